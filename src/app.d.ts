@@ -1,0 +1,20 @@
+import type { SignedInPerson } from '$lib/schemas/people';
+
+declare global {
+	namespace App {
+		interface Error {
+			message: string;
+			/** Ties what the user sees to the log. */
+			id?: string;
+			code?: string;
+		}
+		interface Locals {
+			/** Nobody is signed in when null. */
+			person: SignedInPerson | null;
+			sessionId: string | null;
+			requestId: string;
+		}
+	}
+}
+
+export {};

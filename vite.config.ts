@@ -1,0 +1,41 @@
+import { fileURLToPath } from 'node:url';
+import { sveltekit } from '@sveltejs/kit/vite';
+import tailwindcss from '@tailwindcss/vite';
+import { defineConfig, type TestProjectConfiguration } from 'vitest/config';
+
+/** Superforms' adapter index pulls in a dozen validators; we use zod alone. */
+const zodAdapterOnly = {
+	find: /^sveltekit-superforms\/adapters$/,
+	replacement: fileURLToPath(new URL('./node_modules/sveltekit-superforms/dist/adapters/zod4.js', import.meta.url))
+};
+
+function testProject(name: string, test: Record<string, unknown>): TestProjectConfiguration {
+	return { extends: true, test: { name, environment: 'node', expect: { requireAssertions: true }, ...test } };
+}
+
+export default defineConfig({
+	plugins: [tailwindcss(), sveltekit()],
+	resolve: { alias: [zodAdapterOnly] },
+	worker: { format: 'es' },
+	ssr: { external: ['sequelize', 'mariadb'] },
+	server: { port: Number(process.env.PORT ?? 4173), strictPort: true },
+	test: {
+		projects: [
+			testProject('unit', {
+				include: ['src/**/*.test.ts', 'tests/*.test.ts'],
+				exclude: ['src/**/*.component.test.ts', 'src/**/*.db.test.ts']
+			}),
+			testProject('reference', { include: ['tests/reference/**/*.test.ts'] }),
+			testProject('services', {
+				include: ['src/**/*.db.test.ts', 'tests/services/**/*.db.test.ts'],
+				fileParallelism: false,
+				testTimeout: 30_000,
+				hookTimeout: 60_000
+			}),
+			{
+				...testProject('components', { environment: 'jsdom', include: ['src/**/*.component.test.ts'] }),
+				resolve: { conditions: ['browser'] }
+			}
+		]
+	}
+});
