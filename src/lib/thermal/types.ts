@@ -187,7 +187,9 @@ export interface Scenario {
 	legs: Leg[];
 }
 
-type PartialGroup<T> = T extends LimitPair ? Partial<T> : { [K in keyof T]?: T[K] extends object ? Partial<T[K]> : T[K] };
+type PartialGroup<T> = T extends LimitPair
+	? Partial<T>
+	: { [K in keyof T]?: T[K] extends object ? Partial<T[K]> : T[K] };
 
 /** What people and programs write: absent groups and fields take the defaults. */
 export type ScenarioInput = {
@@ -204,7 +206,8 @@ export interface BmsEvent {
 	hour: number;
 }
 
-export type NodeValues = Record<NodeName, number> & { shield: number | null };
+/** One temperature in °C a node; a shield that is not there is null. */
+export type NodeValues = Record<Exclude<NodeName, 'shield'>, number> & { shield: number | null };
 
 export interface HourlyRow extends NodeValues {
 	hour: number;
@@ -215,7 +218,7 @@ export interface HourlyRow extends NodeValues {
 export interface SimulationReport {
 	peakCellsC: number;
 	peakAtHour: number;
-	peaks: Omit<NodeValues, never>;
+	peaks: NodeValues;
 	end: NodeValues & { soc: number };
 	events: BmsEvent[];
 	hourly: HourlyRow[];
@@ -229,6 +232,7 @@ export interface MinuteSeries {
 	startHour: number;
 	/** Number of grid points (whole minutes, and the start). */
 	count: number;
+	/** °C; without a shield its node stays as it started. */
 	nodes: Record<NodeName, Float64Array>;
 	ambient: Float64Array;
 	soc: Float64Array;
@@ -241,5 +245,11 @@ export interface MinuteSeries {
 
 /** A run that could not be finished is returned, not thrown. */
 export type SimulationResult =
-	| { status: 'done'; report: SimulationReport; minutes: MinuteSeries; chargeRefusedAh: number }
+	| {
+			status: 'done';
+			report: SimulationReport;
+			minutes: MinuteSeries;
+			/** What the charger would have put in while the charge latch was open, Ah. */
+			chargeRefusedAh: number;
+	  }
 	| { status: 'failed'; reason: string; atHour: number; steps: number; evaluations: number };
