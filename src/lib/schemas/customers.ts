@@ -1,0 +1,12 @@
+import { z } from 'zod';
+import { editedSchema, optionalEmail, optionalWords, words } from './fields';
+
+export const customerInputSchema = z.object({
+	name: words('Customer name', 120),
+	email: optionalEmail('Customer e-mail'),
+	phone: optionalWords('Customer phone', 40)
+});
+export type CustomerInput = z.infer<typeof customerInputSchema>;
+
+export const customerSchema = editedSchema.extend(customerInputSchema.shape);
+export type CustomerView = z.infer<typeof customerSchema>;

@@ -1,0 +1,43 @@
+import { z } from 'zod';
+import { SURFACES } from '../thermal/types';
+import { measure, versionSchema, words } from './fields';
+
+export const LEG_KINDS = ['drive', 'crawl', 'stop', 'camp'] as const;
+export type LegKind = (typeof LEG_KINDS)[number];
+
+export const MAX_PLAN_LEGS = 48;
+
+export const planLegSchema = z.object({
+	kind: z.enum(LEG_KINDS).meta({ label: 'What happens' }),
+	minutes: measure('Length', 'min', 1, 24 * 60),
+	speedKmh: measure('Speed', 'km/h', 0, 200),
+	surface: z.enum(SURFACES).meta({ label: 'Surface' }),
+	gradePercent: measure('Average climb', '%', -30, 30),
+	towing: z.boolean().meta({ label: 'Towing' }),
+	engineOn: z.boolean().meta({ label: 'Engine running' }),
+	bonnetOpen: z.boolean().meta({ label: 'Bonnet up' }),
+	loadA: measure('Load', 'A', 0, 300)
+});
+export type PlanLeg = z.infer<typeof planLegSchema>;
+
+export const dayPlanInputSchema = z.object({
+	name: words('Name of the day', 80),
+	startHour: measure('Starts at', 'h', 0, 23.99),
+	startSoc: z.number().min(0).max(1).meta({ label: 'State of charge at the start' }),
+	chargerMaxA: measure('Charger', 'A', 0, 300),
+	legs: z
+		.array(planLegSchema)
+		.min(1, { error: 'A day needs at least one leg.' })
+		.max(MAX_PLAN_LEGS, { error: `A day has at most ${MAX_PLAN_LEGS} legs.` })
+		.refine((legs) => legs.reduce((sum, leg) => sum + leg.minutes, 0) <= 3 * 24 * 60, {
+			error: 'A day plan covers at most three days.'
+		})
+});
+export type DayPlanInput = z.infer<typeof dayPlanInputSchema>;
+
+export const dayPlanSchema = dayPlanInputSchema.extend({
+	id: z.number().int(),
+	version: versionSchema,
+	jobId: z.number().int().nullable()
+});
+export type DayPlanView = z.infer<typeof dayPlanSchema>;

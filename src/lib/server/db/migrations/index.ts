@@ -1,0 +1,65 @@
+import { migration as m001 } from './001-workshops';
+import { migration as m002 } from './002-customers';
+import { migration as m003 } from './003-people';
+import { migration as m004 } from './004-sessions';
+import { migration as m005 } from './005-sign-in-links';
+import { migration as m006 } from './006-rate-limits';
+import { migration as m007 } from './007-vehicles';
+import { migration as m008 } from './008-battery-records';
+import { migration as m009 } from './009-places';
+import { migration as m010 } from './010-jobs';
+import { migration as m011 } from './011-mounts';
+import { migration as m012 } from './012-day-plans';
+import { migration as m013 } from './013-coefficient-books';
+import { migration as m014 } from './014-coefficients';
+import { migration as m015 } from './015-assessments';
+import { migration as m016 } from './016-recommendations';
+import { migration as m017 } from './017-sheets';
+import { migration as m018 } from './018-acknowledgements';
+import { migration as m019 } from './019-outgoing-mails';
+import { migration as m020 } from './020-audit-entries';
+import { migration as m021 } from './021-audit-heads';
+import { migration as m022 } from './022-idempotency-keys';
+import { migration as m023 } from './023-assessments-no-update';
+import { migration as m024 } from './024-assessments-no-delete';
+import { migration as m025 } from './025-audit-entries-no-update';
+import { migration as m026 } from './026-audit-entries-no-delete';
+import { migration as m027 } from './027-acknowledgements-no-update';
+import { migration as m028 } from './028-acknowledgements-no-delete';
+import { migration as m029 } from './029-recommendations-no-update';
+import { migration as m030 } from './030-recommendations-no-delete';
+import type { Migration } from '../migrate';
+
+/** Every migration, in the order in which they run; each is one DDL step that may run again. */
+export const migrations: Migration[] = [
+	m001,
+	m002,
+	m003,
+	m004,
+	m005,
+	m006,
+	m007,
+	m008,
+	m009,
+	m010,
+	m011,
+	m012,
+	m013,
+	m014,
+	m015,
+	m016,
+	m017,
+	m018,
+	m019,
+	m020,
+	m021,
+	m022,
+	m023,
+	m024,
+	m025,
+	m026,
+	m027,
+	m028,
+	m029,
+	m030
+];

@@ -1,0 +1,33 @@
+import {
+	Model,
+	type CreationOptional,
+	type InferAttributes,
+	type InferCreationAttributes,
+	type Sequelize
+} from 'sequelize';
+import { id, number, reference, text } from './base';
+
+export class Coefficient extends Model<InferAttributes<Coefficient>, InferCreationAttributes<Coefficient>> {
+	declare id: CreationOptional<number>;
+	declare bookId: number;
+	declare fieldGroup: string;
+	declare fieldKey: string;
+	declare value: number;
+	declare unit: string;
+	declare source: string;
+}
+
+export function initCoefficient(sequelize: Sequelize): void {
+	Coefficient.init(
+		{
+			id: id,
+			bookId: reference,
+			fieldGroup: text,
+			fieldKey: text,
+			value: number,
+			unit: text,
+			source: text
+		},
+		{ sequelize, tableName: 'coefficients', timestamps: false, modelName: 'Coefficient' }
+	);
+}

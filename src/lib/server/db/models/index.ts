@@ -1,0 +1,76 @@
+import type { Sequelize } from 'sequelize';
+import { Workshop, initWorkshop } from './workshop';
+import { Customer, initCustomer } from './customer';
+import { Person, initPerson } from './person';
+import { Session, initSession } from './session';
+import { SignInLink, initSignInLink } from './sign-in-link';
+import { Vehicle, initVehicle } from './vehicle';
+import { BatteryRecord, initBatteryRecord } from './battery-record';
+import { Place, initPlace } from './place';
+import { Job, initJob } from './job';
+import { Mount, initMount } from './mount';
+import { DayPlan, initDayPlan } from './day-plan';
+import { CoefficientBook, initCoefficientBook } from './coefficient-book';
+import { Coefficient, initCoefficient } from './coefficient';
+import { Assessment, initAssessment } from './assessment';
+import { Recommendation, initRecommendation } from './recommendation';
+import { Sheet, initSheet } from './sheet';
+import { Acknowledgement, initAcknowledgement } from './acknowledgement';
+import { OutgoingMail, initOutgoingMail } from './outgoing-mail';
+import { AuditEntry, initAuditEntry } from './audit-entry';
+
+export {
+	Workshop,
+	Customer,
+	Person,
+	Session,
+	SignInLink,
+	Vehicle,
+	BatteryRecord,
+	Place,
+	Job,
+	Mount,
+	DayPlan,
+	CoefficientBook,
+	Coefficient,
+	Assessment,
+	Recommendation,
+	Sheet,
+	Acknowledgement,
+	OutgoingMail,
+	AuditEntry
+};
+
+const initialisers = [
+	initWorkshop,
+	initCustomer,
+	initPerson,
+	initSession,
+	initSignInLink,
+	initVehicle,
+	initBatteryRecord,
+	initPlace,
+	initJob,
+	initMount,
+	initDayPlan,
+	initCoefficientBook,
+	initCoefficient,
+	initAssessment,
+	initRecommendation,
+	initSheet,
+	initAcknowledgement,
+	initOutgoingMail,
+	initAuditEntry
+];
+
+/** Ties every model to the connection, and the models to each other. */
+export function initModels(sequelize: Sequelize): void {
+	for (const init of initialisers) init(sequelize);
+	Job.belongsTo(Customer, { as: 'customer', foreignKey: 'customerId' });
+	Job.belongsTo(Vehicle, { as: 'vehicle', foreignKey: 'vehicleId' });
+	Job.belongsTo(BatteryRecord, { as: 'batteryRecord', foreignKey: 'batteryRecordId' });
+	Job.belongsTo(Place, { as: 'place', foreignKey: 'placeId' });
+	Sheet.hasOne(Acknowledgement, { as: 'acknowledgement', foreignKey: 'sheetId' });
+	Sheet.belongsTo(Job, { as: 'job', foreignKey: 'jobId' });
+	Sheet.belongsTo(Recommendation, { as: 'recommendation', foreignKey: 'recommendationId' });
+}
