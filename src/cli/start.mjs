@@ -1,5 +1,6 @@
 // Brings up everything that Soakline needs on this machine and keeps it up until Ctrl-C. Uses Node's own modules only:
 // it runs before anything is installed.
+import { existsSync } from 'node:fs';
 import { join } from 'node:path';
 import { applicationEnv, startApplication } from './lib/application.mjs';
 import { ensureBuild } from './lib/build.mjs';
@@ -9,14 +10,20 @@ import { PROJECT, STATE, makeStateFolders } from './lib/folders.mjs';
 import { keepRunning } from './lib/keep-running.mjs';
 import { inTurn, takeLock } from './lib/lock.mjs';
 import { mailEnv, startMailbox } from './lib/mailbox.mjs';
-import { databaseEnv, localConnection, openDatabase } from './lib/mariadb.mjs';
+import { databaseEnv, localConnection, openDatabase, stopLeftServer } from './lib/mariadb.mjs';
 import { MARIADB, ensureInstalled, requireInstallable } from './lib/packages.mjs';
 import { parsePort, rememberedPorts, requireFreeAddress } from './lib/ports.mjs';
 import { stopEverything } from './lib/processes.mjs';
 import { loadSecrets } from './lib/secrets.mjs';
 import { complain, say, sayTime, step, stepDone } from './lib/steps.mjs';
 import { onStopSignal } from './lib/stop-signal.mjs';
-import { requireFreeSpace, requireNode, sentenceFor } from './lib/trouble.mjs';
+import {
+	FRESH_NEEDS_MB,
+	RUNNING_NEEDS_MB,
+	requireFreeSpace,
+	requireNode,
+	sentenceFor
+} from './lib/trouble.mjs';
 
 const dev = process.argv.includes('--dev');
 
@@ -28,7 +35,8 @@ async function checkBeforehand() {
 	requireNode(process.versions.node);
 	const port = parsePort(process.env.PORT);
 	const host = process.env.HOST || '127.0.0.1';
-	await requireFreeSpace(PROJECT);
+	const isFresh = !existsSync(join(PROJECT, 'node_modules')) || !existsSync(join(STATE, 'db'));
+	await requireFreeSpace(PROJECT, isFresh ? FRESH_NEEDS_MB : RUNNING_NEEDS_MB);
 	await requireInstallable([MARIADB]);
 	return { port, host };
 }
@@ -54,21 +62,21 @@ async function prepare(folders) {
 async function startDatabase(folders, secrets) {
 	const logFile = join(folders.log, 'mariadb.log');
 	return step('Database', async (note) => {
-		const { database: port } = await rememberedPorts(folders.base);
-		const connection = localConnection({ port, password: secrets.databasePassword });
+		if (await stopLeftServer(folders.db)) note('stopped the one left by an earlier start');
+		const ports = await rememberedPorts(folders.base);
+		const connection = localConnection({ port: ports.database, password: secrets.databasePassword });
 		const server = { dataDir: folders.db, logFile, connection };
 		const first = (await openDatabase(server, note)).launched;
 		const start = async () => (await openDatabase(server)).launched;
 		kept.push(keepRunning({ name: 'The database', first, start, say, logFile }));
-		return databaseEnv(connection);
+		return { env: databaseEnv(connection), ports };
 	});
 }
 
-/** @param {import('./lib/folders.mjs').StateFolders} folders */
-async function startMail(folders) {
+/** @param {import('./lib/folders.mjs').StateFolders} folders @param {number} port */
+async function startMail(folders, port) {
 	if (process.env.SMTP_URL) return {};
 	return step('Mail', async (note) => {
-		const { mail: port } = await rememberedPorts(folders.base);
 		note(`kept in ${folders.mail}`);
 		const where = { port, folder: folders.mail, logFile: join(folders.log, 'mail.log') };
 		const first = await startMailbox(where);
@@ -117,8 +125,8 @@ async function bringUp() {
 		const secrets = await loadSecrets(folders.base);
 		await prepare(folders);
 		const database = await startDatabase(folders, secrets);
-		const mail = await startMail(folders);
-		const env = applicationEnv({ host, port, secrets, database, mail, dev });
+		const mail = await startMail(folders, database.ports.mail);
+		const env = applicationEnv({ host, port, secrets, database: database.env, mail, dev });
 		await startServer(folders, env);
 		await announce(env, begun);
 		await Promise.race([stopSignal.received, ...kept.map(({ gaveUp }) => gaveUp)]);

@@ -276,9 +276,7 @@ async function downTrouble({ logFile }, ended) {
 		''
 	);
 	const how = ended ? 'stopped while starting' : `did not come up within ${UP_WITHIN_MS / 1000} s`;
-	return new Trouble(
-		`The database ${how}${why ? `: ${why.replace(/\.$/, '')}` : ''} (its log is ${logFile}).`
-	);
+	return new Trouble(`The database ${how}${why ? `: ${why}` : ''} (its log is ${logFile}).`);
 }
 
 /**
@@ -287,7 +285,7 @@ async function downTrouble({ logFile }, ended) {
  * @param {(words: string) => void} [note]
  */
 export async function openDatabase(server, note = () => undefined) {
-	if (await stopLeftServer(server.dataDir)) note('stopped the one left by an earlier start');
+	await stopLeftServer(server.dataDir);
 	if (await ensureDataDirectory(server)) note('new data directory');
 	note(`port ${server.connection.port}`);
 	const launched = await startServer(server);

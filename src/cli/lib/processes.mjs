@@ -78,10 +78,10 @@ export async function stopEverything() {
  * Runs a program to its end, its output into a log file; what it printed comes back too.
  * @param {string} command
  * @param {string[]} args
- * @param {{ cwd?: string, env?: NodeJS.ProcessEnv, logFile?: string, sparing?: boolean }} options
+ * @param {{ cwd?: string, env?: NodeJS.ProcessEnv, logFile?: string, sparing?: boolean, keepChars?: number }} options
  * @returns {Promise<{ code: number, output: string }>}
  */
-export async function run(command, args, { logFile, ...options }) {
+export async function run(command, args, { logFile, keepChars = KEPT_OUTPUT_CHARS, ...options }) {
 	const log = logFile ? createWriteStream(logFile, { flags: 'w' }) : null;
 	/** @type {Error | null} */
 	let logTrouble = null;
@@ -91,7 +91,7 @@ export async function run(command, args, { logFile, ...options }) {
 	for (const stream of [child.stdout, child.stderr]) {
 		stream?.setEncoding('utf8');
 		stream?.on('data', (/** @type {string} */ words) => {
-			output = (output + words).slice(-KEPT_OUTPUT_CHARS);
+			output = (output + words).slice(-keepChars);
 			if (!logTrouble) log?.write(words);
 		});
 	}

@@ -1,4 +1,5 @@
 import { statfs } from 'node:fs/promises';
+import { stripVTControlCharacters } from 'node:util';
 
 /** A failure that is already one sentence for the person at the keyboard. */
 export class Trouble extends Error {
@@ -9,9 +10,14 @@ export class Trouble extends Error {
 	}
 }
 
-export const LEAST_FREE_MB = 1000;
+/** A first start brings the dependencies, a database and a build; a later one only adds rows and logs. */
+export const FRESH_NEEDS_MB = 1000;
+export const RUNNING_NEEDS_MB = 200;
 
 const DISK_FULL = /ENOSPC|no space left on device|errno: 28\b|disk is full/i;
+
+/** Lines that speak of an error and say nothing about it. */
+const NOISE = /complete log|error code|^error during build:$|^npm (error|ERR!)\s*$/i;
 
 const KNOWN_CODES = /** @type {Record<string, (where: string) => string>} */ ({
 	ENOSPC: () => diskFullSentence(),
@@ -25,7 +31,7 @@ const KNOWN_CODES = /** @type {Record<string, (where: string) => string>} */ ({
 });
 
 function diskFullSentence() {
-	return `The disk is full: free at least ${LEAST_FREE_MB} MB and start again.`;
+	return `The disk is full: free some space (a first start needs ${FRESH_NEEDS_MB} MB) and start again.`;
 }
 
 /**
@@ -69,22 +75,20 @@ export function programTrouble(what, words, logFile) {
  * @param {string} words
  */
 export function mostTellingLine(words) {
-	const lines = words
+	const lines = stripVTControlCharacters(words)
 		.split('\n')
 		.map((line) => line.trim())
-		.filter((line) => line !== '');
-	const errors = lines.filter(
-		(line) => /\berror\b|^E:/i.test(line) && !/complete log|error code/i.test(line)
-	);
-	return (errors[0] ?? lines.at(-1) ?? '').slice(0, 200);
+		.filter((line) => line !== '' && !NOISE.test(line));
+	const telling = lines.find((line) => /\berror\b|^E:/i.test(line)) ?? lines.at(-1) ?? '';
+	return telling.slice(0, 200).replace(/[.:]$/, '');
 }
 
 /**
  * Refuses to begin on a disk that would fill up half way.
  * @param {string} folder
- * @param {number} [leastMb]
+ * @param {number} leastMb
  */
-export async function requireFreeSpace(folder, leastMb = LEAST_FREE_MB) {
+export async function requireFreeSpace(folder, leastMb) {
 	const { bavail, bsize } = await statfs(folder);
 	const freeMb = Math.floor((bavail * bsize) / 1e6);
 	if (freeMb < leastMb) {

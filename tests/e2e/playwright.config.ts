@@ -1,0 +1,47 @@
+import { fileURLToPath } from 'node:url';
+import { defineConfig } from '@playwright/test';
+
+/** Debian's Chromium, without what it does in the background. Root needs it without its sandbox. */
+const launchOptions = {
+	executablePath: '/usr/bin/chromium',
+	args: [
+		'--no-sandbox',
+		'--disable-gpu',
+		'--disable-quic',
+		'--no-first-run',
+		'--disable-background-networking',
+		'--disable-component-update',
+		'--disable-sync'
+	]
+};
+
+/** Runs against an application that is up already; src/cli/test.mjs starts it and says where. */
+export default defineConfig({
+	testDir: '.',
+	outputDir: fileURLToPath(new URL('../../test-results', import.meta.url)),
+	workers: 2,
+	retries: 0,
+	forbidOnly: true,
+	timeout: 60_000,
+	expect: { timeout: 10_000 },
+	use: {
+		baseURL: process.env.E2E_BASE_URL,
+		locale: 'en-GB',
+		launchOptions,
+		screenshot: 'only-on-failure',
+		trace: 'retain-on-failure'
+	},
+	projects: [
+		{ name: 'desk', use: { browserName: 'chromium', viewport: { width: 1280, height: 800 } } },
+		{
+			name: 'phone',
+			use: {
+				browserName: 'chromium',
+				viewport: { width: 360, height: 740 },
+				isMobile: true,
+				hasTouch: true,
+				deviceScaleFactor: 2
+			}
+		}
+	]
+});
