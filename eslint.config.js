@@ -26,7 +26,8 @@ const layers = [
 		patterns: [
 			{
 				regex: 'lib/(server|components|simulation)(/|$)',
-				message: 'Schemas and formats are shared with the browser: they may use the engine and themselves only.'
+				message:
+					'Schemas and formats are shared with the browser: they may use the engine and themselves only.'
 			}
 		]
 	},
@@ -88,7 +89,9 @@ const layers = [
 ];
 
 export default ts.config(
-	{ ignores: ['build/', '.svelte-kit/', '.soakline/', 'node_modules/', 'test-results/', 'playwright-report/'] },
+	{
+		ignores: ['build/', '.svelte-kit/', '.soakline/', 'node_modules/', 'test-results/', 'playwright-report/']
+	},
 	js.configs.recommended,
 	...ts.configs.recommended,
 	...svelte.configs.recommended,
@@ -112,13 +115,18 @@ export default ts.config(
 	{
 		files: ['**/*.svelte', '**/*.svelte.ts'],
 		languageOptions: {
-			parserOptions: { projectService: true, extraFileExtensions: ['.svelte'], parser: ts.parser, svelteConfig }
+			parserOptions: {
+				projectService: true,
+				extraFileExtensions: ['.svelte'],
+				parser: ts.parser,
+				svelteConfig
+			}
 		}
 	},
 	{ files: ['src/cli/**'], rules: { 'no-console': 'off' } },
 	...layers.map(({ files, ignores, patterns }) => ({
 		files,
 		...(ignores ? { ignores } : {}),
-		rules: { 'no-restricted-imports': ['error', { patterns }] }
+		rules: { 'no-restricted-imports': /** @type {['error', object]} */ (['error', { patterns }]) }
 	}))
 );

@@ -1,15 +1,17 @@
 import { fileURLToPath } from 'node:url';
 import { sveltekit } from '@sveltejs/kit/vite';
 import tailwindcss from '@tailwindcss/vite';
-import { defineConfig, type TestProjectConfiguration } from 'vitest/config';
+import { defineConfig, type TestProjectInlineConfiguration } from 'vitest/config';
 
 /** Superforms' adapter index pulls in a dozen validators; we use zod alone. */
 const zodAdapterOnly = {
 	find: /^sveltekit-superforms\/adapters$/,
-	replacement: fileURLToPath(new URL('./node_modules/sveltekit-superforms/dist/adapters/zod4.js', import.meta.url))
+	replacement: fileURLToPath(
+		new URL('./node_modules/sveltekit-superforms/dist/adapters/zod4.js', import.meta.url)
+	)
 };
 
-function testProject(name: string, test: Record<string, unknown>): TestProjectConfiguration {
+function testProject(name: string, test: Record<string, unknown>): TestProjectInlineConfiguration {
 	return { extends: true, test: { name, environment: 'node', expect: { requireAssertions: true }, ...test } };
 }
 

@@ -96,7 +96,7 @@ export async function run(command, args, { logFile, keepChars = KEPT_OUTPUT_CHAR
 		});
 	}
 	const { code } = await ended;
-	if (log && !logTrouble) await new Promise((resolve) => log.once('close', resolve).end());
+	if (log && !logTrouble) await new Promise((resolve) => log.end(() => resolve(null)));
 	if (logTrouble) throw logTrouble;
 	return { code: code ?? 1, output };
 }

@@ -10,11 +10,12 @@ import { makeSecrets } from '../secrets.mjs';
 
 /** What a person may have set for their own use, and a test run must not take over. */
 const PERSONAL =
-	/^(HOST|PORT|ORIGIN|AUTH_.*|SMTP_URL|MAIL_FROM|MAILBOX_DIR|SOAKLINE_.*|DATABASE_.*|NODE_ENV|LOG_LEVEL)$/;
+	/^(HOST|PORT|ORIGIN|AUTH_.*|SMTP_URL|MAIL_FROM|MAILBOX_DIR|SOAKLINE_.*|DATABASE_.*|NODE_ENV|LOG_LEVEL|FORCE_COLOR)$/;
 
 /** @param {NodeJS.ProcessEnv} [given] @returns {NodeJS.ProcessEnv} */
 export function impersonalEnv(given = process.env) {
-	return Object.fromEntries(Object.entries(given).filter(([name]) => !PERSONAL.test(name)));
+	const kept = Object.entries(given).filter(([name]) => !PERSONAL.test(name));
+	return { ...Object.fromEntries(kept), NO_COLOR: '1' };
 }
 
 const PREFIX = 'test-';
