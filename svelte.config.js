@@ -27,7 +27,14 @@ export default {
 		typescript: {
 			config: (config) => ({
 				...config,
-				include: [...config.include, '../src/cli/**/*.ts', '../src/cli/**/*.mjs', '../vite.config.ts', '../svelte.config.js', '../eslint.config.js']
+				include: [
+					...config.include,
+					'../src/cli/**/*.ts',
+					'../src/cli/**/*.mjs',
+					'../vite.config.ts',
+					'../svelte.config.js',
+					'../eslint.config.js'
+				]
 			})
 		}
 	}

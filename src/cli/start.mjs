@@ -95,10 +95,14 @@ function showAppStep({ step: name, ms, detail }) {
 /** @param {import('./lib/folders.mjs').StateFolders} folders @param {NodeJS.ProcessEnv} env */
 async function startServer(folders, env) {
 	const logFile = join(folders.log, 'app.log');
-	const what = { project: PROJECT, env, logFile, dev, ...(dev ? { onPlain: say } : {}) };
+	let isUp = false;
+	// What the reloading server says of itself while starting would break up the steps.
+	const onPlain = (/** @type {string} */ line) => dev && isUp && say(line);
+	const what = { project: PROJECT, env, logFile, dev, onPlain };
 	const begun = performance.now();
 	const first = await startApplication({ ...what, onStep: showAppStep });
 	stepDone('Application', 'ready', performance.now() - begun);
+	isUp = true;
 	const start = () => startApplication(what);
 	kept.push(keepRunning({ name: 'The application', first, start, say, logFile }));
 }

@@ -78,13 +78,23 @@ async function openLog(logFile) {
 function programArgs(project, dev, env) {
 	const vite = join(project, 'node_modules', 'vite', 'bin', 'vite.js');
 	return dev
-		? [vite, 'dev', '--host', String(env.HOST), '--port', String(env.PORT), '--strictPort']
+		? [
+				vite,
+				'dev',
+				'--host',
+				String(env.HOST),
+				'--port',
+				String(env.PORT),
+				'--strictPort',
+				'--clearScreen',
+				'false'
+			]
 		: [join(project, 'build', 'index.js')];
 }
 
 /**
  * Starts the application and waits until it is ready to serve.
- * @param {{ project: string, env: NodeJS.ProcessEnv, logFile: string, dev?: boolean, onStep?: (step: AppStep) => void, onPlain?: (line: string) => void }} what
+ * @param {{ project: string, env: NodeJS.ProcessEnv, logFile: string, dev?: boolean, onStep?: (step: AppStep) => void, onPlain?: (line: string) => unknown }} what
  */
 export async function startApplication({ project, env, logFile, dev = false, onStep, onPlain }) {
 	const log = await openLog(logFile);
