@@ -1,0 +1,33 @@
+import { Algorithm, hash, verify } from '@node-rs/argon2';
+
+const OPTIONS = { algorithm: Algorithm.Argon2id, memoryCost: 65_536, timeCost: 3, parallelism: 1 };
+/** Each hash takes 64 MiB: more than this many at once wait their turn. */
+const PARALLEL = 2;
+
+let running = 0;
+const waiting: (() => void)[] = [];
+
+async function inTurn<T>(work: () => Promise<T>): Promise<T> {
+	if (running >= PARALLEL) await new Promise<void>((resolve) => waiting.push(resolve));
+	running++;
+	try {
+		return await work();
+	} finally {
+		running--;
+		waiting.shift()?.();
+	}
+}
+
+export function hashPassword(password: string): Promise<string> {
+	return inTurn(() => hash(password, OPTIONS));
+}
+
+let decoy: Promise<string> | undefined;
+
+/** Takes the same time whether or not there is a hash to check against. */
+export async function passwordMatches(password: string, stored: string | null): Promise<boolean> {
+	decoy ??= hashPassword('nobody has this password, it only takes the time');
+	const against = stored ?? (await decoy);
+	const matches = await inTurn(() => verify(against, password));
+	return matches && stored !== null;
+}

@@ -1,0 +1,46 @@
+import type { Role, SignedInPerson } from '$lib/schemas/people';
+import { AppError } from '../errors';
+
+const WORKSHOP: readonly Role[] = ['installer', 'engineer', 'manager'];
+const BENCH: readonly Role[] = ['engineer', 'manager'];
+
+/**
+ * Who may do what, deny by default: an action that is not in this table cannot be done.
+ * That a record belongs to the person's own workshop is held by every query, not here.
+ */
+export const RULES = {
+	'jobs.read': WORKSHOP,
+	'jobs.write': WORKSHOP,
+	'vehicles.read': WORKSHOP,
+	'mounts.write': WORKSHOP,
+	'day-plans.write': WORKSHOP,
+	'batteries.read': WORKSHOP,
+	'batteries.write': WORKSHOP,
+	'places.read': WORKSHOP,
+	'places.write': WORKSHOP,
+	'assessments.read': WORKSHOP,
+	'assessments.run': WORKSHOP,
+	'recommendations.write': WORKSHOP,
+	'sheets.write': WORKSHOP,
+	'books.read': BENCH,
+	'people.read': ['manager'],
+	'mailbox.read': WORKSHOP,
+	'documents.read-own': ['customer'],
+	'self.read': ['installer', 'engineer', 'manager', 'customer']
+} as const satisfies Record<string, readonly Role[]>;
+
+export type Action = keyof typeof RULES;
+
+export function mayDo(person: SignedInPerson | null, action: Action): person is SignedInPerson {
+	const roles: readonly Role[] = RULES[action];
+	return person !== null && roles.includes(person.role);
+}
+
+/** Gives the person back when the rule allows it, and throws a coded error otherwise. */
+export function allow(person: SignedInPerson | null, action: Action): SignedInPerson {
+	if (person === null) throw new AppError('not_signed_in', 'Sign in first.');
+	if (!mayDo(person, action)) {
+		throw new AppError('not_allowed', `Your role (${person.role}) does not include this.`);
+	}
+	return person;
+}
