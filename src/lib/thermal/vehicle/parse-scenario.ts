@@ -1,0 +1,156 @@
+import { ScenarioError, type ScenarioErrorCode } from '../errors';
+import type { Leg, Scenario } from '../types';
+import { checkConsistency } from './check-consistency';
+import {
+	FIELD_GROUPS,
+	LONGEST_PLAN_MINUTES,
+	MOST_LEGS,
+	SCENARIO_FIELDS,
+	type FieldGroup,
+	type NumberField,
+	type ScenarioField
+} from './scenario-fields';
+
+type Values = Record<string, unknown>;
+
+const fieldsOf = new Map<FieldGroup, ScenarioField[]>(
+	FIELD_GROUPS.map((group) => [group, SCENARIO_FIELDS.filter((field) => field.group === group)])
+);
+
+/** Groups that stand at the top of a scenario, in the order in which they are checked. */
+const TOP_GROUPS = FIELD_GROUPS.filter((group) => !group.includes('.') && group !== 'legs');
+const BMS_LIMITS = ['charge', 'discharge'] as const;
+
+function fail(code: ScenarioErrorCode, path: string, value: unknown, limit: string): never {
+	throw new ScenarioError({ code, path, value, limit });
+}
+
+function requireObject(value: unknown, path: string): Values {
+	if (typeof value !== 'object' || value === null || Array.isArray(value)) {
+		fail('wrong_type', path, value, 'an object');
+	}
+	return value as Values;
+}
+
+function requireKnownKeys(values: Values, known: readonly string[], prefix: string): void {
+	for (const key of Object.keys(values)) {
+		if (!known.includes(key)) {
+			fail('unknown_field', prefix + key, values[key], `the known ones are ${known.join(', ')}`);
+		}
+	}
+}
+
+function ownValue(values: Values, key: string): unknown {
+	return Object.hasOwn(values, key) ? values[key] : undefined;
+}
+
+/** The range of a number field in words: `more than 0 and at most 1 W/K`. */
+export function describeRange(field: NumberField): string {
+	const unit = field.unit === '-' ? '' : ` ${field.unit}`;
+	const low = `${field.minExclusive ? 'more than' : 'at least'} ${field.min}`;
+	const high = `${field.maxExclusive ? 'less than' : 'at most'} ${field.max}`;
+	return `a number, ${low} and ${high}${unit}`;
+}
+
+function parseNumber(field: NumberField, value: unknown, path: string): number {
+	const limit = describeRange(field);
+	if (value === undefined) {
+		if (field.default === null) fail('missing_field', path, value, limit);
+		return field.default;
+	}
+	if (typeof value !== 'number') fail('wrong_type', path, value, limit);
+	if (!Number.isFinite(value)) fail('not_finite', path, value, limit);
+	const tooLow = field.minExclusive ? value <= field.min : value < field.min;
+	const tooHigh = field.maxExclusive ? value >= field.max : value > field.max;
+	if (tooLow || tooHigh) fail('out_of_range', path, value, limit);
+	return value;
+}
+
+function parseField(field: ScenarioField, value: unknown, path: string): unknown {
+	if (field.kind === 'number') return parseNumber(field, value, path);
+	if (value === undefined) return field.default;
+	if (field.kind === 'flag') {
+		if (typeof value !== 'boolean') fail('wrong_type', path, value, 'true or false');
+		return value;
+	}
+	const limit = `one of ${field.choices.join(', ')}`;
+	if (typeof value !== 'string') fail('wrong_type', path, value, limit);
+	if (!field.choices.includes(value)) fail('not_a_choice', path, value, limit);
+	return value;
+}
+
+function parseGroup(group: FieldGroup, input: unknown, path: string, nested: readonly string[] = []): Values {
+	const values = input === undefined ? {} : requireObject(input, path);
+	const fields = fieldsOf.get(group) ?? [];
+	requireKnownKeys(values, [...fields.map((field) => field.key), ...nested], `${path}.`);
+	const parsed: Values = {};
+	for (const field of fields) {
+		parsed[field.key] = parseField(field, ownValue(values, field.key), `${path}.${field.key}`);
+	}
+	return parsed;
+}
+
+function parseBms(input: unknown): Values {
+	const parsed = parseGroup('bms', input, 'bms', BMS_LIMITS);
+	const values = (input ?? {}) as Values;
+	for (const side of BMS_LIMITS) {
+		parsed[side] = parseGroup(`bms.${side}`, ownValue(values, side), `bms.${side}`);
+	}
+	return parsed;
+}
+
+function parseTopGroup(group: FieldGroup, input: unknown): Values | null {
+	if (group === 'bms') return parseBms(input);
+	if (group === 'shield' && (input === undefined || input === null)) return null;
+	return parseGroup(group, input, group);
+}
+
+function parseLegs(input: unknown): Leg[] {
+	const limit = `a list of 1 to ${MOST_LEGS} legs`;
+	if (input === undefined) fail('missing_field', 'legs', input, limit);
+	if (!Array.isArray(input)) fail('wrong_type', 'legs', input, limit);
+	if (input.length === 0) fail('no_legs', 'legs', 0, limit);
+	if (input.length > MOST_LEGS) fail('too_many_legs', 'legs', input.length, limit);
+	const legs = Array.from(input, (leg: unknown, index) => {
+		const path = `legs[${index}]`;
+		return parseGroup('legs', leg === undefined ? null : leg, path) as unknown as Leg;
+	});
+	const minutes = legs.reduce((sum, leg) => sum + leg.minutes, 0);
+	if (minutes > LONGEST_PLAN_MINUTES) {
+		fail('too_long', 'legs', minutes, `at most ${LONGEST_PLAN_MINUTES} minutes (60 days)`);
+	}
+	return legs;
+}
+
+/**
+ * Checks what people or programs wrote and fills in the defaults.
+ *
+ * Checked in a fixed order, the first fault is reported: names of groups, then group by group (names of fields,
+ * then each field in the order of SCENARIO_FIELDS), the legs, and last what several fields say together.
+ *
+ * @param input anything; absent groups and fields take the defaults, an absent or null shield is none
+ * @returns a whole scenario that the engine can run
+ * @throws ScenarioError with code, path, value and limit
+ * @example
+ * parseScenario({ legs: [{ minutes: 60 }] }).charger.maxA // 40
+ */
+export function parseScenario(input: unknown): Scenario {
+	const values = requireObject(input, '');
+	requireKnownKeys(values, [...TOP_GROUPS, 'legs'], '');
+	const parsed: Values = {};
+	for (const group of TOP_GROUPS) parsed[group] = parseTopGroup(group, ownValue(values, group));
+	parsed.legs = parseLegs(ownValue(values, 'legs'));
+	const scenario = parsed as unknown as Scenario;
+	checkConsistency(scenario);
+	return scenario;
+}
+
+/**
+ * The scenario of the thermal model's defaults: no shield, and one hour parked with the engine off.
+ *
+ * @example
+ * defaultScenario().climate.tMax // 42
+ */
+export function defaultScenario(): Scenario {
+	return parseScenario({ legs: [{ minutes: 60 }] });
+}
