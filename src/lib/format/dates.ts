@@ -1,0 +1,21 @@
+/** Dates in British form, in the workshop's own time zone. */
+const style = (options: Intl.DateTimeFormatOptions, timeZone?: string): Intl.DateTimeFormat =>
+	new Intl.DateTimeFormat('en-GB', { ...options, ...(timeZone ? { timeZone } : {}) });
+
+const toDate = (moment: Date | string | number): Date => (moment instanceof Date ? moment : new Date(moment));
+
+/** "4 March 2026". */
+export const formatDate = (moment: Date | string | number, timeZone?: string): string =>
+	style({ day: 'numeric', month: 'long', year: 'numeric' }, timeZone).format(toDate(moment));
+
+/** "4 Mar 2026", for tables. */
+export const formatShortDate = (moment: Date | string | number, timeZone?: string): string =>
+	style({ day: 'numeric', month: 'short', year: 'numeric' }, timeZone).format(toDate(moment));
+
+/** "14:02". */
+export const formatTimeOfDay = (moment: Date | string | number, timeZone?: string): string =>
+	style({ hour: '2-digit', minute: '2-digit', hourCycle: 'h23' }, timeZone).format(toDate(moment));
+
+/** "4 March 2026, 14:02". */
+export const formatDateTime = (moment: Date | string | number, timeZone?: string): string =>
+	`${formatDate(moment, timeZone)}, ${formatTimeOfDay(moment, timeZone)}`;

@@ -1,0 +1,53 @@
+/** Narrow no-break space: thin, and never parts a figure from its unit at a line's end. */
+export const THIN_SPACE = '\u202F';
+export const MINUS = '\u2212';
+
+/** Rounded, with a true minus sign and never "−0". */
+export function formatNumber(value: number, decimals = 0): string {
+	const rounded = Number(value.toFixed(decimals));
+	const text = Math.abs(rounded).toFixed(decimals);
+	return rounded < 0 ? `${MINUS}${text}` : text;
+}
+
+export function formatWithUnit(value: number, unit: string, decimals = 0): string {
+	return `${formatNumber(value, decimals)}${THIN_SPACE}${unit}`;
+}
+
+export const formatTemperature = (tempC: number, decimals = 0): string => formatWithUnit(tempC, '°C', decimals);
+
+export const formatKelvin = (differenceK: number, decimals = 1): string => formatWithUnit(differenceK, 'K', decimals);
+
+/** A change in kelvin: a gain says its plus. */
+export function formatKelvinChange(differenceK: number, decimals = 1): string {
+	const text = formatKelvin(differenceK, decimals);
+	return Number(differenceK.toFixed(decimals)) > 0 ? `+${text}` : text;
+}
+
+export const formatAmpHours = (chargeAh: number): string =>
+	formatWithUnit(chargeAh, 'Ah', Math.abs(chargeAh) < 9.95 ? 1 : 0);
+
+export const formatAmps = (currentA: number): string =>
+	formatWithUnit(currentA, 'A', Number.isInteger(currentA) ? 0 : 1);
+
+export const formatWatts = (powerW: number): string => formatWithUnit(powerW, 'W', Math.abs(powerW) < 9.95 ? 1 : 0);
+
+export const formatPercent = (share: number, decimals = 0): string => formatWithUnit(share * 100, '%', decimals);
+
+export const formatMillimetres = (lengthMm: number): string => formatWithUnit(lengthMm, 'mm');
+
+export const formatSpeed = (speedKmh: number): string => formatWithUnit(speedKmh, 'km/h');
+
+/** Kilograms up to a tonne, then tonnes with one decimal, as a tow bar is spoken of. */
+export const formatMass = (massKg: number): string =>
+	Math.abs(massKg) < 1000 ? formatWithUnit(massKg, 'kg') : formatWithUnit(massKg / 1000, 't', 1);
+
+/** Small views in square centimetres, surfaces in square metres. */
+export const formatArea = (areaM2: number): string =>
+	Math.abs(areaM2) < 0.1 ? formatWithUnit(areaM2 * 1e4, 'cm²') : formatWithUnit(areaM2, 'm²', 2);
+
+/** Natural frequency on one denominator everywhere: "about 11 of 20". */
+export const formatOfTwenty = (share: number): string => `about ${formatNumber(share * 20)} of 20`;
+
+/** A count with its range in brackets: "9 (4 to 16)". */
+export const formatRange = (value: number, low: number, high: number, decimals = 0): string =>
+	`${formatNumber(value, decimals)} (${formatNumber(low, decimals)} to ${formatNumber(high, decimals)})`;
