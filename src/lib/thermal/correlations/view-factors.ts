@@ -50,7 +50,8 @@ export function viewFactorParallelRectangles(widthM: number, heightM: number, ga
 	const ax = Math.sqrt(1 + x ** 2);
 	const ay = Math.sqrt(1 + y ** 2);
 	const logPart = Math.log((ax * ay) / Math.sqrt(1 + x ** 2 + y ** 2));
-	const anglePart = x * ay * Math.atan(x / ay) + y * ax * Math.atan(y / ax) - x * Math.atan(x) - y * Math.atan(y);
+	const anglePart =
+		x * ay * Math.atan(x / ay) + y * ax * Math.atan(y / ax) - x * Math.atan(x) - y * Math.atan(y);
 	return (2 / (Math.PI * x * y)) * (logPart + anglePart);
 }
 

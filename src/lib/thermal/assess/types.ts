@@ -1,0 +1,101 @@
+import type { BmsEvent, HourlyRow, NodeValues, Surface } from '../types';
+
+export type MountVerdict = 'rides-it-out' | 'runs-close' | 'cuts-out';
+
+/** Where heat in the battery can come from. */
+export const HEAT_SOURCES = [
+	'bay-air',
+	'exhaust',
+	'engine',
+	'bonnet',
+	'enclosure-air',
+	'road',
+	'own-current',
+	'outside-air',
+	'start'
+] as const;
+export type HeatSource = (typeof HEAT_SOURCES)[number];
+
+/** One line of the heat ledger, at the moment when the cells are hottest. */
+export interface LedgerEntry {
+	source: HeatSource;
+	/** Heat that this source sends into case, cells and board at that moment, W (negative: it cools). */
+	watts: number;
+	/** Its share of what the cells stand above the outside air at that moment, K; the shares sum to the whole. */
+	kelvin: number;
+}
+
+/** A stretch of the run; `open` when the run ended before it did. */
+export interface HourSpan {
+	fromHour: number;
+	toHour: number;
+	open: boolean;
+}
+
+/** One leg of the day as a strip along the clock. */
+export interface LegSpan {
+	kind?: 'drive' | 'crawl' | 'stop' | 'camp';
+	fromHour: number;
+	toHour: number;
+	engineOn: boolean;
+	speedKmh: number;
+	surface: Surface;
+	bonnetOpen: boolean;
+}
+
+/** What is drawn: one value a step from the start, rounded to 0.01. */
+export interface AssessmentCurves {
+	startHour: number;
+	stepMin: number;
+	ambientC: number[];
+	bayC: number[];
+	caseC: number[];
+	cellsC: number[];
+	boardC: number[];
+	soc: number[];
+}
+
+export interface DoneAssessment {
+	status: 'done';
+	verdict: MountVerdict;
+	/** Discharge cut − peak of what the BMS watches, K; zero or less when it cuts out at once. */
+	headroomK: number;
+	/** Charge cut − the same peak, K. */
+	chargeHeadroomK: number;
+	/** Clock hours run on past 24. */
+	cutAtHour: number | null;
+	resetAtHour: number | null;
+	/** The last time it went dark it came back within the run, with nobody's help. False when it never went dark. */
+	backByItself: boolean;
+	darkSpans: HourSpan[];
+	darkHours: number;
+	/** While charging was stopped by heat. */
+	chargeSpans: HourSpan[];
+	chargeMissedAh: number;
+	chargeMissedHours: number;
+	peakCellsC: number;
+	peakAtHour: number;
+	/** Peak of what the BMS watches. */
+	peakSensorC: number;
+	peaks: NodeValues;
+	end: NodeValues;
+	endSoc: number;
+	endHour: number;
+	events: BmsEvent[];
+	ledger: LedgerEntry[];
+	curves: AssessmentCurves;
+	legs: LegSpan[];
+	engineVersion: string;
+	energyMaxRelativeImbalance: number;
+	steps: number;
+	evaluations: number;
+	hourly: HourlyRow[];
+}
+
+/** A run that could not be finished says why. */
+export interface FailedAssessment {
+	status: 'failed';
+	reason: string;
+}
+
+export type Assessment = DoneAssessment | FailedAssessment;
