@@ -22,8 +22,7 @@ export const CLIMATE_ZONES = [
 		'Cfc'
 	],
 	...['Dsa', 'Dsb', 'Dsc', 'Dsd', 'Dwa', 'Dwb', 'Dwc', 'Dwd', 'Dfa', 'Dfb', 'Dfc', 'Dfd', 'ET', 'EF']
-] as const;
-export type ClimateZone = string;
+] as const satisfies readonly string[];
 
 export const hotDayFields = {
 	hotDayMaxC: measure('Hottest of the day', '°C', -20, 60),
@@ -39,7 +38,9 @@ export const placeInputSchema = z.object({
 	altitudeM: measure('Altitude', 'm', -430, 6_000),
 	climateZone: z
 		.string()
-		.refine((zone) => CLIMATE_ZONES.includes(zone), { error: 'Choose one of the climate classes.' })
+		.refine((zone) => (CLIMATE_ZONES as readonly string[]).includes(zone), {
+			error: 'Choose one of the climate classes.'
+		})
 		.meta({ label: 'Climate class (Köppen–Geiger)' }),
 	...hotDayFields,
 	source: words('Where the figures come from', 300)

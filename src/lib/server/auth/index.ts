@@ -30,7 +30,8 @@ async function byPassword(credentials: Partial<Record<string, unknown>>, request
 	await spend({ name: 'sign-in account', key: email, points: TRIES_PER_ACCOUNT, windowS: WINDOW_S });
 	await spend({ name: 'sign-in address', key: address, points: TRIES_PER_ADDRESS, windowS: WINDOW_S });
 	const person = await Person.findOne({ where: { email, active: true } });
-	if (!(await passwordMatches(password, person?.passwordHash ?? null)) || !person) throw new CredentialsSignin();
+	if (!(await passwordMatches(password, person?.passwordHash ?? null)) || !person)
+		throw new CredentialsSignin();
 	return { id: String(person.id), name: person.name, email: person.email };
 }
 

@@ -1,6 +1,8 @@
-import { Algorithm, hash, verify } from '@node-rs/argon2';
+import { hash, verify, type Algorithm } from '@node-rs/argon2';
 
-const OPTIONS = { algorithm: Algorithm.Argon2id, memoryCost: 65_536, timeCost: 3, parallelism: 1 };
+/** The library's own number for it: its enumeration exists in types only. */
+const ARGON2ID: Algorithm.Argon2id = 2;
+const OPTIONS = { algorithm: ARGON2ID, memoryCost: 65_536, timeCost: 3, parallelism: 1 };
 /** Each hash takes 64 MiB: more than this many at once wait their turn. */
 const PARALLEL = 2;
 

@@ -32,7 +32,8 @@ export async function personOfSession(secret: string): Promise<SignedInPerson | 
 	if (!person?.active) return null;
 	const workshop = await Workshop.findByPk(person.workshopId);
 	if (!workshop) return null;
-	if (now - session.lastSeenAt.getTime() > TOUCH_EVERY_MS) await session.update({ lastSeenAt: new Date(now) });
+	if (now - session.lastSeenAt.getTime() > TOUCH_EVERY_MS)
+		await session.update({ lastSeenAt: new Date(now) });
 	const { id, workshopId, customerId, name, email, role } = person;
 	return { id, workshopId, workshopName: workshop.name, customerId, name, email, role };
 }

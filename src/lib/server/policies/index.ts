@@ -39,8 +39,9 @@ export function mayDo(person: SignedInPerson | null, action: Action): person is 
 /** Gives the person back when the rule allows it, and throws a coded error otherwise. */
 export function allow(person: SignedInPerson | null, action: Action): SignedInPerson {
 	if (person === null) throw new AppError('not_signed_in', 'Sign in first.');
+	const role = person.role;
 	if (!mayDo(person, action)) {
-		throw new AppError('not_allowed', `Your role (${person.role}) does not include this.`);
+		throw new AppError('not_allowed', `Your role (${role}) does not include this.`);
 	}
 	return person;
 }

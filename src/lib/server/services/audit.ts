@@ -57,10 +57,13 @@ export async function record(entry: AuditRecord, transaction: Transaction): Prom
 	};
 	const hash = chainHash(chained);
 	await AuditEntry.create({ ...chained, hash }, { transaction });
-	await connection().query('UPDATE audit_heads SET sequence = :sequence, hash = :hash WHERE workshop_id = :workshopId', {
-		replacements: { sequence: chained.sequence, hash, workshopId },
-		transaction
-	});
+	await connection().query(
+		'UPDATE audit_heads SET sequence = :sequence, hash = :hash WHERE workshop_id = :workshopId',
+		{
+			replacements: { sequence: chained.sequence, hash, workshopId },
+			transaction
+		}
+	);
 }
 
 /** The usual entry: a signed-in person did something in their own workshop. */
@@ -103,6 +106,7 @@ export async function findBreak(workshopId: number): Promise<string | null> {
 		'SELECT sequence, hash FROM audit_heads WHERE workshop_id = :workshopId',
 		{ replacements: { workshopId }, type: QueryTypes.SELECT }
 	);
-	if (head && (head.sequence !== entries.length || head.hash !== previousHash)) return 'the end of the trail is cut off';
+	if (head && (head.sequence !== entries.length || head.hash !== previousHash))
+		return 'the end of the trail is cut off';
 	return null;
 }

@@ -5,7 +5,8 @@ import {
 	type InferCreationAttributes,
 	type Sequelize
 } from 'sequelize';
-import type { AssessmentInputs, AssessmentResult, Verdict } from '$lib/schemas/assessments';
+import type { AssessmentInputs, AssessmentResult } from '$lib/schemas/assessments';
+import type { Verdict } from '$lib/schemas/verdicts';
 import { id, json, moment, number, optionalNumber, reference, text, writtenOnce } from './base';
 
 export class Assessment extends Model<InferAttributes<Assessment>, InferCreationAttributes<Assessment>> {

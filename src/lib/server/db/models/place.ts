@@ -5,7 +5,6 @@ import {
 	type InferCreationAttributes,
 	type Sequelize
 } from 'sequelize';
-import type { ClimateZone } from '$lib/schemas/places';
 import { edited, id, moment, number, reference, text, textOrEmpty, whole } from './base';
 
 export class Place extends Model<InferAttributes<Place>, InferCreationAttributes<Place>> {
@@ -16,7 +15,7 @@ export class Place extends Model<InferAttributes<Place>, InferCreationAttributes
 	declare latitudeDeg: number;
 	declare longitudeDeg: number;
 	declare altitudeM: number;
-	declare climateZone: ClimateZone;
+	declare climateZone: string;
 	declare hotDayMaxC: number;
 	declare dailyRangeK: number;
 	declare sunPeakWPerM2: number;

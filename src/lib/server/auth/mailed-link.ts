@@ -1,0 +1,42 @@
+import { Person, SignInLink } from '../db/models';
+import { inTransaction } from '../db/transaction';
+import { env } from '../env';
+import { newToken, tokenHash } from '../hash';
+import { lettersHtml } from '../mail/html';
+import { postLetter } from '../mail/outbox';
+import { spend } from './rate-limit';
+
+const LIVES_MINUTES = 10;
+const WINDOW_S = 15 * 60;
+
+/**
+ * Mails a link that signs its reader in, once, within ten minutes. Says nothing about whether the address is known:
+ * the answer is the same, and the letter is only written down here, to be sent later.
+ */
+export async function mailSignInLink(email: string, address: string): Promise<void> {
+	await spend({ name: 'link account', key: email, points: 5, windowS: WINDOW_S });
+	await spend({ name: 'link address', key: address, points: 50, windowS: WINDOW_S });
+	const person = await Person.findOne({ where: { email, active: true } });
+	if (!person) return;
+	const token = newToken();
+	await inTransaction(async (transaction) => {
+		const expiresAt = new Date(Date.now() + LIVES_MINUTES * 60_000);
+		await SignInLink.create({ tokenHash: tokenHash(token), personId: person.id, expiresAt }, { transaction });
+		const href = `${env().ORIGIN}/sign-in/link/${token}`;
+		const paragraphs = [
+			`Hello ${person.name},`,
+			`this link signs you in to Soakline. It works once, within ${LIVES_MINUTES} minutes.`,
+			'If you did not ask for it, leave it alone: nothing happens.'
+		];
+		await postLetter(
+			{
+				workshopId: person.workshopId,
+				recipient: person.email,
+				subject: 'Your link to sign in to Soakline',
+				textBody: `${paragraphs.join('\n\n')}\n\n${href}\n`,
+				htmlBody: lettersHtml(paragraphs, { href, words: 'Sign in to Soakline' })
+			},
+			transaction
+		);
+	});
+}

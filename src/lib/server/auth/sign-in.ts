@@ -1,0 +1,33 @@
+import type { RequestEvent } from '@sveltejs/kit';
+import { AuthError } from '@auth/sveltekit';
+import { AppError } from '../errors';
+import { signIn } from '.';
+
+/** Where to go after sign-in: a path of ours, never an address that somebody put into a link. */
+export function safeReturnPath(to: string | null): string {
+	return to !== null && /^\/(?![/\\])[^\s\\]*$/.test(to) ? to : '/';
+}
+
+type Credentials =
+	{ provider: 'password'; email: string; password: string } | { provider: 'link'; token: string };
+
+/** Signs in and redirects; answers with one sentence when that fails, the same for every reason. */
+export async function signInWith(event: RequestEvent, credentials: Credentials, to: string): Promise<string> {
+	const { provider, ...fields } = credentials;
+	const body = new URLSearchParams({ ...fields, providerId: provider, redirectTo: to });
+	const headers = new Headers(event.request.headers);
+	headers.set('content-type', 'application/x-www-form-urlencoded');
+	headers.delete('content-length');
+	const request = new Request(event.url, { method: 'POST', headers, body });
+	try {
+		await signIn(Object.create(event, { request: { value: request } }) as RequestEvent);
+	} catch (error) {
+		if (!(error instanceof AuthError)) throw error;
+		const cause = error.cause?.err;
+		if (cause instanceof AppError) return cause.message;
+		return provider === 'link'
+			? 'This link has been used or is too old. Ask for a new one.'
+			: 'The e-mail or the password is not right.';
+	}
+	return '';
+}

@@ -1,0 +1,48 @@
+import { env } from './env';
+import { closeConnection, connection } from './db/connection';
+import { requireDurableSettings } from './db/durability';
+import { migrate } from './db/migrate';
+import { initModels } from './db/models';
+import { logger } from './logger';
+import { startOutbox, stopOutbox } from './mail/outbox';
+import { seedDemo } from './services/demo/seed-demo';
+
+let ready = false;
+
+export const isReady = (): boolean => ready;
+
+async function timed(step: string, work: () => Promise<string>): Promise<void> {
+	const start = performance.now();
+	const detail = await work();
+	logger.info({ step, ms: Math.round(performance.now() - start), detail });
+}
+
+/** Brings the application up step by step, each said with the time it took; a failure ends the process in one sentence. */
+export async function boot(): Promise<void> {
+	try {
+		const settings = env();
+		const sequelize = connection();
+		initModels(sequelize);
+		await timed('database', async () => {
+			await requireDurableSettings(sequelize);
+			return 'durable settings hold';
+		});
+		await timed('migrations', async () => {
+			const count = await migrate(sequelize);
+			return count === 0 ? 'up to date' : `${count} applied`;
+		});
+		if (settings.SOAKLINE_DEMO === '1') await timed('demo data', seedDemo);
+		startOutbox();
+		ready = true;
+		logger.info({ step: 'ready', ms: 0, detail: settings.ORIGIN });
+	} catch (error) {
+		logger.fatal({ fatal: error instanceof Error ? error.message : String(error), err: error });
+		process.exit(1);
+	}
+}
+
+export async function shutDown(): Promise<void> {
+	ready = false;
+	await stopOutbox();
+	await closeConnection();
+}

@@ -1,0 +1,69 @@
+import { QueryTypes } from 'sequelize';
+import { connection } from '../db/connection';
+import { databaseErrorNumber, inTransaction } from '../db/transaction';
+import { AppError } from '../errors';
+import { sha256 } from '../hash';
+
+export interface StoredAnswer {
+	status: number;
+	body: string;
+}
+
+const DUPLICATE_ENTRY = 1062;
+const KEY = /^[\x21-\x7e]{1,120}$/;
+
+async function readStored(
+	personId: number,
+	key: string
+): Promise<{ request: string; answer: StoredAnswer } | null> {
+	const [row] = await connection().query<{ request: string; status: number; body: string }>(
+		`SELECT request_sha256 AS request, status, response AS body FROM idempotency_keys
+		 WHERE person_id = :personId AND idempotency_key = :key`,
+		{ replacements: { personId, key }, type: QueryTypes.SELECT }
+	);
+	return row ? { request: row.request, answer: { status: row.status, body: row.body } } : null;
+}
+
+/**
+ * Does the work once for a key, however often and however parallel it is asked: the key's row and the work's own rows
+ * are one transaction, so a repeat waits for the first and then gets its answer.
+ */
+export async function answerOnce(
+	{ personId, key, request }: { personId: number; key: string; request: string },
+	work: () => Promise<StoredAnswer>
+): Promise<StoredAnswer> {
+	if (!KEY.test(key)) {
+		throw new AppError(
+			'malformed_request',
+			'Idempotency-Key must be 1 to 120 printable characters without spaces.'
+		);
+	}
+	const requestHash = sha256(request);
+	try {
+		return await inTransaction(async (transaction) => {
+			await connection().query(
+				`INSERT INTO idempotency_keys (person_id, idempotency_key, request_sha256, created_at)
+				 VALUES (:personId, :key, :requestHash, UTC_TIMESTAMP(3))`,
+				{ replacements: { personId, key, requestHash }, transaction }
+			);
+			const answer = await work();
+			await connection().query(
+				`UPDATE idempotency_keys SET status = :status, response = :body
+				 WHERE person_id = :personId AND idempotency_key = :key`,
+				{ replacements: { personId, key, ...answer }, transaction }
+			);
+			return answer;
+		});
+	} catch (error) {
+		if (databaseErrorNumber(error) !== DUPLICATE_ENTRY) throw error;
+		const stored = await readStored(personId, key);
+		if (!stored) throw error;
+		if (stored.request !== requestHash) {
+			throw new AppError(
+				'idempotency_key_reused',
+				'This Idempotency-Key was used for a different request before.'
+			);
+		}
+		return stored.answer;
+	}
+}

@@ -1,0 +1,106 @@
+import { z } from 'zod';
+import type { Operation } from './operation';
+
+const problemSchema = z.object({
+	type: z.literal('about:blank'),
+	title: z.string(),
+	status: z.number().int(),
+	detail: z.string(),
+	code: z.string(),
+	id: z.string(),
+	problems: z.array(
+		z.object({
+			path: z.string(),
+			message: z.string(),
+			code: z.string().optional(),
+			value: z.unknown().optional(),
+			limit: z.string().optional()
+		})
+	)
+});
+
+type JsonSchema = Record<string, unknown>;
+
+function schemaOf(schema: z.ZodType, io: 'input' | 'output'): JsonSchema {
+	const { $schema: _dialect, ...json } = z.toJSONSchema(schema, { io, unrepresentable: 'any' }) as JsonSchema;
+	return json;
+}
+
+function parametersOf(where: 'path' | 'query', schema: z.ZodObject | undefined): JsonSchema[] {
+	if (!schema) return [];
+	const json = schemaOf(schema, 'input');
+	const required = new Set((json.required as string[] | undefined) ?? []);
+	return Object.entries((json.properties as Record<string, JsonSchema> | undefined) ?? {}).map(
+		([name, each]) => ({
+			name,
+			in: where,
+			required: where === 'path' || required.has(name),
+			schema: each
+		})
+	);
+}
+
+const IDEMPOTENCY_KEY = {
+	name: 'Idempotency-Key',
+	in: 'header',
+	required: false,
+	description: 'A repeat with the same key and body gets the first answer again and does nothing twice.',
+	schema: { type: 'string', minLength: 1, maxLength: 120 }
+};
+
+function describe(operation: Operation): JsonSchema {
+	const { id, summary, params, query, body, answer, status, method } = operation;
+	const problem = {
+		description: 'A problem, as in RFC 9457',
+		content: { 'application/problem+json': { schema: { $ref: '#/components/schemas/Problem' } } }
+	};
+	return {
+		operationId: id,
+		summary,
+		parameters: [
+			...parametersOf('path', params),
+			...parametersOf('query', query),
+			...(method === 'POST' ? [IDEMPOTENCY_KEY] : [])
+		],
+		...(body
+			? {
+					requestBody: {
+						required: true,
+						content: { 'application/json': { schema: schemaOf(body, 'input') } }
+					}
+				}
+			: {}),
+		responses: {
+			[status]: {
+				description: 'Done',
+				content: { 'application/json': { schema: schemaOf(answer, 'output') } }
+			},
+			default: problem
+		}
+	};
+}
+
+/** The OpenAPI 3.1 document of all operations, made from the schemas that check them. */
+export function openApiDocument(operations: readonly Operation[], origin: string): JsonSchema {
+	const paths: Record<string, JsonSchema> = {};
+	for (const operation of operations) {
+		const path = operation.path.replace(/\[(\w+)\]/g, '{$1}');
+		paths[path] = { ...paths[path], [operation.method.toLowerCase()]: describe(operation) };
+	}
+	return {
+		openapi: '3.1.0',
+		info: {
+			title: 'Soakline',
+			version: '1',
+			description:
+				'Whether an auxiliary battery will live where it is to be mounted. An estimate, not a certificate: the makers, local rules and licensed practice come first.'
+		},
+		servers: [{ url: origin }],
+		security: [{ session: [] }],
+		paths,
+		components: {
+			schemas: { Problem: schemaOf(problemSchema, 'output') },
+			securitySchemes: { session: { type: 'apiKey', in: 'cookie', name: 'soakline' } }
+		}
+	};
+}

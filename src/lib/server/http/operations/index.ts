@@ -1,0 +1,7 @@
+import type { Operation } from '../operation';
+import { placeOperations } from './places';
+
+/** Everything that the API does. A route without an entry here, or an entry without a route, fails a test. */
+export const OPERATIONS: readonly Operation[] = [placeOperations].flatMap(
+	(group) => Object.values(group) as unknown as Operation[]
+);

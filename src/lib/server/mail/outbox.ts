@@ -1,0 +1,89 @@
+import { randomUUID } from 'node:crypto';
+import { Op, type Transaction } from 'sequelize';
+import { OutgoingMail } from '../db/models';
+import { outsideTransaction } from '../db/transaction';
+import { logger } from '../logger';
+import { deliver, type Letter } from './transport';
+
+const LOOK_EVERY_MS = 5_000;
+const BATCH = 20;
+const MOST_ATTEMPTS = 8;
+const FIRST_PAUSE_MS = 5_000;
+/** While one process is busy with a letter, others leave it alone for this long. */
+const CLAIM_MS = 60_000;
+
+export type NewLetter = Omit<Letter, 'messageId'> & { workshopId: number; sheetId?: number };
+
+/** Puts a letter into the same transaction as what it tells of: both are kept, or neither. */
+export async function postLetter(letter: NewLetter, transaction: Transaction): Promise<void> {
+	await OutgoingMail.create(
+		{ ...letter, messageId: `<${randomUUID()}@soakline.invalid>`, nextAttemptAt: new Date() },
+		{ transaction }
+	);
+	transaction.afterCommit(() => outsideTransaction(nudge));
+}
+
+async function claim(mail: OutgoingMail): Promise<boolean> {
+	const [changed] = await OutgoingMail.update(
+		{ nextAttemptAt: new Date(Date.now() + CLAIM_MS), attempts: mail.attempts + 1 },
+		{ where: { id: mail.id, state: 'waiting', attempts: mail.attempts } }
+	);
+	return changed === 1;
+}
+
+async function sendOne(mail: OutgoingMail): Promise<void> {
+	if (!(await claim(mail))) return;
+	const attempts = mail.attempts + 1;
+	try {
+		await deliver(mail);
+		await OutgoingMail.update(
+			{ state: 'sent', sentAt: new Date(), lastError: '' },
+			{ where: { id: mail.id } }
+		);
+	} catch (error) {
+		const lastError = (error instanceof Error ? error.message : String(error)).slice(0, 300);
+		const givenUp = attempts >= MOST_ATTEMPTS;
+		const nextAttemptAt = new Date(Date.now() + FIRST_PAUSE_MS * 2 ** attempts);
+		await OutgoingMail.update(
+			{ state: givenUp ? 'failed' : 'waiting', nextAttemptAt, lastError },
+			{ where: { id: mail.id } }
+		);
+		logger.warn({ mailId: mail.id, attempts, givenUp, lastError }, 'mail not sent');
+	}
+}
+
+/** Sends what is due; a letter that fails waits longer each time and is given up after eight tries. */
+export async function sendDue(): Promise<void> {
+	const due = await OutgoingMail.findAll({
+		where: { state: 'waiting', nextAttemptAt: { [Op.lte]: new Date() } },
+		order: [
+			['nextAttemptAt', 'ASC'],
+			['id', 'ASC']
+		],
+		limit: BATCH
+	});
+	for (const mail of due) await sendOne(mail);
+}
+
+let timer: NodeJS.Timeout | undefined;
+let running: Promise<void> | null = null;
+
+function nudge(): void {
+	if (timer === undefined) return;
+	running ??= sendDue()
+		.catch((error: unknown) => logger.error({ err: error }, 'outbox failed'))
+		.finally(() => {
+			running = null;
+		});
+}
+
+export function startOutbox(): void {
+	timer ??= setInterval(nudge, LOOK_EVERY_MS);
+	nudge();
+}
+
+export async function stopOutbox(): Promise<void> {
+	clearInterval(timer);
+	timer = undefined;
+	await running;
+}

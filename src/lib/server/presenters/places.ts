@@ -1,0 +1,11 @@
+import type { PlaceView } from '$lib/schemas/places';
+import type { Place } from '../db/models';
+
+export function presentPlace(place: Place): PlaceView {
+	const { id, version, name, region, latitudeDeg, longitudeDeg, altitudeM, climateZone } = place;
+	const { hotDayMaxC, dailyRangeK, sunPeakWPerM2, source } = place;
+	return {
+		...{ id, version, name, region, latitudeDeg, longitudeDeg, altitudeM, climateZone },
+		...{ hotDayMaxC, dailyRangeK, sunPeakWPerM2, source }
+	};
+}

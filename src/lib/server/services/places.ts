@@ -1,0 +1,59 @@
+import type { PlaceInput, PlaceView } from '$lib/schemas/places';
+import type { SignedInPerson } from '$lib/schemas/people';
+import { Place } from '../db/models';
+import { inTransaction } from '../db/transaction';
+import { notFound } from '../errors';
+import { allow } from '../policies';
+import { presentPlace } from '../presenters/places';
+import { recordBy } from './audit';
+import { orNameTaken, saveVersioned } from './records';
+
+export async function listPlaces(person: SignedInPerson): Promise<PlaceView[]> {
+	allow(person, 'places.read');
+	const places = await Place.findAll({
+		where: { workshopId: person.workshopId },
+		order: [
+			['name', 'ASC'],
+			['id', 'ASC']
+		]
+	});
+	return places.map(presentPlace);
+}
+
+export async function getPlace(person: SignedInPerson, placeId: number): Promise<PlaceView> {
+	allow(person, 'places.read');
+	const place = await Place.findOne({ where: { id: placeId, workshopId: person.workshopId } });
+	if (!place) throw notFound('place');
+	return presentPlace(place);
+}
+
+export async function createPlace(person: SignedInPerson, input: PlaceInput): Promise<PlaceView> {
+	allow(person, 'places.write');
+	return orNameTaken('place', 'name', () =>
+		inTransaction(async (transaction) => {
+			const place = await Place.create({ ...input, workshopId: person.workshopId }, { transaction });
+			await recordBy(person, 'place.created', { type: 'place', id: place.id }, transaction, { ...input });
+			return presentPlace(place);
+		})
+	);
+}
+
+export async function updatePlace(
+	person: SignedInPerson,
+	placeId: number,
+	{ version, ...input }: PlaceInput & { version: number }
+): Promise<PlaceView> {
+	allow(person, 'places.write');
+	return orNameTaken('place', 'name', () =>
+		inTransaction(async (transaction) => {
+			const place = await Place.findOne({
+				where: { id: placeId, workshopId: person.workshopId },
+				transaction
+			});
+			if (!place) throw notFound('place');
+			await saveVersioned(place, 'place', version, input, transaction);
+			await recordBy(person, 'place.changed', { type: 'place', id: place.id }, transaction, { ...input });
+			return presentPlace(place);
+		})
+	);
+}
