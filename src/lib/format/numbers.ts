@@ -13,9 +13,11 @@ export function formatWithUnit(value: number, unit: string, decimals = 0): strin
 	return `${formatNumber(value, decimals)}${THIN_SPACE}${unit}`;
 }
 
-export const formatTemperature = (tempC: number, decimals = 0): string => formatWithUnit(tempC, '°C', decimals);
+export const formatTemperature = (tempC: number, decimals = 0): string =>
+	formatWithUnit(tempC, '°C', decimals);
 
-export const formatKelvin = (differenceK: number, decimals = 1): string => formatWithUnit(differenceK, 'K', decimals);
+export const formatKelvin = (differenceK: number, decimals = 1): string =>
+	formatWithUnit(differenceK, 'K', decimals);
 
 /** A change in kelvin: a gain says its plus. */
 export function formatKelvinChange(differenceK: number, decimals = 1): string {
@@ -29,9 +31,11 @@ export const formatAmpHours = (chargeAh: number): string =>
 export const formatAmps = (currentA: number): string =>
 	formatWithUnit(currentA, 'A', Number.isInteger(currentA) ? 0 : 1);
 
-export const formatWatts = (powerW: number): string => formatWithUnit(powerW, 'W', Math.abs(powerW) < 9.95 ? 1 : 0);
+export const formatWatts = (powerW: number): string =>
+	formatWithUnit(powerW, 'W', Math.abs(powerW) < 9.95 ? 1 : 0);
 
-export const formatPercent = (share: number, decimals = 0): string => formatWithUnit(share * 100, '%', decimals);
+export const formatPercent = (share: number, decimals = 0): string =>
+	formatWithUnit(share * 100, '%', decimals);
 
 export const formatMillimetres = (lengthMm: number): string => formatWithUnit(lengthMm, 'mm');
 

@@ -1,7 +1,21 @@
 import { THIN_SPACE } from './numbers';
 
 const MINUTES_A_DAY = 1440;
-const SMALL_NUMBERS = ['no', 'one', 'two', 'three', 'four', 'five', 'six', 'seven', 'eight', 'nine', 'ten', 'eleven', 'twelve'];
+const SMALL_NUMBERS = [
+	'no',
+	'one',
+	'two',
+	'three',
+	'four',
+	'five',
+	'six',
+	'seven',
+	'eight',
+	'nine',
+	'ten',
+	'eleven',
+	'twelve'
+];
 
 const twoDigits = (value: number): string => String(value).padStart(2, '0');
 

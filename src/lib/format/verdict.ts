@@ -1,5 +1,6 @@
-export const VERDICTS = ['rides-it-out', 'runs-close', 'cuts-out'] as const;
-export type Verdict = (typeof VERDICTS)[number];
+import type { Verdict } from '../schemas/verdicts';
+
+export { VERDICTS, type Verdict } from '../schemas/verdicts';
 
 const WORDS: Record<Verdict, string> = {
 	'rides-it-out': 'Rides it out',
