@@ -7,9 +7,10 @@ import { logger } from './logger';
 import { startOutbox, stopOutbox } from './mail/outbox';
 import { seedDemo } from './services/demo/seed-demo';
 
-let ready = false;
+/** Kept on globalThis so that a development reload, which loads this module again, does not forget it. */
+const state = globalThis as { soaklineReady?: boolean };
 
-export const isReady = (): boolean => ready;
+export const isReady = (): boolean => state.soaklineReady === true;
 
 async function timed(step: string, work: () => Promise<string>): Promise<void> {
 	const start = performance.now();
@@ -33,7 +34,7 @@ export async function boot(): Promise<void> {
 		});
 		if (settings.SOAKLINE_DEMO === '1') await timed('demo data', seedDemo);
 		startOutbox();
-		ready = true;
+		state.soaklineReady = true;
 		logger.info({ step: 'ready', ms: 0, detail: settings.ORIGIN });
 	} catch (error) {
 		logger.fatal({ fatal: error instanceof Error ? error.message : String(error), err: error });
@@ -42,7 +43,7 @@ export async function boot(): Promise<void> {
 }
 
 export async function shutDown(): Promise<void> {
-	ready = false;
+	state.soaklineReady = false;
 	await stopOutbox();
 	await closeConnection();
 }

@@ -19,6 +19,9 @@ const TRIES_PER_ACCOUNT = 10;
 const TRIES_PER_ADDRESS = 100;
 const WINDOW_S = 15 * 60;
 
+/** AUTH_URL carries no path and basePath does: the library warns of that on every request, and it is meant so. */
+const BASE_PATH_TWICE = 'env-url-basepath-redundant';
+
 /** Forwarded by hooks.server.ts from the connection itself, so that nobody can choose it. */
 export const CLIENT_ADDRESS_HEADER = 'x-soakline-client';
 
@@ -84,7 +87,9 @@ export const { handle, signIn, signOut } = SvelteKitAuth(() => {
 			error: (error: Error) => {
 				if (error.name !== 'CredentialsSignin') logger.error({ error: error.message }, 'sign-in failed');
 			},
-			warn: (code: string) => logger.warn({ code }, 'sign-in warning'),
+			warn: (code: string) => {
+				if (code !== BASE_PATH_TWICE) logger.warn({ code }, 'sign-in warning');
+			},
 			debug: () => undefined
 		}
 	});

@@ -2,7 +2,7 @@ import { connection } from '../db/connection';
 
 export async function isDatabaseUp(): Promise<boolean> {
 	try {
-		await connection().query('SELECT 1');
+		await connection().authenticate();
 		return true;
 	} catch {
 		return false;

@@ -65,6 +65,11 @@ const initialisers = [
 
 /** Ties every model to the connection, and the models to each other. */
 export function initModels(sequelize: Sequelize): void {
+	// The library writes each column's name into the object that describes it, and ours are shared: give it copies.
+	sequelize.addHook('beforeDefine', 'own-columns', (attributes) => {
+		const columns = attributes as Record<string, object>;
+		for (const [name, column] of Object.entries(columns)) columns[name] = { ...column };
+	});
 	for (const init of initialisers) init(sequelize);
 	Job.belongsTo(Customer, { as: 'customer', foreignKey: 'customerId' });
 	Job.belongsTo(Vehicle, { as: 'vehicle', foreignKey: 'vehicleId' });
