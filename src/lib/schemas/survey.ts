@@ -7,17 +7,18 @@ import {
 	COOLINGS,
 	ENCLOSURE_AIRS,
 	FACINGS,
-	LENGTH_LIMITS_MM,
 	POSITION_KINDS,
 	ROAD_HEATS,
 	SHIELD_FINISHES,
 	SHIELD_KINDS,
 	SHIELD_PLACES,
 	SUN_LOADS,
+	SURVEY_FIELDS,
 	TRAY_MATERIALS,
 	TRAY_MATS,
 	TRAY_UNDERSIDES,
 	UNKNOWN,
+	type ChoiceKey,
 	type LengthKey,
 	type PositionKind,
 	type SurveyAnswers
@@ -30,9 +31,9 @@ export const positionKindSchema = z.enum(POSITION_KINDS).meta({ label: 'Where it
 
 /** A tape-measure reading, "unknown", or not yet answered. */
 function reading(key: LengthKey) {
-	const { label, min, max } = LENGTH_LIMITS_MM[key];
+	const { label, minMm, maxMm } = SURVEY_FIELDS[key];
 	return z
-		.union([measure(label, 'mm', min, max), z.literal(UNKNOWN)], {
+		.union([measure(label, 'mm', minMm, maxMm), z.literal(UNKNOWN)], {
 			error: `${label} must be a number of mm.`
 		})
 		.optional()
@@ -40,7 +41,8 @@ function reading(key: LengthKey) {
 }
 
 /** One of the choices, "unknown", or not yet answered. */
-function choice<const T extends readonly [string, ...string[]]>(label: string, choices: T) {
+function choice<const T extends readonly [string, ...string[]]>(key: ChoiceKey, choices: T) {
+	const { label } = SURVEY_FIELDS[key];
 	return z
 		.union([z.enum(choices), z.literal(UNKNOWN)], { error: `${label}: choose one of the answers.` })
 		.optional()
@@ -49,32 +51,32 @@ function choice<const T extends readonly [string, ...string[]]>(label: string, c
 
 export const surveyAnswersSchema = z.object({
 	positionKind: positionKindSchema,
-	bayPlace: choice('Where in the bay', BAY_PLACES),
-	exhaustFacing: choice('How the exhaust faces the battery', FACINGS),
+	bayPlace: choice('bayPlace', BAY_PLACES),
+	exhaustFacing: choice('exhaustFacing', FACINGS),
 	exhaustGapMm: reading('exhaustGapMm'),
 	exhaustSeenWidthMm: reading('exhaustSeenWidthMm'),
 	exhaustSeenHeightMm: reading('exhaustSeenHeightMm'),
-	exhaustBatterySide: choice('Side of the battery towards the exhaust', BATTERY_SIDES),
-	engineFacing: choice('How the engine faces the battery', FACINGS),
+	exhaustBatterySide: choice('exhaustBatterySide', BATTERY_SIDES),
+	engineFacing: choice('engineFacing', FACINGS),
 	engineGapMm: reading('engineGapMm'),
 	engineSeenWidthMm: reading('engineSeenWidthMm'),
 	engineSeenHeightMm: reading('engineSeenHeightMm'),
-	engineBatterySide: choice('Side of the battery towards the engine', BATTERY_SIDES),
+	engineBatterySide: choice('engineBatterySide', BATTERY_SIDES),
 	bonnetGapMm: reading('bonnetGapMm'),
-	bonnetLining: choice('Under the bonnet panel', BONNET_LININGS),
-	airPath: choice('Air around the battery', AIR_PATHS),
-	trayMaterial: choice('Tray material', TRAY_MATERIALS),
+	bonnetLining: choice('bonnetLining', BONNET_LININGS),
+	airPath: choice('airPath', AIR_PATHS),
+	trayMaterial: choice('trayMaterial', TRAY_MATERIALS),
 	trayLengthMm: reading('trayLengthMm'),
 	trayWidthMm: reading('trayWidthMm'),
 	trayThicknessMm: reading('trayThicknessMm'),
-	trayMat: choice('Between battery and tray', TRAY_MATS),
-	trayUnderside: choice('Under the tray', TRAY_UNDERSIDES),
-	shieldKind: choice('Heat shield', SHIELD_KINDS),
-	shieldPlace: choice('Sides that the shield covers', SHIELD_PLACES),
-	shieldFinish: choice('Finish of the shield', SHIELD_FINISHES),
+	trayMat: choice('trayMat', TRAY_MATS),
+	trayUnderside: choice('trayUnderside', TRAY_UNDERSIDES),
+	shieldKind: choice('shieldKind', SHIELD_KINDS),
+	shieldPlace: choice('shieldPlace', SHIELD_PLACES),
+	shieldFinish: choice('shieldFinish', SHIELD_FINISHES),
 	shieldStandOffMm: reading('shieldStandOffMm'),
-	enclosureCooling: choice('Cooling inside', COOLINGS),
-	enclosureSun: choice('Sun on it', SUN_LOADS),
-	enclosureAir: choice('Air exchange', ENCLOSURE_AIRS),
-	roadHeat: choice('Heat from the road', ROAD_HEATS)
+	enclosureCooling: choice('enclosureCooling', COOLINGS),
+	enclosureSun: choice('enclosureSun', SUN_LOADS),
+	enclosureAir: choice('enclosureAir', ENCLOSURE_AIRS),
+	roadHeat: choice('roadHeat', ROAD_HEATS)
 }) satisfies z.ZodType<SurveyAnswers>;

@@ -1,4 +1,4 @@
-import { requireFraction, requirePositive, requireNotBelow } from './require';
+import { requireFraction, requireNotBelow } from './require';
 
 /** Stefan–Boltzmann constant, W/m²K⁴ (CODATA 2018: exact, from h, k and c). */
 export const STEFAN_BOLTZMANN = 5.670374419e-8;
