@@ -1,6 +1,6 @@
 import { pressureAtAltitude } from '../correlations/air';
 import type { ScenarioInput } from '../types';
-import { AnswerReader } from './answers';
+import { AnswerReader, listAssumptions } from './answers';
 import { measureBattery } from './battery-shape';
 import { deriveBattery } from './derive-battery';
 import { derivePosition } from './derive-position';
@@ -68,14 +68,14 @@ const STANDING_ASSUMPTIONS = [
  */
 export function buildScenario(inputs: SurveyInputs): BuiltScenario {
 	const draft = new ScenarioDraft(inputs.coefficients);
-	const answers = new AnswerReader(inputs.survey, (sentence) => draft.assume(sentence));
+	const answers = new AnswerReader(inputs.survey);
 	const shape = measureBattery(inputs.battery);
 	deriveVehicle(draft, inputs.vehicle);
 	deriveBattery(draft, inputs.battery, shape);
 	derivePosition(draft, answers, shape);
 	deriveDay(draft, inputs);
 	deriveClimate(draft, inputs);
-	for (const sentence of STANDING_ASSUMPTIONS) draft.assume(sentence);
+	for (const sentence of [...listAssumptions(inputs.survey), ...STANDING_ASSUMPTIONS]) draft.assume(sentence);
 	const scenario = draft.build(planLegs(inputs.dayPlan, inputs.vehicle));
 	return { scenario, derivations: draft.derivations, assumptions: draft.assumptions };
 }

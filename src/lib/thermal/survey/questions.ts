@@ -108,7 +108,7 @@ export const SURVEY_QUESTIONS: readonly SurveyQuestion[] = [
 		kinds: ['under-bonnet', 'canopy-box', 'chassis-rail'],
 		fields: ['trayMaterial', 'trayThicknessMm', 'trayLengthMm', 'trayWidthMm', 'trayMat', 'trayUnderside'],
 		ifUnknown:
-			'Straight on a 3 mm steel tray a little larger than the battery, with the air of the bay under it.'
+			'Straight on a 3 mm steel tray a little larger than the battery; under the bonnet, with bay air beneath.'
 	},
 	{
 		id: 'shield',
@@ -116,7 +116,7 @@ export const SURVEY_QUESTIONS: readonly SurveyQuestion[] = [
 		why: 'A bright surface between hot metal and the case turns most of the radiation back.',
 		kinds: IN_THE_OPEN,
 		fields: ['shieldKind', 'shieldPlace', 'shieldFinish', 'shieldStandOffMm'],
-		ifUnknown: 'No shield.'
+		ifUnknown: 'No shield; where there is one, dull and on the cool side.'
 	}
 ];
 
