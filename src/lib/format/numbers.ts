@@ -9,6 +9,13 @@ export function formatNumber(value: number, decimals = 0): string {
 	return rounded < 0 ? `${MINUS}${text}` : text;
 }
 
+/** A figure in a box as a person would have typed it: all its digits, no grouping, no exponent, no dust behind. */
+export function writeNumber(value: number): string {
+	const plain = Number(value.toPrecision(12));
+	const text = String(plain).includes('e') ? plain.toFixed(20).replace(/\.?0+$/, '') : String(plain);
+	return text.replace('-', MINUS);
+}
+
 export function formatWithUnit(value: number, unit: string, decimals = 0): string {
 	return `${formatNumber(value, decimals)}${THIN_SPACE}${unit}`;
 }

@@ -2,6 +2,7 @@
  * Apart from the other formats, so that only who converts carries the unit library.
  */
 import { create, unitDependencies } from 'mathjs';
+import type { MeasureUnit } from '../schemas/fields';
 import { parseDecimal } from './parse';
 
 const math = create({ unitDependencies });
@@ -19,7 +20,10 @@ const UNIT_NAMES = {
 	lb: 'lb',
 	t: 'tonne',
 	'km/h': 'km/h',
-	mph: 'mile/h'
+	mph: 'mile/h',
+	s: 's',
+	min: 'minute',
+	h: 'hour'
 } as const;
 export type PeopleUnit = keyof typeof UNIT_NAMES;
 
@@ -45,7 +49,13 @@ const SPELLINGS: Record<string, PeopleUnit> = {
 	t: 't',
 	'km/h': 'km/h',
 	kmh: 'km/h',
-	mph: 'mph'
+	mph: 'mph',
+	s: 's',
+	min: 'min',
+	h: 'h',
+	hr: 'h',
+	hour: 'h',
+	hours: 'h'
 };
 
 /** Converts between two units of one kind; throws when they are not of one kind. */
@@ -55,15 +65,20 @@ export function convertUnit(value: number, from: PeopleUnit, to: PeopleUnit): nu
 }
 
 /** "180", "180 mm" and "7 in" all answer in `unit`; null when it is no number or a unit of another kind. */
-export function parseMeasure(text: string, unit: PeopleUnit): number | null {
+export function parseMeasure(text: string, unit: PeopleUnit | MeasureUnit): number | null {
 	const match = /^(.*?\d[.,]?)\s*([^\d\s.,][^\d]*)?$/.exec(text.trim());
 	const value = parseDecimal(match?.[1] ?? '');
 	if (value === null) return null;
 	const written = match?.[2]?.trim().toLowerCase();
-	if (!written) return value;
+	if (!written || written === unit.toLowerCase()) return value;
 	const from = SPELLINGS[written];
-	if (!from || !areOfOneKind(from, unit)) return null;
-	return convertUnit(value, from, unit);
+	if (!from || !isConvertible(unit) || !areOfOneKind(from, unit)) return null;
+	return Number(convertUnit(value, from, unit).toPrecision(12));
+}
+
+/** A kelvin is never converted here: a difference of 10 °F is not a temperature of 10 °F. */
+function isConvertible(unit: string): unit is PeopleUnit {
+	return unit in UNIT_NAMES;
 }
 
 function areOfOneKind(a: PeopleUnit, b: PeopleUnit): boolean {

@@ -1,5 +1,3 @@
-import { formatNumber, MINUS } from '$lib/format/numbers';
-
 export interface StepRange {
 	step: number;
 	min?: number;
@@ -13,9 +11,4 @@ export function stepValue(value: number, direction: 1 | -1, { step, min, max }: 
 	const moved = value + direction * step;
 	const decimals = Math.max(decimalsOf(step), decimalsOf(value));
 	return Math.min(max ?? Infinity, Math.max(min ?? -Infinity, Number(moved.toFixed(decimals))));
-}
-
-/** As a person would have typed it: a true minus, no grouping. */
-export function writeValue(value: number): string {
-	return Number.isInteger(value) ? formatNumber(value) : String(value).replace('-', MINUS);
 }
