@@ -1,15 +1,6 @@
-import { fileURLToPath } from 'node:url';
 import { sveltekit } from '@sveltejs/kit/vite';
 import tailwindcss from '@tailwindcss/vite';
 import { defineConfig, type TestProjectInlineConfiguration } from 'vitest/config';
-
-/** Superforms' adapter index pulls in a dozen validators; we use zod alone. */
-const zodAdapterOnly = {
-	find: /^sveltekit-superforms\/adapters$/,
-	replacement: fileURLToPath(
-		new URL('./node_modules/sveltekit-superforms/dist/adapters/zod4.js', import.meta.url)
-	)
-};
 
 function testProject(name: string, test: Record<string, unknown>): TestProjectInlineConfiguration {
 	return { extends: true, test: { name, environment: 'node', expect: { requireAssertions: true }, ...test } };
@@ -17,7 +8,6 @@ function testProject(name: string, test: Record<string, unknown>): TestProjectIn
 
 export default defineConfig({
 	plugins: [tailwindcss(), sveltekit()],
-	resolve: { alias: [zodAdapterOnly] },
 	worker: { format: 'es' },
 	ssr: { external: ['sequelize', 'mariadb'] },
 	server: { port: Number(process.env.PORT ?? 4173), strictPort: true },

@@ -8,14 +8,21 @@ import { spend } from './rate-limit';
 
 const LIVES_MINUTES = 10;
 const WINDOW_S = 15 * 60;
+/** Longer than writing the letter takes, so that the time of the answer does not tell a known address either. */
+const ANSWER_AFTER_MS = 400;
 
 /**
  * Mails a link that signs its reader in, once, within ten minutes. Says nothing about whether the address is known:
- * the answer is the same, and the letter is only written down here, to be sent later.
+ * the answer is the same and takes as long, and the letter is only written down here, to be sent later.
  */
 export async function mailSignInLink(email: string, address: string): Promise<void> {
 	await spend({ name: 'link account', key: email, points: 5, windowS: WINDOW_S });
 	await spend({ name: 'link address', key: address, points: 50, windowS: WINDOW_S });
+	const pause = new Promise((resolve) => setTimeout(resolve, ANSWER_AFTER_MS));
+	await Promise.all([writeLetter(email), pause]);
+}
+
+async function writeLetter(email: string): Promise<void> {
 	const person = await Person.findOne({ where: { email, active: true } });
 	if (!person) return;
 	const token = newToken();

@@ -1,7 +1,7 @@
 import type { RequestEvent } from '@sveltejs/kit';
 import { AuthError } from '@auth/sveltekit';
 import { AppError } from '../errors';
-import { signIn } from '.';
+import { signIn, signOut } from '.';
 
 /** Where to go after sign-in: a path of ours, never an address that somebody put into a link. */
 export function safeReturnPath(to: string | null): string {
@@ -30,4 +30,15 @@ export async function signInWith(event: RequestEvent, credentials: Credentials, 
 			: 'The e-mail or the password is not right.';
 	}
 	return '';
+}
+
+/** Ends the session in the database and on this device. What the device kept for itself is cleared as well. */
+export async function endSession(event: RequestEvent): Promise<void> {
+	event.setHeaders({ 'clear-site-data': '"storage"' });
+	const headers = new Headers(event.request.headers);
+	headers.set('content-type', 'application/x-www-form-urlencoded');
+	headers.delete('content-length');
+	const body = new URLSearchParams({ redirectTo: '/sign-in' });
+	const request = new Request(event.url, { method: 'POST', headers, body });
+	await signOut(Object.create(event, { request: { value: request } }) as RequestEvent);
 }

@@ -1,0 +1,67 @@
+import { fail, redirect, type RequestEvent } from '@sveltejs/kit';
+import { message, setError, superValidate, type SuperValidated } from 'sveltekit-superforms';
+import type { z } from 'zod';
+import { formShape, parseForm, toFormValues, type FormValues } from '$lib/format/form-values';
+import type { SignedInPerson } from '$lib/schemas/people';
+import { AppError } from '../errors';
+import type { Action } from '../policies';
+import { guard } from './guard';
+import { zod4 } from './zod-adapter';
+
+/** A form as the page holds it: numbers are the text that was typed, until the schema has read them. */
+export type PageForm = SuperValidated<FormValues, string>;
+
+/** The form for a page, with what is known so far in its boxes. */
+export async function loadForm<S extends z.ZodObject>(
+	schema: S,
+	data: Partial<z.input<S>> = {}
+): Promise<PageForm> {
+	const shape = formShape(schema);
+	const values = toFormValues(schema, data) as never;
+	return (await superValidate(values, zod4(shape), { errors: false })) as unknown as PageForm;
+}
+
+type Read<S extends z.ZodObject> = { form: PageForm; data: z.output<S> } | { form: PageForm; data: null };
+
+/** Reads a posted form against its schema; what is wrong stands at its field, what was typed stays. */
+export async function readForm<S extends z.ZodObject>(formData: FormData, schema: S): Promise<Read<S>> {
+	const form = (await superValidate(formData, zod4(formShape(schema)), {
+		errors: false
+	})) as unknown as PageForm;
+	const parsed = parseForm(schema, Object.fromEntries(formData));
+	if ('data' in parsed) return { form, data: parsed.data };
+	for (const problem of parsed.errors) setError(form, problem.path as never, problem.message);
+	form.valid = false;
+	return { form, data: null };
+}
+
+/** Puts what a service refused beside its field, or above the form when it concerns the whole. */
+export function refuseForm(form: PageForm, error: unknown) {
+	if (!(error instanceof AppError)) throw error;
+	const named = error.problems.filter((problem) => problem.path in form.data);
+	for (const problem of named) setError(form, problem.path as never, problem.message);
+	form.valid = false;
+	if (named.length === error.problems.length && named.length > 0) return fail(error.status, { form });
+	return message(form, error.message, { status: error.status as 400 });
+}
+
+/**
+ * A form's whole way: guard, validate, do (the service authorises, records and keeps it in one transaction), then 303.
+ * After any refusal the page comes back with every word still in its box.
+ */
+export async function saveForm<S extends z.ZodObject>(
+	event: RequestEvent,
+	steps: {
+		action: Action;
+		schema: S;
+		/** Does it, and says where to go next. */
+		save: (person: SignedInPerson, data: z.output<S>) => Promise<string>;
+	}
+) {
+	const person = guard(event, steps.action);
+	const { form, data } = await readForm(await event.request.formData(), steps.schema);
+	if (data === null) return fail(422, { form });
+	const next = await steps.save(person, data).catch((error: unknown) => ({ refusal: error }));
+	if (typeof next !== 'string') return refuseForm(form, next.refusal);
+	redirect(303, next);
+}

@@ -1,0 +1,41 @@
+import AxeBuilder from '@axe-core/playwright';
+import { expect, type Page } from '@playwright/test';
+import people from '../../seeds/demo-people.json' with { type: 'json' };
+
+type DemoRole = 'installer' | 'engineer' | 'manager' | 'customer';
+
+/** Signs in as the first demo person of a role, through the page that people use. */
+export async function signInAs(page: Page, role: DemoRole): Promise<void> {
+	const person = people.find((each) => each.role === role);
+	if (!person) throw new Error(`The demo has no ${role}.`);
+	await signInWith(page, person);
+}
+
+/** The manager of the other demo workshop. */
+export async function signInAsNeighbour(page: Page): Promise<void> {
+	const person = people.find((each) => each.workshop !== people[0]?.workshop);
+	if (!person) throw new Error('The demo has no second workshop.');
+	await signInWith(page, person);
+}
+
+async function signInWith(
+	page: Page,
+	{ email, password }: { email: string; password: string }
+): Promise<void> {
+	await page.goto('/sign-in');
+	await page.getByLabel('E-mail', { exact: true }).fill(email);
+	await page.getByLabel('Password').fill(password);
+	await page.getByRole('button', { name: 'Sign in' }).click();
+	await page.waitForURL((url) => !url.pathname.startsWith('/sign-in'));
+}
+
+/** Nothing on the page that an accessibility scan by the rules of WCAG 2.2 AA finds fault with. */
+export async function expectNoViolations(page: Page): Promise<void> {
+	const { violations } = await new AxeBuilder({ page })
+		.withTags(['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa', 'best-practice'])
+		.analyze();
+	const found = violations.map(
+		({ id, nodes }) => `${id}: ${nodes.map((node) => node.target.join(' ')).join(', ')}`
+	);
+	expect(found).toEqual([]);
+}
