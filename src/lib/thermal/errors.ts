@@ -26,7 +26,7 @@ export interface ScenarioFault {
  * A scenario that cannot be simulated: says what, where and the limit, before anything is run.
  *
  * @example
- * new ScenarioError({ code: 'out_of_range', path: 'start.soc', value: 2, limit: '0 to 1' }).message
+ * new ScenarioError({ code: 'out_of_range', path: 'start.soc', value: 2, limit: '0 to 1' }).message;
  * // 'start.soc is 2: it must be 0 to 1.'
  */
 export class ScenarioError extends Error implements ScenarioFault {

@@ -22,13 +22,25 @@ function requireNotNegative(value: number, part: string, what: string): void {
 function checkNode(node: NetworkNode, kinds: ReadonlyMap<string, NetworkNode['kind']>): void {
 	if (node.kind === 'stored') {
 		const capacity = node.heatCapacityJPerK;
-		requireThat(Number.isFinite(capacity) && capacity > 0, node.name, `heat capacity is ${capacity}, it must be above 0`);
+		requireThat(
+			Number.isFinite(capacity) && capacity > 0,
+			node.name,
+			`heat capacity is ${capacity}, it must be above 0`
+		);
 	} else if (node.kind === 'fixed') {
-		requireThat(node.tempC > -273.15, node.name, `temperature is ${node.tempC}, it must be above absolute zero`);
+		requireThat(
+			node.tempC > -273.15,
+			node.name,
+			`temperature is ${node.tempC}, it must be above absolute zero`
+		);
 	} else {
 		for (const part of node.parts) {
 			const kind = kinds.get(part.node);
-			requireThat(kind === 'stored' || kind === 'fixed', node.name, `mixes "${part.node}", not a stored or fixed node`);
+			requireThat(
+				kind === 'stored' || kind === 'fixed',
+				node.name,
+				`mixes "${part.node}", not a stored or fixed node`
+			);
 		}
 	}
 }

@@ -1,5 +1,5 @@
 import { ScenarioError, type ScenarioErrorCode } from '../errors';
-import type { Leg, Scenario } from '../types';
+import type { Leg, Scenario, ScenarioInput } from '../types';
 import { checkConsistency } from './check-consistency';
 import {
 	FIELD_GROUPS,
@@ -132,7 +132,7 @@ function parseLegs(input: unknown): Leg[] {
  * @returns a whole scenario that the engine can run
  * @throws ScenarioError with code, path, value and limit
  * @example
- * parseScenario({ legs: [{ minutes: 60 }] }).charger.maxA // 40
+ * parseScenario({ legs: [{ minutes: 60 }] }).charger.maxA; // 40
  */
 export function parseScenario(input: unknown): Scenario {
 	const values = requireObject(input, '');
@@ -146,11 +146,14 @@ export function parseScenario(input: unknown): Scenario {
 }
 
 /**
- * The scenario of the thermal model's defaults: no shield, and one hour parked with the engine off.
+ * The scenario of the thermal model's defaults, without a shield, for the legs given.
  *
+ * @param legs at least one leg with its minutes; the rest of a leg takes its defaults
+ * @returns a whole scenario that the engine can run
+ * @throws ScenarioError when a leg is not possible
  * @example
- * defaultScenario().climate.tMax // 42
+ * defaultScenario([{ minutes: 60 }]).climate.tMax; // 42
  */
-export function defaultScenario(): Scenario {
-	return parseScenario({ legs: [{ minutes: 60 }] });
+export function defaultScenario(legs: ScenarioInput['legs']): Scenario {
+	return parseScenario({ legs });
 }

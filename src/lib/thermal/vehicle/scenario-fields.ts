@@ -228,7 +228,13 @@ const BMS: ScenarioField[] = [
 
 const CHARGER = numbers('charger', [
 	['maxA', 'A', 40, CURRENT, 'The most that the charger gives.'],
-	['taperSoc', '-', 0.95, { ...closed(0, 1), maxExclusive: true }, 'State of charge from which the current tapers.']
+	[
+		'taperSoc',
+		'-',
+		0.95,
+		{ ...closed(0, 1), maxExclusive: true },
+		'State of charge from which the current tapers.'
+	]
 ]);
 
 const CLIMATE = numbers('climate', [
@@ -262,7 +268,14 @@ const LEGS: ScenarioField[] = [
 		['towMassKg', 'kg', 0, closed(0, 1e5), 'Mass of the trailer.'],
 		['towDragAreaM2', 'm²', 0, closed(0, 100), 'Drag area that the trailer adds.']
 	]),
-	{ kind: 'flag', group: 'legs', key: 'bonnetOpen', unit: '-', default: false, meaning: 'Bonnet open, while stopped.' },
+	{
+		kind: 'flag',
+		group: 'legs',
+		key: 'bonnetOpen',
+		unit: '-',
+		default: false,
+		meaning: 'Bonnet open, while stopped.'
+	},
 	...numbers('legs', [['loadA', 'A', 0, CURRENT, 'Current drawn by accessories from the auxiliary side.']])
 ];
 
@@ -272,7 +285,7 @@ const LEGS: ScenarioField[] = [
  * Defaults are those of the thermal model, engineering judgement unless reference-data names a source.
  *
  * @example
- * SCENARIO_FIELDS.find((field) => field.group === 'charger' && field.key === 'maxA')?.default // 40
+ * SCENARIO_FIELDS.find((field) => field.group === 'charger' && field.key === 'maxA').default; // 40
  */
 export const SCENARIO_FIELDS: readonly ScenarioField[] = [
 	...VEHICLE,
@@ -295,3 +308,30 @@ export const SCENARIO_FIELDS: readonly ScenarioField[] = [
 /** The most that one day plan may hold. */
 export const MOST_LEGS = 1000;
 export const LONGEST_PLAN_MINUTES = 60 * 24 * 60;
+
+/** Groups whose numbers an engineer tunes and a coefficient book holds. */
+export const COEFFICIENT_GROUPS = [
+	'vehicle',
+	'engine',
+	'exhaust',
+	'bay',
+	'bonnet',
+	'enclosure',
+	'tray',
+	'shield'
+] as const;
+export type CoefficientGroup = (typeof COEFFICIENT_GROUPS)[number];
+
+/**
+ * The defaults of the groups that an engineer tunes, by group and field; a fresh copy each time.
+ *
+ * @example
+ * coefficientDefaults().bay.leakClosed; // 20
+ */
+export function coefficientDefaults(): Record<CoefficientGroup, Record<string, number>> {
+	const defaults = COEFFICIENT_GROUPS.map((group) => {
+		const fields = SCENARIO_FIELDS.filter((field): field is NumberField => field.group === group);
+		return [group, Object.fromEntries(fields.map(({ key, default: value }) => [key, value]))];
+	});
+	return Object.fromEntries(defaults) as Record<CoefficientGroup, Record<string, number>>;
+}

@@ -1,0 +1,27 @@
+/** The engine's edge: what pages, services and programs may use. */
+export { ScenarioError, SCENARIO_ERROR_CODES } from './errors';
+export type { ScenarioErrorCode, ScenarioFault } from './errors';
+export * from './types';
+export { ambientTempC, sunWPerM2 } from './vehicle/climate';
+export { heatFlowsAt } from './vehicle/heat-flows';
+export type { HeatFlow } from './vehicle/heat-flows';
+export { defaultScenario, describeRange, parseScenario } from './vehicle/parse-scenario';
+export {
+	COEFFICIENT_GROUPS,
+	coefficientDefaults,
+	FIELD_GROUPS,
+	LONGEST_PLAN_MINUTES,
+	MOST_LEGS,
+	SCENARIO_FIELDS
+} from './vehicle/scenario-fields';
+export type {
+	ChoiceField,
+	CoefficientGroup,
+	FieldGroup,
+	FlagField,
+	NumberField,
+	ScenarioField
+} from './vehicle/scenario-fields';
+export { ROLLING_RESISTANCE } from './vehicle/leg-drive';
+export { runScenario, simulateScenario } from './vehicle/simulate';
+export { ENGINE_VERSION } from './version';

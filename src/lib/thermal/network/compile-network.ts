@@ -1,0 +1,395 @@
+import { KELVIN_AT_ZERO_C, STEFAN_BOLTZMANN } from '../correlations/radiation';
+import type { HeatSystem } from '../solve/heat-system';
+import { checkNetwork } from './check-network';
+import type { NetworkDescription, NetworkLink, NetworkSource } from './description';
+
+const REFERENCE_K = 298.15;
+
+type LinkKind = NetworkLink['kind'];
+type LinkOf<K extends LinkKind> = Extract<NetworkLink, { kind: K }>;
+
+/** Where the heat of one link or source goes, as indices into the table of nodes. */
+interface Ends {
+	from: Int32Array;
+	to: Int32Array;
+}
+
+interface Mix {
+	node: number;
+	offsetK: number;
+	parts: Int32Array;
+	weights: Float64Array;
+}
+
+/**
+ * A network laid out in flat arrays, so that its heats and their derivatives are summed without looking up a name.
+ *
+ * What changes in time is set from outside through `set…`, by the name of the node, link or source.
+ */
+export class CompiledNetwork implements HeatSystem {
+	readonly size: number;
+	readonly capacityJPerK: Float64Array;
+	readonly pattern: readonly (readonly [number, number])[];
+	readonly storedNames: readonly string[];
+	/** Called by the integrator whenever time moves. */
+	drive: (timeS: number) => void = () => {};
+
+	private readonly index: Map<string, number>;
+	private readonly places = new Map<string, number>();
+	/** Temperatures of all nodes: stored ones first, then fixed, then mixed. */
+	private readonly temps: Float64Array;
+	private readonly fourthPowers: Float64Array;
+	private readonly gains: Float64Array;
+	private readonly mixes: Mix[];
+	/** Links in the order conductance, flow, radiation, gate, excess; then sources heat, joule. */
+	private readonly ends: Ends;
+	private readonly coefficients: Float64Array;
+	private readonly heats: Float64Array;
+	/** Ends of the runs of links of one kind. */
+	private readonly stops: Record<LinkKind | NetworkSource['kind'], number>;
+	private readonly gates: LinkOf<'gate'>[];
+	private readonly carryTo: Int32Array;
+	private readonly joules: Extract<NetworkSource, { kind: 'joule' }>[];
+	private readonly currents: Float64Array;
+	/** dQ/dTfrom and dQ/dTto of each link. */
+	private readonly slopes: Float64Array;
+	private readonly scatterPlace: Int32Array;
+	private readonly scatterSlope: Int32Array;
+	private readonly scatterWeight: Float64Array;
+
+	constructor(description: NetworkDescription) {
+		checkNetwork(description);
+		const { nodes } = description;
+		const stored = nodes.filter((node) => node.kind === 'stored');
+		const fixed = nodes.filter((node) => node.kind === 'fixed');
+		const mixed = nodes.filter((node) => node.kind === 'mixed');
+		this.size = stored.length;
+		this.storedNames = stored.map(({ name }) => name);
+		this.capacityJPerK = Float64Array.from(stored, (node) => node.heatCapacityJPerK);
+		const ordered = [...stored, ...fixed, ...mixed];
+		this.index = new Map(ordered.map(({ name }, at) => [name, at]));
+		this.temps = new Float64Array(ordered.length);
+		fixed.forEach((node, at) => (this.temps[stored.length + at] = node.tempC));
+		this.fourthPowers = new Float64Array(ordered.length);
+		this.gains = new Float64Array(ordered.length);
+		this.mixes = mixed.map((node) => ({
+			node: this.indexOf(node.name),
+			offsetK: node.offsetK,
+			parts: Int32Array.from(node.parts, (part) => this.indexOf(part.node)),
+			weights: Float64Array.from(node.parts, (part) => part.weight)
+		}));
+
+		const links = sortByKind(description.links, ['conductance', 'flow', 'radiation', 'gate', 'excess']);
+		const sources = sortByKind(description.sources, ['heat', 'joule']);
+		const count = links.length + sources.length;
+		[...links, ...sources].forEach(({ name }, at) => this.places.set(name, at));
+		this.ends = { from: new Int32Array(count), to: new Int32Array(count) };
+		this.coefficients = new Float64Array(count);
+		this.heats = new Float64Array(count);
+		this.slopes = new Float64Array(2 * count);
+		links.forEach((link, at) => {
+			this.ends.from[at] = this.indexOf(link.from);
+			this.ends.to[at] = this.indexOf(link.to);
+			this.coefficients[at] =
+				link.kind === 'radiation' ? STEFAN_BOLTZMANN * link.exchangeAreaM2 : link.conductanceWPerK;
+		});
+		sources.forEach((source, at) => {
+			this.ends.to[links.length + at] = this.indexOf(source.node);
+			this.coefficients[links.length + at] = source.kind === 'heat' ? source.heatW : source.r25Ohm;
+		});
+		this.gates = links.filter((link) => link.kind === 'gate');
+		this.carryTo = Int32Array.from(this.gates, (gate) => this.indexOf(gate.carryTo));
+		this.joules = sources.filter((source) => source.kind === 'joule');
+		this.currents = Float64Array.from(this.joules, (source) => source.currentA);
+		this.stops = countKinds(links, sources);
+
+		const scatter = this.planScatter(links, sources);
+		this.pattern = scatter.map(({ row, column }) => [row, column] as const);
+		this.scatterPlace = Int32Array.from(scatter, ({ row, column }) => row * this.size + column);
+		this.scatterSlope = Int32Array.from(scatter, ({ slope }) => slope);
+		this.scatterWeight = Float64Array.from(scatter, ({ weight }) => weight);
+	}
+
+	indexOf(node: string): number {
+		const at = this.index.get(node);
+		if (at === undefined) throw new RangeError(`no node is called "${node}"`);
+		return at;
+	}
+
+	placeOf(part: string): number {
+		const at = this.places.get(part);
+		if (at === undefined) throw new RangeError(`no link or source is called "${part}"`);
+		return at;
+	}
+
+	/** Index of a mixed node for setMixOffset. */
+	mixOf(node: string): number {
+		const at = this.indexOf(node);
+		return this.mixes.findIndex((mix) => mix.node === at);
+	}
+
+	setFixedTemp(node: number, tempC: number): void {
+		this.temps[node] = tempC;
+	}
+
+	/** Conductance W/K, heat W or resistance Ω of a link or source. */
+	setCoefficient(place: number, value: number): void {
+		this.coefficients[place] = value;
+	}
+
+	setMixOffset(mix: number, offsetK: number): void {
+		this.mixes[mix]!.offsetK = offsetK;
+	}
+
+	/** The current through all joule sources, A. */
+	setCurrent(currentA: number): void {
+		this.currents.fill(currentA);
+	}
+
+	setTime(timeS: number): void {
+		this.drive(timeS);
+	}
+
+	sumHeats(temps: Float64Array, heats: Float64Array): void {
+		this.spread(temps);
+		const { temps: all, fourthPowers, gains, ends, coefficients, heats: flows, stops } = this;
+		const { from, to } = ends;
+		gains.fill(0);
+		let at = 0;
+		for (; at < stops.conductance; at++) {
+			const a = from[at]!;
+			const b = to[at]!;
+			const q = coefficients[at]! * (all[a]! - all[b]!);
+			flows[at] = q;
+			gains[a] = gains[a]! - q;
+			gains[b] = gains[b]! + q;
+		}
+		for (; at < stops.flow; at++) {
+			const b = to[at]!;
+			const q = coefficients[at]! * (all[from[at]!]! - all[b]!);
+			flows[at] = q;
+			gains[b] = gains[b]! + q;
+		}
+		for (; at < stops.radiation; at++) {
+			const a = from[at]!;
+			const b = to[at]!;
+			const q = coefficients[at]! * (fourthPowers[a]! - fourthPowers[b]!);
+			flows[at] = q;
+			gains[a] = gains[a]! - q;
+			gains[b] = gains[b]! + q;
+		}
+		this.sumGates();
+		for (at = stops.gate; at < stops.excess; at++) {
+			const a = from[at]!;
+			const b = to[at]!;
+			const q = coefficients[at]! * Math.max(all[a]! - all[b]!, 0);
+			flows[at] = q;
+			gains[a] = gains[a]! - q;
+			gains[b] = gains[b]! + q;
+		}
+		for (; at < stops.heat; at++) {
+			const b = to[at]!;
+			flows[at] = coefficients[at]!;
+			gains[b] = gains[b]! + coefficients[at]!;
+		}
+		this.sumJoules();
+		for (let i = 0; i < this.size; i++) heats[i] = gains[i]!;
+	}
+
+	fillJacobian(temps: Float64Array, jacobian: Float64Array): void {
+		this.spread(temps);
+		const { temps: all, ends, coefficients, slopes, stops } = this;
+		const { from, to } = ends;
+		let at = 0;
+		for (; at < stops.flow; at++) {
+			slopes[2 * at] = coefficients[at]!;
+			slopes[2 * at + 1] = -coefficients[at]!;
+		}
+		for (; at < stops.radiation; at++) {
+			const a = all[from[at]!]! + KELVIN_AT_ZERO_C;
+			const b = all[to[at]!]! + KELVIN_AT_ZERO_C;
+			slopes[2 * at] = 4 * coefficients[at]! * a * a * a;
+			slopes[2 * at + 1] = -4 * coefficients[at]! * b * b * b;
+		}
+		this.slopeGates();
+		for (at = stops.gate; at < stops.excess; at++) {
+			const slope = all[from[at]!]! > all[to[at]!]! ? coefficients[at]! : 0;
+			slopes[2 * at] = slope;
+			slopes[2 * at + 1] = -slope;
+		}
+		this.slopeJoules();
+		jacobian.fill(0);
+		const { scatterPlace, scatterSlope, scatterWeight } = this;
+		for (let k = 0; k < scatterPlace.length; k++) {
+			const place = scatterPlace[k]!;
+			jacobian[place] = jacobian[place]! + scatterWeight[k]! * slopes[scatterSlope[k]!]!;
+		}
+	}
+
+	sumThroughput(throughput: Float64Array): void {
+		const { ends, heats, size, stops } = this;
+		throughput.fill(0);
+		for (let at = 0; at < heats.length; at++) {
+			const amount = Math.abs(heats[at]!);
+			const from = ends.from[at]!;
+			const to = ends.to[at]!;
+			const givesHeat = at < stops.excess && !(at >= stops.conductance && at < stops.flow);
+			if (givesHeat && from < size) throughput[from] = throughput[from]! + amount;
+			if (to < size) throughput[to] = throughput[to]! + amount;
+		}
+		this.gates.forEach((gate, k) => {
+			const to = this.carryTo[k]!;
+			const amount = gate.carryShare * Math.abs(heats[stops.radiation + k]!);
+			if (to < size) throughput[to] = throughput[to]! + amount;
+		});
+	}
+
+	/** Copies the stored temperatures and works out the mixed ones and the fourth powers. */
+	private spread(temps: Float64Array): void {
+		const { temps: all, fourthPowers, mixes, size } = this;
+		for (let i = 0; i < size; i++) all[i] = temps[i]!;
+		for (const { node, offsetK, parts, weights } of mixes) {
+			let temp = offsetK;
+			for (let k = 0; k < parts.length; k++) temp += weights[k]! * all[parts[k]!]!;
+			all[node] = temp;
+		}
+		for (let i = 0; i < all.length; i++) {
+			const kelvin = all[i]! + KELVIN_AT_ZERO_C;
+			const square = kelvin * kelvin;
+			fourthPowers[i] = square * square;
+		}
+	}
+
+	private sumGates(): void {
+		const { gates, temps: all, gains, ends, coefficients, carryTo, stops } = this;
+		for (let k = 0; k < gates.length; k++) {
+			const at = stops.radiation + k;
+			const a = ends.from[at]!;
+			const b = ends.to[at]!;
+			const gate = gates[k]!;
+			const q = coefficients[at]! * readOpening(gate, all[a]!) * (all[a]! - all[b]!);
+			this.heats[at] = q;
+			gains[a] = gains[a]! - q;
+			gains[b] = gains[b]! + q;
+			const c = carryTo[k]!;
+			gains[c] = gains[c]! + gate.carryShare * q;
+		}
+	}
+
+	private slopeGates(): void {
+		const { gates, temps: all, ends, coefficients, slopes, stops } = this;
+		for (let k = 0; k < gates.length; k++) {
+			const at = stops.radiation + k;
+			const { openC, fullC } = gates[k]!;
+			const temp = all[ends.from[at]!]!;
+			const opening = readOpening(gates[k]!, temp);
+			const moving = opening > 0 && opening < 1 ? (temp - all[ends.to[at]!]!) / (fullC - openC) : 0;
+			slopes[2 * at] = coefficients[at]! * (opening + moving);
+			slopes[2 * at + 1] = -coefficients[at]! * opening;
+		}
+	}
+
+	private sumJoules(): void {
+		const { joules, temps: all, gains, ends, coefficients, currents, stops, heats } = this;
+		for (let k = 0; k < joules.length; k++) {
+			const at = stops.heat + k;
+			const node = ends.to[at]!;
+			const current = currents[k]!;
+			const factor = readResistanceFactor(joules[k]!.activationK, all[node]!);
+			const q = current === 0 ? 0 : current * current * coefficients[at]! * factor;
+			heats[at] = q;
+			gains[node] = gains[node]! + q;
+		}
+	}
+
+	private slopeJoules(): void {
+		const { joules, temps: all, ends, coefficients, currents, slopes, stops } = this;
+		for (let k = 0; k < joules.length; k++) {
+			const at = stops.heat + k;
+			const { activationK } = joules[k]!;
+			const temp = all[ends.to[at]!]!;
+			const kelvin = temp + KELVIN_AT_ZERO_C;
+			const current = currents[k]!;
+			const q = current * current * coefficients[at]! * readResistanceFactor(activationK, temp);
+			slopes[2 * at] = current === 0 ? 0 : (-q * activationK) / (kelvin * kelvin);
+		}
+	}
+
+	private planScatter(links: readonly NetworkLink[], sources: readonly NetworkSource[]): Scatter[] {
+		const entries: Scatter[] = [];
+		const addRow = (row: number, slope: number, along: number, weight: number): void => {
+			if (row >= this.size) return;
+			for (const [column, share] of this.expand(along)) {
+				entries.push({ row, column, slope, weight: weight * share });
+			}
+		};
+		links.forEach((link, at) => {
+			const from = this.indexOf(link.from);
+			const to = this.indexOf(link.to);
+			for (const [slope, along] of [
+				[2 * at, from],
+				[2 * at + 1, to]
+			] as const) {
+				if (link.kind !== 'flow') addRow(from, slope, along, -1);
+				addRow(to, slope, along, 1);
+				if (link.kind === 'gate') addRow(this.indexOf(link.carryTo), slope, along, link.carryShare);
+			}
+		});
+		sources.forEach((source, k) => {
+			const at = links.length + k;
+			const node = this.indexOf(source.node);
+			if (source.kind === 'joule') addRow(node, 2 * at, node, 1);
+		});
+		return entries;
+	}
+
+	/** The stored nodes, with weights, on which the temperature of a node depends. */
+	private expand(node: number): [number, number][] {
+		if (node < this.size) return [[node, 1]];
+		const mix = this.mixes.find((candidate) => candidate.node === node);
+		if (!mix) return [];
+		return Array.from(mix.parts, (part, k): [number, number] => [part, mix.weights[k]!]).filter(
+			([part]) => part < this.size
+		);
+	}
+}
+
+interface Scatter {
+	row: number;
+	column: number;
+	slope: number;
+	weight: number;
+}
+
+function sortByKind<T extends { kind: string }>(parts: readonly T[], kinds: readonly T['kind'][]): T[] {
+	return kinds.flatMap((kind) => parts.filter((part) => part.kind === kind));
+}
+
+/** Where the run of each kind ends in the sorted list of links and sources. */
+function countKinds(
+	links: readonly NetworkLink[],
+	sources: readonly NetworkSource[]
+): Record<LinkKind | NetworkSource['kind'], number> {
+	let sum = 0;
+	const upTo = (kind: string) =>
+		(sum += [...links, ...sources].filter((part: { kind: string }) => part.kind === kind).length);
+	return {
+		conductance: upTo('conductance'),
+		flow: upTo('flow'),
+		radiation: upTo('radiation'),
+		gate: upTo('gate'),
+		excess: upTo('excess'),
+		heat: upTo('heat'),
+		joule: upTo('joule')
+	};
+}
+
+/** How far a thermostat stands open at a temperature, 0…1. */
+export function readOpening({ openC, fullC }: { openC: number; fullC: number }, tempC: number): number {
+	return Math.min(Math.max((tempC - openC) / (fullC - openC), 0), 1);
+}
+
+/** R(T)/R(25 °C) = exp(a (1/T̃ − 1/298.15)). */
+export function readResistanceFactor(activationK: number, tempC: number): number {
+	return Math.exp(activationK * (1 / (tempC + KELVIN_AT_ZERO_C) - 1 / REFERENCE_K));
+}
