@@ -6,7 +6,7 @@ import { env, isSecureOrigin } from '../env';
 import { tokenHash } from '../hash';
 import { logger } from '../logger';
 import { passwordMatches } from './passwords';
-import { spend } from './rate-limit';
+import { giveBack, spend } from './rate-limit';
 import { ABSOLUTE_MS, closeSession, openSession } from './sessions';
 
 declare module '@auth/core/types' {
@@ -30,8 +30,11 @@ async function byPassword(credentials: Partial<Record<string, unknown>>, request
 	if (!parsed.success) throw new CredentialsSignin();
 	const { email, password } = parsed.data;
 	const address = request.headers.get(CLIENT_ADDRESS_HEADER) ?? 'unknown';
-	await spend({ name: 'sign-in account', key: email, points: TRIES_PER_ACCOUNT, windowS: WINDOW_S });
-	await spend({ name: 'sign-in address', key: address, points: TRIES_PER_ADDRESS, windowS: WINDOW_S });
+	const limits = [
+		{ name: 'sign-in account', key: email, points: TRIES_PER_ACCOUNT, windowS: WINDOW_S },
+		{ name: 'sign-in address', key: address, points: TRIES_PER_ADDRESS, windowS: WINDOW_S }
+	];
+	for (const limit of limits) await spend(limit);
 	const person = await Person.findOne({ where: { email, active: true } });
 	if (!(await passwordMatches(password, person?.passwordHash ?? null)) || !person)
 		throw new CredentialsSignin();

@@ -11,9 +11,11 @@ export interface Limit {
 	windowS: number;
 }
 
+const bucketOf = ({ name, key }: Pick<Limit, 'name' | 'key'>): string => `${name}:${sha256(key)}`;
+
 /** Counts one try and throws when there were too many in the window. Survives a restart and counts for every process. */
-export async function spend({ name, key, points, windowS }: Limit): Promise<void> {
-	const bucket = `${name}:${sha256(key)}`;
+export async function spend({ points, windowS, ...what }: Limit): Promise<void> {
+	const bucket = bucketOf(what);
 	await connection().query(
 		`INSERT INTO rate_limits (bucket, points, window_ends_at)
 		 VALUES (:bucket, 1, DATE_ADD(UTC_TIMESTAMP(3), INTERVAL :windowS SECOND))
@@ -34,4 +36,14 @@ export async function spend({ name, key, points, windowS }: Limit): Promise<void
 			`Too many tries. Wait ${minutes} ${minutes === 1 ? 'minute' : 'minutes'}, then try again.`
 		);
 	}
+}
+
+/** Gives one try back: it was a good one. */
+export async function giveBack(limit: Limit): Promise<void> {
+	await connection().query(
+		'UPDATE rate_limits SET points = points - 1 WHERE bucket = :bucket AND points > 0',
+		{
+			replacements: { bucket: bucketOf(limit) }
+		}
+	);
 }
