@@ -5,7 +5,7 @@ import { create, unitDependencies } from 'mathjs';
 import type { MeasureUnit } from '../schemas/fields';
 import { parseDecimal } from './parse';
 
-const math = create({ unitDependencies });
+const math = create({ ...unitDependencies });
 
 /** What people write, against the unit library's own name. */
 const UNIT_NAMES = {
