@@ -1,9 +1,29 @@
 import type { Operation } from '../operation';
+import { batteryOperations } from './batteries';
+import { customerOperations } from './customers';
+import { assessmentOperations } from './assessments';
+import { bookOperations } from './books';
 import { dayPlanOperations } from './day-plans';
+import { jobOperations } from './jobs';
 import { mountOperations } from './mounts';
 import { placeOperations } from './places';
+import { recommendationOperations } from './recommendations';
+import { sheetOperations } from './sheets';
+import { simulationOperations } from './simulations';
+import { vehicleOperations } from './vehicles';
 
 /** Everything that the API does. A route without an entry here, or an entry without a route, fails a test. */
-export const OPERATIONS: readonly Operation[] = [placeOperations, mountOperations, dayPlanOperations].flatMap(
-	(group) => Object.values(group) as unknown as Operation[]
-);
+export const OPERATIONS: readonly Operation[] = [
+	jobOperations,
+	customerOperations,
+	vehicleOperations,
+	batteryOperations,
+	placeOperations,
+	mountOperations,
+	dayPlanOperations,
+	sheetOperations,
+	bookOperations,
+	assessmentOperations,
+	recommendationOperations,
+	simulationOperations
+].flatMap((group) => Object.values(group) as unknown as Operation[]);

@@ -1,0 +1,34 @@
+import { describe, expect, it, vi } from 'vitest';
+import fc from 'fast-check';
+import { canonicalJson, newToken, sha256, tokenHash } from './hash';
+
+vi.mock('./env', () => ({ env: () => ({ SOAKLINE_SECRET: 's'.repeat(32) }) }));
+
+describe('hashes', () => {
+	it('are those of FIPS 180-4 (the published digest of "abc")', () => {
+		expect(sha256('abc')).toBe('ba7816bf8f01cfea414140de5dae2223b00361a396177a9cb410ff61f20015ad');
+	});
+
+	it('give the same text for the same value, whatever order it was made in', () => {
+		expect(canonicalJson({ b: [1, { d: 1, c: 2 }], a: null })).toBe('{"a":null,"b":[1,{"c":2,"d":1}]}');
+		fc.assert(
+			fc.property(fc.dictionary(fc.string(), fc.jsonValue()), (value) => {
+				const turned = Object.fromEntries(Object.entries(value).reverse());
+				return canonicalJson(turned) === canonicalJson(value);
+			})
+		);
+	});
+
+	it('read back to the same numbers, to the last digit', () => {
+		const value = { tempC: 0.1 + 0.2, small: 5e-324 };
+		expect(JSON.parse(canonicalJson(value))).toEqual(value);
+	});
+
+	it('of a token need this installation’s secret', () => {
+		const token = newToken();
+		expect(Buffer.from(token, 'base64url')).toHaveLength(16);
+		expect(tokenHash(token)).toHaveLength(64);
+		expect(tokenHash(token)).not.toBe(sha256(token));
+		expect(newToken()).not.toBe(token);
+	});
+});
