@@ -1,33 +1,50 @@
 import { z } from 'zod';
-import type { Assessment } from '../thermal/assess';
+import type { DoneAssessment } from '../thermal/assess';
 import type { Derivation } from '../thermal/survey';
 import type { ScenarioInput } from '../thermal/types';
-import type { BatteryInput } from './batteries';
-import type { DayPlanInput } from './day-plans';
-import { idSchema, words } from './fields';
-import type { PlaceInput } from './places';
-import type { SurveyAnswers } from './survey';
-import type { VehicleInput } from './vehicles';
+import { assessmentResultSchema } from './assessment-result';
+import { batteryInputSchema } from './batteries';
+import { dayPlanInputSchema } from './day-plans';
+import { idSchema } from './fields';
+import { hotDayFields, placeInputSchema } from './places';
+import { surveyAnswersSchema } from './survey';
+import { vehicleInputSchema } from './vehicles';
 import { VERDICTS } from './verdicts';
 
-/** Everything that went into an assessment, as it was at that moment. */
-export interface AssessmentInputs {
-	jobNumber: number;
-	customerName: string;
-	vehicle: VehicleInput;
-	battery: BatteryInput;
-	mount: { letter: string; name: string; survey: SurveyAnswers };
-	dayPlan: DayPlanInput;
-	place: PlaceInput;
-	/** The hot day that was planned for: the place's own figures unless the job changed them. */
-	hotDay: { hotDayMaxC: number; dailyRangeK: number; sunPeakWPerM2: number };
-	book: { number: number; name: string; coefficients: Record<string, Record<string, number>> };
-	scenario: ScenarioInput;
-	derivations: Derivation[];
-}
-
 /** What the engine answered, whole. */
-export type AssessmentResult = Extract<Assessment, { status: 'done' }>;
+export type AssessmentResult = DoneAssessment;
+
+const derivationSchema = z.object({
+	path: z.string().meta({ description: 'Where it went in the scenario' }),
+	label: z.string(),
+	value: z.union([z.number(), z.string()]),
+	unit: z.string(),
+	basis: z.string().meta({ description: 'The formula with its numbers, and where it comes from' })
+}) satisfies z.ZodType<Derivation>;
+
+/** Everything that went into an assessment, as it was at that moment. */
+export const assessmentInputsSchema = z.object({
+	jobNumber: z.number().int(),
+	customerName: z.string(),
+	vehicle: vehicleInputSchema,
+	battery: batteryInputSchema,
+	mount: z.object({ letter: z.string(), name: z.string(), survey: surveyAnswersSchema }),
+	dayPlan: dayPlanInputSchema,
+	place: placeInputSchema,
+	/** The hot day that was planned for: the place's own figures unless the job changed them. */
+	hotDay: z.object(hotDayFields),
+	book: z.object({
+		number: z.number().int(),
+		name: z.string(),
+		coefficients: z.record(z.string(), z.record(z.string(), z.number()))
+	}),
+	/** What the engine was given. */
+	scenario: z.custom<ScenarioInput>().meta({ type: 'object' }),
+	derivations: z.array(derivationSchema),
+	/** One plain sentence for each thing that nobody measured. */
+	assumptions: z.array(z.string())
+});
+export type AssessmentInputs = z.infer<typeof assessmentInputsSchema>;
 
 export const assessRequestSchema = z.object({ mountId: idSchema });
 
@@ -51,10 +68,34 @@ export const assessmentRowSchema = z.object({
 });
 export type AssessmentRow = z.infer<typeof assessmentRowSchema>;
 
-/** Going ahead against "cuts out" takes a named person and a written reason. */
-export const recommendationSchema = z.object({ assessmentId: idSchema });
-export const overrideSchema = z.object({
-	assessmentId: idSchema,
-	decidedBy: words('Who decided', 120),
-	reason: words('Reason', 1_000)
+/** A mount that stands in a job, with its newest assessment or none. */
+export const mountOutcomeSchema = z.object({
+	mountId: z.number().int(),
+	letter: z.string(),
+	name: z.string(),
+	surveyComplete: z.boolean(),
+	assessment: assessmentRowSchema.nullable()
 });
+export type MountOutcome = z.infer<typeof mountOutcomeSchema>;
+
+export const assessmentSchema = assessmentRowSchema.extend({
+	bookId: z.number().int(),
+	assessedBy: z.string(),
+	inputs: assessmentInputsSchema,
+	inputsSha256: z.string().meta({ description: 'Of the inputs as JSON with sorted keys' }),
+	result: assessmentResultSchema,
+	isCurrent: z.boolean().meta({
+		description: 'The job, the book and the engine are still those that it was made with'
+	}),
+	cautions: z.array(z.string()).meta({ description: 'Names of the cautions that it carries' })
+});
+export type AssessmentView = z.infer<typeof assessmentSchema>;
+
+/** What making an assessment again from its stored inputs gave. */
+export const reproductionSchema = z.object({
+	same: z.boolean().meta({ description: 'Every digit of the result is the same' }),
+	inputsIntact: z.boolean().meta({ description: 'The stored inputs still have their hash' }),
+	engineThen: z.string(),
+	engineNow: z.string()
+});
+export type Reproduction = z.infer<typeof reproductionSchema>;

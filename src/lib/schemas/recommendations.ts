@@ -1,0 +1,41 @@
+import { z } from 'zod';
+import { assessmentRowSchema, type AssessmentView, type MountOutcome } from './assessments';
+import { idSchema, words } from './fields';
+
+/** Going ahead against "cuts out" takes a named person and a written reason; otherwise neither is asked for. */
+export const recommendationInputSchema = z.object({
+	assessmentId: idSchema,
+	decidedBy: words('Who decided', 120).optional(),
+	reason: words('Reason', 1_000).optional()
+});
+export type RecommendationInput = z.infer<typeof recommendationInputSchema>;
+
+export const recommendationFormSchema = z.object({ assessmentId: idSchema });
+export const overrideFormSchema = z.object({
+	assessmentId: idSchema,
+	decidedBy: words('Who decided', 120),
+	reason: words('Reason', 1_000)
+});
+
+export const recommendationSchema = z.object({
+	id: z.number().int(),
+	jobId: z.number().int(),
+	jobNumber: z.number().int(),
+	assessment: assessmentRowSchema,
+	againstVerdict: z.boolean(),
+	decidedBy: z.string().nullable(),
+	reason: z.string().nullable(),
+	recommendedBy: z.string(),
+	createdAt: z.iso.datetime()
+});
+export type RecommendationView = z.infer<typeof recommendationSchema>;
+
+/** Everything that the printed recommendation says. */
+export interface RecommendationDocument {
+	recommendation: RecommendationView;
+	assessment: AssessmentView;
+	workshop: { name: string; address: string; phone: string; email: string };
+	customer: { phone: string; email: string };
+	/** The mounts that were not chosen, as they stood when the recommendation was made. */
+	others: MountOutcome[];
+}

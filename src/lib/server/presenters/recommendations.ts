@@ -1,0 +1,14 @@
+import type { AssessmentRow } from '$lib/schemas/assessments';
+import type { RecommendationView } from '$lib/schemas/recommendations';
+import type { Recommendation } from '../db/models';
+
+export function presentRecommendation(
+	{ id, jobId, againstVerdict, decidedBy, reason, createdAt }: Recommendation,
+	more: { jobNumber: number; assessment: AssessmentRow; recommendedBy: string }
+): RecommendationView {
+	return {
+		...{ id, jobId, againstVerdict, decidedBy, reason },
+		...more,
+		createdAt: createdAt.toISOString()
+	};
+}

@@ -1,0 +1,112 @@
+import type { AssessmentInputs } from '$lib/schemas/assessments';
+import { batteryInputSchema } from '$lib/schemas/batteries';
+import type { BookView } from '$lib/schemas/books';
+import { dayPlanInputSchema } from '$lib/schemas/day-plans';
+import { placeInputSchema } from '$lib/schemas/places';
+import { surveyAnswersSchema } from '$lib/schemas/survey';
+import { vehicleInputSchema } from '$lib/schemas/vehicles';
+import { buildScenario } from '$lib/thermal/survey';
+import { BatteryRecord, Customer, DayPlan, Place, Vehicle, type Job, type Mount } from '../db/models';
+import { AppError, notFound } from '../errors';
+import { coefficientsOf } from './books';
+import { asInputError } from './simulations';
+
+/** What a job must have before anything can be assessed, in the words that its page uses. */
+const PARTS = {
+	battery: 'The job has no battery yet.',
+	place: 'The job has no place and hot day yet.',
+	dayPlan: 'The job has no day plan yet.',
+	survey: 'The survey of this mount is not finished.'
+} as const;
+type Part = keyof typeof PARTS;
+
+/** A job's records, of which some may not be there yet. */
+export interface JobParts {
+	job: Job;
+	customer: Customer;
+	vehicle: Vehicle;
+	battery: BatteryRecord | null;
+	place: Place | null;
+	dayPlan: DayPlan | null;
+}
+
+export async function findJobParts(job: Job): Promise<JobParts> {
+	const { customerId, vehicleId, batteryRecordId, placeId, workshopId } = job;
+	const ours = (id: number) => ({ where: { id, workshopId } });
+	const customer = await Customer.findOne(ours(customerId));
+	const vehicle = await Vehicle.findOne(ours(vehicleId));
+	if (!customer || !vehicle) throw notFound('job');
+	const battery = batteryRecordId === null ? null : await BatteryRecord.findOne(ours(batteryRecordId));
+	const place = placeId === null ? null : await Place.findOne(ours(placeId));
+	const dayPlan = await DayPlan.findOne({ where: { jobId: job.id, workshopId } });
+	return { job, customer, vehicle, battery, place, dayPlan };
+}
+
+function listMissing({ battery, place, dayPlan }: JobParts, mount: Mount): Part[] {
+	const present: Record<Part, unknown> = { battery, place, dayPlan, survey: mount.surveyComplete || null };
+	return (Object.keys(PARTS) as Part[]).filter((part) => present[part] === null);
+}
+
+/** Whether a mount can be assessed as the job stands. */
+export const isAssessable = (parts: JobParts, mount: Mount): boolean =>
+	listMissing(parts, mount).length === 0;
+
+/** A record's own fields, without those that the schema does not know. */
+const plain = (record: { get: (options: { plain: true }) => unknown }): unknown =>
+	record.get({ plain: true });
+
+function measuredOf(
+	{ job, customer, vehicle, battery, place, dayPlan }: JobParts,
+	mount: Mount,
+	book: BookView
+): Omit<AssessmentInputs, 'scenario' | 'derivations' | 'assumptions'> {
+	const at = placeInputSchema.parse(plain(place!));
+	return {
+		jobNumber: job.number,
+		customerName: customer.name,
+		vehicle: vehicleInputSchema.parse(plain(vehicle)),
+		battery: batteryInputSchema.parse(plain(battery!)),
+		mount: {
+			letter: mount.letter,
+			name: mount.name,
+			survey: surveyAnswersSchema.parse({ ...mount.survey, positionKind: mount.positionKind })
+		},
+		dayPlan: dayPlanInputSchema.parse(plain(dayPlan!)),
+		place: at,
+		hotDay: {
+			hotDayMaxC: job.hotDayMaxC ?? at.hotDayMaxC,
+			dailyRangeK: job.dailyRangeK ?? at.dailyRangeK,
+			sunPeakWPerM2: job.sunPeakWPerM2 ?? at.sunPeakWPerM2
+		},
+		book: { number: book.number, name: book.name, coefficients: coefficientsOf(book) }
+	};
+}
+
+/** The scenario that stored inputs give: what an assessment ran, made again. */
+export function scenarioOf(
+	measured: Omit<AssessmentInputs, 'scenario' | 'derivations' | 'assumptions'>
+): Pick<AssessmentInputs, 'scenario' | 'derivations' | 'assumptions'> {
+	const { vehicle, battery, mount, dayPlan, hotDay, place, book } = measured;
+	return buildScenario({
+		...{ vehicle, battery, dayPlan, hotDay },
+		survey: mount.survey,
+		altitudeM: place.altitudeM,
+		coefficients: book.coefficients
+	});
+}
+
+/** Everything that goes into an assessment as the job stands now; says all that is missing at once. */
+export function gatherInputs(parts: JobParts, mount: Mount, book: BookView): AssessmentInputs {
+	const missing = listMissing(parts, mount);
+	if (missing.length > 0) {
+		const problems = missing.map((part) => ({ path: part, message: PARTS[part] }));
+		const sentences = problems.map(({ message }) => message).join(' ');
+		throw new AppError('conflict', `Mount ${mount.letter} cannot be assessed yet. ${sentences}`, problems);
+	}
+	const measured = measuredOf(parts, mount, book);
+	try {
+		return { ...measured, ...scenarioOf(measured) };
+	} catch (error) {
+		throw asInputError(error);
+	}
+}

@@ -1,0 +1,84 @@
+import type { Transaction } from 'sequelize';
+import type { BookRow, BookView } from '$lib/schemas/books';
+import type { SignedInPerson } from '$lib/schemas/people';
+import type { CoefficientBook as Coefficients } from '$lib/thermal/survey';
+import { Coefficient, CoefficientBook } from '../db/models';
+import { AppError, notFound } from '../errors';
+import { allow } from '../policies';
+import { presentBook, presentBookRow, presentCoefficient } from '../presenters/books';
+import { record } from './audit';
+import { COEFFICIENT_FIELDS, coefficientField, sourceOf } from './coefficient-sources';
+
+async function withCoefficients(book: CoefficientBook): Promise<BookView> {
+	const rows = await Coefficient.findAll({ where: { bookId: book.id }, order: [['id', 'ASC']] });
+	const coefficients = rows.map((row) =>
+		presentCoefficient(row, coefficientField(row.fieldGroup, row.fieldKey))
+	);
+	return presentBook(book, coefficients);
+}
+
+export async function listBooks(person: SignedInPerson): Promise<BookRow[]> {
+	allow(person, 'books.read');
+	const books = await CoefficientBook.findAll({
+		where: { workshopId: person.workshopId },
+		order: [['number', 'DESC']]
+	});
+	return books.map(presentBookRow);
+}
+
+export async function getBook(person: SignedInPerson, bookId: number): Promise<BookView> {
+	allow(person, 'books.read');
+	const book = await CoefficientBook.findOne({ where: { id: bookId, workshopId: person.workshopId } });
+	if (!book) throw notFound('book');
+	return withCoefficients(book);
+}
+
+/** The book that every new assessment and every live curve is made with: whoever may assess may know it. */
+export async function bookInForce(person: SignedInPerson): Promise<BookView> {
+	allow(person, 'assessments.run');
+	const book = await CoefficientBook.findOne({
+		where: { workshopId: person.workshopId, state: 'in-force' }
+	});
+	if (!book) {
+		throw new AppError(
+			'not_ready',
+			'No coefficient book is in force in this workshop, so nothing can be assessed.'
+		);
+	}
+	return withCoefficients(book);
+}
+
+/** A book's values as the engine takes them: by group, then key. */
+export function coefficientsOf({ coefficients }: BookView): Coefficients {
+	const groups: Coefficients = {};
+	for (const { group, key, value } of coefficients) (groups[group] ??= {})[key] = value;
+	return groups;
+}
+
+/** A workshop's first book: the thermal model's own values, each with what stands behind it, in force at once. */
+export async function createFirstBook(workshopId: number, transaction: Transaction): Promise<BookView> {
+	const book = await CoefficientBook.create(
+		{
+			workshopId,
+			number: 1,
+			name: 'Thermal model defaults',
+			state: 'in-force',
+			note: 'The values that the thermal model starts with. Nothing in it has been measured on a vehicle of this workshop.'
+		},
+		{ transaction }
+	);
+	const rows = COEFFICIENT_FIELDS.map((field) => ({
+		bookId: book.id,
+		fieldGroup: field.group,
+		fieldKey: field.key,
+		value: field.default,
+		unit: field.unit,
+		source: sourceOf(field)
+	}));
+	await Coefficient.bulkCreate(rows, { transaction });
+	await record(
+		{ workshopId, personId: null, action: 'book.in-force', subjectType: 'book', subjectId: book.id },
+		transaction
+	);
+	return withCoefficients(book);
+}

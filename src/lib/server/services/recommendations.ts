@@ -1,0 +1,147 @@
+import { Op } from 'sequelize';
+import type { AssessmentView, MountOutcome } from '$lib/schemas/assessments';
+import type { SignedInPerson } from '$lib/schemas/people';
+import type {
+	RecommendationDocument,
+	RecommendationInput,
+	RecommendationView
+} from '$lib/schemas/recommendations';
+import { Assessment, Customer, Job, Mount, Person, Recommendation, Workshop } from '../db/models';
+import { inTransaction } from '../db/transaction';
+import { AppError, notFound, type FieldProblem } from '../errors';
+import { allow } from '../policies';
+import { presentRecommendation } from '../presenters/recommendations';
+import { getAssessment, presentRows } from './assessments';
+import { recordBy } from './audit';
+import { WITHOUT_TEXTS, newestByMount, updateJobOutcome } from './job-outcome';
+
+async function show(recommendation: Recommendation): Promise<RecommendationView> {
+	const { jobId, assessmentId, createdBy } = recommendation;
+	const job = await Job.findByPk(jobId);
+	const author = await Person.findByPk(createdBy);
+	const assessment = await Assessment.findByPk(assessmentId, { attributes: WITHOUT_TEXTS });
+	const [row] = assessment ? await presentRows([assessment]) : [];
+	if (!job || !row) throw notFound('recommendation');
+	return presentRecommendation(recommendation, {
+		jobNumber: job.number,
+		assessment: row,
+		recommendedBy: author?.name ?? ''
+	});
+}
+
+const OVERRIDE_WORDS = {
+	decidedBy: 'Say who decided to go ahead although it cuts out.',
+	reason: 'Say why it goes ahead although it cuts out.'
+} as const;
+
+/** Against "cuts out", the two answers that it takes; for any other verdict, nobody decides against anything. */
+function readOverride({ verdict }: AssessmentView, input: RecommendationInput) {
+	if (verdict !== 'cuts-out') return { againstVerdict: false, decidedBy: null, reason: null };
+	const decidedBy = input.decidedBy?.trim() ?? '';
+	const reason = input.reason?.trim() ?? '';
+	const missing: FieldProblem[] = Object.entries({ decidedBy, reason })
+		.filter(([, words]) => words === '')
+		.map(([path]) => ({ path, message: OVERRIDE_WORDS[path as keyof typeof OVERRIDE_WORDS] }));
+	if (missing.length > 0) throw new AppError('invalid_input', missing[0]!.message, missing);
+	return { againstVerdict: true, decidedBy, reason };
+}
+
+function requireCurrent({ isCurrent, id }: AssessmentView): void {
+	if (isCurrent) return;
+	throw new AppError(
+		'conflict',
+		`Assessment ${id} is out of date: the job, the coefficient book or the engine has changed since. Assess the mount again first.`
+	);
+}
+
+/** Recommends what was assessed, and keeps it for good. Going ahead against "cuts out" takes a person and a reason. */
+export async function makeRecommendation(
+	person: SignedInPerson,
+	input: RecommendationInput
+): Promise<RecommendationView> {
+	allow(person, 'recommendations.write');
+	return inTransaction(async (transaction) => {
+		const assessment = await getAssessment(person, input.assessmentId);
+		const override = readOverride(assessment, input);
+		requireCurrent(assessment);
+		const { workshopId } = person;
+		const job = await Job.findOne({ where: { id: assessment.jobId, workshopId }, lock: true });
+		if (!job) throw notFound('job');
+		const recommendation = await Recommendation.create(
+			{ workshopId, jobId: job.id, assessmentId: assessment.id, ...override, createdBy: person.id },
+			{ transaction }
+		);
+		await updateJobOutcome(job, transaction, 'recommended');
+		const subject = { type: 'recommendation', id: recommendation.id };
+		const detail = { jobId: job.id, assessmentId: assessment.id, verdict: assessment.verdict, ...override };
+		await recordBy(person, 'recommendation.made', subject, transaction, detail);
+		return show(recommendation);
+	});
+}
+
+async function findRecommendation(person: SignedInPerson, id: number): Promise<Recommendation> {
+	const recommendation = await Recommendation.findOne({ where: { id, workshopId: person.workshopId } });
+	if (!recommendation) throw notFound('recommendation');
+	return recommendation;
+}
+
+export async function getRecommendation(
+	person: SignedInPerson,
+	recommendationId: number
+): Promise<RecommendationView> {
+	allow(person, 'assessments.read');
+	return show(await findRecommendation(person, recommendationId));
+}
+
+/** The newest recommendation of a job, or none. */
+export async function newestRecommendation(
+	person: SignedInPerson,
+	jobId: number
+): Promise<RecommendationView | null> {
+	allow(person, 'assessments.read');
+	const where = { jobId, workshopId: person.workshopId };
+	const newest = await Recommendation.findOne({ where, order: [['id', 'DESC']] });
+	return newest ? show(newest) : null;
+}
+
+/** The job's other mounts as they stood at that moment: a reprint says what the first print said. */
+async function othersThen({ jobId, createdAt }: Recommendation, chosenId: number): Promise<MountOutcome[]> {
+	const mounts = await Mount.findAll({
+		where: {
+			jobId,
+			id: { [Op.ne]: chosenId },
+			createdAt: { [Op.lte]: createdAt },
+			removedAt: { [Op.or]: [{ [Op.is]: null }, { [Op.gt]: createdAt }] }
+		},
+		order: [['letter', 'ASC']]
+	});
+	const newest = await newestByMount(jobId, createdAt);
+	const rows = new Map((await presentRows([...newest.values()])).map((row) => [row.mountId, row]));
+	return mounts.map(({ id: mountId, letter, name, surveyComplete }) => ({
+		...{ mountId, letter, name, surveyComplete },
+		assessment: rows.get(mountId) ?? null
+	}));
+}
+
+/** Everything that the printed recommendation says. */
+export async function getRecommendationDocument(
+	person: SignedInPerson,
+	recommendationId: number
+): Promise<RecommendationDocument> {
+	allow(person, 'assessments.read');
+	const row = await findRecommendation(person, recommendationId);
+	const recommendation = await show(row);
+	const assessment = await getAssessment(person, row.assessmentId);
+	const workshop = await Workshop.findByPk(person.workshopId);
+	const job = await Job.findByPk(row.jobId);
+	const customer = job && (await Customer.findByPk(job.customerId));
+	if (!workshop || !customer) throw notFound('recommendation');
+	const { name, address, phone, email } = workshop;
+	return {
+		recommendation,
+		assessment,
+		workshop: { name, address, phone, email },
+		customer: { phone: customer.phone, email: customer.email },
+		others: await othersThen(row, assessment.mountId)
+	};
+}
