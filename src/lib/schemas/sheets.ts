@@ -1,10 +1,21 @@
 import { z } from 'zod';
-import type { Verdict } from './verdicts';
+import type { AssessmentResult } from './assessments';
 import { email, idSchema, words } from './fields';
+import { VERDICTS, type Verdict } from './verdicts';
+
+/** What the picture is drawn from: kept with the words, so that the page never changes. */
+export interface SheetRibbon extends Pick<AssessmentResult, 'legs' | 'darkSpans'> {
+	curves: Omit<AssessmentResult['curves'], 'boardC' | 'soc'>;
+	peak: { tempC: number; atHour: number };
+	cutC: number;
+	resetC: number;
+}
 
 /** The customer's page, word for word as it was sent; its hash is what an acknowledgement is tied to. */
 export interface SheetContent {
 	workshop: { name: string; address: string; phone: string; email: string };
+	preparedBy: string;
+	preparedOn: string;
 	jobNumber: number;
 	customerName: string;
 	vehicle: string;
@@ -13,33 +24,80 @@ export interface SheetContent {
 	placeName: string;
 	verdict: Verdict;
 	headline: string;
+	/** What happens, in one or two sentences. */
+	summary: string;
+	/** Which day that is, and why it is so. */
 	paragraphs: string[];
-	figures: { label: string; value: string }[];
+	/** What the shop would do. */
+	advice: string;
 	/** Said when the shop goes ahead against the verdict. */
 	override: { decidedBy: string; reason: string } | null;
-	cautions: string[];
-	preparedOn: string;
+	/** The other positions that were worked out for this job. */
+	alternatives: { mountName: string; verdict: Verdict; summary: string }[];
+	figures: { label: string; value: string }[];
+	ribbon: SheetRibbon;
+	cautions: { title: string; text: string }[];
 	assessmentId: number;
 }
 
 export const sendSheetSchema = z.object({ recommendationId: idSchema, sendTo: email('Send to') });
+export type SendSheet = z.infer<typeof sendSheetSchema>;
 
 export const acknowledgeSchema = z.object({
 	name: words('Your name', 120),
 	understood: z
 		.literal(true, { error: 'Tick the box to say that you have read the sheet.' })
 		.meta({ label: 'I have read this' }),
-	contentSha256: z.string().regex(/^[0-9a-f]{64}$/)
+	contentSha256: z.string().regex(/^[0-9a-f]{64}$/, { error: 'Open the sheet again, then acknowledge it.' })
 });
+export type Acknowledge = z.infer<typeof acknowledgeSchema>;
+
+export const MAIL_STATES = ['waiting', 'sent', 'failed'] as const;
 
 export const sheetStatusSchema = z.object({
 	id: z.number().int(),
+	recommendationId: z.number().int(),
+	mountName: z.string(),
+	verdict: z.enum(VERDICTS),
 	sentTo: z.string(),
+	sentBy: z.string(),
 	createdAt: z.iso.datetime(),
-	mail: z.enum(['waiting', 'sent', 'failed']),
-	firstOpenedAt: z.iso.datetime().nullable(),
+	mail: z.enum(MAIL_STATES),
+	mailAttempts: z.number().int(),
+	mailError: z
+		.string()
+		.meta({ description: 'Why the letter did not go out at the last try; empty when it did' }),
+	mailSentAt: z.iso.datetime().nullable(),
+	linkFirstOpenedAt: z.iso.datetime().nullable().meta({
+		description: 'A mail scanner may open a link before its reader does'
+	}),
 	withdrawnAt: z.iso.datetime().nullable(),
 	acknowledgedAt: z.iso.datetime().nullable(),
 	acknowledgedBy: z.string().nullable()
 });
 export type SheetStatus = z.infer<typeof sheetStatusSchema>;
+
+/** Who acknowledged, and when. */
+export interface AcknowledgementView {
+	name: string;
+	acknowledgedAt: string;
+}
+
+/** What the customer's page shows. */
+export interface SheetView {
+	content: SheetContent;
+	contentSha256: string;
+	textVersion: string;
+	acknowledgement: AcknowledgementView | null;
+}
+
+/** One line of a customer's own list. */
+export interface MySheet {
+	id: number;
+	workshopName: string;
+	vehicle: string;
+	mountName: string;
+	verdict: Verdict;
+	sentAt: string;
+	acknowledgedAt: string | null;
+}

@@ -3,7 +3,8 @@ import { Op, type Transaction } from 'sequelize';
 import { OutgoingMail } from '../db/models';
 import { outsideTransaction } from '../db/transaction';
 import { logger } from '../logger';
-import { deliver, type Letter } from './transport';
+import { isFinalRefusal, sayMailError } from './mail-error';
+import { closeTransport, deliver, type Letter } from './transport';
 
 const LOOK_EVERY_MS = 5_000;
 const BATCH = 20;
@@ -21,6 +22,28 @@ export async function postLetter(letter: NewLetter, transaction: Transaction): P
 		{ transaction }
 	);
 	transaction.afterCommit(() => outsideTransaction(nudge));
+}
+
+/** A letter whose matter is over is not sent any more; one that is out already stays as it is. */
+export async function dropLetters(
+	sheetIds: number[],
+	reason: string,
+	transaction: Transaction
+): Promise<void> {
+	await OutgoingMail.update(
+		{ state: 'failed', lastError: reason },
+		{ where: { sheetId: sheetIds, state: 'waiting' }, transaction }
+	);
+}
+
+/** Gives a letter that was given up its tries again; says whether there was one. */
+export async function tryLetterAgain(sheetId: number, transaction: Transaction): Promise<boolean> {
+	const [changed] = await OutgoingMail.update(
+		{ state: 'waiting', attempts: 0, nextAttemptAt: new Date() },
+		{ where: { sheetId, state: 'failed' }, transaction }
+	);
+	transaction.afterCommit(() => outsideTransaction(nudge));
+	return changed > 0;
 }
 
 async function claim(mail: OutgoingMail): Promise<boolean> {
@@ -41,8 +64,8 @@ async function sendOne(mail: OutgoingMail): Promise<void> {
 			{ where: { id: mail.id } }
 		);
 	} catch (error) {
-		const lastError = (error instanceof Error ? error.message : String(error)).slice(0, 300);
-		const givenUp = attempts >= MOST_ATTEMPTS;
+		const lastError = sayMailError(error);
+		const givenUp = attempts >= MOST_ATTEMPTS || isFinalRefusal(error);
 		const nextAttemptAt = new Date(Date.now() + FIRST_PAUSE_MS * 2 ** attempts);
 		await OutgoingMail.update(
 			{ state: givenUp ? 'failed' : 'waiting', nextAttemptAt, lastError },
@@ -52,7 +75,10 @@ async function sendOne(mail: OutgoingMail): Promise<void> {
 	}
 }
 
-/** Sends what is due; a letter that fails waits longer each time and is given up after eight tries. */
+/**
+ * Sends what is due. A letter that fails waits longer each time and is given up after eight tries, or at once when the
+ * server refuses it for good.
+ */
 export async function sendDue(): Promise<void> {
 	const due = await OutgoingMail.findAll({
 		where: { state: 'waiting', nextAttemptAt: { [Op.lte]: new Date() } },
@@ -86,4 +112,5 @@ export async function stopOutbox(): Promise<void> {
 	clearInterval(timer);
 	timer = undefined;
 	await running;
+	closeTransport();
 }

@@ -3,7 +3,6 @@ import { formatDate } from '$lib/format/dates';
 import { describeVerdict, type VerdictFacts } from '$lib/format/describe-verdict';
 import { formatNumber, formatTemperature } from '$lib/format/numbers';
 import { formatClock, formatClockHour, formatHours, sayHours } from '$lib/format/time';
-import { sayVerdict } from '$lib/format/verdict';
 import type { AssessmentInputs, AssessmentResult } from '$lib/schemas/assessments';
 import type { SheetContent, SheetRibbon } from '$lib/schemas/sheets';
 import type { Verdict } from '$lib/schemas/verdicts';
@@ -162,7 +161,3 @@ export function writeSheetContent(source: SheetSource): SheetContent {
 		cautions: listCautions(battery.chemistry).map(({ title, text }) => ({ title, text }))
 	};
 }
-
-/** What a shop's own list calls the sheet. */
-export const nameSheet = ({ mountName, verdict }: SheetContent): string =>
-	`${mountName}: ${sayVerdict(verdict)}`;

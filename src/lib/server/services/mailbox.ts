@@ -1,0 +1,49 @@
+import type { LetterRow, LetterView } from '$lib/schemas/mailbox';
+import type { SignedInPerson } from '$lib/schemas/people';
+import { OutgoingMail } from '../db/models';
+import { env } from '../env';
+import { notFound } from '../errors';
+import { listKeptLetters, readKeptLetter } from '../mail/mailbox-folder';
+import { allow } from '../policies';
+import { presentLetterLines, presentLetterRow, shortMessageId } from '../presenters/letters';
+
+/** Older letters stay in the folder and are not listed. */
+const MOST_LISTED = 200;
+
+/** Only a demonstration keeps its letters here; anywhere else there is no such page. */
+function requireMailbox(): string {
+	const { SOAKLINE_DEMO, MAILBOX_DIR } = env();
+	if (SOAKLINE_DEMO !== '1' || !MAILBOX_DIR) throw notFound('page');
+	return MAILBOX_DIR;
+}
+
+/** The letters in the folder that this workshop sent: a file alone proves nothing, its message id must be on record. */
+async function findOwn(person: SignedInPerson) {
+	const kept = await listKeptLetters(requireMailbox(), MOST_LISTED);
+	const rows = await OutgoingMail.findAll({
+		where: { workshopId: person.workshopId, messageId: kept.map((letter) => letter.messageId) }
+	});
+	const rowOf = new Map(rows.map((row) => [row.messageId, row]));
+	return kept.flatMap(({ file, messageId }) => {
+		const row = rowOf.get(messageId);
+		return row ? [{ file, row }] : [];
+	});
+}
+
+export async function listLetters(person: SignedInPerson): Promise<LetterRow[]> {
+	allow(person, 'mailbox.read');
+	return (await findOwn(person)).map(({ row }) => presentLetterRow(row));
+}
+
+export async function getLetter(person: SignedInPerson, messageId: string): Promise<LetterView> {
+	allow(person, 'mailbox.read');
+	const found = (await findOwn(person)).find(({ row }) => shortMessageId(row.messageId) === messageId);
+	if (!found) throw notFound('letter');
+	const mail = await readKeptLetter(found.file);
+	return {
+		...presentLetterRow(found.row),
+		subject: mail.subject ?? found.row.subject,
+		sender: mail.from?.text ?? '',
+		lines: presentLetterLines(mail.text ?? '', env().ORIGIN)
+	};
+}
