@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { SENSORS, type Sensor } from '../thermal/types';
-import { editedSchema, measure, optionalWords, words } from './fields';
+import { editedSchema, measure, optionalWords, versionSchema, words } from './fields';
 
 export type { Sensor };
 
@@ -39,7 +39,7 @@ const LIMIT_PAIRS = [
 	{ cut: 'dischargeCutC', reset: 'dischargeResetC', words: 'Comes back at' }
 ] as const;
 
-export const batteryInputSchema = fields.superRefine((battery, context) => {
+function requireResetsBelowCuts(battery: z.infer<typeof fields>, context: z.RefinementCtx): void {
 	for (const { cut, reset, words: label } of LIMIT_PAIRS) {
 		if (battery[reset] >= battery[cut]) {
 			context.addIssue({
@@ -49,8 +49,15 @@ export const batteryInputSchema = fields.superRefine((battery, context) => {
 			});
 		}
 	}
-});
+}
+
+export const batteryInputSchema = fields.superRefine(requireResetsBelowCuts);
 export type BatteryInput = z.infer<typeof batteryInputSchema>;
+
+/** A change of a record, against the version that was seen. */
+export const batteryChangeSchema = fields
+	.extend({ version: versionSchema })
+	.superRefine(requireResetsBelowCuts);
 
 export const batterySchema = editedSchema.extend(fields.shape);
 export type BatteryView = z.infer<typeof batterySchema>;

@@ -1,7 +1,11 @@
 import { z } from 'zod';
-import { idSchema, optionalEmail, optionalWords, versionSchema, words } from './fields';
-import { hotDayFields } from './places';
-import { vehicleInputSchema } from './vehicles';
+import { batterySchema } from './batteries';
+import { customerSchema } from './customers';
+import { dayPlanSchema } from './day-plans';
+import { editedSchema, idSchema, optionalEmail, optionalWords, versionSchema, words } from './fields';
+import { mountSchema } from './mounts';
+import { CLIMATE_ZONES, hotDayFields, placeSchema } from './places';
+import { vehicleInputSchema, vehicleSchema } from './vehicles';
 import { VERDICTS } from './verdicts';
 
 export const JOB_STAGES = ['survey', 'assessed', 'recommended', 'sent', 'acknowledged'] as const;
@@ -19,29 +23,47 @@ export type NewJob = z.infer<typeof newJobSchema>;
 
 /** Another job on a vehicle that the shop knows. */
 export const repeatJobSchema = z.object({ vehicleId: idSchema, note: optionalWords('Note', 1_000) });
+export type RepeatJob = z.infer<typeof repeatJobSchema>;
 
 /** The battery that is to be fitted. */
-export const jobBatterySchema = z.object({ batteryRecordId: idSchema, version: versionSchema });
+export const jobBatterySchema = z.object({
+	batteryRecordId: idSchema.meta({ label: 'Battery' }),
+	version: versionSchema
+});
+export type JobBattery = z.infer<typeof jobBatterySchema>;
 /** The place and the hot day to plan for there; the place's own figures unless changed. */
-export const jobClimateSchema = z.object({ placeId: idSchema, ...hotDayFields, version: versionSchema });
+export const jobClimateSchema = z.object({
+	placeId: idSchema.meta({ label: 'Place' }),
+	...hotDayFields,
+	version: versionSchema
+});
 export type JobClimate = z.infer<typeof jobClimateSchema>;
 
-export const JOB_SORTS = ['updated', 'number', 'customer', 'headroom'] as const;
+/** Each way to order the list, as a person asks for it. */
+export const JOB_SORTS = [
+	'newest',
+	'oldest',
+	'highest-number',
+	'lowest-number',
+	'customer-a-to-z',
+	'customer-z-to-a',
+	'least-headroom',
+	'most-headroom'
+] as const;
 export type JobSort = (typeof JOB_SORTS)[number];
 
 export const jobQuerySchema = z.object({
 	search: z
 		.string()
 		.trim()
-		.max(80)
+		.max(80, { error: 'Search for 80 characters or fewer.' })
 		.default('')
-		.meta({ description: 'Part of a customer, make, model or job number' }),
+		.meta({ description: 'Parts of a customer, make, model, registration or job number' }),
 	verdict: z.enum(VERDICTS).optional(),
 	stage: z.enum(JOB_STAGES).optional(),
-	zone: z.string().max(3).optional().meta({ description: 'Climate class of the place' }),
-	sort: z.enum(JOB_SORTS).default('updated'),
-	order: z.enum(['up', 'down']).default('down'),
-	cursor: z.string().max(400).optional().meta({ description: 'Where the page before ended' }),
+	zone: z.enum(CLIMATE_ZONES).optional().meta({ description: 'Climate class of the place' }),
+	sort: z.enum(JOB_SORTS).default('newest'),
+	cursor: z.string().max(1_200).optional().meta({ description: 'Where the page before ended' }),
 	limit: z.coerce.number().int().min(1).max(100).default(20)
 });
 export type JobQuery = z.infer<typeof jobQuerySchema>;
@@ -67,3 +89,37 @@ export const jobPageSchema = z.object({
 	next: z.string().nullable()
 });
 export type JobPage = z.infer<typeof jobPageSchema>;
+
+/** What an assessment rests on, and what may have changed since. */
+export const ASSESSED_PARTS = ['vehicle', 'battery', 'place', 'hot-day', 'day-plan', 'survey'] as const;
+export type AssessedPart = (typeof ASSESSED_PARTS)[number];
+
+/** Where a mount stands: its newest assessment, and what the job has changed since then. */
+export const mountStandingSchema = z.object({
+	mountId: z.number().int(),
+	assessmentId: z.number().int(),
+	verdict: z.enum(VERDICTS),
+	headroomK: z.number(),
+	assessedAt: z.iso.datetime(),
+	changedSince: z.array(z.enum(ASSESSED_PARTS))
+});
+export type MountStanding = z.infer<typeof mountStandingSchema>;
+
+export const jobSchema = editedSchema.extend({
+	number: z.number().int(),
+	customer: customerSchema,
+	vehicle: vehicleSchema,
+	battery: batterySchema.nullable(),
+	place: placeSchema.nullable(),
+	hotDay: z.object(hotDayFields).nullable(),
+	stage: z.enum(JOB_STAGES),
+	verdict: z.enum(VERDICTS).nullable(),
+	headroomK: z.number().nullable(),
+	note: z.string(),
+	createdAt: z.iso.datetime(),
+	updatedAt: z.iso.datetime(),
+	mounts: z.array(mountSchema),
+	standings: z.array(mountStandingSchema),
+	dayPlan: dayPlanSchema.nullable()
+});
+export type JobView = z.infer<typeof jobSchema>;

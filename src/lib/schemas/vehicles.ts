@@ -34,3 +34,19 @@ export const vehicleSchema = editedSchema.extend({
 	...vehicleInputSchema.shape
 });
 export type VehicleView = z.infer<typeof vehicleSchema>;
+
+export const vehicleQuerySchema = z.object({
+	search: z
+		.string()
+		.trim()
+		.max(80, { error: 'Search for 80 characters or fewer.' })
+		.default('')
+		.meta({ description: 'Parts of a registration, customer, make or model' })
+});
+
+/** A vehicle that the shop knows, with whose it is and its newest job. */
+export const knownVehicleSchema = vehicleSchema.extend({
+	customerName: z.string(),
+	lastJobNumber: z.number().int().nullable()
+});
+export type KnownVehicle = z.infer<typeof knownVehicleSchema>;

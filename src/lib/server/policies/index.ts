@@ -11,7 +11,10 @@ const BENCH: readonly Role[] = ['engineer', 'manager'];
 export const RULES = {
 	'jobs.read': WORKSHOP,
 	'jobs.write': WORKSHOP,
+	'customers.read': WORKSHOP,
+	'customers.write': WORKSHOP,
 	'vehicles.read': WORKSHOP,
+	'vehicles.write': WORKSHOP,
 	'mounts.write': WORKSHOP,
 	'day-plans.write': WORKSHOP,
 	'batteries.read': WORKSHOP,

@@ -28,3 +28,9 @@ export async function orNameTaken<T>(what: string, field: string, work: () => Pr
 		throw new AppError('conflict', message, [{ path: field, message }]);
 	}
 }
+
+/** A record that was chosen in a form or a body and is not in this workshop: says at which field. */
+export function notThere(what: string, field: string): AppError {
+	const message = `There is no such ${what} here: choose one of the list.`;
+	return new AppError('invalid_input', message, [{ path: field, message }]);
+}

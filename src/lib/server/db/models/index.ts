@@ -71,6 +71,7 @@ export function initModels(sequelize: Sequelize): void {
 		for (const [name, column] of Object.entries(columns)) columns[name] = { ...column };
 	});
 	for (const init of initialisers) init(sequelize);
+	Vehicle.belongsTo(Customer, { as: 'customer', foreignKey: 'customerId' });
 	Job.belongsTo(Customer, { as: 'customer', foreignKey: 'customerId' });
 	Job.belongsTo(Vehicle, { as: 'vehicle', foreignKey: 'vehicleId' });
 	Job.belongsTo(BatteryRecord, { as: 'batteryRecord', foreignKey: 'batteryRecordId' });

@@ -3,10 +3,12 @@ import {
 	type CreationOptional,
 	type InferAttributes,
 	type InferCreationAttributes,
+	type NonAttribute,
 	type Sequelize
 } from 'sequelize';
 import type { EngineLayout } from '$lib/schemas/vehicles';
 import { edited, id, moment, number, reference, text, textOrEmpty, whole } from './base';
+import type { Customer } from './customer';
 
 export class Vehicle extends Model<InferAttributes<Vehicle>, InferCreationAttributes<Vehicle>> {
 	declare id: CreationOptional<number>;
@@ -24,6 +26,7 @@ export class Vehicle extends Model<InferAttributes<Vehicle>, InferCreationAttrib
 	declare version: CreationOptional<number>;
 	declare createdAt: CreationOptional<Date>;
 	declare updatedAt: CreationOptional<Date>;
+	declare customer?: NonAttribute<Customer>;
 }
 
 export function initVehicle(sequelize: Sequelize): void {

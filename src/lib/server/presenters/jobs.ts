@@ -1,0 +1,65 @@
+import type { JobRow, JobView, MountStanding } from '$lib/schemas/jobs';
+import type { Assessment, DayPlan, Job, Mount } from '../db/models';
+import { nameBattery, presentBattery } from './batteries';
+import { presentCustomer } from './customers';
+import { presentDayPlan } from './day-plans';
+import { presentMount } from './mounts';
+import { presentPlace } from './places';
+import { nameVehicle, presentVehicle } from './vehicles';
+
+/** A job as it was read: with its customer and its vehicle. */
+function withOwner({ customer, vehicle }: Job) {
+	if (!customer || !vehicle) throw new Error('The job was read without its customer or its vehicle.');
+	return { customer, vehicle };
+}
+
+export function presentJobRow(job: Job): JobRow {
+	const { id, number, batteryRecord, place, stage, verdict, headroomK, updatedAt } = job;
+	const { customer, vehicle } = withOwner(job);
+	return {
+		...{ id, number, stage, verdict, headroomK },
+		customerName: customer.name,
+		vehicle: nameVehicle(vehicle),
+		battery: batteryRecord ? nameBattery(batteryRecord) : null,
+		place: place?.name ?? null,
+		climateZone: place?.climateZone ?? null,
+		updatedAt: updatedAt.toISOString()
+	};
+}
+
+function presentHotDay({ hotDayMaxC, dailyRangeK, sunPeakWPerM2 }: Job): JobView['hotDay'] {
+	if (hotDayMaxC === null || dailyRangeK === null || sunPeakWPerM2 === null) return null;
+	return { hotDayMaxC, dailyRangeK, sunPeakWPerM2 };
+}
+
+export function presentStanding(
+	{ id, mountId, verdict, headroomK, createdAt }: Assessment,
+	changedSince: MountStanding['changedSince']
+): MountStanding {
+	const assessedAt = createdAt.toISOString();
+	return { mountId, assessmentId: id, verdict, headroomK, assessedAt, changedSince };
+}
+
+/** The job sheet: the job with everything that stands on it. */
+export function presentJob(
+	job: Job,
+	mounts: Mount[],
+	dayPlan: DayPlan | null,
+	standings: MountStanding[]
+): JobView {
+	const { id, version, number, stage, verdict, headroomK, note, batteryRecord, place } = job;
+	const { customer, vehicle } = withOwner(job);
+	return {
+		...{ id, version, number, stage, verdict, headroomK, note },
+		customer: presentCustomer(customer),
+		vehicle: presentVehicle(vehicle),
+		battery: batteryRecord ? presentBattery(batteryRecord) : null,
+		place: place ? presentPlace(place) : null,
+		hotDay: presentHotDay(job),
+		createdAt: job.createdAt.toISOString(),
+		updatedAt: job.updatedAt.toISOString(),
+		mounts: mounts.map(presentMount),
+		standings,
+		dayPlan: dayPlan && presentDayPlan(dayPlan)
+	};
+}

@@ -1,0 +1,153 @@
+import { QueryTypes, type Transaction } from 'sequelize';
+import type {
+	JobBattery,
+	JobClimate,
+	JobPage,
+	JobQuery,
+	JobView,
+	NewJob,
+	RepeatJob
+} from '$lib/schemas/jobs';
+import type { SignedInPerson } from '$lib/schemas/people';
+import { connection } from '../db/connection';
+import { BatteryRecord, DayPlan, Job, Mount, Place, Vehicle } from '../db/models';
+import { inTransaction } from '../db/transaction';
+import { notFound } from '../errors';
+import { allow } from '../policies';
+import { presentJob, presentJobRow } from '../presenters/jobs';
+import { recordBy } from './audit';
+import { customerFor } from './customers';
+import { findJobs } from './job-list';
+import { notThere, saveVersioned } from './records';
+import { findStandings } from './standings';
+import { addVehicle } from './vehicles';
+
+export async function listJobs(person: SignedInPerson, query: JobQuery): Promise<JobPage> {
+	allow(person, 'jobs.read');
+	const { jobs, total, next } = await findJobs(person.workshopId, query);
+	return { rows: jobs.map(presentJobRow), total, next };
+}
+
+export async function getJob(person: SignedInPerson, jobId: number): Promise<JobView> {
+	allow(person, 'jobs.read');
+	const { workshopId } = person;
+	const job = await Job.findOne({
+		where: { id: jobId, workshopId },
+		include: ['customer', 'vehicle', 'batteryRecord', 'place']
+	});
+	if (!job) throw notFound('job');
+	const [mounts, dayPlan] = await Promise.all([
+		Mount.findAll({ where: { jobId, workshopId, removedAt: null }, order: [['letter', 'ASC']] }),
+		DayPlan.findOne({ where: { jobId, workshopId } })
+	]);
+	return presentJob(job, mounts, dayPlan, await findStandings(job, mounts, dayPlan));
+}
+
+/** Numbers run within a workshop; its row is held, so that two jobs begun at once get two numbers. */
+async function takeJobNumber(workshopId: number, transaction: Transaction): Promise<number> {
+	const [row] = await connection().query<{ number: number }>(
+		'SELECT next_job_number AS number FROM workshops WHERE id = :workshopId FOR UPDATE',
+		{ replacements: { workshopId }, transaction, type: QueryTypes.SELECT }
+	);
+	if (!row) throw notFound('workshop');
+	await connection().query(
+		'UPDATE workshops SET next_job_number = next_job_number + 1 WHERE id = :workshopId',
+		{ replacements: { workshopId }, transaction }
+	);
+	return row.number;
+}
+
+/** A new job brings its customer and its vehicle: all three are kept, or none. */
+export async function createJob(person: SignedInPerson, input: NewJob): Promise<JobView> {
+	allow(person, 'jobs.write');
+	const { customerName, customerEmail, customerPhone, note, ...vehicleInput } = input;
+	const { workshopId } = person;
+	return inTransaction(async (transaction) => {
+		const number = await takeJobNumber(workshopId, transaction);
+		const contact = { name: customerName, email: customerEmail, phone: customerPhone };
+		const customerId = await customerFor(person, contact, transaction);
+		const vehicleId = await addVehicle(person, customerId, vehicleInput, transaction);
+		const job = await Job.create(
+			{ workshopId, number, customerId, vehicleId, note, createdBy: person.id },
+			{ transaction }
+		);
+		const detail = { number, customerId, vehicleId, note };
+		await recordBy(person, 'job.created', { type: 'job', id: job.id }, transaction, detail);
+		return getJob(person, job.id);
+	});
+}
+
+function keptFrom(before: Job | null) {
+	if (!before) return {};
+	const { batteryRecordId, placeId, hotDayMaxC, dailyRangeK, sunPeakWPerM2 } = before;
+	return { batteryRecordId, placeId, hotDayMaxC, dailyRangeK, sunPeakWPerM2 };
+}
+
+/** Another job on a known vehicle begins with the battery and the hot day of the one before. */
+export async function repeatJob(person: SignedInPerson, { vehicleId, note }: RepeatJob): Promise<JobView> {
+	allow(person, 'jobs.write');
+	const { workshopId } = person;
+	return inTransaction(async (transaction) => {
+		const number = await takeJobNumber(workshopId, transaction);
+		const vehicle = await Vehicle.findOne({ where: { id: vehicleId, workshopId }, transaction });
+		if (!vehicle) throw notThere('vehicle', 'vehicleId');
+		const { customerId } = vehicle;
+		const before = await Job.findOne({
+			where: { vehicleId, workshopId },
+			order: [['number', 'DESC']],
+			transaction
+		});
+		const job = await Job.create(
+			{ ...keptFrom(before), workshopId, number, customerId, vehicleId, note, createdBy: person.id },
+			{ transaction }
+		);
+		const detail = { number, customerId, vehicleId, note, repeats: before?.number ?? null };
+		await recordBy(person, 'job.created', { type: 'job', id: job.id }, transaction, detail);
+		return getJob(person, job.id);
+	});
+}
+
+async function changeJob(
+	person: SignedInPerson,
+	jobId: number,
+	action: string,
+	version: number,
+	changes: Partial<JobClimate> & { batteryRecordId?: number },
+	transaction: Transaction
+): Promise<JobView> {
+	const job = await Job.findOne({ where: { id: jobId, workshopId: person.workshopId }, transaction });
+	if (!job) throw notFound('job');
+	await saveVersioned(job, 'job', version, changes, transaction);
+	await recordBy(person, action, { type: 'job', id: job.id }, transaction, changes);
+	return getJob(person, job.id);
+}
+
+export async function setJobBattery(
+	person: SignedInPerson,
+	jobId: number,
+	{ batteryRecordId, version }: JobBattery
+): Promise<JobView> {
+	allow(person, 'jobs.write');
+	return inTransaction(async (transaction) => {
+		const where = { id: batteryRecordId, workshopId: person.workshopId };
+		if (!(await BatteryRecord.findOne({ where, attributes: ['id'], transaction }))) {
+			throw notThere('battery', 'batteryRecordId');
+		}
+		return changeJob(person, jobId, 'job.battery-set', version, { batteryRecordId }, transaction);
+	});
+}
+
+export async function setJobClimate(
+	person: SignedInPerson,
+	jobId: number,
+	{ version, ...climate }: JobClimate
+): Promise<JobView> {
+	allow(person, 'jobs.write');
+	return inTransaction(async (transaction) => {
+		const where = { id: climate.placeId, workshopId: person.workshopId };
+		if (!(await Place.findOne({ where, attributes: ['id'], transaction }))) {
+			throw notThere('place', 'placeId');
+		}
+		return changeJob(person, jobId, 'job.climate-set', version, climate, transaction);
+	});
+}

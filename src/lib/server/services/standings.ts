@@ -1,0 +1,102 @@
+import { Op, col, fn } from 'sequelize';
+import type { AssessmentInputs } from '$lib/schemas/assessments';
+import { batteryInputSchema } from '$lib/schemas/batteries';
+import { dayPlanInputSchema } from '$lib/schemas/day-plans';
+import type { AssessedPart, MountStanding } from '$lib/schemas/jobs';
+import { hotDayFields } from '$lib/schemas/places';
+import { surveyAnswersSchema } from '$lib/schemas/survey';
+import { Assessment, type DayPlan, type Job, type Mount } from '../db/models';
+import { canonicalJson } from '../hash';
+import { presentStanding } from '../presenters/jobs';
+
+/** What the job is now, in the parts that an assessment keeps. */
+interface Now {
+	job: Job;
+	mount: Mount;
+	dayPlan: DayPlan | null;
+}
+
+interface Part {
+	part: AssessedPart;
+	/** The fields that make a difference. */
+	fields: readonly string[];
+	then: (inputs: AssessmentInputs) => object;
+	now: (now: Now) => object | null | undefined;
+}
+
+const PARTS: readonly Part[] = [
+	{
+		part: 'vehicle',
+		fields: ['engineLayout', 'massKg', 'dragAreaM2', 'towMassKg', 'towDragAreaM2'],
+		then: (inputs) => inputs.vehicle,
+		now: ({ job }) => job.vehicle
+	},
+	{
+		part: 'battery',
+		fields: Object.keys(batteryInputSchema.shape),
+		then: (inputs) => inputs.battery,
+		now: ({ job }) => job.batteryRecord
+	},
+	{
+		part: 'place',
+		fields: ['name', 'region', 'latitudeDeg', 'longitudeDeg', 'altitudeM'],
+		then: (inputs) => inputs.place,
+		now: ({ job }) => job.place
+	},
+	{
+		part: 'hot-day',
+		fields: Object.keys(hotDayFields),
+		then: (inputs) => inputs.hotDay,
+		now: ({ job }) => job
+	},
+	{
+		part: 'day-plan',
+		fields: Object.keys(dayPlanInputSchema.shape).filter((field) => field !== 'name'),
+		then: (inputs) => inputs.dayPlan,
+		now: ({ dayPlan }) => dayPlan
+	},
+	{
+		part: 'survey',
+		fields: Object.keys(surveyAnswersSchema.shape),
+		then: (inputs) => inputs.mount.survey,
+		now: ({ mount }) => mount.survey
+	}
+];
+
+function pick(from: object | null | undefined, fields: readonly string[]): unknown {
+	if (!from) return null;
+	const values = from as Record<string, unknown>;
+	return Object.fromEntries(fields.map((field) => [field, values[field] ?? null]));
+}
+
+/** The parts of a job that are no longer what an assessment was made with. */
+export function partsChangedSince(inputs: AssessmentInputs, now: Now): AssessedPart[] {
+	return PARTS.filter(
+		({ fields, then, now: partNow }) =>
+			canonicalJson(pick(then(inputs), fields)) !== canonicalJson(pick(partNow(now), fields))
+	).map(({ part }) => part);
+}
+
+/** The newest assessment of each mount, and what was changed after it. */
+export async function findStandings(
+	job: Job,
+	mounts: Mount[],
+	dayPlan: DayPlan | null
+): Promise<MountStanding[]> {
+	const newest = await Assessment.findAll({
+		attributes: [[fn('MAX', col('id')), 'id']],
+		where: { jobId: job.id, mountId: mounts.map((mount) => mount.id) },
+		group: ['mount_id']
+	});
+	const assessments = await Assessment.findAll({
+		attributes: ['id', 'mountId', 'verdict', 'headroomK', 'createdAt', 'inputs'],
+		where: { id: { [Op.in]: newest.map((each) => each.id) } },
+		order: [['mountId', 'ASC']]
+	});
+	return assessments.flatMap((assessment) => {
+		const mount = mounts.find((each) => each.id === assessment.mountId);
+		return mount
+			? [presentStanding(assessment, partsChangedSince(assessment.inputs, { job, mount, dayPlan }))]
+			: [];
+	});
+}
