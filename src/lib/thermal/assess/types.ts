@@ -11,17 +11,22 @@ export const HEAT_SOURCES = [
 	'enclosure-air',
 	'road',
 	'own-current',
-	'outside-air',
-	'start'
+	'outside-air'
 ] as const;
 export type HeatSource = (typeof HEAT_SOURCES)[number];
 
 /** One line of the heat ledger, at the moment when the cells are hottest. */
 export interface LedgerEntry {
 	source: HeatSource;
-	/** Heat that this source sends into case, cells and board at that moment, W (negative: it cools). */
+	/**
+	 * Heat that it sends into case, cells and board at that moment, W (negative: it takes heat away), directly and
+	 * through shield and tray. Outside air: what the case loses to it. The watts sum to what the battery stores.
+	 */
 	watts: number;
-	/** Its share of what the cells stand above the outside air at that moment, K; the shares sum to the whole. */
+	/**
+	 * Its share of what the cells stand above the outside air at that moment, K; the shares sum to the whole.
+	 * Outside air: how far the cells still lag behind its rise (negative) or fall.
+	 */
 	kelvin: number;
 }
 

@@ -1,0 +1,148 @@
+import type { MinuteSeries, Scenario, SimulationResult } from '../types';
+import { parseScenario } from '../vehicle/parse-scenario';
+import { runScenario } from '../vehicle/simulate';
+import { ENGINE_VERSION } from '../version';
+import { thinCurves } from './curves';
+import { keepLedger } from './heat-ledger';
+import { findSpans, sumHours } from './spans';
+import type { Assessment, DoneAssessment, HourSpan, LegSpan, MountVerdict } from './types';
+
+type DoneRun = Extract<SimulationResult, { status: 'done' }>;
+
+const MINUTES_PER_H = 60;
+
+/** Less room than this below the cut-off is called close: engineering judgement, about what the coefficients can be off by. */
+export const CLOSE_HEADROOM_K = 5;
+/** Charge missed to heat counts from this share of the capacity. */
+export const MISSED_SHARE_THAT_COUNTS = 0.01;
+
+export interface AssessOptions {
+	/** What each leg is to people, in the order of the legs. */
+	legKinds?: readonly LegSpan['kind'][];
+}
+
+/** Highest reading of what the BMS watches, on the grid of minutes, °C. */
+function findPeakSensorC({ bms }: Scenario, { nodes, count }: MinuteSeries): number {
+	const watched = { cells: [nodes.cells], board: [nodes.board], hotter: [nodes.cells, nodes.board] }[
+		bms.sensor
+	];
+	let peakC = -Infinity;
+	for (const series of watched) {
+		for (let minute = 0; minute < count; minute++) peakC = Math.max(peakC, series[minute]!);
+	}
+	return peakC;
+}
+
+function judge(run: DoneRun, scenario: Scenario, headroomK: number): MountVerdict {
+	if (run.report.events.some(({ side, kind }) => side === 'discharge' && kind === 'cut')) return 'cuts-out';
+	const missedChargeCounts = run.chargeRefusedAh >= MISSED_SHARE_THAT_COUNTS * scenario.battery.capacityAh;
+	return headroomK < CLOSE_HEADROOM_K || missedChargeCounts ? 'runs-close' : 'rides-it-out';
+}
+
+function layOutLegs({ legs, start }: Scenario, kinds: AssessOptions['legKinds']): LegSpan[] {
+	let fromHour = start.hour;
+	return legs.map(({ minutes, engineOn, speedKmh, surface, bonnetOpen }, index) => {
+		const toHour = fromHour + minutes / MINUTES_PER_H;
+		const kind = kinds?.[index];
+		const span = { ...(kind ? { kind } : {}), fromHour, toHour, engineOn, speedKmh, surface, bonnetOpen };
+		fromHour = toHour;
+		return span;
+	});
+}
+
+/** Hours during which the charger had current to spare and the charge latch stood open. */
+function countMissedHours(
+	scenario: Scenario,
+	legs: readonly LegSpan[],
+	chargeSpans: readonly HourSpan[]
+): number {
+	let hours = 0;
+	for (const [index, leg] of legs.entries()) {
+		const sparesA = scenario.legs[index]!.engineOn ? scenario.charger.maxA - scenario.legs[index]!.loadA : 0;
+		if (sparesA <= 0) continue;
+		for (const span of chargeSpans) {
+			hours += Math.max(Math.min(span.toHour, leg.toHour) - Math.max(span.fromHour, leg.fromHour), 0);
+		}
+	}
+	return hours;
+}
+
+function findPeakMinute({ nodes, count }: MinuteSeries): number {
+	let peak = 0;
+	for (let minute = 1; minute < count; minute++) if (nodes.cells[minute]! > nodes.cells[peak]!) peak = minute;
+	return peak;
+}
+
+function describeSpans(run: DoneRun, endHour: number) {
+	const { events } = run.report;
+	const darkSpans = findSpans(events, 'discharge', endHour);
+	const last = darkSpans.at(-1);
+	const firstReset = darkSpans.find((span) => !span.open)?.toHour ?? null;
+	return {
+		darkSpans,
+		darkHours: sumHours(darkSpans),
+		cutAtHour: darkSpans[0]?.fromHour ?? null,
+		resetAtHour: firstReset,
+		backByItself: last !== undefined && !last.open,
+		chargeSpans: findSpans(events, 'charge', endHour)
+	};
+}
+
+function assessRun(scenario: Scenario, run: DoneRun, options: AssessOptions): DoneAssessment {
+	const { report, minutes } = run;
+	const legs = layOutLegs(scenario, options.legKinds);
+	const endHour = legs.at(-1)!.toHour;
+	const spans = describeSpans(run, endHour);
+	const peakSensorC = findPeakSensorC(scenario, minutes);
+	const headroomK = scenario.bms.discharge.cut - peakSensorC;
+	const { soc: endSoc, ...end } = report.end;
+	return {
+		status: 'done',
+		verdict: judge(run, scenario, headroomK),
+		headroomK,
+		chargeHeadroomK: scenario.bms.charge.cut - peakSensorC,
+		...spans,
+		chargeMissedAh: run.chargeRefusedAh,
+		chargeMissedHours: countMissedHours(scenario, legs, spans.chargeSpans),
+		peakCellsC: report.peakCellsC,
+		peakAtHour: report.peakAtHour,
+		peakSensorC,
+		peaks: report.peaks,
+		end,
+		endSoc,
+		endHour,
+		events: report.events,
+		ledger: keepLedger(scenario, minutes, findPeakMinute(minutes)),
+		curves: thinCurves(minutes),
+		legs,
+		engineVersion: ENGINE_VERSION,
+		energyMaxRelativeImbalance: report.energy.maxRelativeImbalance,
+		steps: report.steps,
+		evaluations: report.evaluations,
+		hourly: report.hourly
+	};
+}
+
+/**
+ * Runs a scenario and says what it means for whoever depends on the battery.
+ *
+ * Cuts out: the discharge latch opened. Runs close: less than 5 K between the cut and the peak of what the BMS watches,
+ * or charging stopped by heat for at least a hundredth of the capacity. Otherwise it rides the day out. The 5 K and the
+ * hundredth are engineering judgement.
+ *
+ * @param input a scenario as people or programs write it
+ * @param options what the legs are to people
+ * @returns the assessment, or status `failed` with the reason when the run could not be finished
+ * @throws ScenarioError when the input is not a possible scenario
+ * Validity: as simulateScenario; one day, no spread of the inputs.
+ * Source: the thermal model; the rules for the verdict are our own.
+ * @example
+ * assessScenario({ legs: [{ minutes: 60 }] }).verdict // 'rides-it-out'
+ */
+export function assessScenario(input: unknown, options: AssessOptions = {}): Assessment {
+	const scenario = parseScenario(input);
+	const run = runScenario(scenario);
+	return run.status === 'failed'
+		? { status: 'failed', reason: run.reason }
+		: assessRun(scenario, run, options);
+}

@@ -1,0 +1,17 @@
+import type { BmsEvent } from '../types';
+import type { HourSpan } from './types';
+
+/** The stretches over which a latch stood open, from its events. */
+export function findSpans(events: readonly BmsEvent[], side: BmsEvent['side'], endHour: number): HourSpan[] {
+	const spans: HourSpan[] = [];
+	for (const event of events) {
+		if (event.side !== side) continue;
+		if (event.kind === 'cut') spans.push({ fromHour: event.hour, toHour: endHour, open: true });
+		else Object.assign(spans.at(-1) ?? {}, { toHour: event.hour, open: false });
+	}
+	return spans;
+}
+
+export function sumHours(spans: readonly HourSpan[]): number {
+	return spans.reduce((hours, span) => hours + span.toHour - span.fromHour, 0);
+}
