@@ -29,12 +29,18 @@ export type { PositionKind, SurveyAnswers };
 
 export const positionKindSchema = z.enum(POSITION_KINDS).meta({ label: 'Where it would go' });
 
+/** A number out of its limits says the limit; anything else is no number. */
+function limitOf(issue: z.core.$ZodRawIssue): string | undefined {
+	const failures = issue.code === 'invalid_union' ? issue.errors.flat() : [];
+	return failures.find(({ code }) => code === 'too_small' || code === 'too_big')?.message;
+}
+
 /** A tape-measure reading, "unknown", or not yet answered. */
 function reading(key: LengthKey) {
 	const { label, minMm, maxMm } = SURVEY_FIELDS[key];
 	return z
 		.union([measure(label, 'mm', minMm, maxMm), z.literal(UNKNOWN)], {
-			error: `${label} must be a number of mm.`
+			error: (issue) => limitOf(issue) ?? `${label} must be a number of mm.`
 		})
 		.optional()
 		.meta({ label, unit: 'mm' });
