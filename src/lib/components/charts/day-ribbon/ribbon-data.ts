@@ -1,0 +1,79 @@
+import type { LegKind } from '../../../schemas/day-plans';
+import type { AssessmentCurves, DoneAssessment, HourSpan, LegSpan } from '../../../thermal/assess/types';
+import type { Sensor } from '../../../thermal/types';
+
+/** A leg that knows what it is called. */
+export type RibbonLeg = LegSpan & { kind: LegKind };
+
+/** The battery's own limits, °C. */
+export interface RibbonLimits {
+	dischargeCutC: number;
+	dischargeResetC: number;
+	chargeCutC: number;
+	chargeResetC: number;
+	sensor: Sensor;
+}
+
+/** Where the cells may lie, one value a step of the curves. */
+export interface RibbonBand {
+	lowC: number[];
+	highC: number[];
+}
+
+/** Everything the day ribbon draws. */
+export interface RibbonData {
+	curves: AssessmentCurves;
+	legs: RibbonLeg[];
+	darkSpans: HourSpan[];
+	chargeSpans: HourSpan[];
+	limits: RibbonLimits;
+	peakCellsC: number;
+	peakAtHour: number;
+	/** What the air around the battery is called: "bay air" under a bonnet. */
+	airWord: string;
+	band: RibbonBand | null;
+}
+
+/** Above walking pace and below this a leg without a name counts as crawling. */
+const CRAWL_BELOW_KMH = 25;
+
+/** The name of a leg that carries none, from what the vehicle does. */
+export function nameLeg(leg: LegSpan): LegKind {
+	if (leg.kind) return leg.kind;
+	if (leg.speedKmh <= 0) return leg.engineOn ? 'stop' : 'camp';
+	return leg.speedKmh < CRAWL_BELOW_KMH ? 'crawl' : 'drive';
+}
+
+/** An assessment and the battery's limits as the ribbon wants them. */
+export function toRibbonData(
+	assessment: DoneAssessment,
+	limits: RibbonLimits,
+	settings: { airWord?: string; band?: RibbonBand | null } = {}
+): RibbonData {
+	return {
+		curves: assessment.curves,
+		legs: assessment.legs.map((leg) => ({ ...leg, kind: nameLeg(leg) })),
+		darkSpans: assessment.darkSpans,
+		chargeSpans: assessment.chargeSpans,
+		limits,
+		peakCellsC: assessment.peakCellsC,
+		peakAtHour: assessment.peakAtHour,
+		airWord: settings.airWord ?? 'bay air',
+		band: settings.band ?? null
+	};
+}
+
+export const endHourOf = ({ startHour, stepMin, cellsC }: AssessmentCurves): number =>
+	startHour + ((cellsC.length - 1) * stepMin) / 60;
+
+export const hourAt = ({ startHour, stepMin }: AssessmentCurves, index: number): number =>
+	startHour + (index * stepMin) / 60;
+
+/** The value of a curve at a clock hour, between steps by a straight line, held at both ends. */
+export function valueAt({ startHour, stepMin }: AssessmentCurves, valuesC: number[], hour: number): number {
+	const place = Math.min(Math.max(((hour - startHour) * 60) / stepMin, 0), valuesC.length - 1);
+	const before = Math.floor(place);
+	const low = valuesC[before] ?? NaN;
+	const high = valuesC[before + 1] ?? low;
+	return low + (high - low) * (place - before);
+}
