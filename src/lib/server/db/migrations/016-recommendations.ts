@@ -19,7 +19,7 @@ export const migration: Migration = {
 				CONSTRAINT recommendations_job FOREIGN KEY (job_id) REFERENCES jobs (id),
 				CONSTRAINT recommendations_assessment FOREIGN KEY (assessment_id) REFERENCES assessments (id),
 				CONSTRAINT recommendations_created_by FOREIGN KEY (created_by) REFERENCES people (id),
-				CONSTRAINT recommendations_reasoned CHECK (against_verdict = 0 OR (LENGTH(decided_by) > 0 AND LENGTH(reason) > 0))
+				CONSTRAINT recommendations_reasoned CHECK (against_verdict = 0 OR (COALESCE(LENGTH(decided_by), 0) > 0 AND COALESCE(LENGTH(reason), 0) > 0))
 			)
 		`)
 };

@@ -1,0 +1,130 @@
+import { describe, expect, it } from 'vitest';
+import { makeAssessableJob } from '../../../../tests/support/assessable-job';
+import { makeCrew, useTestDatabase } from '../../../../tests/support/services';
+import { connection } from '../db/connection';
+import { Job, Mount, Place, Recommendation } from '../db/models';
+import { assessJob } from './assessments';
+import {
+	getRecommendation,
+	getRecommendationDocument,
+	makeRecommendation,
+	newestRecommendation
+} from './recommendations';
+
+useTestDatabase();
+
+async function makeAssessedJob() {
+	const crew = await makeCrew();
+	const { jobId, hot, cool } = await makeAssessableJob(crew.installer);
+	const [ofHot, ofCool] = await assessJob(crew.installer, jobId);
+	return { crew, jobId, hot, cool, ofHot: ofHot!, ofCool: ofCool! };
+}
+const WHY = { decidedBy: 'Ilse Tarn', reason: 'No other place; will fit a duct before summer.' };
+
+describe('a recommendation', () => {
+	it('says which mount, by whom, and moves the job on', async () => {
+		const { crew, jobId, ofCool } = await makeAssessedJob();
+		const made = await makeRecommendation(crew.installer, { assessmentId: ofCool.id });
+		expect(made).toMatchObject({
+			...{ jobId, againstVerdict: false, decidedBy: null, reason: null },
+			recommendedBy: crew.installer.name,
+			assessment: { id: ofCool.id, mountLetter: 'B', verdict: 'rides-it-out' }
+		});
+		expect(await getRecommendation(crew.engineer, made.id)).toEqual(made);
+		expect((await Job.findByPk(jobId))!.stage).toBe('recommended');
+	});
+
+	it('decides against nothing when the verdict is good, whatever was sent along', async () => {
+		const { crew, ofCool } = await makeAssessedJob();
+		const made = await makeRecommendation(crew.installer, { assessmentId: ofCool.id, ...WHY });
+		expect(made).toMatchObject({ againstVerdict: false, decidedBy: null, reason: null });
+	});
+
+	it('against "cuts out" asks for a named person and a reason, and keeps both', async () => {
+		const { crew, jobId, ofHot } = await makeAssessedJob();
+		await expect(makeRecommendation(crew.installer, { assessmentId: ofHot.id })).rejects.toMatchObject({
+			code: 'invalid_input',
+			problems: [{ path: 'decidedBy' }, { path: 'reason' }]
+		});
+		await expect(
+			makeRecommendation(crew.installer, { assessmentId: ofHot.id, ...WHY, reason: '   ' })
+		).rejects.toMatchObject({ problems: [{ path: 'reason' }] });
+		expect(await Recommendation.count({ where: { jobId } })).toBe(0);
+		const made = await makeRecommendation(crew.installer, { assessmentId: ofHot.id, ...WHY });
+		expect(made).toMatchObject({ againstVerdict: true, ...WHY });
+	});
+
+	it('against a verdict without a reason is refused by the database itself', async () => {
+		const { crew, jobId, ofHot } = await makeAssessedJob();
+		const { id: createdBy, workshopId } = crew.installer;
+		const bare = { workshopId, jobId, assessmentId: ofHot.id, againstVerdict: true, createdBy };
+		for (const words of [
+			{ decidedBy: null, reason: null },
+			{ decidedBy: '', reason: 'because' },
+			{ decidedBy: 'Ilse Tarn', reason: '' }
+		]) {
+			await expect(Recommendation.create({ ...bare, ...words })).rejects.toThrow();
+		}
+		expect(await Recommendation.count({ where: { jobId } })).toBe(0);
+	});
+
+	it('lets the job say what the recommended mount does, even when another does better', async () => {
+		const { crew, jobId, ofHot } = await makeAssessedJob();
+		await makeRecommendation(crew.installer, { assessmentId: ofHot.id, ...WHY });
+		const { verdict, headroomK } = (await Job.findByPk(jobId))!;
+		expect({ verdict, headroomK }).toEqual({ verdict: 'cuts-out', headroomK: ofHot.headroomK });
+	});
+
+	it('is not made from an assessment that is out of date', async () => {
+		const { crew, jobId, ofCool } = await makeAssessedJob();
+		const { placeId } = (await Job.findByPk(jobId))!;
+		await Place.update({ hotDayMaxC: 50 }, { where: { id: placeId! } });
+		await expect(makeRecommendation(crew.installer, { assessmentId: ofCool.id })).rejects.toMatchObject({
+			code: 'conflict'
+		});
+		expect(await newestRecommendation(crew.installer, jobId)).toBeNull();
+	});
+
+	it('cannot be changed or deleted', async () => {
+		const { crew, ofCool } = await makeAssessedJob();
+		const { id } = await makeRecommendation(crew.installer, { assessmentId: ofCool.id });
+		const run = (sql: string) => connection().query(sql, { replacements: { id } });
+		await expect(run("UPDATE recommendations SET reason = 'x' WHERE id = :id")).rejects.toThrow(/immutable/);
+		await expect(run('DELETE FROM recommendations WHERE id = :id')).rejects.toThrow(/immutable/);
+		expect(await getRecommendation(crew.installer, id)).toMatchObject({ id, reason: null });
+	});
+
+	it('prints the same later, whatever became of the other mounts', async () => {
+		const { crew, jobId, hot, ofHot, ofCool } = await makeAssessedJob();
+		const { id } = await makeRecommendation(crew.installer, { assessmentId: ofCool.id });
+		const then = await getRecommendationDocument(crew.installer, id);
+		expect(then.others).toMatchObject([{ letter: 'A', assessment: { id: ofHot.id } }]);
+		const { placeId } = (await Job.findByPk(jobId))!;
+		await Place.update({ hotDayMaxC: 30 }, { where: { id: placeId! } });
+		await assessJob(crew.installer, jobId);
+		await Mount.update({ removedAt: new Date() }, { where: { id: hot.id } });
+		const later = await getRecommendationDocument(crew.installer, id);
+		expect(later.others).toEqual(then.others);
+		expect(later.assessment.result).toEqual(then.assessment.result);
+	});
+});
+
+describe('who may recommend', () => {
+	it('the workshop, not the customer, and nobody from elsewhere', async () => {
+		const { crew, jobId, ofCool } = await makeAssessedJob();
+		const { id } = await makeRecommendation(crew.manager, { assessmentId: ofCool.id });
+		await expect(makeRecommendation(crew.customer, { assessmentId: ofCool.id })).rejects.toMatchObject({
+			code: 'not_allowed'
+		});
+		const { engineer: stranger } = await makeCrew();
+		const attempts = await Promise.allSettled([
+			makeRecommendation(stranger, { assessmentId: ofCool.id }),
+			getRecommendation(stranger, id),
+			getRecommendationDocument(stranger, id)
+		]);
+		for (const attempt of attempts) {
+			expect(attempt).toMatchObject({ status: 'rejected', reason: { code: 'not_found' } });
+		}
+		expect(await newestRecommendation(stranger, jobId)).toBeNull();
+	});
+});
