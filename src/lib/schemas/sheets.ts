@@ -1,14 +1,17 @@
 import { z } from 'zod';
 import type { AssessmentResult } from './assessments';
+import type { BatteryInput } from './batteries';
 import { email, idSchema, words } from './fields';
 import { VERDICTS, type Verdict } from './verdicts';
 
 /** What the picture is drawn from: kept with the words, so that the page never changes. */
-export interface SheetRibbon extends Pick<AssessmentResult, 'legs' | 'darkSpans'> {
-	curves: Omit<AssessmentResult['curves'], 'boardC' | 'soc'>;
-	peak: { tempC: number; atHour: number };
-	cutC: number;
-	resetC: number;
+export interface SheetRibbon extends Pick<
+	AssessmentResult,
+	'curves' | 'legs' | 'darkSpans' | 'chargeSpans' | 'peakCellsC' | 'peakAtHour'
+> {
+	limits: Pick<BatteryInput, 'dischargeCutC' | 'dischargeResetC' | 'chargeCutC' | 'chargeResetC' | 'sensor'>;
+	/** What the air around the battery is called. */
+	airWord: string;
 }
 
 /** The customer's page, word for word as it was sent; its hash is what an acknowledgement is tied to. */
@@ -33,7 +36,7 @@ export interface SheetContent {
 	/** Said when the shop goes ahead against the verdict. */
 	override: { decidedBy: string; reason: string } | null;
 	/** The other positions that were worked out for this job. */
-	alternatives: { mountName: string; verdict: Verdict; summary: string }[];
+	alternatives: { mountName: string; verdict: Verdict }[];
 	figures: { label: string; value: string }[];
 	ribbon: SheetRibbon;
 	cautions: { title: string; text: string }[];

@@ -5,6 +5,7 @@ import { formatNumber, formatTemperature } from '$lib/format/numbers';
 import { formatClock, formatClockHour, formatHours, sayHours } from '$lib/format/time';
 import type { AssessmentInputs, AssessmentResult } from '$lib/schemas/assessments';
 import type { SheetContent, SheetRibbon } from '$lib/schemas/sheets';
+import type { PositionKind } from '$lib/thermal/survey';
 import type { Verdict } from '$lib/schemas/verdicts';
 
 /** Changes with every change of the sheet's own words: an acknowledgement is tied to what was read. */
@@ -20,9 +21,17 @@ export interface SheetSource {
 	result: AssessmentResult;
 	override: SheetContent['override'];
 	/** The newest answer for each other position of the job. */
-	others: { mountName: string; result: AssessmentResult }[];
+	others: SheetContent['alternatives'];
 }
 
+/** What the air around the battery is called in the picture. */
+const AIR_WORDS: Record<PositionKind, string> = {
+	'under-bonnet': 'bay air',
+	cabin: 'cabin air',
+	'cargo-area': 'air in the cargo area',
+	'canopy-box': 'air in the box',
+	'chassis-rail': 'air at the rail'
+};
 const LATER_H = 0.75;
 const MINUTES_AN_HOUR = 60;
 
@@ -33,8 +42,6 @@ function campHourOf({ legs }: AssessmentResult): number | null {
 function factsOf(result: AssessmentResult): VerdictFacts {
 	return { ...result, campHour: campHourOf(result) };
 }
-
-const summaryOf = (result: AssessmentResult): string => describeVerdict(factsOf(result), 'customer').sentence;
 
 function sayTheDay({ inputs: { hotDay, place, dayPlan, vehicle }, result }: SheetSource): string {
 	const drivingMinutes = dayPlan.legs
@@ -121,15 +128,13 @@ function listFigures({ inputs: { battery }, result }: SheetSource): SheetContent
 	];
 }
 
-function drawnFrom({ inputs: { battery }, result }: SheetSource): SheetRibbon {
-	const { startHour, stepMin, ambientC, bayC, caseC, cellsC } = result.curves;
+function drawnFrom({ inputs: { battery, mount }, result }: SheetSource): SheetRibbon {
+	const { curves, legs, darkSpans, chargeSpans, peakCellsC, peakAtHour } = result;
+	const { dischargeCutC, dischargeResetC, chargeCutC, chargeResetC, sensor } = battery;
 	return {
-		curves: { startHour, stepMin, ambientC, bayC, caseC, cellsC },
-		legs: result.legs,
-		darkSpans: result.darkSpans,
-		peak: { tempC: result.peakCellsC, atHour: result.peakAtHour },
-		cutC: battery.dischargeCutC,
-		resetC: battery.dischargeResetC
+		...{ curves, legs, darkSpans, chargeSpans, peakCellsC, peakAtHour },
+		limits: { dischargeCutC, dischargeResetC, chargeCutC, chargeResetC, sensor },
+		airWord: AIR_WORDS[mount.survey.positionKind]
 	};
 }
 
@@ -137,6 +142,7 @@ function drawnFrom({ inputs: { battery }, result }: SheetSource): SheetRibbon {
 export function writeSheetContent(source: SheetSource): SheetContent {
 	const { inputs, result, workshop, preparedBy, override, assessmentId } = source;
 	const { vehicle, battery } = inputs;
+	const { headline, sentence: summary } = describeVerdict(factsOf(result), 'customer');
 	return {
 		...{ workshop, preparedBy, override, assessmentId },
 		preparedOn: formatDate(source.preparedAt),
@@ -147,15 +153,11 @@ export function writeSheetContent(source: SheetSource): SheetContent {
 		mountName: inputs.mount.name,
 		placeName: inputs.place.name,
 		verdict: result.verdict,
-		headline: describeVerdict(factsOf(result), 'customer').headline,
-		summary: summaryOf(result),
+		headline,
+		summary,
 		paragraphs: [sayTheDay(source), ...sayWhyLater(source), ...saySwitchingOff(source)],
 		advice: ADVICE[result.verdict],
-		alternatives: source.others.map((other) => ({
-			mountName: other.mountName,
-			verdict: other.result.verdict,
-			summary: summaryOf(other.result)
-		})),
+		alternatives: source.others,
 		figures: listFigures(source),
 		ribbon: drawnFrom(source),
 		cautions: listCautions(battery.chemistry).map(({ title, text }) => ({ title, text }))

@@ -81,7 +81,7 @@ export async function sendSheet(
 ): Promise<{ sheet: SheetStatus }> {
 	allow(person, 'sheets.write');
 	return inTransaction(async (transaction) => {
-		const { jobId, ...source } = await readSheetSource(person, recommendationId, transaction);
+		const { jobId, ...source } = await readSheetSource(person, recommendationId);
 		if (askedJobId !== undefined && askedJobId !== jobId) throw notFound('recommendation');
 		await lockJob(person.workshopId, jobId, transaction);
 		await withdrawAll(person, await findUnanswered(jobId, transaction), 'sent again', transaction);

@@ -1,0 +1,33 @@
+import { Job, OutgoingMail } from '../../src/lib/server/db/models';
+import { assessJob } from '../../src/lib/server/services/assessments';
+import { makeRecommendation } from '../../src/lib/server/services/recommendations';
+import { sendSheet } from '../../src/lib/server/services/sheets';
+import { makeAssessableJob } from './assessable-job';
+import { makeCrew } from './services';
+
+const DECISION = { decidedBy: 'Ilse Tarn', reason: 'No other place; a duct follows before summer.' };
+
+/** A recommended job of the crew's own customer: the hot corner against its verdict, or the cool cabin. */
+export async function makeRecommendedJob(which: 'hot' | 'cool' = 'hot') {
+	const crew = await makeCrew();
+	const { jobId, ...mounts } = await makeAssessableJob(crew.installer);
+	await Job.update({ customerId: crew.customer.customerId! }, { where: { id: jobId } });
+	const assessments = await assessJob(crew.installer, jobId);
+	const chosen = assessments.find(({ mountId }) => mountId === mounts[which].id)!;
+	const decision = which === 'hot' ? DECISION : {};
+	const recommendation = await makeRecommendation(crew.installer, { assessmentId: chosen.id, ...decision });
+	return { crew, jobId, assessment: chosen, assessments, recommendationId: recommendation.id };
+}
+
+/** What stands in the letter of a sheet, and nowhere else. */
+export async function readToken(sheetId: number): Promise<string> {
+	const letter = await OutgoingMail.findOne({ where: { sheetId } });
+	return /\/sheet\/([\w-]+)/.exec(letter?.textBody ?? '')?.[1] ?? '';
+}
+
+export async function makeSentSheet(which: 'hot' | 'cool' = 'hot') {
+	const job = await makeRecommendedJob(which);
+	const { recommendationId, crew } = job;
+	const { sheet } = await sendSheet(crew.installer, { recommendationId, sendTo: 'ilse@travellers.example' });
+	return { ...job, sheet, token: await readToken(sheet.id) };
+}
