@@ -110,7 +110,8 @@ class Run {
 	private endSpan(): void {
 		const { span, spanStartS } = this.standing;
 		const lastedS = this.timeS - spanStartS;
-		this.soc = readSoc(span, lastedS);
+		// A span shorter than a rounding error of the clock still ends where it ends, or it would begin again for ever.
+		this.soc = this.timeS >= spanStartS + span.lastsS ? span.socAtEnd : readSoc(span, lastedS);
 		this.refusedAh += (span.refusedA * lastedS) / S_PER_H;
 	}
 
