@@ -3,6 +3,7 @@ import type { z } from 'zod';
 import type { SignedInPerson } from '$lib/schemas/people';
 import { AppError } from '../errors';
 import { allow } from '../policies';
+import { readBody } from './body';
 import { answerOnce, type StoredAnswer } from './idempotency';
 import type { Operation } from './operation';
 import { problemResponse } from './problem';
@@ -23,7 +24,7 @@ async function readJson(request: Request): Promise<unknown> {
 	if (!/^application\/json\b/i.test(type)) {
 		throw new AppError('malformed_request', 'Send the body as JSON, with content-type application/json.');
 	}
-	const text = await request.text();
+	const text = await readBody(request);
 	try {
 		return JSON.parse(text);
 	} catch {
