@@ -57,3 +57,13 @@ export function blankOf(schema: z.ZodType): null | undefined {
 	if (type === 'nullable') return null;
 	return innerType && type === 'optional' ? blankOf(innerType) : undefined;
 }
+
+/** The label of each field of an object schema; a field without one is left out. */
+export function labelsOf(schema: z.ZodType): Record<string, string> {
+	return Object.fromEntries(
+		Object.entries(shapeOf(schema)).flatMap(([name, field]) => {
+			const { label } = metaOfField(field);
+			return label ? [[name, label]] : [];
+		})
+	);
+}

@@ -1,0 +1,26 @@
+import type { AssessedPart, JobStage } from '../schemas/jobs';
+
+/** How far a job has come, as a table says it. */
+export const STAGE_WORDS: Record<JobStage, string> = {
+	survey: 'being surveyed',
+	assessed: 'assessed',
+	recommended: 'recommended',
+	sent: 'sheet sent',
+	acknowledged: 'acknowledged'
+};
+
+const PART_WORDS: Record<AssessedPart, string> = {
+	vehicle: 'the vehicle',
+	battery: 'the battery',
+	place: 'the place',
+	'hot-day': 'the hot day',
+	'day-plan': 'the day plan',
+	survey: 'the survey'
+};
+
+/** "the battery, the hot day and the day plan". */
+export function sayParts(parts: readonly AssessedPart[]): string {
+	const words = parts.map((part) => PART_WORDS[part]);
+	if (words.length < 2) return words.join('');
+	return `${words.slice(0, -1).join(', ')} and ${words.at(-1)}`;
+}
