@@ -1,0 +1,62 @@
+import { writeFile } from 'node:fs/promises';
+import { join } from 'node:path';
+import { describe, expect, it } from 'vitest';
+import { post } from '../../../../tests/support/letters';
+import { makeCrew, useTestDatabase } from '../../../../tests/support/services';
+import { makeSentSheet } from '../../../../tests/support/sheets';
+import { env } from '../env';
+import { sendDue } from '../mail/outbox';
+import { getLetter, listLetters } from './mailbox';
+
+process.env.SOAKLINE_DEMO = '1';
+useTestDatabase();
+
+describe('the local mailbox of a demonstration', () => {
+	it('lists the letters of the own workshop and opens one, its link a link', async () => {
+		const { crew, sheet, token } = await makeSentSheet();
+		await sendDue();
+		const [row, ...more] = await listLetters(crew.installer);
+		expect(more).toEqual([]);
+		expect(row).toMatchObject({ recipient: sheet.sentTo });
+		const letter = await getLetter(crew.installer, row!.messageId);
+		expect(letter.lines).toContainEqual({ kind: 'link', href: `${env().ORIGIN}/sheet/${token}` });
+		expect(letter.subject).toBe(row!.subject);
+	});
+
+	it('shows another workshop nothing of it', async () => {
+		const { crew } = await makeSentSheet();
+		await sendDue();
+		const [row] = await listLetters(crew.installer);
+		const { manager: stranger } = await makeCrew();
+		expect(await listLetters(stranger)).toEqual([]);
+		await expect(getLetter(stranger, row!.messageId)).rejects.toMatchObject({ code: 'not_found' });
+	});
+
+	it('is closed to customers', async () => {
+		const { customer } = await makeCrew();
+		await expect(listLetters(customer)).rejects.toMatchObject({ code: 'not_allowed' });
+		await expect(getLetter(customer, 'any')).rejects.toMatchObject({ code: 'not_allowed' });
+	});
+
+	it('makes no link of an address that leads elsewhere', async () => {
+		const { installer, workshopId } = await makeCrew();
+		await post(workshopId, 'ilse@travellers.example', 'See\n\nhttps://elsewhere.example/sheet/abc\n');
+		await sendDue();
+		const [row] = await listLetters(installer);
+		expect((await getLetter(installer, row!.messageId)).lines).toEqual([
+			{ kind: 'words', text: 'See' },
+			{ kind: 'words', text: 'https://elsewhere.example/sheet/abc' }
+		]);
+	});
+
+	it('passes over files that are no letters of ours', async () => {
+		const { installer, workshopId } = await makeCrew();
+		const folder = env().MAILBOX_DIR!;
+		await writeFile(join(folder, '9999-empty.eml'), '');
+		await writeFile(join(folder, '9999-broken.eml'), Buffer.from([0, 255, 13, 10, 13, 10, 1]));
+		await writeFile(join(folder, '9999-foreign.eml'), 'Message-ID: <made-up@elsewhere.example>\r\n\r\nHi');
+		await post(workshopId, 'ilse@travellers.example');
+		await sendDue();
+		expect(await listLetters(installer)).toHaveLength(1);
+	});
+});
