@@ -4,8 +4,9 @@ import { runScenario } from '../vehicle/simulate';
 import { ENGINE_VERSION } from '../version';
 import { thinCurves } from './curves';
 import { keepLedger } from './heat-ledger';
+import { countMissedCharge } from './missed-charge';
 import { findSpans, sumHours } from './spans';
-import type { Assessment, DoneAssessment, HourSpan, LegSpan, MountVerdict } from './types';
+import type { Assessment, DoneAssessment, LegSpan, MountVerdict } from './types';
 
 type DoneRun = Extract<SimulationResult, { status: 'done' }>;
 
@@ -33,9 +34,9 @@ function findPeakSensorC({ bms }: Scenario, { nodes, count }: MinuteSeries): num
 	return peakC;
 }
 
-function judge(run: DoneRun, scenario: Scenario, headroomK: number): MountVerdict {
+function judge(run: DoneRun, scenario: Scenario, headroomK: number, missedAh: number): MountVerdict {
 	if (run.report.events.some(({ side, kind }) => side === 'discharge' && kind === 'cut')) return 'cuts-out';
-	const missedChargeCounts = run.chargeRefusedAh >= MISSED_SHARE_THAT_COUNTS * scenario.battery.capacityAh;
+	const missedChargeCounts = missedAh >= MISSED_SHARE_THAT_COUNTS * scenario.battery.capacityAh;
 	return headroomK < CLOSE_HEADROOM_K || missedChargeCounts ? 'runs-close' : 'rides-it-out';
 }
 
@@ -48,23 +49,6 @@ function layOutLegs({ legs, start }: Scenario, kinds: AssessOptions['legKinds'])
 		fromHour = toHour;
 		return span;
 	});
-}
-
-/** Hours during which the charger had current to spare and the charge latch stood open. */
-function countMissedHours(
-	scenario: Scenario,
-	legs: readonly LegSpan[],
-	chargeSpans: readonly HourSpan[]
-): number {
-	let hours = 0;
-	for (const [index, leg] of legs.entries()) {
-		const sparesA = scenario.legs[index]!.engineOn ? scenario.charger.maxA - scenario.legs[index]!.loadA : 0;
-		if (sparesA <= 0) continue;
-		for (const span of chargeSpans) {
-			hours += Math.max(Math.min(span.toHour, leg.toHour) - Math.max(span.fromHour, leg.fromHour), 0);
-		}
-	}
-	return hours;
 }
 
 function findPeakMinute({ nodes, count }: MinuteSeries): number {
@@ -94,16 +78,16 @@ function assessRun(scenario: Scenario, run: DoneRun, options: AssessOptions): Do
 	const endHour = legs.at(-1)!.toHour;
 	const spans = describeSpans(run, endHour);
 	const peakSensorC = findPeakSensorC(scenario, minutes);
+	const missed = countMissedCharge(scenario, minutes);
 	const headroomK = scenario.bms.discharge.cut - peakSensorC;
 	const { soc: endSoc, ...end } = report.end;
 	return {
 		status: 'done',
-		verdict: judge(run, scenario, headroomK),
+		verdict: judge(run, scenario, headroomK, missed.chargeMissedAh),
 		headroomK,
 		chargeHeadroomK: scenario.bms.charge.cut - peakSensorC,
 		...spans,
-		chargeMissedAh: run.chargeRefusedAh,
-		chargeMissedHours: countMissedHours(scenario, legs, spans.chargeSpans),
+		...missed,
 		peakCellsC: report.peakCellsC,
 		peakAtHour: report.peakAtHour,
 		peakSensorC,

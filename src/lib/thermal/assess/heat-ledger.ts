@@ -1,6 +1,6 @@
 import type { MinuteSeries, Scenario } from '../types';
 import { conductanceOf, liftOf, type BatteryNetwork, type Moment } from './battery-network';
-import { flowsAt } from './heat-flows';
+import { flowsAt } from './source-watts';
 import { LegClock } from './leg-clock';
 import { ownHeatW } from './own-heat';
 import { solveColumns } from './solve-columns';

@@ -1,8 +1,6 @@
-import { KELVIN_AT_ZERO_C } from '../correlations/radiation';
+import { readResistanceFactor } from '../network/compile-network';
 import type { Scenario } from '../types';
 import type { BatteryNode, Moment } from './battery-network';
-
-const REFERENCE_K = 298.15;
 
 /** Heat that the battery's own current makes, W: i²R in the cells, whose resistance falls with temperature, and in the board. */
 export function ownHeatW(
@@ -10,7 +8,6 @@ export function ownHeatW(
 	moment: Moment,
 	currentA: number
 ): Partial<Record<BatteryNode, number>> {
-	const kelvin = moment.tempOf('cells') + KELVIN_AT_ZERO_C;
-	const cellOhm = battery.r25 * Math.exp(battery.activationK * (1 / kelvin - 1 / REFERENCE_K));
+	const cellOhm = battery.r25 * readResistanceFactor(battery.activationK, moment.tempOf('cells'));
 	return { cells: currentA ** 2 * cellOhm, board: currentA ** 2 * battery.boardR };
 }

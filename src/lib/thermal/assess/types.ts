@@ -76,6 +76,7 @@ export interface DoneAssessment {
 	darkHours: number;
 	/** While charging was stopped by heat. */
 	chargeSpans: HourSpan[];
+	/** What the battery would have taken meanwhile, Ah (on the grid of minutes), and for how long before it was full. */
 	chargeMissedAh: number;
 	chargeMissedHours: number;
 	peakCellsC: number;

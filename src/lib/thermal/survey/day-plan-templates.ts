@@ -11,7 +11,9 @@ export interface DayPlanTemplate {
 type Choices = Partial<Omit<PlannedLeg, 'kind' | 'minutes'>>;
 
 /** Fridge and a few small things. */
-const FRIDGE_A = 4;
+const FRIDGE_A = 3;
+/** And the lights at camp. */
+const CAMP_A = 4;
 
 function leg(kind: PlannedLeg['kind'], minutes: number, choices: Choices): PlannedLeg {
 	const moving = kind === 'drive' || kind === 'crawl';
@@ -34,7 +36,7 @@ const drive = (minutes: number, speedKmh: number, choices: Choices = {}) =>
 const crawl = (minutes: number, speedKmh: number, choices: Choices = {}) =>
 	leg('crawl', minutes, { speedKmh, ...choices });
 const stop = (minutes: number, choices: Choices = {}) => leg('stop', minutes, choices);
-const camp = (minutes: number, choices: Choices = {}) => leg('camp', minutes, { loadA: 6, ...choices });
+const camp = (minutes: number, choices: Choices = {}) => leg('camp', minutes, { loadA: CAMP_A, ...choices });
 
 const tow = { towing: true } as const;
 const corrugated = { surface: 'corrugated' } as const;
@@ -57,16 +59,16 @@ export const DAY_PLAN_TEMPLATES: readonly DayPlanTemplate[] = [
 			startSoc: 0.55,
 			chargerMaxA: 40,
 			legs: [
-				drive(150, 95, tow),
+				drive(150, 90, tow),
 				stop(20),
-				drive(150, 95, tow),
+				drive(150, 90, tow),
 				stop(45),
-				drive(150, 95, tow),
-				drive(30, 70, { ...tow, gradePercent: 3 }),
+				drive(140, 90, tow),
 				stop(15),
-				drive(75, 90, tow),
+				drive(90, 90, tow),
+				drive(40, 60, { ...tow, gradePercent: 3 }),
 				crawl(20, 15, { ...tow, ...gravel }),
-				camp(790)
+				camp(770)
 			]
 		}
 	},
@@ -84,8 +86,8 @@ export const DAY_PLAN_TEMPLATES: readonly DayPlanTemplate[] = [
 				stop(20),
 				drive(120, 65, corrugated),
 				stop(45),
-				crawl(60, 20, sand),
 				drive(120, 60, corrugated),
+				crawl(60, 20, sand),
 				crawl(45, 15, { surface: 'rock', gradePercent: 2 }),
 				camp(850)
 			]
