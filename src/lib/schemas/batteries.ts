@@ -39,7 +39,7 @@ const LIMIT_PAIRS = [
 	{ cut: 'dischargeCutC', reset: 'dischargeResetC', words: 'Comes back at' }
 ] as const;
 
-function requireResetsBelowCuts(battery: z.infer<typeof fields>, context: z.RefinementCtx): void {
+function checkLimits(battery: z.infer<typeof fields>, context: z.RefinementCtx): void {
 	for (const { cut, reset, words: label } of LIMIT_PAIRS) {
 		if (battery[reset] >= battery[cut]) {
 			context.addIssue({
@@ -51,13 +51,27 @@ function requireResetsBelowCuts(battery: z.infer<typeof fields>, context: z.Refi
 	}
 }
 
-export const batteryInputSchema = fields.superRefine(requireResetsBelowCuts);
+/** What a maker is said to say must be quoted, with the place where it can be read. */
+const QUOTES = [
+	{ path: 'underBonnetWords', message: 'Copy what the maker says about under-bonnet use, word for word.' },
+	{ path: 'dataSheet', message: 'Say where that is written: the document and its page.' }
+] as const;
+
+function checkQuotes(battery: z.infer<typeof fields>, context: z.RefinementCtx): void {
+	if (battery.underBonnet === 'silent') return;
+	for (const { path, message } of QUOTES) {
+		if (battery[path] === '') context.addIssue({ code: 'custom', path: [path], message });
+	}
+}
+
+export const batteryInputSchema = fields.superRefine(checkLimits).superRefine(checkQuotes);
 export type BatteryInput = z.infer<typeof batteryInputSchema>;
 
 /** A change of a record, against the version that was seen. */
 export const batteryChangeSchema = fields
 	.extend({ version: versionSchema })
-	.superRefine(requireResetsBelowCuts);
+	.superRefine(checkLimits)
+	.superRefine(checkQuotes);
 
 export const batterySchema = editedSchema.extend(fields.shape);
 export type BatteryView = z.infer<typeof batterySchema>;

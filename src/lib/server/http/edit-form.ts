@@ -1,0 +1,28 @@
+import { fail, type RequestEvent } from '@sveltejs/kit';
+import type { z } from 'zod';
+import { toFormValues } from '$lib/format/form-values';
+import type { SignedInPerson } from '$lib/schemas/people';
+import type { Action } from '../policies';
+import { saveForm } from './forms';
+import { guard } from './guard';
+
+/**
+ * A form that changes a record: like any form, and when somebody saved the record meanwhile the page also gets what it
+ * says now, so that the person can compare and decide.
+ */
+export async function saveEdited<S extends z.ZodObject>(
+	event: RequestEvent,
+	steps: {
+		action: Action;
+		schema: S;
+		save: (person: SignedInPerson, data: z.output<S>) => Promise<string>;
+		/** The record as it is now. */
+		newest: (person: SignedInPerson) => Promise<Partial<z.input<S>>>;
+	}
+) {
+	const { action, schema, save, newest } = steps;
+	const answer = await saveForm(event, { action, schema, save });
+	if (answer.status !== 409) return answer;
+	const now = toFormValues(schema, await newest(guard(event, action)));
+	return fail(409, { ...answer.data, newest: now });
+}

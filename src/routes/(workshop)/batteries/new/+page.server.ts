@@ -1,0 +1,30 @@
+import { batteryInputSchema } from '$lib/schemas/batteries';
+import { idSchema } from '$lib/schemas/fields';
+import { loadForm, saveForm } from '$lib/server/http/forms';
+import { guard } from '$lib/server/http/guard';
+import { createBattery } from '$lib/server/services/batteries';
+import type { Actions, PageServerLoad } from './$types';
+
+/** The job that is waiting for this battery, if the way here came from one. */
+function waitingJob(url: URL): number | null {
+	return idSchema.safeParse(url.searchParams.get('job') ?? undefined).data ?? null;
+}
+
+export const load: PageServerLoad = async (event) => {
+	guard(event, 'batteries.write');
+	const form = await loadForm(batteryInputSchema, { autoReset: true, underBonnet: 'silent' });
+	return { form, jobId: waitingJob(event.url) };
+};
+
+export const actions: Actions = {
+	default: (event) =>
+		saveForm(event, {
+			action: 'batteries.write',
+			schema: batteryInputSchema,
+			save: async (person, data) => {
+				const { id } = await createBattery(person, data);
+				const jobId = waitingJob(event.url);
+				return jobId === null ? `/batteries/${id}?saved` : `/jobs/${jobId}/battery?chosen=${id}`;
+			}
+		})
+};
