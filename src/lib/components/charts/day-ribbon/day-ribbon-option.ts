@@ -6,7 +6,12 @@ import { drawCurves, type DrawnCurve } from './curves';
 import { layOutFrame, type RibbonFrame, type RibbonSize } from './frame';
 import { drawLimits, layOutLimits } from './limits';
 import { marksSeries } from './marks-series';
-import { HEAT_STEPS_C, RIBBON_PALETTES, type RibbonPalette, type RibbonScheme } from './palette';
+import {
+	HEAT_STEPS_C,
+	RIBBON_PALETTES,
+	type RibbonPalette,
+	type RibbonScheme
+} from './palette';
 import type { RibbonData } from './ribbon-data';
 import { drawStrip } from './strip';
 import { drawWords } from './words';
@@ -91,9 +96,12 @@ function lineSeries(
 
 type LineColor = NonNullable<LineSeriesOption['lineStyle']>['color'];
 
-/** The cells' line takes its colour from its own height: the ramp stands still behind the picture. */
+/**
+ * The cells' line takes its colour from its own height: the ramp stands still behind the picture. A rim keeps
+ * the cool end apart from light paper and the hot end apart from dark paper.
+ */
 function cellsSeries(frame: RibbonFrame, curve: DrawnCurve, palette: RibbonPalette): LineSeriesOption[] {
-	const [coolC, hotC] = [HEAT_STEPS_C[0], HEAT_STEPS_C[HEAT_STEPS_C.length - 1] as number];
+	const [coolC, hotC] = [HEAT_STEPS_C[0], HEAT_STEPS_C[4]];
 	const ramp: LineColor = {
 		type: 'linear',
 		global: true,
@@ -106,5 +114,5 @@ function cellsSeries(frame: RibbonFrame, curve: DrawnCurve, palette: RibbonPalet
 			color: palette.heat[i] as string
 		}))
 	};
-	return [lineSeries(curve, 4, palette.rim, curve.widthPx + 1.2), lineSeries(curve, 4, ramp)];
+	return [lineSeries(curve, 4, palette.muted, curve.widthPx + 1.5), lineSeries(curve, 4, ramp)];
 }

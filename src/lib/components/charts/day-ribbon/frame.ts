@@ -21,8 +21,8 @@ export interface SizeSpec {
 	hatchPx: number;
 	curveWords: boolean;
 	peakWords: boolean;
-	/** Words of the limits: in the margin at the right end, over the line, or none. */
-	limitWords: 'margin' | 'inside' | 'none';
+	/** Words of the limits at the right end: one line, two short ones, or none. */
+	limitWords: 'long' | 'short' | 'none';
 }
 
 export const RIBBON_SIZES: Record<RibbonSize, SizeSpec> = {
@@ -46,8 +46,8 @@ export const RIBBON_SIZES: Record<RibbonSize, SizeSpec> = {
 		width: 340,
 		height: 280,
 		fontPx: 12,
-		left: 34,
-		right: 12,
+		left: 32,
+		right: 52,
 		bottom: 26,
 		stripPx: 20,
 		gapPx: 20,
@@ -56,7 +56,7 @@ export const RIBBON_SIZES: Record<RibbonSize, SizeSpec> = {
 		hatchPx: 7,
 		curveWords: true,
 		peakWords: true,
-		limitWords: 'inside'
+		limitWords: 'short'
 	},
 	desk: {
 		width: 1100,
@@ -72,7 +72,7 @@ export const RIBBON_SIZES: Record<RibbonSize, SizeSpec> = {
 		hatchPx: 8,
 		curveWords: true,
 		peakWords: true,
-		limitWords: 'margin'
+		limitWords: 'long'
 	},
 	print: {
 		width: 680,
@@ -88,9 +88,18 @@ export const RIBBON_SIZES: Record<RibbonSize, SizeSpec> = {
 		hatchPx: 6.5,
 		curveWords: true,
 		peakWords: true,
-		limitWords: 'margin'
+		limitWords: 'long'
 	}
 };
+
+/**
+ * The width to draw for the room there is. Close to the size's own width the picture is scaled instead, so that
+ * the live one takes exactly the place of the one that came with the page.
+ */
+export function widthToDraw(size: RibbonSize, roomPx: number): number {
+	const own = RIBBON_SIZES[size].width;
+	return roomPx >= own * 0.8 && roomPx <= own * 1.3 ? own : Math.round(roomPx);
+}
 
 export interface Tick {
 	hour: number;

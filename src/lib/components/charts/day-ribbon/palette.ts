@@ -6,8 +6,6 @@ export interface RibbonPalette {
 	rule: string;
 	/** Cool to hot. */
 	heat: readonly [string, string, string, string, string];
-	/** The rim that keeps the cool end of the cells' line apart from the paper. */
-	rim: string;
 	band: string;
 	bandOpacity: number;
 }
@@ -31,28 +29,25 @@ export const RIBBON_PALETTES: Record<RibbonScheme, RibbonPalette> = {
 			'var(--color-heat-4)',
 			'var(--color-heat-5)'
 		],
-		rim: 'var(--color-muted)',
 		band: 'var(--color-heat-3)',
 		bandOpacity: 0.22
 	},
 	light: {
-		paper: '#F6F2E9',
-		ink: '#1F1B16',
-		muted: '#6A6253',
-		rule: '#D8D0BF',
-		heat: ['#EADFC0', '#E3BC63', '#CF8030', '#A5401F', '#5C1714'],
-		rim: '#6A6253',
-		band: '#CF8030',
+		paper: '#f6f2e9',
+		ink: '#1f1b16',
+		muted: '#6a6253',
+		rule: '#d8d0bf',
+		heat: ['#f4eac8', '#d7aa49', '#b56804', '#882700', '#440005'],
+		band: '#b56804',
 		bandOpacity: 0.22
 	},
 	dark: {
-		paper: '#1F1B16',
-		ink: '#F6F2E9',
-		muted: '#A99F8C',
-		rule: '#463F34',
-		heat: ['#F3E9CD', '#EBC36A', '#E08F3C', '#DB6A30', '#C0352F'],
-		rim: '#A99F8C',
-		band: '#E08F3C',
+		paper: '#1f1b16',
+		ink: '#f6f2e9',
+		muted: '#a99f8c',
+		rule: '#463f34',
+		heat: ['#fff6dc', '#e4b656', '#c67201', '#992e01', '#4f0a0e'],
+		band: '#c67201',
 		bandOpacity: 0.22
 	},
 	'black-and-white': {
@@ -61,7 +56,6 @@ export const RIBBON_PALETTES: Record<RibbonScheme, RibbonPalette> = {
 		muted: '#333333',
 		rule: '#B3B3B3',
 		heat: ['#000000', '#000000', '#000000', '#000000', '#000000'],
-		rim: '#000000',
 		band: '#000000',
 		bandOpacity: 0.12
 	}

@@ -18,6 +18,17 @@ import type { RibbonData } from './ribbon-data';
 export const sayPeak = ({ peakCellsC, peakAtHour }: Pick<RibbonData, 'peakCellsC' | 'peakAtHour'>): string =>
 	`cells ${formatTemperature(peakCellsC)} at ${formatClockHour(peakAtHour)}`;
 
+/** How much words mind a curve underneath, a px. */
+const CROSSING_COST: Record<DrawnCurve['name'], number> = {
+	outside: 0.5,
+	air: 0.7,
+	board: 1.2,
+	case: 1.2,
+	cells: 3
+};
+/** Dearer than this, the word of a curve is left out. */
+const MAX_CURVE_WORD_COST = 90;
+
 /** All words over the plot, each where it crosses least. */
 export function drawWords(
 	frame: RibbonFrame,
@@ -28,7 +39,7 @@ export function drawWords(
 	const peak = { x: frame.x(data.peakAtHour), y: frame.y(data.peakCellsC) };
 	const obstacles: Obstacles = {
 		lines: [
-			...curves.map(({ name, line }) => ({ line, costPerPx: name === 'cells' ? 3 : 1.5 })),
+			...curves.map(({ name, line }) => ({ line, costPerPx: CROSSING_COST[name] })),
 			...limits.map(({ y }) => ({ line: acrossPlot(frame, y), costPerPx: 1.5 }))
 		],
 		boxes: [growBox({ left: peak.x, right: peak.x, top: peak.y, bottom: peak.y }, 6)],
@@ -40,8 +51,7 @@ export function drawWords(
 		}
 	};
 	const marks: Mark[] = [];
-	if (frame.spec.limitWords === 'margin') marks.push(...writeLimitsInMargin(frame, limits));
-	if (frame.spec.limitWords === 'inside') marks.push(...writeLimitsInside(frame, limits, obstacles));
+	if (frame.spec.limitWords !== 'none') marks.push(...writeLimits(frame, limits));
 	if (frame.spec.peakWords) marks.push(...writePeak(frame, data, peak, obstacles));
 	if (frame.spec.curveWords) {
 		const worded = curves.filter(({ name }) => name !== 'cells');
@@ -55,42 +65,29 @@ const acrossPlot = ({ plot }: RibbonFrame, y: number): Point[] => [
 	{ x: plot.right, y }
 ];
 
-function writeLimitsInMargin(frame: RibbonFrame, limits: LimitLine[]): Mark[] {
+/** At the right end, outside the plot: pushed apart where two limits are close. */
+function writeLimits(frame: RibbonFrame, limits: LimitLine[]): Mark[] {
 	const { plot, spec } = frame;
-	const step = spec.fontPx * 1.25;
+	const lineStep = spec.fontPx * 1.2;
+	const blockStep = lineStep * Math.max(...limits.map(({ words }) => words.length));
 	const ys = spreadColumn(
 		limits.map(({ y }) => y),
-		step,
-		plot.top,
-		plot.bottom - step / 2
+		blockStep,
+		plot.top + blockStep / 2,
+		plot.bottom - blockStep / 2
 	);
-	return limits.map((limit, i) => ({
-		kind: 'words',
-		text: limit.words,
-		x: plot.right + 8,
-		y: ys[i] ?? limit.y,
-		align: 'left',
-		fontPx: spec.fontPx,
-		fill: limit.ink,
-		bold: limit.ink === 'ink'
-	}));
-}
-
-/** On a narrow picture the words stand on their line, at the right end if that is free. */
-function writeLimitsInside(frame: RibbonFrame, limits: LimitLine[], obstacles: Obstacles): Mark[] {
-	const { plot, spec } = frame;
-	const off = spec.fontPx * 0.75;
-	return limits.flatMap((limit) => {
-		const spots: Spot[] = [
-			{ x: plot.right - 3, y: limit.y - off, align: 'right' },
-			{ x: plot.right - 3, y: limit.y + off, align: 'right', penalty: 4 },
-			{ x: plot.left + 4, y: limit.y - off, align: 'left', penalty: 20 },
-			{ x: plot.left + 4, y: limit.y + off, align: 'left', penalty: 24 }
-		];
-		const bold = limit.ink === 'ink';
-		const placed = placeWords(limit.words, spots, obstacles, { fontPx: spec.fontPx, bold });
-		return place(placed, obstacles, { fontPx: spec.fontPx, fill: limit.ink, bold, halo: true });
-	});
+	return limits.flatMap((limit, i) =>
+		limit.words.map((text, row): Mark => ({
+			kind: 'words',
+			text,
+			x: plot.right + 7,
+			y: (ys[i] ?? limit.y) + (row - (limit.words.length - 1) / 2) * lineStep,
+			align: 'left',
+			fontPx: spec.fontPx,
+			fill: limit.ink,
+			bold: limit.ink === 'ink'
+		}))
+	);
 }
 
 function writePeak(frame: RibbonFrame, data: RibbonData, peak: Point, obstacles: Obstacles): Mark[] {
@@ -98,7 +95,7 @@ function writePeak(frame: RibbonFrame, data: RibbonData, peak: Point, obstacles:
 	const spots: Spot[] = [];
 	for (const rise of [1.35, -1.35, 2.2, -2.2, 3.1, -3.1, 4.2, -4.2]) {
 		const y = peak.y - rise * fontPx;
-		const far = Math.abs(rise) * 5 + (rise < 0 ? 12 : 0);
+		const far = Math.abs(rise) * 9 + (rise < 0 ? 12 : 0);
 		spots.push(
 			{ x: peak.x, y, align: 'center', penalty: far },
 			{ x: peak.x - 7, y, align: 'right', penalty: far + 2 },
@@ -130,15 +127,21 @@ function writeCurveWord(
 		const box = wordsBox(curve.word, { x, y, align: 'center' }, spec.fontPx);
 		const tilt = Math.abs(heightAt(curve.line, box.left) - y) + Math.abs(heightAt(curve.line, box.right) - y);
 		spots.push({ x, y, align: 'center', penalty: tilt * 4 });
+		const beside = { x, align: 'center', penalty: tilt * 4 + 24 } as const;
+		spots.push({ ...beside, y: y - spec.fontPx * 0.85 }, { ...beside, y: y + spec.fontPx * 0.85 });
 	}
 	const placed = placeWords(curve.word, spots, others, { fontPx: spec.fontPx });
-	if (!placed) return [];
+	if (!placed || placed.cost > MAX_CURVE_WORD_COST) return [];
 	const gap: Mark = {
 		kind: 'box',
 		box: { ...growBox(placed.box, -2), left: placed.box.left - 3, right: placed.box.right + 3 },
 		fill: 'paper'
 	};
-	return [gap, ...place(placed, obstacles, { fontPx: spec.fontPx, fill: 'muted', halo: true })];
+	const onLine = Math.abs(placed.y - heightAt(curve.line, placed.x)) < 1;
+	return [
+		...(onLine ? [gap] : []),
+		...place(placed, obstacles, { fontPx: spec.fontPx, fill: 'muted', halo: true })
+	];
 }
 
 function heightAt(line: Point[], x: number): number {
