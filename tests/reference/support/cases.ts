@@ -67,11 +67,21 @@ export const ENGINE_CASES: readonly { name: string; input: CaseInput }[] = [
 	},
 	{
 		name: 'the board as sensor',
-		input: { position: HOT_SIDE, bms: { ...LOW_LIMITS, sensor: 'board' }, battery: { boardR: 0.004 }, legs: TOURING }
+		input: {
+			position: HOT_SIDE,
+			bms: { ...LOW_LIMITS, sensor: 'board' },
+			battery: { boardR: 0.004 },
+			legs: TOURING
+		}
 	},
 	{
 		name: 'the hotter of cells and board',
-		input: { position: HOT_SIDE, bms: { ...LOW_LIMITS, sensor: 'hotter' }, battery: { boardR: 0.002 }, legs: TOURING }
+		input: {
+			position: HOT_SIDE,
+			bms: { ...LOW_LIMITS, sensor: 'hotter' },
+			battery: { boardR: 0.002 },
+			legs: TOURING
+		}
 	},
 	{
 		name: 'a cut that waits ten minutes',
@@ -92,7 +102,10 @@ export const ENGINE_CASES: readonly { name: string; input: CaseInput }[] = [
 			]
 		}
 	},
-	{ name: 'full at the start', input: { start: { hour: 8, soc: 1 }, legs: [{ minutes: 100, engineOn: true, speedKmh: 90 }] } },
+	{
+		name: 'full at the start',
+		input: { start: { hour: 8, soc: 1 }, legs: [{ minutes: 100, engineOn: true, speedKmh: 90 }] }
+	},
 	{
 		name: 'run empty and charged again',
 		input: {

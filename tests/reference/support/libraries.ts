@@ -43,20 +43,36 @@ interface OdexSolver {
 
 // The package ships its TypeScript source instead of declarations, so its types are written down here.
 const { Solver } = createRequire(import.meta.url)('odex') as { Solver: new (size: number) => OdexSolver };
-const math = create(all!, {});
+
+interface OdeSolution {
+	t: number[];
+	y: number[][];
+}
+// solveODE is missing from the declarations that mathjs ships.
+const math = create(all!, {}) as ReturnType<typeof create> & {
+	solveODE: (
+		derivative: Derivative,
+		span: [number, number],
+		state: number[],
+		options: Record<string, unknown>
+	) => OdeSolution;
+};
 
 /** Without a cap the extrapolation may step so far that it meets infinities and accepts what is not a number. */
 const ODEX_LONGEST_STEP_S = 300;
 
 /** Hairer's extrapolation method, of variable order. */
-export function integrateWithOdex(toleranceK: number, longestStepS = ODEX_LONGEST_STEP_S): ReferenceIntegrator {
+export function integrateWithOdex(
+	toleranceK: number,
+	longestStepS = ODEX_LONGEST_STEP_S
+): ReferenceIntegrator {
 	return (derivative, fromS, state, toS, take) => {
 		const solver = new Solver(state.length);
 		solver.absoluteTolerance = toleranceK;
 		solver.relativeTolerance = 1e-13;
 		solver.maxStepSize = longestStepS;
 		solver.initialStepSize = Math.min(1, toS - fromS);
-		solver.maxSteps = 1e6;
+		solver.maxSteps = 20_000;
 		solver.denseOutput = true;
 		solver.solve(derivative, fromS, state, toS, (_count, from, to, end, dense) => {
 			if (!dense) return true;
@@ -103,7 +119,7 @@ export function integrateWithMathjs(toleranceKPerS: number, longestStepS: number
 				maxStep: longestStepS,
 				minStep: 1e-9,
 				maxIter: 1e6
-			} as never) as unknown as { t: number[]; y: number[][] };
+			});
 			for (let k = 1; k < solution.t.length; k++) {
 				const piece = readCubic(
 					derivative,

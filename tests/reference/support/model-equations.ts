@@ -9,8 +9,8 @@ const SIGMA = 5.670374419e-8;
 const CRR = { sealed: 0.012, gravel: 0.025, corrugated: 0.035, rock: 0.06, sand: 0.15 };
 /** Clock hours 1…24. */
 const PROFILE = [
-	0.88, 0.92, 0.95, 0.98, 1.0, 0.98, 0.91, 0.74, 0.55, 0.38, 0.23, 0.13, 0.05, 0.0, 0.0, 0.06, 0.14, 0.24, 0.39, 0.5,
-	0.59, 0.68, 0.75, 0.82
+	0.88, 0.92, 0.95, 0.98, 1.0, 0.98, 0.91, 0.74, 0.55, 0.38, 0.23, 0.13, 0.05, 0.0, 0.0, 0.06, 0.14, 0.24,
+	0.39, 0.5, 0.59, 0.68, 0.75, 0.82
 ];
 
 const kelvin = (tempC: number) => tempC + 273.15;
@@ -88,7 +88,8 @@ export function modelDerivative(
 	const flow = on ? Math.min(ba.fanFlow + ba.flowPerSpeed * v, ba.maxFlow) : 0;
 	const Gair = rho * 1006 * flow;
 	const o = clamp((Teng - en.thermostatOpen) / (en.thermostatFull - en.thermostatOpen));
-	const Qrad = flow > 0 ? Math.min(en.radiatorStill + en.radiatorPerSpeed * v, en.radiatorMax) * o * (Teng - Tamb) : 0;
+	const Qrad =
+		flow > 0 ? Math.min(en.radiatorStill + en.radiatorPerSpeed * v, en.radiatorMax) * o * (Teng - Tamb) : 0;
 	const Tin = flow > 0 ? Tamb + Qrad / Gair : Tamb;
 	const Tgas = ex.gasIdle + (ex.gasFull - ex.gasIdle) * Math.sqrt(load);
 	const Ggas = on ? ex.gasConductanceFull * load ** 0.8 : 0;
@@ -98,7 +99,10 @@ export function modelDerivative(
 
 	// Section 4
 	const Tloc =
-		Tamb + po.bayAirFraction * (Tbay - Tamb) + po.enclosureFraction * (Tenc - Tamb) + (po.roadUplift * I) / 1000;
+		Tamb +
+		po.bayAirFraction * (Tbay - Tamb) +
+		po.enclosureFraction * (Tenc - Tamb) +
+		(po.roadUplift * I) / 1000;
 	const hc = bt.filmStill + bt.filmPerSqrtSpeed * Math.sqrt(po.airExposure * v);
 	const Tguard = Tamb + po.guardFraction * (Tbay - Tamb);
 	const cov = s.shield?.coverage ?? 0;
@@ -112,9 +116,12 @@ export function modelDerivative(
 	const Qxs = rad(ex.emissivity * eOut * po.exhaustView * cov, Tx, Ts);
 	const Qec = rad(en.emissivity * bt.caseEmissivity * po.engineView * (1 - cov), Teng, Tc);
 	const Qes = rad(en.emissivity * eOut * po.engineView * cov, Teng, Ts);
-	const Qhc = leg.bonnetOpen ? 0 : rad(bo.emissivity * bt.caseEmissivity * bt.topArea * po.bonnetView, Tbon, Tc);
+	const Qhc = leg.bonnetOpen
+		? 0
+		: rad(bo.emissivity * bt.caseEmissivity * bt.topArea * po.bonnetView, Tbon, Tc);
 	const Qsc = s.shield
-		? As * s.shield.gap * (Ts - Tc) + rad(As / (1 / s.shield.emissivityIn + 1 / bt.caseEmissivity - 1), Ts, Tc)
+		? As * s.shield.gap * (Ts - Tc) +
+			rad(As / (1 / s.shield.emissivityIn + 1 / bt.caseEmissivity - 1), Ts, Tc)
 		: 0;
 	const Qxb = rad(ex.emissivity * Math.max(ex.area - po.exhaustView, 0), Tx, Tbay);
 	const R = bt.r25 * Math.exp(bt.activationK * (1 / kelvin(Tk) - 1 / 298.15));

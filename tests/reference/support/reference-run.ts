@@ -97,7 +97,12 @@ export class ReferenceRunner {
 	}
 
 	/** Runs until the end or the first alarm. */
-	private runSpan(leg: ModelLeg, fromS: number, toS: number, start: number[]): { timeS: number; y: number[] } {
+	private runSpan(
+		leg: ModelLeg,
+		fromS: number,
+		toS: number,
+		start: number[]
+	): { timeS: number; y: number[] } {
 		const switches = this.readSwitches();
 		const alarms = [...this.findLatchAlarms(), ...this.findChargeAlarms(leg, start)];
 		let end = { timeS: toS, y: start };

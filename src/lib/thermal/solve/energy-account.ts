@@ -1,6 +1,10 @@
 import type { HeatSystem } from './heat-system';
 import { readStep, type RosenbrockStepper, type Step } from './rosenbrock';
 
+/** Lobatto's rule with four points, exact to the fifth degree: both ends with 1/12 each, two inner ones with 5/12. */
+const END_WEIGHT = 1 / 12;
+const INNER_SHARES = [(1 - Math.sqrt(1 / 5)) / 2, (1 + Math.sqrt(1 / 5)) / 2] as const;
+
 /**
  * Adds up the heats along the curve between the steps and holds them against the heat that the nodes have stored.
  *
@@ -31,18 +35,23 @@ export class EnergyAccount {
 	/** Books one step that the system has taken. */
 	book(step: Step, system: HeatSystem): void {
 		const { lengthS, from, to } = step;
-		for (const [share, weight] of LOBATTO) {
-			for (let i = 0; i < from.length; i++) this.temps[i] = readStep(step, i, share);
-			this.stepper.evaluate(step.timeS + share * lengthS, this.temps, this.heats);
-			system.sumThroughput(this.amounts);
-			const weightS = weight * lengthS;
-			for (let i = 0; i < from.length; i++) {
-				this.gained[i] = this.gained[i]! + weightS * this.heats[i]!;
-				this.passed[i] = this.passed[i]! + (weightS * this.amounts[i]!) / 2;
-			}
-		}
+		const { gained, stored, passed, temps, heats, amounts } = this;
+		const { startHeats, endHeats } = this.stepper;
+		const endWeightS = END_WEIGHT * lengthS;
+		const innerWeightS = (0.5 - END_WEIGHT) * lengthS;
 		for (let i = 0; i < from.length; i++) {
-			this.stored[i] = this.stored[i]! + system.capacityJPerK[i]! * (to[i]! - from[i]!);
+			gained[i] = gained[i]! + endWeightS * (startHeats[i]! + endHeats[i]!);
+			stored[i] = stored[i]! + system.capacityJPerK[i]! * (to[i]! - from[i]!);
+		}
+		for (const share of INNER_SHARES) {
+			for (let i = 0; i < from.length; i++) temps[i] = readStep(step, i, share);
+			this.stepper.evaluate(step.timeS + share * lengthS, temps, heats);
+			system.sumThroughput(amounts);
+			for (let i = 0; i < from.length; i++) {
+				gained[i] = gained[i]! + innerWeightS * heats[i]!;
+				// What comes in is counted, and what goes out: half of both has passed.
+				passed[i] = passed[i]! + (lengthS * amounts[i]!) / 4;
+			}
 		}
 	}
 
@@ -53,12 +62,3 @@ export class EnergyAccount {
 		);
 	}
 }
-
-/** Places and weights of Lobatto's rule with four points, exact to the fifth degree. */
-const INNER = Math.sqrt(1 / 5);
-const LOBATTO = [
-	[0, 1 / 12],
-	[(1 - INNER) / 2, 5 / 12],
-	[(1 + INNER) / 2, 5 / 12],
-	[1, 1 / 12]
-] as const;

@@ -2,7 +2,7 @@ import type { HeatSystem } from './heat-system';
 import { RosenbrockStepper, type Step } from './rosenbrock';
 
 /** Reasons for which a run is given up; it is returned, never thrown. */
-export type Failure = 'not_finite' | 'step_too_small' | 'too_many_steps';
+export type Failure = 'impossible_temperature' | 'step_too_small' | 'too_many_steps';
 
 export interface IntegratorOptions {
 	/** Error allowed in one step, K, node by node. */
@@ -21,7 +21,9 @@ const SHORTEST_STEP_S = 1e-9;
 const SAFETY = 0.9;
 const LEAST_FACTOR = 0.15;
 const MOST_FACTOR = 6;
+/** Outside of these a temperature is not one of a vehicle. */
 const ABSOLUTE_ZERO_C = -273.15;
+const HOTTEST_C = 20_000;
 
 /** Takes steps of a length that keeps each one within the tolerance. */
 export class Integrator {
@@ -58,14 +60,15 @@ export class Integrator {
 		let now = timeS;
 		while (now < endS) {
 			const left = endS - now;
-			stepper.prepare(now, temps, Math.min(left, this.suggestedS));
+			stepper.prepare(now, temps, Math.min(left, this.suggestedS), now > timeS);
 			const failure = this.takeStep(left);
 			if (failure) return { reached: 'failed', failure, timeS: now };
 			const stopAt = watch(stepper.step);
 			if (stopAt !== null) {
 				const length = stopAt * stepper.step.lengthS;
 				if (length > SHORTEST_STEP_S) {
-					if (!stepper.tryStep(length)) return { reached: 'failed', failure: 'not_finite', timeS: now };
+					if (!stepper.tryStep(length))
+						return { reached: 'failed', failure: 'impossible_temperature', timeS: now };
 					this.finishStep(temps, accept);
 					now += length;
 				}
@@ -80,6 +83,7 @@ export class Integrator {
 
 	private finishStep(temps: Float64Array, accept: (step: Step) => void): void {
 		temps.set(this.stepper.step.to);
+		this.stepper.finish();
 		this.steps++;
 		accept(this.stepper.step);
 	}
@@ -98,7 +102,8 @@ export class Integrator {
 			const factor = Number.isFinite(error) ? Math.max(LEAST_FACTOR, SAFETY * error ** -0.25) : LEAST_FACTOR;
 			length *= Math.min(factor, 0.9);
 			this.suggestedS = length;
-			if (length < SHORTEST_STEP_S) return Number.isFinite(error) ? 'step_too_small' : 'not_finite';
+			if (length < SHORTEST_STEP_S)
+				return Number.isFinite(error) ? 'step_too_small' : 'impossible_temperature';
 		}
 	}
 
@@ -114,7 +119,7 @@ export class Integrator {
 		const { toleranceK } = this.options;
 		let largest = 0;
 		for (let i = 0; i < error.length; i++) {
-			if (!(to[i]! > ABSOLUTE_ZERO_C && to[i]! < Infinity)) return Infinity;
+			if (!(to[i]! > ABSOLUTE_ZERO_C && to[i]! < HOTTEST_C)) return Infinity;
 			const scaled = Math.abs(error[i]!) / toleranceK[i]!;
 			if (!(scaled <= largest)) largest = scaled;
 		}

@@ -60,6 +60,8 @@ export class RosenbrockStepper {
 	readonly step: Step;
 	/** H at the start of the step that is tried. */
 	readonly startHeats: Float64Array;
+	/** H at the end of the step that was taken. */
+	readonly endHeats: Float64Array;
 	evaluations = 0;
 	factorisations = 0;
 
@@ -77,6 +79,7 @@ export class RosenbrockStepper {
 		this.jacobian = new Float64Array(size * size);
 		this.matrix = new Float64Array(size * size);
 		this.startHeats = vector();
+		this.endHeats = vector();
 		this.timeSlope = vector();
 		this.work = vector();
 		this.stages = Array.from({ length: STAGES }, vector);
@@ -102,16 +105,31 @@ export class RosenbrockStepper {
 		this.evaluations++;
 	}
 
-	/** Takes up a new starting point; `withinS` is how far time may be varied to find dH/dt. */
-	prepare(timeS: number, temps: Float64Array, withinS: number): void {
+	/**
+	 * Takes up a new starting point.
+	 *
+	 * @param withinS how far time may be varied to find dH/dt, s
+	 * @param goesOn the point is the end of the last step and nothing has changed there: its heats are known
+	 */
+	prepare(timeS: number, temps: Float64Array, withinS: number, goesOn: boolean): void {
 		const { system, step, startHeats, timeSlope, work } = this;
 		step.timeS = timeS;
 		step.from.set(temps);
 		const delta = Math.min(withinS, 1);
 		this.evaluate(timeS + delta, step.from, work);
-		this.evaluate(timeS, step.from, startHeats);
+		if (goesOn) {
+			startHeats.set(this.endHeats);
+			system.setTime(timeS);
+		} else {
+			this.evaluate(timeS, step.from, startHeats);
+		}
 		for (let i = 0; i < system.size; i++) timeSlope[i] = (work[i]! - startHeats[i]!) / delta;
 		system.fillJacobian(step.from, this.jacobian);
+	}
+
+	/** Works out H at the end of the step that was taken. */
+	finish(): void {
+		this.evaluate(this.step.timeS + this.step.lengthS, this.step.to, this.endHeats);
 	}
 
 	/** Tries one step of the length given from the point taken up; false when the matrix cannot be solved. */
