@@ -1,14 +1,24 @@
 import { Workshop } from '../../db/models';
 import { inTransaction } from '../../db/transaction';
-import { seedPeople } from './seed-people';
-import { seedPlaces } from './seed-places';
+import { seedJobs } from './seed-jobs';
+import { seedCrews, seedCustomerSignIns } from './seed-people';
+import { seedShelves } from './seed-shelves';
 
-/** Fills an empty database with the invented workshops, all of it or nothing. */
+/** Puts the invented workshops in, all of them or nothing, and says how many jobs that makes. */
+export async function fillWithDemo(): Promise<number> {
+	return inTransaction(async (transaction) => {
+		let jobs = 0;
+		for (const crew of await seedCrews(transaction)) {
+			await seedShelves(crew, transaction);
+			jobs += await seedJobs(crew, transaction);
+			await seedCustomerSignIns(crew, transaction);
+		}
+		return jobs;
+	});
+}
+
+/** Only an empty database gets the demo. */
 export async function seedDemo(): Promise<string> {
 	if ((await Workshop.count()) > 0) return 'there already';
-	return inTransaction(async (transaction) => {
-		const crews = await seedPeople(transaction);
-		for (const crew of crews) await seedPlaces(crew);
-		return `${crews.length} workshops`;
-	});
+	return `${await fillWithDemo()} jobs`;
 }

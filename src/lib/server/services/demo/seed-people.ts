@@ -5,56 +5,56 @@ import workshops from '../../../../../seeds/demo-workshops.json';
 import { hashPassword } from '../../auth/passwords';
 import { Customer, Person, Workshop } from '../../db/models';
 
-/** A seeded workshop and its people, by role. */
+/** A seeded workshop and its staff; the first of them is its manager. */
 export interface Crew {
 	key: string;
 	workshopId: number;
 	manager: SignedInPerson;
-	people: SignedInPerson[];
+	staff: SignedInPerson[];
 }
 
-async function customerIdOf(workshopId: number, person: (typeof people)[number], transaction: Transaction) {
-	if (!person.customer) return null;
-	const { email } = person;
-	const customer = await Customer.create(
-		{ workshopId, name: person.customer, email, phone: '' },
-		{ transaction }
-	);
-	return customer.id;
-}
+type DemoPerson = (typeof people)[number];
 
-async function seedCrew(
-	{ key, ...shop }: (typeof workshops)[number],
+const isCustomer = ({ role }: DemoPerson): boolean => role === 'customer';
+
+async function seedPerson(
+	{ name, email, password, ...person }: DemoPerson,
+	{ id: workshopId, name: workshopName }: Pick<Workshop, 'id' | 'name'>,
+	customerId: number | null,
 	transaction: Transaction
-): Promise<Crew> {
-	const workshop = await Workshop.create(shop, { transaction });
-	const seeded: SignedInPerson[] = [];
-	for (const person of people.filter((each) => each.workshop === key)) {
-		const { name, email, password } = person;
-		const role = person.role as Role;
-		const customerId = await customerIdOf(workshop.id, person, transaction);
-		const passwordHash = await hashPassword(password);
-		const row = await Person.create(
-			{ workshopId: workshop.id, customerId, name, email, role, passwordHash },
-			{ transaction }
-		);
-		seeded.push({
-			id: row.id,
-			workshopId: workshop.id,
-			workshopName: workshop.name,
-			customerId,
-			name,
-			email,
-			role
-		});
-	}
-	const manager = seeded.find((each) => each.role === 'manager');
-	if (!manager) throw new Error(`The demo workshop ${key} has no manager.`);
-	return { key, workshopId: workshop.id, manager, people: seeded };
+): Promise<SignedInPerson> {
+	const role = person.role as Role;
+	const passwordHash = await hashPassword(password);
+	const row = { workshopId, customerId, name, email, role, passwordHash };
+	const { id } = await Person.create(row, { transaction });
+	return { id, workshopId, workshopName, customerId, name, email, role };
 }
 
-export async function seedPeople(transaction: Transaction): Promise<Crew[]> {
+/** The workshops and who works there. */
+export async function seedCrews(transaction: Transaction): Promise<Crew[]> {
 	const crews: Crew[] = [];
-	for (const shop of workshops) crews.push(await seedCrew(shop, transaction));
+	for (const { key, ...shop } of workshops) {
+		const workshop = await Workshop.create(shop, { transaction });
+		const staff: SignedInPerson[] = [];
+		for (const person of people.filter((each) => each.workshop === key && !isCustomer(each))) {
+			staff.push(await seedPerson(person, workshop, null, transaction));
+		}
+		const manager = staff.find(({ role }) => role === 'manager');
+		if (!manager) throw new Error(`The demo workshop ${key} has no manager.`);
+		crews.push({ key, workshopId: workshop.id, manager, staff });
+	}
 	return crews;
+}
+
+/** Customers who sign in: those of the demo people whose job is there by now. */
+export async function seedCustomerSignIns(
+	{ key, workshopId }: Crew,
+	transaction: Transaction
+): Promise<void> {
+	const workshop = await Workshop.findByPk(workshopId, { transaction });
+	for (const person of people.filter((each) => each.workshop === key && isCustomer(each))) {
+		const customer = await Customer.findOne({ where: { workshopId, email: person.email }, transaction });
+		if (!workshop || !customer) throw new Error(`The demo has no job for ${person.name}.`);
+		await seedPerson(person, workshop, customer.id, transaction);
+	}
 }
