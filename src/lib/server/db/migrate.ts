@@ -1,15 +1,13 @@
 import { QueryTypes, type Sequelize } from 'sequelize';
 import { Umzug } from 'umzug';
 import { migrations } from './migrations';
+import { withNamedLock } from './named-lock';
 
 export interface Migration {
 	name: string;
 	/** One DDL step that may be run again: MariaDB commits DDL by itself, so a half-run step must be repeatable. */
 	up: (run: (sql: string) => Promise<unknown>) => Promise<unknown>;
 }
-
-const LOCK = 'soakline-migrations';
-const LOCK_WAIT_S = 30;
 
 function appliedTable(sequelize: Sequelize) {
 	return {
@@ -39,31 +37,14 @@ function appliedTable(sequelize: Sequelize) {
 	};
 }
 
-/**
- * Brings the tables up to date and says how many steps that took.
- * The lock belongs to one connection, so a transaction pins it while the steps run beside it.
- */
+/** Brings the tables up to date and says how many steps that took; of several processes one does it. */
 export async function migrate(sequelize: Sequelize): Promise<number> {
-	return sequelize.transaction(async (transaction) => {
-		const [lock] = await sequelize.query<{ got: number | null }>('SELECT GET_LOCK(:name, :wait) AS got', {
-			replacements: { name: LOCK, wait: LOCK_WAIT_S },
-			type: QueryTypes.SELECT,
-			transaction
+	return withNamedLock(sequelize, 'tables', async () => {
+		const umzug = new Umzug({
+			migrations: migrations.map(({ name, up }) => ({ name, up: () => up((sql) => sequelize.query(sql)) })),
+			storage: appliedTable(sequelize),
+			logger: undefined
 		});
-		if (lock?.got !== 1) {
-			throw new Error(
-				`Another process has been changing the tables for ${LOCK_WAIT_S} s: wait for it, then start again.`
-			);
-		}
-		try {
-			const umzug = new Umzug({
-				migrations: migrations.map(({ name, up }) => ({ name, up: () => up((sql) => sequelize.query(sql)) })),
-				storage: appliedTable(sequelize),
-				logger: undefined
-			});
-			return (await umzug.up()).length;
-		} finally {
-			await sequelize.query('DO RELEASE_LOCK(:name)', { replacements: { name: LOCK }, transaction });
-		}
+		return (await umzug.up()).length;
 	});
 }

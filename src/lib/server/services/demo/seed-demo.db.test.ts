@@ -21,28 +21,32 @@ async function findManager(workshop: Workshop): Promise<SignedInPerson> {
 const LONG_MS = 180_000;
 
 describe('the demo workshop', () => {
-	it('has people of every role, twelve jobs with a customer each in four climates, and every verdict', async () => {
-		await fillWithDemo();
-		const demo = await Workshop.findOne({ where: { name: workshops[0]?.name ?? '' } });
-		if (!demo) throw new Error('Nothing was seeded.');
-		const where = { workshopId: demo.id };
-		const people = await Person.findAll({ where });
-		expect(new Set(people.map(({ role }) => role))).toEqual(
-			new Set(['installer', 'engineer', 'manager', 'customer'])
-		);
-		expect(people.length).toBeGreaterThanOrEqual(4);
-		const jobs = await Job.findAll({ where });
-		expect(jobs).toHaveLength(12);
-		expect(new Set(jobs.map(({ customerId }) => customerId)).size).toBe(12);
-		expect(await Customer.count({ where })).toBe(12);
-		const places = await Place.findAll({ where: { id: jobs.flatMap(({ placeId }) => placeId ?? []) } });
-		expect(new Set(places.map(({ climateZone }) => climateZone)).size).toBe(4);
-		const assessments = await Assessment.findAll({ where });
-		expect(new Set(assessments.map(({ verdict }) => verdict))).toEqual(new Set(VERDICTS));
-		const manager = await findManager(demo);
-		for (const { id } of assessments)
-			expect(await reproduceAssessment(manager, id)).toMatchObject({ same: true });
-		expect(await findBreak(demo.id)).toBeNull();
-		expect(await seedDemo()).toBe('there already');
-	}, LONG_MS);
+	it(
+		'has people of every role, twelve jobs with a customer each in four climates, and every verdict',
+		async () => {
+			await fillWithDemo();
+			const demo = await Workshop.findOne({ where: { name: workshops[0]?.name ?? '' } });
+			if (!demo) throw new Error('Nothing was seeded.');
+			const where = { workshopId: demo.id };
+			const people = await Person.findAll({ where });
+			expect(new Set(people.map(({ role }) => role))).toEqual(
+				new Set(['installer', 'engineer', 'manager', 'customer'])
+			);
+			expect(people.length).toBeGreaterThanOrEqual(4);
+			const jobs = await Job.findAll({ where });
+			expect(jobs).toHaveLength(12);
+			expect(new Set(jobs.map(({ customerId }) => customerId)).size).toBe(12);
+			expect(await Customer.count({ where })).toBe(12);
+			const places = await Place.findAll({ where: { id: jobs.flatMap(({ placeId }) => placeId ?? []) } });
+			expect(new Set(places.map(({ climateZone }) => climateZone)).size).toBe(4);
+			const assessments = await Assessment.findAll({ where });
+			expect(new Set(assessments.map(({ verdict }) => verdict))).toEqual(new Set(VERDICTS));
+			const manager = await findManager(demo);
+			for (const { id } of assessments)
+				expect(await reproduceAssessment(manager, id)).toMatchObject({ same: true });
+			expect(await findBreak(demo.id)).toBeNull();
+			expect(await seedDemo()).toBe('there already');
+		},
+		LONG_MS
+	);
 });

@@ -1,4 +1,6 @@
+import { connection } from '../../db/connection';
 import { Workshop } from '../../db/models';
+import { withNamedLock } from '../../db/named-lock';
 import { inTransaction } from '../../db/transaction';
 import { seedJobs } from './seed-jobs';
 import { seedCrews, seedCustomerSignIns } from './seed-people';
@@ -17,8 +19,10 @@ export async function fillWithDemo(): Promise<number> {
 	});
 }
 
-/** Only an empty database gets the demo. */
+/** Only an empty database gets the demo, and of several processes that start together one fills it. */
 export async function seedDemo(): Promise<string> {
-	if ((await Workshop.count()) > 0) return 'there already';
-	return `${await fillWithDemo()} jobs`;
+	return withNamedLock(connection(), 'demo data', async () => {
+		if ((await Workshop.count()) > 0) return 'there already';
+		return `${await fillWithDemo()} jobs`;
+	});
 }
