@@ -1,9 +1,9 @@
+import type { z } from 'zod';
 import type { AssessmentInputs } from '$lib/schemas/assessments';
 import { batteryInputSchema } from '$lib/schemas/batteries';
 import type { BookView } from '$lib/schemas/books';
 import { dayPlanInputSchema } from '$lib/schemas/day-plans';
 import { placeInputSchema } from '$lib/schemas/places';
-import { surveyAnswersSchema } from '$lib/schemas/survey';
 import { vehicleInputSchema } from '$lib/schemas/vehicles';
 import { buildScenario } from '$lib/thermal/survey';
 import { BatteryRecord, Customer, DayPlan, Place, Vehicle, type Job, type Mount } from '../db/models';
@@ -51,27 +51,29 @@ function listMissing({ battery, place, dayPlan }: JobParts, mount: Mount): Part[
 export const isAssessable = (parts: JobParts, mount: Mount): boolean =>
 	listMissing(parts, mount).length === 0;
 
-/** A record's own fields, without those that the schema does not know. */
-const plain = (record: { get: (options: { plain: true }) => unknown }): unknown =>
-	record.get({ plain: true });
+/** The fields of a record that its schema knows, as they are stored: what was let in once is not refused later. */
+function fieldsOf<S extends z.ZodObject>(schema: S, record: object): z.output<S> {
+	const values = record as Record<string, unknown>;
+	return Object.fromEntries(Object.keys(schema.shape).map((key) => [key, values[key]])) as z.output<S>;
+}
 
 function measuredOf(
 	{ job, customer, vehicle, battery, place, dayPlan }: JobParts,
 	mount: Mount,
 	book: BookView
 ): Omit<AssessmentInputs, 'scenario' | 'derivations' | 'assumptions'> {
-	const at = placeInputSchema.parse(plain(place!));
+	const at = fieldsOf(placeInputSchema, place!);
 	return {
 		jobNumber: job.number,
 		customerName: customer.name,
-		vehicle: vehicleInputSchema.parse(plain(vehicle)),
-		battery: batteryInputSchema.parse(plain(battery!)),
+		vehicle: fieldsOf(vehicleInputSchema, vehicle),
+		battery: fieldsOf(batteryInputSchema, battery!),
 		mount: {
 			letter: mount.letter,
 			name: mount.name,
-			survey: surveyAnswersSchema.parse({ ...mount.survey, positionKind: mount.positionKind })
+			survey: { ...mount.survey, positionKind: mount.positionKind }
 		},
-		dayPlan: dayPlanInputSchema.parse(plain(dayPlan!)),
+		dayPlan: fieldsOf(dayPlanInputSchema, dayPlan!),
 		place: at,
 		hotDay: {
 			hotDayMaxC: job.hotDayMaxC ?? at.hotDayMaxC,

@@ -1,0 +1,46 @@
+import { formatAmpHours, formatKelvin, formatTemperature } from '$lib/format/numbers';
+import { formatClockHour, formatHours } from '$lib/format/time';
+import type { AssessmentInputs, AssessmentResult } from '$lib/schemas/assessments';
+import type { ReportLine } from '$lib/schemas/reports';
+import type { Sensor } from '$lib/thermal/types';
+
+const WATCHED: Record<Sensor, string> = {
+	cells: 'the cells',
+	board: 'the BMS board',
+	hotter: 'the hotter of cells and BMS board'
+};
+
+function sayReturn({ darkSpans, resetAtHour }: AssessmentResult, autoReset: boolean): ReportLine {
+	const label = 'Comes back';
+	if (resetAtHour !== null) {
+		const again = darkSpans.length > 1 ? 'The first time; it goes dark again.' : undefined;
+		return { label, value: formatClockHour(resetAtHour), ...(again ? { note: again } : {}) };
+	}
+	if (darkSpans.length === 0) return { label, value: 'stays on' };
+	const note = autoReset ? undefined : 'This battery waits until somebody switches it on again.';
+	return { label, value: 'not within the plan', ...(note ? { note } : {}) };
+}
+
+function sayMissed({ chargeMissedAh, chargeMissedHours }: AssessmentResult, chargeCutC: number): ReportLine {
+	const label = 'Charge missed';
+	if (chargeMissedHours <= 0) return { label, value: 'none' };
+	const note = `Charging stops at ${formatTemperature(chargeCutC)}: ${formatHours(chargeMissedHours)} without it.`;
+	return { label, value: formatAmpHours(chargeMissedAh), note };
+}
+
+/** The figures beside the picture, in the order in which people ask for them. */
+export function listFigures({ battery }: AssessmentInputs, result: AssessmentResult): ReportLine[] {
+	const { headroomK, peakCellsC, peakAtHour, cutAtHour, darkHours } = result;
+	return [
+		{
+			label: 'Headroom',
+			value: formatKelvin(headroomK),
+			note: `From the peak of ${WATCHED[battery.sensor]} to ${formatTemperature(battery.dischargeCutC)}, where it goes dark.`
+		},
+		{ label: 'Cells hottest', value: `${formatTemperature(peakCellsC)} at ${formatClockHour(peakAtHour)}` },
+		{ label: 'Goes dark', value: cutAtHour === null ? 'not on this day' : formatClockHour(cutAtHour) },
+		sayReturn(result, battery.autoReset),
+		{ label: 'Dark in all', value: darkHours === 0 ? 'none' : formatHours(darkHours) },
+		sayMissed(result, battery.chargeCutC)
+	];
+}

@@ -1,0 +1,120 @@
+import { describe, expect, it } from 'vitest';
+import type { AssessmentInputs, AssessmentView } from '$lib/schemas/assessments';
+import { assessScenario } from '$lib/thermal/assess';
+import { DAY_PLAN_TEMPLATES, buildScenario, type SurveyAnswers } from '$lib/thermal/survey';
+import { presentReport } from './reports';
+
+const HOT_CORNER: SurveyAnswers = {
+	...{ positionKind: 'under-bonnet', bayPlace: 'firewall-exhaust', exhaustFacing: 'square-on' },
+	...{ exhaustGapMm: 60, exhaustSeenWidthMm: 400, exhaustSeenHeightMm: 'unknown' },
+	...{ exhaustBatterySide: 'long-side', airPath: 'closed-corner' }
+};
+const BATTERY: AssessmentInputs['battery'] = {
+	...{ maker: 'Cindervale', model: 'Ridge 100', chemistry: 'lithium-iron-phosphate', capacityAh: 100 },
+	...{ lengthMm: 320, widthMm: 165, heightMm: 215, massKg: 12.85, internalResistanceMohm: 12 },
+	...{ maxChargeA: 50, sensor: 'cells', chargeCutC: 60, chargeResetC: 50, dischargeCutC: 75 },
+	...{ dischargeResetC: 62, cutDelayS: 0, autoReset: true, underBonnet: 'silent' },
+	...{ underBonnetWords: '', dataSheet: 'Invented for the tests' }
+};
+
+function makeView(changes: { battery?: Partial<AssessmentInputs['battery']>; survey?: SurveyAnswers } = {}) {
+	const battery = { ...BATTERY, ...changes.battery };
+	const survey = changes.survey ?? HOT_CORNER;
+	const vehicle: AssessmentInputs['vehicle'] = {
+		...{ make: 'Marlow', model: 'Ridge', modelYear: 2019, registration: '', engineLayout: 'inline' },
+		...{ massKg: 3100, dragAreaM2: 1.35, towMassKg: 1800, towDragAreaM2: 1 }
+	};
+	const hotDay = { hotDayMaxC: 44, dailyRangeK: 15, sunPeakWPerM2: 1050 };
+	const place = { name: 'Salt Lake', region: '', latitudeDeg: -28, longitudeDeg: 137, altitudeM: 20 };
+	const dayPlan = DAY_PLAN_TEMPLATES[0]!.plan;
+	const built = buildScenario({
+		...{ vehicle, battery, survey, dayPlan, hotDay },
+		...{ altitudeM: place.altitudeM, coefficients: {} }
+	});
+	const result = assessScenario(built.scenario, { legKinds: dayPlan.legs.map(({ kind }) => kind) });
+	if (result.status === 'failed') throw new Error(result.reason);
+	return {
+		...{ id: 7, engineVersion: result.engineVersion, inputsSha256: 'ab'.repeat(32), assessedBy: 'Noor' },
+		createdAt: '2026-01-08T03:00:00.000Z',
+		inputs: {
+			...{ jobNumber: 3, customerName: 'Ilse Tarn', vehicle, battery, dayPlan, hotDay, ...built },
+			mount: { letter: 'A', name: 'Guard', survey },
+			place: { ...place, ...hotDay, climateZone: 'BWh', source: 'Invented' },
+			book: { number: 1, name: 'Defaults', coefficients: {} }
+		},
+		result
+	} as unknown as AssessmentView;
+}
+
+const valueOf = (lines: { label: string; value: string }[], label: string) =>
+	lines.find((line) => line.label === label)?.value.replace(/\u202F/g, ' ');
+
+describe('an assessment in words', () => {
+	it('gives the figures of a day that cuts out', () => {
+		const view = makeView();
+		const report = presentReport(view);
+		expect(report.headline).toBe('Cuts out');
+		expect(valueOf(report.figures, 'Headroom')).toMatch(/^−\d+\.\d K$/);
+		expect(valueOf(report.figures, 'Goes dark')).toMatch(/^\d\d:\d\d$/);
+		expect(valueOf(report.figures, 'Comes back')).toMatch(/^\d\d:\d\d/);
+		expect(valueOf(report.figures, 'Charge missed')).toMatch(/ Ah$/);
+	});
+
+	it('gives the figures of a day that rides it out', () => {
+		const survey: SurveyAnswers = {
+			positionKind: 'cabin',
+			enclosureCooling: 'cooled',
+			enclosureSun: 'shaded'
+		};
+		const report = presentReport(makeView({ survey }));
+		expect(report.headline).toBe('Rides it out');
+		expect(valueOf(report.figures, 'Goes dark')).toBe('not on this day');
+		expect(valueOf(report.figures, 'Comes back')).toBe('stays on');
+		expect(valueOf(report.figures, 'Dark in all')).toBe('none');
+		expect(report.maker).toBeNull();
+	});
+
+	it('says that a battery which needs a hand does not come back', () => {
+		const { figures } = presentReport(makeView({ battery: { autoReset: false } }));
+		const back = figures.find(({ label }) => label === 'Comes back');
+		expect(back).toMatchObject({ value: 'not within the plan', note: expect.stringContaining('somebody') });
+	});
+
+	it('tells an answer from a value that was assumed', () => {
+		const lines = presentReport(makeView()).survey.flatMap((question) => question.lines);
+		expect(valueOf(lines, 'Gap to the exhaust')).toBe('60 mm');
+		expect(valueOf(lines, 'Height of hot pipe in view')).toBe('Not known: 150 mm assumed');
+		expect(valueOf(lines, 'Gap to the engine')).toBe('Not answered: 100 mm assumed');
+	});
+
+	it('writes numbers of the model with four digits and their unit, and says which were only entered', () => {
+		const { derivations } = presentReport(makeView());
+		const at = (label: string) => derivations.find((each) => each.label === label);
+		expect(at('Surface of the case')).toMatchObject({ value: '0.2613 m²', isEntered: false });
+		expect(at('Heat capacity of the cells')?.value).toBe('11190 J/K');
+		expect(at('Mass of the loaded vehicle')).toMatchObject({ value: '3100 kg', isEntered: true });
+		expect(at('How much of the enclosure air reaches the battery')?.value).toBe('0');
+	});
+
+	it.each([
+		['excluded', /^Against/],
+		['silent', /^Without/],
+		['conditional', /^Only on/]
+	] as const)('cautions under a bonnet when the maker’s word is "%s"', (underBonnet, title) => {
+		const battery = { underBonnet, underBonnetWords: 'Not above 60 °C.' };
+		const { maker } = presentReport(makeView({ battery }));
+		expect(maker?.title).toMatch(title);
+		expect(maker?.text).toContain('“Not above 60 °C.”');
+	});
+
+	it('cautions about nothing when the maker allows it', () => {
+		expect(presentReport(makeView({ battery: { underBonnet: 'allowed' } })).maker).toBeNull();
+	});
+
+	it('names the versions that made it', () => {
+		const { versions } = presentReport(makeView());
+		expect(valueOf(versions, 'Assessment')).toBe('7');
+		expect(valueOf(versions, 'Coefficient book')).toBe('1, Defaults');
+		expect(valueOf(versions, 'Hash of the inputs (SHA-256)')).toBe('ab'.repeat(32));
+	});
+});

@@ -1,0 +1,46 @@
+import { error } from '@sveltejs/kit';
+import type { SignedInPerson } from '$lib/schemas/people';
+import { recommendationInputSchema } from '$lib/schemas/recommendations';
+import { loadForm, saveForm } from '$lib/server/http/forms';
+import { guard, orPageError } from '$lib/server/http/guard';
+import { pageId } from '$lib/server/http/page-id';
+import { presentReport } from '$lib/server/presenters/reports';
+import { getAssessment, listMountOutcomes } from '$lib/server/services/assessments';
+import { getJob } from '$lib/server/services/jobs';
+import { makeRecommendation, newestRecommendation } from '$lib/server/services/recommendations';
+import type { Actions, PageServerLoad } from './$types';
+
+/** The assessment that the address asks to recommend, in the words that matter here. */
+async function loadChosen(person: SignedInPerson, jobId: number, asked: string | null) {
+	if (asked === null) return null;
+	const assessment = await getAssessment(person, pageId(asked));
+	if (assessment.jobId !== jobId) error(404, { message: 'There is no such assessment here.' });
+	const { id, mountId, mountLetter, mountName, verdict, headroomK, isCurrent } = assessment;
+	const { sentence, maker } = presentReport(assessment);
+	return { id, mountId, mountLetter, mountName, verdict, headroomK, isCurrent, sentence, maker };
+}
+
+export const load: PageServerLoad = async (event) => {
+	const person = guard(event, 'recommendations.write');
+	const jobId = pageId(event.params.jobId);
+	const outcomes = await orPageError(listMountOutcomes(person, jobId));
+	const asked = event.url.searchParams.get('assessment');
+	const chosen = await orPageError(loadChosen(person, jobId, asked));
+	return {
+		...{ jobId, outcomes, chosen },
+		jobNumber: (await orPageError(getJob(person, jobId))).number,
+		standing: await orPageError(newestRecommendation(person, jobId)),
+		isMade: event.url.searchParams.has('made'),
+		form: await loadForm(recommendationInputSchema, chosen ? { assessmentId: chosen.id } : {})
+	};
+};
+
+export const actions: Actions = {
+	default: (event) =>
+		saveForm(event, {
+			action: 'recommendations.write',
+			schema: recommendationInputSchema,
+			save: async (person, data) =>
+				`/jobs/${(await makeRecommendation(person, data)).jobId}/recommendation?made`
+		})
+};
