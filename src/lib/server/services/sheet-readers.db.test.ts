@@ -37,13 +37,11 @@ describe('opening a sheet by its link', () => {
 		const [noted, ...more] = await entriesOf(sheet.id, 'sheet.link-opened');
 		expect(more).toEqual([]);
 		expect(noted).toMatchObject({ personId: null, workshopId: crew.workshopId });
-		const [{ linkFirstOpenedAt }] = (await listSheets(crew.installer, jobId)) as [
-			{ linkFirstOpenedAt: string }
-		];
+		const [first] = await listSheets(crew.installer, jobId);
 		await openSheet(token);
 		const [later] = await listSheets(crew.installer, jobId);
-		expect(linkFirstOpenedAt).not.toBeNull();
-		expect(later!.linkFirstOpenedAt).toBe(linkFirstOpenedAt);
+		expect(first!.linkFirstOpenedAt).not.toBeNull();
+		expect(later!.linkFirstOpenedAt).toBe(first!.linkFirstOpenedAt);
 	});
 
 	it('finds nothing behind a link that was never made', async () => {

@@ -1,0 +1,8 @@
+import { guard, orPageError } from '$lib/server/http/guard';
+import { listMySheets } from '$lib/server/services/sheet-readers';
+import type { PageServerLoad } from './$types';
+
+export const load: PageServerLoad = async (event) => {
+	const person = guard(event, 'documents.read-own');
+	return { sheets: await orPageError(listMySheets(person)) };
+};

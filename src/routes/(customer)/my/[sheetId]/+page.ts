@@ -1,0 +1,2 @@
+/** The same plain page as behind the link. */
+export const csr = false;

@@ -1,0 +1,17 @@
+import { drawRibbonPictures } from '$lib/components/charts/day-ribbon/render-day-ribbon';
+import { nameLeg } from '$lib/components/charts/day-ribbon/ribbon-data';
+import { acknowledgeSchema, type SheetView } from '$lib/schemas/sheets';
+import { loadForm } from '$lib/server/http/forms';
+
+/** A stored sheet as its page shows it: the words as they are, the picture drawn from its stored data. */
+export async function showSheet({ content, contentSha256, acknowledgement }: SheetView) {
+	const { ribbon, ...words } = content;
+	const day = { ...ribbon, legs: ribbon.legs.map((leg) => ({ ...leg, kind: nameLeg(leg) })), band: null };
+	return {
+		...{ words, acknowledgement, day },
+		screen: drawRibbonPictures(day, ['phone', 'desk'], 'screen'),
+		paper: drawRibbonPictures(day, ['print'], 'paper'),
+		form: await loadForm(acknowledgeSchema, { contentSha256 })
+	};
+}
+export type ShownSheet = Awaited<ReturnType<typeof showSheet>>;

@@ -1,0 +1,64 @@
+import { error, fail, redirect, type RequestEvent } from '@sveltejs/kit';
+import { idSchema } from '$lib/schemas/fields';
+import type { SignedInPerson } from '$lib/schemas/people';
+import { sendSheetSchema } from '$lib/schemas/sheets';
+import { AppError } from '$lib/server/errors';
+import { loadForm, saveForm } from '$lib/server/http/forms';
+import { guard, orPageError } from '$lib/server/http/guard';
+import { getJob } from '$lib/server/services/jobs';
+import { newestRecommendation } from '$lib/server/services/recommendations';
+import { listSheets, retrySheetLetter, sendSheet, withdrawSheet } from '$lib/server/services/sheets';
+import type { Actions, PageServerLoad } from './$types';
+
+function readId(text: unknown, what: string): number {
+	return idSchema.safeParse(text).data ?? error(404, { message: `There is no such ${what} here.` });
+}
+
+export const load: PageServerLoad = async (event) => {
+	const person = guard(event, 'sheets.write');
+	const jobId = readId(event.params.jobId, 'job');
+	const job = await orPageError(getJob(person, jobId));
+	const [recommendation, sheets] = await orPageError(
+		Promise.all([newestRecommendation(person, jobId), listSheets(person, jobId)])
+	);
+	const asked = idSchema.safeParse(event.url.searchParams.get('withdraw') ?? undefined).data;
+	return {
+		...{ job, recommendation, sheets },
+		toWithdraw: sheets.find(({ id, withdrawnAt }) => id === asked && withdrawnAt === null) ?? null,
+		form: await loadForm(sendSheetSchema, {
+			sendTo: job.customer.email,
+			...(recommendation ? { recommendationId: recommendation.id } : {})
+		})
+	};
+};
+
+/** One button on one sheet: does it and shows the list again, or says why it was not done. */
+async function doWithSheet(
+	event: RequestEvent,
+	work: (person: SignedInPerson, sheetId: number) => Promise<unknown>
+) {
+	const person = guard(event, 'sheets.write');
+	const sheetId = readId((await event.request.formData()).get('sheetId'), 'sheet');
+	try {
+		await work(person, sheetId);
+	} catch (refusal) {
+		if (!(refusal instanceof AppError)) throw refusal;
+		return fail(refusal.status, { refusal: refusal.message });
+	}
+	redirect(303, event.url.pathname);
+}
+
+export const actions: Actions = {
+	send: (event) =>
+		saveForm(event, {
+			action: 'sheets.write',
+			schema: sendSheetSchema,
+			save: async (person, data) => {
+				const jobId = readId(event.params.jobId, 'job');
+				await sendSheet(person, { ...data, jobId });
+				return `/jobs/${jobId}/sheets`;
+			}
+		}),
+	withdraw: (event) => doWithSheet(event, withdrawSheet),
+	retry: (event) => doWithSheet(event, retrySheetLetter)
+};

@@ -1,0 +1,8 @@
+import { guard, orPageError } from '$lib/server/http/guard';
+import { listLetters } from '$lib/server/services/mailbox';
+import type { PageServerLoad } from './$types';
+
+export const load: PageServerLoad = async (event) => {
+	const person = guard(event, 'mailbox.read');
+	return { letters: await orPageError(listLetters(person)) };
+};
