@@ -1,0 +1,167 @@
+/** Who stands before a page or an endpoint. The neighbour is the manager of another workshop. */
+export const VISITORS = ['nobody', 'installer', 'engineer', 'manager', 'customer', 'neighbour'] as const;
+export type Visitor = (typeof VISITORS)[number];
+
+/** Whose a route is. `anyone` needs no sign-in; what a link opens is held by its token. */
+type Audience = 'anyone' | 'workshop' | 'bench' | 'customer';
+
+export interface RouteRule {
+	/** As in the folder of routes, without the groups in brackets. */
+	route: string;
+	for: Audience;
+	/** Names one workshop's record: for everybody else there is no such thing. */
+	owned?: true;
+	/** What the route exports, or the names of its form actions. */
+	methods: readonly string[];
+	/** GET answers with a redirect to where the work is. */
+	leadsOn?: true;
+	/** A body that the schema lets through, so that only ownership can refuse. */
+	bodies?: Readonly<Record<string, unknown>>;
+}
+
+const PLACE = {
+	...{ name: 'Nowhere', region: '', latitudeDeg: 0, longitudeDeg: 0, altitudeM: 0, climateZone: 'BWh' },
+	...{ hotDayMaxC: 40, dailyRangeK: 15, sunPeakWPerM2: 1000, source: 'Invented for this test', version: 0 }
+};
+const BATTERY = {
+	...{ maker: 'Nobody', model: 'None', chemistry: 'lithium-iron-phosphate', capacityAh: 100, massKg: 12 },
+	...{
+		lengthMm: 300,
+		widthMm: 170,
+		heightMm: 210,
+		internalResistanceMohm: 10,
+		maxChargeA: 50,
+		sensor: 'cells'
+	},
+	...{
+		chargeCutC: 60,
+		chargeResetC: 50,
+		dischargeCutC: 75,
+		dischargeResetC: 62,
+		cutDelayS: 0,
+		autoReset: true
+	},
+	...{ underBonnet: 'silent', version: 0 }
+};
+const VEHICLE = {
+	...{ make: 'None', model: 'None', modelYear: 2020, engineLayout: 'inline', massKg: 2000, dragAreaM2: 1 },
+	...{ towMassKg: 0, towDragAreaM2: 0, version: 0 }
+};
+const LEG = {
+	...{ kind: 'stop', minutes: 60, speedKmh: 0, surface: 'sealed', gradePercent: 0, towing: false },
+	...{ engineOn: false, bonnetOpen: false, loadA: 0 }
+};
+const DAY = { name: 'None', startHour: 7, startSoc: 0.5, chargerMaxA: 40, legs: [LEG], version: null };
+const CLIMATE = { placeId: 1, hotDayMaxC: 40, dailyRangeK: 15, sunPeakWPerM2: 1000, version: 0 };
+const SURVEY = { survey: { positionKind: 'cabin' }, complete: false, version: 0 };
+
+const page = (route: string, audience: Audience, ...methods: string[]): RouteRule => ({
+	route,
+	for: audience,
+	methods: ['GET', ...methods]
+});
+const owned = (route: string, audience: Audience, ...methods: string[]): RouteRule => ({
+	...page(route, audience, ...methods),
+	owned: true
+});
+const api = (route: string, audience: Audience, ...methods: string[]): RouteRule => ({
+	route: `/api/v1${route}`,
+	for: audience,
+	methods
+});
+const ownedApi = (route: string, audience: Audience, bodies: Record<string, unknown>): RouteRule => ({
+	...api(route, audience, ...Object.keys(bodies)),
+	owned: true,
+	bodies
+});
+
+/** Every route and what it takes; a route that is not here, or takes something else, fails a test. */
+export const ROUTE_RULES: readonly RouteRule[] = [
+	{ ...page('/', 'anyone'), leadsOn: true },
+	page('/healthz', 'anyone'),
+	page('/readyz', 'anyone'),
+	page('/sign-in', 'anyone', 'password', 'link'),
+	page('/sign-in/link/[token]', 'anyone', 'default'),
+	{ ...page('/sign-out', 'anyone', 'default'), leadsOn: true },
+	page('/sheet/[token]', 'anyone', 'default'),
+
+	page('/jobs', 'workshop'),
+	page('/jobs/new', 'workshop', 'create', 'repeat'),
+	owned('/jobs/[jobId]', 'workshop'),
+	owned('/jobs/[jobId]/battery', 'workshop', 'default'),
+	owned('/jobs/[jobId]/climate', 'workshop', 'default'),
+	owned('/jobs/[jobId]/day', 'workshop', 'default'),
+	owned('/jobs/[jobId]/mounts/new', 'workshop', 'default'),
+	owned('/jobs/[jobId]/compare', 'workshop', 'default'),
+	owned('/jobs/[jobId]/recommendation', 'workshop', 'default'),
+	owned('/jobs/[jobId]/sheets', 'workshop', 'send', 'withdraw', 'retry'),
+	{ ...owned('/mounts/[mountId]', 'workshop', 'remove', 'restore'), leadsOn: true },
+	{ ...owned('/mounts/[mountId]/survey', 'workshop'), leadsOn: true },
+	owned('/mounts/[mountId]/survey/[step]', 'workshop', 'default'),
+	owned('/mounts/[mountId]/survey/check', 'workshop', 'default'),
+	owned('/assessments/[assessmentId]', 'workshop', 'again', 'others', 'reproduce'),
+	owned('/recommendations/[recommendationId]/print', 'workshop'),
+	page('/batteries', 'workshop'),
+	page('/batteries/new', 'workshop', 'default'),
+	owned('/batteries/[batteryId]', 'workshop', 'default'),
+	page('/places', 'workshop'),
+	page('/places/new', 'workshop', 'default'),
+	owned('/places/[placeId]', 'workshop', 'default'),
+	page('/books', 'bench'),
+	owned('/books/[bookId]', 'bench'),
+	page('/mailbox', 'workshop'),
+	owned('/mailbox/[messageId]', 'workshop'),
+
+	page('/my', 'customer'),
+	owned('/my/[sheetId]', 'customer', 'default'),
+
+	api('/openapi.json', 'anyone', 'GET'),
+	api('/places', 'workshop', 'GET', 'POST'),
+	ownedApi('/places/[placeId]', 'workshop', { GET: null, PUT: PLACE }),
+	api('/batteries', 'workshop', 'GET', 'POST'),
+	ownedApi('/batteries/[batteryId]', 'workshop', { GET: null, PUT: BATTERY }),
+	ownedApi('/customers/[customerId]', 'workshop', { GET: null, PUT: { name: 'Nobody', version: 0 } }),
+	api('/vehicles', 'workshop', 'GET'),
+	ownedApi('/vehicles/[vehicleId]', 'workshop', { GET: null, PUT: VEHICLE }),
+	{ ...ownedApi('/vehicles/[vehicleId]/jobs', 'workshop', { POST: { note: '' } }) },
+	api('/jobs', 'workshop', 'GET', 'POST'),
+	ownedApi('/jobs/[jobId]', 'workshop', { GET: null }),
+	ownedApi('/jobs/[jobId]/battery', 'workshop', { PUT: { batteryRecordId: 1, version: 0 } }),
+	ownedApi('/jobs/[jobId]/climate', 'workshop', { PUT: CLIMATE }),
+	ownedApi('/jobs/[jobId]/day-plan', 'workshop', { GET: null, PUT: DAY }),
+	ownedApi('/jobs/[jobId]/mounts', 'workshop', { GET: null, POST: { name: 'None', positionKind: 'cabin' } }),
+	ownedApi('/jobs/[jobId]/assessments', 'workshop', { GET: null, POST: null }),
+	ownedApi('/jobs/[jobId]/sheets', 'workshop', {
+		GET: null,
+		POST: { recommendationId: 1, sendTo: 'nobody@shop.example' }
+	}),
+	ownedApi('/mounts/[mountId]', 'workshop', { GET: null, DELETE: null }),
+	ownedApi('/mounts/[mountId]/restore', 'workshop', { POST: null }),
+	ownedApi('/mounts/[mountId]/survey', 'workshop', { PUT: SURVEY }),
+	api('/assessments', 'workshop', 'POST'),
+	ownedApi('/assessments/[assessmentId]', 'workshop', { GET: null }),
+	ownedApi('/assessments/[assessmentId]/reproduction', 'workshop', { GET: null }),
+	api('/recommendations', 'workshop', 'POST'),
+	ownedApi('/recommendations/[recommendationId]', 'workshop', { GET: null }),
+	ownedApi('/sheets/[sheetId]/withdrawal', 'workshop', { POST: null }),
+	ownedApi('/sheets/[sheetId]/letter', 'workshop', { POST: null }),
+	api('/books', 'bench', 'GET'),
+	ownedApi('/books/[bookId]', 'bench', { GET: null }),
+	api('/simulations', 'workshop', 'POST')
+];
+
+const AUDIENCES: Record<Exclude<Audience, 'anyone'>, readonly Visitor[]> = {
+	workshop: ['installer', 'engineer', 'manager', 'neighbour'],
+	bench: ['engineer', 'manager', 'neighbour'],
+	customer: ['customer']
+};
+
+export type Standing = 'let in' | 'asked to sign in' | 'refused' | 'told there is no such thing';
+
+/** What a visitor must meet at a route. */
+export function standingOf(visitor: Visitor, rule: RouteRule): Standing {
+	if (rule.for === 'anyone') return 'let in';
+	if (visitor === 'nobody') return 'asked to sign in';
+	if (!AUDIENCES[rule.for].includes(visitor)) return 'refused';
+	return rule.owned && visitor === 'neighbour' ? 'told there is no such thing' : 'let in';
+}

@@ -1,0 +1,141 @@
+import { readFileSync, readdirSync } from 'node:fs';
+import { join } from 'node:path';
+import { expect, test, type APIRequestContext, type APIResponse } from '@playwright/test';
+import people from '../../seeds/demo-people.json' with { type: 'json' };
+import {
+	ROUTE_RULES,
+	VISITORS,
+	standingOf,
+	type RouteRule,
+	type Standing,
+	type Visitor
+} from './route-rules';
+
+const NOT_THERE = '999999';
+type Ids = Record<string, string>;
+
+async function read<T>(context: APIRequestContext, path: string): Promise<T> {
+	const response = await context.get(path);
+	expect(response.status(), path).toBe(200);
+	return (await response.json()) as T;
+}
+
+/** The link in the letter to the demo customer. */
+function findToken(email: string): string {
+	const folder = process.env.MAILBOX_DIR ?? '';
+	for (const name of readdirSync(folder)) {
+		const letter = readFileSync(join(folder, name), 'utf8').replace(/=\r?\n/g, '');
+		const token = /\/sheet\/([\w-]{22})/.exec(letter)?.[1];
+		if (letter.includes(`To: ${email}`) && token) return token;
+	}
+	throw new Error(`There is no sheet for ${email} in ${folder}.`);
+}
+
+/** Ids of one demo job and everything that hangs on it, to put into the routes. */
+async function findIds(context: APIRequestContext, customer: { name: string; email: string }): Promise<Ids> {
+	const { rows } = await read<{ rows: { id: number }[] }>(
+		context,
+		`/api/v1/jobs?search=${customer.name.split(' ')[0]}`
+	);
+	const jobId = String(rows.at(-1)?.id);
+	type Record = { id: number };
+	type Job = { customer: Record; vehicle: Record; battery: Record; place: Record; mounts: Record[] };
+	const job = await read<Job>(context, `/api/v1/jobs/${jobId}`);
+	const of = (record: Record | undefined) => String(record?.id);
+	const assessments = await read<{ rows: Record[] }>(context, `/api/v1/jobs/${jobId}/assessments`);
+	const sheets = await read<{ rows: (Record & { withdrawnAt: string | null })[] }>(
+		context,
+		`/api/v1/jobs/${jobId}/sheets`
+	);
+	const books = await read<{ rows: Record[] }>(context, '/api/v1/books');
+	const jobPage = await (await context.get(`/jobs/${jobId}`)).text();
+	const mailbox = await (await context.get('/mailbox')).text();
+	return {
+		jobId,
+		mountId: of(job.mounts[0]),
+		step: '1',
+		assessmentId: of(assessments.rows[0]),
+		recommendationId: /\/recommendations\/(\d+)\/print/.exec(jobPage)?.[1] ?? 'none',
+		batteryId: of(job.battery),
+		placeId: of(job.place),
+		customerId: of(job.customer),
+		vehicleId: of(job.vehicle),
+		bookId: of(books.rows[0]),
+		sheetId: of(sheets.rows.find(({ withdrawnAt }) => withdrawnAt === null)),
+		messageId: /href="\/mailbox\/([^"]+)"/.exec(mailbox)?.[1] ?? 'none',
+		token: findToken(customer.email)
+	};
+}
+
+async function signIn(context: APIRequestContext, visitor: Visitor): Promise<void> {
+	if (visitor === 'nobody') return;
+	const home = people[0]?.workshop;
+	const person = people.find(({ role, workshop }) =>
+		visitor === 'neighbour' ? workshop !== home : role === visitor && workshop === home
+	);
+	const form = { email: person?.email ?? '', password: person?.password ?? '' };
+	const response = await context.post('/sign-in?/password', {
+		form,
+		maxRedirects: 0,
+		headers: { accept: 'text/html' }
+	});
+	expect(response.status()).toBe(302);
+}
+
+const fill = (route: string, ids: Ids): string =>
+	route.replace(/\[(\w+)\]/g, (_, name: string) => ids[name] ?? 'none');
+
+/** Records that are not there: whoever is let in finds nothing to change. */
+const emptied = (ids: Ids): Ids => Object.fromEntries(Object.keys(ids).map((name) => [name, NOT_THERE]));
+
+function ask(context: APIRequestContext, rule: RouteRule, method: string, ids: Ids): Promise<APIResponse> {
+	const path = fill(rule.route, ids);
+	const options = { maxRedirects: 0 };
+	if (method === 'GET') return context.get(path, options);
+	if (rule.route.startsWith('/api/')) {
+		return context.fetch(path, { ...options, method, data: rule.bodies?.[method] ?? {} });
+	}
+	const action = method === 'default' ? path : `${path}?/${method}`;
+	return context.post(action, { ...options, form: { nothing: '' }, headers: { accept: 'text/html' } });
+}
+
+/** What an answer means to the one who asked. */
+function standingIn(response: APIResponse, rule: RouteRule): Standing | string {
+	const status = response.status();
+	const to = response.headers().location ?? '';
+	if (status === 401 || (status >= 300 && status < 400 && to.startsWith('/sign-in')))
+		return 'asked to sign in';
+	if (status === 403) return 'refused';
+	if (status === 404) return 'told there is no such thing';
+	const good = rule.leadsOn ? status < 400 : status < 300;
+	return good || status === 422 ? 'let in' : `${status}`;
+}
+
+for (const visitor of VISITORS) {
+	test(`every route meets ${visitor} as it should`, async ({ playwright, baseURL }) => {
+		test.setTimeout(180_000);
+		const [context, guide] = await Promise.all([
+			playwright.request.newContext({ baseURL }),
+			playwright.request.newContext({ baseURL })
+		]);
+		await signIn(guide, 'manager');
+		const customer = people.find(({ role }) => role === 'customer') ?? { name: '', email: '' };
+		const ids = await findIds(guide, customer);
+		expect(Object.values(ids)).not.toContain('none');
+		await signIn(context, visitor);
+		for (const rule of ROUTE_RULES.filter(({ route }) => route !== '/sign-out')) {
+			for (const method of rule.methods) {
+				const expected = standingOf(visitor, rule);
+				const changes = method !== 'GET' && expected === 'let in' && rule.owned === true;
+				const response = await ask(context, rule, method, changes ? emptied(ids) : ids);
+				const met = standingIn(response, rule);
+				const what = `${visitor}: ${method} ${rule.route} (${response.status()})`;
+				if (changes) expect.soft(['let in', 'told there is no such thing'], what).toContain(met);
+				else if (rule.route === '/' || rule.route === '/sign-in')
+					expect.soft(response.status(), what).toBeLessThan(500);
+				else expect.soft(met, what).toBe(expected);
+			}
+		}
+		await Promise.all([context.dispose(), guide.dispose()]);
+	});
+}
