@@ -3,15 +3,10 @@ import type { GridComponentOption } from 'echarts/components';
 import type { ComposeOption } from 'echarts/core';
 import { drawBand, drawDarkHours, drawHourAxis, drawTemperatureAxis } from './axes';
 import { drawCurves, type DrawnCurve } from './curves';
-import { layOutFrame, type RibbonFrame, type RibbonSize } from './frame';
+import { layOutFrame, type RibbonFrame, type RibbonSize, type RibbonSpan } from './frame';
 import { drawLimits, layOutLimits } from './limits';
 import { marksSeries } from './marks-series';
-import {
-	HEAT_STEPS_C,
-	RIBBON_PALETTES,
-	type RibbonPalette,
-	type RibbonScheme
-} from './palette';
+import { HEAT_STEPS_C, RIBBON_PALETTES, type RibbonPalette, type RibbonScheme } from './palette';
 import type { RibbonData } from './ribbon-data';
 import { drawStrip } from './strip';
 import { drawWords } from './words';
@@ -23,11 +18,13 @@ export interface RibbonSettings {
 	scheme: RibbonScheme;
 	/** px; the size's own when left out. */
 	width?: number;
+	/** Axes shared with other ribbons. */
+	span?: RibbonSpan;
 }
 
 /** The whole picture of a day as an option of the chart library: a pure function of its arguments. */
 export function dayRibbonOption(data: RibbonData, settings: RibbonSettings): RibbonOption {
-	const frame = layOutFrame(data, settings.size, settings.width);
+	const frame = layOutFrame(data, settings.size, settings.width, settings.span);
 	const palette = RIBBON_PALETTES[settings.scheme];
 	const curves = drawCurves(frame, data);
 	const limits = layOutLimits(frame, data);

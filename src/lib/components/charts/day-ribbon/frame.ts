@@ -3,7 +3,8 @@ import { simplifyLine, type Box, type Point } from './geometry';
 import { endHourOf, hourAt, type RibbonData } from './ribbon-data';
 import { estimateTextWidth } from './text-width';
 
-export type RibbonSize = 'mini' | 'phone' | 'desk' | 'print';
+/** `mini` and `wide` are the low ones: in the survey and side by side. */
+export type RibbonSize = 'mini' | 'wide' | 'phone' | 'desk' | 'print';
 
 /** What differs between the places where the ribbon stands; lengths in px. */
 export interface SizeSpec {
@@ -41,6 +42,22 @@ export const RIBBON_SIZES: Record<RibbonSize, SizeSpec> = {
 		curveWords: false,
 		peakWords: false,
 		limitWords: 'none'
+	},
+	wide: {
+		width: 760,
+		height: 178,
+		fontPx: 12.5,
+		left: 38,
+		right: 136,
+		bottom: 26,
+		stripPx: 20,
+		gapPx: 18,
+		cellsPx: 3.4,
+		tickGapPx: 72,
+		hatchPx: 7,
+		curveWords: false,
+		peakWords: true,
+		limitWords: 'long'
 	},
 	phone: {
 		width: 340,
@@ -127,12 +144,15 @@ export interface RibbonFrame {
 }
 
 const TEMP_STEP_C = 20;
+/** So that the words of the peak have somewhere to stand. */
+const ROOM_ABOVE_C = 6;
 const HOUR_STEPS = [1, 2, 3, 4, 6, 12, 24];
 
 export function layOutFrame(
 	data: RibbonData,
 	size: RibbonSize,
-	width = RIBBON_SIZES[size].width
+	width = RIBBON_SIZES[size].width,
+	span = spanOf([data])
 ): RibbonFrame {
 	const spec = RIBBON_SIZES[size];
 	const plot: Box = {
@@ -141,9 +161,7 @@ export function layOutFrame(
 		top: spec.stripPx + spec.gapPx + 1,
 		bottom: spec.height - spec.bottom
 	};
-	const [minC, maxC] = temperatureSpan(data);
-	const fromHour = data.curves.startHour;
-	const toHour = Math.max(endHourOf(data.curves), fromHour + 0.5);
+	const { fromHour, toHour, minC, maxC } = span;
 	const x = (hour: number) =>
 		plot.left + ((hour - fromHour) / (toHour - fromHour)) * (plot.right - plot.left);
 	const y = (tempC: number) => plot.bottom - ((tempC - minC) / (maxC - minC)) * (plot.bottom - plot.top);
@@ -167,9 +185,26 @@ export function layOutFrame(
 	};
 }
 
-/** A whole step below the coolest, and room above the hottest for words. */
-function temperatureSpan({ curves, limits, chargeSpans, band }: RibbonData): [number, number] {
-	const all = [
+/** What the two axes cover. */
+export interface RibbonSpan {
+	fromHour: number;
+	toHour: number;
+	minC: number;
+	maxC: number;
+}
+
+/** Axes that hold all the days given: side by side, one px is the same everywhere. */
+export function spanOf(days: readonly RibbonData[]): RibbonSpan {
+	const fromHour = Math.min(...days.map(({ curves }) => curves.startHour));
+	const toHour = Math.max(...days.map(({ curves }) => endHourOf(curves)), fromHour + 0.5);
+	const extremes = days.map(extremesOf);
+	const minC = Math.floor(Math.min(...extremes.map(({ low }) => low)) / TEMP_STEP_C) * TEMP_STEP_C;
+	const maxC = Math.max(...extremes.map(({ high }) => high)) + ROOM_ABOVE_C;
+	return { fromHour, toHour, minC, maxC: Math.max(maxC, minC + TEMP_STEP_C) };
+}
+
+function extremesOf({ curves, limits, chargeSpans, band }: RibbonData): { low: number; high: number } {
+	const lines = [
 		curves.ambientC,
 		curves.bayC,
 		curves.caseC,
@@ -177,16 +212,17 @@ function temperatureSpan({ curves, limits, chargeSpans, band }: RibbonData): [nu
 		band?.lowC ?? [],
 		band?.highC ?? []
 	];
-	let low = limits.dischargeResetC;
-	let high = Math.max(limits.dischargeCutC, chargeSpans.length ? limits.chargeCutC : -Infinity);
-	for (const valuesC of all) {
+	if (limits.sensor === 'board') lines.push(curves.boardC);
+	const marked = [limits.dischargeResetC, limits.dischargeCutC];
+	if (chargeSpans.length) marked.push(limits.chargeCutC, limits.chargeResetC);
+	let [low, high] = [Math.min(...marked), Math.max(...marked)];
+	for (const valuesC of lines) {
 		for (const tempC of valuesC) {
-			if (tempC < low) low = tempC;
-			if (tempC > high) high = tempC;
+			low = Math.min(low, tempC);
+			high = Math.max(high, tempC);
 		}
 	}
-	const minC = Math.floor(low / TEMP_STEP_C) * TEMP_STEP_C;
-	return [minC, Math.max(high + 6, minC + TEMP_STEP_C)];
+	return { low, high };
 }
 
 /** Ticks on the clock, as many as have room, their words inside the picture. */

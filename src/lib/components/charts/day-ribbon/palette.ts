@@ -10,7 +10,7 @@ export interface RibbonPalette {
 	bandOpacity: number;
 }
 
-export type RibbonScheme = 'page' | 'light' | 'dark' | 'black-and-white';
+export type RibbonScheme = 'page' | 'light' | 'dark' | 'print';
 
 /*
  * "page" follows the tokens of app.css, so that one drawing serves day, night and the page's own print;
@@ -50,7 +50,7 @@ export const RIBBON_PALETTES: Record<RibbonScheme, RibbonPalette> = {
 		band: '#c67201',
 		bandOpacity: 0.22
 	},
-	'black-and-white': {
+	print: {
 		paper: '#FFFFFF',
 		ink: '#000000',
 		muted: '#333333',

@@ -5,7 +5,7 @@ import { SVGRenderer } from 'echarts/renderers';
 import { cleanSvg } from './clean-svg';
 import { dayRibbonOption, type RibbonSettings } from './day-ribbon-option';
 import { describeRibbon } from './describe-ribbon';
-import { RIBBON_SIZES, type RibbonSize } from './frame';
+import { RIBBON_SIZES, spanOf, type RibbonSize, type RibbonSpan } from './frame';
 import type { RibbonScheme } from './palette';
 import type { RibbonData } from './ribbon-data';
 
@@ -31,14 +31,28 @@ export function renderDayRibbonSvg(
 /** Pictures by size: the page shows the one that fits. */
 export type RibbonPictures = Partial<Record<RibbonSize, string>>;
 
-/** The pictures that a page wants, drawn while it is loaded. */
+/** The pictures that a page wants, drawn while it is loaded; for paper in black and white unless told otherwise. */
 export function drawRibbonPictures(
 	data: RibbonData,
 	sizes: readonly RibbonSize[],
 	idPrefix: string,
-	scheme: RibbonScheme = 'page'
+	scheme?: RibbonScheme,
+	span?: RibbonSpan
 ): RibbonPictures {
-	return Object.fromEntries(
-		sizes.map((size) => [size, renderDayRibbonSvg(data, { size, scheme, idPrefix: `${idPrefix}-${size}` })])
-	);
+	const drawn = sizes.map((size): [RibbonSize, string] => [
+		size,
+		renderDayRibbonSvg(data, {
+			size,
+			span,
+			scheme: scheme ?? (size === 'print' ? 'print' : 'page'),
+			idPrefix: `${idPrefix}-${size}`
+		})
+	]);
+	return Object.fromEntries(drawn);
+}
+
+/** The low pictures of several days on the same axes, in the order given. */
+export function drawComparedPictures(days: readonly RibbonData[], idPrefix: string): RibbonPictures[] {
+	const span = spanOf(days);
+	return days.map((day, i) => drawRibbonPictures(day, ['mini', 'wide'], `${idPrefix}-${i}`, 'page', span));
 }
