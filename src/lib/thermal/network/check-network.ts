@@ -28,11 +28,7 @@ function checkNode(node: NetworkNode, kinds: ReadonlyMap<string, NetworkNode['ki
 			`heat capacity is ${capacity}, it must be above 0`
 		);
 	} else if (node.kind === 'fixed') {
-		requireThat(
-			node.tempC > -273.15,
-			node.name,
-			`temperature is ${node.tempC}, it must be above absolute zero`
-		);
+		requireThat(node.tempC >= -273.15, node.name, `temperature is ${node.tempC}, below absolute zero`);
 	} else {
 		for (const part of node.parts) {
 			const kind = kinds.get(part.node);

@@ -5,6 +5,9 @@ import { readStep, type RosenbrockStepper, type Step } from './rosenbrock';
 const END_WEIGHT = 1 / 12;
 const INNER_SHARES = [(1 - Math.sqrt(1 / 5)) / 2, (1 + Math.sqrt(1 / 5)) / 2] as const;
 
+/** What passes through a node counts at least as much as would warm it by this: below there is only rounding. */
+const LEAST_PASSED_K = 1e-2;
+
 /**
  * Adds up the heats along the curve between the steps and holds them against the heat that the nodes have stored.
  *
@@ -56,9 +59,10 @@ export class EnergyAccount {
 	}
 
 	/** |heat in − heat out − heat stored| of each node as a share of what passed through it. */
-	relativeImbalances(): number[] {
-		return Array.from(this.passed, (passed, i) =>
-			passed > 0 ? Math.abs(this.gained[i]! - this.stored[i]!) / passed : 0
-		);
+	relativeImbalances(system: HeatSystem): number[] {
+		return Array.from(this.passed, (passed, i) => {
+			const least = LEAST_PASSED_K * system.capacityJPerK[i]!;
+			return Math.abs(this.gained[i]! - this.stored[i]!) / Math.max(passed, least);
+		});
 	}
 }

@@ -27,7 +27,7 @@ const MOST_STEPS = 400_000;
 const TOLERANCE_K: Partial<Record<string, number>> = { engine: 1e-3, exhaust: 1e-3, bay: 1e-3, bonnet: 1e-4 };
 const BATTERY_TOLERANCE_K = 2e-5;
 /** A run whose energy does not close is made again with these shares of the tolerances. */
-const TIGHTENINGS = [1, 0.1, 0.01] as const;
+const TIGHTENINGS = [1, 0.05, 0.0025, 0.000125] as const;
 const CLOSES = 1e-6;
 
 const FAILURES: Record<Failure, string> = {
@@ -198,7 +198,7 @@ class Run {
 			end: { ...record.readRow((name) => temps[names.indexOf(name)]!), soc: this.soc },
 			events: bms.events,
 			hourly: record.readHours(),
-			energy: { maxRelativeImbalance: Math.max(...energy.relativeImbalances()) },
+			energy: { maxRelativeImbalance: Math.max(...energy.relativeImbalances(this.vehicle.network)) },
 			steps: integrator.steps,
 			evaluations: integrator.stepper.evaluations
 		};
