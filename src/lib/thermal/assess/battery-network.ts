@@ -1,4 +1,4 @@
-import { radiativeConductance } from '../correlations/radiation';
+import { KELVIN_AT_ZERO_C, STEFAN_BOLTZMANN } from '../correlations/radiation';
 import type { NetworkDescription, NetworkLink, NetworkNode } from '../network/description';
 import { DRIVEN } from '../vehicle/describe-vehicle';
 import type { HeatSource } from './types';
@@ -111,5 +111,9 @@ export function liftOf(
 
 /** The conductance that carries a link's heat exactly, W/K: for radiation the secant of the fourth-power law. */
 export function conductanceOf(link: BatteryLink, innerC: number, outerC: number): number {
-	return link.kind === 'conductance' ? link.size : radiativeConductance(link.size, innerC, outerC);
+	if (link.kind === 'conductance') return link.size;
+	// As radiativeConductance has it, without its checks: it is asked for some ten thousand times a ledger.
+	const inner = innerC + KELVIN_AT_ZERO_C;
+	const outer = outerC + KELVIN_AT_ZERO_C;
+	return STEFAN_BOLTZMANN * link.size * (inner * inner + outer * outer) * (inner + outer);
 }

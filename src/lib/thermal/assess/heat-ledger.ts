@@ -13,6 +13,11 @@ const columnOf = Object.fromEntries(HEAT_SOURCES.map((source, at) => [source, at
 >;
 const COLUMNS = HEAT_SOURCES.length;
 
+interface LedgerRun {
+	scenario: Scenario;
+	minutes: MinuteSeries;
+}
+
 /** A row a battery node, a column a source: how far that source lifts that node above the outside air, K. */
 type Lifts = Float64Array[];
 
@@ -20,25 +25,29 @@ type Lifts = Float64Array[];
  * One minute of the tagged balance, by the implicit midpoint rule with the conductances of the run itself.
  *
  *     C dθs/dt = Σ G (θs,j − θs) + Σ G lift_s + heat_s,   θ = T − Tamb;   outside air: heat = −C dTamb/dt
+ *
+ * @returns the lifts a minute later; `lifts` becomes what the next call may write into
  */
 function advance(
 	lifts: Lifts,
+	free: Lifts,
+	matrix: Lifts,
 	clock: LegClock,
-	minutes: MinuteSeries,
-	scenario: Scenario,
+	run: LedgerRun,
 	from: number
 ): Lifts {
+	const { minutes, scenario } = run;
 	const network = clock.networkAt(from + 0.5);
 	const moment = clock.momentAt(from, 0.5);
 	const { names, heatCapacityJPerK } = network;
-	const matrix = names.map(() => new Float64Array(names.length));
-	const right = names.map(() => new Float64Array(COLUMNS));
+	const right = free;
+	for (const rows of [matrix, right]) for (const row of rows) row.fill(0);
 	gatherLinks(network, moment, matrix, right);
 	const ownW = ownHeatW(scenario, moment, minutes.currentA[from]!);
 	const ambientKPerS = (minutes.ambient[from + 1]! - minutes.ambient[from]!) / MINUTE_S;
-	names.forEach((name, row) => {
+	for (let row = 0; row < names.length; row++) {
 		const capacity = heatCapacityJPerK[row]!;
-		right[row]![columnOf['own-current']]! += ownW[name] ?? 0;
+		right[row]![columnOf['own-current']]! += ownW[names[row]!] ?? 0;
 		right[row]![columnOf['outside-air']]! -= capacity * ambientKPerS;
 		for (let column = 0; column < COLUMNS; column++) {
 			let given = right[row]![column]! + (capacity / MINUTE_S) * lifts[row]![column]!;
@@ -47,11 +56,11 @@ function advance(
 			}
 			right[row]![column] = given;
 		}
-	});
-	names.forEach((_, row) => {
+	}
+	for (let row = 0; row < names.length; row++) {
 		for (let other = 0; other < names.length; other++) matrix[row]![other]! *= 0.5;
 		matrix[row]![row]! += heatCapacityJPerK[row]! / MINUTE_S;
-	});
+	}
 	return solveColumns(matrix, right);
 }
 
@@ -90,8 +99,13 @@ function gatherLinks(network: BatteryNetwork, moment: Moment, matrix: Lifts, rig
 export function keepLedger(scenario: Scenario, minutes: MinuteSeries, gridPoint: number): LedgerEntry[] {
 	const clock = new LegClock(scenario, minutes);
 	const { names } = clock.networkAt(0);
-	let lifts: Lifts = names.map(() => new Float64Array(COLUMNS));
-	for (let minute = 0; minute < gridPoint; minute++) lifts = advance(lifts, clock, minutes, scenario, minute);
+	const rows = (columns: number): Lifts => names.map(() => new Float64Array(columns));
+	const matrix = rows(names.length);
+	let lifts = rows(COLUMNS);
+	let free = rows(COLUMNS);
+	for (let minute = 0; minute < gridPoint; minute++) {
+		[lifts, free] = [advance(lifts, free, matrix, clock, { scenario, minutes }, minute), lifts];
+	}
 	const watts = flowsAt(scenario, clock, minutes, gridPoint);
 	const cells = lifts[names.indexOf('cells')]!;
 	return HEAT_SOURCES.map((source) => ({ source, watts: watts[source], kelvin: cells[columnOf[source]]! }));

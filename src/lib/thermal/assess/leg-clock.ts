@@ -46,7 +46,10 @@ export class LegClock {
 	momentAt(gridPoint: number, share: number): Moment {
 		const { scenario, minutes, drive } = this;
 		const { leg, constants } = this.legAt(gridPoint + share);
-		findDrive(scenario, leg, constants, minutes.startHour + (gridPoint + share) / 60, drive);
+		// The ground matters to few positions, and what drives it takes longer to find than all the rest.
+		if (scenario.position.roadUplift > 0) {
+			findDrive(scenario, leg, constants, minutes.startHour + (gridPoint + share) / 60, drive);
+		}
 		const mix = (series: Float64Array): number => {
 			const before = series[gridPoint]!;
 			return share === 0 ? before : before + share * (series[gridPoint + 1]! - before);

@@ -30,7 +30,7 @@ const discRadiusM = (areaM2: number): number => Math.sqrt(areaM2 / Math.PI);
  * Validity: flat patch and flat side about opposite one another; a factor of 1 square on, 0.5 at an angle, 0 hidden.
  * Source: the disc formula is that of Incropera et al., 6th ed., Table 13.2; the facing factors are engineering judgement.
  * @example
- * viewAreaOf({ widthM: 0.3, heightM: 0.15, gapM: 0.15, facing: 'square-on', facingAreaM2: 0.07095 }); // 0.01906
+ * viewAreaOf({ widthM: 0.3, heightM: 0.15, gapM: 0.15, facing: 'square-on', facingAreaM2: 0.07095 }); // 0.019052
  */
 export function viewAreaOf({ widthM, heightM, gapM, facing, facingAreaM2 }: HotPatch): number {
 	const patchM2 = widthM * heightM;

@@ -6,4 +6,5 @@ export { describeAnswer, describeAssumed, type DescribedAnswer } from './describ
 export { DAY_PLAN_TEMPLATES, type DayPlanTemplate } from './day-plan-templates';
 export { viewAreaOf, type HotPatch } from './derive-views';
 export { measureBattery, type BatteryShape } from './battery-shape';
+export { listAssumptions } from './answers';
 export { buildScenario } from './build-scenario';
