@@ -10,9 +10,9 @@ function run(input: ScenarioInput) {
 }
 
 /**
- * A mount on the exhaust side against the bulkhead. From a survey by tape: a hot patch of 0.08 m² square on, 110 mm
- * from a side of 0.06 m² (two discs: view factor 0.38), gives 0.03 m²; engine 0.1 m²; the battery stands in bay air with little moving
- * past it and an inner guard below. Chosen beforehand, not fitted.
+ * A mount on the exhaust side against the bulkhead. From a survey by tape: a hot patch of 0.075 m², square on, 115 mm
+ * from a side of 0.06 m² (two discs: view factor 0.41) gives 0.03 m²; engine 0.1 m²; the battery stands in bay air
+ * with little moving past it and an inner guard below. Chosen beforehand, not fitted.
  */
 const HOT_SIDE = {
 	bayAirFraction: 1,

@@ -1,0 +1,95 @@
+/** Something that can run a case: `time` is what the clock sees, `run` gives what is compared. */
+export interface Contender<Input, Output> {
+	name: string;
+	time: (input: Input) => unknown;
+	run: (input: Input) => Output;
+}
+
+interface Run {
+	minutes: readonly (readonly number[])[];
+	events: readonly { hour: number }[];
+	evaluations: number;
+}
+
+export interface Deviation {
+	evaluations: number;
+	largestK: number;
+	/** Null when the events are not the same ones. */
+	largestEventS: number | null;
+}
+
+export interface BenchRow extends Deviation {
+	name: string;
+	medianMs: number;
+}
+
+/** Runs shorter than this are repeated within one measurement, so that the clock's resolution does not matter. */
+const SHORTEST_MS = 20;
+const WARM_UP = 3;
+
+function timeOnce(action: () => unknown, repeats: number): number {
+	const start = performance.now();
+	for (let k = 0; k < repeats; k++) action();
+	return (performance.now() - start) / repeats;
+}
+
+export function findMedian(values: readonly number[]): number {
+	const sorted = [...values].sort((a, b) => a - b);
+	const middle = sorted.length >> 1;
+	return sorted.length % 2 ? sorted[middle]! : (sorted[middle - 1]! + sorted[middle]!) / 2;
+}
+
+/** All contenders take turns in each round, so that whatever else the machine does falls on all of them. */
+export function measureInterleaved<Input, Output>(
+	contenders: readonly Contender<Input, Output>[],
+	input: Input,
+	rounds: number
+): Map<string, number> {
+	const repeats = contenders.map(({ time }) => {
+		for (let k = 0; k < WARM_UP; k++) time(input);
+		return Math.max(1, Math.ceil(SHORTEST_MS / timeOnce(() => time(input), 1)));
+	});
+	const times = contenders.map((): number[] => []);
+	for (let round = 0; round < rounds; round++) {
+		contenders.forEach(({ time }, k) => times[k]!.push(timeOnce(() => time(input), repeats[k]!)));
+	}
+	return new Map(contenders.map(({ name }, k) => [name, findMedian(times[k]!)]));
+}
+
+/** How far a run is from a much tighter one. */
+export function compareRuns(run: Run, truth: Run): Deviation {
+	let largestK = 0;
+	truth.minutes.forEach((state, minute) =>
+		state.forEach((value, k) => {
+			largestK = Math.max(largestK, Math.abs(run.minutes[minute]![k]! - value));
+		})
+	);
+	const sameEvents = run.events.length === truth.events.length;
+	const delaysS = truth.events.map(({ hour }, k) => Math.abs((run.events[k]?.hour ?? NaN) - hour) * 3600);
+	return {
+		evaluations: run.evaluations,
+		largestK,
+		largestEventS: sameEvents ? Math.max(0, ...delaysS) : null
+	};
+}
+
+export function formatTable(rows: readonly BenchRow[]): string {
+	const first = rows[0]!.medianMs;
+	const cells = [
+		['', 'ms', 'ratio', 'evaluations', 'largest K', 'largest event s'],
+		...rows.map(({ name, medianMs, evaluations, largestK, largestEventS }) => [
+			name,
+			medianMs.toFixed(2),
+			(medianMs / first).toFixed(1),
+			String(evaluations),
+			largestK.toFixed(4),
+			largestEventS === null ? 'other events' : largestEventS.toFixed(2)
+		])
+	];
+	const widths = cells[0]!.map((_, k) => Math.max(...cells.map((row) => row[k]!.length)));
+	return cells
+		.map((row) =>
+			row.map((cell, k) => (k === 0 ? cell.padEnd(widths[k]!) : cell.padStart(widths[k]!))).join('  ')
+		)
+		.join('\n');
+}
