@@ -1,4 +1,4 @@
-import type { Chemistry, Sensor, UnderBonnetWord } from '../schemas/batteries';
+import type { BatteryInput, Chemistry, Sensor, UnderBonnetWord } from '../schemas/batteries';
 
 export const CHEMISTRY_WORDS: Record<Chemistry, string> = {
 	'lithium-iron-phosphate': 'Lithium iron phosphate'
@@ -40,3 +40,7 @@ export const UNDER_BONNET: Record<UnderBonnetWord, UnderBonnetText> = {
 			'The maker excludes under-bonnet use. Do not fit it there: no estimate outweighs the maker’s own word, and the warranty ends where it is ignored.'
 	}
 };
+
+/** "Emberlow Slab 100". */
+export const formatBattery = ({ maker, model }: Pick<BatteryInput, 'maker' | 'model'>): string =>
+	`${maker} ${model}`;

@@ -13,5 +13,3 @@ export function presentBattery(battery: BatteryRecord): BatteryView {
 		...{ underBonnet, underBonnetWords, dataSheet }
 	};
 }
-
-export const nameBattery = ({ maker, model }: BatteryRecord): string => `${maker} ${model}`;

@@ -1,11 +1,13 @@
+import { formatBattery } from '$lib/format/batteries';
+import { formatVehicle } from '$lib/format/vehicles';
 import type { JobRow, JobView, MountStanding } from '$lib/schemas/jobs';
 import type { Assessment, DayPlan, Job, Mount } from '../db/models';
-import { nameBattery, presentBattery } from './batteries';
+import { presentBattery } from './batteries';
 import { presentCustomer } from './customers';
 import { presentDayPlan } from './day-plans';
 import { presentMount } from './mounts';
 import { presentPlace } from './places';
-import { nameVehicle, presentVehicle } from './vehicles';
+import { presentVehicle } from './vehicles';
 
 /** A job as it was read: with its customer and its vehicle. */
 function withOwner({ customer, vehicle }: Job) {
@@ -19,8 +21,8 @@ export function presentJobRow(job: Job): JobRow {
 	return {
 		...{ id, number, stage, verdict, headroomK },
 		customerName: customer.name,
-		vehicle: nameVehicle(vehicle),
-		battery: batteryRecord ? nameBattery(batteryRecord) : null,
+		vehicle: formatVehicle(vehicle),
+		battery: batteryRecord ? formatBattery(batteryRecord) : null,
 		place: place?.name ?? null,
 		climateZone: place?.climateZone ?? null,
 		updatedAt: updatedAt.toISOString()

@@ -10,9 +10,6 @@ export function presentVehicle(vehicle: Vehicle): VehicleView {
 	};
 }
 
-/** "Farrow Drover 2019", as a line of a list says it. */
-export const nameVehicle = ({ make, model, modelYear }: Vehicle): string => `${make} ${model} ${modelYear}`;
-
 export function presentKnownVehicle(vehicle: Vehicle, lastJobNumber: number | null): KnownVehicle {
 	return { ...presentVehicle(vehicle), customerName: vehicle.customer?.name ?? '', lastJobNumber };
 }
