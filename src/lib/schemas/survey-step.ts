@@ -1,5 +1,7 @@
 import { z } from 'zod';
 import {
+	POSITION_KINDS,
+	POSITION_LABELS,
 	SURVEY_FIELDS,
 	UNKNOWN,
 	describeAnswer,
@@ -16,6 +18,7 @@ import {
 import { surveyAnswersSchema } from './survey';
 
 export {
+	POSITION_LABELS,
 	SURVEY_FIELDS,
 	UNKNOWN,
 	describeAnswer,
@@ -27,6 +30,9 @@ export {
 	type SurveyKey,
 	type SurveyQuestion
 };
+
+/** The kinds of place, as they are chosen. */
+export const POSITION_CHOICES = POSITION_KINDS.map((value) => ({ value, label: POSITION_LABELS[value] }));
 
 /** A question in a word or two, for the button that leads to it: "Next: air path". */
 const SHORT_WORDS: Record<string, string> = {
