@@ -10,8 +10,6 @@ export interface SheetRibbon extends Pick<
 	'curves' | 'legs' | 'darkSpans' | 'chargeSpans' | 'peakCellsC' | 'peakAtHour'
 > {
 	limits: Pick<BatteryInput, 'dischargeCutC' | 'dischargeResetC' | 'chargeCutC' | 'chargeResetC' | 'sensor'>;
-	/** What the air around the battery is called. */
-	airWord: string;
 }
 
 /** The customer's page, word for word as it was sent; its hash is what an acknowledgement is tied to. */

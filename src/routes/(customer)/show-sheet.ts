@@ -6,7 +6,8 @@ import { loadForm } from '$lib/server/http/forms';
 /** A stored sheet as its page shows it: the words as they are, the picture drawn from its stored data. */
 export async function showSheet({ content, contentSha256, acknowledgement }: SheetView) {
 	const { ribbon, ...words } = content;
-	const day = { ...ribbon, legs: ribbon.legs.map((leg) => ({ ...leg, kind: nameLeg(leg) })), band: null };
+	const legs = ribbon.legs.map((leg) => ({ ...leg, kind: nameLeg(leg) }));
+	const day = { ...ribbon, legs, airWord: 'bay air', band: null };
 	return {
 		...{ words, acknowledgement, day },
 		screen: drawRibbonPictures(day, ['phone', 'desk'], 'screen'),

@@ -5,7 +5,6 @@ import { formatNumber, formatTemperature } from '$lib/format/numbers';
 import { formatClock, formatClockHour, formatHours, sayHours } from '$lib/format/time';
 import type { AssessmentInputs, AssessmentResult } from '$lib/schemas/assessments';
 import type { SheetContent, SheetRibbon } from '$lib/schemas/sheets';
-import type { PositionKind } from '$lib/thermal/survey';
 import type { Verdict } from '$lib/schemas/verdicts';
 
 /** Changes with every change of the sheet's own words: an acknowledgement is tied to what was read. */
@@ -24,14 +23,6 @@ export interface SheetSource {
 	others: SheetContent['alternatives'];
 }
 
-/** What the air around the battery is called in the picture. */
-const AIR_WORDS: Record<PositionKind, string> = {
-	'under-bonnet': 'bay air',
-	cabin: 'cabin air',
-	'cargo-area': 'air in the cargo area',
-	'canopy-box': 'air in the box',
-	'chassis-rail': 'air at the rail'
-};
 const LATER_H = 0.75;
 const MINUTES_AN_HOUR = 60;
 
@@ -62,16 +53,12 @@ function hottestHourOutside({ curves }: AssessmentResult): number {
 	return curves.startHour + (index * curves.stepMin) / MINUTES_AN_HOUR;
 }
 
-/** The hottest hour of the battery is not the hottest hour of the day: said where this day shows it. */
+/** The hottest hour under a bonnet is not the hottest hour of the day: said where this day shows it. */
 function sayWhyLater({ inputs, result }: SheetSource): string[] {
 	const later = result.peakAtHour - hottestHourOutside(result);
-	if (later < LATER_H) return [];
-	const soak =
-		inputs.mount.survey.positionKind === 'under-bonnet'
-			? ', and the engine bay warms up again each time the engine stops'
-			: '';
+	if (inputs.mount.survey.positionKind !== 'under-bonnet' || later < LATER_H) return [];
 	return [
-		`The battery is at its hottest about ${sayHours(later)} after the hottest hour outside: it holds heat for hours${soak}.`
+		`The battery is at its hottest about ${sayHours(later)} after the hottest hour outside: it holds heat for hours, and the engine bay warms up again each time the engine stops.`
 	];
 }
 
@@ -122,19 +109,18 @@ function listFigures({ inputs: { battery }, result }: SheetSource): SheetContent
 		{ label: 'Room to spare before that', value: sayRoom(result) },
 		{ label: 'Fridge dark', value: sayDark(result) },
 		{
-			label: 'Too hot to charge',
-			value: result.chargeMissedHours === 0 ? 'not at all' : formatHours(result.chargeMissedHours)
+			label: 'Charging lost to heat',
+			value: result.chargeMissedHours === 0 ? 'none' : formatHours(result.chargeMissedHours)
 		}
 	];
 }
 
-function drawnFrom({ inputs: { battery, mount }, result }: SheetSource): SheetRibbon {
+function drawnFrom({ inputs: { battery }, result }: SheetSource): SheetRibbon {
 	const { curves, legs, darkSpans, chargeSpans, peakCellsC, peakAtHour } = result;
 	const { dischargeCutC, dischargeResetC, chargeCutC, chargeResetC, sensor } = battery;
 	return {
 		...{ curves, legs, darkSpans, chargeSpans, peakCellsC, peakAtHour },
-		limits: { dischargeCutC, dischargeResetC, chargeCutC, chargeResetC, sensor },
-		airWord: AIR_WORDS[mount.survey.positionKind]
+		limits: { dischargeCutC, dischargeResetC, chargeCutC, chargeResetC, sensor }
 	};
 }
 
