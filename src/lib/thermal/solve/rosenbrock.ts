@@ -26,6 +26,8 @@ const C = [
 	[7.496443313967647, -10.24680431464352, -33.99990352819905, 11.7089089320616],
 	[8.083246795921522, -7.981132988064893, -31.52159432874371, 16.31930543123136, -6.058818238834054]
 ] as const;
+/** Share of the step over which dH/dt is found: small against what bends, large against rounding. */
+const TIME_SHARE = 1e-3;
 /** The two inner coefficients of the cubic between the ends of a step. */
 const DENSE = [
 	[10.12623508344586, -7.487995877610167, -34.80091861555747, -7.992771707568823, 1.025137723295662],
@@ -108,14 +110,14 @@ export class RosenbrockStepper {
 	/**
 	 * Takes up a new starting point.
 	 *
-	 * @param withinS how far time may be varied to find dH/dt, s
+	 * @param withinS about how long the step will be, s
 	 * @param goesOn the point is the end of the last step and nothing has changed there: its heats are known
 	 */
 	prepare(timeS: number, temps: Float64Array, withinS: number, goesOn: boolean): void {
 		const { system, step, startHeats, timeSlope, work } = this;
 		step.timeS = timeS;
 		step.from.set(temps);
-		const delta = Math.min(withinS, 1);
+		const delta = TIME_SHARE * withinS;
 		this.evaluate(timeS + delta, step.from, work);
 		if (goesOn) {
 			startHeats.set(this.endHeats);

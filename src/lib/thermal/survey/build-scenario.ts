@@ -64,7 +64,16 @@ const STANDING_ASSUMPTIONS = [
  * @returns the scenario, one derivation for each derived value, and the assumptions in plain sentences
  * @throws EngineInputError where a dimension is not above zero or the altitude is outside −500…11000 m
  * @example
- * buildScenario({ vehicle, battery, survey: { positionKind: 'cabin' }, dayPlan, hotDay, altitudeM: 0, coefficients: {} })
+ * const vehicle = { massKg: 2900, dragAreaM2: 1.35, towMassKg: 0, towDragAreaM2: 0 };
+ * const size = { lengthMm: 330, widthMm: 172, heightMm: 215, massKg: 12.6 };
+ * const limits = { sensor: 'cells', chargeCutC: 60, chargeResetC: 50, dischargeCutC: 75, dischargeResetC: 62 };
+ * const more = { capacityAh: 100, internalResistanceMohm: 12, maxChargeA: 40, cutDelayS: 0, autoReset: true };
+ * const battery = { ...size, ...limits, ...more };
+ * const hotDay = { hotDayMaxC: 42, dailyRangeK: 15, sunPeakWPerM2: 1000 };
+ * const dayPlan = DAY_PLAN_TEMPLATES[0].plan;
+ * const survey = { positionKind: 'cabin' };
+ * const built = buildScenario({ vehicle, battery, survey, dayPlan, hotDay, altitudeM: 0, coefficients: {} });
+ * built.scenario.position.bayAirFraction; // 0
  */
 export function buildScenario(inputs: SurveyInputs): BuiltScenario {
 	const draft = new ScenarioDraft(inputs.coefficients);
