@@ -87,7 +87,9 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 
 	page('/jobs', 'workshop'),
 	page('/jobs/new', 'workshop', 'create', 'repeat'),
-	owned('/jobs/[jobId]', 'workshop'),
+	owned('/jobs/[jobId]', 'workshop', 'assess'),
+	owned('/jobs/[jobId]/customer', 'workshop', 'default'),
+	owned('/jobs/[jobId]/vehicle', 'workshop', 'default'),
 	owned('/jobs/[jobId]/battery', 'workshop', 'default'),
 	owned('/jobs/[jobId]/climate', 'workshop', 'default'),
 	owned('/jobs/[jobId]/day', 'workshop', 'default'),

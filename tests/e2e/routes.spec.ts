@@ -53,7 +53,7 @@ async function findIds(context: APIRequestContext, customer: { name: string; ema
 	return {
 		jobId,
 		mountId: of(job.mounts[0]),
-		step: '1',
+		step: 'exhaust',
 		assessmentId: of(assessments.rows[0]),
 		recommendationId: /\/recommendations\/(\d+)\/print/.exec(jobPage)?.[1] ?? 'none',
 		batteryId: of(job.battery),

@@ -1,43 +1,53 @@
-import { expect, type Page } from '@playwright/test';
+import { randomUUID } from 'node:crypto';
+import { expect, type Browser, type BrowserContext, type Page } from '@playwright/test';
 import { ask, assessAll, makeAssessableJob } from './assessable-job';
+import { signInAs } from './support';
 
-const DECISION = {
-	decidedBy: 'Ilse Tarn',
-	reason: 'No other place is free; a duct is fitted before summer.'
-};
+/** As long as a reason may be, nearly: what the paper must take. */
+export const REASON = 'The tray is fixed and the customer wants it there all the same. '.repeat(15).trim();
 
-/** A job of its own whose hot corner (or cooled cabin) is recommended and can be sent. */
-export async function makeRecommendedJob(page: Page, which: 'hot' | 'cool' = 'hot') {
-	const job = await makeAssessableJob(page);
-	const assessments = await assessAll(page, job.jobId);
-	const chosen = assessments[which === 'hot' ? 0 : 1]!;
-	await ask(page, 'POST', '/api/v1/recommendations', {
-		assessmentId: chosen.id,
-		...(which === 'hot' ? DECISION : {})
+export interface SendableJob {
+	jobId: number;
+	customerName: string;
+	recommendationId: unknown;
+	/** The installer who made it, still signed in. */
+	cookies: Awaited<ReturnType<BrowserContext['cookies']>>;
+}
+
+/** A job of its own with as many positions as one takes, whose hot corner is recommended against its verdict. */
+export async function makeSendableJob(browser: Browser, baseURL: string | undefined): Promise<SendableJob> {
+	const context = await browser.newContext({ baseURL: baseURL! });
+	const page = await context.newPage();
+	await signInAs(page, 'installer');
+	const { jobId, customerName } = await makeAssessableJob(page, { mounts: 6 });
+	const [hot] = await assessAll(page, jobId);
+	const recommendation = await ask(page, 'POST', '/api/v1/recommendations', {
+		...{ assessmentId: hot!.id, decidedBy: 'Konstantin Abernathy-Wollstonecraft', reason: REASON }
 	});
-	return { ...job, sendTo: `${job.customerName.toLowerCase().replace(/\W+/g, '.')}@travellers.example` };
+	const cookies = await context.cookies();
+	await context.close();
+	return { jobId, customerName, recommendationId: recommendation.id, cookies };
 }
 
-/** Sends a job's page through the form that the shop uses. */
-export async function sendFromPage(page: Page, jobId: number, sendTo: string): Promise<void> {
-	await page.goto(`/jobs/${jobId}/sheets`);
-	await page.getByLabel('Send to').fill(sendTo);
-	await page.getByRole('button', { name: /Send (the page|a new link)/ }).click();
-	await expect(page.getByText(`To ${sendTo}`).first()).toBeVisible();
+export const newAddress = (): string => `reader.${randomUUID().slice(0, 8)}@travellers.example`;
+
+/** Sends the job's page and gives its link, as it stands in the letter. */
+export async function sendSheet(page: Page, { jobId, recommendationId }: SendableJob) {
+	const sendTo = newAddress();
+	await ask(page, 'POST', `/api/v1/jobs/${jobId}/sheets`, { recommendationId, sendTo });
+	await openLetter(page, sendTo);
+	return { sendTo, link: await readLink(page) };
 }
 
-/** Waits for the newest letter to an address in the local mailbox and opens it. */
+/** Waits for the letter to an address in the local mailbox and opens it. */
 export async function openLetter(page: Page, recipient: string): Promise<void> {
+	const row = page.getByRole('row').filter({ hasText: recipient });
 	await expect(async () => {
 		await page.goto('/mailbox');
-		await page
-			.getByRole('row')
-			.filter({ hasText: recipient })
-			.first()
-			.getByRole('link')
-			.click({ timeout: 2_000 });
-	}).toPass({ timeout: 30_000 });
-	await expect(page.getByText(recipient)).toBeVisible();
+		await expect(row).toHaveCount(1, { timeout: 1_000 });
+	}).toPass();
+	await row.getByRole('link').click();
+	await page.waitForURL(/\/mailbox\/.+/);
 }
 
 /** The link that the open letter holds. */

@@ -1,0 +1,100 @@
+import { expect, test } from '@playwright/test';
+import { ask, assessAll, makeAssessableJob } from './assessable-job';
+import { expectNoViolations, signInAs } from './support';
+
+test.beforeEach(({ page }) => signInAs(page, 'installer'));
+
+test('an assessment says what happens, why, and what made it', async ({ page }) => {
+	const { jobId, customerName } = await makeAssessableJob(page);
+	const [hot] = await assessAll(page, jobId);
+	await page.goto(`/assessments/${String(hot!.id)}`);
+	await expect(page.getByRole('heading', { level: 1, name: 'Cuts out' })).toBeVisible();
+	await expect(page.getByText(/The fridge goes dark at \d\d:\d\d/)).toBeVisible();
+	await expect(page.getByText(customerName)).toBeVisible();
+	await expect(page.getByRole('img', { name: /The cells are hottest at/ }).first()).toBeVisible();
+	for (const label of [
+		'Headroom',
+		'Cells hottest',
+		'Goes dark',
+		'Comes back',
+		'Dark in all',
+		'Charge missed'
+	]) {
+		await expect(page.getByRole('term').filter({ hasText: new RegExp(`^${label}$`) })).toBeVisible();
+	}
+	await expect(page.getByText('Not for engine compartments.').first()).toBeVisible();
+	await expect(page.getByRole('link', { name: /^B: Behind seat/ })).toBeVisible();
+	await expect(page.getByText('An estimate, not a certificate').first()).toBeVisible();
+	await expect(page.getByText(String(hot!.inputsSha256))).toBeVisible();
+	await expectNoViolations(page);
+});
+
+test('what went in can be read, answer by answer and number by number', async ({ page }) => {
+	const { jobId } = await makeAssessableJob(page);
+	const [hot] = await assessAll(page, jobId);
+	await page.goto(`/assessments/${String(hot!.id)}`);
+	await page.getByText('The mount as it was surveyed').click();
+	await expect(page.getByText('Gap to the exhaust')).toBeVisible();
+	await page.getByText('How each number of the model came about').click();
+	await expect(page.getByText(/coaxial parallel discs/).first()).toBeVisible();
+	await expectNoViolations(page);
+});
+
+test('can be made again on the spot, digit for digit', async ({ page }) => {
+	const { jobId } = await makeAssessableJob(page);
+	const [hot] = await assessAll(page, jobId);
+	await page.goto(`/assessments/${String(hot!.id)}`);
+	await page.getByRole('button', { name: 'Make it again and compare' }).click();
+	await expect(page.getByText('every digit is the same')).toBeVisible();
+});
+
+test('says when it is out of date, and the mount is assessed again from there', async ({ page }) => {
+	const { jobId } = await makeAssessableJob(page);
+	const [hot] = await assessAll(page, jobId);
+	const plan = await ask(page, 'GET', `/api/v1/jobs/${jobId}/day-plan`);
+	const { id: _id, jobId: _job, ...changed } = plan;
+	await ask(page, 'PUT', `/api/v1/jobs/${jobId}/day-plan`, { ...changed, chargerMaxA: 20 });
+	await page.goto(`/assessments/${String(hot!.id)}`);
+	await expect(page.getByText('Out of date')).toBeVisible();
+	await expect(page.getByRole('link', { name: 'Recommend this mount' })).toHaveCount(0);
+	await page.getByRole('button', { name: 'Assess it as it is now' }).click();
+	await page.waitForURL((url) => url.pathname !== `/assessments/${String(hot!.id)}`);
+	await expect(page.getByText('Out of date')).toHaveCount(0);
+	await expect(page.getByRole('link', { name: 'Recommend this mount' })).toBeVisible();
+});
+
+test('mounts stand side by side, figure by figure, and one is chosen', async ({ page, isMobile }) => {
+	const { jobId } = await makeAssessableJob(page, { mounts: 3 });
+	await page.goto(`/jobs/${jobId}/compare`);
+	await page.getByRole('button', { name: 'Assess all surveyed mounts' }).click();
+	const figures = isMobile ? page.locator('.narrow') : page.locator('table.wide');
+	await expect(figures.getByText('cuts out').first()).toBeVisible();
+	await expect(figures.getByText('rides it out').first()).toBeVisible();
+	await expect(figures.getByText('Headroom').first()).toBeVisible();
+	await expectNoViolations(page);
+	await figures.getByRole('link', { name: 'Recommend B' }).click();
+	await expect(page.getByRole('heading', { level: 1, name: /^Recommend mount B/ })).toBeVisible();
+});
+
+test('the interface runs a scenario as the command line does, and refuses what cannot be', async ({
+	page
+}) => {
+	const report = await ask(page, 'POST', '/api/v1/simulations', {
+		legs: [{ minutes: 240, engineOn: true, speedKmh: 90 }, { minutes: 240 }]
+	});
+	expect(Object.keys(report).sort()).toEqual(
+		['end', 'energy', 'evaluations', 'events', 'hourly', 'peakAtHour', 'peakCellsC', 'peaks', 'steps'].sort()
+	);
+	expect((report.peaks as Record<string, unknown>).shield).toBeNull();
+	const post = (data: unknown) => page.request.post('/api/v1/simulations', { data });
+	const refused = await post({ legs: [{ minutes: 60 }], battery: { cellHeatCapacity: 0 } });
+	expect(refused.status()).toBe(422);
+	expect(refused.headers()['content-type']).toContain('application/problem+json');
+	expect(await refused.json()).toMatchObject({
+		code: 'invalid_input',
+		problems: [{ code: 'out_of_range', path: 'battery.cellHeatCapacity', value: 0 }]
+	});
+	const large = await post({ legs: [{ minutes: 60 }], note: 'x'.repeat(600_000) });
+	expect(large.status()).toBe(413);
+	expect(await large.json()).toMatchObject({ code: 'too_large' });
+});

@@ -1,0 +1,84 @@
+import { expect, test, type Page } from '@playwright/test';
+import { CROWDED_DAY, assessAll, makeAssessableJob } from './assessable-job';
+import { expectNoViolations, signInAs } from './support';
+
+const WHO = 'Ilse Tarn';
+const WHY = 'No other place is free; a duct is fitted before summer.';
+
+test.beforeEach(({ page }) => signInAs(page, 'installer'));
+
+/** Pages of the paper that the browser makes, without colours behind. */
+async function printPages(page: Page): Promise<number> {
+	const pdf = await page.pdf({ format: 'A4', printBackground: false, preferCSSPageSize: true });
+	return pdf.toString('latin1').match(/\/Type\s*\/Page\b/g)?.length ?? 0;
+}
+
+test('a mount that rides it out is recommended and printed', async ({ page }) => {
+	const { jobId, customerName } = await makeAssessableJob(page);
+	const [, cool] = await assessAll(page, jobId);
+	await page.goto(`/assessments/${String(cool!.id)}`);
+	await page.getByRole('link', { name: 'Recommend this mount' }).click();
+	await expect(page.getByLabel('Who decided')).toHaveCount(0);
+	await expectNoViolations(page);
+	await page.getByRole('button', { name: 'Recommend mount B' }).click();
+	await expect(page.getByText('Recommended and kept.')).toBeVisible();
+	await expectNoViolations(page);
+	await page.getByRole('link', { name: 'Print the recommendation' }).click();
+	await expect(page.getByRole('heading', { level: 1, name: 'Rides it out' })).toBeVisible();
+	await expect(page.getByText(customerName)).toBeVisible();
+	for (const who of ['Installer', 'Customer'])
+		await expect(page.getByText(who, { exact: true })).toBeVisible();
+	await expect(page.getByText(/instructions and warranty terms of the battery maker/)).toBeVisible();
+	await expect(page.getByText(String(cool!.inputsSha256))).toBeVisible();
+	await expectNoViolations(page);
+	await page.emulateMedia({ media: 'print' });
+	await expectNoViolations(page);
+});
+
+test('going ahead against the verdict takes a named person and a reason', async ({ page }) => {
+	const { jobId } = await makeAssessableJob(page);
+	const [hot] = await assessAll(page, jobId);
+	await page.goto(`/jobs/${jobId}/recommendation?assessment=${String(hot!.id)}`);
+	await expectNoViolations(page);
+	await page.getByLabel('Who decided').fill(WHO);
+	await page.getByRole('button', { name: 'Recommend it against the verdict' }).click();
+	await expect(page.getByRole('alert').filter({ hasText: 'Say why it goes ahead' }).first()).toBeVisible();
+	await expect(page.getByLabel('Who decided')).toHaveValue(WHO);
+	await expectNoViolations(page);
+	await page.getByLabel('Reason').fill(WHY);
+	await page.getByRole('button', { name: 'Recommend it against the verdict' }).click();
+	await expect(page.getByText('Recommended and kept.')).toBeVisible();
+	await page.getByRole('link', { name: 'Print the recommendation' }).click();
+	await expect(page.getByText(`Decided by ${WHO}.`)).toBeVisible();
+	await expect(page.getByText(`Reason: ${WHY}`)).toBeVisible();
+});
+
+test('it works without a script', async ({ browser, page, baseURL }) => {
+	const { jobId } = await makeAssessableJob(page);
+	const [hot] = await assessAll(page, jobId);
+	const storageState = await page.context().storageState();
+	const context = await browser.newContext({ javaScriptEnabled: false, storageState, baseURL: baseURL! });
+	const plain = await context.newPage();
+	await plain.goto(`/jobs/${jobId}/recommendation?assessment=${String(hot!.id)}`);
+	await plain.getByLabel('Reason').fill(WHY);
+	await plain.getByRole('button', { name: 'Recommend it against the verdict' }).click();
+	await expect(plain.getByLabel('Reason')).toHaveValue(WHY);
+	await plain.getByLabel('Who decided').fill(WHO);
+	await plain.getByRole('button', { name: 'Recommend it against the verdict' }).click();
+	await expect(plain.getByText('Recommended and kept.')).toBeVisible();
+	await context.close();
+});
+
+test('the paper is two pages of A4, even when there is as much to say as there can be', async ({ page }) => {
+	const { jobId } = await makeAssessableJob(page, { mounts: 6, legs: CROWDED_DAY });
+	const [hot] = await assessAll(page, jobId);
+	await page.goto(`/jobs/${jobId}/recommendation?assessment=${String(hot!.id)}`);
+	await page.getByLabel('Who decided').fill(WHO);
+	await page
+		.getByLabel('Reason')
+		.fill('The trip is short and the shop knows the road well. '.repeat(19).trim());
+	await page.getByRole('button', { name: 'Recommend it against the verdict' }).click();
+	await page.getByRole('link', { name: 'Print the recommendation' }).click();
+	await expect(page.getByRole('heading', { level: 1, name: 'Cuts out' })).toBeVisible();
+	expect(await printPages(page)).toBe(2);
+});
