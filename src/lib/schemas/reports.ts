@@ -44,7 +44,10 @@ export interface AssessmentReport {
 	legs: ReportLine[];
 	survey: ReportQuestion[];
 	derivations: ReportDerivation[];
+	/** One sentence for each thing that nobody measured. */
 	assumptions: string[];
+	/** Those of them that the answers to the survey do not show by themselves. */
+	standing: string[];
 	versions: ReportLine[];
 	maker: MakerCaution | null;
 }

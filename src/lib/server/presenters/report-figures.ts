@@ -21,11 +21,14 @@ function sayReturn({ darkSpans, resetAtHour }: AssessmentResult, autoReset: bool
 	return { label, value: 'not within the plan', ...(note ? { note } : {}) };
 }
 
-function sayMissed({ chargeMissedAh, chargeMissedHours }: AssessmentResult, chargeCutC: number): ReportLine {
+function sayMissed({ chargeMissedAh }: AssessmentResult, chargeCutC: number): ReportLine {
 	const label = 'Charge missed';
-	if (chargeMissedHours <= 0) return { label, value: 'none' };
-	const note = `Charging stops at ${formatTemperature(chargeCutC)}: ${formatHours(chargeMissedHours)} without it.`;
-	return { label, value: formatAmpHours(chargeMissedAh), note };
+	if (chargeMissedAh <= 0) return { label, value: 'none' };
+	return {
+		label,
+		value: formatAmpHours(chargeMissedAh),
+		note: `Charging stops at ${formatTemperature(chargeCutC)}.`
+	};
 }
 
 /** The figures beside the picture, in the order in which people ask for them. */

@@ -15,6 +15,7 @@ import { formatClock, formatClockHour, formatHours, formatMinutes } from '$lib/f
 import type { AssessmentInputs, AssessmentResult } from '$lib/schemas/assessments';
 import type { MakerCaution, ReportDerivation, ReportLine, ReportQuestion } from '$lib/schemas/reports';
 import { describeAnswer, questionsFor } from '$lib/thermal/survey';
+import { listAssumptions } from '$lib/thermal/survey/answers';
 
 export function listVehicle({ vehicle }: AssessmentInputs): ReportLine[] {
 	const { make, model, modelYear, registration, massKg, dragAreaM2, towMassKg, towDragAreaM2 } = vehicle;
@@ -29,7 +30,15 @@ export function listVehicle({ vehicle }: AssessmentInputs): ReportLine[] {
 	];
 }
 
-export function listBattery({ battery }: AssessmentInputs): ReportLine[] {
+/** The maker's own words stand here, unless the caution carries them. */
+function sayUnderBonnet(inputs: AssessmentInputs): string {
+	const { underBonnet, underBonnetWords } = inputs.battery;
+	const { short } = UNDER_BONNET[underBonnet];
+	return underBonnetWords && !makerCaution(inputs) ? `${short}: “${underBonnetWords}”` : short;
+}
+
+export function listBattery(inputs: AssessmentInputs): ReportLine[] {
+	const { battery } = inputs;
 	const { maker, model, chemistry, capacityAh, lengthMm, widthMm, heightMm, massKg } = battery;
 	const pair = (cutC: number, resetC: number) =>
 		`off at ${formatTemperature(cutC)}, back at ${formatTemperature(resetC)}`;
@@ -41,11 +50,7 @@ export function listBattery({ battery }: AssessmentInputs): ReportLine[] {
 		{ label: 'Supply', value: pair(battery.dischargeCutC, battery.dischargeResetC) },
 		{ label: 'Charging', value: pair(battery.chargeCutC, battery.chargeResetC) },
 		{ label: 'Its BMS measures', value: SENSOR_WORDS[battery.sensor].toLowerCase() },
-		{
-			label: 'Under-bonnet use, says its maker',
-			value: UNDER_BONNET[battery.underBonnet].short,
-			...(battery.underBonnetWords ? { note: `“${battery.underBonnetWords}”` } : {})
-		},
+		{ label: 'Under-bonnet use, says its maker', value: sayUnderBonnet(inputs) },
 		...(battery.dataSheet ? [{ label: 'Written in', value: battery.dataSheet }] : [])
 	];
 }
@@ -53,7 +58,8 @@ export function listBattery({ battery }: AssessmentInputs): ReportLine[] {
 export function listHotDay({ place, hotDay, dayPlan }: AssessmentInputs): ReportLine[] {
 	const where = place.region ? `${place.name}, ${place.region}` : place.name;
 	return [
-		{ label: 'Place', value: where, note: formatClimateZone(place.climateZone) },
+		{ label: 'Place', value: where },
+		{ label: 'Climate', value: formatClimateZone(place.climateZone) },
 		{ label: 'Altitude', value: formatWithUnit(place.altitudeM, 'm') },
 		{
 			label: 'Hot day',
@@ -105,6 +111,11 @@ export function listSurvey({ mount: { survey } }: AssessmentInputs): ReportQuest
 			value: assumed === null ? (answer ?? '') : `${answer ?? 'Not answered'}: ${assumed} assumed`
 		}))
 	}));
+}
+
+export function listStanding({ mount: { survey }, assumptions }: AssessmentInputs): string[] {
+	const ofAnswers = new Set(listAssumptions(survey));
+	return assumptions.filter((sentence) => !ofAnswers.has(sentence));
 }
 
 /** Four significant digits without an exponent: "0.2768", "12850". */

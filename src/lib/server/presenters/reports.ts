@@ -11,6 +11,7 @@ import {
 	listDerivations,
 	listHotDay,
 	listLegs,
+	listStanding,
 	listSurvey,
 	listVehicle,
 	makerCaution,
@@ -46,6 +47,7 @@ export function presentReport(assessment: AssessmentView): AssessmentReport {
 		survey: listSurvey(inputs),
 		derivations: listDerivations(inputs),
 		assumptions: inputs.assumptions,
+		standing: listStanding(inputs),
 		versions: listVersions(assessment),
 		maker: makerCaution(inputs)
 	};

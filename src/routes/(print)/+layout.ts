@@ -1,0 +1,2 @@
+/** Paper needs no script. */
+export const csr = false;
