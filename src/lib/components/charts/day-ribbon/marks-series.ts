@@ -6,6 +6,9 @@ import type { RibbonPalette } from './palette';
 
 export const RIBBON_FONT = 'Roboto Flex Variable, Roboto, Helvetica Neue, Arial, sans-serif';
 
+/** A tenth of a px is finer than any screen. */
+const roundPx = (px: number): number => Math.round(px * 10) / 10;
+
 /** Marks as one series of the chart library, drawn in the order given. */
 export function marksSeries(palette: RibbonPalette, z: number, marks: Mark[]): CustomSeriesOption {
 	return {
@@ -59,8 +62,8 @@ function elementOf(palette: RibbonPalette, mark: Mark): CustomSeriesRenderItemRe
 				type: 'text',
 				style: {
 					text: mark.text,
-					x: mark.x,
-					y: mark.y,
+					x: roundPx(mark.x),
+					y: roundPx(mark.y),
 					align: mark.align,
 					verticalAlign: 'middle',
 					fill: palette[mark.fill],
