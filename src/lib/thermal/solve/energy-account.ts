@@ -1,9 +1,9 @@
 import type { HeatSystem } from './heat-system';
 import { readStep, type RosenbrockStepper, type Step } from './rosenbrock';
 
-/** Lobatto's rule with four points, exact to the fifth degree: both ends with 1/12 each, two inner ones with 5/12. */
-const END_WEIGHT = 1 / 12;
-const INNER_SHARES = [(1 - Math.sqrt(1 / 5)) / 2, (1 + Math.sqrt(1 / 5)) / 2] as const;
+/** Simpson's rule, exact to the third degree, as the curve inside a step is: both ends with 1/6 each, the middle 2/3. */
+const END_WEIGHT = 1 / 6;
+const MIDDLE_WEIGHT = 2 / 3;
 
 /** What passes through a node counts at least as much as would warm it by this: below there is only rounding. */
 const LEAST_PASSED_K = 1e-2;
@@ -11,7 +11,7 @@ const LEAST_PASSED_K = 1e-2;
 /**
  * Adds up the heats along the curve between the steps and holds them against the heat that the nodes have stored.
  *
- * The heats are integrated on their own (Lobatto's rule on the dense output), so that a step too long, a wrong
+ * The heats are integrated on their own (Simpson's rule on the dense output), so that a step too long, a wrong
  * derivative or a heat that is given but not taken shows as an imbalance.
  */
 export class EnergyAccount {
@@ -41,20 +41,17 @@ export class EnergyAccount {
 		const { gained, stored, passed, temps, heats, amounts } = this;
 		const { startHeats, endHeats } = this.stepper;
 		const endWeightS = END_WEIGHT * lengthS;
-		const innerWeightS = (0.5 - END_WEIGHT) * lengthS;
 		for (let i = 0; i < from.length; i++) {
 			gained[i] = gained[i]! + endWeightS * (startHeats[i]! + endHeats[i]!);
 			stored[i] = stored[i]! + system.capacityJPerK[i]! * (to[i]! - from[i]!);
 		}
-		for (const share of INNER_SHARES) {
-			for (let i = 0; i < from.length; i++) temps[i] = readStep(step, i, share);
-			this.stepper.evaluate(step.timeS + share * lengthS, temps, heats);
-			system.sumThroughput(amounts);
-			for (let i = 0; i < from.length; i++) {
-				gained[i] = gained[i]! + innerWeightS * heats[i]!;
-				// What comes in is counted, and what goes out: half of both has passed.
-				passed[i] = passed[i]! + (lengthS * amounts[i]!) / 4;
-			}
+		for (let i = 0; i < from.length; i++) temps[i] = readStep(step, i, 0.5);
+		this.stepper.evaluate(step.timeS + 0.5 * lengthS, temps, heats);
+		system.sumThroughput(amounts);
+		for (let i = 0; i < from.length; i++) {
+			gained[i] = gained[i]! + MIDDLE_WEIGHT * lengthS * heats[i]!;
+			// What comes in is counted, and what goes out: half of both has passed.
+			passed[i] = passed[i]! + (lengthS * amounts[i]!) / 2;
 		}
 	}
 

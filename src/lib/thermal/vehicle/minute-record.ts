@@ -27,7 +27,8 @@ export interface Standing {
 export class MinuteRecord {
 	readonly minutes: MinuteSeries;
 	private next = 0;
-	private readonly nodeOrder: readonly NodeName[];
+	/** One column a solved node, in the order of the solver. */
+	private readonly columns: readonly Float64Array[];
 
 	constructor(
 		private readonly scenario: Scenario,
@@ -41,7 +42,7 @@ export class MinuteRecord {
 			NodeName,
 			Float64Array
 		>;
-		this.nodeOrder = storedNames as readonly NodeName[];
+		this.columns = storedNames.map((name) => nodes[name as NodeName]);
 		const ambient = column();
 		for (let minute = 0; minute < count; minute++) {
 			ambient[minute] = ambientTempC(startHour + minute / MINUTES_PER_H, scenario.climate);
@@ -62,12 +63,12 @@ export class MinuteRecord {
 	/** Fills the grid points from the start of the step up to, but not at, its end. */
 	fillStep(step: Step, standing: Standing): void {
 		const endS = step.timeS + step.lengthS;
-		const { minutes, nodeOrder } = this;
+		const { minutes, columns } = this;
 		for (; this.next < minutes.count && this.next * MINUTE_S < endS; this.next++) {
 			const minute = this.next;
 			const share = (minute * MINUTE_S - step.timeS) / step.lengthS;
-			for (let node = 0; node < nodeOrder.length; node++) {
-				minutes.nodes[nodeOrder[node]!][minute] = readStep(step, node, share);
+			for (let node = 0; node < columns.length; node++) {
+				columns[node]![minute] = readStep(step, node, share);
 			}
 			this.fillStanding(minute, standing);
 		}
@@ -75,10 +76,10 @@ export class MinuteRecord {
 
 	/** Fills what is left once the last leg has ended: at most its last instant. */
 	fillEnd(temps: Float64Array, standing: Standing): void {
-		const { minutes, nodeOrder } = this;
+		const { minutes, columns } = this;
 		for (; this.next < minutes.count; this.next++) {
-			for (let node = 0; node < nodeOrder.length; node++) {
-				minutes.nodes[nodeOrder[node]!][this.next] = temps[node]!;
+			for (let node = 0; node < columns.length; node++) {
+				columns[node]![this.next] = temps[node]!;
 			}
 			this.fillStanding(this.next, standing);
 		}
