@@ -7,7 +7,7 @@ export type LegKind = (typeof LEG_KINDS)[number];
 
 export const MAX_PLAN_LEGS = 48;
 
-export const planLegSchema = z.object({
+const legFields = z.object({
 	kind: z.enum(LEG_KINDS).meta({ label: 'What happens' }),
 	minutes: measure('Length', 'min', 1, 24 * 60),
 	speedKmh: measure('Speed', 'km/h', 0, 200),
@@ -17,6 +17,21 @@ export const planLegSchema = z.object({
 	engineOn: z.boolean().meta({ label: 'Engine running' }),
 	bonnetOpen: z.boolean().meta({ label: 'Bonnet up' }),
 	loadA: measure('Load', 'A', 0, 300)
+});
+
+export const STILL_KINDS: readonly LegKind[] = ['stop', 'camp'];
+
+/** A leg must not say two things at once. */
+export const planLegSchema = legFields.superRefine(({ kind, speedKmh, bonnetOpen }, context) => {
+	const isStill = STILL_KINDS.includes(kind);
+	if (isStill && speedKmh > 0) {
+		const message = `Speed must be 0 km/h at a ${kind}.`;
+		context.addIssue({ code: 'custom', path: ['speedKmh'], message });
+	}
+	if (!isStill && bonnetOpen) {
+		const message = 'Bonnet up is for stops and camps only.';
+		context.addIssue({ code: 'custom', path: ['bonnetOpen'], message });
+	}
 });
 export type PlanLeg = z.infer<typeof planLegSchema>;
 

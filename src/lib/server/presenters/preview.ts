@@ -12,8 +12,8 @@ export interface PreviewView {
 
 function listMissing({ id, battery, place }: JobView): PreviewView['missing'] {
 	return [
-		...(battery ? [] : [{ words: 'Choose the battery', href: `/jobs/${id}` }]),
-		...(place ? [] : [{ words: 'Choose the place and its hot day', href: `/jobs/${id}` }])
+		...(battery ? [] : [{ words: 'Choose the battery', href: `/jobs/${id}/battery` }]),
+		...(place ? [] : [{ words: 'Choose the place and its hot day', href: `/jobs/${id}/climate` }])
 	];
 }
 
