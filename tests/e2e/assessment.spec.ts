@@ -51,9 +51,8 @@ test('can be made again on the spot, digit for digit', async ({ page }) => {
 test('says when it is out of date, and the mount is assessed again from there', async ({ page }) => {
 	const { jobId } = await makeAssessableJob(page);
 	const [hot] = await assessAll(page, jobId);
-	const plan = await ask(page, 'GET', `/api/v1/jobs/${jobId}/day-plan`);
-	const { id: _id, jobId: _job, ...changed } = plan;
-	await ask(page, 'PUT', `/api/v1/jobs/${jobId}/day-plan`, { ...changed, chargerMaxA: 20 });
+	const { dayPlan } = await ask(page, 'GET', `/api/v1/jobs/${jobId}/day-plan`);
+	await ask(page, 'PUT', `/api/v1/jobs/${jobId}/day-plan`, { ...(dayPlan as object), chargerMaxA: 20 });
 	await page.goto(`/assessments/${String(hot!.id)}`);
 	await expect(page.getByText('Out of date')).toBeVisible();
 	await expect(page.getByRole('link', { name: 'Recommend this mount' })).toHaveCount(0);

@@ -2,6 +2,8 @@ import { expect, test } from '@playwright/test';
 import { expectNoViolations, signInAs } from './support';
 
 test('an engineer reads each coefficient with its unit and its source', async ({ page }) => {
+	// The scan looks at some seventy rows.
+	test.slow();
 	await signInAs(page, 'engineer');
 	await page.goto('/books');
 	await expect(page.getByText('in force').first()).toBeVisible();

@@ -48,7 +48,7 @@ async function findIds(context: APIRequestContext, customer: { name: string; ema
 		`/api/v1/jobs/${jobId}/sheets`
 	);
 	const books = await read<{ rows: Record[] }>(context, '/api/v1/books');
-	const jobPage = await (await context.get(`/jobs/${jobId}`)).text();
+	const jobPage = await (await context.get(`/jobs/${jobId}/recommendation`)).text();
 	const mailbox = await (await context.get('/mailbox')).text();
 	return {
 		jobId,

@@ -27,7 +27,7 @@ export const signInSchema = z.object({
 		.meta({ label: 'Password' })
 });
 
-export const signInLinkSchema = z.object({ email: email('E-mail') });
+export const signInLinkSchema = z.object({ mailTo: email('Your e-mail') });
 
 export const personSchema = z.object({
 	id: z.number().int(),

@@ -32,7 +32,7 @@ export const actions: Actions = {
 		form.id = 'link';
 		if (data === null) return fail(422, { form });
 		try {
-			await mailSignInLink(data.email, event.getClientAddress());
+			await mailSignInLink(data.mailTo, event.getClientAddress());
 		} catch (error) {
 			return refuseForm(form, error);
 		}
