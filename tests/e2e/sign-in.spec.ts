@@ -110,3 +110,17 @@ test('the headers of every answer hold the line', async ({ request, baseURL }) =
 	expect((await request.get('/auth/session')).status()).toBe(404);
 	expect((await request.get(`${baseURL}//elsewhere.example`, { maxRedirects: 0 })).status()).toBe(404);
 });
+
+test('a good sign-in costs no try, so that a busy shop never locks itself out', async ({
+	playwright,
+	baseURL
+}) => {
+	for (let time = 1; time <= 12; time++) {
+		const request = await playwright.request.newContext({ baseURL });
+		const form = { email: engineer.email, password: engineer.password };
+		const headers = { accept: 'text/html' };
+		const response = await request.post('/sign-in?/password', { form, headers, maxRedirects: 0 });
+		expect(response.status(), `sign-in ${time}`).toBe(302);
+		await request.dispose();
+	}
+});

@@ -38,6 +38,7 @@ async function byPassword(credentials: Partial<Record<string, unknown>>, request
 	const person = await Person.findOne({ where: { email, active: true } });
 	if (!(await passwordMatches(password, person?.passwordHash ?? null)) || !person)
 		throw new CredentialsSignin();
+	for (const limit of limits) await giveBack(limit);
 	return { id: String(person.id), name: person.name, email: person.email };
 }
 
@@ -88,7 +89,7 @@ export const { handle, signIn, signOut } = SvelteKitAuth(() => {
 		},
 		logger: {
 			error: (error: Error) => {
-				if (error.name !== 'CredentialsSignin') logger.error({ error: error.message }, 'sign-in failed');
+				if (error.name !== 'CredentialsSignin') logger.error({ err: error.cause ?? error }, 'sign-in failed');
 			},
 			warn: (code: string) => {
 				if (code !== BASE_PATH_TWICE) logger.warn({ code }, 'sign-in warning');
