@@ -1,6 +1,6 @@
 import { randomUUID } from 'node:crypto';
 import { expect, test, type Page } from '@playwright/test';
-import { expectNoViolations, signInAs } from './support';
+import { expectNoViolations, openForm, signInAs } from './support';
 
 const FIGURES = {
 	Length: '310',
@@ -27,7 +27,7 @@ async function fillBattery(page: Page, model: string): Promise<void> {
 
 async function addBattery(page: Page): Promise<string> {
 	const model = `Slab ${randomUUID().slice(0, 8)}`;
-	await page.goto('/batteries/new');
+	await openForm(page, '/batteries/new');
 	await fillBattery(page, model);
 	await page.getByRole('button', { name: 'Save the battery' }).click();
 	await expect(page.getByRole('heading', { level: 1, name: `Emberlow ${model}` })).toBeVisible();
@@ -51,10 +51,10 @@ test('a battery is copied from its data sheet, and the list shows what its maker
 test('what a maker says must be quoted, with where it is written, and is cautioned about', async ({
 	page
 }) => {
-	await page.goto('/batteries/new');
+	await openForm(page, '/batteries/new');
 	await expect(page.getByText('The maker is silent about under-bonnet use')).toBeVisible();
 	await fillBattery(page, `Slab ${randomUUID().slice(0, 8)}`);
-	await page.getByText('Excludes it', { exact: true }).click();
+	await page.getByRole('radio', { name: 'Excludes it' }).check();
 	await expect(page.getByText('The maker excludes under-bonnet use')).toBeVisible();
 	await page.getByLabel('Comes back at', { exact: true }).fill('85');
 	await page.getByRole('button', { name: 'Save the battery' }).click();
@@ -74,7 +74,7 @@ test('when somebody else saved meanwhile, both versions are shown and nothing is
 	await addBattery(page);
 	const address = page.url().split('?')[0]!;
 	const colleague = await context.newPage();
-	await colleague.goto(address);
+	await openForm(colleague, address);
 	await colleague.getByLabel('Goes dark at', { exact: true }).fill('75');
 	await colleague.getByRole('button', { name: 'Save the battery' }).click();
 	await expect(colleague.getByText('Saved.')).toBeVisible();
@@ -90,7 +90,7 @@ test('when somebody else saved meanwhile, both versions are shown and nothing is
 
 	await page.getByRole('button', { name: 'Save the battery' }).click();
 	await expect(page.getByText('Saved.')).toBeVisible();
-	await colleague.goto(address);
+	await openForm(colleague, address);
 	await expect(colleague.getByLabel('Capacity', { exact: true })).toHaveValue('95');
 	await expect(colleague.getByLabel('Goes dark at', { exact: true })).toHaveValue('80');
 });

@@ -1,7 +1,7 @@
 import { randomUUID } from 'node:crypto';
 import { expect, test, type Page } from '@playwright/test';
 import { makeAssessableJob, assessAll } from './assessable-job';
-import { expectNoViolations, signInAs } from './support';
+import { expectNoViolations, openForm, signInAs } from './support';
 
 const ownName = (): string => `Ana ${randomUUID().slice(0, 8)}`;
 
@@ -17,7 +17,7 @@ async function fillNewVehicle(page: Page, customer: string): Promise<void> {
 }
 
 async function beginJob(page: Page, customer: string): Promise<void> {
-	await page.goto('/jobs/new');
+	await openForm(page, '/jobs/new');
 	await fillNewVehicle(page, customer);
 	await page.getByRole('button', { name: 'Begin the job' }).click();
 	await expect(page.getByRole('heading', { level: 1, name: customer })).toBeVisible();
@@ -36,9 +36,9 @@ test.describe('with a script', () => {
 
 		await page.getByRole('link', { name: 'Choose the battery' }).click();
 		await expectNoViolations(page);
-		await page.getByText('Veltissa Camp 100').click();
+		await page.getByRole('radio', { name: 'Veltissa Camp 100' }).check();
 		await expect(page.getByText('The maker excludes under-bonnet use')).toBeVisible();
-		await page.getByText('Quendar Q100 Bay').click();
+		await page.getByRole('radio', { name: 'Quendar Q100 Bay' }).check();
 		await expect(page.getByText('Read the maker’s conditions')).toBeVisible();
 		await page.getByRole('button', { name: 'Take this battery' }).click();
 
@@ -58,7 +58,7 @@ test.describe('with a script', () => {
 	});
 
 	test('a form that is wrong says where, and keeps every word', async ({ page }) => {
-		await page.goto('/jobs/new');
+		await openForm(page, '/jobs/new');
 		await fillNewVehicle(page, ' ');
 		await page.getByLabel('Year').fill('soon');
 		await page.getByRole('button', { name: 'Begin the job' }).click();
@@ -72,7 +72,7 @@ test.describe('with a script', () => {
 	});
 
 	test('a typical body fills the boxes of mass and drag area', async ({ page }) => {
-		await page.goto('/jobs/new');
+		await openForm(page, '/jobs/new');
 		await page.getByLabel('A body like').selectOption('Wagon');
 		await expect(page.getByLabel('Mass, loaded for touring')).toHaveValue('2200');
 		await expect(page.getByLabel('Drag area', { exact: true })).toHaveValue('0.9');
@@ -83,7 +83,7 @@ test.describe('with a script', () => {
 	test('a vehicle that the shop knows needs a word and a button', async ({ page }) => {
 		const customer = ownName();
 		await beginJob(page, customer);
-		await page.goto('/jobs/new');
+		await openForm(page, '/jobs/new');
 		await page.getByLabel('Registration, customer, make or model').pressSequentially(customer);
 		await expect(page.getByRole('listitem').filter({ hasText: customer })).toHaveCount(1);
 		await expectNoViolations(page);
@@ -142,7 +142,7 @@ test.describe('with a script', () => {
 		await page.goto(`/jobs/${jobId}`);
 		await expect(page.getByText('Changed since the last assessment')).toHaveCount(0);
 		await expectNoViolations(page);
-		await page.goto(`/jobs/${jobId}/climate`);
+		await openForm(page, `/jobs/${jobId}/climate`);
 		await page.getByLabel('Hottest of the day').fill('31');
 		await page.getByRole('button', { name: 'Take this day' }).click();
 		await expect(page.getByText('Here the hot day is no longer what the verdicts')).toBeVisible();

@@ -1,6 +1,6 @@
 import { randomUUID } from 'node:crypto';
 import { expect, test, type Page } from '@playwright/test';
-import { expectNoViolations, signInAs } from './support';
+import { expectNoViolations, openForm, signInAs } from './support';
 
 async function fillPlace(page: Page, name: string): Promise<void> {
 	await page.getByLabel('Place', { exact: true }).fill(name);
@@ -17,7 +17,7 @@ test.beforeEach(({ page }) => signInAs(page, 'installer'));
 
 test('a place is added with its hot day, in the units that people use', async ({ page }) => {
 	const name = `Salt Lake ${randomUUID().slice(0, 8)}`;
-	await page.goto('/places/new');
+	await openForm(page, '/places/new');
 	await expectNoViolations(page);
 	await fillPlace(page, name);
 	await page.getByLabel('Where the figures come from').fill('Invented for a test.');
@@ -33,7 +33,7 @@ test('a place is added with its hot day, in the units that people use', async ({
 });
 
 test('figures without a source are not taken, and stay in their boxes', async ({ page }) => {
-	await page.goto('/places/new');
+	await openForm(page, '/places/new');
 	await fillPlace(page, `Salt Lake ${randomUUID().slice(0, 8)}`);
 	await page.getByRole('button', { name: 'Save the place' }).click();
 	await page.getByRole('link', { name: 'Where the figures come from is missing.' }).click();
@@ -43,7 +43,7 @@ test('figures without a source are not taken, and stay in their boxes', async ({
 });
 
 test('a place is changed, and one of another number is not there', async ({ page }) => {
-	await page.goto('/places/new');
+	await openForm(page, '/places/new');
 	const name = `Salt Lake ${randomUUID().slice(0, 8)}`;
 	await fillPlace(page, name);
 	await page.getByLabel('Where the figures come from').fill('Invented for a test.');

@@ -29,6 +29,11 @@ async function signInWith(
 	await page.waitForURL((url) => !url.pathname.startsWith('/sign-in'));
 }
 
+/** Opens a page and waits until its script has it in hand: what is chosen before that may not be kept. */
+export async function openForm(page: Page, path: string): Promise<void> {
+	await page.goto(path, { waitUntil: 'networkidle' });
+}
+
 /** Nothing on the page that an accessibility scan by the rules of WCAG 2.2 AA finds fault with. */
 export async function expectNoViolations(page: Page): Promise<void> {
 	const { violations } = await new AxeBuilder({ page })

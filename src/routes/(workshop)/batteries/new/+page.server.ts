@@ -1,4 +1,4 @@
-import { batteryInputSchema } from '$lib/schemas/batteries';
+import { batteryInputSchema, CHEMISTRIES } from '$lib/schemas/batteries';
 import { idSchema } from '$lib/schemas/fields';
 import { loadForm, saveForm } from '$lib/server/http/forms';
 import { guard } from '$lib/server/http/guard';
@@ -12,7 +12,11 @@ function waitingJob(url: URL): number | null {
 
 export const load: PageServerLoad = async (event) => {
 	guard(event, 'batteries.write');
-	const form = await loadForm(batteryInputSchema, { autoReset: true, underBonnet: 'silent' });
+	const form = await loadForm(batteryInputSchema, {
+		chemistry: CHEMISTRIES[0],
+		autoReset: true,
+		underBonnet: 'silent'
+	});
 	return { form, jobId: waitingJob(event.url) };
 };
 
