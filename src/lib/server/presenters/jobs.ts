@@ -29,9 +29,15 @@ export function presentJobRow(job: Job): JobRow {
 	};
 }
 
-function presentHotDay({ hotDayMaxC, dailyRangeK, sunPeakWPerM2 }: Job): JobView['hotDay'] {
-	if (hotDayMaxC === null || dailyRangeK === null || sunPeakWPerM2 === null) return null;
-	return { hotDayMaxC, dailyRangeK, sunPeakWPerM2 };
+/** The hot day to plan for: the place's own figures unless the job changed them. */
+export function presentHotDay(job: Job): JobView['hotDay'] {
+	const { place } = job;
+	if (!place) return null;
+	return {
+		hotDayMaxC: job.hotDayMaxC ?? place.hotDayMaxC,
+		dailyRangeK: job.dailyRangeK ?? place.dailyRangeK,
+		sunPeakWPerM2: job.sunPeakWPerM2 ?? place.sunPeakWPerM2
+	};
 }
 
 export function presentStanding(

@@ -7,7 +7,7 @@ import { hotDayFields } from '$lib/schemas/places';
 import { surveyAnswersSchema } from '$lib/schemas/survey';
 import { Assessment, type DayPlan, type Job, type Mount } from '../db/models';
 import { canonicalJson } from '../hash';
-import { presentStanding } from '../presenters/jobs';
+import { presentHotDay, presentStanding } from '../presenters/jobs';
 
 /** What the job is now, in the parts that an assessment keeps. */
 interface Now {
@@ -47,7 +47,7 @@ const PARTS: readonly Part[] = [
 		part: 'hot-day',
 		fields: Object.keys(hotDayFields),
 		then: (inputs) => inputs.hotDay,
-		now: ({ job }) => job
+		now: ({ job }) => presentHotDay(job)
 	},
 	{
 		part: 'day-plan',
