@@ -63,6 +63,7 @@ test('says when it is out of date, and the mount is assessed again from there', 
 });
 
 test('mounts stand side by side, figure by figure, and one is chosen', async ({ page, isMobile }) => {
+	test.slow();
 	const { jobId } = await makeAssessableJob(page, { mounts: 3 });
 	await page.goto(`/jobs/${jobId}/compare`);
 	await page.getByRole('button', { name: 'Assess all surveyed mounts' }).click();

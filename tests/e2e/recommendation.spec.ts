@@ -14,6 +14,7 @@ async function printPages(page: Page): Promise<number> {
 }
 
 test('a mount that rides it out is recommended and printed', async ({ page }) => {
+	test.slow();
 	const { jobId, customerName } = await makeAssessableJob(page);
 	const [, cool] = await assessAll(page, jobId);
 	await page.goto(`/assessments/${String(cool!.id)}`);
@@ -36,6 +37,7 @@ test('a mount that rides it out is recommended and printed', async ({ page }) =>
 });
 
 test('going ahead against the verdict takes a named person and a reason', async ({ page }) => {
+	test.slow();
 	const { jobId } = await makeAssessableJob(page);
 	const [hot] = await assessAll(page, jobId);
 	await page.goto(`/jobs/${jobId}/recommendation?assessment=${String(hot!.id)}`);
@@ -70,6 +72,7 @@ test('it works without a script', async ({ browser, page, baseURL }) => {
 });
 
 test('the paper is two pages of A4, even when there is as much to say as there can be', async ({ page }) => {
+	test.slow();
 	const { jobId } = await makeAssessableJob(page, { mounts: 6, legs: CROWDED_DAY });
 	const [hot] = await assessAll(page, jobId);
 	await page.goto(`/jobs/${jobId}/recommendation?assessment=${String(hot!.id)}`);
