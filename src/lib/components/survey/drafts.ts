@@ -1,4 +1,4 @@
-import { deleteDB, openDB, type DBSchema, type IDBPDatabase } from 'idb';
+import { openDB, type DBSchema, type IDBPDatabase } from 'idb';
 
 /** What somebody typed and the workshop has not got yet, on this phone alone. */
 export interface Draft<Values = unknown> {
@@ -16,6 +16,7 @@ interface DraftStore extends DBSchema {
 	drafts: { key: string; value: Stored };
 }
 
+/** Signing out clears it: the answer to that says so to the browser. */
 const DATABASE = 'soakline-drafts';
 let opening: Promise<IDBPDatabase<DraftStore>> | undefined;
 
@@ -51,11 +52,4 @@ export async function readDraft(owner: number, page: string): Promise<Draft | nu
 
 export async function dropDraft(owner: number, page: string): Promise<void> {
 	await (await store()).delete('drafts', keyOf(owner, page));
-}
-
-/** At sign-out nothing of anybody stays on the phone. */
-export async function dropAllDrafts(): Promise<void> {
-	(await opening)?.close();
-	opening = undefined;
-	await deleteDB(DATABASE);
 }
