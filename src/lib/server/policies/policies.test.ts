@@ -20,7 +20,10 @@ function someone(role: Role): SignedInPerson {
 const EXPECTED: Record<Action, string> = {
 	'jobs.read': 'iem',
 	'jobs.write': 'iem',
+	'customers.read': 'iem',
+	'customers.write': 'iem',
 	'vehicles.read': 'iem',
+	'vehicles.write': 'iem',
 	'mounts.write': 'iem',
 	'day-plans.write': 'iem',
 	'batteries.read': 'iem',
