@@ -40,6 +40,20 @@ describe('the outbox', () => {
 		expect(await readArrived(messageId)).toHaveLength(1);
 	});
 
+	it('sends all that is due in one go, however much has gathered', async () => {
+		const { workshopId } = await makeCrew();
+		for (let letter = 0; letter < 45; letter++) await post(workshopId, `many-${letter}@travellers.example`);
+		await sendDue();
+		expect(await OutgoingMail.count({ where: { workshopId, state: 'sent' } })).toBe(45);
+	});
+
+	it('begins no further letter once it is told to stop', async () => {
+		const { workshopId } = await makeCrew();
+		await post(workshopId, 'kept@travellers.example');
+		await sendDue(() => true);
+		expect(await OutgoingMail.count({ where: { workshopId, state: 'waiting' } })).toBe(1);
+	});
+
 	it('posts nothing when what the letter tells of is undone', async () => {
 		const { workshopId } = await makeCrew();
 		const undone = inTransaction(async (transaction) => {

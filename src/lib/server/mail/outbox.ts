@@ -79,8 +79,20 @@ async function sendOne(mail: OutgoingMail): Promise<void> {
  * Sends what is due. A letter that fails waits longer each time and is given up after eight tries, or at once when the
  * server refuses it for good.
  */
-export async function sendDue(): Promise<void> {
-	const due = await OutgoingMail.findAll({
+export async function sendDue(isOver: () => boolean = () => false): Promise<void> {
+	let due: OutgoingMail[];
+	do {
+		due = await findDue();
+		for (const mail of due) {
+			if (isOver()) return;
+			await sendOne(mail);
+		}
+	} while (due.length === BATCH);
+}
+
+/** A letter that is tried is not due for a while, whatever came of it: each round finds others. */
+async function findDue(): Promise<OutgoingMail[]> {
+	return OutgoingMail.findAll({
 		where: { state: 'waiting', nextAttemptAt: { [Op.lte]: new Date() } },
 		order: [
 			['nextAttemptAt', 'ASC'],
@@ -88,7 +100,6 @@ export async function sendDue(): Promise<void> {
 		],
 		limit: BATCH
 	});
-	for (const mail of due) await sendOne(mail);
 }
 
 let timer: NodeJS.Timeout | undefined;
@@ -96,7 +107,7 @@ let running: Promise<void> | null = null;
 
 function nudge(): void {
 	if (timer === undefined) return;
-	running ??= sendDue()
+	running ??= sendDue(() => timer === undefined)
 		.catch((error: unknown) => logger.error({ err: error }, 'outbox failed'))
 		.finally(() => {
 			running = null;
