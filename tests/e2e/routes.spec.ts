@@ -22,10 +22,10 @@ async function read<T>(context: APIRequestContext, path: string): Promise<T> {
 	return (await response.json()) as T;
 }
 
-/** The link in the letter to the demo customer. */
+/** The link in the newest letter to the demo customer. */
 function findToken(email: string): string {
 	const folder = process.env.MAILBOX_DIR ?? '';
-	for (const name of readdirSync(folder)) {
+	for (const name of readdirSync(folder).sort().reverse()) {
 		const letter = readFileSync(join(folder, name), 'utf8').replace(/=\r?\n/g, '');
 		const token = /\/sheet\/([\w-]{22})/.exec(letter)?.[1];
 		if (letter.includes(`To: ${email}`) && token) return token;

@@ -90,7 +90,7 @@ export async function repeatJob(person: SignedInPerson, { vehicleId, note }: Rep
 	return inTransaction(async (transaction) => {
 		const number = await takeJobNumber(workshopId, transaction);
 		const vehicle = await Vehicle.findOne({ where: { id: vehicleId, workshopId }, transaction });
-		if (!vehicle) throw notThere('vehicle', 'vehicleId');
+		if (!vehicle) throw notFound('vehicle');
 		const { customerId } = vehicle;
 		const before = await Job.findOne({
 			where: { vehicleId, workshopId },
@@ -107,16 +107,25 @@ export async function repeatJob(person: SignedInPerson, { vehicleId, note }: Rep
 	});
 }
 
+/** The job comes first: of another workshop's nothing is said, not even what is wrong with the question. */
+async function findJob(
+	{ workshopId }: SignedInPerson,
+	jobId: number,
+	transaction: Transaction
+): Promise<Job> {
+	const job = await Job.findOne({ where: { id: jobId, workshopId }, transaction });
+	if (!job) throw notFound('job');
+	return job;
+}
+
 async function changeJob(
 	person: SignedInPerson,
-	jobId: number,
+	job: Job,
 	action: string,
 	version: number,
 	changes: Partial<JobClimate> & { batteryRecordId?: number },
 	transaction: Transaction
 ): Promise<JobView> {
-	const job = await Job.findOne({ where: { id: jobId, workshopId: person.workshopId }, transaction });
-	if (!job) throw notFound('job');
 	await saveVersioned(job, 'job', version, changes, transaction);
 	await recordBy(person, action, { type: 'job', id: job.id }, transaction, changes);
 	return getJob(person, job.id);
@@ -129,11 +138,12 @@ export async function setJobBattery(
 ): Promise<JobView> {
 	allow(person, 'jobs.write');
 	return inTransaction(async (transaction) => {
+		const job = await findJob(person, jobId, transaction);
 		const where = { id: batteryRecordId, workshopId: person.workshopId };
 		if (!(await BatteryRecord.findOne({ where, attributes: ['id'], transaction }))) {
 			throw notThere('battery', 'batteryRecordId');
 		}
-		return changeJob(person, jobId, 'job.battery-set', version, { batteryRecordId }, transaction);
+		return changeJob(person, job, 'job.battery-set', version, { batteryRecordId }, transaction);
 	});
 }
 
@@ -144,10 +154,11 @@ export async function setJobClimate(
 ): Promise<JobView> {
 	allow(person, 'jobs.write');
 	return inTransaction(async (transaction) => {
+		const job = await findJob(person, jobId, transaction);
 		const where = { id: climate.placeId, workshopId: person.workshopId };
 		if (!(await Place.findOne({ where, attributes: ['id'], transaction }))) {
 			throw notThere('place', 'placeId');
 		}
-		return changeJob(person, jobId, 'job.climate-set', version, climate, transaction);
+		return changeJob(person, job, 'job.climate-set', version, climate, transaction);
 	});
 }
