@@ -1,4 +1,4 @@
-import { fail, isActionFailure, type RequestEvent } from '@sveltejs/kit';
+import { fail, type RequestEvent } from '@sveltejs/kit';
 import type { z } from 'zod';
 import { toFormValues } from '$lib/format/form-values';
 import type { SignedInPerson } from '$lib/schemas/people';
@@ -22,7 +22,7 @@ export async function saveEdited<S extends z.ZodObject>(
 ) {
 	const { action, schema, save, newest } = steps;
 	const answer = await saveForm(event, { action, schema, save });
-	if (!isActionFailure(answer) || answer.status !== 409) return answer;
+	if (!('status' in answer) || answer.status !== 409) return answer;
 	const now = toFormValues(schema, await newest(guard(event, action)));
 	return fail(409, { ...answer.data, newest: now });
 }
