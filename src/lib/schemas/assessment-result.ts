@@ -64,6 +64,7 @@ export const assessmentResultSchema = z.object({
 		stepMin: z.number(),
 		ambientC: curveC,
 		bayC: curveC,
+		airC: curveC,
 		caseC: curveC,
 		cellsC: curveC,
 		boardC: curveC,

@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import type { AssessmentResult } from './assessments';
+import type { PositionKind } from './survey';
 import type { BatteryInput } from './batteries';
 import { email, idSchema, words } from './fields';
 import { VERDICTS, type Verdict } from './verdicts';
@@ -9,6 +10,7 @@ export interface SheetRibbon extends Pick<
 	AssessmentResult,
 	'curves' | 'legs' | 'darkSpans' | 'chargeSpans' | 'peakCellsC' | 'peakAtHour'
 > {
+	position: PositionKind;
 	limits: Pick<BatteryInput, 'dischargeCutC' | 'dischargeResetC' | 'chargeCutC' | 'chargeResetC' | 'sensor'>;
 }
 

@@ -106,7 +106,8 @@ export function askedFields(question: SurveyQuestion, kind: PositionKind, values
 
 function requireAnswer(key: SurveyKey): z.ZodType {
 	const { label } = SURVEY_FIELDS[key];
-	return surveyAnswersSchema.shape[key].refine((value) => value !== undefined, {
+	const answer: z.ZodType = surveyAnswersSchema.shape[key];
+	return answer.refine((value) => value !== undefined, {
 		error: `${label} is missing.`
 	});
 }

@@ -1,5 +1,5 @@
 import { drawRibbonPictures } from '$lib/components/charts/day-ribbon/render-day-ribbon';
-import { nameLeg } from '$lib/components/charts/day-ribbon/ribbon-data';
+import { airAt, nameLeg } from '$lib/components/charts/day-ribbon/ribbon-data';
 import { acknowledgeSchema, type SheetView } from '$lib/schemas/sheets';
 import { loadForm } from '$lib/server/http/forms';
 
@@ -7,7 +7,7 @@ import { loadForm } from '$lib/server/http/forms';
 export async function showSheet({ content, contentSha256, acknowledgement }: SheetView) {
 	const { ribbon, ...words } = content;
 	const legs = ribbon.legs.map((leg) => ({ ...leg, kind: nameLeg(leg) }));
-	const day = { ...ribbon, legs, airWord: 'bay air', band: null };
+	const day = { ...ribbon, legs, air: airAt(ribbon.position), band: null };
 	return {
 		...{ words, acknowledgement, day },
 		screen: drawRibbonPictures(day, ['phone', 'desk'], 'screen'),

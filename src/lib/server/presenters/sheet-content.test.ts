@@ -13,7 +13,17 @@ const RESULT = {
 	darkSpans: [{ fromHour: 16.85, toHour: 20.8667, open: false }],
 	chargeSpans: [],
 	...{ chargeMissedAh: 0, chargeMissedHours: 0, peakCellsC: 80.5, peakAtHour: 17.05 },
-	curves: { startHour: 7, stepMin: 15, ambientC, bayC: [], caseC: [], cellsC: [], boardC: [], soc: [] },
+	curves: {
+		startHour: 7,
+		stepMin: 15,
+		ambientC,
+		bayC: [],
+		airC: [],
+		caseC: [],
+		cellsC: [],
+		boardC: [],
+		soc: []
+	},
 	legs: [
 		{ ...LEG, kind: 'drive', fromHour: 7, toHour: 18.9 },
 		{ ...LEG, kind: 'camp', fromHour: 18.9, toHour: 21 }

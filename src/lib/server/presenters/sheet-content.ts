@@ -115,11 +115,12 @@ function listFigures({ inputs: { battery }, result }: SheetSource): SheetContent
 	];
 }
 
-function drawnFrom({ inputs: { battery }, result }: SheetSource): SheetRibbon {
+function drawnFrom({ inputs: { battery, mount }, result }: SheetSource): SheetRibbon {
 	const { curves, legs, darkSpans, chargeSpans, peakCellsC, peakAtHour } = result;
 	const { dischargeCutC, dischargeResetC, chargeCutC, chargeResetC, sensor } = battery;
 	return {
 		...{ curves, legs, darkSpans, chargeSpans, peakCellsC, peakAtHour },
+		position: mount.survey.positionKind,
 		limits: { dischargeCutC, dischargeResetC, chargeCutC, chargeResetC, sensor }
 	};
 }

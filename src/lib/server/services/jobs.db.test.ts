@@ -107,8 +107,7 @@ describe('another job on a known vehicle', () => {
 		const [ours, theirs] = await Promise.all([makeCrew(), makeCrew()]);
 		const { vehicle } = await createJob(theirs.installer, newJob());
 		await expect(repeatJob(ours.installer, { vehicleId: vehicle.id, note: '' })).rejects.toMatchObject({
-			code: 'invalid_input',
-			problems: [{ path: 'vehicleId' }]
+			code: 'not_found'
 		});
 	});
 });

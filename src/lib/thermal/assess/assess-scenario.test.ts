@@ -232,7 +232,11 @@ describe('what is drawn', () => {
 		expect(endHour - curves.startHour - drawnHours).toBeLessThan(curves.stepMin / 60);
 		expect(curves.cellsC.every((value) => Math.abs(value * 100 - Math.round(value * 100)) < 1e-9)).toBe(true);
 		expect(
-			new Set([curves.bayC, curves.caseC, curves.boardC, curves.soc, curves.ambientC].map((c) => c.length))
+			new Set(
+				[curves.bayC, curves.airC, curves.caseC, curves.boardC, curves.soc, curves.ambientC].map(
+					(c) => c.length
+				)
+			)
 		).toEqual(new Set([curves.cellsC.length]));
 	});
 

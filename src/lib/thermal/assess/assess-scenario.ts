@@ -97,7 +97,7 @@ function assessRun(scenario: Scenario, run: DoneRun, options: AssessOptions): Do
 		endHour,
 		events: report.events,
 		ledger: keepLedger(scenario, minutes, findPeakMinute(minutes)),
-		curves: thinCurves(minutes),
+		curves: thinCurves(scenario, minutes),
 		legs,
 		engineVersion: ENGINE_VERSION,
 		energyMaxRelativeImbalance: report.energy.maxRelativeImbalance,

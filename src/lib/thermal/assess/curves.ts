@@ -1,4 +1,5 @@
-import type { MinuteSeries } from '../types';
+import type { MinuteSeries, Scenario } from '../types';
+import { sunWPerM2 } from '../vehicle/climate';
 import type { AssessmentCurves } from './types';
 
 const MOST_POINTS = 300;
@@ -9,8 +10,27 @@ function chooseStepMin(count: number): number {
 	return STEPS_MIN.find((step) => (count - 1) / step + 1 <= MOST_POINTS) ?? STEPS_MIN.at(-1)!;
 }
 
+/** The air around the battery: mixed from outside, bay and enclosure as the position has it, over a road in the sun. */
+function mixLocalAir(
+	{ position, climate }: Scenario,
+	{ nodes, ambient, startHour, count }: MinuteSeries
+): Float64Array {
+	const { bayAirFraction, enclosureFraction, roadUplift } = position;
+	const air = new Float64Array(count);
+	for (let minute = 0; minute < count; minute++) {
+		const outsideC = ambient[minute]!;
+		const sun = sunWPerM2(startHour + minute / 60, climate);
+		air[minute] =
+			outsideC +
+			bayAirFraction * (nodes.bay[minute]! - outsideC) +
+			enclosureFraction * (nodes.enclosure[minute]! - outsideC) +
+			(roadUplift * sun) / 1000;
+	}
+	return air;
+}
+
 /** Thins the minute grid to what can be drawn. */
-export function thinCurves(minutes: MinuteSeries): AssessmentCurves {
+export function thinCurves(scenario: Scenario, minutes: MinuteSeries): AssessmentCurves {
 	const stepMin = chooseStepMin(minutes.count);
 	const thin = (series: Float64Array): number[] => {
 		const values: number[] = [];
@@ -23,6 +43,7 @@ export function thinCurves(minutes: MinuteSeries): AssessmentCurves {
 		stepMin,
 		ambientC: thin(ambient),
 		bayC: thin(nodes.bay),
+		airC: thin(mixLocalAir(scenario, minutes)),
 		caseC: thin(nodes.case),
 		cellsC: thin(nodes.cells),
 		boardC: thin(nodes.board),

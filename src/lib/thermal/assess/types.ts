@@ -54,6 +54,8 @@ export interface AssessmentCurves {
 	stepMin: number;
 	ambientC: number[];
 	bayC: number[];
+	/** The air around the battery: of the bay in part, or of the enclosure, or over the road. */
+	airC: number[];
 	caseC: number[];
 	cellsC: number[];
 	boardC: number[];

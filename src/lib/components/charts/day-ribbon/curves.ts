@@ -14,7 +14,7 @@ export interface DrawnCurve {
 
 /** The curves of one day, from the back to the front. The board is drawn where the BMS watches it. */
 export function drawCurves(frame: RibbonFrame, data: RibbonData): DrawnCurve[] {
-	const { curves, airWord, limits } = data;
+	const { curves, air, limits } = data;
 	const scale = frame.spec.cellsPx / 4;
 	const thin = 1.15 * Math.max(scale, 0.85);
 	const rows: (Omit<DrawnCurve, 'line'> & { valuesC: number[] })[] = [
@@ -26,7 +26,7 @@ export function drawCurves(frame: RibbonFrame, data: RibbonData): DrawnCurve[] {
 			dash: [1.2, 3.4],
 			ink: 'muted'
 		},
-		{ name: 'air', word: airWord, valuesC: curves.bayC, widthPx: thin, dash: [], ink: 'muted' },
+		{ name: 'air', word: air.word, valuesC: curves[air.curve], widthPx: thin, dash: [], ink: 'muted' },
 		{ name: 'case', word: 'case', valuesC: curves.caseC, widthPx: thin * 1.25, dash: [5.5, 3.5], ink: 'ink' },
 		{
 			name: 'cells',

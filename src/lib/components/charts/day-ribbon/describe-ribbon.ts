@@ -47,7 +47,7 @@ export function readRibbon(data: RibbonData, hour: number): RibbonReading {
 		hour,
 		cellsC: at(curves.cellsC),
 		caseC: at(curves.caseC),
-		airC: at(curves.bayC),
+		airC: at(curves[data.air.curve]),
 		outsideC: at(curves.ambientC),
 		boardC: at(curves.boardC),
 		leg:
@@ -61,7 +61,7 @@ export function sayReading(data: RibbonData, reading: RibbonReading): string {
 	const temperatures = [
 		`cells ${formatTemperature(reading.cellsC)}`,
 		`case ${formatTemperature(reading.caseC)}`,
-		`${data.airWord} ${formatTemperature(reading.airC)}`,
+		`${data.air.word} ${formatTemperature(reading.airC)}`,
 		`outside ${formatTemperature(reading.outsideC)}`
 	];
 	const state = [reading.leg && sayLeg(reading.leg), reading.dark && 'dark'].filter(Boolean).join(', ');

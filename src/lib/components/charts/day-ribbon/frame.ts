@@ -203,10 +203,10 @@ export function spanOf(days: readonly RibbonData[]): RibbonSpan {
 	return { fromHour, toHour, minC, maxC: Math.max(maxC, minC + TEMP_STEP_C) };
 }
 
-function extremesOf({ curves, limits, chargeSpans, band }: RibbonData): { low: number; high: number } {
+function extremesOf({ curves, air, limits, chargeSpans, band }: RibbonData): { low: number; high: number } {
 	const lines = [
 		curves.ambientC,
-		curves.bayC,
+		curves[air.curve],
 		curves.caseC,
 		curves.cellsC,
 		band?.lowC ?? [],

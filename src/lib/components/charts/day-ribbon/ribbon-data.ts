@@ -1,4 +1,5 @@
 import type { LegKind } from '../../../schemas/day-plans';
+import type { PositionKind } from '../../../schemas/survey';
 import type { AssessmentCurves, DoneAssessment, HourSpan, LegSpan } from '../../../thermal/assess/types';
 import type { Sensor } from '../../../thermal/types';
 
@@ -20,6 +21,22 @@ export interface RibbonBand {
 	highC: number[];
 }
 
+/** Which air is drawn, and what it is called: under a bonnet that of the bay, elsewhere that around the battery. */
+export interface RibbonAir {
+	word: string;
+	curve: 'bayC' | 'airC';
+}
+
+const AIR_AT: Record<PositionKind, RibbonAir> = {
+	'under-bonnet': { word: 'bay air', curve: 'bayC' },
+	cabin: { word: 'cabin air', curve: 'airC' },
+	'cargo-area': { word: 'cargo area air', curve: 'airC' },
+	'canopy-box': { word: 'box air', curve: 'airC' },
+	'chassis-rail': { word: 'air at the rail', curve: 'airC' }
+};
+
+export const airAt = (position: PositionKind): RibbonAir => AIR_AT[position];
+
 /** Everything the day ribbon draws. */
 export interface RibbonData {
 	curves: AssessmentCurves;
@@ -29,8 +46,7 @@ export interface RibbonData {
 	limits: RibbonLimits;
 	peakCellsC: number;
 	peakAtHour: number;
-	/** What the air around the battery is called: "bay air" under a bonnet. */
-	airWord: string;
+	air: RibbonAir;
 	band: RibbonBand | null;
 }
 
@@ -48,7 +64,8 @@ export function nameLeg(leg: LegSpan): LegKind {
 export function toRibbonData(
 	assessment: DoneAssessment,
 	limits: RibbonLimits,
-	settings: { airWord?: string; band?: RibbonBand | null } = {}
+	position: PositionKind,
+	band: RibbonBand | null = null
 ): RibbonData {
 	return {
 		curves: assessment.curves,
@@ -58,8 +75,8 @@ export function toRibbonData(
 		limits,
 		peakCellsC: assessment.peakCellsC,
 		peakAtHour: assessment.peakAtHour,
-		airWord: settings.airWord ?? 'bay air',
-		band: settings.band ?? null
+		air: airAt(position),
+		band
 	};
 }
 

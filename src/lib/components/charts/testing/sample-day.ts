@@ -81,7 +81,7 @@ export function sampleDay(settings: SampleSettings = {}): RibbonData {
 		limits: { ...LIMITS, sensor: settings.sensor ?? 'cells' },
 		peakCellsC,
 		peakAtHour: startHour + (curves.cellsC.indexOf(peakCellsC) * stepMin) / 60,
-		airWord: 'bay air',
+		air: { word: 'bay air', curve: 'bayC' },
 		band: settings.band
 			? {
 					lowC: curves.cellsC.map((c) => c - 2 - (c - 30) / 20),
@@ -111,6 +111,7 @@ function runDay(
 		stepMin: day.stepMin,
 		ambientC: [],
 		bayC: [],
+		airC: [],
 		caseC: [],
 		cellsC: [],
 		boardC: [],
@@ -126,6 +127,7 @@ function runDay(
 		const leg = legs.find((span) => hour < span.toHour) ?? (legs.at(-1) as RibbonLeg);
 		curves.ambientC.push(ambient);
 		curves.bayC.push(bay);
+		curves.airC.push(ambient + 0.85 * (bay - ambient));
 		curves.caseC.push(caseC);
 		curves.cellsC.push(cells);
 		curves.boardC.push(cells + 2);

@@ -20,7 +20,7 @@ export const load: PageServerLoad = async (event) => {
 	const { id, jobId, mountId, inputs, result, isCurrent, bookId, headroomK } = assessment;
 	const outcomes = await orPageError(listMountOutcomes(person, jobId));
 	const recommendation = await orPageError(newestRecommendation(person, jobId));
-	const ribbon = toRibbonData(result, inputs.battery);
+	const ribbon = toRibbonData(result, inputs.battery, inputs.mount.survey.positionKind);
 	return {
 		...{ id, jobId, mountId, isCurrent, bookId, headroomK, ribbon },
 		jobNumber: inputs.jobNumber,

@@ -13,7 +13,7 @@ export const load: PageServerLoad = async (event) => {
 		getRecommendationDocument(person, id)
 	);
 	const { inputs, result } = assessment;
-	const ribbon = toRibbonData(result, inputs.battery);
+	const ribbon = toRibbonData(result, inputs.battery, inputs.mount.survey.positionKind);
 	return {
 		...{ recommendation, workshop, others, ribbon },
 		customer: { name: inputs.customerName, ...customer },

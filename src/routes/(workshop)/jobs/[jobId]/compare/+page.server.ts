@@ -25,7 +25,7 @@ async function loadColumn(person: SignedInPerson, { letter, name, assessment }: 
 		verdict: view.verdict,
 		headroomK: view.headroomK,
 		isCurrent: view.isCurrent,
-		ribbon: toRibbonData(view.result, view.inputs.battery),
+		ribbon: toRibbonData(view.result, view.inputs.battery, view.inputs.mount.survey.positionKind),
 		chemistry: view.inputs.battery.chemistry
 	};
 }
