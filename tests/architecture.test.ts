@@ -110,7 +110,8 @@ describe('pages', () => {
 	});
 
 	it('are named as SvelteKit and this project name files', () => {
-		const NAMES = /^(\+[a-z.]+|[A-Z][A-Za-z0-9]*\.(svelte|component\.test\.ts)|[a-z0-9]+(-[a-z0-9]+)*(\.[a-z]+)*\.(ts|mjs))$/;
+		const NAMES =
+			/^(\+[a-z.]+|[A-Z][A-Za-z0-9]*\.(svelte|component\.test\.ts)|[a-z0-9]+(-[a-z0-9]+)*(\.[a-z]+)*\.(ts|mjs))$/;
 		const odd = files.map(({ path }) => path.split('/').at(-1) ?? '').filter((name) => !NAMES.test(name));
 		expect(odd.filter((name) => !name.startsWith('+'))).toEqual([]);
 	});
