@@ -164,7 +164,7 @@ const SHIELD = numbers('shield', [
 	['area', 'm²', 0.12, AREA, 'Case area that the shield covers.'],
 	['coverage', '-', 0.9, FRACTION, 'Share of the hot view that it blocks.'],
 	['emissivityOut', '-', 0.1, FRACTION, 'Emissivity of its outer face.'],
-	['emissivityIn', '-', 0.1, POSITIVE_FRACTION, 'Emissivity of its inner face.'],
+	['emissivityIn', '-', 0.1, FRACTION, 'Emissivity of its inner face.'],
 	['gap', 'W/m²K', 10, FILM, 'Conductance of the gap between shield and case.'],
 	['heatCapacity', 'J/K', 200, CAPACITY, 'Heat capacity of the shield.']
 ]);
@@ -182,7 +182,7 @@ const BATTERY = numbers('battery', [
 	['caseArea', 'm²', 0.277, closed(0.001, 100), 'Surface of the case.'],
 	['topArea', 'm²', 0.057, AREA, 'Top of the case, which faces the bonnet.'],
 	['caseHeatCapacity', 'J/K', 2500, CAPACITY, 'Heat capacity of the case.'],
-	['caseEmissivity', '-', 0.92, POSITIVE_FRACTION, 'Emissivity of the case.'],
+	['caseEmissivity', '-', 0.92, FRACTION, 'Emissivity of the case.'],
 	['filmStill', 'W/m²K', 5, FILM, 'Film between case and local air in still air.'],
 	['filmPerSqrtSpeed', 'W/m²K per √(m/s)', 4, FILM, 'What the root of the local speed adds to it.'],
 	['caseCellConductance', 'W/K', 2.5, CONDUCTANCE, 'Case to cells.'],

@@ -194,6 +194,19 @@ describe('a run', () => {
 		expect(run({ ...input, bms: { ...input.bms, autoReset: true } }).report.events.length).toBeGreaterThan(1);
 	});
 
+	it('takes a case and a shield that radiate nothing as the limit of ones that hardly do', () => {
+		const peaksAt = (emissivity: number) =>
+			run({
+				battery: { caseEmissivity: emissivity },
+				shield: { emissivityIn: emissivity },
+				legs: [{ minutes: 60, engineOn: true, speedKmh: 60 }, { minutes: 60 }]
+			}).report.peaks;
+		const { case: caseC, shield } = peaksAt(0);
+		const almost = peaksAt(1e-9);
+		expect(caseC).toBeCloseTo(almost.case, 5);
+		expect(shield).toBeCloseTo(almost.shield!, 5);
+	});
+
 	it('does not change its input', () => {
 		const scenario = parseScenario({ legs: [{ minutes: 30, engineOn: true }] });
 		const before = structuredClone(scenario);
