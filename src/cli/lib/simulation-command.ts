@@ -1,5 +1,4 @@
-import { ScenarioError, simulateScenario } from '../../lib/thermal';
-import { describeValue } from '../../lib/thermal/errors';
+import { ScenarioError, showValue, simulateScenario } from '../../lib/thermal';
 
 /** What the program writes and how it ends. */
 export interface CommandOutcome {
@@ -17,15 +16,8 @@ interface Fault {
 	message: string;
 }
 
-export const BAD_INPUT = 2;
-export const NUMERICAL_FAILURE = 3;
-
-/** Values that JSON can hold stay as they are; all others, and large ones, are said in words. */
-function showValue(value: unknown): unknown {
-	if (value === undefined || value === null || typeof value === 'boolean') return value ?? null;
-	if (typeof value === 'number' && Number.isFinite(value)) return value;
-	return typeof value === 'string' && value.length <= 60 ? value : describeValue(value);
-}
+const BAD_INPUT = 2;
+const NUMERICAL_FAILURE = 3;
 
 export function refuse({ code, path, value, limit, message }: Fault): CommandOutcome {
 	const fault = { code, path, value: showValue(value), limit, message };

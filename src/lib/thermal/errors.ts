@@ -57,6 +57,15 @@ function describeFault({ code, path, value, limit }: ScenarioFault): string {
 }
 
 const LONGEST_SHOWN = 60;
+const shorten = (text: string): string =>
+	text.length > LONGEST_SHOWN ? `${text.slice(0, LONGEST_SHOWN)}…` : text;
+
+/** A faulty value as JSON can carry it: small ones as they are, large ones and those without a JSON form in words. */
+export function showValue(value: unknown): unknown {
+	if (value === undefined || value === null || typeof value === 'boolean') return value ?? null;
+	if (typeof value === 'number' && Number.isFinite(value)) return value;
+	return typeof value === 'string' ? shorten(value) : describeValue(value);
+}
 
 /** A value in a few words, however large or deep it is. */
 export function describeValue(value: unknown): string {
@@ -65,6 +74,5 @@ export function describeValue(value: unknown): string {
 	if (typeof value === 'object') return 'an object';
 	if (typeof value === 'function') return 'a function';
 	if (typeof value !== 'string') return String(value);
-	const shown = value.length > LONGEST_SHOWN ? `${value.slice(0, LONGEST_SHOWN)}…` : value;
-	return `"${shown}"`;
+	return `"${shorten(value)}"`;
 }

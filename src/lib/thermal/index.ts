@@ -1,5 +1,5 @@
 /** The engine's edge: what pages, services and programs may use. */
-export { ScenarioError, SCENARIO_ERROR_CODES } from './errors';
+export { ScenarioError, SCENARIO_ERROR_CODES, showValue } from './errors';
 export type { ScenarioErrorCode, ScenarioFault } from './errors';
 export * from './types';
 export { ambientTempC, sunWPerM2 } from './vehicle/climate';

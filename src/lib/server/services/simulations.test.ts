@@ -53,6 +53,15 @@ describe('simulate', () => {
 		});
 	});
 
+	it('says a large value in words instead of sending it back', () => {
+		expect(refusalOf({ ...DAY, extra: { deep: 'x'.repeat(1e5) } })).toMatchObject({
+			problems: [{ code: 'unknown_field', path: 'extra', value: 'an object' }]
+		});
+		expect(refusalOf({ ...DAY, extra: 'x'.repeat(1e5) })).toMatchObject({
+			problems: [{ path: 'extra', value: `${'x'.repeat(60)}…` }]
+		});
+	});
+
 	it('is not for customers', () => {
 		expect(() => simulate({ ...installer, role: 'customer' }, DAY)).toThrow(/role/);
 	});

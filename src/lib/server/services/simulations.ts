@@ -1,19 +1,14 @@
 import type { SignedInPerson } from '$lib/schemas/people';
-import { ScenarioError, simulateScenario, type SimulationReport } from '$lib/thermal';
+import { ScenarioError, showValue, simulateScenario, type SimulationReport } from '$lib/thermal';
 import { AppError } from '../errors';
 import { allow } from '../policies';
-
-/** JSON has no word for infinity: a value that it cannot carry is named instead of lost. */
-function showable(value: unknown): unknown {
-	return typeof value === 'number' && !Number.isFinite(value) ? String(value) : value;
-}
 
 /** A scenario that cannot be run, as the input error that it is: where, what, and what would have been right. */
 export function asInputError(error: unknown): unknown {
 	if (error instanceof ScenarioError) {
 		const { code, path, limit, message } = error;
 		return new AppError('invalid_input', message, [
-			{ code, path, value: showable(error.value), limit, message }
+			{ code, path, value: showValue(error.value), limit, message }
 		]);
 	}
 	return error;
