@@ -69,7 +69,8 @@ async function sendOne(mail: OutgoingMail): Promise<void> {
 		const nextAttemptAt = new Date(Date.now() + FIRST_PAUSE_MS * 2 ** attempts);
 		await OutgoingMail.update(
 			{ state: givenUp ? 'failed' : 'waiting', nextAttemptAt, lastError },
-			{ where: { id: mail.id } }
+			// Whoever dropped it meanwhile meant it: it is not put back.
+			{ where: { id: mail.id, state: 'waiting' } }
 		);
 		logger.warn({ mailId: mail.id, attempts, givenUp, lastError }, 'mail not sent');
 	}
