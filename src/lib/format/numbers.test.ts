@@ -38,11 +38,7 @@ describe('figures with units', () => {
 		[numbers.formatWatts(3.24), '3.2 W'],
 		[numbers.formatPercent(0.8), '80 %'],
 		[numbers.formatMass(640), '640 kg'],
-		[numbers.formatMass(2950), '3.0 t'],
-		[numbers.formatArea(0.0312), '312 cm²'],
-		[numbers.formatArea(0.9), '0.90 m²'],
-		[numbers.formatOfTwenty(0.55), 'about 11 of 20'],
-		[numbers.formatRange(9, 4, 16), '9 (4 to 16)']
+		[numbers.formatMass(2950), '3.0 t']
 	])('%s', (text, expected) => {
 		expect(plain(text)).toBe(expected);
 	});

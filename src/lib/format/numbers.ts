@@ -51,14 +51,3 @@ export const formatSpeed = (speedKmh: number): string => formatWithUnit(speedKmh
 /** Kilograms up to a tonne, then tonnes with one decimal, as a tow bar is spoken of. */
 export const formatMass = (massKg: number): string =>
 	Math.abs(massKg) < 1000 ? formatWithUnit(massKg, 'kg') : formatWithUnit(massKg / 1000, 't', 1);
-
-/** Small views in square centimetres, surfaces in square metres. */
-export const formatArea = (areaM2: number): string =>
-	Math.abs(areaM2) < 0.1 ? formatWithUnit(areaM2 * 1e4, 'cm²') : formatWithUnit(areaM2, 'm²', 2);
-
-/** Natural frequency on one denominator everywhere: "about 11 of 20". */
-export const formatOfTwenty = (share: number): string => `about ${formatNumber(share * 20)} of 20`;
-
-/** A count with its range in brackets: "9 (4 to 16)". */
-export const formatRange = (value: number, low: number, high: number, decimals = 0): string =>
-	`${formatNumber(value, decimals)} (${formatNumber(low, decimals)} to ${formatNumber(high, decimals)})`;

@@ -64,5 +64,3 @@ export function sayHours(hours: number): string {
 	if (halves % 2 === 0) return whole === 1 ? 'an hour' : `${word} hours`;
 	return whole === 1 ? 'an hour and a half' : `${word} and a half hours`;
 }
-
-export const sayCount = (count: number): string => SMALL_NUMBERS[count] ?? String(count);

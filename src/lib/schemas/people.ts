@@ -15,8 +15,7 @@ export interface SignedInPerson {
 	role: Role;
 }
 
-export const PASSWORD_MIN_LENGTH = 15;
-export const PASSWORD_MAX_LENGTH = 128;
+const PASSWORD_MAX_LENGTH = 128;
 
 export const signInSchema = z.object({
 	email: email('E-mail'),
@@ -28,11 +27,3 @@ export const signInSchema = z.object({
 });
 
 export const signInLinkSchema = z.object({ mailTo: email('Your e-mail') });
-
-export const personSchema = z.object({
-	id: z.number().int(),
-	name: z.string(),
-	email: z.string(),
-	role: z.enum(ROLES),
-	workshopName: z.string()
-});

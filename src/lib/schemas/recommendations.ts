@@ -10,13 +10,6 @@ export const recommendationInputSchema = z.object({
 });
 export type RecommendationInput = z.infer<typeof recommendationInputSchema>;
 
-export const recommendationFormSchema = z.object({ assessmentId: idSchema });
-export const overrideFormSchema = z.object({
-	assessmentId: idSchema,
-	decidedBy: words('Who decided', 120),
-	reason: words('Reason', 1_000)
-});
-
 export const recommendationSchema = z.object({
 	id: z.number().int(),
 	jobId: z.number().int(),

@@ -26,10 +26,8 @@ export const RULES = {
 	'recommendations.write': WORKSHOP,
 	'sheets.write': WORKSHOP,
 	'books.read': BENCH,
-	'people.read': ['manager'],
 	'mailbox.read': WORKSHOP,
-	'documents.read-own': ['customer'],
-	'self.read': ['installer', 'engineer', 'manager', 'customer']
+	'documents.read-own': ['customer']
 } as const satisfies Record<string, readonly Role[]>;
 
 export type Action = keyof typeof RULES;

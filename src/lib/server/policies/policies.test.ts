@@ -35,10 +35,8 @@ const EXPECTED: Record<Action, string> = {
 	'recommendations.write': 'iem',
 	'sheets.write': 'iem',
 	'books.read': 'em',
-	'people.read': 'm',
 	'mailbox.read': 'iem',
-	'documents.read-own': 'c',
-	'self.read': 'iemc'
+	'documents.read-own': 'c'
 };
 
 const cases = Object.entries(EXPECTED).flatMap(([action, letters]) =>

@@ -18,7 +18,7 @@ import { layOutLimits } from './limits';
 import { moveHour } from './move-hour';
 import { RIBBON_PALETTES } from './palette';
 import { placeWords, spreadColumn, wordsBox } from './place-words';
-import { drawComparedPictures, drawRibbonPictures, renderDayRibbonSvg } from './render-day-ribbon';
+import { drawRibbonPictures, renderDayRibbonSvg } from './render-day-ribbon';
 import { nameLeg, valueAt } from './ribbon-data';
 import { drawStrip } from './strip';
 import { estimateTextWidth } from './text-width';
@@ -194,7 +194,10 @@ describe('the axes', () => {
 		);
 	});
 	it('are the same for days that stand side by side', () => {
-		const [hot, cool] = drawComparedPictures([DAYS.hot, DAYS.cool], 'c').map(({ wide = '' }) => wide);
+		const days = [DAYS.hot, DAYS.cool];
+		const [hot, cool] = days.map(
+			(day, i) => drawRibbonPictures(day, ['wide'], `c-${i}`, 'page', spanOf(days)).wide
+		);
 		const limit = /d="(M38 [\d.]+L624 [\d.]+)" fill="none" stroke="var\(--color-ink\)" stroke-width="1.5">/;
 		expect(hot?.match(limit)?.[1]).toBeTruthy();
 		expect(cool?.match(limit)?.[1]).toBe(hot?.match(limit)?.[1]);

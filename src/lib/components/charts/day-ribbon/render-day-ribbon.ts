@@ -5,7 +5,7 @@ import { SVGRenderer } from 'echarts/renderers';
 import { cleanSvg } from './clean-svg';
 import { dayRibbonOption, type RibbonSettings } from './day-ribbon-option';
 import { describeRibbon } from './describe-ribbon';
-import { RIBBON_SIZES, spanOf, type RibbonSize, type RibbonSpan } from './frame';
+import { RIBBON_SIZES, type RibbonSize, type RibbonSpan } from './frame';
 import type { RibbonScheme } from './palette';
 import type { RibbonData } from './ribbon-data';
 
@@ -49,10 +49,4 @@ export function drawRibbonPictures(
 		})
 	]);
 	return Object.fromEntries(drawn);
-}
-
-/** The low pictures of several days on the same axes, in the order given. */
-export function drawComparedPictures(days: readonly RibbonData[], idPrefix: string): RibbonPictures[] {
-	const span = spanOf(days);
-	return days.map((day, i) => drawRibbonPictures(day, ['mini', 'wide'], `${idPrefix}-${i}`, 'page', span));
 }
