@@ -10,7 +10,8 @@ export async function ask(
 	path: string,
 	data?: Json
 ): Promise<Json> {
-	const response = await page.request.fetch(path, { method, ...(data ? { data } : {}) });
+	// A connection that stood idle too long is closed by the server: then it is opened anew.
+	const response = await page.request.fetch(path, { method, maxRetries: 2, ...(data ? { data } : {}) });
 	expect(response.ok(), `${method} ${path}: ${response.status()} ${await response.text()}`).toBe(true);
 	return (await response.json()) as Json;
 }

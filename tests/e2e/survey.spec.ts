@@ -2,6 +2,14 @@ import { expect, test, type Page } from '@playwright/test';
 import { ask, makeAssessableJob } from './assessable-job';
 import { expectNoViolations, signInAs } from './support';
 
+/** Under the bonnet, as far as the air path. */
+const BEFORE_THE_TRAY = {
+	...{ positionKind: 'under-bonnet', bayPlace: 'firewall', exhaustFacing: 'at-an-angle' },
+	...{ exhaustGapMm: 180, exhaustSeenWidthMm: 177.8, exhaustSeenHeightMm: 'unknown' },
+	...{ exhaustBatterySide: 'end', engineFacing: 'hidden', bonnetGapMm: 45, bonnetLining: 'lined' },
+	airPath: 'some-through-flow'
+};
+
 const next = (page: Page) => page.getByRole('button', { name: /^(Next|Save)/ });
 const verdict = (page: Page) => page.getByText(/^(Rides it out|Runs close|Cuts out)$/);
 
@@ -38,13 +46,12 @@ const isTooWide = (page: Page): Promise<boolean> =>
 test.describe('with a script', () => {
 	test.beforeEach(({ page }) => signInAs(page, 'installer'));
 
-	test('a position is surveyed from its name to the last answer, one question a page', async ({ page }) => {
-		const { jobId } = await begin(page);
+	test('a position is named and surveyed by thumb, one question a page', async ({ page }) => {
+		await begin(page);
 		await go(page, 'place');
 		await expect(page.getByText('1 of 7')).toBeVisible();
 		await page.getByLabel('By the firewall, on the exhaust side').check();
 		await expect(verdict(page)).toBeVisible();
-		await expectNoViolations(page);
 		await page.getByRole('button', { name: 'Next: exhaust' }).click();
 
 		await go(page, 'exhaust');
@@ -66,23 +73,26 @@ test.describe('with a script', () => {
 		await page.getByRole('button', { name: 'More: Gap up to the bonnet' }).click();
 		await page.getByRole('button', { name: 'More: Gap up to the bonnet' }).click();
 		await expect(page.getByRole('textbox', { name: 'Gap up to the bonnet' })).toHaveValue('45');
-		await page.getByLabel('I do not know').last().check();
-		await next(page).click();
+	});
 
-		await go(page, 'air');
-		await page.getByLabel('Some air passes through').check();
-		await next(page).click();
-
+	test('the last questions lead to all answers, each of which can be changed before the end', async ({
+		page
+	}) => {
+		const { jobId, mountId } = await begin(page);
+		const { version } = await ask(page, 'GET', `/api/v1/mounts/${mountId}`);
+		await ask(page, 'PUT', `/api/v1/mounts/${mountId}/survey`, {
+			...{ survey: BEFORE_THE_TRAY, complete: false, version }
+		});
+		await page.goto(`/mounts/${mountId}/survey`);
 		await go(page, 'tray');
+		await expect(verdict(page)).toBeVisible();
 		for (const unknown of await page.getByLabel('I do not know').all()) await unknown.check();
 		await next(page).click();
-
 		await go(page, 'shield');
 		await page.getByLabel('None', { exact: true }).check();
 		await page.getByRole('button', { name: 'Next: check your answers' }).click();
 
 		await go(page, 'check');
-		await expect(page.getByText('180\u202Fmm')).toBeVisible();
 		await expect(page.getByText('177.8\u202Fmm')).toBeVisible();
 		await expect(page.getByText('Height of hot pipe in view: not known.')).toBeVisible();
 		await expect(verdict(page)).toBeVisible();
@@ -96,6 +106,16 @@ test.describe('with a script', () => {
 		await page.getByRole('button', { name: 'Finish the survey' }).click();
 		await page.waitForURL((url) => url.pathname === `/jobs/${jobId}`);
 		await expect(page.getByText('Under the bonnet, surveyed')).toBeVisible();
+	});
+
+	test('a new position asks what it is called and where it would go', async ({ page }) => {
+		const { jobId } = await makeAssessableJob(page, { mounts: 0 });
+		await page.goto(`/jobs/${jobId}/mounts/new`);
+		await expectNoViolations(page);
+		await page.getByRole('button', { name: 'Begin the survey' }).click();
+		await expect(page.getByRole('link', { name: 'What you call this position is missing.' })).toBeVisible();
+		await expect(page.getByRole('link', { name: /^Where it would go/ })).toBeVisible();
+		await expect(page).toHaveTitle(/^Error: /);
 	});
 
 	test('the curve and the verdict follow each answer', async ({ page }) => {
