@@ -38,7 +38,11 @@ export type PlanLeg = z.infer<typeof planLegSchema>;
 export const dayPlanInputSchema = z.object({
 	name: words('Name of the day', 80),
 	startHour: measure('Starts at', 'h', 0, 23.99),
-	startSoc: z.number().min(0).max(1).meta({ label: 'State of charge at the start' }),
+	startSoc: z
+		.number({ error: 'State of charge at the start must be a number.' })
+		.min(0, { error: 'State of charge at the start must be at least 0.' })
+		.max(1, { error: 'State of charge at the start must be at most 1.' })
+		.meta({ label: 'State of charge at the start' }),
 	chargerMaxA: measure('Charger', 'A', 0, 300),
 	legs: z
 		.array(planLegSchema)

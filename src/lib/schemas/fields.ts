@@ -50,13 +50,15 @@ export function optionalWords(label: string, max: number) {
 }
 
 const EMAIL_WORDS = 'must look like name@example.org.';
+const EMAIL_CHARS = 254;
+const EMAIL_TOO_LONG = `must be ${EMAIL_CHARS} characters or fewer.`;
 
 export function email(label: string) {
 	return z
 		.string()
 		.trim()
 		.toLowerCase()
-		.max(254)
+		.max(EMAIL_CHARS, { error: `${label} ${EMAIL_TOO_LONG}` })
 		.pipe(z.email({ error: `${label} ${EMAIL_WORDS}` }))
 		.meta({ label });
 }
@@ -67,7 +69,7 @@ export function optionalEmail(label: string) {
 		.string()
 		.trim()
 		.toLowerCase()
-		.max(254)
+		.max(EMAIL_CHARS, { error: `${label} ${EMAIL_TOO_LONG}` })
 		.default('')
 		.refine((value) => value === '' || z.email().safeParse(value).success, {
 			error: `${label} ${EMAIL_WORDS}`
