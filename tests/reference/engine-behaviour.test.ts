@@ -69,7 +69,7 @@ describe('a hot touring day', () => {
 		for (const riseK of rises) expect(riseK).toBeGreaterThan(2);
 	});
 
-	it('soaks the battery case too', () => {
+	it('soaks the cells too: they warm on after the engine has stopped', () => {
 		const { minutes } = run({ position: HOT_SIDE, start, legs: TOURING });
 		const stop = TOURING.slice(0, 3).reduce((sum, leg) => sum + leg.minutes, 0);
 		const cells = minutes.nodes.cells;
