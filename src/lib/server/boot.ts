@@ -5,6 +5,7 @@ import { migrate } from './db/migrate';
 import { initModels } from './db/models';
 import { logger } from './logger';
 import { startOutbox, stopOutbox } from './mail/outbox';
+import { clearExpired, startClearing, stopClearing } from './services/clear-expired';
 import { seedDemo } from './services/demo/seed-demo';
 
 /** Kept on globalThis so that a development reload, which loads this module again, does not forget it. */
@@ -33,7 +34,9 @@ export async function boot(): Promise<void> {
 			return count === 0 ? 'up to date' : `${count} applied`;
 		});
 		if (settings.SOAKLINE_DEMO === '1') await timed('demo data', seedDemo);
+		await timed('clearing', async () => `${await clearExpired()} rows past their time`);
 		startOutbox();
+		startClearing();
 		state.soaklineReady = true;
 		logger.info({ step: 'ready', ms: 0, detail: settings.ORIGIN });
 	} catch (error) {
@@ -44,6 +47,7 @@ export async function boot(): Promise<void> {
 
 export async function shutDown(): Promise<void> {
 	state.soaklineReady = false;
+	stopClearing();
 	await stopOutbox();
 	await closeConnection();
 }

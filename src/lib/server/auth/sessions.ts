@@ -1,7 +1,10 @@
 import { randomBytes } from 'node:crypto';
+import type { Transaction } from 'sequelize';
 import type { SignedInPerson } from '$lib/schemas/people';
 import { Person, Session, Workshop } from '../db/models';
+import { inTransaction } from '../db/transaction';
 import { sha256 } from '../hash';
+import { record } from '../services/audit';
 
 const MINUTE_MS = 60_000;
 export const IDLE_MS = 30 * MINUTE_MS;
@@ -13,12 +16,27 @@ const TOUCH_EVERY_MS = MINUTE_MS;
 export async function openSession(personId: number): Promise<string> {
 	const secret = randomBytes(32).toString('base64url');
 	const now = new Date();
-	await Session.create({ id: sha256(secret), personId, createdAt: now, lastSeenAt: now });
+	await inTransaction(async (transaction) => {
+		await Session.create({ id: sha256(secret), personId, createdAt: now, lastSeenAt: now }, { transaction });
+		await note(personId, 'person.signed-in', transaction);
+	});
 	return secret;
 }
 
 export async function closeSession(secret: string): Promise<void> {
-	await Session.update({ revokedAt: new Date() }, { where: { id: sha256(secret) } });
+	await inTransaction(async (transaction) => {
+		const session = await Session.findByPk(sha256(secret), { transaction });
+		if (!session || session.revokedAt) return;
+		await session.update({ revokedAt: new Date() }, { transaction });
+		await note(session.personId, 'person.signed-out', transaction);
+	});
+}
+
+async function note(personId: number, action: string, transaction: Transaction): Promise<void> {
+	const person = await Person.findByPk(personId, { attributes: ['workshopId'], transaction });
+	if (!person) return;
+	const { workshopId } = person;
+	await record({ workshopId, personId, action, subjectType: 'person', subjectId: personId }, transaction);
 }
 
 /** Who a session belongs to, while it lives; null once it is idle, too old, revoked, or its person has left. */

@@ -10,6 +10,7 @@ export function writeSheetLetter(content: SheetContent, href: string) {
 		`${preparedBy} of ${workshop.name} worked out how a second battery in your ${vehicle} stands a hot day, and wrote it on one page for you. Please read it and tell us on the page that you have.`
 	];
 	const closing = [
+		'It is an estimate, not a certificate: the makers’ instructions, local rules and licensed practice come first.',
 		'The link is yours: whoever has it can read the page.',
 		reach === '' ? `Questions? Ask ${workshop.name}.` : `Questions? Ask ${workshop.name}: ${reach}.`
 	];

@@ -17,6 +17,10 @@ function requireMailbox(): string {
 	return MAILBOX_DIR;
 }
 
+/** Sheets are the shop's matter; a link that signs somebody in is for that person alone. */
+const mayRead = ({ email }: SignedInPerson, { sheetId, recipient }: OutgoingMail): boolean =>
+	sheetId !== null || recipient === email;
+
 /** The letters in the folder that this workshop sent: a file alone proves nothing, its message id must be on record. */
 async function findOwn(person: SignedInPerson) {
 	const kept = await listKeptLetters(requireMailbox(), MOST_LISTED);
@@ -26,7 +30,7 @@ async function findOwn(person: SignedInPerson) {
 	const rowOf = new Map(rows.map((row) => [row.messageId, row]));
 	return kept.flatMap(({ file, messageId }) => {
 		const row = rowOf.get(messageId);
-		return row ? [{ file, row }] : [];
+		return row && mayRead(person, row) ? [{ file, row }] : [];
 	});
 }
 

@@ -63,20 +63,21 @@ async function readSheet({ where, include = [] }: Find, transaction?: Transactio
 }
 
 /** Once: of two at the same moment one changes the row. */
-async function noteFirstOpening({ id, workshopId }: Sheet): Promise<void> {
+async function noteFirstOpening({ id, workshopId }: Sheet, reader: Reader): Promise<void> {
 	await inTransaction(async (transaction) => {
 		const where = { id, firstOpenedAt: null };
 		const [changed] = await Sheet.update({ firstOpenedAt: new Date() }, { where, transaction });
 		if (changed === 0) return;
 		const subject = { subjectType: 'sheet', subjectId: id };
-		await record({ workshopId, personId: null, action: 'sheet.link-opened', ...subject }, transaction);
+		const action = reader ? 'sheet.read' : 'sheet.link-opened';
+		await record({ workshopId, personId: reader?.id ?? null, action, ...subject }, transaction);
 	});
 }
 
 /** The page behind a link. To open it acknowledges nothing: programs that scan mail open links too. */
 export async function openSheet(token: string): Promise<SheetView> {
 	const sheet = await readSheet(byLink(token));
-	if (sheet.firstOpenedAt === null) await noteFirstOpening(sheet);
+	if (sheet.firstOpenedAt === null) await noteFirstOpening(sheet, null);
 	return presentSheet(sheet);
 }
 
@@ -90,7 +91,9 @@ export async function listMySheets(person: SignedInPerson): Promise<MySheet[]> {
 }
 
 export async function getMySheet(person: SignedInPerson, sheetId: number): Promise<SheetView> {
-	return presentSheet(await readSheet(ofOwn(person, sheetId)));
+	const sheet = await readSheet(ofOwn(person, sheetId));
+	if (sheet.firstOpenedAt === null) await noteFirstOpening(sheet, person);
+	return presentSheet(sheet);
 }
 
 async function storeAcknowledgement(

@@ -1,5 +1,6 @@
 import type { SignedInPerson } from '$lib/schemas/people';
 import { ScenarioError, showValue, simulateScenario, type SimulationReport } from '$lib/thermal';
+import { spend } from '../auth/rate-limit';
 import { AppError } from '../errors';
 import { allow } from '../policies';
 
@@ -14,9 +15,18 @@ export function asInputError(error: unknown): unknown {
 	return error;
 }
 
+/** A run holds the process while it lasts, so one person may not ask for any number of them. */
+const RUNS = { points: 300, windowS: 10 * 60 };
+
 /** Runs a scenario that a person or program wrote; stores nothing. */
-export function simulate(person: SignedInPerson, input: unknown): SimulationReport {
+export async function simulate(person: SignedInPerson, input: unknown): Promise<SimulationReport> {
 	allow(person, 'assessments.run');
+	await spend({ name: 'simulation', key: String(person.id), ...RUNS });
+	return runOnce(input);
+}
+
+/** The same without a person: one run, or the error that says what was wrong with it. */
+export function runOnce(input: unknown): SimulationReport {
 	try {
 		const result = simulateScenario(input);
 		if (result.status === 'done') return result.report;

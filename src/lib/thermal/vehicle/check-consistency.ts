@@ -25,18 +25,6 @@ const RULES: readonly Rule[] = [
 		limit: ({ exhaust }) => `not below exhaust.gasIdle, ${exhaust.gasIdle} °C`
 	},
 	{
-		path: 'position.exhaustView',
-		value: ({ position }) => position.exhaustView,
-		holds: ({ position, exhaust }) => position.exhaustView <= exhaust.area,
-		limit: ({ exhaust }) => `at most exhaust.area, ${exhaust.area} m²`
-	},
-	{
-		path: 'position.engineView',
-		value: ({ position }) => position.engineView,
-		holds: ({ position, engine }) => position.engineView <= engine.area,
-		limit: ({ engine }) => `at most engine.area, ${engine.area} m²`
-	},
-	{
 		path: 'battery.topArea',
 		value: ({ battery }) => battery.topArea,
 		holds: ({ battery }) => battery.topArea <= battery.caseArea,

@@ -26,9 +26,11 @@ export const load: PageServerLoad = async (event) => {
 	const outcomes = await orPageError(listMountOutcomes(person, jobId));
 	const asked = event.url.searchParams.get('assessment');
 	const chosen = await orPageError(loadChosen(person, jobId, asked));
+	const job = await orPageError(getJob(person, jobId));
 	return {
 		...{ jobId, outcomes, chosen },
-		jobNumber: (await orPageError(getJob(person, jobId))).number,
+		jobNumber: job.number,
+		chemistry: job.battery?.chemistry ?? '',
 		standing: await orPageError(newestRecommendation(person, jobId)),
 		isMade: event.url.searchParams.has('made'),
 		form: await loadForm(recommendationInputSchema, chosen ? { assessmentId: chosen.id } : {})
