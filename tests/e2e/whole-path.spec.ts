@@ -149,6 +149,8 @@ test('the installer goes from a new job to a printed recommendation, the custome
 
 /** The words of the list for the demo's desert. */
 async function alice(page: Page): Promise<string> {
+	await expect(page.getByRole('heading', { name: 'Where, and how hot?' })).toBeVisible();
+	await page.waitForLoadState('networkidle');
 	const words = await page.getByLabel('Place', { exact: true }).locator('option').allTextContents();
 	return words.find((each) => each.includes('Alice Springs'))?.trim() ?? 'none';
 }
