@@ -78,8 +78,8 @@ describe('simulate', () => {
 				evaluations: 1
 			})
 		}));
-		const { simulate: simulateFailing } = await import('./simulations');
-		expect(() => simulateFailing(installer, DAY)).toThrow(
+		const { runOnce: runFailing } = await import('./simulations');
+		expect(() => runFailing(DAY)).toThrow(
 			expect.objectContaining({
 				code: 'simulation_failed',
 				message: expect.stringContaining('Too many steps.')
