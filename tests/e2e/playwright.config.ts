@@ -22,7 +22,7 @@ export default defineConfig({
 	workers: 2,
 	retries: 0,
 	forbidOnly: true,
-	timeout: 60_000,
+	timeout: 120_000,
 	expect: { timeout: 10_000 },
 	use: {
 		baseURL: process.env.E2E_BASE_URL,
