@@ -40,7 +40,7 @@ describe('the local mailbox of a demonstration', () => {
 
 	it('makes no link of an address that leads elsewhere', async () => {
 		const { installer, workshopId } = await makeCrew();
-		await post(workshopId, 'ilse@travellers.example', 'See\n\nhttps://elsewhere.example/sheet/abc\n');
+		await post(workshopId, installer.email, 'See\n\nhttps://elsewhere.example/sheet/abc\n');
 		await sendDue();
 		const [row] = await listLetters(installer);
 		expect((await getLetter(installer, row!.messageId)).lines).toEqual([
@@ -55,8 +55,18 @@ describe('the local mailbox of a demonstration', () => {
 		await writeFile(join(folder, '9999-empty.eml'), '');
 		await writeFile(join(folder, '9999-broken.eml'), Buffer.from([0, 255, 13, 10, 13, 10, 1]));
 		await writeFile(join(folder, '9999-foreign.eml'), 'Message-ID: <made-up@elsewhere.example>\r\n\r\nHi');
-		await post(workshopId, 'ilse@travellers.example');
+		await post(workshopId, installer.email);
 		await sendDue();
 		expect(await listLetters(installer)).toHaveLength(1);
+	});
+
+	it('keeps a letter without a sheet, such as a link to sign in, for its reader alone', async () => {
+		const { installer, manager, workshopId } = await makeCrew();
+		await post(workshopId, manager.email);
+		await sendDue();
+		const [row] = await listLetters(manager);
+		expect(row).toBeDefined();
+		expect(await listLetters(installer)).toEqual([]);
+		await expect(getLetter(installer, row!.messageId)).rejects.toMatchObject({ code: 'not_found' });
 	});
 });

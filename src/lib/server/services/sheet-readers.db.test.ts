@@ -122,10 +122,13 @@ describe("a customer's own pages", () => {
 		expect(entry).toMatchObject({ personId: crew.customer.id });
 	});
 
-	it('do not count as opening the link', async () => {
+	it('count as read, by a reader who is known, and not as an opened link', async () => {
 		const { crew, sheet } = await makeSentSheet();
 		await getMySheet(crew.customer, sheet.id);
-		expect((await Sheet.findByPk(sheet.id))!.firstOpenedAt).toBeNull();
+		await getMySheet(crew.customer, sheet.id);
+		expect((await Sheet.findByPk(sheet.id))!.firstOpenedAt).not.toBeNull();
+		expect(await entriesOf(sheet.id, 'sheet.read')).toMatchObject([{ personId: crew.customer.id }]);
+		expect(await entriesOf(sheet.id, 'sheet.link-opened')).toEqual([]);
 	});
 
 	it('leave a withdrawn sheet out of the list, and say so where it was', async () => {
