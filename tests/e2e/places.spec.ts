@@ -50,8 +50,9 @@ test('a place is changed, and one of another number is not there', async ({ page
 	await page.getByRole('button', { name: 'Save the place' }).click();
 	await expect(page.getByText('Saved.')).toBeVisible();
 	await page.getByLabel('Hottest of the day').fill('41');
+	const answered = page.waitForResponse((response) => response.request().method() === 'POST');
 	await page.getByRole('button', { name: 'Save the place' }).click();
-	await expect(page.getByText('Saved.')).toBeVisible();
+	await answered;
 	await page.goto('/places');
 	await expect(page.getByRole('row').filter({ hasText: name })).toContainText('41 °C');
 	const missing = await page.goto('/places/999999999');
