@@ -22,7 +22,7 @@ const IN_THE_CABIN: Record<string, string> = { enclosureCooling: 'cooled', enclo
 async function answer(page: Page, name: string, value: string): Promise<void> {
 	const chip = page.locator(`input[type="radio"][name="${name}"][value="${value}"]`);
 	if ((await chip.count()) > 0) await chip.check();
-	else await page.locator(`input[name="${name}"]`).fill(value);
+	else await page.locator(`input[type="text"][name="${name}"]`).fill(value);
 }
 
 /** Answers one page of the survey after another, as they come, until the answers are shown for a check. */
