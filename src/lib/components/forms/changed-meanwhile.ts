@@ -22,3 +22,8 @@ export function findChanges(
 		.filter(([field]) => mine[field] !== now[field])
 		.map(([field, label]) => ({ label, mine: sayValue(mine[field]), now: sayValue(now[field]) }));
 }
+
+/** What the record says now, when the answer to a save brought it because somebody else had saved meanwhile. */
+export function findNewest(answer: object | null): FormValues | undefined {
+	return answer && 'newest' in answer ? (answer.newest as FormValues) : undefined;
+}

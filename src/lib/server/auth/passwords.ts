@@ -9,14 +9,16 @@ const PARALLEL = 2;
 let running = 0;
 const waiting: (() => void)[] = [];
 
+/** A place that becomes free goes straight to whoever has waited longest, so that nobody slips in between. */
 async function inTurn<T>(work: () => Promise<T>): Promise<T> {
-	if (running >= PARALLEL) await new Promise<void>((resolve) => waiting.push(resolve));
-	running++;
+	if (running < PARALLEL) running++;
+	else await new Promise<void>((resolve) => waiting.push(resolve));
 	try {
 		return await work();
 	} finally {
-		running--;
-		waiting.shift()?.();
+		const next = waiting.shift();
+		if (next) next();
+		else running--;
 	}
 }
 

@@ -2,6 +2,7 @@ import { KELVIN_AT_ZERO_C, STEFAN_BOLTZMANN } from '../correlations/radiation';
 import type { HeatSystem } from '../solve/heat-system';
 import { checkNetwork } from './check-network';
 import type { NetworkDescription, NetworkLink, NetworkSource } from './description';
+import { countKinds, planScatter, sortByKind, type Mix } from './lay-out';
 
 const REFERENCE_K = 298.15;
 
@@ -12,13 +13,6 @@ type LinkOf<K extends LinkKind> = Extract<NetworkLink, { kind: K }>;
 interface Ends {
 	from: Int32Array;
 	to: Int32Array;
-}
-
-interface Mix {
-	node: number;
-	offsetK: number;
-	parts: Int32Array;
-	weights: Float64Array;
 }
 
 /**
@@ -103,7 +97,11 @@ export class CompiledNetwork implements HeatSystem {
 		this.currents = Float64Array.from(this.joules, (source) => source.currentA);
 		this.stops = countKinds(links, sources);
 
-		const scatter = this.planScatter(links, sources);
+		const scatter = planScatter(links, sources, {
+			size: this.size,
+			indexOf: (node) => this.indexOf(node),
+			mixes: this.mixes
+		});
 		this.pattern = scatter.map(({ row, column }) => [row, column] as const);
 		this.scatterPlace = Int32Array.from(scatter, ({ row, column }) => row * this.size + column);
 		this.scatterSlope = Int32Array.from(scatter, ({ slope }) => slope);
@@ -314,74 +312,6 @@ export class CompiledNetwork implements HeatSystem {
 			slopes[2 * at] = current === 0 ? 0 : (-q * activationK) / (kelvin * kelvin);
 		}
 	}
-
-	private planScatter(links: readonly NetworkLink[], sources: readonly NetworkSource[]): Scatter[] {
-		const entries: Scatter[] = [];
-		const addRow = (row: number, slope: number, along: number, weight: number): void => {
-			if (row >= this.size) return;
-			for (const [column, share] of this.expand(along)) {
-				entries.push({ row, column, slope, weight: weight * share });
-			}
-		};
-		links.forEach((link, at) => {
-			const from = this.indexOf(link.from);
-			const to = this.indexOf(link.to);
-			for (const [slope, along] of [
-				[2 * at, from],
-				[2 * at + 1, to]
-			] as const) {
-				if (link.kind !== 'flow') addRow(from, slope, along, -1);
-				addRow(to, slope, along, 1);
-				if (link.kind === 'gate') addRow(this.indexOf(link.carryTo), slope, along, link.carryShare);
-			}
-		});
-		sources.forEach((source, k) => {
-			const at = links.length + k;
-			const node = this.indexOf(source.node);
-			if (source.kind === 'joule') addRow(node, 2 * at, node, 1);
-		});
-		return entries;
-	}
-
-	/** The stored nodes, with weights, on which the temperature of a node depends. */
-	private expand(node: number): [number, number][] {
-		if (node < this.size) return [[node, 1]];
-		const mix = this.mixes.find((candidate) => candidate.node === node);
-		if (!mix) return [];
-		return Array.from(mix.parts, (part, k): [number, number] => [part, mix.weights[k]!]).filter(
-			([part]) => part < this.size
-		);
-	}
-}
-
-interface Scatter {
-	row: number;
-	column: number;
-	slope: number;
-	weight: number;
-}
-
-function sortByKind<T extends { kind: string }>(parts: readonly T[], kinds: readonly T['kind'][]): T[] {
-	return kinds.flatMap((kind) => parts.filter((part) => part.kind === kind));
-}
-
-/** Where the run of each kind ends in the sorted list of links and sources. */
-function countKinds(
-	links: readonly NetworkLink[],
-	sources: readonly NetworkSource[]
-): Record<LinkKind | NetworkSource['kind'], number> {
-	let sum = 0;
-	const upTo = (kind: string) =>
-		(sum += [...links, ...sources].filter((part: { kind: string }) => part.kind === kind).length);
-	return {
-		conductance: upTo('conductance'),
-		flow: upTo('flow'),
-		radiation: upTo('radiation'),
-		gate: upTo('gate'),
-		excess: upTo('excess'),
-		heat: upTo('heat'),
-		joule: upTo('joule')
-	};
 }
 
 /** How far a thermostat stands open at a temperature, 0…1. */
