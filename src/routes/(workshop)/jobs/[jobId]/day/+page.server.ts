@@ -5,7 +5,7 @@ import { DAY_PLAN_TEMPLATES } from '$lib/schemas/day-plan-form';
 import { AppError } from '$lib/server/errors';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { validate } from '$lib/server/http/validate';
-import { saveDayPlan } from '$lib/server/services/day-plans';
+import { getDayPlan, saveDayPlan } from '$lib/server/services/day-plans';
 import { getPreview } from '$lib/server/services/previews';
 import type { Actions, PageServerLoad } from './$types';
 
@@ -44,8 +44,11 @@ export const actions: Actions = {
 			await saveDayPlan(person, jobId, { ...parsed.plan, version });
 		} catch (refusal) {
 			if (!(refusal instanceof AppError)) throw refusal;
-			const message = refusal.code === 'changed_meanwhile' ? CHANGED : refusal.message;
-			return fail(refusal.status, { draft, problems: [{ path: '', message }], isStale: true });
+			if (refusal.code !== 'changed_meanwhile')
+				return fail(refusal.status, { draft, problems: [{ path: '', message: refusal.message }] });
+			// With the newest version in hand, the next save is meant to take its place.
+			const version = (await getDayPlan(person, jobId))?.version ?? null;
+			return fail(409, { draft, problems: [{ path: '', message: CHANGED }], version });
 		}
 		redirect(303, `/jobs/${jobId}#day`);
 	}
