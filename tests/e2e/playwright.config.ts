@@ -27,6 +27,8 @@ export default defineConfig({
 	use: {
 		baseURL: process.env.E2E_BASE_URL,
 		locale: 'en-GB',
+		actionTimeout: 20_000,
+		navigationTimeout: 30_000,
 		launchOptions,
 		screenshot: 'only-on-failure',
 		trace: 'retain-on-failure'

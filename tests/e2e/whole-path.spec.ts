@@ -110,10 +110,7 @@ test('the installer goes from a new job to a printed recommendation, the custome
 	await expectNoViolations(page);
 
 	await page.goto(`${jobUrl}/recommendation`);
-	await page
-		.getByRole('link', { name: /Under the seat/ })
-		.first()
-		.click();
+	await page.getByRole('link', { name: 'Recommend B' }).click();
 	await page.getByRole('button', { name: 'Recommend mount B' }).click();
 	await expect(page.getByText('Recommended and kept.')).toBeVisible();
 	const print = await page
