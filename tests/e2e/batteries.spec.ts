@@ -38,7 +38,7 @@ test.beforeEach(({ page }) => signInAs(page, 'installer'));
 
 test('a battery is copied from its data sheet, and the list shows what its maker says', async ({ page }) => {
 	const model = await addBattery(page);
-	await expect(page.getByText('Saved.')).toBeVisible();
+	await expect(page.getByText('Saved.', { exact: true })).toBeVisible();
 	await expect(page.getByLabel('Width', { exact: true })).toHaveValue('172.72');
 	await expectNoViolations(page);
 	await page.goto('/batteries');
@@ -77,7 +77,7 @@ test('when somebody else saved meanwhile, both versions are shown and nothing is
 	await openForm(colleague, address);
 	await colleague.getByLabel('Goes dark at', { exact: true }).fill('75');
 	await colleague.getByRole('button', { name: 'Save the battery' }).click();
-	await expect(colleague.getByText('Saved.')).toBeVisible();
+	await expect(colleague.getByText('Saved.', { exact: true })).toBeVisible();
 
 	await page.getByLabel('Capacity', { exact: true }).fill('95');
 	await page.getByRole('button', { name: 'Save the battery' }).click();
@@ -89,7 +89,7 @@ test('when somebody else saved meanwhile, both versions are shown and nothing is
 	await expectNoViolations(page);
 
 	await page.getByRole('button', { name: 'Save the battery' }).click();
-	await expect(page.getByText('Saved.')).toBeVisible();
+	await expect(page.getByText('Saved.', { exact: true })).toBeVisible();
 	await openForm(colleague, address);
 	await expect(colleague.getByLabel('Capacity', { exact: true })).toHaveValue('95');
 	await expect(colleague.getByLabel('Goes dark at', { exact: true })).toHaveValue('80');

@@ -171,6 +171,17 @@ test.describe('with a script', () => {
 test.describe('without a script', () => {
 	test.use({ javaScriptEnabled: false });
 
+	test('a second press of the button begins no second job', async ({ page }) => {
+		await signInAs(page, 'installer');
+		await page.goto('/jobs/new');
+		await fillNewVehicle(page, ownName());
+		const sent = page.waitForRequest((request) => request.method() === 'POST');
+		await page.getByRole('button', { name: 'Begin the job' }).click();
+		await page.waitForURL(/\/jobs\/\d+$/);
+		const again = await page.request.fetch(await sent, { maxRedirects: 0 });
+		expect(await again.json()).toMatchObject({ type: 'redirect', location: new URL(page.url()).pathname });
+	});
+
 	test('a job is begun, found in the list and given its hot day', async ({ page }) => {
 		const customer = ownName();
 		await signInAs(page, 'installer');

@@ -48,7 +48,7 @@ test('a place is changed, and one of another number is not there', async ({ page
 	await fillPlace(page, name);
 	await page.getByLabel('Where the figures come from').fill('Invented for a test.');
 	await page.getByRole('button', { name: 'Save the place' }).click();
-	await expect(page.getByText('Saved.')).toBeVisible();
+	await expect(page.getByText('Saved.', { exact: true })).toBeVisible();
 	await page.getByLabel('Hottest of the day').fill('41');
 	const answered = page.waitForResponse((response) => response.request().method() === 'POST');
 	await page.getByRole('button', { name: 'Save the place' }).click();

@@ -2,7 +2,7 @@ import { readFileSync, readdirSync } from 'node:fs';
 import { join } from 'node:path';
 import { expect, test } from '@playwright/test';
 import people from '../../seeds/demo-people.json' with { type: 'json' };
-import { expectNoViolations, signInAs } from './support';
+import { expectNoViolations, personOf, signInWith } from './support';
 
 const engineer = people.find(({ role }) => role === 'engineer') ?? { email: '', password: '' };
 
@@ -50,7 +50,7 @@ test('signing out ends the session everywhere that its cookie was copied to', as
 	playwright,
 	baseURL
 }) => {
-	await signInAs(page, 'engineer');
+	await signInWith(page, personOf('engineer'));
 	const state = await page.context().storageState();
 	const copy = await playwright.request.newContext({ baseURL, storageState: state });
 	expect((await copy.get('/api/v1/places')).status()).toBe(200);

@@ -1,6 +1,6 @@
 import { expect, test, type Page } from '@playwright/test';
 import { ask, makeAssessableJob } from './assessable-job';
-import { expectNoViolations, signInAs } from './support';
+import { expectNoViolations, personOf, signInAs, signInWith } from './support';
 
 /** Under the bonnet, as far as the air path. */
 const BEFORE_THE_TRAY = {
@@ -177,6 +177,8 @@ test.describe('with a script', () => {
 	});
 
 	test('what was typed is gone from the phone after signing out', async ({ page }) => {
+		await page.context().clearCookies();
+		await signInWith(page, personOf('installer'));
 		const { mountId } = await begin(page);
 		await page.goto(`/mounts/${mountId}/survey/bonnet`);
 		await page.getByRole('textbox', { name: 'Gap up to the bonnet' }).fill('62');

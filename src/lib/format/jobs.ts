@@ -15,7 +15,9 @@ const PART_WORDS: Record<AssessedPart, string> = {
 	place: 'the place',
 	'hot-day': 'the hot day',
 	'day-plan': 'the day plan',
-	survey: 'the survey'
+	survey: 'the survey',
+	book: 'the coefficient book',
+	engine: 'the engine'
 };
 
 /** "the battery, the hot day and the day plan". */

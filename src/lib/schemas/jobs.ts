@@ -91,7 +91,10 @@ export const jobPageSchema = z.object({
 export type JobPage = z.infer<typeof jobPageSchema>;
 
 /** What an assessment rests on, and what may have changed since. */
-export const ASSESSED_PARTS = ['vehicle', 'battery', 'place', 'hot-day', 'day-plan', 'survey'] as const;
+export const ASSESSED_PARTS = [
+	...(['vehicle', 'battery', 'place', 'hot-day', 'day-plan', 'survey'] as const),
+	...(['book', 'engine'] as const)
+] as const;
 export type AssessedPart = (typeof ASSESSED_PARTS)[number];
 
 /** Where a mount stands: its newest assessment, and what the job has changed since then. */

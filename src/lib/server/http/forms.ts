@@ -1,24 +1,33 @@
+import { randomUUID } from 'node:crypto';
 import { fail, redirect, type RequestEvent } from '@sveltejs/kit';
 import { message, setError, superValidate, type SuperValidated } from 'sveltekit-superforms';
 import type { z } from 'zod';
 import { formShape, parseForm, toFormValues, type FormValues } from '$lib/format/form-values';
 import type { SignedInPerson } from '$lib/schemas/people';
 import { AppError } from '../errors';
+import { sha256 } from '../hash';
 import type { Action } from '../policies';
 import { guard } from './guard';
+import { answerOnce } from './idempotency';
 import { zod4 } from './zod-adapter';
 
 /** A form as the page holds it: numbers are the text that was typed, until the schema has read them. */
 export type PageForm = SuperValidated<FormValues, string>;
 
+/** A form on its way to the page; its key goes along when it is sent, so that sending it twice does it once. */
+export type FreshForm = PageForm & { onceKey: string };
+
+const ONCE_KEY = 'onceKey';
+
 /** The form for a page, with what is known so far in its boxes. */
 export async function loadForm<S extends z.ZodObject>(
 	schema: S,
 	data: Partial<z.input<S>> = {}
-): Promise<PageForm> {
+): Promise<FreshForm> {
 	const shape = formShape(schema);
 	const values = toFormValues(schema, data) as never;
-	return (await superValidate(values, zod4(shape), { errors: false })) as unknown as PageForm;
+	const form = (await superValidate(values, zod4(shape), { errors: false })) as unknown as PageForm;
+	return { ...form, onceKey: randomUUID() };
 }
 
 type Read<S extends z.ZodObject> = { form: PageForm; data: z.output<S> } | { form: PageForm; data: null };
@@ -45,6 +54,23 @@ export function refuseForm(form: PageForm, error: unknown) {
 	return message(form, error.message, { status: error.status as 400 });
 }
 
+/** Does what a form asks once for the page that it stood on: a second press leads to what the first one made. */
+async function saveOnce(
+	{ id: personId }: SignedInPerson,
+	{ url }: RequestEvent,
+	formData: FormData,
+	save: () => Promise<string>
+): Promise<string> {
+	if (!formData.has(ONCE_KEY)) return save();
+	const entries = JSON.stringify([url.pathname, url.search, ...formData]);
+	const key = `form-${sha256(entries)}`;
+	const answer = await answerOnce({ personId, key, request: entries }, async () => ({
+		status: 303,
+		body: await save()
+	}));
+	return answer.body;
+}
+
 /**
  * A form's whole way: guard, validate, do (the service authorises, records and keeps it in one transaction), then 303.
  * After any refusal the page comes back with every word still in its box.
@@ -59,9 +85,12 @@ export async function saveForm<S extends z.ZodObject>(
 	}
 ) {
 	const person = guard(event, steps.action);
-	const { form, data } = await readForm(await event.request.formData(), steps.schema);
+	const formData = await event.request.formData();
+	const { form, data } = await readForm(formData, steps.schema);
 	if (data === null) return fail(422, { form });
-	const next = await steps.save(person, data).catch((error: unknown) => ({ refusal: error }));
+	const next = await saveOnce(person, event, formData, () => steps.save(person, data)).catch(
+		(error: unknown) => ({ refusal: error })
+	);
 	if (typeof next !== 'string') return refuseForm(form, next.refusal);
 	redirect(303, next);
 }

@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest';
 import type { SignedInPerson } from '$lib/schemas/people';
 import { makeAssessableJob } from '../../../../tests/support/assessable-job';
 import { makeCrew, useTestDatabase } from '../../../../tests/support/services';
+import { Assessment, CoefficientBook } from '../db/models';
 import { assessJob, assessMount } from './assessments';
 import { getBattery, updateBattery } from './batteries';
 import { getDayPlan, saveDayPlan } from './day-plans';
@@ -81,6 +82,23 @@ describe('what changed since the last assessment', () => {
 		const plan = (await getDayPlan(installer, jobId))!;
 		await saveDayPlan(installer, jobId, { ...plan, chargerMaxA: plan.chargerMaxA + 5 });
 		expect((await changedParts(installer, jobId))[hotId]).toEqual(['vehicle', 'battery', 'day-plan']);
+	});
+
+	it('is the book when the workshop has put another in force', async () => {
+		const { installer } = await makeCrew();
+		const { jobId, hotId, coolId } = await assessed(installer);
+		const where = { workshopId: installer.workshopId };
+		await CoefficientBook.update({ state: 'withdrawn' }, { where });
+		await CoefficientBook.create({ ...where, number: 2, name: 'Tuned', state: 'in-force' });
+		expect(await changedParts(installer, jobId)).toEqual({ [hotId]: ['book'], [coolId]: ['book'] });
+	});
+
+	it('is the engine when an assessment was made with an older one', async () => {
+		const { installer } = await makeCrew();
+		const { jobId, hotId, coolId } = await assessed(installer);
+		const { id: _id, ...newest } = (await Assessment.findOne({ where: { mountId: hotId } }))!.toJSON();
+		await Assessment.create({ ...newest, engineVersion: '0.0.1' });
+		expect(await changedParts(installer, jobId)).toEqual({ [hotId]: ['engine'], [coolId]: [] });
 	});
 
 	it('is not a number plate, nor the name of a day', async () => {

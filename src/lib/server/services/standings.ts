@@ -5,7 +5,8 @@ import { dayPlanInputSchema } from '$lib/schemas/day-plans';
 import type { AssessedPart, MountStanding } from '$lib/schemas/jobs';
 import { hotDayFields } from '$lib/schemas/places';
 import { surveyAnswersSchema } from '$lib/schemas/survey';
-import { Assessment, type DayPlan, type Job, type Mount } from '../db/models';
+import { ENGINE_VERSION } from '$lib/thermal';
+import { Assessment, CoefficientBook, type DayPlan, type Job, type Mount } from '../db/models';
 import { canonicalJson } from '../hash';
 import { presentHotDay, presentStanding } from '../presenters/jobs';
 
@@ -77,26 +78,42 @@ export function partsChangedSince(inputs: AssessmentInputs, now: Now): AssessedP
 	).map(({ part }) => part);
 }
 
+/** Whether the workshop has put another book in force, or the engine is another one. */
+function toolsChangedSince({ bookId, engineVersion }: Assessment, bookInForceId?: number): AssessedPart[] {
+	const changed: AssessedPart[] = [];
+	if (bookId !== bookInForceId) changed.push('book');
+	if (engineVersion !== ENGINE_VERSION) changed.push('engine');
+	return changed;
+}
+
 /** The newest assessment of each mount, and what was changed after it. */
 export async function findStandings(
 	job: Job,
 	mounts: Mount[],
 	dayPlan: DayPlan | null
 ): Promise<MountStanding[]> {
+	const { workshopId } = job;
+	const inForce = await CoefficientBook.findOne({ where: { workshopId, state: 'in-force' } });
 	const newest = await Assessment.findAll({
 		attributes: [[fn('MAX', col('id')), 'id']],
 		where: { jobId: job.id, mountId: mounts.map((mount) => mount.id) },
 		group: ['mount_id']
 	});
 	const assessments = await Assessment.findAll({
-		attributes: ['id', 'mountId', 'verdict', 'headroomK', 'createdAt', 'inputs'],
+		attributes: [
+			...['id', 'mountId', 'verdict', 'headroomK', 'createdAt', 'inputs'],
+			...['bookId', 'engineVersion']
+		],
 		where: { id: { [Op.in]: newest.map((each) => each.id) } },
 		order: [['mountId', 'ASC']]
 	});
 	return assessments.flatMap((assessment) => {
 		const mount = mounts.find((each) => each.id === assessment.mountId);
-		return mount
-			? [presentStanding(assessment, partsChangedSince(assessment.inputs, { job, mount, dayPlan }))]
-			: [];
+		if (!mount) return [];
+		const changed = [
+			...partsChangedSince(assessment.inputs, { job, mount, dayPlan }),
+			...toolsChangedSince(assessment, inForce?.id)
+		];
+		return [presentStanding(assessment, changed)];
 	});
 }
