@@ -6,6 +6,9 @@ function testProject(name: string, test: Record<string, unknown>): TestProjectIn
 	return { extends: true, test: { name, environment: 'node', expect: { requireAssertions: true }, ...test } };
 }
 
+/** One file at a time: they share the database of the run. */
+const ON_THE_DATABASE = { fileParallelism: false, testTimeout: 30_000, hookTimeout: 60_000 };
+
 export default defineConfig({
 	plugins: [tailwindcss(), sveltekit()],
 	worker: { format: 'es' },
@@ -14,16 +17,14 @@ export default defineConfig({
 	test: {
 		projects: [
 			testProject('unit', {
+				isolate: false,
 				include: ['src/**/*.test.ts', 'tests/*.test.ts'],
-				exclude: ['src/**/*.component.test.ts', 'src/**/*.db.test.ts']
+				exclude: ['src/**/*.{component,db,settings}.test.ts']
 			}),
-			testProject('reference', { include: ['tests/reference/**/*.test.ts'] }),
-			testProject('services', {
-				include: ['src/**/*.db.test.ts', 'tests/services/**/*.db.test.ts'],
-				fileParallelism: false,
-				testTimeout: 30_000,
-				hookTimeout: 60_000
-			}),
+			testProject('reference', { isolate: false, include: ['tests/reference/**/*.test.ts'] }),
+			testProject('services', { ...ON_THE_DATABASE, isolate: false, include: ['src/**/*.db.test.ts'] }),
+			// The process keeps the settings that it read first, so that each file here has one of its own.
+			testProject('settings', { ...ON_THE_DATABASE, include: ['src/**/*.settings.test.ts'] }),
 			{
 				...testProject('components', { environment: 'jsdom', include: ['src/**/*.component.test.ts'] }),
 				resolve: { conditions: ['browser'] }

@@ -42,19 +42,18 @@ function whole(place, name, args) {
 
 /**
  * @param {Place} place
- * @param {string} project vitest's
+ * @param {string[]} projects vitest's
  * @param {NodeJS.ProcessEnv} [env]
  * @returns {Promise<Outcome>}
  */
-async function runVitest(place, project, env) {
-	const report = join(place.folder, `${project}.json`);
+async function runVitest(place, projects, env) {
+	const report = join(place.folder, `${projects.join('-')}.json`);
 	const { code, output } = await runNode(
 		place,
 		[
 			VITEST,
 			'run',
-			'--project',
-			project,
+			...projects.map((project) => `--project=${project}`),
 			'--reporter=default',
 			'--reporter=json',
 			`--outputFile.json=${report}`,
@@ -69,7 +68,7 @@ async function runVitest(place, project, env) {
 async function runServices(place) {
 	const surroundings = await openSurroundings(join(place.folder, 'services'), { demo: false });
 	try {
-		return await runVitest(place, 'services', { ...surroundings.env, NODE_ENV: 'test' });
+		return await runVitest(place, ['services', 'settings'], { ...surroundings.env, NODE_ENV: 'test' });
 	} finally {
 		await surroundings.close();
 	}
@@ -142,9 +141,9 @@ export function allPhases(place) {
 			'./tsconfig.json',
 			'--fail-on-warnings'
 		]),
-		{ name: 'unit', work: () => runVitest(place, 'unit') },
-		{ name: 'components', work: () => runVitest(place, 'components') },
-		{ name: 'reference', work: () => runVitest(place, 'reference') },
+		{ name: 'unit', work: () => runVitest(place, ['unit']) },
+		{ name: 'components', work: () => runVitest(place, ['components']) },
+		{ name: 'reference', work: () => runVitest(place, ['reference']) },
 		{ name: 'services', work: () => runServices(place) },
 		{ name: 'e2e', needs: 'build', alone: true, work: () => runBrowser(place) }
 	];
