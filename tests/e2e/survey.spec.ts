@@ -108,6 +108,24 @@ test.describe('with a script', () => {
 		await expect(page.getByText('Under the bonnet, surveyed')).toBeVisible();
 	});
 
+	test('what was chosen before the script came stays chosen', async ({ page }) => {
+		const { jobId } = await makeAssessableJob(page, { mounts: 0 });
+		let comes = () => {};
+		const script = new Promise<void>((resolve) => (comes = resolve));
+		await page.route('**/_app/**/*.js', async (route) => {
+			await script;
+			await route.continue();
+		});
+		await page.goto(`/jobs/${jobId}/mounts/new`, { waitUntil: 'commit' });
+		await page.getByLabel('In the cabin').check();
+		await page.getByLabel('What you call this position').fill('Behind the seat');
+		comes();
+		await page.waitForLoadState('networkidle');
+		await expect(page.getByLabel('In the cabin')).toBeChecked();
+		await page.getByRole('button', { name: 'Begin the survey' }).click();
+		await page.waitForURL(/\/survey\/\w+$/);
+	});
+
 	test('a new position asks what it is called and where it would go', async ({ page }) => {
 		const { jobId } = await makeAssessableJob(page, { mounts: 0 });
 		await page.goto(`/jobs/${jobId}/mounts/new`);
