@@ -2,7 +2,9 @@ import { describe, expect, it } from 'vitest';
 import { parseScenario, simulateScenario, type BmsEvent, type NodeName } from '../../src/lib/thermal';
 import { ENGINE_CASES } from './support/cases';
 import { completeCase, LEG_DEFAULTS, MODEL_DEFAULTS, type CaseInput } from './support/defaults';
-import { integrateWithMathjs, integrateWithOdex, type ReferenceIntegrator } from './support/libraries';
+import type { ReferenceIntegrator } from './support/integrator';
+import { integrateWithMathjs } from './support/mathjs';
+import { integrateWithOdex } from './support/odex';
 import { MODEL_STATE } from './support/model-equations';
 import { runReference, type ReferenceRun } from './support/reference-run';
 

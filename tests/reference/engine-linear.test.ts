@@ -2,7 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import type { NetworkDescription, NetworkLink } from '../../src/lib/thermal/network/description';
 import { simulateNetwork } from '../../src/lib/thermal/network/simulate-network';
-import { exponentiate } from './support/libraries';
+import { exponentiate } from './support/mathjs';
 
 interface Linear {
 	capacities: number[];

@@ -1,10 +1,3 @@
-/** Something that can run a case: `time` is what the clock sees, `run` gives what is compared. */
-export interface Contender<Input, Output> {
-	name: string;
-	time: (input: Input) => unknown;
-	run: (input: Input) => Output;
-}
-
 interface Run {
 	minutes: readonly (readonly number[])[];
 	events: readonly { hour: number }[];
@@ -23,8 +16,8 @@ export interface BenchRow extends Deviation {
 	medianMs: number;
 }
 
-/** Runs shorter than this are repeated within one measurement, so that the clock's resolution does not matter. */
-const SHORTEST_MS = 20;
+/** Runs are repeated up to this in one measurement: what is measured is the steady state, not the way there. */
+const SHORTEST_MS = 250;
 const WARM_UP = 3;
 
 function timeOnce(action: () => unknown, repeats: number): number {
@@ -33,27 +26,16 @@ function timeOnce(action: () => unknown, repeats: number): number {
 	return (performance.now() - start) / repeats;
 }
 
+/** Milliseconds of one action among many of the same, ms. */
+export function timeSteadily(action: () => unknown): number {
+	timeOnce(action, WARM_UP);
+	return timeOnce(action, Math.max(1, Math.ceil(SHORTEST_MS / timeOnce(action, 1))));
+}
+
 export function findMedian(values: readonly number[]): number {
 	const sorted = [...values].sort((a, b) => a - b);
 	const middle = sorted.length >> 1;
 	return sorted.length % 2 ? sorted[middle]! : (sorted[middle - 1]! + sorted[middle]!) / 2;
-}
-
-/** All contenders take turns in each round, so that whatever else the machine does falls on all of them. */
-export function measureInterleaved<Input, Output>(
-	contenders: readonly Contender<Input, Output>[],
-	input: Input,
-	rounds: number
-): Map<string, number> {
-	const repeats = contenders.map(({ time }) => {
-		for (let k = 0; k < WARM_UP; k++) time(input);
-		return Math.max(1, Math.ceil(SHORTEST_MS / timeOnce(() => time(input), 1)));
-	});
-	const times = contenders.map((): number[] => []);
-	for (let round = 0; round < rounds; round++) {
-		contenders.forEach(({ time }, k) => times[k]!.push(timeOnce(() => time(input), repeats[k]!)));
-	}
-	return new Map(contenders.map(({ name }, k) => [name, findMedian(times[k]!)]));
 }
 
 /** How far a run is from a much tighter one. */

@@ -1,5 +1,5 @@
 import type { ModelLeg, ModelScenario } from './defaults';
-import type { Piece, ReferenceIntegrator } from './libraries';
+import type { Piece, ReferenceIntegrator } from './integrator';
 import { MODEL_STATE, modelAmbientC, modelDerivative, type ModelSwitches } from './model-equations';
 
 export interface ReferenceEvent {

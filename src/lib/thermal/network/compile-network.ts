@@ -52,50 +52,45 @@ export class CompiledNetwork implements HeatSystem {
 	private readonly scatterWeight: Float64Array;
 
 	constructor(description: NetworkDescription) {
-		checkNetwork(description);
 		const { nodes } = description;
-		const stored = nodes.filter((node) => node.kind === 'stored');
-		const fixed = nodes.filter((node) => node.kind === 'fixed');
-		const mixed = nodes.filter((node) => node.kind === 'mixed');
-		this.size = stored.length;
-		this.storedNames = stored.map(({ name }) => name);
-		this.capacityJPerK = Float64Array.from(stored, (node) => node.heatCapacityJPerK);
-		const ordered = [...stored, ...fixed, ...mixed];
-		this.index = new Map(ordered.map(({ name }, at) => [name, at]));
+		checkNetwork(description);
+		const ofKind = (kind: string) => nodes.filter((node) => node.kind === kind).map(({ name }) => name);
+		this.storedNames = ofKind('stored');
+		this.size = this.storedNames.length;
+		const ordered = [...this.storedNames, ...ofKind('fixed'), ...ofKind('mixed')];
+		this.index = new Map(ordered.map((name, at) => [name, at]));
+		this.capacityJPerK = new Float64Array(this.size);
 		this.temps = new Float64Array(ordered.length);
-		fixed.forEach((node, at) => (this.temps[stored.length + at] = node.tempC));
 		this.fourthPowers = new Float64Array(ordered.length);
 		this.gains = new Float64Array(ordered.length);
-		this.mixes = mixed.map((node) => ({
-			node: this.indexOf(node.name),
-			offsetK: node.offsetK,
-			parts: Int32Array.from(node.parts, (part) => this.indexOf(part.node)),
-			weights: Float64Array.from(node.parts, (part) => part.weight)
-		}));
 
 		const links = sortByKind(description.links, ['conductance', 'flow', 'radiation', 'gate', 'excess']);
 		const sources = sortByKind(description.sources, ['heat', 'joule']);
 		const count = links.length + sources.length;
 		[...links, ...sources].forEach(({ name }, at) => this.places.set(name, at));
-		this.ends = { from: new Int32Array(count), to: new Int32Array(count) };
+		this.ends = {
+			from: Int32Array.from([...links.map(({ from }) => this.indexOf(from)), ...sources.map(() => 0)]),
+			to: Int32Array.from([...links.map(({ to }) => to), ...sources.map(({ node }) => node)], (name) =>
+				this.indexOf(name)
+			)
+		};
 		this.coefficients = new Float64Array(count);
 		this.heats = new Float64Array(count);
 		this.slopes = new Float64Array(2 * count);
-		links.forEach((link, at) => {
-			this.ends.from[at] = this.indexOf(link.from);
-			this.ends.to[at] = this.indexOf(link.to);
-			this.coefficients[at] =
-				link.kind === 'radiation' ? STEFAN_BOLTZMANN * link.exchangeAreaM2 : link.conductanceWPerK;
-		});
-		sources.forEach((source, at) => {
-			this.ends.to[links.length + at] = this.indexOf(source.node);
-			this.coefficients[links.length + at] = source.kind === 'heat' ? source.heatW : source.r25Ohm;
-		});
+		this.stops = countKinds(links, sources);
+		this.mixes = nodes
+			.filter((node) => node.kind === 'mixed')
+			.map(({ name, offsetK, parts }) => ({
+				node: this.indexOf(name),
+				offsetK,
+				parts: Int32Array.from(parts, (part) => this.indexOf(part.node)),
+				weights: Float64Array.from(parts, (part) => part.weight)
+			}));
 		this.gates = links.filter((link) => link.kind === 'gate');
 		this.carryTo = Int32Array.from(this.gates, (gate) => this.indexOf(gate.carryTo));
 		this.joules = sources.filter((source) => source.kind === 'joule');
-		this.currents = Float64Array.from(this.joules, (source) => source.currentA);
-		this.stops = countKinds(links, sources);
+		this.currents = new Float64Array(this.joules.length);
+		this.fill(description);
 
 		const scatter = planScatter(links, sources, {
 			size: this.size,
@@ -106,6 +101,37 @@ export class CompiledNetwork implements HeatSystem {
 		this.scatterPlace = Int32Array.from(scatter, ({ row, column }) => row * this.size + column);
 		this.scatterSlope = Int32Array.from(scatter, ({ slope }) => slope);
 		this.scatterWeight = Float64Array.from(scatter, ({ weight }) => weight);
+	}
+	/**
+	 * Takes the values of a description of the same shape: its names and ends, what is mixed and what gates carry are
+	 * those that the network was laid out for.
+	 */
+	take(description: NetworkDescription): void {
+		checkNetwork(description);
+		this.fill(description);
+	}
+
+	private fill({ nodes, links, sources }: NetworkDescription): void {
+		const { capacityJPerK, temps, coefficients, gates, joules, currents, stops } = this;
+		for (const node of nodes) {
+			const at = this.indexOf(node.name);
+			if (node.kind === 'stored') capacityJPerK[at] = node.heatCapacityJPerK;
+			else if (node.kind === 'fixed') temps[at] = node.tempC;
+			else this.setMixOffset(this.mixOf(node.name), node.offsetK);
+		}
+		for (const link of links) {
+			const at = this.placeOf(link.name);
+			coefficients[at] =
+				link.kind === 'radiation' ? STEFAN_BOLTZMANN * link.exchangeAreaM2 : link.conductanceWPerK;
+			if (link.kind === 'gate') gates[at - stops.radiation] = link;
+		}
+		for (const source of sources) {
+			const at = this.placeOf(source.name);
+			coefficients[at] = source.kind === 'heat' ? source.heatW : source.r25Ohm;
+			if (source.kind !== 'joule') continue;
+			joules[at - stops.heat] = source;
+			currents[at - stops.heat] = source.currentA;
+		}
 	}
 
 	indexOf(node: string): number {
@@ -141,7 +167,7 @@ export class CompiledNetwork implements HeatSystem {
 
 	/** The current through all joule sources, A. */
 	setCurrent(currentA: number): void {
-		this.currents.fill(currentA);
+		for (let k = 0; k < this.currents.length; k++) this.currents[k] = currentA;
 	}
 
 	setTime(timeS: number): void {
@@ -152,7 +178,7 @@ export class CompiledNetwork implements HeatSystem {
 		this.spread(temps);
 		const { temps: all, fourthPowers, gains, ends, coefficients, heats: flows, stops } = this;
 		const { from, to } = ends;
-		gains.fill(0);
+		for (let i = 0; i < gains.length; i++) gains[i] = 0;
 		let at = 0;
 		for (; at < stops.conductance; at++) {
 			const a = from[at]!;
@@ -235,18 +261,19 @@ export class CompiledNetwork implements HeatSystem {
 			if (givesHeat && from < size) throughput[from] = throughput[from]! + amount;
 			if (to < size) throughput[to] = throughput[to]! + amount;
 		}
-		this.gates.forEach((gate, k) => {
+		for (let k = 0; k < this.gates.length; k++) {
 			const to = this.carryTo[k]!;
-			const amount = gate.carryShare * Math.abs(heats[stops.radiation + k]!);
+			const amount = this.gates[k]!.carryShare * Math.abs(heats[stops.radiation + k]!);
 			if (to < size) throughput[to] = throughput[to]! + amount;
-		});
+		}
 	}
 
 	/** Copies the stored temperatures and works out the mixed ones and the fourth powers. */
 	private spread(temps: Float64Array): void {
 		const { temps: all, fourthPowers, mixes, size } = this;
 		for (let i = 0; i < size; i++) all[i] = temps[i]!;
-		for (const { node, offsetK, parts, weights } of mixes) {
+		for (let m = 0; m < mixes.length; m++) {
+			const { node, offsetK, parts, weights } = mixes[m]!;
 			let temp = offsetK;
 			for (let k = 0; k < parts.length; k++) temp += weights[k]! * all[parts[k]!]!;
 			all[node] = temp;
@@ -321,5 +348,6 @@ export function readOpening({ openC, fullC }: { openC: number; fullC: number }, 
 
 /** R(T)/R(25 °C) = exp(a (1/T̃ − 1/298.15)). */
 export function readResistanceFactor(activationK: number, tempC: number): number {
+	if (activationK === 0) return 1;
 	return Math.exp(activationK * (1 / (tempC + KELVIN_AT_ZERO_C) - 1 / REFERENCE_K));
 }

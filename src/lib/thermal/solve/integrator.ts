@@ -18,7 +18,9 @@ export type Advance =
 	{ reached: 'end' | 'stop'; timeS: number } | { reached: 'failed'; failure: Failure; timeS: number };
 
 const SHORTEST_STEP_S = 1e-9;
-const SAFETY = 0.9;
+const SAFETY = 0.95;
+/** A stop is where something bends: the step after it begins shorter than the one before would have gone on. */
+const AFTER_STOP = 0.35;
 const LEAST_FACTOR = 0.15;
 const MOST_FACTOR = 6;
 /** Outside of these a temperature is not one of a vehicle. */
@@ -58,6 +60,7 @@ export class Integrator {
 	): Advance {
 		const { stepper } = this;
 		let now = timeS;
+		this.suggestedS *= AFTER_STOP;
 		while (now < endS) {
 			const left = endS - now;
 			stepper.prepare(now, temps, Math.min(left, this.suggestedS), now > timeS);

@@ -8,8 +8,8 @@ import { factorise, planSparseLu, solveFactorised } from './sparse-lu';
  * set with γ = 1/4, in the transformed variables that avoid products with the Jacobian).
  */
 const GAMMA = 0.25;
-const STAGE_TIME = [0, 0.386, 0.21, 0.63, 1, 1] as const;
-const TIME_DERIVATIVE = [0.25, -0.1043, 0.1035, -0.03620000000000023, 0, 0] as const;
+const STAGE_TIME = Float64Array.of(0, 0.386, 0.21, 0.63, 1, 1);
+const TIME_DERIVATIVE = Float64Array.of(0.25, -0.1043, 0.1035, -0.03620000000000023, 0, 0);
 const A = [
 	[],
 	[1.544],
@@ -17,7 +17,7 @@ const A = [
 	[3.314825187068521, 2.896124015972201, 0.9986419139977817],
 	[1.221224509226641, 6.019134481288629, 12.53708332932087, -0.687886036105895],
 	[1.221224509226641, 6.019134481288629, 12.53708332932087, -0.687886036105895, 1]
-] as const;
+].map((row) => Float64Array.from(row));
 const C = [
 	[],
 	[-5.6688],
@@ -25,14 +25,14 @@ const C = [
 	[-0.1073529058151375, -9.594562251023355, -20.47028614809616],
 	[7.496443313967647, -10.24680431464352, -33.99990352819905, 11.7089089320616],
 	[8.083246795921522, -7.981132988064893, -31.52159432874371, 16.31930543123136, -6.058818238834054]
-] as const;
+].map((row) => Float64Array.from(row));
 /** Share of the step over which dH/dt is found: small against what bends, large against rounding. */
 const TIME_SHARE = 1e-3;
 /** The two inner coefficients of the cubic between the ends of a step. */
 const DENSE = [
 	[10.12623508344586, -7.487995877610167, -34.80091861555747, -7.992771707568823, 1.025137723295662],
 	[-0.6762803392801253, 6.087714651680015, 16.43084320892478, 24.76722511418386, -6.594389125716872]
-] as const;
+].map((row) => Float64Array.from(row));
 
 export const STAGES = 6;
 
@@ -72,9 +72,12 @@ export class RosenbrockStepper {
 	private readonly matrix: Float64Array;
 	private readonly timeSlope: Float64Array;
 	private readonly work: Float64Array;
-	private readonly stages: Float64Array[];
+	/** What the stages before have to do with the one that is solved, W. */
+	private readonly coupling: Float64Array;
+	/** The stages one after the other, each with one value a node. */
+	private readonly stages: Float64Array;
 
-	constructor(private system: HeatSystem) {
+	constructor(private readonly system: HeatSystem) {
 		const size = system.size;
 		const vector = () => new Float64Array(size);
 		this.plan = planSparseLu(size, system.pattern);
@@ -84,7 +87,8 @@ export class RosenbrockStepper {
 		this.endHeats = vector();
 		this.timeSlope = vector();
 		this.work = vector();
-		this.stages = Array.from({ length: STAGES }, vector);
+		this.coupling = vector();
+		this.stages = new Float64Array(STAGES * size);
 		this.step = {
 			timeS: 0,
 			lengthS: 0,
@@ -92,13 +96,8 @@ export class RosenbrockStepper {
 			to: vector(),
 			inner2: vector(),
 			inner3: vector(),
-			error: this.stages[STAGES - 1]!
+			error: this.stages.subarray((STAGES - 1) * size)
 		};
-	}
-
-	/** Goes over to another system of the same shape. */
-	use(system: HeatSystem): void {
-		this.system = system;
 	}
 
 	evaluate(timeS: number, temps: Float64Array, heats: Float64Array): void {
@@ -117,39 +116,41 @@ export class RosenbrockStepper {
 		const { system, step, startHeats, timeSlope, work } = this;
 		step.timeS = timeS;
 		step.from.set(temps);
-		const delta = TIME_SHARE * withinS;
-		this.evaluate(timeS + delta, step.from, work);
 		if (goesOn) {
 			startHeats.set(this.endHeats);
-			system.setTime(timeS);
 		} else {
 			this.evaluate(timeS, step.from, startHeats);
+			system.fillJacobian(step.from, this.jacobian);
 		}
+		const delta = TIME_SHARE * withinS;
+		this.evaluate(timeS + delta, step.from, work);
 		for (let i = 0; i < system.size; i++) timeSlope[i] = (work[i]! - startHeats[i]!) / delta;
-		system.fillJacobian(step.from, this.jacobian);
 	}
 
-	/** Works out H at the end of the step that was taken. */
+	/** Works out H and its derivatives at the end of the step that was taken, where the next one may begin. */
 	finish(): void {
-		this.evaluate(this.step.timeS + this.step.lengthS, this.step.to, this.endHeats);
+		const { timeS, lengthS, to } = this.step;
+		this.evaluate(timeS + lengthS, to, this.endHeats);
+		this.system.fillJacobian(to, this.jacobian);
 	}
 
 	/** Tries one step of the length given from the point taken up; false when the matrix cannot be solved. */
 	tryStep(lengthS: number): boolean {
 		const { system, step, stages } = this;
+		const { size } = system;
+		const [dense2, dense3] = DENSE as [Float64Array, Float64Array];
 		step.lengthS = lengthS;
 		if (!this.buildMatrix(lengthS)) return false;
 		for (let stage = 0; stage < STAGES; stage++) this.solveStage(stage, lengthS);
-		const last = stages[STAGES - 1]!;
-		for (let i = 0; i < system.size; i++) {
-			step.to[i] = step.to[i]! + last[i]!;
+		for (let i = 0; i < size; i++) {
 			let inner2 = 0;
 			let inner3 = 0;
-			for (let k = 0; k < STAGES - 1; k++) {
-				const value = stages[k]![i]!;
-				inner2 += DENSE[0][k]! * value;
-				inner3 += DENSE[1][k]! * value;
+			for (let k = 0, at = i; k < STAGES - 1; k++, at += size) {
+				const value = stages[at]!;
+				inner2 += dense2[k]! * value;
+				inner3 += dense3[k]! * value;
 			}
+			step.to[i] = step.to[i]! + step.error[i]!;
 			step.inner2[i] = inner2;
 			step.inner3[i] = inner3;
 		}
@@ -170,29 +171,41 @@ export class RosenbrockStepper {
 	}
 
 	private solveStage(stage: number, lengthS: number): void {
-		const { system, step, stages, startHeats, timeSlope } = this;
-		const size = system.size;
-		const result = stages[stage]!;
-		const a = A[stage]!;
-		const c = C[stage]!;
-		if (stage === 0) {
-			result.set(startHeats);
-		} else {
-			const temps = step.to;
-			temps.set(step.from);
-			for (let k = 0; k < stage; k++) {
-				const weight = a[k]!;
-				const other = stages[k]!;
-				for (let i = 0; i < size; i++) temps[i] = temps[i]! + weight * other[i]!;
-			}
-			this.evaluate(step.timeS + STAGE_TIME[stage]! * lengthS, temps, result);
+		const { step, stages, startHeats, work, timeSlope, coupling } = this;
+		const { size } = this.system;
+		let heats = startHeats;
+		if (stage > 0) {
+			this.combineStages(stage, lengthS);
+			heats = work;
+			this.evaluate(step.timeS + STAGE_TIME[stage]! * lengthS, step.to, heats);
 		}
 		const slopeWeight = TIME_DERIVATIVE[stage]! * lengthS;
+		const offset = stage * size;
 		for (let i = 0; i < size; i++) {
-			let sum = 0;
-			for (let k = 0; k < stage; k++) sum += c[k]! * stages[k]![i]!;
-			result[i] = result[i]! + slopeWeight * timeSlope[i]! + (system.capacityJPerK[i]! * sum) / lengthS;
+			const coupled = stage > 0 ? coupling[i]! : 0;
+			stages[offset + i] = heats[i]! + slopeWeight * timeSlope[i]! + coupled;
 		}
-		solveFactorised(this.plan, this.matrix, result);
+		solveFactorised(this.plan, this.matrix, stages, offset);
+	}
+
+	/** Where the stage looks, into step.to, and what the ones before add to it, into coupling. */
+	private combineStages(stage: number, lengthS: number): void {
+		const { step, stages, coupling } = this;
+		const { size, capacityJPerK } = this.system;
+		const { from, to } = step;
+		const a = A[stage]!;
+		const c = C[stage]!;
+		const perS = 1 / lengthS;
+		for (let i = 0; i < size; i++) {
+			let temp = from[i]!;
+			let sum = 0;
+			for (let k = 0, at = i; k < stage; k++, at += size) {
+				const value = stages[at]!;
+				temp += a[k]! * value;
+				sum += c[k]! * value;
+			}
+			to[i] = temp;
+			coupling[i] = capacityJPerK[i]! * sum * perS;
+		}
 	}
 }

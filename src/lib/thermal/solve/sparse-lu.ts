@@ -98,20 +98,25 @@ export function factorise(plan: SparseLu, matrix: Float64Array): boolean {
 	return true;
 }
 
-/** Solves with the factorised matrix; the right-hand side becomes the solution. */
-export function solveFactorised(plan: SparseLu, matrix: Float64Array, vector: Float64Array): void {
+/** Solves with the factorised matrix; the right-hand side, which begins at `offset`, becomes the solution. */
+export function solveFactorised(
+	plan: SparseLu,
+	matrix: Float64Array,
+	vectors: Float64Array,
+	offset = 0
+): void {
 	const { forward, backward, inversePivots, order, size } = plan;
 	for (let at = 0; at < forward.length; at += 3) {
-		const row = forward[at]!;
-		vector[row] = vector[row]! - matrix[forward[at + 1]!]! * vector[forward[at + 2]!]!;
+		const row = offset + forward[at]!;
+		vectors[row] = vectors[row]! - matrix[forward[at + 1]!]! * vectors[offset + forward[at + 2]!]!;
 	}
 	let at = 0;
 	for (let step = size - 1; step >= 0; step--) {
 		const row = order[step]!;
-		let value = vector[row]!;
+		let value = vectors[offset + row]!;
 		for (; at < backward.length && backward[at] === row; at += 3) {
-			value -= matrix[backward[at + 1]!]! * vector[backward[at + 2]!]!;
+			value -= matrix[backward[at + 1]!]! * vectors[offset + backward[at + 2]!]!;
 		}
-		vector[row] = value * inversePivots[row]!;
+		vectors[offset + row] = value * inversePivots[row]!;
 	}
 }

@@ -16,6 +16,12 @@ const MINUTES_PER_H = 60;
 /** Sums of leg lengths carry rounding errors; a grid point this near the end still counts, min. */
 const ROUNDING_MIN = 1e-7;
 
+function findHighest(temps: Float64Array): number {
+	let high = -Infinity;
+	for (let minute = 0; minute < temps.length; minute++) high = Math.max(high, temps[minute]!);
+	return high;
+}
+
 /** The current that flows and the latches as they stand while steps are taken. */
 export interface Standing {
 	span: ChargeSpan;
@@ -88,7 +94,7 @@ export class MinuteRecord {
 	/** The highest temperature of each node on the grid, and where the cells have theirs. */
 	findPeaks(): { peaks: NodeValues; peakMinute: number } {
 		const { nodes, count } = this.minutes;
-		const peaks = this.readRow((name) => nodes[name].reduce((high, temp) => Math.max(high, temp), -Infinity));
+		const peaks = this.readRow((name) => findHighest(nodes[name]));
 		let peakMinute = 0;
 		for (let minute = 1; minute < count; minute++) {
 			if (nodes.cells[minute]! > nodes.cells[peakMinute]!) peakMinute = minute;

@@ -1,48 +1,5 @@
-import { createRequire } from 'node:module';
 import { all, create } from 'mathjs';
-
-export type Derivative = (timeS: number, state: readonly number[]) => number[];
-
-/** A piece of the solution that can be read anywhere inside. */
-export interface Piece {
-	fromS: number;
-	toS: number;
-	read: (timeS: number) => number[];
-}
-
-/** Integrates from one instant to another and hands out pieces in order until `take` says stop. */
-export type ReferenceIntegrator = (
-	derivative: Derivative,
-	fromS: number,
-	state: readonly number[],
-	toS: number,
-	take: (piece: Piece) => 'go on' | 'stop'
-) => void;
-
-interface OdexSolver {
-	absoluteTolerance: number;
-	relativeTolerance: number;
-	maxStepSize: number;
-	initialStepSize: number;
-	maxSteps: number;
-	denseOutput: boolean;
-	solve: (
-		derivative: Derivative,
-		from: number,
-		state: readonly number[],
-		to: number,
-		output: (
-			count: number,
-			from: number,
-			to: number,
-			state: number[],
-			dense?: (index: number, at: number) => number
-		) => boolean
-	) => unknown;
-}
-
-// The package ships its TypeScript source instead of declarations, so its types are written down here.
-const { Solver } = createRequire(import.meta.url)('odex') as { Solver: new (size: number) => OdexSolver };
+import type { Derivative, Piece, ReferenceIntegrator } from './integrator';
 
 interface OdeSolution {
 	t: number[];
@@ -57,31 +14,6 @@ const math = create(all!, {}) as ReturnType<typeof create> & {
 		options: Record<string, unknown>
 	) => OdeSolution;
 };
-
-/** Without a cap the extrapolation may step so far that it meets infinities and accepts what is not a number. */
-const ODEX_LONGEST_STEP_S = 300;
-
-/** Hairer's extrapolation method, of variable order. */
-export function integrateWithOdex(
-	toleranceK: number,
-	longestStepS = ODEX_LONGEST_STEP_S
-): ReferenceIntegrator {
-	return (derivative, fromS, state, toS, take) => {
-		const solver = new Solver(state.length);
-		solver.absoluteTolerance = toleranceK;
-		solver.relativeTolerance = 1e-13;
-		solver.maxStepSize = longestStepS;
-		solver.initialStepSize = Math.min(1, toS - fromS);
-		solver.maxSteps = 20_000;
-		solver.denseOutput = true;
-		solver.solve(derivative, fromS, state, toS, (_count, from, to, end, dense) => {
-			if (!dense) return true;
-			const read = (timeS: number) =>
-				timeS === to ? [...end] : state.map((_, index) => dense(index, timeS));
-			return take({ fromS: from, toS: to, read }) === 'go on';
-		});
-	};
-}
 
 /** Between two steps of a method that has no dense output: the cubic through both ends and both slopes. */
 function readCubic(derivative: Derivative, fromS: number, from: number[], toS: number, to: number[]): Piece {
