@@ -1,5 +1,5 @@
 import { expect, test } from '@playwright/test';
-import { expectNoViolations, signInAs } from './support';
+import { expectNoViolations, signInAs, ONCE } from './support';
 
 test('an engineer reads each coefficient with its unit and its source', async ({ page }) => {
 	// The scan looks at some seventy rows.
@@ -17,7 +17,7 @@ test('an engineer reads each coefficient with its unit and its source', async ({
 	await expectNoViolations(page);
 });
 
-test('an installer has no books to look after', async ({ page }) => {
+test('an installer has no books to look after', ONCE, async ({ page }) => {
 	await signInAs(page, 'installer');
 	const response = await page.goto('/books');
 	expect(response?.status()).toBe(403);

@@ -1,7 +1,7 @@
 import { randomUUID } from 'node:crypto';
 import { expect, test, type Page } from '@playwright/test';
 import { makeAssessableJob, assessAll } from './assessable-job';
-import { expectNoViolations, openForm, signInAs } from './support';
+import { expectNoViolations, openForm, signInAs, ONCE } from './support';
 
 const ownName = (): string => `Ana ${randomUUID().slice(0, 8)}`;
 
@@ -171,7 +171,7 @@ test.describe('with a script', () => {
 test.describe('without a script', () => {
 	test.use({ javaScriptEnabled: false });
 
-	test('a second press of the button begins no second job', async ({ page }) => {
+	test('a second press of the button begins no second job', ONCE, async ({ page }) => {
 		await signInAs(page, 'installer');
 		await page.goto('/jobs/new');
 		await fillNewVehicle(page, ownName());

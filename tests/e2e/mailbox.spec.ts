@@ -1,6 +1,6 @@
 import { expect, test } from '@playwright/test';
 import { makeSendableJob, readLink, sendSheet } from './sent-sheet';
-import { expectNoViolations, signInAs, signInAsNeighbour } from './support';
+import { expectNoViolations, signInAs, signInAsNeighbour, ONCE } from './support';
 
 test('a letter that the shop sent can be read in the mailbox, and its link followed', async ({
 	page,
@@ -28,7 +28,7 @@ test('a letter that the shop sent can be read in the mailbox, and its link follo
 	await expect(page.getByText(sendTo)).toHaveCount(0);
 });
 
-test('a letter that nobody sent is not there', async ({ page }) => {
+test('a letter that nobody sent is not there', ONCE, async ({ page }) => {
 	await signInAs(page, 'installer');
 	expect((await page.goto('/mailbox/no-such-letter'))?.status()).toBe(404);
 });

@@ -1,6 +1,6 @@
 import { randomUUID } from 'node:crypto';
 import { expect, test, type Page } from '@playwright/test';
-import { expectNoViolations, openForm, signInAs } from './support';
+import { expectNoViolations, openForm, signInAs, ONCE } from './support';
 
 async function fillPlace(page: Page, name: string): Promise<void> {
 	await page.getByLabel('Place', { exact: true }).fill(name);
@@ -42,7 +42,7 @@ test('figures without a source are not taken, and stay in their boxes', async ({
 	await expectNoViolations(page);
 });
 
-test('a place is changed, and one of another number is not there', async ({ page }) => {
+test('a place is changed, and one of another number is not there', ONCE, async ({ page }) => {
 	await openForm(page, '/places/new');
 	const name = `Salt Lake ${randomUUID().slice(0, 8)}`;
 	await fillPlace(page, name);

@@ -39,8 +39,7 @@ export default defineConfig({
 		{ name: 'desk', use: { browserName: 'chromium', viewport: { width: 1280, height: 800 } } },
 		{
 			name: 'phone',
-			// Asked without a browser: the size of the screen is nothing to it.
-			testIgnore: 'routes.spec.ts',
+			grepInvert: /@once/,
 			use: {
 				browserName: 'chromium',
 				viewport: { width: 360, height: 740 },

@@ -1,6 +1,7 @@
 import { readFileSync, readdirSync } from 'node:fs';
 import { join } from 'node:path';
 import { expect, test, type APIRequestContext, type APIResponse } from '@playwright/test';
+import { ONCE } from './support';
 import people from '../../seeds/demo-people.json' with { type: 'json' };
 import {
 	ROUTE_RULES,
@@ -114,7 +115,7 @@ function standingIn(response: APIResponse, rule: RouteRule): Standing | string {
 }
 
 for (const visitor of VISITORS) {
-	test(`every route meets ${visitor} as it should`, async ({ playwright, baseURL }) => {
+	test(`every route meets ${visitor} as it should`, ONCE, async ({ playwright, baseURL }) => {
 		test.setTimeout(180_000);
 		const [context, guide] = await Promise.all([
 			playwright.request.newContext({ baseURL }),

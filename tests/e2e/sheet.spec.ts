@@ -1,6 +1,6 @@
 import { expect, test, type Browser, type Page } from '@playwright/test';
 import { makeSendableJob, newAddress, openLetter, readLink, sendSheet, type SendableJob } from './sent-sheet';
-import { expectNoViolations, signInAs, signInAsNeighbour } from './support';
+import { expectNoViolations, signInAs, signInAsNeighbour, ONCE } from './support';
 
 const READER = 'Ilse Tarn';
 let job: SendableJob;
@@ -75,24 +75,28 @@ test('the page keeps every word when something is missing, and says what', async
 	await customer.context().close();
 });
 
-test('a changed hash is refused, and two who acknowledge at once see one name', async ({ page, request }) => {
-	const { link } = await sendSheet(page, job);
-	const html = await (await request.get(link)).text();
-	const contentSha256 = /name="contentSha256" value="([0-9a-f]{64})"/.exec(html)?.[1] ?? '';
-	expect(contentSha256).not.toBe('');
-	const post = (name: string, hash: string) =>
-		request.post(link, {
-			form: { name, understood: 'true', contentSha256: hash },
-			headers: { accept: 'text/html', origin: new URL(link).origin },
-			maxRedirects: 0
-		});
-	expect((await post('Forged', '0'.repeat(64))).status()).toBe(409);
-	expect(await (await request.get(link)).text()).not.toContain('Acknowledged by');
-	const answers = await Promise.all(['Anselm', 'Bettina'].map((name) => post(name, contentSha256)));
-	expect(answers.map((answer) => answer.status())).toEqual([303, 303]);
-	const after = await (await request.get(link)).text();
-	expect(after.match(/Acknowledged by <b[^>]*>(Anselm|Bettina)</g)).toHaveLength(1);
-});
+test(
+	'a changed hash is refused, and two who acknowledge at once see one name',
+	ONCE,
+	async ({ page, request }) => {
+		const { link } = await sendSheet(page, job);
+		const html = await (await request.get(link)).text();
+		const contentSha256 = /name="contentSha256" value="([0-9a-f]{64})"/.exec(html)?.[1] ?? '';
+		expect(contentSha256).not.toBe('');
+		const post = (name: string, hash: string) =>
+			request.post(link, {
+				form: { name, understood: 'true', contentSha256: hash },
+				headers: { accept: 'text/html', origin: new URL(link).origin },
+				maxRedirects: 0
+			});
+		expect((await post('Forged', '0'.repeat(64))).status()).toBe(409);
+		expect(await (await request.get(link)).text()).not.toContain('Acknowledged by');
+		const answers = await Promise.all(['Anselm', 'Bettina'].map((name) => post(name, contentSha256)));
+		expect(answers.map((answer) => answer.status())).toEqual([303, 303]);
+		const after = await (await request.get(link)).text();
+		expect(after.match(/Acknowledged by <b[^>]*>(Anselm|Bettina)</g)).toHaveLength(1);
+	}
+);
 
 test('the page reads well by every measure, on the screen and on one sheet of paper', async ({ page }) => {
 	const { link } = await sendSheet(page, job);
@@ -138,7 +142,7 @@ test('a withdrawn page is gone, in kind words, and the withdrawal asks first', a
 	await customer.context().close();
 });
 
-test('sending again stops the link before', async ({ page, request }) => {
+test('sending again stops the link before', ONCE, async ({ page, request }) => {
 	const first = await sendSheet(page, job);
 	await page.goto(`/jobs/${job.jobId}/sheets`);
 	await expect(page.getByText('The link that is out now stops working.')).toBeVisible();
@@ -147,22 +151,26 @@ test('sending again stops the link before', async ({ page, request }) => {
 	expect((await request.get(second.link)).status()).toBe(200);
 });
 
-test('a link that leads nowhere says so', async ({ page }) => {
+test('a link that leads nowhere says so', ONCE, async ({ page }) => {
 	const answer = await page.goto('/sheet/AAAAAAAAAAAAAAAAAAAAAA');
 	expect(answer?.status()).toBe(404);
 	await expect(page.getByRole('heading', { name: 'This link leads nowhere' })).toBeVisible();
 	await expectNoViolations(page);
 });
 
-test('the neighbour finds nothing, and a customer has no way into the shop’s pages', async ({ page }) => {
-	await page.context().clearCookies();
-	await signInAsNeighbour(page);
-	expect((await page.goto(`/jobs/${job.jobId}/sheets`))?.status()).toBe(404);
-	await page.context().clearCookies();
-	await signInAs(page, 'customer');
-	expect((await page.goto(`/jobs/${job.jobId}/sheets`))?.status()).toBe(403);
-	expect((await page.goto('/mailbox'))?.status()).toBe(403);
-});
+test(
+	'the neighbour finds nothing, and a customer has no way into the shop’s pages',
+	ONCE,
+	async ({ page }) => {
+		await page.context().clearCookies();
+		await signInAsNeighbour(page);
+		expect((await page.goto(`/jobs/${job.jobId}/sheets`))?.status()).toBe(404);
+		await page.context().clearCookies();
+		await signInAs(page, 'customer');
+		expect((await page.goto(`/jobs/${job.jobId}/sheets`))?.status()).toBe(403);
+		expect((await page.goto('/mailbox'))?.status()).toBe(403);
+	}
+);
 
 test('a customer finds their own pages after signing in, and the shop does not', async ({ page }) => {
 	await page.context().clearCookies();

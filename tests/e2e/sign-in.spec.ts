@@ -2,7 +2,7 @@ import { readFileSync, readdirSync } from 'node:fs';
 import { join } from 'node:path';
 import { expect, test } from '@playwright/test';
 import people from '../../seeds/demo-people.json' with { type: 'json' };
-import { expectNoViolations, personOf, signInWith } from './support';
+import { expectNoViolations, personOf, signInWith, ONCE } from './support';
 
 const engineer = people.find(({ role }) => role === 'engineer') ?? { email: '', password: '' };
 
@@ -28,7 +28,7 @@ test('a wrong password says so in one sentence, and keeps the address', async ({
 	await expectNoViolations(page);
 });
 
-test('a page that needs a person leads to the sign-in page and back to itself', async ({ page }) => {
+test('a page that needs a person leads to the sign-in page and back to itself', ONCE, async ({ page }) => {
 	await page.goto('/places/new');
 	await expect(page).toHaveURL(/\/sign-in\?to=%2Fplaces%2Fnew$/);
 	await page.getByLabel('E-mail', { exact: true }).fill(engineer.email);
@@ -37,7 +37,7 @@ test('a page that needs a person leads to the sign-in page and back to itself', 
 	await expect(page).toHaveURL(/\/places\/new$/);
 });
 
-test('nobody is led out of the house after sign-in', async ({ page }) => {
+test('nobody is led out of the house after sign-in', ONCE, async ({ page }) => {
 	await page.goto('/sign-in?to=//elsewhere.example/');
 	await page.getByLabel('E-mail', { exact: true }).fill(engineer.email);
 	await page.getByLabel('Password').fill(engineer.password);
@@ -45,22 +45,22 @@ test('nobody is led out of the house after sign-in', async ({ page }) => {
 	await expect(page).toHaveURL(/\/jobs$/);
 });
 
-test('signing out ends the session everywhere that its cookie was copied to', async ({
-	page,
-	playwright,
-	baseURL
-}) => {
-	await signInWith(page, personOf('engineer'));
-	const state = await page.context().storageState();
-	const copy = await playwright.request.newContext({ baseURL, storageState: state });
-	expect((await copy.get('/api/v1/places')).status()).toBe(200);
-	const menu = page.getByText('Menu', { exact: true });
-	if (await menu.isVisible()) await menu.click();
-	await page.getByRole('button', { name: 'Sign out' }).filter({ visible: true }).click();
-	await expect(page).toHaveURL(/\/sign-in$/);
-	expect((await copy.get('/api/v1/places')).status()).toBe(401);
-	await copy.dispose();
-});
+test(
+	'signing out ends the session everywhere that its cookie was copied to',
+	ONCE,
+	async ({ page, playwright, baseURL }) => {
+		await signInWith(page, personOf('engineer'));
+		const state = await page.context().storageState();
+		const copy = await playwright.request.newContext({ baseURL, storageState: state });
+		expect((await copy.get('/api/v1/places')).status()).toBe(200);
+		const menu = page.getByText('Menu', { exact: true });
+		if (await menu.isVisible()) await menu.click();
+		await page.getByRole('button', { name: 'Sign out' }).filter({ visible: true }).click();
+		await expect(page).toHaveURL(/\/sign-in$/);
+		expect((await copy.get('/api/v1/places')).status()).toBe(401);
+		await copy.dispose();
+	}
+);
 
 test('a mailed link signs in once, by its button and not by being opened', async ({ page }, { project }) => {
 	// Each project has a person of its own, so that the two never read each other's letters.
@@ -94,7 +94,7 @@ test('sign-in works without a script', async ({ browser, baseURL }) => {
 	await context.close();
 });
 
-test('the headers of every answer hold the line', async ({ request, baseURL }) => {
+test('the headers of every answer hold the line', ONCE, async ({ request, baseURL }) => {
 	const page = await request.get('/sign-in');
 	const headers = page.headers();
 	expect(headers['content-security-policy']).toContain("default-src 'none'");
@@ -111,16 +111,17 @@ test('the headers of every answer hold the line', async ({ request, baseURL }) =
 	expect((await request.get(`${baseURL}//elsewhere.example`, { maxRedirects: 0 })).status()).toBe(404);
 });
 
-test('a good sign-in costs no try, so that a busy shop never locks itself out', async ({
-	playwright,
-	baseURL
-}) => {
-	for (let time = 1; time <= 12; time++) {
-		const request = await playwright.request.newContext({ baseURL });
-		const form = { email: engineer.email, password: engineer.password };
-		const headers = { accept: 'text/html' };
-		const response = await request.post('/sign-in?/password', { form, headers, maxRedirects: 0 });
-		expect(response.status(), `sign-in ${time}`).toBe(302);
-		await request.dispose();
+test(
+	'a good sign-in costs no try, so that a busy shop never locks itself out',
+	ONCE,
+	async ({ playwright, baseURL }) => {
+		for (let time = 1; time <= 12; time++) {
+			const request = await playwright.request.newContext({ baseURL });
+			const form = { email: engineer.email, password: engineer.password };
+			const headers = { accept: 'text/html' };
+			const response = await request.post('/sign-in?/password', { form, headers, maxRedirects: 0 });
+			expect(response.status(), `sign-in ${time}`).toBe(302);
+			await request.dispose();
+		}
 	}
-});
+);

@@ -4,6 +4,9 @@ import people from '../../seeds/demo-people.json' with { type: 'json' };
 
 type DemoRole = 'installer' | 'engineer' | 'manager' | 'customer';
 
+/** Of a test to which the size of the screen is nothing: it runs on the desk alone. */
+export const ONCE = { tag: '@once' };
+
 interface Person {
 	email: string;
 	password: string;

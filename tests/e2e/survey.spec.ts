@@ -1,6 +1,6 @@
 import { expect, test, type Page } from '@playwright/test';
 import { ask, makeAssessableJob } from './assessable-job';
-import { expectNoViolations, personOf, signInAs, signInWith } from './support';
+import { expectNoViolations, personOf, signInAs, signInWith, ONCE } from './support';
 
 /** Under the bonnet, as far as the air path. */
 const BEFORE_THE_TRAY = {
@@ -223,7 +223,7 @@ test.describe('with a script', () => {
 		await go(page, 'exhaust');
 	});
 
-	test('two people on one survey lose nothing: who comes second sees both', async ({ page }) => {
+	test('two people on one survey lose nothing: who comes second sees both', ONCE, async ({ page }) => {
 		const { mountId } = await begin(page);
 		await page.goto(`/mounts/${mountId}/survey/place`);
 		await page.getByLabel('Half way back').check();

@@ -6,7 +6,10 @@ import { makeCrew, useTestDatabase } from '../../../../tests/support/services';
 import { OutgoingMail } from '../db/models';
 import { sendDue, stopOutbox } from './outbox';
 
-/** A real server of its own that knows nobody called "nobody" and is too busy for "busy". */
+const dropAll = (recipient: string) =>
+	OutgoingMail.update({ state: 'failed', lastError: 'Withdrawn.' }, { where: { recipient } });
+
+/** A real server of its own that knows nobody called "nobody", is too busy for "busy", and slow for "dropped". */
 const server = new SMTPServer({
 	authOptional: true,
 	disabledCommands: ['AUTH', 'STARTTLS'],
@@ -14,6 +17,8 @@ const server = new SMTPServer({
 		if (address.startsWith('nobody'))
 			done(Object.assign(new Error('No such mailbox'), { responseCode: 550 }));
 		else if (address.startsWith('busy')) done(Object.assign(new Error('Try later'), { responseCode: 451 }));
+		else if (address.startsWith('dropped'))
+			void dropAll(address).then(() => done(Object.assign(new Error('Try later'), { responseCode: 451 })));
 		else done();
 	}
 });
@@ -49,6 +54,11 @@ describe('a letter that the mail server does not take', () => {
 			lastError: 'The mail server answered: 451 Try later'
 		});
 		expect(letter.nextAttemptAt.getTime()).toBeGreaterThan(Date.now());
+	});
+
+	it('is not put back when somebody dropped it while it was tried', async () => {
+		const mail = await postAndSend('dropped@travellers.example');
+		expect(mail).toMatchObject({ state: 'failed', lastError: 'Withdrawn.' });
 	});
 
 	it('is given up after eight tries', async () => {

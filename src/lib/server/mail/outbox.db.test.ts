@@ -25,6 +25,7 @@ describe('the outbox', () => {
 		await sendDue();
 		const sent = (await OutgoingMail.findByPk(id))!;
 		expect(sent).toMatchObject({ state: 'sent', attempts: 1, lastError: '' });
+		expect([sent.textBody, sent.htmlBody]).toEqual(['', '']);
 		const [letter, ...more] = await readArrived(messageId);
 		expect(more).toEqual([]);
 		expect(letter!.text).toBe(text);

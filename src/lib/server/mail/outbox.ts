@@ -24,6 +24,9 @@ export async function postLetter(letter: NewLetter, transaction: Transaction): P
 	transaction.afterCommit(() => outsideTransaction(nudge));
 }
 
+/** What a letter says holds a link that opens something: it is kept no longer than it takes to send it. */
+const FORGOTTEN = { textBody: '', htmlBody: '' };
+
 /** A letter whose matter is over is not sent any more; one that is out already stays as it is. */
 export async function dropLetters(
 	sheetIds: number[],
@@ -31,7 +34,7 @@ export async function dropLetters(
 	transaction: Transaction
 ): Promise<void> {
 	await OutgoingMail.update(
-		{ state: 'failed', lastError: reason },
+		{ state: 'failed', lastError: reason, ...FORGOTTEN },
 		{ where: { sheetId: sheetIds, state: 'waiting' }, transaction }
 	);
 }
@@ -60,7 +63,7 @@ async function sendOne(mail: OutgoingMail): Promise<void> {
 	try {
 		await deliver(mail);
 		await OutgoingMail.update(
-			{ state: 'sent', sentAt: new Date(), lastError: '' },
+			{ state: 'sent', sentAt: new Date(), lastError: '', ...FORGOTTEN },
 			{ where: { id: mail.id } }
 		);
 	} catch (error) {

@@ -120,8 +120,10 @@ describe('the customer’s page', () => {
 	});
 
 	it('says where the battery measures when that is not the cells', () => {
-		const labels = write({}, {}, { sensor: 'board' }).figures.map(({ label }) => label);
-		expect(labels).toContain('Switches itself off when its electronics reach');
+		const labels = (sensor: 'board' | 'hotter') =>
+			write({}, {}, { sensor }).figures.map(({ label }) => label);
+		expect(labels('board')).toContain('Switches itself off when its electronics reach');
+		expect(labels('hotter')).toContain('Switches itself off when its cells or electronics reach');
 	});
 
 	it('keeps what the picture is drawn from, and the cautions in their words', () => {

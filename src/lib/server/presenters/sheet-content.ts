@@ -95,15 +95,20 @@ function sayRoom({ headroomK }: AssessmentResult): string {
 	return headroomK < 1 ? 'less than 1 degree' : `${degrees} ${degrees === '1' ? 'degree' : 'degrees'}`;
 }
 
+const SWITCHES_OFF: Record<SheetSource['inputs']['battery']['sensor'], string> = {
+	cells: 'Switches itself off at',
+	board: 'Switches itself off when its electronics reach',
+	hotter: 'Switches itself off when its cells or electronics reach'
+};
+
 function listFigures({ inputs: { battery }, result }: SheetSource): SheetContent['figures'] {
-	const sensedElsewhere = battery.sensor !== 'cells';
 	return [
 		{
 			label: 'Hottest inside the battery',
 			value: `${formatTemperature(result.peakCellsC)} at ${formatClockHour(result.peakAtHour)}`
 		},
 		{
-			label: sensedElsewhere ? 'Switches itself off when its electronics reach' : 'Switches itself off at',
+			label: SWITCHES_OFF[battery.sensor],
 			value: formatTemperature(battery.dischargeCutC)
 		},
 		{ label: 'Room to spare before that', value: sayRoom(result) },
