@@ -1,5 +1,6 @@
 import type { z } from 'zod';
 import { AppError, type ErrorCode, type FieldProblem } from '../errors';
+import { sayIssue } from './say-issue';
 
 /** "legs[2].minutes": where in the input a problem lies. */
 export function pathText(path: readonly PropertyKey[]): string {
@@ -15,7 +16,7 @@ export function validate<S extends z.ZodType>(
 	input: unknown,
 	code: ErrorCode = 'invalid_input'
 ): z.output<S> {
-	const parsed = schema.safeParse(input);
+	const parsed = schema.safeParse(input, { error: sayIssue });
 	if (parsed.success) return parsed.data;
 	const problems: FieldProblem[] = parsed.error.issues.map((issue) => ({
 		path: pathText(issue.path),
