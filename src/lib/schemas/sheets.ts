@@ -91,6 +91,8 @@ export interface SheetView {
 	content: SheetContent;
 	contentSha256: string;
 	textVersion: string;
+	/** When the shop sent this customer a later page for the same job. */
+	newerSentAt: string | null;
 	acknowledgement: AcknowledgementView | null;
 }
 

@@ -4,12 +4,12 @@ import { acknowledgeSchema, type SheetView } from '$lib/schemas/sheets';
 import { loadForm } from '$lib/server/http/forms';
 
 /** A stored sheet as its page shows it: the words as they are, the picture drawn from its stored data. */
-export async function showSheet({ content, contentSha256, acknowledgement }: SheetView) {
+export async function showSheet({ content, contentSha256, acknowledgement, newerSentAt }: SheetView) {
 	const { ribbon, ...words } = content;
 	const legs = ribbon.legs.map((leg) => ({ ...leg, kind: nameLeg(leg) }));
 	const day = { ...ribbon, legs, air: airAt(ribbon.position), band: null };
 	return {
-		...{ words, acknowledgement, day },
+		...{ words, acknowledgement, newerSentAt, day },
 		screen: drawRibbonPictures(day, ['phone', 'desk'], 'screen'),
 		paper: drawRibbonPictures(day, ['print'], 'paper'),
 		form: await loadForm(acknowledgeSchema, { contentSha256 })

@@ -37,7 +37,7 @@ const INPUTS = {
 	battery: {
 		...{ maker: 'Emberlow', model: 'Slab 100', chemistry: 'lithium-iron-phosphate', capacityAh: 100 },
 		...{ sensor: 'cells', chargeCutC: 60, chargeResetC: 50, dischargeCutC: 80, dischargeResetC: 57 },
-		autoReset: true
+		...{ autoReset: true, underBonnet: 'allowed', underBonnetWords: '' }
 	},
 	mount: { letter: 'B', name: 'Rear corner', survey: { positionKind: 'under-bonnet' } },
 	dayPlan: { startHour: 7, legs: [{ kind: 'drive', minutes: 380, towing: true }] },
@@ -111,6 +111,15 @@ describe('the customer’s page', () => {
 		const close = write({}, { ...STAYS_ON, verdict: 'runs-close', headroomK: 0.6 });
 		expect(close.advice).toContain('with little to spare');
 		expect(figure(close, 'Room to spare before that')).toBe('less than 1 degree');
+	});
+
+	it('says first what the maker says about a place under the bonnet', () => {
+		const words = 'Not for engine bays.';
+		const { paragraphs } = write({}, {}, { underBonnet: 'excluded', underBonnetWords: words });
+		expect(paragraphs[0]).toMatch(/^Against the maker’s word\..*“Not for engine bays\.”$/);
+		const inCabin = { ...INPUTS.mount, survey: { positionKind: 'cabin' } } as AssessmentInputs['mount'];
+		const cabin = write({ inputs: { ...INPUTS, mount: inCabin } });
+		expect(cabin.paragraphs.join(' ')).not.toContain('maker');
 	});
 
 	it('counts every dark stretch of the day', () => {

@@ -6,9 +6,10 @@ import { formatClock, formatClockHour, formatHours, sayHours } from '$lib/format
 import type { AssessmentInputs, AssessmentResult } from '$lib/schemas/assessments';
 import type { SheetContent, SheetRibbon } from '$lib/schemas/sheets';
 import type { Verdict } from '$lib/schemas/verdicts';
+import { makerCaution } from './report-inputs';
 
 /** Changes with every change of the sheet's own words: an acknowledgement is tied to what was read. */
-export const SHEET_WORDS_VERSION = 1;
+export const SHEET_WORDS_VERSION = 2;
 
 /** What a sheet is written from. */
 export interface SheetSource {
@@ -130,6 +131,12 @@ function drawnFrom({ inputs: { battery, mount }, result }: SheetSource): SheetRi
 	};
 }
 
+/** What the battery's maker says about a place under the bonnet comes before anything of ours. */
+function sayMaker({ inputs }: SheetSource): string[] {
+	const maker = makerCaution(inputs);
+	return maker ? [`${maker.title} ${maker.text}`] : [];
+}
+
 /** Writes the customer's page in plain words, once: what is stored is what everybody reads from then on. */
 export function writeSheetContent(source: SheetSource): SheetContent {
 	const { inputs, result, workshop, preparedBy, override, assessmentId } = source;
@@ -147,7 +154,7 @@ export function writeSheetContent(source: SheetSource): SheetContent {
 		verdict: result.verdict,
 		headline,
 		summary,
-		paragraphs: [sayTheDay(source), ...sayWhyLater(source), ...saySwitchingOff(source)],
+		paragraphs: [...sayMaker(source), sayTheDay(source), ...sayWhyLater(source), ...saySwitchingOff(source)],
 		advice: ADVICE[result.verdict],
 		alternatives: source.others,
 		figures: listFigures(source),

@@ -25,8 +25,12 @@ export function presentSheetStatus(sheet: Sheet, letter: OutgoingMail, sentBy: s
 	};
 }
 
-export function presentSheet({ content, contentSha256, textVersion, acknowledgement }: Sheet): SheetView {
+export function presentSheet(
+	{ content, contentSha256, textVersion, acknowledgement }: Sheet,
+	newer: Sheet | null
+): SheetView {
 	return {
+		newerSentAt: isoOrNull(newer?.createdAt),
 		...{ content, contentSha256, textVersion },
 		acknowledgement: acknowledgement ? presentAcknowledgement(acknowledgement) : null
 	};

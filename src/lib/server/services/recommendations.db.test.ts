@@ -49,6 +49,9 @@ describe('a recommendation', () => {
 		await expect(
 			makeRecommendation(crew.installer, { assessmentId: ofHot.id, ...WHY, reason: '   ' })
 		).rejects.toMatchObject({ problems: [{ path: 'reason' }] });
+		await expect(
+			makeRecommendation(crew.installer, { assessmentId: ofHot.id, decidedBy: 'x', reason: 'ok' })
+		).rejects.toMatchObject({ problems: [{ path: 'decidedBy' }, { path: 'reason' }] });
 		expect(await Recommendation.count({ where: { jobId } })).toBe(0);
 		const made = await makeRecommendation(crew.installer, { assessmentId: ofHot.id, ...WHY });
 		expect(made).toMatchObject({ againstVerdict: true, ...WHY });

@@ -33,15 +33,18 @@ const OVERRIDE_WORDS = {
 	decidedBy: 'Say who decided to go ahead although it cuts out.',
 	reason: 'Say why it goes ahead although it cuts out.'
 } as const;
+/** Less is no name and no reason: both are kept for good, and the customer reads them. */
+const FEWEST_CHARACTERS = { decidedBy: 3, reason: 10 } as const;
 
 /** Against "cuts out", the two answers that it takes; for any other verdict, nobody decides against anything. */
 function readOverride({ verdict }: AssessmentView, input: RecommendationInput) {
 	if (verdict !== 'cuts-out') return { againstVerdict: false, decidedBy: null, reason: null };
 	const decidedBy = input.decidedBy?.trim() ?? '';
 	const reason = input.reason?.trim() ?? '';
-	const missing: FieldProblem[] = Object.entries({ decidedBy, reason })
-		.filter(([, words]) => words === '')
-		.map(([path]) => ({ path, message: OVERRIDE_WORDS[path as keyof typeof OVERRIDE_WORDS] }));
+	const given = { decidedBy, reason };
+	const missing: FieldProblem[] = (['decidedBy', 'reason'] as const)
+		.filter((path) => given[path].length < FEWEST_CHARACTERS[path])
+		.map((path) => ({ path, message: OVERRIDE_WORDS[path] }));
 	if (missing.length > 0) throw new AppError('invalid_input', missing[0]!.message, missing);
 	return { againstVerdict: true, decidedBy, reason };
 }

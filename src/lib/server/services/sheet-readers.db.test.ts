@@ -5,7 +5,7 @@ import { Acknowledgement, AuditEntry, Job, Sheet } from '../db/models';
 import { newToken } from '../hash';
 import { findBreak } from './audit';
 import { acknowledgeMySheet, acknowledgeSheet, getMySheet, listMySheets, openSheet } from './sheet-readers';
-import { listSheets, withdrawSheet } from './sheets';
+import { listSheets, sendSheet, withdrawSheet } from './sheets';
 
 useTestDatabase();
 
@@ -25,7 +25,8 @@ describe('opening a sheet by its link', () => {
 				content: stored.content,
 				contentSha256: stored.contentSha256,
 				textVersion: stored.textVersion,
-				acknowledgement: null
+				acknowledgement: null,
+				newerSentAt: null
 			});
 		}
 		expect(await Acknowledgement.count({ where: { sheetId: sheet.id } })).toBe(0);
@@ -42,6 +43,14 @@ describe('opening a sheet by its link', () => {
 		const [later] = await listSheets(crew.installer, jobId);
 		expect(first!.linkFirstOpenedAt).not.toBeNull();
 		expect(later!.linkFirstOpenedAt).toBe(first!.linkFirstOpenedAt);
+	});
+
+	it('tells whoever reads an acknowledged page that the shop has sent a newer one', async () => {
+		const { crew, sheet, token, recommendationId } = await makeSentSheet();
+		await acknowledgeSheet(token, await read(token));
+		await sendSheet(crew.installer, { recommendationId, sendTo: sheet.sentTo });
+		const [newest] = await listSheets(crew.installer, (await Sheet.findByPk(sheet.id))!.jobId);
+		expect((await openSheet(token)).newerSentAt).toBe(newest!.createdAt);
 	});
 
 	it('finds nothing behind a link that was never made', async () => {

@@ -1,4 +1,4 @@
-import { UniqueConstraintError, type Includeable, type Transaction, type WhereOptions } from 'sequelize';
+import { Op, UniqueConstraintError, type Includeable, type Transaction, type WhereOptions } from 'sequelize';
 import type { SignedInPerson } from '$lib/schemas/people';
 import type { Acknowledge, AcknowledgementView, MySheet, SheetView } from '$lib/schemas/sheets';
 import { Acknowledgement, Job, Sheet } from '../db/models';
@@ -62,6 +62,12 @@ async function readSheet({ where, include = [] }: Find, transaction?: Transactio
 	return sheet;
 }
 
+/** The page that the shop sent after this one, if that still stands. */
+async function findNewer({ id, jobId }: Sheet): Promise<Sheet | null> {
+	const where = { jobId, withdrawnAt: null, id: { [Op.gt]: id } };
+	return Sheet.findOne({ where, order: [['id', 'DESC']] });
+}
+
 /** Once: of two at the same moment one changes the row. */
 async function noteFirstOpening({ id, workshopId }: Sheet, reader: Reader): Promise<void> {
 	await inTransaction(async (transaction) => {
@@ -78,7 +84,7 @@ async function noteFirstOpening({ id, workshopId }: Sheet, reader: Reader): Prom
 export async function openSheet(token: string): Promise<SheetView> {
 	const sheet = await readSheet(byLink(token));
 	if (sheet.firstOpenedAt === null) await noteFirstOpening(sheet, null);
-	return presentSheet(sheet);
+	return presentSheet(sheet, await findNewer(sheet));
 }
 
 export async function listMySheets(person: SignedInPerson): Promise<MySheet[]> {
@@ -93,7 +99,7 @@ export async function listMySheets(person: SignedInPerson): Promise<MySheet[]> {
 export async function getMySheet(person: SignedInPerson, sheetId: number): Promise<SheetView> {
 	const sheet = await readSheet(ofOwn(person, sheetId));
 	if (sheet.firstOpenedAt === null) await noteFirstOpening(sheet, person);
-	return presentSheet(sheet);
+	return presentSheet(sheet, await findNewer(sheet));
 }
 
 async function storeAcknowledgement(

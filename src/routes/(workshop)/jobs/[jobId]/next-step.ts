@@ -62,7 +62,7 @@ const RULES: readonly Rule[] = [
 		return mount
 			? {
 					label: `Survey mount ${mount.letter}`,
-					text: `${mount.name}: some questions are still open.`,
+					text: `${mount.name}: the survey is not finished yet.`,
 					href: `/mounts/${mount.id}/survey`
 				}
 			: null;
@@ -75,7 +75,7 @@ const RULES: readonly Rule[] = [
 		return {
 			label: again ? 'Assess again' : 'Assess',
 			text: again
-				? `Mount ${letters} was assessed before something changed.`
+				? `Assessed before something changed: mount ${letters}.`
 				: `All is there to work out the hot day of mount ${letters}.`,
 			href: null
 		};

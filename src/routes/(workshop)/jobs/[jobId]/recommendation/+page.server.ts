@@ -20,6 +20,14 @@ async function loadChosen(person: SignedInPerson, jobId: number, asked: string |
 	return { id, mountId, mountLetter, mountName, verdict, headroomK, isCurrent, sentence, maker };
 }
 
+/** The recommendation that stands, with what its maker says and whether its assessment still holds. */
+async function loadStanding(person: SignedInPerson, jobId: number) {
+	const recommendation = await newestRecommendation(person, jobId);
+	if (!recommendation) return null;
+	const assessment = await getAssessment(person, recommendation.assessment.id);
+	return { ...recommendation, isCurrent: assessment.isCurrent, maker: presentReport(assessment).maker };
+}
+
 export const load: PageServerLoad = async (event) => {
 	const person = guard(event, 'recommendations.write');
 	const jobId = pageId(event.params.jobId);
@@ -31,7 +39,7 @@ export const load: PageServerLoad = async (event) => {
 		...{ jobId, outcomes, chosen },
 		jobNumber: job.number,
 		chemistry: job.battery?.chemistry ?? '',
-		standing: await orPageError(newestRecommendation(person, jobId)),
+		standing: await orPageError(loadStanding(person, jobId)),
 		isMade: event.url.searchParams.has('made'),
 		form: await loadForm(recommendationInputSchema, chosen ? { assessmentId: chosen.id } : {})
 	};

@@ -5,6 +5,7 @@ import { sendSheetSchema } from '$lib/schemas/sheets';
 import { AppError } from '$lib/server/errors';
 import { loadForm, saveForm } from '$lib/server/http/forms';
 import { guard, orPageError } from '$lib/server/http/guard';
+import { getAssessment } from '$lib/server/services/assessments';
 import { getJob } from '$lib/server/services/jobs';
 import { newestRecommendation } from '$lib/server/services/recommendations';
 import { listSheets, retrySheetLetter, sendSheet, withdrawSheet } from '$lib/server/services/sheets';
@@ -21,9 +22,13 @@ export const load: PageServerLoad = async (event) => {
 	const [recommendation, sheets] = await orPageError(
 		Promise.all([newestRecommendation(person, jobId), listSheets(person, jobId)])
 	);
+	const assessment = recommendation
+		? await orPageError(getAssessment(person, recommendation.assessment.id))
+		: null;
 	const asked = idSchema.safeParse(event.url.searchParams.get('withdraw') ?? undefined).data;
 	return {
 		...{ job, recommendation, sheets },
+		isOutOfDate: assessment?.isCurrent === false,
 		toWithdraw: sheets.find(({ id, withdrawnAt }) => id === asked && withdrawnAt === null) ?? null,
 		form: await loadForm(sendSheetSchema, {
 			sendTo: job.customer.email,
