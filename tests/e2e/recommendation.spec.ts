@@ -1,5 +1,5 @@
 import { expect, test, type Page } from '@playwright/test';
-import { CROWDED_DAY, assessAll, makeAssessableJob } from './assessable-job';
+import { CROWDED_DAY, ask, assessAll, makeAssessableJob } from './assessable-job';
 import { expectNoViolations, signInAs } from './support';
 
 const WHO = 'Ilse Tarn';
@@ -53,6 +53,29 @@ test('going ahead against the verdict takes a named person and a reason', async 
 	await page.getByRole('link', { name: 'Print the recommendation' }).click();
 	await expect(page.getByText(`Decided by ${WHO}.`)).toBeVisible();
 	await expect(page.getByText(`Reason: ${WHY}`)).toBeVisible();
+});
+
+test('a recommendation whose day changed since says so, where it is shown and where it would be sent', async ({
+	page
+}) => {
+	const { jobId } = await makeAssessableJob(page);
+	const [, cool] = await assessAll(page, jobId);
+	await ask(page, 'POST', '/api/v1/recommendations', { assessmentId: cool!.id });
+	const shown = [`/jobs/${jobId}/recommendation`, `/jobs/${jobId}/sheets`];
+	const notice = page.getByText('This recommendation is out of date');
+	for (const path of shown) {
+		await page.goto(path);
+		await expect(page.getByRole('heading', { level: 1 })).toBeVisible();
+		await expect(notice).toHaveCount(0);
+	}
+	const { dayPlan } = await ask(page, 'GET', `/api/v1/jobs/${jobId}/day-plan`);
+	const { id: _, jobId: __, ...plan } = dayPlan as Record<string, unknown>;
+	await ask(page, 'PUT', `/api/v1/jobs/${jobId}/day-plan`, { ...plan, startHour: 9 });
+	for (const path of shown) {
+		await page.goto(path);
+		await expect(notice).toBeVisible();
+	}
+	await expectNoViolations(page);
 });
 
 test('it works without a script', async ({ browser, page, baseURL }) => {

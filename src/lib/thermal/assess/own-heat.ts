@@ -1,4 +1,4 @@
-import { readResistanceFactor } from '../network/compile-network';
+import { readResistanceFactor } from '../network/element-laws';
 import type { Scenario } from '../types';
 import type { BatteryNode, Moment } from './battery-network';
 

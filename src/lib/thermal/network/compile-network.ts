@@ -2,9 +2,8 @@ import { KELVIN_AT_ZERO_C, STEFAN_BOLTZMANN } from '../correlations/radiation';
 import type { HeatSystem } from '../solve/heat-system';
 import { checkNetwork } from './check-network';
 import type { NetworkDescription, NetworkLink, NetworkSource } from './description';
-import { countKinds, planScatter, sortByKind, type Mix } from './lay-out';
-
-const REFERENCE_K = 298.15;
+import { readOpening, readResistanceFactor } from './element-laws';
+import { countKinds, planMixes, planScatter, sortByKind, type Mix } from './lay-out';
 
 type LinkKind = NetworkLink['kind'];
 type LinkOf<K extends LinkKind> = Extract<NetworkLink, { kind: K }>;
@@ -78,14 +77,7 @@ export class CompiledNetwork implements HeatSystem {
 		this.heats = new Float64Array(count);
 		this.slopes = new Float64Array(2 * count);
 		this.stops = countKinds(links, sources);
-		this.mixes = nodes
-			.filter((node) => node.kind === 'mixed')
-			.map(({ name, offsetK, parts }) => ({
-				node: this.indexOf(name),
-				offsetK,
-				parts: Int32Array.from(parts, (part) => this.indexOf(part.node)),
-				weights: Float64Array.from(parts, (part) => part.weight)
-			}));
+		this.mixes = planMixes(nodes, (node) => this.indexOf(node));
 		this.gates = links.filter((link) => link.kind === 'gate');
 		this.carryTo = Int32Array.from(this.gates, (gate) => this.indexOf(gate.carryTo));
 		this.joules = sources.filter((source) => source.kind === 'joule');
@@ -339,15 +331,4 @@ export class CompiledNetwork implements HeatSystem {
 			slopes[2 * at] = current === 0 ? 0 : (-q * activationK) / (kelvin * kelvin);
 		}
 	}
-}
-
-/** How far a thermostat stands open at a temperature, 0…1. */
-export function readOpening({ openC, fullC }: { openC: number; fullC: number }, tempC: number): number {
-	return Math.min(Math.max((tempC - openC) / (fullC - openC), 0), 1);
-}
-
-/** R(T)/R(25 °C) = exp(a (1/T̃ − 1/298.15)). */
-export function readResistanceFactor(activationK: number, tempC: number): number {
-	if (activationK === 0) return 1;
-	return Math.exp(activationK * (1 / (tempC + KELVIN_AT_ZERO_C) - 1 / REFERENCE_K));
 }

@@ -1,4 +1,4 @@
-import type { NetworkLink, NetworkSource } from './description';
+import type { NetworkLink, NetworkNode, NetworkSource } from './description';
 
 /** A mixed node by its place in the table of nodes: T = offset + Σ weight·T. */
 export interface Mix {
@@ -28,6 +28,18 @@ export function sortByKind<T extends { kind: string }>(
 	kinds: readonly T['kind'][]
 ): T[] {
 	return kinds.flatMap((kind) => parts.filter((part) => part.kind === kind));
+}
+
+/** The mixed nodes with their parts as places in the table of nodes. */
+export function planMixes(nodes: readonly NetworkNode[], indexOf: (node: string) => number): Mix[] {
+	return nodes
+		.filter((node) => node.kind === 'mixed')
+		.map(({ name, offsetK, parts }) => ({
+			node: indexOf(name),
+			offsetK,
+			parts: Int32Array.from(parts, (part) => indexOf(part.node)),
+			weights: Float64Array.from(parts, (part) => part.weight)
+		}));
 }
 
 /** Where the run of each kind ends in the sorted list of links and sources. */

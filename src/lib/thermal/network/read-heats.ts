@@ -1,5 +1,5 @@
 import { KELVIN_AT_ZERO_C, STEFAN_BOLTZMANN } from '../correlations/radiation';
-import { readOpening, readResistanceFactor } from './compile-network';
+import { readOpening, readResistanceFactor } from './element-laws';
 import type { NetworkDescription, NetworkLink, NetworkSource } from './description';
 
 /** Heat along one link or from one source, positive from `from` to `to`. */

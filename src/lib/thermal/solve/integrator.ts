@@ -19,7 +19,7 @@ export type Advance =
 
 const SHORTEST_STEP_S = 1e-9;
 const SAFETY = 0.95;
-/** A stop is where something bends: the step after it begins shorter than the one before would have gone on. */
+/** A stop is where something bends: the first step after it takes this share of what was suggested. */
 const AFTER_STOP = 0.35;
 const LEAST_FACTOR = 0.15;
 const MOST_FACTOR = 6;
@@ -41,7 +41,7 @@ export class Integrator {
 		this.stepper = new RosenbrockStepper(system);
 	}
 
-	/** After a sudden change: begin with short steps again. */
+	/** After a sudden change: suggests no more than this for the first step. */
 	restart(firstStepS: number): void {
 		this.suggestedS = Math.min(this.suggestedS, firstStepS);
 	}

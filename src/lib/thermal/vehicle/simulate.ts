@@ -13,7 +13,7 @@ const S_PER_H = 3600;
 const S_PER_MIN = 60;
 /** Two instants nearer than this are one, s. */
 const SAME_INSTANT_S = 1e-6;
-/** First step after a sudden change, s. */
+/** The most that is suggested for the first step after a sudden change, s. */
 const FIRST_STEP_S = 2;
 /** A decaying current is followed from its onset with steps of this share of its time constant. */
 const DECAY_SHARE = 0.25;
