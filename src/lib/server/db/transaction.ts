@@ -1,5 +1,5 @@
 import { AsyncLocalStorage } from 'node:async_hooks';
-import { Sequelize, type Transaction } from 'sequelize';
+import { QueryTypes, Sequelize, type Transaction } from 'sequelize';
 import { connection } from './connection';
 
 /** Errors after which the same transaction may simply be tried again: changed since read, lock wait, deadlock. */
@@ -33,7 +33,19 @@ function pause(ms: number): Promise<void> {
 }
 
 /**
- * Runs the work in one transaction; after a lost race it is done again from the start, with a growing random pause.
+ * Holds what all changes meet over, the heads of the audit trail, before anything is read. Otherwise a slow change would
+ * lose against quick ones again and again, for what it has read is old by the time that it writes.
+ */
+async function goFirst(transaction: Transaction): Promise<void> {
+	await connection().query('SELECT sequence FROM audit_heads FOR UPDATE', {
+		transaction,
+		type: QueryTypes.SELECT
+	});
+}
+
+/**
+ * Runs the work in one transaction; after a lost race it is done again from the start, after a growing random pause and
+ * with the others waiting.
  * Work that is already inside one joins it: all of it is kept, or none.
  */
 export async function inTransaction<T>(work: (transaction: Transaction) => Promise<T>): Promise<T> {
@@ -41,7 +53,10 @@ export async function inTransaction<T>(work: (transaction: Transaction) => Promi
 	if (outer) return work(outer);
 	for (let attempt = 1; ; attempt++) {
 		try {
-			return await connection().transaction(work);
+			return await connection().transaction(async (transaction) => {
+				if (attempt > 1) await goFirst(transaction);
+				return work(transaction);
+			});
 		} catch (error) {
 			const again = RETRYABLE.has(databaseErrorNumber(error) ?? 0) && attempt < ATTEMPTS;
 			if (!again) throw error;

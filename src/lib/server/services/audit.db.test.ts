@@ -38,6 +38,24 @@ describe('the audit trail', () => {
 		expect(await findBreak(crew.workshopId)).toBeNull();
 	});
 
+	it('takes the entry of a slow change beside a busy shop', async () => {
+		const crew = await makeCrew();
+		await writeTrail(crew, 1);
+		let isBusy = true;
+		const busy = (async () => {
+			while (isBusy) await writeTrail(crew, 1);
+		})();
+		const slow = inTransaction(async (transaction) => {
+			await AuditEntry.count({ where: { workshopId: crew.workshopId }, transaction });
+			await new Promise((resolve) => setTimeout(resolve, 120));
+			await recordBy(crew.manager, 'place.changed', { type: 'place', id: 7 }, transaction);
+		});
+		await expect(slow).resolves.toBeUndefined();
+		isBusy = false;
+		await busy;
+		expect(await findBreak(crew.workshopId)).toBeNull();
+	});
+
 	it('forgets an entry together with the change that it told of', async () => {
 		const crew = await makeCrew();
 		const work = inTransaction(async (transaction) => {
