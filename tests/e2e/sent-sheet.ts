@@ -32,7 +32,10 @@ export async function makeSendableJob(browser: Browser, baseURL: string | undefi
 export const newAddress = (): string => `reader.${randomUUID().slice(0, 8)}@travellers.example`;
 
 /** Sends the job's page and gives its link, as it stands in the letter. */
-export async function sendSheet(page: Page, { jobId, recommendationId }: SendableJob) {
+export async function sendSheet(
+	page: Page,
+	{ jobId, recommendationId }: Pick<SendableJob, 'jobId' | 'recommendationId'>
+) {
 	const sendTo = newAddress();
 	await ask(page, 'POST', `/api/v1/jobs/${jobId}/sheets`, { recommendationId, sendTo });
 	await openLetter(page, sendTo);

@@ -1,4 +1,5 @@
 import { expect, test, type Browser, type Page } from '@playwright/test';
+import { ask, assessAll, makeAssessableJob } from './assessable-job';
 import { makeSendableJob, newAddress, openLetter, readLink, sendSheet, type SendableJob } from './sent-sheet';
 import { expectNoViolations, signInAs, signInAsNeighbour, ONCE } from './support';
 
@@ -122,6 +123,43 @@ test('the page reads well by every measure, on the screen and on one sheet of pa
 	await page.emulateMedia({ media: 'print' });
 	await expectNoViolations(page);
 });
+
+test(
+	'the page stays on one sheet of paper, however much maker and shop have to say',
+	ONCE,
+	async ({ page }) => {
+		test.slow();
+		const { jobId } = await makeAssessableJob(page, { mounts: 6 });
+		const { battery } = await ask(page, 'GET', `/api/v1/jobs/${jobId}`);
+		const record = `/api/v1/batteries/${(battery as { id: number }).id}`;
+		for (const [quoted, length] of [
+			[20, 12],
+			[20, 150],
+			[20, 250],
+			[20, 1000],
+			[250, 12],
+			[500, 400],
+			[500, 1000]
+		] as const) {
+			const { id: _, ...now } = await ask(page, 'GET', record);
+			await ask(page, 'PUT', record, {
+				...now,
+				underBonnetWords: 'Not under a bonnet. '.repeat(25).slice(0, quoted)
+			});
+			const [hot] = await assessAll(page, jobId);
+			const reason = 'No other place. '.repeat(63).slice(0, length);
+			const decision = { assessmentId: hot!.id, decidedBy: 'Ilse Tarn', reason };
+			const { id: recommendationId } = await ask(page, 'POST', '/api/v1/recommendations', decision);
+			const { link } = await sendSheet(page, { jobId, recommendationId });
+			await page.goto(link);
+			const pdf = await page.pdf({ format: 'A4', printBackground: false, preferCSSPageSize: true });
+			expect(
+				pdf.toString('latin1').match(/\/Type\s*\/Page\b/g),
+				`${quoted} characters of the maker, ${length} of the shop`
+			).toHaveLength(1);
+		}
+	}
+);
 
 test('a withdrawn page is gone, in kind words, and the withdrawal asks first', async ({ page, browser }) => {
 	const { link, sendTo } = await sendSheet(page, job);

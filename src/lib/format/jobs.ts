@@ -22,7 +22,15 @@ const PART_WORDS: Record<AssessedPart, string> = {
 
 /** "the battery, the hot day and the day plan". */
 export function sayParts(parts: readonly AssessedPart[]): string {
-	const words = parts.map((part) => PART_WORDS[part]);
+	return sayList(parts.map((part) => PART_WORDS[part]));
+}
+
+/** "mount B", "mounts A, B and C". */
+export function sayMounts(letters: readonly string[]): string {
+	return `${letters.length === 1 ? 'mount' : 'mounts'} ${sayList(letters)}`;
+}
+
+function sayList(words: readonly string[]): string {
 	if (words.length < 2) return words.join('');
 	return `${words.slice(0, -1).join(', ')} and ${words.at(-1)}`;
 }

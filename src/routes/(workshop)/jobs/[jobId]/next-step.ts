@@ -1,3 +1,4 @@
+import { sayMounts } from '$lib/format/jobs';
 import type { JobView } from '$lib/schemas/jobs';
 
 /** The one thing that is to be done next. */
@@ -70,13 +71,13 @@ const RULES: readonly Rule[] = [
 	(job) => {
 		const mounts = mountsToAssess(job);
 		if (mounts.length === 0) return null;
-		const letters = mounts.map((mount) => mount.letter).join(', ');
+		const which = sayMounts(mounts.map((mount) => mount.letter));
 		const again = mounts.some((mount) => standingOf(job, mount.id));
 		return {
 			label: again ? 'Assess again' : 'Assess',
 			text: again
-				? `Assessed before something changed: mount ${letters}.`
-				: `All is there to work out the hot day of mount ${letters}.`,
+				? `Assessed before something changed: ${which}.`
+				: `All is there to work out the hot day of ${which}.`,
 			href: null
 		};
 	},
