@@ -1,7 +1,9 @@
 import { existsSync, readdirSync } from 'node:fs';
 import { describe, expect, it } from 'vitest';
 import { ROLLING_RESISTANCE, SCENARIO_FIELDS, type NumberField } from '../../src/lib/thermal';
-import { readCases, readTable, readText } from './support/reference-data';
+import { STANDINGS } from './support/check-against';
+import { readTable, readText } from './support/reference-data';
+import { readPublishedCases } from './support/report-cases';
 
 const root = new URL('../../reference-data/', import.meta.url);
 const sets = readdirSync(root, { withFileTypes: true }).filter((entry) => entry.isDirectory());
@@ -12,12 +14,17 @@ describe('reference data', () => {
 		expect(readText(`${name}/SOURCE.md`).length).toBeGreaterThan(100);
 	});
 
-	it('gives every handbook case a source and a status', () => {
-		const cases = ['convection', 'radiation', 'view-factors'].flatMap(readCases);
-		const statuses = new Set(cases.map(({ status }) => status));
-		expect([...statuses].sort()).toEqual(['computed', 'verified', 'verified and recomputed']);
-		expect(cases.every(({ source, id }) => source.length > 10 && id.length > 1)).toBe(true);
-		expect(new Set(cases.map(({ id }) => id)).size).toBe(cases.length);
+	it('gives every published case a name of its own, a place, a standing and a reason for its tolerance', () => {
+		const files = readdirSync(new URL('handbook-cases/', root)).filter((file) => file.endsWith('.json'));
+		const cases = files
+			.filter((file) => file !== 'sources.json')
+			.flatMap((file) => readPublishedCases(file.replace('.json', '')));
+		expect(new Set(cases.map(({ name }) => name)).size).toBe(cases.length);
+		for (const { name, place, standing, because, tolerance } of cases) {
+			expect([name, place, because].every((text) => text.length > 3)).toBe(true);
+			expect(STANDINGS).toContain(standing);
+			expect(Object.values(tolerance)[0]).toBeGreaterThan(0);
+		}
 	});
 
 	it('holds the rolling resistance that the engine has', () => {

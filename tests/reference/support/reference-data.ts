@@ -2,24 +2,8 @@ import { readFileSync } from 'node:fs';
 
 const root = new URL('../../../reference-data/', import.meta.url);
 
-/** A worked example: what a formula must give for these inputs. */
-export interface HandbookCase {
-	id: string;
-	source: string;
-	formula: string;
-	/** In the order in which the formula takes them. */
-	inputs: (number | number[][])[];
-	expected: number;
-	relativeTolerance: number;
-	status: string;
-}
-
 export function readText(path: string): string {
 	return readFileSync(new URL(path, root), 'utf8');
-}
-
-export function readCases(name: string): HandbookCase[] {
-	return JSON.parse(readText(`handbook-cases/${name}.json`)) as HandbookCase[];
 }
 
 /** A comma that no quotes enclose. */

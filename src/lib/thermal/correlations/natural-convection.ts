@@ -1,37 +1,5 @@
 import { requirePositive, requireWithin } from './require';
 
-const GRAVITY_M_PER_S2 = 9.80665;
-
-/** Properties of the fluid at the film temperature, SI. */
-export interface BuoyantFluid {
-	/** β, 1/K; for an ideal gas 1/T. */
-	expansionPerK: number;
-	kinematicViscosityM2PerS: number;
-	diffusivityM2PerS: number;
-}
-
-/**
- * Rayleigh number: how strongly warmth drives air along a surface.
- *
- *     Ra = g β ΔT L³ / (ν α)
- *
- * @param differenceK temperature difference between surface and fluid, K, above zero
- * @param lengthM height of a wall, diameter of a cylinder, or area over perimeter of a horizontal plate, m
- * @param fluid β in 1/K, ν and α in m²/s at the film temperature
- * @returns Ra, without unit
- * @throws EngineInputError when a value is not finite and above zero
- * Validity: any fluid whose properties change little over the difference.
- * Source: Incropera, DeWitt, Bergman, Lavine, Fundamentals of Heat and Mass Transfer, 6th ed., eq. 9.25.
- * @example
- * rayleigh(30, 0.3, { expansionPerK: 0.0033, kinematicViscosityM2PerS: 16.2e-6, diffusivityM2PerS: 22.9e-6 }); // 7.0659e7
- */
-export function rayleigh(differenceK: number, lengthM: number, fluid: BuoyantFluid): number {
-	const { expansionPerK, kinematicViscosityM2PerS, diffusivityM2PerS } = fluid;
-	requirePositive({ differenceK, lengthM, expansionPerK, kinematicViscosityM2PerS, diffusivityM2PerS });
-	const drive = GRAVITY_M_PER_S2 * expansionPerK * differenceK * lengthM ** 3;
-	return drive / (kinematicViscosityM2PerS * diffusivityM2PerS);
-}
-
 /** [1 + (a/Pr)^(9/16)], which all of Churchill's laws share. */
 function prandtlTerm(a: number, pr: number): number {
 	return 1 + (a / pr) ** (9 / 16);
@@ -47,7 +15,7 @@ function prandtlTerm(a: number, pr: number): number {
  * @returns mean Nu over the height
  * @throws EngineInputError outside 0 < Ra ≤ 1e13 or when Pr is not above zero
  * Validity: isothermal plate, all Ra (checked to 1e13).
- * Source: Incropera et al., 6th ed., eq. 9.26 (Churchill and Chu 1975).
+ * Source: Incropera, DeWitt, Bergman, Lavine, Fundamentals of Heat and Mass Transfer, 6th ed., eq. 9.26 (Churchill and Chu 1975).
  * @example
  * nusseltVerticalPlate(1.8147e9, 0.69); // 147.16
  */
@@ -77,33 +45,6 @@ export function nusseltVerticalPlateLaminar(ra: number, pr: number): number {
 	return 0.68 + (0.67 * ra ** 0.25) / prandtlTerm(0.492, pr) ** (4 / 9);
 }
 
-/** Which way the heat wants to go from a horizontal plate: freely, or held under (or over) it. */
-export type PlateFace = 'hot-up' | 'hot-down';
-
-/**
- * Mean Nusselt number of a horizontal plate.
- *
- *     hot face up (or cold face down):  Nu = 0.54 Ra^¼ (Ra ≤ 1e7),  0.15 Ra^⅓ (above)
- *     hot face down (or cold face up):  Nu = 0.27 Ra^¼
- *
- * @param ra Rayleigh number over area/perimeter (in older editions half the width of a strip)
- * @param face which way the hot face looks
- * @returns mean Nu over that length
- * @throws EngineInputError outside 1e4 ≤ Ra ≤ 1e11 (up) or 1e5 ≤ Ra ≤ 1e10 (down)
- * Validity: isothermal plate with free edges; the two laws for the face up meet to 6 % at 1e7.
- * Source: Incropera et al., 6th ed., eq. 9.30 to 9.32 (McAdams 1954).
- * @example
- * nusseltHorizontalPlate(1.381e8, 'hot-up'); // 77.533
- */
-export function nusseltHorizontalPlate(ra: number, face: PlateFace): number {
-	if (face === 'hot-down') {
-		requireWithin(1e5, 1e10, { ra });
-		return 0.27 * ra ** 0.25;
-	}
-	requireWithin(1e4, 1e11, { ra });
-	return ra <= 1e7 ? 0.54 * ra ** 0.25 : 0.15 * Math.cbrt(ra);
-}
-
 /**
  * Mean Nusselt number of a long horizontal cylinder.
  *
@@ -122,4 +63,54 @@ export function nusseltHorizontalCylinder(ra: number, pr: number): number {
 	requirePositive({ ra, pr });
 	requireWithin(0, 1e12, { ra });
 	return (0.6 + (0.387 * ra ** (1 / 6)) / prandtlTerm(0.559, pr) ** (8 / 27)) ** 2;
+}
+
+/** Constants of Morgan's law up to each Rayleigh number. */
+const MORGAN_BANDS = [
+	{ upTo: 1e-2, c: 0.675, n: 0.058 },
+	{ upTo: 1e2, c: 1.02, n: 0.148 },
+	{ upTo: 1e4, c: 0.85, n: 0.188 },
+	{ upTo: 1e7, c: 0.48, n: 0.25 },
+	{ upTo: 1e12, c: 0.125, n: 0.333 }
+] as const;
+
+/**
+ * Mean Nusselt number of a long horizontal cylinder in bands of Ra, from a large review of measurements.
+ *
+ *     Nu = C Ra^n
+ *
+ * @param ra Rayleigh number over the diameter
+ * @returns mean Nu over the circumference
+ * @throws EngineInputError outside 1e-10 ≤ Ra ≤ 1e12
+ * Validity: isothermal cylinder in a gas or an ordinary liquid, 1e-10 ≤ Ra ≤ 1e12; the bands meet to about 1 %.
+ * Source: Incropera et al., 6th ed., eq. 9.33 and Table 9.1 (Morgan 1975).
+ * @example
+ * nusseltHorizontalCylinderBanded(9e6); // 26.291
+ */
+export function nusseltHorizontalCylinderBanded(ra: number): number {
+	requireWithin(1e-10, 1e12, { ra });
+	const band = MORGAN_BANDS.find(({ upTo }) => ra <= upTo)!;
+	return band.c * ra ** band.n;
+}
+
+/**
+ * Mean Nusselt number of a sphere in still fluid.
+ *
+ *     Nu = 2 + 0.589 Ra^¼ / [1 + (0.469/Pr)^(9/16)]^(4/9) · { 1 + 7.44e-8 Ra / [1 + (0.469/Pr)^(9/16)]^(16/9) }^(1/12)
+ *
+ * @param ra Rayleigh number over the diameter
+ * @param pr Prandtl number at the film temperature
+ * @returns mean Nu over the sphere
+ * @throws EngineInputError outside 0 < Ra ≤ 1e13 or when Pr is not above zero
+ * Validity: isothermal sphere, Ra ≤ 1e13; tends to 2, conduction into still fluid.
+ * Source: Churchill, in Heat Exchanger Design Handbook, Hemisphere 1987, section 2.5.7 (section from memory).
+ * @example
+ * nusseltNaturalSphere(7e6, 0.7); // 25.671
+ */
+export function nusseltNaturalSphere(ra: number, pr: number): number {
+	requirePositive({ ra, pr });
+	requireWithin(0, 1e13, { ra });
+	const term = prandtlTerm(0.469, pr);
+	const laminar = (0.589 * ra ** 0.25) / term ** (4 / 9);
+	return 2 + laminar * (1 + (7.44e-8 * ra) / term ** (16 / 9)) ** (1 / 12);
 }
