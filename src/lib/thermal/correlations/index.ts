@@ -1,14 +1,27 @@
 /** Published laws of heat, air, sun and climate, one file a family; each says where it comes from and where it holds. */
 export * from './air';
+export * from './building-zones';
+export * from './clear-sky';
+export * from './climate-class';
+export * from './degree-days';
+export * from './degree-hours';
 export * from './forced-convection';
 export * from './forced-plate';
 export * from './grey-enclosure';
+export * from './hydrogen';
+export { drynessLimitMm, yearlyMeanC } from './monthly-climate';
+export type { MonthlyClimate } from './monthly-climate';
 export * from './natural-convection';
 export * from './natural-horizontal-plate';
 export * from './radiation';
 export * from './radiation-shields';
 export { EngineInputError } from './require';
+export * from './resistances';
 export * from './similarity';
 export * from './small-linear';
+export * from './sol-air';
+export * from './sun-ephemeris';
+export * from './sun-position';
+export * from './transient-wall';
 export * from './view-factor-algebra';
 export * from './view-factors';
