@@ -1,4 +1,4 @@
-import { mean, requireMonthlyClimate, sum, type MonthlyClimate } from './monthly-climate';
+import { drynessLimitMm, mean, requireMonthlyClimate, sum, type MonthlyClimate } from './monthly-climate';
 import { requireNotBelow } from './require';
 
 /** From the mildest to the coldest: the first limit of heating degree-days that is not exceeded gives the zone. */
@@ -33,27 +33,35 @@ export function buildingThermalZone(cdd10: number, hdd18: number): number {
 	return ZONES_BY_COLD.find(({ upToHdd18 }) => hdd18 <= upToHdd18)?.zone ?? 8;
 }
 
+/** The standard that the moisture letter goes by: the later one minds the season of the rain. */
+export type MoistureEdition = 2010 | 2013;
+
 /**
  * Moisture letter of the American climate zones.
  *
  *     C marine: coldest month −3…18 °C, hottest below 22 °C, at least four months above 10 °C
- *     B dry:    yearly rain below 20 (T + 7) mm, T the yearly mean in °C;   A humid: the rest
+ *     B dry:    yearly rain below 20 (T + 7) mm, T the yearly mean in °C; from 2013 below 20 (T + 14) where 70 % of it falls
+ *               in summer, below 20 T where 70 % falls in winter
+ *     A humid:  the rest
  *
  * @param climate twelve monthly means, °C, and rain, mm
+ * @param edition which rule for dry
  * @returns A, B or C
  * @throws EngineInputError unless there are twelve months of temperatures within −80…50 °C and rain not below zero
  * Validity: zones 0 to 6; marine in zones 3 to 5 alone; the dry season that the marine letter asks for besides is left out.
- * Source: ANSI/ASHRAE/IES Standard 90.1-2010, Table B-4 (as programs have it).
+ * Source: ANSI/ASHRAE/IES Standard 90.1-2010, Table B-4 (as a program has it); ANSI/ASHRAE Standard 169-2013, section A3
+ *   (from memory).
  * @example
- * buildingMoistureLetter({ meanC: [5, 6, 8, 10, 13, 16, 18, 18, 16, 12, 8, 5], rainMm: [130, 90, 95, 70, 50, 40, 20, 25, 40, 90, 160, 150] }); // 'C'
+ * buildingMoistureLetter({ meanC: [5, 6, 8, 10, 13, 16, 18, 18, 16, 12, 8, 5], rainMm: [130, 90, 95, 70, 50, 40, 20, 25, 40, 90, 160, 150] }, 2010); // 'C'
  */
-export function buildingMoistureLetter(climate: MonthlyClimate): 'A' | 'B' | 'C' {
+export function buildingMoistureLetter(climate: MonthlyClimate, edition: MoistureEdition): 'A' | 'B' | 'C' {
 	requireMonthlyClimate(climate);
 	const { meanC, rainMm } = climate;
 	const coldestC = Math.min(...meanC);
 	const warmMonths = meanC.filter((tempC) => tempC > 10).length;
 	if (coldestC > -3 && coldestC < 18 && Math.max(...meanC) < 22 && warmMonths >= 4) return 'C';
-	return sum(rainMm) < 20 * (mean(meanC) + 7) ? 'B' : 'A';
+	const limitMm = edition === 2010 ? 20 * (mean(meanC) + 7) : drynessLimitMm(climate);
+	return sum(rainMm) < limitMm ? 'B' : 'A';
 }
 
 /** What the Australian climate zones go by. */

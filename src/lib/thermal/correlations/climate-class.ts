@@ -79,8 +79,9 @@ function nameSummer({ hottestC, monthsAbove10, coldestC }: Figures): 'a' | 'b' |
  * @returns the class, such as BWh
  * @throws EngineInputError unless there are twelve months of temperatures within −80…50 °C and rain not below zero
  * Validity: averages over years; near a threshold another source of averages gives another letter.
- * Source: Beck et al., Scientific Data 5 (2018) 180214, Table 2, after Peel, Finlayson, McMahon, Hydrology and Earth System
- *   Sciences 11 (2007) 1633; E before B, as cold deserts of ice have little snow (order and the tie of s and w from memory).
+ * Source: Peel, Finlayson, McMahon, Hydrology and Earth System Sciences 11 (2007) 1633, Table 1, with E to 10 °C as in Beck et
+ *   al., Scientific Data 5 (2018) 180214; E before B as in Kottek et al., Meteorologische Zeitschrift 15 (2006) 259 (that
+ *   order, and the drier half where both s and w hold, from memory).
  * @example
  * climateClass({ meanC: [27, 28, 28.5, 28.5, 28.5, 28.5, 28, 28, 28.5, 28.5, 27.5, 27], rainMm: [234, 101, 170, 185, 154, 130, 256, 193, 174, 211, 271, 324] }); // 'Af'
  */
