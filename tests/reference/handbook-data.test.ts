@@ -27,6 +27,20 @@ describe('reference data', () => {
 		}
 	});
 
+	it.each(['emissivities/emissivities.csv', 'contact-resistance/contact-resistance.csv'])(
+		'gives every range of %s two ends in order and a standing',
+		(path) => {
+			for (const row of readTable(path)) {
+				const [low, high] = Object.entries(row)
+					.filter(([column]) => /^(low|high)/.test(column))
+					.map(([, value]) => Number(value));
+				expect(low).toBeGreaterThan(0);
+				expect(high).toBeGreaterThanOrEqual(low!);
+				expect(STANDINGS).toContain(row.standing);
+			}
+		}
+	);
+
 	it('holds the rolling resistance that the engine has', () => {
 		const table = readTable('rolling-resistance/rolling-resistance.csv');
 		expect(Object.fromEntries(table.map((row) => [row.surface, Number(row.coefficient)]))).toEqual(

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { ambientTempC, sunWPerM2 } from '../../src/lib/thermal';
+import { checkAgainst, type PublishedValue } from './support/check-against';
 import { readTable } from './support/reference-data';
 
 const profile = readTable('design-day-profile/profile.csv').map((row) => ({
@@ -8,24 +9,51 @@ const profile = readTable('design-day-profile/profile.csv').map((row) => ({
 }));
 const DAY = { tMax: 40, dailyRange: 14 };
 
-describe('the design day (ASHRAE Handbook Fundamentals 2021, ch. 14, Table 6)', () => {
-	it.each(profile.map(({ hour, fraction }) => [hour, fraction]))(
-		'is at hour %i by %f of the range cooler',
-		(hour, fraction) => {
-			expect(ambientTempC(hour, DAY)).toBeCloseTo(40 - 14 * fraction, 12);
-		}
+const HANDBOOK: Omit<PublishedValue, 'name' | 'expected'> = {
+	source: 'ASHRAE Handbook Fundamentals 2021',
+	place: 'ch. 14, Table 6',
+	standing: 'read in the source',
+	unit: '',
+	tolerance: { absolute: 1e-12 },
+	because: 'a table value: only rounding'
+};
+
+describe('the design day against the handbook', () => {
+	for (const { hour, fraction } of profile) {
+		checkAgainst(
+			{ ...HANDBOOK, name: `share of the daily range at hour ${hour}`, expected: fraction },
+			() => {
+				return (DAY.tMax - ambientTempC(hour, DAY)) / DAY.dailyRange;
+			}
+		);
+	}
+
+	const worked: Omit<PublishedValue, 'name' | 'expected'> = {
+		...HANDBOOK,
+		standing: 'worked from the published equation',
+		unit: '°C',
+		tolerance: { absolute: 0.005 },
+		because: 'worked by hand to two decimals'
+	};
+	for (const row of readTable('design-day-profile/worked-day.csv')) {
+		const hour = Number(row.clockHour);
+		checkAgainst({ ...worked, name: `worked day at hour ${hour}`, expected: Number(row.dryBulbC) }, () =>
+			ambientTempC(hour, DAY)
+		);
+	}
+	const exact = { ...worked, tolerance: { absolute: 1e-10 }, because: 'an exact sum: only rounding' };
+	const mean = (values: number[]) => values.reduce((sum, value) => sum + value, 0) / values.length;
+	checkAgainst({ ...exact, name: 'mean of the worked day', expected: 32.4925 }, () =>
+		mean(profile.map(({ hour }) => ambientTempC(hour, DAY)))
 	);
+	checkAgainst({ ...exact, name: 'sum of the shares of a day', expected: 12.87, unit: '' }, () =>
+		profile.reduce((sum, { hour }) => sum + (DAY.tMax - ambientTempC(hour, DAY)) / DAY.dailyRange, 0)
+	);
+});
 
-	it.each(
-		readTable('design-day-profile/worked-day.csv').map((row) => [Number(row.clockHour), Number(row.dryBulbC)])
-	)('has at hour %i the worked %f °C', (hour, dryBulbC) => {
-		expect(ambientTempC(hour, DAY)).toBeCloseTo(dryBulbC, 2);
-	});
-
-	it('sums its fractions to 12.87 and averages 32.4925 °C on the worked day', () => {
-		expect(profile).toHaveLength(24);
-		expect(profile.reduce((sum, { fraction }) => sum + fraction, 0)).toBeCloseTo(12.87, 10);
-		expect(profile.reduce((sum, { hour }) => sum + ambientTempC(hour, DAY), 0) / 24).toBeCloseTo(32.4925, 10);
+describe('the design day', () => {
+	it('has 24 hours in the table', () => {
+		expect(profile.map(({ hour }) => hour)).toEqual(Array.from({ length: 24 }, (_, at) => at + 1));
 	});
 
 	it('is straight between the hours, and begins anew at midnight', () => {
