@@ -90,7 +90,15 @@ const layers = [
 
 export default ts.config(
 	{
-		ignores: ['build/', '.svelte-kit/', '.soakline/', 'node_modules/', 'test-results/', 'playwright-report/']
+		ignores: [
+			'src/lib/**/generated/',
+			'build/',
+			'.svelte-kit/',
+			'.soakline/',
+			'node_modules/',
+			'test-results/',
+			'playwright-report/'
+		]
 	},
 	js.configs.recommended,
 	...ts.configs.recommended,

@@ -179,7 +179,8 @@ describe('the verdict', () => {
 		const bms = { discharge: { cut: peakSensorC - 0.01, reset: 30 }, cutDelayS: 3600 };
 		const assessment = assess({ ...DAY, bms: { ...bms, charge: { cut: 90, reset: 80 } } });
 		expect(assessment.verdict).toBe('runs-close');
-		expect(assessment.headroomK).toBeCloseTo(-0.01, 6);
+		// The two runs stop at different instants: they agree as far as the steps are true.
+		expect(assessment.headroomK).toBeCloseTo(-0.01, 3);
 	});
 
 	it('runs close when heat stopped the charging for part of the day', () => {

@@ -1,6 +1,6 @@
 import { KELVIN_AT_ZERO_C, STEFAN_BOLTZMANN } from '../correlations/radiation';
 import type { NetworkDescription, NetworkLink, NetworkNode } from '../network/description';
-import { DRIVEN } from '../vehicle/describe-vehicle';
+import { DRIVEN } from '../vehicle/network-table';
 import type { HeatSource } from './types';
 
 /** Nodes whose temperature the ledger takes apart; the others are where the heat comes from. */
@@ -47,7 +47,7 @@ function findOuterEnd(name: string, nodes: ReadonlyMap<string, NetworkNode>): Ou
 		return { parts: [{ node: name, weight: 1, source }], warmedByRoad: false, body: source };
 	}
 	const parts = node.parts.map((part) => ({ ...part, source: SOURCE_OF_NODE[part.node] ?? null }));
-	return { parts, warmedByRoad: Object.hasOwn(DRIVEN.mixes, name), body: null };
+	return { parts, warmedByRoad: Object.hasOwn(DRIVEN, name), body: null };
 }
 
 function pickLink(

@@ -1,9 +1,10 @@
-import { describeVehicle, DRIVEN } from '../vehicle/describe-vehicle';
+import { describeVehicle } from '../vehicle/describe-vehicle';
 import { emptyDrive, findDrive, findLegConstants, type Drive, type LegConstants } from '../vehicle/leg-drive';
+import { DRIVEN } from '../vehicle/network-table';
 import type { Leg, MinuteSeries, NodeName, Scenario } from '../types';
 import { pickBattery, type BatteryNetwork, type Moment } from './battery-network';
 
-const ROAD_WARMED = Object.keys(DRIVEN.mixes)[0] as keyof typeof DRIVEN.mixes;
+const findRoadK = DRIVEN['local air']!;
 
 interface TimedLeg {
 	leg: Leg;
@@ -56,7 +57,7 @@ export class LegClock {
 		};
 		return {
 			ambientC: mix(minutes.ambient),
-			roadK: DRIVEN.mixes[ROAD_WARMED](drive, scenario),
+			roadK: findRoadK(drive, scenario),
 			tempOf: (node) => mix(minutes.nodes[node as NodeName])
 		};
 	}

@@ -1,6 +1,7 @@
 import { EnergyAccount } from '../solve/energy-account';
 import { Integrator, type Failure } from '../solve/integrator';
-import { readStep } from '../solve/rosenbrock';
+import { RosenbrockStepper } from '../solve/rosenbrock';
+import { readStep } from '../solve/stepper';
 import { CompiledNetwork } from './compile-network';
 import type { NetworkDescription } from './description';
 
@@ -64,14 +65,15 @@ export function simulateNetwork(description: NetworkDescription, run: NetworkRun
 	}
 	const temps = Float64Array.from(network.storedNames, (name) => readStart(run.startC, name));
 	const toleranceK = new Float64Array(network.size).fill(run.toleranceK ?? TOLERANCE_K);
-	const integrator = new Integrator(network, { toleranceK, mostSteps: MOST_STEPS });
-	const energy = new EnergyAccount(network.size, integrator.stepper);
+	const stepper = new RosenbrockStepper(network);
+	const integrator = new Integrator(stepper, { toleranceK, mostSteps: MOST_STEPS });
+	const energy = new EnergyAccount(network.size, stepper);
 	const rows: Record<string, number>[] = [];
 	const addRow = (read: (node: number) => number): void => {
 		rows.push(Object.fromEntries(network.storedNames.map((name, node) => [name, read(node)])));
 	};
 	while (rows.length < timesS.length && timesS[rows.length]! <= 0) addRow((node) => temps[node]!);
-	const advance = integrator.advance(
+	const reached = integrator.advance(
 		0,
 		timesS.at(-1) ?? 0,
 		temps,
@@ -85,9 +87,9 @@ export function simulateNetwork(description: NetworkDescription, run: NetworkRun
 			}
 		}
 	);
-	const counts = { steps: integrator.steps, evaluations: integrator.stepper.evaluations };
-	if (advance.reached === 'failed') {
-		return { status: 'failed', reason: advance.failure, atS: advance.timeS, ...counts };
+	const counts = { steps: integrator.steps, evaluations: stepper.evaluations };
+	if (reached === 'failed') {
+		return { status: 'failed', reason: integrator.failure!, atS: integrator.timeS, ...counts };
 	}
 	while (rows.length < timesS.length) addRow((node) => temps[node]!);
 	return { status: 'done', temps: rows, relativeImbalances: energy.relativeImbalances(network), ...counts };

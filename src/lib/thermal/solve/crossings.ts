@@ -1,4 +1,4 @@
-import type { Step } from './rosenbrock';
+import type { Step } from './stepper';
 
 /** a0 + a1 s + a2 s² + a3 s³: the temperature of one node inside a step. */
 export type Cubic = readonly [number, number, number, number];
@@ -50,15 +50,30 @@ export function findRoots(cubic: Cubic, level: number): number[] {
 	return roots;
 }
 
-/** No value of the cubic inside the step is higher. */
-function highestBound(step: Step, node: number): number {
-	const inner = (Math.abs(step.inner2[node]!) + Math.abs(step.inner3[node]!)) / 4;
-	return Math.max(step.from[node]!, step.to[node]!) + inner;
+function innerBound(step: Step, node: number): number {
+	return (Math.abs(step.inner2[node]!) + Math.abs(step.inner3[node]!)) / 4;
 }
 
+/** No value of the node inside the step is higher. */
+export function highestBound(step: Step, node: number): number {
+	return Math.max(step.from[node]!, step.to[node]!) + innerBound(step, node);
+}
+
+/** No value of the node inside the step is lower. */
 function lowestBound(step: Step, node: number): number {
-	const inner = (Math.abs(step.inner2[node]!) + Math.abs(step.inner3[node]!)) / 4;
-	return Math.min(step.from[node]!, step.to[node]!) - inner;
+	return Math.min(step.from[node]!, step.to[node]!) - innerBound(step, node);
+}
+
+/** Whether the hottest of some nodes can be at the level or above anywhere in the step: most steps come nowhere near. */
+export function mayReach(step: Step, nodes: readonly number[], level: number): boolean {
+	for (let k = 0; k < nodes.length; k++) if (highestBound(step, nodes[k]!) >= level) return true;
+	return false;
+}
+
+/** Whether the hottest of some nodes can be at the level or below anywhere in the step. */
+export function mayFall(step: Step, nodes: readonly number[], level: number): boolean {
+	for (let k = 0; k < nodes.length; k++) if (lowestBound(step, nodes[k]!) > level) return false;
+	return true;
 }
 
 /** What is looked for: at or above the level, at or below it, or truly below it. */
@@ -80,8 +95,8 @@ export function findCrossing(
 	level: number,
 	crossing: Crossing
 ): number | null {
-	if (crossing === 'reach' && nodes.every((node) => highestBound(step, node) < level)) return null;
-	if (crossing !== 'reach' && nodes.some((node) => lowestBound(step, node) > level)) return null;
+	const near = crossing === 'reach' ? mayReach(step, nodes, level) : mayFall(step, nodes, level);
+	if (!near) return null;
 	const holds = HOLDS[crossing];
 	const cubics = nodes.map((node) => readCubic(step, node));
 	const hottestAt = (share: number) => Math.max(...cubics.map((cubic) => valueAt(cubic, share)));

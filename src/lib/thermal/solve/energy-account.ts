@@ -1,5 +1,6 @@
 import type { HeatSystem } from './heat-system';
-import { readStep, type RosenbrockStepper, type Step } from './rosenbrock';
+import type { RosenbrockStepper } from './rosenbrock';
+import { readStep, type Step } from './stepper';
 
 /** Simpson's rule, exact to the third degree, as the curve inside a step is: both ends with 1/6 each, the middle 2/3. */
 const END_WEIGHT = 1 / 6;

@@ -1,64 +1,17 @@
 import type { HeatSystem } from './heat-system';
+import { RODAS, STAGES } from './rodas';
 import { factorise, planSparseLu, solveFactorised } from './sparse-lu';
+import type { Step, Stepper } from './stepper';
 
-/**
- * RODAS, a stiffly accurate and L-stable Rosenbrock method of order 4(3) with six stages.
- *
- * Source: Hairer, Wanner, Solving Ordinary Differential Equations II, 2nd ed., section VI.4 (coefficients of the
- * set with γ = 1/4, in the transformed variables that avoid products with the Jacobian).
- */
-const GAMMA = 0.25;
-const STAGE_TIME = Float64Array.of(0, 0.386, 0.21, 0.63, 1, 1);
-const TIME_DERIVATIVE = Float64Array.of(0.25, -0.1043, 0.1035, -0.03620000000000023, 0, 0);
-const A = [
-	[],
-	[1.544],
-	[0.9466785280815826, 0.2557011698983284],
-	[3.314825187068521, 2.896124015972201, 0.9986419139977817],
-	[1.221224509226641, 6.019134481288629, 12.53708332932087, -0.687886036105895],
-	[1.221224509226641, 6.019134481288629, 12.53708332932087, -0.687886036105895, 1]
-].map((row) => Float64Array.from(row));
-const C = [
-	[],
-	[-5.6688],
-	[-2.430093356833875, -0.2063599157091915],
-	[-0.1073529058151375, -9.594562251023355, -20.47028614809616],
-	[7.496443313967647, -10.24680431464352, -33.99990352819905, 11.7089089320616],
-	[8.083246795921522, -7.981132988064893, -31.52159432874371, 16.31930543123136, -6.058818238834054]
-].map((row) => Float64Array.from(row));
+const GAMMA = RODAS.gamma;
+const A = RODAS.a.map((row) => Float64Array.from(row));
+const C = RODAS.c.map((row) => Float64Array.from(row));
+const DENSE = RODAS.dense.map((row) => Float64Array.from(row));
 /** Share of the step over which dH/dt is found: small against what bends, large against rounding. */
 const TIME_SHARE = 1e-3;
-/** The two inner coefficients of the cubic between the ends of a step. */
-const DENSE = [
-	[10.12623508344586, -7.487995877610167, -34.80091861555747, -7.992771707568823, 1.025137723295662],
-	[-0.6762803392801253, 6.087714651680015, 16.43084320892478, 24.76722511418386, -6.594389125716872]
-].map((row) => Float64Array.from(row));
 
-export const STAGES = 6;
-
-/** One step: T(s) = T0 (1−s) + s (T1 + (1−s) (c2 + s c3)), 0 ≤ s ≤ 1. */
-export interface Step {
-	timeS: number;
-	lengthS: number;
-	readonly from: Float64Array;
-	readonly to: Float64Array;
-	readonly inner2: Float64Array;
-	readonly inner3: Float64Array;
-	/** Difference to the embedded solution of order 3, K. */
-	readonly error: Float64Array;
-}
-
-/** The temperature of one node inside a step, °C; `share` runs from 0 to 1. */
-export function readStep(step: Step, node: number, share: number): number {
-	const rest = 1 - share;
-	return (
-		step.from[node]! * rest +
-		share * (step.to[node]! + rest * (step.inner2[node]! + share * step.inner3[node]!))
-	);
-}
-
-/** Takes single steps of a heat system; says nothing about how long they should be. */
-export class RosenbrockStepper {
+/** RODAS for any heat system. */
+export class RosenbrockStepper implements Stepper {
 	readonly step: Step;
 	/** H at the start of the step that is tried. */
 	readonly startHeats: Float64Array;
@@ -177,9 +130,9 @@ export class RosenbrockStepper {
 		if (stage > 0) {
 			this.combineStages(stage, lengthS);
 			heats = work;
-			this.evaluate(step.timeS + STAGE_TIME[stage]! * lengthS, step.to, heats);
+			this.evaluate(step.timeS + RODAS.times[stage]! * lengthS, step.to, heats);
 		}
-		const slopeWeight = TIME_DERIVATIVE[stage]! * lengthS;
+		const slopeWeight = RODAS.timeDerivative[stage]! * lengthS;
 		const offset = stage * size;
 		for (let i = 0; i < size; i++) {
 			const coupled = stage > 0 ? coupling[i]! : 0;

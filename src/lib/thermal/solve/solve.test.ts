@@ -1,8 +1,9 @@
 import { describe, expect, it } from 'vitest';
-import { findCrossing, findRoots, type Cubic } from './crossings';
+import { findCrossing, findRoots, readCubic, type Cubic } from './crossings';
 import type { HeatSystem } from './heat-system';
 import { Integrator } from './integrator';
-import { readStep, RosenbrockStepper, type Step } from './rosenbrock';
+import { RosenbrockStepper } from './rosenbrock';
+import { readStep, type Step } from './stepper';
 import { factorise, planSparseLu, solveFactorised } from './sparse-lu';
 
 /**
@@ -95,43 +96,89 @@ describe('the integrator', () => {
 	const run = (toleranceK: number, mostSteps = 10_000) => {
 		const temps = Float64Array.from(START);
 		const options = { toleranceK: new Float64Array(3).fill(toleranceK), mostSteps };
-		const integrator = new Integrator(new TestSystem(), options);
-		const advance = integrator.advance(
+		const stepper = new RosenbrockStepper(new TestSystem());
+		const integrator = new Integrator(stepper, options);
+		const reached = integrator.advance(
 			0,
 			600,
 			temps,
 			() => null,
 			() => {}
 		);
-		return { advance, temps, integrator };
+		return { reached, temps, integrator, stepper };
 	};
 
 	it('keeps near the tolerance and within a budget of evaluations', () => {
-		const { temps, integrator } = run(1e-4);
+		const { temps, stepper } = run(1e-4);
 		const [first, third] = exact(600);
 		expect(Math.abs(temps[0]! - first)).toBeLessThan(1e-3);
 		expect(Math.abs(temps[2]! - third)).toBeLessThan(1e-3);
-		expect(integrator.stepper.evaluations).toBeLessThan(2000);
+		expect(stepper.evaluations).toBeLessThan(2000);
 	});
 
 	it('gives up after the steps that it may take', () => {
-		expect(run(1e-8, 20).advance).toMatchObject({ reached: 'failed', failure: 'too_many_steps' });
+		const { reached, integrator } = run(1e-8, 20);
+		expect([reached, integrator.failure]).toEqual(['failed', 'too_many_steps']);
 	});
 
 	it('repeats the step up to where it is stopped', () => {
 		const temps = Float64Array.from(START);
 		const options = { toleranceK: new Float64Array(3).fill(1e-5), mostSteps: 10_000 };
-		const advance = new Integrator(new TestSystem(), options).advance(
+		const integrator = new Integrator(new RosenbrockStepper(new TestSystem()), options);
+		const reached = integrator.advance(
 			0,
 			600,
 			temps,
 			(step) => findCrossing(step, [2], 150, 'fall'),
 			() => {}
 		);
-		expect(advance.reached).toBe('stop');
+		expect(reached).toBe('stop');
 		// 1/150 = 1/200 + 1e-4 t
-		expect(advance.timeS).toBeCloseTo((1 / 150 - 1 / 200) / 1e-4, 3);
+		expect(integrator.timeS).toBeCloseTo((1 / 150 - 1 / 200) / 1e-4, 3);
 		expect(temps[2]).toBeCloseTo(150, 4);
+	});
+});
+
+describe('a heat that bends sharply', () => {
+	/** dT/dt = 1 below 50, 0.2 above. */
+	class BentSystem implements HeatSystem {
+		readonly size = 1;
+		readonly capacityJPerK = Float64Array.of(1);
+		readonly pattern = [[0, 0]] as const;
+		setTime(): void {}
+		sumHeats(temps: Float64Array, heats: Float64Array): void {
+			heats[0] = temps[0]! < 50 ? 1 : 0.2;
+		}
+		fillJacobian(_temps: Float64Array, jacobian: Float64Array): void {
+			jacobian[0] = 0;
+		}
+		sumThroughput(throughput: Float64Array): void {
+			throughput.fill(1);
+		}
+	}
+	const passage = (step: Step) => {
+		const passes = step.from[0]! < 50 && step.to[0]! > 50.0001;
+		return passes ? (findRoots(readCubic(step, 0), 50.00001)[0] ?? null) : null;
+	};
+
+	it('ends a step where it does, and goes on from there', () => {
+		const temps = Float64Array.of(30);
+		const integrator = new Integrator(new RosenbrockStepper(new BentSystem()), {
+			toleranceK: Float64Array.of(1e-3),
+			mostSteps: 1000,
+			findBend: passage,
+			afterBendS: 5
+		});
+		const ends: number[] = [];
+		integrator.advance(
+			0,
+			100,
+			temps,
+			() => null,
+			(step) => ends.push(step.timeS + step.lengthS)
+		);
+		expect(temps[0]).toBeCloseTo(50 + 0.2 * 80, 4);
+		expect(Math.min(...ends.map((end) => Math.abs(end - 20)))).toBeLessThan(1e-3);
 	});
 });
 

@@ -1,5 +1,5 @@
-import { findCrossing } from '../solve/crossings';
-import type { Step } from '../solve/rosenbrock';
+import { findCrossing, mayFall, mayReach, type Crossing } from '../solve/crossings';
+import type { Step } from '../solve/stepper';
 import type { BmsEvent, BmsSettings, LimitPair } from '../types';
 
 type Side = BmsEvent['side'];
@@ -47,14 +47,17 @@ export class Bms {
 
 	/** When a running delay ends at the latest, s. */
 	nextDeadlineS(): number {
-		return Math.min(
-			...this.latches.map(({ state, opensAtS }) => (state === 'waiting' ? opensAtS : Infinity))
-		);
+		let next = Infinity;
+		for (const { state, opensAtS } of this.latches) {
+			if (state === 'waiting' && opensAtS < next) next = opensAtS;
+		}
+		return next;
 	}
 
 	/** At the start, and when a delay has run out: what the temperatures alone decide. Tells whether a latch moved. */
 	settle(timeS: number, hour: number, temps: Float64Array): boolean {
-		const sensor = Math.max(...this.sensorNodes.map((node) => temps[node]!));
+		let sensor = -Infinity;
+		for (const node of this.sensorNodes) sensor = Math.max(sensor, temps[node]!);
 		let moved = false;
 		for (const latch of this.latches) {
 			if (latch.state === 'closed' && timeS === 0 && sensor >= latch.limits.cut) {
@@ -69,15 +72,10 @@ export class Bms {
 
 	/** The first place in the step where a latch changes, with all that change there; null when none does. */
 	findChange(step: Step): { share: number; changes: PlannedChange[] } | null {
-		let share = Infinity;
-		const found: (PlannedChange & { share: number })[] = [];
-		for (const latch of this.latches) {
-			const next = this.watch(step, latch);
-			if (next === null) continue;
-			found.push({ latch, ...next });
-			share = Math.min(share, next.share);
-		}
+		if (!this.mayChange(step, this.latches[0]!) && !this.mayChange(step, this.latches[1]!)) return null;
+		const found = this.latches.flatMap((latch) => this.watch(step, latch));
 		if (found.length === 0) return null;
+		const share = Math.min(...found.map((change) => change.share));
 		return { share, changes: found.filter((change) => change.share <= share + SAME_PLACE) };
 	}
 
@@ -97,22 +95,28 @@ export class Bms {
 		return true;
 	}
 
-	private reachedCut(): LatchChange {
+	private reachedCut(): 'wait' | 'open' {
 		return this.settings.cutDelayS > 0 ? 'wait' : 'open';
 	}
 
-	private watch(step: Step, latch: Latch): { share: number; change: LatchChange } | null {
-		const { cut, reset } = latch.limits;
-		if (latch.state === 'open') {
-			if (!this.settings.autoReset) return null;
-			const share = findCrossing(step, this.sensorNodes, reset, 'fall');
-			return share === null ? null : { share, change: 'close' };
-		}
-		if (latch.state === 'closed') {
-			const share = findCrossing(step, this.sensorNodes, cut, 'reach');
-			return share === null ? null : { share, change: this.reachedCut() };
-		}
-		const share = findCrossing(step, this.sensorNodes, cut, 'leave');
-		return share === null ? null : { share, change: 'break' };
+	/** The level that a latch watches for and how; null when nothing moves it any more. */
+	private watchedBy({ state, limits }: Latch): { level: number; crossing: Crossing } | null {
+		if (state === 'closed') return { level: limits.cut, crossing: 'reach' };
+		if (state === 'waiting') return { level: limits.cut, crossing: 'leave' };
+		return this.settings.autoReset ? { level: limits.reset, crossing: 'fall' } : null;
+	}
+
+	private mayChange(step: Step, { state, limits }: Latch): boolean {
+		if (state === 'open') return this.settings.autoReset && mayFall(step, this.sensorNodes, limits.reset);
+		return state === 'waiting' || mayReach(step, this.sensorNodes, limits.cut);
+	}
+
+	private watch(step: Step, latch: Latch): (PlannedChange & { share: number })[] {
+		const watched = this.watchedBy(latch);
+		if (watched === null) return [];
+		const share = findCrossing(step, this.sensorNodes, watched.level, watched.crossing);
+		if (share === null) return [];
+		const change = { reach: this.reachedCut(), leave: 'break', fall: 'close' } as const;
+		return [{ latch, change: change[watched.crossing], share }];
 	}
 }

@@ -1,3 +1,4 @@
+import { expOf } from '../solve/elementary';
 import type { Leg, Scenario } from '../types';
 
 const S_PER_H = 3600;
@@ -59,7 +60,7 @@ export function planChargeSpan(
 
 /** Battery current `afterS` seconds into the span, A. */
 export function readCurrentA(span: ChargeSpan, afterS: number): number {
-	return span.decayPerS === 0 ? span.currentA : span.currentA * Math.exp(-span.decayPerS * afterS);
+	return span.decayPerS === 0 ? span.currentA : span.currentA * expOf(-span.decayPerS * afterS);
 }
 
 /** State of charge `afterS` seconds into the span, 0…1. */
@@ -68,6 +69,38 @@ export function readSoc(span: ChargeSpan, afterS: number): number {
 	const soc =
 		span.decayPerS === 0
 			? span.socAtStart + (span.currentA * afterS) / (S_PER_H * span.capacityAh)
-			: 1 - (1 - span.socAtStart) * Math.exp(-span.decayPerS * afterS);
+			: 1 - (1 - span.socAtStart) * expOf(-span.decayPerS * afterS);
 	return Math.min(Math.max(soc, 0), 1);
+}
+
+const S_PER_MIN = 60;
+
+/** Writes state of charge and current on whole minutes, from `minute` up to, but not at, `last`. */
+export function fillCharge(
+	span: ChargeSpan,
+	spanStartS: number,
+	soc: Float64Array,
+	currentA: Float64Array,
+	minute: number,
+	last: number
+): void {
+	// Within a span of constant current both are straight lines, and what leaves 0…1 is at its end.
+	if (span.decayPerS === 0 && (last - 1) * S_PER_MIN - spanStartS < span.lastsS) {
+		const perMinute = (span.currentA * S_PER_MIN) / (S_PER_H * span.capacityAh);
+		const atZero = span.socAtStart - (perMinute * spanStartS) / S_PER_MIN;
+		for (let at = minute; at < last; at++) {
+			soc[at] = atZero + perMinute * at;
+			currentA[at] = span.currentA;
+		}
+		return;
+	}
+	// A decaying current falls by the same factor each minute.
+	const eachMinute = expOf(-span.decayPerS * S_PER_MIN);
+	let left = expOf(-span.decayPerS * (minute * S_PER_MIN - spanStartS));
+	for (let at = minute; at < last; at++) {
+		const afterS = at * S_PER_MIN - spanStartS;
+		soc[at] = span.decayPerS === 0 ? readSoc(span, afterS) : 1 - (1 - span.socAtStart) * left;
+		currentA[at] = span.currentA * left;
+		left *= eachMinute;
+	}
 }

@@ -1,3 +1,4 @@
+import { fifthRootOf, sineOf } from '../solve/elementary';
 import type { ClimateGroup } from '../types';
 
 /**
@@ -10,6 +11,7 @@ const RANGE_SHARE = [
 ] as const;
 
 const HOURS_A_DAY = 24;
+const MINUTES_PER_H = 60;
 
 /**
  * Air temperature of the design day.
@@ -32,6 +34,24 @@ export function ambientTempC(hour: number, climate: Pick<ClimateGroup, 'tMax' | 
 	return climate.tMax - climate.dailyRange * (before + (after - before) * (clock - whole));
 }
 
+/** Writes the air's temperature on whole minutes from the start. */
+export function fillAmbient(
+	column: Float64Array,
+	startHour: number,
+	climate: Pick<ClimateGroup, 'tMax' | 'dailyRange'>
+): void {
+	for (let from = 0; from < column.length;) {
+		// Up to the next whole hour the air follows a straight line.
+		const hour = startHour + from / MINUTES_PER_H;
+		const to = Math.min(column.length, Math.ceil((Math.floor(hour) + 1 - startHour) * MINUTES_PER_H));
+		const startC = ambientTempC(hour, climate);
+		const perMinute =
+			(ambientTempC(startHour + (to - 1) / MINUTES_PER_H, climate) - startC) / Math.max(to - 1 - from, 1);
+		for (let minute = from; minute < to; minute++) column[minute] = startC + (minute - from) * perMinute;
+		from = to;
+	}
+}
+
 /**
  * Sun on the bonnet.
  *
@@ -48,5 +68,6 @@ export function ambientTempC(hour: number, climate: Pick<ClimateGroup, 'tMax' | 
 export function sunWPerM2(hour: number, climate: Pick<ClimateGroup, 'sunPeak'>): number {
 	const clock = hour - HOURS_A_DAY * Math.floor(hour / HOURS_A_DAY);
 	if (clock <= 6 || clock >= 18) return 0;
-	return climate.sunPeak * Math.sin((Math.PI * (clock - 6)) / 12) ** 1.2;
+	const height = sineOf((Math.PI * (clock - 6)) / 12);
+	return climate.sunPeak * height * fifthRootOf(height);
 }

@@ -1,4 +1,5 @@
 import { KELVIN_AT_ZERO_C } from '../correlations/radiation';
+import { fifthRootOf } from '../solve/elementary';
 import type { Leg, Scenario, Surface } from '../types';
 import { ambientTempC, sunWPerM2 } from './climate';
 
@@ -85,12 +86,39 @@ export function findFuelPowerW(
 	airDensityKgPerM3: number
 ): number {
 	if (!leg.engineOn) return 0;
+	const forceN = findForceN(vehicle, leg, speedMPerS, airDensityKgPerM3);
+	const brakeW = Math.max(forceN * speedMPerS, 0) / vehicle.driveline + vehicle.accessoryPowerW;
+	return Math.min(vehicle.idleFuelPowerW + brakeW / vehicle.brakeEfficiency, vehicle.ratedFuelPowerW);
+}
+
+/** What the road, the climb and the air hold against the vehicle; negative when it is pulled downhill. */
+function findForceN(
+	vehicle: Scenario['vehicle'],
+	leg: Leg,
+	speedMPerS: number,
+	airDensityKgPerM3: number
+): number {
 	const weightN = (vehicle.massKg + leg.towMassKg) * GRAVITY_M_PER_S2;
 	const rollN = weightN * (ROLLING_RESISTANCE[leg.surface] + leg.gradePercent / 100);
 	const dragAreaM2 = vehicle.dragAreaM2 + leg.towDragAreaM2;
-	const forceN = rollN + 0.5 * airDensityKgPerM3 * dragAreaM2 * speedMPerS ** 2;
-	const brakeW = Math.max(forceN * speedMPerS, 0) / vehicle.driveline + vehicle.accessoryPowerW;
-	return Math.min(vehicle.idleFuelPowerW + brakeW / vehicle.brakeEfficiency, vehicle.ratedFuelPowerW);
+	return rollN + 0.5 * airDensityKgPerM3 * dragAreaM2 * speedMPerS * speedMPerS;
+}
+
+function findAirDensity({ pressurePa }: Scenario['climate'], ambientC: number): number {
+	return pressurePa / (AIR_GAS_J_PER_KG_K * (ambientC + KELVIN_AT_ZERO_C));
+}
+
+/** Which of the limits of the fuel power holds: where it changes, the heats have a kink. */
+export function findFuelRegime(
+	{ vehicle, climate }: Scenario,
+	leg: Leg,
+	{ speedMPerS }: LegConstants,
+	hour: number
+): 'pulled' | 'between' | 'rated' {
+	const density = findAirDensity(climate, ambientTempC(hour, climate));
+	if (findForceN(vehicle, leg, speedMPerS, density) <= 0) return 'pulled';
+	const powerW = findFuelPowerW(vehicle, leg, speedMPerS, density);
+	return powerW < vehicle.ratedFuelPowerW ? 'between' : 'rated';
 }
 
 /** Everything that the clock sets, written into `drive`. */
@@ -103,7 +131,7 @@ export function findDrive(
 ): Drive {
 	const { vehicle, exhaust, climate } = scenario;
 	const ambientC = ambientTempC(hour, climate);
-	const density = climate.pressurePa / (AIR_GAS_J_PER_KG_K * (ambientC + KELVIN_AT_ZERO_C));
+	const density = findAirDensity(climate, ambientC);
 	drive.ambientC = ambientC;
 	drive.skyC = ambientC - climate.skyDropK;
 	drive.sunWPerM2 = sunWPerM2(hour, climate);
@@ -111,7 +139,8 @@ export function findDrive(
 	drive.fuelPowerW = findFuelPowerW(vehicle, leg, constants.speedMPerS, density);
 	const load = drive.fuelPowerW / vehicle.ratedFuelPowerW;
 	drive.gasTempC = exhaust.gasIdle + (exhaust.gasFull - exhaust.gasIdle) * Math.sqrt(load);
-	drive.gasWPerK = leg.engineOn ? exhaust.gasConductanceFull * load ** 0.8 : 0;
+	const root = fifthRootOf(load);
+	drive.gasWPerK = leg.engineOn ? exhaust.gasConductanceFull * root * root * root * root : 0;
 	return drive;
 }
 

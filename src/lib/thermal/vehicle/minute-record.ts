@@ -1,4 +1,4 @@
-import { readStep, type Step } from '../solve/rosenbrock';
+import type { Step } from '../solve/stepper';
 import {
 	NODE_NAMES,
 	type HourlyRow,
@@ -7,52 +7,48 @@ import {
 	type NodeValues,
 	type Scenario
 } from '../types';
-import type { Bms } from './bms';
-import { readCurrentA, readSoc, type ChargeSpan } from './charge';
-import { ambientTempC } from './climate';
+import { fillCharge } from './charge';
+import { fillAmbient } from './climate';
+import { fillMinutes } from './fill-minutes';
+import type { Standing, StepSink } from './step-sink';
 
-const MINUTE_S = 60;
 const MINUTES_PER_H = 60;
 /** Sums of leg lengths carry rounding errors; a grid point this near the end still counts, min. */
 const ROUNDING_MIN = 1e-7;
 
-function findHighest(temps: Float64Array): number {
-	let high = -Infinity;
-	for (let minute = 0; minute < temps.length; minute++) high = Math.max(high, temps[minute]!);
-	return high;
+/** How many grid points a run has: whole minutes, and the start. */
+export function countMinutes({ legs }: Scenario): number {
+	let totalMinutes = 0;
+	for (const leg of legs) totalMinutes += leg.minutes;
+	return Math.floor(totalMinutes + ROUNDING_MIN) + 1;
 }
 
-/** The current that flows and the latches as they stand while steps are taken. */
-export interface Standing {
-	span: ChargeSpan;
-	spanStartS: number;
-	bms: Bms;
-}
+/** Air outside, state of charge, current. */
+const OTHER_COLUMNS = 3;
 
 /** Fills the grid of minutes from the steps as they are taken. */
-export class MinuteRecord {
+export class MinuteRecord implements StepSink {
 	readonly minutes: MinuteSeries;
-	private next = 0;
+	/** Highest temperature of each solved node so far, °C. */
+	readonly highestC: Float64Array;
 	/** One column a solved node, in the order of the solver. */
 	private readonly columns: readonly Float64Array[];
 
 	constructor(
 		private readonly scenario: Scenario,
 		storedNames: readonly string[],
-		totalMinutes: number
+		count: number
 	) {
-		const count = Math.floor(totalMinutes + ROUNDING_MIN) + 1;
 		const startHour = scenario.start.hour;
-		const column = () => new Float64Array(count);
-		const nodes = Object.fromEntries(NODE_NAMES.map((name) => [name, column()])) as Record<
-			NodeName,
-			Float64Array
-		>;
+		const memory = new Float64Array((NODE_NAMES.length + OTHER_COLUMNS) * count);
+		let next = 0;
+		const column = () => memory.subarray(next++ * count, next * count);
+		const nodes = {} as Record<NodeName, Float64Array>;
+		for (const name of NODE_NAMES) nodes[name] = column();
 		this.columns = storedNames.map((name) => nodes[name as NodeName]);
+		this.highestC = new Float64Array(storedNames.length).fill(-Infinity);
 		const ambient = column();
-		for (let minute = 0; minute < count; minute++) {
-			ambient[minute] = ambientTempC(startHour + minute / MINUTES_PER_H, scenario.climate);
-		}
+		fillAmbient(ambient, startHour, scenario.climate);
 		if (!scenario.shield) nodes.shield.fill(ambient[0]!);
 		this.minutes = {
 			startHour,
@@ -66,65 +62,67 @@ export class MinuteRecord {
 		};
 	}
 
-	/** Fills the grid points from the start of the step up to, but not at, its end. */
-	fillStep(step: Step, standing: Standing): void {
-		const endS = step.timeS + step.lengthS;
-		const { minutes, columns } = this;
-		for (; this.next < minutes.count && this.next * MINUTE_S < endS; this.next++) {
-			const minute = this.next;
-			const share = (minute * MINUTE_S - step.timeS) / step.lengthS;
-			for (let node = 0; node < columns.length; node++) {
-				columns[node]![minute] = readStep(step, node, share);
-			}
-			this.fillStanding(minute, standing);
+	/** Fills the grid points of a step from the one up to, but not at, the other. */
+	takeStep(step: Step, standing: Standing, minute: number, last: number): void {
+		if (minute === last) return;
+		const { columns, highestC } = this;
+		for (let node = 0; node < columns.length; node++) {
+			highestC[node] = fillMinutes(step, node, minute, last, columns[node]!, highestC[node]!);
 		}
+		this.fillStanding(standing, minute, last);
 	}
 
 	/** Fills what is left once the last leg has ended: at most its last instant. */
-	fillEnd(temps: Float64Array, standing: Standing): void {
-		const { minutes, columns } = this;
-		for (; this.next < minutes.count; this.next++) {
-			for (let node = 0; node < columns.length; node++) {
-				columns[node]![this.next] = temps[node]!;
-			}
-			this.fillStanding(this.next, standing);
+	takeEnd(temps: Float64Array, standing: Standing, minute: number): void {
+		const { columns, highestC, minutes } = this;
+		if (minute === minutes.count) return;
+		for (let node = 0; node < columns.length; node++) {
+			columns[node]!.fill(temps[node]!, minute, minutes.count);
+			highestC[node] = Math.max(highestC[node]!, temps[node]!);
 		}
-	}
-
-	/** The highest temperature of each node on the grid, and where the cells have theirs. */
-	findPeaks(): { peaks: NodeValues; peakMinute: number } {
-		const { nodes, count } = this.minutes;
-		const peaks = this.readRow((name) => findHighest(nodes[name]));
-		let peakMinute = 0;
-		for (let minute = 1; minute < count; minute++) {
-			if (nodes.cells[minute]! > nodes.cells[peakMinute]!) peakMinute = minute;
-		}
-		return { peaks, peakMinute };
+		this.fillStanding(standing, minute, minutes.count);
 	}
 
 	/** The start and every whole hour after it. */
 	readHours(): HourlyRow[] {
-		const { nodes, soc, count, startHour } = this.minutes;
+		const { soc, count, startHour } = this.minutes;
 		const rows: HourlyRow[] = [];
 		for (let minute = 0; minute < count; minute += MINUTES_PER_H) {
-			const hour = startHour + minute / MINUTES_PER_H;
-			rows.push({ hour, ...this.readRow((name) => nodes[name][minute]!), soc: soc[minute]! });
+			rows.push({
+				hour: startHour + minute / MINUTES_PER_H,
+				...this.readMinute(minute),
+				soc: soc[minute]!
+			});
 		}
 		return rows;
 	}
 
 	/** One value a node; null for a shield that is not there. */
 	readRow(read: (name: NodeName) => number): NodeValues {
-		return Object.fromEntries(
-			NODE_NAMES.map((name) => [name, name === 'shield' && !this.scenario.shield ? null : read(name)])
-		) as NodeValues;
+		const { shield } = this.scenario;
+		return {
+			engine: read('engine'),
+			exhaust: read('exhaust'),
+			bay: read('bay'),
+			bonnet: read('bonnet'),
+			enclosure: read('enclosure'),
+			shield: shield ? read('shield') : null,
+			tray: read('tray'),
+			case: read('case'),
+			cells: read('cells'),
+			board: read('board')
+		};
 	}
 
-	private fillStanding(minute: number, { span, spanStartS, bms }: Standing): void {
-		const afterS = minute * MINUTE_S - spanStartS;
-		this.minutes.soc[minute] = readSoc(span, afterS);
-		this.minutes.currentA[minute] = readCurrentA(span, afterS);
-		this.minutes.chargeOpen[minute] = Number(bms.isOpen('charge'));
-		this.minutes.dischargeOpen[minute] = Number(bms.isOpen('discharge'));
+	private readMinute(minute: number): NodeValues {
+		const { nodes } = this.minutes;
+		return this.readRow((name) => nodes[name][minute]!);
+	}
+
+	private fillStanding({ span, spanStartS, bms }: Standing, minute: number, last: number): void {
+		const { soc, currentA, chargeOpen, dischargeOpen } = this.minutes;
+		fillCharge(span, spanStartS, soc, currentA, minute, last);
+		if (bms.isOpen('charge')) chargeOpen.fill(1, minute, last);
+		if (bms.isOpen('discharge')) dischargeOpen.fill(1, minute, last);
 	}
 }

@@ -17,9 +17,28 @@ const fieldsOf = new Map<FieldGroup, ScenarioField[]>(
 	FIELD_GROUPS.map((group) => [group, SCENARIO_FIELDS.filter((field) => field.group === group)])
 );
 
+const defaultsOf = new Map<FieldGroup, Values>(
+	FIELD_GROUPS.map((group) => [
+		group,
+		Object.fromEntries(fieldsOf.get(group)!.map(({ key, default: value }) => [key, value]))
+	])
+);
+/** Groups that do without defaults in some field. */
+const hasRequired = new Set(
+	SCENARIO_FIELDS.filter((field) => field.default === null).map(({ group }) => group)
+);
+
 /** Groups that stand at the top of a scenario, in the order in which they are checked. */
 const TOP_GROUPS = FIELD_GROUPS.filter((group) => !group.includes('.') && group !== 'legs');
 const BMS_LIMITS = ['charge', 'discharge'] as const;
+
+/** Keys that may stand in a group: its fields, and in that of the BMS its limits. */
+const keysOf = new Map<FieldGroup, readonly string[]>(
+	FIELD_GROUPS.map((group) => [
+		group,
+		[...fieldsOf.get(group)!.map(({ key }) => key), ...(group === 'bms' ? BMS_LIMITS : [])]
+	])
+);
 
 function fail(code: ScenarioErrorCode, path: string, value: unknown, limit: string): never {
 	throw new ScenarioError({ code, path, value, limit });
@@ -53,22 +72,20 @@ export function describeRange(field: NumberField): string {
 }
 
 function parseNumber(field: NumberField, value: unknown, path: string): number {
-	const limit = describeRange(field);
-	if (value === undefined) {
-		if (field.default === null) fail('missing_field', path, value, limit);
-		return field.default;
-	}
-	if (typeof value !== 'number') fail('wrong_type', path, value, limit);
-	if (!Number.isFinite(value)) fail('not_finite', path, value, limit);
+	if (value === undefined) fail('missing_field', path, value, describeRange(field));
+	if (typeof value !== 'number') fail('wrong_type', path, value, describeRange(field));
+	if (!Number.isFinite(value)) fail('not_finite', path, value, describeRange(field));
 	const tooLow = field.minExclusive ? value <= field.min : value < field.min;
 	const tooHigh = field.maxExclusive ? value >= field.max : value > field.max;
-	if (tooLow || tooHigh) fail('out_of_range', path, value, limit);
+	if (tooLow || tooHigh) fail('out_of_range', path, value, describeRange(field));
 	return value;
 }
 
-function parseField(field: ScenarioField, value: unknown, path: string): unknown {
+/** Paths are put together only where something is wrong: a hundred fields are read for each scenario. */
+function parseField(field: ScenarioField, value: unknown, group: string): unknown {
+	if (value === undefined && field.default !== null) return field.default;
+	const path = `${group}.${field.key}`;
 	if (field.kind === 'number') return parseNumber(field, value, path);
-	if (value === undefined) return field.default;
 	if (field.kind === 'flag') {
 		if (typeof value !== 'boolean') fail('wrong_type', path, value, 'true or false');
 		return value;
@@ -79,19 +96,19 @@ function parseField(field: ScenarioField, value: unknown, path: string): unknown
 	return value;
 }
 
-function parseGroup(group: FieldGroup, input: unknown, path: string, nested: readonly string[] = []): Values {
+function parseGroup(group: FieldGroup, input: unknown, path: string): Values {
+	const parsed = { ...defaultsOf.get(group) };
+	if (input === undefined && !hasRequired.has(group)) return parsed;
 	const values = input === undefined ? {} : requireObject(input, path);
-	const fields = fieldsOf.get(group) ?? [];
-	requireKnownKeys(values, [...fields.map((field) => field.key), ...nested], `${path}.`);
-	const parsed: Values = {};
-	for (const field of fields) {
-		parsed[field.key] = parseField(field, ownValue(values, field.key), `${path}.${field.key}`);
+	requireKnownKeys(values, keysOf.get(group)!, `${path}.`);
+	for (const field of fieldsOf.get(group)!) {
+		parsed[field.key] = parseField(field, ownValue(values, field.key), path);
 	}
 	return parsed;
 }
 
 function parseBms(input: unknown): Values {
-	const parsed = parseGroup('bms', input, 'bms', BMS_LIMITS);
+	const parsed = parseGroup('bms', input, 'bms');
 	const values = (input ?? {}) as Values;
 	for (const side of BMS_LIMITS) {
 		parsed[side] = parseGroup(`bms.${side}`, ownValue(values, side), `bms.${side}`);

@@ -1,0 +1,134 @@
+import { INSTANTS, planSlots, SLOPE } from '../network/step-generator/slots';
+import { expOf } from '../solve/elementary';
+import type { ChargeSpan } from './charge';
+import { emptyDrive, findDrive, findFuelRegime, type Drive } from './leg-drive';
+import { DRIVEN, SUNLIT, type Setting } from './network-table';
+import { readSunShape, readSunSlopePerH } from './sun-shape';
+import { shapeVehicle } from './vehicle-shape';
+
+const S_PER_H = 3600;
+/** Two instants nearer than this are one, s. */
+const SAME_INSTANT_S = 1e-3;
+const KINK_HALVINGS = 40;
+
+type Reader = (typeof DRIVEN)[string];
+
+function readersOf(sunlit: boolean): Reader[] {
+	return Object.entries(DRIVEN).flatMap(([name, read]) => (SUNLIT.has(name) === sunlit ? [read] : []));
+}
+
+const BENT = readersOf(false);
+const LIT = readersOf(true);
+/** The places are the same with a shield and without. */
+const PLACES = planSlots(shapeVehicle(false)).driven;
+const FIRST_BENT = Math.min(...PLACES.bent.values());
+const FIRST_LIT = Math.min(...PLACES.lit.values());
+
+/**
+ * What the clock drives, for the instants at which a step looks.
+ *
+ * Within an hour of a leg the air's temperature is a straight line, and what follows from it bends so little that the
+ * parabola through both ends and the middle has it to a millionth; the sun is read from its own cubics, the current is in closed form.
+ */
+export class DriveClock {
+	/** What a generated step reads, in the places of its plan. */
+	readonly values = new Float64Array(PLACES.size);
+	/** Until when the parabolas hold, s. */
+	segmentEndS = 0;
+	private segmentStartS = 0;
+	private startHour = 0;
+	private setting!: Setting;
+	private span!: ChargeSpan;
+	private spanStartS = 0;
+	private isLit = false;
+	private readonly drive: Drive = emptyDrive();
+
+	/** From `timeS` on this leg runs. */
+	startLeg(setting: Setting, timeS: number): void {
+		this.setting = setting;
+		this.startHour = setting.scenario.start.hour;
+		this.drive.sunWPerM2 = setting.scenario.climate.sunPeak;
+		this.isLit = false;
+		for (let k = 0; k < LIT.length; k++) {
+			const peak = LIT[k]!(this.drive, setting.scenario);
+			this.values[FIRST_LIT + k] = peak;
+			if (peak !== 0) this.isLit = true;
+		}
+		this.segmentEndS = timeS;
+	}
+
+	/** From `startS` on this current flows. */
+	setSpan(span: ChargeSpan, startS: number): void {
+		this.span = span;
+		this.spanStartS = startS;
+	}
+
+	/** Works out the parabolas from `timeS` to the next whole hour, or to where the engine's load comes to its limits. */
+	enterSegment(timeS: number): void {
+		const { setting, drive, values, startHour } = this;
+		const hour = startHour + timeS / S_PER_H;
+		const wholeHour = Math.floor(hour + SAME_INSTANT_S / S_PER_H) + 1;
+		const endHour = this.findKink(hour, wholeHour);
+		this.segmentStartS = timeS;
+		this.segmentEndS = (endHour - startHour) * S_PER_H;
+		const length = this.segmentEndS - timeS;
+		const { scenario, leg, constants } = setting;
+		for (let point = 0; point < 3; point++) {
+			findDrive(scenario, leg, constants, hour + (point / 2) * (endHour - hour), drive);
+			for (let k = 0; k < BENT.length; k++) values[FIRST_BENT + 3 * k + point] = BENT[k]!(drive, scenario);
+		}
+		for (let at = FIRST_BENT; at < FIRST_BENT + 3 * BENT.length; at += 3) {
+			const start = values[at]!;
+			const middle = values[at + 1]!;
+			const end = values[at + 2]!;
+			values[at + 1] = (4 * middle - 3 * start - end) / length;
+			values[at + 2] = (2 * (start + end - 2 * middle)) / (length * length);
+		}
+	}
+
+	/** Where within the hour the fuel power comes to idle or to its rating; the end of the hour when nowhere. */
+	private findKink(fromHour: number, toHour: number): number {
+		const { scenario, leg, constants } = this.setting;
+		const regimeAt = (hour: number) => findFuelRegime(scenario, leg, constants, hour);
+		if (!leg.engineOn || constants.speedMPerS === 0) return toHour;
+		const regime = regimeAt(fromHour + SAME_INSTANT_S / S_PER_H);
+		if (regimeAt(toHour) === regime) return toHour;
+		let low = fromHour;
+		let high = toHour;
+		for (let halving = 0; halving < KINK_HALVINGS; halving++) {
+			const middle = (low + high) / 2;
+			if (regimeAt(middle) === regime) low = middle;
+			else high = middle;
+		}
+		return high;
+	}
+
+	/** Writes what holds at the start of a step. */
+	fillStart(timeS: number): void {
+		const { values, span, isLit } = this;
+		const hour = this.startHour + timeS / S_PER_H;
+		const { signal, current } = PLACES;
+		values[PLACES.elapsed] = timeS - this.segmentStartS;
+		values[signal] = isLit ? readSunShape(hour) : 0;
+		values[signal + SLOPE] = isLit ? readSunSlopePerH(hour) / S_PER_H : 0;
+		const currentA = this.currentAt(timeS);
+		values[current] = currentA;
+		values[current + SLOPE] = -span.decayPerS * currentA;
+	}
+
+	/** Writes what the stages of a step find at their instants. */
+	fillStages(timeS: number, lengthS: number): void {
+		const { values, isLit } = this;
+		const { signal, current } = PLACES;
+		for (let k = 1; k < INSTANTS.length; k++) {
+			const instantS = timeS + INSTANTS[k]! * lengthS;
+			values[signal + k] = isLit ? readSunShape(this.startHour + instantS / S_PER_H) : 0;
+			values[current + k] = this.currentAt(instantS);
+		}
+	}
+
+	private currentAt(timeS: number): number {
+		const { currentA, decayPerS } = this.span;
+		return decayPerS === 0 ? currentA : currentA * expOf(-decayPerS * (timeS - this.spanStartS));
+	}
+}
