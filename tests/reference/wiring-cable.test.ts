@@ -15,6 +15,7 @@ import {
 	type InsulationC
 } from '../../src/lib/thermal/wiring';
 import { checkAgainst } from './support/check-against';
+import { checkDescriptions } from './support/descriptions';
 import { readTable } from './support/reference-data';
 
 const ROUNDED = {
@@ -229,3 +230,5 @@ describe('short circuits', () => {
 		expect(() => shortCircuitWithstandS(16, 115, 0)).toThrow('currentA is 0');
 	});
 });
+
+checkDescriptions('wiring');
