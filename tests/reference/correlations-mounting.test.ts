@@ -12,10 +12,14 @@ import {
 	planeWallRoot,
 	planeWallShare,
 	seriesResistanceKPerW,
+	soakPeak,
 	sparkFreeDistanceMm,
+	timeToReach,
 	tractionAirFlowM3PerH,
 	tubeResistanceKPerW,
-	ventOpeningCm2
+	twoBodyTimeConstantsS,
+	ventOpeningCm2,
+	waveResponse
 } from '../../src/lib/thermal/correlations';
 
 const CELLS = { cells: 6, gassingMaPerAh: 8, capacityAh: 100 };
@@ -95,6 +99,35 @@ describe('a wall in a film', () => {
 	});
 });
 
+describe('lumped bodies', () => {
+	it('follow a slow wave wholly and a quick one not at all, a quarter of it late', () => {
+		expect(waveResponse(1, 1e6).height).toBeCloseTo(1, 9);
+		expect(waveResponse(1, 1e6).lag).toBeCloseTo(1, 6);
+		expect(waveResponse(1e6, 1).height).toBeLessThan(1e-6);
+		expect(waveResponse(1e6, 1).lag).toBeCloseTo(0.25, 6);
+	});
+
+	it('peak where body and surroundings meet: the body stops warming there', () => {
+		const soak = { surroundingsK: 40, surroundingsTime: 0.7, bodyK: 5, bodyTime: 3 };
+		const { excessK, time } = soakPeak(soak);
+		expect(excessK).toBeCloseTo(40 * Math.exp(-time / 0.7), 9);
+		expect(soakPeak({ ...soak, bodyTime: 0.1 }).excessK).toBeGreaterThan(excessK);
+		expect(soakPeak({ ...soak, bodyK: 50 })).toEqual({ excessK: 50, time: 0 });
+	});
+
+	it('have the time constants of one body when they hang together tightly, or hardly at all', () => {
+		expect(twoBodyTimeConstantsS([3000, 5000], 1e9, [1, 3])[0]).toBeCloseTo(2000, 3);
+		const [long, short] = twoBodyTimeConstantsS([3000, 5000], 1e-9, [1, 1]);
+		expect(long).toBeCloseTo(5000, 3);
+		expect(short).toBeCloseTo(3000, 3);
+	});
+
+	it('take as long to warm as to cool, and no time to stay', () => {
+		expect(timeToReach(2, 20, 50, 60)).toBeCloseTo(timeToReach(2, 60, 30, 20), 12);
+		expect(timeToReach(2, 20, 20, 60)).toBe(0);
+	});
+});
+
 describe('mounting outside its range', () => {
 	it.each([
 		['a battery without cells', () => hydrogenAirFlowM3PerH({ ...CELLS, cells: 0 }), 'cells', 0],
@@ -133,7 +166,17 @@ describe('mounting outside its range', () => {
 			() => planeWallShare({ biotNumber: 1, fourierNumber: 1, depthShare: 1.1 }),
 			'depthShare',
 			1.1
-		]
+		],
+		['a reset that the air never allows', () => timeToReach(4, 65, 55, 55), 'targetC', 55],
+		['a target away from the air', () => timeToReach(4, 65, 70, 40), 'targetC', 70],
+		['a wave without a period', () => waveResponse(4, 0), 'period', 0],
+		[
+			'a body that follows as its surroundings do',
+			() => soakPeak({ surroundingsK: 50, surroundingsTime: 2, bodyK: 0, bodyTime: 2 }),
+			'bodyTime',
+			2
+		],
+		['two bodies shut off from the air', () => twoBodyTimeConstantsS([1, 1], 1, [0, 0]), 'toAirWPerK', 0]
 	] as const)('is refused with name and value: %s', (_, run, input, value) => {
 		expect(run).toThrow(EngineInputError);
 		expect(run).toThrow(expect.objectContaining({ input, value }) as Error);

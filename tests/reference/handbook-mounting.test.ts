@@ -11,9 +11,13 @@ import {
 	planeWallRoot,
 	planeWallShare,
 	seriesResistanceKPerW,
+	soakPeak,
 	sparkFreeDistanceMm,
+	timeToReach,
 	tractionAirFlowM3PerH,
+	twoBodyTimeConstantsS,
 	ventOpeningCm2,
+	waveResponse,
 	type ChargeMode,
 	type GassingBattery
 } from '../../src/lib/thermal/correlations';
@@ -98,5 +102,21 @@ const CONDUCTION: Record<string, Formula> = {
 	'wall flux': (...wall: Wall) => wall[0] * (wallTempC(...wall, 1) - wall[6])
 };
 
+const LUMPED: Record<string, Formula> = {
+	time: timeToReach,
+	wave: (timeConstant: number, period: number, what: 'height' | 'lag') =>
+		waveResponse(timeConstant, period)[what],
+	soak: (
+		surroundingsK: number,
+		surroundingsTime: number,
+		bodyK: number,
+		bodyTime: number,
+		what: 'excessK' | 'time'
+	) => soakPeak({ surroundingsK, surroundingsTime, bodyK, bodyTime })[what],
+	'two bodies': (capacities: [number, number], between: number, toAir: [number, number], which: 0 | 1) =>
+		twoBodyTimeConstantsS(capacities, between, toAir)[which]
+};
+
 describe('fresh air for batteries against published values', () => checkCases('hydrogen', HYDROGEN));
 describe('conduction against published values', () => checkCases('conduction', CONDUCTION));
+describe('lumped bodies against closed forms', () => checkCases('lumped', LUMPED));

@@ -9,6 +9,7 @@ export * from './forced-convection';
 export * from './forced-plate';
 export * from './grey-enclosure';
 export * from './hydrogen';
+export * from './lumped-response';
 export { drynessLimitMm, yearlyMeanC } from './monthly-climate';
 export type { MonthlyClimate } from './monthly-climate';
 export * from './natural-convection';
