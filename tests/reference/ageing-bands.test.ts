@@ -166,8 +166,18 @@ describe('the band of a lithium iron phosphate pack', () => {
 		expect(later.map(({ model }) => model)).toEqual(['Naumann 2018 calendar', 'Swierczynski 2015 calendar']);
 	});
 
-	it('is silent about tests when all is within them', () => {
-		expect(lfpAgeingBand(STEADY, 1)[0]!.extrapolations).toEqual([]);
+	it('holds the cycle law at its gentlest tested rate for gentler ones', () => {
+		const losses = (cRate: number) =>
+			lfpAgeingBand({ ...UNDER_BONNET, cRate }, 1)[0]!.ways.map(({ loss }) => loss);
+		expect(losses(0.05)).toEqual(losses(0.2));
+		expect(losses(0.4)[0]!).toBeGreaterThan(losses(0.2)[0]!);
+	});
+
+	it('is silent about tests when all is within them, ends included', () => {
+		expect(lfpAgeingBand(STEADY, 2)[1]!.extrapolations).toEqual([]);
+		const high = { ...STEADY, year: steady(40), soc: 0.9, cRate: 2, depthOfDischarge: 1 };
+		const low = { ...STEADY, year: steady(25), soc: 0.1, cRate: 0.2 };
+		expect([high, low].flatMap((duty) => lfpAgeingBand(duty, 1)[0]!.extrapolations)).toEqual([]);
 	});
 
 	it('never leaves more than all or less than nothing', () => {

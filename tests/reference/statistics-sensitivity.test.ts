@@ -165,6 +165,14 @@ describe('a sensitivity plan', () => {
 		expect(readSensitivity(plan, values)).toEqual(estimateSensitivity(ishigami, options));
 	});
 
+	it('does not mind what is added to the model', () => {
+		const far = { dimensions: 3, pointsEach: 256, replicates: 4, seed: 2 };
+		const plain = estimateSensitivity(ishigami, far);
+		const lifted = estimateSensitivity((point) => ishigami(point) + 1000, far);
+		plain.firstOrder.forEach(({ value }, k) => expect(lifted.firstOrder[k]!.value).toBeCloseTo(value, 8));
+		plain.totalEffect.forEach(({ value }, k) => expect(lifted.totalEffect[k]!.value).toBeCloseTo(value, 8));
+	});
+
 	it('finds nothing where nothing varies', () => {
 		const result = estimateSensitivity(() => 7, options);
 		expect(result.variance).toEqual({ value: 0, standardError: 0 });

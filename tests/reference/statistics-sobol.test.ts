@@ -86,6 +86,15 @@ describe('scrambled points', () => {
 		}
 	});
 
+	it.each(readTable('sobol-points/scrambled.csv'))(
+		'have the digits that another language gives them: point $index, dimension $dimension, seed $seed',
+		({ index, dimension, seed, coordinate }) => {
+			expect(scrambledSobolCoordinate(Number(index), Number(dimension), Number(seed))).toBe(
+				Number(coordinate)
+			);
+		}
+	);
+
 	it('are others for another seed, and the same for the same', () => {
 		const first = SEEDS.map((seed) => scrambledSobolPoint(3, 40, seed));
 		expect(new Set(first.flat()).size).toBe(SEEDS.length * 40);
