@@ -60,6 +60,12 @@ function countMet(checks: ReportedCheck[]): string {
 	return `${checks.length} declared, ${met} met, ${checks.length - met} missed`;
 }
 
+/** Names that more than one check has: each stands for one value. */
+function listSharedNames(checks: ReportedCheck[]): string[] {
+	const names = checks.map(({ name }) => name);
+	return [...new Set(names.filter((name, at) => names.indexOf(name) !== at))];
+}
+
 function writeSummary({ checks, others, broken }: ReportContent): string[] {
 	const missed = checks.filter(({ met }) => !met);
 	return [
@@ -68,6 +74,7 @@ function writeSummary({ checks, others, broken }: ReportContent): string[] {
 			(standing) => `  ${standing}: ${countMet(checks.filter((check) => check.standing === standing))}`
 		),
 		...missed.map(({ name, source }) => `  missed: ${name} (${source})`),
+		...listSharedNames(checks).map((name) => `  a name that several checks share: ${name}`),
 		...broken.map(({ name, trouble }) => `  broken: ${name}: ${trouble}`),
 		...others.failed.map(({ name, trouble }) => `  failed, no published value: ${name}: ${trouble}`),
 		`Published values: ${countMet(checks)}.`,

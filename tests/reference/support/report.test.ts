@@ -58,6 +58,14 @@ describe('the report of the checks against published values', () => {
 		expect(report).toContain('read in the source: 2 declared, 1 met, 1 missed');
 	});
 
+	it('names a file that could not be run, and a name that two checks share', () => {
+		const broken = [{ name: 'a.test.ts', trouble: 'no such module' }];
+		const report = writeReport({ checks: [MET, MET], others: NOTHING_ELSE.others, broken });
+		expect(report).toContain('broken: a.test.ts: no such module');
+		expect(report).toContain('a name that several checks share: heat of a strip');
+		expect(report).toContain('Files that could not be run, and errors outside tests: 1.');
+	});
+
 	it('puts the checks of one source together, sources in the order of the alphabet', () => {
 		const elsewhere = { ...MET, source: 'A book before it' };
 		const report = writeReport({ checks: [MET, elsewhere, MISSED], ...NOTHING_ELSE });

@@ -51,7 +51,9 @@ export function gather(
 
 /** Prints what every check against a published value came to. The runner keeps the say over the exit code. */
 export default class PublishedValuesReporter implements Reporter {
-	onTestRunEnd(testModules: readonly TestModule[], unhandled: readonly SerializedError[]): void {
-		process.stdout.write(`\n${writeReport(gather(testModules, unhandled))}`);
+	/** Done when all of it is written: the runner ends the process afterwards, and a pipe takes its time. */
+	onTestRunEnd(testModules: readonly TestModule[], unhandled: readonly SerializedError[]): Promise<void> {
+		const report = `\n${writeReport(gather(testModules, unhandled))}`;
+		return new Promise((resolve) => process.stdout.write(report, () => resolve()));
 	}
 }

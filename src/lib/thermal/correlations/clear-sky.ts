@@ -9,7 +9,7 @@ import { EngineInputError, requirePositive, requireWithin } from './require';
  * @param dayOfYear n, 1 on the first of January
  * @returns irradiance, W/m²
  * @throws EngineInputError outside 1…366
- * Validity: any year, within 0.4 % of measurements (today's solar constant is 1361 W/m²).
+ * Validity: any year; today's solar constant of 1361 W/m² is 0.4 % lower.
  * Source: ASHRAE Handbook Fundamentals 2021, ch. 14, eq. 4.
  * @example
  * extraterrestrialWPerM2(21); // 1410

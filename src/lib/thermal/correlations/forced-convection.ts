@@ -64,7 +64,7 @@ export function nusseltCylinderBanded(re: number, pr: number, prSurface: number)
  * @returns mean Nu over the sphere
  * @throws EngineInputError outside 3.5 ≤ Re ≤ 7.6e4, 0.7 ≤ Pr ≤ 380 or 0.5 ≤ μ/μs ≤ 3.2
  * Validity: 3.5 ≤ Re ≤ 7.6e4, 0.71 ≤ Pr ≤ 380, 1 ≤ μ/μs ≤ 3.2 as published; a gas that meets a hot sphere lies a little
- *   below in Pr and in μ/μs, as in the handbook's own example 7.6, and is let pass down to 0.7 and 0.5. Within about 30 %.
+ *   below in Pr and in μ/μs, as in the handbook's own example 7.6, and is let pass down to 0.7 and 0.5. Within about 30 % (from memory).
  * Source: Incropera et al., 6th ed., eq. 7.56 (Whitaker 1972).
  * @example
  * nusseltSphere(6439, 0.708, 182.6e-7, 197.8e-7); // 47.13

@@ -12,7 +12,7 @@ export const CRITICAL_REYNOLDS = 5e5;
  * @param kinematicViscosityM2PerS ν at the film temperature, m²/s
  * @returns xc, m
  * @throws EngineInputError when a value is not finite and above zero
- * Validity: smooth plate, quiet flow; roughness and turbulence bring it forward to Re 1e5, great quiet delays it to 3e6.
+ * Validity: smooth plate, quiet flow; roughness and turbulence bring it forward to Re 1e5, great quiet delays it to 3e6 (from memory).
  * Source: Incropera, DeWitt, Bergman, Lavine, Fundamentals of Heat and Mass Transfer, 6th ed., ch. 6, critical Reynolds number.
  * @example
  * criticalPlateLengthM(30, 16.5e-6); // 0.275
@@ -72,7 +72,7 @@ export function nusseltPlateMixed(re: number, pr: number): number {
  * @param pr Prandtl number at the film temperature
  * @returns mean Nu over that length
  * @throws EngineInputError outside 0 < Re ≤ 5e5 or when Re·Pr is below 100
- * Validity: isothermal smooth plate, Re ≤ 5e5, Re·Pr ≥ 100; 2 % below the law for gases at Pr 0.7.
+ * Validity: isothermal smooth plate, Re ≤ 5e5, Re·Pr ≥ 100 (from memory); 2 % below the law for gases at Pr 0.7.
  * Source: Churchill and Ozoe, Journal of Heat Transfer 95 (1973) 416; Incropera et al., 6th ed., ch. 7.
  * @example
  * nusseltPlateLaminarAllPrandtl(1e5, 0.7); // 183.09
@@ -93,7 +93,7 @@ export function nusseltPlateLaminarAllPrandtl(re: number, pr: number): number {
  * @param pr Prandtl number at the film temperature
  * @returns mean Nu over that length
  * @throws EngineInputError outside 1e5 ≤ Re ≤ 1e7 or 0.6 ≤ Pr ≤ 2000
- * Validity: smooth plate with a tripped boundary layer, 1e5 ≤ Re ≤ 1e7 (from 5e5 for certain), 0.6 ≤ Pr ≤ 2000.
+ * Validity: smooth plate with a tripped boundary layer, 1e5 ≤ Re ≤ 1e7 (from 5e5 for certain), 0.6 ≤ Pr ≤ 2000 (limits from memory).
  * Source: Schlichting and Gersten, Grenzschicht-Theorie, 9th ed. 1997; VDI Heat Atlas, 2nd ed. 2010, G4.
  * @example
  * nusseltPlateTurbulent(1e5, 0.7); // 309.62
