@@ -6,16 +6,12 @@ import { thinCurves } from './curves';
 import { keepLedger } from './heat-ledger';
 import { countMissedCharge } from './missed-charge';
 import { findSpans, sumHours } from './spans';
-import type { Assessment, DoneAssessment, LegSpan, MountVerdict } from './types';
+import type { Assessment, DoneAssessment, LegSpan } from './types';
+import { judgeOutcome } from './verdict';
 
 type DoneRun = Extract<SimulationResult, { status: 'done' }>;
 
 const MINUTES_PER_H = 60;
-
-/** Less room than this below the cut-off is called close: engineering judgement, about what the coefficients can be off by. */
-export const CLOSE_HEADROOM_K = 5;
-/** Charge missed to heat counts from this share of the capacity. */
-export const MISSED_SHARE_THAT_COUNTS = 0.01;
 
 export interface AssessOptions {
 	/** What each leg is to people, in the order of the legs. */
@@ -32,12 +28,6 @@ function findPeakSensorC({ bms }: Scenario, { nodes, count }: MinuteSeries): num
 		for (let minute = 0; minute < count; minute++) peakC = Math.max(peakC, series[minute]!);
 	}
 	return peakC;
-}
-
-function judge(run: DoneRun, scenario: Scenario, headroomK: number, missedAh: number): MountVerdict {
-	if (run.report.events.some(({ side, kind }) => side === 'discharge' && kind === 'cut')) return 'cuts-out';
-	const missedChargeCounts = missedAh >= MISSED_SHARE_THAT_COUNTS * scenario.battery.capacityAh;
-	return headroomK < CLOSE_HEADROOM_K || missedChargeCounts ? 'runs-close' : 'rides-it-out';
 }
 
 function layOutLegs({ legs, start }: Scenario, kinds: AssessOptions['legKinds']): LegSpan[] {
@@ -83,7 +73,11 @@ function assessRun(scenario: Scenario, run: DoneRun, options: AssessOptions): Do
 	const { soc: endSoc, ...end } = report.end;
 	return {
 		status: 'done',
-		verdict: judge(run, scenario, headroomK, missed.chargeMissedAh),
+		verdict: judgeOutcome(scenario, {
+			cutsOut: spans.darkSpans.length > 0,
+			peakSensorC,
+			missedAh: missed.chargeMissedAh
+		}),
 		headroomK,
 		chargeHeadroomK: scenario.bms.charge.cut - peakSensorC,
 		...spans,

@@ -1,7 +1,3 @@
 export * from './types';
-export {
-	assessScenario,
-	CLOSE_HEADROOM_K,
-	MISSED_SHARE_THAT_COUNTS,
-	type AssessOptions
-} from './assess-scenario';
+export { assessScenario, type AssessOptions } from './assess-scenario';
+export { CLOSE_HEADROOM_K, judgeOutcome, MISSED_SHARE_THAT_COUNTS } from './verdict';

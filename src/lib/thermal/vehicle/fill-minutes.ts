@@ -9,6 +9,7 @@ const MINUTE_S = 60;
  * @param last one beyond the last
  * @param column where they go, one value a minute; null when only the highest is asked for
  * @param highest the highest so far
+ * @param offset place of the first of them in the column, when it is not the minute itself
  * @returns the highest now
  */
 export function fillMinutes(
@@ -17,7 +18,8 @@ export function fillMinutes(
 	minute: number,
 	last: number,
 	column: Float64Array | null,
-	highest: number
+	highest: number,
+	offset = minute
 ): number {
 	const share = (minute * MINUTE_S - step.timeS) / step.lengthS;
 	const apart = MINUTE_S / step.lengthS;
@@ -33,7 +35,7 @@ export function fillMinutes(
 	const third = -6 * inner3 * apart * apart * apart;
 	let high = highest;
 	for (let at = minute; at < last; at++) {
-		if (column !== null) column[at] = value;
+		if (column !== null) column[offset + at - minute] = value;
 		if (value > high) high = value;
 		value += first;
 		first += second;
