@@ -51,7 +51,8 @@ describe('climate classes', () => {
 		expect(climateClass({ meanC: year(20), rainMm: year(limit) })).toBe('Aw');
 		expect(climateClass({ meanC: year(20), rainMm: year(limit * 0.999) })).toBe('BSh');
 		expect(climateClass({ meanC: year(20), rainMm: year(limit * 0.499) })).toBe('BWh');
-		expect(climateClass({ meanC: year(17.9), rainMm: year(5) })).toBe('BWk');
+		expect(climateClass({ meanC: year(18), rainMm: year(5) })).toBe('BWh');
+		expect(climateClass({ meanC: year(17.99), rainMm: year(5) })).toBe('BWk');
 	});
 
 	it('mind in which half of the year the rain falls: dryness by 140 and 280 mm', () => {
@@ -102,6 +103,8 @@ describe('zones of the building codes', () => {
 		expect(buildingMoistureLetter(monsoon, 2010)).toBe('A');
 		expect(buildingMoistureLetter(monsoon, 2013)).toBe('B');
 		expect(buildingMoistureLetter({ meanC: swing(11, 6), rainMm: year(60) }, 2010)).toBe('C');
+		expect(buildingMoistureLetter({ meanC: [...year(12).slice(1), 21.9], rainMm: year(60) }, 2010)).toBe('C');
+		expect(buildingMoistureLetter({ meanC: [...year(12).slice(1), 22], rainMm: year(60) }, 2010)).toBe('A');
 		expect(buildingMoistureLetter({ meanC: swing(20, 9), rainMm: year(20) }, 2010)).toBe('B');
 	});
 

@@ -131,6 +131,7 @@ describe('lumped bodies', () => {
 describe('mounting outside its range', () => {
 	it.each([
 		['a battery without cells', () => hydrogenAirFlowM3PerH({ ...CELLS, cells: 0 }), 'cells', 0],
+		['more cells than a battery has', () => hydrogenAirFlowM3PerH({ ...CELLS, cells: 201 }), 'cells', 201],
 		[
 			'a current beyond all',
 			() => hydrogenAirFlowM3PerH({ ...CELLS, gassingMaPerAh: 101 }),
