@@ -4,6 +4,7 @@ import type { Derivation } from '../thermal/survey';
 import type { ScenarioInput } from '../thermal/types';
 import { assessmentResultSchema } from './assessment-result';
 import { batteryInputSchema } from './batteries';
+import { cableInputSchema } from './cables';
 import { dayPlanInputSchema } from './day-plans';
 import { idSchema } from './fields';
 import { hotDayFields, placeInputSchema } from './places';
@@ -31,6 +32,8 @@ export const assessmentInputsSchema = z.object({
 	mount: z.object({ letter: z.string(), name: z.string(), survey: surveyAnswersSchema }),
 	dayPlan: dayPlanInputSchema,
 	place: placeInputSchema,
+	/** The cable and fuse that were proposed for the mount; absent where nobody had said. */
+	cable: cableInputSchema.optional(),
 	/** The hot day that was planned for: the place's own figures unless the job changed them. */
 	hotDay: z.object(hotDayFields),
 	book: z.object({

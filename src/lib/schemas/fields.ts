@@ -2,7 +2,23 @@ import { z } from 'zod';
 
 /** Unit names that people may write and that stand beside a box; SI is what is stored. */
 export type MeasureUnit =
-	'mm' | 'm' | 'kg' | 'm²' | '°C' | 'K' | 'A' | 'Ah' | 'mΩ' | 's' | 'min' | 'km/h' | '%' | 'W/m²' | '°' | 'h';
+	| 'mm'
+	| 'm'
+	| 'kg'
+	| 'm²'
+	| 'mm²'
+	| '°C'
+	| 'K'
+	| 'A'
+	| 'Ah'
+	| 'mΩ'
+	| 's'
+	| 'min'
+	| 'km/h'
+	| '%'
+	| 'W/m²'
+	| '°'
+	| 'h';
 
 export interface FieldMeta {
 	label: string;

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { cableInputSchema } from './cables';
 import { versionSchema, words } from './fields';
 import { positionKindSchema, surveyAnswersSchema } from './survey';
 
@@ -24,6 +25,7 @@ export const mountSchema = mountInputSchema.extend({
 	letter: z.string(),
 	survey: surveyAnswersSchema,
 	surveyComplete: z.boolean(),
+	cable: cableInputSchema.nullable(),
 	version: versionSchema
 });
 export type MountView = z.infer<typeof mountSchema>;

@@ -23,6 +23,8 @@ export const RULES = {
 	'places.write': WORKSHOP,
 	'assessments.read': WORKSHOP,
 	'assessments.run': WORKSHOP,
+	'remedies.read': WORKSHOP,
+	'remedies.write': BENCH,
 	'recommendations.write': WORKSHOP,
 	'sheets.write': WORKSHOP,
 	'books.read': BENCH,

@@ -32,6 +32,8 @@ const EXPECTED: Record<Action, string> = {
 	'places.write': 'iem',
 	'assessments.read': 'iem',
 	'assessments.run': 'iem',
+	'remedies.read': 'iem',
+	'remedies.write': 'em',
 	'recommendations.write': 'iem',
 	'sheets.write': 'iem',
 	'books.read': 'em',

@@ -73,6 +73,7 @@ function measuredOf(
 			name: mount.name,
 			survey: { ...mount.survey, positionKind: mount.positionKind }
 		},
+		...(mount.cable ? { cable: mount.cable } : {}),
 		dayPlan: fieldsOf(dayPlanInputSchema, dayPlan!),
 		place: at,
 		hotDay: {

@@ -1,4 +1,5 @@
 import type { Transaction } from 'sequelize';
+import type { CableChange } from '$lib/schemas/cables';
 import { MAX_MOUNTS, type MountInput, type MountSurvey, type MountView } from '$lib/schemas/mounts';
 import type { SignedInPerson } from '$lib/schemas/people';
 import type { SurveyAnswers } from '$lib/schemas/survey';
@@ -117,6 +118,21 @@ export async function saveSurvey(
 		await saveVersioned(mount, 'survey', version, changes, transaction);
 		const subject = { type: 'mount', id: mount.id };
 		await recordBy(person, 'mount.surveyed', subject, transaction, { complete, survey: { ...survey } });
+		return presentMount(mount);
+	});
+}
+
+/** Keeps the cable and fuse that are proposed for a mount, or takes the proposal back. */
+export async function saveCable(
+	person: SignedInPerson,
+	mountId: number,
+	{ cable, version }: CableChange
+): Promise<MountView> {
+	allow(person, 'mounts.write');
+	return inTransaction(async (transaction) => {
+		const mount = await findStanding(person, mountId, transaction);
+		await saveVersioned(mount, 'cable', version, { cable }, transaction);
+		await recordBy(person, 'mount.cable', { type: 'mount', id: mount.id }, transaction, { cable });
 		return presentMount(mount);
 	});
 }

@@ -10,7 +10,7 @@ import { judgeOutcome } from './verdict';
 /** More than these together are not tried: the list grows fast, and nobody fits five. */
 export const MOST_TOGETHER = 4;
 /** What an hour of work counts as beside money, where the workshop has not said. */
-const MONEY_PER_HOUR = 100;
+export const USUAL_MONEY_PER_HOUR = 100;
 
 /** Less than this is no gain. */
 const LEAST_GAIN_K = 0.05;
@@ -63,6 +63,8 @@ export interface SearchOptions {
 	seed: number;
 	/** The chance that is still called riding it out. */
 	mostCutOutShare: number;
+	/** How many are tried together. */
+	together?: number;
 }
 
 type Offered = Remedy & { offered: boolean };
@@ -86,10 +88,10 @@ function goTogether(remedies: readonly Remedy[], next: Remedy): boolean {
 }
 
 /** Every set of up to so many that go together, the empty one left out. */
-function listSets(remedies: readonly Remedy[]): Remedy[][] {
+function listSets(remedies: readonly Remedy[], together: number): Remedy[][] {
 	let last: Remedy[][] = [[]];
 	const all: Remedy[][] = [];
-	for (let size = 1; size <= MOST_TOGETHER; size++) {
+	for (let size = 1; size <= together; size++) {
 		last = last.flatMap((set) => {
 			const from = set.length === 0 ? 0 : remedies.indexOf(set.at(-1)!) + 1;
 			return remedies
@@ -133,13 +135,13 @@ function findFront(sets: readonly RemedySet[], moneyPerHour: number): RemedySet[
 	return front;
 }
 
-function listNotTried(offered: readonly Offered[], scenario: Scenario): string[] {
+function listNotTried(offered: readonly Offered[], scenario: Scenario, together: number): string[] {
 	const withheld = offered.filter((remedy) => !remedy.offered).map(({ label }) => label);
 	const unfit = offered
 		.filter((remedy) => remedy.offered && !remedy.fits(scenario))
 		.map(({ label }) => label);
 	return [
-		`More than ${MOST_TOGETHER} together.`,
+		`More than ${together} together.`,
 		...(withheld.length > 0 ? [`What the workshop does not offer: ${withheld.join(', ')}.`] : []),
 		...(unfit.length > 0 ? [`What does not apply to this mount: ${unfit.join(', ')}.`] : []),
 		'Other positions: each is a mount of its own, beside this one.'
@@ -180,11 +182,14 @@ function* findCutOutShare(
  * step.value.least.keys.length; // 0
  */
 export function* searchRemedies(scenario: Scenario, options: SearchOptions): Generator<number, RemedySearch> {
-	const { offers, moneyPerHour = MONEY_PER_HOUR, mostCutOutShare } = options;
+	const { offers, moneyPerHour = USUAL_MONEY_PER_HOUR, mostCutOutShare, together = MOST_TOGETHER } = options;
 	const runner = new OutcomeRunner();
 	const bareC = runner.run(scenario).peakSensorC;
 	const offered = priceRemedies(offers);
-	const candidates = listSets(offered.filter((remedy) => remedy.offered && remedy.fits(scenario)));
+	const candidates = listSets(
+		offered.filter((remedy) => remedy.offered && remedy.fits(scenario)),
+		together
+	);
 	const asPlanned = runSet(scenario, [], runner, bareC);
 	const results = new Map<RemedySet, Remedy[]>([[asPlanned, []]]);
 	for (const [at, set] of candidates.entries()) {
@@ -212,7 +217,7 @@ export function* searchRemedies(scenario: Scenario, options: SearchOptions): Gen
 		least,
 		mostCutOutShare,
 		tried: candidates.length,
-		notTried: listNotTried(offered, scenario)
+		notTried: listNotTried(offered, scenario, together)
 	};
 }
 

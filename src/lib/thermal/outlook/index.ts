@@ -4,6 +4,7 @@ export { REMEDIES, type Remedy } from '../assess/remedies';
 export type { EnvelopePoint, SafeEnvelope } from '../assess/safe-envelope';
 export {
 	priceRemedies,
+	USUAL_MONEY_PER_HOUR,
 	type RemedyOffer,
 	type RemedySearch,
 	type RemedySet

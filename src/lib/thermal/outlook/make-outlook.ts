@@ -1,6 +1,11 @@
 import { expectLife, type ExpectedLife, type Wear } from '../assess/expected-life';
 import { findSafeEnvelope, type SafeEnvelope } from '../assess/safe-envelope';
-import { searchRemedies, type RemedyOffer, type RemedySearch } from '../assess/search-remedies';
+import {
+	MOST_TOGETHER,
+	searchRemedies,
+	type RemedyOffer,
+	type RemedySearch
+} from '../assess/search-remedies';
 import type { Scenario } from '../types';
 import { countCutOutDays, type CutOutDays, type TouringYear } from '../uncertainty/cut-out-days';
 import { rankInfluences, type Influences } from '../uncertainty/influence';
@@ -15,6 +20,8 @@ export interface OutlookEffort {
 	influencePoints: number;
 	influenceReplicates: number;
 	remedySamples: number;
+	/** How many remedies are tried together. */
+	remediesTogether: number;
 	envelopeSamples: number;
 }
 
@@ -25,6 +32,7 @@ export const FULL_EFFORT: OutlookEffort = {
 	influencePoints: 16,
 	influenceReplicates: 2,
 	remedySamples: 64,
+	remediesTogether: MOST_TOGETHER,
 	envelopeSamples: 16
 };
 
@@ -98,7 +106,7 @@ function* follow<T>(
  * @example
  * const scenario = defaultScenario([{ minutes: 60, engineOn: true }, { minutes: 60 }]);
  * const year = { months: Array(12).fill({ meanMaxC: 20, spreadK: 3 }), daysOnRoad: Array(12).fill(2) };
- * const effort = { daySamples: 16, yearSamples: 2, influencePoints: 2, influenceReplicates: 2, remedySamples: 2, envelopeSamples: 0 };
+ * const effort = { daySamples: 16, yearSamples: 2, influencePoints: 2, influenceReplicates: 2, remedySamples: 2, remediesTogether: 1, envelopeSamples: 0 };
  * const rest = { offers: [], moneyPerHour: 100, cable: null, hottestAirC: 50, seed: 1, effort, mostCutOutShare: 0.05 };
  * const work = makeOutlook({ scenario, year, wear: { law: 'none' }, ...rest });
  * let step = work.next();
@@ -133,6 +141,7 @@ export function* makeOutlook(request: OutlookRequest): Generator<OutlookProgress
 			offers: request.offers,
 			moneyPerHour: request.moneyPerHour,
 			samples: effort.remedySamples,
+			together: effort.remediesTogether,
 			seed,
 			mostCutOutShare: request.mostCutOutShare
 		}),

@@ -28,6 +28,11 @@ import { migration as m027 } from './027-acknowledgements-no-update';
 import { migration as m028 } from './028-acknowledgements-no-delete';
 import { migration as m029 } from './029-recommendations-no-update';
 import { migration as m030 } from './030-recommendations-no-delete';
+import { migration as m040 } from './040-assessment-outlooks';
+import { migration as m041 } from './041-assessment-outlooks-no-update';
+import { migration as m042 } from './042-assessment-outlooks-no-delete';
+import { migration as m043 } from './043-remedy-lists';
+import { migration as m044 } from './044-mounts-cable';
 import type { Migration } from '../migrate';
 
 /** Every migration, in the order in which they run; each is one DDL step that may run again. */
@@ -61,5 +66,10 @@ export const migrations: Migration[] = [
 	m027,
 	m028,
 	m029,
-	m030
+	m030,
+	m040,
+	m041,
+	m042,
+	m043,
+	m044
 ];

@@ -12,6 +12,7 @@ export const optionalNumber = { type: DataTypes.DOUBLE, allowNull: true } as con
 export const whole = { type: DataTypes.INTEGER.UNSIGNED, allowNull: false } as const;
 export const flag = { type: DataTypes.BOOLEAN, allowNull: false } as const;
 export const json = { type: DataTypes.JSON, allowNull: false } as const;
+export const optionalJson = { type: DataTypes.JSON, allowNull: true } as const;
 export const moment = { type: DataTypes.DATE(3), allowNull: false } as const;
 export const optionalMoment = { type: DataTypes.DATE(3), allowNull: true } as const;
 

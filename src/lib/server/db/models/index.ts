@@ -13,6 +13,8 @@ import { DayPlan, initDayPlan } from './day-plan';
 import { CoefficientBook, initCoefficientBook } from './coefficient-book';
 import { Coefficient, initCoefficient } from './coefficient';
 import { Assessment, initAssessment } from './assessment';
+import { AssessmentOutlook, initAssessmentOutlook } from './assessment-outlook';
+import { RemedyList, initRemedyList } from './remedy-list';
 import { Recommendation, initRecommendation } from './recommendation';
 import { Sheet, initSheet } from './sheet';
 import { Acknowledgement, initAcknowledgement } from './acknowledgement';
@@ -34,6 +36,8 @@ export {
 	CoefficientBook,
 	Coefficient,
 	Assessment,
+	AssessmentOutlook,
+	RemedyList,
 	Recommendation,
 	Sheet,
 	Acknowledgement,
@@ -56,6 +60,8 @@ const initialisers = [
 	initCoefficientBook,
 	initCoefficient,
 	initAssessment,
+	initAssessmentOutlook,
+	initRemedyList,
 	initRecommendation,
 	initSheet,
 	initAcknowledgement,

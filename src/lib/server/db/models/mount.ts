@@ -6,7 +6,8 @@ import {
 	type Sequelize
 } from 'sequelize';
 import type { PositionKind, SurveyAnswers } from '$lib/schemas/survey';
-import { edited, flag, id, json, moment, optionalMoment, reference, text, whole } from './base';
+import type { CableInput } from '$lib/schemas/cables';
+import { edited, flag, id, json, moment, optionalJson, optionalMoment, reference, text, whole } from './base';
 
 export class Mount extends Model<InferAttributes<Mount>, InferCreationAttributes<Mount>> {
 	declare id: CreationOptional<number>;
@@ -17,6 +18,8 @@ export class Mount extends Model<InferAttributes<Mount>, InferCreationAttributes
 	declare positionKind: PositionKind;
 	declare survey: SurveyAnswers;
 	declare surveyComplete: CreationOptional<boolean>;
+	/** Proposed cable and fuse; null when nobody has said. */
+	declare cable: CreationOptional<CableInput | null>;
 	declare removedAt: CreationOptional<Date | null>;
 	declare version: CreationOptional<number>;
 	declare createdAt: CreationOptional<Date>;
@@ -34,6 +37,7 @@ export function initMount(sequelize: Sequelize): void {
 			positionKind: text,
 			survey: json,
 			surveyComplete: { ...flag, defaultValue: false },
+			cable: optionalJson,
 			removedAt: optionalMoment,
 			version: { ...whole, defaultValue: 0 },
 			createdAt: moment,

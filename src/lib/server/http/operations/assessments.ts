@@ -6,6 +6,7 @@ import {
 	reproductionSchema
 } from '$lib/schemas/assessments';
 import { idSchema } from '$lib/schemas/fields';
+import { outlookSchema } from '$lib/schemas/outlooks';
 import { defineOperation } from '../operation';
 
 const params = z.object({ assessmentId: idSchema });
@@ -40,6 +41,17 @@ export const assessmentOperations = {
 		summary: 'Makes an assessment again from what was stored with it and compares every digit.',
 		params,
 		answer: reproductionSchema,
+		status: 200
+	}),
+	outlook: defineOperation({
+		id: 'getOutlook',
+		method: 'GET',
+		path: '/api/v1/assessments/[assessmentId]/outlook',
+		action: 'assessments.read',
+		summary:
+			'What an assessment says beside its number: spread, cut-out days a year, what to measure first, remedies, safe envelope, life, cable and fuse. Worked out at the first asking (some seconds) and kept.',
+		params,
+		answer: outlookSchema,
 		status: 200
 	}),
 	listOfJob: defineOperation({

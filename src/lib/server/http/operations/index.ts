@@ -8,6 +8,7 @@ import { jobOperations } from './jobs';
 import { mountOperations } from './mounts';
 import { placeOperations } from './places';
 import { recommendationOperations } from './recommendations';
+import { remedyOperations } from './remedies';
 import { sheetOperations } from './sheets';
 import { simulationOperations } from './simulations';
 import { vehicleOperations } from './vehicles';
@@ -25,5 +26,6 @@ export const OPERATIONS: readonly Operation[] = [
 	bookOperations,
 	assessmentOperations,
 	recommendationOperations,
+	remedyOperations,
 	simulationOperations
 ].flatMap((group) => Object.values(group) as unknown as Operation[]);

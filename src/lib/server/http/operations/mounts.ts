@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { cableChangeSchema } from '$lib/schemas/cables';
 import { idSchema } from '$lib/schemas/fields';
 import { mountInputSchema, mountSchema, mountSurveySchema } from '$lib/schemas/mounts';
 import { defineOperation } from '../operation';
@@ -66,6 +67,17 @@ export const mountOperations = {
 		summary: 'Saves the answers, if nobody changed them since they were read.',
 		params,
 		body: mountSurveySchema,
+		answer: mountSchema,
+		status: 200
+	}),
+	cable: defineOperation({
+		id: 'saveCable',
+		method: 'PUT',
+		path: '/api/v1/mounts/[mountId]/cable',
+		action: 'mounts.write',
+		summary: 'Keeps the cable and fuse that are proposed for a position; null takes the proposal back.',
+		params,
+		body: cableChangeSchema,
 		answer: mountSchema,
 		status: 200
 	})

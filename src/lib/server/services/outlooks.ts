@@ -1,0 +1,162 @@
+import { UniqueConstraintError } from 'sequelize';
+import type { AssessmentInputs } from '$lib/schemas/assessments';
+import type { Outlook } from '$lib/schemas/outlooks';
+import type { SignedInPerson } from '$lib/schemas/people';
+import { parseScenario } from '$lib/thermal';
+import {
+	FULL_EFFORT,
+	makeOutlook,
+	type OutlookEffort,
+	type OutlookProgress,
+	type OutlookRequest,
+	type TouringYear
+} from '$lib/thermal/outlook';
+import { estimateMonths } from '$lib/thermal/weather';
+import { Assessment, AssessmentOutlook } from '../db/models';
+import { notFound } from '../errors';
+import { allow } from '../policies';
+import { remedyListOf } from './remedy-lists';
+import { afterOthers, workInSlices } from './slices';
+
+/** One dark day in twenty is still called riding it out. */
+const MOST_CUT_OUT_SHARE = 0.05;
+const NOMINAL_V = 12.8;
+/** A drop that is usually accepted between battery and charger or loads: common practice. */
+const ACCEPTED_DROP = 0.04;
+const USUAL_DAYS_ON_ROAD = 4;
+
+/** Where the months of older assessments, which kept none, come from. */
+function touringOf(inputs: AssessmentInputs & { touring?: TouringYear }): TouringYear {
+	const { touring, place, hotDay } = inputs;
+	if (touring) return touring;
+	return {
+		months: estimateMonths({ latitudeDeg: place.latitudeDeg, hotDayMaxC: hotDay.hotDayMaxC }),
+		daysOnRoad: Array.from({ length: 12 }, () => USUAL_DAYS_ON_ROAD)
+	};
+}
+
+function cableOf({ cable, dayPlan }: AssessmentInputs): OutlookRequest['cable'] {
+	if (!cable) return null;
+	const { fuseRatedA, areaMm2, insulationC, laying, conductorLengthM } = cable;
+	const continuousA = Math.max(dayPlan.chargerMaxA, ...dayPlan.legs.map(({ loadA }) => loadA));
+	return {
+		...{ areaMm2, insulationC, laying, conductorLengthM, fuseRatedA, continuousA },
+		nominalV: NOMINAL_V,
+		acceptedDrop: ACCEPTED_DROP
+	};
+}
+
+async function requestFor(assessment: Assessment, effort: OutlookEffort): Promise<OutlookRequest> {
+	const { id, workshopId, inputs, result } = assessment;
+	const { moneyPerHour, offers } = await remedyListOf(workshopId);
+	return {
+		scenario: parseScenario(inputs.scenario),
+		year: touringOf(inputs),
+		wear: { law: inputs.battery.chemistry },
+		offers: offers.map(({ key, cost, hours, offered }) => ({ key, cost, hours, offered })),
+		moneyPerHour,
+		cable: cableOf(inputs),
+		hottestAirC: Math.max(...result.curves.airC),
+		// Any number does; the assessment's own gives the same digits each time.
+		seed: id,
+		effort,
+		mostCutOutShare: MOST_CUT_OUT_SHARE
+	};
+}
+
+interface Running {
+	done: Promise<Outlook>;
+	progress: OutlookProgress;
+	listeners: Set<(progress: OutlookProgress) => void>;
+}
+
+/** What is being worked out now, by assessment. */
+const running = new Map<number, Running>();
+
+async function store(assessment: Assessment, request: OutlookRequest, outlook: Outlook): Promise<Outlook> {
+	const { id: assessmentId, workshopId } = assessment;
+	const row = { workshopId, assessmentId, engineVersion: outlook.engineVersion, request, outlook };
+	try {
+		await AssessmentOutlook.create(row);
+		return outlook;
+	} catch (error) {
+		// Another process was first: what it kept counts.
+		if (!(error instanceof UniqueConstraintError)) throw error;
+		return (await AssessmentOutlook.findOne({ where: { assessmentId } }))!.outlook;
+	}
+}
+
+function begin(assessment: Assessment, effort: OutlookEffort): Running {
+	const work: Running = {
+		done: Promise.resolve(null as never),
+		progress: { part: 'day', share: 0 },
+		listeners: new Set()
+	};
+	work.done = afterOthers(async () => {
+		const request = await requestFor(assessment, effort);
+		const outlook = await workInSlices(makeOutlook(request), (progress) => {
+			work.progress = progress;
+			for (const tell of work.listeners) tell(progress);
+		});
+		return store(assessment, request, outlook);
+	}).finally(() => running.delete(assessment.id));
+	running.set(assessment.id, work);
+	return work;
+}
+
+/** The outlook of an assessment, if it has been worked out. */
+export async function findOutlook(assessmentId: number): Promise<Outlook | null> {
+	const row = await AssessmentOutlook.findOne({ where: { assessmentId } });
+	return row?.outlook ?? null;
+}
+
+/** The outlook of an assessment: what is kept, or worked out now and kept. Two who ask at once wait for the same work. */
+export async function ensureOutlook(assessment: Assessment, effort = FULL_EFFORT): Promise<Outlook> {
+	const kept = await findOutlook(assessment.id);
+	if (kept) return kept;
+	return (running.get(assessment.id) ?? begin(assessment, effort)).done;
+}
+
+async function findOwn(person: SignedInPerson, assessmentId: number): Promise<Assessment> {
+	const assessment = await Assessment.findOne({ where: { id: assessmentId, workshopId: person.workshopId } });
+	if (!assessment) throw notFound('assessment');
+	return assessment;
+}
+
+/** What an assessment says beside its number; worked out at the first asking, which takes some seconds. */
+export async function getOutlook(person: SignedInPerson, assessmentId: number): Promise<Outlook> {
+	allow(person, 'assessments.read');
+	return ensureOutlook(await findOwn(person, assessmentId));
+}
+
+/** What is kept, or null while it is worked out: begins the work, and does not wait for it. */
+export async function peekOutlook(
+	person: SignedInPerson,
+	assessmentId: number,
+	sayTrouble: (error: unknown) => void
+): Promise<Outlook | null> {
+	allow(person, 'assessments.read');
+	const assessment = await findOwn(person, assessmentId);
+	const kept = await findOutlook(assessment.id);
+	if (!kept && !running.has(assessment.id)) begin(assessment, FULL_EFFORT).done.catch(sayTrouble);
+	return kept;
+}
+
+/** Follows the work on an outlook to its end, beginning it when nobody has. */
+export async function followOutlook(
+	person: SignedInPerson,
+	assessmentId: number,
+	tell: (progress: OutlookProgress) => void
+): Promise<void> {
+	allow(person, 'assessments.read');
+	const assessment = await findOwn(person, assessmentId);
+	if (await findOutlook(assessment.id)) return;
+	const work = running.get(assessment.id) ?? begin(assessment, FULL_EFFORT);
+	tell(work.progress);
+	work.listeners.add(tell);
+	try {
+		await work.done;
+	} finally {
+		work.listeners.delete(tell);
+	}
+}
