@@ -1,6 +1,7 @@
 import { DAY_PLAN_TEMPLATES, type SurveyAnswers, type SurveyInputs } from '../../src/lib/thermal/survey';
 
 export const battery: SurveyInputs['battery'] = {
+	chemistry: 'lithium-iron-phosphate',
 	capacityAh: 100,
 	lengthMm: 330,
 	widthMm: 172,

@@ -3,6 +3,7 @@ import type { AssessmentInputs, AssessmentResult } from '$lib/schemas/assessment
 import type { SignedInPerson } from '$lib/schemas/people';
 import { ENGINE_VERSION } from '$lib/thermal';
 import { assessScenario } from '$lib/thermal/assess';
+import { heatLimitsOf } from '$lib/thermal/chemistries';
 import { Assessment, type Job, type Mount } from '../db/models';
 import { AppError } from '../errors';
 import { canonicalJson, sha256 } from '../hash';
@@ -13,9 +14,12 @@ import { updateJobOutcome } from './job-outcome';
 import { asInputError } from './simulations';
 
 /** Runs what went in; a run that cannot be finished is an error, so that nothing of it is stored. */
-export function runInputs({ scenario, dayPlan }: AssessmentInputs): AssessmentResult {
+export function runInputs({ scenario, dayPlan, battery }: AssessmentInputs): AssessmentResult {
 	try {
-		const answer = assessScenario(scenario, { legKinds: dayPlan.legs.map(({ kind }) => kind) });
+		const answer = assessScenario(scenario, {
+			legKinds: dayPlan.legs.map(({ kind }) => kind),
+			heatLimits: heatLimitsOf(battery)
+		});
 		if (answer.status === 'done') return answer;
 		throw new AppError(
 			'simulation_failed',

@@ -16,6 +16,7 @@ const leg = (kind: PlannedLeg['kind'], minutes: number, speedKmh: number): Plann
 export const DEFAULT_SAMPLE: SurveyInputs = {
 	vehicle: { massKg: 2400, dragAreaM2: 1.1, towMassKg: 0, towDragAreaM2: 0 },
 	battery: {
+		chemistry: 'lithium-iron-phosphate',
 		capacityAh: 100,
 		lengthMm: 330,
 		widthMm: 172,

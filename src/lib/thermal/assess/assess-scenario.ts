@@ -1,9 +1,11 @@
+import type { HeatLimits } from '../chemistries/guard';
 import type { MinuteSeries, Scenario, SimulationResult } from '../types';
 import { parseScenario } from '../vehicle/parse-scenario';
 import { runScenario } from '../vehicle/simulate';
 import { ENGINE_VERSION } from '../version';
 import { thinCurves } from './curves';
 import { keepLedger } from './heat-ledger';
+import { judgeHeat, weighHeat } from './heat-limits';
 import { countMissedCharge } from './missed-charge';
 import { findSpans, sumHours } from './spans';
 import type { Assessment, DoneAssessment, LegSpan } from './types';
@@ -16,6 +18,8 @@ const MINUTES_PER_H = 60;
 export interface AssessOptions {
 	/** What each leg is to people, in the order of the legs. */
 	legKinds?: readonly LegSpan['kind'][];
+	/** Of a battery that nothing switches off: it is judged by them, and the latches of the scenario are not asked. */
+	heatLimits?: HeatLimits | null;
 }
 
 /** Highest reading of what the BMS watches, on the grid of minutes, °C. */
@@ -62,6 +66,13 @@ function describeSpans(run: DoneRun, endHour: number) {
 	};
 }
 
+/** Where the battery goes dark and where it stops charging; without a BMS, where its maker draws the line. */
+function findCeilings({ bms }: Scenario, limits: AssessOptions['heatLimits']) {
+	return limits
+		? { useC: limits.highestUseC, chargeC: limits.highestChargeC }
+		: { useC: bms.discharge.cut, chargeC: bms.charge.cut };
+}
+
 function assessRun(scenario: Scenario, run: DoneRun, options: AssessOptions): DoneAssessment {
 	const { report, minutes } = run;
 	const legs = layOutLegs(scenario, options.legKinds);
@@ -69,17 +80,21 @@ function assessRun(scenario: Scenario, run: DoneRun, options: AssessOptions): Do
 	const spans = describeSpans(run, endHour);
 	const peakSensorC = findPeakSensorC(scenario, minutes);
 	const missed = countMissedCharge(scenario, minutes);
-	const headroomK = scenario.bms.discharge.cut - peakSensorC;
+	const ceilings = findCeilings(scenario, options.heatLimits);
+	const headroomK = ceilings.useC - peakSensorC;
+	const leadAcid = options.heatLimits ? weighHeat(scenario, minutes, options.heatLimits) : null;
 	const { soc: endSoc, ...end } = report.end;
 	return {
 		status: 'done',
-		verdict: judgeOutcome(scenario, {
-			cutsOut: spans.darkSpans.length > 0,
-			peakSensorC,
-			missedAh: missed.chargeMissedAh
-		}),
+		verdict: leadAcid
+			? judgeHeat(leadAcid, headroomK)
+			: judgeOutcome(scenario, {
+					cutsOut: spans.darkSpans.length > 0,
+					peakSensorC,
+					missedAh: missed.chargeMissedAh
+				}),
 		headroomK,
-		chargeHeadroomK: scenario.bms.charge.cut - peakSensorC,
+		chargeHeadroomK: ceilings.chargeC - peakSensorC,
 		...spans,
 		...missed,
 		peakCellsC: report.peakCellsC,
@@ -97,7 +112,8 @@ function assessRun(scenario: Scenario, run: DoneRun, options: AssessOptions): Do
 		energyMaxRelativeImbalance: report.energy.maxRelativeImbalance,
 		steps: report.steps,
 		evaluations: report.evaluations,
-		hourly: report.hourly
+		hourly: report.hourly,
+		...(leadAcid ? { leadAcid } : {})
 	};
 }
 
@@ -106,10 +122,10 @@ function assessRun(scenario: Scenario, run: DoneRun, options: AssessOptions): Do
  *
  * Cuts out: the discharge latch opened. Runs close: less than 5 K between the cut and the peak of what the BMS watches,
  * or charging stopped by heat for at least a hundredth of the capacity. Otherwise it rides the day out. The 5 K and the
- * hundredth are engineering judgement.
+ * hundredth are engineering judgement. A battery without a BMS is judged by its limits, as judgeHeat says.
  *
  * @param input a scenario as people or programs write it
- * @param options what the legs are to people
+ * @param options what the legs are to people; the limits of a battery that nothing switches off
  * @returns the assessment, or status `failed` with the reason when the run could not be finished
  * @throws ScenarioError when the input is not a possible scenario
  * Validity: as simulateScenario; one day, no spread of the inputs.

@@ -62,12 +62,37 @@ export interface AssessmentCurves {
 	soc: number[];
 }
 
+/** What a lead-acid battery, which nothing switches off, needs and bears on the day. */
+export interface LeadAcidFigures {
+	/** Highest temperatures at which it may be used and charged, by its maker. */
+	useLimitC: number;
+	chargeLimitC: number;
+	/** First minute on which the cells are above the limit of use; null when they never are. */
+	tooHotAtHour: number | null;
+	hoursAboveUseLimit: number;
+	/** How long it is charged above the limit of charging, h, and the hottest that it is charged at; null without charge. */
+	hoursAboveChargeLimit: number;
+	peakChargingC: number | null;
+	/** Whether its charger lowers its voltage as the battery warms. */
+	chargerCompensates: boolean;
+	/** What the charger should give at the hottest, and what it gives at 25 °C. */
+	compensatedChargeV: number;
+	uncompensatedChargeV: number;
+	/** Fresh air that carries its hydrogen away while it is charged; each of two openings; no sparks within this of its vents. */
+	freshAirM3PerH: number;
+	openingCm2: number;
+	sparkFreeMm: number;
+}
+
 export interface DoneAssessment {
 	status: 'done';
 	verdict: MountVerdict;
-	/** Discharge cut − peak of what the BMS watches, K; zero or less when it cuts out at once. */
+	/**
+	 * Discharge cut − peak of what the BMS watches, K; zero or less when it cuts out at once. Without a BMS: highest
+	 * temperature of use − peak of the cells.
+	 */
 	headroomK: number;
-	/** Charge cut − the same peak, K. */
+	/** Charge cut, or without a BMS the highest temperature of charging, − the same peak, K. */
 	chargeHeadroomK: number;
 	/** Clock hours run on past 24. */
 	cutAtHour: number | null;
@@ -98,6 +123,8 @@ export interface DoneAssessment {
 	steps: number;
 	evaluations: number;
 	hourly: HourlyRow[];
+	/** Of a lead-acid battery alone. */
+	leadAcid?: LeadAcidFigures;
 }
 
 /** A run that could not be finished says why. */

@@ -6,6 +6,13 @@ import { coefficientDefaults, parseScenario } from '../index';
 import { buildScenario } from './build-scenario';
 import { POSITION_KINDS, type SurveyAnswers, type SurveyInputs } from './types';
 
+const AGM: SurveyInputs['battery'] = {
+	...{ ...battery, chemistry: 'lead-acid-agm', massKg: 30, internalResistanceMohm: 5 },
+	...{ sensor: null, cutDelayS: null, autoReset: null },
+	...{ chargeCutC: null, chargeResetC: null, dischargeCutC: null, dischargeResetC: null },
+	...{ highestChargeC: 50, highestUseC: 60, ratedLifeYears: 6, compensatesCharge: true }
+};
+
 function build(survey: SurveyAnswers, changes: Partial<SurveyInputs> = {}): Scenario {
 	return parseScenario(buildScenario(inputsFor(survey, changes)).scenario);
 }
@@ -31,6 +38,30 @@ describe('a scenario from a survey', () => {
 		const { caseHeatCapacity, cellHeatCapacity, boardHeatCapacity } = build(hotSide).battery;
 		expect(caseHeatCapacity + cellHeatCapacity + boardHeatCapacity).toBeCloseTo(12.6 * 1100, 6);
 		expect(cellHeatCapacity / caseHeatCapacity).toBeCloseTo(11000 / 2500, 10);
+	});
+
+	it('sets the latches of a battery without a BMS where nothing reaches them, and says so', () => {
+		const built = buildScenario(inputsFor(hotSide, { battery: AGM }));
+		const { bms, battery: group, charger } = parseScenario(built.scenario);
+		expect(bms).toMatchObject({ charge: { cut: 1000, reset: 999 }, discharge: { cut: 1000, reset: 999 } });
+		expect(group).toMatchObject({ boardR: 0, r25: 0.005, activationK: 1000 });
+		expect(charger.taperSoc).toBe(0.8);
+		const cut = built.derivations.find(({ path }) => path === 'bms.discharge.cut');
+		expect(cut?.basis).toMatch(/no BMS.*nothing is ever cut off/);
+	});
+
+	it('gives lead-acid its own heat capacity, and its wet cells more contact with the case', () => {
+		const [dry, wet] = [build(hotSide), build(hotSide, { battery: AGM })];
+		const { caseHeatCapacity, cellHeatCapacity, boardHeatCapacity } = wet.battery;
+		expect(caseHeatCapacity + cellHeatCapacity + boardHeatCapacity).toBeCloseTo(30 * 780, 6);
+		expect(wet.battery.caseCellConductance).toBeCloseTo(2 * dry.battery.caseCellConductance, 10);
+	});
+
+	it('writes no value of the chemistry where it is the model’s own default', () => {
+		const paths = buildScenario(inputsFor(hotSide)).derivations.map(({ path }) => path);
+		expect(paths).not.toContain('battery.activationK');
+		expect(paths).not.toContain('charger.taperSoc');
+		expect(paths).not.toContain('battery.boardR');
 	});
 
 	it('takes the BMS limits from the data sheet as they are', () => {

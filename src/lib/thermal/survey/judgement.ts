@@ -144,6 +144,3 @@ export const ENCLOSURES: Record<'cabin' | 'cargo-area' | 'canopy-box', Enclosure
 };
 /** What vents or an open side add to the box's air exchange, W/K. */
 export const BOX_AIR_W_PER_K: Record<EnclosureAir, number> = { sealed: 0, vented: 15, open: 60 };
-
-/** A lithium iron phosphate pack as a whole, J/kgK: cells 1040 to 1130, case and busbars about the same. */
-export const PACK_SPECIFIC_HEAT_J_PER_KG_K = 1100;

@@ -1,4 +1,5 @@
-import type { ScenarioInput, Sensor, Surface } from '../types';
+import type { HeatFields } from '../chemistries/guard';
+import type { ScenarioInput, Surface } from '../types';
 
 /** Where a battery can be proposed. */
 export const POSITION_KINDS = ['under-bonnet', 'cabin', 'cargo-area', 'canopy-box', 'chassis-rail'] as const;
@@ -119,7 +120,7 @@ export interface SurveyedVehicle {
 	towDragAreaM2: number;
 }
 
-export interface SurveyedBattery {
+export interface SurveyedBattery extends HeatFields {
 	capacityAh: number;
 	lengthMm: number;
 	widthMm: number;
@@ -127,13 +128,6 @@ export interface SurveyedBattery {
 	massKg: number;
 	internalResistanceMohm: number;
 	maxChargeA: number;
-	sensor: Sensor;
-	chargeCutC: number;
-	chargeResetC: number;
-	dischargeCutC: number;
-	dischargeResetC: number;
-	cutDelayS: number;
-	autoReset: boolean;
 }
 
 export type PlannedLegKind = 'drive' | 'crawl' | 'stop' | 'camp';

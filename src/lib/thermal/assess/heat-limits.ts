@@ -1,0 +1,69 @@
+import { chargeVoltageV } from '../chemistries/charge-voltage';
+import { findGasNeeds } from '../chemistries/gas';
+import type { HeatLimits } from '../chemistries/guard';
+import type { MinuteSeries, Scenario } from '../types';
+import type { LeadAcidFigures, MountVerdict } from './types';
+import { CLOSE_HEADROOM_K } from './verdict';
+
+const MINUTES_PER_H = 60;
+const CHARGER_REFERENCE_C = 25;
+const NO_GAS = { freshAirM3PerH: 0, openingCm2: 0, sparkFreeMm: 0 };
+
+/** Minutes of the grid on which something holds; the last grid point has no minute after it. */
+function listMinutes({ count }: MinuteSeries, holds: (minute: number) => boolean): number[] {
+	const minutes: number[] = [];
+	for (let minute = 0; minute + 1 < count; minute++) if (holds(minute)) minutes.push(minute);
+	return minutes;
+}
+
+function findPeakC(cells: Float64Array, count: number): number {
+	let peakC = -Infinity;
+	for (let minute = 0; minute < count; minute++) peakC = Math.max(peakC, cells[minute]!);
+	return peakC;
+}
+
+/**
+ * What a day does to a battery that nothing switches off, and what it asks of its charger and its place.
+ *
+ * @param scenario the day as it was run
+ * @param minutes the run on the grid of minutes
+ * @param limits highest temperatures of use and charging, °C
+ * @returns hours above each limit, charging voltages, fresh air and openings
+ * @throws EngineInputError when the capacity is above 5000 Ah
+ * Validity: charging goes on at any temperature, as an alternator without a sensor does it.
+ * Source: as chargeVoltageV and findGasNeeds.
+ */
+export function weighHeat({ battery }: Scenario, minutes: MinuteSeries, limits: HeatLimits): LeadAcidFigures {
+	const { chemistry, highestUseC: useLimitC, highestChargeC: chargeLimitC } = limits;
+	const { cells } = minutes.nodes;
+	const tooHot = listMinutes(minutes, (minute) => cells[minute]! > useLimitC);
+	const charged = listMinutes(minutes, (minute) => minutes.currentA[minute]! > 0);
+	const chargedHot = charged.filter((minute) => cells[minute]! > chargeLimitC);
+	const [first] = tooHot;
+	const { freshAirM3PerH, openingCm2, sparkFreeMm } = findGasNeeds(chemistry, battery.capacityAh) ?? NO_GAS;
+	return {
+		...{ useLimitC, chargeLimitC },
+		tooHotAtHour: first === undefined ? null : minutes.startHour + first / MINUTES_PER_H,
+		hoursAboveUseLimit: tooHot.length / MINUTES_PER_H,
+		hoursAboveChargeLimit: chargedHot.length / MINUTES_PER_H,
+		peakChargingC: charged.length === 0 ? null : Math.max(...charged.map((minute) => cells[minute]!)),
+		chargerCompensates: limits.compensatesCharge,
+		compensatedChargeV: chargeVoltageV(chemistry, findPeakC(cells, minutes.count)),
+		uncompensatedChargeV: chargeVoltageV(chemistry, CHARGER_REFERENCE_C),
+		...{ freshAirM3PerH, openingCm2, sparkFreeMm }
+	};
+}
+
+/**
+ * The verdict on a battery that nothing switches off.
+ *
+ * The key of "cuts out": the cells pass the limit of use. Runs close: less than 5 K below it, or charged above the limit
+ * of charging. Otherwise it rides the day out.
+ */
+export function judgeHeat(
+	{ hoursAboveChargeLimit }: Pick<LeadAcidFigures, 'hoursAboveChargeLimit'>,
+	headroomK: number
+): MountVerdict {
+	if (headroomK < 0) return 'cuts-out';
+	return headroomK < CLOSE_HEADROOM_K || hoursAboveChargeLimit > 0 ? 'runs-close' : 'rides-it-out';
+}
