@@ -90,8 +90,10 @@ export function fifthRootOf(x: number): number {
 	return root * shrink;
 }
 
-/** Coefficients of (−1)^k / (2k + 1)!, from the ninth downwards. */
+/** (−1)^k / (2k + 1)! for k from 10 downwards. */
 const SINE_SERIES = Float64Array.of(
+	1 / 51090942171709440000,
+	-1 / 121645100408832000,
 	1 / 355687428096000,
 	-1 / 1307674368000,
 	1 / 6227020800,
@@ -109,9 +111,9 @@ const SINE_SERIES = Float64Array.of(
  *     sin x = Σ (−1)^k x^(2k+1) / (2k+1)!,  sin x = sin(π − x)
  *
  * @param x angle, rad, from 0 to π
- * @returns sin x to 1e-14
+ * @returns sin x to 1e-15
  * Validity: 0 ≤ x ≤ π; NaN outside.
- * Source: Taylor's series to the term of degree 17.
+ * Source: Taylor's series to the term of degree 21.
  * @example
  * sineOf(Math.PI / 6); // 0.5
  */
