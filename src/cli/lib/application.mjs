@@ -26,7 +26,7 @@ export function applicationEnv({ host, port, secrets, database, mail, dev = fals
 	return {
 		MAIL_FROM: 'Soakline <soakline@localhost>',
 		SOAKLINE_DEMO: '1',
-		BODY_SIZE_LIMIT: '2M',
+		BODY_SIZE_LIMIT: '6M',
 		SHUTDOWN_TIMEOUT: '4',
 		...given,
 		...database,

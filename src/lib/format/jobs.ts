@@ -14,6 +14,7 @@ const PART_WORDS: Record<AssessedPart, string> = {
 	battery: 'the battery',
 	place: 'the place',
 	'hot-day': 'the hot day',
+	touring: 'the months or the days on the road',
 	'day-plan': 'the day plan',
 	survey: 'the survey',
 	book: 'the coefficient book',

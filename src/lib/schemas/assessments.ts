@@ -2,12 +2,13 @@ import { z } from 'zod';
 import type { DoneAssessment } from '../thermal/assess';
 import type { Derivation } from '../thermal/survey';
 import type { ScenarioInput } from '../thermal/types';
+import type { TouringYear } from '../thermal/uncertainty/cut-out-days';
 import { assessmentResultSchema } from './assessment-result';
 import { batteryInputSchema } from './batteries';
 import { cableInputSchema } from './cables';
 import { dayPlanInputSchema } from './day-plans';
 import { idSchema } from './fields';
-import { hotDayFields, placeInputSchema } from './places';
+import { hotDayFields, placeSiteSchema } from './places';
 import { surveyAnswersSchema } from './survey';
 import { vehicleInputSchema } from './vehicles';
 import { VERDICTS } from './verdicts';
@@ -23,6 +24,16 @@ const derivationSchema = z.object({
 	basis: z.string().meta({ description: 'The formula with its numbers, and where it comes from' })
 }) satisfies z.ZodType<Derivation>;
 
+const oneYear = <S extends z.ZodType>(month: S) => z.array(month).length(12);
+
+/** The weather of a year and the days on the road in it, January to December. */
+export const touringSchema = z.object({
+	months: oneYear(z.object({ meanMaxC: z.number(), spreadK: z.number() })),
+	daysOnRoad: oneYear(z.number().int()),
+	basis: z.string().meta({ description: 'Where the months come from, in words' })
+}) satisfies z.ZodType<TouringYear>;
+export type Touring = z.infer<typeof touringSchema>;
+
 /** Everything that went into an assessment, as it was at that moment. */
 export const assessmentInputsSchema = z.object({
 	jobNumber: z.number().int(),
@@ -31,11 +42,12 @@ export const assessmentInputsSchema = z.object({
 	battery: batteryInputSchema,
 	mount: z.object({ letter: z.string(), name: z.string(), survey: surveyAnswersSchema }),
 	dayPlan: dayPlanInputSchema,
-	place: placeInputSchema,
+	place: placeSiteSchema,
 	/** The cable and fuse that were proposed for the mount; absent where nobody had said. */
 	cable: cableInputSchema.optional(),
 	/** The hot day that was planned for: the place's own figures unless the job changed them. */
 	hotDay: z.object(hotDayFields),
+	touring: touringSchema.optional().meta({ description: 'Not in assessments from before it was kept' }),
 	book: z.object({
 		number: z.number().int(),
 		name: z.string(),

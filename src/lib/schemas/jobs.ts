@@ -2,7 +2,16 @@ import { z } from 'zod';
 import { batterySchema } from './batteries';
 import { customerSchema } from './customers';
 import { dayPlanSchema } from './day-plans';
-import { editedSchema, idSchema, optionalEmail, optionalWords, versionSchema, words } from './fields';
+import {
+	editedSchema,
+	idSchema,
+	optionalEmail,
+	optionalWords,
+	versionSchema,
+	wholeNumber,
+	words
+} from './fields';
+import { monthList } from './months';
 import { mountSchema } from './mounts';
 import { CLIMATE_ZONES, hotDayFields, placeSchema } from './places';
 import { vehicleInputSchema, vehicleSchema } from './vehicles';
@@ -31,10 +40,21 @@ export const jobBatterySchema = z.object({
 	version: versionSchema
 });
 export type JobBattery = z.infer<typeof jobBatterySchema>;
+
+export const DAYS_ON_ROAD = 'Days on the road';
+/** Of a job that says nothing else: every second weekend. */
+export const USUAL_DAYS_ON_ROAD = 4;
+/** One month, or any month when no name is given. */
+export const daysOnRoadField = (month: string | null = null) =>
+	wholeNumber(month === null ? DAYS_ON_ROAD : `${month}, ${DAYS_ON_ROAD.toLowerCase()}`, 0, 31);
+
 /** The place and the hot day to plan for there; the place's own figures unless changed. */
 export const jobClimateSchema = z.object({
 	placeId: idSchema.meta({ label: 'Place' }),
 	...hotDayFields,
+	daysOnRoad: monthList(daysOnRoadField(), DAYS_ON_ROAD).meta({
+		description: `January to December; null for the usual ${USUAL_DAYS_ON_ROAD} each month`
+	}),
 	version: versionSchema
 });
 export type JobClimate = z.infer<typeof jobClimateSchema>;
@@ -92,7 +112,7 @@ export type JobPage = z.infer<typeof jobPageSchema>;
 
 /** What an assessment rests on, and what may have changed since. */
 export const ASSESSED_PARTS = [
-	...(['vehicle', 'battery', 'place', 'hot-day', 'day-plan', 'survey'] as const),
+	...(['vehicle', 'battery', 'place', 'hot-day', 'touring', 'day-plan', 'survey'] as const),
 	...(['book', 'engine'] as const)
 ] as const;
 export type AssessedPart = (typeof ASSESSED_PARTS)[number];
@@ -120,6 +140,7 @@ export const jobSchema = editedSchema.extend({
 	headroomK: z.number().nullable(),
 	note: z.string(),
 	createdAt: z.iso.datetime(),
+	daysOnRoad: z.array(z.number().int()).nullable(),
 	updatedAt: z.iso.datetime(),
 	mounts: z.array(mountSchema),
 	standings: z.array(mountStandingSchema),

@@ -24,6 +24,9 @@ export interface FieldProblem {
 	code?: string;
 	value?: unknown;
 	limit?: string;
+	/** In a file: counted from 1. */
+	line?: number;
+	column?: { number: number; name: string };
 }
 
 /** The one error that services throw when a request cannot be done as asked. */

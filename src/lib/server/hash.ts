@@ -1,8 +1,8 @@
-import { createHash, createHmac, randomBytes } from 'node:crypto';
+import { createHash, createHmac, randomBytes, timingSafeEqual } from 'node:crypto';
 import { env } from './env';
 
-export function sha256(text: string): string {
-	return createHash('sha256').update(text).digest('hex');
+export function sha256(content: string | Uint8Array): string {
+	return createHash('sha256').update(content).digest('hex');
 }
 
 /** 128 random bits, safe in an address. */
@@ -13,6 +13,15 @@ export function newToken(): string {
 /** What the database keeps of a token: useless without this installation's secret. */
 export function tokenHash(token: string): string {
 	return createHmac('sha256', env().SOAKLINE_SECRET).update(token).digest('hex');
+}
+
+/** Goes along with what a page sends back, so that it comes back as it was; `purpose` keeps one use apart from another. */
+export const sealOf = (purpose: string, text: string): string => tokenHash(`${purpose}\n${text}`);
+
+export function isSealed(purpose: string, text: string, seal: string): boolean {
+	const expected = Buffer.from(sealOf(purpose, text));
+	const given = Buffer.from(seal);
+	return expected.length === given.length && timingSafeEqual(expected, given);
 }
 
 /** JSON with sorted keys: the same value always gives the same text, whatever order it was made in. */

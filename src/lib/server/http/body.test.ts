@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { readBody } from './body';
+import { readBody, readFormData } from './body';
 
 function streamed(parts: Uint8Array[], headers: Record<string, string> = {}) {
 	let pulled = 0;
@@ -41,5 +41,29 @@ describe('readBody', () => {
 		const { request, pulled } = streamed(Array.from({ length: 100 }, () => new Uint8Array(600)));
 		await expect(readBody(request, 1024)).rejects.toMatchObject({ code: 'too_large' });
 		expect(pulled()).toBeLessThan(5);
+	});
+});
+
+describe('readFormData', () => {
+	const post = (form: FormData) => new Request('http://localhost/', { method: 'POST', body: form });
+
+	it('reads fields and files', async () => {
+		const sent = new FormData();
+		sent.set('version', '3');
+		sent.set('file', new File(['a,b\n1,2'], 'table.csv', { type: 'text/csv' }));
+		const form = await readFormData(post(sent));
+		const file = form.get('file') as File;
+		expect([form.get('version'), file.name, await file.text()]).toEqual(['3', 'table.csv', 'a,b\n1,2']);
+	});
+
+	it('refuses a form that is larger than a form may be', async () => {
+		const sent = new FormData();
+		sent.set('file', new File(['x'.repeat(3_000)], 'long.txt'));
+		await expect(readFormData(post(sent), 2_048)).rejects.toMatchObject({ code: 'too_large' });
+	});
+
+	it('says that what is no form is none', async () => {
+		const request = new Request('http://localhost/', { method: 'POST', body: 'hello' });
+		await expect(readFormData(request)).rejects.toMatchObject({ code: 'malformed_request', status: 400 });
 	});
 });

@@ -2,10 +2,12 @@ import type { RequestEvent } from '@sveltejs/kit';
 import type { z } from 'zod';
 import type { SignedInPerson } from '$lib/schemas/people';
 import { AppError } from '../errors';
+import { sha256 } from '../hash';
 import { allow } from '../policies';
 import { readBody } from './body';
+import { readSentFile, type SentFile } from './file-upload';
 import { answerOnce, type StoredAnswer } from './idempotency';
-import type { Operation } from './operation';
+import type { FileOperation, Operation } from './operation';
 import { problemResponse } from './problem';
 import { validate } from './validate';
 
@@ -39,6 +41,24 @@ function jsonResponse({ status, body }: StoredAnswer): Response {
 	});
 }
 
+/** Answers what the work gives; a repeat with the same key and the same question gets the first answer again. */
+async function answer(
+	{ request }: RequestEvent,
+	{ method, status }: Pick<Operation, 'method' | 'status'>,
+	{ personId, asked }: { personId: number; asked: unknown },
+	work: () => Promise<unknown>
+): Promise<Response> {
+	const respond = async (): Promise<StoredAnswer> => ({ status, body: JSON.stringify(await work()) });
+	const key = request.headers.get('idempotency-key');
+	if (method !== 'POST' || key === null) return jsonResponse(await respond());
+	return jsonResponse(await answerOnce({ personId, key, request: JSON.stringify(asked) }, respond));
+}
+
+const orProblem =
+	(handle: (event: RequestEvent) => Promise<Response>) =>
+	(event: RequestEvent): Promise<Response> =>
+		handle(event).catch((error: unknown) => problemResponse(error, event.locals.requestId));
+
 /** Guard, authorise, validate, do, present: the same steps for every endpoint, from its operation. */
 export function endpoint<
 	Params extends z.ZodObject,
@@ -49,26 +69,51 @@ export function endpoint<
 	operation: Operation<Params, Query, Body, Answer>,
 	handle: (call: Call<Params, Query, Body>) => Promise<z.input<Answer>>
 ): (event: RequestEvent) => Promise<Response> {
-	return async (event) => {
+	return orProblem(async (event) => {
 		const { locals, request, url } = event;
-		try {
-			const person = allow(locals.person, operation.action);
-			const params = operation.params ? validate(operation.params, event.params, 'not_found') : undefined;
-			const query = operation.query
-				? validate(operation.query, Object.fromEntries(url.searchParams))
-				: undefined;
-			const rawBody = operation.body ? await readJson(request) : undefined;
-			const body = operation.body ? validate(operation.body, rawBody) : undefined;
-			const work = async (): Promise<StoredAnswer> => {
-				const call = { person, params, query, body, event } as Call<Params, Query, Body>;
-				return { status: operation.status, body: JSON.stringify(await handle(call)) };
-			};
-			const key = request.headers.get('idempotency-key');
-			if (operation.method !== 'POST' || key === null) return jsonResponse(await work());
-			const asked = JSON.stringify([url.pathname, rawBody ?? null]);
-			return jsonResponse(await answerOnce({ personId: person.id, key, request: asked }, work));
-		} catch (error) {
-			return problemResponse(error, locals.requestId);
-		}
-	};
+		const person = allow(locals.person, operation.action);
+		const params = operation.params ? validate(operation.params, event.params, 'not_found') : undefined;
+		const query = operation.query
+			? validate(operation.query, Object.fromEntries(url.searchParams))
+			: undefined;
+		const rawBody = operation.body ? await readJson(request) : undefined;
+		const body = operation.body ? validate(operation.body, rawBody) : undefined;
+		const call = { person, params, query, body, event } as Call<Params, Query, Body>;
+		const asked = [url.pathname, rawBody ?? null];
+		return answer(event, operation, { personId: person.id, asked }, () => handle(call));
+	});
+}
+
+interface FileCall<Params extends z.ZodObject, Query extends z.ZodObject> {
+	person: SignedInPerson;
+	params: z.output<Params>;
+	query: z.output<Query>;
+	file: SentFile;
+}
+
+/**
+ * The same steps for an operation that takes a file. The record that it is for is looked up first: nobody's file is read
+ * for a record that is not theirs, and nothing is said of what is wrong with the question.
+ */
+export function fileEndpoint<Params extends z.ZodObject, Query extends z.ZodObject, Answer extends z.ZodType>(
+	operation: FileOperation<Params, Query, Answer>,
+	steps: {
+		find: (person: SignedInPerson, params: z.output<Params>) => Promise<unknown>;
+		/** What a file is called that came without a form. */
+		nameOf: (query: z.output<Query>) => string;
+		handle: (call: FileCall<Params, Query>) => Promise<z.input<Answer>>;
+	}
+): (event: RequestEvent) => Promise<Response> {
+	return orProblem(async (event) => {
+		const { locals, request, url } = event;
+		const person = allow(locals.person, operation.action);
+		const params = validate(operation.params, event.params, 'not_found');
+		await steps.find(person, params);
+		const query = validate(operation.query, Object.fromEntries(url.searchParams));
+		const file = await readSentFile(request, steps.nameOf(query), operation.mostFileBytes);
+		const asked = [url.pathname, url.search, file.name, sha256(file.bytes)];
+		return answer(event, operation, { personId: person.id, asked }, () =>
+			steps.handle({ person, params, query, file })
+		);
+	});
 }

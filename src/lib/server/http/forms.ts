@@ -7,7 +7,8 @@ import type { SignedInPerson } from '$lib/schemas/people';
 import { AppError } from '../errors';
 import { sha256 } from '../hash';
 import type { Action } from '../policies';
-import { guard } from './guard';
+import { readFormData } from './body';
+import { guard, orPageError } from './guard';
 import { answerOnce } from './idempotency';
 import { zod4 } from './zod-adapter';
 
@@ -55,7 +56,7 @@ export function refuseForm(form: PageForm, error: unknown) {
 }
 
 /** Does what a form asks once for the page that it stood on: a second press leads to what the first one made. */
-async function saveOnce(
+export async function saveOnce(
 	{ id: personId }: SignedInPerson,
 	{ url }: RequestEvent,
 	formData: FormData,
@@ -69,6 +70,20 @@ async function saveOnce(
 		body: await save()
 	}));
 	return answer.body;
+}
+
+/** What a page sent, read no further than a form may be long. */
+export const readPageForm = (request: Request): Promise<FormData> => orPageError(readFormData(request));
+
+/** A form as it was typed, with some boxes filled in; nothing is checked yet. */
+export async function fillForm<S extends z.ZodObject>(
+	formData: FormData,
+	schema: S,
+	filled: FormValues
+): Promise<PageForm> {
+	const options = { errors: false };
+	const form = (await superValidate(formData, zod4(formShape(schema)), options)) as unknown as PageForm;
+	return { ...form, data: { ...form.data, ...filled } };
 }
 
 /**
@@ -85,7 +100,7 @@ export async function saveForm<S extends z.ZodObject>(
 	}
 ) {
 	const person = guard(event, steps.action);
-	const formData = await event.request.formData();
+	const formData = await readPageForm(event.request);
 	const { form, data } = await readForm(formData, steps.schema);
 	if (data === null) return fail(422, { form });
 	const next = await saveOnce(person, event, formData, () => steps.save(person, data)).catch(

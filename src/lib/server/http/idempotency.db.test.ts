@@ -1,15 +1,16 @@
 import { describe, expect, it } from 'vitest';
 import { makeCrew, useTestDatabase } from '../../../../tests/support/services';
+import { placeInputSchema } from '$lib/schemas/places';
 import { Place } from '../db/models';
 import { createPlace } from '../services/places';
 import { answerOnce } from './idempotency';
 
 useTestDatabase();
 
-const PLACE = {
+const PLACE = placeInputSchema.parse({
 	...{ name: 'Gravel Pit', region: '', latitudeDeg: 0, longitudeDeg: 0, altitudeM: 0, climateZone: 'BWh' },
 	...{ hotDayMaxC: 40, dailyRangeK: 15, sunPeakWPerM2: 1000, source: 'Invented for this test' }
-};
+});
 
 describe('a request that is repeated with its key', () => {
 	it('makes one row out of fifty at once, and gives all of them the same answer', async () => {

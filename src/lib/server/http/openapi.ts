@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { FILE_FIELD, FILE_MEDIA } from './file-upload';
 import type { Operation } from './operation';
 
 const problemSchema = z.object({
@@ -14,7 +15,9 @@ const problemSchema = z.object({
 			message: z.string(),
 			code: z.string().optional(),
 			value: z.unknown().optional(),
-			limit: z.string().optional()
+			limit: z.string().optional(),
+			line: z.number().int().optional(),
+			column: z.object({ number: z.number().int(), name: z.string() }).optional()
 		})
 	)
 });
@@ -48,8 +51,26 @@ const IDEMPOTENCY_KEY = {
 	schema: { type: 'string', minLength: 1, maxLength: 120 }
 };
 
+/** A file, whole as the body or as the field "file" of a form. */
+function fileBody(mostBytes: number): JsonSchema {
+	const file = { type: 'string', maxLength: mostBytes, description: `At most ${mostBytes} bytes` };
+	const form = { type: 'object', required: [FILE_FIELD], properties: { [FILE_FIELD]: file } };
+	const plain = FILE_MEDIA.map((media) => [media, { schema: file }]);
+	return {
+		required: true,
+		content: { 'multipart/form-data': { schema: form }, ...Object.fromEntries(plain) }
+	};
+}
+
+function bodyOf({ body, mostFileBytes }: Operation): JsonSchema {
+	if (mostFileBytes !== undefined) return { requestBody: fileBody(mostFileBytes) };
+	if (!body) return {};
+	const content = { 'application/json': { schema: schemaOf(body, 'input') } };
+	return { requestBody: { required: true, content } };
+}
+
 function describe(operation: Operation): JsonSchema {
-	const { id, summary, params, query, body, answer, status, method } = operation;
+	const { id, summary, params, query, answer, status, method } = operation;
 	const problem = {
 		description: 'A problem, as in RFC 9457',
 		content: { 'application/problem+json': { schema: { $ref: '#/components/schemas/Problem' } } }
@@ -62,14 +83,7 @@ function describe(operation: Operation): JsonSchema {
 			...parametersOf('query', query),
 			...(method === 'POST' ? [IDEMPOTENCY_KEY] : [])
 		],
-		...(body
-			? {
-					requestBody: {
-						required: true,
-						content: { 'application/json': { schema: schemaOf(body, 'input') } }
-					}
-				}
-			: {}),
+		...bodyOf(operation),
 		responses: {
 			[status]: {
 				description: 'Done',

@@ -20,6 +20,8 @@ export interface Operation<
 	params?: Params;
 	query?: Query;
 	body?: Body;
+	/** Takes a file in the place of a JSON body, up to this size. */
+	mostFileBytes?: number;
 	answer: Answer;
 	/** Status of a good answer. */
 	status: 200 | 201;
@@ -31,5 +33,24 @@ export function defineOperation<
 	Body extends z.ZodType,
 	Answer extends z.ZodType
 >(operation: Operation<Params, Query, Body, Answer>): Operation<Params, Query, Body, Answer> {
+	return operation;
+}
+
+/** One that takes a file for a record. */
+export interface FileOperation<
+	Params extends z.ZodObject = z.ZodObject,
+	Query extends z.ZodObject = z.ZodObject,
+	Answer extends z.ZodType = z.ZodType
+> extends Operation<Params, Query, z.ZodType, Answer> {
+	params: Params;
+	query: Query;
+	mostFileBytes: number;
+}
+
+export function defineFileOperation<
+	Params extends z.ZodObject,
+	Query extends z.ZodObject,
+	Answer extends z.ZodType
+>(operation: FileOperation<Params, Query, Answer>): FileOperation<Params, Query, Answer> {
 	return operation;
 }

@@ -65,6 +65,7 @@ export function presentJob(
 		place: place ? presentPlace(place) : null,
 		hotDay: presentHotDay(job),
 		createdAt: job.createdAt.toISOString(),
+		daysOnRoad: job.daysOnRoad ?? null,
 		updatedAt: job.updatedAt.toISOString(),
 		mounts: mounts.map(presentMount),
 		standings,

@@ -6,6 +6,12 @@ export function presentPlace(place: Place): PlaceView {
 	const { hotDayMaxC, dailyRangeK, sunPeakWPerM2, source } = place;
 	return {
 		...{ id, version, name, region, latitudeDeg, longitudeDeg, altitudeM, climateZone },
-		...{ hotDayMaxC, dailyRangeK, sunPeakWPerM2, source }
+		...{ hotDayMaxC, dailyRangeK, sunPeakWPerM2, source },
+		// Of a record that was made just now the columns that nobody filled are not there yet.
+		monthlyMaxC: place.monthlyMaxC ?? null,
+		monthlySpreadK: place.monthlySpreadK ?? null,
+		monthsSource: place.monthsSource ?? null,
+		weatherFile: place.weatherFile ?? null,
+		canPutBack: Boolean(place.beforeWeather)
 	};
 }

@@ -3,13 +3,14 @@ import type { AssessmentInputs } from '$lib/schemas/assessments';
 import { batteryInputSchema } from '$lib/schemas/batteries';
 import type { BookView } from '$lib/schemas/books';
 import { dayPlanInputSchema } from '$lib/schemas/day-plans';
-import { placeInputSchema } from '$lib/schemas/places';
+import { placeSiteSchema } from '$lib/schemas/places';
 import { vehicleInputSchema } from '$lib/schemas/vehicles';
 import { buildScenario } from '$lib/thermal/survey';
 import { BatteryRecord, Customer, DayPlan, Place, Vehicle, type Job, type Mount } from '../db/models';
 import { AppError, notFound } from '../errors';
 import { coefficientsOf } from './books';
 import { asInputError } from './simulations';
+import { touringYearOf } from './touring-year';
 
 /** What a job must have before anything can be assessed, in the words that its page uses. */
 const PARTS = {
@@ -62,7 +63,7 @@ function measuredOf(
 	mount: Mount,
 	book: BookView
 ): Omit<AssessmentInputs, 'scenario' | 'derivations' | 'assumptions'> {
-	const at = fieldsOf(placeInputSchema, place!);
+	const at = fieldsOf(placeSiteSchema, place!);
 	return {
 		jobNumber: job.number,
 		customerName: customer.name,
@@ -81,6 +82,7 @@ function measuredOf(
 			dailyRangeK: job.dailyRangeK ?? at.dailyRangeK,
 			sunPeakWPerM2: job.sunPeakWPerM2 ?? at.sunPeakWPerM2
 		},
+		touring: touringYearOf({ job, place: place! }),
 		book: { number: book.number, name: book.name, coefficients: coefficientsOf(book) }
 	};
 }

@@ -11,6 +11,8 @@ import { BATTERY, PLACE, newJob } from '../../../../tests/support/records';
 useTestDatabase();
 
 const query = (asked: Record<string, unknown> = {}): JobQuery => jobQuerySchema.parse(asked);
+/** Eight days of each month on the road. */
+const WEEKENDS = Array<number>(12).fill(8);
 const HOT_DAY = { hotDayMaxC: 44, dailyRangeK: 15, sunPeakWPerM2: 1020 };
 
 async function writeOutcome(jobId: number, verdict: string, headroomK: number): Promise<void> {
@@ -86,20 +88,26 @@ describe('a new job', () => {
 });
 
 describe('another job on a known vehicle', () => {
-	it('has the same customer and vehicle, and begins with the battery and hot day of the last', async () => {
+	it('has the same customer and vehicle, and begins with the battery, the hot day and the days on the road of the last', async () => {
 		const { installer } = await makeCrew();
 		const battery = await createBattery(installer, BATTERY);
 		const place = await createPlace(installer, PLACE);
 		const first = await createJob(installer, newJob());
 		const second = await setJobBattery(installer, first.id, { batteryRecordId: battery.id, version: 0 });
 		const { version } = second;
-		await setJobClimate(installer, first.id, { placeId: place.id, ...HOT_DAY, version });
+		await setJobClimate(installer, first.id, {
+			placeId: place.id,
+			...HOT_DAY,
+			daysOnRoad: WEEKENDS,
+			version
+		});
 		const again = await repeatJob(installer, { vehicleId: first.vehicle.id, note: 'Second tray' });
 		expect(again.number).toBe(2);
 		expect(again.customer).toEqual(first.customer);
 		expect(again.vehicle).toEqual(first.vehicle);
 		expect(again.battery?.id).toBe(battery.id);
 		expect(again.hotDay).toEqual(HOT_DAY);
+		expect(again.daysOnRoad).toEqual(WEEKENDS);
 		expect(again.note).toBe('Second tray');
 	});
 
@@ -118,7 +126,7 @@ describe('the battery and the hot day of a job', () => {
 		const battery = await createBattery(installer, BATTERY);
 		const place = await createPlace(installer, PLACE);
 		const { id, version } = await createJob(installer, newJob());
-		await setJobClimate(engineer, id, { placeId: place.id, ...HOT_DAY, version });
+		await setJobClimate(engineer, id, { placeId: place.id, ...HOT_DAY, daysOnRoad: null, version });
 		const late = setJobBattery(installer, id, { batteryRecordId: battery.id, version });
 		await expect(late).rejects.toMatchObject({ code: 'changed_meanwhile' });
 		const job = await getJob(installer, id);
@@ -134,7 +142,7 @@ describe('the battery and the hot day of a job', () => {
 			setJobBattery(ours.installer, id, { batteryRecordId: battery.id, version })
 		).rejects.toMatchObject({ problems: [{ path: 'batteryRecordId' }] });
 		await expect(
-			setJobClimate(ours.installer, id, { placeId: place.id, ...HOT_DAY, version })
+			setJobClimate(ours.installer, id, { placeId: place.id, ...HOT_DAY, daysOnRoad: null, version })
 		).rejects.toMatchObject({ problems: [{ path: 'placeId' }] });
 	});
 });
@@ -173,7 +181,12 @@ describe('the list of jobs', () => {
 		const crew = await makeCrew();
 		const [first, second] = await makeJobs(crew, ['Ana', 'Ben', 'Cleo']);
 		const place = await createPlace(crew.installer, PLACE);
-		await setJobClimate(crew.installer, first!, { placeId: place.id, ...HOT_DAY, version: 0 });
+		await setJobClimate(crew.installer, first!, {
+			placeId: place.id,
+			...HOT_DAY,
+			daysOnRoad: null,
+			version: 0
+		});
 		await writeOutcome(second!, 'cuts-out', -3);
 		const count = async (asked: Record<string, unknown>) =>
 			(await listJobs(crew.installer, query({ ...asked, limit: 1 }))).total;

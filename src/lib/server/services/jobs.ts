@@ -79,11 +79,11 @@ export async function createJob(person: SignedInPerson, input: NewJob): Promise<
 
 function keptFrom(before: Job | null) {
 	if (!before) return {};
-	const { batteryRecordId, placeId, hotDayMaxC, dailyRangeK, sunPeakWPerM2 } = before;
-	return { batteryRecordId, placeId, hotDayMaxC, dailyRangeK, sunPeakWPerM2 };
+	const { batteryRecordId, placeId, hotDayMaxC, dailyRangeK, sunPeakWPerM2, daysOnRoad } = before;
+	return { batteryRecordId, placeId, hotDayMaxC, dailyRangeK, sunPeakWPerM2, daysOnRoad };
 }
 
-/** Another job on a known vehicle begins with the battery and the hot day of the one before. */
+/** Another job on a known vehicle begins with the battery, the hot day and the days on the road of the one before. */
 export async function repeatJob(person: SignedInPerson, { vehicleId, note }: RepeatJob): Promise<JobView> {
 	allow(person, 'jobs.write');
 	const { workshopId } = person;

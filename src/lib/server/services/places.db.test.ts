@@ -1,10 +1,11 @@
 import { describe, expect, it } from 'vitest';
 import { makeCrew, useTestDatabase } from '../../../../tests/support/services';
+import { placeInputSchema } from '$lib/schemas/places';
 import { createPlace, getPlace, listPlaces, updatePlace } from './places';
 
 useTestDatabase();
 
-const PLACE = {
+const PLACE = placeInputSchema.parse({
 	...{
 		name: 'Salt Lake',
 		region: 'North',
@@ -14,7 +15,7 @@ const PLACE = {
 		climateZone: 'BWh'
 	},
 	...{ hotDayMaxC: 44.5, dailyRangeK: 16, sunPeakWPerM2: 1050, source: 'Invented for this test' }
-};
+});
 
 describe('places', () => {
 	it('come back as they were entered, in order of their names', async () => {

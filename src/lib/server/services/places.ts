@@ -3,6 +3,7 @@ import type { SignedInPerson } from '$lib/schemas/people';
 import { Place } from '../db/models';
 import { inTransaction } from '../db/transaction';
 import { notFound } from '../errors';
+import { canonicalJson } from '../hash';
 import { allow } from '../policies';
 import { presentPlace } from '../presenters/places';
 import { recordBy } from './audit';
@@ -38,6 +39,14 @@ export async function createPlace(person: SignedInPerson, input: PlaceInput): Pr
 	);
 }
 
+const MONTHS_FIELDS = ['monthlyMaxC', 'monthlySpreadK', 'monthsSource'] as const;
+
+/** Months that somebody typed over are no longer the weather file's; and what it replaced is not put back any more. */
+function weatherMarkAfter(place: Place, input: PlaceInput): Pick<Place, 'weatherFile' | 'beforeWeather'> {
+	const isKept = MONTHS_FIELDS.every((field) => canonicalJson(place[field]) === canonicalJson(input[field]));
+	return { weatherFile: isKept ? place.weatherFile : null, beforeWeather: null };
+}
+
 export async function updatePlace(
 	person: SignedInPerson,
 	placeId: number,
@@ -51,7 +60,8 @@ export async function updatePlace(
 				transaction
 			});
 			if (!place) throw notFound('place');
-			await saveVersioned(place, 'place', version, input, transaction);
+			const changes = { ...input, ...weatherMarkAfter(place, input) };
+			await saveVersioned(place, 'place', version, changes, transaction);
 			await recordBy(person, 'place.changed', { type: 'place', id: place.id }, transaction, { ...input });
 			return presentPlace(place);
 		})

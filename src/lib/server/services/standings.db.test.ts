@@ -56,7 +56,13 @@ describe('what changed since the last assessment', () => {
 		const { installer } = await makeCrew();
 		const { jobId, hotId, coolId } = await assessed(installer);
 		const { version, place, hotDay } = await getJob(installer, jobId);
-		await setJobClimate(installer, jobId, { placeId: place!.id, ...hotDay!, hotDayMaxC: 31, version });
+		await setJobClimate(installer, jobId, {
+			placeId: place!.id,
+			...hotDay!,
+			hotDayMaxC: 31,
+			daysOnRoad: null,
+			version
+		});
 		expect(await changedParts(installer, jobId)).toEqual({ [hotId]: ['hot-day'], [coolId]: ['hot-day'] });
 		await assessJob(installer, jobId);
 		expect(await changedParts(installer, jobId)).toEqual({ [hotId]: [], [coolId]: [] });

@@ -9,6 +9,7 @@ import { ENGINE_VERSION } from '$lib/thermal';
 import { Assessment, CoefficientBook, type DayPlan, type Job, type Mount } from '../db/models';
 import { canonicalJson } from '../hash';
 import { presentHotDay, presentStanding } from '../presenters/jobs';
+import { touringYearOf } from './touring-year';
 
 /** What the job is now, in the parts that an assessment keeps. */
 interface Now {
@@ -21,8 +22,9 @@ interface Part {
 	part: AssessedPart;
 	/** The fields that make a difference. */
 	fields: readonly string[];
-	then: (inputs: AssessmentInputs) => object;
-	now: (now: Now) => object | null | undefined;
+	then: (inputs: AssessmentInputs) => object | undefined;
+	/** Beside what an older assessment did not keep there is nothing to compare. */
+	now: (now: Now, then: AssessmentInputs) => object | null | undefined;
 }
 
 const PARTS: readonly Part[] = [
@@ -51,6 +53,12 @@ const PARTS: readonly Part[] = [
 		now: ({ job }) => presentHotDay(job)
 	},
 	{
+		part: 'touring',
+		fields: ['months', 'daysOnRoad'],
+		then: (inputs) => inputs.touring,
+		now: ({ job }, { touring }) => touring && job.place && touringYearOf({ job, place: job.place })
+	},
+	{
 		part: 'day-plan',
 		fields: Object.keys(dayPlanInputSchema.shape).filter((field) => field !== 'name'),
 		then: (inputs) => inputs.dayPlan,
@@ -74,7 +82,7 @@ function pick(from: object | null | undefined, fields: readonly string[]): unkno
 export function partsChangedSince(inputs: AssessmentInputs, now: Now): AssessedPart[] {
 	return PARTS.filter(
 		({ fields, then, now: partNow }) =>
-			canonicalJson(pick(then(inputs), fields)) !== canonicalJson(pick(partNow(now), fields))
+			canonicalJson(pick(then(inputs), fields)) !== canonicalJson(pick(partNow(now, inputs), fields))
 	).map(({ part }) => part);
 }
 

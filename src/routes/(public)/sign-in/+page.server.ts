@@ -5,7 +5,7 @@ import { signInLinkSchema, signInSchema } from '$lib/schemas/people';
 import { mailSignInLink } from '$lib/server/auth/mailed-link';
 import { safeReturnPath, signInWith } from '$lib/server/auth/sign-in';
 import { env } from '$lib/server/env';
-import { loadForm, readForm, refuseForm } from '$lib/server/http/forms';
+import { loadForm, readForm, readPageForm, refuseForm } from '$lib/server/http/forms';
 import type { Actions, PageServerLoad } from './$types';
 
 export const load: PageServerLoad = async ({ locals, url }) => {
@@ -19,7 +19,7 @@ export const load: PageServerLoad = async ({ locals, url }) => {
 
 export const actions: Actions = {
 	password: async (event) => {
-		const { form, data } = await readForm(await event.request.clone().formData(), signInSchema);
+		const { form, data } = await readForm(await readPageForm(event.request.clone()), signInSchema);
 		form.id = 'password';
 		form.data.password = '';
 		if (data === null) return fail(422, { form });
@@ -28,7 +28,7 @@ export const actions: Actions = {
 		return message(form, refusal, { status: 401 });
 	},
 	link: async (event) => {
-		const { form, data } = await readForm(await event.request.clone().formData(), signInLinkSchema);
+		const { form, data } = await readForm(await readPageForm(event.request.clone()), signInLinkSchema);
 		form.id = 'link';
 		if (data === null) return fail(422, { form });
 		try {

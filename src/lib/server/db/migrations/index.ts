@@ -28,6 +28,9 @@ import { migration as m027 } from './027-acknowledgements-no-update';
 import { migration as m028 } from './028-acknowledgements-no-delete';
 import { migration as m029 } from './029-recommendations-no-update';
 import { migration as m030 } from './030-recommendations-no-delete';
+import { migration as m031 } from './031-places-months';
+import { migration as m032 } from './032-places-weather-file';
+import { migration as m033 } from './033-jobs-days-on-road';
 import { migration as m040 } from './040-assessment-outlooks';
 import { migration as m041 } from './041-assessment-outlooks-no-update';
 import { migration as m042 } from './042-assessment-outlooks-no-delete';
@@ -70,6 +73,9 @@ export const migrations: Migration[] = [
 	m040,
 	m041,
 	m042,
+	m031,
+	m032,
+	m033,
 	m043,
 	m044
 ];

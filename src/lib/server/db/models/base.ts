@@ -11,6 +11,7 @@ export const number = { type: DataTypes.DOUBLE, allowNull: false } as const;
 export const optionalNumber = { type: DataTypes.DOUBLE, allowNull: true } as const;
 export const whole = { type: DataTypes.INTEGER.UNSIGNED, allowNull: false } as const;
 export const flag = { type: DataTypes.BOOLEAN, allowNull: false } as const;
+export const optionalFlag = { type: DataTypes.BOOLEAN, allowNull: true } as const;
 export const json = { type: DataTypes.JSON, allowNull: false } as const;
 export const optionalJson = { type: DataTypes.JSON, allowNull: true } as const;
 export const moment = { type: DataTypes.DATE(3), allowNull: false } as const;

@@ -17,6 +17,7 @@ import {
 	id,
 	moment,
 	optionalNumber,
+	optionalJson,
 	optionalReference,
 	optionalText,
 	reference,
@@ -37,6 +38,8 @@ export class Job extends Model<InferAttributes<Job>, InferCreationAttributes<Job
 	declare dailyRangeK: CreationOptional<number | null>;
 	declare sunPeakWPerM2: CreationOptional<number | null>;
 	declare stage: CreationOptional<JobStage>;
+	/** January to December; null for the workshop's usual. */
+	declare daysOnRoad: CreationOptional<number[] | null>;
 	declare verdict: CreationOptional<Verdict | null>;
 	declare headroomK: CreationOptional<number | null>;
 	declare note: CreationOptional<string>;
@@ -66,6 +69,7 @@ export function initJob(sequelize: Sequelize): void {
 			stage: { ...text, defaultValue: 'survey' },
 			verdict: optionalText,
 			headroomK: optionalNumber,
+			daysOnRoad: optionalJson,
 			note: textOrEmpty,
 			createdBy: reference,
 			version: { ...whole, defaultValue: 0 },

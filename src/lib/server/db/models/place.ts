@@ -5,7 +5,27 @@ import {
 	type InferCreationAttributes,
 	type Sequelize
 } from 'sequelize';
-import { edited, id, moment, number, reference, text, textOrEmpty, whole } from './base';
+import type { PlaceInput, WeatherFileMark } from '$lib/schemas/places';
+import {
+	edited,
+	id,
+	moment,
+	number,
+	optionalJson,
+	optionalText,
+	reference,
+	text,
+	textOrEmpty,
+	whole
+} from './base';
+
+/** What a weather file may change of a place, and what it came from. */
+export type WeatherFields = Pick<
+	PlaceInput,
+	| ('latitudeDeg' | 'longitudeDeg' | 'altitudeM')
+	| ('hotDayMaxC' | 'dailyRangeK' | 'sunPeakWPerM2' | 'source')
+	| ('monthlyMaxC' | 'monthlySpreadK' | 'monthsSource')
+> & { weatherFile: WeatherFileMark | null };
 
 export class Place extends Model<InferAttributes<Place>, InferCreationAttributes<Place>> {
 	declare id: CreationOptional<number>;
@@ -20,6 +40,12 @@ export class Place extends Model<InferAttributes<Place>, InferCreationAttributes
 	declare dailyRangeK: number;
 	declare sunPeakWPerM2: number;
 	declare source: string;
+	declare monthlyMaxC: CreationOptional<number[] | null>;
+	declare monthlySpreadK: CreationOptional<number[] | null>;
+	declare monthsSource: CreationOptional<string | null>;
+	declare weatherFile: CreationOptional<WeatherFileMark | null>;
+	/** As it stood before its weather file was taken; null once somebody changed it again. */
+	declare beforeWeather: CreationOptional<WeatherFields | null>;
 	declare version: CreationOptional<number>;
 	declare createdAt: CreationOptional<Date>;
 	declare updatedAt: CreationOptional<Date>;
@@ -40,6 +66,11 @@ export function initPlace(sequelize: Sequelize): void {
 			dailyRangeK: number,
 			sunPeakWPerM2: { ...number, field: 'sun_peak_w_per_m2' },
 			source: text,
+			monthlyMaxC: optionalJson,
+			monthlySpreadK: optionalJson,
+			monthsSource: optionalText,
+			weatherFile: optionalJson,
+			beforeWeather: optionalJson,
 			version: { ...whole, defaultValue: 0 },
 			createdAt: moment,
 			updatedAt: moment

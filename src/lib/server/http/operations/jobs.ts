@@ -60,7 +60,8 @@ export const jobOperations = {
 		method: 'PUT',
 		path: '/api/v1/jobs/[jobId]/climate',
 		action: 'jobs.write',
-		summary: 'Chooses the place and the hot day to plan for, if nobody changed the job since it was read.',
+		summary:
+			'Chooses the place, the hot day to plan for and the days on the road, if nobody changed the job since it was read.',
 		params,
 		body: jobClimateSchema,
 		answer: jobSchema,
@@ -71,7 +72,8 @@ export const jobOperations = {
 		method: 'POST',
 		path: '/api/v1/vehicles/[vehicleId]/jobs',
 		action: 'jobs.write',
-		summary: 'Begins another job on a known vehicle, with the battery and the hot day of its last job.',
+		summary:
+			'Begins another job on a known vehicle, with the battery, the hot day and the days on the road of its last job.',
 		params: z.object({ vehicleId: idSchema }),
 		body: repeatJobSchema.omit({ vehicleId: true }),
 		answer: jobSchema,

@@ -1,9 +1,22 @@
 import { z } from 'zod';
 import { idSchema, versionSchema } from '$lib/schemas/fields';
 import { placeInputSchema, placeSchema } from '$lib/schemas/places';
-import { defineOperation } from '../operation';
+import { weatherAnswerSchema } from '$lib/schemas/weather';
+import { MOST_WEATHER_BYTES } from '$lib/thermal/weather';
+import { defineFileOperation, defineOperation } from '../operation';
 
 const params = z.object({ placeId: idSchema });
+
+const yesOrNo = (byDefault: 'true' | 'false', description: string) =>
+	z.enum(['true', 'false']).default(byDefault).meta({ description });
+
+const weatherQuery = z.object({
+	version: versionSchema.meta({ description: 'Of the place, as it was read' }),
+	preview: yesOrNo('false', 'Only say what the file gives; nothing is saved'),
+	takeHotDay: yesOrNo('true', 'The hot day, too, not the months alone'),
+	takeSite: yesOrNo('false', 'Latitude, longitude and altitude, too, where the file has them'),
+	fileName: z.string().max(200).default('').meta({ description: 'Of a file that is sent as the body' })
+});
 
 export const placeOperations = {
 	list: defineOperation({
@@ -43,6 +56,30 @@ export const placeOperations = {
 		summary: 'Changes a place, if nobody changed it since it was read.',
 		params,
 		body: placeInputSchema.extend({ version: versionSchema }),
+		answer: placeSchema,
+		status: 200
+	}),
+	takeWeather: defineFileOperation({
+		id: 'takePlaceWeather',
+		method: 'POST',
+		path: '/api/v1/places/[placeId]/weather',
+		action: 'places.write',
+		summary:
+			'Takes the months and the hot day of a place from an hourly weather file, EPW or CSV; a problem tells what is wrong by line and column.',
+		params,
+		query: weatherQuery,
+		mostFileBytes: MOST_WEATHER_BYTES,
+		answer: weatherAnswerSchema,
+		status: 200
+	}),
+	putBackWeather: defineOperation({
+		id: 'putBackPlaceWeather',
+		method: 'POST',
+		path: '/api/v1/places/[placeId]/weather/put-back',
+		action: 'places.write',
+		summary: 'Puts back what the weather file replaced, if nobody changed the place since.',
+		params,
+		body: z.object({ version: versionSchema }),
 		answer: placeSchema,
 		status: 200
 	})

@@ -47,8 +47,8 @@ async function enterJob(
 	job = await setJobBattery(person, job.id, { batteryRecordId: battery.id, version: job.version });
 	const { id: placeId, ...place } = findNamed(await listPlaces(person), ({ name }) => name, demo.place);
 	const { hotDayMaxC, dailyRangeK, sunPeakWPerM2 } = place;
-	const climate = { placeId, hotDayMaxC, dailyRangeK, sunPeakWPerM2, version: job.version };
-	return setJobClimate(person, job.id, climate);
+	const hotDay = { hotDayMaxC, dailyRangeK, sunPeakWPerM2 };
+	return setJobClimate(person, job.id, { placeId, ...hotDay, daysOnRoad: null, version: job.version });
 }
 
 async function measureMounts(

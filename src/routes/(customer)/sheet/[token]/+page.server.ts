@@ -1,7 +1,7 @@
 import { fail, redirect } from '@sveltejs/kit';
 import { acknowledgeSchema } from '$lib/schemas/sheets';
 import { readByLink, writeByLink } from '$lib/server/http/by-link';
-import { readForm, refuseForm } from '$lib/server/http/forms';
+import { readForm, readPageForm, refuseForm } from '$lib/server/http/forms';
 import { orPageError } from '$lib/server/http/guard';
 import { acknowledgeSheet, openSheet } from '$lib/server/services/sheet-readers';
 import { showSheet } from '../../show-sheet';
@@ -14,7 +14,7 @@ export const load: PageServerLoad = async (event) =>
 export const actions: Actions = {
 	default: async (event) => {
 		const { token } = event.params;
-		const { form, data } = await readForm(await event.request.formData(), acknowledgeSchema);
+		const { form, data } = await readForm(await readPageForm(event.request), acknowledgeSchema);
 		if (data === null) return fail(422, { form });
 		try {
 			await writeByLink(event, () => acknowledgeSheet(token, data));

@@ -1,5 +1,5 @@
 import { idSchema } from '$lib/schemas/fields';
-import { placeInputSchema } from '$lib/schemas/places';
+import { fromPlaceForm, placeFormSchema } from '$lib/schemas/place-form';
 import { loadForm, saveForm } from '$lib/server/http/forms';
 import { guard } from '$lib/server/http/guard';
 import { createPlace } from '$lib/server/services/places';
@@ -12,16 +12,16 @@ function waitingJob(url: URL): number | null {
 
 export const load: PageServerLoad = async (event) => {
 	guard(event, 'places.write');
-	return { form: await loadForm(placeInputSchema), jobId: waitingJob(event.url) };
+	return { form: await loadForm(placeFormSchema), jobId: waitingJob(event.url) };
 };
 
 export const actions: Actions = {
 	default: (event) =>
 		saveForm(event, {
 			action: 'places.write',
-			schema: placeInputSchema,
+			schema: placeFormSchema,
 			save: async (person, data) => {
-				const { id } = await createPlace(person, data);
+				const { id } = await createPlace(person, fromPlaceForm(data));
 				const jobId = waitingJob(event.url);
 				return jobId === null ? `/places/${id}?saved` : `/jobs/${jobId}/climate?place=${id}`;
 			}

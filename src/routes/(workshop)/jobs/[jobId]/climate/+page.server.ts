@@ -1,8 +1,10 @@
 import { idSchema } from '$lib/schemas/fields';
-import { jobClimateSchema, type JobView } from '$lib/schemas/jobs';
+import { fromJobClimateForm, jobClimateFormSchema, toDaysOnRoadBoxes } from '$lib/schemas/job-climate-form';
+import type { JobView } from '$lib/schemas/jobs';
+import { monthBoxes } from '$lib/schemas/months';
 import type { PlaceView } from '$lib/schemas/places';
 import { saveEdited } from '$lib/server/http/edit-form';
-import { loadForm } from '$lib/server/http/forms';
+import { fillForm, loadForm, readPageForm } from '$lib/server/http/forms';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { pageId } from '$lib/server/http/page-id';
 import { getJob, setJobClimate } from '$lib/server/services/jobs';
@@ -27,20 +29,34 @@ export const load: PageServerLoad = async (event) => {
 		Promise.all([getJob(person, pageId(event.params.jobId)), listPlaces(person)])
 	);
 	const start = startFrom(job, places, event.url);
-	const form = await loadForm(jobClimateSchema, { version: job.version, ...start });
+	const days = toDaysOnRoadBoxes(job.daysOnRoad);
+	const form = await loadForm(jobClimateFormSchema, { version: job.version, ...days, ...start });
 	return { job, places, form };
 };
 
+/** The row of days with the same number in each, which the page then shows; nothing is saved. */
+async function fillDays(formData: FormData) {
+	const every = String(formData.get('sameEvery') ?? '').trim();
+	const boxes = Object.fromEntries(monthBoxes('daysOnRoad').map(({ box }) => [box, every]));
+	return { form: await fillForm(formData, jobClimateFormSchema, boxes), every };
+}
+
 export const actions: Actions = {
-	default: (event) => {
+	default: async (event) => {
+		const person = guard(event, 'jobs.write');
 		const jobId = pageId(event.params.jobId);
+		const formData = await readPageForm(event.request.clone());
+		if (formData.has('fill')) {
+			await orPageError(getJob(person, jobId));
+			return fillDays(formData);
+		}
 		return saveEdited(event, {
 			action: 'jobs.write',
-			schema: jobClimateSchema,
-			save: async (person, data) => `/jobs/${(await setJobClimate(person, jobId, data)).id}`,
-			newest: async (person) => {
-				const { version, place, hotDay } = await getJob(person, jobId);
-				return { version, placeId: place?.id, ...hotDay };
+			schema: jobClimateFormSchema,
+			save: async (by, data) => `/jobs/${(await setJobClimate(by, jobId, fromJobClimateForm(data))).id}`,
+			newest: async (by) => {
+				const { version, place, hotDay, daysOnRoad } = await getJob(by, jobId);
+				return { version, placeId: place?.id, ...hotDay, ...toDaysOnRoadBoxes(daysOnRoad) };
 			}
 		});
 	}

@@ -3,6 +3,7 @@ import { blankDraft, changePlan, draftOfEntries, draftOfPlan, parsePlan } from '
 import { idSchema, versionSchema } from '$lib/schemas/fields';
 import { DAY_PLAN_TEMPLATES } from '$lib/schemas/day-plan-form';
 import { AppError } from '$lib/server/errors';
+import { readPageForm } from '$lib/server/http/forms';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { validate } from '$lib/server/http/validate';
 import { getDayPlan, saveDayPlan } from '$lib/server/services/day-plans';
@@ -32,7 +33,7 @@ const CHANGED =
 export const actions: Actions = {
 	default: async (event) => {
 		const person = guard(event, 'day-plans.write');
-		const entries = Object.fromEntries(await event.request.formData());
+		const entries = Object.fromEntries(await readPageForm(event.request));
 		const draft = draftOfEntries(entries);
 		// A button of the editor: without a script the page comes back changed, and nothing is stored yet.
 		if (typeof entries.do === 'string') return { draft: changePlan(draft, entries.do), problems: [] };

@@ -3,7 +3,7 @@ import { idSchema } from '$lib/schemas/fields';
 import type { SignedInPerson } from '$lib/schemas/people';
 import { sendSheetSchema } from '$lib/schemas/sheets';
 import { AppError } from '$lib/server/errors';
-import { loadForm, saveForm } from '$lib/server/http/forms';
+import { loadForm, readPageForm, saveForm } from '$lib/server/http/forms';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { getAssessment } from '$lib/server/services/assessments';
 import { getJob } from '$lib/server/services/jobs';
@@ -43,7 +43,7 @@ async function doWithSheet(
 	work: (person: SignedInPerson, sheetId: number) => Promise<unknown>
 ) {
 	const person = guard(event, 'sheets.write');
-	const sheetId = readId((await event.request.formData()).get('sheetId'), 'sheet');
+	const sheetId = readId((await readPageForm(event.request)).get('sheetId'), 'sheet');
 	try {
 		await work(person, sheetId);
 	} catch (refusal) {

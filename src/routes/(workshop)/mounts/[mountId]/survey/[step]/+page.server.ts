@@ -3,7 +3,7 @@ import { describeAnswer, findStep, mergeStep, stepSchema, type SurveyStep } from
 import { versionSchema } from '$lib/schemas/fields';
 import type { MountView } from '$lib/schemas/mounts';
 import { AppError } from '$lib/server/errors';
-import { loadForm, readForm, refuseForm } from '$lib/server/http/forms';
+import { loadForm, readForm, readPageForm, refuseForm } from '$lib/server/http/forms';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { validate } from '$lib/server/http/validate';
 import { saveSurvey } from '$lib/server/services/mounts';
@@ -37,7 +37,7 @@ export const actions: Actions = {
 		const person = guard(event, 'mounts.write');
 		const mount = await openMount(person, event.params);
 		const step = stepOf(mount, event.params.step);
-		const formData = await event.request.formData();
+		const formData = await readPageForm(event.request);
 		const values = Object.fromEntries(formData);
 		const schema = stepSchema(step.question, mount.positionKind, values);
 		const { form, data } = await readForm(formData, schema);

@@ -2,6 +2,7 @@ import { fail, redirect } from '@sveltejs/kit';
 import { versionSchema } from '$lib/schemas/fields';
 import { describeAnswer, questionsFor } from '$lib/schemas/survey-step';
 import { AppError, type FieldProblem } from '$lib/server/errors';
+import { readPageForm } from '$lib/server/http/forms';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { validate } from '$lib/server/http/validate';
 import { saveSurvey } from '$lib/server/services/mounts';
@@ -34,7 +35,7 @@ export const actions: Actions = {
 	default: async (event) => {
 		const person = guard(event, 'mounts.write');
 		const { id, jobId, survey } = await openMount(person, event.params);
-		const seen = (await event.request.formData()).get('version');
+		const seen = (await readPageForm(event.request)).get('version');
 		try {
 			const version = validate(versionSchema, seen);
 			await saveSurvey(person, id, { survey, complete: true, version });

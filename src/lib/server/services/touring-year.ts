@@ -1,0 +1,25 @@
+import type { Touring } from '$lib/schemas/assessments';
+import { USUAL_DAYS_ON_ROAD } from '$lib/schemas/jobs';
+import { MONTH_NAMES, estimateMonths } from '$lib/thermal/weather';
+import type { Job, Place } from '../db/models';
+
+type Months = Pick<Touring, 'months' | 'basis'>;
+
+function monthsOf(place: Place): Months {
+	const { monthlyMaxC, monthlySpreadK, monthsSource, weatherFile, latitudeDeg, hotDayMaxC } = place;
+	if (!monthlyMaxC || !monthlySpreadK) {
+		const basis = 'Estimated from latitude and hot day; a weather file would replace it.';
+		return { months: estimateMonths({ latitudeDeg, hotDayMaxC }), basis };
+	}
+	const months = monthlyMaxC.map((meanMaxC, month) => ({ meanMaxC, spreadK: monthlySpreadK[month]! }));
+	const basis = weatherFile
+		? `From the weather file ${weatherFile.name}.`
+		: `Entered for the place: ${monthsSource ?? ''}`;
+	return { months, basis };
+}
+
+/** The weather of a year at the job's place, and how many days of each month the customer is on the road. */
+export function touringYearOf({ job, place }: { job: Job; place: Place }): Touring {
+	const usual = MONTH_NAMES.map(() => USUAL_DAYS_ON_ROAD);
+	return { ...monthsOf(place), daysOnRoad: job.daysOnRoad ?? usual };
+}
