@@ -70,12 +70,12 @@ export const migrations: Migration[] = [
 	m028,
 	m029,
 	m030,
-	m040,
-	m041,
-	m042,
 	m031,
 	m032,
 	m033,
+	m040,
+	m041,
+	m042,
 	m043,
 	m044
 ];

@@ -16,8 +16,8 @@ import {
 	edited,
 	id,
 	moment,
-	optionalNumber,
 	optionalJson,
+	optionalNumber,
 	optionalReference,
 	optionalText,
 	reference,
@@ -37,9 +37,9 @@ export class Job extends Model<InferAttributes<Job>, InferCreationAttributes<Job
 	declare hotDayMaxC: CreationOptional<number | null>;
 	declare dailyRangeK: CreationOptional<number | null>;
 	declare sunPeakWPerM2: CreationOptional<number | null>;
-	declare stage: CreationOptional<JobStage>;
 	/** January to December; null for the workshop's usual. */
 	declare daysOnRoad: CreationOptional<number[] | null>;
+	declare stage: CreationOptional<JobStage>;
 	declare verdict: CreationOptional<Verdict | null>;
 	declare headroomK: CreationOptional<number | null>;
 	declare note: CreationOptional<string>;
@@ -66,10 +66,10 @@ export function initJob(sequelize: Sequelize): void {
 			hotDayMaxC: optionalNumber,
 			dailyRangeK: optionalNumber,
 			sunPeakWPerM2: { ...optionalNumber, field: 'sun_peak_w_per_m2' },
+			daysOnRoad: optionalJson,
 			stage: { ...text, defaultValue: 'survey' },
 			verdict: optionalText,
 			headroomK: optionalNumber,
-			daysOnRoad: optionalJson,
 			note: textOrEmpty,
 			createdBy: reference,
 			version: { ...whole, defaultValue: 0 },
