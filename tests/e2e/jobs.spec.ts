@@ -103,7 +103,7 @@ test.describe('with a script', () => {
 		expect((await asked).status()).toBe(200);
 		await expect(page.getByText('1 job', { exact: true })).toBeVisible();
 		await expect(page).toHaveURL(/search=Ana/);
-		await page.getByLabel('Verdict').selectOption('cut out');
+		await page.getByLabel('Verdict').selectOption('cut out or get too hot');
 		await expect(page.getByText('No job is like that')).toBeVisible();
 		await expect(page).toHaveURL(/verdict=cuts-out/);
 		await page.goBack();

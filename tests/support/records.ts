@@ -12,6 +12,14 @@ export const BATTERY = batteryInputSchema.parse({
 	dataSheet: 'Invented data sheet, page 3'
 });
 
+/** One that nothing switches off. */
+export const AGM_BATTERY = batteryInputSchema.parse({
+	...{ maker: 'Emberlow', model: 'Mat 95', chemistry: 'lead-acid-agm', capacityAh: 95 },
+	...{ lengthMm: 353, widthMm: 175, heightMm: 190, massKg: 27, internalResistanceMohm: 5, maxChargeA: 25 },
+	...{ highestChargeC: 50, highestUseC: 60, ratedLifeYears: 6, compensatesCharge: false },
+	underBonnet: 'silent'
+});
+
 export const PLACE = placeInputSchema.parse({
 	...{ name: 'Salt Lake', region: 'North', latitudeDeg: -28, longitudeDeg: 137, altitudeM: 20 },
 	...{ climateZone: 'BWh', hotDayMaxC: 44.5, dailyRangeK: 16, sunPeakWPerM2: 1050 },

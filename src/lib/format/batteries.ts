@@ -1,8 +1,10 @@
+import { CHEMISTRIES, findChemistry } from '../thermal/chemistries';
+import { formatTemperature } from './numbers';
 import type { BatteryInput, Chemistry, Sensor, UnderBonnetWord } from '../schemas/batteries';
 
-export const CHEMISTRY_WORDS: Record<Chemistry, string> = {
-	'lithium-iron-phosphate': 'Lithium iron phosphate'
-};
+export const CHEMISTRY_WORDS = Object.fromEntries(
+	CHEMISTRIES.map(({ key, label }) => [key, label])
+) as Record<Chemistry, string>;
 
 export const SENSOR_WORDS: Record<Sensor, string> = {
 	cells: 'The cells',
@@ -44,3 +46,13 @@ export const UNDER_BONNET: Record<UnderBonnetWord, UnderBonnetText> = {
 /** "Emberlow Slab 100". */
 export const formatBattery = ({ maker, model }: Pick<BatteryInput, 'maker' | 'model'>): string =>
 	`${maker} ${model}`;
+
+/** What is usual for a kind of battery, for whoever has no data sheet at hand yet. */
+export function sayUsualLimits(key: string): string {
+	const chemistry = findChemistry(key);
+	if (chemistry?.wear.law !== 'lead-acid') return '';
+	const { highestChargeC, highestUseC, wear } = chemistry;
+	const charge = formatTemperature(highestChargeC.value);
+	const use = formatTemperature(highestUseC.value);
+	return `Usual for this kind: charged up to ${charge}, used up to ${use}, ${wear.usualLifeYears.value} years at 25 °C. The data sheet counts.`;
+}

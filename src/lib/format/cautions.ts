@@ -1,12 +1,43 @@
+import { findChemistry, type ChemistryCaution } from '../thermal/chemistries';
+
 /** Changes with every change of the words below: an acknowledgement is tied to what was read. */
-export const CAUTION_TEXT_VERSION = 1;
+export const CAUTION_TEXT_VERSION = 2;
 
 export interface Caution {
 	id: string;
 	title: string;
 	text: string;
-	when: 'always' | 'lithium';
+	/** Of some chemistries the table of chemistries says so under this id. */
+	when: 'always' | 'by-chemistry';
 }
+
+/** Those that the table of chemistries asks for. */
+const BY_CHEMISTRY: Record<ChemistryCaution, Pick<Caution, 'title' | 'text'>> = {
+	'failing-lithium': {
+		title: 'Toxic and flammable gas',
+		text: 'A failing lithium battery gives off gas that poisons and burns. Do not breathe it, move people away and call the fire service.'
+	},
+	'fierce-fire': {
+		title: 'A fire of this kind is fierce',
+		text: 'Lithium cells with nickel and cobalt fail at lower temperatures than those with iron phosphate, and burn far hotter. Ask the maker in writing whether the place under the bonnet is allowed at all.'
+	},
+	'vent-flooded': {
+		title: 'Vent it to the open',
+		text: 'A flooded battery gives off hydrogen whenever it charges. Never put it in a closed box or where people sit or sleep, unless openings low and high lead outside; keep relays, switches and anything that sparks away from it.'
+	},
+	'vent-valve-regulated': {
+		title: 'Sealed is not gas-tight',
+		text: 'A valve-regulated battery keeps its gas only while it is charged as its maker says. Overcharged or hot it lets hydrogen out: do not shut it into a box without openings that lead outside.'
+	},
+	'hot-charge': {
+		title: 'Charging a hot battery',
+		text: 'A lead-acid battery that is charged hot at full voltage gases, dries out and can go on heating itself. The charger must lower its voltage as the battery warms, and stop at the limit of its maker.'
+	},
+	acid: {
+		title: 'Acid',
+		text: 'Keep it upright and tied down, wear eye protection, and have water at hand. Acid burns skin, eyes, paint and cables.'
+	}
+};
 
 /** What every result carries: on the screen, in print and on the customer's sheet, in these words. */
 export const CAUTIONS: readonly Caution[] = [
@@ -52,12 +83,7 @@ export const CAUTIONS: readonly Caution[] = [
 		text: 'A vented lead-acid battery, the starting battery included, gives off explosive gas while it charges. Keep sparks and flames away and let the gas out to the open.',
 		when: 'always'
 	},
-	{
-		id: 'failing-lithium',
-		title: 'Toxic and flammable gas',
-		text: 'A failing lithium battery gives off gas that poisons and burns. Do not breathe it, move people away and call the fire service.',
-		when: 'lithium'
-	},
+	...Object.entries(BY_CHEMISTRY).map(([id, words]) => ({ id, ...words, when: 'by-chemistry' as const })),
 	{
 		id: 'stop-using',
 		title: 'When to stop using a battery',
@@ -66,8 +92,14 @@ export const CAUTIONS: readonly Caution[] = [
 	}
 ];
 
+/** Those that a battery calls for by its chemistry. */
+export function listOwnCautions(chemistry: string): Caution[] {
+	const own: readonly string[] = findChemistry(chemistry)?.cautions ?? [];
+	return CAUTIONS.filter(({ id, when }) => when === 'by-chemistry' && own.includes(id));
+}
+
 /** The cautions that a battery of this chemistry calls for, in their order. */
 export function listCautions(chemistry: string): Caution[] {
-	const isLithium = chemistry.startsWith('lithium');
-	return CAUTIONS.filter((caution) => caution.when === 'always' || isLithium);
+	const own = listOwnCautions(chemistry);
+	return CAUTIONS.filter((caution) => caution.when === 'always' || own.includes(caution));
 }

@@ -1,9 +1,12 @@
 import { describe, expect, it } from 'vitest';
+import type { LeadAcidFigures } from '../thermal/assess/types';
 import { describeVerdict, type VerdictFacts } from './describe-verdict';
 
 /** Thin spaces read as plain ones here. */
-const say = (changes: Partial<VerdictFacts>, audience?: 'workshop' | 'customer'): string =>
-	describeVerdict({ ...HOT_DAY, ...changes }, audience).sentence.replace(/\u202F/g, ' ');
+const say = (
+	changes: Partial<VerdictFacts> & { chemistry?: string },
+	audience?: 'workshop' | 'customer'
+): string => describeVerdict({ ...HOT_DAY, ...changes }, audience).sentence.replace(/\u202F/g, ' ');
 
 const HOT_DAY: VerdictFacts = {
 	verdict: 'cuts-out',
@@ -85,4 +88,59 @@ describe('for the customer', () => {
 			expect(words).toMatch(/^The fridge .*too hot to charge/);
 		}
 	);
+});
+
+describe('a battery that nothing switches off', () => {
+	const leadAcid: LeadAcidFigures = {
+		...{ useLimitC: 60, chargeLimitC: 50, tooHotAtHour: 16.85, hoursAboveUseLimit: 2.1667 },
+		...{ hoursAboveChargeLimit: 0, peakChargingC: 48, chargerCompensates: false },
+		...{ compensatedChargeV: 13.4, uncompensatedChargeV: 14.4 },
+		...{ freshAirM3PerH: 0.24, openingCm2: 6.72, sparkFreeMm: 267 }
+	};
+	const tooHot = { ...MILD_DAY, chemistry: 'lead-acid-agm', headroomK: -6, peakCellsC: 66, leadAcid };
+
+	it('gets too hot: says from when, for how long, and that it is not switched off', () => {
+		expect(describeVerdict({ ...HOT_DAY, ...tooHot }).headline).toBe('Gets too hot');
+		expect(say(tooHot)).toBe(
+			'From 16:51, two hours before camp, the battery is hotter than the 60 °C that it may have in use, for 2 h 10 min in all. Nothing switches it off: the cells reach 66 °C at 17:03.'
+		);
+		expect(say(tooHot, 'customer')).toBe(
+			'From 16:51, two hours before camp, the battery is hotter than its maker allows, for 2 h 10 min in all. Nothing switches it off: the fridge stays on, and the battery takes harm.'
+		);
+	});
+
+	it('runs close: says how close, and that it is charged too hot', () => {
+		const cooler = { ...leadAcid, tooHotAtHour: null, hoursAboveUseLimit: 0 };
+		const close = { ...tooHot, verdict: 'runs-close', headroomK: 8, peakCellsC: 52 } as const;
+		const charged = { ...cooler, hoursAboveChargeLimit: 1.5, peakChargingC: 52 };
+		expect(say({ ...close, leadAcid: charged })).toBe(
+			'The battery bears the day, but only just: at 17:03 the cells reach 52 °C, 8.0 K short of the 60 °C that it may have in use. For 1 h 30 min it is charged above 50 °C, at up to 52 °C.'
+		);
+		expect(say({ ...close, leadAcid: charged }, 'customer')).toContain(
+			'For an hour and a half it is charged hotter than its maker allows'
+		);
+		expect(say({ ...close, headroomK: 3, leadAcid: cooler })).not.toContain('charged');
+	});
+
+	it('bears the day where it stays cool', () => {
+		const cool = { ...leadAcid, tooHotAtHour: null, hoursAboveUseLimit: 0 };
+		const mild = {
+			...tooHot,
+			verdict: 'rides-it-out',
+			headroomK: 15,
+			peakCellsC: 45,
+			leadAcid: cool
+		} as const;
+		expect(say(mild)).toBe(
+			'The battery bears the day: at 17:03 the cells reach 45 °C, 15.0 K short of the 60 °C that it may have in use.'
+		);
+		expect(say(mild, 'customer')).toContain('with room to spare');
+	});
+
+	it('never goes dark, whatever happens', () => {
+		for (const verdict of ['rides-it-out', 'runs-close', 'cuts-out'] as const) {
+			const both = `${say({ ...tooHot, verdict })} ${say({ ...tooHot, verdict }, 'customer')}`;
+			expect(both).not.toMatch(/\bdark\b|cut.?off|comes back/);
+		}
+	});
 });

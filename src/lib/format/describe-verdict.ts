@@ -1,40 +1,14 @@
+import { describeHeat } from './describe-heat';
 import { formatAmpHours, formatKelvin, formatTemperature } from './numbers';
-import { formatClockHour, formatHours, sayHours } from './time';
-import { formatVerdict, type Verdict } from './verdict';
+import { A_MOMENT_H, formatClockHour, formatHours, sayAgainstCamp, sayHours } from './time';
+import { formatVerdict } from './verdict';
+import type { Audience, VerdictFacts } from './verdict-facts';
 
-/** What the sentence needs of an assessment; hours run on past 24. */
-export interface VerdictFacts {
-	verdict: Verdict;
-	cutAtHour: number | null;
-	resetAtHour: number | null;
-	backByItself: boolean;
-	darkHours: number;
-	headroomK: number;
-	peakCellsC: number;
-	peakAtHour: number;
-	chargeMissedAh: number;
-	chargeMissedHours: number;
-	/** When the day reaches camp, if it does. */
-	campHour?: number | null;
-}
+export type { Audience, VerdictFacts };
 
 export interface VerdictWords {
 	headline: string;
 	sentence: string;
-}
-
-/** The workshop hears temperatures; the customer hears what happens. */
-export type Audience = 'workshop' | 'customer';
-
-const A_MOMENT_H = 8 / 60;
-
-/** "two hours before camp", "just as camp is reached", "half an hour after reaching camp". */
-function sayAgainstCamp(hour: number, campHour: number): string {
-	const hoursAfter = hour - campHour;
-	if (Math.abs(hoursAfter) < A_MOMENT_H) return 'just as camp is reached';
-	return hoursAfter < 0
-		? `${sayHours(-hoursAfter)} before camp`
-		: `${sayHours(hoursAfter)} after reaching camp`;
 }
 
 /** How it ends: nothing is promised that the day's plan does not show. */
@@ -76,8 +50,17 @@ function sayChargeMissed({ chargeMissedAh, chargeMissedHours }: VerdictFacts, au
 	return ` Heat stops the charging for ${length}: ${formatAmpHours(chargeMissedAh)} missed.`;
 }
 
-/** The verdict in one word of ours, and in one or two sentences of what happens to the person. */
-export function describeVerdict(facts: VerdictFacts, audience: Audience = 'workshop'): VerdictWords {
+function describeDark(facts: VerdictFacts, audience: Audience): string {
 	const happens = facts.verdict === 'cuts-out' ? sayCutOut(facts) : sayStaysOn(facts, audience);
-	return { headline: formatVerdict(facts.verdict), sentence: happens + sayChargeMissed(facts, audience) };
+	return happens + sayChargeMissed(facts, audience);
+}
+
+/** The verdict in one word of ours, and in one or two sentences of what happens to the person. */
+export function describeVerdict(
+	facts: VerdictFacts & { chemistry?: string },
+	audience: Audience = 'workshop'
+): VerdictWords {
+	const { leadAcid, verdict, chemistry } = facts;
+	const sentence = leadAcid ? describeHeat({ ...facts, leadAcid }, audience) : describeDark(facts, audience);
+	return { headline: formatVerdict(verdict, chemistry), sentence };
 }

@@ -133,6 +133,10 @@ const BATTERY_TYPED = {
 	dischargeResetC: '57',
 	cutDelayS: '5 s',
 	autoReset: 'on',
+	highestChargeC: '',
+	highestUseC: '',
+	ratedLifeYears: '',
+	compensatesCharge: '',
 	underBonnet: 'silent',
 	underBonnetWords: '',
 	dataSheet: ''

@@ -64,3 +64,15 @@ export function sayHours(hours: number): string {
 	if (halves % 2 === 0) return whole === 1 ? 'an hour' : `${word} hours`;
 	return whole === 1 ? 'an hour and a half' : `${word} and a half hours`;
 }
+
+/** Shorter than this is as good as at once. */
+export const A_MOMENT_H = 8 / 60;
+
+/** "two hours before camp", "just as camp is reached", "half an hour after reaching camp". */
+export function sayAgainstCamp(hour: number, campHour: number): string {
+	const hoursAfter = hour - campHour;
+	if (Math.abs(hoursAfter) < A_MOMENT_H) return 'just as camp is reached';
+	return hoursAfter < 0
+		? `${sayHours(-hoursAfter)} before camp`
+		: `${sayHours(hoursAfter)} after reaching camp`;
+}

@@ -4,7 +4,7 @@ import type { Derivation } from '../thermal/survey';
 import type { ScenarioInput } from '../thermal/types';
 import type { TouringYear } from '../thermal/uncertainty/cut-out-days';
 import { assessmentResultSchema } from './assessment-result';
-import { batteryInputSchema } from './batteries';
+import { batteryInputSchema, CHEMISTRIES } from './batteries';
 import { cableInputSchema } from './cables';
 import { dayPlanInputSchema } from './day-plans';
 import { idSchema } from './fields';
@@ -69,6 +69,8 @@ export const assessmentRowSchema = z.object({
 	mountId: z.number().int(),
 	mountLetter: z.string(),
 	mountName: z.string(),
+	/** Of the battery as it was then. */
+	chemistry: z.enum(CHEMISTRIES),
 	verdict: z.enum(VERDICTS),
 	headroomK: z.number(),
 	peakCellsC: z.number(),

@@ -18,7 +18,8 @@ export type MeasureUnit =
 	| '%'
 	| 'W/m²'
 	| '°'
-	| 'h';
+	| 'h'
+	| 'years';
 
 export interface FieldMeta {
 	label: string;

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { batterySchema } from './batteries';
+import { batterySchema, CHEMISTRIES } from './batteries';
 import { customerSchema } from './customers';
 import { dayPlanSchema } from './day-plans';
 import {
@@ -88,6 +88,9 @@ export const jobQuerySchema = z.object({
 });
 export type JobQuery = z.infer<typeof jobQuerySchema>;
 
+/** Of the battery that the verdict is about: it tells how the verdict is worded. */
+const assessedChemistry = z.enum(CHEMISTRIES);
+
 export const jobRowSchema = z.object({
 	id: z.number().int(),
 	number: z.number().int(),
@@ -98,6 +101,7 @@ export const jobRowSchema = z.object({
 	climateZone: z.string().nullable(),
 	stage: z.enum(JOB_STAGES),
 	verdict: z.enum(VERDICTS).nullable(),
+	assessedChemistry,
 	headroomK: z.number().nullable(),
 	updatedAt: z.iso.datetime()
 });
@@ -121,6 +125,7 @@ export type AssessedPart = (typeof ASSESSED_PARTS)[number];
 export const mountStandingSchema = z.object({
 	mountId: z.number().int(),
 	assessmentId: z.number().int(),
+	chemistry: z.enum(CHEMISTRIES),
 	verdict: z.enum(VERDICTS),
 	headroomK: z.number(),
 	assessedAt: z.iso.datetime(),
@@ -138,6 +143,7 @@ export const jobSchema = editedSchema.extend({
 	daysOnRoad: z.array(z.number().int()).nullable(),
 	stage: z.enum(JOB_STAGES),
 	verdict: z.enum(VERDICTS).nullable(),
+	assessedChemistry,
 	headroomK: z.number().nullable(),
 	note: z.string(),
 	createdAt: z.iso.datetime(),

@@ -1,7 +1,7 @@
 import { z } from 'zod';
+import type { DayLimits } from '../format/heat-limits';
 import type { AssessmentResult } from './assessments';
 import type { PositionKind } from './survey';
-import type { BatteryInput } from './batteries';
 import { email, idSchema, words } from './fields';
 import { VERDICTS, type Verdict } from './verdicts';
 
@@ -11,7 +11,7 @@ export interface SheetRibbon extends Pick<
 	'curves' | 'legs' | 'darkSpans' | 'chargeSpans' | 'peakCellsC' | 'peakAtHour'
 > {
 	position: PositionKind;
-	limits: Pick<BatteryInput, 'dischargeCutC' | 'dischargeResetC' | 'chargeCutC' | 'chargeResetC' | 'sensor'>;
+	limits: DayLimits;
 }
 
 /** The customer's page, word for word as it was sent; its hash is what an acknowledgement is tied to. */
@@ -23,6 +23,8 @@ export interface SheetContent {
 	customerName: string;
 	vehicle: string;
 	battery: string;
+	/** Of that battery; pages from before there were several have none. */
+	chemistry?: string;
 	mountName: string;
 	placeName: string;
 	verdict: Verdict;
@@ -36,7 +38,7 @@ export interface SheetContent {
 	/** Said when the shop goes ahead against the verdict. */
 	override: { decidedBy: string; reason: string } | null;
 	/** The other positions that were worked out for this job. */
-	alternatives: { mountName: string; verdict: Verdict }[];
+	alternatives: { mountName: string; verdict: Verdict; chemistry?: string }[];
 	figures: { label: string; value: string }[];
 	ribbon: SheetRibbon;
 	cautions: { title: string; text: string }[];
@@ -55,6 +57,9 @@ export const acknowledgeSchema = z.object({
 });
 export type Acknowledge = z.infer<typeof acknowledgeSchema>;
 
+/** Of a battery as it was then: it tells how its verdict is worded. */
+const chemistryName = z.string().meta({ description: 'Chemistry of the battery' });
+
 export const MAIL_STATES = ['waiting', 'sent', 'failed'] as const;
 
 export const sheetStatusSchema = z.object({
@@ -62,6 +67,7 @@ export const sheetStatusSchema = z.object({
 	recommendationId: z.number().int(),
 	mountName: z.string(),
 	verdict: z.enum(VERDICTS),
+	chemistry: chemistryName,
 	sentTo: z.string(),
 	sentBy: z.string(),
 	createdAt: z.iso.datetime(),
@@ -103,6 +109,7 @@ export interface MySheet {
 	vehicle: string;
 	mountName: string;
 	verdict: Verdict;
+	chemistry: string;
 	sentAt: string;
 	acknowledgedAt: string | null;
 }

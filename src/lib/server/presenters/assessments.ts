@@ -12,10 +12,11 @@ export function presentAssessmentRow(
 	assessment: Assessment,
 	{ mountLetter, mountName, bookNumber }: AssessmentSurroundings
 ): AssessmentRow {
-	const { id, jobId, mountId, verdict, headroomK, peakCellsC, peakAtHour } = assessment;
+	const { id, jobId, mountId, chemistry, verdict, headroomK, peakCellsC, peakAtHour } = assessment;
 	const { cutAtHour, resetAtHour, darkHours, chargeMissedAh, engineVersion, createdAt } = assessment;
 	return {
-		...{ id, jobId, mountId, mountLetter, mountName, verdict, headroomK, peakCellsC, peakAtHour },
+		...{ id, jobId, mountId, mountLetter, mountName, chemistry, verdict },
+		...{ headroomK, peakCellsC, peakAtHour },
 		...{ cutAtHour, resetAtHour, darkHours, chargeMissedAh, engineVersion, bookNumber },
 		createdAt: createdAt.toISOString()
 	};

@@ -16,10 +16,10 @@ function withOwner({ customer, vehicle }: Job) {
 }
 
 export function presentJobRow(job: Job): JobRow {
-	const { id, number, batteryRecord, place, stage, verdict, headroomK, updatedAt } = job;
+	const { id, number, batteryRecord, place, stage, verdict, assessedChemistry, headroomK, updatedAt } = job;
 	const { customer, vehicle } = withOwner(job);
 	return {
-		...{ id, number, stage, verdict, headroomK },
+		...{ id, number, stage, verdict, assessedChemistry, headroomK },
 		customerName: customer.name,
 		vehicle: formatVehicle(vehicle),
 		battery: batteryRecord ? formatBattery(batteryRecord) : null,
@@ -41,11 +41,11 @@ export function presentHotDay(job: Job): JobView['hotDay'] {
 }
 
 export function presentStanding(
-	{ id, mountId, verdict, headroomK, createdAt }: Assessment,
+	{ id, mountId, chemistry, verdict, headroomK, createdAt }: Assessment,
 	changedSince: MountStanding['changedSince']
 ): MountStanding {
 	const assessedAt = createdAt.toISOString();
-	return { mountId, assessmentId: id, verdict, headroomK, assessedAt, changedSince };
+	return { mountId, assessmentId: id, chemistry, verdict, headroomK, assessedAt, changedSince };
 }
 
 /** The job sheet: the job with everything that stands on it. */
@@ -56,9 +56,10 @@ export function presentJob(
 	standings: MountStanding[]
 ): JobView {
 	const { id, version, number, stage, verdict, headroomK, note, batteryRecord, place } = job;
+	const { assessedChemistry } = job;
 	const { customer, vehicle } = withOwner(job);
 	return {
-		...{ id, version, number, stage, verdict, headroomK, note },
+		...{ id, version, number, stage, verdict, assessedChemistry, headroomK, note },
 		customer: presentCustomer(customer),
 		vehicle: presentVehicle(vehicle),
 		battery: batteryRecord ? presentBattery(batteryRecord) : null,

@@ -2,7 +2,9 @@ import { formatAmpHours, formatKelvin, formatTemperature } from '$lib/format/num
 import { formatClockHour, formatHours } from '$lib/format/time';
 import type { AssessmentInputs, AssessmentResult } from '$lib/schemas/assessments';
 import type { ReportLine } from '$lib/schemas/reports';
+import { guardOf, type CutOffs } from '$lib/thermal/chemistries';
 import type { Sensor } from '$lib/thermal/types';
+import { listLeadAcidFigures } from './lead-acid-figures';
 
 const WATCHED: Record<Sensor, string> = {
 	cells: 'the cells',
@@ -31,19 +33,30 @@ function sayMissed({ chargeMissedAh }: AssessmentResult, chargeCutC: number): Re
 	};
 }
 
-/** The figures beside the picture, in the order in which people ask for them. */
-export function listFigures({ battery }: AssessmentInputs, result: AssessmentResult): ReportLine[] {
-	const { headroomK, peakCellsC, peakAtHour, cutAtHour, darkHours } = result;
+const sayPeak = ({ peakCellsC, peakAtHour }: AssessmentResult): ReportLine => ({
+	label: 'Cells hottest',
+	value: `${formatTemperature(peakCellsC)} at ${formatClockHour(peakAtHour)}`
+});
+
+function listDarkFigures(cutOffs: CutOffs, result: AssessmentResult): ReportLine[] {
+	const { headroomK, cutAtHour, darkHours } = result;
 	return [
 		{
 			label: 'Headroom',
 			value: formatKelvin(headroomK),
-			note: `From the peak of ${WATCHED[battery.sensor]} to ${formatTemperature(battery.dischargeCutC)}, where it goes dark.`
+			note: `From the peak of ${WATCHED[cutOffs.sensor]} to ${formatTemperature(cutOffs.dischargeCutC)}, where it goes dark.`
 		},
-		{ label: 'Cells hottest', value: `${formatTemperature(peakCellsC)} at ${formatClockHour(peakAtHour)}` },
+		sayPeak(result),
 		{ label: 'Goes dark', value: cutAtHour === null ? 'not on this day' : formatClockHour(cutAtHour) },
-		sayReturn(result, battery.autoReset),
+		sayReturn(result, cutOffs.autoReset),
 		{ label: 'Dark in all', value: darkHours === 0 ? 'none' : formatHours(darkHours) },
-		sayMissed(result, battery.chargeCutC)
+		sayMissed(result, cutOffs.chargeCutC)
 	];
+}
+
+/** The figures beside the picture, in the order in which people ask for them. */
+export function listFigures({ battery }: AssessmentInputs, result: AssessmentResult): ReportLine[] {
+	const guard = guardOf(battery);
+	if (guard.kind === 'cut-offs') return listDarkFigures(guard, result);
+	return result.leadAcid ? listLeadAcidFigures(guard, result.leadAcid, sayPeak(result), result) : [];
 }

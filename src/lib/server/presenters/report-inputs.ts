@@ -9,11 +9,13 @@ import {
 	formatPercent,
 	formatSpeed,
 	formatTemperature,
-	formatWithUnit
+	formatWithUnit,
+	writeNumber
 } from '$lib/format/numbers';
 import { formatClock, formatClockHour, formatHours, formatMinutes } from '$lib/format/time';
 import type { AssessmentInputs, AssessmentResult } from '$lib/schemas/assessments';
 import type { MakerCaution, ReportDerivation, ReportLine, ReportQuestion } from '$lib/schemas/reports';
+import { guardOf } from '$lib/thermal/chemistries';
 import { describeAnswer, questionsFor } from '$lib/thermal/survey';
 import { listAssumptions } from '$lib/thermal/survey/answers';
 
@@ -37,19 +39,38 @@ function sayUnderBonnet(inputs: AssessmentInputs): string {
 	return underBonnetWords && !makerCaution(inputs) ? `${short}: “${underBonnetWords}”` : short;
 }
 
+/** What stands between it and its heat: the cut-offs of its BMS, or the limits of its maker. */
+function listGuard(battery: AssessmentInputs['battery']): ReportLine[] {
+	const guard = guardOf(battery);
+	if (guard.kind === 'heat-limits') {
+		const charger = guard.compensatesCharge
+			? 'lowers its voltage as the battery warms'
+			: 'does not follow the temperature';
+		return [
+			{ label: 'Use', value: `up to ${formatTemperature(guard.highestUseC)}; it has no BMS` },
+			{ label: 'Charging', value: `up to ${formatTemperature(guard.highestChargeC)}` },
+			{ label: 'Its charger', value: charger },
+			{ label: 'Rated life', value: `${writeNumber(guard.ratedLifeYears)} years at 25 °C` }
+		];
+	}
+	const pair = (cutC: number, resetC: number) =>
+		`off at ${formatTemperature(cutC)}, back at ${formatTemperature(resetC)}`;
+	return [
+		{ label: 'Supply', value: pair(guard.dischargeCutC, guard.dischargeResetC) },
+		{ label: 'Charging', value: pair(guard.chargeCutC, guard.chargeResetC) },
+		{ label: 'Its BMS measures', value: SENSOR_WORDS[guard.sensor].toLowerCase() }
+	];
+}
+
 export function listBattery(inputs: AssessmentInputs): ReportLine[] {
 	const { battery } = inputs;
 	const { maker, model, chemistry, capacityAh, lengthMm, widthMm, heightMm, massKg } = battery;
-	const pair = (cutC: number, resetC: number) =>
-		`off at ${formatTemperature(cutC)}, back at ${formatTemperature(resetC)}`;
 	const size = [lengthMm, widthMm, heightMm].map((each) => formatNumber(each)).join(' × ');
 	return [
 		{ label: 'Battery', value: `${maker} ${model}, ${formatAmpHours(capacityAh)}` },
 		{ label: 'Chemistry', value: CHEMISTRY_WORDS[chemistry] },
 		{ label: 'Size and mass', value: `${size} mm, ${formatWithUnit(massKg, 'kg', 1)}` },
-		{ label: 'Supply', value: pair(battery.dischargeCutC, battery.dischargeResetC) },
-		{ label: 'Charging', value: pair(battery.chargeCutC, battery.chargeResetC) },
-		{ label: 'Its BMS measures', value: SENSOR_WORDS[battery.sensor].toLowerCase() },
+		...listGuard(battery),
 		{ label: 'Under-bonnet use, says its maker', value: sayUnderBonnet(inputs) },
 		...(battery.dataSheet ? [{ label: 'Written in', value: battery.dataSheet }] : [])
 	];

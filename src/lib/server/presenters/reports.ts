@@ -34,7 +34,11 @@ export function presentReport(assessment: AssessmentView): AssessmentReport {
 	const { inputs, result } = assessment;
 	const { mount, place, hotDay, dayPlan } = inputs;
 	const campHour = result.legs.find(({ kind }) => kind === 'camp')?.fromHour ?? null;
-	const { headline, sentence } = describeVerdict({ ...result, campHour });
+	const { headline, sentence } = describeVerdict({
+		...result,
+		campHour,
+		chemistry: inputs.battery.chemistry
+	});
 	return {
 		...{ verdict: result.verdict, headline, sentence },
 		mount: `Mount ${mount.letter}: ${mount.name}. ${POSITION_LABELS[mount.survey.positionKind]}.`,

@@ -37,7 +37,7 @@ const INPUTS = {
 	battery: {
 		...{ maker: 'Emberlow', model: 'Slab 100', chemistry: 'lithium-iron-phosphate', capacityAh: 100 },
 		...{ sensor: 'cells', chargeCutC: 60, chargeResetC: 50, dischargeCutC: 80, dischargeResetC: 57 },
-		...{ autoReset: true, underBonnet: 'allowed', underBonnetWords: '' }
+		...{ cutDelayS: 5, autoReset: true, underBonnet: 'allowed', underBonnetWords: '' }
 	},
 	mount: { letter: 'B', name: 'Rear corner', survey: { positionKind: 'under-bonnet' } },
 	dayPlan: { startHour: 7, legs: [{ kind: 'drive', minutes: 380, towing: true }] },

@@ -1,15 +1,19 @@
 import { listCautions } from '$lib/format/cautions';
 import { formatDate } from '$lib/format/dates';
 import { describeVerdict, type VerdictFacts } from '$lib/format/describe-verdict';
+import { dayLimitsOf } from '$lib/format/heat-limits';
 import { formatNumber, formatTemperature } from '$lib/format/numbers';
 import { formatClock, formatClockHour, formatHours, sayHours } from '$lib/format/time';
 import type { AssessmentInputs, AssessmentResult } from '$lib/schemas/assessments';
 import type { SheetContent, SheetRibbon } from '$lib/schemas/sheets';
 import type { Verdict } from '$lib/schemas/verdicts';
+import { guardOf, type CutOffs, type HeatGuard } from '$lib/thermal/chemistries';
+import type { Sensor } from '$lib/thermal/types';
+import { listLeadAcidSheetFigures, sayLeadAcid } from './lead-acid-sheet';
 import { makerCaution } from './report-inputs';
 
 /** Changes with every change of the sheet's own words: an acknowledgement is tied to what was read. */
-export const SHEET_WORDS_VERSION = 2;
+export const SHEET_WORDS_VERSION = 3;
 
 /** What a sheet is written from. */
 export interface SheetSource {
@@ -23,6 +27,8 @@ export interface SheetSource {
 	/** The newest answer for each other position of the job. */
 	others: SheetContent['alternatives'];
 }
+
+type SheetFigure = SheetContent['figures'][number];
 
 const LATER_H = 0.75;
 const MINUTES_AN_HOUR = 60;
@@ -63,22 +69,38 @@ function sayWhyLater({ inputs, result }: SheetSource): string[] {
 	];
 }
 
-function saySwitchingOff({ inputs: { battery }, result }: SheetSource): string[] {
-	if (result.verdict !== 'cuts-out') return [];
-	const back = battery.autoReset
-		? `It switches on again by itself once it has cooled to ${formatTemperature(battery.dischargeResetC)}.`
+function saySwitchingOff({ dischargeCutC, dischargeResetC, autoReset }: CutOffs, verdict: Verdict): string[] {
+	if (verdict !== 'cuts-out') return [];
+	const back = autoReset
+		? `It switches on again by itself once it has cooled to ${formatTemperature(dischargeResetC)}.`
 		: 'It does not switch on again by itself: somebody has to do it once it has cooled.';
 	return [
-		`Going dark is how the battery guards itself: its own electronics switch it off at ${formatTemperature(battery.dischargeCutC)}, and everything that runs from it stops. ${back}`
+		`Going dark is how the battery guards itself: its own electronics switch it off at ${formatTemperature(dischargeCutC)}, and everything that runs from it stops. ${back}`
 	];
 }
 
-const ADVICE: Record<Verdict, string> = {
-	'rides-it-out': 'We recommend this position.',
-	'runs-close':
-		'We recommend this position, with little to spare: on a hotter or longer day than this one the fridge may go dark. Ask us what would give it more room.',
-	'cuts-out':
-		'On a day like this the position does not keep the fridge on. It goes ahead all the same, by a decision that is written here. Ask us about anything in it that is not clear to you.'
+/** What guards it from heat, and what it asks for in the warm. */
+function sayGuard({ inputs: { battery }, result }: SheetSource): string[] {
+	const guard = guardOf(battery);
+	if (guard.kind === 'cut-offs') return saySwitchingOff(guard, result.verdict);
+	return result.leadAcid ? sayLeadAcid(result.leadAcid) : [];
+}
+
+const DECIDED =
+	'It goes ahead all the same, by a decision that is written here. Ask us about anything in it that is not clear to you.';
+const ADVICE: Record<HeatGuard['kind'], Record<Verdict, string>> = {
+	'cut-offs': {
+		'rides-it-out': 'We recommend this position.',
+		'runs-close':
+			'We recommend this position, with little to spare: on a hotter or longer day than this one the fridge may go dark. Ask us what would give it more room.',
+		'cuts-out': `On a day like this the position does not keep the fridge on. ${DECIDED}`
+	},
+	'heat-limits': {
+		'rides-it-out': 'We recommend this position.',
+		'runs-close':
+			'We recommend this position, with little to spare: on a hotter or longer day than this one the battery may get hotter than its maker allows. Ask us what would give it more room.',
+		'cuts-out': `On a day like this the battery gets hotter here than its maker allows. ${DECIDED}`
+	}
 };
 
 function sayDark({ darkHours, cutAtHour, resetAtHour, darkSpans }: AssessmentResult): string {
@@ -96,22 +118,20 @@ function sayRoom({ headroomK }: AssessmentResult): string {
 	return headroomK < 1 ? 'less than 1 degree' : `${degrees} ${degrees === '1' ? 'degree' : 'degrees'}`;
 }
 
-const SWITCHES_OFF: Record<SheetSource['inputs']['battery']['sensor'], string> = {
+const SWITCHES_OFF: Record<Sensor, string> = {
 	cells: 'Switches itself off at',
 	board: 'Switches itself off when its electronics reach',
 	hotter: 'Switches itself off when its cells or electronics reach'
 };
 
-function listFigures({ inputs: { battery }, result }: SheetSource): SheetContent['figures'] {
+const sayHottest = ({ peakCellsC, peakAtHour }: AssessmentResult): SheetFigure => ({
+	label: 'Hottest inside the battery',
+	value: `${formatTemperature(peakCellsC)} at ${formatClockHour(peakAtHour)}`
+});
+
+function listDarkFigures({ sensor, dischargeCutC }: CutOffs, result: AssessmentResult): SheetFigure[] {
 	return [
-		{
-			label: 'Hottest inside the battery',
-			value: `${formatTemperature(result.peakCellsC)} at ${formatClockHour(result.peakAtHour)}`
-		},
-		{
-			label: SWITCHES_OFF[battery.sensor],
-			value: formatTemperature(battery.dischargeCutC)
-		},
+		{ label: SWITCHES_OFF[sensor], value: formatTemperature(dischargeCutC) },
 		{ label: 'Room to spare before that', value: sayRoom(result) },
 		{ label: 'Fridge dark', value: sayDark(result) },
 		{
@@ -121,13 +141,19 @@ function listFigures({ inputs: { battery }, result }: SheetSource): SheetContent
 	];
 }
 
+function listFigures({ inputs: { battery }, result }: SheetSource): SheetFigure[] {
+	const guard = guardOf(battery);
+	if (guard.kind === 'cut-offs') return [sayHottest(result), ...listDarkFigures(guard, result)];
+	const own = result.leadAcid ? listLeadAcidSheetFigures(result.leadAcid, sayRoom(result)) : [];
+	return [sayHottest(result), ...own];
+}
+
 function drawnFrom({ inputs: { battery, mount }, result }: SheetSource): SheetRibbon {
 	const { curves, legs, darkSpans, chargeSpans, peakCellsC, peakAtHour } = result;
-	const { dischargeCutC, dischargeResetC, chargeCutC, chargeResetC, sensor } = battery;
 	return {
 		...{ curves, legs, darkSpans, chargeSpans, peakCellsC, peakAtHour },
 		position: mount.survey.positionKind,
-		limits: { dischargeCutC, dischargeResetC, chargeCutC, chargeResetC, sensor }
+		limits: dayLimitsOf(battery)
 	};
 }
 
@@ -141,21 +167,25 @@ function sayMaker({ inputs }: SheetSource): string[] {
 export function writeSheetContent(source: SheetSource): SheetContent {
 	const { inputs, result, workshop, preparedBy, override, assessmentId } = source;
 	const { vehicle, battery } = inputs;
-	const { headline, sentence: summary } = describeVerdict(factsOf(result), 'customer');
+	const { headline, sentence: summary } = describeVerdict(
+		{ ...factsOf(result), chemistry: battery.chemistry },
+		'customer'
+	);
 	return {
 		...{ workshop, preparedBy, override, assessmentId },
 		preparedOn: formatDate(source.preparedAt),
 		jobNumber: inputs.jobNumber,
 		customerName: inputs.customerName,
 		vehicle: `${vehicle.make} ${vehicle.model}, ${vehicle.modelYear}`,
+		chemistry: battery.chemistry,
 		battery: `${battery.maker} ${battery.model}, ${formatNumber(battery.capacityAh)} Ah`,
 		mountName: inputs.mount.name,
 		placeName: inputs.place.name,
 		verdict: result.verdict,
 		headline,
 		summary,
-		paragraphs: [...sayMaker(source), sayTheDay(source), ...sayWhyLater(source), ...saySwitchingOff(source)],
-		advice: ADVICE[result.verdict],
+		paragraphs: [...sayMaker(source), sayTheDay(source), ...sayWhyLater(source), ...sayGuard(source)],
+		advice: ADVICE[guardOf(battery).kind][result.verdict],
 		alternatives: source.others,
 		figures: listFigures(source),
 		ribbon: drawnFrom(source),

@@ -12,7 +12,7 @@ export function presentSheetStatus(sheet: Sheet, letter: OutgoingMail, sentBy: s
 	const { id, recommendationId, sentTo, content, acknowledgement } = sheet;
 	return {
 		...{ id, recommendationId, sentTo, sentBy },
-		...{ mountName: content.mountName, verdict: content.verdict },
+		...{ mountName: content.mountName, verdict: content.verdict, chemistry: content.chemistry ?? '' },
 		createdAt: sheet.createdAt.toISOString(),
 		mail: letter.state,
 		mailAttempts: letter.attempts,
@@ -37,9 +37,9 @@ export function presentSheet(
 }
 
 export function presentMySheet({ id, content, createdAt, acknowledgement }: Sheet): MySheet {
-	const { vehicle, mountName, verdict, workshop } = content;
+	const { vehicle, mountName, verdict, chemistry = '', workshop } = content;
 	return {
-		...{ id, vehicle, mountName, verdict },
+		...{ id, vehicle, mountName, verdict, chemistry },
 		workshopName: workshop.name,
 		sentAt: createdAt.toISOString(),
 		acknowledgedAt: isoOrNull(acknowledgement?.createdAt)

@@ -68,6 +68,7 @@ async function assessOne(
 			mountId: mount.id,
 			bookId: book.id,
 			...columnsOf(result),
+			chemistry: inputs.battery.chemistry,
 			...{ inputs, inputsSha256, result },
 			createdBy: person.id
 		},

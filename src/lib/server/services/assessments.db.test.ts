@@ -2,9 +2,10 @@ import { describe, expect, it } from 'vitest';
 import { COOL_CABIN, addSurveyedMount, makeAssessableJob } from '../../../../tests/support/assessable-job';
 import { makeBareJob } from '../../../../tests/support/jobs';
 import { makeCrew, useTestDatabase } from '../../../../tests/support/services';
+import type { BatteryInput } from '$lib/schemas/batteries';
 import { ENGINE_VERSION } from '$lib/thermal';
 import { connection } from '../db/connection';
-import { Assessment, AuditEntry, DayPlan, Job, Mount } from '../db/models';
+import { Assessment, AuditEntry, BatteryRecord, DayPlan, Job, Mount } from '../db/models';
 import { canonicalJson, sha256 } from '../hash';
 import {
 	assessJob,
@@ -131,6 +132,77 @@ describe('an assessment', () => {
 		expect((await Job.findByPk(jobId))!.verdict).toBe('cuts-out');
 		expect((await getAssessment(installer, ofCabin!.id)).isCurrent).toBe(false);
 		expect((await listMountOutcomes(installer, jobId)).map(({ letter }) => letter)).toEqual(['A']);
+	});
+});
+
+/** No BMS: what its maker allows is all there is. */
+const AGM: Partial<BatteryInput> = {
+	...{ chemistry: 'lead-acid-agm', massKg: 28, internalResistanceMohm: 5, maxChargeA: 25 },
+	...{ sensor: null, cutDelayS: null, autoReset: null },
+	...{ chargeCutC: null, chargeResetC: null, dischargeCutC: null, dischargeResetC: null },
+	...{ highestChargeC: 50, highestUseC: 60, ratedLifeYears: 6, compensatesCharge: false }
+};
+
+describe('an assessment of a battery that nothing switches off', () => {
+	it('says how hot, how long and what its charger and its gas ask for, and can be made again', async () => {
+		const { installer } = await makeCrew();
+		const { hot } = await makeAssessableJob(installer, AGM);
+		const view = await assessMount(installer, { mountId: hot.id });
+		expect(view).toMatchObject({
+			chemistry: 'lead-acid-agm',
+			verdict: 'cuts-out',
+			cutAtHour: null,
+			darkHours: 0
+		});
+		expect(view.result.events).toEqual([]);
+		expect(view.result.leadAcid).toMatchObject({
+			useLimitC: 60,
+			chargeLimitC: 50,
+			chargerCompensates: false
+		});
+		expect(view.result.leadAcid!.hoursAboveUseLimit).toBeGreaterThan(0);
+		expect(view.headroomK).toBeCloseTo(60 - view.peakCellsC, 9);
+		expect(view.cautions).toEqual(expect.arrayContaining(['vent-valve-regulated', 'hot-charge']));
+		expect(await reproduceAssessment(installer, view.id)).toMatchObject({ same: true, inputsIntact: true });
+	});
+
+	it('goes out of date when a limit changes, though the day that was run is the same', async () => {
+		const { installer } = await makeCrew();
+		const { jobId, hot } = await makeAssessableJob(installer, AGM);
+		const before = await assessMount(installer, { mountId: hot.id });
+		const { batteryRecordId } = (await Job.findByPk(jobId))!;
+		await BatteryRecord.update({ highestUseC: 70 }, { where: { id: batteryRecordId! } });
+		expect((await getAssessment(installer, before.id)).isCurrent).toBe(false);
+		const after = await assessMount(installer, { mountId: hot.id });
+		expect(after.headroomK).toBeCloseTo(before.headroomK + 10, 9);
+		expect(canonicalJson(after.inputs.scenario)).toBe(canonicalJson(before.inputs.scenario));
+	});
+
+	it('tells the job by which words its verdict goes', async () => {
+		const { installer } = await makeCrew();
+		const { jobId } = await makeAssessableJob(installer, AGM);
+		await assessJob(installer, jobId);
+		expect((await Job.findByPk(jobId))!.assessedChemistry).toBe('lead-acid-agm');
+	});
+});
+
+describe('what stands in the database from before there were other chemistries', () => {
+	it('is shown and made again as it was', async () => {
+		const { installer } = await makeCrew();
+		const { hot } = await makeAssessableJob(installer);
+		const { id } = await assessMount(installer, { mountId: hot.id });
+		const { id: _id, ...row } = (await Assessment.findByPk(id))!.get({ plain: true });
+		const { highestChargeC, highestUseC, ratedLifeYears, compensatesCharge, ...battery } = row.inputs.battery;
+		expect([highestChargeC, highestUseC, ratedLifeYears, compensatesCharge]).toEqual([
+			null,
+			null,
+			null,
+			null
+		]);
+		const inputs = { ...row.inputs, battery };
+		const old = await Assessment.create({ ...row, inputs, inputsSha256: sha256(canonicalJson(inputs)) });
+		expect(await reproduceAssessment(installer, old.id)).toMatchObject({ same: true, inputsIntact: true });
+		expect(await getAssessment(installer, old.id)).toMatchObject({ isCurrent: true, verdict: 'cuts-out' });
 	});
 });
 

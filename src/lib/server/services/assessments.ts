@@ -1,7 +1,14 @@
 import { listCautions } from '$lib/format/cautions';
-import type { AssessmentRow, AssessmentView, MountOutcome, Reproduction } from '$lib/schemas/assessments';
+import type {
+	AssessmentInputs,
+	AssessmentRow,
+	AssessmentView,
+	MountOutcome,
+	Reproduction
+} from '$lib/schemas/assessments';
 import type { SignedInPerson } from '$lib/schemas/people';
 import { ENGINE_VERSION } from '$lib/thermal';
+import { heatLimitsOf } from '$lib/thermal/chemistries';
 import { Assessment, CoefficientBook, Job, Mount, Person } from '../db/models';
 import { inTransaction } from '../db/transaction';
 import { AppError, notFound } from '../errors';
@@ -26,7 +33,7 @@ async function findAssessment(person: SignedInPerson, assessmentId: number): Pro
 	return assessment;
 }
 
-/** Whether assessing its mount now would run the very same scenario on the same engine. */
+/** Whether assessing its mount now would run the very same scenario on the same engine, and judge it by the same limits. */
 async function isCurrent(person: SignedInPerson, assessment: Assessment): Promise<boolean> {
 	if (assessment.engineVersion !== ENGINE_VERSION) return false;
 	const { workshopId } = person;
@@ -35,7 +42,9 @@ async function isCurrent(person: SignedInPerson, assessment: Assessment): Promis
 	const parts = await findJobParts(await findJob(person, assessment.jobId));
 	if (!isAssessable(parts, mount)) return false;
 	const now = gatherInputs(parts, mount, await bookInForce(person));
-	return canonicalJson(now.scenario) === canonicalJson(assessment.inputs.scenario);
+	const judged = ({ scenario, battery }: AssessmentInputs): string =>
+		canonicalJson({ scenario, limits: heatLimitsOf(battery) });
+	return judged(now) === judged(assessment.inputs);
 }
 
 async function show(person: SignedInPerson, assessment: Assessment): Promise<AssessmentView> {

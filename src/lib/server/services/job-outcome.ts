@@ -39,6 +39,7 @@ export async function updateJobOutcome(
 ): Promise<void> {
 	const speaking = await findSpeaking(job.id);
 	const { verdict = null, headroomK = null } = speaking ?? {};
+	const assessed = speaking ? { assessedChemistry: speaking.chemistry } : {};
 	const reached = stage ?? (job.stage === 'survey' && speaking ? 'assessed' : job.stage);
-	await job.update({ verdict, headroomK, stage: reached }, { transaction });
+	await job.update({ verdict, headroomK, ...assessed, stage: reached }, { transaction });
 }

@@ -3,6 +3,7 @@ import type { AssessmentInputs } from '$lib/schemas/assessments';
 import type { Outlook } from '$lib/schemas/outlooks';
 import type { SignedInPerson } from '$lib/schemas/people';
 import { parseScenario } from '$lib/thermal';
+import { wearOf } from '$lib/thermal/chemistries';
 import {
 	FULL_EFFORT,
 	makeOutlook,
@@ -52,7 +53,7 @@ async function requestFor(assessment: Assessment, effort: OutlookEffort): Promis
 	return {
 		scenario: parseScenario(inputs.scenario),
 		year: touringOf(inputs),
-		wear: { law: inputs.battery.chemistry },
+		wear: wearOf(inputs.battery),
 		offers: offers.map(({ key, cost, hours, offered }) => ({ key, cost, hours, offered })),
 		moneyPerHour,
 		cable: cableOf(inputs),

@@ -1,4 +1,5 @@
 import { Op } from 'sequelize';
+import { sayVerdict } from '$lib/format/verdict';
 import type { AssessmentView, MountOutcome } from '$lib/schemas/assessments';
 import type { SignedInPerson } from '$lib/schemas/people';
 import type {
@@ -30,21 +31,21 @@ async function show(recommendation: Recommendation): Promise<RecommendationView>
 }
 
 const OVERRIDE_WORDS = {
-	decidedBy: 'Say who decided to go ahead although it cuts out.',
-	reason: 'Say why it goes ahead although it cuts out.'
+	decidedBy: (verdict: string) => `Say who decided to go ahead although it ${verdict}.`,
+	reason: (verdict: string) => `Say why it goes ahead although it ${verdict}.`
 } as const;
 /** Less is no name and no reason: both are kept for good, and the customer reads them. */
 const FEWEST_CHARACTERS = { decidedBy: 3, reason: 10 } as const;
 
 /** Against "cuts out", the two answers that it takes; for any other verdict, nobody decides against anything. */
-function readOverride({ verdict }: AssessmentView, input: RecommendationInput) {
+function readOverride({ verdict, chemistry }: AssessmentView, input: RecommendationInput) {
 	if (verdict !== 'cuts-out') return { againstVerdict: false, decidedBy: null, reason: null };
 	const decidedBy = input.decidedBy?.trim() ?? '';
 	const reason = input.reason?.trim() ?? '';
 	const given = { decidedBy, reason };
 	const missing: FieldProblem[] = (['decidedBy', 'reason'] as const)
 		.filter((path) => given[path].length < FEWEST_CHARACTERS[path])
-		.map((path) => ({ path, message: OVERRIDE_WORDS[path] }));
+		.map((path) => ({ path, message: OVERRIDE_WORDS[path](sayVerdict(verdict, chemistry)) }));
 	if (missing.length > 0) throw new AppError('invalid_input', missing[0]!.message, missing);
 	return { againstVerdict: true, decidedBy, reason };
 }

@@ -27,7 +27,7 @@ export async function readSheetSource(
 		result: assessment.result,
 		override: againstVerdict ? { decidedBy: decidedBy ?? '', reason: reason ?? '' } : null,
 		others: others.flatMap(({ name, assessment: other }) =>
-			other ? [{ mountName: name, verdict: other.verdict }] : []
+			other ? [{ mountName: name, verdict: other.verdict, chemistry: other.chemistry }] : []
 		)
 	};
 }

@@ -109,7 +109,7 @@ export async function findStandings(
 	});
 	const assessments = await Assessment.findAll({
 		attributes: [
-			...['id', 'mountId', 'verdict', 'headroomK', 'createdAt', 'inputs'],
+			...['id', 'mountId', 'chemistry', 'verdict', 'headroomK', 'createdAt', 'inputs'],
 			...['bookId', 'engineVersion']
 		],
 		where: { id: { [Op.in]: newest.map((each) => each.id) } },

@@ -1,4 +1,5 @@
 import { lineOf, type CurvePoint, type RibbonFrame } from './frame';
+import { watchesBoardAlone } from './limit-rows';
 import type { Ink } from './marks';
 import type { RibbonData } from './ribbon-data';
 
@@ -14,7 +15,7 @@ export interface DrawnCurve {
 
 /** The curves of one day, from the back to the front. The board is drawn where the BMS watches it. */
 export function drawCurves(frame: RibbonFrame, data: RibbonData): DrawnCurve[] {
-	const { curves, air, limits } = data;
+	const { curves, air } = data;
 	const scale = frame.spec.cellsPx / 4;
 	const thin = 1.15 * Math.max(scale, 0.85);
 	const rows: (Omit<DrawnCurve, 'line'> & { valuesC: number[] })[] = [
@@ -37,7 +38,7 @@ export function drawCurves(frame: RibbonFrame, data: RibbonData): DrawnCurve[] {
 			ink: 'ink'
 		}
 	];
-	if (limits.sensor === 'board') {
+	if (watchesBoardAlone(data)) {
 		const board = { name: 'board', word: 'BMS board', valuesC: curves.boardC, dash: [8, 3, 1.5, 3] } as const;
 		rows.splice(3, 0, { ...board, dash: [...board.dash], widthPx: thin * 1.25, ink: 'ink' });
 	}

@@ -29,6 +29,8 @@ const DAYS = {
 	hot: sampleDay({ band: true }),
 	cool: sampleDay({ exposure: 0.5 }),
 	board: sampleDay({ sensor: 'board' }),
+	'no BMS': sampleDay({ limits: { highestUseC: 60, highestChargeC: 50 } }),
+	'limits close by': sampleDay({ limits: { highestUseC: 60, highestChargeC: 59 } }),
 	'never back': sampleDay({ exposure: 1.3, legs: TOURING_LEGS.slice(0, -1) }),
 	'three days': sampleDay({ legs: [...TOURING_LEGS, ...TOURING_LEGS, ...TOURING_LEGS] }),
 	'half an hour': sampleDay({ legs: TOURING_LEGS.slice(2, 3) })
@@ -83,6 +85,14 @@ describe('the drawing', () => {
 	it('shows the charge limits only where heat stops the charge', () => {
 		expect(svgOf(DAYS.hot)).toContain('charge stops at');
 		expect(svgOf(DAYS.cool)).not.toContain('charge stops at');
+	});
+
+	it('shows how hot a battery without a BMS may be, and nothing that would switch it off', () => {
+		const svg = svgOf(DAYS['no BMS']);
+		expect(svg).toContain('too hot above');
+		expect(svg).toContain('no charge above');
+		expect(svg).not.toMatch(/dark at|comes back|charge stops/);
+		expect(svgOf(DAYS['no BMS'], 'phone')).toContain('too hot');
 	});
 });
 
@@ -250,6 +260,11 @@ describe('what a reader is told', () => {
 		);
 		expect(describeRibbon(DAYS.cool)).toContain('never goes dark');
 		expect(describeRibbon(DAYS['never back'])).toContain('to the end of the day');
+	});
+	it('is the limits of its maker where nothing switches the battery off', () => {
+		const words = describeRibbon(DAYS['no BMS']);
+		expect(words).toMatch(/Nothing switches this battery off\. It is too hot above 60\u202F°C/);
+		expect(words).not.toContain('dark');
 	});
 	it('is one reading an hour, and the start and the end', () => {
 		expect(

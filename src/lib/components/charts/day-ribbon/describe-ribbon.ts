@@ -1,3 +1,4 @@
+import { isUseLimits } from '../../../format/heat-limits';
 import { formatTemperature } from '../../../format/numbers';
 import { formatClock, formatClockHour } from '../../../format/time';
 import { endHourOf, hourAt, valueAt, type RibbonData, type RibbonLeg } from './ribbon-data';
@@ -5,14 +6,12 @@ import { legWords } from './strip';
 
 /** The picture in sentences, for whoever cannot see it. */
 export function describeRibbon(data: RibbonData): string {
-	const { curves, peakCellsC, peakAtHour, limits } = data;
+	const { curves, peakCellsC, peakAtHour } = data;
 	const from = formatClock(curves.startHour);
 	const until = formatClockHour(endHourOf(curves));
 	const day = `Temperatures from ${from} to ${until}.`;
 	const peak = `The cells are hottest at ${formatClockHour(peakAtHour)} with ${formatTemperature(peakCellsC)}.`;
-	return [day, peak, describeDark(data), describeLimits(limits.dischargeCutC, limits.dischargeResetC)].join(
-		' '
-	);
+	return [day, peak, describeGuard(data)].join(' ');
 }
 
 function describeDark({ darkSpans }: RibbonData): string {
@@ -25,8 +24,16 @@ function describeDark({ darkSpans }: RibbonData): string {
 	return `It is dark ${spans.join(' and ')}.`;
 }
 
-const describeLimits = (cutC: number, resetC: number): string =>
-	`It goes dark at ${formatTemperature(cutC)} and comes back at ${formatTemperature(resetC)}.`;
+/** What its limits do: those of a BMS switch it off, those of a maker only say how hot is too hot. */
+function describeGuard(data: RibbonData): string {
+	const { limits } = data;
+	if (isUseLimits(limits)) {
+		const [use, charge] = [limits.highestUseC, limits.highestChargeC].map((tempC) => formatTemperature(tempC));
+		return `Nothing switches this battery off. It is too hot above ${use}, and is not to be charged above ${charge}.`;
+	}
+	const [cut, reset] = [limits.dischargeCutC, limits.dischargeResetC].map((tempC) => formatTemperature(tempC));
+	return `${describeDark(data)} It goes dark at ${cut} and comes back at ${reset}.`;
+}
 
 /** Everything the ribbon says at one moment. */
 export interface RibbonReading {

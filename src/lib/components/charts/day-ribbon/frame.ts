@@ -1,5 +1,6 @@
 import { formatHourTick } from '../../../format/time';
 import { simplifyLine, type Box, type Point } from './geometry';
+import { listLimits, watchesBoardAlone } from './limit-rows';
 import { endHourOf, hourAt, type RibbonData } from './ribbon-data';
 import { estimateTextWidth } from './text-width';
 
@@ -203,7 +204,8 @@ export function spanOf(days: readonly RibbonData[]): RibbonSpan {
 	return { fromHour, toHour, minC, maxC: Math.max(maxC, minC + TEMP_STEP_C) };
 }
 
-function extremesOf({ curves, air, limits, chargeSpans, band }: RibbonData): { low: number; high: number } {
+function extremesOf(data: RibbonData): { low: number; high: number } {
+	const { curves, air, band } = data;
 	const lines = [
 		curves.ambientC,
 		curves[air.curve],
@@ -212,9 +214,8 @@ function extremesOf({ curves, air, limits, chargeSpans, band }: RibbonData): { l
 		band?.lowC ?? [],
 		band?.highC ?? []
 	];
-	if (limits.sensor === 'board') lines.push(curves.boardC);
-	const marked = [limits.dischargeResetC, limits.dischargeCutC];
-	if (chargeSpans.length) marked.push(limits.chargeCutC, limits.chargeResetC);
+	if (watchesBoardAlone(data)) lines.push(curves.boardC);
+	const marked = listLimits(data).map(({ tempC }) => tempC);
 	let [low, high] = [Math.min(...marked), Math.max(...marked)];
 	for (const valuesC of lines) {
 		for (const tempC of valuesC) {

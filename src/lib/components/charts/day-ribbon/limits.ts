@@ -1,5 +1,6 @@
 import { formatTemperature } from '../../../format/numbers';
 import type { RibbonFrame } from './frame';
+import { listLimits, type LimitRow } from './limit-rows';
 import type { Mark } from './marks';
 import type { RibbonData } from './ribbon-data';
 
@@ -14,43 +15,19 @@ export interface LimitLine {
 
 const COMES_BACK_DASH = [1.6, 3.6];
 
-/** The battery's limits; those of charging only where heat stops it, and where their words have room. */
+/** The battery's limits; of two at one place the lighter is left out, and extra ones where their words have no room. */
 export function layOutLimits(frame: RibbonFrame, data: RibbonData): LimitLine[] {
-	const { dischargeCutC, dischargeResetC, chargeCutC, chargeResetC } = data.limits;
-	const words = (long: string, short: string, tempC: number) => {
-		const figure = formatTemperature(tempC);
-		return frame.spec.limitWords === 'short' ? [short, figure] : [`${long} ${figure}`];
+	const rows = listLimits(data);
+	const isShown = ({ tempC, line, isExtra }: LimitRow): boolean => {
+		if (!isExtra) return true;
+		const isTaken = rows.some((other) => !other.isExtra && other.line === line && other.tempC === tempC);
+		return frame.spec.limitWords === 'long' && !isTaken;
 	};
-	const limits: LimitLine[] = [
-		{
-			y: frame.y(dischargeCutC),
-			words: words('goes dark at', 'dark at', dischargeCutC),
-			dash: [],
-			ink: 'ink'
-		},
-		{
-			y: frame.y(dischargeResetC),
-			words: words('comes back at', 'back at', dischargeResetC),
-			dash: COMES_BACK_DASH,
-			ink: 'ink'
-		}
-	];
-	if (!data.chargeSpans.length || frame.spec.limitWords !== 'long') return limits;
-	if (chargeCutC !== dischargeCutC)
-		limits.push({
-			y: frame.y(chargeCutC),
-			words: [`charge stops at ${formatTemperature(chargeCutC)}`],
-			dash: [],
-			ink: 'muted'
-		});
-	if (chargeResetC !== dischargeResetC)
-		limits.push({
-			y: frame.y(chargeResetC),
-			words: [`charges again at ${formatTemperature(chargeResetC)}`],
-			dash: COMES_BACK_DASH,
-			ink: 'muted'
-		});
-	return limits;
+	return rows.filter(isShown).map(({ tempC, long, short, line, ink }) => {
+		const figure = formatTemperature(tempC);
+		const words = frame.spec.limitWords === 'short' ? [short, figure] : [`${long} ${figure}`];
+		return { y: frame.y(tempC), words, dash: line === 'solid' ? [] : COMES_BACK_DASH, ink };
+	});
 }
 
 export const drawLimits = ({ plot }: RibbonFrame, limits: LimitLine[]): Mark[] =>

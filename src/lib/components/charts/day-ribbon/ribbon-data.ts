@@ -1,3 +1,4 @@
+import type { DayLimits } from '../../../format/heat-limits';
 import type { LegKind } from '../../../schemas/day-plans';
 import type { PositionKind } from '../../../schemas/survey';
 import type { AssessmentCurves, DoneAssessment, HourSpan, LegSpan } from '../../../thermal/assess/types';
@@ -43,7 +44,8 @@ export interface RibbonData {
 	legs: RibbonLeg[];
 	darkSpans: HourSpan[];
 	chargeSpans: HourSpan[];
-	limits: RibbonLimits;
+	/** The battery's own limits, °C. */
+	limits: DayLimits;
 	peakCellsC: number;
 	peakAtHour: number;
 	air: RibbonAir;
@@ -63,7 +65,7 @@ export function nameLeg(leg: LegSpan): LegKind {
 /** An assessment and the battery's limits as the ribbon wants them. */
 export function toRibbonData(
 	assessment: DoneAssessment,
-	limits: RibbonLimits,
+	limits: DayLimits,
 	position: PositionKind,
 	band: RibbonBand | null = null
 ): RibbonData {

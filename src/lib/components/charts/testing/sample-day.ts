@@ -1,3 +1,4 @@
+import type { CutOffLimits, UseLimits } from '../../../format/heat-limits';
 import type { HourSpan, LegSpan } from '../../../thermal/assess/types';
 import type { RibbonData, RibbonLeg } from '../day-ribbon/ribbon-data';
 
@@ -62,7 +63,8 @@ export interface SampleSettings {
 	/** How much of the bay's heat reaches the case, 0…1. */
 	exposure?: number;
 	band?: boolean;
-	sensor?: RibbonData['limits']['sensor'];
+	sensor?: CutOffLimits['sensor'];
+	limits?: UseLimits;
 	stepMin?: number;
 }
 
@@ -76,9 +78,13 @@ export function sampleDay(settings: SampleSettings = {}): RibbonData {
 	return {
 		curves,
 		legs: spans,
-		darkSpans: latch(curves.cellsC, startHour, stepMin, LIMITS.dischargeCutC, LIMITS.dischargeResetC),
-		chargeSpans: latch(curves.cellsC, startHour, stepMin, LIMITS.chargeCutC, LIMITS.chargeResetC),
-		limits: { ...LIMITS, sensor: settings.sensor ?? 'cells' },
+		darkSpans: settings.limits
+			? []
+			: latch(curves.cellsC, startHour, stepMin, LIMITS.dischargeCutC, LIMITS.dischargeResetC),
+		chargeSpans: settings.limits
+			? []
+			: latch(curves.cellsC, startHour, stepMin, LIMITS.chargeCutC, LIMITS.chargeResetC),
+		limits: settings.limits ?? { ...LIMITS, sensor: settings.sensor ?? 'cells' },
 		peakCellsC,
 		peakAtHour: startHour + (curves.cellsC.indexOf(peakCellsC) * stepMin) / 60,
 		air: { word: 'bay air', curve: 'bayC' },

@@ -36,6 +36,9 @@ import { migration as m041 } from './041-assessment-outlooks-no-update';
 import { migration as m042 } from './042-assessment-outlooks-no-delete';
 import { migration as m043 } from './043-remedy-lists';
 import { migration as m044 } from './044-mounts-cable';
+import { migration as m050 } from './050-batteries-without-bms';
+import { migration as m051 } from './051-assessments-chemistry';
+import { migration as m052 } from './052-jobs-chemistry';
 import type { Migration } from '../migrate';
 
 /** Every migration, in the order in which they run; each is one DDL step that may run again. */
@@ -77,5 +80,8 @@ export const migrations: Migration[] = [
 	m041,
 	m042,
 	m043,
-	m044
+	m044,
+	m050,
+	m051,
+	m052
 ];

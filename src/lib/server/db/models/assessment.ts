@@ -5,6 +5,7 @@ import {
 	type InferCreationAttributes,
 	type Sequelize
 } from 'sequelize';
+import type { Chemistry } from '$lib/schemas/batteries';
 import type { AssessmentInputs, AssessmentResult } from '$lib/schemas/assessments';
 import type { Verdict } from '$lib/schemas/verdicts';
 import { id, json, moment, number, optionalNumber, reference, text, writtenOnce } from './base';
@@ -19,6 +20,7 @@ export class Assessment extends Model<InferAttributes<Assessment>, InferCreation
 	declare inputs: AssessmentInputs;
 	declare inputsSha256: string;
 	declare result: AssessmentResult;
+	declare chemistry: CreationOptional<Chemistry>;
 	declare verdict: Verdict;
 	declare headroomK: number;
 	declare peakCellsC: number;
@@ -43,6 +45,7 @@ export function initAssessment(sequelize: Sequelize): void {
 			inputs: json,
 			inputsSha256: { ...text, field: 'inputs_sha256' },
 			result: json,
+			chemistry: { ...text, defaultValue: 'lithium-iron-phosphate' },
 			verdict: text,
 			headroomK: number,
 			peakCellsC: number,

@@ -6,7 +6,19 @@ import {
 	type Sequelize
 } from 'sequelize';
 import type { Chemistry, Sensor, UnderBonnetWord } from '$lib/schemas/batteries';
-import { edited, flag, id, moment, number, reference, text, textOrEmpty, whole } from './base';
+import {
+	edited,
+	id,
+	moment,
+	number,
+	optionalFlag,
+	optionalNumber,
+	optionalText,
+	reference,
+	text,
+	textOrEmpty,
+	whole
+} from './base';
 
 export class BatteryRecord extends Model<
 	InferAttributes<BatteryRecord>,
@@ -24,13 +36,19 @@ export class BatteryRecord extends Model<
 	declare massKg: number;
 	declare internalResistanceMohm: number;
 	declare maxChargeA: number;
-	declare sensor: Sensor;
-	declare chargeCutC: number;
-	declare chargeResetC: number;
-	declare dischargeCutC: number;
-	declare dischargeResetC: number;
-	declare cutDelayS: number;
-	declare autoReset: boolean;
+	/** What a BMS does; null for a battery without one. */
+	declare sensor: CreationOptional<Sensor | null>;
+	declare chargeCutC: CreationOptional<number | null>;
+	declare chargeResetC: CreationOptional<number | null>;
+	declare dischargeCutC: CreationOptional<number | null>;
+	declare dischargeResetC: CreationOptional<number | null>;
+	declare cutDelayS: CreationOptional<number | null>;
+	declare autoReset: CreationOptional<boolean | null>;
+	/** What a maker allows a battery that nothing switches off; null for one with a BMS. */
+	declare highestChargeC: CreationOptional<number | null>;
+	declare highestUseC: CreationOptional<number | null>;
+	declare ratedLifeYears: CreationOptional<number | null>;
+	declare compensatesCharge: CreationOptional<boolean | null>;
 	declare underBonnet: UnderBonnetWord;
 	declare underBonnetWords: CreationOptional<string>;
 	declare dataSheet: CreationOptional<string>;
@@ -54,13 +72,17 @@ export function initBatteryRecord(sequelize: Sequelize): void {
 			massKg: number,
 			internalResistanceMohm: number,
 			maxChargeA: number,
-			sensor: text,
-			chargeCutC: number,
-			chargeResetC: number,
-			dischargeCutC: number,
-			dischargeResetC: number,
-			cutDelayS: number,
-			autoReset: flag,
+			sensor: optionalText,
+			chargeCutC: optionalNumber,
+			chargeResetC: optionalNumber,
+			dischargeCutC: optionalNumber,
+			dischargeResetC: optionalNumber,
+			cutDelayS: optionalNumber,
+			autoReset: optionalFlag,
+			highestChargeC: optionalNumber,
+			highestUseC: optionalNumber,
+			ratedLifeYears: optionalNumber,
+			compensatesCharge: optionalFlag,
 			underBonnet: text,
 			underBonnetWords: textOrEmpty,
 			dataSheet: textOrEmpty,

@@ -6,6 +6,7 @@ import {
 	type NonAttribute,
 	type Sequelize
 } from 'sequelize';
+import type { Chemistry } from '$lib/schemas/batteries';
 import type { Verdict } from '$lib/schemas/verdicts';
 import type { JobStage } from '$lib/schemas/jobs';
 import type { BatteryRecord } from './battery-record';
@@ -41,6 +42,8 @@ export class Job extends Model<InferAttributes<Job>, InferCreationAttributes<Job
 	declare daysOnRoad: CreationOptional<number[] | null>;
 	declare stage: CreationOptional<JobStage>;
 	declare verdict: CreationOptional<Verdict | null>;
+	/** Of the battery that the verdict is about. */
+	declare assessedChemistry: CreationOptional<Chemistry>;
 	declare headroomK: CreationOptional<number | null>;
 	declare note: CreationOptional<string>;
 	declare createdBy: number;
@@ -69,6 +72,7 @@ export function initJob(sequelize: Sequelize): void {
 			daysOnRoad: optionalJson,
 			stage: { ...text, defaultValue: 'survey' },
 			verdict: optionalText,
+			assessedChemistry: { ...text, defaultValue: 'lithium-iron-phosphate' },
 			headroomK: optionalNumber,
 			note: textOrEmpty,
 			createdBy: reference,

@@ -1,6 +1,7 @@
 import { redirect } from '@sveltejs/kit';
 import { drawRibbonPictures } from '$lib/components/charts/day-ribbon/render-day-ribbon';
 import { toRibbonData } from '$lib/components/charts/day-ribbon/ribbon-data';
+import { dayLimitsOf } from '$lib/format/heat-limits';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { pageId } from '$lib/server/http/page-id';
 import { presentReport } from '$lib/server/presenters/reports';
@@ -20,7 +21,7 @@ export const load: PageServerLoad = async (event) => {
 	const { id, jobId, mountId, inputs, result, isCurrent, bookId, headroomK } = assessment;
 	const outcomes = await orPageError(listMountOutcomes(person, jobId));
 	const recommendation = await orPageError(newestRecommendation(person, jobId));
-	const ribbon = toRibbonData(result, inputs.battery, inputs.mount.survey.positionKind);
+	const ribbon = toRibbonData(result, dayLimitsOf(inputs.battery), inputs.mount.survey.positionKind);
 	return {
 		...{ id, jobId, mountId, isCurrent, bookId, headroomK, ribbon },
 		jobNumber: inputs.jobNumber,

@@ -2,6 +2,7 @@ import { batteryChangeSchema } from '$lib/schemas/batteries';
 import { saveEdited } from '$lib/server/http/edit-form';
 import { loadForm } from '$lib/server/http/forms';
 import { guard, orPageError } from '$lib/server/http/guard';
+import { redrawOr } from '$lib/server/http/redraw-form';
 import { pageId } from '$lib/server/http/page-id';
 import { getBattery, updateBattery } from '$lib/server/services/batteries';
 import type { Actions, PageServerLoad } from './$types';
@@ -13,14 +14,17 @@ export const load: PageServerLoad = async (event) => {
 	return { battery, form, isSaved: event.url.searchParams.has('saved') };
 };
 
+const FORM = { action: 'batteries.write', schema: batteryChangeSchema } as const;
+
 export const actions: Actions = {
 	default: (event) => {
 		const id = pageId(event.params.batteryId);
-		return saveEdited(event, {
-			action: 'batteries.write',
-			schema: batteryChangeSchema,
-			save: async (person, data) => `/batteries/${(await updateBattery(person, id, data)).id}?saved`,
-			newest: (person) => getBattery(person, id)
-		});
+		return redrawOr(event, FORM, () =>
+			saveEdited(event, {
+				...FORM,
+				save: async (person, data) => `/batteries/${(await updateBattery(person, id, data)).id}?saved`,
+				newest: (person) => getBattery(person, id)
+			})
+		);
 	}
 };

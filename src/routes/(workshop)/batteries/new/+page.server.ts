@@ -1,6 +1,7 @@
 import { batteryInputSchema, CHEMISTRIES } from '$lib/schemas/batteries';
 import { idSchema } from '$lib/schemas/fields';
 import { loadForm, saveForm } from '$lib/server/http/forms';
+import { redrawOr } from '$lib/server/http/redraw-form';
 import { guard } from '$lib/server/http/guard';
 import { createBattery } from '$lib/server/services/batteries';
 import type { Actions, PageServerLoad } from './$types';
@@ -20,15 +21,18 @@ export const load: PageServerLoad = async (event) => {
 	return { form, jobId: waitingJob(event.url) };
 };
 
+const FORM = { action: 'batteries.write', schema: batteryInputSchema } as const;
+
 export const actions: Actions = {
 	default: (event) =>
-		saveForm(event, {
-			action: 'batteries.write',
-			schema: batteryInputSchema,
-			save: async (person, data) => {
-				const { id } = await createBattery(person, data);
-				const jobId = waitingJob(event.url);
-				return jobId === null ? `/batteries/${id}?saved` : `/jobs/${jobId}/battery?chosen=${id}`;
-			}
-		})
+		redrawOr(event, FORM, () =>
+			saveForm(event, {
+				...FORM,
+				save: async (person, data) => {
+					const { id } = await createBattery(person, data);
+					const jobId = waitingJob(event.url);
+					return jobId === null ? `/batteries/${id}?saved` : `/jobs/${jobId}/battery?chosen=${id}`;
+				}
+			})
+		)
 };

@@ -1,5 +1,6 @@
 import { drawRibbonPictures } from '$lib/components/charts/day-ribbon/render-day-ribbon';
 import { toRibbonData } from '$lib/components/charts/day-ribbon/ribbon-data';
+import { dayLimitsOf } from '$lib/format/heat-limits';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { pageId } from '$lib/server/http/page-id';
 import { presentReport } from '$lib/server/presenters/reports';
@@ -13,7 +14,7 @@ export const load: PageServerLoad = async (event) => {
 		getRecommendationDocument(person, id)
 	);
 	const { inputs, result } = assessment;
-	const ribbon = toRibbonData(result, inputs.battery, inputs.mount.survey.positionKind);
+	const ribbon = toRibbonData(result, dayLimitsOf(inputs.battery), inputs.mount.survey.positionKind);
 	return {
 		...{ recommendation, workshop, others, ribbon },
 		customer: { name: inputs.customerName, ...customer },

@@ -2,6 +2,7 @@ import { redirect } from '@sveltejs/kit';
 import { spanOf } from '$lib/components/charts/day-ribbon/frame';
 import { renderDayRibbonSvg } from '$lib/components/charts/day-ribbon/render-day-ribbon';
 import { toRibbonData } from '$lib/components/charts/day-ribbon/ribbon-data';
+import { dayLimitsOf } from '$lib/format/heat-limits';
 import type { MountOutcome } from '$lib/schemas/assessments';
 import type { SignedInPerson } from '$lib/schemas/people';
 import { guard, orPageError } from '$lib/server/http/guard';
@@ -25,7 +26,11 @@ async function loadColumn(person: SignedInPerson, { letter, name, assessment }: 
 		verdict: view.verdict,
 		headroomK: view.headroomK,
 		isCurrent: view.isCurrent,
-		ribbon: toRibbonData(view.result, view.inputs.battery, view.inputs.mount.survey.positionKind),
+		ribbon: toRibbonData(
+			view.result,
+			dayLimitsOf(view.inputs.battery),
+			view.inputs.mount.survey.positionKind
+		),
 		chemistry: view.inputs.battery.chemistry
 	};
 }

@@ -15,9 +15,12 @@ async function loadChosen(person: SignedInPerson, jobId: number, asked: string |
 	if (asked === null) return null;
 	const assessment = await getAssessment(person, pageId(asked));
 	if (assessment.jobId !== jobId) error(404, { message: 'There is no such assessment here.' });
-	const { id, mountId, mountLetter, mountName, verdict, headroomK, isCurrent } = assessment;
+	const { id, mountId, mountLetter, mountName, chemistry, verdict, headroomK, isCurrent } = assessment;
 	const { sentence, maker } = presentReport(assessment);
-	return { id, mountId, mountLetter, mountName, verdict, headroomK, isCurrent, sentence, maker };
+	return {
+		...{ id, mountId, mountLetter, mountName, chemistry, verdict, headroomK, isCurrent },
+		...{ sentence, maker }
+	};
 }
 
 /** The recommendation that stands, with what its maker says and whether its assessment still holds. */

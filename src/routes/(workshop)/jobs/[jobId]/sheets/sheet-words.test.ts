@@ -4,7 +4,8 @@ import { listSheetFacts, sayLetter, saySheetState } from './sheet-words';
 
 const AT = '2026-03-04T12:00:00.000Z';
 const status = (changes: Partial<SheetStatus> = {}): SheetStatus => ({
-	...{ id: 1, recommendationId: 2, mountName: 'Rear corner', verdict: 'runs-close', sentTo: 'a@b.example' },
+	...{ id: 1, recommendationId: 2, mountName: 'Rear corner', verdict: 'runs-close' },
+	...{ chemistry: 'lithium-iron-phosphate', sentTo: 'a@b.example' },
 	...{ sentBy: 'Noor', createdAt: AT, mail: 'waiting', mailAttempts: 0, mailError: '', mailSentAt: null },
 	...{ linkFirstOpenedAt: null, withdrawnAt: null, acknowledgedAt: null, acknowledgedBy: null },
 	...changes
