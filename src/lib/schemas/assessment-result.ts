@@ -36,6 +36,29 @@ const legSchema = z.object({
 	bonnetOpen: z.boolean()
 });
 
+const hours = z.number().meta({ description: 'h' });
+const volts = z.number().meta({ description: 'V' });
+
+/** Of a battery that nothing switches off. */
+const leadAcidSchema = z
+	.object({
+		useLimitC: tempC,
+		chargeLimitC: tempC,
+		tooHotAtHour: hour.nullable(),
+		hoursAboveUseLimit: hours,
+		hoursAboveChargeLimit: hours.meta({ description: 'How long it is charged above that limit, h' }),
+		peakChargingC: tempC
+			.nullable()
+			.meta({ description: 'Hottest that it is charged at, °C; null without charge' }),
+		chargerCompensates: z.boolean(),
+		compensatedChargeV: volts.meta({ description: 'What the charger should give at the hottest, V' }),
+		uncompensatedChargeV: volts.meta({ description: 'What it gives at 25 °C, V' }),
+		freshAirM3PerH: z.number().meta({ description: 'For its hydrogen on boost charge by EN 50272-2, m³/h' }),
+		openingCm2: z.number().meta({ description: 'Each of two openings, one low and one high, cm²' }),
+		sparkFreeMm: z.number().meta({ description: 'No spark within this of its vents, mm' })
+	})
+	.meta({ description: 'Lead-acid alone: it has no BMS, never cuts out, and is judged by its limits' });
+
 /** What the engine answered, for the API's document; the engine's own type is what holds. */
 export const assessmentResultSchema = z.object({
 	status: z.literal('done'),
@@ -75,5 +98,6 @@ export const assessmentResultSchema = z.object({
 	energyMaxRelativeImbalance: z.number(),
 	steps: z.number().int(),
 	evaluations: z.number().int(),
-	hourly: z.array(z.record(z.string(), z.number().nullable()))
+	hourly: z.array(z.record(z.string(), z.number().nullable())),
+	leadAcid: leadAcidSchema.optional()
 }) as unknown as z.ZodType<DoneAssessment, DoneAssessment>;

@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import type { AssessmentInputs, AssessmentView } from '$lib/schemas/assessments';
 import { assessScenario } from '$lib/thermal/assess';
+import { heatLimitsOf } from '$lib/thermal/chemistries';
 import { DAY_PLAN_TEMPLATES, buildScenario, type SurveyAnswers } from '$lib/thermal/survey';
 import { presentReport } from './reports';
 
@@ -17,6 +18,13 @@ const BATTERY: AssessmentInputs['battery'] = {
 	...{ underBonnetWords: '', dataSheet: 'Invented for the tests' }
 };
 
+const AGM: Partial<AssessmentInputs['battery']> = {
+	...{ chemistry: 'lead-acid-agm', massKg: 28, internalResistanceMohm: 5, maxChargeA: 25 },
+	...{ sensor: null, cutDelayS: null, autoReset: null },
+	...{ chargeCutC: null, chargeResetC: null, dischargeCutC: null, dischargeResetC: null },
+	...{ highestChargeC: 50, highestUseC: 60, ratedLifeYears: 6, compensatesCharge: false }
+};
+
 function makeView(changes: { battery?: Partial<AssessmentInputs['battery']>; survey?: SurveyAnswers } = {}) {
 	const battery = { ...BATTERY, ...changes.battery };
 	const survey = changes.survey ?? HOT_CORNER;
@@ -31,7 +39,10 @@ function makeView(changes: { battery?: Partial<AssessmentInputs['battery']>; sur
 		...{ vehicle, battery, survey, dayPlan, hotDay },
 		...{ altitudeM: place.altitudeM, coefficients: {} }
 	});
-	const result = assessScenario(built.scenario, { legKinds: dayPlan.legs.map(({ kind }) => kind) });
+	const result = assessScenario(built.scenario, {
+		legKinds: dayPlan.legs.map(({ kind }) => kind),
+		heatLimits: heatLimitsOf(battery)
+	});
 	if (result.status === 'failed') throw new Error(result.reason);
 	return {
 		...{ id: 7, engineVersion: result.engineVersion, inputsSha256: 'ab'.repeat(32), assessedBy: 'Noor' },
@@ -78,6 +89,31 @@ describe('an assessment in words', () => {
 		const { figures } = presentReport(makeView({ battery: { autoReset: false } }));
 		const back = figures.find(({ label }) => label === 'Comes back');
 		expect(back).toMatchObject({ value: 'not within the plan', note: expect.stringContaining('somebody') });
+	});
+
+	it('gives the limits, the charging voltage and the gas of a battery that nothing switches off', () => {
+		const report = presentReport(makeView({ battery: AGM }));
+		expect(report.headline).toBe('Gets too hot');
+		expect(valueOf(report.figures, 'Headroom')).toMatch(/^−\d+\.\d K$/);
+		expect(valueOf(report.figures, 'Too hot')).toMatch(/ from \d\d:\d\d/);
+		expect(valueOf(report.figures, 'Charging voltage at the hottest')).toMatch(/^1[23]\.\d V$/);
+		expect(valueOf(report.figures, 'Fresh air while it charges')).toBe('0.24 m³/h');
+		expect(valueOf(report.battery, 'Use')).toBe('up to 60 °C; it has no BMS');
+		expect(valueOf(report.battery, 'Rated life')).toBe('6 years at 25 °C');
+		const said = JSON.stringify([report.sentence, report.figures, report.battery]);
+		expect(said).not.toMatch(/\bdark\b|cut.?off|[Cc]omes back|BMS measures/);
+	});
+
+	it('works the charging voltage out before the reader’s eyes', () => {
+		const view = makeView({ battery: AGM });
+		const line = presentReport(view).figures.find(({ label }) => label.startsWith('Charging voltage'));
+		const kelvin = Math.round(view.result.peakCellsC - 25);
+		expect(line?.note?.replace(/\u202F/g, ' ')).toContain(
+			`14.4 V at 25 °C, and 6 cells × −4 mV/K × ${kelvin} K`
+		);
+		expect(line?.note).toContain('The charger does not');
+		const seen = presentReport(makeView({ battery: { ...AGM, compensatesCharge: true } })).figures;
+		expect(JSON.stringify(seen)).toContain('The charger sees to it');
 	});
 
 	it('tells an answer from a value that was assumed', () => {

@@ -145,6 +145,63 @@ describe('the customer’s page', () => {
 		expect(cautions.map(({ title }) => title)).toContain('Toxic and flammable gas');
 	});
 
+	describe('of a battery that nothing switches off', () => {
+		const LEAD_ACID: NonNullable<AssessmentResult['leadAcid']> = {
+			...{ useLimitC: 60, chargeLimitC: 50, tooHotAtHour: 16.85, hoursAboveUseLimit: 2 },
+			...{ hoursAboveChargeLimit: 3.5, peakChargingC: 63, chargerCompensates: false },
+			...{ compensatedChargeV: 13.4, uncompensatedChargeV: 14.4 },
+			...{ freshAirM3PerH: 0.24, openingCm2: 6.72, sparkFreeMm: 267 }
+		};
+		const AGM = {
+			...{ chemistry: 'lead-acid-agm', highestChargeC: 50, highestUseC: 60 },
+			...{ ratedLifeYears: 6, compensatesCharge: false }
+		} as const;
+		const writeAgm = (result: Partial<AssessmentResult> = {}) =>
+			write({}, { ...STAYS_ON, peakCellsC: 66, headroomK: -6, leadAcid: LEAD_ACID, ...result }, AGM);
+
+		it('says when it gets too hot, and that the fridge stays on', () => {
+			const content = writeAgm();
+			expect(content).toMatchObject({ headline: 'Gets too hot', chemistry: 'lead-acid-agm' });
+			expect(content.summary).toContain('Nothing switches it off: the fridge stays on');
+			expect(content.advice).toContain('hotter here than its maker allows. It goes ahead all the same');
+			expect(figure(content, 'Its maker allows up to')).toBe('60 °C');
+			expect(figure(content, 'Hotter than that')).toBe('2 h, from 16:51');
+			expect(figure(content, 'Charged hotter than allowed')).toBe('3 h 30 min');
+			expect(content.ribbon.limits).toEqual({ highestUseC: 60, highestChargeC: 50 });
+		});
+
+		it('says what its charger and its gas ask for', () => {
+			const told = writeAgm().paragraphs.join(' ');
+			expect(told).toContain('about 13.4 V instead of 14.4 V. Its charger does not see to that by itself');
+			expect(told).toContain('two openings to the outside of at least 7 cm² each, one low and one high');
+			const compensated = writeAgm({ leadAcid: { ...LEAD_ACID, chargerCompensates: true } });
+			expect(compensated.paragraphs.join(' ')).toContain('Its charger sees to that by itself');
+		});
+
+		it('warns of its own gas, not of lithium’s', () => {
+			const titles = writeAgm().cautions.map(({ title }) => title);
+			expect(titles).toContain('Sealed is not gas-tight');
+			expect(titles).not.toContain('Toxic and flammable gas');
+		});
+
+		it.each(['rides-it-out', 'runs-close', 'cuts-out'] as const)(
+			'says nothing of the dark and no word of the trade (%s)',
+			(verdict) => {
+				const { summary, paragraphs, advice, figures } = writeAgm({ verdict });
+				const all = [
+					summary,
+					...paragraphs,
+					advice,
+					...figures.flatMap(({ label, value }) => [label, value])
+				];
+				expect(all.join(' ')).not.toMatch(
+					/\bBMS\b|headroom|\bcells?\b|\breset\b|\bK\b|\bAh\b|verdict|assess/i
+				);
+				expect(all.join(' ')).not.toMatch(/\bdark\b|switches itself off|comes back/i);
+			}
+		);
+	});
+
 	it.each(['rides-it-out', 'runs-close', 'cuts-out'] as const)(
 		'uses no word of the trade (%s)',
 		(verdict) => {

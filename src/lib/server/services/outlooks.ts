@@ -4,6 +4,8 @@ import type { Outlook } from '$lib/schemas/outlooks';
 import type { SignedInPerson } from '$lib/schemas/people';
 import { parseScenario } from '$lib/thermal';
 import { wearOf } from '$lib/thermal/chemistries';
+import { watchUseLimit } from '$lib/thermal/assess';
+import { heatLimitsOf, wearOf } from '$lib/thermal/chemistries';
 import {
 	FULL_EFFORT,
 	makeOutlook,
@@ -51,7 +53,7 @@ async function requestFor(assessment: Assessment, effort: OutlookEffort): Promis
 	const { id, workshopId, inputs, result } = assessment;
 	const { moneyPerHour, offers } = await remedyListOf(workshopId);
 	return {
-		scenario: parseScenario(inputs.scenario),
+		scenario: watchUseLimit(parseScenario(inputs.scenario), heatLimitsOf(inputs.battery)),
 		year: touringOf(inputs),
 		wear: wearOf(inputs.battery),
 		offers: offers.map(({ key, cost, hours, offered }) => ({ key, cost, hours, offered })),

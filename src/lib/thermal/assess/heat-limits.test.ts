@@ -4,8 +4,10 @@ import type { HeatLimits } from '../chemistries/guard';
 import { heatLimitsOf } from '../chemistries/guard';
 import { buildScenario } from '../survey/build-scenario';
 import type { SurveyAnswers, SurveyInputs } from '../survey/types';
+import { parseScenario } from '../vehicle/parse-scenario';
+import { OutcomeRunner } from '../vehicle/outcome-run';
 import { assessScenario } from './assess-scenario';
-import { judgeHeat } from './heat-limits';
+import { judgeHeat, watchUseLimit } from './heat-limits';
 import type { DoneAssessment } from './types';
 
 const AGM: SurveyInputs['battery'] = {
@@ -88,6 +90,36 @@ describe('a day of a battery that nothing switches off', () => {
 		const answer = assessScenario(scenario, { heatLimits: heatLimitsOf(inputsFor(hotSide).battery) });
 		expect(answer).toEqual(assessScenario(scenario));
 		expect(Object.keys(answer)).not.toContain('leadAcid');
+	});
+});
+
+describe('a day that is watched for its limit', () => {
+	const watch = (survey: SurveyAnswers) => {
+		const inputs = inputsFor(survey, { battery: AGM });
+		const scenario = parseScenario(buildScenario(inputs).scenario);
+		const watched = watchUseLimit(scenario, heatLimitsOf(inputs.battery));
+		return { plain: new OutcomeRunner().run(scenario), watched: new OutcomeRunner().run(watched) };
+	};
+
+	it('counts as cut out where the limit is passed, with about the same peak', () => {
+		const { plain, watched } = watch(hotSide);
+		expect(plain.cutsOut).toBe(false);
+		expect(watched.cutsOut).toBe(true);
+		expect(Math.abs(watched.peakSensorC - plain.peakSensorC)).toBeLessThan(0.2);
+	});
+
+	it('is the same day to the last digit where the limit is not reached', () => {
+		const { plain, watched } = watch({
+			positionKind: 'cabin',
+			enclosureCooling: 'cooled',
+			enclosureSun: 'shaded'
+		});
+		expect(watched).toEqual(plain);
+	});
+
+	it('is left as it is for a battery with a BMS', () => {
+		const scenario = parseScenario(buildScenario(inputsFor(hotSide)).scenario);
+		expect(watchUseLimit(scenario, null)).toBe(scenario);
 	});
 });
 

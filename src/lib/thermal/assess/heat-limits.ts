@@ -67,3 +67,25 @@ export function judgeHeat(
 	if (headroomK < 0) return 'cuts-out';
 	return headroomK < CLOSE_HEADROOM_K || hoursAboveChargeLimit > 0 ? 'runs-close' : 'rides-it-out';
 }
+
+/** Below the limit by so much, a battery that was too hot counts as cool again. */
+const COOLED_K = 1;
+
+/**
+ * A day on which passing the limit of use counts as a cut-off: for whoever counts such days or looks for their edge.
+ *
+ * @param scenario the day of a battery that nothing switches off
+ * @param limits highest temperature of use, °C
+ * @returns the same day with the limit in the place of the cut-off; a battery with a BMS, without limits, as it is
+ * Validity: from the moment on which the limit is passed its loads are not drawn, which moves the peak by little; up to
+ *   that moment the day is the same.
+ * Source: our own.
+ * @example
+ * const limits = { kind: 'heat-limits', chemistry: 'lead-acid-agm', highestChargeC: 50, highestUseC: 60, ratedLifeYears: 6, compensatesCharge: true };
+ * watchUseLimit(defaultScenario([{ minutes: 60 }]), limits).bms.discharge.cut; // 60
+ */
+export function watchUseLimit(scenario: Scenario, limits: HeatLimits | null): Scenario {
+	if (limits === null) return scenario;
+	const cut = limits.highestUseC;
+	return { ...scenario, bms: { ...scenario.bms, discharge: { cut, reset: cut - COOLED_K } } };
+}
