@@ -1,5 +1,6 @@
 import { CHEMISTRY_WORDS, SENSOR_WORDS, UNDER_BONNET } from '$lib/format/batteries';
 import { formatClimateZone } from '$lib/format/climate-zones';
+import { sayDaysOnRoad } from '$lib/format/days-on-road';
 import {
 	formatAmps,
 	formatAmpHours,
@@ -76,7 +77,17 @@ export function listBattery(inputs: AssessmentInputs): ReportLine[] {
 	];
 }
 
-export function listHotDay({ place, hotDay, dayPlan }: AssessmentInputs): ReportLine[] {
+/** Not in assessments from before it was kept. */
+function listTouring({ touring }: AssessmentInputs): ReportLine[] {
+	if (!touring) return [];
+	return [
+		{ label: 'Months of the year', value: touring.basis },
+		{ label: 'On the road', value: sayDaysOnRoad(touring.daysOnRoad) }
+	];
+}
+
+export function listHotDay(inputs: AssessmentInputs): ReportLine[] {
+	const { place, hotDay, dayPlan } = inputs;
 	const where = place.region ? `${place.name}, ${place.region}` : place.name;
 	return [
 		{ label: 'Place', value: where },
@@ -87,6 +98,7 @@ export function listHotDay({ place, hotDay, dayPlan }: AssessmentInputs): Report
 			value: `${formatTemperature(hotDay.hotDayMaxC)}, ${formatKelvin(hotDay.dailyRangeK, 0)} less at its coolest`
 		},
 		{ label: 'Sun at noon', value: formatWithUnit(hotDay.sunPeakWPerM2, 'W/m²') },
+		...listTouring(inputs),
 		{ label: 'Day plan', value: dayPlan.name },
 		{
 			label: 'At the start',

@@ -91,6 +91,21 @@ describe('an assessment in words', () => {
 		expect(back).toMatchObject({ value: 'not within the plan', note: expect.stringContaining('somebody') });
 	});
 
+	it('says where the months come from and how often the customer is out, where that was kept', () => {
+		const { inputs, ...view } = makeView();
+		const touring = {
+			months: Array.from({ length: 12 }, () => ({ meanMaxC: 30, spreadK: 3 })),
+			daysOnRoad: Array<number>(12).fill(4),
+			basis: 'Entered for the place: our own log'
+		};
+		const { hotDay } = presentReport({ ...view, inputs: { ...inputs, touring } });
+		expect(valueOf(hotDay, 'Months of the year')).toBe('Entered for the place: our own log');
+		expect(valueOf(hotDay, 'On the road')).toBe('4 days each month');
+		const before = presentReport({ ...view, inputs });
+		expect(valueOf(before.hotDay, 'On the road')).toBeUndefined();
+		expect(before.hotDay).toHaveLength(hotDay.length - 2);
+	});
+
 	it('gives the limits, the charging voltage and the gas of a battery that nothing switches off', () => {
 		const report = presentReport(makeView({ battery: AGM }));
 		expect(report.headline).toBe('Gets too hot');

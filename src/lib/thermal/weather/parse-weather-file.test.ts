@@ -261,6 +261,10 @@ describe('a long list of problems', () => {
 		expect(problems[19]?.line).toBe(21);
 	});
 
+	it('shows a dot for what does not show', () => {
+		expect(refuse(['PK\u0003\u0004\u0000']).problems[0]?.value).toBe('PK···');
+	});
+
 	it('cuts a long value short', () => {
 		expect(epwWith(7, 'y'.repeat(90)).problems[0]?.value).toBe(`${'y'.repeat(40)}…`);
 	});

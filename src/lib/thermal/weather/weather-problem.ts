@@ -23,7 +23,7 @@ export interface WeatherProblem {
 	/** Counted from 1; null where it concerns the file as a whole. */
 	line: number | null;
 	column: WeatherColumn | null;
-	/** What was found, cut short. */
+	/** What was found, cut short, with a dot for what does not show. */
 	value: string;
 	/** What is needed instead. */
 	limit: string;
@@ -49,7 +49,8 @@ export class ProblemList {
 	add({ value, ...rest }: Found): void {
 		this.count++;
 		if (this.told.length >= MOST_PROBLEMS_TOLD) return;
-		const short = value.length > LONGEST_VALUE ? `${value.slice(0, LONGEST_VALUE)}…` : value;
+		const shown = value.replace(/\p{C}/gu, '·');
+		const short = shown.length > LONGEST_VALUE ? `${shown.slice(0, LONGEST_VALUE)}…` : shown;
 		const found = short === '' ? 'nothing' : short;
 		const message = `${sayWhere(rest)}: found ${found}; needed: ${rest.limit}.`;
 		this.told.push({ ...rest, value: short, message });

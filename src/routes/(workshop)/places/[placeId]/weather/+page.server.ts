@@ -11,7 +11,7 @@ import { pageId } from '$lib/server/http/page-id';
 import { validate } from '$lib/server/http/validate';
 import { previewWeather, putBackWeather, takeWeather } from '$lib/server/services/place-weather';
 import { getPlace } from '$lib/server/services/places';
-import { CSV_NAMES, FEWEST_HOURS, MOST_HOURS, MOST_WEATHER_BYTES } from '$lib/thermal/weather';
+import { CSV_NAMES, FEWEST_HOURS, MOST_WEATHER_BYTES } from '$lib/thermal/weather';
 import type { Actions, PageServerLoad } from './$types';
 
 /** The place of the page, before anything is said of what was sent. */
@@ -22,7 +22,7 @@ async function openPlace(event: Parameters<typeof guard>[0] & { params: { placeI
 
 export const load: PageServerLoad = async (event) => {
 	const { place } = await openPlace(event);
-	const limits = { fewestHours: FEWEST_HOURS, mostHours: MOST_HOURS, mostBytes: MOST_WEATHER_BYTES };
+	const limits = { fewestHours: FEWEST_HOURS, mostBytes: MOST_WEATHER_BYTES };
 	return { place, limits, csvNames: CSV_NAMES };
 };
 
