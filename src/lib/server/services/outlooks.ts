@@ -3,7 +3,6 @@ import type { AssessmentInputs } from '$lib/schemas/assessments';
 import type { Outlook } from '$lib/schemas/outlooks';
 import type { SignedInPerson } from '$lib/schemas/people';
 import { parseScenario } from '$lib/thermal';
-import { wearOf } from '$lib/thermal/chemistries';
 import { watchUseLimit } from '$lib/thermal/assess';
 import { heatLimitsOf, wearOf } from '$lib/thermal/chemistries';
 import {
