@@ -1,106 +1,107 @@
 import { fork, type ChildProcess } from 'node:child_process';
 import { once } from 'node:events';
+import { cpus } from 'node:os';
 import { fileURLToPath } from 'node:url';
-import { simulateScenario } from '../lib/thermal';
-import { compareRuns, findMedian, formatTable, timeSteadily, type BenchRow } from './lib/bench-table';
-import { ENGINE_CASES } from '../../tests/reference/support/cases';
-import { completeCase, type CaseInput } from '../../tests/reference/support/defaults';
-import type { ReferenceIntegrator } from '../../tests/reference/support/integrator';
-import { MODEL_STATE } from '../../tests/reference/support/model-equations';
-import { runReference, type ReferenceRun } from '../../tests/reference/support/reference-run';
+import { findMedian, formatTable } from './lib/bench-table';
+import { CONTENDERS, DAYS, findTruth, type Contender } from './lib/bench-contenders';
+import { LONG_RUNS, WORKLOADS } from './lib/bench-workloads';
 
-/** Days of about 24 hours, each once through all contenders in turn. */
-const DAYS = ENGINE_CASES.filter(({ input }) => {
-	const minutes = input.legs.reduce((sum, leg) => sum + leg.minutes, 0);
-	return minutes >= 1000 && minutes <= 1500;
-}).slice(0, 4);
 const ROUNDS = 9;
+const SELF = fileURLToPath(import.meta.url);
+/** Young memory so large that nothing is collected while a run is watched. */
+const WATCHED = ['--expose-gc', '--max-semi-space-size=64'];
 
-function runEngine(input: CaseInput): ReferenceRun {
-	const result = simulateScenario(input);
-	if (result.status === 'failed') throw new Error(result.reason);
-	const { report, minutes } = result;
-	const columns = MODEL_STATE.map((name) => (name === 'soc' ? minutes.soc : minutes.nodes[name]));
-	return {
-		minutes: Array.from({ length: minutes.count }, (_, minute) => columns.map((column) => column[minute]!)),
-		end: [],
-		events: report.events,
-		evaluations: report.evaluations
-	};
-}
+/** What a process of its own is asked for, and how it answers. */
+type Request = { day: number } | { workload: number } | { hours: number };
 
-interface Contender {
-	/** What the clock sees. */
-	time: (input: CaseInput) => unknown;
-	/** What is compared. */
-	run: (input: CaseInput) => ReferenceRun;
-}
-
-const reference = (integrate: ReferenceIntegrator): Contender => {
-	const run = (input: CaseInput) => runReference(completeCase(input), integrate);
-	return { time: run, run };
-};
-const loadOdex = async (tolerance: number) =>
-	(await import('../../tests/reference/support/odex')).integrateWithOdex(tolerance);
-
-/**
- * The libraries run with settings that keep every node within 0.05 K and every event within 5 s on these days; three
- * times looser ones do not. The engine runs as it is, tighter than that. Each is loaded only where it runs: to have
- * mathjs in the process alone makes everything else slower.
- */
-const CONTENDERS: Readonly<Record<string, () => Promise<Contender>>> = {
-	engine: () => Promise.resolve({ time: simulateScenario, run: runEngine }),
-	odex: async () => reference(await loadOdex(3e-4)),
-	'mathjs solveODE': async () => {
-		const { integrateWithMathjs } = await import('../../tests/reference/support/mathjs');
-		return reference(integrateWithMathjs(3e-4, 60));
-	}
-};
-
-/** One contender in a process of its own, so that none runs on what another has done to the compiler: times on request. */
+/** One contender in a process of its own, so that none runs on what another has done to the compiler. */
 async function serve(name: string): Promise<void> {
-	const { time } = await CONTENDERS[name]!();
-	process.on('message', (day: number) => process.send?.(timeSteadily(() => time(DAYS[day]!.input))));
+	const contender = await CONTENDERS[name]?.();
+	process.on('message', (request: Request) => process.send?.(answer(request, contender)));
 }
 
-async function askTime(contender: ChildProcess, day: number): Promise<number> {
-	contender.send(day);
-	const [timeMs] = (await once(contender, 'message')) as [number];
-	return timeMs;
+function answer(request: Request, contender: Contender | undefined): unknown {
+	if ('day' in request) return contender!.time(request.day);
+	if ('workload' in request) return WORKLOADS[request.workload]!.time();
+	return LONG_RUNS.watch(request.hours);
+}
+
+async function ask<T>(child: ChildProcess, request: Request): Promise<T> {
+	child.send(request);
+	return ((await once(child, 'message')) as [T])[0];
 }
 
 /** All contenders take turns in each round, so that whatever else the machine does falls on all of them. */
 async function takeTurns(
-	contenders: ReadonlyMap<string, ChildProcess>,
+	children: ReadonlyMap<string, ChildProcess>,
 	day: number
 ): Promise<Map<string, number>> {
-	const times = new Map([...contenders.keys()].map((name) => [name, [] as number[]]));
+	const times = new Map([...children.keys()].map((name) => [name, [] as number[]]));
 	for (let round = 0; round < ROUNDS; round++) {
-		for (const [name, contender] of contenders) times.get(name)!.push(await askTime(contender, day));
+		for (const [name, child] of children) times.get(name)!.push(await ask<number>(child, { day }));
 	}
 	return new Map([...times].map(([name, all]) => [name, findMedian(all)]));
 }
 
-async function compare(): Promise<void> {
-	const self = fileURLToPath(import.meta.url);
-	const contenders = new Map(Object.keys(CONTENDERS).map((name) => [name, fork(self, [name])]));
-	const tight = await loadOdex(1e-8);
-	for (const [day, { name, input }] of DAYS.entries()) {
-		const truth = runReference(completeCase(input), tight);
-		const times = await takeTurns(contenders, day);
-		const rows: BenchRow[] = [];
+async function compareDays(): Promise<void> {
+	const children = new Map(Object.keys(CONTENDERS).map((name) => [name, fork(SELF, [name])]));
+	for (const [day, { name }] of DAYS.entries()) {
+		const truth = await findTruth(day);
+		const times = await takeTurns(children, day);
+		const engineMs = times.get('engine')!;
+		const rows = [['', 'ms', 'times the engine', 'evaluations', 'largest K', 'largest event s']];
 		for (const [each, load] of Object.entries(CONTENDERS)) {
-			const { run } = await load();
-			rows.push({ name: each, medianMs: times.get(each)!, ...compareRuns(run(input), truth) });
+			const { evaluations, largestK, largestEventS } = (await load()).compare(day, truth);
+			const ms = times.get(each)!;
+			rows.push([
+				each,
+				ms.toFixed(ms < 1 ? 3 : 1),
+				(ms / engineMs).toFixed(each === 'engine' ? 0 : 1),
+				String(evaluations),
+				largestK.toFixed(4),
+				largestEventS === null ? 'other events' : largestEventS.toFixed(2)
+			]);
 		}
 		console.log(
 			`\n${name}: ${truth.minutes.length - 1} min, ${truth.events.length} events, median of ${ROUNDS} rounds`
 		);
 		console.log(formatTable(rows));
 	}
-	for (const contender of contenders.values()) contender.disconnect();
+	for (const child of children.values()) child.disconnect();
 }
 
-const [asked] = process.argv.slice(2);
-if (asked) await serve(asked);
-else await compare();
+async function timeWorkloads(): Promise<void> {
+	const child = fork(SELF, ['workloads']);
+	const rows = [['work', 'ms', 'days run', 'ms a day']];
+	for (const [at, { name }] of WORKLOADS.entries()) {
+		const { ms, days } = await ask<{ ms: number; days: number }>(child, { workload: at });
+		rows.push([name, ms.toFixed(1), String(days), (ms / days).toFixed(3)]);
+	}
+	child.disconnect();
+	console.log(`\n${formatTable(rows)}`);
+}
+
+async function watchLongRuns(): Promise<void> {
+	const child = fork(SELF, ['long runs'], { execArgv: WATCHED });
+	const rows = [['hours simulated', 'µs an hour', 'KiB allocated', 'bytes an hour']];
+	for (const hours of LONG_RUNS.hours) {
+		const { ms, bytes } = await ask<{ ms: number; bytes: number }>(child, { hours });
+		rows.push([
+			String(hours),
+			((1000 * ms) / hours).toFixed(1),
+			(bytes / 1024).toFixed(1),
+			(bytes / hours).toFixed(0)
+		]);
+	}
+	child.disconnect();
+	console.log(`\nThe same day over and over, for its outcome alone:\n${formatTable(rows)}`);
+}
+
+const [role] = process.argv.slice(2);
+if (role) await serve(role);
+else {
+	console.log(`${cpus()[0]?.model.trim()}, ${cpus().length} threads, Node ${process.versions.node}`);
+	await compareDays();
+	await timeWorkloads();
+	await watchLongRuns();
+}

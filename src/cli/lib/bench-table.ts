@@ -11,11 +11,6 @@ export interface Deviation {
 	largestEventS: number | null;
 }
 
-export interface BenchRow extends Deviation {
-	name: string;
-	medianMs: number;
-}
-
 /** Runs are repeated up to this in one measurement: what is measured is the steady state, not the way there. */
 const SHORTEST_MS = 250;
 const WARM_UP = 3;
@@ -55,19 +50,8 @@ export function compareRuns(run: Run, truth: Run): Deviation {
 	};
 }
 
-export function formatTable(rows: readonly BenchRow[]): string {
-	const first = rows[0]!.medianMs;
-	const cells = [
-		['', 'ms', 'ratio', 'evaluations', 'largest K', 'largest event s'],
-		...rows.map(({ name, medianMs, evaluations, largestK, largestEventS }) => [
-			name,
-			medianMs.toFixed(2),
-			(medianMs / first).toFixed(1),
-			String(evaluations),
-			largestK.toFixed(4),
-			largestEventS === null ? 'other events' : largestEventS.toFixed(2)
-		])
-	];
+/** Rows of cells under a row of heads: the first column to the left, numbers to the right. */
+export function formatTable(cells: readonly (readonly string[])[]): string {
 	const widths = cells[0]!.map((_, k) => Math.max(...cells.map((row) => row[k]!.length)));
 	return cells
 		.map((row) =>

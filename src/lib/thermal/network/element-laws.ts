@@ -18,3 +18,12 @@ export function readResistanceFactor(activationK: number, tempC: number): number
 	if (activationK === 0) return 1;
 	return expOf(activationK * (1 / (tempC + KELVIN_AT_ZERO_C) - 1 / REFERENCE_K));
 }
+
+/** Beyond this the series is not close enough. */
+const NEAR = 0.1;
+
+/** e^x to 2e-9 by its series near 0, which is where the temperatures of a step are; elsewhere by the function itself. */
+export function growNear(x: number): number {
+	if (x > NEAR || x < -NEAR) return expOf(x);
+	return 1 + x * (1 + x * (1 / 2 + x * (1 / 6 + x * (1 / 24 + x / 120))));
+}

@@ -120,6 +120,7 @@ export class DriveClock {
 	fillStages(timeS: number, lengthS: number): void {
 		const { values, isLit } = this;
 		const { signal, current } = PLACES;
+		values[PLACES.length] = lengthS;
 		for (let k = 1; k < INSTANTS.length; k++) {
 			const instantS = timeS + INSTANTS[k]! * lengthS;
 			values[signal + k] = isLit ? readSunShape(this.startHour + instantS / S_PER_H) : 0;

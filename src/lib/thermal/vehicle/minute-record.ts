@@ -16,6 +16,12 @@ const MINUTES_PER_H = 60;
 /** Sums of leg lengths carry rounding errors; a grid point this near the end still counts, min. */
 const ROUNDING_MIN = 1e-7;
 
+function findHighest(temps: Float64Array): number {
+	let high = -Infinity;
+	for (let at = 0; at < temps.length; at++) if (temps[at]! > high) high = temps[at]!;
+	return high;
+}
+
 /** How many grid points a run has: whole minutes, and the start. */
 export function countMinutes({ legs }: Scenario): number {
 	let totalMinutes = 0;
@@ -29,8 +35,6 @@ const OTHER_COLUMNS = 3;
 /** Fills the grid of minutes from the steps as they are taken. */
 export class MinuteRecord implements StepSink {
 	readonly minutes: MinuteSeries;
-	/** Highest temperature of each solved node so far, °C. */
-	readonly highestC: Float64Array;
 	/** One column a solved node, in the order of the solver. */
 	private readonly columns: readonly Float64Array[];
 
@@ -46,7 +50,6 @@ export class MinuteRecord implements StepSink {
 		const nodes = {} as Record<NodeName, Float64Array>;
 		for (const name of NODE_NAMES) nodes[name] = column();
 		this.columns = storedNames.map((name) => nodes[name as NodeName]);
-		this.highestC = new Float64Array(storedNames.length).fill(-Infinity);
 		const ambient = column();
 		fillAmbient(ambient, startHour, scenario.climate);
 		if (!scenario.shield) nodes.shield.fill(ambient[0]!);
@@ -65,22 +68,27 @@ export class MinuteRecord implements StepSink {
 	/** Fills the grid points of a step from the one up to, but not at, the other. */
 	takeStep(step: Step, standing: Standing, minute: number, last: number): void {
 		if (minute === last) return;
-		const { columns, highestC } = this;
+		const { columns } = this;
 		for (let node = 0; node < columns.length; node++) {
-			highestC[node] = fillMinutes(step, node, minute, last, columns[node]!, highestC[node]!);
+			fillMinutes(step, node, minute, last, columns[node]!);
 		}
 		this.fillStanding(standing, minute, last);
 	}
 
 	/** Fills what is left once the last leg has ended: at most its last instant. */
 	takeEnd(temps: Float64Array, standing: Standing, minute: number): void {
-		const { columns, highestC, minutes } = this;
+		const { columns, minutes } = this;
 		if (minute === minutes.count) return;
 		for (let node = 0; node < columns.length; node++) {
 			columns[node]!.fill(temps[node]!, minute, minutes.count);
-			highestC[node] = Math.max(highestC[node]!, temps[node]!);
 		}
 		this.fillStanding(standing, minute, minutes.count);
+	}
+
+	/** The highest temperature of each node on the grid. */
+	findPeaks(): NodeValues {
+		const { nodes } = this.minutes;
+		return this.readRow((name) => findHighest(nodes[name]));
 	}
 
 	/** The start and every whole hour after it. */

@@ -1,6 +1,6 @@
 import type { Step } from '../solve/stepper';
 import type { Scenario } from '../types';
-import { fillMinutes } from './fill-minutes';
+import { fillEvery, raiseHighest } from './fill-minutes';
 import { FAILURE_WORDS, VehicleRun } from './vehicle-run';
 import type { Standing, StepSink } from './step-sink';
 
@@ -18,21 +18,22 @@ export interface Outcome {
 
 /** Keeps the peak of what the BMS watches, the time in the dark, and of the cells a value each so many minutes. */
 class OutcomeSink implements StepSink {
-	peakSensorC = -Infinity;
-	cells: Float64Array | null = null;
-	everyMin = 1;
+	/** Of each node that is watched, °C. */
+	readonly highestC: Float64Array;
+	watched: readonly number[] = [];
+	private cells: Float64Array | null = null;
+	private everyMin = 1;
 	private readonly cellsNode: number;
 	private readonly boardNode: number;
-	private scratch = new Float64Array(0);
-	private watched: readonly number[] = [];
 
 	constructor(names: readonly string[]) {
+		this.highestC = new Float64Array(names.length);
 		this.cellsNode = names.indexOf('cells');
 		this.boardNode = names.indexOf('board');
 	}
 
 	begin({ bms }: Scenario, cells: Float64Array | null, everyMin: number): void {
-		this.peakSensorC = -Infinity;
+		this.highestC.fill(-Infinity);
 		this.cells = cells;
 		this.everyMin = everyMin;
 		this.watched = {
@@ -45,25 +46,24 @@ class OutcomeSink implements StepSink {
 	takeStep(step: Step, _standing: Standing, minute: number, last: number): void {
 		if (minute === last) return;
 		for (let k = 0; k < this.watched.length; k++) {
-			this.peakSensorC = fillMinutes(step, this.watched[k]!, minute, last, null, this.peakSensorC);
+			raiseHighest(step, this.watched[k]!, minute, last, this.highestC);
 		}
-		if (this.cells !== null) this.keepCells(step, this.cells, minute, last);
+		if (this.cells !== null) fillEvery(step, this.cellsNode, minute, last, this.everyMin, this.cells);
 	}
 
 	takeEnd(temps: Float64Array, _standing: Standing, minute: number): void {
-		for (const node of this.watched) this.peakSensorC = Math.max(this.peakSensorC, temps[node]!);
-		if (this.cells !== null && minute % this.everyMin === 0)
+		for (const node of this.watched) {
+			this.highestC[node] = Math.max(this.highestC[node]!, temps[node]!);
+		}
+		if (this.cells !== null && minute % this.everyMin === 0) {
 			this.cells[minute / this.everyMin] = temps[this.cellsNode]!;
+		}
 	}
 
-	private keepCells(step: Step, cells: Float64Array, minute: number, last: number): void {
-		const first = Math.ceil(minute / this.everyMin) * this.everyMin;
-		if (first >= last) return;
-		if (this.scratch.length < last - minute) this.scratch = new Float64Array(2 * (last - minute));
-		for (let at = first; at < last; at += this.everyMin) {
-			fillMinutes(step, this.cellsNode, at, at + 1, this.scratch, -Infinity, 0);
-			cells[at / this.everyMin] = this.scratch[0]!;
-		}
+	findPeakSensorC(): number {
+		let peakC = -Infinity;
+		for (const node of this.watched) peakC = Math.max(peakC, this.highestC[node]!);
+		return peakC;
 	}
 }
 
@@ -97,7 +97,7 @@ export class OutcomeRunner {
 		if (failure) throw new RunFailedError(FAILURE_WORDS[failure]);
 		return {
 			cutsOut: run.bms.events.some(({ side, kind }) => side === 'discharge' && kind === 'cut'),
-			peakSensorC: sink.peakSensorC,
+			peakSensorC: sink.findPeakSensorC(),
 			darkHours: this.sumDark(run, scenario),
 			missedAh: Math.min(run.refusedAh, (1 - run.soc) * scenario.battery.capacityAh)
 		};

@@ -19,7 +19,7 @@ function reportFailure(run: VehicleRun, failure: Failure): SimulationResult {
 function report(run: VehicleRun, record: MinuteRecord): SimulationReport {
 	const { stepper, integrator, temps } = run;
 	const at = (name: NodeName) => stepper.names.indexOf(name);
-	const peaks = record.readRow((name) => record.highestC[at(name)]!);
+	const peaks = record.findPeaks();
 	const peakMinute = record.minutes.nodes.cells.indexOf(peaks.cells);
 	return {
 		peakCellsC: peaks.cells,

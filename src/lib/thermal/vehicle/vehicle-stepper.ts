@@ -82,7 +82,7 @@ export class VehicleStepper implements Stepper {
 	tryStep(lengthS: number): boolean {
 		this.step.lengthS = lengthS;
 		this.clock.fillStages(this.step.timeS, lengthS);
-		this.variant.take(this.constants, this.clock.values, this.state, lengthS, this.account);
+		this.variant.take(this.constants, this.clock.values, this.state, this.account);
 		this.evaluations += STAGES;
 		return true;
 	}

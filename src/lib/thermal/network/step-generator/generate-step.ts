@@ -50,7 +50,7 @@ class StepWriter {
 			...this.writeAccount()
 		];
 		return [
-			`export function ${name}(k: Float64Array, d: Float64Array, s: Float64Array, lengthS: number, account: boolean): void {`,
+			`export function ${name}(k: Float64Array, d: Float64Array, s: Float64Array, account: boolean): void {`,
 			...body.map((line) => `\t${line}`),
 			'}'
 		].join('\n');
@@ -69,9 +69,10 @@ class StepWriter {
 	}
 
 	private loadDriven(): string[] {
-		const { elapsed, bent, lit } = this.slots.driven;
+		const { elapsed, length, bent, lit } = this.slots.driven;
 		return [
 			`const x0 = d[${elapsed}]!;`,
+			`const lengthS = d[${length}]!;`,
 			...[...bent].flatMap(([name, at]) =>
 				[0, 1, 2].map((power) => `const ${this.coefficient(name, power)} = d[${at + power}]!;`)
 			),
@@ -216,7 +217,7 @@ class StepWriter {
 const HEAD = `// Generated from the shape of the network by \`npm run generate\`; a test holds it to its generator, another to the
 // general network core. Locals: t temperature, s and p its square and fourth power in kelvin, q heat, h sum of a node's
 // heats, d driven value, c its coefficients, x time, a and b slopes of a heat along its ends, v and w slopes in time, g sum of those, j Jacobian, m matrix,
-// i inverse pivot, u solution of a stage, e capacity over length; the digit is the stage, T the slopes in time.
+// r resistance and y inverse kelvin where the step starts, i inverse pivot, u solution of a stage, e capacity over length; the digit is the stage, T the slopes in time.
 `;
 
 /**
@@ -225,7 +226,7 @@ const HEAD = `// Generated from the shape of the network by \`npm run generate\`
  *     (C/(γh) − J) uᵢ = H(Tᵢ) + (C/h) Σ cᵢⱼuⱼ + dᵢ h ∂H/∂t
  *
  * The function that it writes takes the values of the leg `k` and the driven values `d` in the places of planSlots, the state `s` (rows as STATE_ROWS, one value a stored
- * node), the length of the step in s, and whether to keep the account of the heats.
+ * node), and whether to keep the account of the heats.
  *
  * @param name of the function
  * @param shape of the network
@@ -250,7 +251,7 @@ export function generateModule(shapes: Readonly<Record<string, NetworkShape>>): 
 	const steps = Object.entries(shapes).map(([name, shape]) => generateStep(name, shape));
 	const imports = [
 		`import { KELVIN_AT_ZERO_C as KELVIN } from '../../correlations/radiation';`,
-		`import { clampToUnit, readResistanceFactor as resistanceFactor } from '../../network/element-laws';`
+		`import { clampToUnit, growNear, readResistanceFactor as resistanceFactor } from '../../network/element-laws';`
 	];
 	return [HEAD + imports.join('\n'), ...steps].join('\n\n') + '\n';
 }

@@ -13,6 +13,8 @@ export interface SlotPlan {
 export interface DrivenPlan {
 	/** Time at the start of the step in the parabolas' own count, s. */
 	elapsed: number;
+	/** Length of the step, s: handed over here, for a number that is an argument is put into a box. */
+	length: number;
 	/** First of the three coefficients of each parabola. */
 	bent: ReadonlyMap<string, number>;
 	/** Peak of each lit value. */
@@ -68,12 +70,13 @@ function numberEach(keys: readonly string[]): Map<string, number> {
 
 function planDriven({ driven }: NetworkShape): DrivenPlan {
 	const { bent, lit } = driven;
-	const firstLit = 1 + 3 * bent.length;
+	const firstLit = 2 + 3 * bent.length;
 	const signal = firstLit + lit.length;
 	const current = signal + SLOPE + 1;
 	return {
 		elapsed: 0,
-		bent: new Map(bent.map((name, k) => [name, 1 + 3 * k])),
+		length: 1,
+		bent: new Map(bent.map((name, k) => [name, 2 + 3 * k])),
 		lit: new Map(lit.map((name, k) => [name, firstLit + k])),
 		signal,
 		current,

@@ -71,7 +71,7 @@ export class HeatWriter {
 			]),
 			...shape.links.flatMap((link) => this.writeLink(link, stage)),
 			...shape.sources.flatMap(({ name, kind, node }) =>
-				kind === 'joule' ? [this.writeJoule(name, node, stage)] : []
+				kind === 'joule' ? this.writeJoule(name, node, stage) : []
 			),
 			...shape.stored.map((node) => `const h${stage}_${toIdentifier(node)} = ${this.sumOf(node, stage)};`)
 		];
@@ -102,11 +102,21 @@ export class HeatWriter {
 		return [`${q} = ${size} * ${difference};`];
 	}
 
-	private writeJoule(name: string, node: string, stage: string): string {
+	/** Later stages take the resistance from where the step starts, which a series near there has without a call. */
+	private writeJoule(name: string, node: string, stage: string): string[] {
+		const id = toIdentifier(name);
 		const current = this.drivenAt(CURRENT, stage);
-		const factor = `resistanceFactor(${this.constant(keyOf.activation(name))}, ${this.temp(node, stage)})`;
-		const ohm = `${this.constant(keyOf.r25(name))} * ${factor}`;
-		return `const ${this.heat(name, stage)} = ${current} === 0 ? 0 : ${current} * ${current} * ${ohm};`;
+		const activation = this.constant(keyOf.activation(name));
+		const perKelvin = `1 / (${this.temp(node, stage)} + KELVIN)`;
+		const moved = `${activation} * (${perKelvin} - y_${id})`;
+		const start = [
+			`const r_${id} = ${this.constant(keyOf.r25(name))} * resistanceFactor(${activation}, ${this.temp(node, stage)});`,
+			`const y_${id} = ${perKelvin};`
+		];
+		const heat = `${current} * ${current} * r_${id}`;
+		return stage === '0'
+			? [...start, `const ${this.heat(name, stage)} = ${heat};`]
+			: [`const ${this.heat(name, stage)} = ${heat} * growNear(${moved});`];
 	}
 
 	/** Every term of a node's balance; `write` says how a heat is written, null leaves it out. */

@@ -1,11 +1,11 @@
 // Generated from the shape of the network by `npm run generate`; a test holds it to its generator, another to the
 // general network core. Locals: t temperature, s and p its square and fourth power in kelvin, q heat, h sum of a node's
 // heats, d driven value, c its coefficients, x time, a and b slopes of a heat along its ends, v and w slopes in time, g sum of those, j Jacobian, m matrix,
-// i inverse pivot, u solution of a stage, e capacity over length; the digit is the stage, T the slopes in time.
+// r resistance and y inverse kelvin where the step starts, i inverse pivot, u solution of a stage, e capacity over length; the digit is the stage, T the slopes in time.
 import { KELVIN_AT_ZERO_C as KELVIN } from '../../correlations/radiation';
-import { clampToUnit, readResistanceFactor as resistanceFactor } from '../../network/element-laws';
+import { clampToUnit, growNear, readResistanceFactor as resistanceFactor } from '../../network/element-laws';
 
-export function stepBare(k: Float64Array, d: Float64Array, s: Float64Array, lengthS: number, account: boolean): void {
+export function stepBare(k: Float64Array, d: Float64Array, s: Float64Array, account: boolean): void {
 	const k0 = k[0]!; // capacity of engine
 	const k1 = k[1]!; // capacity of exhaust
 	const k2 = k[2]!; // capacity of bay
@@ -52,49 +52,50 @@ export function stepBare(k: Float64Array, d: Float64Array, s: Float64Array, leng
 	const k43 = k[43]!; // resistance of current in board
 	const k44 = k[44]!; // activation of current in board
 	const x0 = d[0]!;
-	const c0_outside = d[1]!;
-	const c1_outside = d[2]!;
-	const c2_outside = d[3]!;
-	const c0_sky = d[4]!;
-	const c1_sky = d[5]!;
-	const c2_sky = d[6]!;
-	const c0_exhaustGas = d[7]!;
-	const c1_exhaustGas = d[8]!;
-	const c2_exhaustGas = d[9]!;
-	const c0_gasToExhaust = d[10]!;
-	const c1_gasToExhaust = d[11]!;
-	const c2_gasToExhaust = d[12]!;
-	const c0_airFromRadiatorToBay = d[13]!;
-	const c1_airFromRadiatorToBay = d[14]!;
-	const c2_airFromRadiatorToBay = d[15]!;
-	const c0_fuelHeatInEngine = d[16]!;
-	const c1_fuelHeatInEngine = d[17]!;
-	const c2_fuelHeatInEngine = d[18]!;
-	const c0_sunOnBonnet = d[19]!;
-	const c0_sunIntoEnclosure = d[20]!;
-	const c0_localAir = d[21]!;
+	const lengthS = d[1]!;
+	const c0_outside = d[2]!;
+	const c1_outside = d[3]!;
+	const c2_outside = d[4]!;
+	const c0_sky = d[5]!;
+	const c1_sky = d[6]!;
+	const c2_sky = d[7]!;
+	const c0_exhaustGas = d[8]!;
+	const c1_exhaustGas = d[9]!;
+	const c2_exhaustGas = d[10]!;
+	const c0_gasToExhaust = d[11]!;
+	const c1_gasToExhaust = d[12]!;
+	const c2_gasToExhaust = d[13]!;
+	const c0_airFromRadiatorToBay = d[14]!;
+	const c1_airFromRadiatorToBay = d[15]!;
+	const c2_airFromRadiatorToBay = d[16]!;
+	const c0_fuelHeatInEngine = d[17]!;
+	const c1_fuelHeatInEngine = d[18]!;
+	const c2_fuelHeatInEngine = d[19]!;
+	const c0_sunOnBonnet = d[20]!;
+	const c0_sunIntoEnclosure = d[21]!;
+	const c0_localAir = d[22]!;
 	const d0_outside = c0_outside + x0 * (c1_outside + x0 * c2_outside);
 	const d0_sky = c0_sky + x0 * (c1_sky + x0 * c2_sky);
 	const d0_exhaustGas = c0_exhaustGas + x0 * (c1_exhaustGas + x0 * c2_exhaustGas);
 	const d0_gasToExhaust = c0_gasToExhaust + x0 * (c1_gasToExhaust + x0 * c2_gasToExhaust);
 	const d0_airFromRadiatorToBay = c0_airFromRadiatorToBay + x0 * (c1_airFromRadiatorToBay + x0 * c2_airFromRadiatorToBay);
 	const d0_fuelHeatInEngine = c0_fuelHeatInEngine + x0 * (c1_fuelHeatInEngine + x0 * c2_fuelHeatInEngine);
-	const d0_signal = d[22]!;
+	const d0_signal = d[23]!;
 	const d0_sunOnBonnet = c0_sunOnBonnet * d0_signal;
 	const d0_sunIntoEnclosure = c0_sunIntoEnclosure * d0_signal;
 	const d0_localAir = c0_localAir * d0_signal;
-	const d0_current = d[28]!;
+	const d0_current = d[29]!;
 	const dT_outside = c1_outside + 2 * x0 * c2_outside;
 	const dT_sky = c1_sky + 2 * x0 * c2_sky;
 	const dT_exhaustGas = c1_exhaustGas + 2 * x0 * c2_exhaustGas;
 	const dT_gasToExhaust = c1_gasToExhaust + 2 * x0 * c2_gasToExhaust;
 	const dT_airFromRadiatorToBay = c1_airFromRadiatorToBay + 2 * x0 * c2_airFromRadiatorToBay;
 	const dT_fuelHeatInEngine = c1_fuelHeatInEngine + 2 * x0 * c2_fuelHeatInEngine;
-	const dT_signal = d[27]!;
+	const dT_signal = d[28]!;
 	const dT_sunOnBonnet = c0_sunOnBonnet * dT_signal;
 	const dT_sunIntoEnclosure = c0_sunIntoEnclosure * dT_signal;
 	const dT_localAir = c0_localAir * dT_signal;
-	const dT_current = d[33]!;
+	const dT_current = d[34]!;
 	const t0_engine = s[0]!;
 	const t0_exhaust = s[1]!;
 	const t0_bay = s[2]!;
@@ -146,8 +147,12 @@ export function stepBare(k: Float64Array, d: Float64Array, s: Float64Array, leng
 	const q0_exhaustRadiationToCase = k35 * (p0_exhaust - p0_case);
 	const q0_engineRadiationToCase = k36 * (p0_engine - p0_case);
 	const q0_bonnetRadiationToCase = k37 * (p0_bonnet - p0_case);
-	const q0_currentInCells = d0_current === 0 ? 0 : d0_current * d0_current * k41 * resistanceFactor(k42, t0_cells);
-	const q0_currentInBoard = d0_current === 0 ? 0 : d0_current * d0_current * k43 * resistanceFactor(k44, t0_board);
+	const r_currentInCells = k41 * resistanceFactor(k42, t0_cells);
+	const y_currentInCells = 1 / (t0_cells + KELVIN);
+	const q0_currentInCells = d0_current * d0_current * r_currentInCells;
+	const r_currentInBoard = k43 * resistanceFactor(k44, t0_board);
+	const y_currentInBoard = 1 / (t0_board + KELVIN);
+	const q0_currentInBoard = d0_current * d0_current * r_currentInBoard;
 	const h0_engine = -q0_engineToBay - q0_engineToAirBeneath - q0_radiator - q0_engineRadiationToCase + d0_fuelHeatInEngine;
 	const h0_exhaust = -q0_exhaustToBay + q0_gasToExhaust - q0_exhaustRadiationToBay - q0_exhaustRadiationToCase;
 	const h0_bay = q0_engineToBay + q0_exhaustToBay + q0_bayToOutside + q0_bonnetToBay + q0_airFromRadiatorToBay + q0_exhaustRadiationToBay + k40 * q0_radiator;
@@ -406,11 +411,11 @@ export function stepBare(k: Float64Array, d: Float64Array, s: Float64Array, leng
 	const d1_gasToExhaust = c0_gasToExhaust + x1 * (c1_gasToExhaust + x1 * c2_gasToExhaust);
 	const d1_airFromRadiatorToBay = c0_airFromRadiatorToBay + x1 * (c1_airFromRadiatorToBay + x1 * c2_airFromRadiatorToBay);
 	const d1_fuelHeatInEngine = c0_fuelHeatInEngine + x1 * (c1_fuelHeatInEngine + x1 * c2_fuelHeatInEngine);
-	const d1_signal = d[23]!;
+	const d1_signal = d[24]!;
 	const d1_sunOnBonnet = c0_sunOnBonnet * d1_signal;
 	const d1_sunIntoEnclosure = c0_sunIntoEnclosure * d1_signal;
 	const d1_localAir = c0_localAir * d1_signal;
-	const d1_current = d[29]!;
+	const d1_current = d[30]!;
 	const t1_engine = t0_engine + 1.544 * u0_engine;
 	const t1_exhaust = t0_exhaust + 1.544 * u0_exhaust;
 	const t1_bay = t0_bay + 1.544 * u0_bay;
@@ -461,8 +466,8 @@ export function stepBare(k: Float64Array, d: Float64Array, s: Float64Array, leng
 	const q1_exhaustRadiationToCase = k35 * (p1_exhaust - p1_case);
 	const q1_engineRadiationToCase = k36 * (p1_engine - p1_case);
 	const q1_bonnetRadiationToCase = k37 * (p1_bonnet - p1_case);
-	const q1_currentInCells = d1_current === 0 ? 0 : d1_current * d1_current * k41 * resistanceFactor(k42, t1_cells);
-	const q1_currentInBoard = d1_current === 0 ? 0 : d1_current * d1_current * k43 * resistanceFactor(k44, t1_board);
+	const q1_currentInCells = d1_current * d1_current * r_currentInCells * growNear(k42 * (1 / (t1_cells + KELVIN) - y_currentInCells));
+	const q1_currentInBoard = d1_current * d1_current * r_currentInBoard * growNear(k44 * (1 / (t1_board + KELVIN) - y_currentInBoard));
 	const h1_engine = -q1_engineToBay - q1_engineToAirBeneath - q1_radiator - q1_engineRadiationToCase + d1_fuelHeatInEngine;
 	const h1_exhaust = -q1_exhaustToBay + q1_gasToExhaust - q1_exhaustRadiationToBay - q1_exhaustRadiationToCase;
 	const h1_bay = q1_engineToBay + q1_exhaustToBay + q1_bayToOutside + q1_bonnetToBay + q1_airFromRadiatorToBay + q1_exhaustRadiationToBay + k40 * q1_radiator;
@@ -524,11 +529,11 @@ export function stepBare(k: Float64Array, d: Float64Array, s: Float64Array, leng
 	const d2_gasToExhaust = c0_gasToExhaust + x2 * (c1_gasToExhaust + x2 * c2_gasToExhaust);
 	const d2_airFromRadiatorToBay = c0_airFromRadiatorToBay + x2 * (c1_airFromRadiatorToBay + x2 * c2_airFromRadiatorToBay);
 	const d2_fuelHeatInEngine = c0_fuelHeatInEngine + x2 * (c1_fuelHeatInEngine + x2 * c2_fuelHeatInEngine);
-	const d2_signal = d[24]!;
+	const d2_signal = d[25]!;
 	const d2_sunOnBonnet = c0_sunOnBonnet * d2_signal;
 	const d2_sunIntoEnclosure = c0_sunIntoEnclosure * d2_signal;
 	const d2_localAir = c0_localAir * d2_signal;
-	const d2_current = d[30]!;
+	const d2_current = d[31]!;
 	const t2_engine = t0_engine + 0.9466785280815826 * u0_engine + 0.2557011698983284 * u1_engine;
 	const t2_exhaust = t0_exhaust + 0.9466785280815826 * u0_exhaust + 0.2557011698983284 * u1_exhaust;
 	const t2_bay = t0_bay + 0.9466785280815826 * u0_bay + 0.2557011698983284 * u1_bay;
@@ -579,8 +584,8 @@ export function stepBare(k: Float64Array, d: Float64Array, s: Float64Array, leng
 	const q2_exhaustRadiationToCase = k35 * (p2_exhaust - p2_case);
 	const q2_engineRadiationToCase = k36 * (p2_engine - p2_case);
 	const q2_bonnetRadiationToCase = k37 * (p2_bonnet - p2_case);
-	const q2_currentInCells = d2_current === 0 ? 0 : d2_current * d2_current * k41 * resistanceFactor(k42, t2_cells);
-	const q2_currentInBoard = d2_current === 0 ? 0 : d2_current * d2_current * k43 * resistanceFactor(k44, t2_board);
+	const q2_currentInCells = d2_current * d2_current * r_currentInCells * growNear(k42 * (1 / (t2_cells + KELVIN) - y_currentInCells));
+	const q2_currentInBoard = d2_current * d2_current * r_currentInBoard * growNear(k44 * (1 / (t2_board + KELVIN) - y_currentInBoard));
 	const h2_engine = -q2_engineToBay - q2_engineToAirBeneath - q2_radiator - q2_engineRadiationToCase + d2_fuelHeatInEngine;
 	const h2_exhaust = -q2_exhaustToBay + q2_gasToExhaust - q2_exhaustRadiationToBay - q2_exhaustRadiationToCase;
 	const h2_bay = q2_engineToBay + q2_exhaustToBay + q2_bayToOutside + q2_bonnetToBay + q2_airFromRadiatorToBay + q2_exhaustRadiationToBay + k40 * q2_radiator;
@@ -642,11 +647,11 @@ export function stepBare(k: Float64Array, d: Float64Array, s: Float64Array, leng
 	const d3_gasToExhaust = c0_gasToExhaust + x3 * (c1_gasToExhaust + x3 * c2_gasToExhaust);
 	const d3_airFromRadiatorToBay = c0_airFromRadiatorToBay + x3 * (c1_airFromRadiatorToBay + x3 * c2_airFromRadiatorToBay);
 	const d3_fuelHeatInEngine = c0_fuelHeatInEngine + x3 * (c1_fuelHeatInEngine + x3 * c2_fuelHeatInEngine);
-	const d3_signal = d[25]!;
+	const d3_signal = d[26]!;
 	const d3_sunOnBonnet = c0_sunOnBonnet * d3_signal;
 	const d3_sunIntoEnclosure = c0_sunIntoEnclosure * d3_signal;
 	const d3_localAir = c0_localAir * d3_signal;
-	const d3_current = d[31]!;
+	const d3_current = d[32]!;
 	const t3_engine = t0_engine + 3.314825187068521 * u0_engine + 2.896124015972201 * u1_engine + 0.9986419139977817 * u2_engine;
 	const t3_exhaust = t0_exhaust + 3.314825187068521 * u0_exhaust + 2.896124015972201 * u1_exhaust + 0.9986419139977817 * u2_exhaust;
 	const t3_bay = t0_bay + 3.314825187068521 * u0_bay + 2.896124015972201 * u1_bay + 0.9986419139977817 * u2_bay;
@@ -697,8 +702,8 @@ export function stepBare(k: Float64Array, d: Float64Array, s: Float64Array, leng
 	const q3_exhaustRadiationToCase = k35 * (p3_exhaust - p3_case);
 	const q3_engineRadiationToCase = k36 * (p3_engine - p3_case);
 	const q3_bonnetRadiationToCase = k37 * (p3_bonnet - p3_case);
-	const q3_currentInCells = d3_current === 0 ? 0 : d3_current * d3_current * k41 * resistanceFactor(k42, t3_cells);
-	const q3_currentInBoard = d3_current === 0 ? 0 : d3_current * d3_current * k43 * resistanceFactor(k44, t3_board);
+	const q3_currentInCells = d3_current * d3_current * r_currentInCells * growNear(k42 * (1 / (t3_cells + KELVIN) - y_currentInCells));
+	const q3_currentInBoard = d3_current * d3_current * r_currentInBoard * growNear(k44 * (1 / (t3_board + KELVIN) - y_currentInBoard));
 	const h3_engine = -q3_engineToBay - q3_engineToAirBeneath - q3_radiator - q3_engineRadiationToCase + d3_fuelHeatInEngine;
 	const h3_exhaust = -q3_exhaustToBay + q3_gasToExhaust - q3_exhaustRadiationToBay - q3_exhaustRadiationToCase;
 	const h3_bay = q3_engineToBay + q3_exhaustToBay + q3_bayToOutside + q3_bonnetToBay + q3_airFromRadiatorToBay + q3_exhaustRadiationToBay + k40 * q3_radiator;
@@ -760,11 +765,11 @@ export function stepBare(k: Float64Array, d: Float64Array, s: Float64Array, leng
 	const d4_gasToExhaust = c0_gasToExhaust + x4 * (c1_gasToExhaust + x4 * c2_gasToExhaust);
 	const d4_airFromRadiatorToBay = c0_airFromRadiatorToBay + x4 * (c1_airFromRadiatorToBay + x4 * c2_airFromRadiatorToBay);
 	const d4_fuelHeatInEngine = c0_fuelHeatInEngine + x4 * (c1_fuelHeatInEngine + x4 * c2_fuelHeatInEngine);
-	const d4_signal = d[26]!;
+	const d4_signal = d[27]!;
 	const d4_sunOnBonnet = c0_sunOnBonnet * d4_signal;
 	const d4_sunIntoEnclosure = c0_sunIntoEnclosure * d4_signal;
 	const d4_localAir = c0_localAir * d4_signal;
-	const d4_current = d[32]!;
+	const d4_current = d[33]!;
 	const t4_engine = t0_engine + 1.221224509226641 * u0_engine + 6.019134481288629 * u1_engine + 12.53708332932087 * u2_engine + (-0.687886036105895) * u3_engine;
 	const t4_exhaust = t0_exhaust + 1.221224509226641 * u0_exhaust + 6.019134481288629 * u1_exhaust + 12.53708332932087 * u2_exhaust + (-0.687886036105895) * u3_exhaust;
 	const t4_bay = t0_bay + 1.221224509226641 * u0_bay + 6.019134481288629 * u1_bay + 12.53708332932087 * u2_bay + (-0.687886036105895) * u3_bay;
@@ -815,8 +820,8 @@ export function stepBare(k: Float64Array, d: Float64Array, s: Float64Array, leng
 	const q4_exhaustRadiationToCase = k35 * (p4_exhaust - p4_case);
 	const q4_engineRadiationToCase = k36 * (p4_engine - p4_case);
 	const q4_bonnetRadiationToCase = k37 * (p4_bonnet - p4_case);
-	const q4_currentInCells = d4_current === 0 ? 0 : d4_current * d4_current * k41 * resistanceFactor(k42, t4_cells);
-	const q4_currentInBoard = d4_current === 0 ? 0 : d4_current * d4_current * k43 * resistanceFactor(k44, t4_board);
+	const q4_currentInCells = d4_current * d4_current * r_currentInCells * growNear(k42 * (1 / (t4_cells + KELVIN) - y_currentInCells));
+	const q4_currentInBoard = d4_current * d4_current * r_currentInBoard * growNear(k44 * (1 / (t4_board + KELVIN) - y_currentInBoard));
 	const h4_engine = -q4_engineToBay - q4_engineToAirBeneath - q4_radiator - q4_engineRadiationToCase + d4_fuelHeatInEngine;
 	const h4_exhaust = -q4_exhaustToBay + q4_gasToExhaust - q4_exhaustRadiationToBay - q4_exhaustRadiationToCase;
 	const h4_bay = q4_engineToBay + q4_exhaustToBay + q4_bayToOutside + q4_bonnetToBay + q4_airFromRadiatorToBay + q4_exhaustRadiationToBay + k40 * q4_radiator;
@@ -930,8 +935,8 @@ export function stepBare(k: Float64Array, d: Float64Array, s: Float64Array, leng
 	const q5_exhaustRadiationToCase = k35 * (p5_exhaust - p5_case);
 	const q5_engineRadiationToCase = k36 * (p5_engine - p5_case);
 	const q5_bonnetRadiationToCase = k37 * (p5_bonnet - p5_case);
-	const q5_currentInCells = d5_current === 0 ? 0 : d5_current * d5_current * k41 * resistanceFactor(k42, t5_cells);
-	const q5_currentInBoard = d5_current === 0 ? 0 : d5_current * d5_current * k43 * resistanceFactor(k44, t5_board);
+	const q5_currentInCells = d5_current * d5_current * r_currentInCells * growNear(k42 * (1 / (t5_cells + KELVIN) - y_currentInCells));
+	const q5_currentInBoard = d5_current * d5_current * r_currentInBoard * growNear(k44 * (1 / (t5_board + KELVIN) - y_currentInBoard));
 	const h5_engine = -q5_engineToBay - q5_engineToAirBeneath - q5_radiator - q5_engineRadiationToCase + d5_fuelHeatInEngine;
 	const h5_exhaust = -q5_exhaustToBay + q5_gasToExhaust - q5_exhaustRadiationToBay - q5_exhaustRadiationToCase;
 	const h5_bay = q5_engineToBay + q5_exhaustToBay + q5_bayToOutside + q5_bonnetToBay + q5_airFromRadiatorToBay + q5_exhaustRadiationToBay + k40 * q5_radiator;
@@ -1053,7 +1058,7 @@ export function stepBare(k: Float64Array, d: Float64Array, s: Float64Array, leng
 	s[62] = 0.5 * lengthS * (Math.abs(q0_boardToCells) + Math.abs(q0_boardToCase) + Math.abs(q0_currentInBoard));
 }
 
-export function stepShielded(k: Float64Array, d: Float64Array, s: Float64Array, lengthS: number, account: boolean): void {
+export function stepShielded(k: Float64Array, d: Float64Array, s: Float64Array, account: boolean): void {
 	const k0 = k[0]!; // capacity of engine
 	const k1 = k[1]!; // capacity of exhaust
 	const k2 = k[2]!; // capacity of bay
@@ -1107,49 +1112,50 @@ export function stepShielded(k: Float64Array, d: Float64Array, s: Float64Array, 
 	const k50 = k[50]!; // resistance of current in board
 	const k51 = k[51]!; // activation of current in board
 	const x0 = d[0]!;
-	const c0_outside = d[1]!;
-	const c1_outside = d[2]!;
-	const c2_outside = d[3]!;
-	const c0_sky = d[4]!;
-	const c1_sky = d[5]!;
-	const c2_sky = d[6]!;
-	const c0_exhaustGas = d[7]!;
-	const c1_exhaustGas = d[8]!;
-	const c2_exhaustGas = d[9]!;
-	const c0_gasToExhaust = d[10]!;
-	const c1_gasToExhaust = d[11]!;
-	const c2_gasToExhaust = d[12]!;
-	const c0_airFromRadiatorToBay = d[13]!;
-	const c1_airFromRadiatorToBay = d[14]!;
-	const c2_airFromRadiatorToBay = d[15]!;
-	const c0_fuelHeatInEngine = d[16]!;
-	const c1_fuelHeatInEngine = d[17]!;
-	const c2_fuelHeatInEngine = d[18]!;
-	const c0_sunOnBonnet = d[19]!;
-	const c0_sunIntoEnclosure = d[20]!;
-	const c0_localAir = d[21]!;
+	const lengthS = d[1]!;
+	const c0_outside = d[2]!;
+	const c1_outside = d[3]!;
+	const c2_outside = d[4]!;
+	const c0_sky = d[5]!;
+	const c1_sky = d[6]!;
+	const c2_sky = d[7]!;
+	const c0_exhaustGas = d[8]!;
+	const c1_exhaustGas = d[9]!;
+	const c2_exhaustGas = d[10]!;
+	const c0_gasToExhaust = d[11]!;
+	const c1_gasToExhaust = d[12]!;
+	const c2_gasToExhaust = d[13]!;
+	const c0_airFromRadiatorToBay = d[14]!;
+	const c1_airFromRadiatorToBay = d[15]!;
+	const c2_airFromRadiatorToBay = d[16]!;
+	const c0_fuelHeatInEngine = d[17]!;
+	const c1_fuelHeatInEngine = d[18]!;
+	const c2_fuelHeatInEngine = d[19]!;
+	const c0_sunOnBonnet = d[20]!;
+	const c0_sunIntoEnclosure = d[21]!;
+	const c0_localAir = d[22]!;
 	const d0_outside = c0_outside + x0 * (c1_outside + x0 * c2_outside);
 	const d0_sky = c0_sky + x0 * (c1_sky + x0 * c2_sky);
 	const d0_exhaustGas = c0_exhaustGas + x0 * (c1_exhaustGas + x0 * c2_exhaustGas);
 	const d0_gasToExhaust = c0_gasToExhaust + x0 * (c1_gasToExhaust + x0 * c2_gasToExhaust);
 	const d0_airFromRadiatorToBay = c0_airFromRadiatorToBay + x0 * (c1_airFromRadiatorToBay + x0 * c2_airFromRadiatorToBay);
 	const d0_fuelHeatInEngine = c0_fuelHeatInEngine + x0 * (c1_fuelHeatInEngine + x0 * c2_fuelHeatInEngine);
-	const d0_signal = d[22]!;
+	const d0_signal = d[23]!;
 	const d0_sunOnBonnet = c0_sunOnBonnet * d0_signal;
 	const d0_sunIntoEnclosure = c0_sunIntoEnclosure * d0_signal;
 	const d0_localAir = c0_localAir * d0_signal;
-	const d0_current = d[28]!;
+	const d0_current = d[29]!;
 	const dT_outside = c1_outside + 2 * x0 * c2_outside;
 	const dT_sky = c1_sky + 2 * x0 * c2_sky;
 	const dT_exhaustGas = c1_exhaustGas + 2 * x0 * c2_exhaustGas;
 	const dT_gasToExhaust = c1_gasToExhaust + 2 * x0 * c2_gasToExhaust;
 	const dT_airFromRadiatorToBay = c1_airFromRadiatorToBay + 2 * x0 * c2_airFromRadiatorToBay;
 	const dT_fuelHeatInEngine = c1_fuelHeatInEngine + 2 * x0 * c2_fuelHeatInEngine;
-	const dT_signal = d[27]!;
+	const dT_signal = d[28]!;
 	const dT_sunOnBonnet = c0_sunOnBonnet * dT_signal;
 	const dT_sunIntoEnclosure = c0_sunIntoEnclosure * dT_signal;
 	const dT_localAir = c0_localAir * dT_signal;
-	const dT_current = d[33]!;
+	const dT_current = d[34]!;
 	const t0_engine = s[0]!;
 	const t0_exhaust = s[1]!;
 	const t0_bay = s[2]!;
@@ -1210,8 +1216,12 @@ export function stepShielded(k: Float64Array, d: Float64Array, s: Float64Array, 
 	const q0_engineRadiationToShield = k42 * (p0_engine - p0_shield);
 	const q0_surroundingsRadiationToShield = k43 * (p0_localAir - p0_shield);
 	const q0_shieldRadiationToCase = k44 * (p0_shield - p0_case);
-	const q0_currentInCells = d0_current === 0 ? 0 : d0_current * d0_current * k48 * resistanceFactor(k49, t0_cells);
-	const q0_currentInBoard = d0_current === 0 ? 0 : d0_current * d0_current * k50 * resistanceFactor(k51, t0_board);
+	const r_currentInCells = k48 * resistanceFactor(k49, t0_cells);
+	const y_currentInCells = 1 / (t0_cells + KELVIN);
+	const q0_currentInCells = d0_current * d0_current * r_currentInCells;
+	const r_currentInBoard = k50 * resistanceFactor(k51, t0_board);
+	const y_currentInBoard = 1 / (t0_board + KELVIN);
+	const q0_currentInBoard = d0_current * d0_current * r_currentInBoard;
 	const h0_engine = -q0_engineToBay - q0_engineToAirBeneath - q0_radiator - q0_engineRadiationToCase - q0_engineRadiationToShield + d0_fuelHeatInEngine;
 	const h0_exhaust = -q0_exhaustToBay + q0_gasToExhaust - q0_exhaustRadiationToBay - q0_exhaustRadiationToCase - q0_exhaustRadiationToShield;
 	const h0_bay = q0_engineToBay + q0_exhaustToBay + q0_bayToOutside + q0_bonnetToBay + q0_airFromRadiatorToBay + q0_exhaustRadiationToBay + k47 * q0_radiator;
@@ -1536,11 +1546,11 @@ export function stepShielded(k: Float64Array, d: Float64Array, s: Float64Array, 
 	const d1_gasToExhaust = c0_gasToExhaust + x1 * (c1_gasToExhaust + x1 * c2_gasToExhaust);
 	const d1_airFromRadiatorToBay = c0_airFromRadiatorToBay + x1 * (c1_airFromRadiatorToBay + x1 * c2_airFromRadiatorToBay);
 	const d1_fuelHeatInEngine = c0_fuelHeatInEngine + x1 * (c1_fuelHeatInEngine + x1 * c2_fuelHeatInEngine);
-	const d1_signal = d[23]!;
+	const d1_signal = d[24]!;
 	const d1_sunOnBonnet = c0_sunOnBonnet * d1_signal;
 	const d1_sunIntoEnclosure = c0_sunIntoEnclosure * d1_signal;
 	const d1_localAir = c0_localAir * d1_signal;
-	const d1_current = d[29]!;
+	const d1_current = d[30]!;
 	const t1_engine = t0_engine + 1.544 * u0_engine;
 	const t1_exhaust = t0_exhaust + 1.544 * u0_exhaust;
 	const t1_bay = t0_bay + 1.544 * u0_bay;
@@ -1600,8 +1610,8 @@ export function stepShielded(k: Float64Array, d: Float64Array, s: Float64Array, 
 	const q1_engineRadiationToShield = k42 * (p1_engine - p1_shield);
 	const q1_surroundingsRadiationToShield = k43 * (p1_localAir - p1_shield);
 	const q1_shieldRadiationToCase = k44 * (p1_shield - p1_case);
-	const q1_currentInCells = d1_current === 0 ? 0 : d1_current * d1_current * k48 * resistanceFactor(k49, t1_cells);
-	const q1_currentInBoard = d1_current === 0 ? 0 : d1_current * d1_current * k50 * resistanceFactor(k51, t1_board);
+	const q1_currentInCells = d1_current * d1_current * r_currentInCells * growNear(k49 * (1 / (t1_cells + KELVIN) - y_currentInCells));
+	const q1_currentInBoard = d1_current * d1_current * r_currentInBoard * growNear(k51 * (1 / (t1_board + KELVIN) - y_currentInBoard));
 	const h1_engine = -q1_engineToBay - q1_engineToAirBeneath - q1_radiator - q1_engineRadiationToCase - q1_engineRadiationToShield + d1_fuelHeatInEngine;
 	const h1_exhaust = -q1_exhaustToBay + q1_gasToExhaust - q1_exhaustRadiationToBay - q1_exhaustRadiationToCase - q1_exhaustRadiationToShield;
 	const h1_bay = q1_engineToBay + q1_exhaustToBay + q1_bayToOutside + q1_bonnetToBay + q1_airFromRadiatorToBay + q1_exhaustRadiationToBay + k47 * q1_radiator;
@@ -1675,11 +1685,11 @@ export function stepShielded(k: Float64Array, d: Float64Array, s: Float64Array, 
 	const d2_gasToExhaust = c0_gasToExhaust + x2 * (c1_gasToExhaust + x2 * c2_gasToExhaust);
 	const d2_airFromRadiatorToBay = c0_airFromRadiatorToBay + x2 * (c1_airFromRadiatorToBay + x2 * c2_airFromRadiatorToBay);
 	const d2_fuelHeatInEngine = c0_fuelHeatInEngine + x2 * (c1_fuelHeatInEngine + x2 * c2_fuelHeatInEngine);
-	const d2_signal = d[24]!;
+	const d2_signal = d[25]!;
 	const d2_sunOnBonnet = c0_sunOnBonnet * d2_signal;
 	const d2_sunIntoEnclosure = c0_sunIntoEnclosure * d2_signal;
 	const d2_localAir = c0_localAir * d2_signal;
-	const d2_current = d[30]!;
+	const d2_current = d[31]!;
 	const t2_engine = t0_engine + 0.9466785280815826 * u0_engine + 0.2557011698983284 * u1_engine;
 	const t2_exhaust = t0_exhaust + 0.9466785280815826 * u0_exhaust + 0.2557011698983284 * u1_exhaust;
 	const t2_bay = t0_bay + 0.9466785280815826 * u0_bay + 0.2557011698983284 * u1_bay;
@@ -1739,8 +1749,8 @@ export function stepShielded(k: Float64Array, d: Float64Array, s: Float64Array, 
 	const q2_engineRadiationToShield = k42 * (p2_engine - p2_shield);
 	const q2_surroundingsRadiationToShield = k43 * (p2_localAir - p2_shield);
 	const q2_shieldRadiationToCase = k44 * (p2_shield - p2_case);
-	const q2_currentInCells = d2_current === 0 ? 0 : d2_current * d2_current * k48 * resistanceFactor(k49, t2_cells);
-	const q2_currentInBoard = d2_current === 0 ? 0 : d2_current * d2_current * k50 * resistanceFactor(k51, t2_board);
+	const q2_currentInCells = d2_current * d2_current * r_currentInCells * growNear(k49 * (1 / (t2_cells + KELVIN) - y_currentInCells));
+	const q2_currentInBoard = d2_current * d2_current * r_currentInBoard * growNear(k51 * (1 / (t2_board + KELVIN) - y_currentInBoard));
 	const h2_engine = -q2_engineToBay - q2_engineToAirBeneath - q2_radiator - q2_engineRadiationToCase - q2_engineRadiationToShield + d2_fuelHeatInEngine;
 	const h2_exhaust = -q2_exhaustToBay + q2_gasToExhaust - q2_exhaustRadiationToBay - q2_exhaustRadiationToCase - q2_exhaustRadiationToShield;
 	const h2_bay = q2_engineToBay + q2_exhaustToBay + q2_bayToOutside + q2_bonnetToBay + q2_airFromRadiatorToBay + q2_exhaustRadiationToBay + k47 * q2_radiator;
@@ -1814,11 +1824,11 @@ export function stepShielded(k: Float64Array, d: Float64Array, s: Float64Array, 
 	const d3_gasToExhaust = c0_gasToExhaust + x3 * (c1_gasToExhaust + x3 * c2_gasToExhaust);
 	const d3_airFromRadiatorToBay = c0_airFromRadiatorToBay + x3 * (c1_airFromRadiatorToBay + x3 * c2_airFromRadiatorToBay);
 	const d3_fuelHeatInEngine = c0_fuelHeatInEngine + x3 * (c1_fuelHeatInEngine + x3 * c2_fuelHeatInEngine);
-	const d3_signal = d[25]!;
+	const d3_signal = d[26]!;
 	const d3_sunOnBonnet = c0_sunOnBonnet * d3_signal;
 	const d3_sunIntoEnclosure = c0_sunIntoEnclosure * d3_signal;
 	const d3_localAir = c0_localAir * d3_signal;
-	const d3_current = d[31]!;
+	const d3_current = d[32]!;
 	const t3_engine = t0_engine + 3.314825187068521 * u0_engine + 2.896124015972201 * u1_engine + 0.9986419139977817 * u2_engine;
 	const t3_exhaust = t0_exhaust + 3.314825187068521 * u0_exhaust + 2.896124015972201 * u1_exhaust + 0.9986419139977817 * u2_exhaust;
 	const t3_bay = t0_bay + 3.314825187068521 * u0_bay + 2.896124015972201 * u1_bay + 0.9986419139977817 * u2_bay;
@@ -1878,8 +1888,8 @@ export function stepShielded(k: Float64Array, d: Float64Array, s: Float64Array, 
 	const q3_engineRadiationToShield = k42 * (p3_engine - p3_shield);
 	const q3_surroundingsRadiationToShield = k43 * (p3_localAir - p3_shield);
 	const q3_shieldRadiationToCase = k44 * (p3_shield - p3_case);
-	const q3_currentInCells = d3_current === 0 ? 0 : d3_current * d3_current * k48 * resistanceFactor(k49, t3_cells);
-	const q3_currentInBoard = d3_current === 0 ? 0 : d3_current * d3_current * k50 * resistanceFactor(k51, t3_board);
+	const q3_currentInCells = d3_current * d3_current * r_currentInCells * growNear(k49 * (1 / (t3_cells + KELVIN) - y_currentInCells));
+	const q3_currentInBoard = d3_current * d3_current * r_currentInBoard * growNear(k51 * (1 / (t3_board + KELVIN) - y_currentInBoard));
 	const h3_engine = -q3_engineToBay - q3_engineToAirBeneath - q3_radiator - q3_engineRadiationToCase - q3_engineRadiationToShield + d3_fuelHeatInEngine;
 	const h3_exhaust = -q3_exhaustToBay + q3_gasToExhaust - q3_exhaustRadiationToBay - q3_exhaustRadiationToCase - q3_exhaustRadiationToShield;
 	const h3_bay = q3_engineToBay + q3_exhaustToBay + q3_bayToOutside + q3_bonnetToBay + q3_airFromRadiatorToBay + q3_exhaustRadiationToBay + k47 * q3_radiator;
@@ -1953,11 +1963,11 @@ export function stepShielded(k: Float64Array, d: Float64Array, s: Float64Array, 
 	const d4_gasToExhaust = c0_gasToExhaust + x4 * (c1_gasToExhaust + x4 * c2_gasToExhaust);
 	const d4_airFromRadiatorToBay = c0_airFromRadiatorToBay + x4 * (c1_airFromRadiatorToBay + x4 * c2_airFromRadiatorToBay);
 	const d4_fuelHeatInEngine = c0_fuelHeatInEngine + x4 * (c1_fuelHeatInEngine + x4 * c2_fuelHeatInEngine);
-	const d4_signal = d[26]!;
+	const d4_signal = d[27]!;
 	const d4_sunOnBonnet = c0_sunOnBonnet * d4_signal;
 	const d4_sunIntoEnclosure = c0_sunIntoEnclosure * d4_signal;
 	const d4_localAir = c0_localAir * d4_signal;
-	const d4_current = d[32]!;
+	const d4_current = d[33]!;
 	const t4_engine = t0_engine + 1.221224509226641 * u0_engine + 6.019134481288629 * u1_engine + 12.53708332932087 * u2_engine + (-0.687886036105895) * u3_engine;
 	const t4_exhaust = t0_exhaust + 1.221224509226641 * u0_exhaust + 6.019134481288629 * u1_exhaust + 12.53708332932087 * u2_exhaust + (-0.687886036105895) * u3_exhaust;
 	const t4_bay = t0_bay + 1.221224509226641 * u0_bay + 6.019134481288629 * u1_bay + 12.53708332932087 * u2_bay + (-0.687886036105895) * u3_bay;
@@ -2017,8 +2027,8 @@ export function stepShielded(k: Float64Array, d: Float64Array, s: Float64Array, 
 	const q4_engineRadiationToShield = k42 * (p4_engine - p4_shield);
 	const q4_surroundingsRadiationToShield = k43 * (p4_localAir - p4_shield);
 	const q4_shieldRadiationToCase = k44 * (p4_shield - p4_case);
-	const q4_currentInCells = d4_current === 0 ? 0 : d4_current * d4_current * k48 * resistanceFactor(k49, t4_cells);
-	const q4_currentInBoard = d4_current === 0 ? 0 : d4_current * d4_current * k50 * resistanceFactor(k51, t4_board);
+	const q4_currentInCells = d4_current * d4_current * r_currentInCells * growNear(k49 * (1 / (t4_cells + KELVIN) - y_currentInCells));
+	const q4_currentInBoard = d4_current * d4_current * r_currentInBoard * growNear(k51 * (1 / (t4_board + KELVIN) - y_currentInBoard));
 	const h4_engine = -q4_engineToBay - q4_engineToAirBeneath - q4_radiator - q4_engineRadiationToCase - q4_engineRadiationToShield + d4_fuelHeatInEngine;
 	const h4_exhaust = -q4_exhaustToBay + q4_gasToExhaust - q4_exhaustRadiationToBay - q4_exhaustRadiationToCase - q4_exhaustRadiationToShield;
 	const h4_bay = q4_engineToBay + q4_exhaustToBay + q4_bayToOutside + q4_bonnetToBay + q4_airFromRadiatorToBay + q4_exhaustRadiationToBay + k47 * q4_radiator;
@@ -2153,8 +2163,8 @@ export function stepShielded(k: Float64Array, d: Float64Array, s: Float64Array, 
 	const q5_engineRadiationToShield = k42 * (p5_engine - p5_shield);
 	const q5_surroundingsRadiationToShield = k43 * (p5_localAir - p5_shield);
 	const q5_shieldRadiationToCase = k44 * (p5_shield - p5_case);
-	const q5_currentInCells = d5_current === 0 ? 0 : d5_current * d5_current * k48 * resistanceFactor(k49, t5_cells);
-	const q5_currentInBoard = d5_current === 0 ? 0 : d5_current * d5_current * k50 * resistanceFactor(k51, t5_board);
+	const q5_currentInCells = d5_current * d5_current * r_currentInCells * growNear(k49 * (1 / (t5_cells + KELVIN) - y_currentInCells));
+	const q5_currentInBoard = d5_current * d5_current * r_currentInBoard * growNear(k51 * (1 / (t5_board + KELVIN) - y_currentInBoard));
 	const h5_engine = -q5_engineToBay - q5_engineToAirBeneath - q5_radiator - q5_engineRadiationToCase - q5_engineRadiationToShield + d5_fuelHeatInEngine;
 	const h5_exhaust = -q5_exhaustToBay + q5_gasToExhaust - q5_exhaustRadiationToBay - q5_exhaustRadiationToCase - q5_exhaustRadiationToShield;
 	const h5_bay = q5_engineToBay + q5_exhaustToBay + q5_bayToOutside + q5_bonnetToBay + q5_airFromRadiatorToBay + q5_exhaustRadiationToBay + k47 * q5_radiator;
