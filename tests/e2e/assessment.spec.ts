@@ -34,6 +34,57 @@ test('an assessment says what happens, why, and what made it', async ({ page }) 
 	await expectNoViolations(page);
 });
 
+test('an assessment says beside its number how sure it is, how often, what it would take and how long it lives', async ({
+	page
+}) => {
+	test.slow();
+	const { jobId } = await makeAssessableJob(page);
+	const [hot] = await assessAll(page, jobId);
+	const address = `/assessments/${String(hot!.id)}`;
+	await page.goto(address);
+	const chapter = page.getByRole('region', { name: 'What the estimate says beside its number' });
+	// Nobody asks for it again: the page itself hears when it is there.
+	await expect(chapter.getByText(/^On .+ days like this the battery goes dark\.$/)).toBeVisible({
+		timeout: 90_000
+	});
+	const outlook = await ask(page, 'GET', `/api/v1${address}/outlook`);
+	const { daysOfTwenty } = outlook.day as { daysOfTwenty: number };
+	expect(await chapter.locator('circle.dark').count()).toBe(daysOfTwenty);
+	for (const title of [
+		'In a year like the customer’s',
+		'What it would take',
+		'How hot a day, how long a drive',
+		'What to measure first',
+		'How it wears',
+		'Cable and fuse in that heat'
+	]) {
+		await expect(chapter.getByRole('heading', { level: 3, name: title })).toBeVisible();
+	}
+	await expect(page.getByRole('img', { name: /nine in ten between/ }).first()).toBeVisible();
+	await expect(page.getByRole('term').filter({ hasText: /^Cut-out days a year$/ })).toBeVisible();
+	await chapter.getByText('How that settled as more days were drawn').click();
+	await expect(chapter.getByRole('rowheader', { name: '512' })).toBeVisible();
+	await expectNoViolations(page);
+	await page.emulateMedia({ colorScheme: 'dark' });
+	await expectNoViolations(page);
+});
+
+test('without a script the same is there when one looks again', async ({ browser, page, baseURL }) => {
+	test.slow();
+	const { jobId } = await makeAssessableJob(page, { mounts: 1 });
+	const [hot] = await assessAll(page, jobId);
+	const storageState = await page.context().storageState();
+	const context = await browser.newContext({ javaScriptEnabled: false, storageState, baseURL: baseURL! });
+	const plain = await context.newPage();
+	await plain.goto(`/assessments/${String(hot!.id)}`);
+	await expect(plain.getByText('It is being worked out, which takes some seconds.')).toBeVisible();
+	await ask(page, 'GET', `/api/v1/assessments/${String(hot!.id)}/outlook`);
+	await plain.getByRole('link', { name: 'Look again' }).click();
+	await expect(plain.getByText(/^On .+ days like this the battery goes dark\.$/)).toBeVisible();
+	await expect(plain.getByText('It is being worked out')).toHaveCount(0);
+	await context.close();
+});
+
 test('what went in can be read, answer by answer and number by number', async ({ page }) => {
 	const { jobId } = await makeAssessableJob(page);
 	const [hot] = await assessAll(page, jobId);

@@ -133,3 +133,4 @@ export const outlookProgressSchema = z.object({
 	share: z.number(),
 	part: z.enum(['day', 'year', 'influences', 'remedies', 'envelope', 'life'])
 });
+export type OutlookStep = z.infer<typeof outlookProgressSchema>['part'];

@@ -1,5 +1,6 @@
 import { UniqueConstraintError } from 'sequelize';
 import type { AssessmentInputs } from '$lib/schemas/assessments';
+import { USUAL_DAYS_ON_ROAD } from '$lib/schemas/jobs';
 import type { Outlook } from '$lib/schemas/outlooks';
 import type { SignedInPerson } from '$lib/schemas/people';
 import { parseScenario } from '$lib/thermal';
@@ -10,13 +11,13 @@ import {
 	makeOutlook,
 	type OutlookEffort,
 	type OutlookProgress,
-	type OutlookRequest,
-	type TouringYear
+	type OutlookRequest
 } from '$lib/thermal/outlook';
 import { estimateMonths } from '$lib/thermal/weather';
 import { Assessment, AssessmentOutlook } from '../db/models';
 import { notFound } from '../errors';
 import { allow } from '../policies';
+import type { CountedYear } from '../presenters/outlook/year';
 import { remedyListOf } from './remedy-lists';
 import { afterOthers, workInSlices } from './slices';
 
@@ -25,10 +26,9 @@ const MOST_CUT_OUT_SHARE = 0.05;
 const NOMINAL_V = 12.8;
 /** A drop that is usually accepted between battery and charger or loads: common practice. */
 const ACCEPTED_DROP = 0.04;
-const USUAL_DAYS_ON_ROAD = 4;
 
 /** Where the months of older assessments, which kept none, come from. */
-function touringOf(inputs: AssessmentInputs & { touring?: TouringYear }): TouringYear {
+export function touringOf(inputs: AssessmentInputs): CountedYear {
 	const { touring, place, hotDay } = inputs;
 	if (touring) return touring;
 	return {
@@ -129,6 +129,17 @@ async function findOwn(person: SignedInPerson, assessmentId: number): Promise<As
 export async function getOutlook(person: SignedInPerson, assessmentId: number): Promise<Outlook> {
 	allow(person, 'assessments.read');
 	return ensureOutlook(await findOwn(person, assessmentId));
+}
+
+/** What is kept of these assessments, and of no other workshop's; nothing is begun. */
+export async function listKeptOutlooks(
+	person: SignedInPerson,
+	assessmentIds: number[]
+): Promise<Map<number, Outlook>> {
+	allow(person, 'assessments.read');
+	const { workshopId } = person;
+	const rows = await AssessmentOutlook.findAll({ where: { assessmentId: assessmentIds, workshopId } });
+	return new Map(rows.map(({ assessmentId, outlook }) => [assessmentId, outlook]));
 }
 
 /** What is kept, or null while it is worked out: begins the work, and does not wait for it. */

@@ -42,5 +42,5 @@ export function drawCurves(frame: RibbonFrame, data: RibbonData): DrawnCurve[] {
 		const board = { name: 'board', word: 'BMS board', valuesC: curves.boardC, dash: [8, 3, 1.5, 3] } as const;
 		rows.splice(3, 0, { ...board, dash: [...board.dash], widthPx: thin * 1.25, ink: 'ink' });
 	}
-	return rows.map(({ valuesC, ...rest }) => ({ ...rest, line: lineOf(frame, data, valuesC) }));
+	return rows.map(({ valuesC, ...rest }) => ({ ...rest, line: lineOf(frame, curves, valuesC) }));
 }

@@ -1,6 +1,7 @@
 import { readFileSync } from 'node:fs';
 import { describe, expect, it } from 'vitest';
 import { sampleDay, TOURING_LEGS } from '../testing/sample-day';
+import { drawBand } from './axes';
 import { cleanSvg } from './clean-svg';
 import { drawCurves } from './curves';
 import { describeRibbon, hourlyReadings, readRibbon, sayReading } from './describe-ribbon';
@@ -15,11 +16,12 @@ import {
 	widthOf
 } from './geometry';
 import { layOutLimits } from './limits';
+import type { Mark } from './marks';
 import { moveHour } from './move-hour';
 import { RIBBON_PALETTES } from './palette';
 import { placeWords, spreadColumn, wordsBox } from './place-words';
 import { drawRibbonPictures, renderDayRibbonSvg } from './render-day-ribbon';
-import { nameLeg, valueAt } from './ribbon-data';
+import { endHourOf, nameLeg, valueAt } from './ribbon-data';
 import { drawStrip } from './strip';
 import { estimateTextWidth } from './text-width';
 import { drawWords } from './words';
@@ -93,6 +95,45 @@ describe('the drawing', () => {
 		expect(svg).toContain('no charge above');
 		expect(svg).not.toMatch(/dark at|comes back|charge stops/);
 		expect(svgOf(DAYS['no BMS'], 'phone')).toContain('too hot');
+	});
+});
+
+describe('the band', () => {
+	const frame = layOutFrame(DAYS.hot, 'desk');
+	/** Its edges from left to right: above, then below. */
+	const edgesOf = (mark: Mark): { x: number; y: number }[] =>
+		mark.kind === 'band'
+			? [...mark.d.matchAll(/([\d.]+) ([\d.]+)/g)].map(([, x, y]) => ({ x: Number(x), y: Number(y) }))
+			: [];
+	const spanAt = (mark: Mark, x: number): number => {
+		const ys = edgesOf(mark)
+			.filter((point) => Math.abs(point.x - x) < 12)
+			.map(({ y }) => y);
+		return Math.max(...ys) - Math.min(...ys);
+	};
+
+	it('is drawn wide and, on top of it, narrow: the part in both is the darker one', () => {
+		const [wide, narrow] = drawBand(frame, DAYS.hot);
+		const atPeak = frame.x(DAYS.hot.peakAtHour);
+		expect(spanAt(wide!, atPeak)).toBeGreaterThan(2 * spanAt(narrow!, atPeak));
+		expect(svgOf(DAYS.hot).match(/fill-opacity="0\.22"/g)).toHaveLength(2);
+		expect(drawBand(frame, DAYS.cool)).toEqual([]);
+	});
+
+	it('may have fewer points than the curves, and ends where they end', () => {
+		const { band, curves } = DAYS.hot;
+		const third = (valuesC: number[]) => valuesC.filter((_, at) => at % 3 === 0);
+		const sparse = { ...DAYS.hot, band: { ...band!, stepMin: 3 * band!.stepMin } };
+		for (const edge of ['lowC', 'lowerC', 'upperC', 'highC'] as const) sparse.band[edge] = third(band![edge]);
+		const xs = edgesOf(drawBand(frame, sparse)[0]!).map(({ x }) => x);
+		expect(Math.max(...xs)).toBeGreaterThan(frame.x(endHourOf(curves)) - 3);
+	});
+
+	it('is told in words at the hottest hour', () => {
+		expect(describeRibbon(DAYS.hot)).toMatch(
+			/At \d\d:\d\d half of all days lie between \d\d\u202F°C and \d\d\u202F°C, nine in ten between \d\d\u202F°C and \d\d\u202F°C\.$/
+		);
+		expect(describeRibbon(DAYS.cool)).not.toContain('nine in ten');
 	});
 });
 

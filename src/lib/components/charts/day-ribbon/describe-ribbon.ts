@@ -11,7 +11,16 @@ export function describeRibbon(data: RibbonData): string {
 	const until = formatClockHour(endHourOf(curves));
 	const day = `Temperatures from ${from} to ${until}.`;
 	const peak = `The cells are hottest at ${formatClockHour(peakAtHour)} with ${formatTemperature(peakCellsC)}.`;
-	return [day, peak, describeGuard(data)].join(' ');
+	return [day, peak, describeGuard(data), ...describeBand(data)].join(' ');
+}
+
+/** How far the days lie apart where they matter: at the peak. */
+function describeBand({ band, peakAtHour }: RibbonData): string[] {
+	if (!band) return [];
+	const at = (valuesC: number[]) => formatTemperature(valueAt(band, valuesC, peakAtHour));
+	return [
+		`At ${formatClockHour(peakAtHour)} half of all days lie between ${at(band.lowerC)} and ${at(band.upperC)}, nine in ten between ${at(band.lowC)} and ${at(band.highC)}.`
+	];
 }
 
 function describeDark({ darkSpans }: RibbonData): string {
@@ -28,10 +37,14 @@ function describeDark({ darkSpans }: RibbonData): string {
 function describeGuard(data: RibbonData): string {
 	const { limits } = data;
 	if (isUseLimits(limits)) {
-		const [use, charge] = [limits.highestUseC, limits.highestChargeC].map((tempC) => formatTemperature(tempC));
+		const [use, charge] = [limits.highestUseC, limits.highestChargeC].map((tempC) =>
+			formatTemperature(tempC)
+		);
 		return `Nothing switches this battery off. It is too hot above ${use}, and is not to be charged above ${charge}.`;
 	}
-	const [cut, reset] = [limits.dischargeCutC, limits.dischargeResetC].map((tempC) => formatTemperature(tempC));
+	const [cut, reset] = [limits.dischargeCutC, limits.dischargeResetC].map((tempC) =>
+		formatTemperature(tempC)
+	);
 	return `${describeDark(data)} It goes dark at ${cut} and comes back at ${reset}.`;
 }
 

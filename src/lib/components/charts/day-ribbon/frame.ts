@@ -1,7 +1,7 @@
 import { formatHourTick } from '../../../format/time';
 import { simplifyLine, type Box, type Point } from './geometry';
 import { listLimits, watchesBoardAlone } from './limit-rows';
-import { endHourOf, hourAt, type RibbonData } from './ribbon-data';
+import { endHourOf, hourAt, type RibbonData, type RibbonHours } from './ribbon-data';
 import { estimateTextWidth } from './text-width';
 
 /** `mini` and `wide` are the low ones: in the survey and side by side. */
@@ -256,9 +256,9 @@ export interface CurvePoint extends Point {
 const CURVE_TOLERANCE_PX = 0.15;
 
 /** A curve in the picture's own px, with no more points than it takes to draw it. */
-export function lineOf(frame: RibbonFrame, data: RibbonData, valuesC: number[]): CurvePoint[] {
+export function lineOf(frame: RibbonFrame, hours: RibbonHours, valuesC: number[]): CurvePoint[] {
 	const points = valuesC.map((tempC, i) => {
-		const hour = hourAt(data.curves, i);
+		const hour = hourAt(hours, i);
 		return { hour, tempC, x: frame.x(hour), y: frame.y(tempC) };
 	});
 	return simplifyLine(points, CURVE_TOLERANCE_PX);

@@ -2,23 +2,18 @@ import type { DayLimits } from '../../../format/heat-limits';
 import type { LegKind } from '../../../schemas/day-plans';
 import type { PositionKind } from '../../../schemas/survey';
 import type { AssessmentCurves, DoneAssessment, HourSpan, LegSpan } from '../../../thermal/assess/types';
-import type { Sensor } from '../../../thermal/types';
 
 /** A leg that knows what it is called. */
 export type RibbonLeg = LegSpan & { kind: LegKind };
 
-/** The battery's own limits, °C. */
-export interface RibbonLimits {
-	dischargeCutC: number;
-	dischargeResetC: number;
-	chargeCutC: number;
-	chargeResetC: number;
-	sensor: Sensor;
-}
+/** When the values of a curve begin, and how far apart they are. */
+export type RibbonHours = Pick<AssessmentCurves, 'startHour' | 'stepMin'>;
 
-/** Where the cells may lie, one value a step of the curves. */
-export interface RibbonBand {
+/** Where the cells may lie: half of all days between the inner two, nine in ten between the outer two. */
+export interface RibbonBand extends RibbonHours {
 	lowC: number[];
+	lowerC: number[];
+	upperC: number[];
 	highC: number[];
 }
 
@@ -85,11 +80,11 @@ export function toRibbonData(
 export const endHourOf = ({ startHour, stepMin, cellsC }: AssessmentCurves): number =>
 	startHour + ((cellsC.length - 1) * stepMin) / 60;
 
-export const hourAt = ({ startHour, stepMin }: AssessmentCurves, index: number): number =>
+export const hourAt = ({ startHour, stepMin }: RibbonHours, index: number): number =>
 	startHour + (index * stepMin) / 60;
 
 /** The value of a curve at a clock hour, between steps by a straight line, held at both ends. */
-export function valueAt({ startHour, stepMin }: AssessmentCurves, valuesC: number[], hour: number): number {
+export function valueAt({ startHour, stepMin }: RibbonHours, valuesC: number[], hour: number): number {
 	const place = Math.min(Math.max(((hour - startHour) * 60) / stepMin, 0), valuesC.length - 1);
 	const before = Math.floor(place);
 	const low = valuesC[before] ?? NaN;

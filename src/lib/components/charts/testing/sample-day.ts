@@ -90,7 +90,10 @@ export function sampleDay(settings: SampleSettings = {}): RibbonData {
 		air: { word: 'bay air', curve: 'bayC' },
 		band: settings.band
 			? {
+					...{ startHour, stepMin },
 					lowC: curves.cellsC.map((c) => c - 2 - (c - 30) / 20),
+					lowerC: curves.cellsC.map((c) => c - 1),
+					upperC: curves.cellsC.map((c) => c + 1),
 					highC: curves.cellsC.map((c) => c + 2 + (c - 30) / 20)
 				}
 			: null

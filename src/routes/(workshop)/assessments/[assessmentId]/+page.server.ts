@@ -4,6 +4,7 @@ import { toRibbonData } from '$lib/components/charts/day-ribbon/ribbon-data';
 import { dayLimitsOf } from '$lib/format/heat-limits';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { pageId } from '$lib/server/http/page-id';
+import { logger } from '$lib/server/logger';
 import { presentReport } from '$lib/server/presenters/reports';
 import {
 	assessJob,
@@ -12,6 +13,7 @@ import {
 	listMountOutcomes,
 	reproduceAssessment
 } from '$lib/server/services/assessments';
+import { peekOutlookReport } from '$lib/server/services/outlook-reports';
 import { newestRecommendation } from '$lib/server/services/recommendations';
 import type { Actions, PageServerLoad, RequestEvent } from './$types';
 
@@ -21,8 +23,14 @@ export const load: PageServerLoad = async (event) => {
 	const { id, jobId, mountId, inputs, result, isCurrent, bookId, headroomK } = assessment;
 	const outcomes = await orPageError(listMountOutcomes(person, jobId));
 	const recommendation = await orPageError(newestRecommendation(person, jobId));
-	const ribbon = toRibbonData(result, dayLimitsOf(inputs.battery), inputs.mount.survey.positionKind);
+	const others = outcomes.filter((outcome) => outcome.mountId !== mountId);
+	const sayTrouble = (error: unknown) => logger.error({ assessmentId: id, err: error }, 'outlook failed');
+	const { told, waiting } = await orPageError(peekOutlookReport(person, assessment, others, sayTrouble));
+	const { positionKind } = inputs.mount.survey;
+	const band = told?.outlook.day.band ?? null;
+	const ribbon = toRibbonData(result, dayLimitsOf(inputs.battery), positionKind, band);
 	return {
+		outlook: told?.report ?? null,
 		...{ id, jobId, mountId, isCurrent, bookId, headroomK, ribbon },
 		jobNumber: inputs.jobNumber,
 		customerName: inputs.customerName,
@@ -33,7 +41,7 @@ export const load: PageServerLoad = async (event) => {
 		report: presentReport(assessment),
 		pictures: drawRibbonPictures(ribbon, ['desk', 'phone'], 'day'),
 		newest: outcomes.find((outcome) => outcome.mountId === mountId)?.assessment?.id ?? null,
-		others: outcomes.filter((outcome) => outcome.mountId !== mountId),
+		...{ others, waiting },
 		recommendation: recommendation?.assessment.id === id ? recommendation : null
 	};
 };
