@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest';
 import {
 	heatFlowsAt,
 	parseScenario,
+	SCENARIO_FIELDS,
 	SENSORS,
 	SURFACES,
 	type NodeValues,
