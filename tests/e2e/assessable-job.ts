@@ -50,6 +50,17 @@ const COOLED_CABIN: Json = {
 };
 const SURVEYS: Json[] = [HOT_CORNER, COOLED_CABIN];
 
+const LITHIUM: Json = {
+	...{ chemistry: 'lithium-iron-phosphate', capacityAh: 100, massKg: 12.85, internalResistanceMohm: 12 },
+	...{ sensor: 'cells', chargeCutC: 60, chargeResetC: 50, dischargeCutC: 75, dischargeResetC: 62 },
+	...{ cutDelayS: 0, autoReset: true }
+};
+/** Nothing switches it off. */
+export const FLOODED: Json = {
+	...{ chemistry: 'lead-acid-flooded', capacityAh: 100, massKg: 27, internalResistanceMohm: 5 },
+	...{ highestChargeC: 50, highestUseC: 60, ratedLifeYears: 5, compensatesCharge: false }
+};
+
 export interface AssessableJob {
 	jobId: number;
 	mountIds: number[];
@@ -70,7 +81,11 @@ async function addMount(page: Page, jobId: unknown, index: number): Promise<numb
 /** A job of its own with all that an assessment needs: an exhaust corner, a cooled cabin, and so on in turn. */
 export async function makeAssessableJob(
 	page: Page,
-	{ mounts = 2, legs = HOT_DAY }: { mounts?: number; legs?: Json[] } = {}
+	{
+		mounts = 2,
+		legs = HOT_DAY,
+		battery: kind = LITHIUM
+	}: { mounts?: number; legs?: Json[]; battery?: Json } = {}
 ): Promise<AssessableJob> {
 	const tag = randomUUID().slice(0, 8);
 	const customerName = `Ilse Tarn ${tag}`;
@@ -79,10 +94,8 @@ export async function makeAssessableJob(
 		...{ massKg: 3100, dragAreaM2: 1.35, towMassKg: 1800, towDragAreaM2: 1 }
 	});
 	const battery = await ask(page, 'POST', '/api/v1/batteries', {
-		...{ maker: 'Cindervale', model: `Trial ${tag}`, chemistry: 'lithium-iron-phosphate' },
-		...{ capacityAh: 100, lengthMm: 320, widthMm: 165, heightMm: 215, massKg: 12.85 },
-		...{ internalResistanceMohm: 12, maxChargeA: 50, sensor: 'cells', chargeCutC: 60, chargeResetC: 50 },
-		...{ dischargeCutC: 75, dischargeResetC: 62, cutDelayS: 0, autoReset: true },
+		...{ maker: 'Cindervale', model: `Trial ${tag}`, ...kind },
+		...{ lengthMm: 320, widthMm: 165, heightMm: 215, maxChargeA: 50 },
 		...{ underBonnet: 'excluded', underBonnetWords: 'Not for engine compartments.' },
 		dataSheet: 'Invented for the tests, page 2'
 	});

@@ -54,5 +54,5 @@ export function sayUsualLimits(key: string): string {
 	const { highestChargeC, highestUseC, wear } = chemistry;
 	const charge = formatTemperature(highestChargeC.value);
 	const use = formatTemperature(highestUseC.value);
-	return `Usual for this kind: charged up to ${charge}, used up to ${use}, ${wear.usualLifeYears.value} years at 25 °C. The data sheet counts.`;
+	return `Usual for this kind: charged up to ${charge}, used up to ${use}, ${wear.usualLifeYears.value} years at ${formatTemperature(25)}. The data sheet counts.`;
 }

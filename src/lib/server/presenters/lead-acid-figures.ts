@@ -37,10 +37,11 @@ function sayVoltage({ chemistry }: HeatLimits, leadAcid: LeadAcid, peakCellsC: n
 	const charger = chargerCompensates
 		? 'The charger sees to it.'
 		: `The charger does not: it goes on at ${formatVolts(uncompensatedChargeV)}.`;
+	const sum = `${formatVolts(uncompensatedChargeV)} at ${formatTemperature(25)}, and ${cells.value} cells × ${step} × ${formatKelvin(peakCellsC - 25, 0)}`;
 	return {
 		label: 'Charging voltage at the hottest',
 		value: formatVolts(compensatedChargeV),
-		note: `${formatVolts(uncompensatedChargeV)} at 25 °C, and ${cells.value} cells × ${step} × ${formatKelvin(peakCellsC - 25, 0)}; usual practice, the maker's own figure comes first. ${charger}`
+		note: `${sum}, as is usual. ${charger}`
 	};
 }
 
@@ -48,7 +49,7 @@ function sayGas({ freshAirM3PerH, openingCm2, sparkFreeMm }: LeadAcid): ReportLi
 	return {
 		label: 'Fresh air while it charges',
 		value: formatWithUnit(freshAirM3PerH, 'm³/h', 2),
-		note: `Hydrogen, by EN 50272-2 on boost charge: an opening of ${formatOpening(openingCm2)} low and one high, to the outside; no spark within ${formatMillimetres(sparkFreeMm)} of its vents.`
+		note: `Hydrogen on boost charge (EN 50272-2): openings to the outside of ${formatOpening(openingCm2)} each, low and high; no spark within ${formatMillimetres(sparkFreeMm)} of a vent.`
 	};
 }
 

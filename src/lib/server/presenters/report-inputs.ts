@@ -51,7 +51,7 @@ function listGuard(battery: AssessmentInputs['battery']): ReportLine[] {
 			{ label: 'Use', value: `up to ${formatTemperature(guard.highestUseC)}; it has no BMS` },
 			{ label: 'Charging', value: `up to ${formatTemperature(guard.highestChargeC)}` },
 			{ label: 'Its charger', value: charger },
-			{ label: 'Rated life', value: `${writeNumber(guard.ratedLifeYears)} years at 25 °C` }
+			{ label: 'Rated life', value: `${writeNumber(guard.ratedLifeYears)} years at ${formatTemperature(25)}` }
 		];
 	}
 	const pair = (cutC: number, resetC: number) =>
