@@ -78,6 +78,8 @@ test('a weather file with faults is told line by line, and changes nothing', asy
 	expect(await readPlace(page, id)).toMatchObject({ version, monthlyMaxC: null, weatherFile: null });
 	await page.getByRole('button', { name: 'See what it would change' }).click();
 	await expect(page.getByText('The file is missing, or there is nothing in it: choose one.')).toBeVisible();
+	await chooseFile(page, 'large.epw', Buffer.alloc(5.5 * 1024 * 1024, 'x'));
+	await expect(page.getByText('The file is larger than 5 MB, the most that is read here.')).toBeVisible();
 });
 
 test('the months of a place are typed in, all twelve or none', ONCE, async ({ page }) => {

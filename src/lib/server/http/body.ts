@@ -28,7 +28,8 @@ export async function readBytes(request: Request, mostBytes: number): Promise<Ui
 	for (let part = await reader.read(); !part.done; part = await reader.read()) {
 		bytes += part.value.byteLength;
 		if (bytes > mostBytes) {
-			await reader.cancel();
+			// Left unread and not broken off: to cancel it would close the connection before the answer is out.
+			reader.releaseLock();
 			throw tooLarge(mostBytes);
 		}
 		parts.push(part.value);

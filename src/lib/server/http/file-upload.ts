@@ -15,8 +15,10 @@ export const FILE_MEDIA = ['text/plain', 'text/csv', 'application/octet-stream']
 /** Boundaries and the other fields of a form around its file. */
 const FORM_AROUND_FILE_BYTES = 64 * 1024;
 
-function sayLimit(mostBytes: number): string {
-	return `${Math.floor(mostBytes / 1024 / 1024)} MB`;
+function fileTooLarge(mostBytes: number): AppError {
+	const limit = `${Math.floor(mostBytes / 1024 / 1024)} MB`;
+	const message = `The file is larger than ${limit}, the most that is read here.`;
+	return new AppError('too_large', message, [{ path: FILE_FIELD, message }]);
 }
 
 /** The file of a form that was read already; none and an empty one are told at its field. */
@@ -26,16 +28,19 @@ export async function fileOf(formData: FormData, mostBytes: number): Promise<Sen
 		const message = 'The file is missing, or there is nothing in it: choose one.';
 		throw new AppError('invalid_input', message, [{ path: FILE_FIELD, message }]);
 	}
-	if (file.size > mostBytes) {
-		const message = `The file is larger than ${sayLimit(mostBytes)}, the most that is read here.`;
-		throw new AppError('too_large', message, [{ path: FILE_FIELD, message }]);
-	}
+	if (file.size > mostBytes) throw fileTooLarge(mostBytes);
 	return { name: file.name, bytes: new Uint8Array(await file.arrayBuffer()) };
 }
 
 /** The form around a file, read no further than the file's limit and a little more. */
-export const readFileForm = (request: Request, mostBytes: number): Promise<FormData> =>
-	readFormData(request, mostBytes + FORM_AROUND_FILE_BYTES);
+export async function readFileForm(request: Request, mostBytes: number): Promise<FormData> {
+	try {
+		return await readFormData(request, mostBytes + FORM_AROUND_FILE_BYTES);
+	} catch (error) {
+		if (error instanceof AppError && error.code === 'too_large') throw fileTooLarge(mostBytes);
+		throw error;
+	}
+}
 
 /** The file of a request to the API: in a form, or as the body. */
 export async function readSentFile(request: Request, name: string, mostBytes: number): Promise<SentFile> {
