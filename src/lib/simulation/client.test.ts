@@ -1,7 +1,7 @@
 import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
 import type { SurveyInputs } from '../thermal/survey/types';
 import { createAssessor, type AssessWorker } from './client';
-import type { AssessRequest, AssessResponse, RunAnswer } from './messages';
+import type { AssessRequest, AssessResponse, LiveSpread, RunAnswer } from './messages';
 
 const inputs = (altitudeM: number) => ({ altitudeM }) as SurveyInputs;
 const answer = (reason: string): RunAnswer => ({ status: 'failed', reason });
@@ -22,6 +22,12 @@ class FakeWorker implements AssessWorker {
 	}
 	terminate() {
 		this.terminated = true;
+	}
+	spread(index: number, daysOfTwenty: number) {
+		const spread = { daysOfTwenty } as LiveSpread;
+		this.onmessage?.({
+			data: { id: this.requests[index]?.id ?? -1, spread }
+		} as MessageEvent<AssessResponse>);
 	}
 	answer(index: number, reason: string) {
 		const id = this.requests[index]?.id ?? -1;
@@ -127,6 +133,19 @@ describe('an assessor', () => {
 		assessor.dispose();
 		expect(worker(0).terminated).toBe(true);
 		expect(await running).toEqual({ status: 'dropped' });
+	});
+
+	it('hands on the spread around the newest answer, and none that came too late', async () => {
+		const heard: number[] = [];
+		const onSpread = ({ daysOfTwenty }: LiveSpread) => heard.push(daysOfTwenty);
+		const assessor = createAssessor({ createWorker: () => new FakeWorker(), onSpread });
+		const first = assessor.assess(inputs(1));
+		worker(0).answer(0, 'first');
+		await first;
+		worker(0).spread(0, 3);
+		void assessor.assess(inputs(2));
+		worker(0).spread(0, 4);
+		expect(heard).toEqual([3]);
 	});
 
 	it('runs in the page where there are no workers', async () => {

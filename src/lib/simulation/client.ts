@@ -1,5 +1,5 @@
 import type { SurveyInputs } from '../thermal/survey/types';
-import type { AssessOutcome, AssessRequest, AssessResponse, RunAnswer } from './messages';
+import type { AssessOutcome, AssessRequest, AssessResponse, LiveSpread, RunAnswer } from './messages';
 
 /** As much of a worker as is used here. */
 export interface AssessWorker {
@@ -15,6 +15,8 @@ export interface AssessorSettings {
 	runInPage?: (inputs: SurveyInputs) => Promise<RunAnswer>;
 	/** Longer than any sound run takes on a slow phone. */
 	maxRunMs?: number;
+	/** Hears of the spread around the answer that was handed back last. */
+	onSpread?: (spread: LiveSpread) => void;
 }
 
 export interface Assessor {
@@ -36,7 +38,7 @@ const BROKE_DOWN = 'The calculation broke down. Change something to try again.';
 
 /** Runs assessments beside the page. One at a time: only the newest waits, the rest are dropped. */
 export function createAssessor(settings: AssessorSettings = {}): Assessor {
-	const { createWorker = startWorker, runInPage = importAndRun, maxRunMs = MAX_RUN_MS } = settings;
+	const { createWorker = startWorker, runInPage = importAndRun, maxRunMs = MAX_RUN_MS, onSpread } = settings;
 	let worker: AssessWorker | null = null;
 	let running: Run | null = null;
 	let waiting: Run | null = null;
@@ -60,7 +62,10 @@ export function createAssessor(settings: AssessorSettings = {}): Assessor {
 	function openWorker(): AssessWorker | null {
 		const opened = createWorker();
 		if (!opened) return null;
-		opened.onmessage = ({ data }) => finish(data.id, data.answer);
+		opened.onmessage = ({ data }) => {
+			if ('answer' in data) finish(data.id, data.answer);
+			else if (data.id === lastId) onSpread?.(data.spread);
+		};
 		opened.onerror = () => breakOff(BROKE_DOWN);
 		return opened;
 	}

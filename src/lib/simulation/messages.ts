@@ -1,4 +1,5 @@
 import type { Assessment } from '../thermal/assess/types';
+import type { DaySpread } from '../thermal/uncertainty/spread-day';
 import type { SurveyInputs } from '../thermal/survey/types';
 
 /** To the worker: one run. */
@@ -22,8 +23,8 @@ export interface DroppedRun {
 export type RunAnswer = Assessment | RefusedRun;
 export type AssessOutcome = RunAnswer | DroppedRun;
 
-/** From the worker: the answer to the run of that id. */
-export interface AssessResponse {
-	id: number;
-	answer: RunAnswer;
-}
+/** How far the day may go otherwise, from draws of what is not known. */
+export type LiveSpread = Pick<DaySpread, 'samples' | 'cutOutShare' | 'daysOfTwenty' | 'band'>;
+
+/** From the worker: the answer to the run of that id, and after it what the draws around it came to. */
+export type AssessResponse = { id: number; answer: RunAnswer } | { id: number; spread: LiveSpread };

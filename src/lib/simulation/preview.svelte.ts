@@ -1,7 +1,8 @@
 import { onDestroy } from 'svelte';
 import type { DoneAssessment } from '../thermal/assess/types';
 import type { SurveyInputs } from '../thermal/survey/types';
-import { createAssessor, type Assessor } from './client';
+import { createAssessor, type Assessor, type AssessorSettings } from './client';
+import type { LiveSpread } from './messages';
 
 export interface PreviewProblem {
 	/** Which input it is about; empty when it is about none. */
@@ -12,12 +13,11 @@ export interface PreviewProblem {
 export interface Preview {
 	/** The last assessment that came out; it stays while the next is on its way. */
 	readonly current: DoneAssessment | null;
+	/** How far it may go otherwise; null until the draws around the current assessment are done. */
+	readonly spread: LiveSpread | null;
 	readonly busy: boolean;
 	readonly problem: PreviewProblem | null;
 }
-
-/** Long enough to skip the steps of a held button, too short to be noticed. */
-const DEBOUNCE_MS = 60;
 
 /**
  * An assessment that follows its inputs, for use while a component is set up. `getInputs` reads whatever it needs
@@ -25,20 +25,22 @@ const DEBOUNCE_MS = 60;
  */
 export function createPreview(
 	getInputs: () => SurveyInputs | null,
-	openAssessor: () => Assessor = createAssessor
+	openAssessor: (settings: AssessorSettings) => Assessor = createAssessor
 ): Preview {
 	let current = $state.raw<DoneAssessment | null>(null);
 	let problem = $state.raw<PreviewProblem | null>(null);
+	let spread = $state.raw<LiveSpread | null>(null);
 	let busy = $state(false);
 	let assessor: Assessor | null = null;
 
 	async function run(inputs: SurveyInputs) {
-		assessor ??= openAssessor();
+		assessor ??= openAssessor({ onSpread: (heard) => (spread = heard) });
 		const outcome = await assessor.assess(inputs);
 		if (outcome.status === 'dropped') return;
 		busy = false;
 		if (outcome.status === 'done') {
 			current = outcome;
+			spread = null;
 			problem = null;
 		} else if (outcome.status === 'refused') problem = { path: outcome.path, message: outcome.message };
 		else problem = { path: '', message: outcome.reason };
@@ -47,6 +49,7 @@ export function createPreview(
 	function clear() {
 		assessor?.cancel();
 		current = null;
+		spread = null;
 		problem = null;
 		busy = false;
 	}
@@ -59,8 +62,8 @@ export function createPreview(
 		}
 		const plain = $state.snapshot(inputs) as SurveyInputs;
 		busy = true;
-		const timer = setTimeout(() => void run(plain), DEBOUNCE_MS);
-		return () => clearTimeout(timer);
+		// Nothing is held back: of several that wait only the newest is run.
+		void run(plain);
 	});
 
 	onDestroy(() => assessor?.dispose());
@@ -68,6 +71,9 @@ export function createPreview(
 	return {
 		get current() {
 			return current;
+		},
+		get spread() {
+			return spread;
 		},
 		get busy() {
 			return busy;
