@@ -6,6 +6,9 @@ import { chemistryOf, type HeatLimits } from '$lib/thermal/chemistries';
 
 type LeadAcid = NonNullable<AssessmentResult['leadAcid']>;
 
+/** At which a charging voltage is given. */
+const REFERENCE_C = 25;
+
 export const formatVolts = (voltageV: number): string => formatWithUnit(voltageV, 'V', 1);
 export const formatOpening = (openingCm2: number): string => formatWithUnit(openingCm2, 'cm²', 0);
 
@@ -34,22 +37,22 @@ function sayVoltage({ chemistry }: HeatLimits, leadAcid: LeadAcid, peakCellsC: n
 	const { cells, compensationMvPerKPerCell } = chemistryOf(chemistry);
 	const { compensatedChargeV, uncompensatedChargeV, chargerCompensates } = leadAcid;
 	const step = formatWithUnit(compensationMvPerKPerCell.value, 'mV/K');
-	const charger = chargerCompensates
-		? 'The charger sees to it.'
-		: `The charger does not: it goes on at ${formatVolts(uncompensatedChargeV)}.`;
-	const sum = `${formatVolts(uncompensatedChargeV)} at ${formatTemperature(25)}, and ${cells.value} cells × ${step} × ${formatKelvin(peakCellsC - 25, 0)}`;
+	const at25 = formatVolts(uncompensatedChargeV);
+	const fall = `${cells.value} cells × ${step} × ${formatKelvin(peakCellsC - REFERENCE_C, 0)}`;
+	const charger = chargerCompensates ? 'the charger follows' : `the charger stays at ${at25}`;
 	return {
 		label: 'Charging voltage at the hottest',
 		value: formatVolts(compensatedChargeV),
-		note: `${sum}, as is usual. ${charger}`
+		note: `Usually ${at25} at ${formatTemperature(REFERENCE_C)}, and ${fall}; ${charger}.`
 	};
 }
 
 function sayGas({ freshAirM3PerH, openingCm2, sparkFreeMm }: LeadAcid): ReportLine {
+	const openings = `Openings of ${formatOpening(openingCm2)} low and high (EN 50272-2, boost)`;
 	return {
-		label: 'Fresh air while it charges',
+		label: 'Fresh air for its hydrogen',
 		value: formatWithUnit(freshAirM3PerH, 'm³/h', 2),
-		note: `Hydrogen on boost charge (EN 50272-2): openings to the outside of ${formatOpening(openingCm2)} each, low and high; no spark within ${formatMillimetres(sparkFreeMm)} of a vent.`
+		note: `${openings}; no spark within ${formatMillimetres(sparkFreeMm)}.`
 	};
 }
 

@@ -112,7 +112,7 @@ describe('an assessment in words', () => {
 		expect(valueOf(report.figures, 'Headroom')).toMatch(/^−\d+\.\d K$/);
 		expect(valueOf(report.figures, 'Too hot')).toMatch(/ from \d\d:\d\d/);
 		expect(valueOf(report.figures, 'Charging voltage at the hottest')).toMatch(/^1[23]\.\d V$/);
-		expect(valueOf(report.figures, 'Fresh air while it charges')).toBe('0.24 m³/h');
+		expect(valueOf(report.figures, 'Fresh air for its hydrogen')).toBe('0.24 m³/h');
 		expect(valueOf(report.battery, 'Use')).toBe('up to 60 °C; it has no BMS');
 		expect(valueOf(report.battery, 'Rated life')).toBe('6 years at 25 °C');
 		const said = JSON.stringify([report.sentence, report.figures, report.battery]);
@@ -124,11 +124,11 @@ describe('an assessment in words', () => {
 		const line = presentReport(view).figures.find(({ label }) => label.startsWith('Charging voltage'));
 		const kelvin = Math.round(view.result.peakCellsC - 25);
 		expect(line?.note?.replace(/\u202F/g, ' ')).toContain(
-			`14.4 V at 25 °C, and 6 cells × −4 mV/K × ${kelvin} K`
+			`Usually 14.4 V at 25 °C, and 6 cells × −4 mV/K × ${kelvin} K`
 		);
-		expect(line?.note).toContain('The charger does not');
+		expect(line?.note).toContain('the charger stays at');
 		const seen = presentReport(makeView({ battery: { ...AGM, compensatesCharge: true } })).figures;
-		expect(JSON.stringify(seen)).toContain('The charger sees to it');
+		expect(JSON.stringify(seen)).toContain('the charger follows');
 	});
 
 	it('tells an answer from a value that was assumed', () => {
