@@ -18,6 +18,8 @@ export interface ReportDerivation {
 	value: string;
 	/** The formula with its numbers, and where it comes from. */
 	basis: string;
+	/** What measurement would make it better known. */
+	betterBy: string;
 	/** Taken as it was entered, and told among the inputs already. */
 	isEntered: boolean;
 }

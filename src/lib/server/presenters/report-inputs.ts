@@ -1,3 +1,4 @@
+import { improvedBy } from '$lib/format/improved-by';
 import { CHEMISTRY_WORDS, SENSOR_WORDS, UNDER_BONNET } from '$lib/format/batteries';
 import { formatClimateZone } from '$lib/format/climate-zones';
 import { sayDaysOnRoad } from '$lib/format/days-on-road';
@@ -167,6 +168,7 @@ export function listDerivations({ derivations }: AssessmentInputs): ReportDeriva
 		const figure = typeof value === 'number' ? formatFigure(value) : value;
 		return {
 			...{ label, basis },
+			betterBy: improvedBy(path),
 			value: unit === '-' ? figure : `${figure} ${unit}`,
 			isEntered: ENTERED.test(path)
 		};

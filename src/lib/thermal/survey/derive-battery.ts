@@ -3,6 +3,7 @@ import { chemistryOf } from '../chemistries/table';
 import type { Chemistry, Sourced } from '../chemistries/types';
 import type { FieldGroup } from '../vehicle/scenario-fields';
 import type { BatteryShape } from './battery-shape';
+import { deriveFilms } from './derive-films';
 import { show, type ScenarioDraft } from './draft';
 import { JUDGEMENT } from './judgement';
 import type { SurveyedBattery } from './types';
@@ -26,6 +27,7 @@ export function deriveBattery(draft: ScenarioDraft, battery: SurveyedBattery, sh
 			'four sides and the top; the base exchanges heat through the tray.'
 	);
 	draft.derive('battery', 'topArea', shape.baseAreaM2, `L·W = ${show(lengthM)}·${show(widthM)} m².`);
+	deriveFilms(draft, shape);
 	const chemistry = chemistryOf(battery.chemistry);
 	deriveHeatCapacities(draft, battery.massKg, chemistry);
 	deriveConductances(draft, caseAreaM2, chemistry);
