@@ -3,6 +3,9 @@ import { CROWDED_DAY, ask, assessAll, makeAssessableJob } from './assessable-job
 import { expectNoViolations, signInAs } from './support';
 
 const WHO = 'Ilse Tarn';
+const CABLE = {
+	...{ areaMm2: 16, insulationC: 90, laying: 'in a tube', conductorLengthM: 6, fuseRatedA: 60 }
+};
 const WHY = 'No other place is free; a duct is fitted before summer.';
 
 test.beforeEach(({ page }) => signInAs(page, 'installer'));
@@ -31,6 +34,10 @@ test('a mount that rides it out is recommended and printed', async ({ page }) =>
 		await expect(page.getByText(who, { exact: true })).toBeVisible();
 	await expect(page.getByText('instructions and warranty terms of the battery maker')).toBeVisible();
 	await expect(page.getByText(String(cool!.inputsSha256))).toBeVisible();
+	const beside = page.getByRole('heading', { name: 'What the estimate says beside its number' });
+	await expect(beside).toBeVisible();
+	await expect(page.getByText(/On fewer than 1 of 20 days like this the battery goes dark/)).toBeVisible();
+	await expect(page.getByText(/Nothing more is needed/)).toBeVisible();
 	await expectNoViolations(page);
 	await page.emulateMedia({ media: 'print' });
 	await expectNoViolations(page);
@@ -96,7 +103,10 @@ test('it works without a script', async ({ browser, page, baseURL }) => {
 
 test('the paper is two pages of A4, even when there is as much to say as there can be', async ({ page }) => {
 	test.slow();
-	const { jobId } = await makeAssessableJob(page, { mounts: 6, legs: CROWDED_DAY });
+	const { jobId, mountIds } = await makeAssessableJob(page, { mounts: 6, legs: CROWDED_DAY });
+	const mount = `/api/v1/mounts/${mountIds[0]}`;
+	const { version } = await ask(page, 'GET', mount);
+	await ask(page, 'PUT', `${mount}/cable`, { cable: CABLE, version });
 	const [hot] = await assessAll(page, jobId);
 	await page.goto(`/jobs/${jobId}/recommendation?assessment=${String(hot!.id)}`);
 	await page.getByLabel('Who decided').fill(WHO);
@@ -106,5 +116,7 @@ test('the paper is two pages of A4, even when there is as much to say as there c
 	await page.getByRole('button', { name: 'Recommend it against the verdict' }).click();
 	await page.getByRole('link', { name: 'Print the recommendation' }).click();
 	await expect(page.getByRole('heading', { level: 1, name: 'Cuts out' })).toBeVisible();
+	await expect(page.getByText('16 mm² copper with insulation for')).toBeVisible();
+	await expect(page.getByRole('img', { name: /nine in ten between/ })).toBeVisible();
 	expect(await printPages(page)).toBe(2);
 });

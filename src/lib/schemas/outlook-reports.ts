@@ -1,5 +1,4 @@
 import type { ReportLine } from './reports';
-import type { Verdict } from './verdicts';
 
 /** A value with the range in which it is expected. */
 export interface Range {
@@ -71,7 +70,8 @@ export interface RemedyLine {
 	gain: string;
 	parts: string;
 	work: string;
-	verdict: Verdict;
+	/** "rides it out". */
+	verdict: string;
 	/** "dark on about 1 of 20"; empty where it was not worked out. */
 	chance: string;
 	isLeast: boolean;
@@ -137,6 +137,8 @@ export interface CableReport {
 	proposal: string;
 	sentence: string;
 	air: string;
+	/** How warm it gets, and what the fuse is worth there. */
+	conductor: string;
 	findings: CableFindingReport[];
 	deference: string;
 }

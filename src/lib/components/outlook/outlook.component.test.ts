@@ -92,7 +92,7 @@ describe('twenty days', () => {
 
 const line = (label: string, gain: string): RemedyLine => ({
 	...{ label, gain, effect: `What ${label} does.`, parts: '60', work: '30 min' },
-	...{ verdict: 'cuts-out', chance: '', isLeast: false }
+	...{ verdict: 'cuts out', chance: '', isLeast: false }
 });
 const REMEDIES: RemedyReport = {
 	sentence: 'The least is a wrap.',
@@ -118,7 +118,13 @@ describe('what it would take', () => {
 
 describe('cable and fuse', () => {
 	const CABLE: CableReport = {
-		...{ proposal: '16 mm²', sentence: 'One does not hold.', air: 'At 70 °C.', deference: 'Makers first.' },
+		...{
+			proposal: '16 mm²',
+			sentence: 'One does not hold.',
+			air: 'At 70 °C.',
+			conductor: 'It is at 80 °C.',
+			deference: 'Makers first.'
+		},
 		findings: [
 			{
 				label: 'The cable carries the current',

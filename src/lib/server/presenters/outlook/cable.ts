@@ -81,7 +81,8 @@ export function presentCable(cable: Outlook['cable'], proposal: CableInput | und
 	return {
 		proposal: sayProposal(proposal),
 		sentence: sayOutcome(cable),
-		air: `Held against ${formatTemperature(cable.airC)}, the hottest air around the battery on the planned day. ${conductor}`,
+		air: `Held against ${formatTemperature(cable.airC)}, the hottest air around the battery on the planned day.`,
+		conductor,
 		findings: cable.findings.map(presentFinding),
 		deference:
 			'The makers’ own curves for cable and fuse, local wiring rules and whoever is licensed for the work come first.'

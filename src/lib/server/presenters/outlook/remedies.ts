@@ -1,6 +1,5 @@
 import { formatKelvin, formatNumber } from '$lib/format/numbers';
 import { formatHours } from '$lib/format/time';
-import { sayVerdict } from '$lib/format/verdict';
 import type { RemedyLine, RemedyReport } from '$lib/schemas/outlook-reports';
 import { REMEDIES, type RemedySearch, type RemedySet } from '$lib/thermal/outlook';
 import { joinWords, sayOfTwenty, small, type EventWords } from './words';
@@ -24,7 +23,11 @@ function nameSet({ keys }: RemedySet): string {
 	return joinWords(keys.map((key, at) => (at === 0 ? labelOf(key) : small(labelOf(key)))));
 }
 
-function presentSet(set: RemedySet, least: RemedySet | null, { adjective }: EventWords): RemedyLine {
+function presentSet(
+	set: RemedySet,
+	least: RemedySet | null,
+	{ adjective, sayVerdict }: EventWords
+): RemedyLine {
 	const { keys, cost, hours, gainK, verdict, cutOutShare } = set;
 	return {
 		label: nameSet(set),
@@ -32,7 +35,7 @@ function presentSet(set: RemedySet, least: RemedySet | null, { adjective }: Even
 		gain: sayGain(gainK),
 		parts: sayParts(cost),
 		work: sayWork(hours),
-		verdict,
+		verdict: sayVerdict(verdict),
 		chance: cutOutShare === null ? '' : `${adjective} on ${sayOfTwenty(cutOutShare)}`,
 		isLeast: least !== null && least.keys.join() === keys.join()
 	};
@@ -46,7 +49,7 @@ export function sumMoney({ cost, hours }: RemedySet, moneyPerHour: number): numb
 
 export const nameRemedies = (set: RemedySet): string => small(nameSet(set));
 
-function sayLeast(search: RemedySearch, { adjective }: EventWords): string {
+function sayLeast(search: RemedySearch, { adjective, sayVerdict }: EventWords): string {
 	const { least, front, mostCutOutShare, moneyPerHour, asPlanned } = search;
 	const bar = `“rides it out”, ${adjective} on at most ${formatNumber(20 * mostCutOutShare)} of 20 days like this`;
 	if (least === null) {

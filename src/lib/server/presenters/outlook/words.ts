@@ -1,6 +1,8 @@
 import { formatNumber } from '$lib/format/numbers';
+import { sayVerdict } from '$lib/format/verdict';
 import { hasBms } from '$lib/schemas/batteries';
 import type { Range } from '$lib/schemas/outlook-reports';
+import type { Verdict } from '$lib/schemas/verdicts';
 
 /** What happens to a battery that is too hot: electronics of its own switch it off, or nothing does. */
 export interface EventWords {
@@ -9,21 +11,26 @@ export interface EventWords {
 	/** For a table: "Dark on days like this". */
 	adjective: string;
 	days: string;
+	sayVerdict: (verdict: Verdict) => string;
 }
 
-const SWITCHED_OFF: EventWords = {
+type Happening = Omit<EventWords, 'sayVerdict'>;
+
+const SWITCHED_OFF: Happening = {
 	happens: 'the battery goes dark',
 	adjective: 'dark',
 	days: 'Cut-out days a year'
 };
-const NOT_SWITCHED_OFF: EventWords = {
+const NOT_SWITCHED_OFF: Happening = {
 	happens: 'the battery gets hotter than it may',
 	adjective: 'too hot',
 	days: 'Days too hot in a year'
 };
 
-export const eventWordsOf = (chemistry: string): EventWords =>
-	hasBms(chemistry) ? SWITCHED_OFF : NOT_SWITCHED_OFF;
+export const eventWordsOf = (chemistry: string): EventWords => ({
+	...(hasBms(chemistry) ? SWITCHED_OFF : NOT_SWITCHED_OFF),
+	sayVerdict: (verdict) => sayVerdict(verdict, chemistry)
+});
 
 const TWENTY = 20;
 
