@@ -82,6 +82,35 @@ test('a weather file with faults is told line by line, and changes nothing', asy
 	await expect(page.getByText('The file is larger than 5 MB, the most that is read here.')).toBeVisible();
 });
 
+test('a place that somebody changed meanwhile is shown anew before it is changed', ONCE, async ({ page }) => {
+	const { version, weatherFile: _none, ...place } = await addPlace(page);
+	const { id } = place;
+	await openForm(page, `/places/${id}/weather`);
+	await chooseFile(page, 'lake.epw', EPW);
+	const hotDay = page.getByRole('table', { name: 'The hot day, now and by the file' });
+	await expect(hotDay).toContainText('44.0');
+	const change = { ...place, hotDayMaxC: 46, version };
+	expect((await page.request.put(`/api/v1/places/${id}`, { data: change })).status()).toBe(200);
+	await page.getByRole('button', { name: 'Yes, take these figures' }).click();
+	await expect(page.getByText(/^Somebody changed this place while you had it open/)).toBeVisible();
+	await expect(hotDay).toContainText('46.0');
+	expect(await readPlace(page, id)).toMatchObject({ hotDayMaxC: 46, weatherFile: null });
+	await page.getByRole('button', { name: 'Yes, take these figures' }).click();
+	await expect(page.getByText('The figures of the weather file are in.')).toBeVisible();
+});
+
+test('figures that were changed on their way through the page are not taken', ONCE, async ({ page }) => {
+	const { id, version } = await addPlace(page);
+	await openForm(page, `/places/${id}/weather`);
+	await chooseFile(page, 'lake.epw', EPW);
+	await page.locator('input[name="reading"]').evaluate((box: HTMLInputElement) => {
+		box.value = box.value.replace('lake.epw', 'official.epw');
+	});
+	await page.getByRole('button', { name: 'Yes, take these figures' }).click();
+	await expect(page.getByText(/did not come back whole/)).toBeVisible();
+	expect(await readPlace(page, id)).toMatchObject({ version, weatherFile: null });
+});
+
 test('the months of a place are typed in, all twelve or none', ONCE, async ({ page }) => {
 	const { id } = await addPlace(page);
 	await openForm(page, `/places/${id}`);
