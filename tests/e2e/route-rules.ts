@@ -15,6 +15,8 @@ export interface RouteRule {
 	methods: readonly string[];
 	/** GET answers with a redirect to where the work is. */
 	leadsOn?: true;
+	/** Methods that fewer may use than the route is open to. */
+	only?: Readonly<Record<string, Audience>>;
 	/** A body that the schema lets through, so that only ownership can refuse. */
 	bodies?: Readonly<Record<string, unknown>>;
 }
@@ -145,7 +147,7 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 	ownedApi('/mounts/[mountId]/restore', 'workshop', { POST: null }),
 	ownedApi('/mounts/[mountId]/survey', 'workshop', { PUT: SURVEY }),
 	ownedApi('/mounts/[mountId]/cable', 'workshop', { PUT: { cable: null, version: 0 } }),
-	api('/remedies', 'workshop', 'GET', 'PUT'),
+	{ ...api('/remedies', 'workshop', 'GET', 'PUT'), only: { PUT: 'bench' } },
 	api('/assessments', 'workshop', 'POST'),
 	ownedApi('/assessments/[assessmentId]/outlook', 'workshop', { GET: null }),
 	ownedApi('/assessments/[assessmentId]', 'workshop', { GET: null }),
@@ -168,9 +170,10 @@ const AUDIENCES: Record<Exclude<Audience, 'anyone'>, readonly Visitor[]> = {
 export type Standing = 'let in' | 'asked to sign in' | 'refused' | 'told there is no such thing';
 
 /** What a visitor must meet at a route. */
-export function standingOf(visitor: Visitor, rule: RouteRule): Standing {
-	if (rule.for === 'anyone') return 'let in';
+export function standingOf(visitor: Visitor, rule: RouteRule, method: string): Standing {
+	const audience = rule.only?.[method] ?? rule.for;
+	if (audience === 'anyone') return 'let in';
 	if (visitor === 'nobody') return 'asked to sign in';
-	if (!AUDIENCES[rule.for].includes(visitor)) return 'refused';
+	if (!AUDIENCES[audience].includes(visitor)) return 'refused';
 	return rule.owned && visitor === 'neighbour' ? 'told there is no such thing' : 'let in';
 }

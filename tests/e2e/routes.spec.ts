@@ -128,7 +128,7 @@ for (const visitor of VISITORS) {
 		await signIn(context, visitor);
 		for (const rule of ROUTE_RULES.filter(({ route }) => !ABOUT_SESSIONS.test(route))) {
 			for (const method of rule.methods) {
-				const expected = standingOf(visitor, rule);
+				const expected = standingOf(visitor, rule, method);
 				const changes = method !== 'GET' && expected === 'let in' && rule.owned === true;
 				const response = await ask(context, rule, method, changes ? emptied(ids) : ids);
 				const met = standingIn(response, rule);
