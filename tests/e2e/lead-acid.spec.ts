@@ -1,6 +1,7 @@
 import { randomUUID } from 'node:crypto';
 import { expect, test, type Page } from '@playwright/test';
-import { CROWDED_DAY, FLOODED, assessAll, makeAssessableJob } from './assessable-job';
+import { CROWDED_DAY, FLOODED, ask, assessAll, makeAssessableJob } from './assessable-job';
+import { sendSheet } from './sent-sheet';
 import { ONCE, expectNoViolations, openForm, signInAs } from './support';
 
 const FIGURES = {
@@ -28,6 +29,12 @@ async function saveAgm(page: Page, model: string): Promise<void> {
 	await expect(page.getByLabel('Chemistry')).toHaveValue('lead-acid-agm');
 	await expect(page.getByLabel('Highest temperature for charging')).toHaveValue('50');
 	await expect(page.getByLabel('Its charger lowers the voltage')).toBeChecked();
+}
+
+/** Pages of A4 that the browser makes of it. */
+async function countPaper(page: Page): Promise<number> {
+	const pdf = await page.pdf({ format: 'A4', printBackground: false, preferCSSPageSize: true });
+	return pdf.toString('latin1').match(/\/Type\s*\/Page\b/g)?.length ?? 0;
 }
 
 test.beforeEach(({ page }) => signInAs(page, 'installer'));
@@ -126,6 +133,34 @@ test('the paper is two pages of A4 for a battery without a BMS too', ONCE, async
 	await page.getByRole('button', { name: 'Recommend it against the verdict' }).click();
 	await page.getByRole('link', { name: 'Print the recommendation' }).click();
 	await expect(page.getByRole('heading', { level: 1, name: 'Gets too hot' })).toBeVisible();
-	const pdf = await page.pdf({ format: 'A4', printBackground: false, preferCSSPageSize: true });
-	expect(pdf.toString('latin1').match(/\/Type\s*\/Page\b/g)).toHaveLength(2);
+	expect(await countPaper(page)).toBe(2);
 });
+
+test(
+	'the customer’s page stays on one sheet of paper for it, however much there is to say',
+	ONCE,
+	async ({ page }) => {
+		test.slow();
+		const { jobId } = await makeAssessableJob(page, { mounts: 6, battery: FLOODED });
+		const { battery } = await ask(page, 'GET', `/api/v1/jobs/${jobId}`);
+		const record = `/api/v1/batteries/${(battery as { id: number }).id}`;
+		for (const [quoted, length] of [
+			[20, 12],
+			[20, 1000],
+			[500, 400],
+			[500, 1000]
+		] as const) {
+			const { id: _, ...now } = await ask(page, 'GET', record);
+			const underBonnetWords = 'Not under a bonnet. '.repeat(25).slice(0, quoted);
+			await ask(page, 'PUT', record, { ...now, underBonnetWords });
+			const [hot] = await assessAll(page, jobId);
+			const reason = 'No other place. '.repeat(63).slice(0, length);
+			const decision = { assessmentId: hot!.id, decidedBy: 'Ilse Tarn', reason };
+			const { id: recommendationId } = await ask(page, 'POST', '/api/v1/recommendations', decision);
+			const { link } = await sendSheet(page, { jobId, recommendationId });
+			await page.goto(link);
+			await expect(page.getByRole('heading', { level: 1, name: 'Gets too hot' })).toBeVisible();
+			expect(await countPaper(page), `${quoted} characters of the maker, ${length} of the shop`).toBe(1);
+		}
+	}
+);
