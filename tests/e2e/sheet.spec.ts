@@ -46,6 +46,10 @@ test('the shop sends the page, the customer acknowledges it without a script, th
 	await expect(customer.getByRole('heading', { level: 1, name: 'Cuts out' })).toBeVisible();
 	await expect(customer.getByText(/^The fridge goes dark at/)).toBeVisible();
 	await expect(customer.getByText('Konstantin Abernathy-Wollstonecraft')).toBeVisible();
+	await expect(customer.getByText(/On .+ days like this the fridge goes dark\./)).toBeVisible();
+	for (const label of ['How often.', 'What would make it safer.', 'How long it lasts.']) {
+		await expect(customer.getByText(label)).toBeVisible();
+	}
 	await page.reload();
 	await expect(sent(page, sendTo).getByRole('heading')).toHaveText('Opened, not acknowledged');
 

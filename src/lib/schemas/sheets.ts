@@ -40,6 +40,8 @@ export interface SheetContent {
 	/** The other positions that were worked out for this job. */
 	alternatives: { mountName: string; verdict: Verdict; chemistry?: string }[];
 	figures: { label: string; value: string }[];
+	/** How often, what would help, how long it lasts; pages from before it was worked out have none. */
+	outlook?: { label: string; text: string }[];
 	ribbon: SheetRibbon;
 	cautions: { title: string; text: string }[];
 	assessmentId: number;

@@ -45,6 +45,18 @@ const INPUTS = {
 	hotDay: { hotDayMaxC: 42 }
 } as unknown as AssessmentInputs;
 
+/** As little as a sheet says of it: its own words have tests beside them. */
+const BESIDE = {
+	outlook: {
+		day: { cutOutShare: 0.55 },
+		year: { year: { low: 4, middle: 9, high: 16 } },
+		remedies: { least: null, moneyPerHour: 100 },
+		life: null
+	} as unknown as SheetSource['beside']['outlook'],
+	year: { months: [], daysOnRoad: [48] },
+	elsewhere: []
+};
+
 function write(
 	changes: Partial<SheetSource> = {},
 	result: Partial<AssessmentResult> = {},
@@ -59,6 +71,7 @@ function write(
 		result: { ...RESULT, ...result },
 		override: null,
 		others: [],
+		beside: BESIDE,
 		...changes
 	});
 	return JSON.parse(JSON.stringify(content).replace(/\u202F/g, ' ')) as typeof content;
@@ -113,6 +126,12 @@ describe('the customer’s page', () => {
 		expect(figure(close, 'Room to spare before that')).toBe('less than 1 degree');
 	});
 
+	it('says how often, and what would help', () => {
+		const { outlook } = write();
+		expect(outlook?.map(({ label }) => label)).toEqual(['How often', 'What would make it safer']);
+		expect(outlook?.[0]?.text).toMatch(/^On about 11 of 20 days like this the fridge goes dark\./);
+	});
+
 	it('says first what the maker says about a place under the bonnet', () => {
 		const words = 'Not for engine bays.';
 		const { paragraphs } = write({}, {}, { underBonnet: 'excluded', underBonnetWords: words });
@@ -152,10 +171,10 @@ describe('the customer’s page', () => {
 			...{ compensatedChargeV: 13.4, uncompensatedChargeV: 14.4 },
 			...{ freshAirM3PerH: 0.24, openingCm2: 6.72, sparkFreeMm: 267 }
 		};
-		const AGM = {
+		const AGM: Partial<AssessmentInputs['battery']> = {
 			...{ chemistry: 'lead-acid-agm', highestChargeC: 50, highestUseC: 60 },
 			...{ ratedLifeYears: 6, compensatesCharge: false }
-		} as const;
+		};
 		const writeAgm = (result: Partial<AssessmentResult> = {}) =>
 			write({}, { ...STAYS_ON, peakCellsC: 66, headroomK: -6, leadAcid: LEAD_ACID, ...result }, AGM);
 

@@ -11,9 +11,10 @@ import { guardOf, type CutOffs, type HeatGuard } from '$lib/thermal/chemistries'
 import type { Sensor } from '$lib/thermal/types';
 import { listLeadAcidSheetFigures, sayLeadAcid } from './lead-acid-sheet';
 import { makerCaution } from './report-inputs';
+import { writeSheetOutlook, type SheetBeside } from './sheet-outlook';
 
 /** Changes with every change of the sheet's own words: an acknowledgement is tied to what was read. */
-export const SHEET_WORDS_VERSION = 3;
+export const SHEET_WORDS_VERSION = 4;
 
 /** What a sheet is written from. */
 export interface SheetSource {
@@ -26,6 +27,7 @@ export interface SheetSource {
 	override: SheetContent['override'];
 	/** The newest answer for each other position of the job. */
 	others: SheetContent['alternatives'];
+	beside: Omit<SheetBeside, 'chemistry' | 'placeName'>;
 }
 
 type SheetFigure = SheetContent['figures'][number];
@@ -188,6 +190,11 @@ export function writeSheetContent(source: SheetSource): SheetContent {
 		advice: ADVICE[guardOf(battery).kind][result.verdict],
 		alternatives: source.others,
 		figures: listFigures(source),
+		outlook: writeSheetOutlook({
+			...source.beside,
+			chemistry: battery.chemistry,
+			placeName: inputs.place.name
+		}),
 		ribbon: drawnFrom(source),
 		cautions: listCautions(battery.chemistry).map(({ title, text }) => ({ title, text }))
 	};

@@ -19,7 +19,7 @@ export interface WaitingMount {
 }
 
 /** The job's other mounts: what is known of the battery's life there, and where it is not worked out yet. */
-async function lookElsewhere(person: SignedInPerson, others: readonly MountOutcome[]) {
+export async function lookElsewhere(person: SignedInPerson, others: readonly MountOutcome[]) {
 	const assessed = others.flatMap(({ letter, name, assessment }) =>
 		assessment ? [{ letter, name, assessmentId: assessment.id }] : []
 	);
@@ -29,7 +29,7 @@ async function lookElsewhere(person: SignedInPerson, others: readonly MountOutco
 	);
 	const elsewhere = assessed.flatMap(({ letter, name, assessmentId }) => {
 		const life = kept.get(assessmentId)?.life;
-		return life ? [{ label: `${letter}: ${name}`, life }] : [];
+		return life ? [{ label: `${letter}: ${name}`, name, life }] : [];
 	});
 	const waiting: WaitingMount[] = assessed.filter(({ assessmentId }) => !kept.has(assessmentId));
 	return { elsewhere, waiting };

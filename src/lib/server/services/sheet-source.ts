@@ -1,11 +1,13 @@
 import type { SignedInPerson } from '$lib/schemas/people';
 import { AppError } from '../errors';
 import type { SheetSource } from '../presenters/sheet-content';
+import { lookElsewhere } from './outlook-reports';
+import { getOutlook, touringOf } from './outlooks';
 import { getRecommendationDocument, newestRecommendation } from './recommendations';
 
 const SUPERSEDED = 'There is a newer recommendation for this job: send that one.';
 
-/** Collects what a sheet is written from. Only the newest recommendation of a job may go to its customer. */
+/** Collects what a sheet is written from, and waits for the outlook while that is worked out. Only the newest recommendation of a job may go to its customer. */
 export async function readSheetSource(
 	person: SignedInPerson,
 	recommendationId: number
@@ -18,8 +20,15 @@ export async function readSheetSource(
 	const newest = await newestRecommendation(person, jobId);
 	if (newest?.id !== recommendationId)
 		throw new AppError('conflict', SUPERSEDED, [{ path: 'recommendationId', message: SUPERSEDED }]);
+	const outlook = await getOutlook(person, assessment.id);
+	const { elsewhere } = await lookElsewhere(person, others);
 	return {
 		...{ jobId, workshop },
+		beside: {
+			outlook,
+			year: touringOf(assessment.inputs),
+			elsewhere: elsewhere.map(({ name, life }) => ({ label: name, life }))
+		},
 		preparedBy: person.name,
 		preparedAt: new Date(),
 		assessmentId: assessment.id,

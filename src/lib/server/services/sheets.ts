@@ -80,6 +80,8 @@ export async function sendSheet(
 	{ recommendationId, sendTo, jobId: askedJobId }: SendSheet & { jobId?: number }
 ): Promise<{ sheet: SheetStatus }> {
 	allow(person, 'sheets.write');
+	// What takes seconds is worked out first: nobody is kept waiting by a lock meanwhile.
+	await readSheetSource(person, recommendationId);
 	return inTransaction(async (transaction) => {
 		const { jobId, ...source } = await readSheetSource(person, recommendationId);
 		if (askedJobId !== undefined && askedJobId !== jobId) throw notFound('recommendation');
