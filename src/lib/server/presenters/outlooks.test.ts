@@ -5,7 +5,7 @@ import { defaultScenario } from '$lib/thermal';
 import { finishOutlook, type Outlook, type RemedySet } from '$lib/thermal/outlook';
 import { limitAt } from './outlook/envelope';
 import { sayWornAfter } from './outlook/life';
-import { formatDays, sayOfTwenty, sayShare } from './outlook/words';
+import { formatDays, sayOfTwenty, sayShare } from '$lib/format/outlook-words';
 import { presentOutlook } from './outlooks';
 
 const YEAR = {

@@ -7,7 +7,7 @@ import { presentEnvelope } from './outlook/envelope';
 import { presentLife, type LifeElsewhere } from './outlook/life';
 import { presentMeasure } from './outlook/measure';
 import { presentRemedies } from './outlook/remedies';
-import { eventWordsOf } from './outlook/words';
+import { eventWordsOf } from '$lib/format/outlook-words';
 import { presentYear, type CountedYear } from './outlook/year';
 
 /** What stands beside an outlook: the assessment that it belongs to, its year, and the battery's life elsewhere. */

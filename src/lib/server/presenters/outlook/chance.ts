@@ -1,7 +1,7 @@
 import { formatKelvin, formatNumber } from '$lib/format/numbers';
 import type { ChanceReport } from '$lib/schemas/outlook-reports';
 import type { DaySpread } from '$lib/thermal/outlook';
-import { sayDaysLikeThis, sayOfTwenty, type EventWords } from './words';
+import { sayDaysLikeThis, sayOfTwenty, type EventWords } from '$lib/format/outlook-words';
 
 const TWENTY = 20;
 

@@ -1,7 +1,7 @@
 import { formatKelvin, formatNumber, formatPercent } from '$lib/format/numbers';
 import type { MeasureReport, UnknownReport } from '$lib/schemas/outlook-reports';
 import type { Influence, Influences } from '$lib/thermal/outlook';
-import { joinWords, sayShare } from './words';
+import { joinWords, sayShare } from '$lib/format/outlook-words';
 
 /** At least and at most so many are told first. */
 const FEWEST = 3;

@@ -2,7 +2,7 @@ import { formatKelvin, formatNumber } from '$lib/format/numbers';
 import { formatHours } from '$lib/format/time';
 import type { RemedyLine, RemedyReport } from '$lib/schemas/outlook-reports';
 import { REMEDIES, type RemedySearch, type RemedySet } from '$lib/thermal/outlook';
-import { joinWords, sayOfTwenty, small, type EventWords } from './words';
+import { joinWords, sayOfTwenty, small, type EventWords } from '$lib/format/outlook-words';
 
 /** Less than this is neither cooler nor hotter. */
 const LEAST_K = 0.05;

@@ -2,7 +2,7 @@ import { formatKelvin, formatNumber, formatTemperature } from '$lib/format/numbe
 import type { MonthReport, YearReport } from '$lib/schemas/outlook-reports';
 import type { CutOutDays, TouringYear } from '$lib/thermal/outlook';
 import { MONTH_NAMES } from '$lib/thermal/weather';
-import { formatDays, formatMonthDays, type EventWords } from './words';
+import { formatDays, formatMonthDays, type EventWords } from '$lib/format/outlook-words';
 
 /** The weather and the days on the road that the days were counted with. */
 export type CountedYear = TouringYear & { basis?: string };
