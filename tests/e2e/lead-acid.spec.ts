@@ -117,6 +117,7 @@ test('a mount that gets too hot says so everywhere, and nothing goes dark', asyn
 	await expect(page.getByText('Goes ahead although it gets too hot.')).toBeVisible();
 	await expect(page.getByText('up to 60 °C; it has no BMS')).toBeVisible();
 	expect(await page.getByRole('article').innerText()).not.toMatch(OF_A_BMS);
+	expect(await countPaper(page)).toBe(2);
 	await page.emulateMedia({ media: 'print' });
 	await expectNoViolations(page);
 });
