@@ -1,3 +1,5 @@
+import { watchUseLimit } from '../thermal/assess';
+import { heatLimitsOf } from '../thermal/chemistries';
 import { buildScenario } from '../thermal/survey';
 import type { SurveyInputs } from '../thermal/survey/types';
 import { spreadDay } from '../thermal/uncertainty';
@@ -11,7 +13,8 @@ const SEED = 1;
 
 /** Draws days around what is surveyed; yields after each, so that whoever drives it can look whether it is still wanted. */
 export function* runSpread(inputs: SurveyInputs): Generator<number, LiveSpread> {
-	const scenario = parseScenario(buildScenario(inputs).scenario);
+	const surveyed = parseScenario(buildScenario(inputs).scenario);
+	const scenario = watchUseLimit(surveyed, heatLimitsOf(inputs.battery));
 	const { samples, cutOutShare, daysOfTwenty, band } = yield* spreadDay(scenario, {
 		samples: SAMPLES,
 		seed: SEED
