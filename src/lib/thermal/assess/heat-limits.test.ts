@@ -4,6 +4,7 @@ import type { HeatLimits } from '../chemistries/guard';
 import { heatLimitsOf } from '../chemistries/guard';
 import { buildScenario } from '../survey/build-scenario';
 import type { SurveyAnswers, SurveyInputs } from '../survey/types';
+import { copyScenario, PRIORS } from '../uncertainty';
 import { parseScenario } from '../vehicle/parse-scenario';
 import { OutcomeRunner } from '../vehicle/outcome-run';
 import { assessScenario } from './assess-scenario';
@@ -115,6 +116,17 @@ describe('a day that is watched for its limit', () => {
 			enclosureSun: 'shaded'
 		});
 		expect(watched).toEqual(plain);
+	});
+
+	it('has no BMS whose readings or thresholds could be off', () => {
+		const inputs = inputsFor(hotSide, { battery: AGM });
+		const watched = watchUseLimit(
+			parseScenario(buildScenario(inputs).scenario),
+			heatLimitsOf(inputs.battery)
+		);
+		const off = copyScenario(watched);
+		PRIORS.find(({ key }) => key === 'sensor')!.apply(off, (value) => value + 1.5);
+		expect(off.bms).toEqual(watched.bms);
 	});
 
 	it('is left as it is for a battery with a BMS', () => {

@@ -1,6 +1,12 @@
-import type { Sensor } from '../types';
+import type { BmsSettings, Sensor } from '../types';
 import { chemistryOf } from './table';
 import type { ChemistryKey } from './types';
+
+/** The highest that the table of fields lets a cut-off be: where the latches of a battery without a BMS stand. */
+export const NEVER_CUT_C = 1000;
+
+/** Whether electronics stand behind the limits of a scenario: without them nothing measures or switches. */
+export const hasLatches = ({ charge }: Pick<BmsSettings, 'charge'>): boolean => charge.cut < NEVER_CUT_C;
 
 /** What a record says of heat: of a battery with a BMS its cut-offs, of one without its limits; the rest is empty. */
 export interface HeatFields {

@@ -4,9 +4,11 @@ export { CHEMISTRIES, chemistryOf, findChemistry } from './table';
 export {
 	CUT_OFF_FIELDS,
 	guardOf,
+	hasLatches,
 	HEAT_LIMIT_FIELDS,
 	heatFieldsOf,
 	heatLimitsOf,
+	NEVER_CUT_C,
 	type CutOffs,
 	type HeatFields,
 	type HeatGuard,

@@ -1,4 +1,4 @@
-import { guardOf, type CutOffs } from '../chemistries/guard';
+import { guardOf, NEVER_CUT_C, type CutOffs } from '../chemistries/guard';
 import { chemistryOf } from '../chemistries/table';
 import type { Chemistry, Sourced } from '../chemistries/types';
 import type { FieldGroup } from '../vehicle/scenario-fields';
@@ -12,8 +12,6 @@ const DATA_SHEET = "The battery's data sheet.";
 /** A measured resistance below that of the board alone still leaves the cells some. */
 const LEAST_CELL_OHM = 1e-4;
 const NO_BMS = 'This battery has no BMS.';
-/** The highest that the table of fields lets a cut-off be. */
-const NEVER_C = 1000;
 
 /** Battery and BMS from the data sheet: sizes become surfaces, mass becomes heat capacity. */
 export function deriveBattery(draft: ScenarioDraft, battery: SurveyedBattery, shape: BatteryShape): void {
@@ -111,9 +109,9 @@ function deriveCutOffs(draft: ScenarioDraft, cutOffs: CutOffs): void {
 
 /** No latch may open on a battery that has none. */
 function deriveOpenGuard(draft: ScenarioDraft): void {
-	const basis = `${NO_BMS} ${NEVER_C} °C is the most that this field takes, so that nothing is ever cut off; the limits of its maker are held against the run afterwards.`;
+	const basis = `${NO_BMS} ${NEVER_CUT_C} °C is the most that this field takes, so that nothing is ever cut off; the limits of its maker are held against the run afterwards.`;
 	draft.deriveAll('bms', { sensor: 'cells', cutDelayS: 0, autoReset: true }, NO_BMS);
 	for (const group of ['bms.charge', 'bms.discharge'] as const) {
-		draft.deriveAll(group, { cut: NEVER_C, reset: NEVER_C - 1 }, basis);
+		draft.deriveAll(group, { cut: NEVER_CUT_C, reset: NEVER_CUT_C - 1 }, basis);
 	}
 }

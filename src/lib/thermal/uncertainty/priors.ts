@@ -1,3 +1,4 @@
+import { hasLatches } from '../chemistries/guard';
 import type { Leg, Scenario } from '../types';
 
 /** How an unknown spreads about what the scenario says: all with a standard normal number z. */
@@ -221,6 +222,7 @@ export const PRIORS: readonly Prior[] = [
 		basis: 'Thermistors and thresholds of such units: 1 to 2 K, engineering judgement.',
 		measure: 'The BMS readout beside a thermometer in a warm room.',
 		apply: ({ bms }, change) => {
+			if (!hasLatches(bms)) return;
 			const by = change(0);
 			for (const limits of [bms.charge, bms.discharge]) {
 				limits.cut += by;
