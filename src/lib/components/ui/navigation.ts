@@ -9,6 +9,7 @@ const ENTRIES: (NavEntry & { roles?: Role[]; demoOnly?: boolean })[] = [
 	{ label: 'Jobs', href: '/jobs' },
 	{ label: 'Batteries', href: '/batteries' },
 	{ label: 'Places', href: '/places' },
+	{ label: 'Remedies', href: '/remedies' },
 	{ label: 'Books', href: '/books', roles: ['engineer', 'manager'] },
 	{ label: 'Mailbox', href: '/mailbox', demoOnly: true }
 ];
