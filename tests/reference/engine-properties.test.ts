@@ -45,7 +45,7 @@ function drawLegs(draw: Draw) {
 	return Array.from({ length: 1 + Math.floor(draw.between(0, 4)) }, () => {
 		const engineOn = draw.chance(0.65);
 		return {
-			minutes: draw.between(2, 200),
+			minutes: draw.between(2, 120),
 			engineOn,
 			speedKmh: engineOn ? draw.between(0, 130) : 0,
 			surface: draw.pick(SURFACES),
