@@ -36,7 +36,7 @@ describe('the frame of a page', () => {
 		const labels = within(menu as HTMLElement)
 			.getAllByRole('link', { hidden: true })
 			.map((link) => link.textContent?.trim());
-		expect(labels).toEqual(['Jobs', 'Batteries', 'Places']);
+		expect(labels).toEqual(['Jobs', 'Batteries', 'Places', 'Remedies']);
 	});
 
 	it('signs out by posting a form', () => {
@@ -54,9 +54,9 @@ describe('the frame of a page', () => {
 
 describe('the entries', () => {
 	it.each([
-		['installer', false, ['Jobs', 'Batteries', 'Places']],
-		['engineer', false, ['Jobs', 'Batteries', 'Places', 'Books']],
-		['manager', true, ['Jobs', 'Batteries', 'Places', 'Books', 'Mailbox']]
+		['installer', false, ['Jobs', 'Batteries', 'Places', 'Remedies']],
+		['engineer', false, ['Jobs', 'Batteries', 'Places', 'Remedies', 'Books']],
+		['manager', true, ['Jobs', 'Batteries', 'Places', 'Remedies', 'Books', 'Mailbox']]
 	] as const)('of the %s (demo: %s)', (role, isDemo, labels) => {
 		expect(listNavigation(role, isDemo).map((entry) => entry.label)).toEqual(labels);
 	});
