@@ -1,6 +1,6 @@
 import { cleanup, fireEvent, render, screen } from '@testing-library/svelte';
 import { afterEach, describe, expect, it, vi } from 'vitest';
-import { CAUTIONS } from '$lib/format/cautions';
+import { CAUTIONS, listCautions } from '$lib/format/cautions';
 import Cautions from './Cautions.svelte';
 import DocumentTitle from './DocumentTitle.svelte';
 import ErrorState from './ErrorState.svelte';
@@ -26,6 +26,11 @@ describe('the verdict', () => {
 		const { container } = render(Verdict, { verdict: 'cuts-out', size });
 		const element = container.firstElementChild;
 		expect([element?.tagName, element?.textContent?.trim()]).toEqual([tag, words]);
+	});
+
+	it('has words of its own for a battery that nothing switches off', () => {
+		const { container } = render(Verdict, { verdict: 'cuts-out', chemistry: 'lead-acid-agm', size: 'small' });
+		expect(container.textContent.trim()).toBe('Gets too hot');
 	});
 
 	it('draws a mark of its own for each, hidden from those who listen', () => {
@@ -71,8 +76,9 @@ describe('trouble', () => {
 });
 
 describe('the cautions', () => {
-	it('stand there in full', () => {
-		const { container } = render(Cautions, { chemistry: 'lithium-iron-phosphate' });
-		CAUTIONS.forEach(({ text }) => expect(container.textContent).toContain(text));
+	it.each(['lithium-iron-phosphate', 'lead-acid-flooded'])('stand there in full (%s)', (chemistry) => {
+		const { container } = render(Cautions, { chemistry });
+		const shown = CAUTIONS.filter(({ text }) => container.textContent.includes(text)).map(({ id }) => id);
+		expect(shown).toEqual(listCautions(chemistry).map(({ id }) => id));
 	});
 });
