@@ -1,8 +1,17 @@
 import type { Transaction } from 'sequelize';
 import type { SignedInPerson } from '$lib/schemas/people';
-import { OutgoingMail } from '../../db/models';
+import { FULL_EFFORT, type OutlookEffort } from '$lib/thermal/outlook';
+import { Assessment, OutgoingMail, Recommendation } from '../../db/models';
+import { ensureOutlook } from '../outlooks';
 import { acknowledgeSheet, openSheet } from '../sheet-readers';
 import { sendSheet } from '../sheets';
+
+/** Less than for a shop's own work, and said so on the page: the first start is not to take much longer. */
+const DEMO_EFFORT: OutlookEffort = {
+	...FULL_EFFORT,
+	...{ daySamples: 256, yearSamples: 16, influencePoints: 8 },
+	...{ remedySamples: 32, remediesTogether: 3, envelopeSamples: 4 }
+};
 
 interface Posted {
 	recommendationId: number;
@@ -17,6 +26,9 @@ export async function seedSheet(
 	{ recommendationId, name, email, acknowledged }: Posted,
 	transaction: Transaction
 ): Promise<void> {
+	const recommendation = await Recommendation.findByPk(recommendationId, { transaction });
+	const assessment = await Assessment.findByPk(recommendation!.assessmentId, { transaction });
+	await ensureOutlook(assessment!, DEMO_EFFORT);
 	const { sheet } = await sendSheet(person, { recommendationId, sendTo: email });
 	if (!acknowledged) return;
 	const letter = await OutgoingMail.findOne({ where: { sheetId: sheet.id }, transaction });
