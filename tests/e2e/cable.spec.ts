@@ -10,7 +10,7 @@ test('a cable and its fuse are proposed for a mount, held against its heat, and 
 	test.slow();
 	const { jobId, mountIds } = await makeAssessableJob(page, { mounts: 1 });
 	await page.goto(`/jobs/${jobId}`);
-	await page.getByRole('link', { name: 'Cable and fuse of mount A, none proposed' }).click();
+	await page.getByRole('link', { name: 'Propose a cable and fuse for mount A' }).click();
 	await page.waitForURL(`/mounts/${mountIds[0]}/cable`);
 	await openForm(page, page.url());
 	await page.getByLabel('Cross-section of the copper').fill('16');
@@ -20,8 +20,8 @@ test('a cable and its fuse are proposed for a mount, held against its heat, and 
 	await expect(page.getByText('Choose what the insulation is made for.').first()).toBeVisible();
 	await expect(page.getByLabel('Rating of the fuse')).toHaveValue('60');
 	await expectNoViolations(page);
-	await page.getByText('90\u202F°C', { exact: true }).click();
-	await page.getByText('in a tube', { exact: true }).click();
+	await page.getByRole('radio', { name: '90\u202F°C' }).check();
+	await page.getByRole('radio', { name: 'in a tube' }).check();
 	await page.getByRole('button', { name: 'Propose this' }).click();
 	await expect(page.getByText('Saved.')).toBeVisible();
 	await expectNoViolations(page);
@@ -52,8 +52,8 @@ test('it is proposed without a script, too', async ({ browser, page, baseURL }) 
 	await plain.getByLabel('Cross-section of the copper').fill('16 mm²');
 	await plain.getByLabel('Length of cable, there and back').fill('600 cm');
 	await plain.getByLabel('Rating of the fuse').fill('60');
-	await plain.getByText('105\u202F°C', { exact: true }).click();
-	await plain.getByText('in free air', { exact: true }).click();
+	await plain.getByRole('radio', { name: '105\u202F°C' }).check();
+	await plain.getByRole('radio', { name: 'in free air' }).check();
 	await plain.getByRole('button', { name: 'Propose this' }).click();
 	await expect(plain.getByText('Saved.')).toBeVisible();
 	await expect(plain.getByLabel('Length of cable, there and back')).toHaveValue('6');
