@@ -21,6 +21,8 @@ export async function makeSendableJob(browser: Browser, baseURL: string | undefi
 	await signInAs(page, 'installer');
 	const { jobId, customerName } = await makeAssessableJob(page, { mounts: 6 });
 	const [hot] = await assessAll(page, jobId);
+	// What a shop has looked at before it recommends is there; a page that is sent waits for it otherwise.
+	await ask(page, 'GET', `/api/v1/assessments/${String(hot!.id)}/outlook`);
 	const recommendation = await ask(page, 'POST', '/api/v1/recommendations', {
 		...{ assessmentId: hot!.id, decidedBy: 'Konstantin Abernathy-Wollstonecraft', reason: REASON }
 	});

@@ -45,13 +45,13 @@ export const actions: Actions = {
 	},
 	takeBack: async (event) => {
 		const person = guard(event, 'mounts.write');
-		const mountId = pageId(event.params.mountId);
+		const { id } = await openMount(person, event.params);
 		const sent = await event.request.formData();
 		const change = async () => {
 			const version = validate(versionSchema, sent.get('version') ?? undefined);
-			await saveCable(person, mountId, { cable: null, version });
+			await saveCable(person, id, { cable: null, version });
 		};
 		await orPageError(change());
-		redirect(303, `/mounts/${mountId}/cable?taken-back`);
+		redirect(303, `/mounts/${id}/cable?taken-back`);
 	}
 };
