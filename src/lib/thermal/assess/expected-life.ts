@@ -74,9 +74,22 @@ function findUse(scenario: Scenario, daysOnRoad: number): Use | null {
 	};
 }
 
+const INPUT_WORDS: Record<Extrapolation['input'], { name: string; unit: string }> = {
+	tempC: { name: 'temperature', unit: ' °C' },
+	soc: { name: 'mean state of charge', unit: '' },
+	depthOfDischarge: { name: 'depth of discharge', unit: '' },
+	cRate: { name: 'current by capacity', unit: ' 1/h' },
+	years: { name: 'time', unit: ' years' }
+};
+
+const threeDigits = (value: number): number => Number(value.toPrecision(3));
+
 function sayExtrapolation({ model, input, value, tested, hoursPerYear }: Extrapolation): string {
+	const { name, unit } = INPUT_WORDS[input];
+	const [low, high] = tested.map(threeDigits);
 	const where = hoursPerYear === null ? '' : `, ${Math.round(hoursPerYear)} h a year`;
-	return `${model}: ${input} up to ${Number(value.toPrecision(3))}${where}; tested from ${tested[0]} to ${tested[1]}.`;
+	const far = `${value < tested[0] ? 'down' : 'up'} to ${threeDigits(value)}${unit}${where}`;
+	return `${model}: ${name} ${far}; tested from ${low} to ${high}${unit}.`;
 }
 
 function lifeOfLithium(year: HoursAtTemperature[], use: Use, capacityAh: number) {
