@@ -175,10 +175,12 @@ test('the manager sees every job by its verdict and climate, and the address kee
 	page
 }) => {
 	await signInAs(page, 'manager');
-	await page.goto('/jobs?verdict=cuts-out&zone=BWh');
+	// Other tests add jobs of this kind to the first page meanwhile: the search finds one among them.
+	await page.goto('/jobs?search=Pell&verdict=cuts-out&zone=BWh');
 	await expect(page.getByText('Ignatius Pell').first()).toBeVisible();
-	await expect(page.getByText('Saffron Dunmore')).toHaveCount(0);
 	await expectNoViolations(page);
+	await page.goto('/jobs?search=Dunmore&verdict=cuts-out&zone=BWh');
+	await expect(page.getByText('Saffron Dunmore')).toHaveCount(0);
 });
 
 test('the customer signs in, finds their own page and nobody else’s', async ({ page }) => {
