@@ -51,6 +51,12 @@ export function formatDays({ low, middle, high }: Range): string {
 	return least === most && (value === least || least === '0') ? value : `${value} (${least} to ${most})`;
 }
 
+/** The same as it stands in a sentence: "9 (4 to 16) days", "fewer than 1 day". */
+export function sayDayCount(range: Range): string {
+	const days = formatDays(range);
+	return days === '1' || days === 'fewer than 1' ? `${days} day` : `${days} days`;
+}
+
 /** The same with a decimal, for a month. */
 export function formatMonthDays({ low, middle, high }: Range): string {
 	const [least, value, most] = [low, middle, high].map((days) => formatNumber(days, 1));

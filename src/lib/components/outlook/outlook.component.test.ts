@@ -1,5 +1,6 @@
 import { cleanup, fireEvent, render, screen } from '@testing-library/svelte';
 import axe from 'axe-core';
+import { tick } from 'svelte';
 import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
 import { invalidateAll } from '$app/navigation';
 import type { CableReport, RemedyLine, RemedyReport } from '../../schemas/outlook-reports';
@@ -9,6 +10,10 @@ import RemedyPart from './RemedyPart.svelte';
 import TwentyDays from './TwentyDays.svelte';
 
 vi.mock('$app/navigation', () => ({ invalidateAll: vi.fn(() => Promise.resolve()) }));
+
+/** Where somebody is on the way to; null while the page stays. */
+const way = vi.hoisted(() => ({ to: null as object | null }));
+vi.mock('$app/state', () => ({ navigating: way }));
 
 /** A part is no page, and jsdom lays nothing out: contrast is looked at on the pages, in a browser. */
 const NOT_HERE = {
@@ -62,8 +67,18 @@ describe('the work on an outlook', () => {
 		expect((screen.getByRole('progressbar') as HTMLProgressElement).value).toBe(0.64);
 		expect(invalidateAll).not.toHaveBeenCalled();
 		stream.say('done');
-		expect(invalidateAll).toHaveBeenCalledOnce();
+		await vi.waitFor(() => expect(invalidateAll).toHaveBeenCalledOnce());
 		expect(stream.isClosed).toBe(true);
+	});
+
+	it('does not break off the way of who is leaving', async () => {
+		const stream = begin();
+		way.to = {};
+		stream.say('done');
+		await tick();
+		way.to = null;
+		expect(stream.isClosed).toBe(true);
+		expect(invalidateAll).not.toHaveBeenCalled();
 	});
 
 	it('says when it failed, and tries again', async () => {

@@ -53,7 +53,7 @@ const BESIDE = {
 		remedies: { least: null, moneyPerHour: 100 },
 		life: null
 	} as unknown as SheetSource['beside']['outlook'],
-	year: { months: [], daysOnRoad: [48] },
+	year: { months: [], daysOnRoad: [48], basis: '' },
 	elsewhere: []
 };
 

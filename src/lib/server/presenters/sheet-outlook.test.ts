@@ -33,7 +33,8 @@ function write(
 	} as unknown as Outlook;
 	const year = {
 		months: Array.from({ length: 12 }, () => ({ meanMaxC: 30, spreadK: 3 })),
-		daysOnRoad: Array.from({ length: 12 }, () => 4)
+		daysOnRoad: Array.from({ length: 12 }, () => 4),
+		basis: 'Invented for this test.'
 	};
 	const lines = writeSheetOutlook({
 		...{ outlook, year, elsewhere: [], chemistry: 'lithium-iron-phosphate', placeName: 'Salt Lake' },

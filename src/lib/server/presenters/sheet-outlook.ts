@@ -4,7 +4,7 @@ import type { SheetContent } from '$lib/schemas/sheets';
 import type { Outlook } from '$lib/schemas/outlooks';
 import { sayWornAfter, type LifeElsewhere } from './outlook/life';
 import { nameRemedies, sumMoney } from './outlook/remedies';
-import { formatDays, joinWords, sayDaysLikeThis, sayOfTwenty } from '$lib/format/outlook-words';
+import { joinWords, sayDayCount, sayDaysLikeThis, sayOfTwenty } from '$lib/format/outlook-words';
 import type { CountedYear } from './outlook/year';
 
 /** What stands beside the assessment that a sheet is written from. */
@@ -25,10 +25,9 @@ const happensTo = (chemistry: string): string =>
 function sayHowOften({ outlook, year, chemistry, placeName }: SheetBeside): Line {
 	const happens = happensTo(chemistry);
 	const onRoad = year.daysOnRoad.reduce((sum, days) => sum + days, 0);
-	const days = formatDays(outlook.year.year);
 	return {
 		label: 'How often',
-		text: `${sayDaysLikeThis(outlook.day.cutOutShare)} ${happens}. For somebody with ${formatNumber(onRoad)} days a year on the road around ${placeName} that is ${days} ${days === '1' ? 'day' : 'days'} a year. In brackets is how far that may be off.`
+		text: `${sayDaysLikeThis(outlook.day.cutOutShare)} ${happens}. For somebody with ${formatNumber(onRoad)} days a year on the road around ${placeName} that is ${sayDayCount(outlook.year.year)} a year. In brackets is how far that may be off.`
 	};
 }
 

@@ -3,7 +3,8 @@ import type { OutlookReport } from '$lib/schemas/outlook-reports';
 import type { Outlook } from '$lib/schemas/outlooks';
 import type { SignedInPerson } from '$lib/schemas/people';
 import { presentOutlook } from '../presenters/outlooks';
-import { getOutlook, listKeptOutlooks, peekOutlook, touringOf } from './outlooks';
+import { getOutlook, listKeptOutlooks, peekOutlook } from './outlooks';
+import { touringOf } from './touring-year';
 
 /** An outlook with its words. */
 export interface ToldOutlook {

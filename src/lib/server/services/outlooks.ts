@@ -1,6 +1,5 @@
 import { UniqueConstraintError } from 'sequelize';
 import type { AssessmentInputs } from '$lib/schemas/assessments';
-import { USUAL_DAYS_ON_ROAD } from '$lib/schemas/jobs';
 import type { Outlook } from '$lib/schemas/outlooks';
 import type { SignedInPerson } from '$lib/schemas/people';
 import { parseScenario } from '$lib/thermal';
@@ -13,29 +12,18 @@ import {
 	type OutlookProgress,
 	type OutlookRequest
 } from '$lib/thermal/outlook';
-import { estimateMonths } from '$lib/thermal/weather';
 import { Assessment, AssessmentOutlook } from '../db/models';
 import { notFound } from '../errors';
 import { allow } from '../policies';
-import type { CountedYear } from '../presenters/outlook/year';
 import { remedyListOf } from './remedy-lists';
 import { afterOthers, workInSlices } from './slices';
+import { touringOf } from './touring-year';
 
 /** One dark day in twenty is still called riding it out. */
 const MOST_CUT_OUT_SHARE = 0.05;
 const NOMINAL_V = 12.8;
 /** A drop that is usually accepted between battery and charger or loads: common practice. */
 const ACCEPTED_DROP = 0.04;
-
-/** Where the months of older assessments, which kept none, come from. */
-export function touringOf(inputs: AssessmentInputs): CountedYear {
-	const { touring, place, hotDay } = inputs;
-	if (touring) return touring;
-	return {
-		months: estimateMonths({ latitudeDeg: place.latitudeDeg, hotDayMaxC: hotDay.hotDayMaxC }),
-		daysOnRoad: Array.from({ length: 12 }, () => USUAL_DAYS_ON_ROAD)
-	};
-}
 
 function cableOf({ cable, dayPlan }: AssessmentInputs): OutlookRequest['cable'] {
 	if (!cable) return null;

@@ -2,7 +2,8 @@ import type { SignedInPerson } from '$lib/schemas/people';
 import { AppError } from '../errors';
 import type { SheetSource } from '../presenters/sheet-content';
 import { lookElsewhere } from './outlook-reports';
-import { getOutlook, touringOf } from './outlooks';
+import { getOutlook } from './outlooks';
+import { touringOf } from './touring-year';
 import { getRecommendationDocument, newestRecommendation } from './recommendations';
 
 const SUPERSEDED = 'There is a newer recommendation for this job: send that one.';

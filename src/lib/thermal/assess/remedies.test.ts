@@ -1,6 +1,8 @@
 import { describe, expect, it } from 'vitest';
+import { HOT_SIDE, TOURING_LEGS } from '../../../../tests/support/hot-side';
 import type { Scenario } from '../types';
 import { copyScenario } from '../uncertainty/draw-scenario';
+import { finishWork } from '../uncertainty/finish-work';
 import { parseScenario } from '../vehicle/parse-scenario';
 import { OutcomeRunner } from '../vehicle/outcome-run';
 import { expectLife } from './expected-life';
@@ -9,30 +11,10 @@ import { findSafeEnvelope } from './safe-envelope';
 import { MOST_TOGETHER, priceRemedies, searchRemedies, type RemedySet } from './search-remedies';
 import { judgeOutcome } from './verdict';
 
-function finish<T>(work: Generator<unknown, T>): T {
-	for (;;) {
-		const step = work.next();
-		if (step.done) return step.value;
-	}
-}
-
-const LEGS = [
-	{ minutes: 240, engineOn: true, speedKmh: 80, loadA: 4 },
-	{ minutes: 60, loadA: 6 },
-	{ minutes: 240, engineOn: true, speedKmh: 60, surface: 'gravel' as const, loadA: 4 },
-	{ minutes: 600, loadA: 8 }
-];
-const HOT_SIDE = {
-	bayAirFraction: 0.95,
-	exhaustView: 0.03,
-	engineView: 0.1,
-	airExposure: 0.05,
-	guardFraction: 0.9
-};
 const HOT: Scenario = parseScenario({
 	position: HOT_SIDE,
 	bms: { charge: { cut: 300, reset: 299 }, discharge: { cut: 66, reset: 55 } },
-	legs: LEGS
+	legs: TOURING_LEGS
 });
 const OPTIONS = { samples: 8, seed: 1, mostCutOutShare: 0.25 };
 const money = ({ cost, hours }: RemedySet) => cost + 100 * hours;
@@ -42,7 +24,7 @@ describe('the remedies', () => {
 	const HOT_TRAY: Scenario = parseScenario({
 		position: { bayAirFraction: 0.4, exhaustView: 0, engineView: 0, guardFraction: 1, airExposure: 0.3 },
 		tray: { guardConductance: 20 },
-		legs: LEGS
+		legs: TOURING_LEGS
 	});
 
 	it.each(
@@ -59,7 +41,7 @@ describe('the remedies', () => {
 	it('of the engine bay are not offered to a battery in the cabin', () => {
 		const cabin = parseScenario({
 			position: { bayAirFraction: 0, enclosureFraction: 1, exhaustView: 0, engineView: 0 },
-			legs: LEGS
+			legs: TOURING_LEGS
 		});
 		const fitting = REMEDIES.filter(({ fits }) => fits(cabin)).map(({ key }) => key);
 		expect(fitting).toEqual(['lowerCurrent', 'chargeLater', 'trayIsolation']);
@@ -73,7 +55,7 @@ describe('the remedies', () => {
 });
 
 describe('the search for what it would take', () => {
-	const search = finish(searchRemedies(HOT, OPTIONS));
+	const search = finishWork(searchRemedies(HOT, OPTIONS));
 
 	it('tries every set of up to four that go together', () => {
 		// Eight without a group, three shields and two ways to charge of which one each can be had.
@@ -108,18 +90,18 @@ describe('the search for what it would take', () => {
 	});
 
 	it('asks for nothing where nothing is needed', () => {
-		const cool = parseScenario({ climate: { tMax: 15 }, legs: LEGS });
-		expect(finish(searchRemedies(cool, OPTIONS)).least).toMatchObject({ keys: [], cost: 0, gainK: 0 });
+		const cool = parseScenario({ climate: { tMax: 15 }, legs: TOURING_LEGS });
+		expect(finishWork(searchRemedies(cool, OPTIONS)).least).toMatchObject({ keys: [], cost: 0, gainK: 0 });
 	});
 
 	it('finds none where none is enough, and says what it did not try', () => {
 		const furnace = parseScenario({
 			climate: { tMax: 59 },
 			bms: { discharge: { cut: 50, reset: 40 } },
-			legs: LEGS
+			legs: TOURING_LEGS
 		});
 		const offers = [{ key: 'vent', cost: 1, hours: 1, offered: false }];
-		const { least, notTried } = finish(searchRemedies(furnace, { ...OPTIONS, offers }));
+		const { least, notTried } = finishWork(searchRemedies(furnace, { ...OPTIONS, offers }));
 		expect(least).toBeNull();
 		expect(notTried.join(' ')).toContain('Vented bonnet');
 		expect(notTried.join(' ')).toContain('More than 4 together');
@@ -127,7 +109,7 @@ describe('the search for what it would take', () => {
 });
 
 describe('the safe envelope', () => {
-	const envelope = finish(findSafeEnvelope(HOT, { samples: 4, seed: 1 }));
+	const envelope = finishWork(findSafeEnvelope(HOT, { samples: 4, seed: 1 }));
 
 	it('bears a hotter day with a short drive than with a long one', () => {
 		const limits = envelope.points.map(({ middleC }) => middleC ?? -Infinity);
@@ -151,7 +133,7 @@ describe('the safe envelope', () => {
 	it('has a band around its line, and no points without driving', () => {
 		for (const { lowC, highC } of envelope.points) expect(lowC ?? -99).toBeLessThanOrEqual(highC ?? -99);
 		const parked = parseScenario({ legs: [{ minutes: 600 }] });
-		expect(finish(findSafeEnvelope(parked, { samples: 0, seed: 1 })).points).toEqual([]);
+		expect(finishWork(findSafeEnvelope(parked, { samples: 0, seed: 1 })).points).toEqual([]);
 	});
 });
 
@@ -166,7 +148,7 @@ describe('the life that is expected', () => {
 	it('is shorter on the hot side than in the cabin, and shorter the hotter the place', () => {
 		const cabin = parseScenario({
 			position: { bayAirFraction: 0, enclosureFraction: 1, exhaustView: 0, engineView: 0, bonnetView: 0 },
-			legs: LEGS
+			legs: TOURING_LEGS
 		});
 		const left = (scenario: Scenario, meanMaxC: number) =>
 			expectLife(scenario, year(meanMaxC), LFP)!.years[9]!.middle;
@@ -189,7 +171,7 @@ describe('the life that is expected', () => {
 	});
 
 	it('counts what the days on the road take out', () => {
-		const cool = parseScenario({ climate: { tMax: 20 }, legs: LEGS });
+		const cool = parseScenario({ climate: { tMax: 20 }, legs: TOURING_LEGS });
 		const life = expectLife(cool, year(20), LFP)!;
 		// Eight ampere for ten hours and six for one each day of 19 hours, sixty days.
 		expect(life.takenOutAhPerYear).toBeCloseTo(((8 * 10 + 6) * 60 * 24) / 19, -1);

@@ -8,6 +8,7 @@ import {
 } from '../assess/search-remedies';
 import type { Scenario } from '../types';
 import { countCutOutDays, type CutOutDays, type TouringYear } from '../uncertainty/cut-out-days';
+import { finishWork } from '../uncertainty/finish-work';
 import { rankInfluences, type Influences } from '../uncertainty/influence';
 import { spreadDay, type DaySpread } from '../uncertainty/spread-day';
 import { ENGINE_VERSION } from '../version';
@@ -170,11 +171,7 @@ export function* makeOutlook(request: OutlookRequest): Generator<OutlookProgress
 	};
 }
 
-/** Drives the work to its end at once. */
+/** The outlook at once, for who has nothing else to do. */
 export function finishOutlook(request: OutlookRequest): Outlook {
-	const work = makeOutlook(request);
-	for (;;) {
-		const step = work.next();
-		if (step.done) return step.value;
-	}
+	return finishWork(makeOutlook(request));
 }

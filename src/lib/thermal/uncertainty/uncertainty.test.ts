@@ -1,5 +1,7 @@
 import { describe, expect, it } from 'vitest';
+import { HOT_SIDE, TOURING_LEGS } from '../../../../tests/support/hot-side';
 import type { Scenario } from '../types';
+import { finishWork } from './finish-work';
 import { parseScenario } from '../vehicle/parse-scenario';
 import { simulateScenario } from '../vehicle/simulate';
 import { OutcomeRunner } from '../vehicle/outcome-run';
@@ -10,28 +12,8 @@ import { rankInfluences } from './influence';
 import { PRIORS } from './priors';
 import { spreadDay } from './spread-day';
 
-function finish<T>(work: Generator<unknown, T>): T {
-	for (;;) {
-		const step = work.next();
-		if (step.done) return step.value;
-	}
-}
-
-const LEGS = [
-	{ minutes: 240, engineOn: true, speedKmh: 80, loadA: 4 },
-	{ minutes: 60, loadA: 6 },
-	{ minutes: 240, engineOn: true, speedKmh: 60, surface: 'gravel' as const, loadA: 4 },
-	{ minutes: 600, loadA: 8 }
-];
-const HOT_SIDE = {
-	bayAirFraction: 0.95,
-	exhaustView: 0.03,
-	engineView: 0.1,
-	airExposure: 0.05,
-	guardFraction: 0.9
-};
 const scenarioWith = (more: object = {}): Scenario =>
-	parseScenario({ position: HOT_SIDE, legs: LEGS, ...more });
+	parseScenario({ position: HOT_SIDE, legs: TOURING_LEGS, ...more });
 const WITH_SHIELD = scenarioWith({ shield: {} });
 /** A limit that half of the days drawn reach. */
 const EDGE = scenarioWith({ bms: { discharge: { cut: 66, reset: 55 } } });
@@ -106,11 +88,11 @@ describe('an outcome', () => {
 });
 
 describe('the spread of a day', () => {
-	const spread = finish(spreadDay(EDGE, { samples: 64, seed: 3 }));
+	const spread = finishWork(spreadDay(EDGE, { samples: 64, seed: 3 }));
 
 	it('gives the same digits for the same seed, and others for another', () => {
-		expect(finish(spreadDay(EDGE, { samples: 64, seed: 3 }))).toEqual(spread);
-		expect(finish(spreadDay(EDGE, { samples: 64, seed: 4 })).headroomMiddleK).not.toBe(
+		expect(finishWork(spreadDay(EDGE, { samples: 64, seed: 3 }))).toEqual(spread);
+		expect(finishWork(spreadDay(EDGE, { samples: 64, seed: 4 })).headroomMiddleK).not.toBe(
 			spread.headroomMiddleK
 		);
 	});
@@ -139,10 +121,10 @@ describe('the spread of a day', () => {
 	});
 
 	it('comes nearer to what many draws say the more are drawn', () => {
-		const many = finish(spreadDay(EDGE, { samples: 256, seed: 8 })).headroomMiddleK;
+		const many = finishWork(spreadDay(EDGE, { samples: 256, seed: 8 })).headroomMiddleK;
 		const offBy = (samples: number) =>
 			[1, 2, 3, 4].reduce(
-				(sum, seed) => sum + Math.abs(finish(spreadDay(EDGE, { samples, seed })).headroomMiddleK - many),
+				(sum, seed) => sum + Math.abs(finishWork(spreadDay(EDGE, { samples, seed })).headroomMiddleK - many),
 				0
 			);
 		expect(offBy(64)).toBeLessThan(offBy(8));
@@ -168,7 +150,7 @@ describe('the hottest day', () => {
 describe('cut-out days in a year', () => {
 	const months = (meanMaxC: number) => Array.from({ length: 12 }, () => ({ meanMaxC, spreadK: 3 }));
 	const countAt = (meanMaxC: number, days = 5) =>
-		finish(
+		finishWork(
 			countCutOutDays(
 				EDGE,
 				{ months: months(meanMaxC), daysOnRoad: Array(12).fill(days) as number[] },
@@ -190,12 +172,14 @@ describe('cut-out days in a year', () => {
 
 	it('refuse a year without twelve months', () => {
 		const short = { months: months(30).slice(1), daysOnRoad: Array(12).fill(1) as number[] };
-		expect(() => finish(countCutOutDays(EDGE, short, { samples: 2, seed: 1 }))).toThrow('twelve months');
+		expect(() => finishWork(countCutOutDays(EDGE, short, { samples: 2, seed: 1 }))).toThrow('twelve months');
 	});
 });
 
 describe('what matters most', () => {
-	const { ranking, evaluations } = finish(rankInfluences(EDGE, { pointsEach: 16, replicates: 2, seed: 2 }));
+	const { ranking, evaluations } = finishWork(
+		rankInfluences(EDGE, { pointsEach: 16, replicates: 2, seed: 2 })
+	);
 
 	it('is ranked by the share of the variance, and leaves out what moves nothing here', () => {
 		const effects = ranking.map(({ totalEffect }) => totalEffect);

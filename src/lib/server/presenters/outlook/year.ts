@@ -2,12 +2,10 @@ import { formatKelvin, formatNumber, formatTemperature } from '$lib/format/numbe
 import type { MonthReport, YearReport } from '$lib/schemas/outlook-reports';
 import type { CutOutDays, TouringYear } from '$lib/thermal/outlook';
 import { MONTH_NAMES } from '$lib/thermal/weather';
-import { formatDays, formatMonthDays, type EventWords } from '$lib/format/outlook-words';
+import { formatDays, formatMonthDays, sayDayCount, type EventWords } from '$lib/format/outlook-words';
 
 /** The weather and the days on the road that the days were counted with. */
-export type CountedYear = TouringYear & { basis?: string };
-
-const ESTIMATED = 'The months are estimated from the latitude and the hot day.';
+export type CountedYear = TouringYear & { basis: string };
 
 function presentMonth({ months }: CutOutDays, { months: weather, daysOnRoad }: TouringYear, at: number) {
 	const days = months[at]!;
@@ -40,10 +38,10 @@ export function presentYear(
 	const onRoad = year.daysOnRoad.reduce((sum, each) => sum + each, 0);
 	const value = formatDays(days.year);
 	return {
-		sentence: `On ${value} ${value === '1' ? 'day' : 'days'} a year ${happens}, with ${formatNumber(onRoad)} days a year on the road around ${place}.`,
+		sentence: `On ${sayDayCount(days.year)} a year ${happens}, with ${formatNumber(onRoad)} days a year on the road around ${place}.`,
 		value,
 		months: MONTH_NAMES.map((_, at) => presentMonth(days, year, at)),
-		basis: [year.basis ?? ESTIMATED, sayRoad(year.daysOnRoad)],
+		basis: [year.basis, sayRoad(year.daysOnRoad)],
 		method: `${samples} vehicles and mounts were drawn with the seed ${seed}; in brackets, and as the thin line, the range that holds four of five of them.`
 	};
 }
