@@ -12,7 +12,7 @@ const SELF = fileURLToPath(import.meta.url);
 const WATCHED = ['--expose-gc', '--max-semi-space-size=64'];
 
 /** What a process of its own is asked for, and how it answers. */
-type Request = { day: number } | { workload: number } | { hours: number };
+type Request = { warmUp: number } | { day: number } | { workload: number } | { hours: number };
 
 /** One contender in a process of its own, so that none runs on what another has done to the compiler. */
 async function serve(name: string): Promise<void> {
@@ -21,6 +21,7 @@ async function serve(name: string): Promise<void> {
 }
 
 function answer(request: Request, contender: Contender | undefined): unknown {
+	if ('warmUp' in request) return contender!.warmUp(request.warmUp) ?? null;
 	if ('day' in request) return contender!.time(request.day);
 	if ('workload' in request) return WORKLOADS[request.workload]!.time();
 	return LONG_RUNS.watch(request.hours);
@@ -37,6 +38,7 @@ async function takeTurns(
 	day: number
 ): Promise<Map<string, number>> {
 	const times = new Map([...children.keys()].map((name) => [name, [] as number[]]));
+	for (const child of children.values()) await ask(child, { warmUp: day });
 	for (let round = 0; round < ROUNDS; round++) {
 		for (const [name, child] of children) times.get(name)!.push(await ask<number>(child, { day }));
 	}

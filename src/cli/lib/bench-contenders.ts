@@ -4,7 +4,7 @@ import { completeCase, type CaseInput } from '../../../tests/reference/support/d
 import type { ReferenceIntegrator } from '../../../tests/reference/support/integrator';
 import { MODEL_STATE } from '../../../tests/reference/support/model-equations';
 import { runReference, type ReferenceRun } from '../../../tests/reference/support/reference-run';
-import { compareRuns, timeSteadily, type Deviation } from './bench-table';
+import { compareRuns, timeSteadily, warmUp, type Deviation } from './bench-table';
 
 /** Days of about 24 hours, each once through all contenders in turn. */
 export const DAYS = ENGINE_CASES.filter(({ input }) => {
@@ -13,6 +13,7 @@ export const DAYS = ENGINE_CASES.filter(({ input }) => {
 }).slice(0, 4);
 
 export interface Contender {
+	warmUp: (day: number) => void;
 	/** Milliseconds of one run of a day among many. */
 	time: (day: number) => number;
 	/** How far its run of a day is from a much tighter one. */
@@ -37,6 +38,7 @@ function contend(
 	timed: (input: CaseInput) => unknown = run
 ): Contender {
 	return {
+		warmUp: (day) => warmUp(() => timed(DAYS[day]!.input)),
 		time: (day) => timeSteadily(() => timed(DAYS[day]!.input)),
 		compare: (day, truth) => compareRuns(run(DAYS[day]!.input), truth)
 	};

@@ -13,7 +13,8 @@ export interface Deviation {
 
 /** Runs are repeated up to this in one measurement: what is measured is the steady state, not the way there. */
 const SHORTEST_MS = 250;
-const WARM_UP = 3;
+/** Before the first measurement of all: the compiler of the engine takes its time to settle. */
+const WARM_UP_MS = 3000;
 
 function timeOnce(action: () => unknown, repeats: number): number {
 	const start = performance.now();
@@ -21,10 +22,15 @@ function timeOnce(action: () => unknown, repeats: number): number {
 	return (performance.now() - start) / repeats;
 }
 
+/** Repeats an action until nothing about it changes any more. */
+export function warmUp(action: () => unknown): void {
+	const end = performance.now() + WARM_UP_MS;
+	while (performance.now() < end) action();
+}
+
 /** Milliseconds of one action among many of the same, ms. */
 export function timeSteadily(action: () => unknown): number {
-	timeOnce(action, WARM_UP);
-	return timeOnce(action, Math.max(1, Math.ceil(SHORTEST_MS / timeOnce(action, 1))));
+	return timeOnce(action, Math.max(1, Math.ceil(SHORTEST_MS / timeOnce(action, 3))));
 }
 
 export function findMedian(values: readonly number[]): number {

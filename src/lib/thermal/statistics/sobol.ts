@@ -32,10 +32,13 @@ const DIRECTIONS = [FIRST_DIMENSION, ...JOE_KUO_ROWS.trim().split('\n').map(read
 /** As many dimensions as there are direction numbers for. */
 export const SOBOL_DIMENSIONS = DIRECTIONS.length;
 
-/** The coordinate as a 32-bit integer: the direction numbers of the Gray code of the index, added without carry. */
-function sobolBits(index: number, dimension: number): number {
+function requirePlace(index: number, dimension: number): void {
 	requireWhole(0, TWO_TO_32 - 1, { index });
 	requireWhole(0, SOBOL_DIMENSIONS - 1, { dimension });
+}
+
+/** The coordinate as a 32-bit integer: the direction numbers of the Gray code of the index, added without carry. */
+function sobolBits(index: number, dimension: number): number {
 	const directions = DIRECTIONS[dimension]!;
 	let gray = (index ^ (index >>> 1)) >>> 0;
 	let bits = 0;
@@ -60,6 +63,7 @@ function sobolBits(index: number, dimension: number): number {
  * sobolCoordinate(2, 1); // 0.25
  */
 export function sobolCoordinate(index: number, dimension: number): number {
+	requirePlace(index, dimension);
 	return sobolBits(index, dimension) / TWO_TO_32;
 }
 
@@ -97,7 +101,12 @@ function scrambleBits(bits: number, key: number): number {
  * scrambledSobolCoordinate(0, 0, 1) === scrambledSobolCoordinate(0, 0, 2); // false
  */
 export function scrambledSobolCoordinate(index: number, dimension: number, seed: number): number {
+	requirePlace(index, dimension);
 	requireWhole(0, TWO_TO_32 - 1, { seed });
+	return scrambledAt(index, dimension, seed);
+}
+
+function scrambledAt(index: number, dimension: number, seed: number): number {
 	const bits = scrambleBits(sobolBits(index, dimension), hashWords(seed, dimension));
 	return (bits + 0.5) / TWO_TO_32;
 }
@@ -132,7 +141,6 @@ export function sobolPoint(index: number, dimensions: number): number[] {
  */
 export function scrambledSobolPoint(index: number, dimensions: number, seed: number): number[] {
 	requireWhole(0, SOBOL_DIMENSIONS, { dimensions });
-	return Array.from({ length: dimensions }, (_, dimension) =>
-		scrambledSobolCoordinate(index, dimension, seed)
-	);
+	requireWhole(0, TWO_TO_32 - 1, { index, seed });
+	return Array.from({ length: dimensions }, (_, dimension) => scrambledAt(index, dimension, seed));
 }

@@ -1,9 +1,9 @@
 import { INSTANTS, planSlots, SLOPE } from '../network/step-generator/slots';
 import { expOf } from '../solve/elementary';
-import type { ChargeSpan } from './charge';
-import { emptyDrive, findDrive, findFuelRegime, type Drive } from './leg-drive';
+import { readCurrentA, type ChargeSpan } from './charge';
+import { emptyDrive, findFuelRegime, findUnlitDrive, type Drive } from './leg-drive';
 import { DRIVEN, SUNLIT, type Setting } from './network-table';
-import { readSunShape, readSunSlopePerH } from './sun-shape';
+import { CELLS_PER_H, findSunPlace, readSunShape, readSunSlopePerH } from './sun-shape';
 import { shapeVehicle } from './vehicle-shape';
 
 const S_PER_H = 3600;
@@ -41,6 +41,9 @@ export class DriveClock {
 	private span!: ChargeSpan;
 	private spanStartS = 0;
 	private isLit = false;
+	/** Where the step starts: the sun's place among its cells, and the current, A. */
+	private sunPlace = 0;
+	private stepStartA = 0;
 	private readonly drive: Drive = emptyDrive();
 
 	/** From `timeS` on this leg runs. */
@@ -54,6 +57,7 @@ export class DriveClock {
 			this.values[FIRST_LIT + k] = peak;
 			if (peak !== 0) this.isLit = true;
 		}
+		this.values.fill(0, PLACES.signal, PLACES.signal + SLOPE + 1);
 		this.segmentEndS = timeS;
 	}
 
@@ -61,6 +65,8 @@ export class DriveClock {
 	setSpan(span: ChargeSpan, startS: number): void {
 		this.span = span;
 		this.spanStartS = startS;
+		this.values.fill(span.currentA, PLACES.current, PLACES.current + SLOPE);
+		this.values[PLACES.current + SLOPE] = 0;
 	}
 
 	/** Works out the parabolas from `timeS` to the next whole hour, or to where the engine's load comes to its limits. */
@@ -74,7 +80,7 @@ export class DriveClock {
 		const length = this.segmentEndS - timeS;
 		const { scenario, leg, constants } = setting;
 		for (let point = 0; point < 3; point++) {
-			findDrive(scenario, leg, constants, hour + (point / 2) * (endHour - hour), drive);
+			findUnlitDrive(scenario, leg, constants, hour + (point / 2) * (endHour - hour), drive);
 			for (let k = 0; k < BENT.length; k++) values[FIRST_BENT + 3 * k + point] = BENT[k]!(drive, scenario);
 		}
 		for (let at = FIRST_BENT; at < FIRST_BENT + 3 * BENT.length; at += 3) {
@@ -105,31 +111,33 @@ export class DriveClock {
 
 	/** Writes what holds at the start of a step. */
 	fillStart(timeS: number): void {
-		const { values, span, isLit } = this;
-		const hour = this.startHour + timeS / S_PER_H;
-		const { signal, current } = PLACES;
+		const { values } = this;
 		values[PLACES.elapsed] = timeS - this.segmentStartS;
-		values[signal] = isLit ? readSunShape(hour) : 0;
-		values[signal + SLOPE] = isLit ? readSunSlopePerH(hour) / S_PER_H : 0;
-		const currentA = this.currentAt(timeS);
-		values[current] = currentA;
-		values[current + SLOPE] = -span.decayPerS * currentA;
-	}
-
-	/** Writes what the stages of a step find at their instants. */
-	fillStages(timeS: number, lengthS: number): void {
-		const { values, isLit } = this;
-		const { signal, current } = PLACES;
-		values[PLACES.length] = lengthS;
-		for (let k = 1; k < INSTANTS.length; k++) {
-			const instantS = timeS + INSTANTS[k]! * lengthS;
-			values[signal + k] = isLit ? readSunShape(this.startHour + instantS / S_PER_H) : 0;
-			values[current + k] = this.currentAt(instantS);
+		if (this.isLit) {
+			this.sunPlace = findSunPlace(this.startHour + timeS / S_PER_H);
+			values[PLACES.signal] = readSunShape(this.sunPlace);
+			values[PLACES.signal + SLOPE] = readSunSlopePerH(this.sunPlace) / S_PER_H;
 		}
+		const { decayPerS } = this.span;
+		if (decayPerS === 0) return;
+		this.stepStartA = readCurrentA(this.span, timeS - this.spanStartS);
+		values[PLACES.current] = this.stepStartA;
+		values[PLACES.current + SLOPE] = -decayPerS * this.stepStartA;
 	}
 
-	private currentAt(timeS: number): number {
-		const { currentA, decayPerS } = this.span;
-		return decayPerS === 0 ? currentA : currentA * expOf(-decayPerS * (timeS - this.spanStartS));
+	/** Writes what the stages of the step find at their instants. */
+	fillStages(lengthS: number): void {
+		const { values, isLit, span } = this;
+		values[PLACES.length] = lengthS;
+		if (isLit) {
+			const cells = (lengthS / S_PER_H) * CELLS_PER_H;
+			for (let k = 1; k < INSTANTS.length; k++) {
+				values[PLACES.signal + k] = readSunShape(this.sunPlace + INSTANTS[k]! * cells);
+			}
+		}
+		if (span.decayPerS === 0) return;
+		for (let k = 1; k < INSTANTS.length; k++) {
+			values[PLACES.current + k] = this.stepStartA * expOf(-span.decayPerS * INSTANTS[k]! * lengthS);
+		}
 	}
 }

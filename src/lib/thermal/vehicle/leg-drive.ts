@@ -129,12 +129,23 @@ export function findDrive(
 	hour: number,
 	drive: Drive
 ): Drive {
+	drive.sunWPerM2 = sunWPerM2(hour, scenario.climate);
+	return findUnlitDrive(scenario, leg, constants, hour, drive);
+}
+
+/** All of it but the sun, which is left as it stands. */
+export function findUnlitDrive(
+	scenario: Scenario,
+	leg: Leg,
+	constants: LegConstants,
+	hour: number,
+	drive: Drive
+): Drive {
 	const { vehicle, exhaust, climate } = scenario;
 	const ambientC = ambientTempC(hour, climate);
 	const density = findAirDensity(climate, ambientC);
 	drive.ambientC = ambientC;
 	drive.skyC = ambientC - climate.skyDropK;
-	drive.sunWPerM2 = sunWPerM2(hour, climate);
 	drive.airWPerK = density * AIR_HEAT_J_PER_KG_K * constants.flowM3PerS;
 	drive.fuelPowerW = findFuelPowerW(vehicle, leg, constants.speedMPerS, density);
 	const load = drive.fuelPowerW / vehicle.ratedFuelPowerW;

@@ -1,3 +1,4 @@
+import { highestBound } from '../solve/crossings';
 import type { Step } from '../solve/stepper';
 import {
 	NODE_NAMES,
@@ -16,10 +17,11 @@ const MINUTES_PER_H = 60;
 /** Sums of leg lengths carry rounding errors; a grid point this near the end still counts, min. */
 const ROUNDING_MIN = 1e-7;
 
-function findHighest(temps: Float64Array): number {
-	let high = -Infinity;
-	for (let at = 0; at < temps.length; at++) if (temps[at]! > high) high = temps[at]!;
-	return high;
+/** Raises the highest value of a node to that of some minutes of its column. */
+function raise(highestC: Float64Array, node: number, column: Float64Array, from: number, to: number): void {
+	let high = highestC[node]!;
+	for (let at = from; at < to; at++) if (column[at]! > high) high = column[at]!;
+	highestC[node] = high;
 }
 
 /** How many grid points a run has: whole minutes, and the start. */
@@ -37,10 +39,12 @@ export class MinuteRecord implements StepSink {
 	readonly minutes: MinuteSeries;
 	/** One column a solved node, in the order of the solver. */
 	private readonly columns: readonly Float64Array[];
+	/** Of each solved node on the minutes filled so far, °C. */
+	private readonly highestC: Float64Array;
 
 	constructor(
 		private readonly scenario: Scenario,
-		storedNames: readonly string[],
+		private readonly storedNames: readonly string[],
 		count: number
 	) {
 		const startHour = scenario.start.hour;
@@ -50,6 +54,7 @@ export class MinuteRecord implements StepSink {
 		const nodes = {} as Record<NodeName, Float64Array>;
 		for (const name of NODE_NAMES) nodes[name] = column();
 		this.columns = storedNames.map((name) => nodes[name as NodeName]);
+		this.highestC = new Float64Array(storedNames.length).fill(-Infinity);
 		const ambient = column();
 		fillAmbient(ambient, startHour, scenario.climate);
 		if (!scenario.shield) nodes.shield.fill(ambient[0]!);
@@ -65,42 +70,53 @@ export class MinuteRecord implements StepSink {
 		};
 	}
 
-	/** Fills the grid points of a step from the one up to, but not at, the other. */
-	takeStep(step: Step, standing: Standing, minute: number, last: number): void {
+	takeStep(step: Step, _standing: Standing, minute: number, last: number): void {
 		if (minute === last) return;
-		const { columns } = this;
+		const { columns, highestC } = this;
 		for (let node = 0; node < columns.length; node++) {
-			fillMinutes(step, node, minute, last, columns[node]!);
+			const column = columns[node]!;
+			fillMinutes(step, node, minute, last, column);
+			if (highestBound(step, node) > highestC[node]!) raise(highestC, node, column, minute, last);
 		}
-		this.fillStanding(standing, minute, last);
+	}
+
+	takeStanding(
+		{ span, spanStartS, chargeOpen, dischargeOpen }: Standing,
+		minute: number,
+		last: number
+	): void {
+		if (minute === last) return;
+		const { minutes } = this;
+		fillCharge(span, spanStartS, minutes.soc, minutes.currentA, minute, last);
+		if (chargeOpen) minutes.chargeOpen.fill(1, minute, last);
+		if (dischargeOpen) minutes.dischargeOpen.fill(1, minute, last);
 	}
 
 	/** Fills what is left once the last leg has ended: at most its last instant. */
 	takeEnd(temps: Float64Array, standing: Standing, minute: number): void {
-		const { columns, minutes } = this;
+		const { columns, highestC, minutes } = this;
 		if (minute === minutes.count) return;
 		for (let node = 0; node < columns.length; node++) {
 			columns[node]!.fill(temps[node]!, minute, minutes.count);
+			raise(highestC, node, columns[node]!, minute, minutes.count);
 		}
-		this.fillStanding(standing, minute, minutes.count);
+		this.takeStanding(standing, minute, minutes.count);
 	}
 
 	/** The highest temperature of each node on the grid. */
 	findPeaks(): NodeValues {
-		const { nodes } = this.minutes;
-		return this.readRow((name) => findHighest(nodes[name]));
+		return this.readRow((name) => this.highestC[this.storedNames.indexOf(name)]!);
 	}
 
 	/** The start and every whole hour after it. */
 	readHours(): HourlyRow[] {
-		const { soc, count, startHour } = this.minutes;
+		const { nodes, soc, count, startHour } = this.minutes;
 		const rows: HourlyRow[] = [];
 		for (let minute = 0; minute < count; minute += MINUTES_PER_H) {
-			rows.push({
-				hour: startHour + minute / MINUTES_PER_H,
-				...this.readMinute(minute),
-				soc: soc[minute]!
-			});
+			const row = this.readRow((name) => nodes[name][minute]!) as HourlyRow;
+			row.hour = startHour + minute / MINUTES_PER_H;
+			row.soc = soc[minute]!;
+			rows.push(row);
 		}
 		return rows;
 	}
@@ -120,17 +136,5 @@ export class MinuteRecord implements StepSink {
 			cells: read('cells'),
 			board: read('board')
 		};
-	}
-
-	private readMinute(minute: number): NodeValues {
-		const { nodes } = this.minutes;
-		return this.readRow((name) => nodes[name][minute]!);
-	}
-
-	private fillStanding({ span, spanStartS, bms }: Standing, minute: number, last: number): void {
-		const { soc, currentA, chargeOpen, dischargeOpen } = this.minutes;
-		fillCharge(span, spanStartS, soc, currentA, minute, last);
-		if (bms.isOpen('charge')) chargeOpen.fill(1, minute, last);
-		if (bms.isOpen('discharge')) dischargeOpen.fill(1, minute, last);
 	}
 }

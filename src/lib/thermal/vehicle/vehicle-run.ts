@@ -57,6 +57,7 @@ export class VehicleRun {
 	private standing!: Standing;
 	private nextMinute = 0;
 	private minuteCount = 0;
+	private spanMinute = 0;
 	private pending: readonly PlannedChange[] = [];
 	private readonly kinks: Kinks;
 
@@ -94,6 +95,7 @@ export class VehicleRun {
 			const failure = this.runLeg(leg, legEndS);
 			if (failure) return failure;
 		}
+		this.noteLatches();
 		sink.takeEnd(this.temps, this.standing, this.nextMinute);
 		return null;
 	}
@@ -122,7 +124,7 @@ export class VehicleRun {
 		this.standing = {
 			span: planChargeSpan(scenario, legs[0]!, start.soc, CLOSED),
 			spanStartS: 0,
-			bms: this.bms
+			...CLOSED
 		};
 	}
 
@@ -138,14 +140,19 @@ export class VehicleRun {
 	}
 
 	private beginSpan(leg: Leg): void {
-		const span = planChargeSpan(this.scenario, leg, this.soc, {
-			chargeOpen: this.bms.isOpen('charge'),
-			dischargeOpen: this.bms.isOpen('discharge')
-		});
-		this.standing.span = span;
-		this.standing.spanStartS = this.timeS;
+		const { standing } = this;
+		this.noteLatches();
+		const span = planChargeSpan(this.scenario, leg, this.soc, standing);
+		standing.span = span;
+		standing.spanStartS = this.timeS;
+		this.spanMinute = this.nextMinute;
 		this.stepper.clock.setSpan(span, this.timeS);
 		if (span.decayPerS > 0) this.integrator.restart(DECAY_SHARE / span.decayPerS);
+	}
+
+	private noteLatches(): void {
+		this.standing.chargeOpen = this.bms.isOpen('charge');
+		this.standing.dischargeOpen = this.bms.isOpen('discharge');
 	}
 
 	private endSpan(): void {
@@ -154,6 +161,7 @@ export class VehicleRun {
 		// A span shorter than a rounding error of the clock still ends where it ends, or it would begin again for ever.
 		this.soc = this.timeS >= spanStartS + span.lastsS ? span.socAtEnd : readSoc(span, lastedS);
 		this.refusedAh += (span.refusedA * lastedS) / S_PER_H;
+		this.sink.takeStanding?.(this.standing, this.spanMinute, this.nextMinute);
 	}
 
 	/** Runs until the leg or the span ends or a latch moves; where the air's slope changes is a stop too. */

@@ -81,7 +81,7 @@ export class VehicleStepper implements Stepper {
 
 	tryStep(lengthS: number): boolean {
 		this.step.lengthS = lengthS;
-		this.clock.fillStages(this.step.timeS, lengthS);
+		this.clock.fillStages(lengthS);
 		this.variant.take(this.constants, this.clock.values, this.state, this.account);
 		this.evaluations += STAGES;
 		return true;
