@@ -64,7 +64,7 @@ export class LegClock {
 
 	private legAt(minute: number): TimedLeg {
 		const { legs } = this;
-		if (minute < legs[this.at]!.fromMin) this.at = 0;
+		while (this.at > 0 && minute < legs[this.at]!.fromMin) this.at--;
 		while (this.at + 1 < legs.length && minute >= legs[this.at + 1]!.fromMin) this.at++;
 		return legs[this.at]!;
 	}
