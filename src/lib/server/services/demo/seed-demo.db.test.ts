@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import workshops from '../../../../../seeds/demo-workshops.json';
 import { useTestDatabase } from '../../../../../tests/support/services';
-import { Assessment, Customer, Job, Person, Place, Workshop } from '../../db/models';
+import { Assessment, Customer, Job, Person, Place, Recommendation, Workshop } from '../../db/models';
 import { reproduceAssessment } from '../assessments';
 import { findBreak } from '../audit';
 import { fillWithDemo, seedDemo } from './seed-demo';
@@ -41,6 +41,8 @@ describe('the demo workshop', () => {
 			expect(new Set(places.map(({ climateZone }) => climateZone)).size).toBe(4);
 			const assessments = await Assessment.findAll({ where });
 			expect(new Set(assessments.map(({ verdict }) => verdict))).toEqual(new Set(VERDICTS));
+			// One goes ahead against its verdict, with a name and a reason.
+			expect(await Recommendation.count({ where: { ...where, againstVerdict: true } })).toBe(1);
 			// One of them has a battery that nothing switches off, under the bonnet and elsewhere.
 			const withoutBms = assessments.filter(({ result }) => result.leadAcid);
 			expect(new Set(withoutBms.map(({ jobId }) => jobId)).size).toBe(1);
