@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { assessmentRowSchema, type AssessmentView, type MountOutcome } from './assessments';
 import { idSchema, words } from './fields';
+import { preDrillSnapshotSchema } from './pre-drill';
 
 /** Going ahead against "cuts out" takes a named person and a written reason; otherwise neither is asked for. */
 export const recommendationInputSchema = z.object({
@@ -18,6 +19,8 @@ export const recommendationSchema = z.object({
 	againstVerdict: z.boolean(),
 	decidedBy: z.string().nullable(),
 	reason: z.string().nullable(),
+	/** The check before drilling as it stood; null for those that were made before there was one. */
+	preDrill: preDrillSnapshotSchema.nullable(),
 	recommendedBy: z.string(),
 	createdAt: z.iso.datetime()
 });

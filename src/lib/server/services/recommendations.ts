@@ -15,6 +15,7 @@ import { presentRecommendation } from '../presenters/recommendations';
 import { getAssessment, presentRows } from './assessments';
 import { recordBy } from './audit';
 import { WITHOUT_TEXTS, newestByMount, updateJobOutcome } from './job-outcome';
+import { snapshotPreDrill } from './pre-drill';
 
 async function show(recommendation: Recommendation): Promise<RecommendationView> {
 	const { jobId, assessmentId, createdBy } = recommendation;
@@ -71,13 +72,18 @@ export async function makeRecommendation(
 		const { workshopId } = person;
 		const job = await Job.findOne({ where: { id: assessment.jobId, workshopId }, lock: true });
 		if (!job) throw notFound('job');
-		const recommendation = await Recommendation.create(
-			{ workshopId, jobId: job.id, assessmentId: assessment.id, ...override, createdBy: person.id },
-			{ transaction }
-		);
+		const preDrill = await snapshotPreDrill(person, assessment.mountId);
+		const made = { workshopId, jobId: job.id, assessmentId: assessment.id, createdBy: person.id };
+		const recommendation = await Recommendation.create({ ...made, ...override, preDrill }, { transaction });
 		await updateJobOutcome(job, transaction, 'recommended');
 		const subject = { type: 'recommendation', id: recommendation.id };
-		const detail = { jobId: job.id, assessmentId: assessment.id, verdict: assessment.verdict, ...override };
+		const detail = {
+			jobId: job.id,
+			assessmentId: assessment.id,
+			verdict: assessment.verdict,
+			...override,
+			preDrill
+		};
 		await recordBy(person, 'recommendation.made', subject, transaction, detail);
 		return show(recommendation);
 	});

@@ -8,7 +8,10 @@ export const CLOSE_HEADROOM_K = 5;
 export const MISSED_SHARE_THAT_COUNTS = 0.01;
 
 /** What a run means in one of three words. */
-export function judgeOutcome({ battery, bms }: Scenario, outcome: Omit<Outcome, 'darkHours'>): MountVerdict {
+export function judgeOutcome(
+	{ battery, bms }: Scenario,
+	outcome: Omit<Outcome, 'darkHours' | 'events'>
+): MountVerdict {
 	if (outcome.cutsOut) return 'cuts-out';
 	const headroomK = bms.discharge.cut - outcome.peakSensorC;
 	const missedChargeCounts = outcome.missedAh >= MISSED_SHARE_THAT_COUNTS * battery.capacityAh;

@@ -33,8 +33,16 @@ export interface CutOutDays {
 	months: DayCount[];
 }
 
+export interface CutOutDaysOptions {
+	samples: number;
+	seed: number;
+	/** The point of each draw, one coordinate a prior in the order of PRIORS; without it the seed gives them. */
+	pointOf?: (draw: number) => readonly number[];
+}
+
 /** The weather is in the months: what is drawn is the vehicle and the mount. */
-const DRAWN = PRIORS.filter(({ key }) => key !== 'dayMax');
+const OF_THE_MONTHS = 'dayMax';
+const DRAWN = PRIORS.filter(({ key }) => key !== OF_THE_MONTHS);
 const LIMIT_WITHIN_K = 0.5;
 const OUTER = 0.1;
 
@@ -64,7 +72,7 @@ function countDays(values: readonly number[]): DayCount {
  *
  * @param scenario the day as it was estimated
  * @param year mean and spread of the daily maxima in °C and K, days on the road, month by month
- * @param options number of draws and seed
+ * @param options number of draws and seed, or the points themselves
  * @returns as a generator, yields the share of the work done; the expected days by month and in the year: the mean over
  *   the draws, and what a tenth of them stay below and exceed
  * @throws RangeError when there are not twelve months, EngineInputError for a month that cannot be
@@ -81,14 +89,17 @@ function countDays(values: readonly number[]): DayCount {
 export function* countCutOutDays(
 	scenario: Scenario,
 	year: TouringYear,
-	{ samples, seed }: { samples: number; seed: number }
+	{ samples, seed, pointOf }: CutOutDaysOptions
 ): Generator<number, CutOutDays> {
 	requireYear(year);
 	const runner = new OutcomeRunner();
 	const byMonth: number[][] = year.months.map(() => []);
 	const sums: number[] = [];
 	for (let draw = 0; draw < samples; draw++) {
-		const drawn = drawScenario(scenario, scrambledSobolPoint(draw, DRAWN.length, seed), DRAWN);
+		const point = pointOf
+			? pointOf(draw).filter((_, at) => PRIORS[at]!.key !== OF_THE_MONTHS)
+			: scrambledSobolPoint(draw, DRAWN.length, seed);
+		const drawn = drawScenario(scenario, point, DRAWN);
 		const limitC = findHottestDay(drawn, runner, ({ cutsOut }) => !cutsOut, LIMIT_WITHIN_K);
 		let sum = 0;
 		year.months.forEach(({ meanMaxC, spreadK }, month) => {

@@ -1,5 +1,5 @@
 import type { Step } from '../solve/stepper';
-import type { Scenario } from '../types';
+import type { BmsEvent, Scenario } from '../types';
 import { fillEvery, raiseHighest } from './fill-minutes';
 import { FAILURE_WORDS, VehicleRun } from './vehicle-run';
 import type { Standing, StepSink } from './step-sink';
@@ -14,6 +14,8 @@ export interface Outcome {
 	darkHours: number;
 	/** What the charger would have put in while the charge latch was open, but not more than the battery had room for, Ah. */
 	missedAh: number;
+	/** Each time a latch opened or closed, in order. */
+	events: readonly BmsEvent[];
 }
 
 /** Keeps the peak of what the BMS watches, the time in the dark, and of the cells a value each so many minutes. */
@@ -99,7 +101,8 @@ export class OutcomeRunner {
 			cutsOut: run.bms.events.some(({ side, kind }) => side === 'discharge' && kind === 'cut'),
 			peakSensorC: sink.findPeakSensorC(),
 			darkHours: this.sumDark(run, scenario),
-			missedAh: Math.min(run.refusedAh, (1 - run.soc) * scenario.battery.capacityAh)
+			missedAh: Math.min(run.refusedAh, (1 - run.soc) * scenario.battery.capacityAh),
+			events: run.bms.events
 		};
 	}
 

@@ -39,6 +39,8 @@ import { migration as m044 } from './044-mounts-cable';
 import { migration as m050 } from './050-batteries-without-bms';
 import { migration as m051 } from './051-assessments-chemistry';
 import { migration as m052 } from './052-jobs-chemistry';
+import { migration as m060 } from './060-pre-drill-checks';
+import { migration as m061 } from './061-recommendations-pre-drill';
 import type { Migration } from '../migrate';
 
 /** Every migration, in the order in which they run; each is one DDL step that may run again. */
@@ -83,5 +85,7 @@ export const migrations: Migration[] = [
 	m044,
 	m050,
 	m051,
-	m052
+	m052,
+	m060,
+	m061
 ];

@@ -15,6 +15,7 @@ import { Coefficient, initCoefficient } from './coefficient';
 import { Assessment, initAssessment } from './assessment';
 import { AssessmentOutlook, initAssessmentOutlook } from './assessment-outlook';
 import { RemedyList, initRemedyList } from './remedy-list';
+import { PreDrillCheck, initPreDrillCheck } from './pre-drill-check';
 import { Recommendation, initRecommendation } from './recommendation';
 import { Sheet, initSheet } from './sheet';
 import { Acknowledgement, initAcknowledgement } from './acknowledgement';
@@ -38,6 +39,7 @@ export {
 	Assessment,
 	AssessmentOutlook,
 	RemedyList,
+	PreDrillCheck,
 	Recommendation,
 	Sheet,
 	Acknowledgement,
@@ -62,6 +64,7 @@ const initialisers = [
 	initAssessment,
 	initAssessmentOutlook,
 	initRemedyList,
+	initPreDrillCheck,
 	initRecommendation,
 	initSheet,
 	initAcknowledgement,

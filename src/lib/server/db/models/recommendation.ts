@@ -5,7 +5,8 @@ import {
 	type InferCreationAttributes,
 	type Sequelize
 } from 'sequelize';
-import { flag, id, moment, optionalText, reference, writtenOnce } from './base';
+import type { PreDrillSnapshot } from '$lib/schemas/pre-drill';
+import { flag, id, moment, optionalJson, optionalText, reference, writtenOnce } from './base';
 
 export class Recommendation extends Model<
 	InferAttributes<Recommendation>,
@@ -18,6 +19,8 @@ export class Recommendation extends Model<
 	declare againstVerdict: boolean;
 	declare decidedBy: string | null;
 	declare reason: string | null;
+	/** The check before drilling as it stood; null for those that were made before there was one. */
+	declare preDrill: CreationOptional<PreDrillSnapshot | null>;
 	declare createdBy: number;
 	declare createdAt: CreationOptional<Date>;
 }
@@ -32,6 +35,7 @@ export function initRecommendation(sequelize: Sequelize): void {
 			againstVerdict: flag,
 			decidedBy: optionalText,
 			reason: optionalText,
+			preDrill: optionalJson,
 			createdBy: reference,
 			createdAt: moment
 		},

@@ -7,6 +7,7 @@ import { dayPlanOperations } from './day-plans';
 import { jobOperations } from './jobs';
 import { mountOperations } from './mounts';
 import { placeOperations } from './places';
+import { preDrillOperations } from './pre-drill';
 import { recommendationOperations } from './recommendations';
 import { remedyOperations } from './remedies';
 import { sheetOperations } from './sheets';
@@ -21,6 +22,7 @@ export const OPERATIONS: readonly Operation[] = [
 	batteryOperations,
 	placeOperations,
 	mountOperations,
+	preDrillOperations,
 	dayPlanOperations,
 	sheetOperations,
 	bookOperations,

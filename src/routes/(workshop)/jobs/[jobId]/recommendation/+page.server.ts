@@ -7,6 +7,7 @@ import { pageId } from '$lib/server/http/page-id';
 import { presentReport } from '$lib/server/presenters/reports';
 import { getAssessment, listMountOutcomes } from '$lib/server/services/assessments';
 import { getJob } from '$lib/server/services/jobs';
+import { snapshotPreDrill } from '$lib/server/services/pre-drill';
 import { makeRecommendation, newestRecommendation } from '$lib/server/services/recommendations';
 import type { Actions, PageServerLoad } from './$types';
 
@@ -17,9 +18,10 @@ async function loadChosen(person: SignedInPerson, jobId: number, asked: string |
 	if (assessment.jobId !== jobId) error(404, { message: 'There is no such assessment here.' });
 	const { id, mountId, mountLetter, mountName, chemistry, verdict, headroomK, isCurrent } = assessment;
 	const { sentence, maker } = presentReport(assessment);
+	const preDrill = await snapshotPreDrill(person, mountId);
 	return {
 		...{ id, mountId, mountLetter, mountName, chemistry, verdict, headroomK, isCurrent },
-		...{ sentence, maker }
+		...{ sentence, maker, preDrill }
 	};
 }
 

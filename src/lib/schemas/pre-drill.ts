@@ -1,0 +1,87 @@
+import { z } from 'zod';
+import { optionalWords, versionSchema, words } from './fields';
+import { PRE_DRILL_KEYS, type PreDrillQuestion } from './pre-drill-questions';
+
+/** It holds, it does not, or it does not arise here (which takes a word why). */
+export const PRE_DRILL_ANSWERS = ['holds', 'does-not', 'not-here'] as const;
+export type PreDrillWord = (typeof PRE_DRILL_ANSWERS)[number];
+
+export const PRE_DRILL_LABELS: Readonly<Record<PreDrillWord, string>> = {
+	holds: 'Yes',
+	'does-not': 'No',
+	'not-here': 'Does not arise'
+};
+
+export const NOTE_CHARS = 160;
+
+const preDrillAnswerSchema = z.object({
+	answer: z.enum(PRE_DRILL_ANSWERS, { error: 'Answer yes, no or does not arise.' }),
+	note: optionalWords('Note', NOTE_CHARS)
+});
+export type PreDrillAnswer = z.infer<typeof preDrillAnswerSchema>;
+
+/** What is missing beside an answer; null when nothing is. Only a plain yes stands without a word. */
+export function sayMissingNote(answer: PreDrillWord | '', note: string): string | null {
+	if (answer === '' || answer === 'holds' || note !== '') return null;
+	return answer === 'does-not' ? 'Say what is missing.' : 'Say why it does not arise here.';
+}
+
+/** The answers so far, by question. */
+export const preDrillAnswersSchema = z
+	.partialRecord(z.enum(PRE_DRILL_KEYS), preDrillAnswerSchema)
+	.superRefine((answers, context) => {
+		for (const [key, given] of Object.entries(answers)) {
+			const message = given ? sayMissingNote(given.answer, given.note) : null;
+			if (message) context.addIssue({ code: 'custom', path: [key, 'note'], message });
+		}
+	});
+export type PreDrillAnswers = z.infer<typeof preDrillAnswersSchema>;
+
+export const preDrillChangeSchema = z.object({ answers: preDrillAnswersSchema, version: versionSchema });
+export type PreDrillChange = z.infer<typeof preDrillChangeSchema>;
+
+/** A name under the answers as they stand. */
+export const preDrillSignatureSchema = z.object({ name: words('Your name', 120), version: versionSchema });
+export type PreDrillSignature = z.infer<typeof preDrillSignatureSchema>;
+
+/** What stands open before drilling, as it is printed. */
+export const openItemSchema = z.object({
+	key: z.string(),
+	label: z.string(),
+	state: z.enum(['unanswered', 'failed']),
+	note: z.string()
+});
+export type OpenItem = z.infer<typeof openItemSchema>;
+
+export const preDrillSchema = z.object({
+	mountId: z.number().int(),
+	questions: z.array(
+		z.object({
+			key: z.string(),
+			label: z.string(),
+			question: z.string(),
+			reason: z.string(),
+			photo: z.boolean(),
+			answer: z.enum(PRE_DRILL_ANSWERS).nullable(),
+			note: z.string()
+		})
+	),
+	open: z.array(openItemSchema),
+	signedBy: z.string().nullable(),
+	signedAt: z.iso.datetime().nullable(),
+	version: versionSchema
+});
+export type PreDrillView = z.infer<typeof preDrillSchema>;
+
+/** What a recommendation says of the check as it stood. */
+export const preDrillSnapshotSchema = preDrillSchema.pick({ open: true, signedBy: true, signedAt: true });
+export type PreDrillSnapshot = z.infer<typeof preDrillSnapshotSchema>;
+
+/** The questions that have no answer, and those whose answer is no. */
+export function findOpenItems(questions: readonly PreDrillQuestion[], answers: PreDrillAnswers): OpenItem[] {
+	return questions.flatMap(({ key, label }): OpenItem[] => {
+		const given = answers[key];
+		if (!given) return [{ key, label, state: 'unanswered', note: '' }];
+		return given.answer === 'does-not' ? [{ key, label, state: 'failed', note: given.note }] : [];
+	});
+}

@@ -1,0 +1,43 @@
+import {
+	Model,
+	type CreationOptional,
+	type InferAttributes,
+	type InferCreationAttributes,
+	type Sequelize
+} from 'sequelize';
+import type { PreDrillAnswers } from '$lib/schemas/pre-drill';
+import { edited, id, json, moment, optionalMoment, optionalText, reference, whole } from './base';
+
+/** What was asked before a hole was drilled, one a mount. */
+export class PreDrillCheck extends Model<
+	InferAttributes<PreDrillCheck>,
+	InferCreationAttributes<PreDrillCheck>
+> {
+	declare id: CreationOptional<number>;
+	declare workshopId: number;
+	declare mountId: number;
+	declare answers: PreDrillAnswers;
+	/** Who put a name under the answers as they stand; a later change takes it off. */
+	declare signedBy: CreationOptional<string | null>;
+	declare signedAt: CreationOptional<Date | null>;
+	declare version: CreationOptional<number>;
+	declare createdAt: CreationOptional<Date>;
+	declare updatedAt: CreationOptional<Date>;
+}
+
+export function initPreDrillCheck(sequelize: Sequelize): void {
+	PreDrillCheck.init(
+		{
+			id: id,
+			workshopId: reference,
+			mountId: reference,
+			answers: json,
+			signedBy: optionalText,
+			signedAt: optionalMoment,
+			version: { ...whole, defaultValue: 0 },
+			createdAt: moment,
+			updatedAt: moment
+		},
+		{ sequelize, tableName: 'pre_drill_checks', ...edited, modelName: 'PreDrillCheck' }
+	);
+}

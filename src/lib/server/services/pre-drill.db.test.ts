@@ -1,0 +1,102 @@
+import { describe, expect, it } from 'vitest';
+import { makeBareJob } from '../../../../tests/support/jobs';
+import { AGM_BATTERY, BATTERY } from '../../../../tests/support/records';
+import { makeCrew, useTestDatabase } from '../../../../tests/support/services';
+import { AuditEntry, Job } from '../db/models';
+import { createBattery } from './batteries';
+import { addMount } from './mounts';
+import { getPreDrill, savePreDrill, signPreDrill, snapshotPreDrill } from './pre-drill';
+
+useTestDatabase();
+
+async function makeMount(battery = BATTERY, positionKind: 'under-bonnet' | 'cabin' = 'under-bonnet') {
+	const crew = await makeCrew();
+	const { installer } = crew;
+	const jobId = await makeBareJob(installer);
+	const { id } = await createBattery(installer, battery);
+	await Job.update({ batteryRecordId: id }, { where: { id: jobId } });
+	const mount = await addMount(installer, jobId, { name: 'Left guard', positionKind });
+	return { crew, installer, mountId: mount.id, jobId };
+}
+const HOLDS = { answer: 'holds', note: '' } as const;
+const MISSING = { answer: 'does-not', note: 'No fuse at the starting battery.' } as const;
+
+describe('the check before drilling', () => {
+	it('asks by position and battery: gaps under the bonnet, fresh air for what gives off gas, a way out for gas inside', async () => {
+		const keysOf = async (...where: Parameters<typeof makeMount>) => {
+			const { installer, mountId } = await makeMount(...where);
+			return (await getPreDrill(installer, mountId)).questions.map(({ key }) => key);
+		};
+		const lithiumUnderBonnet = await keysOf();
+		expect(lithiumUnderBonnet).toContain('clearance');
+		expect(lithiumUnderBonnet).not.toContain('air');
+		expect(await keysOf(AGM_BATTERY)).toContain('air');
+		const inCabin = await keysOf(BATTERY, 'cabin');
+		expect(inCabin).toContain('failingCell');
+		expect(inCabin).not.toContain('clearance');
+	});
+
+	it('begins with everything open, and keeps answers with what is missing', async () => {
+		const { installer, mountId } = await makeMount();
+		const before = await getPreDrill(installer, mountId);
+		expect(before.open).toHaveLength(before.questions.length);
+		const answers = { behindPanel: HOLDS, fuse: MISSING };
+		const after = await savePreDrill(installer, mountId, { answers, version: before.version });
+		expect(after.open).toHaveLength(before.questions.length - 1);
+		expect(after.open.find(({ key }) => key === 'fuse')).toMatchObject({
+			state: 'failed',
+			note: MISSING.note
+		});
+		expect(await getPreDrill(installer, mountId)).toEqual(after);
+	});
+
+	it('is signed as it stands, and not any more once an answer is another', async () => {
+		const { installer, mountId } = await makeMount();
+		const saved = await savePreDrill(installer, mountId, { answers: { fuse: MISSING }, version: 0 });
+		const signed = await signPreDrill(installer, mountId, { name: 'Ida Fenn', version: saved.version });
+		expect(signed).toMatchObject({ signedBy: 'Ida Fenn', signedAt: expect.any(String) });
+		const same = await savePreDrill(installer, mountId, {
+			answers: { fuse: MISSING },
+			version: signed.version
+		});
+		expect(same.signedBy).toBe('Ida Fenn');
+		const changed = await savePreDrill(installer, mountId, {
+			answers: { fuse: HOLDS },
+			version: same.version
+		});
+		expect(changed).toMatchObject({ signedBy: null, signedAt: null });
+		const actions = await AuditEntry.findAll({ where: { subjectType: 'mount', subjectId: mountId } });
+		expect(actions.map(({ action }) => action)).toContain('mount.pre-drill-signed');
+	});
+
+	it('gives a recommendation what is open at that moment', async () => {
+		const { installer, mountId } = await makeMount();
+		await savePreDrill(installer, mountId, { answers: { fuse: MISSING }, version: 0 });
+		const { open, signedBy } = await snapshotPreDrill(installer, mountId);
+		expect(open.filter(({ state }) => state === 'failed').map(({ key }) => key)).toEqual(['fuse']);
+		expect(signedBy).toBeNull();
+	});
+
+	it.each([
+		['what is not asked here', { air: HOLDS }, 0, 'invalid_input'],
+		['an older version', { fuse: HOLDS }, 3, 'changed_meanwhile']
+	])('refuses %s', async (_, answers, version, code) => {
+		const { installer, mountId } = await makeMount();
+		await expect(savePreDrill(installer, mountId, { answers, version })).rejects.toMatchObject({ code });
+	});
+
+	it('cannot be signed empty, nor asked before the battery is known', async () => {
+		const { installer, mountId, jobId } = await makeMount();
+		await expect(signPreDrill(installer, mountId, { name: 'Ida', version: 0 })).rejects.toMatchObject({
+			code: 'conflict'
+		});
+		await Job.update({ batteryRecordId: null }, { where: { id: jobId } });
+		await expect(getPreDrill(installer, mountId)).rejects.toMatchObject({ code: 'conflict' });
+	});
+
+	it('is not there for another workshop', async () => {
+		const { mountId } = await makeMount();
+		const { installer } = await makeCrew();
+		await expect(getPreDrill(installer, mountId)).rejects.toMatchObject({ code: 'not_found' });
+	});
+});

@@ -1,0 +1,117 @@
+import { isDeepStrictEqual } from 'node:util';
+import type { Transaction } from 'sequelize';
+import type { SignedInPerson } from '$lib/schemas/people';
+import {
+	findOpenItems,
+	type PreDrillAnswers,
+	type PreDrillChange,
+	type PreDrillSignature,
+	type PreDrillSnapshot,
+	type PreDrillView
+} from '$lib/schemas/pre-drill';
+import { preDrillQuestionsFor, type PreDrillQuestion } from '$lib/schemas/pre-drill-questions';
+import { BatteryRecord, Job, Mount, PreDrillCheck } from '../db/models';
+import { inTransaction } from '../db/transaction';
+import { AppError, notFound } from '../errors';
+import { allow } from '../policies';
+import { presentPreDrill, presentSnapshot } from '../presenters/pre-drill';
+import { recordBy } from './audit';
+import { saveVersioned } from './records';
+
+const NO_BATTERY = 'The questions depend on the battery: choose the battery of the job first.';
+
+interface Asked {
+	mount: Mount;
+	questions: PreDrillQuestion[];
+}
+
+async function findAsked(person: SignedInPerson, mountId: number): Promise<Asked> {
+	const where = { id: mountId, workshopId: person.workshopId, removedAt: null };
+	const mount = await Mount.findOne({ where });
+	if (!mount) throw notFound('mount');
+	const job = await Job.findByPk(mount.jobId, { attributes: ['batteryRecordId'] });
+	const battery = job?.batteryRecordId ? await BatteryRecord.findByPk(job.batteryRecordId) : null;
+	if (!battery) throw new AppError('conflict', NO_BATTERY);
+	const { chemistry, capacityAh } = battery;
+	return {
+		mount,
+		questions: preDrillQuestionsFor({ positionKind: mount.positionKind, chemistry, capacityAh })
+	};
+}
+
+const findCheck = (mountId: number): Promise<PreDrillCheck | null> =>
+	PreDrillCheck.findOne({ where: { mountId } });
+
+/** The questions before drilling for a mount, with the answers so far. */
+export async function getPreDrill(person: SignedInPerson, mountId: number): Promise<PreDrillView> {
+	allow(person, 'jobs.read');
+	const { questions } = await findAsked(person, mountId);
+	return presentPreDrill(mountId, questions, await findCheck(mountId));
+}
+
+/** The row of a mount, made when there is none yet. */
+async function holdCheck(
+	{ id: mountId, workshopId }: Mount,
+	transaction: Transaction
+): Promise<PreDrillCheck> {
+	const [check] = await PreDrillCheck.findOrCreate({
+		where: { mountId },
+		defaults: { workshopId, mountId, answers: {} },
+		transaction
+	});
+	return check;
+}
+
+function refuseUnasked(questions: readonly PreDrillQuestion[], answers: PreDrillAnswers): void {
+	const asked = new Set(questions.map(({ key }) => key));
+	const problems = Object.keys(answers)
+		.filter((key) => !asked.has(key))
+		.map((key) => ({ path: `answers.${key}`, message: 'This is not asked for this position and battery.' }));
+	if (problems.length > 0) throw new AppError('invalid_input', problems[0]!.message, problems);
+}
+
+/** Keeps the answers. What was signed is not signed any more once an answer is another. */
+export async function savePreDrill(
+	person: SignedInPerson,
+	mountId: number,
+	{ answers, version }: PreDrillChange
+): Promise<PreDrillView> {
+	allow(person, 'mounts.write');
+	return inTransaction(async (transaction) => {
+		const { mount, questions } = await findAsked(person, mountId);
+		refuseUnasked(questions, answers);
+		const check = await holdCheck(mount, transaction);
+		const unsigned = isDeepStrictEqual(check.answers, answers) ? {} : { signedBy: null, signedAt: null };
+		await saveVersioned(check, 'check', version, { answers, ...unsigned }, transaction);
+		const subject = { type: 'mount', id: mountId };
+		await recordBy(person, 'mount.pre-drill', subject, transaction, { answers });
+		return presentPreDrill(mountId, questions, check);
+	});
+}
+
+/** Puts a name and the time under the answers as they stand, open ones included. */
+export async function signPreDrill(
+	person: SignedInPerson,
+	mountId: number,
+	{ name, version }: PreDrillSignature
+): Promise<PreDrillView> {
+	allow(person, 'mounts.write');
+	return inTransaction(async (transaction) => {
+		const { mount, questions } = await findAsked(person, mountId);
+		const check = await holdCheck(mount, transaction);
+		if (Object.keys(check.answers).length === 0) {
+			throw new AppError('conflict', 'Nothing is answered yet: there is nothing to sign.');
+		}
+		await saveVersioned(check, 'check', version, { signedBy: name, signedAt: new Date() }, transaction);
+		const open = findOpenItems(questions, check.answers).map(({ key }) => key);
+		const subject = { type: 'mount', id: mountId };
+		await recordBy(person, 'mount.pre-drill-signed', subject, transaction, { name, open });
+		return presentPreDrill(mountId, questions, check);
+	});
+}
+
+/** What a recommendation for the mount says of its check: as it stands at this moment. */
+export async function snapshotPreDrill(person: SignedInPerson, mountId: number): Promise<PreDrillSnapshot> {
+	const { questions } = await findAsked(person, mountId);
+	return presentSnapshot(questions, await findCheck(mountId));
+}

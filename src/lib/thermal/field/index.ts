@@ -1,0 +1,14 @@
+/** What is noted in the field, held against the model. */
+export { toReferenceTemperature, type CapacityTest } from './capacity-tests';
+export {
+	projectCapacity,
+	type CapacityTrend,
+	type Projection,
+	type TrendLaw,
+	type YearsRange
+} from './capacity-trend';
+export { weighReport, type CutOutReport } from './cut-out-report';
+export { learnFrom, type Belief, type LearntUnknown, type Learning, type ReadingDay } from './learn';
+export { OTHER_CAUSES, type RankedCause } from './other-causes';
+export { READING_PLACES, weighReading, type FieldReading, type ReadingPlace } from './readings';
+export { weighHeat, type HeatCause, type HourRange } from './was-it-heat';

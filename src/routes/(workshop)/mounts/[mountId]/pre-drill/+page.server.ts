@@ -1,0 +1,65 @@
+import { preDrillSignatureSchema, type PreDrillView } from '$lib/schemas/pre-drill';
+import { fromPreDrillForm, preDrillFormSchema, toPreDrillForm } from '$lib/schemas/pre-drill-form';
+import { saveEdited } from '$lib/server/http/edit-form';
+import { loadForm, saveForm } from '$lib/server/http/forms';
+import { guard, orPageError } from '$lib/server/http/guard';
+import { pageId } from '$lib/server/http/page-id';
+import { getJob } from '$lib/server/services/jobs';
+import { getPreDrill, savePreDrill, signPreDrill } from '$lib/server/services/pre-drill';
+import { openMount } from '../open-mount';
+import type { Actions, PageServerLoad } from './$types';
+
+function answersOf({ questions }: PreDrillView) {
+	return Object.fromEntries(
+		questions.flatMap(({ key, answer, note }) => (answer ? [[key, { answer, note }] as const] : []))
+	);
+}
+
+export const load: PageServerLoad = async (event) => {
+	const person = guard(event, 'mounts.write');
+	const mount = await openMount(person, event.params);
+	const check = await orPageError(getPreDrill(person, mount.id));
+	const job = await orPageError(getJob(person, mount.jobId));
+	const { version } = check;
+	const assessmentId = job.standings.find(({ mountId }) => mountId === mount.id)?.assessmentId ?? null;
+	return {
+		...{ mount, check, assessmentId },
+		job: { id: job.id, number: job.number, chemistry: job.battery?.chemistry ?? '' },
+		form: await loadForm(preDrillFormSchema, { version, ...toPreDrillForm(answersOf(check)) }),
+		signature: await loadForm(preDrillSignatureSchema, { version, name: person.name }),
+		isSaved: event.url.searchParams.has('saved'),
+		isSigned: event.url.searchParams.has('signed')
+	};
+};
+
+export const actions: Actions = {
+	save: (event) => {
+		const mountId = pageId(event.params.mountId);
+		return saveEdited(event, {
+			action: 'mounts.write',
+			schema: preDrillFormSchema,
+			save: async (person, form) => {
+				await savePreDrill(person, mountId, {
+					answers: fromPreDrillForm(form),
+					version: form.version as number
+				});
+				return `/mounts/${mountId}/pre-drill?saved`;
+			},
+			newest: async (person) => {
+				const check = await getPreDrill(person, mountId);
+				return { version: check.version, ...toPreDrillForm(answersOf(check)) };
+			}
+		});
+	},
+	sign: (event) => {
+		const mountId = pageId(event.params.mountId);
+		return saveForm(event, {
+			action: 'mounts.write',
+			schema: preDrillSignatureSchema,
+			save: async (person, signature) => {
+				await signPreDrill(person, mountId, signature);
+				return `/mounts/${mountId}/pre-drill?signed`;
+			}
+		});
+	}
+};
