@@ -193,5 +193,7 @@ test('the customer signs in, finds their own page and nobody else’s', async ({
 		.click();
 	await expect(page.getByRole('heading', { level: 1, name: 'Rides it out' })).toBeVisible();
 	await expect(page.getByText(/Acknowledged by Odile Vantongeren/)).toBeVisible();
+	const pdf = await page.pdf({ format: 'A4', printBackground: false, preferCSSPageSize: true });
+	expect(pdf.toString('latin1').match(/\/Type\s*\/Page\b/g)).toHaveLength(1);
 	expect((await page.request.get('/jobs')).status()).toBe(403);
 });

@@ -1,3 +1,4 @@
+import { CLOSE_HEADROOM_K } from '../thermal/assess';
 import type { LeadAcidFigures } from '../thermal/assess/types';
 import { formatKelvin, formatTemperature } from './numbers';
 import { A_MOMENT_H, formatClockHour, formatHours, sayAgainstCamp, sayHours } from './time';
@@ -31,7 +32,7 @@ function sayBearsIt({ leadAcid, verdict, ...facts }: HeatFacts, audience: Audien
 	}
 	const limit = formatTemperature(leadAcid.useLimitC);
 	const peak = `at ${at} the cells reach ${formatTemperature(peakCellsC)}, ${formatKelvin(headroomK)} short of the ${limit} that it may have in use`;
-	return isClose
+	return isClose && headroomK < CLOSE_HEADROOM_K
 		? `The battery bears the day, but only just: ${peak}.`
 		: `The battery bears the day: ${peak}.`;
 }

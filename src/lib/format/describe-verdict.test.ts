@@ -72,6 +72,15 @@ describe('a day that the battery gets through', () => {
 		);
 	});
 
+	it('says that it is the charge that it runs close with, where there is room for more heat', () => {
+		const facts = { ...MILD_DAY, verdict: 'runs-close', headroomK: 18.3, peakCellsC: 46.7 } as const;
+		const missed = { ...facts, chargeMissedAh: 63, chargeMissedHours: 5 };
+		expect(say(missed)).toBe(
+			'The fridge stays on all day, but the heat keeps the battery from charging as it should. The cells are hottest with 47 °C at 17:03, 18.3 K short of going dark. Heat stops the charging for five hours: 63 Ah missed.'
+		);
+		expect(say(missed, 'customer')).toMatch(/^The fridge stays on all day, but the heat keeps the battery/);
+	});
+
 	it('says what heat kept out of the battery', () => {
 		const words = say({ ...MILD_DAY, verdict: 'runs-close', chargeMissedAh: 31.2, chargeMissedHours: 2.4 });
 		expect(words).toMatch(/Heat stops the charging for two and a half hours: 31 Ah missed\.$/);
@@ -114,7 +123,7 @@ describe('a battery that nothing switches off', () => {
 		const close = { ...tooHot, verdict: 'runs-close', headroomK: 8, peakCellsC: 52 } as const;
 		const charged = { ...cooler, hoursAboveChargeLimit: 1.5, peakChargingC: 52 };
 		expect(say({ ...close, leadAcid: charged })).toBe(
-			'The battery bears the day, but only just: at 17:03 the cells reach 52 °C, 8.0 K short of the 60 °C that it may have in use. For 1 h 30 min it is charged above 50 °C, at up to 52 °C.'
+			'The battery bears the day: at 17:03 the cells reach 52 °C, 8.0 K short of the 60 °C that it may have in use. For 1 h 30 min it is charged above 50 °C, at up to 52 °C.'
 		);
 		expect(say({ ...close, leadAcid: charged }, 'customer')).toContain(
 			'For an hour and a half it is charged hotter than its maker allows'

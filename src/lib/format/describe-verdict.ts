@@ -1,6 +1,7 @@
 import { describeHeat } from './describe-heat';
 import { formatAmpHours, formatKelvin, formatTemperature } from './numbers';
 import { A_MOMENT_H, formatClockHour, formatHours, sayAgainstCamp, sayHours } from './time';
+import { CLOSE_HEADROOM_K } from '../thermal/assess';
 import { formatVerdict } from './verdict';
 import type { Audience, VerdictFacts } from './verdict-facts';
 
@@ -27,10 +28,19 @@ function sayCutOut(facts: VerdictFacts): string {
 	return `The fridge goes dark at ${formatClockHour(cutAtHour)}${camp}${camp ? ',' : ''} ${ending}.`;
 }
 
+function sayKeptFromCharge({ headroomK, peakCellsC, peakAtHour }: VerdictFacts, audience: Audience): string {
+	const stays = 'The fridge stays on all day, but the heat keeps the battery from charging as it should';
+	if (audience === 'customer') return `${stays}.`;
+	const peak = `${formatTemperature(peakCellsC)} at ${formatClockHour(peakAtHour)}`;
+	return `${stays}. The cells are hottest with ${peak}, ${formatKelvin(headroomK)} short of going dark.`;
+}
+
 function sayStaysOn(facts: VerdictFacts, audience: Audience): string {
 	const { verdict, headroomK, peakCellsC, peakAtHour } = facts;
 	const isClose = verdict === 'runs-close';
 	const at = formatClockHour(peakAtHour);
+	// Far from its cut-off, what makes it close is the charge that heat keeps from it.
+	if (isClose && headroomK >= CLOSE_HEADROOM_K) return sayKeptFromCharge(facts, audience);
 	if (audience === 'customer') {
 		return isClose
 			? `The fridge stays on, but only just: at ${at} the battery is close to switching itself off.`

@@ -16,6 +16,7 @@ const PART_WORDS: Record<AssessedPart, string> = {
 	'hot-day': 'the hot day',
 	touring: 'the months or the days on the road',
 	'day-plan': 'the day plan',
+	cable: 'the proposed cable or fuse',
 	survey: 'the survey',
 	book: 'the coefficient book',
 	engine: 'the engine'

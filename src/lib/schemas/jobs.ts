@@ -116,7 +116,7 @@ export type JobPage = z.infer<typeof jobPageSchema>;
 
 /** What an assessment rests on, and what may have changed since. */
 export const ASSESSED_PARTS = [
-	...(['vehicle', 'battery', 'place', 'hot-day', 'touring', 'day-plan', 'survey'] as const),
+	...(['vehicle', 'battery', 'place', 'hot-day', 'touring', 'day-plan', 'survey', 'cable'] as const),
 	...(['book', 'engine'] as const)
 ] as const;
 export type AssessedPart = (typeof ASSESSED_PARTS)[number];

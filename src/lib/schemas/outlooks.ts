@@ -106,6 +106,7 @@ export const outlookSchema = z.object({
 			beyondTests: z.array(z.string())
 		})
 		.nullable(),
+	lifeProblem: z.string().nullable(),
 	cable: z
 		.object({
 			airC: tempC,
@@ -125,7 +126,8 @@ export const outlookSchema = z.object({
 				})
 			)
 		})
-		.nullable()
+		.nullable(),
+	cableProblem: z.string().nullable()
 }) as unknown as z.ZodType<Outlook, Outlook>;
 
 /** How far the work on an outlook is. */

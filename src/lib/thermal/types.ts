@@ -251,5 +251,7 @@ export type SimulationResult =
 			minutes: MinuteSeries;
 			/** What the charger would have put in while the charge latch was open, Ah. */
 			chargeRefusedAh: number;
+			/** As much of it as the battery would have had room for, tapering as it fills, Ah. */
+			chargeMissedAh: number;
 	  }
 	| { status: 'failed'; reason: string; atHour: number; steps: number; evaluations: number };

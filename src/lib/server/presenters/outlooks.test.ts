@@ -29,7 +29,7 @@ const made: Outlook = finishOutlook({
 	offers: [],
 	moneyPerHour: 100,
 	cable: { ...CABLE, continuousA: 40, nominalV: 12.8, acceptedDrop: 0.04 },
-	hottestAirC: 70,
+	limits: null,
 	seed: 7,
 	effort: LIGHT,
 	mostCutOutShare: 0.05
@@ -46,7 +46,9 @@ type Changes = { [Part in keyof Outlook]?: Partial<Outlook[Part]> };
 function present(changes: Changes = {}, inputs: Partial<AssessmentInputs> = {}) {
 	const parts = Object.entries(changes).map(([part, change]) => [
 		part,
-		change && { ...(made[part as keyof Outlook] as object), ...(change as object) }
+		change !== null && typeof change === 'object'
+			? { ...(made[part as keyof Outlook] as object), ...(change as object) }
+			: change
 	]);
 	const outlook = { ...made, ...Object.fromEntries(parts) } as Outlook;
 	const told = presentOutlook({
@@ -162,11 +164,22 @@ describe('what it would take', () => {
 		const least = set(['wrap', 'duct'], 9.26, {
 			...{ cost: 170, hours: 2.5, verdict: 'rides-it-out', cutOutShare: 0.03 }
 		});
-		const { remedies } = present({ remedies: { least, front: [set(['wrap'], 4), least] } });
+		const asPlanned = set([], 0, { verdict: 'runs-close', cutOutShare: 0.2 });
+		const { remedies } = present({ remedies: { asPlanned, least, front: [set(['wrap'], 4), least] } });
 		expect(remedies.sentence).toBe(
-			'The least that brings it to “rides it out”, dark on at most 1 of 20 days like this: reflective wrap and fresh-air duct. That is 9.3 K cooler, parts for 170 and 2 h 30 min of work, together about 420; dark on about 1 of 20.'
+			'The least that brings it to “rides it out”, dark on at most 1 of 20 days like this: reflective wrap and fresh-air duct. That is 9.3 K cooler, parts 170, work 2 h 30 min, together about 420; dark on about 1 of 20.'
 		);
 		expect(remedies.front.map(({ isLeast }) => isLeast)).toEqual([false, true]);
+	});
+
+	it('says of what rides the planned day out already that it is dark too often, and of what costs nothing that it does', () => {
+		const asPlanned = set([], 0, { verdict: 'rides-it-out', cutOutShare: 0.1 });
+		const least = set(['bonnetUp'], 0.8, { cost: 0, hours: 0, verdict: 'rides-it-out', cutOutShare: 0.04 });
+		const { remedies } = present({ remedies: { asPlanned, least } });
+		expect(remedies.sentence).toMatch(
+			/^As planned it rides the day out, but is dark on about 2 of 20 days like it\./
+		);
+		expect(remedies.sentence).toContain('That is 0.8 K cooler, and costs nothing;');
 	});
 
 	it('says when nothing suffices, and what comes nearest', () => {
@@ -208,7 +221,7 @@ describe('the envelope', () => {
 		const planned = { points, plannedHours: 4, triedC: [10, 56] as [number, number] };
 		const { envelope } = present({ envelope: { ...planned, plannedMaxC: 46 } });
 		expect(envelope.sentence).toBe(
-			'With 4 h of driving it rides out days of up to about 44 °C (40 °C to 48 °C). The planned day has 46 °C, 2 K above it.'
+			'With 4 h of driving it rides out, not even close and charging as it should, days of up to about 44 °C (40 °C to 48 °C). The planned day has 46 °C, 2 K above it.'
 		);
 		expect(envelope.rows[1]).toEqual({ drive: '8 h', limit: 'about 36 °C', range: 'below 10 °C to 40 °C' });
 	});
@@ -238,7 +251,7 @@ describe('the life', () => {
 
 	it('runs from the first to the last of the models to four fifths', () => {
 		const life = { ...made.life!, years };
-		expect(sayWornAfter(life)).toBe('2 to 3 years or more');
+		expect(sayWornAfter(life)).toBe('2 to more than 3 years');
 		expect(sayWornAfter({ ...life, lifeYears: { low: 2.2, middle: 3, high: 4.4 } })).toBe('2 to 4 years');
 		expect(sayWornAfter({ ...life, years: [] })).toBe('');
 	});
@@ -263,8 +276,17 @@ describe('cable and fuse', () => {
 		expect(cable!.findings).toHaveLength(5);
 		expect(cable!.findings[0]).toMatchObject({ value: '40.0 A', holds: true });
 		expect(cable!.findings[0]!.source).toMatch(/Current ≤ .*IEC 60364-5-52.*\(from memory\)/);
-		expect(cable!.air).toContain('Held against 70 °C');
+		expect(cable!.air).toMatch(/^Held against \d+ °C, the hottest air/);
 		expect(cable!.deference).toContain('makers’ own curves');
+	});
+
+	it('do not belong where the air gets hotter than the formulas are for', () => {
+		const told = present({
+			cable: null as never,
+			cableProblem: 'airC is 130: it must be within -40 to 125.' as never
+		});
+		expect(told.cable).toMatchObject({ findings: [], air: expect.stringContaining('130') });
+		expect(told.cable!.sentence).toContain('do not belong there');
 	});
 
 	it('say what follows when a check does not hold', () => {

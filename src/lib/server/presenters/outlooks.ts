@@ -23,14 +23,14 @@ export function presentOutlook({ inputs, outlook, year, elsewhere = [] }: Outloo
 	const words = eventWordsOf(inputs.battery.chemistry);
 	const chance = presentChance(outlook.day, words);
 	const days = presentYear(outlook.year, year, words, inputs.place.name);
-	const life = presentLife(outlook.life, elsewhere);
+	const life = presentLife(outlook.life, outlook.lifeProblem, elsewhere);
 	return {
 		...{ chance, life },
 		year: days,
-		measure: presentMeasure(outlook.influences),
+		measure: presentMeasure(outlook.influences, outlook.day),
 		remedies: presentRemedies(outlook.remedies, words),
 		envelope: presentEnvelope(outlook.envelope),
-		cable: presentCable(outlook.cable, inputs.cable),
+		cable: presentCable(outlook, inputs.cable),
 		figures: [
 			{
 				label: `${words.adjective.charAt(0).toUpperCase()}${words.adjective.slice(1)} on days like this`,

@@ -23,9 +23,12 @@ function sayReturn({ darkSpans, resetAtHour }: AssessmentResult, autoReset: bool
 	return { label, value: 'not within the plan', ...(note ? { note } : {}) };
 }
 
+/** Less would be written as 0.0 Ah. */
+const LEAST_MISSED_AH = 0.05;
+
 function sayMissed({ chargeMissedAh }: AssessmentResult, chargeCutC: number): ReportLine {
 	const label = 'Charge missed';
-	if (chargeMissedAh <= 0) return { label, value: 'none' };
+	if (chargeMissedAh < LEAST_MISSED_AH) return { label, value: 'none' };
 	return {
 		label,
 		value: formatAmpHours(chargeMissedAh),

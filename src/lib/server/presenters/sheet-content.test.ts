@@ -51,7 +51,9 @@ const BESIDE = {
 		day: { cutOutShare: 0.55 },
 		year: { year: { low: 4, middle: 9, high: 16 } },
 		remedies: { least: null, moneyPerHour: 100 },
-		life: null
+		envelope: { points: [], plannedHours: 8, triedC: [10, 56] },
+		influences: { ranking: [] },
+		...{ life: null, lifeProblem: null, cable: null, cableProblem: null }
 	} as unknown as SheetSource['beside']['outlook'],
 	year: { months: [], daysOnRoad: [48], basis: '' },
 	elsewhere: []

@@ -21,6 +21,7 @@ function write(
 		least?: RemedySet | null;
 		life?: ExpectedLife | null;
 		moneyPerHour?: number;
+		beside?: Partial<Outlook>;
 	} = {},
 	more: Partial<SheetBeside> = {}
 ) {
@@ -29,7 +30,11 @@ function write(
 		day: { cutOutShare: share },
 		year: { year: { low: 4, middle: 9, high: 16 } },
 		remedies: { least, moneyPerHour },
-		life
+		envelope: { points: [], plannedHours: 8, triedC: [10, 56] },
+		influences: { ranking: [] },
+		...{ cable: null, cableProblem: null, lifeProblem: null },
+		life,
+		...changes.beside
 	} as unknown as Outlook;
 	const year = {
 		months: Array.from({ length: 12 }, () => ({ meanMaxC: 30, spreadK: 3 })),
@@ -48,6 +53,8 @@ describe('what the customer reads beside the answer', () => {
 		expect(write()[0]).toBe(
 			'On about 11 of 20 days like this the fridge goes dark. For somebody with 48 days a year on the road around Salt Lake that is 9 (4 to 16) days a year. In brackets is how far that may be off.'
 		);
+		const [rarely] = write({ beside: { year: { year: { low: 0, middle: 0.1, high: 0.3 } } as never } });
+		expect(rarely).not.toContain('brackets');
 		expect(write({ share: 0 })[0]).toMatch(/^On fewer than 1 of 20 days like this/);
 	});
 
@@ -62,7 +69,24 @@ describe('what the customer reads beside the answer', () => {
 
 	it('says when nothing is needed, and when nothing here is enough', () => {
 		expect(write({ least: set({ keys: [] }) })[1]).toBe('Nothing more is needed for a day like this.');
-		expect(write({ least: null })[1]).toContain('Another position would be.');
+		expect(write({ least: null })[1]).toContain('Ask us about another position.');
+	});
+
+	it('is how hot a day it bears, whether cable and fuse suit, and what would tell more', () => {
+		const point = { driveHours: 8, lowC: 36, middleC: 39, highC: 42 };
+		const finding = { check: 'fuse holds the current', holds: false, value: 40, limit: 30, unit: 'A' };
+		const beside = {
+			envelope: { points: [point], plannedHours: 8, triedC: [10, 56] },
+			cable: { findings: [finding] },
+			influences: { ranking: [{ label: 'how hot the exhaust gets' }] }
+		} as unknown as Partial<Outlook>;
+		expect(write({ beside }).slice(3)).toEqual([
+			'With as much driving as planned it is well within its limits on days of up to about 39 °C.',
+			'As proposed they do not suit the heat there; we will change them.',
+			'Above all how hot the exhaust gets.'
+		]);
+		const tooHot = { cableProblem: 'airC is 130: it must be within -40 to 125.' } as Partial<Outlook>;
+		expect(write({ beside: tooHot })[3]).toContain('do not suit');
 	});
 
 	it('is how long the battery lasts, here and elsewhere', () => {

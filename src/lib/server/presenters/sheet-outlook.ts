@@ -1,7 +1,8 @@
-import { formatNumber } from '$lib/format/numbers';
+import { formatNumber, formatTemperature } from '$lib/format/numbers';
 import { hasBms } from '$lib/schemas/batteries';
 import type { SheetContent } from '$lib/schemas/sheets';
 import type { Outlook } from '$lib/schemas/outlooks';
+import { limitAt } from './outlook/envelope';
 import { sayWornAfter, type LifeElsewhere } from './outlook/life';
 import { nameRemedies, sumMoney } from './outlook/remedies';
 import { joinWords, sayDayCount, sayDaysLikeThis, sayOfTwenty } from '$lib/format/outlook-words';
@@ -24,10 +25,11 @@ const happensTo = (chemistry: string): string =>
 
 function sayHowOften({ outlook, year, chemistry, placeName }: SheetBeside): Line {
 	const happens = happensTo(chemistry);
-	const onRoad = year.daysOnRoad.reduce((sum, days) => sum + days, 0);
+	const onRoad = year.daysOnRoad.reduce((sum, each) => sum + each, 0);
+	const days = sayDayCount(outlook.year.year);
 	return {
 		label: 'How often',
-		text: `${sayDaysLikeThis(outlook.day.cutOutShare)} ${happens}. For somebody with ${formatNumber(onRoad)} days a year on the road around ${placeName} that is ${sayDayCount(outlook.year.year)} a year. In brackets is how far that may be off.`
+		text: `${sayDaysLikeThis(outlook.day.cutOutShare)} ${happens}. For somebody with ${formatNumber(onRoad)} days a year on the road around ${placeName} that is ${days} a year.${days.includes('(') ? ' In brackets is how far that may be off.' : ''}`
 	};
 }
 
@@ -40,7 +42,10 @@ function sayWhatHelps({ outlook: { remedies }, chemistry }: SheetBeside): Line {
 	const label = 'What would make it safer';
 	const { least, moneyPerHour } = remedies;
 	if (least === null)
-		return { label, text: 'Nothing that we tried in this position is enough. Another position would be.' };
+		return {
+			label,
+			text: 'Nothing that we tried in this position is enough. Ask us about another position.'
+		};
 	if (least.keys.length === 0) return { label, text: 'Nothing more is needed for a day like this.' };
 	const money = sumMoney(least, moneyPerHour);
 	const price =
@@ -64,7 +69,32 @@ function sayLife({ outlook: { life }, elsewhere }: SheetBeside): Line[] {
 	return [{ label, text }];
 }
 
-/** What the estimate says beside its number, for the customer: how often, what would help, how long it lasts. */
+function sayHowHot({ outlook: { envelope } }: SheetBeside): Line[] {
+	const { points, plannedHours, triedC } = envelope;
+	const limitC = limitAt(points, plannedHours)?.middleC ?? null;
+	if (limitC === null || limitC >= triedC[1]) return [];
+	const text = `With as much driving as planned it is well within its limits on days of up to about ${formatTemperature(limitC)}.`;
+	return [{ label: 'How hot a day', text }];
+}
+
+function sayCable({ outlook: { cable, cableProblem } }: SheetBeside): Line[] {
+	if (cable === null && cableProblem === null) return [];
+	const holds = cable?.findings.every((finding) => finding.holds) ?? false;
+	const text = holds
+		? 'As proposed they suit the heat there.'
+		: 'As proposed they do not suit the heat there; we will change them.';
+	return [{ label: 'Cable and fuse', text }];
+}
+
+function sayMeasure({ outlook: { influences } }: SheetBeside): Line[] {
+	const [first] = influences.ranking;
+	return first ? [{ label: 'What would tell us more', text: `Above all ${first.label}.` }] : [];
+}
+
+/** What the estimate says beside its number, for the customer, in plain words. */
 export function writeSheetOutlook(beside: SheetBeside): Line[] {
-	return [sayHowOften(beside), sayWhatHelps(beside), ...sayLife(beside)];
+	return [
+		...[sayHowOften(beside), sayWhatHelps(beside), ...sayLife(beside)],
+		...[...sayHowHot(beside), ...sayCable(beside), ...sayMeasure(beside)]
+	];
 }

@@ -33,7 +33,7 @@ async function findAssessment(person: SignedInPerson, assessmentId: number): Pro
 	return assessment;
 }
 
-/** Whether assessing its mount now would run the very same scenario on the same engine, and judge it by the same limits. */
+/** Whether assessing its mount now would run the very same scenario on the same engine, with the same year, cable and limits. */
 async function isCurrent(person: SignedInPerson, assessment: Assessment): Promise<boolean> {
 	if (assessment.engineVersion !== ENGINE_VERSION) return false;
 	const { workshopId } = person;
@@ -42,8 +42,13 @@ async function isCurrent(person: SignedInPerson, assessment: Assessment): Promis
 	const parts = await findJobParts(await findJob(person, assessment.jobId));
 	if (!isAssessable(parts, mount)) return false;
 	const now = gatherInputs(parts, mount, await bookInForce(person));
-	const judged = ({ scenario, battery }: AssessmentInputs): string =>
-		canonicalJson({ scenario, limits: heatLimitsOf(battery) });
+	// Beside what an older assessment did not keep there is nothing to compare.
+	const withYear = assessment.inputs.touring !== undefined;
+	const judged = ({ scenario, battery, cable, touring }: AssessmentInputs): string =>
+		canonicalJson({
+			...{ scenario, limits: heatLimitsOf(battery), cable: cable ?? null },
+			...(withYear && touring ? { months: touring.months, daysOnRoad: touring.daysOnRoad } : {})
+		});
 	return judged(now) === judged(assessment.inputs);
 }
 

@@ -37,16 +37,17 @@ function cableOf({ cable, dayPlan }: AssessmentInputs): OutlookRequest['cable'] 
 }
 
 async function requestFor(assessment: Assessment, effort: OutlookEffort): Promise<OutlookRequest> {
-	const { id, workshopId, inputs, result } = assessment;
+	const { id, workshopId, inputs } = assessment;
+	const limits = heatLimitsOf(inputs.battery);
 	const { moneyPerHour, offers } = await remedyListOf(workshopId);
 	return {
-		scenario: watchUseLimit(parseScenario(inputs.scenario), heatLimitsOf(inputs.battery)),
+		scenario: watchUseLimit(parseScenario(inputs.scenario), limits),
+		limits,
 		year: touringOf(inputs),
 		wear: wearOf(inputs.battery),
 		offers: offers.map(({ key, cost, hours, offered }) => ({ key, cost, hours, offered })),
 		moneyPerHour,
 		cable: cableOf(inputs),
-		hottestAirC: Math.max(...result.curves.airC),
 		// Any number does; the assessment's own gives the same digits each time.
 		seed: id,
 		effort,

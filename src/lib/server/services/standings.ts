@@ -1,6 +1,7 @@
 import { Op, col, fn } from 'sequelize';
 import type { AssessmentInputs } from '$lib/schemas/assessments';
 import { batteryInputSchema } from '$lib/schemas/batteries';
+import { cableInputSchema } from '$lib/schemas/cables';
 import { dayPlanInputSchema } from '$lib/schemas/day-plans';
 import type { AssessedPart, MountStanding } from '$lib/schemas/jobs';
 import { hotDayFields } from '$lib/schemas/places';
@@ -63,6 +64,12 @@ const PARTS: readonly Part[] = [
 		fields: Object.keys(dayPlanInputSchema.shape).filter((field) => field !== 'name'),
 		then: (inputs) => inputs.dayPlan,
 		now: ({ dayPlan }) => dayPlan
+	},
+	{
+		part: 'cable',
+		fields: Object.keys(cableInputSchema.shape),
+		then: (inputs) => inputs.cable,
+		now: ({ mount }) => mount.cable
 	},
 	{
 		part: 'survey',

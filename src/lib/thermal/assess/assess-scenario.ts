@@ -5,11 +5,11 @@ import { runScenario } from '../vehicle/simulate';
 import { ENGINE_VERSION } from '../version';
 import { thinCurves } from './curves';
 import { keepLedger } from './heat-ledger';
-import { judgeHeat, weighHeat } from './heat-limits';
-import { countMissedCharge } from './missed-charge';
+import { weighHeat } from './heat-limits';
+import { countMissedHours } from './missed-charge';
 import { findSpans, sumHours } from './spans';
 import type { Assessment, DoneAssessment, LegSpan } from './types';
-import { judgeOutcome } from './verdict';
+import { judgeHeat, judgeOutcome } from './verdict';
 
 type DoneRun = Extract<SimulationResult, { status: 'done' }>;
 
@@ -79,7 +79,7 @@ function assessRun(scenario: Scenario, run: DoneRun, options: AssessOptions): Do
 	const endHour = legs.at(-1)!.toHour;
 	const spans = describeSpans(run, endHour);
 	const peakSensorC = findPeakSensorC(scenario, minutes);
-	const missed = countMissedCharge(scenario, minutes);
+	const { chargeMissedAh } = run;
 	const ceilings = findCeilings(scenario, options.heatLimits);
 	const headroomK = ceilings.useC - peakSensorC;
 	const leadAcid = options.heatLimits ? weighHeat(scenario, minutes, options.heatLimits) : null;
@@ -87,16 +87,20 @@ function assessRun(scenario: Scenario, run: DoneRun, options: AssessOptions): Do
 	return {
 		status: 'done',
 		verdict: leadAcid
-			? judgeHeat(leadAcid, headroomK)
-			: judgeOutcome(scenario, {
-					cutsOut: spans.darkSpans.length > 0,
-					peakSensorC,
-					missedAh: missed.chargeMissedAh
-				}),
+			? judgeHeat({ chargedTooHot: leadAcid.hoursAboveChargeLimit > 0 }, headroomK)
+			: judgeOutcome(
+					scenario,
+					{
+						...{ cutsOut: spans.darkSpans.length > 0, peakSensorC, missedAh: chargeMissedAh },
+						peakChargingC: -Infinity
+					},
+					null
+				),
 		headroomK,
 		chargeHeadroomK: ceilings.chargeC - peakSensorC,
 		...spans,
-		...missed,
+		chargeMissedAh,
+		chargeMissedHours: countMissedHours(scenario, minutes),
 		peakCellsC: report.peakCellsC,
 		peakAtHour: report.peakAtHour,
 		peakSensorC,

@@ -29,6 +29,11 @@ function mixLocalAir(
 	return air;
 }
 
+/** The hottest that the air around the battery gets, on the grid of minutes, °C. */
+export function findHottestAirC(scenario: Scenario, minutes: MinuteSeries): number {
+	return mixLocalAir(scenario, minutes).reduce((hottest, airC) => Math.max(hottest, airC), -Infinity);
+}
+
 /** Thins the minute grid to what can be drawn. */
 export function thinCurves(scenario: Scenario, minutes: MinuteSeries): AssessmentCurves {
 	const stepMin = chooseStepMin(minutes.count);

@@ -64,7 +64,8 @@ function findUse(scenario: Scenario, daysOnRoad: number): Use | null {
 		lowest = Math.min(lowest, soc[minute]!);
 		highest = Math.max(highest, soc[minute]!);
 	}
-	const planDays = Math.max((count - 1) / 60 / HOURS_A_DAY, 1 / HOURS_A_DAY);
+	// A plan shorter than a day is a day on the road all the same.
+	const planDays = Math.max((count - 1) / 60 / HOURS_A_DAY, 1);
 	const meanA = outMinutes > 0 ? (60 * outAh) / outMinutes : 0;
 	return {
 		takenOutAhPerYear: (outAh / planDays) * daysOnRoad,

@@ -8,7 +8,8 @@ import { copyScenario, PRIORS } from '../uncertainty';
 import { parseScenario } from '../vehicle/parse-scenario';
 import { OutcomeRunner } from '../vehicle/outcome-run';
 import { assessScenario } from './assess-scenario';
-import { judgeHeat, watchUseLimit } from './heat-limits';
+import { watchUseLimit } from './heat-limits';
+import { judgeHeat } from './verdict';
 import type { DoneAssessment } from './types';
 
 const AGM: SurveyInputs['battery'] = {
@@ -144,6 +145,6 @@ describe('the verdict by limits', () => {
 		[20, 0.1, 'runs-close'],
 		[-3, 2, 'cuts-out']
 	] as const)('with %d K of headroom and %d h charged too hot is %s', (headroomK, hours, verdict) => {
-		expect(judgeHeat({ hoursAboveChargeLimit: hours }, headroomK)).toBe(verdict);
+		expect(judgeHeat({ chargedTooHot: hours > 0 }, headroomK)).toBe(verdict);
 	});
 });

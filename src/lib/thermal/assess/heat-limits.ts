@@ -2,8 +2,7 @@ import { chargeVoltageV } from '../chemistries/charge-voltage';
 import { findGasNeeds } from '../chemistries/gas';
 import type { HeatLimits } from '../chemistries/guard';
 import type { MinuteSeries, Scenario } from '../types';
-import type { LeadAcidFigures, MountVerdict } from './types';
-import { CLOSE_HEADROOM_K } from './verdict';
+import type { LeadAcidFigures } from './types';
 
 const MINUTES_PER_H = 60;
 const CHARGER_REFERENCE_C = 25;
@@ -52,20 +51,6 @@ export function weighHeat({ battery }: Scenario, minutes: MinuteSeries, limits: 
 		uncompensatedChargeV: chargeVoltageV(chemistry, CHARGER_REFERENCE_C),
 		...{ freshAirM3PerH, openingCm2, sparkFreeMm }
 	};
-}
-
-/**
- * The verdict on a battery that nothing switches off.
- *
- * The key of "cuts out": the cells pass the limit of use. Runs close: less than 5 K below it, or charged above the limit
- * of charging. Otherwise it rides the day out.
- */
-export function judgeHeat(
-	{ hoursAboveChargeLimit }: Pick<LeadAcidFigures, 'hoursAboveChargeLimit'>,
-	headroomK: number
-): MountVerdict {
-	if (headroomK < 0) return 'cuts-out';
-	return headroomK < CLOSE_HEADROOM_K || hoursAboveChargeLimit > 0 ? 'runs-close' : 'rides-it-out';
 }
 
 /** Below the limit by so much, a battery that was too hot counts as cool again. */

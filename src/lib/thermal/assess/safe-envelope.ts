@@ -1,4 +1,5 @@
 import { sampleQuantile, scrambledSobolPoint } from '../statistics';
+import type { HeatLimits } from '../chemistries/guard';
 import type { Scenario } from '../types';
 import { copyScenario, drawScenario } from '../uncertainty/draw-scenario';
 import { COOLEST_TRIED_C, findHottestDay, HOTTEST_TRIED_C } from '../uncertainty/hottest-day';
@@ -61,7 +62,7 @@ function readLimit(limits: readonly number[], share: number): number | null {
  *     T*(h) = hottest daily maximum at which the verdict is "rides it out" when the driving takes h hours
  *
  * @param scenario the day as it was estimated
- * @param options draws for the band (0: none) and seed
+ * @param options draws for the band (0: none), seed, and the limits of a battery that nothing switches off
  * @returns as a generator, yields the share of the work done; one point a length of drive, with the band that holds eight
  *   drawn vehicles in ten; no points for a plan without driving
  * Validity: the planned day with its driving stretched evenly; sun, daily range and loads as planned.
@@ -74,7 +75,7 @@ function readLimit(limits: readonly number[], share: number): number | null {
  */
 export function* findSafeEnvelope(
 	scenario: Scenario,
-	{ samples, seed }: { samples: number; seed: number }
+	{ samples, seed, limits = null }: { samples: number; seed: number; limits?: HeatLimits | null }
 ): Generator<number, SafeEnvelope> {
 	const runner = new OutcomeRunner();
 	const plannedHours = sumDriving(scenario);
@@ -83,7 +84,7 @@ export function* findSafeEnvelope(
 		findHottestDay(
 			day,
 			runner,
-			(outcome, tried) => judgeOutcome(tried, outcome) === 'rides-it-out',
+			(outcome, tried) => judgeOutcome(tried, outcome, limits) === 'rides-it-out',
 			WITHIN_K
 		);
 	const points: EnvelopePoint[] = [];

@@ -1,3 +1,4 @@
+import type { HeatLimits } from '../chemistries/guard';
 import type { Scenario } from '../types';
 import { copyScenario, drawScenario } from '../uncertainty/draw-scenario';
 import { PRIORS } from '../uncertainty/priors';
@@ -14,6 +15,9 @@ export const USUAL_MONEY_PER_HOUR = 100;
 
 /** Less than this is no gain. */
 const LEAST_GAIN_K = 0.05;
+/** Of so many sets that ride the planned day out, the cheapest, the chance is worked out. */
+const MOST_CHANCES = 40;
+const SAY_MOST_CHANCES = `The chance of more than the ${MOST_CHANCES} cheapest that ride the planned day out.`;
 /** How much of the work the search is; the rest are the chances. */
 const SEARCH_SHARE = 0.6;
 
@@ -65,6 +69,10 @@ export interface SearchOptions {
 	mostCutOutShare: number;
 	/** How many are tried together. */
 	together?: number;
+	/** Of a battery that nothing switches off. */
+	limits?: HeatLimits | null;
+	/** The share of dark days without any remedy, where it was worked out with more draws already. */
+	bareCutOutShare?: number;
 }
 
 type Offered = Remedy & { offered: boolean };
@@ -110,7 +118,13 @@ function applyAll(scenario: Scenario, set: readonly Remedy[]): Scenario {
 	return changed;
 }
 
-function runSet(scenario: Scenario, set: readonly Remedy[], runner: OutcomeRunner, bareC: number): RemedySet {
+function runSet(
+	scenario: Scenario,
+	set: readonly Remedy[],
+	runner: OutcomeRunner,
+	bareC: number,
+	limits: HeatLimits | null
+): RemedySet {
 	const changed = applyAll(scenario, set);
 	const outcome = runner.run(changed);
 	return {
@@ -119,15 +133,19 @@ function runSet(scenario: Scenario, set: readonly Remedy[], runner: OutcomeRunne
 		hours: set.reduce((sum, { hours }) => sum + hours, 0),
 		gainK: bareC - outcome.peakSensorC,
 		headroomK: changed.bms.discharge.cut - outcome.peakSensorC,
-		verdict: judgeOutcome(changed, outcome),
+		verdict: judgeOutcome(changed, outcome, limits),
 		cutOutShare: null
 	};
 }
 
-/** The sets of which no other costs no more and gains more, from the cheapest on. */
-function findFront(sets: readonly RemedySet[], moneyPerHour: number): RemedySet[] {
+/** From the cheapest on, of equally cheap ones the coolest first. */
+function sortByMoney(sets: readonly RemedySet[], moneyPerHour: number): RemedySet[] {
 	const money = ({ cost, hours }: RemedySet): number => cost + hours * moneyPerHour;
-	const byMoney = [...sets].sort((a, b) => money(a) - money(b) || b.gainK - a.gainK);
+	return [...sets].sort((a, b) => money(a) - money(b) || b.gainK - a.gainK);
+}
+
+/** The sets of which no other costs no more and gains more, from the cheapest on. */
+function findFront(byMoney: readonly RemedySet[]): RemedySet[] {
 	const front: RemedySet[] = [];
 	for (const set of byMoney) {
 		if (set.gainK > (front.at(-1)?.gainK ?? 0) + LEAST_GAIN_K) front.push(set);
@@ -148,6 +166,13 @@ function listNotTried(offered: readonly Offered[], scenario: Scenario, together:
 	];
 }
 
+/** A charger that carries the loads alone does so whatever they draw. */
+function keepAtRest({ legs, charger }: Scenario, drawn: Scenario): void {
+	legs.forEach(({ loadA, engineOn }, at) => {
+		if (engineOn && loadA === charger.maxA) drawn.legs[at]!.loadA = drawn.charger.maxA;
+	});
+}
+
 /** The share of drawn days that end in the dark. */
 function* findCutOutShare(
 	scenario: Scenario,
@@ -157,6 +182,7 @@ function* findCutOutShare(
 	let cutOuts = 0;
 	for (let draw = 0; draw < samples; draw++) {
 		const drawn = drawScenario(scenario, scrambledSobolPoint(draw, PRIORS.length, seed));
+		keepAtRest(scenario, drawn);
 		if (runner.run(drawn).cutsOut) cutOuts++;
 		yield;
 	}
@@ -182,7 +208,8 @@ function* findCutOutShare(
  * step.value.least.keys.length; // 0
  */
 export function* searchRemedies(scenario: Scenario, options: SearchOptions): Generator<number, RemedySearch> {
-	const { offers, moneyPerHour = USUAL_MONEY_PER_HOUR, mostCutOutShare, together = MOST_TOGETHER } = options;
+	const { offers, moneyPerHour = USUAL_MONEY_PER_HOUR, mostCutOutShare } = options;
+	const { together = MOST_TOGETHER, limits = null, bareCutOutShare } = options;
 	const runner = new OutcomeRunner();
 	const bareC = runner.run(scenario).peakSensorC;
 	const offered = priceRemedies(offers);
@@ -190,24 +217,37 @@ export function* searchRemedies(scenario: Scenario, options: SearchOptions): Gen
 		offered.filter((remedy) => remedy.offered && remedy.fits(scenario)),
 		together
 	);
-	const asPlanned = runSet(scenario, [], runner, bareC);
+	const asPlanned = runSet(scenario, [], runner, bareC, limits);
 	const results = new Map<RemedySet, Remedy[]>([[asPlanned, []]]);
 	for (const [at, set] of candidates.entries()) {
-		results.set(runSet(scenario, set, runner, bareC), set);
+		results.set(runSet(scenario, set, runner, bareC, limits), set);
 		yield (SEARCH_SHARE * (at + 1)) / candidates.length;
 	}
 	const alone = [...results].filter(([, set]) => set.length === 1).map(([result]) => result);
-	const front = findFront([...results.keys()], moneyPerHour);
+	const byMoney = sortByMoney([...results.keys()], moneyPerHour);
+	const front = findFront(byMoney);
+	// Where nothing is needed, nothing is asked for, not even what costs nothing.
+	const inOrder = [asPlanned, ...byMoney.filter((set) => set !== asPlanned)];
+	const rides = inOrder.filter(({ verdict }) => verdict === 'rides-it-out');
+	let asked = 0;
+	/** Works out the chance of a set once. */
+	const askChance = function* (result: RemedySet): Generator<number, number> {
+		if (result === asPlanned && bareCutOutShare !== undefined) result.cutOutShare = bareCutOutShare;
+		if (result.cutOutShare === null) {
+			const progress = SEARCH_SHARE + (1 - SEARCH_SHARE) * Math.min(++asked / MOST_CHANCES, 1);
+			const changed = applyAll(scenario, results.get(result)!);
+			result.cutOutShare = yield* mapProgress(findCutOutShare(changed, runner, options), progress);
+		}
+		return result.cutOutShare;
+	};
+	yield* askChance(asPlanned);
 	let least: RemedySet | null = null;
-	for (const [at, result] of [asPlanned, ...front].entries()) {
-		// Chances are worked out from where a set rides the planned day out.
-		if (result.verdict !== 'rides-it-out' && least === null) continue;
-		const changed = applyAll(scenario, results.get(result)!);
-		const progress = SEARCH_SHARE + ((1 - SEARCH_SHARE) * at) / (front.length + 1);
-		result.cutOutShare = yield* mapProgress(findCutOutShare(changed, runner, options), progress);
-		const rides = result.verdict === 'rides-it-out' && result.cutOutShare <= mostCutOutShare;
-		if (least === null && rides) least = result;
+	for (const result of rides.slice(0, MOST_CHANCES)) {
+		if ((yield* askChance(result)) > mostCutOutShare) continue;
+		least = result;
+		break;
 	}
+	for (const result of front.filter(({ verdict }) => verdict === 'rides-it-out')) yield* askChance(result);
 	yield 1;
 	return {
 		moneyPerHour,
@@ -217,7 +257,10 @@ export function* searchRemedies(scenario: Scenario, options: SearchOptions): Gen
 		least,
 		mostCutOutShare,
 		tried: candidates.length,
-		notTried: listNotTried(offered, scenario, together)
+		notTried: [
+			...listNotTried(offered, scenario, together),
+			...(least === null && rides.length > MOST_CHANCES ? [SAY_MOST_CHANCES] : [])
+		]
 	};
 }
 

@@ -41,8 +41,8 @@ class Histogram {
 /**
  * How many hours of a year the cells spend at which temperature.
  *
- * In each month the days on the road go as the planned day at the month's mean daily maximum, on the others the vehicle
- * stands in that air from midnight to midnight.
+ * In each month the days on the road go as the planned day at the month's mean daily maximum, on the others, and in what a
+ * shorter plan leaves of its day, the vehicle stands in that air as from midnight to midnight.
  *
  * @param scenario the planned day
  * @param year mean daily maxima and days on the road, month by month
@@ -55,19 +55,21 @@ export function findYearOfCells(
 ): HoursAtTemperature[] {
 	const runner = new OutcomeRunner();
 	const histogram = new Histogram();
-	const count = (day: Scenario, meanMaxC: number, days: number): void => {
-		if (days <= 0) return;
+	const count = (day: Scenario, meanMaxC: number, hours: number): void => {
+		if (hours <= 0) return;
 		day.climate.tMax = meanMaxC;
 		const cells = new Float64Array(Math.floor((countMinutes(day) - 1) / EVERY_MIN) + 1);
 		runner.run(day, cells, EVERY_MIN);
-		histogram.add(cells, days * HOURS_A_DAY);
+		histogram.add(cells, hours);
 	};
 	const touring = copyScenario(scenario);
+	const plannedHours = Math.min((countMinutes(scenario) - 1) / 60, HOURS_A_DAY);
 	const standing = standStill(scenario);
 	months.forEach(({ meanMaxC }, month) => {
 		const onRoad = Math.min(daysOnRoad[month]!, DAYS_IN_MONTH[month]!);
-		count(touring, meanMaxC, onRoad);
-		count(standing, meanMaxC, DAYS_IN_MONTH[month]! - onRoad);
+		const touringHours = onRoad * plannedHours;
+		count(touring, meanMaxC, touringHours);
+		count(standing, meanMaxC, DAYS_IN_MONTH[month]! * HOURS_A_DAY - touringHours);
 	});
 	return histogram.list();
 }

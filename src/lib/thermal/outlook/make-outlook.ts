@@ -6,11 +6,15 @@ import {
 	type RemedyOffer,
 	type RemedySearch
 } from '../assess/search-remedies';
+import { findHottestAirC } from '../assess/curves';
+import type { HeatLimits } from '../chemistries/guard';
+import { EngineInputError } from '../correlations/require';
 import type { Scenario } from '../types';
 import { countCutOutDays, type CutOutDays, type TouringYear } from '../uncertainty/cut-out-days';
 import { finishWork } from '../uncertainty/finish-work';
 import { rankInfluences, type Influences } from '../uncertainty/influence';
 import { spreadDay, type DaySpread } from '../uncertainty/spread-day';
+import { runScenario } from '../vehicle/simulate';
 import { ENGINE_VERSION } from '../version';
 import { sizeCableAndFuse, type CableAndFuse, type CableSizing } from '../wiring';
 
@@ -30,8 +34,8 @@ export interface OutlookEffort {
 export const FULL_EFFORT: OutlookEffort = {
 	daySamples: 512,
 	yearSamples: 64,
-	influencePoints: 16,
-	influenceReplicates: 2,
+	influencePoints: 32,
+	influenceReplicates: 4,
 	remedySamples: 64,
 	remediesTogether: MOST_TOGETHER,
 	envelopeSamples: 16
@@ -45,8 +49,8 @@ export interface OutlookRequest {
 	moneyPerHour: number;
 	/** The cable and fuse that are proposed, without the air, which the run finds; null when nobody has said. */
 	cable: Omit<CableAndFuse, 'cableAirC' | 'fuseAirC'> | null;
-	/** Hottest air around the battery on the planned day, °C. */
-	hottestAirC: number;
+	/** Of a battery that nothing switches off; null for one with a BMS. */
+	limits: HeatLimits | null;
 	seed: number;
 	effort: OutlookEffort;
 	/** The share of dark days that is still called riding it out. */
@@ -62,8 +66,12 @@ export interface Outlook {
 	influences: Influences;
 	remedies: RemedySearch;
 	envelope: SafeEnvelope;
+	/** Null with the reason beside it where the models do not reach. */
 	life: ExpectedLife | null;
+	lifeProblem: string | null;
+	/** Null where none is proposed, or with the reason beside it. */
 	cable: (CableSizing & { airC: number }) | null;
+	cableProblem: string | null;
 }
 
 /** How far the work is, and with what. */
@@ -108,14 +116,14 @@ function* follow<T>(
  * const scenario = defaultScenario([{ minutes: 60, engineOn: true }, { minutes: 60 }]);
  * const year = { months: Array(12).fill({ meanMaxC: 20, spreadK: 3 }), daysOnRoad: Array(12).fill(2) };
  * const effort = { daySamples: 16, yearSamples: 2, influencePoints: 2, influenceReplicates: 2, remedySamples: 2, remediesTogether: 1, envelopeSamples: 0 };
- * const rest = { offers: [], moneyPerHour: 100, cable: null, hottestAirC: 50, seed: 1, effort, mostCutOutShare: 0.05 };
+ * const rest = { offers: [], moneyPerHour: 100, cable: null, limits: null, seed: 1, effort, mostCutOutShare: 0.05 };
  * const work = makeOutlook({ scenario, year, wear: { law: 'none' }, ...rest });
  * let step = work.next();
  * while (!step.done) step = work.next();
  * step.value.day.samples; // 16
  */
 export function* makeOutlook(request: OutlookRequest): Generator<OutlookProgress, Outlook> {
-	const { scenario, year, wear, seed, effort, cable, hottestAirC } = request;
+	const { scenario, year, wear, seed, effort, limits } = request;
 	let before = 0;
 	const next = (part: OutlookProgress['part']): number => {
 		const at = before;
@@ -144,31 +152,44 @@ export function* makeOutlook(request: OutlookRequest): Generator<OutlookProgress
 			samples: effort.remedySamples,
 			together: effort.remediesTogether,
 			seed,
+			limits,
+			bareCutOutShare: day.cutOutShare,
 			mostCutOutShare: request.mostCutOutShare
 		}),
 		'remedies',
 		next('remedies')
 	);
 	const envelope = yield* follow(
-		findSafeEnvelope(scenario, { samples: effort.envelopeSamples, seed }),
+		findSafeEnvelope(scenario, { samples: effort.envelopeSamples, seed, limits }),
 		'envelope',
 		next('envelope')
 	);
 	yield { part: 'life', share: next('life') };
+	const life = within(() => expectLife(scenario, year, wear));
+	const sized = within(() => sizeCable(request));
 	return {
-		engineVersion: ENGINE_VERSION,
-		seed,
-		day,
-		year: days,
-		influences,
-		remedies,
-		envelope,
-		life: expectLife(scenario, year, wear),
-		cable: cable && {
-			...sizeCableAndFuse({ ...cable, cableAirC: hottestAirC, fuseAirC: hottestAirC }),
-			airC: hottestAirC
-		}
+		...{ engineVersion: ENGINE_VERSION, seed, day, year: days, influences, remedies, envelope },
+		...{ life: life.value, lifeProblem: life.problem, cable: sized.value, cableProblem: sized.problem }
 	};
+}
+
+/** What a part gives; where a figure lies outside what its formulas are for, the reason in its place. */
+function within<T>(work: () => T): { value: T | null; problem: string | null } {
+	try {
+		return { value: work(), problem: null };
+	} catch (error) {
+		if (!(error instanceof EngineInputError)) throw error;
+		return { value: null, problem: error.message };
+	}
+}
+
+/** Cable and fuse in the hottest air of the planned day. */
+function sizeCable({ scenario, cable }: OutlookRequest): Outlook['cable'] {
+	if (cable === null) return null;
+	const run = runScenario(scenario);
+	if (run.status === 'failed') return null;
+	const airC = findHottestAirC(scenario, run.minutes);
+	return { ...sizeCableAndFuse({ ...cable, cableAirC: airC, fuseAirC: airC }), airC };
 }
 
 /** The outlook at once, for who has nothing else to do. */

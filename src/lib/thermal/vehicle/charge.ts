@@ -73,6 +73,28 @@ export function readSoc(span: ChargeSpan, afterS: number): number {
 	return Math.min(Math.max(soc, 0), 1);
 }
 
+/**
+ * What a battery would have taken in a while, as the charger and its own taper allow; nothing where loads take more.
+ *
+ * @returns the state of charge that it would have come to
+ */
+export function fillUp(
+	scenario: Pick<Scenario, 'charger' | 'battery'>,
+	leg: Leg,
+	soc: number,
+	lastedS: number
+): number {
+	let reached = soc;
+	let leftS = lastedS;
+	while (leftS > 0) {
+		const span = planChargeSpan(scenario, leg, reached, { chargeOpen: false, dischargeOpen: true });
+		if (span.currentA <= 0) break;
+		reached = readSoc(span, Math.min(leftS, span.lastsS));
+		leftS -= span.lastsS;
+	}
+	return reached;
+}
+
 const S_PER_MIN = 60;
 
 /** Writes state of charge and current on whole minutes, from `minute` up to, but not at, `last`. */

@@ -10,9 +10,11 @@ export interface Outcome {
 	cutsOut: boolean;
 	/** Highest reading of what the BMS watches on the grid of minutes, °C. */
 	peakSensorC: number;
+	/** Hottest cells while charging current flowed, on the grid of minutes, °C; −Infinity when none did. */
+	peakChargingC: number;
 	/** How long the discharge latch stood open, h. */
 	darkHours: number;
-	/** What the charger would have put in while the charge latch was open, but not more than the battery had room for, Ah. */
+	/** What the charger would have put in while the charge latch was open, as far as the battery had room for it, Ah. */
 	missedAh: number;
 	/** Each time a latch opened or closed, in order. */
 	events: readonly BmsEvent[];
@@ -23,6 +25,8 @@ class OutcomeSink implements StepSink {
 	/** Of each node that is watched, °C. */
 	readonly highestC: Float64Array;
 	watched: readonly number[] = [];
+	/** Of the cells alone, while they are charged, at their node's place, °C. */
+	private readonly chargingC: Float64Array;
 	private cells: Float64Array | null = null;
 	private everyMin = 1;
 	private readonly cellsNode: number;
@@ -30,12 +34,14 @@ class OutcomeSink implements StepSink {
 
 	constructor(names: readonly string[]) {
 		this.highestC = new Float64Array(names.length);
+		this.chargingC = new Float64Array(names.length);
 		this.cellsNode = names.indexOf('cells');
 		this.boardNode = names.indexOf('board');
 	}
 
 	begin({ bms }: Scenario, cells: Float64Array | null, everyMin: number): void {
 		this.highestC.fill(-Infinity);
+		this.chargingC.fill(-Infinity);
 		this.cells = cells;
 		this.everyMin = everyMin;
 		this.watched = {
@@ -45,8 +51,13 @@ class OutcomeSink implements StepSink {
 		}[bms.sensor];
 	}
 
-	takeStep(step: Step, _standing: Standing, minute: number, last: number): void {
+	get peakChargingC(): number {
+		return this.chargingC[this.cellsNode]!;
+	}
+
+	takeStep(step: Step, { span }: Standing, minute: number, last: number): void {
 		if (minute === last) return;
+		if (span.currentA > 0) raiseHighest(step, this.cellsNode, minute, last, this.chargingC);
 		for (let k = 0; k < this.watched.length; k++) {
 			raiseHighest(step, this.watched[k]!, minute, last, this.highestC);
 		}
@@ -101,7 +112,8 @@ export class OutcomeRunner {
 			cutsOut: run.bms.events.some(({ side, kind }) => side === 'discharge' && kind === 'cut'),
 			peakSensorC: sink.findPeakSensorC(),
 			darkHours: this.sumDark(run, scenario),
-			missedAh: Math.min(run.refusedAh, (1 - run.soc) * scenario.battery.capacityAh),
+			missedAh: run.missedAh,
+			peakChargingC: sink.peakChargingC,
 			events: run.bms.events
 		};
 	}

@@ -56,7 +56,8 @@ export function runScenario(scenario: Scenario): SimulationResult {
 		status: 'done',
 		report: report(run, record),
 		minutes: record.minutes,
-		chargeRefusedAh: run.refusedAh
+		chargeRefusedAh: run.refusedAh,
+		chargeMissedAh: run.missedAh
 	};
 }
 

@@ -2,7 +2,7 @@ import { Integrator, type Failure, type Reached } from '../solve/integrator';
 import type { Step } from '../solve/stepper';
 import type { Leg, Scenario } from '../types';
 import { Bms, type PlannedChange } from './bms';
-import { planChargeSpan, readSoc } from './charge';
+import { fillUp, planChargeSpan, readSoc } from './charge';
 import { ambientTempC } from './climate';
 import { findLegConstants } from './leg-drive';
 import { Kinks } from './kinks';
@@ -50,6 +50,10 @@ export class VehicleRun {
 	soc = 0;
 	/** What the charger would have put in while the charge latch was open, Ah. */
 	refusedAh = 0;
+	/** The same for a battery that fills up and tapers meanwhile: what it could not have held is not missed, Ah. */
+	missedAh = 0;
+	/** What it would hold beyond what it does, since the charge latch opened, 0…1. */
+	private missedSoc = 0;
 	timeS = 0;
 	bms!: Bms;
 	private scenario!: Scenario;
@@ -110,6 +114,8 @@ export class VehicleRun {
 		this.sink = sink;
 		this.soc = start.soc;
 		this.refusedAh = 0;
+		this.missedAh = 0;
+		this.missedSoc = 0;
 		this.timeS = 0;
 		this.nextMinute = 0;
 		this.minuteCount = countMinutes(scenario);
@@ -134,7 +140,7 @@ export class VehicleRun {
 			this.beginSpan(leg);
 			const failure = this.runSpan(legEndS);
 			if (failure) return failure;
-			this.endSpan();
+			this.endSpan(leg);
 		} while (this.timeS < legEndS);
 		return null;
 	}
@@ -155,13 +161,23 @@ export class VehicleRun {
 		this.standing.dischargeOpen = this.bms.isOpen('discharge');
 	}
 
-	private endSpan(): void {
-		const { span, spanStartS } = this.standing;
+	private endSpan(leg: Leg): void {
+		const { span, spanStartS, chargeOpen } = this.standing;
 		const lastedS = this.timeS - spanStartS;
 		// A span shorter than a rounding error of the clock still ends where it ends, or it would begin again for ever.
 		this.soc = this.timeS >= spanStartS + span.lastsS ? span.socAtEnd : readSoc(span, lastedS);
 		this.refusedAh += (span.refusedA * lastedS) / S_PER_H;
+		if (chargeOpen) this.countMissed(leg, lastedS);
+		else this.missedSoc = 0;
 		this.sink.takeStanding?.(this.standing, this.spanMinute, this.nextMinute);
+	}
+
+	private countMissed(leg: Leg, lastedS: number): void {
+		const { scenario } = this;
+		const would = Math.min(this.soc + this.missedSoc, 1);
+		const gained = fillUp(scenario, leg, would, lastedS) - would;
+		this.missedSoc += gained;
+		this.missedAh += gained * scenario.battery.capacityAh;
 	}
 
 	/** Runs until the leg or the span ends or a latch moves; where the air's slope changes is a stop too. */

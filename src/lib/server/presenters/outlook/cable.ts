@@ -71,9 +71,27 @@ function sayOutcome({ findings, protectsCable, opensWithoutFault }: NonNullable<
 	return `${wrong.length} of ${findings.length} checks do not hold${consequence}.`;
 }
 
+const DEFERENCE =
+	'The makers’ own curves for cable and fuse, local wiring rules and whoever is licensed for the work come first.';
+
+/** The air is hotter than the formulas are for: that is the answer. */
+const presentProblem = (proposal: CableInput, problem: string): CableReport => ({
+	proposal: sayProposal(proposal),
+	sentence:
+		'Cable and fuse do not belong there: the air around the battery gets hotter than the formulas are for.',
+	air: problem,
+	conductor: '',
+	findings: [],
+	deference: DEFERENCE
+});
+
 /** A proposed cable and fuse at the hottest air around the battery. */
-export function presentCable(cable: Outlook['cable'], proposal: CableInput | undefined): CableReport | null {
-	if (cable === null || proposal === undefined) return null;
+export function presentCable(
+	{ cable, cableProblem }: Pick<Outlook, 'cable' | 'cableProblem'>,
+	proposal: CableInput | undefined
+): CableReport | null {
+	if (!proposal) return null;
+	if (cable === null) return cableProblem ? presentProblem(proposal, cableProblem) : null;
 	const conductor =
 		cable.conductorC === null
 			? 'The air alone is warmer than the insulation may be.'
@@ -84,7 +102,6 @@ export function presentCable(cable: Outlook['cable'], proposal: CableInput | und
 		air: `Held against ${formatTemperature(cable.airC)}, the hottest air around the battery on the planned day.`,
 		conductor,
 		findings: cable.findings.map(presentFinding),
-		deference:
-			'The makers’ own curves for cable and fuse, local wiring rules and whoever is licensed for the work come first.'
+		deference: DEFERENCE
 	};
 }

@@ -47,7 +47,7 @@ function sayPlanned({ points, plannedHours, plannedMaxC, triedC }: SafeEnvelope)
 	const apartK = plannedMaxC - middleC;
 	const where =
 		middleC >= triedC[1] ? '' : `, ${formatKelvin(Math.abs(apartK), 0)} ${apartK > 0 ? 'above' : 'below'} it`;
-	return `With ${driving} of driving it rides out days of up to ${sayLimit(middleC, triedC)} (${sayRange(limit, triedC)}). ${planned}${where}.`;
+	return `With ${driving} of driving it rides out, not even close and charging as it should, days of up to ${sayLimit(middleC, triedC)} (${sayRange(limit, triedC)}). ${planned}${where}.`;
 }
 
 /** How hot a day and how long a drive the mount bears. */

@@ -30,7 +30,8 @@ function yearsTo(years: readonly LifeYear[], line: 'low' | 'middle' | 'high'): n
 function sayYears(low: number | null, high: number | null, longest: number): string {
 	if (low === null) return `more than ${longest} years`;
 	const least = formatYears(low);
-	if (high === null) return `${least} to ${longest} years or more`;
+	if (high === null)
+		return low >= longest ? `about ${longest} years or more` : `${least} to more than ${longest} years`;
 	const most = formatYears(high);
 	return most === least ? `about ${most} years` : `${least} to ${most} years`;
 }
@@ -55,7 +56,7 @@ function sayHere(life: ExpectedLife): string {
 	const source =
 		life.law === 'lead-acid'
 			? 'by the life that its record gives and the rule that heat halves it'
-			: 'by three published models of such cells, which the band holds';
+			: 'by published models of such cells, two of standing and two of use, which the band holds';
 	return `${worn}, ${source}. After ${five.years} years ${sayLeft(five)} is left.`;
 }
 
@@ -75,9 +76,15 @@ function row(label: string, { years }: ExpectedLife): LifeReport['rows'][number]
 const HEADS = ['Mount', ...TOLD_YEARS.map((years) => (years === 1 ? '1 year' : `${years} years`))];
 
 /** How the battery wears, here and elsewhere. */
-export function presentLife(life: ExpectedLife | null, others: readonly LifeElsewhere[]): LifeReport {
+export function presentLife(
+	life: ExpectedLife | null,
+	problem: string | null,
+	others: readonly LifeElsewhere[]
+): LifeReport {
 	if (life === null) {
-		const sentence = 'The planned day could not be run to its end, so its years were not worked out.';
+		const sentence = problem
+			? `The years were not worked out: a figure lies outside what the models of wear are for. ${problem}`
+			: 'The planned day could not be run to its end, so its years were not worked out.';
 		return { sentence, value: '', figures: [], curves: [], heads: [], rows: [], beyondTests: [] };
 	}
 	const all = [{ label: HERE, life }, ...others].filter((each) => each.life.years.length > 0);

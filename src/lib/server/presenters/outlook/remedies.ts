@@ -49,6 +49,12 @@ export function sumMoney({ cost, hours }: RemedySet, moneyPerHour: number): numb
 
 export const nameRemedies = (set: RemedySet): string => small(nameSet(set));
 
+function sayCost(set: RemedySet, moneyPerHour: number): string {
+	const money = sumMoney(set, moneyPerHour);
+	if (money === 0) return 'and costs nothing';
+	return `parts ${sayParts(set.cost)}, work ${sayWork(set.hours)}, together about ${formatNumber(money)}`;
+}
+
 function sayLeast(search: RemedySearch, { adjective, sayVerdict }: EventWords): string {
 	const { least, front, mostCutOutShare, moneyPerHour, asPlanned } = search;
 	const bar = `“rides it out”, ${adjective} on at most ${formatNumber(20 * mostCutOutShare)} of 20 days like this`;
@@ -62,8 +68,11 @@ function sayLeast(search: RemedySearch, { adjective, sayVerdict }: EventWords): 
 	if (least.keys.length === 0) {
 		return `Nothing more is needed: as planned it rides the day out, ${adjective} on ${sayOfTwenty(asPlanned.cutOutShare ?? 0)} days like this.`;
 	}
-	const money = formatNumber(sumMoney(least, moneyPerHour));
-	return `The least that brings it to ${bar}: ${small(nameSet(least))}. That is ${sayGain(least.gainK)}, parts for ${sayParts(least.cost)} and ${sayWork(least.hours)} of work, together about ${money}; ${adjective} on ${sayOfTwenty(least.cutOutShare ?? 0)}.`;
+	const already =
+		asPlanned.verdict === 'rides-it-out'
+			? `As planned it rides the day out, but is ${adjective} on ${sayOfTwenty(asPlanned.cutOutShare ?? 0)} days like it. `
+			: '';
+	return `${already}The least that brings it to ${bar}: ${small(nameSet(least))}. That is ${sayGain(least.gainK)}, ${sayCost(least, moneyPerHour)}; ${adjective} on ${sayOfTwenty(least.cutOutShare ?? 0)}.`;
 }
 
 function sayHotter(alone: readonly RemedySet[]): string {

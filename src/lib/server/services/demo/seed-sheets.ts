@@ -9,8 +9,8 @@ import { sendSheet } from '../sheets';
 /** Less than for a shop's own work, and said so on the page: the first start is not to take much longer. */
 const DEMO_EFFORT: OutlookEffort = {
 	...FULL_EFFORT,
-	...{ daySamples: 256, yearSamples: 16, influencePoints: 8 },
-	...{ remedySamples: 32, remediesTogether: 3, envelopeSamples: 4 }
+	...{ daySamples: 256, yearSamples: 16, influencePoints: 16 },
+	...{ remedySamples: 32, remediesTogether: 3, envelopeSamples: 16 }
 };
 
 interface Posted {

@@ -1,6 +1,7 @@
 import { guard, orPageError } from '$lib/server/http/guard';
 import { pageId } from '$lib/server/http/page-id';
 import { getAssessment } from '$lib/server/services/assessments';
+import { logger } from '$lib/server/logger';
 import { followOutlook } from '$lib/server/services/outlooks';
 import type { RequestHandler } from './$types';
 
@@ -17,7 +18,10 @@ export const GET: RequestHandler = async (event) => {
 			};
 			followOutlook(person, id, (progress) => send('progress', progress))
 				.then(() => send('done', {}))
-				.catch(() => send('failed', {}))
+				.catch((error: unknown) => {
+					logger.error({ assessmentId: id, err: error }, 'outlook failed');
+					send('failed', {});
+				})
 				.finally(() => {
 					if (isOpen) controller.close();
 					isOpen = false;
