@@ -56,6 +56,8 @@ const LEG = {
 const DAY = { name: 'None', startHour: 7, startSoc: 0.5, chargerMaxA: 40, legs: [LEG], version: null };
 const CLIMATE = { placeId: 1, hotDayMaxC: 40, dailyRangeK: 15, sunPeakWPerM2: 1000, version: 0 };
 const SURVEY = { survey: { positionKind: 'cabin' }, complete: false, version: 0 };
+const FITTING = { fittedOn: '2026-01-05', fittedBy: 'Nobody', differences: [], version: null };
+const FIELD_NOTE = { kind: 'inspection', notedOn: '2026-01-06', words: 'Nothing' };
 
 const page = (route: string, audience: Audience, ...methods: string[]): RouteRule => ({
 	route,
@@ -105,6 +107,10 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 	owned('/mounts/[mountId]/survey/check', 'workshop', 'default'),
 	owned('/mounts/[mountId]/cable', 'workshop', 'save', 'takeBack'),
 	owned('/mounts/[mountId]/pre-drill', 'workshop', 'save', 'sign'),
+	owned('/mounts/[mountId]/fitted', 'workshop', 'save', 'done'),
+	owned('/mounts/[mountId]/follow-ups.ics', 'workshop'),
+	owned('/mounts/[mountId]/field', 'workshop'),
+	owned('/mounts/[mountId]/field/new/[kind]', 'workshop', 'default'),
 	owned('/assessments/[assessmentId]', 'workshop', 'again', 'others', 'reproduce'),
 	owned('/assessments/[assessmentId]/outlook-progress', 'workshop'),
 	owned('/recommendations/[recommendationId]/print', 'workshop'),
@@ -151,6 +157,9 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 	ownedApi('/mounts/[mountId]/survey', 'workshop', { PUT: SURVEY }),
 	ownedApi('/mounts/[mountId]/cable', 'workshop', { PUT: { cable: null, version: 0 } }),
 	ownedApi('/mounts/[mountId]/pre-drill', 'workshop', { GET: null, PUT: { answers: {}, version: 0 } }),
+	ownedApi('/mounts/[mountId]/fitting', 'workshop', { GET: null, PUT: FITTING }),
+	ownedApi('/mounts/[mountId]/field-notes', 'workshop', { GET: null, POST: FIELD_NOTE }),
+	ownedApi('/follow-ups/[followUpId]/done', 'workshop', { POST: { version: 0 } }),
 	ownedApi('/mounts/[mountId]/pre-drill/signature', 'workshop', { PUT: { name: 'Nobody', version: 0 } }),
 	{ ...api('/remedies', 'workshop', 'GET', 'PUT'), only: { PUT: 'bench' } },
 	api('/assessments', 'workshop', 'POST'),

@@ -11,6 +11,7 @@ export type MeasureUnit =
 	| 'K'
 	| 'A'
 	| 'Ah'
+	| 'V'
 	| 'mΩ'
 	| 's'
 	| 'min'

@@ -7,6 +7,7 @@ import { logger } from './logger';
 import { startOutbox, stopOutbox } from './mail/outbox';
 import { clearExpired, startClearing, stopClearing } from './services/clear-expired';
 import { seedDemo } from './services/demo/seed-demo';
+import { startReminders, stopReminders } from './services/reminders';
 
 /** Kept on globalThis so that a development reload, which loads this module again, does not forget it. */
 const state = globalThis as { soaklineReady?: boolean };
@@ -37,6 +38,7 @@ export async function boot(): Promise<void> {
 		await timed('clearing', async () => `${await clearExpired()} rows past their time`);
 		startOutbox();
 		startClearing();
+		startReminders();
 		state.soaklineReady = true;
 		logger.info({ step: 'ready', ms: 0, detail: settings.ORIGIN });
 	} catch (error) {
@@ -48,6 +50,7 @@ export async function boot(): Promise<void> {
 export async function shutDown(): Promise<void> {
 	state.soaklineReady = false;
 	stopClearing();
+	stopReminders();
 	await stopOutbox();
 	await closeConnection();
 }

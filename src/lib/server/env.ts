@@ -14,7 +14,9 @@ const envSchema = z.object({
 	SMTP_URL: z.string().startsWith('smtp'),
 	MAIL_FROM: z.string().default('Soakline <soakline@localhost>'),
 	MAILBOX_DIR: z.string().optional(),
-	SOAKLINE_DEMO: z.enum(['0', '1']).default('0')
+	SOAKLINE_DEMO: z.enum(['0', '1']).default('0'),
+	/** How hard outlooks are worked out: `light` for machines that have no time for more. */
+	SOAKLINE_OUTLOOK: z.enum(['full', 'light']).default('full')
 });
 
 export type Env = z.infer<typeof envSchema>;

@@ -60,7 +60,8 @@ export async function openSurroundings(base, { demo }) {
 	const database = await openDatabase(server);
 	const mailbox = { port: mailPort, folder: folders.mail, logFile: join(folders.log, 'mail.log') };
 	const mail = await startMailbox(mailbox);
-	const given = { ...impersonalEnv(), SOAKLINE_DEMO: demo ? '1' : '0' };
+	// Full outlooks have tests of their own; the browser's wait for many.
+	const given = { ...impersonalEnv(), SOAKLINE_DEMO: demo ? '1' : '0', SOAKLINE_OUTLOOK: 'light' };
 	const env = applicationEnv(
 		{
 			host: '127.0.0.1',

@@ -7,12 +7,14 @@ import { watchUseLimit } from '$lib/thermal/assess';
 import { heatLimitsOf, wearOf } from '$lib/thermal/chemistries';
 import {
 	FULL_EFFORT,
+	LIGHT_EFFORT,
 	makeOutlook,
 	type OutlookEffort,
 	type OutlookProgress,
 	type OutlookRequest
 } from '$lib/thermal/outlook';
 import { Assessment, AssessmentOutlook } from '../db/models';
+import { env } from '../env';
 import { notFound } from '../errors';
 import { allow } from '../policies';
 import { remedyListOf } from './remedy-lists';
@@ -77,6 +79,8 @@ async function store(assessment: Assessment, request: OutlookRequest, outlook: O
 	}
 }
 
+const usualEffort = (): OutlookEffort => (env().SOAKLINE_OUTLOOK === 'light' ? LIGHT_EFFORT : FULL_EFFORT);
+
 function begin(assessment: Assessment, effort: OutlookEffort): Running {
 	const work: Running = {
 		done: Promise.resolve(null as never),
@@ -102,7 +106,7 @@ export async function findOutlook(assessmentId: number): Promise<Outlook | null>
 }
 
 /** The outlook of an assessment: what is kept, or worked out now and kept. Two who ask at once wait for the same work. */
-export async function ensureOutlook(assessment: Assessment, effort = FULL_EFFORT): Promise<Outlook> {
+export async function ensureOutlook(assessment: Assessment, effort = usualEffort()): Promise<Outlook> {
 	const kept = await findOutlook(assessment.id);
 	if (kept) return kept;
 	return (running.get(assessment.id) ?? begin(assessment, effort)).done;
@@ -140,7 +144,7 @@ export async function peekOutlook(
 	allow(person, 'assessments.read');
 	const assessment = await findOwn(person, assessmentId);
 	const kept = await findOutlook(assessment.id);
-	if (!kept && !running.has(assessment.id)) begin(assessment, FULL_EFFORT).done.catch(sayTrouble);
+	if (!kept && !running.has(assessment.id)) begin(assessment, usualEffort()).done.catch(sayTrouble);
 	return kept;
 }
 
@@ -153,7 +157,7 @@ export async function followOutlook(
 	allow(person, 'assessments.read');
 	const assessment = await findOwn(person, assessmentId);
 	if (await findOutlook(assessment.id)) return;
-	const work = running.get(assessment.id) ?? begin(assessment, FULL_EFFORT);
+	const work = running.get(assessment.id) ?? begin(assessment, usualEffort());
 	tell(work.progress);
 	work.listeners.add(tell);
 	try {

@@ -10,5 +10,5 @@ export {
 export { weighReport, type CutOutReport } from './cut-out-report';
 export { learnFrom, type Belief, type LearntUnknown, type Learning, type ReadingDay } from './learn';
 export { OTHER_CAUSES, type RankedCause } from './other-causes';
-export { READING_PLACES, weighReading, type FieldReading, type ReadingPlace } from './readings';
+export { checkReading, READING_PLACES, weighReading, type FieldReading, type ReadingPlace } from './readings';
 export { weighHeat, type HeatCause, type HourRange } from './was-it-heat';

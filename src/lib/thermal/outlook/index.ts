@@ -15,6 +15,7 @@ export type { CurveBand, DaySpread } from '../uncertainty/spread-day';
 export {
 	finishOutlook,
 	FULL_EFFORT,
+	LIGHT_EFFORT,
 	makeOutlook,
 	type Outlook,
 	type OutlookEffort,

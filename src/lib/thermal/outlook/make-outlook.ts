@@ -41,6 +41,13 @@ export const FULL_EFFORT: OutlookEffort = {
 	envelopeSamples: 16
 };
 
+/** The same of fewer draws, each said beside what comes of it. */
+export const LIGHT_EFFORT: OutlookEffort = {
+	...FULL_EFFORT,
+	...{ daySamples: 128, yearSamples: 16, influencePoints: 8, influenceReplicates: 2 },
+	...{ remedySamples: 32, remediesTogether: 3, envelopeSamples: 8 }
+};
+
 export interface OutlookRequest {
 	scenario: Scenario;
 	year: TouringYear;

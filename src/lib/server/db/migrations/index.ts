@@ -41,6 +41,11 @@ import { migration as m051 } from './051-assessments-chemistry';
 import { migration as m052 } from './052-jobs-chemistry';
 import { migration as m060 } from './060-pre-drill-checks';
 import { migration as m061 } from './061-recommendations-pre-drill';
+import { migration as m062 } from './062-installations';
+import { migration as m063 } from './063-follow-ups';
+import { migration as m064 } from './064-field-notes';
+import { migration as m065 } from './065-field-notes-no-update';
+import { migration as m066 } from './066-field-notes-no-delete';
 import type { Migration } from '../migrate';
 
 /** Every migration, in the order in which they run; each is one DDL step that may run again. */
@@ -87,5 +92,10 @@ export const migrations: Migration[] = [
 	m051,
 	m052,
 	m060,
-	m061
+	m061,
+	m062,
+	m063,
+	m064,
+	m065,
+	m066
 ];

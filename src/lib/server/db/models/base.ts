@@ -14,6 +14,9 @@ export const flag = { type: DataTypes.BOOLEAN, allowNull: false } as const;
 export const optionalFlag = { type: DataTypes.BOOLEAN, allowNull: true } as const;
 export const json = { type: DataTypes.JSON, allowNull: false } as const;
 export const optionalJson = { type: DataTypes.JSON, allowNull: true } as const;
+/** A day without a time, as "2026-03-04". */
+export const day = { type: DataTypes.DATEONLY, allowNull: false } as const;
+export const optionalDay = { type: DataTypes.DATEONLY, allowNull: true } as const;
 export const moment = { type: DataTypes.DATE(3), allowNull: false } as const;
 export const optionalMoment = { type: DataTypes.DATE(3), allowNull: true } as const;
 

@@ -19,6 +19,9 @@ import { PreDrillCheck, initPreDrillCheck } from './pre-drill-check';
 import { Recommendation, initRecommendation } from './recommendation';
 import { Sheet, initSheet } from './sheet';
 import { Acknowledgement, initAcknowledgement } from './acknowledgement';
+import { Installation, initInstallation } from './installation';
+import { FollowUp, initFollowUp } from './follow-up';
+import { FieldNote, initFieldNote } from './field-note';
 import { OutgoingMail, initOutgoingMail } from './outgoing-mail';
 import { AuditEntry, initAuditEntry } from './audit-entry';
 
@@ -43,6 +46,9 @@ export {
 	Recommendation,
 	Sheet,
 	Acknowledgement,
+	Installation,
+	FollowUp,
+	FieldNote,
 	OutgoingMail,
 	AuditEntry
 };
@@ -68,6 +74,9 @@ const initialisers = [
 	initRecommendation,
 	initSheet,
 	initAcknowledgement,
+	initInstallation,
+	initFollowUp,
+	initFieldNote,
 	initOutgoingMail,
 	initAuditEntry
 ];

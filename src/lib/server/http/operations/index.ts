@@ -4,6 +4,7 @@ import { customerOperations } from './customers';
 import { assessmentOperations } from './assessments';
 import { bookOperations } from './books';
 import { dayPlanOperations } from './day-plans';
+import { fittingOperations } from './fittings';
 import { jobOperations } from './jobs';
 import { mountOperations } from './mounts';
 import { placeOperations } from './places';
@@ -23,6 +24,7 @@ export const OPERATIONS: readonly Operation[] = [
 	placeOperations,
 	mountOperations,
 	preDrillOperations,
+	fittingOperations,
 	dayPlanOperations,
 	sheetOperations,
 	bookOperations,

@@ -1,17 +1,10 @@
 import type { Transaction } from 'sequelize';
 import type { SignedInPerson } from '$lib/schemas/people';
-import { FULL_EFFORT, type OutlookEffort } from '$lib/thermal/outlook';
+import { LIGHT_EFFORT } from '$lib/thermal/outlook';
 import { Assessment, OutgoingMail, Recommendation } from '../../db/models';
 import { ensureOutlook } from '../outlooks';
 import { acknowledgeSheet, openSheet } from '../sheet-readers';
 import { sendSheet } from '../sheets';
-
-/** Less than for a shop's own work, and said so on the page: the first start is not to take much longer. */
-const DEMO_EFFORT: OutlookEffort = {
-	...FULL_EFFORT,
-	...{ daySamples: 256, yearSamples: 16, influencePoints: 16 },
-	...{ remedySamples: 32, remediesTogether: 3, envelopeSamples: 16 }
-};
 
 interface Posted {
 	recommendationId: number;
@@ -28,7 +21,7 @@ export async function seedSheet(
 ): Promise<void> {
 	const recommendation = await Recommendation.findByPk(recommendationId, { transaction });
 	const assessment = await Assessment.findByPk(recommendation!.assessmentId, { transaction });
-	await ensureOutlook(assessment!, DEMO_EFFORT);
+	await ensureOutlook(assessment!, LIGHT_EFFORT);
 	const { sheet } = await sendSheet(person, { recommendationId, sendTo: email });
 	if (!acknowledged) return;
 	const letter = await OutgoingMail.findOne({ where: { sheetId: sheet.id }, transaction });

@@ -1,0 +1,83 @@
+import { z } from 'zod';
+import type { CapacityTrend, HeatCause, Learning } from '../thermal/field';
+import { READING_PLACES } from '../thermal/field';
+import { measure, words } from './fields';
+import { pastDay } from './fitting';
+
+export const FIELD_NOTE_KINDS = ['capacity-test', 'inspection', 'peak-label', 'cut-out'] as const;
+export type FieldNoteKind = (typeof FIELD_NOTE_KINDS)[number];
+
+export const FIELD_NOTE_LABELS: Readonly<Record<FieldNoteKind, string>> = {
+	'capacity-test': 'Capacity test',
+	inspection: 'Inspection',
+	'peak-label': 'Peak label read',
+	'cut-out': 'Went dark'
+};
+
+const hottestDayC = measure('Hottest of that day', '°C', -20, 55);
+const hour = (label: string) => measure(label, 'h', 0, 72);
+
+export const capacityTestSchema = z.object({
+	kind: z.literal('capacity-test'),
+	notedOn: pastDay('Tested on'),
+	capacityAh: measure('Capacity found', 'Ah', 0.5, 2000),
+	currentA: measure('Current of the test', 'A', 0.1, 500),
+	cutOffV: measure('Stopped at', 'V', 5, 16),
+	tempC: measure('Temperature of the battery', '°C', -20, 60)
+});
+
+export const inspectionSchema = z.object({
+	kind: z.literal('inspection'),
+	notedOn: pastDay('Looked at on'),
+	words: words('What was seen', 1000)
+});
+
+export const peakLabelSchema = z.object({
+	kind: z.literal('peak-label'),
+	notedOn: pastDay('Read on'),
+	place: z.enum(READING_PLACES, { error: 'Choose where the label is.' }),
+	turnedC: measure('Highest field that has turned', '°C', 20, 150).nullable(),
+	notTurnedC: measure('Lowest field that has not', '°C', 20, 150).nullable(),
+	hottestDayC
+});
+
+export const cutOutSchema = z.object({
+	kind: z.literal('cut-out'),
+	notedOn: pastDay('The day'),
+	wentDarkHour: hour('Went dark'),
+	cameBackHour: hour('Came back by itself').nullable(),
+	withinHours: measure('Known to within', 'h', 0.05, 6),
+	hottestDayC
+});
+
+export const fieldNoteInputSchema = z.discriminatedUnion('kind', [
+	capacityTestSchema,
+	inspectionSchema,
+	peakLabelSchema,
+	cutOutSchema
+]);
+export type FieldNoteInput = z.infer<typeof fieldNoteInputSchema>;
+export type FieldNoteData = FieldNoteInput;
+
+/** What the model made of a note. */
+export interface FieldFinding {
+	cause: HeatCause | null;
+	learning: Learning | null;
+}
+
+export const fieldNoteSchema = z.object({
+	id: z.number().int(),
+	kind: z.enum(FIELD_NOTE_KINDS),
+	notedOn: z.iso.date(),
+	notedBy: z.string(),
+	data: fieldNoteInputSchema,
+	finding: z.custom<FieldFinding>().nullable().meta({ type: 'object' }),
+	engineVersion: z.string()
+});
+export type FieldNoteView = z.infer<typeof fieldNoteSchema>;
+
+export const fieldNotesSchema = z.object({
+	rows: z.array(fieldNoteSchema),
+	trend: z.custom<CapacityTrend>().nullable().meta({ type: 'object', description: 'Of the capacity tests' })
+});
+export type FieldNotesView = z.infer<typeof fieldNotesSchema>;

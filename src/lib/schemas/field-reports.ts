@@ -1,0 +1,26 @@
+/** A note of the field in words. */
+export interface NoteReport {
+	id: number;
+	title: string;
+	when: string;
+	words: string;
+	cause: {
+		/** "Yes", "Perhaps", "Hardly". */
+		word: string;
+		sentence: string;
+		usual: string;
+		others: { label: string; measure: string }[];
+	} | null;
+	learning: {
+		sentence: string;
+		rows: { label: string; before: string; after: string }[];
+		method: string;
+	} | null;
+}
+
+/** Where a capacity goes, in words. */
+export interface TrendReport {
+	sentence: string;
+	rows: { law: string; isHonest: boolean; toEighty: string; fiveYears: string }[];
+	method: string;
+}

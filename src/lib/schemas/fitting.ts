@@ -1,0 +1,106 @@
+import { z } from 'zod';
+import { optionalWords, versionSchema, words } from './fields';
+
+/** One thing that was agreed before it was fitted. */
+export const agreedItemSchema = z.object({ key: z.string(), label: z.string(), agreed: z.string() });
+export type AgreedItem = z.infer<typeof agreedItemSchema>;
+
+/** Everything that may be agreed, in the order in which one would look. */
+export const FITTED_KEYS = ['battery', 'position', 'shield', 'cable', 'fuse', 'charger'] as const;
+export type FittedKey = (typeof FITTED_KEYS)[number];
+
+/** What was made otherwise than agreed. */
+export const differenceSchema = z.object({
+	key: z.enum(FITTED_KEYS),
+	fitted: words('What was fitted instead', 200)
+});
+export type Difference = z.infer<typeof differenceSchema>;
+
+/** A day, not before batteries of this kind and not in the future. */
+export const pastDay = (label: string) =>
+	z.iso
+		.date({ error: `${label} must be a day, such as 2026-03-04.` })
+		.refine((day) => day >= '2000-01-01', { error: `${label} must be 2000-01-01 or later.` })
+		.meta({ label });
+
+const fittingFields = {
+	fittedOn: pastDay('Fitted on'),
+	fittedBy: words('Fitted by', 120),
+	serialNumber: optionalWords('Serial number of the battery', 80),
+	note: optionalWords('Note', 1000)
+};
+
+export const fittingChangeSchema = z.object({
+	...fittingFields,
+	differences: z.array(differenceSchema).max(FITTED_KEYS.length),
+	version: versionSchema.nullable()
+});
+export type FittingChange = z.infer<typeof fittingChangeSchema>;
+
+export const followUpSchema = z.object({
+	id: z.number().int(),
+	afterMonths: z.number().int(),
+	dueOn: z.iso.date(),
+	doneOn: z.iso.date().nullable(),
+	doneBy: z.string().nullable(),
+	isOverdue: z.boolean(),
+	version: versionSchema
+});
+export type FollowUpView = z.infer<typeof followUpSchema>;
+
+/** What was fitted; null where nothing has been yet. */
+export const fittingSchema = z.object({
+	mountId: z.number().int(),
+	jobId: z.number().int(),
+	assessmentId: z.number().int(),
+	agreed: z.array(agreedItemSchema),
+	installation: z
+		.object({
+			id: z.number().int(),
+			fittedOn: z.iso.date(),
+			fittedBy: z.string(),
+			serialNumber: z.string(),
+			note: z.string(),
+			differences: z.array(differenceSchema),
+			version: versionSchema
+		})
+		.nullable(),
+	followUps: z.array(followUpSchema)
+});
+export type FittingView = z.infer<typeof fittingSchema>;
+
+/** A look at the battery is due so many months after it was fitted: common practice, no source. */
+export const FOLLOW_UP_MONTHS = [1, 6, 12] as const;
+
+const otherwise = (label: string) => optionalWords(`${label}, if otherwise`, 200);
+
+/** One box an item: empty where it was fitted as agreed. */
+export const fittingFormSchema = z.object({
+	...fittingFields,
+	battery: otherwise('Battery'),
+	position: otherwise('Position'),
+	shield: otherwise('Shield'),
+	cable: otherwise('Cable'),
+	fuse: otherwise('Fuse'),
+	charger: otherwise('Charger'),
+	version: z.string().default('')
+});
+export type FittingForm = z.infer<typeof fittingFormSchema>;
+
+export function toFittingForm(installation: FittingView['installation']): Partial<FittingForm> {
+	if (!installation) return { version: '' };
+	const { fittedOn, fittedBy, serialNumber, note, differences, version } = installation;
+	return {
+		...{ fittedOn, fittedBy, serialNumber, note, version: String(version) },
+		...Object.fromEntries(differences.map(({ key, fitted }) => [key, fitted]))
+	};
+}
+
+export function fromFittingForm({ version, ...form }: FittingForm): FittingChange {
+	const { fittedOn, fittedBy, serialNumber, note } = form;
+	return {
+		...{ fittedOn, fittedBy, serialNumber, note },
+		differences: FITTED_KEYS.filter((key) => form[key] !== '').map((key) => ({ key, fitted: form[key] })),
+		version: version === '' ? null : Number(version)
+	};
+}

@@ -1,0 +1,63 @@
+import { z } from 'zod';
+import { fieldNoteInputSchema, fieldNotesSchema } from '$lib/schemas/field-notes';
+import { idSchema, versionSchema } from '$lib/schemas/fields';
+import { fittingChangeSchema, fittingSchema } from '$lib/schemas/fitting';
+import { defineOperation } from '../operation';
+
+const params = z.object({ mountId: idSchema });
+
+export const fittingOperations = {
+	get: defineOperation({
+		id: 'getFitting',
+		method: 'GET',
+		path: '/api/v1/mounts/[mountId]/fitting',
+		action: 'jobs.read',
+		summary: 'What was agreed for a position, what was fitted, and when it is to be looked at.',
+		params,
+		answer: fittingSchema,
+		status: 200
+	}),
+	save: defineOperation({
+		id: 'saveFitting',
+		method: 'PUT',
+		path: '/api/v1/mounts/[mountId]/fitting',
+		action: 'mounts.write',
+		summary: 'Keeps what was fitted; the first time it also sets the dates of the follow-ups.',
+		params,
+		body: fittingChangeSchema,
+		answer: fittingSchema,
+		status: 200
+	}),
+	finish: defineOperation({
+		id: 'finishFollowUp',
+		method: 'POST',
+		path: '/api/v1/follow-ups/[followUpId]/done',
+		action: 'mounts.write',
+		summary: 'Marks a follow-up as done; one that was done is open again.',
+		params: z.object({ followUpId: idSchema }),
+		body: z.object({ version: versionSchema }),
+		answer: fittingSchema,
+		status: 200
+	}),
+	notes: defineOperation({
+		id: 'listFieldNotes',
+		method: 'GET',
+		path: '/api/v1/mounts/[mountId]/field-notes',
+		action: 'jobs.read',
+		summary: 'What was noted of a fitted battery, the newest first, and where its capacity goes.',
+		params,
+		answer: fieldNotesSchema,
+		status: 200
+	}),
+	addNote: defineOperation({
+		id: 'addFieldNote',
+		method: 'POST',
+		path: '/api/v1/mounts/[mountId]/field-notes',
+		action: 'mounts.write',
+		summary: 'Keeps a note for good, with what the model makes of it: was it heat, and what does it teach.',
+		params,
+		body: fieldNoteInputSchema,
+		answer: fieldNotesSchema,
+		status: 201
+	})
+};

@@ -1,0 +1,148 @@
+import { formatDate } from '$lib/format/dates';
+import {
+	formatAmpHours,
+	formatAmps,
+	formatKelvin,
+	formatNumber,
+	formatPercent,
+	formatTemperature,
+	formatWithUnit
+} from '$lib/format/numbers';
+import { joinWords, sayDayCount, sayOfTwenty } from '$lib/format/outlook-words';
+import { formatClockHour, formatHours } from '$lib/format/time';
+import { FIELD_NOTE_LABELS, type FieldNoteData, type FieldNoteView } from '$lib/schemas/field-notes';
+import type { NoteReport, TrendReport } from '$lib/schemas/field-reports';
+import type { CapacityTrend, HeatCause, HourRange, Learning, TrendLaw, YearsRange } from '$lib/thermal/field';
+
+const PLACES = { case: 'on the case', cells: 'on the cells', board: 'on the BMS board' } as const;
+
+function sayData(data: FieldNoteData): string {
+	switch (data.kind) {
+		case 'inspection':
+			return data.words;
+		case 'capacity-test':
+			return `${formatAmpHours(data.capacityAh)} at ${formatAmps(data.currentA)} down to ${formatWithUnit(data.cutOffV, 'V', 1)}, battery at ${formatTemperature(data.tempC)}.`;
+		case 'peak-label': {
+			const turned =
+				data.turnedC === null ? 'No field has turned' : `${formatTemperature(data.turnedC)} has turned`;
+			const not = data.notTurnedC === null ? 'all have' : `${formatTemperature(data.notTurnedC)} has not`;
+			return `Label ${PLACES[data.place]}: ${turned}, ${not}. Hottest day since: ${formatTemperature(data.hottestDayC)}.`;
+		}
+		case 'cut-out': {
+			const back =
+				data.cameBackHour === null
+					? 'nobody knows when it came back'
+					: `back by itself at ${formatClockHour(data.cameBackHour)}`;
+			return `Went dark at ${formatClockHour(data.wentDarkHour)}, ${back}, known to within ${formatHours(data.withinHours)}. The day got to ${formatTemperature(data.hottestDayC)}.`;
+		}
+	}
+}
+
+const WORDS = { explained: 'Yes', possible: 'Perhaps', 'not-explained': 'Hardly' } as const;
+
+const sayRange = ({ lowHour, middleHour, highHour }: HourRange): string =>
+	`${formatClockHour(middleHour)} (${formatClockHour(lowHour)} to ${formatClockHour(highHour)})`;
+
+function sayUsual({ usuallyDark, usuallyBack, darkShare }: HeatCause): string {
+	if (!usuallyDark) return `On such a day it goes dark from heat on ${sayOfTwenty(darkShare)} days.`;
+	const back = usuallyBack ? `, and comes back at ${sayRange(usuallyBack)}` : '';
+	return `Where heat does it on such a day, it goes dark at ${sayRange(usuallyDark)}${back}.`;
+}
+
+function sayCause(cause: HeatCause): string {
+	const { finding, heatProbability, drivenHours, airFalling } = cause;
+	const air = airFalling ? ', with the air outside already getting cooler' : '';
+	const when = `It went dark after ${formatHours(drivenHours)} of driving${air}.`;
+	const chance = `with about ${Math.round(20 * heatProbability)} chances in 20`;
+	if (finding === 'explained')
+		return `Heat alone explains both when it went dark and when it came back, ${chance}. ${when}`;
+	if (finding === 'possible') return `Heat alone may explain it, ${chance}. ${when}`;
+	return `Heat alone hardly explains it, ${chance}. ${when}`;
+}
+
+function presentCause(cause: HeatCause | null): NoteReport['cause'] {
+	if (!cause) return null;
+	return {
+		word: WORDS[cause.finding],
+		sentence: sayCause(cause),
+		usual: sayUsual(cause),
+		others:
+			cause.finding === 'explained' ? [] : cause.otherCauses.map(({ label, measure }) => ({ label, measure }))
+	};
+}
+
+function sayLearnt({ fits, unknowns, before, after }: Learning): string {
+	if (!fits) {
+		return 'This lies outside of what the estimate held possible: look at the reading again, and at the survey. Nothing was changed.';
+	}
+	const [was, is] = [before.year.year.middle, after.year.year.middle];
+	const told = unknowns.slice(0, 3).map(({ label }) => label);
+	const about = told.length > 0 ? ` It tells most of ${joinWords(told)}.` : '';
+	const change = is < was * 0.95 ? 'fewer' : is > was * 1.05 ? 'more' : 'about as many';
+	return `With this ${change} dark days are to be expected than before.${about}`;
+}
+
+function presentLearning(learning: Learning | null): NoteReport['learning'] {
+	if (!learning) return null;
+	const { before, after, fits, samples, seed, effectiveSamples } = learning;
+	const range = ({ headroomLowK, headroomMiddleK, headroomHighK }: typeof before): string =>
+		`${formatKelvin(headroomMiddleK)} (${formatKelvin(headroomLowK)} to ${formatKelvin(headroomHighK)})`;
+	const row = (label: string, read: (belief: typeof before) => string) => ({
+		...{ label, before: read(before), after: read(after) }
+	});
+	return {
+		sentence: sayLearnt(learning),
+		rows: fits
+			? [
+					row('Dark days a year', ({ year }) => sayDayCount(year.year)),
+					row('Dark on the planned day', ({ cutOutShare }) => sayOfTwenty(cutOutShare)),
+					row('Headroom on it', range)
+				]
+			: [],
+		method: `${samples} vehicles and mounts drawn with the seed ${seed}; what agrees with the notes so far says as much as ${formatNumber(effectiveSamples)} of them.`
+	};
+}
+
+/** A note with what the model makes of it. */
+export function presentNote({ id, kind, notedOn, notedBy, data, finding }: FieldNoteView): NoteReport {
+	return {
+		id,
+		title: FIELD_NOTE_LABELS[kind],
+		when: `${formatDate(notedOn)}, noted by ${notedBy}`,
+		words: sayData(data),
+		cause: presentCause(finding?.cause ?? null),
+		learning: presentLearning(finding?.learning ?? null)
+	};
+}
+
+const LAWS: Readonly<Record<TrendLaw, string>> = {
+	linear: 'by as much each year',
+	'square-root': 'ever more slowly'
+};
+
+const years = (value: number | null): string => (value === null ? 'more than 30' : formatNumber(value, 1));
+
+const sayYears = ({ low, middle, high }: YearsRange): string =>
+	middle === null ? 'more than 30 years' : `${years(middle)} years (${years(low)} to ${years(high)})`;
+
+/** Capacity tests over time, and where they lead. */
+export function presentTrend({ tests, projections, honest, toldByTests }: CapacityTrend): TrendReport {
+	const by = projections.find(({ law }) => law === honest)!;
+	const why = toldByTests
+		? 'The tests themselves tell which.'
+		: 'The tests do not tell the two apart yet: the more careful one is gone by.';
+	return {
+		sentence: `By ${tests.length === 1 ? 'one test' : `${tests.length} tests`} it is down to 80 % of its rated capacity after ${sayYears(by.toEightyPercent)}, falling ${LAWS[honest]}. ${why}`,
+		rows: projections.map(({ law, toEightyPercent, points }) => {
+			const { low, middle, high } = points[5]!;
+			return {
+				law: LAWS[law],
+				isHonest: law === honest,
+				toEighty: sayYears(toEightyPercent),
+				fiveYears: `${formatPercent(middle)} (${formatPercent(low)} to ${formatPercent(high)})`
+			};
+		}),
+		method:
+			'At 25 °C. Nine chances in ten lie in the brackets; a test is taken to be right to 2 %, a new battery to hold its rated capacity to 5 % (judgement).'
+	};
+}

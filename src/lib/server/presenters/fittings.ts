@@ -1,0 +1,53 @@
+import { formatAmps } from '$lib/format/numbers';
+import type { AgreedItem, FittingView, FollowUpView } from '$lib/schemas/fitting';
+import type { Assessment, FollowUp, Installation, Mount } from '../db/models';
+import { sayProposal } from './outlook/cable';
+
+const SHIELD_WORDS: Readonly<Record<string, string>> = { none: 'none' };
+
+/** What was agreed with an assessment, in the words of a list to tick off. */
+export function listAgreed({ inputs }: Assessment): AgreedItem[] {
+	const { battery, mount, cable, dayPlan } = inputs;
+	const shield = String(mount.survey.shieldKind ?? 'none');
+	return [
+		{ key: 'battery', label: 'Battery', agreed: `${battery.maker} ${battery.model}` },
+		{ key: 'position', label: 'Position', agreed: `${mount.letter}: ${mount.name}` },
+		{ key: 'shield', label: 'Shield', agreed: SHIELD_WORDS[shield] ?? shield.replaceAll('-', ' ') },
+		{ key: 'cable', label: 'Cable', agreed: cable ? sayProposal(cable) : 'not proposed' },
+		{ key: 'fuse', label: 'Fuse', agreed: cable ? formatAmps(cable.fuseRatedA) : 'not proposed' },
+		{ key: 'charger', label: 'Charger', agreed: `at most ${formatAmps(dayPlan.chargerMaxA)}` }
+	];
+}
+
+const presentFollowUp = (
+	{ id, afterMonths, dueOn, doneOn, doneBy, version }: FollowUp,
+	now: string
+): FollowUpView => ({
+	...{ id, afterMonths, dueOn, version },
+	doneOn: doneOn ?? null,
+	doneBy: doneBy ?? null,
+	isOverdue: (doneOn ?? null) === null && dueOn < now
+});
+
+export function presentFitting(
+	{ id: mountId, jobId }: Mount,
+	agreed: Assessment,
+	installation: Installation | null,
+	followUps: readonly FollowUp[],
+	now: string
+): FittingView {
+	return {
+		...{ mountId, jobId, assessmentId: agreed.id },
+		agreed: installation?.agreed ?? listAgreed(agreed),
+		installation: installation && {
+			id: installation.id,
+			fittedOn: installation.fittedOn,
+			fittedBy: installation.fittedBy,
+			serialNumber: installation.serialNumber,
+			note: installation.note,
+			differences: installation.differences,
+			version: installation.version
+		},
+		followUps: followUps.map((followUp) => presentFollowUp(followUp, now))
+	};
+}

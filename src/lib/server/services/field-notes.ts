@@ -1,0 +1,177 @@
+import type { FieldFinding, FieldNoteInput, FieldNotesView } from '$lib/schemas/field-notes';
+import type { SignedInPerson } from '$lib/schemas/people';
+import { ENGINE_VERSION, parseScenario, type Scenario } from '$lib/thermal';
+import { heatLimitsOf } from '$lib/thermal/chemistries';
+import { watchUseLimit } from '$lib/thermal/assess';
+import {
+	checkReading,
+	learnFrom,
+	projectCapacity,
+	weighHeat,
+	type CapacityTrend,
+	type FieldReading,
+	type ReadingDay
+} from '$lib/thermal/field';
+import { EngineInputError } from '$lib/thermal/correlations';
+import { Assessment, FieldNote, Installation, Mount, Person } from '../db/models';
+import { inTransaction } from '../db/transaction';
+import { AppError, notFound } from '../errors';
+import { allow } from '../policies';
+import { presentFieldNote } from '../presenters/field-notes';
+import { recordBy } from './audit';
+import { daysBetween, today } from './days';
+import { afterOthers, workInSlices } from './slices';
+import { touringOf } from './touring-year';
+
+const DRAWS = 512;
+const YEAR_DRAWS = 32;
+const DAYS_A_YEAR = 365.25;
+/** Of a label that turns at a temperature, K: 1 K to 2 K are usual, from memory. */
+const LABEL_WITHIN_K = 1.5;
+
+interface Fitted {
+	installation: Installation;
+	assessment: Assessment;
+}
+
+async function findFitted(person: SignedInPerson, mountId: number): Promise<Fitted> {
+	const { workshopId } = person;
+	const mount = await Mount.findOne({ where: { id: mountId, workshopId, removedAt: null } });
+	if (!mount) throw notFound('mount');
+	const installation = await Installation.findOne({ where: { mountId, workshopId } });
+	if (!installation)
+		throw new AppError('conflict', 'This mount has not been fitted yet: say first when it was.');
+	const assessment = await Assessment.findByPk(installation.assessmentId);
+	if (!assessment) throw notFound('assessment');
+	return { installation, assessment };
+}
+
+/** The mount on a day as hot as was said. */
+function scenarioOn({ inputs }: Assessment, hottestDayC: number): Scenario {
+	const scenario = parseScenario(inputs.scenario);
+	const watched = watchUseLimit(scenario, heatLimitsOf(inputs.battery));
+	return { ...watched, climate: { ...watched.climate, tMax: hottestDayC } };
+}
+
+/** What a note says to the model; null for what says nothing of heat. */
+function readingOf(data: FieldNoteInput): FieldReading | null {
+	if (data.kind === 'peak-label') {
+		const { place, turnedC, notTurnedC } = data;
+		return { kind: 'peak-label', place, turnedC, notTurnedC, withinK: LABEL_WITHIN_K };
+	}
+	if (data.kind !== 'cut-out') return null;
+	const { wentDarkHour, cameBackHour, withinHours } = data;
+	return { kind: 'cut-out', report: { wentDarkHour, cameBackHour, withinHours } };
+}
+
+/** Earlier notes that taught something: labels, and what heat had done. */
+function listReadings(assessment: Assessment, notes: readonly FieldNote[]): ReadingDay[] {
+	return notes.flatMap(({ data, finding }) => {
+		if (data.kind === 'cut-out' && finding?.cause?.finding !== 'explained') return [];
+		const reading = readingOf(data);
+		if (reading === null || !('hottestDayC' in data)) return [];
+		return [{ scenario: scenarioOn(assessment, data.hottestDayC), reading }];
+	});
+}
+
+/** Was it heat, and what does it teach? Worked out in slices, one after the other. */
+async function findOut(
+	assessment: Assessment,
+	earlier: readonly FieldNote[],
+	data: FieldNoteInput,
+	seed: number
+): Promise<FieldFinding | null> {
+	const reading = readingOf(data);
+	if (reading === null || !('hottestDayC' in data)) return null;
+	const scenario = scenarioOn(assessment, data.hottestDayC);
+	return afterOthers(async () => {
+		const cause =
+			reading.kind === 'cut-out'
+				? await workInSlices(weighHeat(scenario, reading.report, { samples: DRAWS, seed }))
+				: null;
+		if (cause && cause.finding !== 'explained') return { cause, learning: null };
+		const { tMax } = parseScenario(assessment.inputs.scenario).climate;
+		const days = [...listReadings(assessment, earlier), { scenario, reading }];
+		const options = { samples: DRAWS, yearSamples: YEAR_DRAWS, seed };
+		const work = learnFrom(scenarioOn(assessment, tMax), days, touringOf(assessment.inputs), options);
+		return { cause, learning: await workInSlices(work) };
+	});
+}
+
+function refuseImpossible(data: FieldNoteInput, fittedOn: string): void {
+	const refuse = (path: string, message: string): never => {
+		throw new AppError('invalid_input', message, [{ path, message }]);
+	};
+	if (data.notedOn > today()) refuse('notedOn', 'The day must not be in the future.');
+	if (data.notedOn < fittedOn) refuse('notedOn', `The day must not be before it was fitted, ${fittedOn}.`);
+	const reading = readingOf(data);
+	if (reading === null) return;
+	try {
+		checkReading(reading);
+	} catch (error) {
+		if (error instanceof EngineInputError) refuse(error.input, error.message);
+		throw error;
+	}
+}
+
+async function notesOf({ id: installationId }: Installation): Promise<FieldNote[]> {
+	return FieldNote.findAll({
+		where: { installationId },
+		order: [
+			['notedOn', 'ASC'],
+			['id', 'ASC']
+		]
+	});
+}
+
+function trendOf({ installation, assessment }: Fitted, notes: readonly FieldNote[]): CapacityTrend | null {
+	const { battery } = assessment.inputs;
+	const tests = notes.flatMap(({ data }) => {
+		if (data.kind !== 'capacity-test') return [];
+		const { notedOn, capacityAh, currentA, cutOffV, tempC } = data;
+		const years = Math.max(daysBetween(installation.fittedOn, notedOn), 0) / DAYS_A_YEAR;
+		return [{ years, capacityAh, currentA, cutOffV, tempC }];
+	});
+	if (tests.length === 0) return null;
+	const isLeadAcid = heatLimitsOf(battery) !== null;
+	return projectCapacity(tests, battery.capacityAh, { isLeadAcid, namedAh: null });
+}
+
+async function show(fitted: Fitted): Promise<FieldNotesView> {
+	const notes = await notesOf(fitted.installation);
+	const people = await Person.findAll({ where: { id: notes.map(({ createdBy }) => createdBy) } });
+	const nameOf = (id: number): string => people.find((person) => person.id === id)?.name ?? '';
+	return {
+		rows: [...notes].reverse().map((note) => presentFieldNote(note, nameOf(note.createdBy))),
+		trend: trendOf(fitted, notes)
+	};
+}
+
+/** What was noted of a fitted battery, the newest first, and where its capacity goes. */
+export async function listFieldNotes(person: SignedInPerson, mountId: number): Promise<FieldNotesView> {
+	allow(person, 'jobs.read');
+	return show(await findFitted(person, mountId));
+}
+
+/** Keeps a note for good, with what the model makes of it. */
+export async function addFieldNote(
+	person: SignedInPerson,
+	mountId: number,
+	data: FieldNoteInput
+): Promise<FieldNotesView> {
+	allow(person, 'mounts.write');
+	const fitted = await findFitted(person, mountId);
+	const { installation, assessment } = fitted;
+	refuseImpossible(data, installation.fittedOn);
+	const earlier = await notesOf(installation);
+	const finding = await findOut(assessment, earlier, data, installation.id);
+	await inTransaction(async (transaction) => {
+		const { kind, notedOn } = data;
+		const row = { workshopId: person.workshopId, installationId: installation.id, createdBy: person.id };
+		const told = { kind, notedOn, data, finding, engineVersion: ENGINE_VERSION };
+		const note = await FieldNote.create({ ...row, ...told }, { transaction });
+		const subject = { type: 'mount', id: mountId };
+		await recordBy(person, 'mount.field-note', subject, transaction, { noteId: note.id, ...data });
+	});
+	return show(fitted);
+}

@@ -1,0 +1,101 @@
+import { describe, expect, it } from 'vitest';
+import { FITTED, makeFitted, makeRecommended } from '../../../../tests/support/fitted';
+import { makeCrew, useTestDatabase } from '../../../../tests/support/services';
+import { Customer, FollowUp, Job, OutgoingMail } from '../db/models';
+import { addDays, addMonths, daysBetween } from './days';
+import { writeCalendar } from './follow-up-calendar';
+import { finishFollowUp, getFitting, saveFitting } from './fittings';
+import { remindDue } from './reminders';
+
+useTestDatabase();
+
+describe('days', () => {
+	it('go on by months to the same day, or to the last of a shorter month', () => {
+		expect(addMonths('2026-01-31', 1)).toBe('2026-02-28');
+		expect(addMonths('2028-01-31', 1)).toBe('2028-02-29');
+		expect(addMonths('2026-11-15', 12)).toBe('2027-11-15');
+		expect(addDays('2026-02-28', 1)).toBe('2026-03-01');
+		expect(daysBetween('2026-01-01', '2027-01-01')).toBe(365);
+	});
+});
+
+describe('what was fitted', () => {
+	it('is held against what was agreed, difference by difference', async () => {
+		const { installer } = await makeCrew();
+		const { mountId, assessment } = await makeRecommended(installer);
+		const before = await getFitting(installer, mountId);
+		expect(before).toMatchObject({ installation: null, followUps: [], assessmentId: assessment.id });
+		expect(before.agreed.map(({ key }) => key)).toContain('battery');
+		const differences = [{ key: 'fuse' as const, fitted: '80 A' }];
+		const fitting = await saveFitting(installer, mountId, { ...FITTED, differences });
+		expect(fitting.installation).toMatchObject({ fittedOn: '2026-01-31', differences });
+		expect(await getFitting(installer, mountId)).toEqual(fitting);
+	});
+
+	it('sets dates after one, six and twelve months, and moves those not done with the day of fitting', async () => {
+		const { installer } = await makeCrew();
+		const { mountId, fitting } = await makeFitted(installer);
+		expect(fitting.followUps.map(({ dueOn }) => dueOn)).toEqual(['2026-02-28', '2026-07-31', '2027-01-31']);
+		const [first] = fitting.followUps;
+		const done = await finishFollowUp(installer, first!.id, first!.version);
+		expect(done.followUps[0]).toMatchObject({ doneBy: installer.name, isOverdue: false });
+		const { version } = done.installation!;
+		const moved = await saveFitting(installer, mountId, { ...FITTED, fittedOn: '2026-02-10', version });
+		expect(moved.followUps.map(({ dueOn }) => dueOn)).toEqual(['2026-02-28', '2026-08-10', '2027-02-10']);
+	});
+
+	it.each([
+		['a day that has not come', { fittedOn: '2999-01-01' }, 'invalid_input'],
+		['an older version', { version: 7 }, 'changed_meanwhile']
+	])('refuses %s', async (_, change, code) => {
+		const { installer } = await makeCrew();
+		const { mountId } = await makeFitted(installer);
+		await expect(saveFitting(installer, mountId, { ...FITTED, ...change })).rejects.toMatchObject({ code });
+	});
+
+	it('waits for a recommendation, and is not there for another workshop', async () => {
+		const { installer } = await makeCrew();
+		const { mountId, otherMountId } = await makeRecommended(installer);
+		await expect(getFitting(installer, otherMountId)).rejects.toMatchObject({ code: 'conflict' });
+		const { installer: neighbour } = await makeCrew();
+		await expect(getFitting(neighbour, mountId)).rejects.toMatchObject({ code: 'not_found' });
+	});
+});
+
+describe('the dates', () => {
+	it('go into a calendar file, each with an identity of its own', async () => {
+		const { installer } = await makeCrew();
+		const { mountId, fitting } = await makeFitted(installer);
+		const text = await writeCalendar(installer, mountId);
+		expect(text.match(/BEGIN:VEVENT/g)).toHaveLength(3);
+		for (const { id } of fitting.followUps) expect(text).toContain(`UID:follow-up-${id}@soakline.invalid`);
+		expect(text).toContain('DTSTART;VALUE=DATE:20260228');
+		expect(await writeCalendar(installer, mountId)).toBe(text);
+	});
+
+	it('are reminded of once, however often and by however many it is looked', async () => {
+		const { installer } = await makeCrew();
+		const { jobId, fitting } = await makeFitted(installer);
+		const job = await Job.findByPk(jobId);
+		await Customer.update({ email: 'ilse@travellers.example' }, { where: { id: job!.customerId } });
+		const where = { workshopId: installer.workshopId, recipient: 'ilse@travellers.example' };
+		await remindDue('2026-02-20');
+		expect(await OutgoingMail.count({ where })).toBe(0);
+		await Promise.all([remindDue('2026-02-21'), remindDue('2026-02-21'), remindDue('2026-02-21')]);
+		await remindDue('2026-02-22');
+		const letters = await OutgoingMail.findAll({ where });
+		expect(letters).toHaveLength(1);
+		expect(letters[0]!.textBody).toContain('on 28 February 2026 or thereabouts');
+		const reminded = await FollowUp.findByPk(fitting.followUps[0]!.id);
+		expect(reminded!.remindedAt).not.toBeNull();
+	});
+
+	it('that were done are not reminded of', async () => {
+		const { installer } = await makeCrew();
+		const { fitting } = await makeFitted(installer);
+		for (const { id, version } of fitting.followUps) await finishFollowUp(installer, id, version);
+		await remindDue('2030-01-01');
+		const reminded = await FollowUp.findAll({ where: { id: fitting.followUps.map(({ id }) => id) } });
+		expect(reminded.map(({ remindedAt }) => remindedAt)).toEqual([null, null, null]);
+	});
+});

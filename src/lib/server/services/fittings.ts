@@ -1,0 +1,131 @@
+import type { Transaction } from 'sequelize';
+import { FOLLOW_UP_MONTHS, type FittingChange, type FittingView } from '$lib/schemas/fitting';
+import type { SignedInPerson } from '$lib/schemas/people';
+import { Assessment, FollowUp, Installation, Mount, Recommendation } from '../db/models';
+import { inTransaction } from '../db/transaction';
+import { AppError, changedMeanwhile, notFound } from '../errors';
+import { allow } from '../policies';
+import { listAgreed, presentFitting } from '../presenters/fittings';
+import { recordBy } from './audit';
+import { addMonths, today } from './days';
+import { saveVersioned } from './records';
+
+const NOTHING_AGREED = 'Nothing is agreed for this mount yet: recommend it first.';
+
+async function findMount(person: SignedInPerson, mountId: number): Promise<Mount> {
+	const mount = await Mount.findOne({
+		where: { id: mountId, workshopId: person.workshopId, removedAt: null }
+	});
+	if (!mount) throw notFound('mount');
+	return mount;
+}
+
+/** The assessment that the newest recommendation of the mount rests on. */
+async function findAgreed({ id: mountId, jobId, workshopId }: Mount): Promise<Assessment> {
+	const recommendations = await Recommendation.findAll({
+		where: { jobId, workshopId },
+		order: [['id', 'DESC']]
+	});
+	const ids = recommendations.map(({ assessmentId }) => assessmentId);
+	const assessments = await Assessment.findAll({ where: { id: ids, mountId } });
+	const [agreed] = ids.flatMap((id) => assessments.find((each) => each.id === id) ?? []);
+	if (!agreed) throw new AppError('conflict', NOTHING_AGREED);
+	return agreed;
+}
+
+async function show(mount: Mount): Promise<FittingView> {
+	const installation = await Installation.findOne({ where: { mountId: mount.id } });
+	const followUps = installation
+		? await FollowUp.findAll({ where: { installationId: installation.id }, order: [['dueOn', 'ASC']] })
+		: [];
+	const agreed = installation
+		? await Assessment.findByPk(installation.assessmentId)
+		: await findAgreed(mount);
+	if (!agreed) throw notFound('assessment');
+	return presentFitting(mount, agreed, installation, followUps, today());
+}
+
+/** What was agreed for a mount, what was fitted, and when it is to be looked at. */
+export async function getFitting(person: SignedInPerson, mountId: number): Promise<FittingView> {
+	allow(person, 'jobs.read');
+	return show(await findMount(person, mountId));
+}
+
+/** The dates by rule; those of looks that were not done move with the day of fitting. */
+async function setFollowUps(
+	{ id, workshopId, fittedOn }: Installation,
+	transaction: Transaction
+): Promise<void> {
+	for (const afterMonths of FOLLOW_UP_MONTHS) {
+		const dueOn = addMonths(fittedOn, afterMonths);
+		const [followUp, isNew] = await FollowUp.findOrCreate({
+			where: { installationId: id, afterMonths },
+			defaults: { workshopId, installationId: id, afterMonths, dueOn },
+			transaction
+		});
+		if (!isNew && followUp.doneOn === null && followUp.dueOn !== dueOn) {
+			await followUp.update({ dueOn }, { transaction });
+		}
+	}
+}
+
+function refuseFuture({ fittedOn }: FittingChange): void {
+	if (fittedOn <= today()) return;
+	const message = 'Fitted on must not be in the future.';
+	throw new AppError('invalid_input', message, [{ path: 'fittedOn', message }]);
+}
+
+/** Keeps what was fitted against what was agreed, and sets the dates at which it is to be looked at. */
+export async function saveFitting(
+	person: SignedInPerson,
+	mountId: number,
+	change: FittingChange
+): Promise<FittingView> {
+	allow(person, 'mounts.write');
+	refuseFuture(change);
+	const { version, ...fitted } = change;
+	return inTransaction(async (transaction) => {
+		const mount = await findMount(person, mountId);
+		let installation = await Installation.findOne({ where: { mountId }, lock: true, transaction });
+		if (installation) {
+			if (version === null) throw changedMeanwhile('fitting');
+			await saveVersioned(installation, 'fitting', version, fitted, transaction);
+		} else {
+			const agreed = await findAgreed(mount);
+			const { workshopId, jobId } = mount;
+			const made = { workshopId, jobId, mountId, assessmentId: agreed.id, createdBy: person.id };
+			installation = await Installation.create(
+				{ ...made, ...fitted, agreed: listAgreed(agreed) },
+				{ transaction }
+			);
+		}
+		await setFollowUps(installation, transaction);
+		await recordBy(person, 'mount.fitted', { type: 'mount', id: mountId }, transaction, { ...fitted });
+		return show(mount);
+	});
+}
+
+/** Somebody has looked at the battery. */
+export async function finishFollowUp(
+	person: SignedInPerson,
+	followUpId: number,
+	version: number
+): Promise<FittingView> {
+	allow(person, 'mounts.write');
+	return inTransaction(async (transaction) => {
+		const where = { id: followUpId, workshopId: person.workshopId };
+		const followUp = await FollowUp.findOne({ where, transaction });
+		if (!followUp) throw notFound('follow-up');
+		const installation = await Installation.findByPk(followUp.installationId, { transaction });
+		const mount = await findMount(person, installation!.mountId);
+		const done =
+			followUp.doneOn === null ? { doneOn: today(), doneBy: person.name } : { doneOn: null, doneBy: null };
+		await saveVersioned(followUp, 'follow-up', version, done, transaction);
+		const subject = { type: 'mount', id: mount.id };
+		await recordBy(person, 'mount.follow-up', subject, transaction, {
+			afterMonths: followUp.afterMonths,
+			...done
+		});
+		return show(mount);
+	});
+}

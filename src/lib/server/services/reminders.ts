@@ -1,0 +1,73 @@
+import { QueryTypes } from 'sequelize';
+import { connection } from '../db/connection';
+import { Customer, FollowUp, Installation, Job, Vehicle, Workshop } from '../db/models';
+import { inTransaction } from '../db/transaction';
+import { logger } from '../logger';
+import { postLetter } from '../mail/outbox';
+import { writeReminder } from '../mail/reminder-letter';
+import { addDays, today } from './days';
+
+const EVERY_MS = 60 * 60_000;
+/** A reminder goes out so long before the date. */
+const DAYS_AHEAD = 7;
+const BATCH = 50;
+
+/** Of a row that two processes look at, one has it and the other goes on: nothing is sent twice. */
+const DUE = `
+	SELECT id FROM follow_ups
+	WHERE done_on IS NULL AND reminded_at IS NULL AND due_on <= :until
+	ORDER BY due_on, id LIMIT ${BATCH} FOR UPDATE SKIP LOCKED
+`;
+
+async function postReminder(
+	followUp: FollowUp,
+	transaction: Parameters<typeof postLetter>[1]
+): Promise<void> {
+	const installation = await Installation.findByPk(followUp.installationId, { transaction });
+	const job = await Job.findByPk(installation!.jobId, { transaction });
+	const [customer, vehicle, workshop] = await Promise.all([
+		Customer.findByPk(job!.customerId, { transaction }),
+		Vehicle.findByPk(job!.vehicleId, { transaction }),
+		Workshop.findByPk(followUp.workshopId, { transaction })
+	]);
+	const recipient = customer!.email || workshop!.email;
+	await followUp.update({ remindedAt: new Date() }, { transaction });
+	if (!recipient) return;
+	const letter = writeReminder({ followUp, customer: customer!, vehicle: vehicle!, workshop: workshop! });
+	await postLetter({ workshopId: followUp.workshopId, recipient, ...letter }, transaction);
+}
+
+/** Puts the reminders that are due into the outbox, each in one transaction with the note that it is there. */
+export async function remindDue(now = today()): Promise<number> {
+	return inTransaction(async (transaction) => {
+		const rows = await connection().query<{ id: number }>(DUE, {
+			replacements: { until: addDays(now, DAYS_AHEAD) },
+			type: QueryTypes.SELECT,
+			transaction
+		});
+		const due = await FollowUp.findAll({ where: { id: rows.map(({ id }) => id) }, transaction });
+		for (const followUp of due) await postReminder(followUp, transaction);
+		return due.length;
+	});
+}
+
+let timer: NodeJS.Timeout | undefined;
+
+async function remindAllDue(): Promise<void> {
+	while ((await remindDue()) === BATCH);
+}
+
+function look(): void {
+	remindAllDue().catch((error: unknown) => logger.error({ err: error }, 'reminders failed'));
+}
+
+/** Looks at once, for what came due while nothing ran, and then every hour. */
+export function startReminders(): void {
+	timer ??= setInterval(look, EVERY_MS);
+	look();
+}
+
+export function stopReminders(): void {
+	clearInterval(timer);
+	timer = undefined;
+}

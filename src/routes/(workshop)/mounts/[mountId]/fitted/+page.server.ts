@@ -1,0 +1,52 @@
+import { redirect } from '@sveltejs/kit';
+import { idSchema, versionSchema } from '$lib/schemas/fields';
+import { fittingFormSchema, fromFittingForm, toFittingForm } from '$lib/schemas/fitting';
+import { saveEdited } from '$lib/server/http/edit-form';
+import { loadForm } from '$lib/server/http/forms';
+import { guard, orPageError } from '$lib/server/http/guard';
+import { pageId } from '$lib/server/http/page-id';
+import { validate } from '$lib/server/http/validate';
+import { finishFollowUp, getFitting, saveFitting } from '$lib/server/services/fittings';
+import { getJob } from '$lib/server/services/jobs';
+import { openMount } from '../open-mount';
+import type { Actions, PageServerLoad } from './$types';
+
+export const load: PageServerLoad = async (event) => {
+	const person = guard(event, 'mounts.write');
+	const mount = await openMount(person, event.params);
+	const fitting = await orPageError(getFitting(person, mount.id));
+	const job = await orPageError(getJob(person, mount.jobId));
+	const known = fitting.installation ? toFittingForm(fitting.installation) : { fittedBy: person.name };
+	return {
+		...{ mount, fitting },
+		job: { id: job.id, number: job.number },
+		form: await loadForm(fittingFormSchema, known),
+		isSaved: event.url.searchParams.has('saved')
+	};
+};
+
+export const actions: Actions = {
+	save: (event) => {
+		const mountId = pageId(event.params.mountId);
+		return saveEdited(event, {
+			action: 'mounts.write',
+			schema: fittingFormSchema,
+			save: async (person, form) => {
+				await saveFitting(person, mountId, fromFittingForm(form));
+				return `/mounts/${mountId}/fitted?saved`;
+			},
+			newest: async (person) => toFittingForm((await getFitting(person, mountId)).installation)
+		});
+	},
+	done: async (event) => {
+		const person = guard(event, 'mounts.write');
+		const { id } = await openMount(person, event.params);
+		const sent = await event.request.formData();
+		const change = async () => {
+			const followUpId = validate(idSchema, sent.get('followUp') ?? undefined);
+			await finishFollowUp(person, followUpId, validate(versionSchema, sent.get('version') ?? undefined));
+		};
+		await orPageError(change());
+		redirect(303, `/mounts/${id}/fitted#dates`);
+	}
+};
