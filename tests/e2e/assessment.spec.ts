@@ -63,7 +63,7 @@ test('an assessment says beside its number how sure it is, how often, what it wo
 	await expect(page.getByRole('img', { name: /nine in ten between/ }).first()).toBeVisible();
 	await expect(page.getByRole('term').filter({ hasText: /^Cut-out days a year$/ })).toBeVisible();
 	await chapter.getByText('How that settled as more days were drawn').click();
-	await expect(chapter.getByRole('rowheader', { name: '512' })).toBeVisible();
+	await expect(chapter.getByRole('rowheader', { name: '128' })).toBeVisible();
 	await expectNoViolations(page);
 	await page.emulateMedia({ colorScheme: 'dark' });
 	await expectNoViolations(page);

@@ -53,12 +53,21 @@ async function findIds(context: APIRequestContext, customer: { name: string; ema
 	const books = await read<{ rows: Record[] }>(context, '/api/v1/books');
 	const jobPage = await (await context.get(`/jobs/${jobId}/recommendation`)).text();
 	const mailbox = await (await context.get('/mailbox')).text();
+	const recommendationId = /\/recommendations\/(\d+)\/print/.exec(jobPage)?.[1] ?? 'none';
+	const { assessment } = await read<{ assessment: { mountId: number } }>(
+		context,
+		`/api/v1/recommendations/${recommendationId}`
+	);
+	const mountId = String(assessment.mountId);
+	const fitting = await read<{ followUps: Record[] }>(context, `/api/v1/mounts/${mountId}/fitting`);
 	return {
 		jobId,
-		mountId: of(job.mounts[0]),
+		mountId,
+		followUpId: of(fitting.followUps[0]),
+		kind: 'inspection',
 		step: 'exhaust',
 		assessmentId: of(assessments.rows[0]),
-		recommendationId: /\/recommendations\/(\d+)\/print/.exec(jobPage)?.[1] ?? 'none',
+		recommendationId,
 		batteryId: of(job.battery),
 		placeId: of(job.place),
 		customerId: of(job.customer),

@@ -77,7 +77,16 @@ export interface SearchOptions {
 
 type Offered = Remedy & { offered: boolean };
 
-/** The remedies with the workshop's own figures. */
+/**
+ * The remedies with the workshop's own figures.
+ *
+ * @param offers money in the workshop's currency, hours, and whether it is offered, by key
+ * @returns every remedy; one without an offer with its usual figures, and offered
+ * Validity: offers of keys that are no remedy's are passed over.
+ * Source: the workshop; the usual figures are judgement.
+ * @example
+ * priceRemedies([{ key: 'wrap', cost: 75, hours: 1, offered: true }])[0].cost; // 75
+ */
 export function priceRemedies(offers: readonly RemedyOffer[] = []): Offered[] {
 	const byKey = new Map(offers.map((offer) => [offer.key, offer]));
 	return REMEDIES.map((remedy) => {

@@ -5,7 +5,16 @@ import type { ChemistryKey } from './types';
 /** The highest that the table of fields lets a cut-off be: where the latches of a battery without a BMS stand. */
 export const NEVER_CUT_C = 1000;
 
-/** Whether electronics stand behind the limits of a scenario: without them nothing measures or switches. */
+/**
+ * Whether electronics stand behind the limits of a scenario: without them nothing measures or switches.
+ *
+ * @param bms the latches of a scenario, °C
+ * @returns false where the charge latch stands at 1000 °C
+ * Validity: scenarios that were built from a record, or written by who knows this.
+ * Source: our own.
+ * @example
+ * hasLatches({ charge: { cut: 60, reset: 50 } }); // true
+ */
 export const hasLatches = ({ charge }: Pick<BmsSettings, 'charge'>): boolean => charge.cut < NEVER_CUT_C;
 
 /** What a record says of heat: of a battery with a BMS its cut-offs, of one without its limits; the rest is empty. */
@@ -50,7 +59,16 @@ export type CutOffs = { kind: 'cut-offs' } & Filled<CutOffField>;
 export type HeatLimits = { kind: 'heat-limits'; chemistry: ChemistryKey } & Filled<HeatLimitField>;
 export type HeatGuard = CutOffs | HeatLimits;
 
-/** The fields of a record that a battery of this chemistry has. */
+/**
+ * The fields of a record that a battery of this chemistry has.
+ *
+ * @param chemistry its key in the table
+ * @returns the cut-offs of a battery with a BMS, the limits of one without
+ * Validity: keys of the table.
+ * Source: the table of chemistries.
+ * @example
+ * heatFieldsOf('lead-acid-agm').includes('highestUseC'); // true
+ */
 export function heatFieldsOf(chemistry: ChemistryKey): readonly (CutOffField | HeatLimitField)[] {
 	return chemistryOf(chemistry).hasBms ? CUT_OFF_FIELDS : HEAT_LIMIT_FIELDS;
 }
@@ -86,7 +104,14 @@ export function guardOf(battery: HeatFields): HeatGuard {
 			};
 }
 
-/** The limits of a battery that nothing switches off; null for one with a BMS. */
+/**
+ * The limits of a battery that nothing switches off.
+ *
+ * @param battery the record
+ * @returns its limits; null for one with a BMS
+ * Validity: as guardOf.
+ * Source: as guardOf.
+ */
 export function heatLimitsOf(battery: HeatFields): HeatLimits | null {
 	const guard = guardOf(battery);
 	return guard.kind === 'heat-limits' ? guard : null;

@@ -63,6 +63,8 @@ const STANDING_ASSUMPTIONS = [
  * @param inputs see SurveyInputs; altitude in m, coefficients by group and key as in the table of scenario fields
  * @returns the scenario, one derivation for each derived value, and the assumptions in plain sentences
  * @throws EngineInputError where a dimension is not above zero or the altitude is outside −500…11000 m
+ * Validity: as the correlations that each derivation names.
+ * Source: as each derivation says; judgement where nothing is measured.
  * @example
  * const vehicle = { massKg: 2900, dragAreaM2: 1.35, towMassKg: 0, towDragAreaM2: 0 };
  * const size = { lengthMm: 330, widthMm: 172, heightMm: 215, massKg: 12.6 };

@@ -3,7 +3,16 @@ import { normalQuantile } from '../statistics';
 import type { Scenario } from '../types';
 import { PRIORS, type Prior, type Spread } from './priors';
 
-/** A copy whose groups and legs may be changed. */
+/**
+ * A copy whose groups and legs may be changed.
+ *
+ * @param scenario whole scenario; not changed
+ * @returns one with groups and legs of its own
+ * Validity: every scenario that parseScenario made.
+ * Source: our own.
+ * @example
+ * copyScenario(defaultScenario([{ minutes: 60 }])).legs.length; // 1
+ */
 export function copyScenario(scenario: Scenario): Scenario {
 	const { shield, bms } = scenario;
 	return {
@@ -25,7 +34,20 @@ export function copyScenario(scenario: Scenario): Scenario {
 	};
 }
 
-/** A value moved by z standard deviations of its spread. */
+/**
+ * A value moved by z standard deviations of its spread.
+ *
+ *     shift: v + σz,  factor: v e^(σz),  share: v/(v + (1 − v) e^(−σz))
+ *
+ * @param spread its kind and σ
+ * @param z standard normal number
+ * @param value as estimated
+ * @returns the moved value; a share of 0 or 1 stays what it is
+ * Validity: all numbers; shares within 0…1.
+ * Source: definitions of a normal, a lognormal and a logit-normal spread.
+ * @example
+ * moveBy({ kind: 'factor', sigma: 0.5 }, 2, 10); // 27.183
+ */
 export function moveBy({ kind, sigma }: Spread, z: number, value: number): number {
 	if (kind === 'shift') return value + sigma * z;
 	if (kind === 'factor') return value * expOf(sigma * z);

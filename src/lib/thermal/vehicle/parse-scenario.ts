@@ -148,6 +148,8 @@ function parseLegs(input: unknown): Leg[] {
  * @param input anything; absent groups and fields take the defaults, an absent or null shield is none
  * @returns a whole scenario that the engine can run
  * @throws ScenarioError with code, path, value and limit
+ * Validity: the limits of SCENARIO_FIELDS.
+ * Source: the thermal model, for fields, limits and defaults.
  * @example
  * parseScenario({ legs: [{ minutes: 60 }] }).charger.maxA; // 40
  */
@@ -168,6 +170,8 @@ export function parseScenario(input: unknown): Scenario {
  * @param legs at least one leg with its minutes; the rest of a leg takes its defaults
  * @returns a whole scenario that the engine can run
  * @throws ScenarioError when a leg is not possible
+ * Validity: as parseScenario.
+ * Source: the defaults of the thermal model.
  * @example
  * defaultScenario([{ minutes: 60 }]).climate.tMax; // 42
  */

@@ -35,6 +35,7 @@ export const load: PageServerLoad = async (event) => {
 
 export const actions: Actions = {
 	default: (event) => {
+		guard(event, 'mounts.write');
 		const mountId = pageId(event.params.mountId);
 		const kind = readKind(event.params.kind);
 		return saveForm(event, {
