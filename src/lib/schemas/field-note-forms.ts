@@ -23,16 +23,13 @@ export const WITHIN_CHOICES = [
 	{ value: '2', label: 'To two hours' }
 ] as const;
 
-const { kind: _1, ...capacityTest } = capacityTestSchema.shape;
-const { kind: _2, ...inspection } = inspectionSchema.shape;
-const { kind: _3, ...peakLabel } = peakLabelSchema.shape;
 const { notedOn, hottestDayC } = cutOutSchema.shape;
 
 /** The forms by kind, as people fill them in. */
 export const FIELD_NOTE_FORMS = {
-	'capacity-test': z.object(capacityTest),
-	inspection: z.object(inspection),
-	'peak-label': z.object(peakLabel),
+	'capacity-test': capacityTestSchema.omit({ kind: true }),
+	inspection: inspectionSchema.omit({ kind: true }),
+	'peak-label': peakLabelSchema.omit({ kind: true }),
 	'cut-out': z.object({
 		notedOn,
 		wentDark: clock('Went dark'),

@@ -1,4 +1,4 @@
-import { findGasNeeds, type ChemistryKey } from '../thermal/chemistries';
+import { chemistryOf, findGasNeeds, type ChemistryKey } from '../thermal/chemistries';
 import type { PositionKind } from '../thermal/survey/types';
 
 /** What the questions before drilling depend on. */
@@ -41,7 +41,7 @@ const PROTECTION: Readonly<Record<PositionKind, { code: string; because: string 
 const isInside = ({ positionKind }: PreDrillCase): boolean =>
 	positionKind === 'cabin' || positionKind === 'cargo-area';
 const gasOf = ({ chemistry, capacityAh }: PreDrillCase) => findGasNeeds(chemistry, capacityAh);
-const isLithium = ({ chemistry }: PreDrillCase): boolean => !chemistry.startsWith('lead-acid');
+const isLithium = ({ chemistry }: PreDrillCase): boolean => chemistryOf(chemistry).family === 'lithium';
 
 function askForAir(of: PreDrillCase): string {
 	const { openingCm2 = 0, sparkFreeMm = 0 } = gasOf(of) ?? {};

@@ -1,18 +1,24 @@
 import { formatAmps } from '$lib/format/numbers';
 import type { AgreedItem, FittingView, FollowUpView } from '$lib/schemas/fitting';
+import type { SurveyAnswers } from '$lib/schemas/survey';
+import { describeAssumed, SURVEY_FIELDS } from '$lib/thermal/survey';
 import type { Assessment, FollowUp, Installation, Mount } from '../db/models';
 import { sayProposal } from './outlook/cable';
 
-const SHIELD_WORDS: Readonly<Record<string, string>> = { none: 'none' };
+const SHIELD = SURVEY_FIELDS.shieldKind;
+
+/** In the words of the survey; where nobody said, as it was taken to be. */
+function sayShield({ shieldKind }: SurveyAnswers): string {
+	return SHIELD.choices.find(({ value }) => value === shieldKind)?.label ?? describeAssumed(SHIELD);
+}
 
 /** What was agreed with an assessment, in the words of a list to tick off. */
 export function listAgreed({ inputs }: Assessment): AgreedItem[] {
 	const { battery, mount, cable, dayPlan } = inputs;
-	const shield = String(mount.survey.shieldKind ?? 'none');
 	return [
 		{ key: 'battery', label: 'Battery', agreed: `${battery.maker} ${battery.model}` },
 		{ key: 'position', label: 'Position', agreed: `${mount.letter}: ${mount.name}` },
-		{ key: 'shield', label: 'Shield', agreed: SHIELD_WORDS[shield] ?? shield.replaceAll('-', ' ') },
+		{ key: 'shield', label: 'Shield', agreed: sayShield(mount.survey) },
 		{ key: 'cable', label: 'Cable', agreed: cable ? sayProposal(cable) : 'not proposed' },
 		{ key: 'fuse', label: 'Fuse', agreed: cable ? formatAmps(cable.fuseRatedA) : 'not proposed' },
 		{ key: 'charger', label: 'Charger', agreed: `at most ${formatAmps(dayPlan.chargerMaxA)}` }

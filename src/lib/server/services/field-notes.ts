@@ -13,13 +13,14 @@ import {
 	type ReadingDay
 } from '$lib/thermal/field';
 import { EngineInputError } from '$lib/thermal/correlations';
-import { Assessment, FieldNote, Installation, Mount, Person } from '../db/models';
+import { Assessment, FieldNote, Installation, Person } from '../db/models';
 import { inTransaction } from '../db/transaction';
 import { AppError, notFound } from '../errors';
 import { allow } from '../policies';
 import { presentFieldNote } from '../presenters/field-notes';
 import { recordBy } from './audit';
 import { daysBetween, today } from './days';
+import { findStandingMount } from './mounts';
 import { afterOthers, workInSlices } from './slices';
 import { touringOf } from './touring-year';
 
@@ -35,10 +36,8 @@ interface Fitted {
 }
 
 async function findFitted(person: SignedInPerson, mountId: number): Promise<Fitted> {
-	const { workshopId } = person;
-	const mount = await Mount.findOne({ where: { id: mountId, workshopId, removedAt: null } });
-	if (!mount) throw notFound('mount');
-	const installation = await Installation.findOne({ where: { mountId, workshopId } });
+	const { id, workshopId } = await findStandingMount(person, mountId);
+	const installation = await Installation.findOne({ where: { mountId: id, workshopId } });
 	if (!installation)
 		throw new AppError('conflict', 'This mount has not been fitted yet: say first when it was.');
 	const assessment = await Assessment.findByPk(installation.assessmentId);

@@ -1,24 +1,17 @@
 import type { Transaction } from 'sequelize';
 import { FOLLOW_UP_MONTHS, type FittingChange, type FittingView } from '$lib/schemas/fitting';
 import type { SignedInPerson } from '$lib/schemas/people';
-import { Assessment, FollowUp, Installation, Mount, Recommendation } from '../db/models';
+import { Assessment, FollowUp, Installation, Recommendation, type Mount } from '../db/models';
 import { inTransaction } from '../db/transaction';
 import { AppError, changedMeanwhile, notFound } from '../errors';
 import { allow } from '../policies';
 import { listAgreed, presentFitting } from '../presenters/fittings';
 import { recordBy } from './audit';
 import { addMonths, today } from './days';
+import { findStandingMount } from './mounts';
 import { saveVersioned } from './records';
 
 const NOTHING_AGREED = 'Nothing is agreed for this mount yet: recommend it first.';
-
-async function findMount(person: SignedInPerson, mountId: number): Promise<Mount> {
-	const mount = await Mount.findOne({
-		where: { id: mountId, workshopId: person.workshopId, removedAt: null }
-	});
-	if (!mount) throw notFound('mount');
-	return mount;
-}
 
 /** The assessment that the newest recommendation of the mount rests on. */
 async function findAgreed({ id: mountId, jobId, workshopId }: Mount): Promise<Assessment> {
@@ -48,7 +41,7 @@ async function show(mount: Mount): Promise<FittingView> {
 /** What was agreed for a mount, what was fitted, and when it is to be looked at. */
 export async function getFitting(person: SignedInPerson, mountId: number): Promise<FittingView> {
 	allow(person, 'jobs.read');
-	return show(await findMount(person, mountId));
+	return show(await findStandingMount(person, mountId));
 }
 
 /** The dates by rule; those of looks that were not done move with the day of fitting. */
@@ -85,7 +78,7 @@ export async function saveFitting(
 	refuseFuture(change);
 	const { version, ...fitted } = change;
 	return inTransaction(async (transaction) => {
-		const mount = await findMount(person, mountId);
+		const mount = await findStandingMount(person, mountId);
 		let installation = await Installation.findOne({ where: { mountId }, lock: true, transaction });
 		if (installation) {
 			if (version === null) throw changedMeanwhile('fitting');
@@ -117,7 +110,7 @@ export async function finishFollowUp(
 		const followUp = await FollowUp.findOne({ where, transaction });
 		if (!followUp) throw notFound('follow-up');
 		const installation = await Installation.findByPk(followUp.installationId, { transaction });
-		const mount = await findMount(person, installation!.mountId);
+		const mount = await findStandingMount(person, installation!.mountId);
 		const done =
 			followUp.doneOn === null ? { doneOn: today(), doneBy: person.name } : { doneOn: null, doneBy: null };
 		await saveVersioned(followUp, 'follow-up', version, done, transaction);

@@ -46,7 +46,7 @@ async function findMount(person: SignedInPerson, mountId: number, transaction?: 
 }
 
 /** A mount that was removed is not there, except for who puts it back. */
-async function findStanding(
+export async function findStandingMount(
 	person: SignedInPerson,
 	mountId: number,
 	transaction?: Transaction
@@ -68,7 +68,7 @@ export async function listMounts(person: SignedInPerson, jobId: number): Promise
 
 export async function getMount(person: SignedInPerson, mountId: number): Promise<MountView> {
 	allow(person, 'jobs.read');
-	return presentMount(await findStanding(person, mountId));
+	return presentMount(await findStandingMount(person, mountId));
 }
 
 export async function addMount(person: SignedInPerson, jobId: number, input: MountInput): Promise<MountView> {
@@ -113,7 +113,7 @@ export async function saveSurvey(
 	if (complete) refuseUnanswered(survey);
 	const { positionKind } = survey;
 	return inTransaction(async (transaction) => {
-		const mount = await findStanding(person, mountId, transaction);
+		const mount = await findStandingMount(person, mountId, transaction);
 		const changes = { survey, positionKind, surveyComplete: complete };
 		await saveVersioned(mount, 'survey', version, changes, transaction);
 		const subject = { type: 'mount', id: mount.id };
@@ -130,7 +130,7 @@ export async function saveCable(
 ): Promise<MountView> {
 	allow(person, 'mounts.write');
 	return inTransaction(async (transaction) => {
-		const mount = await findStanding(person, mountId, transaction);
+		const mount = await findStandingMount(person, mountId, transaction);
 		await saveVersioned(mount, 'cable', version, { cable }, transaction);
 		await recordBy(person, 'mount.cable', { type: 'mount', id: mount.id }, transaction, { cable });
 		return presentMount(mount);
@@ -140,7 +140,7 @@ export async function saveCable(
 export async function removeMount(person: SignedInPerson, mountId: number): Promise<MountView> {
 	allow(person, 'mounts.write');
 	return inTransaction(async (transaction) => {
-		const mount = await findStanding(person, mountId, transaction);
+		const mount = await findStandingMount(person, mountId, transaction);
 		await mount.update({ removedAt: new Date() }, { transaction });
 		await recordBy(person, 'mount.removed', { type: 'mount', id: mount.id }, transaction);
 		return presentMount(mount);

@@ -10,12 +10,13 @@ import {
 	type PreDrillView
 } from '$lib/schemas/pre-drill';
 import { preDrillQuestionsFor, type PreDrillQuestion } from '$lib/schemas/pre-drill-questions';
-import { BatteryRecord, Job, Mount, PreDrillCheck } from '../db/models';
+import { BatteryRecord, Job, PreDrillCheck, type Mount } from '../db/models';
 import { inTransaction } from '../db/transaction';
-import { AppError, notFound } from '../errors';
+import { AppError } from '../errors';
 import { allow } from '../policies';
 import { presentPreDrill, presentSnapshot } from '../presenters/pre-drill';
 import { recordBy } from './audit';
+import { findStandingMount } from './mounts';
 import { saveVersioned } from './records';
 
 const NO_BATTERY = 'The questions depend on the battery: choose the battery of the job first.';
@@ -26,9 +27,7 @@ interface Asked {
 }
 
 async function findAsked(person: SignedInPerson, mountId: number): Promise<Asked> {
-	const where = { id: mountId, workshopId: person.workshopId, removedAt: null };
-	const mount = await Mount.findOne({ where });
-	if (!mount) throw notFound('mount');
+	const mount = await findStandingMount(person, mountId);
 	const job = await Job.findByPk(mount.jobId, { attributes: ['batteryRecordId'] });
 	const battery = job?.batteryRecordId ? await BatteryRecord.findByPk(job.batteryRecordId) : null;
 	if (!battery) throw new AppError('conflict', NO_BATTERY);

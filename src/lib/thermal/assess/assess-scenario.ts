@@ -2,12 +2,12 @@ import type { HeatLimits } from '../chemistries/guard';
 import type { MinuteSeries, Scenario, SimulationResult } from '../types';
 import { parseScenario } from '../vehicle/parse-scenario';
 import { runScenario } from '../vehicle/simulate';
+import { findSpans, sumHours } from '../vehicle/spans';
 import { ENGINE_VERSION } from '../version';
 import { thinCurves } from './curves';
 import { keepLedger } from './heat-ledger';
 import { weighHeat } from './heat-limits';
 import { countMissedHours } from './missed-charge';
-import { findSpans, sumHours } from './spans';
 import type { Assessment, DoneAssessment, LegSpan } from './types';
 import { judgeHeat, judgeOutcome } from './verdict';
 

@@ -1,6 +1,7 @@
 import type { HeatLimits } from '../chemistries/guard';
 import type { Scenario } from '../types';
 import { copyScenario, drawScenario } from '../uncertainty/draw-scenario';
+import { partOf } from '../uncertainty/finish-work';
 import { PRIORS } from '../uncertainty/priors';
 import { scrambledSobolPoint } from '../statistics';
 import { OutcomeRunner } from '../vehicle/outcome-run';
@@ -245,7 +246,7 @@ export function* searchRemedies(scenario: Scenario, options: SearchOptions): Gen
 		if (result.cutOutShare === null) {
 			const progress = SEARCH_SHARE + (1 - SEARCH_SHARE) * Math.min(++asked / MOST_CHANCES, 1);
 			const changed = applyAll(scenario, results.get(result)!);
-			result.cutOutShare = yield* mapProgress(findCutOutShare(changed, runner, options), progress);
+			result.cutOutShare = yield* partOf(findCutOutShare(changed, runner, options), () => progress);
 		}
 		return result.cutOutShare;
 	};
@@ -271,13 +272,4 @@ export function* searchRemedies(scenario: Scenario, options: SearchOptions): Gen
 			...(least === null && rides.length > MOST_CHANCES ? [SAY_MOST_CHANCES] : [])
 		]
 	};
-}
-
-/** Goes on with a work that has no measure of its own, at the progress given. */
-function* mapProgress<T>(work: Generator<void, T>, progress: number): Generator<number, T> {
-	for (;;) {
-		const step = work.next();
-		if (step.done) return step.value;
-		yield progress;
-	}
 }

@@ -1,4 +1,7 @@
 import type { BmsEvent, HourlyRow, NodeValues, Surface } from '../types';
+import type { HourSpan } from '../vehicle/spans';
+
+export type { HourSpan };
 
 export type MountVerdict = 'rides-it-out' | 'runs-close' | 'cuts-out';
 
@@ -28,13 +31,6 @@ export interface LedgerEntry {
 	 * Outside air: how far the cells still lag behind its rise (negative) or fall.
 	 */
 	kelvin: number;
-}
-
-/** A stretch of the run; `open` when the run ended before it did. */
-export interface HourSpan {
-	fromHour: number;
-	toHour: number;
-	open: boolean;
 }
 
 /** One leg of the day as a strip along the clock. */
@@ -103,7 +99,7 @@ export interface DoneAssessment {
 	darkHours: number;
 	/** While charging was stopped by heat. */
 	chargeSpans: HourSpan[];
-	/** What the battery would have taken meanwhile, Ah (on the grid of minutes), and for how long before it was full. */
+	/** What the battery would have taken meanwhile, Ah, and for how long before it was full (on the grid of minutes). */
 	chargeMissedAh: number;
 	chargeMissedHours: number;
 	peakCellsC: number;

@@ -31,7 +31,7 @@ export function judgeHeat({ chargedTooHot }: { chargedTooHot: boolean }, headroo
  */
 export function judgeOutcome(
 	{ battery, bms }: Scenario,
-	outcome: Omit<Outcome, 'darkHours' | 'events'>,
+	outcome: Pick<Outcome, 'cutsOut' | 'peakSensorC' | 'missedAh' | 'peakChargingC'>,
 	limits: HeatLimits | null
 ): MountVerdict {
 	const headroomK = bms.discharge.cut - outcome.peakSensorC;

@@ -1,6 +1,6 @@
 import { EngineInputError, requireNotBelow, requirePositive } from '../correlations/require';
-import type { HourSpan } from '../assess/types';
 import { expOf } from '../solve/elementary';
+import type { HourSpan } from '../vehicle/spans';
 
 /** What somebody says of a battery that went dark. Hours since midnight of the day; they run on past 24. */
 export interface CutOutReport {
@@ -12,7 +12,7 @@ export interface CutOutReport {
 }
 
 /** Of a normal law, so many standard deviations hold nine of ten. */
-const NINE_OF_TEN = 1.6449;
+export const NINE_OF_TEN = 1.6449;
 const ROOT_TWO_PI = Math.sqrt(2 * Math.PI);
 /** Without heat a battery may have been dark for any time up to this: engineering judgement, h. */
 export const LONGEST_DARK_HOURS = 12;

@@ -1,10 +1,12 @@
-import { findSpans } from '../assess/spans';
 import { normalQuantile, scrambledSobolPoint } from '../statistics';
 import type { Scenario } from '../types';
 import { countCutOutDays, type CutOutDays, type TouringYear } from '../uncertainty/cut-out-days';
 import { drawScenario } from '../uncertainty/draw-scenario';
+import { partOf } from '../uncertainty/finish-work';
 import { PRIORS } from '../uncertainty/priors';
+import { OutcomeRunner } from '../vehicle/outcome-run';
 import { runScenario } from '../vehicle/simulate';
+import { findEndHour, findSpans } from '../vehicle/spans';
 import { checkReading, weighReading, type FieldReading, type RunForReading } from './readings';
 import { drawAgain, effectiveCount, weightedMean, weightedQuantile } from './weighted';
 
@@ -97,25 +99,10 @@ function readRun(drawn: Scenario, reading: FieldReading): RunForReading {
 	const run = runScenario(drawn);
 	if (run.status === 'failed') return { spans: [], peakC: NaN, tempC: NaN };
 	const { report, minutes } = run;
-	const endHour = minutes.startHour + (minutes.count - 1) / 60;
-	const spans = findSpans(report.events, 'discharge', endHour);
+	const spans = findSpans(report.events, 'discharge', findEndHour(drawn));
 	if (reading.kind === 'cut-out') return { spans, peakC: NaN, tempC: NaN };
 	const at = reading.kind === 'thermometer' ? Math.round((reading.hour - minutes.startHour) * 60) : -1;
 	return { spans, peakC: report.peaks[reading.place], tempC: minutes.nodes[reading.place][at] ?? NaN };
-}
-
-interface PlannedOutcome {
-	cutsOut: number;
-	headroomK: number;
-}
-
-function runPlanned(drawn: Scenario): PlannedOutcome {
-	const run = runScenario(drawn);
-	if (run.status === 'failed') return { cutsOut: NaN, headroomK: NaN };
-	const { events, peaks } = run.report;
-	const sensorC = { cells: peaks.cells, board: peaks.board, hotter: Math.max(peaks.cells, peaks.board) };
-	const cut = events.some(({ side, kind }) => side === 'discharge' && kind === 'cut');
-	return { cutsOut: cut ? 1 : 0, headroomK: drawn.bms.discharge.cut - sensorC[drawn.bms.sensor] };
 }
 
 function describeUnknowns(points: readonly number[][], weights: readonly number[]): LearntUnknown[] {
@@ -129,6 +116,12 @@ function describeUnknowns(points: readonly number[][], weights: readonly number[
 		.sort((a, b) => Math.abs(b.movedBy) + 1 - b.spreadLeft - (Math.abs(a.movedBy) + 1 - a.spreadLeft));
 }
 
+/** What one drawn day comes to. */
+interface PlannedOutcome {
+	cutsOut: boolean;
+	headroomK: number;
+}
+
 function summarise(
 	outcomes: readonly PlannedOutcome[],
 	weights: readonly number[],
@@ -138,7 +131,7 @@ function summarise(
 	const quantile = (share: number) => weightedQuantile(headroomK, weights, share);
 	return {
 		cutOutShare: weightedMean(
-			outcomes.map(({ cutsOut }) => cutsOut),
+			outcomes.map(({ cutsOut }) => (cutsOut ? 1 : 0)),
 			weights
 		),
 		headroomLowK: quantile(EDGE),
@@ -159,7 +152,7 @@ function summarise(
  * @param options draws and seed
  * @returns as a generator, yields the share of the work done; what was held possible before, what is left after, and the
  *   unknowns that the readings told of, the most first
- * @throws EngineInputError for a reading that cannot be
+ * @throws EngineInputError for a reading that cannot be, RunFailedError when a planned day cannot be run to its end
  * Validity: readings independent of each other once vehicle, mount and day are given; the model itself is taken for true;
  * at most 20 readings.
  * Source: Bayes' rule by importance weights on low-discrepancy draws; effective number of draws after Kong, Technical
@@ -181,12 +174,15 @@ export function* learnFrom(
 ): Generator<number, Learning> {
 	for (const { reading } of days) checkReading(reading);
 	const draws = new Draws(days.length, seed);
+	const runner = new OutcomeRunner();
 	const points: number[][] = [];
 	const weights: number[] = [];
 	const outcomes: PlannedOutcome[] = [];
 	for (let draw = 0; draw < samples; draw++) {
 		points.push(draws.mountPoint(draw));
-		outcomes.push(runPlanned(drawScenario(planned, draws.pointOn(draw, 0))));
+		const drawn = drawScenario(planned, draws.pointOn(draw, 0));
+		const { cutsOut, peakSensorC } = runner.run(drawn);
+		outcomes.push({ cutsOut, headroomK: drawn.bms.discharge.cut - peakSensorC });
 		let weight = 1;
 		days.forEach(({ scenario, reading }, at) => {
 			if (weight === 0) return;
@@ -198,15 +194,11 @@ export function* learnFrom(
 	const effectiveSamples = effectiveCount(weights);
 	const fits = effectiveSamples >= FEWEST_EFFECTIVE;
 	const even = weights.map(() => 1);
-	const countYear = function* (held: readonly number[], from: number): Generator<number, CutOutDays> {
+	const countYear = (held: readonly number[], from: number): Generator<number, CutOutDays> => {
 		const again = drawAgain(held, yearSamples);
 		const pointOf = (draw: number) => draws.pointOn(again[draw]!, 0);
 		const work = countCutOutDays(planned, year, { samples: yearSamples, seed, pointOf });
-		for (;;) {
-			const step = work.next();
-			if (step.done) return step.value;
-			yield from + 0.2 * step.value;
-		}
+		return partOf(work, (share) => from + 0.2 * share);
 	};
 	const before = summarise(outcomes, even, yield* countYear(even, 0.6));
 	const after = fits ? summarise(outcomes, weights, yield* countYear(weights, 0.8)) : before;

@@ -1,8 +1,8 @@
 import { EngineInputError, requirePositive } from '../correlations/require';
-import type { HourSpan } from '../assess/types';
 import { normalCdf } from '../statistics';
 import { expOf } from '../solve/elementary';
-import { checkReport, weighReport, type CutOutReport } from './cut-out-report';
+import type { HourSpan } from '../vehicle/spans';
+import { checkReport, NINE_OF_TEN, weighReport, type CutOutReport } from './cut-out-report';
 
 /** Where a thermometer or a label can be on a battery. */
 export const READING_PLACES = ['case', 'cells', 'board'] as const;
@@ -29,9 +29,6 @@ export interface RunForReading {
 	/** At the hour of the reading, °C; NaN outside the day. */
 	tempC: number;
 }
-
-/** Of a normal law, so many standard deviations hold nine of ten. */
-const NINE_OF_TEN = 1.6449;
 
 /** Refuses a reading that cannot be. */
 export function checkReading(reading: FieldReading): void {

@@ -1,10 +1,10 @@
-import { findSpans } from '../assess/spans';
 import { sampleQuantile, scrambledSobolPoint } from '../statistics';
 import type { MinuteSeries, Scenario } from '../types';
 import { drawScenario } from '../uncertainty/draw-scenario';
 import { PRIORS } from '../uncertainty/priors';
 import { OutcomeRunner } from '../vehicle/outcome-run';
 import { runScenario } from '../vehicle/simulate';
+import { findEndHour } from '../vehicle/spans';
 import { checkReport, matchesReport, weighAnyTime, weighReport, type CutOutReport } from './cut-out-report';
 import { rankOtherCauses, type RankedCause } from './other-causes';
 
@@ -51,10 +51,6 @@ function rangeOf(hours: readonly number[]): HourRange | null {
 		middleHour: sampleQuantile(hours, 0.5),
 		highHour: sampleQuantile(hours, 1 - EDGE)
 	};
-}
-
-function endHourOf({ start, legs }: Scenario): number {
-	return legs.reduce((hour, { minutes }) => hour + minutes / 60, start.hour);
 }
 
 /** What the legs say of an hour: the driving before it, and whether the engine runs at it. */
@@ -147,7 +143,7 @@ export function* weighHeat(
 	let [likelihood, when, both] = [0, 0, 0];
 	for (let draw = 0; draw < samples; draw++) {
 		const drawn = drawScenario(scenario, scrambledSobolPoint(draw, PRIORS.length, seed));
-		const spans = findSpans(runner.run(drawn).events, 'discharge', endHourOf(drawn));
+		const { darkSpans: spans } = runner.run(drawn);
 		likelihood += weighReport(spans, report);
 		const matched = matchesReport(spans, report);
 		if (matched.when) when++;
@@ -160,7 +156,7 @@ export function* weighHeat(
 		yield (draw + 1) / samples;
 	}
 	const mean = likelihood / samples;
-	const anyTime = weighAnyTime(report, endHourOf(scenario) - scenario.start.hour);
+	const anyTime = weighAnyTime(report, findEndHour(scenario) - scenario.start.hour);
 	const heatProbability = mean / (mean + OTHERWISE_DARK_SHARE * anyTime);
 	return {
 		...{ samples, seed, heatProbability, finding: judge(heatProbability) },

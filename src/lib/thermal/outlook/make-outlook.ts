@@ -11,7 +11,7 @@ import type { HeatLimits } from '../chemistries/guard';
 import { EngineInputError } from '../correlations/require';
 import type { Scenario } from '../types';
 import { countCutOutDays, type CutOutDays, type TouringYear } from '../uncertainty/cut-out-days';
-import { finishWork } from '../uncertainty/finish-work';
+import { finishWork, partOf } from '../uncertainty/finish-work';
 import { rankInfluences, type Influences } from '../uncertainty/influence';
 import { spreadDay, type DaySpread } from '../uncertainty/spread-day';
 import { runScenario } from '../vehicle/simulate';
@@ -97,16 +97,12 @@ const PART_SHARES = {
 	life: 0.02
 } as const;
 
-function* follow<T>(
+function follow<T>(
 	work: Generator<number, T>,
 	part: OutlookProgress['part'],
 	before: number
 ): Generator<OutlookProgress, T> {
-	for (;;) {
-		const step = work.next();
-		if (step.done) return step.value;
-		yield { part, share: before + step.value * PART_SHARES[part] };
-	}
+	return partOf(work, (share) => ({ part, share: before + share * PART_SHARES[part] }));
 }
 
 /**

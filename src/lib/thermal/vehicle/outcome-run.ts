@@ -1,7 +1,8 @@
 import type { Step } from '../solve/stepper';
-import type { BmsEvent, Scenario } from '../types';
+import type { Scenario } from '../types';
 import { fillEvery, raiseHighest } from './fill-minutes';
 import { FAILURE_WORDS, VehicleRun } from './vehicle-run';
+import { findEndHour, findSpans, sumHours, type HourSpan } from './spans';
 import type { Standing, StepSink } from './step-sink';
 
 /** What a run comes to when nobody draws it. */
@@ -16,8 +17,8 @@ export interface Outcome {
 	darkHours: number;
 	/** What the charger would have put in while the charge latch was open, as far as the battery had room for it, Ah. */
 	missedAh: number;
-	/** Each time a latch opened or closed, in order. */
-	events: readonly BmsEvent[];
+	/** Each time that it was dark, in order. */
+	darkSpans: HourSpan[];
 }
 
 /** Keeps the peak of what the BMS watches, the time in the dark, and of the cells a value each so many minutes. */
@@ -108,29 +109,14 @@ export class OutcomeRunner {
 		sink.begin(scenario, cells, everyMin);
 		const failure = run.run(scenario, sink);
 		if (failure) throw new RunFailedError(FAILURE_WORDS[failure]);
+		const darkSpans = findSpans(run.bms.events, 'discharge', findEndHour(scenario));
 		return {
-			cutsOut: run.bms.events.some(({ side, kind }) => side === 'discharge' && kind === 'cut'),
+			cutsOut: darkSpans.length > 0,
 			peakSensorC: sink.findPeakSensorC(),
-			darkHours: this.sumDark(run, scenario),
+			darkHours: sumHours(darkSpans),
+			darkSpans,
 			missedAh: run.missedAh,
-			peakChargingC: sink.peakChargingC,
-			events: run.bms.events
+			peakChargingC: sink.peakChargingC
 		};
-	}
-
-	private sumDark(run: VehicleRun, scenario: Scenario): number {
-		let hours = 0;
-		let since: number | null = null;
-		for (const { side, kind, hour } of run.bms.events) {
-			if (side !== 'discharge') continue;
-			if (kind === 'cut') since = hour;
-			else if (since !== null) {
-				hours += hour - since;
-				since = null;
-			}
-		}
-		let endHour = scenario.start.hour;
-		for (const { minutes } of scenario.legs) endHour += minutes / 60;
-		return since === null ? hours : hours + endHour - since;
 	}
 }
