@@ -53,7 +53,8 @@ function sayCause(cause: HeatCause): string {
 	const { finding, heatProbability, drivenHours, airFalling } = cause;
 	const air = airFalling ? ', with the air outside already getting cooler' : '';
 	const when = `It went dark after ${formatHours(drivenHours)} of driving${air}.`;
-	const chance = `with about ${Math.round(20 * heatProbability)} chances in 20`;
+	const chances = Math.round(20 * heatProbability);
+	const chance = chances === 0 ? 'with fewer than 1 chance in 20' : `with about ${chances} chances in 20`;
 	if (finding === 'explained')
 		return `Heat alone explains both when it went dark and when it came back, ${chance}. ${when}`;
 	if (finding === 'possible') return `Heat alone may explain it, ${chance}. ${when}`;

@@ -25,7 +25,10 @@ export const load: PageServerLoad = async (event) => {
 		error(409, { message: 'This mount has not been fitted yet: say first when it was.' });
 	const job = await orPageError(getJob(person, mount.jobId));
 	const hottestDayC = job.hotDay?.hotDayMaxC;
-	const known = kind === 'peak-label' || kind === 'cut-out' ? { hottestDayC } : {};
+	const known = {
+		...(kind === 'peak-label' || kind === 'cut-out' ? { hottestDayC } : {}),
+		...(kind === 'cut-out' ? { within: '0.5' } : {})
+	};
 	return {
 		...{ mount, kind },
 		job: { id: job.id, number: job.number },
