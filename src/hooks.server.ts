@@ -24,7 +24,7 @@ export const init: ServerInit = async () => {
 const PROBES = new Set(['/healthz', '/readyz']);
 /** Sign-in happens in forms of our own; the library's own pages are not served. */
 const LIBRARY_PAGES = /^\/auth(\/|$)/;
-const OPENED_BY_LINK = /^\/(sheet|sign-in\/link)(\/|$)/;
+const OPENED_BY_LINK = /^\/(sheet|sign-in\/link|reminders)(\/|$)/;
 
 const number: Handle = ({ event, resolve }) => {
 	event.locals.requestId = randomUUID();

@@ -43,7 +43,7 @@ describe('the rules of who may go where', () => {
 		expect(new Set(ROUTE_RULES.map(({ route }) => route)).size).toBe(ROUTE_RULES.length);
 	});
 
-	it('let only sign-in, the link’s own page, the probes and the API’s description go without a person', () => {
+	it('let only sign-in, the pages of a link, the probes and the API’s description go without a person', () => {
 		const open = ROUTE_RULES.filter((rule) => rule.for === 'anyone').map(({ route }) => route);
 		expect(open).toEqual([
 			'/',
@@ -53,6 +53,7 @@ describe('the rules of who may go where', () => {
 			'/sign-in/link/[token]',
 			'/sign-out',
 			'/sheet/[token]',
+			'/reminders/[stop]',
 			'/api/v1/openapi.json'
 		]);
 	});

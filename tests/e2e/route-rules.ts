@@ -87,11 +87,13 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 	page('/sign-in', 'anyone', 'password', 'link'),
 	page('/sign-in/link/[token]', 'anyone', 'default'),
 	{ ...page('/sign-out', 'anyone', 'default'), leadsOn: true },
-	page('/sheet/[token]', 'anyone', 'default'),
+	page('/sheet/[token]', 'anyone', 'acknowledge', 'ask'),
+
+	page('/reminders/[stop]', 'anyone', 'default'),
 
 	page('/jobs', 'workshop'),
 	page('/jobs/new', 'workshop', 'create', 'repeat'),
-	owned('/jobs/[jobId]', 'workshop', 'assess'),
+	owned('/jobs/[jobId]', 'workshop', 'assess', 'answer'),
 	owned('/jobs/[jobId]/customer', 'workshop', 'default'),
 	owned('/jobs/[jobId]/vehicle', 'workshop', 'default'),
 	owned('/jobs/[jobId]/battery', 'workshop', 'default'),
@@ -128,7 +130,7 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 	owned('/mailbox/[messageId]', 'workshop'),
 
 	page('/my', 'customer'),
-	owned('/my/[sheetId]', 'customer', 'default'),
+	owned('/my/[sheetId]', 'customer', 'acknowledge', 'ask'),
 
 	api('/openapi.json', 'anyone', 'GET'),
 	api('/places', 'workshop', 'GET', 'POST'),
@@ -159,7 +161,7 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 	ownedApi('/mounts/[mountId]/pre-drill', 'workshop', { GET: null, PUT: { answers: {}, version: 0 } }),
 	ownedApi('/mounts/[mountId]/fitting', 'workshop', { GET: null, PUT: FITTING }),
 	ownedApi('/mounts/[mountId]/field-notes', 'workshop', { GET: null, POST: FIELD_NOTE }),
-	ownedApi('/follow-ups/[followUpId]/done', 'workshop', { POST: { version: 0 } }),
+	ownedApi('/follow-ups/[followUpId]/done', 'workshop', { POST: { isDone: true, version: 0 } }),
 	ownedApi('/mounts/[mountId]/pre-drill/signature', 'workshop', { PUT: { name: 'Nobody', version: 0 } }),
 	{ ...api('/remedies', 'workshop', 'GET', 'PUT'), only: { PUT: 'bench' } },
 	api('/assessments', 'workshop', 'POST'),
@@ -170,6 +172,12 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 	ownedApi('/recommendations/[recommendationId]', 'workshop', { GET: null }),
 	ownedApi('/sheets/[sheetId]/withdrawal', 'workshop', { POST: null }),
 	ownedApi('/sheets/[sheetId]/letter', 'workshop', { POST: null }),
+	ownedApi('/jobs/[jobId]/questions', 'workshop', { GET: null }),
+	ownedApi('/questions/[questionId]/answers', 'workshop', { POST: { answer: 'Nothing' } }),
+	ownedApi('/my/sheets/[sheetId]/questions', 'customer', {
+		GET: null,
+		POST: { askedBy: 'Nobody', question: 'Nothing?' }
+	}),
 	api('/books', 'bench', 'GET'),
 	ownedApi('/books/[bookId]', 'bench', { GET: null }),
 	api('/simulations', 'workshop', 'POST')

@@ -35,7 +35,11 @@ function findToken(email: string): string {
 }
 
 /** Ids of one demo job and everything that hangs on it, to put into the routes. */
-async function findIds(context: APIRequestContext, customer: { name: string; email: string }): Promise<Ids> {
+async function findIds(
+	context: APIRequestContext,
+	customers: APIRequestContext,
+	customer: { name: string; email: string }
+): Promise<Ids> {
 	const { rows } = await read<{ rows: { id: number }[] }>(
 		context,
 		`/api/v1/jobs?search=${customer.name.split(' ')[0]}`
@@ -60,6 +64,7 @@ async function findIds(context: APIRequestContext, customer: { name: string; ema
 	);
 	const mountId = String(assessment.mountId);
 	const fitting = await read<{ followUps: Record[] }>(context, `/api/v1/mounts/${mountId}/fitting`);
+	const own = await (await customers.get('/my')).text();
 	return {
 		jobId,
 		mountId,
@@ -75,6 +80,7 @@ async function findIds(context: APIRequestContext, customer: { name: string; ema
 		bookId: of(books.rows[0]),
 		sheetId: of(sheets.rows.find(({ withdrawnAt }) => withdrawnAt === null)),
 		messageId: /href="\/mailbox\/([^"]+)"/.exec(mailbox)?.[1] ?? 'none',
+		stop: /href="\/reminders\/([^"]+)"/.exec(own)?.[1] ?? 'none',
 		token: findToken(customer.email)
 	};
 }
@@ -126,13 +132,15 @@ function standingIn(response: APIResponse, rule: RouteRule): Standing | string {
 for (const visitor of VISITORS) {
 	test(`every route meets ${visitor} as it should`, ONCE, async ({ playwright, baseURL }) => {
 		test.setTimeout(180_000);
-		const [context, guide] = await Promise.all([
+		const [context, guide, reader] = await Promise.all([
+			playwright.request.newContext({ baseURL }),
 			playwright.request.newContext({ baseURL }),
 			playwright.request.newContext({ baseURL })
 		]);
 		await signIn(guide, 'manager');
+		await signIn(reader, 'customer');
 		const customer = people.find(({ role }) => role === 'customer') ?? { name: '', email: '' };
-		const ids = await findIds(guide, customer);
+		const ids = await findIds(guide, reader, customer);
 		expect(Object.values(ids)).not.toContain('none');
 		await signIn(context, visitor);
 		for (const rule of ROUTE_RULES.filter(({ route }) => !ABOUT_SESSIONS.test(route))) {
@@ -148,6 +156,6 @@ for (const visitor of VISITORS) {
 				else expect.soft(met, what).toBe(expected);
 			}
 		}
-		await Promise.all([context.dispose(), guide.dispose()]);
+		await Promise.all([context.dispose(), guide.dispose(), reader.dispose()]);
 	});
 }

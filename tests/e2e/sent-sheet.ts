@@ -44,9 +44,9 @@ export async function sendSheet(
 	return { sendTo, link: await readLink(page) };
 }
 
-/** Waits for the letter to an address in the local mailbox and opens it. */
-export async function openLetter(page: Page, recipient: string): Promise<void> {
-	const row = page.getByRole('row').filter({ hasText: recipient });
+/** Waits for the letter to an address in the local mailbox, of several the one about something, and opens it. */
+export async function openLetter(page: Page, recipient: string, about = ''): Promise<void> {
+	const row = page.getByRole('row').filter({ hasText: recipient }).filter({ hasText: about });
 	await expect(async () => {
 		await page.goto('/mailbox');
 		await expect(row).toHaveCount(1, { timeout: 1_000 });

@@ -89,7 +89,7 @@ test(
 		const contentSha256 = /name="contentSha256" value="([0-9a-f]{64})"/.exec(html)?.[1] ?? '';
 		expect(contentSha256).not.toBe('');
 		const post = (name: string, hash: string) =>
-			request.post(link, {
+			request.post(`${link}?/acknowledge`, {
 				form: { name, understood: 'true', contentSha256: hash },
 				headers: { accept: 'text/html', origin: new URL(link).origin },
 				maxRedirects: 0

@@ -36,3 +36,6 @@ function sayList(words: readonly string[]): string {
 	if (words.length < 2) return words.join('');
 	return `${words.slice(0, -1).join(', ')} and ${words.at(-1)}`;
 }
+
+export const sayOpenQuestions = (count: number): string =>
+	count === 1 ? '1 question waits' : `${count} questions wait`;

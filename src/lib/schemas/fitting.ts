@@ -48,6 +48,13 @@ export const followUpSchema = z.object({
 });
 export type FollowUpView = z.infer<typeof followUpSchema>;
 
+/** Whether somebody has looked. */
+export const followUpChangeSchema = z.object({
+	isDone: z.boolean({ error: 'Say whether it is done: true or false.' }),
+	version: versionSchema
+});
+export type FollowUpChange = z.infer<typeof followUpChangeSchema>;
+
 /** What was fitted; null where nothing has been yet. */
 export const fittingSchema = z.object({
 	mountId: z.number().int(),

@@ -103,6 +103,7 @@ export const jobRowSchema = z.object({
 	verdict: z.enum(VERDICTS).nullable(),
 	assessedChemistry,
 	headroomK: z.number().nullable(),
+	openQuestions: z.number().int().meta({ description: 'Questions of the customer without an answer' }),
 	updatedAt: z.iso.datetime()
 });
 export type JobRow = z.infer<typeof jobRowSchema>;

@@ -3,6 +3,7 @@ import type { DayLimits } from '../format/heat-limits';
 import type { AssessmentResult } from './assessments';
 import type { PositionKind } from './survey';
 import { email, idSchema, words } from './fields';
+import type { Question } from './questions';
 import { VERDICTS, type Verdict } from './verdicts';
 
 /** What the picture is drawn from: kept with the words, so that the page never changes. */
@@ -102,6 +103,8 @@ export interface SheetView {
 	/** When the shop sent this customer a later page for the same job. */
 	newerSentAt: string | null;
 	acknowledgement: AcknowledgementView | null;
+	/** Of the whole job, with what the shop answered. */
+	questions: Question[];
 }
 
 /** One line of a customer's own list. */

@@ -2,7 +2,7 @@ import { Person, SignInLink } from '../db/models';
 import { inTransaction } from '../db/transaction';
 import { env } from '../env';
 import { newToken, tokenHash } from '../hash';
-import { lettersHtml } from '../mail/html';
+import { layOutLetter } from '../mail/layout';
 import { postLetter } from '../mail/outbox';
 import { spend } from './rate-limit';
 
@@ -30,19 +30,18 @@ async function writeLetter(email: string): Promise<void> {
 		const expiresAt = new Date(Date.now() + LIVES_MINUTES * 60_000);
 		await SignInLink.create({ tokenHash: tokenHash(token), personId: person.id, expiresAt }, { transaction });
 		const href = `${env().ORIGIN}/sign-in/link/${token}`;
-		const paragraphs = [
-			`Hello ${person.name},`,
-			`this link signs you in to Soakline. It works once, within ${LIVES_MINUTES} minutes.`,
-			'If you did not ask for it, leave it alone: nothing happens.'
-		];
+		const letter = layOutLetter({
+			subject: 'Your link to sign in to Soakline',
+			from: 'Soakline',
+			parts: [
+				`Hello ${person.name},`,
+				`this link signs you in to Soakline. It works once, within ${LIVES_MINUTES} minutes.`,
+				{ href, words: 'Sign in to Soakline' },
+				'If you did not ask for it, leave it alone: nothing happens.'
+			]
+		});
 		await postLetter(
-			{
-				workshopId: person.workshopId,
-				recipient: person.email,
-				subject: 'Your link to sign in to Soakline',
-				textBody: `${paragraphs.join('\n\n')}\n\n${href}\n`,
-				htmlBody: lettersHtml(paragraphs, { href, words: 'Sign in to Soakline' })
-			},
+			{ ...letter, kind: 'sign-in', workshopId: person.workshopId, recipient: person.email },
 			transaction
 		);
 	});

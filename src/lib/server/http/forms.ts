@@ -55,17 +55,22 @@ export function refuseForm(form: PageForm, error: unknown) {
 	return message(form, error.message, { status: error.status as 400 });
 }
 
+/** What is the same when the same form is sent twice with the same words in it; null for a form that may be. */
+export function onceKeyOf({ url }: Pick<RequestEvent, 'url'>, formData: FormData): string | null {
+	if (!formData.has(ONCE_KEY)) return null;
+	return `form-${sha256(JSON.stringify([url.pathname, url.search, ...formData]))}`;
+}
+
 /** Does what a form asks once for the page that it stood on: a second press leads to what the first one made. */
 export async function saveOnce(
 	{ id: personId }: SignedInPerson,
-	{ url }: RequestEvent,
+	event: RequestEvent,
 	formData: FormData,
 	save: () => Promise<string>
 ): Promise<string> {
-	if (!formData.has(ONCE_KEY)) return save();
-	const entries = JSON.stringify([url.pathname, url.search, ...formData]);
-	const key = `form-${sha256(entries)}`;
-	const answer = await answerOnce({ personId, key, request: entries }, async () => ({
+	const key = onceKeyOf(event, formData);
+	if (key === null) return save();
+	const answer = await answerOnce({ personId, key, request: key }, async () => ({
 		status: 303,
 		body: await save()
 	}));

@@ -59,7 +59,10 @@ describe('the outbox', () => {
 		const { workshopId } = await makeCrew();
 		const undone = inTransaction(async (transaction) => {
 			const words = { subject: 'Undone', textBody: 'Undone', htmlBody: '<p>Undone</p>' };
-			await postLetter({ workshopId, recipient: 'never@travellers.example', ...words }, transaction);
+			await postLetter(
+				{ kind: 'sheet', workshopId, recipient: 'never@travellers.example', ...words },
+				transaction
+			);
 			throw new Error('undone');
 		});
 		await expect(undone).rejects.toThrow('undone');

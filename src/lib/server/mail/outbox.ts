@@ -1,5 +1,6 @@
 import { randomUUID } from 'node:crypto';
 import { Op, type Transaction } from 'sequelize';
+import type { LetterKind } from '$lib/schemas/letters';
 import { OutgoingMail } from '../db/models';
 import { outsideTransaction } from '../db/transaction';
 import { logger } from '../logger';
@@ -13,7 +14,13 @@ const FIRST_PAUSE_MS = 5_000;
 /** While one process is busy with a letter, others leave it alone for this long. */
 const CLAIM_MS = 60_000;
 
-export type NewLetter = Omit<Letter, 'messageId'> & { workshopId: number; sheetId?: number };
+export type NewLetter = Omit<Letter, 'messageId'> & {
+	kind: LetterKind;
+	workshopId: number;
+	/** The job in whose sending log it stands. */
+	jobId?: number;
+	sheetId?: number;
+};
 
 /** Puts a letter into the same transaction as what it tells of: both are kept, or neither. */
 export async function postLetter(letter: NewLetter, transaction: Transaction): Promise<void> {
@@ -28,14 +35,24 @@ export async function postLetter(letter: NewLetter, transaction: Transaction): P
 const FORGOTTEN = { textBody: '', htmlBody: '' };
 
 /** A letter whose matter is over is not sent any more; one that is out already stays as it is. */
+export async function dropMails(ids: number[], reason: string): Promise<void> {
+	await OutgoingMail.update(
+		{ state: 'failed', lastError: reason, ...FORGOTTEN },
+		{ where: { id: ids, state: 'waiting' } }
+	);
+}
+
+/** The same for the letters of these sheets. */
 export async function dropLetters(
 	sheetIds: number[],
 	reason: string,
 	transaction: Transaction
 ): Promise<void> {
-	await OutgoingMail.update(
-		{ state: 'failed', lastError: reason, ...FORGOTTEN },
-		{ where: { sheetId: sheetIds, state: 'waiting' }, transaction }
+	const where = { sheetId: sheetIds, state: 'waiting' };
+	const letters = await OutgoingMail.findAll({ where, attributes: ['id'], transaction });
+	await dropMails(
+		letters.map(({ id }) => id),
+		reason
 	);
 }
 

@@ -17,7 +17,7 @@ describe('the letter that brings the page', () => {
 		expect(subject).toBe('Your battery, on one page: job 412 at Wattle & Wire');
 		expect(textBody.split('\n')).toContain(HREF);
 		expect(textBody).toContain('Wattle & Wire worked out how a second battery in your Farrow Drover, 2019');
-		expect(textBody).toContain('Ask Wattle & Wire: 00 0000 0101 or bench@shop.example.');
+		expect(textBody).toContain('ask Wattle & Wire: 00 0000 0101 or bench@shop.example.');
 	});
 
 	it('lets nothing that people typed become markup', () => {
@@ -29,7 +29,7 @@ describe('the letter that brings the page', () => {
 
 	it('asks by name alone where the shop has given no way to reach it', () => {
 		const workshop = { ...CONTENT.workshop, phone: '', email: '' };
-		expect(writeSheetLetter({ ...CONTENT, workshop }, HREF).textBody).toContain('Ask Wattle & Wire.\n');
+		expect(writeSheetLetter({ ...CONTENT, workshop }, HREF).textBody).toContain('ask Wattle & Wire.\n');
 	});
 
 	it('keeps its subject within what the outbox takes', () => {

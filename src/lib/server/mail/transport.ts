@@ -4,6 +4,10 @@ import { env } from '../env';
 export interface Letter {
 	messageId: string;
 	recipient: string;
+	/** Whom an answer reaches; empty for the sender. */
+	replyTo?: string;
+	/** Where its reader can stop letters of its kind; empty for letters that nobody stops. */
+	stopUrl?: string;
 	subject: string;
 	textBody: string;
 	htmlBody: string;
@@ -14,8 +18,15 @@ const PATIENCE_MS = 10_000;
 
 let transporter: Transporter | undefined;
 
+/** Mail programs show a button of their own that stops such letters with one press (RFC 2369, RFC 8058). */
+const stopHeaders = (stopUrl: string) => ({
+	'List-Unsubscribe': `<${stopUrl}>`,
+	'List-Unsubscribe-Post': 'List-Unsubscribe=One-Click'
+});
+
 /** Hands one letter to the mail server; resolves once the server has taken it. */
-export async function deliver({ messageId, recipient, subject, textBody, htmlBody }: Letter): Promise<void> {
+export async function deliver(letter: Letter): Promise<void> {
+	const { messageId, recipient, replyTo, stopUrl, subject, textBody, htmlBody } = letter;
 	transporter ??= createTransport({
 		url: env().SMTP_URL,
 		connectionTimeout: PATIENCE_MS,
@@ -28,6 +39,8 @@ export async function deliver({ messageId, recipient, subject, textBody, htmlBod
 		messageId,
 		from: env().MAIL_FROM,
 		to: recipient,
+		...(replyTo ? { replyTo } : {}),
+		...(stopUrl ? { headers: stopHeaders(stopUrl) } : {}),
 		subject,
 		text: textBody,
 		html: htmlBody

@@ -27,6 +27,8 @@ export const RULES = {
 	'remedies.write': BENCH,
 	'recommendations.write': WORKSHOP,
 	'sheets.write': WORKSHOP,
+	'questions.answer': WORKSHOP,
+	'questions.ask': ['customer'],
 	'books.read': BENCH,
 	'mailbox.read': WORKSHOP,
 	'documents.read-own': ['customer']

@@ -36,6 +36,8 @@ const EXPECTED: Record<Action, string> = {
 	'remedies.write': 'em',
 	'recommendations.write': 'iem',
 	'sheets.write': 'iem',
+	'questions.answer': 'iem',
+	'questions.ask': 'c',
 	'books.read': 'em',
 	'mailbox.read': 'iem',
 	'documents.read-own': 'c'

@@ -15,11 +15,11 @@ function withOwner({ customer, vehicle }: Job) {
 	return { customer, vehicle };
 }
 
-export function presentJobRow(job: Job): JobRow {
+export function presentJobRow(job: Job, openQuestions: number): JobRow {
 	const { id, number, batteryRecord, place, stage, verdict, assessedChemistry, headroomK, updatedAt } = job;
 	const { customer, vehicle } = withOwner(job);
 	return {
-		...{ id, number, stage, verdict, assessedChemistry, headroomK },
+		...{ id, number, stage, verdict, assessedChemistry, headroomK, openQuestions },
 		customerName: customer.name,
 		vehicle: formatVehicle(vehicle),
 		battery: batteryRecord ? formatBattery(batteryRecord) : null,

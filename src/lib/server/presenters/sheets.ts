@@ -1,3 +1,4 @@
+import type { Question } from '$lib/schemas/questions';
 import type { AcknowledgementView, MySheet, SheetStatus, SheetView } from '$lib/schemas/sheets';
 import type { Acknowledgement, OutgoingMail, Sheet } from '../db/models';
 
@@ -27,11 +28,12 @@ export function presentSheetStatus(sheet: Sheet, letter: OutgoingMail, sentBy: s
 
 export function presentSheet(
 	{ content, contentSha256, textVersion, acknowledgement }: Sheet,
-	newer: Sheet | null
+	newer: Sheet | null,
+	questions: Question[]
 ): SheetView {
 	return {
 		newerSentAt: isoOrNull(newer?.createdAt),
-		...{ content, contentSha256, textVersion },
+		...{ content, contentSha256, textVersion, questions },
 		acknowledgement: acknowledgement ? presentAcknowledgement(acknowledgement) : null
 	};
 }

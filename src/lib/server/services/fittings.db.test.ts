@@ -37,7 +37,7 @@ describe('what was fitted', () => {
 		const { mountId, fitting } = await makeFitted(installer);
 		expect(fitting.followUps.map(({ dueOn }) => dueOn)).toEqual(['2026-02-28', '2026-07-31', '2027-01-31']);
 		const [first] = fitting.followUps;
-		const done = await finishFollowUp(installer, first!.id, first!.version);
+		const done = await finishFollowUp(installer, first!.id, { isDone: true, version: first!.version });
 		expect(done.followUps[0]).toMatchObject({ doneBy: installer.name, isOverdue: false });
 		const { version } = done.installation!;
 		const moved = await saveFitting(installer, mountId, { ...FITTED, fittedOn: '2026-02-10', version });
@@ -93,7 +93,8 @@ describe('the dates', () => {
 	it('that were done are not reminded of', async () => {
 		const { installer } = await makeCrew();
 		const { fitting } = await makeFitted(installer);
-		for (const { id, version } of fitting.followUps) await finishFollowUp(installer, id, version);
+		for (const { id, version } of fitting.followUps)
+			await finishFollowUp(installer, id, { isDone: true, version });
 		await remindDue('2030-01-01');
 		const reminded = await FollowUp.findAll({ where: { id: fitting.followUps.map(({ id }) => id) } });
 		expect(reminded.map(({ remindedAt }) => remindedAt)).toEqual([null, null, null]);

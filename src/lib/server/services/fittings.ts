@@ -1,5 +1,10 @@
 import type { Transaction } from 'sequelize';
-import { FOLLOW_UP_MONTHS, type FittingChange, type FittingView } from '$lib/schemas/fitting';
+import {
+	FOLLOW_UP_MONTHS,
+	type FittingChange,
+	type FittingView,
+	type FollowUpChange
+} from '$lib/schemas/fitting';
 import type { SignedInPerson } from '$lib/schemas/people';
 import { Assessment, FollowUp, Installation, Recommendation, type Mount } from '../db/models';
 import { inTransaction } from '../db/transaction';
@@ -57,7 +62,8 @@ async function setFollowUps(
 			transaction
 		});
 		if (!isNew && followUp.doneOn === null && followUp.dueOn !== dueOn) {
-			await followUp.update({ dueOn }, { transaction });
+			// Another day is another reminder.
+			await followUp.update({ dueOn, remindedAt: null }, { transaction });
 		}
 	}
 }
@@ -98,11 +104,11 @@ export async function saveFitting(
 	});
 }
 
-/** Somebody has looked at the battery. */
+/** Somebody has looked at the battery, or after all nobody has; to say the same again changes nothing. */
 export async function finishFollowUp(
 	person: SignedInPerson,
 	followUpId: number,
-	version: number
+	{ isDone, version }: FollowUpChange
 ): Promise<FittingView> {
 	allow(person, 'mounts.write');
 	return inTransaction(async (transaction) => {
@@ -111,8 +117,8 @@ export async function finishFollowUp(
 		if (!followUp) throw notFound('follow-up');
 		const installation = await Installation.findByPk(followUp.installationId, { transaction });
 		const mount = await findStandingMount(person, installation!.mountId);
-		const done =
-			followUp.doneOn === null ? { doneOn: today(), doneBy: person.name } : { doneOn: null, doneBy: null };
+		if (isDone === ((followUp.doneOn ?? null) !== null)) return show(mount);
+		const done = isDone ? { doneOn: today(), doneBy: person.name } : { doneOn: null, doneBy: null };
 		await saveVersioned(followUp, 'follow-up', version, done, transaction);
 		const subject = { type: 'mount', id: mount.id };
 		await recordBy(person, 'mount.follow-up', subject, transaction, {

@@ -18,6 +18,7 @@ import { presentJob, presentJobRow } from '../presenters/jobs';
 import { recordBy } from './audit';
 import { customerFor } from './customers';
 import { findJobs } from './job-list';
+import { countOpenQuestions } from './question-threads';
 import { notThere, saveVersioned } from './records';
 import { findStandings } from './standings';
 import { addVehicle } from './vehicles';
@@ -25,7 +26,8 @@ import { addVehicle } from './vehicles';
 export async function listJobs(person: SignedInPerson, query: JobQuery): Promise<JobPage> {
 	allow(person, 'jobs.read');
 	const { jobs, total, next } = await findJobs(person.workshopId, query);
-	return { rows: jobs.map(presentJobRow), total, next };
+	const open = await countOpenQuestions(jobs.map(({ id }) => id));
+	return { rows: jobs.map((job) => presentJobRow(job, open.get(job.id) ?? 0)), total, next };
 }
 
 export async function getJob(person: SignedInPerson, jobId: number): Promise<JobView> {

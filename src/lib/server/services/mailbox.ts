@@ -17,9 +17,9 @@ function requireMailbox(): string {
 	return MAILBOX_DIR;
 }
 
-/** Sheets are the shop's matter; a link that signs somebody in is for that person alone. */
-const mayRead = ({ email }: SignedInPerson, { sheetId, recipient }: OutgoingMail): boolean =>
-	sheetId !== null || recipient === email;
+/** What belongs to a job is the shop's matter; a link that signs somebody in is for that person alone. */
+const mayRead = ({ email }: SignedInPerson, { sheetId, jobId, recipient }: OutgoingMail): boolean =>
+	sheetId !== null || jobId !== null || recipient === email;
 
 /** The letters in the folder that this workshop sent: a file alone proves nothing, its message id must be on record. */
 async function findOwn(person: SignedInPerson) {

@@ -6,6 +6,7 @@ import { logger } from '../logger';
 import { postLetter } from '../mail/outbox';
 import { writeReminder } from '../mail/reminder-letter';
 import { addDays, today } from './days';
+import { stopUrlOf } from './reminder-stops';
 
 const EVERY_MS = 60 * 60_000;
 /** A reminder goes out so long before the date. */
@@ -30,11 +31,16 @@ async function postReminder(
 		Vehicle.findByPk(job!.vehicleId, { transaction }),
 		Workshop.findByPk(followUp.workshopId, { transaction })
 	]);
-	const recipient = customer!.email || workshop!.email;
 	await followUp.update({ remindedAt: new Date() }, { transaction });
+	// Whoever stopped them is left in peace; the date stays on the shop's list.
+	if (customer!.remindersStoppedAt) return;
+	const recipient = customer!.email || workshop!.email;
 	if (!recipient) return;
-	const letter = writeReminder({ followUp, customer: customer!, vehicle: vehicle!, workshop: workshop! });
-	await postLetter({ workshopId: followUp.workshopId, recipient, ...letter }, transaction);
+	const stopUrl = customer!.email ? stopUrlOf(customer!.id) : '';
+	const about = { followUp, customer: customer!, vehicle: vehicle!, workshop: workshop!, stopUrl };
+	const { id: jobId, workshopId } = job!;
+	const posted = { kind: 'reminder', workshopId, jobId, recipient, stopUrl } as const;
+	await postLetter({ ...writeReminder(about), ...posted, replyTo: workshop!.email }, transaction);
 }
 
 /** Puts the reminders that are due into the outbox, each in one transaction with the note that it is there. */

@@ -26,7 +26,8 @@ describe('opening a sheet by its link', () => {
 				contentSha256: stored.contentSha256,
 				textVersion: stored.textVersion,
 				acknowledgement: null,
-				newerSentAt: null
+				newerSentAt: null,
+				questions: []
 			});
 		}
 		expect(await Acknowledgement.count({ where: { sheetId: sheet.id } })).toBe(0);

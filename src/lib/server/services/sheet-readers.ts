@@ -9,6 +9,7 @@ import { logger } from '../logger';
 import { allow } from '../policies';
 import { presentAcknowledgement, presentMySheet, presentSheet } from '../presenters/sheets';
 import { record } from './audit';
+import { readThread } from './question-threads';
 
 const ACKNOWLEDGEMENT = { model: Acknowledgement, as: 'acknowledgement' };
 
@@ -62,6 +63,13 @@ async function readSheet({ where, include = [] }: Find, transaction?: Transactio
 	return sheet;
 }
 
+/** The page behind a link, for what is done through it. */
+export const findLinkedSheet = (token: string): Promise<Sheet> => readSheet(byLink(token));
+
+/** A page of a signed-in customer, for what is done with it. */
+export const findMySheet = async (person: SignedInPerson, sheetId: number): Promise<Sheet> =>
+	readSheet(ofOwn(person, sheetId));
+
 /** The page that the shop sent after this one, if that still stands. */
 async function findNewer({ id, jobId }: Sheet): Promise<Sheet | null> {
 	const where = { jobId, withdrawnAt: null, id: { [Op.gt]: id } };
@@ -84,7 +92,7 @@ async function noteFirstOpening({ id, workshopId }: Sheet, reader: Reader): Prom
 export async function openSheet(token: string): Promise<SheetView> {
 	const sheet = await readSheet(byLink(token));
 	if (sheet.firstOpenedAt === null) await noteFirstOpening(sheet, null);
-	return presentSheet(sheet, await findNewer(sheet));
+	return presentSheet(sheet, await findNewer(sheet), await readThread(sheet.jobId));
 }
 
 export async function listMySheets(person: SignedInPerson): Promise<MySheet[]> {
@@ -99,7 +107,7 @@ export async function listMySheets(person: SignedInPerson): Promise<MySheet[]> {
 export async function getMySheet(person: SignedInPerson, sheetId: number): Promise<SheetView> {
 	const sheet = await readSheet(ofOwn(person, sheetId));
 	if (sheet.firstOpenedAt === null) await noteFirstOpening(sheet, person);
-	return presentSheet(sheet, await findNewer(sheet));
+	return presentSheet(sheet, await findNewer(sheet), await readThread(sheet.jobId));
 }
 
 async function storeAcknowledgement(

@@ -102,7 +102,10 @@ export async function sendSheet(
 		);
 		const letter = writeSheetLetter(content, `${env().ORIGIN}/sheet/${token}`);
 		await postLetter(
-			{ ...letter, workshopId: person.workshopId, sheetId: sheet.id, recipient: sendTo },
+			{
+				...letter,
+				...{ kind: 'sheet', workshopId: person.workshopId, jobId, sheetId: sheet.id, recipient: sendTo }
+			},
 			transaction
 		);
 		await Job.update({ stage: 'sent' }, { where: { id: jobId }, transaction });

@@ -46,6 +46,12 @@ import { migration as m063 } from './063-follow-ups';
 import { migration as m064 } from './064-field-notes';
 import { migration as m065 } from './065-field-notes-no-update';
 import { migration as m066 } from './066-field-notes-no-delete';
+import { migration as m100 } from './100-erasures';
+import { migration as m101 } from './101-customer-messages';
+import { migration as m102 } from './102-customer-messages-no-update';
+import { migration as m103 } from './103-customer-messages-no-delete';
+import { migration as m104 } from './104-outgoing-mails-log';
+import { migration as m105 } from './105-customers-reminders-stopped';
 import type { Migration } from '../migrate';
 
 /** Every migration, in the order in which they run; each is one DDL step that may run again. */
@@ -97,5 +103,11 @@ export const migrations: Migration[] = [
 	m063,
 	m064,
 	m065,
-	m066
+	m066,
+	m100,
+	m101,
+	m102,
+	m103,
+	m104,
+	m105
 ];

@@ -5,7 +5,7 @@ import {
 	type InferCreationAttributes,
 	type Sequelize
 } from 'sequelize';
-import { edited, id, moment, reference, text, textOrEmpty, whole } from './base';
+import { edited, id, moment, optionalMoment, reference, text, textOrEmpty, whole } from './base';
 
 export class Customer extends Model<InferAttributes<Customer>, InferCreationAttributes<Customer>> {
 	declare id: CreationOptional<number>;
@@ -13,6 +13,8 @@ export class Customer extends Model<InferAttributes<Customer>, InferCreationAttr
 	declare name: string;
 	declare email: CreationOptional<string>;
 	declare phone: CreationOptional<string>;
+	/** When they stopped reminders; null while they get them. */
+	declare remindersStoppedAt: CreationOptional<Date | null>;
 	declare version: CreationOptional<number>;
 	declare createdAt: CreationOptional<Date>;
 	declare updatedAt: CreationOptional<Date>;
@@ -26,6 +28,7 @@ export function initCustomer(sequelize: Sequelize): void {
 			name: text,
 			email: textOrEmpty,
 			phone: textOrEmpty,
+			remindersStoppedAt: optionalMoment,
 			version: { ...whole, defaultValue: 0 },
 			createdAt: moment,
 			updatedAt: moment

@@ -22,6 +22,7 @@ import { Acknowledgement, initAcknowledgement } from './acknowledgement';
 import { Installation, initInstallation } from './installation';
 import { FollowUp, initFollowUp } from './follow-up';
 import { FieldNote, initFieldNote } from './field-note';
+import { CustomerMessage, initCustomerMessage } from './customer-message';
 import { OutgoingMail, initOutgoingMail } from './outgoing-mail';
 import { AuditEntry, initAuditEntry } from './audit-entry';
 
@@ -49,6 +50,7 @@ export {
 	Installation,
 	FollowUp,
 	FieldNote,
+	CustomerMessage,
 	OutgoingMail,
 	AuditEntry
 };
@@ -77,6 +79,7 @@ const initialisers = [
 	initInstallation,
 	initFollowUp,
 	initFieldNote,
+	initCustomerMessage,
 	initOutgoingMail,
 	initAuditEntry
 ];

@@ -6,6 +6,7 @@ import {
 	type InferCreationAttributes,
 	type Sequelize
 } from 'sequelize';
+import type { LetterKind } from '$lib/schemas/letters';
 import {
 	id,
 	moment,
@@ -24,9 +25,15 @@ export class OutgoingMail extends Model<
 > {
 	declare id: CreationOptional<number>;
 	declare workshopId: number;
+	declare kind: LetterKind;
 	declare sheetId: CreationOptional<number | null>;
+	declare jobId: CreationOptional<number | null>;
 	declare messageId: string;
 	declare recipient: string;
+	/** Whom an answer reaches, where that is not the sender. */
+	declare replyTo: CreationOptional<string>;
+	/** Where its reader can stop letters of its kind; none for letters that nobody stops. */
+	declare stopUrl: CreationOptional<string>;
 	declare subject: string;
 	declare textBody: string;
 	declare htmlBody: string;
@@ -43,9 +50,13 @@ export function initOutgoingMail(sequelize: Sequelize): void {
 		{
 			id: id,
 			workshopId: reference,
+			kind: text,
 			sheetId: optionalReference,
+			jobId: optionalReference,
 			messageId: text,
 			recipient: text,
+			replyTo: textOrEmpty,
+			stopUrl: textOrEmpty,
 			subject: text,
 			textBody: { type: DataTypes.TEXT, allowNull: false },
 			htmlBody: { type: DataTypes.TEXT, allowNull: false },

@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { fieldNoteInputSchema, fieldNotesSchema } from '$lib/schemas/field-notes';
-import { idSchema, versionSchema } from '$lib/schemas/fields';
-import { fittingChangeSchema, fittingSchema } from '$lib/schemas/fitting';
+import { idSchema } from '$lib/schemas/fields';
+import { fittingChangeSchema, fittingSchema, followUpChangeSchema } from '$lib/schemas/fitting';
 import { defineOperation } from '../operation';
 
 const params = z.object({ mountId: idSchema });
@@ -33,9 +33,9 @@ export const fittingOperations = {
 		method: 'POST',
 		path: '/api/v1/follow-ups/[followUpId]/done',
 		action: 'mounts.write',
-		summary: 'Marks a follow-up as done; one that was done is open again.',
+		summary: 'Says whether a follow-up is done.',
 		params: z.object({ followUpId: idSchema }),
-		body: z.object({ version: versionSchema }),
+		body: followUpChangeSchema,
 		answer: fittingSchema,
 		status: 200
 	}),

@@ -9,6 +9,7 @@ import { jobOperations } from './jobs';
 import { mountOperations } from './mounts';
 import { placeOperations } from './places';
 import { preDrillOperations } from './pre-drill';
+import { questionOperations } from './questions';
 import { recommendationOperations } from './recommendations';
 import { remedyOperations } from './remedies';
 import { sheetOperations } from './sheets';
@@ -27,6 +28,7 @@ export const OPERATIONS: readonly Operation[] = [
 	fittingOperations,
 	dayPlanOperations,
 	sheetOperations,
+	questionOperations,
 	bookOperations,
 	assessmentOperations,
 	recommendationOperations,

@@ -1,8 +1,10 @@
 import { error } from '@sveltejs/kit';
 import { idSchema } from '$lib/schemas/fields';
+import { askSchema } from '$lib/schemas/questions';
 import { acknowledgeSchema } from '$lib/schemas/sheets';
 import { saveForm } from '$lib/server/http/forms';
 import { guard, orPageError } from '$lib/server/http/guard';
+import { askOnMySheet } from '$lib/server/services/questions';
 import { acknowledgeMySheet, getMySheet } from '$lib/server/services/sheet-readers';
 import { showSheet } from '../../show-sheet';
 import type { Actions, PageServerLoad } from './$types';
@@ -13,11 +15,12 @@ function readSheetId(text: string): number {
 
 export const load: PageServerLoad = async (event) => {
 	const person = guard(event, 'documents.read-own');
-	return showSheet(await orPageError(getMySheet(person, readSheetId(event.params.sheetId))));
+	const sheet = await orPageError(getMySheet(person, readSheetId(event.params.sheetId)));
+	return showSheet(sheet, person.name);
 };
 
 export const actions: Actions = {
-	default: (event) =>
+	acknowledge: (event) =>
 		saveForm(event, {
 			action: 'documents.read-own',
 			schema: acknowledgeSchema,
@@ -25,6 +28,16 @@ export const actions: Actions = {
 				const sheetId = readSheetId(event.params.sheetId);
 				await acknowledgeMySheet(person, sheetId, data);
 				return `/my/${sheetId}#acknowledged`;
+			}
+		}),
+	ask: (event) =>
+		saveForm(event, {
+			action: 'questions.ask',
+			schema: askSchema,
+			save: async (person, data) => {
+				const sheetId = readSheetId(event.params.sheetId);
+				await askOnMySheet(person, sheetId, data);
+				return `/my/${sheetId}#questions`;
 			}
 		})
 };

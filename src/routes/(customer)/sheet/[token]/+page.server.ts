@@ -1,8 +1,11 @@
-import { fail, redirect } from '@sveltejs/kit';
+import { fail, redirect, type RequestEvent } from '@sveltejs/kit';
+import type { z } from 'zod';
+import { askSchema } from '$lib/schemas/questions';
 import { acknowledgeSchema } from '$lib/schemas/sheets';
 import { readByLink, writeByLink } from '$lib/server/http/by-link';
-import { readForm, readPageForm, refuseForm } from '$lib/server/http/forms';
+import { onceKeyOf, readForm, readPageForm, refuseForm } from '$lib/server/http/forms';
 import { orPageError } from '$lib/server/http/guard';
+import { askByLink } from '$lib/server/services/questions';
 import { acknowledgeSheet, openSheet } from '$lib/server/services/sheet-readers';
 import { showSheet } from '../../show-sheet';
 import type { Actions, PageServerLoad } from './$types';
@@ -11,16 +14,29 @@ import type { Actions, PageServerLoad } from './$types';
 export const load: PageServerLoad = async (event) =>
 	showSheet(await orPageError(readByLink(event, () => openSheet(event.params.token))));
 
-export const actions: Actions = {
-	default: async (event) => {
-		const { token } = event.params;
-		const { form, data } = await readForm(await readPageForm(event.request), acknowledgeSchema);
-		if (data === null) return fail(422, { form });
-		try {
-			await writeByLink(event, () => acknowledgeSheet(token, data));
-		} catch (error) {
-			return refuseForm(form, error);
-		}
-		redirect(303, `/sheet/${token}#acknowledged`);
+/** What somebody sends through the link: read, done, and shown where it stands now. */
+async function sendByLink<S extends z.ZodObject>(
+	event: RequestEvent,
+	schema: S,
+	place: string,
+	save: (data: z.output<S>, onceKey: string | null) => Promise<unknown>
+) {
+	const formData = await readPageForm(event.request);
+	const { form, data } = await readForm(formData, schema);
+	if (data === null) return fail(422, { form });
+	try {
+		await writeByLink(event, () => save(data, onceKeyOf(event, formData)));
+	} catch (error) {
+		return refuseForm(form, error);
 	}
+	redirect(303, `${event.url.pathname}#${place}`);
+}
+
+export const actions: Actions = {
+	acknowledge: (event) =>
+		sendByLink(event, acknowledgeSchema, 'acknowledged', (data) =>
+			acknowledgeSheet(event.params.token, data)
+		),
+	ask: (event) =>
+		sendByLink(event, askSchema, 'questions', (data, onceKey) => askByLink(event.params.token, data, onceKey))
 };

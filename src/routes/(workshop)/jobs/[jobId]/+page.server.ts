@@ -1,14 +1,28 @@
 import { fail, redirect } from '@sveltejs/kit';
+import { answerFormSchema, type Question } from '$lib/schemas/questions';
 import { AppError } from '$lib/server/errors';
+import { loadForm, saveForm } from '$lib/server/http/forms';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { pageId } from '$lib/server/http/page-id';
 import { assessJob } from '$lib/server/services/assessments';
 import { getJob } from '$lib/server/services/jobs';
+import { answerQuestion, listQuestions } from '$lib/server/services/questions';
 import type { Actions, PageServerLoad } from './$types';
+
+/** The question that was chosen; else the first that nobody has answered. */
+function chooseQuestion(questions: readonly Question[], asked: string | null): Question | null {
+	const chosen = questions.find(({ id }) => String(id) === asked);
+	return chosen ?? questions.find(({ answers }) => answers.length === 0) ?? null;
+}
 
 export const load: PageServerLoad = async (event) => {
 	const person = guard(event, 'jobs.read');
-	return { job: await orPageError(getJob(person, pageId(event.params.jobId))) };
+	const jobId = pageId(event.params.jobId);
+	const [job, questions] = await orPageError(
+		Promise.all([getJob(person, jobId), listQuestions(person, jobId)])
+	);
+	const toAnswer = chooseQuestion(questions, event.url.searchParams.get('question'));
+	return { job, questions, toAnswer, answerForm: await loadForm(answerFormSchema) };
 };
 
 export const actions: Actions = {
@@ -23,5 +37,14 @@ export const actions: Actions = {
 		if (made instanceof AppError) return fail(made.status, { refusal: made.message });
 		const [only] = made;
 		redirect(303, only && made.length === 1 ? `/assessments/${only.id}` : `/jobs/${jobId}/compare`);
-	}
+	},
+	answer: (event) =>
+		saveForm(event, {
+			action: 'questions.answer',
+			schema: answerFormSchema,
+			save: async (person, { questionId, answer }) => {
+				await answerQuestion(person, questionId, answer);
+				return `/jobs/${pageId(event.params.jobId)}#question-${questionId}`;
+			}
+		})
 };

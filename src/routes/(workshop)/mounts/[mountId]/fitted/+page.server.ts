@@ -44,7 +44,8 @@ export const actions: Actions = {
 		const sent = await event.request.formData();
 		const change = async () => {
 			const followUpId = validate(idSchema, sent.get('followUp') ?? undefined);
-			await finishFollowUp(person, followUpId, validate(versionSchema, sent.get('version') ?? undefined));
+			const version = validate(versionSchema, sent.get('version') ?? undefined);
+			await finishFollowUp(person, followUpId, { isDone: sent.get('isDone') === 'true', version });
 		};
 		await orPageError(change());
 		redirect(303, `/mounts/${id}/fitted#dates`);

@@ -1,0 +1,2 @@
+/** A plain page for any phone: a link alone opens it. */
+export const csr = false;
