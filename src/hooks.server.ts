@@ -3,11 +3,13 @@ import type { Handle, HandleServerError, ServerInit } from '@sveltejs/kit';
 import { sequence } from '@sveltejs/kit/hooks';
 import { building } from '$app/environment';
 import { CLIENT_ADDRESS_HEADER, handle as handleAuth } from '$lib/server/auth';
+import { mustSetUpFactor } from '$lib/server/auth/second-factor';
 import { personOfSession } from '$lib/server/auth/sessions';
 import { boot, shutDown } from '$lib/server/boot';
 import { env, isSecureOrigin } from '$lib/server/env';
 import { AppError } from '$lib/server/errors';
 import { isForged } from '$lib/server/http/csrf';
+import { leadToSetUp } from '$lib/server/http/lead-to-set-up';
 import { secureHeaders } from '$lib/server/http/headers';
 import { problemResponse } from '$lib/server/http/problem';
 import { logger } from '$lib/server/logger';
@@ -24,7 +26,7 @@ export const init: ServerInit = async () => {
 const PROBES = new Set(['/healthz', '/readyz']);
 /** Sign-in happens in forms of our own; the library's own pages are not served. */
 const LIBRARY_PAGES = /^\/auth(\/|$)/;
-const OPENED_BY_LINK = /^\/(sheet|sign-in\/link|reminders)(\/|$)/;
+const OPENED_BY_LINK = /^\/(sheet|sign-in\/(link|invitation)|reminders)(\/|$)/;
 
 const number: Handle = ({ event, resolve }) => {
 	event.locals.requestId = randomUUID();
@@ -58,7 +60,9 @@ const identify: Handle = async ({ event, resolve }) => {
 		event.locals.person = await personOfSession(secret);
 		event.locals.sessionId = event.locals.person ? secret : null;
 	}
-	return resolve(event);
+	const { person } = event.locals;
+	const led = person && (await mustSetUpFactor(person)) ? leadToSetUp(event) : null;
+	return led ?? resolve(event);
 };
 
 const protect: Handle = async ({ event, resolve }) => {

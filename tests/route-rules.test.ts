@@ -51,6 +51,8 @@ describe('the rules of who may go where', () => {
 			'/readyz',
 			'/sign-in',
 			'/sign-in/link/[token]',
+			'/sign-in/second-step',
+			'/sign-in/invitation/[token]',
 			'/sign-out',
 			'/sheet/[token]',
 			'/reminders/[stop]',

@@ -3,7 +3,7 @@ export const VISITORS = ['nobody', 'installer', 'engineer', 'manager', 'customer
 export type Visitor = (typeof VISITORS)[number];
 
 /** Whose a route is. `anyone` needs no sign-in; what a link opens is held by its token. */
-type Audience = 'anyone' | 'workshop' | 'bench' | 'customer';
+type Audience = 'anyone' | 'workshop' | 'bench' | 'manager' | 'customer';
 
 export interface RouteRule {
 	/** As in the folder of routes, without the groups in brackets. */
@@ -13,7 +13,7 @@ export interface RouteRule {
 	owned?: true;
 	/** What the route exports, or the names of its form actions. */
 	methods: readonly string[];
-	/** GET answers with a redirect to where the work is. */
+	/** A good answer is a redirect to where the work is. */
 	leadsOn?: true;
 	/** Methods that fewer may use than the route is open to. */
 	only?: Readonly<Record<string, Audience>>;
@@ -86,6 +86,8 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 	page('/readyz', 'anyone'),
 	page('/sign-in', 'anyone', 'password', 'link'),
 	page('/sign-in/link/[token]', 'anyone', 'default'),
+	page('/sign-in/second-step', 'anyone', 'default'),
+	page('/sign-in/invitation/[token]', 'anyone', 'default'),
 	{ ...page('/sign-out', 'anyone', 'default'), leadsOn: true },
 	page('/sheet/[token]', 'anyone', 'acknowledge', 'ask'),
 
@@ -126,6 +128,14 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 	owned('/places/[placeId]/weather', 'workshop', 'read', 'take', 'putBack'),
 	page('/books', 'bench'),
 	owned('/books/[bookId]', 'bench'),
+	page('/people', 'manager', 'invite', 'again', 'withdraw'),
+	owned('/people/[personId]', 'manager', 'role', 'resetFactor', 'leave', 'comeBack'),
+	{ ...page('/second-factor', 'workshop', 'begin', 'confirm', 'renew', 'off'), leadsOn: true },
+	{ ...page('/shop', 'manager', 'details', 'logo', 'removeLogo', 'secondFactor'), leadsOn: true },
+	{ ...page('/audit', 'manager', 'check'), leadsOn: true },
+	page('/audit/audit.csv', 'manager'),
+	page('/shop/cautions', 'manager', 'default'),
+	page('/shop/retention', 'manager', 'default'),
 	page('/mailbox', 'workshop'),
 	owned('/mailbox/[messageId]', 'workshop'),
 
@@ -180,12 +190,28 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 	}),
 	api('/books', 'bench', 'GET'),
 	ownedApi('/books/[bookId]', 'bench', { GET: null }),
-	api('/simulations', 'workshop', 'POST')
+	api('/simulations', 'workshop', 'POST'),
+	api('/people', 'manager', 'GET'),
+	ownedApi('/people/[personId]/role', 'manager', { PUT: { role: 'engineer', version: 0 } }),
+	ownedApi('/people/[personId]/departure', 'manager', { POST: { version: 0 } }),
+	ownedApi('/people/[personId]/return', 'manager', { POST: { version: 0 } }),
+	ownedApi('/people/[personId]/second-factor', 'manager', { DELETE: null }),
+	api('/invitations', 'manager', 'POST'),
+	ownedApi('/invitations/[invitationId]/letter', 'manager', { POST: null }),
+	ownedApi('/invitations/[invitationId]/withdrawal', 'manager', { POST: null }),
+	api('/shop', 'manager', 'GET', 'PUT'),
+	api('/shop/logo', 'manager', 'POST', 'DELETE'),
+	api('/shop/second-factor', 'manager', 'PUT'),
+	api('/shop/cautions', 'manager', 'GET', 'PUT'),
+	api('/shop/retention', 'manager', 'GET', 'PUT'),
+	api('/audit', 'manager', 'GET'),
+	api('/audit/check', 'manager', 'POST')
 ];
 
 const AUDIENCES: Record<Exclude<Audience, 'anyone'>, readonly Visitor[]> = {
 	workshop: ['installer', 'engineer', 'manager', 'neighbour'],
 	bench: ['engineer', 'manager', 'neighbour'],
+	manager: ['manager', 'neighbour'],
 	customer: ['customer']
 };
 

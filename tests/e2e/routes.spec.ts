@@ -1,4 +1,5 @@
 import { readFileSync, readdirSync } from 'node:fs';
+import { randomUUID } from 'node:crypto';
 import { join } from 'node:path';
 import { expect, test, type APIRequestContext, type APIResponse } from '@playwright/test';
 import { ONCE } from './support';
@@ -34,6 +35,19 @@ function findToken(email: string): string {
 	throw new Error(`There is no sheet for ${email} in ${folder}.`);
 }
 
+/** Somebody of the shop, and somebody who was asked to join it. */
+async function findPeople(context: APIRequestContext): Promise<Ids> {
+	const email = `asked-${randomUUID()}@shop.example`;
+	const asked = await context.post('/api/v1/invitations', {
+		data: { name: 'Somebody asked', email, role: 'installer' }
+	});
+	expect(asked.status()).toBe(201);
+	const { people: staff } = await read<{ people: { id: number; role: string }[] }>(context, '/api/v1/people');
+	const installer = staff.find(({ role }) => role === 'installer');
+	const invitation = (await asked.json()) as { id: number };
+	return { personId: String(installer?.id ?? 'none'), invitationId: String(invitation.id) };
+}
+
 /** Ids of one demo job and everything that hangs on it, to put into the routes. */
 async function findIds(
 	context: APIRequestContext,
@@ -66,6 +80,7 @@ async function findIds(
 	const fitting = await read<{ followUps: Record[] }>(context, `/api/v1/mounts/${mountId}/fitting`);
 	const own = await (await customers.get('/my')).text();
 	return {
+		...(await findPeople(context)),
 		jobId,
 		mountId,
 		followUpId: of(fitting.followUps[0]),

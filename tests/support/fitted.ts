@@ -9,8 +9,8 @@ export async function makeRecommended(person: SignedInPerson) {
 	const { jobId, hot, cool } = await makeAssessableJob(person);
 	const [ofHot] = await assessJob(person, jobId);
 	const why = { decidedBy: 'Ilse Tarn', reason: 'No other place; a duct is fitted before summer.' };
-	await makeRecommendation(person, { assessmentId: ofHot!.id, ...why });
-	return { jobId, mountId: hot.id, otherMountId: cool.id, assessment: ofHot! };
+	const recommendation = await makeRecommendation(person, { assessmentId: ofHot!.id, ...why });
+	return { jobId, mountId: hot.id, otherMountId: cool.id, assessment: ofHot!, recommendation };
 }
 
 export const FITTED = {

@@ -9,7 +9,8 @@ import { postLetter, sendDue } from '../../src/lib/server/mail/outbox';
 export async function post(
 	workshopId: number,
 	recipient: string,
-	textBody = 'Hello.'
+	textBody = 'Hello.',
+	htmlBody = '<p>Hello.</p>'
 ): Promise<OutgoingMail> {
 	await inTransaction((transaction) =>
 		postLetter(
@@ -19,7 +20,7 @@ export async function post(
 				recipient,
 				subject: 'A day at 45 °C',
 				textBody,
-				htmlBody: '<p>Hello.</p>'
+				htmlBody
 			},
 			transaction
 		)

@@ -7,7 +7,9 @@ export const LETTER_KINDS = {
 	question: 'A question of the customer',
 	answer: 'An answer to the customer',
 	reminder: 'Reminder of a follow-up',
-	'sign-in': 'Link to sign in'
+	'sign-in': 'Link to sign in',
+	invitation: 'Invitation to the workshop',
+	'second-factor': 'A second factor that was reset'
 } as const;
 export type LetterKind = keyof typeof LETTER_KINDS;
 

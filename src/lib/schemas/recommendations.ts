@@ -1,7 +1,9 @@
 import { z } from 'zod';
 import { assessmentRowSchema, type AssessmentView, type MountOutcome } from './assessments';
 import { idSchema, words } from './fields';
+import { cautionLineSchema } from './caution-texts';
 import { preDrillSnapshotSchema } from './pre-drill';
+import type { LogoView, WorkshopHead } from './shop';
 
 /** Going ahead against "cuts out" takes a named person and a written reason; otherwise neither is asked for. */
 export const recommendationInputSchema = z.object({
@@ -21,6 +23,8 @@ export const recommendationSchema = z.object({
 	reason: z.string().nullable(),
 	/** The check before drilling as it stood; null for those that were made before there was one. */
 	preDrill: preDrillSnapshotSchema.nullable(),
+	/** As they read when it was issued; null for those from before they were kept. */
+	cautions: z.array(cautionLineSchema).nullable(),
 	recommendedBy: z.string(),
 	createdAt: z.iso.datetime()
 });
@@ -30,7 +34,8 @@ export type RecommendationView = z.infer<typeof recommendationSchema>;
 export interface RecommendationDocument {
 	recommendation: RecommendationView;
 	assessment: AssessmentView;
-	workshop: { name: string; address: string; phone: string; email: string };
+	workshop: WorkshopHead;
+	logo: LogoView | null;
 	customer: { phone: string; email: string };
 	/** The mounts that were not chosen, as they stood when the recommendation was made. */
 	others: MountOutcome[];

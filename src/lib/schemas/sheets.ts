@@ -5,6 +5,7 @@ import type { PositionKind } from './survey';
 import { email, idSchema, words } from './fields';
 import type { Question } from './questions';
 import { VERDICTS, type Verdict } from './verdicts';
+import type { LogoView, WorkshopHead } from './shop';
 
 /** What the picture is drawn from: kept with the words, so that the page never changes. */
 export interface SheetRibbon extends Pick<
@@ -17,7 +18,7 @@ export interface SheetRibbon extends Pick<
 
 /** The customer's page, word for word as it was sent; its hash is what an acknowledgement is tied to. */
 export interface SheetContent {
-	workshop: { name: string; address: string; phone: string; email: string };
+	workshop: WorkshopHead;
 	preparedBy: string;
 	preparedOn: string;
 	jobNumber: number;
@@ -100,6 +101,8 @@ export interface SheetView {
 	content: SheetContent;
 	contentSha256: string;
 	textVersion: string;
+	/** Of the shop, as it was when the page was sent. */
+	logo: LogoView | null;
 	/** When the shop sent this customer a later page for the same job. */
 	newerSentAt: string | null;
 	acknowledgement: AcknowledgementView | null;

@@ -7,6 +7,8 @@ import { tokenHash } from '../hash';
 import { logger } from '../logger';
 import { passwordMatches } from './passwords';
 import { giveBack, spend } from './rate-limit';
+import { hasSecondFactor } from './second-factor';
+import { SecondStepNeeded, passSecondStep } from './second-step';
 import { ABSOLUTE_MS, closeSession, openSession } from './sessions';
 
 declare module '@auth/core/types' {
@@ -25,6 +27,14 @@ const BASE_PATH_TWICE = 'env-url-basepath-redundant';
 /** Forwarded by hooks.server.ts from the connection itself, so that nobody can choose it. */
 export const CLIENT_ADDRESS_HEADER = 'x-soakline-client';
 
+const letIn = ({ id, name, email }: Person) => ({ id: String(id), name, email });
+
+/** The first step was right; who has a second factor is not in before it is right too. */
+async function letInOrAsk(person: Person) {
+	if (await hasSecondFactor(person.id)) throw new SecondStepNeeded(person.id);
+	return letIn(person);
+}
+
 async function byPassword(credentials: Partial<Record<string, unknown>>, request: Request) {
 	const parsed = signInSchema.safeParse(credentials);
 	if (!parsed.success) throw new CredentialsSignin();
@@ -39,7 +49,7 @@ async function byPassword(credentials: Partial<Record<string, unknown>>, request
 	if (!(await passwordMatches(password, person?.passwordHash ?? null)) || !person)
 		throw new CredentialsSignin();
 	for (const limit of limits) await giveBack(limit);
-	return { id: String(person.id), name: person.name, email: person.email };
+	return letInOrAsk(person);
 }
 
 async function byMailedLink(credentials: Partial<Record<string, unknown>>) {
@@ -50,12 +60,18 @@ async function byMailedLink(credentials: Partial<Record<string, unknown>>) {
 	if (!link || used !== 1 || link.expiresAt.getTime() < Date.now()) throw new CredentialsSignin();
 	const person = await Person.findOne({ where: { id: link.personId, active: true } });
 	if (!person) throw new CredentialsSignin();
-	return { id: String(person.id), name: person.name, email: person.email };
+	return letInOrAsk(person);
+}
+
+async function bySecondStep(credentials: Partial<Record<string, unknown>>) {
+	const person = await passSecondStep(String(credentials.token ?? ''), String(credentials.code ?? ''));
+	if (!person) throw new CredentialsSignin();
+	return letIn(person);
 }
 
 export const { handle, signIn, signOut } = SvelteKitAuth(() => {
 	const secure = isSecureOrigin();
-	const credentials = { email: {}, password: {}, token: {} };
+	const credentials = { email: {}, password: {}, token: {}, code: {} };
 	return Promise.resolve({
 		trustHost: true,
 		secret: env().AUTH_SECRET,
@@ -70,7 +86,8 @@ export const { handle, signIn, signOut } = SvelteKitAuth(() => {
 		},
 		providers: [
 			Credentials({ id: 'password', name: 'Password', credentials, authorize: byPassword }),
-			Credentials({ id: 'link', name: 'Mailed link', credentials, authorize: byMailedLink })
+			Credentials({ id: 'link', name: 'Mailed link', credentials, authorize: byMailedLink }),
+			Credentials({ id: 'second-step', name: 'Second step', credentials, authorize: bySecondStep })
 		],
 		callbacks: {
 			async jwt({ token, user }) {
@@ -89,7 +106,9 @@ export const { handle, signIn, signOut } = SvelteKitAuth(() => {
 		},
 		logger: {
 			error: (error: Error) => {
-				if (error.name !== 'CredentialsSignin') logger.error({ err: error.cause ?? error }, 'sign-in failed');
+				const cause = error.cause as { err?: unknown } | undefined;
+				if (error.name === 'CredentialsSignin' || cause?.err instanceof SecondStepNeeded) return;
+				logger.error({ err: error.cause ?? error }, 'sign-in failed');
 			},
 			warn: (code: string) => {
 				if (code !== BASE_PATH_TWICE) logger.warn({ code }, 'sign-in warning');

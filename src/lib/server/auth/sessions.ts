@@ -1,7 +1,8 @@
 import { randomBytes } from 'node:crypto';
 import type { Transaction } from 'sequelize';
 import type { SignedInPerson } from '$lib/schemas/people';
-import { Person, Session, Workshop } from '../db/models';
+import { connection } from '../db/connection';
+import { Person, Session, SignInLink, SignInStep, Workshop } from '../db/models';
 import { inTransaction } from '../db/transaction';
 import { sha256 } from '../hash';
 import { record } from '../services/audit';
@@ -18,6 +19,11 @@ export async function openSession(personId: number): Promise<string> {
 	const now = new Date();
 	await inTransaction(async (transaction) => {
 		await Session.create({ id: sha256(secret), personId, createdAt: now, lastSeenAt: now }, { transaction });
+		// Not an edit of the person: their version stays, for whoever has them open.
+		await connection().query('UPDATE people SET last_signed_in_at = :now WHERE id = :personId', {
+			replacements: { now, personId },
+			transaction
+		});
 		await note(personId, 'person.signed-in', transaction);
 	});
 	return secret;
@@ -30,6 +36,13 @@ export async function closeSession(secret: string): Promise<void> {
 		await session.update({ revokedAt: new Date() }, { transaction });
 		await note(session.personId, 'person.signed-out', transaction);
 	});
+}
+
+/** Ends every session of a person, on any device, from their next request on. */
+export async function endSessions(personId: number, transaction: Transaction): Promise<void> {
+	await Session.update({ revokedAt: new Date() }, { where: { personId, revokedAt: null }, transaction });
+	await SignInLink.destroy({ where: { personId }, transaction });
+	await SignInStep.destroy({ where: { personId }, transaction });
 }
 
 async function note(personId: number, action: string, transaction: Transaction): Promise<void> {

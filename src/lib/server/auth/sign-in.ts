@@ -1,6 +1,7 @@
-import type { RequestEvent } from '@sveltejs/kit';
+import { redirect, type RequestEvent } from '@sveltejs/kit';
 import { AuthError } from '@auth/sveltekit';
 import { AppError } from '../errors';
+import { SecondStepNeeded, beginSecondStep } from './second-step';
 import { signIn, signOut } from '.';
 
 /** Where to go after sign-in: a path of ours, never an address that somebody put into a link. */
@@ -9,7 +10,24 @@ export function safeReturnPath(to: string | null): string {
 }
 
 type Credentials =
-	{ provider: 'password'; email: string; password: string } | { provider: 'link'; token: string };
+	| { provider: 'password'; email: string; password: string }
+	| { provider: 'link'; token: string }
+	| { provider: 'second-step'; token: string; code: string };
+
+const REFUSALS: Record<Credentials['provider'], string> = {
+	password: 'The e-mail or the password is not right.',
+	link: 'This link has been used or is too old. Ask for a new one.',
+	'second-step': 'This code is not right, or it was used already. Wait for the next one.'
+};
+
+async function askSecondStep(
+	{ cookies }: RequestEvent,
+	{ personId }: SecondStepNeeded,
+	to: string
+): Promise<never> {
+	await beginSecondStep(cookies, personId);
+	redirect(303, `/sign-in/second-step${to === '/' ? '' : `?to=${encodeURIComponent(to)}`}`);
+}
 
 /** Signs in and redirects; answers with one sentence when that fails, the same for every reason. */
 export async function signInWith(event: RequestEvent, credentials: Credentials, to: string): Promise<string> {
@@ -24,10 +42,8 @@ export async function signInWith(event: RequestEvent, credentials: Credentials, 
 	} catch (error) {
 		if (!(error instanceof AuthError)) throw error;
 		const cause = error.cause?.err;
-		if (cause instanceof AppError) return cause.message;
-		return provider === 'link'
-			? 'This link has been used or is too old. Ask for a new one.'
-			: 'The e-mail or the password is not right.';
+		if (cause instanceof SecondStepNeeded) return askSecondStep(event, cause, to);
+		return cause instanceof AppError ? cause.message : REFUSALS[provider];
 	}
 	return '';
 }

@@ -4,6 +4,7 @@ import type { LetterKind } from '$lib/schemas/letters';
 import { OutgoingMail } from '../db/models';
 import { outsideTransaction } from '../db/transaction';
 import { logger } from '../logger';
+import { withLetterhead } from './letterhead';
 import { isFinalRefusal, sayMailError } from './mail-error';
 import { closeTransport, deliver, type Letter } from './transport';
 
@@ -24,8 +25,9 @@ export type NewLetter = Omit<Letter, 'messageId'> & {
 
 /** Puts a letter into the same transaction as what it tells of: both are kept, or neither. */
 export async function postLetter(letter: NewLetter, transaction: Transaction): Promise<void> {
+	const htmlBody = await withLetterhead(letter.workshopId, letter.htmlBody, transaction);
 	await OutgoingMail.create(
-		{ ...letter, messageId: `<${randomUUID()}@soakline.invalid>`, nextAttemptAt: new Date() },
+		{ ...letter, htmlBody, messageId: `<${randomUUID()}@soakline.invalid>`, nextAttemptAt: new Date() },
 		{ transaction }
 	);
 	transaction.afterCommit(() => outsideTransaction(nudge));

@@ -1,5 +1,6 @@
 import { createTransport, type Transporter } from 'nodemailer';
 import { env } from '../env';
+import { listPictures } from './letterhead';
 
 export interface Letter {
 	messageId: string;
@@ -43,7 +44,8 @@ export async function deliver(letter: Letter): Promise<void> {
 		...(stopUrl ? { headers: stopHeaders(stopUrl) } : {}),
 		subject,
 		text: textBody,
-		html: htmlBody
+		html: htmlBody,
+		attachments: await listPictures(htmlBody)
 	});
 }
 

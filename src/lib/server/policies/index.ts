@@ -3,6 +3,7 @@ import { AppError } from '../errors';
 
 const WORKSHOP: readonly Role[] = ['installer', 'engineer', 'manager'];
 const BENCH: readonly Role[] = ['engineer', 'manager'];
+const MANAGER: readonly Role[] = ['manager'];
 
 /**
  * Who may do what, deny by default: an action that is not in this table cannot be done.
@@ -31,6 +32,11 @@ export const RULES = {
 	'questions.ask': ['customer'],
 	'books.read': BENCH,
 	'mailbox.read': WORKSHOP,
+	'second-factor.own': WORKSHOP,
+	'people.read': MANAGER,
+	'people.write': MANAGER,
+	'shop.write': MANAGER,
+	'audit.read': MANAGER,
 	'documents.read-own': ['customer']
 } as const satisfies Record<string, readonly Role[]>;
 

@@ -40,6 +40,11 @@ const EXPECTED: Record<Action, string> = {
 	'questions.ask': 'c',
 	'books.read': 'em',
 	'mailbox.read': 'iem',
+	'second-factor.own': 'iem',
+	'people.read': 'm',
+	'people.write': 'm',
+	'shop.write': 'm',
+	'audit.read': 'm',
 	'documents.read-own': 'c'
 };
 

@@ -3,12 +3,13 @@ import type { RecommendationView } from '$lib/schemas/recommendations';
 import type { Recommendation } from '../db/models';
 
 export function presentRecommendation(
-	{ id, jobId, againstVerdict, decidedBy, reason, preDrill, createdAt }: Recommendation,
+	{ id, jobId, againstVerdict, decidedBy, reason, preDrill, cautions, createdAt }: Recommendation,
 	more: { jobNumber: number; assessment: AssessmentRow; recommendedBy: string }
 ): RecommendationView {
 	return {
 		...{ id, jobId, againstVerdict, decidedBy, reason },
 		preDrill: preDrill ?? null,
+		cautions: cautions ?? null,
 		...more,
 		createdAt: createdAt.toISOString()
 	};

@@ -72,6 +72,7 @@ function write(
 		inputs: { ...INPUTS, battery: { ...INPUTS.battery, ...battery } },
 		result: { ...RESULT, ...result },
 		override: null,
+		cautions: null,
 		others: [],
 		beside: BESIDE,
 		...changes

@@ -25,6 +25,8 @@ export interface SheetSource {
 	inputs: AssessmentInputs;
 	result: AssessmentResult;
 	override: SheetContent['override'];
+	/** As they were issued with the recommendation; null for those from before they were kept. */
+	cautions: SheetContent['cautions'] | null;
 	/** The newest answer for each other position of the job. */
 	others: SheetContent['alternatives'];
 	beside: Omit<SheetBeside, 'chemistry' | 'placeName'>;
@@ -196,6 +198,6 @@ export function writeSheetContent(source: SheetSource): SheetContent {
 			placeName: inputs.place.name
 		}),
 		ribbon: drawnFrom(source),
-		cautions: listCautions(battery.chemistry).map(({ title, text }) => ({ title, text }))
+		cautions: source.cautions ?? listCautions(battery.chemistry).map(({ title, text }) => ({ title, text }))
 	};
 }

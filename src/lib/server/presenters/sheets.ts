@@ -1,4 +1,5 @@
 import type { Question } from '$lib/schemas/questions';
+import type { LogoView } from '$lib/schemas/shop';
 import type { AcknowledgementView, MySheet, SheetStatus, SheetView } from '$lib/schemas/sheets';
 import type { Acknowledgement, OutgoingMail, Sheet } from '../db/models';
 
@@ -29,11 +30,11 @@ export function presentSheetStatus(sheet: Sheet, letter: OutgoingMail, sentBy: s
 export function presentSheet(
 	{ content, contentSha256, textVersion, acknowledgement }: Sheet,
 	newer: Sheet | null,
-	questions: Question[]
+	more: { questions: Question[]; logo: LogoView | null }
 ): SheetView {
 	return {
 		newerSentAt: isoOrNull(newer?.createdAt),
-		...{ content, contentSha256, textVersion, questions },
+		...{ content, contentSha256, textVersion, ...more },
 		acknowledgement: acknowledgement ? presentAcknowledgement(acknowledgement) : null
 	};
 }

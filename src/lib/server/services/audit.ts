@@ -3,9 +3,9 @@ import { QueryTypes } from 'sequelize';
 import type { SignedInPerson } from '$lib/schemas/people';
 import { connection } from '../db/connection';
 import { AuditEntry } from '../db/models';
-import { canonicalJson, sha256 } from '../hash';
+import { GENESIS, chainHash, type Chained } from './audit-chain';
 
-const GENESIS = '0'.repeat(64);
+export { findBreak } from './audit-walk';
 
 export interface AuditRecord {
 	workshopId: number;
@@ -15,22 +15,6 @@ export interface AuditRecord {
 	subjectType: string;
 	subjectId: number;
 	detail?: Record<string, unknown>;
-}
-
-interface Chained {
-	workshopId: number;
-	sequence: number;
-	at: Date;
-	personId: number | null;
-	action: string;
-	subjectType: string;
-	subjectId: number;
-	detail: Record<string, unknown>;
-	previousHash: string;
-}
-
-function chainHash(entry: Chained): string {
-	return sha256(canonicalJson({ ...entry, at: entry.at.toISOString() }));
 }
 
 /** Appends one entry to the workshop's chain, inside the transaction whose change it tells of. */
@@ -85,28 +69,4 @@ export async function recordBy(
 		},
 		transaction
 	);
-}
-
-/** Walks a workshop's chain; says where it first fails, or null when it is whole to its head. */
-export async function findBreak(workshopId: number): Promise<string | null> {
-	const entries = await AuditEntry.findAll({ where: { workshopId }, order: [['sequence', 'ASC']] });
-	let previousHash = GENESIS;
-	for (const [index, entry] of entries.entries()) {
-		const { sequence, at, personId, action, subjectType, subjectId, detail, hash } = entry;
-		if (sequence !== index + 1) return `entry ${index + 1} is missing`;
-		if (entry.previousHash !== previousHash) return `entry ${sequence} does not follow the one before it`;
-		const expected = chainHash({
-			...{ workshopId, sequence, at, personId, action, subjectType, subjectId, detail },
-			previousHash
-		});
-		if (expected !== hash) return `entry ${sequence} was changed`;
-		previousHash = hash;
-	}
-	const [head] = await connection().query<{ sequence: number; hash: string }>(
-		'SELECT sequence, hash FROM audit_heads WHERE workshop_id = :workshopId',
-		{ replacements: { workshopId }, type: QueryTypes.SELECT }
-	);
-	if (head && (head.sequence !== entries.length || head.hash !== previousHash))
-		return 'the end of the trail is cut off';
-	return null;
 }

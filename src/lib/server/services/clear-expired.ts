@@ -8,6 +8,7 @@ const EVERY_MS = 60 * 60_000;
 const EXPIRED: readonly { table: string; past: string }[] = [
 	{ table: 'idempotency_keys', past: 'created_at < UTC_TIMESTAMP(3) - INTERVAL 1 DAY' },
 	{ table: 'sign_in_links', past: 'expires_at < UTC_TIMESTAMP(3)' },
+	{ table: 'sign_in_steps', past: 'expires_at < UTC_TIMESTAMP(3)' },
 	{ table: 'rate_limits', past: 'window_ends_at < UTC_TIMESTAMP(3)' },
 	// A session is over after eight hours; for a month it can still be seen who was in.
 	{ table: 'sessions', past: 'created_at < UTC_TIMESTAMP(3) - INTERVAL 30 DAY' }

@@ -14,8 +14,10 @@ import { allow } from '../policies';
 import { presentRecommendation } from '../presenters/recommendations';
 import { getAssessment, presentRows } from './assessments';
 import { recordBy } from './audit';
+import { listIssuedCautions } from './caution-texts';
 import { WITHOUT_TEXTS, newestByMount, updateJobOutcome } from './job-outcome';
 import { snapshotPreDrill } from './pre-drill';
+import { findLogo, headOf } from './shop';
 
 async function show(recommendation: Recommendation): Promise<RecommendationView> {
 	const { jobId, assessmentId, createdBy } = recommendation;
@@ -73,8 +75,12 @@ export async function makeRecommendation(
 		const job = await Job.findOne({ where: { id: assessment.jobId, workshopId }, lock: true });
 		if (!job) throw notFound('job');
 		const preDrill = await snapshotPreDrill(person, assessment.mountId);
+		const cautions = await listIssuedCautions(workshopId, person.workshopName, assessment.chemistry);
 		const made = { workshopId, jobId: job.id, assessmentId: assessment.id, createdBy: person.id };
-		const recommendation = await Recommendation.create({ ...made, ...override, preDrill }, { transaction });
+		const recommendation = await Recommendation.create(
+			{ ...made, ...override, preDrill, cautions },
+			{ transaction }
+		);
 		await updateJobOutcome(job, transaction, 'recommended');
 		const subject = { type: 'recommendation', id: recommendation.id };
 		const detail = {
@@ -146,11 +152,11 @@ export async function getRecommendationDocument(
 	const job = await Job.findByPk(row.jobId);
 	const customer = job && (await Customer.findByPk(job.customerId));
 	if (!workshop || !customer) throw notFound('recommendation');
-	const { name, address, phone, email } = workshop;
 	return {
 		recommendation,
 		assessment,
-		workshop: { name, address, phone, email },
+		workshop: headOf(workshop),
+		logo: await findLogo(workshop.id, workshop.logoSha256),
 		customer: { phone: customer.phone, email: customer.email },
 		others: await othersThen(row, assessment.mountId)
 	};

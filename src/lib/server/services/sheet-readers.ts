@@ -10,6 +10,7 @@ import { allow } from '../policies';
 import { presentAcknowledgement, presentMySheet, presentSheet } from '../presenters/sheets';
 import { record } from './audit';
 import { readThread } from './question-threads';
+import { findLogo } from './shop';
 
 const ACKNOWLEDGEMENT = { model: Acknowledgement, as: 'acknowledgement' };
 
@@ -88,11 +89,17 @@ async function noteFirstOpening({ id, workshopId }: Sheet, reader: Reader): Prom
 	});
 }
 
+async function show(sheet: Sheet): Promise<SheetView> {
+	const logo = await findLogo(sheet.workshopId, sheet.content.workshop.logoSha256);
+	const questions = await readThread(sheet.jobId);
+	return presentSheet(sheet, await findNewer(sheet), { questions, logo });
+}
+
 /** The page behind a link. To open it acknowledges nothing: programs that scan mail open links too. */
 export async function openSheet(token: string): Promise<SheetView> {
 	const sheet = await readSheet(byLink(token));
 	if (sheet.firstOpenedAt === null) await noteFirstOpening(sheet, null);
-	return presentSheet(sheet, await findNewer(sheet), await readThread(sheet.jobId));
+	return show(sheet);
 }
 
 export async function listMySheets(person: SignedInPerson): Promise<MySheet[]> {
@@ -107,7 +114,7 @@ export async function listMySheets(person: SignedInPerson): Promise<MySheet[]> {
 export async function getMySheet(person: SignedInPerson, sheetId: number): Promise<SheetView> {
 	const sheet = await readSheet(ofOwn(person, sheetId));
 	if (sheet.firstOpenedAt === null) await noteFirstOpening(sheet, person);
-	return presentSheet(sheet, await findNewer(sheet), await readThread(sheet.jobId));
+	return show(sheet);
 }
 
 async function storeAcknowledgement(

@@ -30,6 +30,7 @@ export async function readSheetSource(
 			year: touringOf(assessment.inputs),
 			elsewhere: elsewhere.map(({ name, life }) => ({ label: name, life }))
 		},
+		cautions: recommendation.cautions,
 		preparedBy: person.name,
 		preparedAt: new Date(),
 		assessmentId: assessment.id,

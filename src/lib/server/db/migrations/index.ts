@@ -46,6 +46,16 @@ import { migration as m063 } from './063-follow-ups';
 import { migration as m064 } from './064-field-notes';
 import { migration as m065 } from './065-field-notes-no-update';
 import { migration as m066 } from './066-field-notes-no-delete';
+import { migration as m090 } from './090-invitations';
+import { migration as m091 } from './091-people-seen';
+import { migration as m092 } from './092-second-factors';
+import { migration as m093 } from './093-recovery-codes';
+import { migration as m094 } from './094-sign-in-steps';
+import { migration as m095 } from './095-workshops-shop';
+import { migration as m096 } from './096-workshop-logos';
+import { migration as m097 } from './097-caution-texts';
+import { migration as m098 } from './098-recommendations-cautions';
+import { migration as m099 } from './099-audit-checks';
 import { migration as m100 } from './100-erasures';
 import { migration as m101 } from './101-customer-messages';
 import { migration as m102 } from './102-customer-messages-no-update';
@@ -104,6 +114,16 @@ export const migrations: Migration[] = [
 	m064,
 	m065,
 	m066,
+	m090,
+	m091,
+	m092,
+	m093,
+	m094,
+	m095,
+	m096,
+	m097,
+	m098,
+	m099,
 	m100,
 	m101,
 	m102,

@@ -1,9 +1,15 @@
 import type { Sequelize } from 'sequelize';
 import { Workshop, initWorkshop } from './workshop';
+import { WorkshopLogo, initWorkshopLogo } from './workshop-logo';
+import { CautionText, initCautionText } from './caution-text';
 import { Customer, initCustomer } from './customer';
 import { Person, initPerson } from './person';
+import { Invitation, initInvitation } from './invitation';
 import { Session, initSession } from './session';
 import { SignInLink, initSignInLink } from './sign-in-link';
+import { SignInStep, initSignInStep } from './sign-in-step';
+import { SecondFactor, initSecondFactor } from './second-factor';
+import { RecoveryCode, initRecoveryCode } from './recovery-code';
 import { Vehicle, initVehicle } from './vehicle';
 import { BatteryRecord, initBatteryRecord } from './battery-record';
 import { Place, initPlace } from './place';
@@ -24,14 +30,21 @@ import { FollowUp, initFollowUp } from './follow-up';
 import { FieldNote, initFieldNote } from './field-note';
 import { CustomerMessage, initCustomerMessage } from './customer-message';
 import { OutgoingMail, initOutgoingMail } from './outgoing-mail';
+import { AuditCheck, initAuditCheck } from './audit-check';
 import { AuditEntry, initAuditEntry } from './audit-entry';
 
 export {
 	Workshop,
+	WorkshopLogo,
+	CautionText,
 	Customer,
 	Person,
+	Invitation,
 	Session,
 	SignInLink,
+	SignInStep,
+	SecondFactor,
+	RecoveryCode,
 	Vehicle,
 	BatteryRecord,
 	Place,
@@ -52,15 +65,22 @@ export {
 	FieldNote,
 	CustomerMessage,
 	OutgoingMail,
+	AuditCheck,
 	AuditEntry
 };
 
 const initialisers = [
 	initWorkshop,
+	initWorkshopLogo,
+	initCautionText,
 	initCustomer,
 	initPerson,
+	initInvitation,
 	initSession,
 	initSignInLink,
+	initSignInStep,
+	initSecondFactor,
+	initRecoveryCode,
 	initVehicle,
 	initBatteryRecord,
 	initPlace,
@@ -81,6 +101,7 @@ const initialisers = [
 	initFieldNote,
 	initCustomerMessage,
 	initOutgoingMail,
+	initAuditCheck,
 	initAuditEntry
 ];
 

@@ -6,7 +6,18 @@ import {
 	type Sequelize
 } from 'sequelize';
 import type { Role } from '$lib/schemas/people';
-import { edited, flag, id, moment, optionalReference, optionalText, reference, text, whole } from './base';
+import {
+	edited,
+	flag,
+	id,
+	moment,
+	optionalMoment,
+	optionalReference,
+	optionalText,
+	reference,
+	text,
+	whole
+} from './base';
 
 export class Person extends Model<InferAttributes<Person>, InferCreationAttributes<Person>> {
 	declare id: CreationOptional<number>;
@@ -17,6 +28,8 @@ export class Person extends Model<InferAttributes<Person>, InferCreationAttribut
 	declare role: Role;
 	declare passwordHash: CreationOptional<string | null>;
 	declare active: CreationOptional<boolean>;
+	declare lastSignedInAt: CreationOptional<Date | null>;
+	declare leftAt: CreationOptional<Date | null>;
 	declare version: CreationOptional<number>;
 	declare createdAt: CreationOptional<Date>;
 	declare updatedAt: CreationOptional<Date>;
@@ -33,6 +46,8 @@ export function initPerson(sequelize: Sequelize): void {
 			role: text,
 			passwordHash: optionalText,
 			active: { ...flag, defaultValue: true },
+			lastSignedInAt: optionalMoment,
+			leftAt: optionalMoment,
 			version: { ...whole, defaultValue: 0 },
 			createdAt: moment,
 			updatedAt: moment

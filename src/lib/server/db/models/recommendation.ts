@@ -5,6 +5,7 @@ import {
 	type InferCreationAttributes,
 	type Sequelize
 } from 'sequelize';
+import type { CautionLine } from '$lib/schemas/caution-texts';
 import type { PreDrillSnapshot } from '$lib/schemas/pre-drill';
 import { flag, id, moment, optionalJson, optionalText, reference, writtenOnce } from './base';
 
@@ -21,6 +22,8 @@ export class Recommendation extends Model<
 	declare reason: string | null;
 	/** The check before drilling as it stood; null for those that were made before there was one. */
 	declare preDrill: CreationOptional<PreDrillSnapshot | null>;
+	/** The cautions as they read when it was issued; null for those from before they were kept. */
+	declare cautions: CreationOptional<CautionLine[] | null>;
 	declare createdBy: number;
 	declare createdAt: CreationOptional<Date>;
 }
@@ -36,6 +39,7 @@ export function initRecommendation(sequelize: Sequelize): void {
 			decidedBy: optionalText,
 			reason: optionalText,
 			preDrill: optionalJson,
+			cautions: optionalJson,
 			createdBy: reference,
 			createdAt: moment
 		},

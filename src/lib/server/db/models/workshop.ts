@@ -1,11 +1,12 @@
 import {
+	DataTypes,
 	Model,
 	type CreationOptional,
 	type InferAttributes,
 	type InferCreationAttributes,
 	type Sequelize
 } from 'sequelize';
-import { edited, id, moment, text, textOrEmpty, whole } from './base';
+import { edited, flag, id, moment, optionalText, text, textOrEmpty, whole } from './base';
 
 export class Workshop extends Model<InferAttributes<Workshop>, InferCreationAttributes<Workshop>> {
 	declare id: CreationOptional<number>;
@@ -13,6 +14,13 @@ export class Workshop extends Model<InferAttributes<Workshop>, InferCreationAttr
 	declare address: CreationOptional<string>;
 	declare phone: CreationOptional<string>;
 	declare email: CreationOptional<string>;
+	declare businessNumber: CreationOptional<string>;
+	declare web: CreationOptional<string>;
+	/** Of its logos the one that is printed now. */
+	declare logoSha256: CreationOptional<string | null>;
+	declare requiresSecondFactor: CreationOptional<boolean>;
+	/** Customers' personal data go so many years after the last change to their jobs; null keeps them. */
+	declare retentionYears: CreationOptional<number | null>;
 	declare nextJobNumber: CreationOptional<number>;
 	declare version: CreationOptional<number>;
 	declare createdAt: CreationOptional<Date>;
@@ -27,6 +35,11 @@ export function initWorkshop(sequelize: Sequelize): void {
 			address: textOrEmpty,
 			phone: textOrEmpty,
 			email: textOrEmpty,
+			businessNumber: textOrEmpty,
+			web: textOrEmpty,
+			logoSha256: { ...optionalText, field: 'logo_sha256' },
+			requiresSecondFactor: { ...flag, defaultValue: false },
+			retentionYears: { type: DataTypes.TINYINT.UNSIGNED, allowNull: true },
 			nextJobNumber: { ...whole, defaultValue: 1 },
 			version: { ...whole, defaultValue: 0 },
 			createdAt: moment,

@@ -1,4 +1,5 @@
 import type { Operation } from '../operation';
+import { auditOperations } from './audit';
 import { batteryOperations } from './batteries';
 import { customerOperations } from './customers';
 import { assessmentOperations } from './assessments';
@@ -7,12 +8,14 @@ import { dayPlanOperations } from './day-plans';
 import { fittingOperations } from './fittings';
 import { jobOperations } from './jobs';
 import { mountOperations } from './mounts';
+import { peopleOperations } from './people';
 import { placeOperations } from './places';
 import { preDrillOperations } from './pre-drill';
 import { questionOperations } from './questions';
 import { recommendationOperations } from './recommendations';
 import { remedyOperations } from './remedies';
 import { sheetOperations } from './sheets';
+import { shopOperations } from './shop';
 import { simulationOperations } from './simulations';
 import { vehicleOperations } from './vehicles';
 
@@ -33,5 +36,8 @@ export const OPERATIONS: readonly Operation[] = [
 	assessmentOperations,
 	recommendationOperations,
 	remedyOperations,
-	simulationOperations
+	simulationOperations,
+	peopleOperations,
+	shopOperations,
+	auditOperations
 ].flatMap((group) => Object.values(group) as unknown as Operation[]);

@@ -11,7 +11,7 @@ import type { PageServerLoad } from './$types';
 export const load: PageServerLoad = async (event) => {
 	const person = guard(event, 'assessments.read');
 	const id = pageId(event.params.recommendationId);
-	const { recommendation, assessment, workshop, customer, others } = await orPageError(
+	const { recommendation, assessment, workshop, logo, customer, others } = await orPageError(
 		getRecommendationDocument(person, id)
 	);
 	const { inputs, result } = assessment;
@@ -20,7 +20,7 @@ export const load: PageServerLoad = async (event) => {
 	const { positionKind } = inputs.mount.survey;
 	const ribbon = toRibbonData(result, dayLimitsOf(inputs.battery), positionKind, outlook.day.band);
 	return {
-		...{ recommendation, workshop, others, ribbon },
+		...{ recommendation, workshop, logo, others, ribbon },
 		customer: { name: inputs.customerName, ...customer },
 		chemistry: inputs.battery.chemistry,
 		ledger: result.ledger,

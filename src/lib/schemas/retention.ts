@@ -1,0 +1,31 @@
+import { z } from 'zod';
+import { versionSchema } from './fields';
+
+/** So long customers' personal data may be kept; "none" keeps them. */
+export const RETENTION_YEARS = [2, 3, 5, 7, 10] as const;
+
+const years = z.union(RETENTION_YEARS.map((each) => z.literal(each))).nullable();
+export const retentionInputSchema = z.object({ years, version: versionSchema });
+export type RetentionInput = z.infer<typeof retentionInputSchema>;
+
+/** Somebody whose data are older than the shop means to keep them. */
+export const retainedCustomerSchema = z.object({
+	id: z.number().int(),
+	name: z.string(),
+	jobs: z.number().int(),
+	lastChangedOn: z.iso.date()
+});
+export type RetainedCustomer = z.infer<typeof retainedCustomerSchema>;
+
+export const retentionSchema = z.object({
+	years,
+	/** Of the shop. */
+	version: versionSchema,
+	/** Whom the years that were asked for would reach today, the oldest first. */
+	preview: z.object({
+		years,
+		total: z.number().int(),
+		customers: z.array(retainedCustomerSchema)
+	})
+});
+export type RetentionView = z.infer<typeof retentionSchema>;

@@ -1,0 +1,102 @@
+import type { AuditRow } from '$lib/schemas/audit';
+import type { AuditEntry } from '../db/models';
+
+const NOBODY = 'a customer or the program';
+
+/** What each action is called; one that is not here is read out by its own words. */
+const DID: Record<string, string> = {
+	'assessment.made': 'assessed a mount',
+	'battery.changed': 'changed a battery',
+	'battery.created': 'added a battery',
+	'book.in-force': 'put a coefficient book in force',
+	'customer.changed': 'changed a customer',
+	'customer.created': 'added a customer',
+	'invitation.sent-again': 'sent an invitation again',
+	'invitation.withdrawn': 'withdrew an invitation',
+	'job.created': 'began a job',
+	'mount.added': 'added a mount',
+	'mount.cable': 'changed the proposed cable',
+	'mount.field-note': 'kept a field note',
+	'mount.fitted': 'said what was fitted',
+	'mount.follow-up': 'looked at a battery again',
+	'mount.pre-drill': 'answered the check before drilling',
+	'mount.pre-drill-signed': 'signed the check before drilling',
+	'mount.removed': 'removed a mount',
+	'mount.restored': 'put a mount back',
+	'mount.surveyed': 'surveyed a mount',
+	'person.came-back': 'brought somebody back',
+	'person.invited': 'invited somebody',
+	'person.joined': 'joined the workshop',
+	'person.left': 'ended somebody’s access',
+	'person.role-changed': 'gave somebody another role',
+	'person.signed-in': 'signed in',
+	'person.signed-out': 'signed out',
+	'place.changed': 'changed a place',
+	'place.created': 'added a place',
+	'place.weather-put-back': 'put a place’s weather back',
+	'place.weather-taken': 'took a weather file for a place',
+	'recommendation.made': 'recommended a mount',
+	'remedies.changed': 'changed remedies and prices',
+	'second-factor.codes-renewed': 'made new recovery codes',
+	'second-factor.recovery-code-used': 'signed in with a recovery code',
+	'second-factor.reset': 'reset somebody’s second factor',
+	'second-factor.turned-off': 'turned their second factor off',
+	'second-factor.turned-on': 'turned their second factor on',
+	'sheet.acknowledged': 'acknowledged a customer’s page',
+	'sheet.letter-tried-again': 'sent a letter again',
+	'sheet.link-opened': 'opened a customer’s page by its link',
+	'sheet.read': 'read a customer’s page',
+	'sheet.sent': 'sent a customer’s page',
+	'sheet.withdrawn': 'withdrew a customer’s page',
+	'shop.cautions-changed': 'changed the shop’s cautions',
+	'shop.changed': 'changed the shop’s details',
+	'shop.logo-changed': 'changed the shop’s logo',
+	'shop.logo-removed': 'took the shop’s logo away',
+	'shop.retention-changed': 'changed how long customers’ data are kept',
+	'shop.second-factor-rule': 'changed whether a second factor is asked for',
+	'vehicle.changed': 'changed a vehicle',
+	'vehicle.created': 'added a vehicle'
+};
+
+export const sayAction = (action: string): string => DID[action] ?? action.replace(/[.-]/g, ' ');
+
+const PAGES: Record<string, (id: number) => string> = {
+	assessment: (id) => `/assessments/${id}`,
+	battery: (id) => `/batteries/${id}`,
+	book: (id) => `/books/${id}`,
+	job: (id) => `/jobs/${id}`,
+	mount: (id) => `/mounts/${id}`,
+	person: (id) => `/people/${id}`,
+	place: (id) => `/places/${id}`,
+	recommendation: (id) => `/recommendations/${id}/print`
+};
+
+/** "hotDayMaxC" as "hot day max C". */
+const sayKey = (key: string): string =>
+	key.replace(/([a-z0-9])([A-Z])/g, '$1 $2').replace(/[A-Z](?=[a-z])/g, (sign) => sign.toLowerCase());
+
+function sayValue(value: unknown): string {
+	if (value === null || value === undefined || value === '') return 'nothing';
+	if (value === true) return 'yes';
+	if (value === false) return 'no';
+	if (Array.isArray(value)) return value.length === 0 ? 'none' : value.map(sayValue).join(', ');
+	if (typeof value === 'object') {
+		return Object.entries(value)
+			.map(([key, inner]) => `${sayKey(key)} ${sayValue(inner)}`)
+			.join('; ');
+	}
+	return String(value as string | number);
+}
+
+export function presentAuditEntry(entry: AuditEntry, nameOf: ReadonlyMap<number, string>): AuditRow {
+	const { sequence, at, personId, action, subjectType, subjectId, detail } = entry;
+	return {
+		...{ sequence, action, subjectId },
+		at: at.toISOString(),
+		who: personId === null ? NOBODY : (nameOf.get(personId) ?? `person ${personId}`),
+		did: sayAction(action),
+		subject: subjectType,
+		href: PAGES[subjectType]?.(subjectId) ?? null,
+		detail: Object.entries(detail).map(([key, value]) => ({ label: sayKey(key), value: sayValue(value) }))
+	};
+}

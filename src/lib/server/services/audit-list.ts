@@ -1,0 +1,110 @@
+import { Op, QueryTypes, col, where as whereColumn, type WhereOptions } from 'sequelize';
+import { z } from 'zod';
+import type { AuditChoices, AuditPage, AuditQuery, AuditRow } from '$lib/schemas/audit';
+import type { SignedInPerson } from '$lib/schemas/people';
+import { connection } from '../db/connection';
+import { AuditEntry, Person } from '../db/models';
+import { allow } from '../policies';
+import { presentAuditEntry, sayAction } from '../presenters/audit';
+import { readCursor, writeCursor } from './cursors';
+import { addDays } from './days';
+
+const positionSchema = z.object({ before: z.number().int() });
+const MOST_WORDS = 8;
+
+const escapePattern = (word: string): string => word.replace(/[\\%_]/g, '\\$&');
+
+/** Every word stands somewhere in what was recorded, or names the action, or is the subject's number. */
+function matchAll(words: string): WhereOptions[] {
+	return words
+		.split(/\s+/)
+		.filter(Boolean)
+		.slice(0, MOST_WORDS)
+		.map((word) => {
+			const like = { [Op.like]: `%${escapePattern(word)}%` };
+			const number = /^\d{1,15}$/.test(word) ? [{ subjectId: Number(word) }] : [];
+			return {
+				[Op.or]: [whereColumn(col('detail'), like), { action: like }, { subjectType: like }, ...number]
+			};
+		});
+}
+
+function filterOf(workshopId: number, query: AuditQuery): WhereOptions {
+	const { person, action, subject, words, from, to } = query;
+	return {
+		[Op.and]: [
+			{ workshopId },
+			...(person === undefined ? [] : [{ personId: person }]),
+			...(action === undefined ? [] : [{ action }]),
+			...(subject === undefined ? [] : [{ subjectType: subject }]),
+			...(from === undefined ? [] : [{ at: { [Op.gte]: new Date(from) } }]),
+			// The day that was named is in.
+			...(to === undefined ? [] : [{ at: { [Op.lt]: new Date(addDays(to, 1)) } }]),
+			...matchAll(words)
+		]
+	};
+}
+
+async function presentAll(entries: readonly AuditEntry[]): Promise<AuditRow[]> {
+	const ids = [...new Set(entries.flatMap(({ personId }) => personId ?? []))];
+	const people = await Person.findAll({ where: { id: ids }, attributes: ['id', 'name'] });
+	const nameOf = new Map(people.map(({ id, name }) => [id, name]));
+	return entries.map((entry) => presentAuditEntry(entry, nameOf));
+}
+
+function readBefore(filter: WhereOptions, before: number | null, limit: number): Promise<AuditEntry[]> {
+	const where = before === null ? filter : { [Op.and]: [filter, { sequence: { [Op.lt]: before } }] };
+	return AuditEntry.findAll({ where, order: [['sequence', 'DESC']], limit });
+}
+
+/** One page of the workshop's trail, the newest first. */
+export async function listAudit(person: SignedInPerson, query: AuditQuery): Promise<AuditPage> {
+	const { workshopId } = allow(person, 'audit.read');
+	const { cursor, limit } = query;
+	const scope = `audit ${workshopId}`;
+	const before = cursor === undefined ? null : readCursor(scope, cursor, positionSchema).before;
+	const filter = filterOf(workshopId, query);
+	// One more than asked for tells whether there is a next page.
+	const found = await readBefore(filter, before, limit + 1);
+	const page = found.slice(0, limit);
+	return {
+		rows: await presentAll(page),
+		total: await AuditEntry.count({ where: filter }),
+		next: found.length > limit ? writeCursor(scope, { before: page.at(-1)!.sequence }) : null
+	};
+}
+
+/** What the trail holds, to choose from. */
+export async function listAuditChoices(person: SignedInPerson): Promise<AuditChoices> {
+	const { workshopId } = allow(person, 'audit.read');
+	const [people, rows] = await Promise.all([
+		Person.findAll({ where: { workshopId }, attributes: ['id', 'name'], order: [['name', 'ASC']] }),
+		connection().query<{ action: string; subject: string }>(
+			'SELECT DISTINCT action, subject_type AS subject FROM audit_entries WHERE workshop_id = :workshopId',
+			{ replacements: { workshopId }, type: QueryTypes.SELECT }
+		)
+	]);
+	const actions = [...new Set(rows.map(({ action }) => action))];
+	return {
+		people: people.map(({ id, name }) => ({ id, name })),
+		actions: actions
+			.map((key) => ({ key, label: sayAction(key) }))
+			.sort((a, b) => a.label.localeCompare(b.label)),
+		subjects: [...new Set(rows.map(({ subject }) => subject))].sort()
+	};
+}
+
+const BATCH = 500;
+
+/** All that a question finds, batch by batch, however long it is. */
+export async function* readAudit(person: SignedInPerson, query: AuditQuery): AsyncGenerator<AuditRow[]> {
+	const { workshopId } = allow(person, 'audit.read');
+	const filter = filterOf(workshopId, query);
+	let before: number | null = null;
+	for (;;) {
+		const batch: AuditEntry[] = await readBefore(filter, before, BATCH);
+		if (batch.length > 0) yield await presentAll(batch);
+		if (batch.length < BATCH) return;
+		before = batch.at(-1)!.sequence;
+	}
+}

@@ -1,0 +1,31 @@
+import { fileTypeFromBuffer } from 'file-type';
+import sharp from 'sharp';
+import { AppError } from '../errors';
+
+const TAKEN = new Set(['image/png', 'image/jpeg']);
+const WIDEST_PX = 600;
+const HIGHEST_PX = 200;
+/** More would be a picture that is small as a file and huge in memory. */
+const MOST_PIXELS = 40_000_000;
+
+function notALogo(message: string): AppError {
+	return new AppError('invalid_input', message, [{ path: 'file', message }]);
+}
+
+/** Makes a logo anew from what was sent, at most 600 × 200 px, with nothing in it but the picture. */
+export async function makeLogo(
+	bytes: Uint8Array
+): Promise<{ png: Buffer; widthPx: number; heightPx: number }> {
+	const type = await fileTypeFromBuffer(bytes);
+	if (!type || !TAKEN.has(type.mime)) throw notALogo('The logo must be a PNG or JPEG picture.');
+	try {
+		const { data, info } = await sharp(bytes, { limitInputPixels: MOST_PIXELS })
+			.rotate()
+			.resize({ width: WIDEST_PX, height: HIGHEST_PX, fit: 'inside', withoutEnlargement: true })
+			.png({ compressionLevel: 9 })
+			.toBuffer({ resolveWithObject: true });
+		return { png: data, widthPx: info.width, heightPx: info.height };
+	} catch {
+		throw notALogo('The picture cannot be read: it is broken, or has more than 40 million pixels.');
+	}
+}

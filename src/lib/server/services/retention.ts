@@ -1,0 +1,72 @@
+import { QueryTypes } from 'sequelize';
+import type { SignedInPerson } from '$lib/schemas/people';
+import type { RetainedCustomer, RetentionInput, RetentionView } from '$lib/schemas/retention';
+import { connection } from '../db/connection';
+import { Workshop } from '../db/models';
+import { inTransaction } from '../db/transaction';
+import { notFound } from '../errors';
+import { allow } from '../policies';
+import { recordBy } from './audit';
+import { addMonths, today } from './days';
+import { saveVersioned } from './records';
+
+type Years = RetentionView['years'];
+const MOST_LISTED = 200;
+
+/** The last change of a customer: of their jobs, or of themselves where they have none. */
+const AGED = `
+	SELECT c.id, c.name, COUNT(j.id) AS jobs,
+		DATE_FORMAT(COALESCE(MAX(j.updated_at), c.updated_at), '%Y-%m-%d') AS lastChangedOn
+	FROM customers c LEFT JOIN jobs j ON j.customer_id = c.id
+	WHERE c.workshop_id = :workshopId
+	GROUP BY c.id, c.name, c.updated_at
+	HAVING lastChangedOn < :before
+	ORDER BY lastChangedOn, c.id
+`;
+
+/** Whose data a rule of so many years reaches on a day, the oldest first. */
+export async function findAged(workshopId: number, years: Years, now = today()): Promise<RetainedCustomer[]> {
+	if (years === null) return [];
+	const before = addMonths(now, -12 * years);
+	return connection().query<RetainedCustomer>(AGED, {
+		replacements: { workshopId, before },
+		type: QueryTypes.SELECT
+	});
+}
+
+async function findWorkshop({ workshopId }: SignedInPerson): Promise<Workshop> {
+	const workshop = await Workshop.findByPk(workshopId);
+	if (!workshop) throw notFound('workshop');
+	return workshop;
+}
+
+async function show(
+	{ id, retentionYears, version }: Workshop,
+	asked: Years | undefined
+): Promise<RetentionView> {
+	const years = (retentionYears ?? null) as Years;
+	const shown = asked === undefined ? years : asked;
+	const aged = await findAged(id, shown);
+	const preview = { years: shown, total: aged.length, customers: aged.slice(0, MOST_LISTED) };
+	return { years, version, preview };
+}
+
+/** How long the shop keeps customers' data, and whom that reaches; or whom other years would reach. */
+export async function getRetention(person: SignedInPerson, asked?: Years): Promise<RetentionView> {
+	allow(person, 'shop.write');
+	return show(await findWorkshop(person), asked);
+}
+
+export async function saveRetention(
+	person: SignedInPerson,
+	{ years, version }: RetentionInput
+): Promise<RetentionView> {
+	allow(person, 'shop.write');
+	return inTransaction(async (transaction) => {
+		const workshop = await findWorkshop(person);
+		await saveVersioned(workshop, 'shop', version, { retentionYears: years }, transaction);
+		const subject = { type: 'workshop', id: workshop.id };
+		await recordBy(person, 'shop.retention-changed', subject, transaction, { years });
+		return show(workshop, undefined);
+	});
+}

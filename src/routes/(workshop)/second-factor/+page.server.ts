@@ -1,0 +1,44 @@
+import { redirect, type RequestEvent } from '@sveltejs/kit';
+import { secondFactorCodeSchema } from '$lib/schemas/second-factor';
+import type { SignedInPerson } from '$lib/schemas/people';
+import { doOrSay } from '$lib/server/http/do-or-say';
+import { guard, orPageError } from '$lib/server/http/guard';
+import { validate } from '$lib/server/http/validate';
+import {
+	beginSetUp,
+	confirmSetUp,
+	getSecondFactor,
+	renewRecoveryCodes,
+	turnOff
+} from '$lib/server/services/second-factor';
+import type { Actions, PageServerLoad } from './$types';
+
+export const load: PageServerLoad = async (event) => {
+	const person = guard(event, 'second-factor.own');
+	return {
+		factor: await orPageError(getSecondFactor(person)),
+		isOff: event.url.searchParams.has('off')
+	};
+};
+
+/** What a code brings: recovery codes, which the answer to this one form shows and no page again. */
+const withCode = (event: RequestEvent, work: (person: SignedInPerson, code: string) => Promise<string[]>) =>
+	doOrSay(event, 'second-factor.own', async (person, sent) => {
+		const { code } = validate(secondFactorCodeSchema, { code: sent.get('code') ?? undefined });
+		return { codes: await work(person, code) };
+	});
+
+export const actions: Actions = {
+	begin: (event) =>
+		doOrSay(event, 'second-factor.own', async (person) => {
+			await beginSetUp(person);
+			redirect(303, '/second-factor');
+		}),
+	confirm: (event) => withCode(event, confirmSetUp),
+	renew: (event) => withCode(event, renewRecoveryCodes),
+	off: (event) =>
+		withCode(event, async (person, code) => {
+			await turnOff(person, code);
+			redirect(303, '/second-factor?off');
+		})
+};

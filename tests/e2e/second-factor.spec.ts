@@ -1,0 +1,112 @@
+import { randomUUID } from 'node:crypto';
+import { expect, test, type Browser, type Page } from '@playwright/test';
+import { generate } from 'otplib';
+import { readMail, waitForLink } from './mailed';
+import { expectNoViolations, signInAs, signInWith } from './support';
+
+const PASSWORD = 'nine goats on the roof';
+
+/** A new engineer of the demo workshop, invited by its manager, in a browser of their own. */
+async function joinAsEngineer(manager: Page, browser: Browser, baseURL: string | undefined) {
+	const name = `Vesna ${randomUUID().slice(0, 8)}`;
+	const email = `vesna-${randomUUID()}@shop.example`;
+	const data = { name, email, role: 'engineer' };
+	const asked = await manager.request.post('/api/v1/invitations', { data });
+	expect(asked.status()).toBe(201);
+	const link = await waitForLink(email, /\/sign-in\/invitation\/[\w-]{22}/);
+	const context = await browser.newContext(baseURL ? { baseURL } : {});
+	const page = await context.newPage();
+	await page.goto(link);
+	await page.getByLabel('Password').fill(PASSWORD);
+	await page.getByRole('button', { name: 'Join and sign in' }).click();
+	await expect(page).toHaveURL(/\/jobs$/);
+	return { page, context, name, email };
+}
+
+async function enterCode(page: Page, code: string): Promise<void> {
+	await page.getByLabel('Code').fill(code);
+	await page.getByRole('button', { name: 'Sign in' }).click();
+}
+
+async function enterPassword(page: Page, email: string): Promise<void> {
+	await page.context().clearCookies();
+	await page.goto('/sign-in?to=/places');
+	await page.getByLabel('E-mail', { exact: true }).fill(email);
+	await page.getByLabel('Password').fill(PASSWORD);
+	await page.getByRole('button', { name: 'Sign in' }).click();
+	await expect(page).toHaveURL(/\/sign-in\/second-step/);
+}
+
+test('a second factor is set up, asked for after password and link, and reset by the manager', async ({
+	page,
+	browser,
+	baseURL
+}) => {
+	test.slow();
+	await signInAs(page, 'manager');
+	const engineer = await joinAsEngineer(page, browser, baseURL);
+	const theirs = engineer.page;
+	await theirs.goto('/second-factor');
+	await expectNoViolations(theirs);
+	await theirs.getByRole('button', { name: 'Set it up' }).click();
+	await expect(theirs.getByRole('img', { name: /Picture of the key/ })).toBeVisible();
+	await expectNoViolations(theirs);
+	const key = (await theirs.locator('[data-key]').innerText()).replace(/\s/g, '');
+	const codeNow = (stepsOn: number) =>
+		generate({ secret: key, epoch: Math.floor(Date.now() / 1000) + 30 * stepsOn });
+	await theirs.getByLabel('Code').fill('000 00');
+	await theirs.getByRole('button', { name: 'Turn it on' }).click();
+	await expect(theirs.getByText(/^This code is not right/)).toBeVisible();
+	await theirs.getByLabel('Code').fill(await codeNow(0));
+	await theirs.getByRole('button', { name: 'Turn it on' }).click();
+	await expect(theirs.getByText('this page shows them once')).toBeVisible();
+	await expectNoViolations(theirs);
+	const recovery = await theirs.locator('[data-recovery]').allInnerTexts();
+	expect(recovery).toHaveLength(10);
+	await theirs.getByRole('link', { name: 'I have them' }).click();
+	await expect(theirs.getByText('10 recovery codes are left.')).toBeVisible();
+	await expectNoViolations(theirs);
+
+	await enterPassword(theirs, engineer.email);
+	await expectNoViolations(theirs);
+	expect((await theirs.request.get('/api/v1/places')).status()).toBe(401);
+	const code = await codeNow(1);
+	await enterCode(theirs, code);
+	await expect(theirs).toHaveURL(/\/places$/);
+
+	await enterPassword(theirs, engineer.email);
+	await enterCode(theirs, code);
+	await expect(theirs.getByText(/^This code is not right, or it was used already/).first()).toBeVisible();
+	await expectNoViolations(theirs);
+	await enterCode(theirs, recovery[0] ?? '');
+	await expect(theirs).toHaveURL(/\/places$/);
+
+	await theirs.context().clearCookies();
+	await theirs.goto('/sign-in');
+	await theirs.getByLabel('Your e-mail').fill(engineer.email);
+	await theirs.getByRole('button', { name: 'Send me a link' }).click();
+	await theirs.goto(await waitForLink(engineer.email, /\/sign-in\/link\/[\w-]{22}/));
+	await theirs.getByRole('button', { name: 'Sign in now' }).click();
+	await expect(theirs).toHaveURL(/\/sign-in\/second-step/);
+	await enterCode(theirs, recovery[1] ?? '');
+	await expect(theirs).toHaveURL(/\/jobs$/);
+
+	await page.goto('/people');
+	await page.getByRole('link', { name: engineer.name }).click();
+	await expectNoViolations(page);
+	await page.getByRole('button', { name: 'Reset the second factor' }).click();
+	await expect(page.getByText('The second factor is reset.')).toBeVisible();
+	const told = () =>
+		readMail(engineer.email).some((letter) => letter.includes('has reset your second factor'));
+	await expect.poll(told, { timeout: 20_000 }).toBe(true);
+	await theirs.goto('/places');
+	await expect(theirs).toHaveURL(/\/sign-in/);
+	await signInWith(theirs, { email: engineer.email, password: PASSWORD });
+	await expect(theirs).toHaveURL(/\/jobs$/);
+	await engineer.context.close();
+});
+
+test('nobody gets to the second step without the first', async ({ page }) => {
+	await page.goto('/sign-in/second-step');
+	await expect(page).toHaveURL(/\/sign-in$/);
+});
