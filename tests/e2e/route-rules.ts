@@ -200,7 +200,7 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 	ownedApi('/invitations/[invitationId]/letter', 'manager', { POST: null }),
 	ownedApi('/invitations/[invitationId]/withdrawal', 'manager', { POST: null }),
 	api('/shop', 'manager', 'GET', 'PUT'),
-	api('/shop/logo', 'manager', 'POST', 'DELETE'),
+	{ ...api('/shop/logo', 'manager', 'POST', 'DELETE'), bodies: { POST: Buffer.from('no picture') } },
 	api('/shop/second-factor', 'manager', 'PUT'),
 	api('/shop/cautions', 'manager', 'GET', 'PUT'),
 	api('/shop/retention', 'manager', 'GET', 'PUT'),

@@ -1,4 +1,4 @@
-import type { Transaction } from 'sequelize';
+import { UniqueConstraintError, type Transaction } from 'sequelize';
 import type { InvitationInput, InvitationRow, InvitationView, SignedInPerson } from '$lib/schemas/people';
 import { isCommonPassword } from '../auth/common-passwords';
 import { hashPassword } from '../auth/passwords';
@@ -148,6 +148,12 @@ export async function openInvitation(token: string): Promise<InvitationView> {
 const TOO_COMMON =
 	'This password is one of the first that anybody would try. Take a few words that do not belong together.';
 
+/** Invited by two workshops: the one that was accepted first has the address. */
+function orSignsInAlready(error: unknown): never {
+	if (!(error instanceof UniqueConstraintError)) throw error;
+	throw new AppError('conflict', 'This address signs in already. Ask the shop to invite another one.');
+}
+
 /** Joins: from now on there is a person with this password. Gives back the address to sign in with. */
 export async function acceptInvitation(token: string, password: string): Promise<string> {
 	const { name, email, workshopName } = await openInvitation(token);
@@ -158,10 +164,8 @@ export async function acceptInvitation(token: string, password: string): Promise
 	return inTransaction(async (transaction) => {
 		const invitation = await findOpen(token, transaction);
 		const { workshopId, role } = invitation;
-		if ((await Person.count({ where: { email }, transaction })) > 0) {
-			throw new AppError('conflict', 'This address signs in already. Ask the shop to invite another one.');
-		}
-		const { id } = await Person.create({ workshopId, name, email, role, passwordHash }, { transaction });
+		const joining = { workshopId, name, email, role, passwordHash };
+		const { id } = await Person.create(joining, { transaction }).catch(orSignsInAlready);
 		await invitation.update({ acceptedAt: new Date() }, { transaction });
 		const joined = { action: 'person.joined', subjectType: 'person', subjectId: id };
 		const detail = { invitationId: invitation.id, role };

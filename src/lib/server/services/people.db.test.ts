@@ -105,6 +105,16 @@ describe('an invitation', () => {
 		}
 	});
 
+	it('of two workshops makes one person, of the one that was accepted first', async () => {
+		const [crew, other] = [await makeCrew(), await makeCrew()];
+		const { email, token } = await ask(crew);
+		await invite(other.manager, { name: 'Wren Tollgate', email, role: 'installer' });
+		const [, second = ''] = await readTokens(email, PATH);
+		await acceptInvitation(token, PASSWORD);
+		await expect(acceptInvitation(second, PASSWORD)).rejects.toMatchObject({ code: 'conflict' });
+		expect(await Person.count({ where: { email, workshopId: crew.workshopId } })).toBe(1);
+	});
+
 	it('is the manager’s matter, and no other workshop’s', async () => {
 		const [crew, other] = [await makeCrew(), await makeCrew()];
 		const { invitation } = await ask(crew);

@@ -26,6 +26,7 @@ describe('opening a sheet by its link', () => {
 				contentSha256: stored.contentSha256,
 				textVersion: stored.textVersion,
 				acknowledgement: null,
+				logo: null,
 				newerSentAt: null,
 				questions: []
 			});

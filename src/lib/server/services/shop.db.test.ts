@@ -46,11 +46,11 @@ describe('the details of the shop', () => {
 		const { manager } = await makeCrew();
 		const { recommendation } = await makeRecommended(manager);
 		await saveShop(manager, { ...DETAILS, version: 0 });
-		await saveLogo(manager, await picture(300, 90).png().toBuffer());
+		const { version } = await saveLogo(manager, await picture(300, 90).png().toBuffer());
 		const document = await getRecommendationDocument(manager, recommendation.id);
 		expect(document.workshop).toMatchObject(DETAILS);
 		expect(document.logo).toMatchObject({ widthPx: 300, heightPx: 90 });
-		await removeLogo(manager);
+		await removeLogo(manager, version);
 		expect((await getRecommendationDocument(manager, recommendation.id)).logo).toBeNull();
 	});
 });

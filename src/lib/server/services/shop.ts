@@ -89,6 +89,6 @@ export async function saveLogo(person: SignedInPerson, bytes: Uint8Array): Promi
 	});
 }
 
-export function removeLogo(person: SignedInPerson): Promise<ShopView> {
-	return changeShop(person, 'shop.logo-removed', null, { logoSha256: null });
+export function removeLogo(person: SignedInPerson, version: number): Promise<ShopView> {
+	return changeShop(person, 'shop.logo-removed', version, { logoSha256: null });
 }

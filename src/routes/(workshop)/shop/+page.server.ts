@@ -1,4 +1,5 @@
 import { fail, redirect } from '@sveltejs/kit';
+import { versionSchema } from '$lib/schemas/fields';
 import {
 	factorRuleSchema,
 	MOST_LOGO_BYTES,
@@ -53,8 +54,8 @@ export const actions: Actions = {
 		redirect(303, '/shop?done=logo#logo');
 	},
 	removeLogo: (event) =>
-		doOrSay(event, 'shop.write', async (person) => {
-			await removeLogo(person);
+		doOrSay(event, 'shop.write', async (person, sent) => {
+			await removeLogo(person, validate(versionSchema, sent.get('version') ?? undefined));
 			redirect(303, '/shop?done=noLogo#logo');
 		}),
 	secondFactor: (event) =>

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { versionSchema } from '$lib/schemas/fields';
 import { cautionTextInputSchema, cautionTextSchema } from '$lib/schemas/caution-texts';
 import { retentionInputSchema, retentionSchema } from '$lib/schemas/retention';
 import { factorRuleSchema, MOST_LOGO_BYTES, shopDetailsSchema, shopSchema } from '$lib/schemas/shop';
@@ -42,6 +43,7 @@ export const shopOperations = {
 		path: '/api/v1/shop/logo',
 		action: 'shop.write',
 		summary: 'Goes on without a logo; pages that were sent keep theirs.',
+		body: z.object({ version: versionSchema }),
 		answer: shopSchema,
 		status: 200
 	}),

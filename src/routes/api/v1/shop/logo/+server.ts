@@ -8,4 +8,6 @@ export const POST = fileEndpoint(shopOperations.saveLogo, {
 	handle: ({ person, file }) => saveLogo(person, file.bytes)
 });
 
-export const DELETE = endpoint(shopOperations.removeLogo, ({ person }) => removeLogo(person));
+export const DELETE = endpoint(shopOperations.removeLogo, ({ person, body }) =>
+	removeLogo(person, body.version)
+);
