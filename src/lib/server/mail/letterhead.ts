@@ -16,7 +16,10 @@ export async function withLetterhead(
 	const workshop = await Workshop.findByPk(workshopId, { transaction });
 	if (!workshop?.logoSha256) return htmlBody;
 	const src = `cid:logo-${workshopId}-${workshop.logoSha256}`;
-	return htmlBody.replace(BEGIN, (begin) => `${begin}\n<p><img src="${src}" height="${HIGHEST_PX}" alt=""></p>`);
+	return htmlBody.replace(
+		BEGIN,
+		(begin) => `${begin}\n<p><img src="${src}" height="${HIGHEST_PX}" alt=""></p>`
+	);
 }
 
 /** The picture goes along with the letter: none is fetched from anywhere when it is read. */
