@@ -28,6 +28,9 @@ test('somebody is invited, joins by the letter’s link, gets another role, and 
 	const email = await inviteByPage(page, name, 'installer');
 	await expectNoViolations(page);
 	const link = await waitForLink(email, LINK);
+	await page.goto('/mailbox');
+	await page.getByRole('row').filter({ hasText: email }).getByRole('link').click();
+	await expect(page.getByText(/asks you to join .* as an installer/)).toBeVisible();
 
 	const theirs = await browser.newContext({ ...(baseURL ? { baseURL } : {}) });
 	const other = await theirs.newPage();

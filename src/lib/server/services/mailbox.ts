@@ -4,7 +4,7 @@ import { OutgoingMail } from '../db/models';
 import { env } from '../env';
 import { notFound } from '../errors';
 import { listKeptLetters, readKeptLetter } from '../mail/mailbox-folder';
-import { allow } from '../policies';
+import { allow, mayDo } from '../policies';
 import { presentLetterLines, presentLetterRow, shortMessageId } from '../presenters/letters';
 
 /** Older letters stay in the folder and are not listed. */
@@ -17,9 +17,15 @@ function requireMailbox(): string {
 	return MAILBOX_DIR;
 }
 
-/** What belongs to a job is the shop's matter; a link that signs somebody in is for that person alone. */
-const mayRead = ({ email }: SignedInPerson, { sheetId, jobId, recipient }: OutgoingMail): boolean =>
-	sheetId !== null || jobId !== null || recipient === email;
+/**
+ * What belongs to a job is the shop's matter, and invitations are the manager's; a link that signs somebody in is for
+ * that person alone.
+ */
+const mayRead = (person: SignedInPerson, { sheetId, jobId, kind, recipient }: OutgoingMail): boolean =>
+	sheetId !== null ||
+	jobId !== null ||
+	recipient === person.email ||
+	(kind === 'invitation' && mayDo(person, 'people.write'));
 
 /** The letters in the folder that this workshop sent: a file alone proves nothing, its message id must be on record. */
 async function findOwn(person: SignedInPerson) {
