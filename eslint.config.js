@@ -68,6 +68,15 @@ const layers = [
 		]
 	},
 	{
+		files: ['src/lib/server/papers/**'],
+		patterns: [
+			{
+				regex: '/(services|db|auth|mail|http)(/|$)',
+				message: 'Papers set what they are given: a service reads it and passes it in.'
+			}
+		]
+	},
+	{
 		files: ['src/routes/**/*.ts', 'src/hooks.server.ts'],
 		patterns: [
 			{

@@ -25,8 +25,12 @@ const RULES: { folder: RegExp; may: RegExp; types?: RegExp }[] = [
 		types: /^src\/lib\/server\/db\/models\//
 	},
 	{
+		folder: /^src\/lib\/server\/papers\//,
+		may: /^src\/lib\/(server\/(papers|presenters)\/|schemas\/|format\/|thermal\/|components\/(charts|report\/print)\/.*\.ts$)/
+	},
+	{
 		folder: /^src\/lib\/server\/services\//,
-		may: /^src\/lib\/(server\/(services|db|policies|presenters|mail|storage|jobs|auth)\/|server\/[a-z-]+\.ts$|schemas\/|format\/|thermal\/)|^seeds\//
+		may: /^src\/lib\/(server\/(services|papers|db|policies|presenters|mail|storage|jobs|auth)\/|server\/[a-z-]+\.ts$|schemas\/|format\/|thermal\/)|^seeds\//
 	},
 	{
 		folder: /^src\/(routes\/.*\.ts|hooks\.server\.ts)$/,

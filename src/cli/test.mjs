@@ -5,7 +5,7 @@ import { join } from 'node:path';
 import { ensureDependencies } from './lib/dependencies.mjs';
 import { PROJECT, STATE, makeStateFolders } from './lib/folders.mjs';
 import { inTurn } from './lib/lock.mjs';
-import { CHROMIUM, MARIADB, ensureInstalled, requireInstallable } from './lib/packages.mjs';
+import { CHROMIUM, MARIADB, POPPLER, ensureInstalled, requireInstallable } from './lib/packages.mjs';
 import { run, stopEverything } from './lib/processes.mjs';
 import { say, sayTime, step } from './lib/steps.mjs';
 import { onStopSignal } from './lib/stop-signal.mjs';
@@ -38,7 +38,8 @@ async function prepare(only) {
 	await requireFreeSpace(PROJECT, FRESH_NEEDS_MB);
 	const needs = [
 		...(only === null || only === 'services' || only === 'e2e' ? [MARIADB] : []),
-		...(only === null || only === 'e2e' ? [CHROMIUM] : [])
+		...(only === null || only === 'e2e' ? [CHROMIUM] : []),
+		...(only === null || only === 'services' || only === 'e2e' ? [POPPLER] : [])
 	];
 	await requireInstallable(needs);
 	const { log } = await makeStateFolders(STATE);

@@ -85,6 +85,7 @@ async function findIds(
 		mountId,
 		followUpId: of(fitting.followUps[0]),
 		kind: 'inspection',
+		paper: 'handover',
 		step: 'exhaust',
 		assessmentId: of(assessments.rows[0]),
 		recommendationId,
@@ -116,7 +117,7 @@ async function signIn(context: APIRequestContext, visitor: Visitor): Promise<voi
 }
 
 const fill = (route: string, ids: Ids): string =>
-	route.replace(/\[(\w+)\]/g, (_, name: string) => ids[name] ?? 'none');
+	route.replace(/\[(\w+)(?:=\w+)?\]/g, (_, name: string) => ids[name] ?? 'none');
 
 /** Records that are not there: whoever is let in finds nothing to change. */
 const emptied = (ids: Ids): Ids => Object.fromEntries(Object.keys(ids).map((name) => [name, NOT_THERE]));

@@ -30,6 +30,16 @@ export const CHROMIUM = {
 };
 
 /**
+ * What reads the documents back in the tests.
+ * @type {Need}
+ */
+export const POPPLER = {
+	what: 'Poppler',
+	packages: ['poppler-utils'],
+	programs: ['pdftotext', 'pdftoppm', 'pdffonts']
+};
+
+/**
  * @param {string} program
  * @returns {Promise<string | null>} its full path
  */

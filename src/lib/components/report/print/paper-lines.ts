@@ -1,10 +1,12 @@
+import { formatDateTime } from '../../../format/dates';
 import { formatKelvin } from '../../../format/numbers';
 import { formatHours } from '../../../format/time';
 import { sayVerdict } from '../../../format/verdict';
 import type { AssessmentRow, MountOutcome } from '../../../schemas/assessments';
 import { hasBms } from '../../../schemas/batteries';
-import type { CableReport } from '../../../schemas/outlook-reports';
-import type { ReportLine } from '../../../schemas/reports';
+import type { CableReport, OutlookReport } from '../../../schemas/outlook-reports';
+import type { PreDrillSnapshot } from '../../../schemas/pre-drill';
+import type { ReportDerivation, ReportLine } from '../../../schemas/reports';
 
 /** A proposed cable and fuse as lines of the paper: what, in which air, what came of it. */
 export function listCableLines(cable: CableReport | null): ReportLine[] {
@@ -38,4 +40,63 @@ export function listMountLines(others: readonly MountOutcome[]): ReportLine[] {
 		label: `${letter}: ${name}`,
 		value: assessment ? sayMount(assessment) : 'not assessed'
 	}));
+}
+
+/** What the estimate says beside its number, under a word each. */
+export function listOutlookLines({ chance, year, remedies, envelope, life }: OutlookReport): ReportLine[] {
+	return [
+		{ label: 'How sure', value: `${chance.sentence} ${chance.interval} ${chance.band}` },
+		{ label: 'In a year', value: year.sentence },
+		{ label: 'What it would take', value: `${remedies.sentence} ${remedies.hotter}`.trim() },
+		{ label: 'How hot a day', value: envelope.sentence },
+		{ label: 'How it wears', value: life.sentence }
+	];
+}
+
+/** Values that came about in the same way, told together; what was entered is told among the inputs already. */
+export function listDerived(derivations: readonly ReportDerivation[]): ReportLine[] {
+	const values: Record<string, string[]> = {};
+	for (const { label, value, basis, isEntered } of derivations) {
+		if (!isEntered) (values[basis] ??= []).push(`${label}: ${value}`);
+	}
+	return Object.entries(values).map(([basis, told]) => ({ label: told.join('; '), value: basis }));
+}
+
+/** How the check before drilling stood, in a sentence or two. */
+export function sayCheck(check: PreDrillSnapshot, where = ''): string {
+	const { open, signedBy, signedAt } = check;
+	const points = open.length === 1 ? 'one point is' : `${open.length} points are`;
+	const stand = open.length === 0 ? 'all points hold.' : `${points} open${where}.`;
+	const signed =
+		signedBy && signedAt ? `Signed by ${signedBy}, ${formatDateTime(signedAt)}.` : 'Nobody has signed it.';
+	return `${stand} ${signed}`;
+}
+
+/** The points that stayed open, for a list. */
+export function listOpenLines(check: PreDrillSnapshot | null): ReportLine[] {
+	const open = check?.open ?? [];
+	const failed = open
+		.filter(({ state }) => state === 'failed')
+		.map(({ label, note }) => ({ label, value: `does not hold. ${note}` }));
+	const unanswered = open.filter(({ state }) => state === 'unanswered');
+	if (unanswered.length === 0) return failed;
+	return [
+		...failed,
+		{ label: 'Not answered', value: unanswered.map(({ label }) => label.toLowerCase()).join(', ') }
+	];
+}
+
+/** What has room beside everything else on two pages; the picture shows every leg. */
+const MOST_LEGS = 12;
+
+/** The legs of the day; of very many the first ones and the last. */
+export function listLegLines(legs: readonly ReportLine[]): ReportLine[] {
+	if (legs.length <= MOST_LEGS) return [...legs];
+	const shown = legs.slice(0, MOST_LEGS - 1);
+	const last = legs.at(-1)!;
+	const rest = {
+		label: `And ${legs.length - shown.length} more`,
+		value: `the last from ${last.label}, ${last.value}`
+	};
+	return [...shown, rest];
 }

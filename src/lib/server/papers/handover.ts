@@ -1,0 +1,57 @@
+import { DEFERENCE } from '$lib/format/deference';
+import { formatDate } from '$lib/format/dates';
+import type { Paper, PaperBlock } from '$lib/schemas/papers';
+import {
+	tellBattery,
+	tellDay,
+	tellFitted,
+	tellFollowUps,
+	tellVehicle,
+	type MountRecord
+} from './mount-record';
+
+/** What to do, for somebody at camp with a warm fridge: engineering judgement, no source. */
+const WHEN_DARK = [
+	'If the battery switches off after a hot day, it is most likely protecting its cells. They cool over hours, not minutes; in the shade, with the engine off and the bonnet up, sooner.',
+	'It comes back by itself when the cells have cooled. Never bridge its protection, never open it, and do not force it with a charger.',
+	'Write down when it went dark, when it came back and how hot the day was: with that the workshop can tell whether it was heat.',
+	'If it went dark on a cool day, or does not come back within a day, have it looked at.'
+];
+
+const tellEstimate = ({ paper: { outlook } }: MountRecord): PaperBlock => ({
+	...{ kind: 'words', title: 'What to expect' },
+	sentences: [
+		outlook.chance.sentence,
+		outlook.year.sentence,
+		outlook.envelope.sentence,
+		outlook.life.sentence
+	]
+});
+
+/** What goes to the customer with the vehicle. */
+export function layHandover(record: MountRecord): Paper {
+	const { paper, fitting, photos } = record;
+	const { jobNumber } = paper.recommendation;
+	return {
+		title: 'Handover',
+		under: `Job ${jobNumber}, fitted ${formatDate(fitting.installation.fittedOn)}`,
+		shop: paper.workshop,
+		logo: paper.logo,
+		madeAt: `${fitting.installation.fittedOn}T00:00:00.000Z`,
+		blocks: [
+			tellVehicle(record),
+			tellBattery(record),
+			...tellFitted(fitting),
+			...(photos.length > 0
+				? [{ kind: 'photos' as const, title: 'The mount', photos: photos.slice(0, 1) }]
+				: []),
+			tellEstimate(record),
+			tellDay(record),
+			{ kind: 'words', title: 'When it goes dark', sentences: WHEN_DARK },
+			tellFollowUps(record),
+			{ kind: 'cautions', cautions: paper.cautions },
+			{ kind: 'words', sentences: [DEFERENCE.replace('recommendation', 'handover')] },
+			{ kind: 'signatures', who: ['Fitted by', 'Received by'] }
+		]
+	};
+}

@@ -1,0 +1,117 @@
+import type { FieldNotesView } from '$lib/schemas/field-notes';
+import type { FittingView } from '$lib/schemas/fitting';
+import type { PaperBlock, PaperPhoto } from '$lib/schemas/papers';
+import type { PreDrillView } from '$lib/schemas/pre-drill';
+import type { AcknowledgementView } from '$lib/schemas/sheets';
+import { formatDate, formatDateTime } from '$lib/format/dates';
+import { sayVerdict } from '$lib/format/verdict';
+import { PRE_DRILL_LABELS } from '$lib/schemas/pre-drill';
+import { drawRibbon } from './ribbon-picture';
+import type { RecommendationPaper } from './recommendation';
+
+/** Everything that is kept of one fitted battery. */
+export interface MountRecord {
+	paper: RecommendationPaper;
+	fitting: FittingView & { installation: NonNullable<FittingView['installation']> };
+	preDrill: PreDrillView;
+	notes: FieldNotesView;
+	acknowledgement: AcknowledgementView | null;
+	/** The picture of the mount first. */
+	photos: PaperPhoto[];
+}
+
+export const AS_AGREED = 'as agreed';
+
+/** What was agreed and what was fitted, one beside the other. */
+export function tellFitted({ agreed, installation }: MountRecord['fitting']): PaperBlock[] {
+	const { differences, note } = installation;
+	const fittedOf = (key: string): string =>
+		differences.find((difference) => difference.key === key)?.fitted ?? AS_AGREED;
+	const sentence =
+		differences.length === 0
+			? 'Everything was fitted as agreed.'
+			: `${differences.length === 1 ? 'One thing is' : `${differences.length} things are`} not as agreed. The estimate was made for what was agreed.`;
+	return [
+		{
+			...{ kind: 'table', title: 'What was agreed, and what was fitted', empty: '' },
+			heads: ['', 'Agreed', 'Fitted'],
+			rows: agreed.map(({ key, label, agreed }) => [label, agreed, fittedOf(key)])
+		},
+		{ kind: 'words', sentences: [sentence, ...(note ? [`Note: ${note}`] : [])] }
+	];
+}
+
+export const tellBattery = ({ paper, fitting }: MountRecord): PaperBlock => ({
+	...{ kind: 'lines', title: 'The battery' },
+	lines: [
+		...paper.report.battery,
+		{ label: 'Serial number', value: fitting.installation.serialNumber || 'not noted' },
+		{ label: 'Position', value: paper.report.mount },
+		{
+			label: 'Fitted',
+			value: `${formatDate(fitting.installation.fittedOn)}, by ${fitting.installation.fittedBy}`
+		}
+	]
+});
+
+export const tellVehicle = ({ paper }: MountRecord): PaperBlock => ({
+	...{ kind: 'lines', title: 'Customer and vehicle' },
+	lines: [{ label: 'Customer', value: paper.customer.name }, ...paper.report.vehicle]
+});
+
+export const tellDay = ({ paper: { ribbon, report } }: MountRecord): PaperBlock => ({
+	...{ kind: 'picture', title: 'The hot day it was estimated for', svg: drawRibbon(ribbon) },
+	caption: `${report.headline}. ${report.sentence} ${report.day}`
+});
+
+const monthsAfter = (months: number): string => (months === 1 ? 'one month' : `${months} months`);
+
+export const tellFollowUps = ({ fitting }: MountRecord): PaperBlock => ({
+	...{ kind: 'table', title: 'When it is to be looked at', empty: 'No dates are set.' },
+	heads: ['After', 'Due', 'Done'],
+	rows: fitting.followUps.map(({ afterMonths, dueOn, doneOn, doneBy }) => [
+		monthsAfter(afterMonths),
+		formatDate(dueOn),
+		doneOn ? `${formatDate(doneOn)}, by ${doneBy}` : ''
+	])
+});
+
+export const tellAgreement = ({ paper, acknowledgement }: MountRecord): PaperBlock => {
+	const { recommendation } = paper;
+	const { id, createdAt, recommendedBy, againstVerdict, decidedBy, reason, assessment } = recommendation;
+	const verdict = sayVerdict(assessment.verdict, assessment.chemistry);
+	return {
+		...{ kind: 'lines', title: 'What was recommended' },
+		lines: [
+			{ label: `Recommendation ${id}`, value: `${formatDateTime(createdAt)}, by ${recommendedBy}` },
+			{ label: 'Verdict', value: verdict },
+			...(againstVerdict
+				? [
+						{
+							label: `Went ahead although it ${verdict}`,
+							value: `decided by ${decidedBy}. Reason: ${reason}`
+						}
+					]
+				: []),
+			{
+				label: 'Read and acknowledged',
+				value: acknowledgement
+					? `${formatDateTime(acknowledgement.acknowledgedAt)}, by ${acknowledgement.name}`
+					: 'not by the customer'
+			}
+		]
+	};
+};
+
+export const tellPreDrill = ({ preDrill }: MountRecord): PaperBlock => ({
+	...{ kind: 'table', title: 'Checked before drilling', empty: '' },
+	heads: ['Point', 'Holds', 'Note'],
+	rows: [
+		...preDrill.questions.map(({ label, answer, note }) => [
+			label,
+			answer ? PRE_DRILL_LABELS[answer] : 'not answered',
+			note
+		]),
+		['Signed', preDrill.signedBy ?? 'by nobody', preDrill.signedAt ? formatDateTime(preDrill.signedAt) : '']
+	]
+});
