@@ -53,7 +53,7 @@ const layers = [
 		files: ['src/lib/server/db/**'],
 		patterns: [
 			{
-				regex: '(lib/server|\\.\\.)/(services|policies|presenters|auth|mail|api)(/|$)',
+				regex: '(lib/server|\\.\\.)/(services|policies|presenters|auth|mail|storage|api)(/|$)',
 				message: 'Models know nothing of who uses them: put the rule into a service or a policy.'
 			}
 		]
@@ -62,7 +62,7 @@ const layers = [
 		files: ['src/lib/server/policies/**', 'src/lib/server/presenters/**'],
 		patterns: [
 			{
-				regex: '/(services|auth|mail|api)(/|$)',
+				regex: '/(services|auth|mail|storage|api)(/|$)',
 				message: 'Policies allow and presenters show: they get what they need as arguments.'
 			}
 		]
@@ -73,6 +73,15 @@ const layers = [
 			{
 				regex: '/(services|db|auth|mail|http)(/|$)',
 				message: 'Papers set what they are given: a service reads it and passes it in.'
+			}
+		]
+	},
+	{
+		files: ['src/lib/server/storage/**'],
+		patterns: [
+			{
+				regex: '(lib/|/)(db|services|policies|presenters|auth|mail|http|schemas)(/|$)',
+				message: 'The storage knows keys and bytes alone: what they are is known to services.'
 			}
 		]
 	},

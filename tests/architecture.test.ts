@@ -24,6 +24,7 @@ const RULES: { folder: RegExp; may: RegExp; types?: RegExp }[] = [
 		may: /^src\/lib\/(server\/(policies|presenters)\/|server\/errors\.ts$|schemas\/|format\/|thermal\/)/,
 		types: /^src\/lib\/server\/db\/models\//
 	},
+	{ folder: /^src\/lib\/server\/storage\//, may: /^src\/lib\/server\/(storage\/|[a-z-]+\.ts$)/ },
 	{
 		folder: /^src\/lib\/server\/papers\//,
 		may: /^src\/lib\/(server\/(papers|presenters)\/|schemas\/|format\/|thermal\/|components\/(charts|report\/print)\/.*\.ts$)/

@@ -1,5 +1,5 @@
 import { applicationEnv } from './lib/application.mjs';
-import { STATE } from './lib/folders.mjs';
+import { STATE, stateFolders } from './lib/folders.mjs';
 import { databaseEnv, localConnection } from './lib/mariadb.mjs';
 import { rememberedPorts } from './lib/ports.mjs';
 import { loadSecrets } from './lib/secrets.mjs';
@@ -14,7 +14,14 @@ async function findDatabase(): Promise<NodeJS.ProcessEnv> {
 	const [secrets, ports] = await Promise.all([loadSecrets(STATE), rememberedPorts(STATE)]);
 	const database = databaseEnv(localConnection({ port: ports.database, password: secrets.databasePassword }));
 	const mail = { SMTP_URL: `smtp://127.0.0.1:${ports.mail}` };
-	return applicationEnv({ host: '127.0.0.1', port: 4173, secrets, database, mail });
+	return applicationEnv({
+		host: '127.0.0.1',
+		port: 4173,
+		secrets,
+		database,
+		mail,
+		files: stateFolders(STATE).files
+	});
 }
 
 function readIds(words: readonly string[]): number[] {

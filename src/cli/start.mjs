@@ -130,7 +130,8 @@ async function bringUp() {
 		await prepare(folders);
 		const database = await startDatabase(folders, secrets);
 		const mail = await startMail(folders, database.ports.mail);
-		const env = applicationEnv({ host, port, secrets, database: database.env, mail, dev });
+		const { files } = folders;
+		const env = applicationEnv({ host, port, secrets, database: database.env, mail, files, dev });
 		await startServer(folders, env);
 		await announce(env, begun);
 		await Promise.race([stopSignal.received, ...kept.map(({ gaveUp }) => gaveUp)]);

@@ -14,6 +14,11 @@ import {
 } from './route-rules';
 
 const NOT_THERE = '999999';
+/** The smallest photo that there is: a PNG of one grey pixel. */
+const ONE_PIXEL = Buffer.from(
+	'iVBORw0KGgoAAAANSUhEUgAAAAEAAAABCAAAAAA6fptVAAAACklEQVR4nGNoAAAAggCBd81ytgAAAABJRU5ErkJggg==',
+	'base64'
+);
 /** What these answer depends on who is signed in already; sign-in has tests of its own. */
 const ABOUT_SESSIONS = /^\/(sign-in|sign-out)(\/|$)/;
 type Ids = Record<string, string>;
@@ -79,10 +84,14 @@ async function findIds(
 	const mountId = String(assessment.mountId);
 	const fitting = await read<{ followUps: Record[] }>(context, `/api/v1/mounts/${mountId}/fitting`);
 	const own = await (await customers.get('/my')).text();
+	const file = { name: 'a.png', mimeType: 'image/png', buffer: ONE_PIXEL };
+	const sent = await context.post(`/api/v1/mounts/${mountId}/files`, { multipart: { file } });
+	expect(sent.status(), await sent.text()).toBe(201);
 	return {
 		...(await findPeople(context)),
 		jobId,
 		mountId,
+		fileId: of((await sent.json()) as Record),
 		followUpId: of(fitting.followUps[0]),
 		kind: 'inspection',
 		paper: 'handover',

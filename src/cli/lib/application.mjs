@@ -17,16 +17,20 @@ const WITH_PARENT = new URL('./exit-with-parent.mjs', import.meta.url).href;
 
 /**
  * The environment that the application runs in.
- * @param {{ host: string, port: number, secrets: import('./secrets.mjs').Secrets, database: Record<string, string>, mail: Record<string, string>, dev?: boolean }} parts
+ * @param {{ host: string, port: number, secrets: import('./secrets.mjs').Secrets, database: Record<string, string>, mail: Record<string, string>, files: string, dev?: boolean }} parts
  * @param {NodeJS.ProcessEnv} [given]
  * @returns {NodeJS.ProcessEnv}
  */
-export function applicationEnv({ host, port, secrets, database, mail, dev = false }, given = process.env) {
+export function applicationEnv(
+	{ host, port, secrets, database, mail, files, dev = false },
+	given = process.env
+) {
 	const origin = given.ORIGIN || `http://localhost:${port}`;
 	return {
 		MAIL_FROM: 'Soakline <soakline@localhost>',
 		SOAKLINE_DEMO: '1',
-		BODY_SIZE_LIMIT: '6M',
+		BODY_SIZE_LIMIT: '210M',
+		SOAKLINE_FILES_DIR: files,
 		SHUTDOWN_TIMEOUT: '4',
 		...given,
 		...database,

@@ -7,7 +7,8 @@ const parts = {
 	port: 4200,
 	secrets: makeSecrets(),
 	database: { DATABASE_PORT: '21000' },
-	mail: { SMTP_URL: 'smtp://127.0.0.1:21001' }
+	mail: { SMTP_URL: 'smtp://127.0.0.1:21001' },
+	files: '/srv/soakline/files'
 };
 
 describe('readLine', () => {
@@ -28,6 +29,12 @@ describe('readLine', () => {
 });
 
 describe('applicationEnv', () => {
+	it('keeps photos in the state folder, or where somebody wants them', () => {
+		expect(applicationEnv(parts, {}).SOAKLINE_FILES_DIR).toBe('/srv/soakline/files');
+		const given = { SOAKLINE_FILES_DIR: '/mnt/photos' };
+		expect(applicationEnv(parts, given).SOAKLINE_FILES_DIR).toBe('/mnt/photos');
+	});
+
 	it('leads sign-in and forms to the address that people type', () => {
 		const env = applicationEnv(parts, {});
 		expect(env).toMatchObject({

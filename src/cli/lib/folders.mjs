@@ -10,7 +10,13 @@ export const PROJECT = dirname(dirname(dirname(dirname(fileURLToPath(import.meta
  * @param {string} base
  */
 export function stateFolders(base) {
-	return { base, db: join(base, 'db'), mail: join(base, 'mail'), log: join(base, 'log') };
+	return {
+		base,
+		db: join(base, 'db'),
+		mail: join(base, 'mail'),
+		log: join(base, 'log'),
+		files: join(base, 'files')
+	};
 }
 
 /** @typedef {ReturnType<typeof stateFolders>} StateFolders */
@@ -25,6 +31,7 @@ export async function makeStateFolders(base) {
 	await mkdir(folders.base, { recursive: true, mode: 0o700 });
 	await mkdir(folders.mail, { recursive: true, mode: 0o700 });
 	await mkdir(folders.log, { recursive: true, mode: 0o700 });
+	await mkdir(folders.files, { recursive: true, mode: 0o700 });
 	return folders;
 }
 

@@ -56,6 +56,7 @@ describe('state folders', () => {
 		await makeStateFolders(join(folder, 'own'));
 		expect(await modeOf('own')).toBe('700');
 		expect(await modeOf('own/mail')).toBe('700');
+		expect(await modeOf('own/files')).toBe('700');
 	});
 });
 

@@ -35,7 +35,7 @@ export async function boot(): Promise<void> {
 			return count === 0 ? 'up to date' : `${count} applied`;
 		});
 		if (settings.SOAKLINE_DEMO === '1') await timed('demo data', seedDemo);
-		await timed('clearing', async () => `${await clearExpired()} rows past their time`);
+		await timed('clearing', async () => `${await clearExpired()} rows and files past their time`);
 		startOutbox();
 		startClearing();
 		startReminders();

@@ -14,6 +14,8 @@ const envSchema = z.object({
 	SMTP_URL: z.string().startsWith('smtp'),
 	MAIL_FROM: z.string().default('Soakline <soakline@localhost>'),
 	MAILBOX_DIR: z.string().optional(),
+	/** Where photos and documents are kept. */
+	SOAKLINE_FILES_DIR: z.string().min(1).default('.soakline/files'),
 	SOAKLINE_DEMO: z.enum(['0', '1']).default('0'),
 	/** How hard outlooks are worked out: `light` for machines that have no time for more. */
 	SOAKLINE_OUTLOOK: z.enum(['full', 'light']).default('full')

@@ -68,7 +68,8 @@ export async function openSurroundings(base, { demo }) {
 			port: appPort,
 			secrets,
 			database: databaseEnv(connection),
-			mail: mailEnv(mailbox)
+			mail: mailEnv(mailbox),
+			files: folders.files
 		},
 		given
 	);

@@ -5,7 +5,7 @@ export const MOST_BODY_BYTES = 512 * 1024;
 /** A form writes the name of every box out: the same thousand legs are within it. */
 export const MOST_FORM_BYTES = 2 * 1024 * 1024;
 
-function sayBytes(bytes: number): string {
+export function sayBytes(bytes: number): string {
 	const [size, unit] = bytes < 1024 * 1024 ? [bytes / 1024, 'KiB'] : [bytes / 1024 / 1024, 'MiB'];
 	return `${Math.floor(size)} ${unit}`;
 }

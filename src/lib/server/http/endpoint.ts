@@ -5,9 +5,10 @@ import { AppError } from '../errors';
 import { sha256 } from '../hash';
 import { allow } from '../policies';
 import { readBody } from './body';
+import { contentResponse, type GivenContent } from './content-response';
 import { readSentFile, type SentFile } from './file-upload';
 import { answerOnce, type StoredAnswer } from './idempotency';
-import type { FileOperation, Operation } from './operation';
+import type { ContentOperation, FileOperation, Operation } from './operation';
 import { problemResponse } from './problem';
 import { validate } from './validate';
 
@@ -34,7 +35,7 @@ async function readJson(request: Request): Promise<unknown> {
 	}
 }
 
-function jsonResponse({ status, body }: StoredAnswer): Response {
+export function jsonResponse({ status, body }: StoredAnswer): Response {
 	return new Response(body, {
 		status,
 		headers: { 'content-type': 'application/json', 'cache-control': 'no-store' }
@@ -54,7 +55,7 @@ async function answer(
 	return jsonResponse(await answerOnce({ personId, key, request: JSON.stringify(asked) }, respond));
 }
 
-const orProblem =
+export const orProblem =
 	(handle: (event: RequestEvent) => Promise<Response>) =>
 	(event: RequestEvent): Promise<Response> =>
 		handle(event).catch((error: unknown) => problemResponse(error, event.locals.requestId));
@@ -81,6 +82,23 @@ export function endpoint<
 		const call = { person, params, query, body, event } as Call<Params, Query, Body>;
 		const asked = [url.pathname, rawBody ?? null];
 		return answer(event, operation, { personId: person.id, asked }, () => handle(call));
+	});
+}
+
+/** The same steps for an operation that gives a file. */
+export function contentEndpoint<Params extends z.ZodObject, Query extends z.ZodObject>(
+	operation: ContentOperation<Params, Query>,
+	handle: (call: {
+		person: SignedInPerson;
+		params: z.output<Params>;
+		query: z.output<Query>;
+	}) => Promise<GivenContent>
+): (event: RequestEvent) => Promise<Response> {
+	return orProblem(async ({ locals, params: given, request, url }) => {
+		const person = allow(locals.person, operation.action);
+		const params = validate(operation.params, given, 'not_found');
+		const query = validate(operation.query, Object.fromEntries(url.searchParams));
+		return contentResponse(request, await handle({ person, params, query }));
 	});
 }
 

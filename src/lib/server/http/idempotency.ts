@@ -24,20 +24,41 @@ async function readStored(
 	return row ? { request: row.request, answer: { status: row.status, body: row.body } } : null;
 }
 
+function requireKey(key: string): void {
+	if (KEY.test(key)) return;
+	throw new AppError(
+		'malformed_request',
+		'Idempotency-Key must be 1 to 120 printable characters without spaces.'
+	);
+}
+
+interface Asked {
+	personId: number;
+	key: string;
+	request: string;
+}
+
+/** What was answered to this question under this key; null when it is new. */
+export async function findAnswer({ personId, key, request }: Asked): Promise<StoredAnswer | null> {
+	requireKey(key);
+	const stored = await readStored(personId, key);
+	if (!stored) return null;
+	if (stored.request === sha256(request)) return stored.answer;
+	throw new AppError(
+		'idempotency_key_reused',
+		'This Idempotency-Key was used for a different request before.'
+	);
+}
+
 /**
  * Does the work once for a key, however often and however parallel it is asked: the key's row and the work's own rows
  * are one transaction, so a repeat waits for the first and then gets its answer.
  */
 export async function answerOnce(
-	{ personId, key, request }: { personId: number; key: string; request: string },
+	{ personId, key, request }: Asked,
 	work: () => Promise<StoredAnswer>
 ): Promise<StoredAnswer> {
-	if (!KEY.test(key)) {
-		throw new AppError(
-			'malformed_request',
-			'Idempotency-Key must be 1 to 120 printable characters without spaces.'
-		);
-	}
+	requireKey(key);
 	const requestHash = sha256(request);
 	try {
 		return await inTransaction(async (transaction) => {
@@ -56,14 +77,8 @@ export async function answerOnce(
 		});
 	} catch (error) {
 		if (databaseErrorNumber(error) !== DUPLICATE_ENTRY) throw error;
-		const stored = await readStored(personId, key);
+		const stored = await findAnswer({ personId, key, request });
 		if (!stored) throw error;
-		if (stored.request !== requestHash) {
-			throw new AppError(
-				'idempotency_key_reused',
-				'This Idempotency-Key was used for a different request before.'
-			);
-		}
-		return stored.answer;
+		return stored;
 	}
 }

@@ -52,25 +52,29 @@ const IDEMPOTENCY_KEY = {
 };
 
 /** A file, whole as the body or as the field "file" of a form. */
-function fileBody(mostBytes: number): JsonSchema {
+function fileBody(mostBytes: number, media: readonly string[]): JsonSchema {
 	const file = { type: 'string', maxLength: mostBytes, description: `At most ${mostBytes} bytes` };
 	const form = { type: 'object', required: [FILE_FIELD], properties: { [FILE_FIELD]: file } };
-	const plain = FILE_MEDIA.map((media) => [media, { schema: file }]);
+	const plain = media.map((each) => [each, { schema: file }]);
 	return {
 		required: true,
 		content: { 'multipart/form-data': { schema: form }, ...Object.fromEntries(plain) }
 	};
 }
 
-function bodyOf({ body, mostFileBytes }: Operation): JsonSchema {
-	if (mostFileBytes !== undefined) return { requestBody: fileBody(mostFileBytes) };
+function bodyOf({ body, mostFileBytes, fileMedia = FILE_MEDIA }: Operation): JsonSchema {
+	if (mostFileBytes !== undefined) return { requestBody: fileBody(mostFileBytes, fileMedia) };
 	if (!body) return {};
 	const content = { 'application/json': { schema: schemaOf(body, 'input') } };
 	return { requestBody: { required: true, content } };
 }
 
+function answerOf(answer: z.ZodType, media: readonly string[] = ['application/json']): JsonSchema {
+	return Object.fromEntries(media.map((each) => [each, { schema: schemaOf(answer, 'output') }]));
+}
+
 function describe(operation: Operation): JsonSchema {
-	const { id, summary, params, query, answer, status, method } = operation;
+	const { id, summary, params, query, answer, answerMedia, status, method } = operation;
 	const problem = {
 		description: 'A problem, as in RFC 9457',
 		content: { 'application/problem+json': { schema: { $ref: '#/components/schemas/Problem' } } }
@@ -85,10 +89,7 @@ function describe(operation: Operation): JsonSchema {
 		],
 		...bodyOf(operation),
 		responses: {
-			[status]: {
-				description: 'Done',
-				content: { 'application/json': { schema: schemaOf(answer, 'output') } }
-			},
+			[status]: { description: 'Done', content: answerOf(answer, answerMedia) },
 			default: problem
 		}
 	};

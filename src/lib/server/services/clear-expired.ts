@@ -1,6 +1,7 @@
 import { QueryTypes } from 'sequelize';
 import { connection } from '../db/connection';
 import { logger } from '../logger';
+import { clearFiles } from './clear-files';
 
 const EVERY_MS = 60 * 60_000;
 
@@ -14,7 +15,7 @@ const EXPIRED: readonly { table: string; past: string }[] = [
 	{ table: 'sessions', past: 'created_at < UTC_TIMESTAMP(3) - INTERVAL 30 DAY' }
 ];
 
-/** Deletes what is past its time, and says how many rows that were. */
+/** Deletes what is past its time, rows and files, and says how many that were. */
 export async function clearExpired(): Promise<number> {
 	let cleared = 0;
 	for (const { table, past } of EXPIRED) {
@@ -22,7 +23,7 @@ export async function clearExpired(): Promise<number> {
 			type: QueryTypes.BULKDELETE
 		});
 	}
-	return cleared;
+	return cleared + (await clearFiles());
 }
 
 let timer: NodeJS.Timeout | undefined;

@@ -17,6 +17,7 @@ import { sha256 } from '../hash';
 import { allow } from '../policies';
 import { presentPlace } from '../presenters/places';
 import { recordBy } from './audit';
+import { cleanFileName } from './file-names';
 import { saveVersioned } from './records';
 
 /** A file as it was sent. */
@@ -25,15 +26,7 @@ export interface Sent {
 	bytes: Uint8Array;
 }
 
-const LONGEST_NAME = 120;
 const NAMELESS = 'weather file';
-
-/** The last part of a path, without what does not show, short enough to be kept. */
-function cleanName(name: string): string {
-	const last = name.split(/[\\/]/).at(-1) ?? '';
-	const shown = last.replace(/\p{C}/gu, '').trim();
-	return [...shown].slice(0, LONGEST_NAME).join('').trim() || NAMELESS;
-}
 
 function asFieldProblem({ kind, line, column, value, limit, message }: WeatherProblem): FieldProblem {
 	return {
@@ -75,7 +68,7 @@ function readingOf({ site, hours }: WeatherFile, file: WeatherReading['file']): 
 export function readWeather({ name, bytes }: Sent): WeatherReading {
 	const parsed = parseWeatherFile(new TextDecoder().decode(bytes));
 	if (!parsed.ok) throw refuseFile(parsed.problems, parsed.problemCount);
-	const file = { name: cleanName(name), sizeBytes: bytes.byteLength, sha256: sha256(bytes) };
+	const file = { name: cleanFileName(name, NAMELESS), sizeBytes: bytes.byteLength, sha256: sha256(bytes) };
 	return readingOf(parsed.file, file);
 }
 

@@ -46,6 +46,7 @@ import { migration as m063 } from './063-follow-ups';
 import { migration as m064 } from './064-field-notes';
 import { migration as m065 } from './065-field-notes-no-update';
 import { migration as m066 } from './066-field-notes-no-delete';
+import { migration as m070 } from './070-stored-files';
 import { migration as m090 } from './090-invitations';
 import { migration as m091 } from './091-people-seen';
 import { migration as m092 } from './092-second-factors';
@@ -114,6 +115,7 @@ export const migrations: Migration[] = [
 	m064,
 	m065,
 	m066,
+	m070,
 	m090,
 	m091,
 	m092,

@@ -29,6 +29,7 @@ import { Installation, initInstallation } from './installation';
 import { FollowUp, initFollowUp } from './follow-up';
 import { FieldNote, initFieldNote } from './field-note';
 import { CustomerMessage, initCustomerMessage } from './customer-message';
+import { StoredFile, initStoredFile } from './stored-file';
 import { OutgoingMail, initOutgoingMail } from './outgoing-mail';
 import { AuditCheck, initAuditCheck } from './audit-check';
 import { AuditEntry, initAuditEntry } from './audit-entry';
@@ -64,6 +65,7 @@ export {
 	FollowUp,
 	FieldNote,
 	CustomerMessage,
+	StoredFile,
 	OutgoingMail,
 	AuditCheck,
 	AuditEntry
@@ -100,6 +102,7 @@ const initialisers = [
 	initFollowUp,
 	initFieldNote,
 	initCustomerMessage,
+	initStoredFile,
 	initOutgoingMail,
 	initAuditCheck,
 	initAuditEntry

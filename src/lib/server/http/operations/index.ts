@@ -5,6 +5,7 @@ import { customerOperations } from './customers';
 import { assessmentOperations } from './assessments';
 import { bookOperations } from './books';
 import { dayPlanOperations } from './day-plans';
+import { fileOperations } from './files';
 import { fittingOperations } from './fittings';
 import { jobOperations } from './jobs';
 import { mountOperations } from './mounts';
@@ -29,6 +30,7 @@ export const OPERATIONS: readonly Operation[] = [
 	mountOperations,
 	preDrillOperations,
 	fittingOperations,
+	fileOperations,
 	dayPlanOperations,
 	sheetOperations,
 	questionOperations,
