@@ -16,7 +16,7 @@ test('the trail is searched, read in plain words, taken as CSV, and found whole'
 	await expect(entries.first()).toBeVisible();
 	await expect(page.getByRole('listitem').filter({ hasText: 'signed in' })).toHaveCount(0);
 	await entries.first().getByText('What was recorded').click();
-	await expect(entries.first().getByText('verdict')).toBeVisible();
+	await expect(entries.first().getByText('verdict', { exact: true })).toBeVisible();
 	await expectNoViolations(page);
 	const href = await page.getByRole('link', { name: 'Take it as CSV' }).getAttribute('href');
 	const table = await page.request.get(href ?? '');

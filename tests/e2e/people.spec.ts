@@ -11,7 +11,7 @@ async function inviteByPage(page: Page, name: string, role: string): Promise<str
 	await openForm(page, '/people');
 	await page.getByLabel('Name').fill(name);
 	await page.getByLabel('E-mail').fill(email);
-	await page.getByLabel('Role').selectOption(role);
+	await page.getByLabel('Role', { exact: true }).selectOption(role);
 	await page.getByRole('button', { name: 'Send the invitation' }).click();
 	await expect(page.getByText('The invitation is on its way.')).toBeVisible();
 	return email;
@@ -50,7 +50,7 @@ test('somebody is invited, joins by the letter’s link, gets another role, and 
 	await page.goto('/people');
 	await page.getByRole('link', { name }).click();
 	await expectNoViolations(page);
-	await page.getByLabel('Role').selectOption('engineer');
+	await page.getByLabel('Role', { exact: true }).selectOption('engineer');
 	await page.getByRole('button', { name: 'Change the role' }).click();
 	await expect(page.getByText('The role is changed.')).toBeVisible();
 	await other
@@ -93,12 +93,12 @@ test('an invitation is sent again and withdrawn, without a script too', async ({
 	});
 	const without = await plain.newPage();
 	await without.goto('/people');
-	await without.getByRole('button', { name: `Send it again, to ${name}` }).click();
+	await without.getByRole('button', { name: new RegExp(`^Send it again ?, to ${name}`) }).click();
 	await expect(without.getByText('The invitation is on its way once more.')).toBeVisible();
 	const second = await waitForLink(email, LINK, 2);
 	expect((await page.request.get(first)).status()).toBe(404);
 	expect((await page.request.get(second)).status()).toBe(200);
-	await without.getByRole('button', { name: `Withdraw it, from ${name}` }).click();
+	await without.getByRole('button', { name: new RegExp(`^Withdraw it ?, from ${name}`) }).click();
 	await expect(without.getByText('The invitation is withdrawn.')).toBeVisible();
 	expect((await page.request.get(second)).status()).toBe(410);
 	await plain.close();

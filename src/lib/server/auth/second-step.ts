@@ -16,7 +16,8 @@ export class SecondStepNeeded extends Error {
 	}
 }
 
-const cookieName = (): string => (isSecureOrigin() ? '__Host-soakline-step' : 'soakline-step');
+/** Not a longer form of the session's cookie: the sign-in library takes those for parts of that one, and clears them. */
+const cookieName = (): string => (isSecureOrigin() ? '__Host-second-step' : 'second-step');
 
 /** Remembers on this device, for ten minutes, whose first step was right. */
 export async function beginSecondStep(cookies: Cookies, personId: number): Promise<void> {
