@@ -53,6 +53,12 @@ async function findPeople(context: APIRequestContext): Promise<Ids> {
 	return { personId: String(installer?.id ?? 'none'), invitationId: String(invitation.id) };
 }
 
+/** In the manager's mailbox the newest letter that the whole shop may read: an invitation is the manager's alone. */
+function findSharedLetter(mailbox: string): string {
+	const letters = [...mailbox.matchAll(/href="\/mailbox\/([^"]+)"[^>]*>(?:<!--.*?-->|\s)*([^<]+)/g)];
+	return letters.find(([, , subject]) => !subject?.startsWith('Join '))?.[1] ?? 'none';
+}
+
 /** Ids of one demo job and everything that hangs on it, to put into the routes. */
 async function findIds(
 	context: APIRequestContext,
@@ -104,7 +110,7 @@ async function findIds(
 		vehicleId: of(job.vehicle),
 		bookId: of(books.rows[0]),
 		sheetId: of(sheets.rows.find(({ withdrawnAt }) => withdrawnAt === null)),
-		messageId: /href="\/mailbox\/([^"]+)"/.exec(mailbox)?.[1] ?? 'none',
+		messageId: findSharedLetter(mailbox),
 		stop: /href="\/reminders\/([^"]+)"/.exec(own)?.[1] ?? 'none',
 		token: findToken(customer.email)
 	};

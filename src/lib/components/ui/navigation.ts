@@ -11,7 +11,6 @@ const ENTRIES: (NavEntry & { roles?: Role[]; demoOnly?: boolean })[] = [
 	{ label: 'Places', href: '/places' },
 	{ label: 'Remedies', href: '/remedies' },
 	{ label: 'Books', href: '/books', roles: ['engineer', 'manager'] },
-	{ label: 'People', href: '/people', roles: ['manager'] },
 	{ label: 'Shop', href: '/shop', roles: ['manager'] },
 	{ label: 'Mailbox', href: '/mailbox', demoOnly: true }
 ];
