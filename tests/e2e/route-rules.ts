@@ -95,7 +95,7 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 
 	page('/jobs', 'workshop'),
 	page('/jobs/new', 'workshop', 'create', 'repeat'),
-	owned('/jobs/[jobId]', 'workshop', 'assess', 'answer'),
+	owned('/jobs/[jobId]', 'workshop', 'assess', 'answer', 'again'),
 	owned('/jobs/[jobId]/customer', 'workshop', 'default'),
 	owned('/jobs/[jobId]/vehicle', 'workshop', 'default'),
 	owned('/jobs/[jobId]/battery', 'workshop', 'default'),
@@ -142,7 +142,11 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 	page('/mailbox', 'workshop'),
 	owned('/mailbox/[messageId]', 'workshop'),
 
+	page('/erasures', 'manager', 'default'),
+
 	page('/my', 'customer'),
+	page('/my/data', 'customer', 'default'),
+	page('/my/data.zip', 'customer'),
 	owned('/my/[sheetId]', 'customer', 'acknowledge', 'ask'),
 
 	api('/openapi.json', 'anyone', 'GET'),
@@ -189,12 +193,20 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 	ownedApi('/recommendations/[recommendationId]', 'workshop', { GET: null }),
 	ownedApi('/sheets/[sheetId]/withdrawal', 'workshop', { POST: null }),
 	ownedApi('/sheets/[sheetId]/letter', 'workshop', { POST: null }),
+	ownedApi('/jobs/[jobId]/letters', 'workshop', { GET: null }),
+	ownedApi('/letters/[letterId]/tries', 'workshop', { POST: null }),
 	ownedApi('/jobs/[jobId]/questions', 'workshop', { GET: null }),
 	ownedApi('/questions/[questionId]/answers', 'workshop', { POST: { answer: 'Nothing' } }),
 	ownedApi('/my/sheets/[sheetId]/questions', 'customer', {
 		GET: null,
 		POST: { askedBy: 'Nobody', question: 'Nothing?' }
 	}),
+	api('/erasures', 'manager', 'GET'),
+	ownedApi('/erasures/[erasureId]/decision', 'manager', {
+		POST: { decision: 'refuse', reason: 'None', version: 0 }
+	}),
+	api('/my/data', 'customer', 'GET'),
+	api('/my/erasure', 'customer', 'POST'),
 	api('/books', 'bench', 'GET'),
 	ownedApi('/books/[bookId]', 'bench', { GET: null }),
 	api('/simulations', 'workshop', 'POST'),

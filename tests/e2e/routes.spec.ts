@@ -89,6 +89,7 @@ async function findIds(
 	);
 	const mountId = String(assessment.mountId);
 	const fitting = await read<{ followUps: Record[] }>(context, `/api/v1/mounts/${mountId}/fitting`);
+	const letters = await read<{ rows: Record[] }>(context, `/api/v1/jobs/${jobId}/letters`);
 	const own = await (await customers.get('/my')).text();
 	const file = { name: 'a.png', mimeType: 'image/png', buffer: ONE_PIXEL };
 	const sent = await context.post(`/api/v1/mounts/${mountId}/files`, { multipart: { file } });
@@ -111,6 +112,7 @@ async function findIds(
 		bookId: of(books.rows[0]),
 		sheetId: of(sheets.rows.find(({ withdrawnAt }) => withdrawnAt === null)),
 		messageId: findSharedLetter(mailbox),
+		letterId: of(letters.rows[0]),
 		stop: /href="\/reminders\/([^"]+)"/.exec(own)?.[1] ?? 'none',
 		token: findToken(customer.email)
 	};

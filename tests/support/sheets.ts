@@ -5,7 +5,7 @@ import { makeRecommendation } from '../../src/lib/server/services/recommendation
 import { sendSheet } from '../../src/lib/server/services/sheets';
 import type { OutlookEffort } from '../../src/lib/thermal/outlook';
 import { makeAssessableJob } from './assessable-job';
-import { makeCrew } from './services';
+import { makeCrew, type Crew } from './services';
 
 /** Enough to go through every part, too little to be believed. */
 export const LIGHT_EFFORT: OutlookEffort = {
@@ -15,8 +15,12 @@ export const LIGHT_EFFORT: OutlookEffort = {
 const DECISION = { decidedBy: 'Ilse Tarn', reason: 'No other place; a duct follows before summer.' };
 
 /** A recommended job of the crew's own customer: the hot corner against its verdict, or the cool cabin. */
-export async function makeRecommendedJob(which: 'hot' | 'cool' = 'hot') {
+export async function makeRecommendedJob(
+	which: 'hot' | 'cool' = 'hot',
+	prepare: (crew: Crew) => Promise<void> = () => Promise.resolve()
+) {
 	const crew = await makeCrew();
+	await prepare(crew);
 	const { jobId, ...mounts } = await makeAssessableJob(crew.installer);
 	await Job.update({ customerId: crew.customer.customerId! }, { where: { id: jobId } });
 	const assessments = await assessJob(crew.installer, jobId);

@@ -8,5 +8,11 @@ export const customerInputSchema = z.object({
 });
 export type CustomerInput = z.infer<typeof customerInputSchema>;
 
-export const customerSchema = editedSchema.extend(customerInputSchema.shape);
+export const customerSchema = editedSchema.extend({
+	...customerInputSchema.shape,
+	remindersStoppedAt: z.iso
+		.datetime()
+		.nullable()
+		.meta({ description: 'When the customer stopped reminders; null while they get them' })
+});
 export type CustomerView = z.infer<typeof customerSchema>;

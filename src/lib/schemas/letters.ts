@@ -7,6 +7,9 @@ export const LETTER_KINDS = {
 	question: 'A question of the customer',
 	answer: 'An answer to the customer',
 	reminder: 'Reminder of a follow-up',
+	'erasure-asked': 'A customer asks for deletion',
+	'erasure-refused': 'A request for deletion, refused',
+	'erasure-granted': 'A request for deletion, done',
 	'sign-in': 'Link to sign in',
 	invitation: 'Invitation to the workshop',
 	'second-factor': 'A second factor that was reset'

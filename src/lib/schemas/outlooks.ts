@@ -48,7 +48,13 @@ export const outlookSchema = z.object({
 		headroomHighK: kelvin,
 		darkHoursHigh: z.number(),
 		band: bandSchema,
-		convergence: z.array(z.object({ samples: z.number().int(), cutOutShare: share, middleHeadroomK: kelvin }))
+		convergence: z.array(
+			z.object({ samples: z.number().int(), cutOutShare: share, middleHeadroomK: kelvin })
+		),
+		hottest: z
+			.object({ limitC: tempC, daysC: z.array(tempC) })
+			.optional()
+			.meta({ description: 'Fifty equally likely days against the limit, coolest first' })
 	}),
 	year: z.object({
 		samples: z.number().int(),

@@ -3,6 +3,7 @@ import type { DayLimits } from '../format/heat-limits';
 import type { AssessmentResult } from './assessments';
 import type { PositionKind } from './survey';
 import { email, idSchema, words } from './fields';
+import type { FieldLesson } from './my';
 import type { Question } from './questions';
 import { VERDICTS, type Verdict } from './verdicts';
 import type { LogoView, WorkshopHead } from './shop';
@@ -14,6 +15,16 @@ export interface SheetRibbon extends Pick<
 > {
 	position: PositionKind;
 	limits: DayLimits;
+}
+
+/** Fifty equally likely days, each by how hot it gets, with the words and numbers of their picture. */
+export interface SheetDots {
+	daysC: number[];
+	limitC: number;
+	/** What happens at the limit. */
+	limitWords: string;
+	sentence: string;
+	figures: { label: string; value: string }[];
 }
 
 /** The customer's page, word for word as it was sent; its hash is what an acknowledgement is tied to. */
@@ -44,6 +55,8 @@ export interface SheetContent {
 	figures: { label: string; value: string }[];
 	/** How often, what would help, how long it lasts; pages from before it was worked out have none. */
 	outlook?: { label: string; text: string }[];
+	/** Fifty equally likely days against the limit; pages from before it was drawn have none. */
+	dots?: SheetDots;
 	ribbon: SheetRibbon;
 	cautions: { title: string; text: string }[];
 	assessmentId: number;
@@ -108,6 +121,8 @@ export interface SheetView {
 	acknowledgement: AcknowledgementView | null;
 	/** Of the whole job, with what the shop answered. */
 	questions: Question[];
+	/** What readings in the field taught about the fitted battery since. */
+	lessons: FieldLesson[];
 }
 
 /** One line of a customer's own list. */

@@ -6,12 +6,12 @@ import { loadForm } from '$lib/server/http/forms';
 
 /** A stored sheet as its page shows it: the words as they are, the picture drawn from its stored data. */
 export async function showSheet(sheet: SheetView, askedBy = '') {
-	const { content, contentSha256, acknowledgement, newerSentAt, questions, logo } = sheet;
+	const { content, contentSha256, acknowledgement, newerSentAt, questions, lessons, logo } = sheet;
 	const { ribbon, ...words } = content;
 	const legs = ribbon.legs.map((leg) => ({ ...leg, kind: nameLeg(leg) }));
 	const day = { ...ribbon, legs, air: airAt(ribbon.position), band: null };
 	return {
-		...{ words, acknowledgement, newerSentAt, questions, logo, day },
+		...{ words, acknowledgement, newerSentAt, questions, lessons, logo, day },
 		screen: drawRibbonPictures(day, ['phone', 'desk'], 'screen'),
 		paper: drawRibbonPictures(day, ['print'], 'paper'),
 		form: await loadForm(acknowledgeSchema, { contentSha256 }),

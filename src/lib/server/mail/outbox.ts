@@ -58,15 +58,25 @@ export async function dropLetters(
 	);
 }
 
-/** Gives a letter that was given up its tries again; says whether there was one. */
-export async function tryLetterAgain(sheetId: number, transaction: Transaction): Promise<boolean> {
+/** Gives a letter that was given up its tries again; says whether it is one. What was dropped has no words left. */
+export async function tryMailAgain(id: number, transaction: Transaction): Promise<boolean> {
 	const [changed] = await OutgoingMail.update(
 		{ state: 'waiting', attempts: 0, nextAttemptAt: new Date() },
-		{ where: { sheetId, state: 'failed' }, transaction }
+		{ where: { id, state: 'failed', textBody: { [Op.ne]: '' } }, transaction }
 	);
 	transaction.afterCommit(() => outsideTransaction(nudge));
 	return changed > 0;
 }
+
+/** The same for the letter that brings a sheet. */
+export async function tryLetterAgain(sheetId: number, transaction: Transaction): Promise<boolean> {
+	const letter = await OutgoingMail.findOne({ where: { sheetId }, attributes: ['id'], transaction });
+	return letter !== null && tryMailAgain(letter.id, transaction);
+}
+
+/** Whose data was deleted is not kept as the reader of the letter that says so either. */
+const withoutReader = ({ kind }: OutgoingMail): Partial<OutgoingMail> =>
+	kind === 'erasure-granted' ? { recipient: '(erased)', lastError: '', ...FORGOTTEN } : {};
 
 async function claim(mail: OutgoingMail): Promise<boolean> {
 	const [changed] = await OutgoingMail.update(
@@ -82,7 +92,7 @@ async function sendOne(mail: OutgoingMail): Promise<void> {
 	try {
 		await deliver(mail);
 		await OutgoingMail.update(
-			{ state: 'sent', sentAt: new Date(), lastError: '', ...FORGOTTEN },
+			{ state: 'sent', sentAt: new Date(), lastError: '', ...FORGOTTEN, ...withoutReader(mail) },
 			{ where: { id: mail.id } }
 		);
 	} catch (error) {
@@ -90,7 +100,10 @@ async function sendOne(mail: OutgoingMail): Promise<void> {
 		const givenUp = attempts >= MOST_ATTEMPTS || isFinalRefusal(error);
 		const nextAttemptAt = new Date(Date.now() + FIRST_PAUSE_MS * 2 ** attempts);
 		await OutgoingMail.update(
-			{ state: givenUp ? 'failed' : 'waiting', nextAttemptAt, lastError },
+			{
+				...{ state: givenUp ? 'failed' : 'waiting', nextAttemptAt, lastError },
+				...(givenUp ? withoutReader(mail) : {})
+			},
 			// Whoever dropped it meanwhile meant it: it is not put back.
 			{ where: { id: mail.id, state: 'waiting' } }
 		);

@@ -11,10 +11,11 @@ import { guardOf, type CutOffs, type HeatGuard } from '$lib/thermal/chemistries'
 import type { Sensor } from '$lib/thermal/types';
 import { listLeadAcidSheetFigures, sayLeadAcid } from './lead-acid-sheet';
 import { makerCaution } from './report-inputs';
+import { writeSheetDots } from './sheet-dots';
 import { writeSheetOutlook, type SheetBeside } from './sheet-outlook';
 
 /** Changes with every change of the sheet's own words: an acknowledgement is tied to what was read. */
-export const SHEET_WORDS_VERSION = 4;
+export const SHEET_WORDS_VERSION = 5;
 
 /** What a sheet is written from. */
 export interface SheetSource {
@@ -171,6 +172,7 @@ function sayMaker({ inputs }: SheetSource): string[] {
 export function writeSheetContent(source: SheetSource): SheetContent {
 	const { inputs, result, workshop, preparedBy, override, assessmentId } = source;
 	const { vehicle, battery } = inputs;
+	const dots = writeSheetDots(source.beside.outlook.day, battery.chemistry);
 	const { headline, sentence: summary } = describeVerdict(
 		{ ...factsOf(result), chemistry: battery.chemistry },
 		'customer'
@@ -197,6 +199,7 @@ export function writeSheetContent(source: SheetSource): SheetContent {
 			chemistry: battery.chemistry,
 			placeName: inputs.place.name
 		}),
+		...(dots ? { dots } : {}),
 		ribbon: drawnFrom(source),
 		cautions: source.cautions ?? listCautions(battery.chemistry).map(({ title, text }) => ({ title, text }))
 	};

@@ -1,5 +1,3 @@
-import type { Question } from '$lib/schemas/questions';
-import type { LogoView } from '$lib/schemas/shop';
 import type { AcknowledgementView, MySheet, SheetStatus, SheetView } from '$lib/schemas/sheets';
 import type { Acknowledgement, OutgoingMail, Sheet } from '../db/models';
 
@@ -30,11 +28,11 @@ export function presentSheetStatus(sheet: Sheet, letter: OutgoingMail, sentBy: s
 export function presentSheet(
 	{ content, contentSha256, textVersion, acknowledgement }: Sheet,
 	newer: Sheet | null,
-	more: { questions: Question[]; logo: LogoView | null }
+	beside: Pick<SheetView, 'questions' | 'lessons' | 'logo'>
 ): SheetView {
 	return {
 		newerSentAt: isoOrNull(newer?.createdAt),
-		...{ content, contentSha256, textVersion, ...more },
+		...{ content, contentSha256, textVersion, ...beside },
 		acknowledgement: acknowledgement ? presentAcknowledgement(acknowledgement) : null
 	};
 }

@@ -3,6 +3,7 @@ import { connection } from '../db/connection';
 import { AuditEntry } from '../db/models';
 import { inTransaction } from '../db/transaction';
 import { GENESIS, chainHash } from './audit-chain';
+import { isBlanked, readBlanked } from './audit-erased';
 
 const BATCH = 1_000;
 
@@ -31,7 +32,12 @@ async function* readEntries(workshopId: number, transaction: Transaction): Async
 	}
 }
 
-function findWrong(entry: AuditEntry, place: number, previousHash: string): string | null {
+function findWrong(
+	entry: AuditEntry,
+	place: number,
+	previousHash: string,
+	blanked: ReadonlyMap<number, string>
+): string | null {
 	const { workshopId, sequence, at, personId, action, subjectType, subjectId, detail, hash } = entry;
 	if (sequence !== place) return `entry ${place} is missing`;
 	if (entry.previousHash !== previousHash) return `entry ${sequence} does not follow the one before it`;
@@ -46,6 +52,7 @@ function findWrong(entry: AuditEntry, place: number, previousHash: string): stri
 		detail,
 		previousHash
 	};
+	if (isBlanked(entry, blanked)) return null;
 	return chainHash(chained) === hash ? null : `entry ${sequence} was changed`;
 }
 
@@ -63,8 +70,9 @@ async function findCut({ entries, headHash }: Walk, workshopId: number, transact
 export function walkTrail(workshopId: number, asked = 0): Promise<Walk> {
 	return inTransaction(async (transaction) => {
 		const walk: Walk = { entries: 0, headHash: GENESIS, finding: null, hashAt: null };
+		const blanked = await readBlanked(workshopId, transaction);
 		for await (const entry of readEntries(workshopId, transaction)) {
-			const finding = findWrong(entry, walk.entries + 1, walk.headHash);
+			const finding = findWrong(entry, walk.entries + 1, walk.headHash, blanked);
 			if (finding) return { ...walk, finding };
 			walk.entries = entry.sequence;
 			walk.headHash = entry.hash;

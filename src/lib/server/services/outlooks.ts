@@ -13,6 +13,7 @@ import {
 	type OutlookProgress,
 	type OutlookRequest
 } from '$lib/thermal/outlook';
+import { spreadDay } from '$lib/thermal/uncertainty';
 import { Assessment, AssessmentOutlook } from '../db/models';
 import { env } from '../env';
 import { notFound } from '../errors';
@@ -110,6 +111,18 @@ export async function ensureOutlook(assessment: Assessment, effort = usualEffort
 	const kept = await findOutlook(assessment.id);
 	if (kept) return kept;
 	return (running.get(assessment.id) ?? begin(assessment, effort)).done;
+}
+
+/** The same with its fifty days: drawn again, with the same seed, for an outlook that was kept before they were. */
+export async function withHottestDays(assessmentId: number, outlook: Outlook): Promise<Outlook> {
+	if (outlook.day.hottest) return outlook;
+	const row = await AssessmentOutlook.findOne({ where: { assessmentId } });
+	if (!row) return outlook;
+	const { samples, seed } = outlook.day;
+	const { hottest } = await afterOthers(() =>
+		workInSlices(spreadDay(row.request.scenario, { samples, seed }))
+	);
+	return { ...outlook, day: { ...outlook.day, ...(hottest ? { hottest } : {}) } };
 }
 
 async function findOwn(person: SignedInPerson, assessmentId: number): Promise<Assessment> {

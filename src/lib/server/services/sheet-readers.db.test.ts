@@ -28,7 +28,8 @@ describe('opening a sheet by its link', () => {
 				acknowledgement: null,
 				logo: null,
 				newerSentAt: null,
-				questions: []
+				questions: [],
+				lessons: []
 			});
 		}
 		expect(await Acknowledgement.count({ where: { sheetId: sheet.id } })).toBe(0);

@@ -1,7 +1,7 @@
 import { Op, UniqueConstraintError, type Includeable, type Transaction, type WhereOptions } from 'sequelize';
 import type { SignedInPerson } from '$lib/schemas/people';
 import type { Acknowledge, AcknowledgementView, MySheet, SheetView } from '$lib/schemas/sheets';
-import { Acknowledgement, Job, Sheet } from '../db/models';
+import { Acknowledgement, Assessment, Job, Sheet } from '../db/models';
 import { inTransaction } from '../db/transaction';
 import { AppError, notFound } from '../errors';
 import { canonicalJson, sha256, tokenHash } from '../hash';
@@ -9,6 +9,7 @@ import { logger } from '../logger';
 import { allow } from '../policies';
 import { presentAcknowledgement, presentMySheet, presentSheet } from '../presenters/sheets';
 import { record } from './audit';
+import { listLessons } from './field-lessons';
 import { readThread } from './question-threads';
 import { findLogo } from './shop';
 
@@ -77,6 +78,20 @@ async function findNewer({ id, jobId }: Sheet): Promise<Sheet | null> {
 	return Sheet.findOne({ where, order: [['id', 'DESC']] });
 }
 
+/** The page with what belongs beside it: a newer one, questions, and what the field has taught about this position. */
+async function show(sheet: Sheet): Promise<SheetView> {
+	const { workshopId, jobId, content } = sheet;
+	const [newer, questions, lessons, assessment, logo] = await Promise.all([
+		findNewer(sheet),
+		readThread(jobId),
+		listLessons([jobId]),
+		Assessment.findByPk(content.assessmentId, { attributes: ['mountId'] }),
+		findLogo(workshopId, content.workshop.logoSha256)
+	]);
+	const ofMount = lessons.filter(({ mountId }) => mountId === assessment?.mountId);
+	return presentSheet(sheet, newer, { questions, lessons: ofMount, logo });
+}
+
 /** Once: of two at the same moment one changes the row. */
 async function noteFirstOpening({ id, workshopId }: Sheet, reader: Reader): Promise<void> {
 	await inTransaction(async (transaction) => {
@@ -87,12 +102,6 @@ async function noteFirstOpening({ id, workshopId }: Sheet, reader: Reader): Prom
 		const action = reader ? 'sheet.read' : 'sheet.link-opened';
 		await record({ workshopId, personId: reader?.id ?? null, action, ...subject }, transaction);
 	});
-}
-
-async function show(sheet: Sheet): Promise<SheetView> {
-	const logo = await findLogo(sheet.workshopId, sheet.content.workshop.logoSha256);
-	const questions = await readThread(sheet.jobId);
-	return presentSheet(sheet, await findNewer(sheet), { questions, logo });
 }
 
 /** The page behind a link. To open it acknowledges nothing: programs that scan mail open links too. */

@@ -2,7 +2,7 @@ import type { SignedInPerson } from '$lib/schemas/people';
 import { AppError } from '../errors';
 import type { SheetSource } from '../presenters/sheet-content';
 import { lookElsewhere } from './outlook-reports';
-import { getOutlook } from './outlooks';
+import { getOutlook, withHottestDays } from './outlooks';
 import { touringOf } from './touring-year';
 import { getRecommendationDocument, newestRecommendation } from './recommendations';
 
@@ -21,7 +21,7 @@ export async function readSheetSource(
 	const newest = await newestRecommendation(person, jobId);
 	if (newest?.id !== recommendationId)
 		throw new AppError('conflict', SUPERSEDED, [{ path: 'recommendationId', message: SUPERSEDED }]);
-	const outlook = await getOutlook(person, assessment.id);
+	const outlook = await withHottestDays(assessment.id, await getOutlook(person, assessment.id));
 	const { elsewhere } = await lookElsewhere(person, others);
 	return {
 		...{ jobId, workshop },

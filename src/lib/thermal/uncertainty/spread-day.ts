@@ -50,6 +50,25 @@ export interface DaySpread extends SpreadOptions {
 	darkHoursHigh: number;
 	band: CurveBand;
 	convergence: ConvergencePoint[];
+	/** Fifty equally likely days, coolest first; not in what was stored before it was kept. */
+	hottest?: HottestDays;
+}
+
+/** How hot it gets where the limit is watched, each day counted from the limit that was drawn with it. */
+export interface HottestDays {
+	limitC: number;
+	daysC: number[];
+}
+
+const FEW_DAYS = 50;
+
+/** The middles of fifty shares of equal size: what a quantile dot plot shows (Fernandes and others, CHI 2018, 144). */
+function hottestDays(limitC: number, headrooms: readonly number[]): HottestDays {
+	const daysC = Array.from({ length: FEW_DAYS }, (_, day) => {
+		const headroomK = sampleQuantile(headrooms, 1 - (day + 0.5) / FEW_DAYS);
+		return Math.round((limitC - headroomK) * 100) / 100;
+	});
+	return { limitC, daysC };
 }
 
 /** Whole minutes between the points of a band, so that there are not too many. */
@@ -143,6 +162,7 @@ export function* spreadDay(
 			upperC: upperC!,
 			highC: highC!
 		},
-		convergence
+		convergence,
+		hottest: hottestDays(scenario.bms.discharge.cut, headrooms)
 	};
 }

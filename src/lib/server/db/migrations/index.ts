@@ -63,6 +63,11 @@ import { migration as m102 } from './102-customer-messages-no-update';
 import { migration as m103 } from './103-customer-messages-no-delete';
 import { migration as m104 } from './104-outgoing-mails-log';
 import { migration as m105 } from './105-customers-reminders-stopped';
+import { migration as m106 } from './106-acknowledgements-erasure';
+import { migration as m107 } from './107-recommendations-erasure';
+import { migration as m108 } from './108-assessments-erasure';
+import { migration as m109 } from './109-field-notes-erasure';
+import { migration as m109Then } from './109-then-audit-entries-erasure';
 import type { Migration } from '../migrate';
 
 /** Every migration, in the order in which they run; each is one DDL step that may run again. */
@@ -131,5 +136,10 @@ export const migrations: Migration[] = [
 	m102,
 	m103,
 	m104,
-	m105
+	m105,
+	m106,
+	m107,
+	m108,
+	m109,
+	m109Then
 ];

@@ -30,6 +30,7 @@ import { FollowUp, initFollowUp } from './follow-up';
 import { FieldNote, initFieldNote } from './field-note';
 import { CustomerMessage, initCustomerMessage } from './customer-message';
 import { StoredFile, initStoredFile } from './stored-file';
+import { Erasure, initErasure } from './erasure';
 import { OutgoingMail, initOutgoingMail } from './outgoing-mail';
 import { AuditCheck, initAuditCheck } from './audit-check';
 import { AuditEntry, initAuditEntry } from './audit-entry';
@@ -66,6 +67,7 @@ export {
 	FieldNote,
 	CustomerMessage,
 	StoredFile,
+	Erasure,
 	OutgoingMail,
 	AuditCheck,
 	AuditEntry
@@ -103,6 +105,7 @@ const initialisers = [
 	initFieldNote,
 	initCustomerMessage,
 	initStoredFile,
+	initErasure,
 	initOutgoingMail,
 	initAuditCheck,
 	initAuditEntry

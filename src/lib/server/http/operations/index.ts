@@ -6,8 +6,10 @@ import { assessmentOperations } from './assessments';
 import { bookOperations } from './books';
 import { dayPlanOperations } from './day-plans';
 import { fileOperations } from './files';
+import { erasureOperations } from './erasures';
 import { fittingOperations } from './fittings';
 import { jobOperations } from './jobs';
+import { letterOperations } from './letters';
 import { mountOperations } from './mounts';
 import { peopleOperations } from './people';
 import { placeOperations } from './places';
@@ -34,6 +36,8 @@ export const OPERATIONS: readonly Operation[] = [
 	dayPlanOperations,
 	sheetOperations,
 	questionOperations,
+	letterOperations,
+	erasureOperations,
 	bookOperations,
 	assessmentOperations,
 	recommendationOperations,

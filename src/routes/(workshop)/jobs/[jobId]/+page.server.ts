@@ -1,11 +1,12 @@
 import { fail, redirect } from '@sveltejs/kit';
 import { answerFormSchema, type Question } from '$lib/schemas/questions';
 import { AppError } from '$lib/server/errors';
-import { loadForm, saveForm } from '$lib/server/http/forms';
+import { loadForm, readPageForm, saveForm } from '$lib/server/http/forms';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { pageId } from '$lib/server/http/page-id';
 import { assessJob } from '$lib/server/services/assessments';
 import { getJob } from '$lib/server/services/jobs';
+import { listSentLetters, sendLetterAgain } from '$lib/server/services/sent-letters';
 import { answerQuestion, listQuestions } from '$lib/server/services/questions';
 import type { Actions, PageServerLoad } from './$types';
 
@@ -18,11 +19,11 @@ function chooseQuestion(questions: readonly Question[], asked: string | null): Q
 export const load: PageServerLoad = async (event) => {
 	const person = guard(event, 'jobs.read');
 	const jobId = pageId(event.params.jobId);
-	const [job, questions] = await orPageError(
-		Promise.all([getJob(person, jobId), listQuestions(person, jobId)])
+	const [job, questions, letters] = await orPageError(
+		Promise.all([getJob(person, jobId), listQuestions(person, jobId), listSentLetters(person, jobId)])
 	);
 	const toAnswer = chooseQuestion(questions, event.url.searchParams.get('question'));
-	return { job, questions, toAnswer, answerForm: await loadForm(answerFormSchema) };
+	return { job, questions, letters, toAnswer, answerForm: await loadForm(answerFormSchema) };
 };
 
 export const actions: Actions = {
@@ -37,6 +38,18 @@ export const actions: Actions = {
 		if (made instanceof AppError) return fail(made.status, { refusal: made.message });
 		const [only] = made;
 		redirect(303, only && made.length === 1 ? `/assessments/${only.id}` : `/jobs/${jobId}/compare`);
+	},
+	/** Another row of tries for a letter that was given up. */
+	again: async (event) => {
+		const person = guard(event, 'sheets.write');
+		const letterId = pageId(String((await readPageForm(event.request)).get('letterId') ?? ''));
+		try {
+			await sendLetterAgain(person, letterId);
+		} catch (error) {
+			if (error instanceof AppError) return fail(error.status, { letterRefusal: error.message });
+			throw error;
+		}
+		redirect(303, `/jobs/${pageId(event.params.jobId)}#letters`);
 	},
 	answer: (event) =>
 		saveForm(event, {

@@ -1,0 +1,60 @@
+import { formatTemperature } from '$lib/format/numbers';
+import { sayDayCount, sayOfTwenty } from '$lib/format/outlook-words';
+import { formatClockHour } from '$lib/format/time';
+import { hasBms } from '$lib/schemas/batteries';
+import type { FieldNoteData } from '$lib/schemas/field-notes';
+import type { FieldLesson } from '$lib/schemas/my';
+import type { Learning } from '$lib/thermal/field';
+import type { FieldNote } from '../db/models';
+
+/** Of which fitted battery a note tells. */
+export interface NotedMount {
+	jobId: number;
+	mountId: number;
+	chemistry: string;
+}
+
+function sayRead(data: FieldNoteData): string {
+	if (data.kind === 'cut-out')
+		return `The battery went dark at ${formatClockHour(data.wentDarkHour)} on a day of ${formatTemperature(data.hottestDayC)}, from heat.`;
+	if (data.kind !== 'peak-label') return '';
+	if (data.turnedC === null)
+		return `The heat label on the battery has not turned, on days of up to ${formatTemperature(data.hottestDayC)}.`;
+	return `The heat label on the battery has turned at ${formatTemperature(data.turnedC)}, on days of up to ${formatTemperature(data.hottestDayC)}.`;
+}
+
+function sayLesson({ fits, before, after }: Learning, event: string): string {
+	if (!fits)
+		return 'That does not fit what we had thought possible. The estimate stays as it was, and we look at the battery and the reading again.';
+	const [was, is] = [before.year.year.middle, after.year.year.middle];
+	const change =
+		is < was * 0.95 ? 'less often than' : is > was * 1.05 ? 'more often than' : 'about as often as';
+	return `With that we expect that it ${event} ${change} we had thought. It is still an estimate.`;
+}
+
+/** What a note taught about the mount, before and after, in words for the customer; nothing where it taught nothing. */
+export function presentLesson(note: FieldNote, { jobId, mountId, chemistry }: NotedMount): FieldLesson[] {
+	const learning = note.finding?.learning ?? null;
+	if (learning === null) return [];
+	const event = hasBms(chemistry) ? 'goes dark' : 'gets too hot';
+	const { before, after, fits } = learning;
+	const figures = [
+		{
+			label: `Days a year on which it ${event}`,
+			before: sayDayCount(before.year.year),
+			after: sayDayCount(after.year.year)
+		},
+		{
+			label: `Hot days like the planned one on which it ${event}`,
+			before: sayOfTwenty(before.cutOutShare),
+			after: sayOfTwenty(after.cutOutShare)
+		}
+	];
+	return [
+		{
+			...{ jobId, mountId, on: note.notedOn, read: sayRead(note.data) },
+			sentence: sayLesson(learning, event),
+			figures: fits ? figures : null
+		}
+	];
+}

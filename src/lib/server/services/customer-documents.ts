@@ -1,0 +1,13 @@
+import type { CustomerDocument } from '$lib/schemas/my';
+import { Sheet } from '../db/models';
+import { presentSheetDocument } from '../presenters/my-history';
+
+/**
+ * Everything that a customer can open about these jobs of theirs, the newest first. This is the one place to add to:
+ * another kind of document is one more list here.
+ */
+export async function listCustomerDocuments(jobIds: readonly number[]): Promise<CustomerDocument[]> {
+	const sheets = await Sheet.findAll({ where: { jobId: [...jobIds], withdrawnAt: null } });
+	const documents = [...sheets.map(presentSheetDocument)];
+	return documents.sort((a, b) => (a.at < b.at ? 1 : -1));
+}

@@ -1,0 +1,40 @@
+import { strFromU8, unzipSync } from 'fflate';
+import { describe, expect, it } from 'vitest';
+import { makeKnownCustomer } from '../../../../tests/support/known-customer';
+import { useTestDatabase } from '../../../../tests/support/services';
+import { AuditEntry } from '../db/models';
+import { getHeldData, packHeldData } from './held-data';
+
+useTestDatabase();
+
+describe('what is held about a customer', () => {
+	it('goes out as one parcel: a first page to read, the data, and every page as text', async () => {
+		const { known, customer, sheet } = await makeKnownCustomer();
+		const parcel = unzipSync(await packHeldData(customer));
+		expect(Object.keys(parcel).sort()).toEqual([
+			...['data.json', `documents/page-${sheet.id}.txt`, 'read-me-first.txt']
+		]);
+		const read = (path: string): string => strFromU8(parcel[path]!);
+		for (const words of [known.name, known.email, known.phone, known.registration]) {
+			expect(read('read-me-first.txt')).toContain(words);
+			expect(read('data.json')).toContain(words);
+		}
+		expect(read(`documents/page-${sheet.id}.txt`)).toContain(`Prepared for ${known.name}`);
+		const data = JSON.parse(read('data.json')) as Awaited<ReturnType<typeof getHeldData>>;
+		expect(data.jobs).toHaveLength(1);
+		expect(data.jobs[0]!.questions).toMatchObject([{ words: known.question, name: known.name }]);
+		expect(data.jobs[0]!.pages).toMatchObject([{ sentTo: known.email, acknowledged: { by: known.name } }]);
+		expect(data.letters.map(({ about }) => about)).toContain('The customer’s page');
+	}, 60_000);
+
+	it('holds no secret and nothing of anybody else, and that it was taken is on record', async () => {
+		const { customer, crew, token } = await makeKnownCustomer();
+		const other = await makeKnownCustomer();
+		const text = JSON.stringify(await getHeldData(customer));
+		for (const secret of [token, 'tokenHash', 'passwordHash', other.known.surname])
+			expect(text).not.toContain(secret);
+		const where = { action: 'customer.data-taken', subjectId: customer.customerId! };
+		expect(await AuditEntry.findAll({ where })).toMatchObject([{ personId: customer.id }]);
+		await expect(getHeldData(crew.manager)).rejects.toMatchObject({ code: 'not_allowed' });
+	}, 60_000);
+});

@@ -1,0 +1,43 @@
+import type { SentLetter } from '$lib/schemas/letters';
+import type { SignedInPerson } from '$lib/schemas/people';
+import { Job, OutgoingMail, Sheet } from '../db/models';
+import { inTransaction } from '../db/transaction';
+import { AppError, notFound } from '../errors';
+import { tryMailAgain } from '../mail/outbox';
+import { allow } from '../policies';
+import { presentSentLetter } from '../presenters/sent-letters';
+import { recordBy } from './audit';
+
+/** Every letter of a job, the newest first: to whom, and what became of it. */
+export async function listSentLetters(person: SignedInPerson, jobId: number): Promise<SentLetter[]> {
+	allow(person, 'jobs.read');
+	const where = { id: jobId, workshopId: person.workshopId };
+	if (!(await Job.findOne({ where, attributes: ['id'] }))) throw notFound('job');
+	const letters = await OutgoingMail.findAll({
+		where: { jobId, workshopId: person.workshopId },
+		order: [['id', 'DESC']]
+	});
+	return letters.map(presentSentLetter);
+}
+
+async function refuseWithdrawn({ sheetId }: OutgoingMail): Promise<void> {
+	const sheet = (sheetId ?? null) === null ? null : await Sheet.findByPk(sheetId!);
+	if (sheet?.withdrawnAt) throw new AppError('conflict', 'This sheet was withdrawn: send a new one instead.');
+}
+
+/** Gives a letter that was given up another row of tries. */
+export async function sendLetterAgain(person: SignedInPerson, letterId: number): Promise<SentLetter> {
+	allow(person, 'sheets.write');
+	return inTransaction(async (transaction) => {
+		const where = { id: letterId, workshopId: person.workshopId };
+		const letter = await OutgoingMail.findOne({ where, transaction, lock: transaction.LOCK.UPDATE });
+		if (!letter?.jobId) throw notFound('letter');
+		await refuseWithdrawn(letter);
+		if (!(await tryMailAgain(letter.id, transaction)))
+			throw new AppError('conflict', 'This letter is sent, is being tried already, or was dropped.');
+		const subject = { type: 'job', id: letter.jobId };
+		await recordBy(person, 'job.letter-tried-again', subject, transaction, { letterId });
+		await letter.reload({ transaction });
+		return presentSentLetter(letter);
+	});
+}

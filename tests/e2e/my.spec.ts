@@ -1,0 +1,82 @@
+import { expect, test } from '@playwright/test';
+import { expectNoViolations, ONCE, signInAs } from './support';
+
+test('a customer finds vehicle, documents and history, all within the width of a phone', async ({ page }) => {
+	await signInAs(page, 'customer');
+	await page.goto('/my');
+	await expect(page.getByRole('heading', { name: 'Documents' }).first()).toBeVisible();
+	await expect(page.getByRole('heading', { name: 'What happened' }).first()).toBeVisible();
+	await expect(page.getByText('Page sent').first()).toBeVisible();
+	await expectNoViolations(page);
+	await page.setViewportSize({ width: 360, height: 800 });
+	const { scrollWidth, clientWidth } = await page.evaluate(() => {
+		const { scrollWidth, clientWidth } = document.documentElement;
+		return { scrollWidth, clientWidth };
+	});
+	expect(scrollWidth).toBeLessThanOrEqual(clientWidth);
+	const paper = page.getByRole('link', { name: /^Your battery on a hot day/ }).first();
+	await paper.focus();
+	await page.keyboard.press('Enter');
+	await expect(page.getByText(/^Prepared for/)).toBeVisible();
+	await expect(page.getByRole('img', { name: /Each dot is one of 50 days like this/ })).toBeVisible();
+	await expectNoViolations(page);
+});
+
+test(
+	'reminders are stopped by a button or in one press of a mail program, and wanted again',
+	ONCE,
+	async ({ page, request }) => {
+		await signInAs(page, 'customer');
+		await page.goto('/my');
+		await page.getByRole('link', { name: 'Reminders by e-mail' }).click();
+		await expect(page.getByRole('button', { name: 'Stop these reminders' })).toBeVisible();
+		await expectNoViolations(page);
+		// What a mail program posts (RFC 8058): no cookie, one word, and no answer that leads elsewhere.
+		const answer = await request.post(page.url(), {
+			form: { 'List-Unsubscribe': 'One-Click' },
+			maxRedirects: 0
+		});
+		expect(answer.status()).toBe(200);
+		await page.reload();
+		await expect(page.getByText('No reminders go out to you')).toBeVisible();
+		await expectNoViolations(page);
+		await page.getByRole('button', { name: 'Send them again' }).click();
+		await expect(page.getByRole('button', { name: 'Stop these reminders' })).toBeVisible();
+	}
+);
+
+test(
+	'a customer takes what is held, asks for deletion, and the manager says why not',
+	ONCE,
+	async ({ page, browser, baseURL }) => {
+		await signInAs(page, 'customer');
+		await page.goto('/my/data', { waitUntil: 'networkidle' });
+		await expectNoViolations(page);
+		const [download] = await Promise.all([
+			page.waitForEvent('download'),
+			page.getByRole('link', { name: 'Download it' }).click()
+		]);
+		expect(download.suggestedFilename()).toBe('what-is-held-about-you.zip');
+		await page.getByRole('button', { name: 'Ask for deletion' }).click();
+		await expect(page.getByText('Tick the box to say that you want this.').first()).toBeVisible();
+		await page.getByLabel('Yes, delete what is held about me').check();
+		await page.getByRole('button', { name: 'Ask for deletion' }).click();
+		await expect(page.getByText(/^You asked for it on/)).toBeVisible();
+
+		const context = await browser.newContext({ baseURL: baseURL! });
+		const manager = await context.newPage();
+		await signInAs(manager, 'manager');
+		await manager.goto('/erasures', { waitUntil: 'networkidle' });
+		await expectNoViolations(manager);
+		await manager.getByRole('radio', { name: 'Refuse it' }).check();
+		await manager.getByRole('button', { name: 'Decide, and tell the customer' }).click();
+		await expect(manager.getByText('Reason is missing').first()).toBeVisible();
+		await manager.getByLabel('Reason', { exact: true }).fill('The warranty runs until June.');
+		await manager.getByRole('button', { name: 'Decide, and tell the customer' }).click();
+		await expect(manager.getByText('“The warranty runs until June.”')).toBeVisible();
+		await context.close();
+		await page.reload();
+		await expect(page.getByText('The warranty runs until June.')).toBeVisible();
+		await expectNoViolations(page);
+	}
+);
