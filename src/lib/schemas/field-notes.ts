@@ -76,8 +76,25 @@ export const fieldNoteSchema = z.object({
 });
 export type FieldNoteView = z.infer<typeof fieldNoteSchema>;
 
+/** The least capacity that the customer can do with, and from how much on it could be asked for. */
+const namedAh = z.coerce
+	.number({ error: 'Capacity must be a number of Ah, such as 70.' })
+	.min(0.5, { error: 'Capacity must be at least 0.5 Ah.' })
+	.max(2000, { error: 'Capacity must be at most 2000 Ah.' });
+export const fieldNotesQuerySchema = z.object({
+	namedAh: namedAh.optional().meta({ description: 'When does the battery come down to so many Ah?' })
+});
+
 export const fieldNotesSchema = z.object({
 	rows: z.array(fieldNoteSchema),
-	trend: z.custom<CapacityTrend>().nullable().meta({ type: 'object', description: 'Of the capacity tests' })
+	trend: z.custom<CapacityTrend>().nullable().meta({ type: 'object', description: 'Of the capacity tests' }),
+	ratedAh: z.number(),
+	namedAh: z.number().nullable(),
+	expected: z
+		.array(z.object({ years: z.number(), low: z.number(), middle: z.number(), high: z.number() }))
+		.nullable()
+		.meta({
+			description: 'Share of the first capacity that the estimate expects; null before it is worked out'
+		})
 });
 export type FieldNotesView = z.infer<typeof fieldNotesSchema>;

@@ -1,3 +1,5 @@
+import type { LifeCurve } from './outlook-reports';
+
 /** A note of the field in words. */
 export interface NoteReport {
 	id: number;
@@ -21,6 +23,12 @@ export interface NoteReport {
 /** Where a capacity goes, in words. */
 export interface TrendReport {
 	sentence: string;
-	rows: { law: string; isHonest: boolean; toEighty: string; fiveYears: string }[];
+	rows: { law: string; isHonest: boolean; toEighty: string; toNamed: string; fiveYears: string }[];
+	/** "70 Ah"; empty where nobody asked. */
+	named: string;
+	/** The estimate's own band first, where there is one; then what the tests lead to. */
+	curves: LifeCurve[];
+	tests: { years: number; share: number }[];
+	picture: string;
 	method: string;
 }

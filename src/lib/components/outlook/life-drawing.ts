@@ -6,6 +6,8 @@ export interface LifeDrawing {
 	/** Of the first curve: where what is left may lie. */
 	band: string;
 	lines: { label: string; d: string; isFirst: boolean; endY: number }[];
+	/** Tests within the years that are drawn. */
+	dots: { x: number; y: number }[];
 	xTicks: { years: number; x: number }[];
 	yTicks: { share: number; y: number; isWorn: boolean }[];
 }
@@ -35,11 +37,15 @@ function spread(ys: number[], foot: number): number[] {
 }
 
 /** What is left of the capacity year by year: a band and its middle for the first, a line for each other. */
-export function drawLife(curves: readonly LifeCurve[]): LifeDrawing {
+export function drawLife(
+	curves: readonly LifeCurve[],
+	tests: readonly { years: number; share: number }[] = []
+): LifeDrawing {
 	const { width, height, left, right, top, bottom } = LIFE_BOX;
 	const foot = height - bottom;
 	const longest = YEAR_TICKS.at(-1)!;
 	const lowest = Math.min(
+		...tests.map(({ share }) => share),
 		...curves.flatMap(({ years }, at) => years.map(({ low, middle }) => (at === 0 ? low : middle))),
 		LOWEST_TOP_SHARE
 	);
@@ -64,6 +70,9 @@ export function drawLife(curves: readonly LifeCurve[]): LifeDrawing {
 			isFirst: at === 0,
 			endY: ends[at]!
 		})),
+		dots: tests
+			.filter(({ years }) => years <= longest)
+			.map(({ years, share }) => ({ x: x(years), y: y(Math.min(Math.max(share, least), 1.04)) })),
 		xTicks: YEAR_TICKS.map((years) => ({ years, x: x(years) })),
 		yTicks: Array.from({ length: Math.round((1 - least) / STEP) + 1 }, (_, at) => {
 			const share = least + at * STEP;

@@ -31,9 +31,10 @@ function tellNotes({ notes }: MountRecord): PaperBlock {
 	};
 }
 
-function tellTrend({ notes: { trend } }: MountRecord): PaperBlock[] {
+function tellTrend({ notes }: MountRecord): PaperBlock[] {
+	const trend = presentTrend(notes);
 	if (!trend) return [];
-	const { sentence, method } = presentTrend(trend);
+	const { sentence, method } = trend;
 	return [{ kind: 'words', title: 'Where its capacity goes', sentences: [sentence, method] }];
 }
 

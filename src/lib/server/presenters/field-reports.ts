@@ -10,9 +10,14 @@ import {
 } from '$lib/format/numbers';
 import { joinWords, sayDayCount, sayOfTwenty } from '$lib/format/outlook-words';
 import { formatClockHour, formatHours } from '$lib/format/time';
-import { FIELD_NOTE_LABELS, type FieldNoteData, type FieldNoteView } from '$lib/schemas/field-notes';
+import {
+	FIELD_NOTE_LABELS,
+	type FieldNoteData,
+	type FieldNotesView,
+	type FieldNoteView
+} from '$lib/schemas/field-notes';
 import type { NoteReport, TrendReport } from '$lib/schemas/field-reports';
-import type { CapacityTrend, HeatCause, HourRange, Learning, TrendLaw, YearsRange } from '$lib/thermal/field';
+import type { HeatCause, HourRange, Learning, TrendLaw, YearsRange } from '$lib/thermal/field';
 
 const PLACES = { case: 'on the case', cells: 'on the cells', board: 'on the BMS board' } as const;
 
@@ -126,23 +131,68 @@ const years = (value: number | null): string => (value === null ? 'more than 30'
 const sayYears = ({ low, middle, high }: YearsRange): string =>
 	middle === null ? 'more than 30 years' : `${years(middle)} years (${years(low)} to ${years(high)})`;
 
-/** Capacity tests over time, and where they lead. */
-export function presentTrend({ tests, projections, honest, toldByTests }: CapacityTrend): TrendReport {
+const ESTIMATE = 'estimate';
+const BY_TESTS = 'tests';
+
+type Expected = NonNullable<FieldNotesView['expected']>;
+
+/** The band of a moment between two of its years, by a straight line; a new battery is whole. */
+function bandAt(expected: Expected, years: number): { low: number; high: number } | null {
+	const points = [{ years: 0, low: 1, middle: 1, high: 1 }, ...expected];
+	const after = points.findIndex((point) => point.years >= years);
+	if (after < 0) return null;
+	const [b, a] = [points[after]!, points[Math.max(after - 1, 0)]!];
+	const part = b.years === a.years ? 0 : (years - a.years) / (b.years - a.years);
+	return { low: a.low + part * (b.low - a.low), high: a.high + part * (b.high - a.high) };
+}
+
+/** On which side of the estimate the last test lies; a test is right to 2 %, which counts as within. */
+function saySide(
+	tests: readonly { years: number; capacityAh: number }[],
+	ratedAh: number,
+	expected: Expected
+): string {
+	const last = tests.at(-1)!;
+	const band = bandAt(expected, last.years);
+	if (!band) return '';
+	const share = last.capacityAh / ratedAh;
+	if (share < band.low - TEST_SHARE)
+		return 'The last test lies below the estimate: it ages faster than expected.';
+	if (share > band.high + TEST_SHARE)
+		return 'The last test lies above the estimate: it ages more slowly than expected.';
+	return 'The last test agrees with the estimate.';
+}
+const TEST_SHARE = 0.02;
+
+/** Capacity tests over time, and where they lead; null without a test. */
+export function presentTrend({ trend, ratedAh, namedAh, expected }: FieldNotesView): TrendReport | null {
+	if (!trend) return null;
+	const { tests, projections, honest, toldByTests } = trend;
 	const by = projections.find(({ law }) => law === honest)!;
 	const why = toldByTests
 		? 'The tests themselves tell which.'
 		: 'The tests do not tell the two apart yet: the more careful one is gone by.';
 	return {
 		sentence: `By ${tests.length === 1 ? 'one test' : `${tests.length} tests`} it is down to 80 % of its rated capacity after ${sayYears(by.toEightyPercent)}, falling ${LAWS[honest]}. ${why}`,
-		rows: projections.map(({ law, toEightyPercent, points }) => {
+		rows: projections.map(({ law, toEightyPercent, toNamed, points }) => {
 			const { low, middle, high } = points[5]!;
 			return {
 				law: LAWS[law],
 				isHonest: law === honest,
 				toEighty: sayYears(toEightyPercent),
+				toNamed: toNamed ? sayYears(toNamed) : '',
 				fiveYears: `${formatPercent(middle)} (${formatPercent(low)} to ${formatPercent(high)})`
 			};
 		}),
+		named: namedAh === null ? '' : formatAmpHours(namedAh),
+		curves: [
+			...(expected && expected.length > 0 ? [{ label: ESTIMATE, years: expected }] : []),
+			{ label: BY_TESTS, years: by.points.filter(({ years }) => years > 0) }
+		],
+		tests: tests.map(({ years, capacityAh }) => ({ years, share: capacityAh / ratedAh })),
+		picture: expected
+			? `Dots: tests. Band and thick line: what the estimate expected. Dashed: where the tests lead. ${saySide(tests, ratedAh, expected)}`
+			: 'Dots: tests. Band and line: where they lead. What the estimate expects is not worked out yet.',
 		method:
 			'At 25 °C. Nine chances in ten lie in the brackets; a test is taken to be right to 2 %, a new battery to hold its rated capacity to 5 % (judgement).'
 	};

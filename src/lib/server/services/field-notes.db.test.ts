@@ -4,6 +4,7 @@ import { makeCrew, useTestDatabase } from '../../../../tests/support/services';
 import { connection } from '../db/connection';
 import { presentNote, presentTrend } from '../presenters/field-reports';
 import { addFieldNote, listFieldNotes } from './field-notes';
+import { getOutlook } from './outlooks';
 
 useTestDatabase();
 
@@ -76,13 +77,32 @@ describe('notes from the field', () => {
 	it('of capacity tests draw where the capacity goes', async () => {
 		const { installer, mountId } = await makeMount();
 		await addFieldNote(installer, mountId, test('2026-02-01', 99));
-		const { trend, rows } = await addFieldNote(installer, mountId, test('2026-11-30', 94));
+		const { trend, rows, expected } = await addFieldNote(installer, mountId, test('2026-11-30', 94));
 		expect(rows.map(({ notedOn }) => notedOn)).toEqual(['2026-11-30', '2026-02-01']);
 		expect(trend!.tests.map(({ capacityAh }) => capacityAh)).toEqual([99, 94]);
-		expect(presentTrend(trend!).sentence).toMatch(
-			/^By 2 tests it is down to 80 % of its rated capacity after/
-		);
+		expect(expected).toBeNull();
+		const told = presentTrend(await listFieldNotes(installer, mountId))!;
+		expect(told.sentence).toMatch(/^By 2 tests it is down to 80 % of its rated capacity after/);
+		expect(told.tests.map(({ share }) => share)).toEqual([0.99, 0.94]);
+		expect(told.named).toBe('');
 	});
+
+	it(
+		'of capacity tests are held against the ageing that was expected, and say when a named capacity is reached',
+		{ timeout: LONG_MS },
+		async () => {
+			const { installer, mountId, assessment } = await makeMount();
+			await getOutlook(installer, assessment.id);
+			await addFieldNote(installer, mountId, test('2026-11-30', 40));
+			const notes = await listFieldNotes(installer, mountId, 35);
+			const told = presentTrend(notes)!;
+			expect(told.named).toMatch(/^35\sAh$/);
+			expect(told.rows.every(({ toNamed }) => /year/.test(toNamed))).toBe(true);
+			expect(told.curves.map(({ label }) => label)).toEqual(['estimate', 'tests']);
+			expect(told.picture).toContain('it ages faster than expected');
+			expect(notes.expected![0]!.low).toBeLessThan(notes.expected![0]!.high);
+		}
+	);
 
 	it('are kept for good', async () => {
 		const { installer, mountId } = await makeMount();

@@ -21,6 +21,7 @@ import { presentFieldNote } from '../presenters/field-notes';
 import { recordBy } from './audit';
 import { daysBetween, today } from './days';
 import { findStandingMount } from './mounts';
+import { listKeptOutlooks } from './outlooks';
 import { afterOthers, workInSlices } from './slices';
 import { touringOf } from './touring-year';
 
@@ -123,7 +124,11 @@ async function notesOf({ id: installationId }: Installation): Promise<FieldNote[
 	});
 }
 
-function trendOf({ installation, assessment }: Fitted, notes: readonly FieldNote[]): CapacityTrend | null {
+function trendOf(
+	{ installation, assessment }: Fitted,
+	notes: readonly FieldNote[],
+	namedAh: number | null
+): CapacityTrend | null {
 	const { battery } = assessment.inputs;
 	const tests = notes.flatMap(({ data }) => {
 		if (data.kind !== 'capacity-test') return [];
@@ -133,23 +138,39 @@ function trendOf({ installation, assessment }: Fitted, notes: readonly FieldNote
 	});
 	if (tests.length === 0) return null;
 	const isLeadAcid = heatLimitsOf(battery) !== null;
-	return projectCapacity(tests, battery.capacityAh, { isLeadAcid, namedAh: null });
+	return projectCapacity(tests, battery.capacityAh, { isLeadAcid, namedAh });
 }
 
-async function show(fitted: Fitted): Promise<FieldNotesView> {
+/** What the estimate expected of the capacity, where it has been worked out. */
+async function expectedOf(person: SignedInPerson, { assessment: { id } }: Fitted) {
+	const kept = await listKeptOutlooks(person, [id]);
+	return kept.get(id)?.life?.years ?? null;
+}
+
+async function show(
+	person: SignedInPerson,
+	fitted: Fitted,
+	namedAh: number | null = null
+): Promise<FieldNotesView> {
 	const notes = await notesOf(fitted.installation);
 	const people = await Person.findAll({ where: { id: notes.map(({ createdBy }) => createdBy) } });
 	const nameOf = (id: number): string => people.find((person) => person.id === id)?.name ?? '';
 	return {
 		rows: [...notes].reverse().map((note) => presentFieldNote(note, nameOf(note.createdBy))),
-		trend: trendOf(fitted, notes)
+		trend: trendOf(fitted, notes, namedAh),
+		...{ namedAh, ratedAh: fitted.assessment.inputs.battery.capacityAh },
+		expected: await expectedOf(person, fitted)
 	};
 }
 
 /** What was noted of a fitted battery, the newest first, and where its capacity goes. */
-export async function listFieldNotes(person: SignedInPerson, mountId: number): Promise<FieldNotesView> {
+export async function listFieldNotes(
+	person: SignedInPerson,
+	mountId: number,
+	namedAh: number | null = null
+): Promise<FieldNotesView> {
 	allow(person, 'jobs.read');
-	return show(await findFitted(person, mountId));
+	return show(person, await findFitted(person, mountId), namedAh);
 }
 
 /** Keeps a note for good, with what the model makes of it. */
@@ -172,5 +193,5 @@ export async function addFieldNote(
 		const subject = { type: 'mount', id: mountId };
 		await recordBy(person, 'mount.field-note', subject, transaction, { noteId: note.id, ...data });
 	});
-	return show(fitted);
+	return show(person, fitted);
 }

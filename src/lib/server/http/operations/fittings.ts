@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { fieldNoteInputSchema, fieldNotesSchema } from '$lib/schemas/field-notes';
+import { fieldNoteInputSchema, fieldNotesQuerySchema, fieldNotesSchema } from '$lib/schemas/field-notes';
 import { idSchema } from '$lib/schemas/fields';
 import { fittingChangeSchema, fittingSchema, followUpChangeSchema } from '$lib/schemas/fitting';
 import { defineOperation } from '../operation';
@@ -46,6 +46,7 @@ export const fittingOperations = {
 		action: 'jobs.read',
 		summary: 'What was noted of a fitted battery, the newest first, and where its capacity goes.',
 		params,
+		query: fieldNotesQuerySchema,
 		answer: fieldNotesSchema,
 		status: 200
 	}),

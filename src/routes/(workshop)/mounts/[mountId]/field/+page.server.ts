@@ -1,3 +1,4 @@
+import { fieldNotesQuerySchema } from '$lib/schemas/field-notes';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { presentTrend, presentNote } from '$lib/server/presenters/field-reports';
 import { listFieldNotes } from '$lib/server/services/field-notes';
@@ -5,16 +6,28 @@ import { getJob } from '$lib/server/services/jobs';
 import { openMount } from '../open-mount';
 import type { PageServerLoad } from './$types';
 
+/** The capacity that was asked for, as people write it; without one, or with a wrong one, nothing is worked out. */
+function readNamed(url: URL): { namedAh: number | null; problem: string } {
+	const text = (url.searchParams.get('capacity') ?? '').trim();
+	if (text === '') return { namedAh: null, problem: '' };
+	const read = fieldNotesQuerySchema.safeParse({ namedAh: text.replace(',', '.').replace(/\s*Ah$/i, '') });
+	return read.success
+		? { namedAh: read.data.namedAh ?? null, problem: '' }
+		: { namedAh: null, problem: read.error.issues[0]!.message };
+}
+
 export const load: PageServerLoad = async (event) => {
 	const person = guard(event, 'jobs.read');
 	const mount = await openMount(person, event.params);
-	const { rows, trend } = await orPageError(listFieldNotes(person, mount.id));
+	const { namedAh, problem } = readNamed(event.url);
+	const notes = await orPageError(listFieldNotes(person, mount.id, namedAh));
 	const job = await orPageError(getJob(person, mount.jobId));
 	return {
 		mount,
 		job: { id: job.id, number: job.number },
-		notes: rows.map(presentNote),
-		trend: trend && presentTrend(trend),
+		notes: notes.rows.map(presentNote),
+		trend: presentTrend(notes),
+		asked: { text: event.url.searchParams.get('capacity') ?? '', problem },
 		isAdded: event.url.searchParams.has('added')
 	};
 };
