@@ -57,6 +57,7 @@ const DAY = { name: 'None', startHour: 7, startSoc: 0.5, chargerMaxA: 40, legs: 
 const CLIMATE = { placeId: 1, hotDayMaxC: 40, dailyRangeK: 15, sunPeakWPerM2: 1000, version: 0 };
 const SURVEY = { survey: { positionKind: 'cabin' }, complete: false, version: 0 };
 const FITTING = { fittedOn: '2026-01-05', fittedBy: 'Nobody', differences: [], version: null };
+const OWN_ZONE = { name: 'None', position: 1, rule: 'latitude', fromValue: 0, toValue: 1, version: 0 };
 const FIELD_NOTE = { kind: 'inspection', notedOn: '2026-01-06', words: 'Nothing' };
 
 const page = (route: string, audience: Audience, ...methods: string[]): RouteRule => ({
@@ -139,6 +140,14 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 	page('/audit/audit.csv', 'manager'),
 	page('/shop/cautions', 'manager', 'default'),
 	page('/shop/retention', 'manager', 'default'),
+	page('/review', 'manager'),
+	page('/review/installations', 'manager'),
+	page('/review/installations.csv', 'manager'),
+	page('/review/map', 'manager'),
+	page('/review/months', 'manager'),
+	page('/review/zones', 'manager'),
+	page('/review/zones/new', 'manager', 'default'),
+	owned('/review/zones/[zoneId]', 'manager', 'save', 'remove'),
 	page('/mailbox', 'workshop'),
 	owned('/mailbox/[messageId]', 'workshop'),
 
@@ -224,7 +233,13 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 	api('/shop/cautions', 'manager', 'GET', 'PUT'),
 	api('/shop/retention', 'manager', 'GET', 'PUT'),
 	api('/audit', 'manager', 'GET'),
-	api('/audit/check', 'manager', 'POST')
+	api('/audit/check', 'manager', 'POST'),
+	api('/review/zones', 'manager', 'GET'),
+	api('/review/installations', 'manager', 'GET'),
+	api('/review/trends', 'manager', 'GET'),
+	api('/review/map', 'manager', 'GET'),
+	api('/own-zones', 'manager', 'GET', 'POST'),
+	ownedApi('/own-zones/[zoneId]', 'manager', { PUT: OWN_ZONE, DELETE: null })
 ];
 
 const AUDIENCES: Record<Exclude<Audience, 'anyone'>, readonly Visitor[]> = {

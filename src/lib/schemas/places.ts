@@ -55,6 +55,13 @@ export const MONTH_ROWS = {
 	monthsSource: 'Where the months come from'
 } as const;
 
+/** What a climate class is computed from, as people call it. */
+export const CLASS_ROWS = {
+	monthlyMeanC: 'Mean of the whole month',
+	monthlyRainMm: 'Rain of the month',
+	classSource: 'Where means and rain come from'
+} as const;
+
 const named = (month: string | null, label: string): string =>
 	month === null ? label : `${month}, ${label.toLowerCase()}`;
 /** One month, or any month when no name is given. */
@@ -62,29 +69,41 @@ export const monthlyMaxField = (month: string | null = null) =>
 	measure(named(month, MONTH_ROWS.monthlyMaxC), '°C', -60, 60);
 export const monthlySpreadField = (month: string | null = null) =>
 	measure(named(month, MONTH_ROWS.monthlySpreadK), 'K', 0.1, 20);
+/** One month, or any month when no name is given. */
+export const monthlyMeanField = (month: string | null = null) =>
+	measure(named(month, CLASS_ROWS.monthlyMeanC), '°C', -60, 50);
+export const monthlyRainField = (month: string | null = null) =>
+	measure(named(month, CLASS_ROWS.monthlyRainMm), 'mm', 0, 3_000);
 
 const monthsFields = {
 	monthlyMaxC: monthList(monthlyMaxField(), MONTH_ROWS.monthlyMaxC),
 	monthlySpreadK: monthList(monthlySpreadField(), MONTH_ROWS.monthlySpreadK),
 	monthsSource: words(MONTH_ROWS.monthsSource, 300).nullable().default(null)
 };
-type MonthsField = keyof typeof monthsFields;
-const MONTHS_FIELDS = Object.keys(monthsFields) as MonthsField[];
+const classFields = {
+	monthlyMeanC: monthList(monthlyMeanField(), CLASS_ROWS.monthlyMeanC),
+	monthlyRainMm: monthList(monthlyRainField(), CLASS_ROWS.monthlyRainMm),
+	classSource: words(CLASS_ROWS.classSource, 300).nullable().default(null)
+};
+type Issues = { addIssue: (issue: { code: 'custom'; path: string[]; message: string }) => void };
 
-/** The months come with both rows and a source, or not at all. */
-function refuseHalfMonths(
-	place: Record<MonthsField, unknown>,
-	{ addIssue }: { addIssue: (issue: { code: 'custom'; path: string[]; message: string }) => void }
-): void {
-	const missing = MONTHS_FIELDS.filter((field) => place[field] === null);
-	if (missing.length === MONTHS_FIELDS.length) return;
-	for (const field of missing) {
-		const message = `${MONTH_ROWS[field]} is missing: the months need both rows and their source, or none of them.`;
-		addIssue({ code: 'custom', path: [field], message });
-	}
-}
+/** Rows that belong together come with both and a source, or not at all. */
+const refuseHalf =
+	<Field extends string>(what: string, labels: Record<Field, string>) =>
+	(place: Record<Field, unknown>, { addIssue }: Issues): void => {
+		const fields = Object.keys(labels) as Field[];
+		const missing = fields.filter((field) => place[field] === null);
+		if (missing.length === fields.length) return;
+		for (const field of missing) {
+			const message = `${labels[field]} is missing: ${what} need both rows and their source, or none of them.`;
+			addIssue({ code: 'custom', path: [field], message });
+		}
+	};
 
-export const placeInputSchema = placeSiteSchema.extend(monthsFields).superRefine(refuseHalfMonths);
+export const placeInputSchema = placeSiteSchema
+	.extend({ ...monthsFields, ...classFields })
+	.superRefine(refuseHalf('the months', MONTH_ROWS))
+	.superRefine(refuseHalf('means and rain', CLASS_ROWS));
 export type PlaceInput = z.infer<typeof placeInputSchema>;
 
 /** What is kept of a weather file: not the file. */
@@ -97,6 +116,10 @@ export type WeatherFileMark = z.infer<typeof weatherFileSchema>;
 
 export const placeSchema = editedSchema.extend({
 	...placeInputSchema.shape,
+	computedZone: z
+		.string()
+		.nullable()
+		.meta({ description: 'Climate class computed from means and rain; null where they are not known' }),
 	weatherFile: weatherFileSchema
 		.nullable()
 		.meta({ description: 'The weather file that the months were taken from' }),

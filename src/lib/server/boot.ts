@@ -8,6 +8,7 @@ import { startOutbox, stopOutbox } from './mail/outbox';
 import { clearExpired, startClearing, stopClearing } from './services/clear-expired';
 import { seedDemo } from './services/demo/seed-demo';
 import { startReminders, stopReminders } from './services/reminders';
+import { completeReviews } from './services/review/keep-review';
 
 /** Kept on globalThis so that a development reload, which loads this module again, does not forget it. */
 const state = globalThis as { soaklineReady?: boolean };
@@ -36,6 +37,7 @@ export async function boot(): Promise<void> {
 		});
 		if (settings.SOAKLINE_DEMO === '1') await timed('demo data', seedDemo);
 		await timed('clearing', async () => `${await clearExpired()} rows and files past their time`);
+		await timed('review', async () => `${await completeReviews()} made anew`);
 		startOutbox();
 		startClearing();
 		startReminders();

@@ -34,6 +34,8 @@ export const RULES = {
 	'erasures.ask': ['customer'],
 	'erasures.decide': ['manager'],
 	'books.read': BENCH,
+	'review.read': MANAGER,
+	'own-zones.write': MANAGER,
 	'mailbox.read': WORKSHOP,
 	'second-factor.own': WORKSHOP,
 	'people.read': MANAGER,

@@ -42,6 +42,8 @@ const EXPECTED: Record<Action, string> = {
 	'erasures.ask': 'c',
 	'erasures.decide': 'm',
 	'books.read': 'em',
+	'review.read': 'm',
+	'own-zones.write': 'm',
 	'mailbox.read': 'iem',
 	'second-factor.own': 'iem',
 	'people.read': 'm',

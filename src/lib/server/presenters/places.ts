@@ -11,6 +11,10 @@ export function presentPlace(place: Place): PlaceView {
 		monthlyMaxC: place.monthlyMaxC ?? null,
 		monthlySpreadK: place.monthlySpreadK ?? null,
 		monthsSource: place.monthsSource ?? null,
+		monthlyMeanC: place.monthlyMeanC ?? null,
+		monthlyRainMm: place.monthlyRainMm ?? null,
+		classSource: place.classSource ?? null,
+		computedZone: place.computedZone ?? null,
 		weatherFile: place.weatherFile ?? null,
 		canPutBack: Boolean(place.beforeWeather)
 	};

@@ -22,6 +22,7 @@ import { recordBy } from './audit';
 import { daysBetween, today } from './days';
 import { findStandingMount } from './mounts';
 import { listKeptOutlooks } from './outlooks';
+import { refreshReview } from './review/keep-review';
 import { afterOthers, workInSlices } from './slices';
 import { touringOf } from './touring-year';
 
@@ -190,6 +191,7 @@ export async function addFieldNote(
 		const row = { workshopId: person.workshopId, installationId: installation.id, createdBy: person.id };
 		const told = { kind, notedOn, data, finding, engineVersion: ENGINE_VERSION };
 		const note = await FieldNote.create({ ...row, ...told }, { transaction });
+		await refreshReview('installation', installation.id, transaction);
 		const subject = { type: 'mount', id: mountId };
 		await recordBy(person, 'mount.field-note', subject, transaction, { noteId: note.id, ...data });
 	});

@@ -15,6 +15,7 @@ import { recordBy } from './audit';
 import { addMonths, today } from './days';
 import { findStandingMount } from './mounts';
 import { saveVersioned } from './records';
+import { refreshReview } from './review/keep-review';
 
 const NOTHING_AGREED = 'Nothing is agreed for this mount yet: recommend it first.';
 
@@ -99,6 +100,7 @@ export async function saveFitting(
 			);
 		}
 		await setFollowUps(installation, transaction);
+		await refreshReview('installation', installation.id, transaction);
 		await recordBy(person, 'mount.fitted', { type: 'mount', id: mountId }, transaction, { ...fitted });
 		return show(mount);
 	});
@@ -120,6 +122,7 @@ export async function finishFollowUp(
 		if (isDone === ((followUp.doneOn ?? null) !== null)) return show(mount);
 		const done = isDone ? { doneOn: today(), doneBy: person.name } : { doneOn: null, doneBy: null };
 		await saveVersioned(followUp, 'follow-up', version, done, transaction);
+		await refreshReview('installation', followUp.installationId, transaction);
 		const subject = { type: 'mount', id: mount.id };
 		await recordBy(person, 'mount.follow-up', subject, transaction, {
 			afterMonths: followUp.afterMonths,

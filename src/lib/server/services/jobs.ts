@@ -20,6 +20,7 @@ import { customerFor } from './customers';
 import { findJobs } from './job-list';
 import { countOpenQuestions } from './question-threads';
 import { notThere, saveVersioned } from './records';
+import { refreshReview } from './review/keep-review';
 import { findStandings } from './standings';
 import { addVehicle } from './vehicles';
 
@@ -129,6 +130,7 @@ async function changeJob(
 	transaction: Transaction
 ): Promise<JobView> {
 	await saveVersioned(job, 'job', version, changes, transaction);
+	await refreshReview('job', job.id, transaction);
 	await recordBy(person, action, { type: 'job', id: job.id }, transaction, changes);
 	return getJob(person, job.id);
 }

@@ -11,6 +11,7 @@ import { allow } from '../policies';
 import { presentMount } from '../presenters/mounts';
 import { recordBy } from './audit';
 import { saveVersioned } from './records';
+import { refreshReview } from './review/keep-review';
 
 const LETTERS = [...'ABCDEFGHIJKLMNOPQRSTUVWXYZ'];
 
@@ -142,6 +143,7 @@ export async function removeMount(person: SignedInPerson, mountId: number): Prom
 	return inTransaction(async (transaction) => {
 		const mount = await findStandingMount(person, mountId, transaction);
 		await mount.update({ removedAt: new Date() }, { transaction });
+		await refreshReview('mount', mount.id, transaction);
 		await recordBy(person, 'mount.removed', { type: 'mount', id: mount.id }, transaction);
 		return presentMount(mount);
 	});
@@ -157,6 +159,7 @@ export async function restoreMount(person: SignedInPerson, mountId: number): Pro
 		if (mount.removedAt === null) return presentMount(mount);
 		refuseTooMany(await mountsOf(jobId, transaction));
 		await mount.update({ removedAt: null }, { transaction });
+		await refreshReview('mount', mount.id, transaction);
 		await recordBy(person, 'mount.restored', { type: 'mount', id: mount.id }, transaction);
 		return presentMount(mount);
 	});

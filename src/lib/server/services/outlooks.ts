@@ -15,10 +15,12 @@ import {
 } from '$lib/thermal/outlook';
 import { spreadDay } from '$lib/thermal/uncertainty';
 import { Assessment, AssessmentOutlook } from '../db/models';
+import { inTransaction } from '../db/transaction';
 import { env } from '../env';
 import { notFound } from '../errors';
 import { allow } from '../policies';
 import { remedyListOf } from './remedy-lists';
+import { refreshReview } from './review/keep-review';
 import { afterOthers, workInSlices } from './slices';
 import { touringOf } from './touring-year';
 
@@ -71,7 +73,10 @@ async function store(assessment: Assessment, request: OutlookRequest, outlook: O
 	const { id: assessmentId, workshopId } = assessment;
 	const row = { workshopId, assessmentId, engineVersion: outlook.engineVersion, request, outlook };
 	try {
-		await AssessmentOutlook.create(row);
+		await inTransaction(async (transaction) => {
+			await AssessmentOutlook.create(row, { transaction });
+			await refreshReview('assessment', assessmentId, transaction);
+		});
 		return outlook;
 	} catch (error) {
 		// Another process was first: what it kept counts.

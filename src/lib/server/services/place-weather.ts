@@ -19,6 +19,7 @@ import { presentPlace } from '../presenters/places';
 import { recordBy } from './audit';
 import { cleanFileName } from './file-names';
 import { saveVersioned } from './records';
+import { placeInZones } from './review/place-zones';
 
 /** A file as it was sent. */
 export interface Sent {
@@ -153,6 +154,7 @@ export async function takeWeather(
 		requirePlaceLimits(place, changes);
 		const before = fieldsNow(place);
 		await saveVersioned(place, 'place', version, { ...changes, beforeWeather: before }, transaction);
+		await placeInZones(person.workshopId, transaction);
 		const detail = { ...changes, before };
 		await recordBy(person, 'place.weather-taken', { type: 'place', id: place.id }, transaction, detail);
 		return presentPlace(place);
@@ -171,6 +173,7 @@ export async function putBackWeather(
 		const { beforeWeather: before } = place;
 		if (!before) throw new AppError('conflict', 'There is nothing to put back: the place was changed since.');
 		await saveVersioned(place, 'place', version, { ...before, beforeWeather: null }, transaction);
+		await placeInZones(person.workshopId, transaction);
 		const subject = { type: 'place', id: place.id };
 		await recordBy(person, 'place.weather-put-back', subject, transaction, { ...before });
 		return presentPlace(place);

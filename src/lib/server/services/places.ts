@@ -8,6 +8,7 @@ import { allow } from '../policies';
 import { presentPlace } from '../presenters/places';
 import { recordBy } from './audit';
 import { orNameTaken, saveVersioned } from './records';
+import { computeZone, placeInZones } from './review/place-zones';
 
 export async function listPlaces(person: SignedInPerson): Promise<PlaceView[]> {
 	allow(person, 'places.read');
@@ -32,7 +33,9 @@ export async function createPlace(person: SignedInPerson, input: PlaceInput): Pr
 	allow(person, 'places.write');
 	return orNameTaken('place', 'name', () =>
 		inTransaction(async (transaction) => {
-			const place = await Place.create({ ...input, workshopId: person.workshopId }, { transaction });
+			const { workshopId } = person;
+			const place = await Place.create({ ...input, ...computeZone(input), workshopId }, { transaction });
+			await placeInZones(workshopId, transaction);
 			await recordBy(person, 'place.created', { type: 'place', id: place.id }, transaction, { ...input });
 			return presentPlace(place);
 		})
@@ -60,8 +63,9 @@ export async function updatePlace(
 				transaction
 			});
 			if (!place) throw notFound('place');
-			const changes = { ...input, ...weatherMarkAfter(place, input) };
+			const changes = { ...input, ...computeZone(input), ...weatherMarkAfter(place, input) };
 			await saveVersioned(place, 'place', version, changes, transaction);
+			await placeInZones(person.workshopId, transaction);
 			await recordBy(person, 'place.changed', { type: 'place', id: place.id }, transaction, { ...input });
 			return presentPlace(place);
 		})

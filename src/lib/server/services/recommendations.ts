@@ -18,6 +18,7 @@ import { listIssuedCautions } from './caution-texts';
 import { WITHOUT_TEXTS, newestByMount, updateJobOutcome } from './job-outcome';
 import { snapshotPreDrill } from './pre-drill';
 import { findLogo, headOf } from './shop';
+import { refreshReview } from './review/keep-review';
 
 async function show(recommendation: Recommendation): Promise<RecommendationView> {
 	const { jobId, assessmentId, createdBy } = recommendation;
@@ -82,6 +83,7 @@ export async function makeRecommendation(
 			{ transaction }
 		);
 		await updateJobOutcome(job, transaction, 'recommended');
+		await refreshReview('assessment', assessment.id, transaction);
 		const subject = { type: 'recommendation', id: recommendation.id };
 		const detail = {
 			jobId: job.id,

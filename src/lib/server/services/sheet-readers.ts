@@ -12,6 +12,7 @@ import { record } from './audit';
 import { listLessons } from './field-lessons';
 import { readThread } from './question-threads';
 import { findLogo } from './shop';
+import { refreshReview } from './review/keep-review';
 
 const ACKNOWLEDGEMENT = { model: Acknowledgement, as: 'acknowledgement' };
 
@@ -134,6 +135,7 @@ async function storeAcknowledgement(
 ): Promise<Acknowledgement> {
 	const made = await Acknowledgement.create({ sheetId, name, textVersion, contentSha256 }, { transaction });
 	await Job.update({ stage: 'acknowledged' }, { where: { id: jobId }, transaction });
+	await refreshReview('job', jobId, transaction);
 	await record(
 		{
 			workshopId,

@@ -13,6 +13,7 @@ import { allow } from '../policies';
 import { SHEET_WORDS_VERSION, writeSheetContent } from '../presenters/sheet-content';
 import { presentSheetStatus } from '../presenters/sheets';
 import { recordBy } from './audit';
+import { refreshReview } from './review/keep-review';
 import { readSheetSource } from './sheet-source';
 
 /** Both parts of what is read: the sheet's own words and the cautions. */
@@ -109,6 +110,7 @@ export async function sendSheet(
 			transaction
 		);
 		await Job.update({ stage: 'sent' }, { where: { id: jobId }, transaction });
+		await refreshReview('job', jobId, transaction);
 		const told = { recommendationId, sendTo, contentSha256, textVersion: TEXT_VERSION };
 		await recordBy(person, 'sheet.sent', { type: 'sheet', id: sheet.id }, transaction, told);
 		return { sheet: await presentOne(sheet.id) };
@@ -130,6 +132,7 @@ export async function withdrawSheet(person: SignedInPerson, sheetId: number): Pr
 		const { jobId } = sheet;
 		if (sheet.withdrawnAt === null) {
 			await withdrawAll(person, [sheet], 'by hand', transaction);
+			await refreshReview('job', jobId, transaction);
 			const open = await Sheet.count({ where: { jobId, withdrawnAt: null }, transaction });
 			if (open === 0)
 				await Job.update({ stage: 'recommended' }, { where: { id: jobId, stage: 'sent' }, transaction });

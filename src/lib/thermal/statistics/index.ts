@@ -7,6 +7,7 @@ export {
 	clopperPearsonInterval,
 	jeffreysInterval,
 	poissonInterval,
+	poissonRatioInterval,
 	wilsonInterval,
 	type Interval
 } from './intervals';

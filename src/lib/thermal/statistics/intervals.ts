@@ -1,4 +1,4 @@
-import { EngineInputError } from '../correlations/require';
+import { EngineInputError, requirePositive } from '../correlations/require';
 import { betaQuantile } from './beta';
 import { gammaQuantile } from './gamma';
 import { normalQuantile } from './normal';
@@ -120,4 +120,26 @@ export function poissonInterval(events: number, confidence: number): Interval {
 		low: events === 0 ? 0 : gammaQuantile(events, tail),
 		high: gammaQuantile(events + 1, 1 - tail)
 	};
+}
+
+/**
+ * Interval for how many times as often something happens as was expected, from how often it was counted.
+ *
+ *     low = G(α/2; k)/E,  high = G(1−α/2; k+1)/E      (G: quantile of the gamma distribution)
+ *
+ * @param events how many were counted, a whole number
+ * @param expected how many were expected, above zero and taken as known
+ * @param confidence how sure, above 0 and below 1
+ * @returns lowest and highest ratio of the true expectation to the one that was made
+ * @throws EngineInputError as poissonInterval, and when the expectation is not above zero
+ * Validity: independent events at a steady rate; what is uncertain about the expectation itself is not in it.
+ * Source: Garwood, Biometrika 28 (1936) 437; divided by the expectation as for a standardised mortality ratio, Ulm, Am. J.
+ *   Epidemiol. 131 (1990) 373 (from memory).
+ * @example
+ * poissonRatioInterval(10, 5, 0.95).high; // 3.6781
+ */
+export function poissonRatioInterval(events: number, expected: number, confidence: number): Interval {
+	requirePositive({ expected });
+	const { low, high } = poissonInterval(events, confidence);
+	return { low: low / expected, high: high / expected };
 }

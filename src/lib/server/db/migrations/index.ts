@@ -47,6 +47,11 @@ import { migration as m064 } from './064-field-notes';
 import { migration as m065 } from './065-field-notes-no-update';
 import { migration as m066 } from './066-field-notes-no-delete';
 import { migration as m070 } from './070-stored-files';
+import { migration as m080 } from './080-places-class';
+import { migration as m081 } from './081-own-zones';
+import { migration as m082 } from './082-review-rows';
+import { migration as m083 } from './083-review-months';
+import { migration as m084 } from './084-review-dark-days';
 import { migration as m090 } from './090-invitations';
 import { migration as m091 } from './091-people-seen';
 import { migration as m092 } from './092-second-factors';
@@ -121,6 +126,11 @@ export const migrations: Migration[] = [
 	m065,
 	m066,
 	m070,
+	m080,
+	m081,
+	m082,
+	m083,
+	m084,
 	m090,
 	m091,
 	m092,

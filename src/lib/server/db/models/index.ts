@@ -31,6 +31,7 @@ import { FieldNote, initFieldNote } from './field-note';
 import { CustomerMessage, initCustomerMessage } from './customer-message';
 import { StoredFile, initStoredFile } from './stored-file';
 import { Erasure, initErasure } from './erasure';
+import { OwnZone, initOwnZone } from './own-zone';
 import { OutgoingMail, initOutgoingMail } from './outgoing-mail';
 import { AuditCheck, initAuditCheck } from './audit-check';
 import { AuditEntry, initAuditEntry } from './audit-entry';
@@ -68,6 +69,7 @@ export {
 	CustomerMessage,
 	StoredFile,
 	Erasure,
+	OwnZone,
 	OutgoingMail,
 	AuditCheck,
 	AuditEntry
@@ -106,6 +108,7 @@ const initialisers = [
 	initCustomerMessage,
 	initStoredFile,
 	initErasure,
+	initOwnZone,
 	initOutgoingMail,
 	initAuditCheck,
 	initAuditEntry

@@ -44,6 +44,13 @@ export class Place extends Model<InferAttributes<Place>, InferCreationAttributes
 	declare monthlySpreadK: CreationOptional<number[] | null>;
 	declare monthsSource: CreationOptional<string | null>;
 	declare weatherFile: CreationOptional<WeatherFileMark | null>;
+	/** What the climate class is computed from, where somebody gave it. */
+	declare monthlyMeanC: CreationOptional<number[] | null>;
+	declare monthlyRainMm: CreationOptional<number[] | null>;
+	declare classSource: CreationOptional<string | null>;
+	declare computedZone: CreationOptional<string | null>;
+	/** Of the shop's own zones; 0 where none fits. */
+	declare ownZoneId: CreationOptional<number>;
 	/** As it stood before its weather file was taken; null once somebody changed it again. */
 	declare beforeWeather: CreationOptional<WeatherFields | null>;
 	declare version: CreationOptional<number>;
@@ -71,6 +78,11 @@ export function initPlace(sequelize: Sequelize): void {
 			monthsSource: optionalText,
 			weatherFile: optionalJson,
 			beforeWeather: optionalJson,
+			monthlyMeanC: optionalJson,
+			monthlyRainMm: optionalJson,
+			classSource: optionalText,
+			computedZone: optionalText,
+			ownZoneId: { ...reference, defaultValue: 0 },
 			version: { ...whole, defaultValue: 0 },
 			createdAt: moment,
 			updatedAt: moment

@@ -12,11 +12,13 @@ import { jobOperations } from './jobs';
 import { letterOperations } from './letters';
 import { mountOperations } from './mounts';
 import { peopleOperations } from './people';
+import { ownZoneOperations } from './own-zones';
 import { placeOperations } from './places';
 import { preDrillOperations } from './pre-drill';
 import { questionOperations } from './questions';
 import { recommendationOperations } from './recommendations';
 import { remedyOperations } from './remedies';
+import { reviewOperations } from './review';
 import { sheetOperations } from './sheets';
 import { shopOperations } from './shop';
 import { simulationOperations } from './simulations';
@@ -45,5 +47,7 @@ export const OPERATIONS: readonly Operation[] = [
 	simulationOperations,
 	peopleOperations,
 	shopOperations,
-	auditOperations
+	auditOperations,
+	reviewOperations,
+	ownZoneOperations
 ].flatMap((group) => Object.values(group) as unknown as Operation[]);

@@ -1,0 +1,60 @@
+import type { EChartsCoreOption } from 'echarts/core';
+
+import { MONTH_KEYS } from '../../../schemas/months';
+import type { ReviewTrends } from '../../../schemas/review';
+import { RIBBON_PALETTES } from '../day-ribbon/palette';
+
+export const TRENDS_SIZE = { width: 680, height: 380 } as const;
+
+/** "Mar 2026"; on the axis the year stands with its first month alone. */
+export const sayMonth = (month: string): string =>
+	`${MONTH_KEYS[Number(month.slice(5, 7)) - 1]!} ${month.slice(0, 4)}`;
+
+const tickOf = (month: string, index: number): string => {
+	const letter = MONTH_KEYS[Number(month.slice(5, 7)) - 1]!.slice(0, 1);
+	return index === 0 || month.endsWith('-01') ? `${letter}\n${month.slice(0, 4)}` : letter;
+};
+
+/** Dark days above, predicted as a line and reported as filled marks; below, what was fitted. */
+export function trendsOption({ months }: ReviewTrends): EChartsCoreOption {
+	const { ink, muted, rule, paper } = RIBBON_PALETTES.page;
+	const labels = months.map(({ month }, index) => tickOf(month, index));
+	const text = { color: muted, fontSize: 12, fontFamily: 'inherit' };
+	const axis = (gridIndex: number, show: boolean) => ({
+		...{ gridIndex, type: 'category' as const, data: labels, axisTick: { show: false } },
+		axisLine: { lineStyle: { color: muted } },
+		axisLabel: { ...text, show, interval: 0 }
+	});
+	const scale = (gridIndex: number, name: string) => ({
+		...{ gridIndex, name, type: 'value' as const, minInterval: 1, splitNumber: 3 },
+		nameTextStyle: { ...text, align: 'left' as const },
+		axisLabel: text,
+		splitLine: { lineStyle: { color: rule } }
+	});
+	return {
+		animation: false,
+		grid: [
+			{ left: 48, right: 8, top: 28, height: 150 },
+			{ left: 48, right: 8, top: 222, height: 100 }
+		],
+		xAxis: [axis(0, false), axis(1, true)],
+		yAxis: [scale(0, 'dark days a month'), scale(1, 'fitted in the month')],
+		series: [
+			{
+				...{ type: 'line', xAxisIndex: 0, yAxisIndex: 0, symbol: 'none', step: 'middle' },
+				lineStyle: { color: ink, width: 1.5, type: 'dashed' },
+				data: months.map(({ predictedDays }) => predictedDays)
+			},
+			{
+				...{ type: 'scatter', xAxisIndex: 0, yAxisIndex: 0, symbol: 'circle', symbolSize: 8 },
+				itemStyle: { color: ink, borderColor: paper, borderWidth: 1 },
+				data: months.map(({ reportedDays }) => reportedDays)
+			},
+			{
+				...{ type: 'bar', xAxisIndex: 1, yAxisIndex: 1, barWidth: '62%' },
+				itemStyle: { color: rule, borderColor: ink, borderWidth: 1 },
+				data: months.map(({ fitted }) => Object.values(fitted).reduce((sum, count) => sum + count, 0))
+			}
+		]
+	};
+}

@@ -1,0 +1,29 @@
+import { describe, expect, it } from 'vitest';
+import { formatDays, formatRatioRange, sayApart, sayRatio } from './review-words';
+
+describe('a ratio of reported to predicted', () => {
+	it('is said with its range, and judged by it alone', () => {
+		expect(formatRatioRange({ value: 0.8234, low: 0.4, high: 1.514 })).toBe('0.82 (0.40 to 1.51)');
+		expect(sayRatio({ value: 2, low: 1.1, high: 3 })).toBe('more went dark than was predicted');
+		expect(sayRatio({ value: 0.2, low: 0.1, high: 0.9 })).toContain('or not all was reported');
+		expect(sayRatio({ value: 2, low: 0.9, high: 5 })).toContain('chance');
+		expect(sayRatio(null)).toBe('nothing to hold it against');
+	});
+
+	it('says what is left out of it, and only that', () => {
+		const figures = {
+			chance: { known: 3, unknown: 1, never: 2 },
+			reportedElsewhere: 0,
+			notHeatDays: 1
+		} as Parameters<typeof sayApart>[0];
+		expect(sayApart(figures)).toHaveLength(3);
+		expect(sayApart(figures)[0]).toMatch(/^Of 1 installation the chance is not known/);
+		expect(sayApart(figures)[1]).toMatch(/^2 installations have a battery that nothing switches off/);
+		expect(sayApart({ ...figures, chance: { known: 3, unknown: 0, never: 0 }, notHeatDays: 0 })).toEqual([]);
+	});
+
+	it('counts few days with a decimal', () => {
+		expect(formatDays(3.14)).toBe('3.1');
+		expect(formatDays(31.4)).toBe('31');
+	});
+});

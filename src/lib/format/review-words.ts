@@ -1,0 +1,66 @@
+import type { Ratio, ReviewFigures, ReviewInstallation, ReviewList } from '../schemas/review';
+import { formatNumber } from './numbers';
+
+/** Days as a manager counts them: one decimal below ten, none above. */
+export const formatDays = (days: number): string => formatNumber(days, days < 9.95 ? 1 : 0);
+
+const formatRatio = (value: number): string => formatNumber(value, value < 9.95 ? 2 : 0);
+
+/** "0.82 (0.40 to 1.51)". */
+export const formatRatioRange = ({ value, low, high }: Ratio): string =>
+	`${formatRatio(value)} (${formatRatio(low)} to ${formatRatio(high)})`;
+
+/** What the ratio allows to say: the range holds the true one 19 times in 20. */
+export function sayRatio(ratio: Ratio | null): string {
+	if (ratio === null) return 'nothing to hold it against';
+	if (ratio.low > 1) return 'more went dark than was predicted';
+	if (ratio.high < 1) return 'fewer went dark than was predicted, or not all was reported';
+	return 'no difference that could be told from chance';
+}
+
+const plural = (count: number, one: string, many: string): string => `${count} ${count === 1 ? one : many}`;
+
+/** What stands apart from the ratio, each in a sentence; nothing where nothing does. */
+export function sayApart({ chance, reportedElsewhere, notHeatDays }: ReviewFigures): string[] {
+	return [
+		...(chance.unknown > 0
+			? [
+					`Of ${plural(chance.unknown, 'installation', 'installations')} the chance is not known, as the outlook of the assessment has not been worked out: left out of the prediction and of the ratio.`
+				]
+			: []),
+		...(chance.never > 0
+			? [
+					`${plural(chance.never, 'installation has', 'installations have')} a battery that nothing switches off: it does not go dark, and is left out.`
+				]
+			: []),
+		...(reportedElsewhere > 0
+			? [
+					`${plural(reportedElsewhere, 'dark day was', 'dark days were')} reported of those, and not counted above.`
+				]
+			: []),
+		...(notHeatDays > 0
+			? [
+					`Of the dark days counted, ${formatNumber(notHeatDays)} ${notHeatDays === 1 ? 'is one' : 'are ones'} that heat hardly explains; they are in the ratio, since nobody sorts out the others either.`
+				]
+			: [])
+	];
+}
+
+export const LIST_TITLES: Record<ReviewList | 'all', string> = {
+	all: 'Installations',
+	overdue: 'Overdue follow-ups',
+	overrides: 'Gone ahead against the verdict',
+	waiting: 'Sheets not acknowledged',
+	missing: 'Without a sheet',
+	'gone-dark': 'Reported dark'
+};
+
+/** "due 4 days ago". */
+export const sayOverdue = ({ overdueDays }: ReviewInstallation): string =>
+	overdueDays === 1 ? '1 day late' : `${overdueDays} days late`;
+
+export const SHEET_WORDS = {
+	acknowledged: 'acknowledged',
+	waiting: 'not acknowledged',
+	missing: 'no sheet'
+} as const;

@@ -1,0 +1,304 @@
+import { QueryTypes, type Transaction } from 'sequelize';
+import type { Verdict } from '$lib/schemas/verdicts';
+import { ENGINE_VERSION } from '$lib/thermal';
+import { hashWords } from '$lib/thermal/statistics';
+import { connection } from '../../db/connection';
+import { CoefficientBook, Customer, Person, Place, Vehicle, Workshop } from '../../db/models';
+import { inTransaction } from '../../db/transaction';
+import { addDays, addMonths, daysBetween } from '../days';
+import { placeInZones } from './place-zones';
+
+/** How a workshop is invented: the same seed and day give the same rows. */
+export interface Invention {
+	installations: number;
+	seed: number;
+	today: string;
+	/** Its own workshop, under this name. */
+	name: string;
+	/** Who may look at it. */
+	manager: { name: string; email: string; passwordHash: string | null };
+}
+
+const CHUNK = 1_000;
+const PLACES = 60;
+const CUSTOMERS = 200;
+const YEARS = 5;
+const DAYS_A_YEAR = 365.25;
+const ZONES = ['Aw', 'BWh', 'BWk', 'BSh', 'BSk', 'Csa', 'Csb', 'Cfa', 'Cfb', 'Dfb'] as const;
+
+/** What each part of an installation draws from; one number never serves two of them. */
+const DRAWS = {
+	...{ place: 1, fitted: 2, verdict: 3, chemistry: 4, outlook: 5, days: 6, reports: 7, looked: 8, sheet: 9 },
+	...{ acknowledged: 10, removed: 11, darkOn: 12, cause: 13, latitude: 14, longitude: 15 }
+} as const;
+type Draw = (seed: number, index: number, what: keyof typeof DRAWS, again?: number) => number;
+
+/** Within 0 to below 1. */
+const draw: Draw = (seed, index, what, again = 0) => hashWords(seed, index, DRAWS[what], again) / 2 ** 32;
+
+const VERDICT_SHARES: [Verdict, number][] = [
+	['cuts-out', 0.06],
+	['runs-close', 0.3],
+	['rides-it-out', 1]
+];
+/** Most dark days a year of a verdict. */
+const MOST_DAYS: Record<Verdict, number> = { 'cuts-out': 8, 'runs-close': 1, 'rides-it-out': 0.05 };
+const WITHOUT_BMS_SHARE = 0.08;
+const OUTLOOK_SHARE = 0.95;
+const REPORTED_SHARE = 0.6;
+const HEAT_SHARE = 0.85;
+const LOOKED_SHARE = 0.8;
+const SHEET_SHARE = 0.9;
+const ACKNOWLEDGED_SHARE = 0.85;
+const REMOVED_SHARE = 0.01;
+
+/** Twelve months of dark days: all of them in the warm half of the year. */
+function monthDays(yearDays: number, isSouth: boolean): number[] {
+	const weights = Array.from({ length: 12 }, (_, month) =>
+		Math.max(Math.cos((2 * Math.PI * (month - (isSouth ? 0 : 6))) / 12), 0)
+	);
+	const sum = weights.reduce((total, weight) => total + weight, 0);
+	return weights.map((weight) => (yearDays * weight) / sum);
+}
+
+interface Invented {
+	index: number;
+	place: Place;
+	fittedOn: string;
+	verdict: Verdict;
+	chemistry: string;
+	expected: number[] | null;
+	darkDays: { on: string; isHeat: boolean }[];
+	followUps: { months: number; dueOn: string; isDone: boolean }[];
+	sheet: 'none' | 'sent' | 'acknowledged';
+	isRemoved: boolean;
+}
+
+function inventDarkDays(
+	{ seed, today }: Invention,
+	index: number,
+	fittedOn: string,
+	yearDays: number
+): Invented['darkDays'] {
+	const exposedDays = daysBetween(fittedOn, today);
+	const likely = (yearDays * exposedDays * REPORTED_SHARE) / DAYS_A_YEAR;
+	const count = Math.floor(2 * likely * draw(seed, index, 'reports') + 0.5);
+	return Array.from({ length: count }, (_, again) => ({
+		on: addDays(fittedOn, Math.floor(draw(seed, index, 'darkOn', again) * (exposedDays + 1))),
+		isHeat: draw(seed, index, 'cause', again) < HEAT_SHARE
+	}));
+}
+
+function inventOne(invention: Invention, index: number, places: readonly Place[]): Invented {
+	const { seed, today } = invention;
+	const random = (what: keyof typeof DRAWS, again?: number): number => draw(seed, index, what, again);
+	// Few places have many of the installations, as in any shop.
+	const place = places[Math.floor(random('place') ** 2 * places.length)]!;
+	const fittedOn = addDays(today, -Math.floor(random('fitted') * YEARS * DAYS_A_YEAR));
+	const [verdict] = VERDICT_SHARES.find(([, share]) => random('verdict') < share)!;
+	const yearDays = MOST_DAYS[verdict] * random('days');
+	const chemistry = random('chemistry') < WITHOUT_BMS_SHARE ? 'lead-acid-agm' : 'lithium-iron-phosphate';
+	const followUps = [1, 6, 12].map((months) => {
+		const dueOn = addMonths(fittedOn, months);
+		return { months, dueOn, isDone: dueOn <= today && random('looked', months) < LOOKED_SHARE };
+	});
+	const isSent = random('sheet') < SHEET_SHARE;
+	return {
+		...{ index, place, fittedOn, verdict, chemistry, followUps },
+		expected: random('outlook') < OUTLOOK_SHARE ? monthDays(yearDays, place.latitudeDeg < 0) : null,
+		darkDays: inventDarkDays(invention, index, fittedOn, yearDays),
+		sheet: isSent ? (random('acknowledged') < ACKNOWLEDGED_SHARE ? 'acknowledged' : 'sent') : 'none',
+		isRemoved: random('removed') < REMOVED_SHARE
+	};
+}
+
+/** Inserts rows at once and says which numbers they got: those of one statement follow each other. */
+async function insert(
+	table: string,
+	columns: readonly string[],
+	rows: readonly (readonly unknown[])[],
+	transaction: Transaction
+): Promise<number[]> {
+	if (rows.length === 0) return [];
+	const [first] = await connection().query(`INSERT INTO ${table} (${columns.join(', ')}) VALUES :rows`, {
+		replacements: { rows },
+		type: QueryTypes.INSERT,
+		transaction
+	});
+	return rows.map((_, at) => Number(first) + at);
+}
+
+interface Base {
+	workshopId: number;
+	managerId: number;
+	bookId: number;
+	places: Place[];
+	/** Each with a vehicle of theirs. */
+	customers: { customerId: number; vehicleId: number }[];
+}
+
+async function inventBase({ seed, name, manager }: Invention): Promise<Base> {
+	const workshop = await Workshop.create({ name });
+	const workshopId = workshop.id;
+	const person = await Person.create({ workshopId, role: 'manager', ...manager });
+	const book = await CoefficientBook.create({ workshopId, number: 1, name: 'Invented', state: 'in-force' });
+	const places = await Place.bulkCreate(
+		Array.from({ length: PLACES }, (_, index) => ({
+			...{ workshopId, name: `Invented place ${index + 1}`, altitudeM: 100 },
+			latitudeDeg: Math.round(-38 + 76 * draw(seed, index, 'latitude')),
+			longitudeDeg: Math.round(-120 + 270 * draw(seed, index, 'longitude')),
+			climateZone: ZONES[index % ZONES.length]!,
+			...{ hotDayMaxC: 40, dailyRangeK: 14, sunPeakWPerM2: 1_000, source: 'Invented' }
+		}))
+	);
+	const customers = await Customer.bulkCreate(
+		Array.from({ length: CUSTOMERS }, (_, index) => ({ workshopId, name: `Invented customer ${index + 1}` }))
+	);
+	const vehicles = await Vehicle.bulkCreate(
+		customers.map(({ id: customerId }, index) => ({
+			...{ workshopId, customerId, make: 'Invented', model: `Vehicle ${index + 1}`, modelYear: 2020 },
+			...{ engineLayout: 'inline' as const, massKg: 2_200, dragAreaM2: 1.1 }
+		}))
+	);
+	return {
+		...{ workshopId, managerId: person.id, bookId: book.id, places },
+		customers: customers.map(({ id }, index) => ({ customerId: id, vehicleId: vehicles[index]!.id }))
+	};
+}
+
+const NOTHING = JSON.stringify({});
+
+/** Jobs, mounts, assessments and what hangs on them, of one chunk. */
+async function storeChunk(
+	{ workshopId, managerId, bookId, customers }: Base,
+	invented: readonly Invented[],
+	transaction: Transaction
+): Promise<void> {
+	const at = (day: string): string => `${day} 08:00:00.000`;
+	const add = (table: string, columns: string, rows: readonly (readonly unknown[])[]): Promise<number[]> =>
+		insert(table, columns.split(' '), rows, transaction);
+	const jobs = await add(
+		'jobs',
+		'workshop_id number customer_id vehicle_id place_id stage verdict created_by created_at updated_at',
+		invented.map(({ index, place, fittedOn, verdict, sheet }) => {
+			const { customerId, vehicleId } = customers[index % customers.length]!;
+			const stage = { none: 'recommended', sent: 'sent', acknowledged: 'acknowledged' }[sheet];
+			return [
+				...[workshopId, index + 1, customerId, vehicleId, place.id, stage, verdict, managerId],
+				...[at(fittedOn), at(fittedOn)]
+			];
+		})
+	);
+	const mounts = await add(
+		'mounts',
+		'workshop_id job_id letter name position_kind survey survey_complete removed_at created_at updated_at',
+		invented.map(({ fittedOn, isRemoved }, k) => [
+			...[
+				workshopId,
+				jobs[k],
+				'A',
+				'Invented position',
+				'under-bonnet',
+				'{"positionKind":"under-bonnet"}',
+				1
+			],
+			...[isRemoved ? at(fittedOn) : null, at(fittedOn), at(fittedOn)]
+		])
+	);
+	const assessments = await add(
+		'assessments',
+		'workshop_id job_id mount_id book_id engine_version inputs inputs_sha256 result chemistry verdict headroom_k peak_cells_c peak_at_hour dark_hours charge_missed_ah created_by created_at',
+		invented.map(({ fittedOn, verdict, chemistry }, k) => [
+			...[workshopId, jobs[k], mounts[k], bookId, ENGINE_VERSION, NOTHING, '0'.repeat(64), NOTHING],
+			...[chemistry, verdict, 0, 60, 17, 0, 0, managerId, at(fittedOn)]
+		])
+	);
+	await add(
+		'assessment_outlooks',
+		'workshop_id assessment_id engine_version request outlook created_at',
+		invented.flatMap(({ fittedOn, expected }, k) => {
+			if (!expected) return [];
+			const outlook = JSON.stringify({ year: { months: expected.map((middle) => ({ middle })) } });
+			return [[workshopId, assessments[k], ENGINE_VERSION, NOTHING, outlook, at(fittedOn)]];
+		})
+	);
+	const recommendations = await add(
+		'recommendations',
+		'workshop_id job_id assessment_id against_verdict decided_by reason created_by created_at',
+		invented.map(({ fittedOn, verdict }, k) => {
+			const words =
+				verdict === 'cuts-out'
+					? [1, 'Invented manager', 'Invented: a duct is fitted before summer.']
+					: [0, null, null];
+			return [workshopId, jobs[k], assessments[k], ...words, managerId, at(fittedOn)];
+		})
+	);
+	const sent = invented.flatMap((each, k) => (each.sheet === 'none' ? [] : [{ ...each, k }]));
+	const sheets = await add(
+		'sheets',
+		'workshop_id job_id recommendation_id token_hash text_version content content_sha256 created_by created_at',
+		sent.map(({ fittedOn, k }) => [
+			...[workshopId, jobs[k], recommendations[k], `${workshopId}-${jobs[k]}`.padEnd(64, '-'), 'invented'],
+			...[NOTHING, '0'.repeat(64), managerId, at(fittedOn)]
+		])
+	);
+	await add(
+		'acknowledgements',
+		'sheet_id name text_version content_sha256 created_at',
+		sent.flatMap(({ fittedOn, sheet }, k) =>
+			sheet === 'acknowledged' ? [[sheets[k], 'Invented', 'invented', '0'.repeat(64), at(fittedOn)]] : []
+		)
+	);
+	const installations = await add(
+		'installations',
+		'workshop_id job_id mount_id assessment_id fitted_on fitted_by agreed differences created_by created_at updated_at',
+		invented.map(({ fittedOn }, k) => [
+			...[workshopId, jobs[k], mounts[k], assessments[k], fittedOn, 'Invented', '[]', '[]', managerId],
+			...[at(fittedOn), at(fittedOn)]
+		])
+	);
+	await add(
+		'follow_ups',
+		'workshop_id installation_id after_months due_on done_on done_by reminded_at created_at updated_at',
+		invented.flatMap(({ fittedOn, followUps }, k) =>
+			followUps.map(({ months, dueOn, isDone }) => [
+				...[workshopId, installations[k], months, dueOn, isDone ? dueOn : null, isDone ? 'Invented' : null],
+				// Nobody is to be written to.
+				...[at(dueOn), at(fittedOn), at(fittedOn)]
+			])
+		)
+	);
+	await add(
+		'field_notes',
+		'workshop_id installation_id kind noted_on data finding engine_version created_by created_at',
+		invented.flatMap(({ darkDays }, k) =>
+			darkDays.map(({ on, isHeat }) => {
+				const data = JSON.stringify({ kind: 'cut-out', notedOn: on });
+				const finding = JSON.stringify({ cause: { finding: isHeat ? 'explained' : 'not-explained' } });
+				return [
+					workshopId,
+					installations[k],
+					'cut-out',
+					on,
+					data,
+					finding,
+					ENGINE_VERSION,
+					managerId,
+					at(on)
+				];
+			})
+		)
+	);
+}
+
+/** Fills a workshop of its own with invented installations; the review of it is still to be made. */
+export async function inventInstallations(invention: Invention): Promise<{ workshopId: number }> {
+	const base = await inTransaction(() => inventBase(invention));
+	for (let from = 0; from < invention.installations; from += CHUNK) {
+		const size = Math.min(CHUNK, invention.installations - from);
+		const invented = Array.from({ length: size }, (_, k) => inventOne(invention, from + k, base.places));
+		await inTransaction((transaction) => storeChunk(base, invented, transaction));
+	}
+	await inTransaction((transaction) => placeInZones(base.workshopId, transaction));
+	return { workshopId: base.workshopId };
+}

@@ -1,0 +1,20 @@
+import { renderTrendsSvg } from '$lib/components/charts/review-trends/render-trends';
+import { reviewScopeSchema } from '$lib/schemas/review';
+import { guard, orPageError } from '$lib/server/http/guard';
+import { pageQuery } from '$lib/server/http/page-query';
+import { reviewTrends } from '$lib/server/services/review/review-trends';
+import { listZones } from '$lib/server/services/review/review-zones';
+import type { PageServerLoad } from './$types';
+
+const LABEL =
+	'Month by month: dark days predicted as a dashed line, reported as dots; below, how many were fitted.';
+
+export const load: PageServerLoad = async (event) => {
+	const person = guard(event, 'review.read');
+	const query = await pageQuery(reviewScopeSchema, event.url);
+	const [trends, zones] = await Promise.all([
+		orPageError(reviewTrends(person, query)),
+		orPageError(listZones(person, query.kind))
+	]);
+	return { query, trends, ...zones, picture: renderTrendsSvg(trends, LABEL) };
+};
