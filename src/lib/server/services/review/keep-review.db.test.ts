@@ -61,7 +61,7 @@ describe('the review of a workshop', () => {
 			await saveFitting(installer, mountId, { ...FITTED, fittedOn: '2026-01-15', version });
 			expect(await keptRow()).toMatchObject({ fitted_on: '2026-01-15', next_due_on: '2026-02-15' });
 			const [first] = (await getFitting(installer, mountId)).followUps;
-			await finishFollowUp(installer, first!.id, first!.version);
+			await finishFollowUp(installer, first!.id, { isDone: true, version: first!.version });
 			expect(await keptRow()).toMatchObject({ next_due_on: '2026-07-15' });
 
 			await addFieldNote(installer, mountId, INSPECTION);
