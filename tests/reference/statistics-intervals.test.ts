@@ -3,6 +3,7 @@ import {
 	clopperPearsonInterval,
 	jeffreysInterval,
 	poissonInterval,
+	poissonRatioInterval,
 	wilsonInterval,
 	type Interval
 } from '../../src/lib/thermal/statistics';
@@ -97,6 +98,28 @@ describe('intervals for a count', () => {
 			},
 			limits,
 			() => poissonInterval(events, LEVEL)
+		);
+	}
+	// The factors by which a ratio of counted to expected is multiplied for its limits are tabled by the count alone.
+	const FACTORS: [number, [number, number]][] = [
+		[1, [0.0253, 5.57]],
+		[10, [0.48, 1.84]],
+		[20, [0.611, 1.54]],
+		[50, [0.742, 1.32]]
+	];
+	for (const [events, factors] of FACTORS) {
+		checkInterval(
+			{
+				name: `Poisson interval for a ratio, ${events} counted where as many were expected`,
+				source: 'Breslow and Day, Statistical Methods in Cancer Research II (IARC, 1987), Table 2.10',
+				place: '95 % two-sided',
+				standing: 'from memory',
+				unit: '',
+				tolerance: { absolute: 0.00501 },
+				because: 'half a unit of the last digit remembered'
+			},
+			factors,
+			() => poissonRatioInterval(events, events, LEVEL)
 		);
 	}
 });

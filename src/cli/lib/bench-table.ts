@@ -65,3 +65,5 @@ export function formatTable(cells: readonly (readonly string[])[]): string {
 		)
 		.join('\n');
 }
+
+export const formatSeconds = (ms: number): string => `${(ms / 1000).toFixed(1)} s`;

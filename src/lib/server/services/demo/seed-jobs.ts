@@ -9,12 +9,11 @@ import neighbourJobs from '../../../../../seeds/demo-neighbour-jobs.json';
 import { assessJob } from '../assessments';
 import { listBatteries } from '../batteries';
 import { saveDayPlan } from '../day-plans';
-import { today } from '../days';
-import { saveFitting } from '../fittings';
 import { createJob, setJobBattery, setJobClimate } from '../jobs';
 import { addMount, saveSurvey } from '../mounts';
 import { listPlaces } from '../places';
 import { getRecommendation, makeRecommendation } from '../recommendations';
+import { seedFitting, TODAY } from './seed-fittings';
 import { seedSheet } from './seed-sheets';
 import type { Crew } from './seed-people';
 
@@ -78,30 +77,19 @@ async function recommend(person: SignedInPerson, job: JobView, demo: DemoJob): P
 	return id;
 }
 
-/** What was acknowledged has been fitted since, as agreed. */
-async function fitRecommended(person: SignedInPerson, recommendationId: number): Promise<void> {
-	const { assessment } = await getRecommendation(person, recommendationId);
-	await saveFitting(person, assessment.mountId, {
-		...{
-			fittedOn: today(),
-			fittedBy: person.name,
-			serialNumber: '',
-			note: '',
-			differences: [],
-			version: null
-		}
-	});
-}
-
 async function seedJob(person: SignedInPerson, demo: DemoJob, transaction: Transaction): Promise<void> {
 	const job = await enterJob(person, demo);
 	await measureMounts(person, job, demo);
 	if (!demo.mounts.some(isMeasured)) return;
 	const recommendationId = await recommend(person, job, demo);
-	if (recommendationId === null || demo.sheet === null) return;
+	if (recommendationId === null) return;
 	const acknowledged = demo.sheet === 'acknowledged';
-	await seedSheet(person, { recommendationId, ...demo.customer, acknowledged }, transaction);
-	if (acknowledged) await fitRecommended(person, recommendationId);
+	if (demo.sheet !== null)
+		await seedSheet(person, { recommendationId, ...demo.customer, acknowledged }, transaction);
+	const { assessment } = await getRecommendation(person, recommendationId);
+	// What is acknowledged and says nothing else was fitted today.
+	const fitted = ('fitted' in demo && demo.fitted) || (acknowledged && TODAY);
+	if (fitted) await seedFitting(person, assessment.mountId, fitted, transaction);
 }
 
 /** The invented jobs of a demo workshop, made the way people make them: through the services, in turns. */
