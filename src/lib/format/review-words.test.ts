@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { formatDays, formatRatioRange, sayApart, sayRatio } from './review-words';
+import { countVerdict, formatDays, formatRatioRange, sayApart, sayRatio } from './review-words';
 
 describe('a ratio of reported to predicted', () => {
 	it('is said with its range, and judged by it alone', () => {
@@ -20,6 +20,11 @@ describe('a ratio of reported to predicted', () => {
 		expect(sayApart(figures)[0]).toMatch(/^Of 1 installation the chance is not known/);
 		expect(sayApart(figures)[1]).toMatch(/^2 installations have a battery that nothing switches off/);
 		expect(sayApart({ ...figures, chance: { known: 3, unknown: 0, never: 0 }, notHeatDays: 0 })).toEqual([]);
+	});
+
+	it('counts verdicts as one speaks', () => {
+		expect(countVerdict('cuts-out', 1)).toBe('1 cuts out');
+		expect(countVerdict('rides-it-out', 3)).toBe('3 ride it out');
 	});
 
 	it('counts few days with a decimal', () => {

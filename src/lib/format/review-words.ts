@@ -1,5 +1,17 @@
 import type { Ratio, ReviewFigures, ReviewInstallation, ReviewList } from '../schemas/review';
+import type { Verdict } from '../schemas/verdicts';
 import { formatNumber } from './numbers';
+import { sayVerdict } from './verdict';
+
+const OF_MANY: Record<Verdict, string> = {
+	'rides-it-out': 'ride it out',
+	'runs-close': 'run close',
+	'cuts-out': 'cut out'
+};
+
+/** "1 cuts out", "3 cut out". */
+export const countVerdict = (verdict: Verdict, count: number): string =>
+	`${count} ${count === 1 ? sayVerdict(verdict) : OF_MANY[verdict]}`;
 
 /** Days as a manager counts them: one decimal below ten, none above. */
 export const formatDays = (days: number): string => formatNumber(days, days < 9.95 ? 1 : 0);
