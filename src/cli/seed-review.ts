@@ -2,7 +2,7 @@
 // review can be looked at with as many of them as one likes.
 import { parseArgs } from 'node:util';
 import { applicationEnv } from './lib/application.mjs';
-import { STATE } from './lib/folders.mjs';
+import { STATE, stateFolders } from './lib/folders.mjs';
 import { inventWorkshop } from './lib/invent-workshop';
 import { databaseEnv, localConnection } from './lib/mariadb.mjs';
 import { rememberedPorts } from './lib/ports.mjs';
@@ -33,7 +33,8 @@ const env = applicationEnv(
 		port: 4173,
 		secrets,
 		database: databaseEnv(connection),
-		mail: { SMTP_URL: 'smtp://127.0.0.1:1' }
+		mail: { SMTP_URL: 'smtp://127.0.0.1:1' },
+		files: stateFolders(STATE).files
 	},
 	process.env
 );
