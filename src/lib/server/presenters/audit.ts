@@ -36,6 +36,9 @@ const DID: Record<string, string> = {
 	'mount.removed': 'removed a mount',
 	'mount.restored': 'put a mount back',
 	'mount.surveyed': 'surveyed a mount',
+	'own-zone.changed': 'changed a zone of the shop’s own',
+	'own-zone.created': 'added a zone of the shop’s own',
+	'own-zone.removed': 'removed a zone of the shop’s own',
 	'person.came-back': 'brought somebody back',
 	'person.invited': 'invited somebody',
 	'person.joined': 'joined the workshop',
@@ -80,6 +83,7 @@ const PAGES: Record<string, (id: number) => string> = {
 	job: (id) => `/jobs/${id}`,
 	mount: (id) => `/mounts/${id}`,
 	person: (id) => `/people/${id}`,
+	'own-zone': (id) => `/review/zones/${id}`,
 	place: (id) => `/places/${id}`,
 	recommendation: (id) => `/recommendations/${id}/print`
 };

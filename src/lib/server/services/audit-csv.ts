@@ -2,11 +2,9 @@ import { stringify } from 'csv-stringify/sync';
 import type { AuditQuery, AuditRow } from '$lib/schemas/audit';
 import type { SignedInPerson } from '$lib/schemas/people';
 import { readAudit } from './audit-list';
+import { safeText } from './safe-csv';
 
 const HEADINGS = ['number', 'at (UTC)', 'who', 'action', 'in words', 'subject', 'subject number', 'recorded'];
-
-/** A table program would run a cell of text that begins like this as a formula. */
-const safeText = (text: string): string => (/^[=+\-@\t\r]/.test(text) ? `'${text}` : text);
 
 const sayDetail = ({ detail }: AuditRow): string =>
 	detail.map(({ label, value }) => `${label}: ${value}`).join('; ');

@@ -3,15 +3,12 @@ import { formatVerdict } from '$lib/format/verdict';
 import { SHEET_WORDS } from '$lib/format/review-words';
 import type { SignedInPerson } from '$lib/schemas/people';
 import type { ReviewInstallation, ReviewListQuery } from '$lib/schemas/review';
+import { safeText } from '../safe-csv';
 import { walkInstallations } from './review-list';
 
 const BATCH = 1_000;
 /** Spreadsheets on Windows take a file without it for one in their own alphabet. */
 const BYTE_ORDER_MARK = '\uFEFF';
-/** What a spreadsheet would run: a text that begins so gets an apostrophe; a number is a number and stays one. */
-const FORMULA = /^[=+\-@\t\r]/;
-
-const safe = (text: string): string => (FORMULA.test(text) ? `'${text}` : text);
 const rounded = (value: number | null): number | string => (value === null ? '' : Number(value.toFixed(3)));
 
 const COLUMNS: Record<string, (row: ReviewInstallation) => string | number> = {
@@ -46,7 +43,7 @@ export async function* writeReviewCsv(
 		const cells = rows.map((row) =>
 			READERS.map((read) => {
 				const value = read(row);
-				return typeof value === 'string' ? safe(value) : value;
+				return typeof value === 'string' ? safeText(value) : value;
 			})
 		);
 		const body = stringify(cells, { record_delimiter: 'windows' });
