@@ -1,5 +1,5 @@
 import { expect, test, type Page } from '@playwright/test';
-import { expectNoViolations, openForm, signInAs } from './support';
+import { expectNoViolations, ONCE, openForm, signInAs } from './support';
 
 test.beforeEach(({ page }) => signInAs(page, 'manager'));
 
@@ -98,7 +98,7 @@ test('the months show a picture and the same in figures', async ({ page }) => {
 	await expectNoViolations(page);
 });
 
-test('a zone of one’s own takes its places, and is changed and removed', async ({ page }) => {
+test('a zone of one’s own takes its places, and is changed and removed', ONCE, async ({ page }) => {
 	const name = `Tropics ${Date.now()}`;
 	await openForm(page, '/review/zones/new');
 	await expectNoViolations(page);
