@@ -1,4 +1,4 @@
-import type { MountPaper, Paper } from '$lib/schemas/papers';
+import type { MountPaper, Paper, PaperPhoto } from '$lib/schemas/papers';
 import type { SignedInPerson } from '$lib/schemas/people';
 import { Recommendation } from '../db/models';
 import { AppError } from '../errors';
@@ -9,6 +9,7 @@ import { readRecommendation, type RecommendationPaper } from '../papers/recommen
 import { layWarrantyFile } from '../papers/warranty';
 import { writeRecommendation } from '../papers/write-recommendation';
 import { listFieldNotes } from './field-notes';
+import { listMountFiles, readFileContent } from './files';
 import { getFitting } from './fittings';
 import { getOutlookReport } from './outlook-reports';
 import { getPreDrill } from './pre-drill';
@@ -40,6 +41,15 @@ async function findAcknowledgement(person: SignedInPerson, { id, jobId }: Recomm
 	return read ? { name: read.acknowledgedBy ?? '', acknowledgedAt: read.acknowledgedAt! } : null;
 }
 
+/** The photos of a mount, its picture first. */
+async function listPhotos(person: SignedInPerson, mountId: number): Promise<PaperPhoto[]> {
+	const files = await listMountFiles(person, mountId);
+	return files
+		.filter(({ kind }) => kind === 'photo')
+		.sort((a, b) => Number(b.isMountPicture) - Number(a.isMountPicture) || a.id - b.id)
+		.map(({ id, caption }) => ({ fileId: id, caption }));
+}
+
 /** What is kept of a fitted battery, from its recommendation to the last note. */
 async function readMountRecord(person: SignedInPerson, mountId: number): Promise<MountRecord> {
 	const { installation, assessmentId, ...fitting } = await getFitting(person, mountId);
@@ -56,7 +66,7 @@ async function readMountRecord(person: SignedInPerson, mountId: number): Promise
 		preDrill: await getPreDrill(person, mountId),
 		notes: await listFieldNotes(person, mountId),
 		acknowledgement: await findAcknowledgement(person, recommendation),
-		photos: []
+		photos: await listPhotos(person, mountId)
 	};
 }
 
@@ -82,5 +92,5 @@ export async function writeMountPaper(
 	name: MountPaper
 ): Promise<Buffer> {
 	const paper = await getMountPaper(person, mountId, name);
-	return writePaper(paper, () => Promise.reject(new Error('no photo')));
+	return writePaper(paper, async (fileId) => (await readFileContent(person, fileId)).bytes);
 }

@@ -13,7 +13,8 @@ import {
 	PreDrillCheck,
 	Recommendation,
 	Session,
-	SignInLink
+	SignInLink,
+	StoredFile
 } from '../../db/models';
 import { canonicalJson, newToken, sha256, tokenHash } from '../../hash';
 import type { Persona } from './find-persona';
@@ -138,6 +139,10 @@ const eraseFromField: Step = async ({ ids, installationIds, scrub }, transaction
 	);
 };
 
+/** Photos and documents may show anybody: their rows go, and what nobody owns is cleared away within the hour. */
+const eraseFiles: Step = ({ ids }, transaction) =>
+	StoredFile.destroy({ where: { mountId: ids.mounts }, transaction });
+
 const TO_SHOP = new Set(['question', 'erasure-asked']);
 
 /** The sending log keeps that something was sent, and when; what waits is not sent any more. */
@@ -185,5 +190,5 @@ const eraseFormerRequests: Step = async ({ customer, scrub }, transaction) => {
  */
 export const STEPS: readonly Step[] = [
 	...[eraseSignIn, eraseFromPlans, eraseFromPapers, eraseFromSheets, eraseMessages, eraseFromField],
-	...[eraseLetters, eraseKeptAnswers, eraseFormerRequests, eraseContact]
+	...[eraseFiles, eraseLetters, eraseKeptAnswers, eraseFormerRequests, eraseContact]
 ];
