@@ -2,6 +2,7 @@ import { QueryTypes } from 'sequelize';
 import { connection } from '../db/connection';
 import { logger } from '../logger';
 import { clearFiles } from './clear-files';
+import { askForAged } from './retention';
 
 const EVERY_MS = 60 * 60_000;
 
@@ -15,7 +16,7 @@ const EXPIRED: readonly { table: string; past: string }[] = [
 	{ table: 'sessions', past: 'created_at < UTC_TIMESTAMP(3) - INTERVAL 30 DAY' }
 ];
 
-/** Deletes what is past its time, rows and files, and says how many that were. */
+/** Deletes what is past its time, rows and files, puts aged customers before their manager, and says how many that were. */
 export async function clearExpired(): Promise<number> {
 	let cleared = 0;
 	for (const { table, past } of EXPIRED) {
@@ -23,7 +24,7 @@ export async function clearExpired(): Promise<number> {
 			type: QueryTypes.BULKDELETE
 		});
 	}
-	return cleared + (await clearFiles());
+	return cleared + (await clearFiles()) + (await askForAged());
 }
 
 let timer: NodeJS.Timeout | undefined;

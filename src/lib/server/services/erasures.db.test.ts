@@ -1,6 +1,8 @@
 import { QueryTypes } from 'sequelize';
 import { afterAll, describe, expect, it } from 'vitest';
 import { andUndo, makeKnownCustomer } from '../../../../tests/support/known-customer';
+import { contentIdOf, listKept } from '../../../../tests/support/mount-files';
+import { asIncoming, telephonePhoto } from '../../../../tests/support/pictures';
 import { receive } from '../../../../tests/support/letters';
 import { makeCrew, useTestDatabase } from '../../../../tests/support/services';
 import { openSession, personOfSession } from '../auth/sessions';
@@ -12,8 +14,10 @@ import {
 	Erasure,
 	FieldNote,
 	Installation,
+	Mount,
 	OutgoingMail,
 	Recommendation,
+	StoredFile,
 	Workshop
 } from '../db/models';
 import { env } from '../env';
@@ -22,6 +26,10 @@ import { sendDue, stopOutbox } from '../mail/outbox';
 import { reproduceAssessment } from './assessments';
 import { findBreak } from './audit';
 import { askErasure, decideErasure, getMyErasure, listErasures } from './erasures';
+import { clearFiles } from './clear-files';
+import { addMonths, today } from './days';
+import { addFile } from './files';
+import { askForAged, getRetention, saveRetention } from './retention';
 import { listQuestions } from './questions';
 import { openSheet } from './sheet-readers';
 
@@ -89,6 +97,37 @@ describe('a request for deletion', () => {
 });
 
 describe('an erasure', () => {
+	it('takes photos and documents of the mounts along, and leaves their contents to nobody', async () => {
+		const { crew, jobId, request } = await makeRequest();
+		const { id: mountId } = (await Mount.findOne({ where: { jobId } }))!;
+		const photo = await telephonePhoto();
+		const file = await asIncoming('a.jpg', photo, (sent) => addFile(crew.installer, mountId, sent));
+		const contentId = await contentIdOf(file.id);
+		await decideErasure(crew.manager, request.id, GRANT(request.version));
+		expect(await StoredFile.count({ where: { mountId } })).toBe(0);
+		await clearFiles(new Date(Date.now() + 2 * 60 * 60_000));
+		expect((await listKept()).filter((key) => key.includes(contentId))).toEqual([]);
+	}, 60_000);
+
+	it('is put before the manager by the rule of the shop, once for each whom it reaches', async () => {
+		const { manager, customer, workshopId } = await makeCrew();
+		await saveRetention(manager, { years: 2, version: 0 });
+		const at = `${addMonths(today(), -30)} 12:00:00`;
+		await connection().query('UPDATE customers SET updated_at = :at WHERE id = :id', {
+			replacements: { at, id: customer.customerId! }
+		});
+		await askForAged();
+		await askForAged();
+		const asked = await listErasures(manager);
+		expect(asked.map(({ customerId, state }) => [customerId, state])).toEqual([
+			[customer.customerId, 'asked']
+		]);
+		await decideErasure(manager, asked[0]!.id, GRANT(asked[0]!.version));
+		await askForAged();
+		expect(await Erasure.count({ where: { workshopId } })).toBe(1);
+		expect((await getRetention(manager)).preview.total).toBe(0);
+	}, 60_000);
+
 	it('leaves nothing of the person in any column of any table, and tells them', async () => {
 		const { crew, customer, known, request } = await makeRequest();
 		await openSession(customer.id);

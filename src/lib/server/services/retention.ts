@@ -1,8 +1,8 @@
-import { QueryTypes } from 'sequelize';
+import { Op, QueryTypes } from 'sequelize';
 import type { SignedInPerson } from '$lib/schemas/people';
 import type { RetainedCustomer, RetentionInput, RetentionView } from '$lib/schemas/retention';
 import { connection } from '../db/connection';
-import { Workshop } from '../db/models';
+import { Customer, Erasure, Workshop } from '../db/models';
 import { inTransaction } from '../db/transaction';
 import { notFound } from '../errors';
 import { allow } from '../policies';
@@ -19,6 +19,7 @@ const AGED = `
 		DATE_FORMAT(COALESCE(MAX(j.updated_at), c.updated_at), '%Y-%m-%d') AS lastChangedOn
 	FROM customers c LEFT JOIN jobs j ON j.customer_id = c.id
 	WHERE c.workshop_id = :workshopId
+		AND NOT EXISTS (SELECT 1 FROM erasures e WHERE e.customer_id = c.id AND e.state = 'granted')
 	GROUP BY c.id, c.name, c.updated_at
 	HAVING lastChangedOn < :before
 	ORDER BY lastChangedOn, c.id
@@ -32,6 +33,34 @@ export async function findAged(workshopId: number, years: Years, now = today()):
 		replacements: { workshopId, before },
 		type: QueryTypes.SELECT
 	});
+}
+
+/**
+ * Puts those whom the rule of their shop reaches on the list of requests, once each; a manager decides there. Nothing is
+ * deleted unseen: a customer who calls after years may still have a battery under warranty. Says how many are new.
+ */
+export async function askForAged(now = today()): Promise<number> {
+	const workshops = await Workshop.findAll({ where: { retentionYears: { [Op.ne]: null } } });
+	let asked = 0;
+	for (const { id: workshopId, retentionYears } of workshops) {
+		const aged = await findAged(workshopId, (retentionYears ?? null) as Years, now);
+		asked += await inTransaction(async (transaction) => {
+			const ids = aged.map(({ id }) => id);
+			const held = {
+				where: { id: ids },
+				order: [['id', 'ASC']] as [string, string][],
+				transaction,
+				lock: true
+			};
+			await Customer.findAll(held);
+			const before = await Erasure.findAll({ where: { customerId: ids }, transaction });
+			const known = new Set(before.map(({ customerId }) => customerId));
+			const rows = ids.filter((id) => !known.has(id)).map((customerId) => ({ workshopId, customerId }));
+			await Erasure.bulkCreate(rows, { transaction });
+			return rows.length;
+		});
+	}
+	return asked;
 }
 
 async function findWorkshop({ workshopId }: SignedInPerson): Promise<Workshop> {
