@@ -18,6 +18,8 @@ export default defineConfig({
 		projects: [
 			testProject('unit', {
 				isolate: false,
+				// A busy machine is not a fault.
+				testTimeout: 30_000,
 				include: ['src/**/*.test.ts', 'tests/*.test.ts'],
 				exclude: ['src/**/*.{component,db,settings}.test.ts']
 			}),

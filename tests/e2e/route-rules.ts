@@ -157,6 +157,7 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 	page('/my/data', 'customer', 'default'),
 	page('/my/data.zip', 'customer'),
 	owned('/my/[sheetId]', 'customer', 'acknowledge', 'ask'),
+	owned('/my/handover/[mountId].pdf', 'customer'),
 
 	api('/openapi.json', 'anyone', 'GET'),
 	api('/places', 'workshop', 'GET', 'POST'),

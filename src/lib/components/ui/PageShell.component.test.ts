@@ -56,7 +56,7 @@ describe('the entries', () => {
 	it.each([
 		['installer', false, ['Jobs', 'Batteries', 'Places', 'Remedies']],
 		['engineer', false, ['Jobs', 'Batteries', 'Places', 'Remedies', 'Books']],
-		['manager', true, ['Jobs', 'Batteries', 'Places', 'Remedies', 'Books', 'Shop', 'Mailbox']]
+		['manager', true, ['Jobs', 'Batteries', 'Places', 'Remedies', 'Books', 'Shop', 'Review', 'Mailbox']]
 	] as const)('of the %s (demo: %s)', (role, isDemo, labels) => {
 		expect(listNavigation(role, isDemo).map((entry) => entry.label)).toEqual(labels);
 	});

@@ -12,7 +12,6 @@ const ENTRIES: (NavEntry & { roles?: Role[]; demoOnly?: boolean })[] = [
 	{ label: 'Remedies', href: '/remedies' },
 	{ label: 'Books', href: '/books', roles: ['engineer', 'manager'] },
 	{ label: 'Shop', href: '/shop', roles: ['manager'] },
-	{ label: 'Deletion', href: '/erasures', roles: ['manager'] },
 	{ label: 'Review', href: '/review', roles: ['manager'] },
 	{ label: 'Mailbox', href: '/mailbox', demoOnly: true }
 ];

@@ -17,6 +17,16 @@ export function presentSheetDocument({ id, jobId, content, createdAt }: Sheet): 
 	};
 }
 
+export const presentHandoverDocument = ({ mountId, jobId, fittedOn }: Installation): CustomerDocument => ({
+	...{
+		jobId,
+		title: 'Handover of your battery (PDF)',
+		about: 'What was fitted, what to expect, when to look at it'
+	},
+	at: `${fittedOn}T00:00:00.000Z`,
+	href: `/my/handover/${mountId}.pdf`
+});
+
 type Told = Omit<HistoryEntry, 'jobId'>;
 const atMoment = (at: Date, title: string, words: string): Told => ({
 	...{ at: at.toISOString(), isDay: false, title, words }

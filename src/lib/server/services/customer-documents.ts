@@ -1,6 +1,6 @@
 import type { CustomerDocument } from '$lib/schemas/my';
-import { Sheet } from '../db/models';
-import { presentSheetDocument } from '../presenters/my-history';
+import { Installation, Sheet } from '../db/models';
+import { presentHandoverDocument, presentSheetDocument } from '../presenters/my-history';
 
 /**
  * Everything that a customer can open about these jobs of theirs, the newest first. This is the one place to add to:
@@ -8,6 +8,7 @@ import { presentSheetDocument } from '../presenters/my-history';
  */
 export async function listCustomerDocuments(jobIds: readonly number[]): Promise<CustomerDocument[]> {
 	const sheets = await Sheet.findAll({ where: { jobId: [...jobIds], withdrawnAt: null } });
-	const documents = [...sheets.map(presentSheetDocument)];
+	const installations = await Installation.findAll({ where: { jobId: [...jobIds] } });
+	const documents = [...sheets.map(presentSheetDocument), ...installations.map(presentHandoverDocument)];
 	return documents.sort((a, b) => (a.at < b.at ? 1 : -1));
 }

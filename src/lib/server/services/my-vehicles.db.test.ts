@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import { readPdf } from '../../../../tests/support/documents';
 import { FITTED } from '../../../../tests/support/fitted';
 import { makeCrew, useTestDatabase } from '../../../../tests/support/services';
 import { makeSentSheet } from '../../../../tests/support/sheets';
@@ -6,6 +7,7 @@ import { Vehicle, Job } from '../db/models';
 import { addFieldNote } from './field-notes';
 import { finishFollowUp, saveFitting } from './fittings';
 import { listMyVehicles } from './my-vehicles';
+import { writeMyHandover } from './papers';
 import { answerQuestion, askByLink } from './questions';
 import { acknowledgeSheet, openSheet } from './sheet-readers';
 
@@ -40,10 +42,18 @@ async function makeStory() {
 
 describe('what a customer finds of their own vehicles', () => {
 	it('is each vehicle with its documents, what happened in plain words, and what was learnt', async () => {
-		const { crew, sheet, token } = await makeStory();
+		const { crew, sheet, token, assessment } = await makeStory();
 		const [vehicle, ...more] = await listMyVehicles(crew.customer);
 		expect(more).toEqual([]);
-		expect(vehicle!.documents).toMatchObject([{ href: `/my/${sheet.id}` }]);
+		expect(vehicle!.documents).toMatchObject([
+			{ href: `/my/${sheet.id}` },
+			{ href: `/my/handover/${assessment.mountId}.pdf` }
+		]);
+		const { text } = await readPdf(await writeMyHandover(crew.customer, assessment.mountId));
+		expect(text).toContain('Handover');
+		const { customer: stranger } = await makeCrew();
+		const read = writeMyHandover({ ...stranger, workshopId: crew.workshopId }, assessment.mountId);
+		await expect(read).rejects.toMatchObject({ code: 'not_found' });
 		const titles = vehicle!.history.map(({ title }) => title);
 		expect([...titles].sort()).toEqual([
 			...['Battery fitted', 'Battery looked at', 'Heat label read', 'Page acknowledged', 'Page opened'],

@@ -1,7 +1,8 @@
 import type { MountPaper, Paper, PaperPhoto } from '$lib/schemas/papers';
 import type { SignedInPerson } from '$lib/schemas/people';
-import { Recommendation } from '../db/models';
-import { AppError } from '../errors';
+import { Installation, Job, Person, Recommendation } from '../db/models';
+import { AppError, notFound } from '../errors';
+import { allow } from '../policies';
 import { layHandover } from '../papers/handover';
 import type { MountRecord } from '../papers/mount-record';
 import { writePaper } from '../papers/paper-layout';
@@ -93,4 +94,15 @@ export async function writeMountPaper(
 ): Promise<Buffer> {
 	const paper = await getMountPaper(person, mountId, name);
 	return writePaper(paper, async (fileId) => (await readFileContent(person, fileId)).bytes);
+}
+
+/** The handover of a customer's own battery, read as the one of the shop reads it who noted the fitting. */
+export async function writeMyHandover(person: SignedInPerson, mountId: number): Promise<Buffer> {
+	const { workshopId, workshopName, customerId } = allow(person, 'documents.read-own');
+	const installation = await Installation.findOne({ where: { mountId, workshopId } });
+	const where = { id: installation?.jobId ?? 0, workshopId, customerId: customerId! };
+	if (!installation || (await Job.count({ where })) === 0) throw notFound('handover');
+	const { id, name, email, role } = (await Person.findByPk(installation.createdBy))!;
+	const reader = { id, workshopId, workshopName, customerId: null, name, email, role };
+	return writeMountPaper(reader, mountId, 'handover');
 }
