@@ -16,6 +16,8 @@ import {
 	type Weighed
 } from './parts';
 
+/** Of the columns of a table: what, when or agreed, and room for words. */
+const WIDTHS = ['22%', '30%', '*'];
 const SIZE = 9;
 const HEADING = 11.5;
 
@@ -46,7 +48,9 @@ const LAY_OUT: LayOut = {
 		)
 	],
 	figures: ({ lines }) => [figures(lines, SIZE)],
-	table: ({ heads, rows, empty }) => [rows.length === 0 ? { text: empty, color: MUTED } : ruled(heads, rows)],
+	table: ({ heads, rows, empty }) => [
+		rows.length === 0 ? { text: empty, color: MUTED } : ruled(heads, rows, [], WIDTHS)
+	],
 	picture: ({ svg, caption }) => [
 		{
 			stack: [
@@ -108,6 +112,9 @@ const keepWithNext: TDocumentDefinitions['pageBreakBefore'] = (
 	{ getFollowingNodesOnPage }
 ) => headlineLevel === 1 && getFollowingNodesOnPage().length === 0;
 
+/** "Job 12, fitted 3 May" in the middle of a sentence. */
+const lowerFirst = (text: string): string => text.charAt(0).toLowerCase() + text.slice(1);
+
 /** A paper as a PDF document. */
 export async function writePaper(paper: Paper, readPhoto: ReadPhoto): Promise<Buffer> {
 	const { title, under, shop, logo, madeAt, blocks } = paper;
@@ -120,13 +127,13 @@ export async function writePaper(paper: Paper, readPhoto: ReadPhoto): Promise<Bu
 			defaultStyle: { font: TEXT_FAMILY, fontSize: SIZE, lineHeight: 1.15 },
 			pageBreakBefore: keepWithNext,
 			footer: (page, count) => ({
-				text: `${shop.name}: ${title.toLowerCase()}, ${under.toLowerCase()}, page ${page} of ${count}`,
+				text: `${shop.name}: ${title.toLowerCase()}, ${lowerFirst(under)}, page ${page} of ${count}`,
 				alignment: 'right',
 				fontSize: 7,
 				margin: [0, mm(4), mm(16), 0]
 			}),
 			content: [paperHead({ shop, logo, title, under }), ...content]
 		},
-		{ title: `${title}, ${under.toLowerCase()}`, author: shop.name, madeAt: new Date(madeAt) }
+		{ title: `${title}, ${lowerFirst(under)}`, author: shop.name, madeAt: new Date(madeAt) }
 	);
 }

@@ -69,12 +69,16 @@ export function figures(lines: readonly ReportLine[], fontSize: number): Content
 }
 
 /** A table with a head; the columns named stand at the right. */
-export function ruled(heads: string[], rows: string[][], right: readonly number[] = []): Content {
+export function ruled(
+	heads: string[],
+	rows: string[][],
+	right: readonly number[] = [],
+	widths: (string | number)[] = heads.map((_, column) => (right.includes(column) ? 'auto' : '*'))
+): Content {
 	const side = (column: number) =>
 		right.includes(column) ? { alignment: 'right' as const, noWrap: true } : {};
 	const head = heads.map((text, column): TableCell => ({ text, color: MUTED, ...side(column) }));
 	const body = rows.map((cells) => cells.map((text, column): TableCell => ({ text, ...side(column) })));
-	const widths = heads.map((_, column) => (right.includes(column) ? 'auto' : '*'));
 	const made = table([head, ...body], widths);
 	return { ...made, table: { ...made.table, headerRows: 1 } };
 }
@@ -105,7 +109,7 @@ export function inColumns(items: readonly Weighed[], count: number, gap = mm(6))
 	const stacks = Array.from({ length: count }, (): Content[] => []);
 	let before = 0;
 	for (const { content, weight } of items) {
-		const column = Math.min(count - 1, Math.floor(((before + weight / 2) * count) / (whole || 1)));
+		const column = Math.min(count - 1, Math.floor(((before + weight / 2) * count) / (whole || 1) - 1e-9));
 		stacks[column]!.push(content);
 		before += weight;
 	}

@@ -2,10 +2,10 @@ import { execFile } from 'node:child_process';
 import { join } from 'node:path';
 import { describe, expect, it } from 'vitest';
 import { PROJECT } from '../../../../tests/support/source-files';
+import { pastGuard } from '../../../../tests/support/audit-guard';
 import { makeCrew, useTestDatabase, type Crew } from '../../../../tests/support/services';
 import { auditQuerySchema, type AuditQuery } from '$lib/schemas/audit';
 import { connection } from '../db/connection';
-import { migrations } from '../db/migrations';
 import { AuditEntry } from '../db/models';
 import { inTransaction } from '../db/transaction';
 import { chainHash, GENESIS } from './audit-chain';
@@ -26,17 +26,6 @@ async function makeTrail(length = 4): Promise<Crew> {
 	const crew = await makeCrew();
 	for (let id = 1; id <= length; id++) await note(crew, 'manager', 'place.changed', id, { heatC: 40 + id });
 	return crew;
-}
-
-/** Somebody with the database's own keys: takes the guards off, does it, and puts them back. */
-async function past(guards: 'update' | 'delete', statements: string[]): Promise<void> {
-	await connection().query(`DROP TRIGGER audit_entries_no_${guards}`);
-	try {
-		for (const sql of statements) await connection().query(sql);
-	} finally {
-		const guard = migrations.find(({ name }) => name.endsWith(`audit-entries-no-${guards}`));
-		await guard?.up((text) => connection().query(text));
-	}
 }
 
 interface Run {
@@ -106,7 +95,7 @@ const CASES: [string, 'update' | 'delete', (id: number) => string[], string][] =
 describe('the check of the trail', () => {
 	it.each(CASES)('finds %s, on the page and by the command', async (_what, guards, statements, found) => {
 		const crew = await makeTrail();
-		await past(guards, statements(crew.workshopId));
+		await pastGuard(guards, statements(crew.workshopId));
 		expect(await checkOwnTrail(crew.manager)).toMatchObject({ finding: found });
 		const { code, stdout } = await runCommand(String(crew.workshopId));
 		expect(stdout).toContain(
@@ -120,7 +109,7 @@ describe('the check of the trail', () => {
 		expect(await checkOwnTrail(crew.manager)).toMatchObject({ entries: 4, finding: null });
 		const where = `workshop_id = ${crew.workshopId}`;
 		const [third] = await AuditEntry.findAll({ where: { workshopId: crew.workshopId, sequence: 3 } });
-		await past('delete', [
+		await pastGuard('delete', [
 			`DELETE FROM audit_entries WHERE sequence = 4 AND ${where}`,
 			`UPDATE audit_heads SET sequence = 3, hash = '${third!.hash}' WHERE ${where}`
 		]);
@@ -132,7 +121,7 @@ describe('the check of the trail', () => {
 	it('finds an end that was written anew with right hashes, once it was seen whole before', async () => {
 		const crew = await makeTrail();
 		await checkOwnTrail(crew.manager);
-		await past('update', await rewriteLast(crew));
+		await pastGuard('update', await rewriteLast(crew));
 		const check = await checkOwnTrail(crew.manager);
 		expect(check.finding).toBe('entry 4 is not the one that was there when the trail was last found whole');
 	});

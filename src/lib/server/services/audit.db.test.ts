@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
+import { pastGuard } from '../../../../tests/support/audit-guard';
 import { makeCrew, useTestDatabase, type Crew } from '../../../../tests/support/services';
 import { connection } from '../db/connection';
-import { migrations } from '../db/migrations';
 import { AuditEntry } from '../db/models';
 import { inTransaction } from '../db/transaction';
 import { findBreak, recordBy } from './audit';
@@ -15,17 +15,6 @@ async function writeTrail(crew: Crew, length: number): Promise<void> {
 				heatC: 40 + index / 3
 			})
 		);
-	}
-}
-
-/** Somebody with the database's own keys: takes the guard off, changes rows, and puts it back. */
-async function tamper(trigger: 'update' | 'delete', sql: string): Promise<void> {
-	await connection().query(`DROP TRIGGER audit_entries_no_${trigger}`);
-	try {
-		await connection().query(sql);
-	} finally {
-		const guard = migrations.find(({ name }) => name.endsWith(`audit-entries-no-${trigger}`));
-		await guard?.up((text) => connection().query(text));
 	}
 }
 
@@ -98,7 +87,7 @@ describe('the audit trail', () => {
 	] as const)('shows %s', async (_what, trigger, sql, found) => {
 		const crew = await makeCrew();
 		await writeTrail(crew, 3);
-		await tamper(trigger, `${sql} workshop_id = ${crew.workshopId}`);
+		await pastGuard(trigger, [`${sql} workshop_id = ${crew.workshopId}`]);
 		expect(await findBreak(crew.workshopId)).toBe(found);
 	});
 });
