@@ -59,6 +59,16 @@ function findSharedLetter(mailbox: string): string {
 	return letters.find(([, , subject]) => !subject?.startsWith('Join '))?.[1] ?? 'none';
 }
 
+/** A zone of the shop's own in which no place lies. */
+async function findZone(context: APIRequestContext): Promise<string> {
+	const listed = (await (await context.get('/api/v1/own-zones')).json()) as { rows: Record[] };
+	if (listed.rows.length > 0) return of(listed.rows[0]);
+	const zone = { name: 'Empty sea', position: 9, rule: 'latitude', fromValue: 0, toValue: 1 };
+	const made = await context.post('/api/v1/own-zones', { data: zone });
+	expect(made.status(), await made.text()).toBe(201);
+	return of((await made.json()) as Record);
+}
+
 /** Ids of one demo job and everything that hangs on it, to put into the routes. */
 async function findIds(
 	context: APIRequestContext,
@@ -96,6 +106,7 @@ async function findIds(
 	expect(sent.status(), await sent.text()).toBe(201);
 	return {
 		...(await findPeople(context)),
+		zoneId: await findZone(context),
 		jobId,
 		mountId,
 		fileId: of((await sent.json()) as Record),
