@@ -6,6 +6,7 @@ import { parseArgs } from 'node:util';
 import { chromium, type BrowserContext } from '@playwright/test';
 import config from '../../tests/e2e/playwright.config';
 import { signInWith } from '../../tests/e2e/support';
+import type { ReviewZones } from '../lib/schemas/review';
 import { startApplication } from './lib/application.mjs';
 import { findMedian, formatSeconds, formatTable } from './lib/bench-table';
 import { ensureBuild } from './lib/build.mjs';
@@ -26,6 +27,19 @@ const ASKS = Number(values.asks);
 const EVERY_MS = Number(values.every);
 const WARM_UP = 5;
 const PAGE = 50;
+
+/** What the review says of a workshop has to be what stands in the tables that people write to. */
+async function requireTrue(
+	context: BrowserContext,
+	{ standing, darkDays }: { standing: number; darkDays: number }
+): Promise<void> {
+	const { all } = JSON.parse(await ask(context, `${API}/zones`)) as ReviewZones;
+	const reported = all.reportedDays + all.reportedElsewhere;
+	if (all.installations === standing && reported === darkDays) return;
+	throw new Error(
+		`The review counts ${all.installations} installations and ${reported} dark days; there are ${standing} and ${darkDays}.`
+	);
+}
 
 interface Latencies {
 	medianMs: number;
@@ -118,6 +132,7 @@ try {
 			const manager = await inventWorkshop(env, { installations: count, seed: 1 }, console.log);
 			const context = await browser.newContext({ baseURL: env.ORIGIN });
 			await signInWith(await context.newPage(), manager);
+			await requireTrue(context, manager);
 			contexts.push(context);
 		}
 		const [few, many] = contexts as [BrowserContext, BrowserContext];

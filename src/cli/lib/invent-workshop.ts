@@ -1,9 +1,23 @@
 // Fills a workshop of its own with invented installations, in the database that the environment leads to.
+import { QueryTypes } from 'sequelize';
 import { formatSeconds } from './bench-table';
 
 export interface InventedWorkshop {
 	installations: number;
 	seed: number;
+}
+
+/** Counted where people write to, without anything that the review keeps. */
+const COUNT = `
+	SELECT COUNT(DISTINCT i.id) AS standing, COUNT(DISTINCT n.installation_id, n.noted_on) AS darkDays
+	FROM installations i
+		JOIN mounts m ON m.id = i.mount_id AND m.removed_at IS NULL
+		LEFT JOIN field_notes n ON n.installation_id = i.id AND n.kind = 'cut-out'
+	WHERE i.workshop_id = :workshopId
+`;
+interface Counted {
+	standing: number;
+	darkDays: number;
 }
 
 /** For trying out alone: whoever runs the program reads it on the screen. */
@@ -14,7 +28,7 @@ export async function inventWorkshop(
 	env: NodeJS.ProcessEnv,
 	{ installations, seed }: InventedWorkshop,
 	say: (words: string) => void
-): Promise<{ email: string; password: string; workshopId: number }> {
+): Promise<{ email: string; password: string; standing: number; darkDays: number }> {
 	Object.assign(process.env, env);
 	// Only now: what these read of the environment they read when they are loaded or first used.
 	const { closeConnection, connection } = await import('../../lib/server/db/connection');
@@ -37,7 +51,16 @@ export async function inventWorkshop(
 		say(
 			`${installations} installations invented in ${formatSeconds(invented - begun)}, their review made in ${formatSeconds(made - invented)}.`
 		);
-		return { email, password: PASSWORD, workshopId };
+		const [counted] = await connection().query<Counted>(COUNT, {
+			replacements: { workshopId },
+			type: QueryTypes.SELECT
+		});
+		return {
+			email,
+			password: PASSWORD,
+			standing: Number(counted!.standing),
+			darkDays: Number(counted!.darkDays)
+		};
 	} finally {
 		await closeConnection();
 	}
