@@ -5,8 +5,8 @@ import { connection } from '../../db/connection';
 import type { Cohort } from './predicted-days';
 import { MILLION, MONTH_NUMBERS } from './review-row';
 
-/** Installations of one kind: in one zone, place or none in particular, of one verdict, fitted in one month. */
-export interface SumsRow extends Cohort {
+/** How many installations there are of a verdict, in one zone, place, month or all of them. */
+export interface CountRow {
 	group: string;
 	verdict: Verdict;
 	installations: number;
@@ -21,8 +21,12 @@ export interface SumsRow extends Cohort {
 	sheetsMissing: number;
 }
 
-/** What the rows are told apart by, beside verdict and month. */
-export type Grouping = 'zone' | 'place' | 'nothing';
+export interface CohortRow extends Cohort {
+	group: string;
+}
+
+/** What the rows are told apart by. */
+export type Grouping = 'zone' | 'place' | 'month' | 'nothing';
 
 const ZONES = {
 	climate: "COALESCE(p.computed_zone, p.climate_zone, '')",
@@ -58,60 +62,85 @@ function conditionsOf(workshopId: number, { kind, zone, place, verdict, since, u
 	return { where: conditions.join(' AND '), replacements };
 }
 
-const MONTH_SUMS = MONTH_NUMBERS.map((number) => `SUM(s.m${number}) AS m${number}`).join(', ');
+const groupOf = (grouping: Grouping, kind: ReviewScope['kind']): string =>
+	({
+		zone: ZONES[kind],
+		place: 's.place_id',
+		month: 'CAST(s.fitted_month AS CHAR)',
+		nothing: "''"
+	})[grouping];
 
-function queryFor(grouping: Grouping, kind: ReviewScope['kind'], where: string): string {
-	const group = { zone: ZONES[kind], place: 's.place_id', nothing: "''" }[grouping];
-	return `
-		SELECT ${group} AS grouped, s.verdict, CAST(s.fitted_month AS CHAR) AS fittedMonth,
-			SUM(s.installations) AS installations, SUM(s.known) AS known, SUM(s.never_dark) AS neverDark,
-			SUM(s.first_month) AS firstMonth, ${MONTH_SUMS},
-			SUM(s.dark_days) AS darkDays, SUM(s.known_dark_days) AS knownDarkDays,
-			SUM(s.known_not_heat_days) AS knownNotHeatDays, SUM(s.gone_dark) AS goneDark,
-			SUM(s.overrides) AS overrides, SUM(s.sheets_waiting) AS sheetsWaiting,
-			SUM(s.sheets_missing) AS sheetsMissing
-		FROM review_months s LEFT JOIN places p ON p.id = s.place_id
-		WHERE ${where}
-		GROUP BY grouped, s.verdict, s.fitted_month
-		HAVING installations > 0
-	`;
-}
+const COUNTS: Record<Exclude<keyof CountRow, 'group' | 'verdict'>, string> = {
+	installations: 'installations',
+	known: 'known',
+	neverDark: 'never_dark',
+	darkDays: 'dark_days',
+	knownDarkDays: 'known_dark_days',
+	knownNotHeatDays: 'known_not_heat_days',
+	goneDark: 'gone_dark',
+	overrides: 'overrides',
+	sheetsWaiting: 'sheets_waiting',
+	sheetsMissing: 'sheets_missing'
+};
+type Count = keyof typeof COUNTS;
+const COUNT_NAMES = Object.keys(COUNTS) as Count[];
 
-type Stored = Record<string, string | number> & { verdict: Verdict; fittedMonth: string };
+/** As floating point, which takes a third of the time of decimals and holds whole numbers of this size exactly. */
+const add = (column: string): string => `SUM(s.${column} * 1e0)`;
+const SUMS = COUNT_NAMES.map((name) => `${add(COUNTS[name])} AS ${name}`).join(', ');
+const MONTH_SUMS = MONTH_NUMBERS.map((number) => `${add(`m${number}`)} AS m${number}`).join(', ');
+const FROM = 'FROM review_months s LEFT JOIN places p ON p.id = s.place_id';
 
-function readSums(stored: Stored): SumsRow {
-	const number = (name: string): number => Number(stored[name]);
-	return {
-		group: String(stored.grouped),
-		verdict: stored.verdict,
-		month: stored.fittedMonth.slice(0, 7),
-		firstMonthDays: number('firstMonth') / MILLION,
-		monthDays: MONTH_NUMBERS.map((month) => number(`m${month}`) / MILLION),
-		installations: number('installations'),
-		known: number('known'),
-		neverDark: number('neverDark'),
-		darkDays: number('darkDays'),
-		knownDarkDays: number('knownDarkDays'),
-		knownNotHeatDays: number('knownNotHeatDays'),
-		goneDark: number('goneDark'),
-		overrides: number('overrides'),
-		sheetsWaiting: number('sheetsWaiting'),
-		sheetsMissing: number('sheetsMissing')
-	};
-}
+type Stored = Record<string, string | number>;
 
-/** The sums of a workshop within a scope. */
-export async function listSums(
+/** The counts of a workshop within a scope. */
+export async function listCounts(
 	workshopId: number,
 	scope: ReviewScope,
 	grouping: Grouping
-): Promise<SumsRow[]> {
+): Promise<CountRow[]> {
 	const { where, replacements } = conditionsOf(workshopId, scope);
-	const rows = await connection().query<Stored>(queryFor(grouping, scope.kind, where), {
-		replacements,
-		type: QueryTypes.SELECT
-	});
-	return rows.map(readSums);
+	const rows = await connection().query<Stored>(
+		`SELECT ${groupOf(grouping, scope.kind)} AS grouped, s.verdict, ${SUMS}
+			${FROM} WHERE ${where} GROUP BY grouped, s.verdict HAVING installations > 0`,
+		{ replacements, type: QueryTypes.SELECT }
+	);
+	return rows.map((row) => ({
+		group: String(row.grouped),
+		verdict: row.verdict as Verdict,
+		...(Object.fromEntries(COUNT_NAMES.map((name) => [name, Number(row[name])])) as Record<Count, number>)
+	}));
+}
+
+/** What is expected of the installations of a workshop within a scope, by the month in which they were fitted. */
+export async function listCohorts(
+	workshopId: number,
+	scope: ReviewScope,
+	grouping: Grouping
+): Promise<CohortRow[]> {
+	const { where, replacements } = conditionsOf(workshopId, scope);
+	const rows = await connection().query<Stored>(
+		`SELECT ${groupOf(grouping, scope.kind)} AS grouped, CAST(s.fitted_month AS CHAR) AS fittedMonth,
+				${add('first_month')} AS firstMonth, ${MONTH_SUMS}
+			${FROM} WHERE ${where} AND s.known > 0 GROUP BY grouped, s.fitted_month`,
+		{ replacements, type: QueryTypes.SELECT }
+	);
+	return rows.map((row) => ({
+		group: String(row.grouped),
+		month: String(row.fittedMonth).slice(0, 7),
+		firstMonthDays: Number(row.firstMonth) / MILLION,
+		monthDays: MONTH_NUMBERS.map((number) => Number(row[`m${number}`]) / MILLION)
+	}));
+}
+
+/** The zones in which something has been fitted; the index on them is skipped through, not read. */
+export async function findZones(workshopId: number, kind: ReviewScope['kind']): Promise<string[]> {
+	const column = kind === 'own' ? 'own_zone_id' : 'zone';
+	const rows = await connection().query<{ zone: string | number }>(
+		`SELECT ${column} AS zone FROM review_rows WHERE workshop_id = :workshopId GROUP BY ${column}`,
+		{ replacements: { workshopId }, type: QueryTypes.SELECT }
+	);
+	return rows.map(({ zone }) => shownZone(kind, zone));
 }
 
 const COUNTED: Record<Exclude<ReviewList, 'overdue'>, string> = {

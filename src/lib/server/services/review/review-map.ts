@@ -2,19 +2,19 @@ import type { SignedInPerson } from '$lib/schemas/people';
 import type { ReviewFilter, ReviewMap, ReviewPlace } from '$lib/schemas/review';
 import { Place } from '../../db/models';
 import { allow } from '../../policies';
-import { listSums, type SumsRow } from './read-sums';
+import { listCounts, type CountRow } from './read-sums';
 import { countVerdicts } from './review-zones';
 
 /** Where the installations tour, the place with the most first. */
 export async function reviewMap(person: SignedInPerson, filter: ReviewFilter): Promise<ReviewMap> {
 	allow(person, 'review.read');
 	const { workshopId } = person;
-	const byPlace = new Map<number, SumsRow[]>();
-	for (const row of await listSums(workshopId, filter, 'place')) {
+	const byPlace = new Map<number, CountRow[]>();
+	for (const row of await listCounts(workshopId, filter, 'place')) {
 		const placeId = Number(row.group);
 		byPlace.set(placeId, [...(byPlace.get(placeId) ?? []), row]);
 	}
-	const total = (rows: readonly SumsRow[]): number => rows.reduce((sum, row) => sum + row.installations, 0);
+	const total = (rows: readonly CountRow[]): number => rows.reduce((sum, row) => sum + row.installations, 0);
 	const places = await Place.findAll({ where: { id: [...byPlace.keys()], workshopId } });
 	const rows = places.map((place): ReviewPlace => {
 		const sums = byPlace.get(place.id)!;

@@ -5,7 +5,7 @@ import { connection } from '../../db/connection';
 import { allow } from '../../policies';
 import { today } from '../days';
 import { listMonths, monthOf, monthsBefore, predictInMonth } from './predicted-days';
-import { listSums, storedZone } from './read-sums';
+import { listCohorts, listCounts, storedZone } from './read-sums';
 import { countVerdicts } from './review-zones';
 
 /** So many months, that of today included. */
@@ -50,16 +50,17 @@ export async function reviewTrends(person: SignedInPerson, scope: ReviewScope): 
 	const { workshopId } = person;
 	const now = today();
 	const from = monthsBefore(monthOf(now), MONTHS_SHOWN - 1);
-	const [sums, reported] = await Promise.all([
-		listSums(workshopId, scope, 'nothing'),
+	const [counts, cohorts, reported] = await Promise.all([
+		listCounts(workshopId, scope, 'month'),
+		listCohorts(workshopId, scope, 'nothing'),
 		countReported(workshopId, scope, from)
 	]);
 	return {
 		on: now,
 		months: listMonths(from, monthOf(now)).map((month) => ({
 			month,
-			fitted: countVerdicts(sums.filter((row) => row.month === month)),
-			predictedDays: sums.reduce((total, cohort) => total + predictInMonth(cohort, month, now), 0),
+			fitted: countVerdicts(counts.filter(({ group }) => group.startsWith(month))),
+			predictedDays: cohorts.reduce((total, cohort) => total + predictInMonth(cohort, month, now), 0),
 			reportedDays: reported.get(month) ?? 0
 		}))
 	};

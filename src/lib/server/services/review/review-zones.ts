@@ -16,7 +16,7 @@ import { OwnZone } from '../../db/models';
 import { allow } from '../../policies';
 import { today } from '../days';
 import { predictUntil } from './predicted-days';
-import { listSums, shownZone, type SumsRow } from './read-sums';
+import { findZones, listCohorts, listCounts, shownZone, type CohortRow, type CountRow } from './read-sums';
 import { conditionsOn } from './review-list';
 
 const CONFIDENCE = 0.95;
@@ -28,19 +28,24 @@ function ratioOf(reported: number, predicted: number): ReviewFigures['ratio'] {
 	return { value: reported / predicted, ...poissonRatioInterval(reported, predicted, CONFIDENCE) };
 }
 
-export function countVerdicts(rows: readonly SumsRow[]): Record<Verdict, number> {
+export function countVerdicts(rows: readonly CountRow[]): Record<Verdict, number> {
 	const counts: Record<Verdict, number> = { 'rides-it-out': 0, 'runs-close': 0, 'cuts-out': 0 };
 	for (const { verdict, installations } of rows) counts[verdict] += installations;
 	return counts;
 }
 
-/** The figures of some sums, up to the end of today. */
-export function figuresOf(rows: readonly SumsRow[], overdue: number, now: string): ReviewFigures {
-	const sum = (read: (row: SumsRow) => number): number => rows.reduce((total, row) => total + read(row), 0);
+/** The figures of some counts and what was expected of them, up to the end of today. */
+export function figuresOf(
+	rows: readonly CountRow[],
+	cohorts: readonly CohortRow[],
+	overdue: number,
+	now: string
+): ReviewFigures {
+	const sum = (read: (row: CountRow) => number): number => rows.reduce((total, row) => total + read(row), 0);
 	const installations = sum((row) => row.installations);
 	const known = sum((row) => row.known);
 	const never = sum((row) => row.neverDark);
-	const predictedDays = sum((row) => predictUntil(row, now));
+	const predictedDays = cohorts.reduce((total, cohort) => total + predictUntil(cohort, now), 0);
 	const reportedDays = sum((row) => row.knownDarkDays);
 	return {
 		installations,
@@ -108,22 +113,24 @@ export async function reviewZones(
 	const { workshopId } = person;
 	const { kind } = filter;
 	const now = today();
-	const [sums, overdue, { nameOf, compare }] = await Promise.all([
-		listSums(workshopId, filter, 'zone'),
+	const [counts, cohorts, overdue, { nameOf, compare }] = await Promise.all([
+		listCounts(workshopId, filter, 'zone'),
+		listCohorts(workshopId, filter, 'zone'),
 		countOverdue(workshopId, filter),
 		nameZones(workshopId, kind)
 	]);
-	const byZone = new Map<string, SumsRow[]>();
-	for (const row of sums) {
-		const zone = shownZone(kind, row.group);
-		byZone.set(zone, [...(byZone.get(zone) ?? []), row]);
-	}
-	const rows = [...byZone.keys()].sort(compare).map((zone): ReviewZone => ({
-		...{ zone, name: nameOf(zone) },
-		...figuresOf(byZone.get(zone)!, overdue.get(zone) ?? 0, now)
-	}));
+	const zones = [...new Set(counts.map(({ group }) => group))].map((group): ReviewZone => {
+		const isOf = (row: { group: string }): boolean => row.group === group;
+		const zone = shownZone(kind, group);
+		const figures = figuresOf(counts.filter(isOf), cohorts.filter(isOf), overdue.get(zone) ?? 0, now);
+		return { zone, name: nameOf(zone), ...figures };
+	});
 	const allOverdue = [...overdue.values()].reduce((total, count) => total + count, 0);
-	return { on: now, rows, all: figuresOf(sums, allOverdue, now) };
+	return {
+		on: now,
+		rows: zones.sort((a, b) => compare(a.zone, b.zone)),
+		all: figuresOf(counts, cohorts, allOverdue, now)
+	};
 }
 
 /** The zones that a list can be narrowed to, and the day up to which is counted. */
@@ -133,10 +140,12 @@ export async function listZones(
 ): Promise<{ on: string; zones: { value: string; label: string }[] }> {
 	allow(person, 'review.read');
 	const { workshopId } = person;
-	const [sums, { nameOf, compare }] = await Promise.all([
-		listSums(workshopId, { kind }, 'zone'),
+	const [zones, { nameOf, compare }] = await Promise.all([
+		findZones(workshopId, kind),
 		nameZones(workshopId, kind)
 	]);
-	const zones = [...new Set(sums.map(({ group }) => shownZone(kind, group)))].sort(compare);
-	return { on: today(), zones: zones.map((value) => ({ value, label: nameOf(value) })) };
+	return {
+		on: today(),
+		zones: zones.sort(compare).map((value) => ({ value, label: nameOf(value) }))
+	};
 }
