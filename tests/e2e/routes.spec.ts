@@ -61,12 +61,12 @@ function findSharedLetter(mailbox: string): string {
 
 /** A zone of the shop's own in which no place lies. */
 async function findZone(context: APIRequestContext): Promise<string> {
-	const listed = (await (await context.get('/api/v1/own-zones')).json()) as { rows: Record[] };
-	if (listed.rows.length > 0) return of(listed.rows[0]);
+	const { rows } = await read<{ rows: { id: number }[] }>(context, '/api/v1/own-zones');
+	if (rows[0]) return String(rows[0].id);
 	const zone = { name: 'Empty sea', position: 9, rule: 'latitude', fromValue: 0, toValue: 1 };
 	const made = await context.post('/api/v1/own-zones', { data: zone });
 	expect(made.status(), await made.text()).toBe(201);
-	return of((await made.json()) as Record);
+	return String(((await made.json()) as { id: number }).id);
 }
 
 /** Ids of one demo job and everything that hangs on it, to put into the routes. */

@@ -1,4 +1,4 @@
-import { geoBounds, geoEquirectangular, geoPath } from 'd3-geo';
+import { geoBounds, geoEquirectangular, geoPath, type GeoProjection } from 'd3-geo';
 import { feature } from 'topojson-client';
 import type { GeometryCollection, Topology } from 'topojson-specification';
 import land from 'world-atlas/land-110m.json' with { type: 'json' };
@@ -97,13 +97,28 @@ const round = (px: number): number => Math.round(px * 10) / 10;
 const sayMark = ({ name, installations, goneDark }: ReviewPlace): string =>
 	`${name}: ${installations} ${installations === 1 ? 'installation' : 'installations'}, ${goneDark} reported dark`;
 
+/** The world's coasts take longer to draw than all the rest: those of the frames last shown are kept. */
+const drawnCoasts = new Map<string, string>();
+const MOST_DRAWN = 50;
+
+function drawCoasts(projection: GeoProjection, frame: string): string {
+	const drawn = drawnCoasts.get(frame) ?? geoPath(projection).digits(1)(COASTS) ?? '';
+	// The one asked for last goes to the end; the one not asked for the longest is forgotten.
+	drawnCoasts.delete(frame);
+	drawnCoasts.set(frame, drawn);
+	const [oldest = ''] = drawnCoasts.keys();
+	if (drawnCoasts.size > MOST_DRAWN) drawnCoasts.delete(oldest);
+	return drawn;
+}
+
 /** Coasts and marks as numbers and paths; the page draws them. */
 export function drawReviewMap(places: readonly ReviewPlace[]): MapDrawing {
 	const extent: [[number, number], [number, number]] = [
 		[EDGE, EDGE],
 		[WIDTH - EDGE, HEIGHT - EDGE]
 	];
-	const projection = geoEquirectangular().fitExtent(extent, frameOf(places) as GeoJSON.MultiPoint);
+	const frame = frameOf(places);
+	const projection = geoEquirectangular().fitExtent(extent, frame as GeoJSON.MultiPoint);
 	projection.clipExtent([
 		[0, 0],
 		[WIDTH, HEIGHT]
@@ -127,5 +142,5 @@ export function drawReviewMap(places: readonly ReviewPlace[]): MapDrawing {
 			isNameLeft: named?.isNameLeft ?? false
 		};
 	});
-	return { width: WIDTH, height: HEIGHT, land: geoPath(projection).digits(1)(COASTS) ?? '', marks };
+	return { width: WIDTH, height: HEIGHT, land: drawCoasts(projection, JSON.stringify(frame)), marks };
 }
