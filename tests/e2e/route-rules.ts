@@ -113,6 +113,7 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 	owned('/mounts/[mountId]/cable', 'workshop', 'save', 'takeBack'),
 	owned('/mounts/[mountId]/pre-drill', 'workshop', 'save', 'sign'),
 	owned('/mounts/[mountId]/fitted', 'workshop', 'save', 'done'),
+	owned('/mounts/[mountId]/photos', 'workshop', 'add', 'caption', 'picture', 'remove', 'restore'),
 	owned('/mounts/[mountId]/follow-ups.ics', 'workshop'),
 	owned('/mounts/[mountId]/field', 'workshop'),
 	owned('/mounts/[mountId]/field/new/[kind]', 'workshop', 'default'),

@@ -5,6 +5,7 @@ import { loadForm, readPageForm, saveForm } from '$lib/server/http/forms';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { pageId } from '$lib/server/http/page-id';
 import { assessJob } from '$lib/server/services/assessments';
+import { listMountPictures } from '$lib/server/services/files';
 import { getJob } from '$lib/server/services/jobs';
 import { listSentLetters, sendLetterAgain } from '$lib/server/services/sent-letters';
 import { answerQuestion, listQuestions } from '$lib/server/services/questions';
@@ -19,11 +20,16 @@ function chooseQuestion(questions: readonly Question[], asked: string | null): Q
 export const load: PageServerLoad = async (event) => {
 	const person = guard(event, 'jobs.read');
 	const jobId = pageId(event.params.jobId);
-	const [job, questions, letters] = await orPageError(
-		Promise.all([getJob(person, jobId), listQuestions(person, jobId), listSentLetters(person, jobId)])
+	const [job, questions, letters, pictures] = await orPageError(
+		Promise.all([
+			getJob(person, jobId),
+			listQuestions(person, jobId),
+			listSentLetters(person, jobId),
+			listMountPictures(person, jobId)
+		])
 	);
 	const toAnswer = chooseQuestion(questions, event.url.searchParams.get('question'));
-	return { job, questions, letters, toAnswer, answerForm: await loadForm(answerFormSchema) };
+	return { job, questions, letters, pictures, toAnswer, answerForm: await loadForm(answerFormSchema) };
 };
 
 export const actions: Actions = {

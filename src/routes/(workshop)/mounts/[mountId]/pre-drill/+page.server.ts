@@ -1,9 +1,11 @@
+import type { FileView } from '$lib/schemas/files';
 import { preDrillSignatureSchema, type PreDrillView } from '$lib/schemas/pre-drill';
 import { fromPreDrillForm, preDrillFormSchema, toPreDrillForm } from '$lib/schemas/pre-drill-form';
 import { saveEdited } from '$lib/server/http/edit-form';
 import { loadForm, saveForm } from '$lib/server/http/forms';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { pageId } from '$lib/server/http/page-id';
+import { listMountFiles } from '$lib/server/services/files';
 import { getJob } from '$lib/server/services/jobs';
 import { getPreDrill, savePreDrill, signPreDrill } from '$lib/server/services/pre-drill';
 import { openMount } from '../open-mount';
@@ -15,18 +17,29 @@ function answersOf({ questions }: PreDrillView) {
 	);
 }
 
+/** How many photos each question has. */
+function countPhotos(files: readonly FileView[]): Record<string, number> {
+	const counts: Record<string, number> = {};
+	for (const { kind, questionKey } of files) {
+		if (kind === 'photo' && questionKey !== null) counts[questionKey] = (counts[questionKey] ?? 0) + 1;
+	}
+	return counts;
+}
+
 export const load: PageServerLoad = async (event) => {
 	const person = guard(event, 'mounts.write');
 	const mount = await openMount(person, event.params);
 	const check = await orPageError(getPreDrill(person, mount.id));
 	const job = await orPageError(getJob(person, mount.jobId));
 	const { version } = check;
+	const files = await orPageError(listMountFiles(person, mount.id));
 	const assessmentId = job.standings.find(({ mountId }) => mountId === mount.id)?.assessmentId ?? null;
 	return {
 		...{ mount, check, assessmentId },
 		job: { id: job.id, number: job.number, chemistry: job.battery?.chemistry ?? '' },
 		form: await loadForm(preDrillFormSchema, { version, ...toPreDrillForm(answersOf(check)) }),
 		signature: await loadForm(preDrillSignatureSchema, { version, name: person.name }),
+		photosOf: countPhotos(files),
 		isSaved: event.url.searchParams.has('saved'),
 		isSigned: event.url.searchParams.has('signed')
 	};
