@@ -159,6 +159,7 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 	page('/my/data.zip', 'customer'),
 	owned('/my/[sheetId]', 'customer', 'acknowledge', 'ask'),
 	owned('/my/handover/[mountId].pdf', 'customer'),
+	owned('/my/recommendation/[recommendationId].pdf', 'customer'),
 
 	api('/openapi.json', 'anyone', 'GET'),
 	api('/places', 'workshop', 'GET', 'POST'),

@@ -164,6 +164,10 @@ const ROWS: readonly QuestionRow[] = [
 
 export const PRE_DRILL_KEYS = ROWS.map(({ key }) => key);
 
+/** The matter of a question, in a word or two; nothing for one that is no longer asked. */
+export const preDrillLabelOf = (key: string | null): string =>
+	ROWS.find((row) => row.key === key)?.label ?? '';
+
 /** The questions for a position and a battery, in order. */
 export function preDrillQuestionsFor(of: PreDrillCase): PreDrillQuestion[] {
 	const say = (words: QuestionRow['question']): string => (typeof words === 'string' ? words : words(of));

@@ -1,5 +1,5 @@
 import type { Content, TDocumentDefinitions } from 'pdfmake/interfaces';
-import type { Paper, PaperBlock } from '$lib/schemas/papers';
+import type { Paper, PaperBlock, PaperPhoto } from '$lib/schemas/papers';
 import { makePdf, TEXT_FAMILY } from './make-pdf';
 import {
 	figures,
@@ -23,6 +23,26 @@ const HEADING = 11.5;
 
 /** The content of a photo, as JPEG. */
 export type ReadPhoto = (fileId: number) => Promise<Buffer>;
+
+/** Photos in two columns, each with its caption. */
+export async function layPhotos(photos: readonly PaperPhoto[], read: ReadPhoto): Promise<Content> {
+	const shown = await Promise.all(
+		photos.map(async ({ fileId, caption }): Promise<Content> => {
+			const image = `data:image/jpeg;base64,${(await read(fileId)).toString('base64')}`;
+			return {
+				stack: [
+					{ image, fit: [mm(86), mm(80)] },
+					{ text: caption, color: MUTED }
+				],
+				...{ unbreakable: true, margin: [0, 0, 0, mm(4)] as [number, number, number, number] }
+			};
+		})
+	);
+	return inColumns(
+		shown.map((content) => ({ content, weight: 1 })),
+		2
+	);
+}
 
 const weighed = (content: Content, text: string, charactersALine: number): Weighed => ({
 	content,
@@ -60,26 +80,7 @@ const LAY_OUT: LayOut = {
 			unbreakable: true
 		}
 	],
-	photos: async ({ photos }, read) => {
-		const shown = await Promise.all(
-			photos.map(async ({ fileId, caption }): Promise<Content> => {
-				const image = `data:image/jpeg;base64,${(await read(fileId)).toString('base64')}`;
-				return {
-					stack: [
-						{ image, fit: [mm(86), mm(80)] },
-						{ text: caption, color: MUTED }
-					],
-					...{ unbreakable: true, margin: [0, 0, 0, mm(4)] as [number, number, number, number] }
-				};
-			})
-		);
-		return [
-			inColumns(
-				shown.map((content) => ({ content, weight: 1 })),
-				2
-			)
-		];
-	},
+	photos: async ({ photos }, read) => [await layPhotos(photos, read)],
 	cautions: ({ cautions }) => [
 		inColumns(
 			cautions.map(({ title, text }) =>

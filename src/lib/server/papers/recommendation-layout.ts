@@ -5,6 +5,7 @@ import {
 	listLegLines,
 	listOpenLines,
 	listOutlookLines,
+	PHOTOS_TITLE,
 	sayCheck,
 	sayDark
 } from '$lib/components/report/print/paper-lines';
@@ -43,6 +44,8 @@ export interface PageScales {
 
 /** What stands last on the first page, by this name in the layout. */
 export const FIRST_PAGE_END = 'first-page-end';
+/** And what stands first on the pages of photos. */
+export const PHOTOS_START = 'photos-start';
 
 const gap = (height: number): Content => ({ text: '', margin: [0, 0, 0, mm(height)] });
 
@@ -243,8 +246,24 @@ function secondPage(paper: RecommendationPaper, scale: number): Content {
 	};
 }
 
-/** The recommendation on two A4 pages, as large as `scales` says. */
-export function layOutRecommendation(paper: RecommendationPaper, scales: PageScales): TDocumentDefinitions {
+/** What was photographed, on pages of its own, where anything was. */
+const photoPages = (photos: Content | null): Content[] =>
+	photos === null
+		? []
+		: [
+				{
+					...{ text: PHOTOS_TITLE, id: PHOTOS_START, bold: true, fontSize: 9.5 },
+					...{ pageBreak: 'before', margin: [0, 0, 0, mm(2)] }
+				},
+				{ stack: [photos], fontSize: 8.4 }
+			];
+
+/** The recommendation on two A4 pages, as large as `scales` says, and what was photographed after them. */
+export function layOutRecommendation(
+	paper: RecommendationPaper,
+	scales: PageScales,
+	photos: Content | null
+): TDocumentDefinitions {
 	const { id, jobNumber } = paper.recommendation;
 	return {
 		pageSize: 'A4',
@@ -256,6 +275,6 @@ export function layOutRecommendation(paper: RecommendationPaper, scales: PageSca
 			fontSize: 6.5,
 			margin: [0, mm(3), mm(14), 0]
 		}),
-		content: [firstPage(paper, scales.first), secondPage(paper, scales.second)]
+		content: [firstPage(paper, scales.first), secondPage(paper, scales.second), ...photoPages(photos)]
 	};
 }

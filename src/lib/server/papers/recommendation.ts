@@ -3,6 +3,7 @@ import { listCautions } from '$lib/format/cautions';
 import { dayLimitsOf } from '$lib/format/heat-limits';
 import type { MountOutcome } from '$lib/schemas/assessments';
 import type { CautionLine } from '$lib/schemas/caution-texts';
+import type { PaperPhoto } from '$lib/schemas/papers';
 import type { OutlookReport } from '$lib/schemas/outlook-reports';
 import type { Outlook } from '$lib/schemas/outlooks';
 import type { RecommendationDocument, RecommendationView } from '$lib/schemas/recommendations';
@@ -24,18 +25,21 @@ export interface RecommendationPaper {
 	ledger: LedgerEntry[];
 	report: AssessmentReport;
 	outlook: OutlookReport;
+	/** What was photographed before it was issued, the picture of the mount first. */
+	photos: PaperPhoto[];
 }
 
 /** What was recommended and what its estimate says, as the paper tells it. */
 export function readRecommendation(
 	{ recommendation, assessment, workshop, logo, customer, others }: RecommendationDocument,
-	{ outlook, report }: { outlook: Outlook; report: OutlookReport }
+	{ outlook, report }: { outlook: Outlook; report: OutlookReport },
+	photos: PaperPhoto[]
 ): RecommendationPaper {
 	const { inputs, result } = assessment;
 	const { chemistry } = inputs.battery;
 	const { positionKind } = inputs.mount.survey;
 	return {
-		...{ recommendation, workshop, logo, others },
+		...{ recommendation, workshop, logo, others, photos },
 		customer: { name: inputs.customerName, ...customer },
 		chemistry,
 		cautions: recommendation.cautions ?? listCautions(chemistry),

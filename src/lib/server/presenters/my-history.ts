@@ -17,6 +17,17 @@ export function presentSheetDocument({ id, jobId, content, createdAt }: Sheet): 
 	};
 }
 
+/** The whole recommendation behind such pages, once for each however many were sent. */
+export function presentRecommendationDocuments(sheets: readonly Sheet[]): CustomerDocument[] {
+	const newest = new Map(sheets.map((sheet) => [sheet.recommendationId, sheet]));
+	return [...newest.values()].map(({ jobId, content, createdAt, recommendationId }) => ({
+		...{ jobId, title: `Recommendation: ${content.mountName} (PDF)` },
+		about: 'All that went into it, its figures and its cautions',
+		at: createdAt.toISOString(),
+		href: `/my/recommendation/${recommendationId}.pdf`
+	}));
+}
+
 export const presentHandoverDocument = ({ mountId, jobId, fittedOn }: Installation): CustomerDocument => ({
 	...{
 		jobId,

@@ -7,7 +7,7 @@ import { Vehicle, Job } from '../db/models';
 import { addFieldNote } from './field-notes';
 import { finishFollowUp, saveFitting } from './fittings';
 import { listMyVehicles } from './my-vehicles';
-import { writeMyHandover } from './papers';
+import { writeMyHandover, writeMyRecommendation } from './papers';
 import { answerQuestion, askByLink } from './questions';
 import { acknowledgeSheet, openSheet } from './sheet-readers';
 
@@ -47,13 +47,21 @@ describe('what a customer finds of their own vehicles', () => {
 		expect(more).toEqual([]);
 		expect(vehicle!.documents).toMatchObject([
 			{ href: `/my/${sheet.id}` },
+			{ href: `/my/recommendation/${sheet.recommendationId}.pdf` },
 			{ href: `/my/handover/${assessment.mountId}.pdf` }
 		]);
 		const { text } = await readPdf(await writeMyHandover(crew.customer, assessment.mountId));
 		expect(text).toContain('Handover');
-		const { customer: stranger } = await makeCrew();
-		const read = writeMyHandover({ ...stranger, workshopId: crew.workshopId }, assessment.mountId);
-		await expect(read).rejects.toMatchObject({ code: 'not_found' });
+		const recommended = await readPdf(await writeMyRecommendation(crew.customer, sheet.recommendationId));
+		expect(recommended.text).toContain(`Recommendation ${sheet.recommendationId}`);
+		const { customer } = await makeCrew();
+		const stranger = { ...customer, workshopId: crew.workshopId };
+		for (const read of [
+			writeMyHandover(stranger, assessment.mountId),
+			writeMyRecommendation(stranger, sheet.recommendationId)
+		]) {
+			await expect(read).rejects.toMatchObject({ code: 'not_found' });
+		}
 		const titles = vehicle!.history.map(({ title }) => title);
 		expect([...titles].sort()).toEqual([
 			...['Battery fitted', 'Battery looked at', 'Heat label read', 'Page acknowledged', 'Page opened'],

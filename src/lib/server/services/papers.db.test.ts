@@ -4,9 +4,11 @@ import { readPdf } from '../../../../tests/support/documents';
 import { FITTED, makeFitted } from '../../../../tests/support/fitted';
 import { makeCrew, useTestDatabase } from '../../../../tests/support/services';
 import { listCautions } from '$lib/format/cautions';
+import { asIncoming, telephonePhoto } from '../../../../tests/support/pictures';
 import { assessJob } from './assessments';
 import { updateCustomer } from './customers';
 import { addFieldNote } from './field-notes';
+import { addFile, changeFile } from './files';
 import { saveFitting } from './fittings';
 import { getJob } from './jobs';
 import { writeMountPaper, writeRecommendationPdf } from './papers';
@@ -67,6 +69,34 @@ describe('a recommendation as a document', () => {
 			expect(pages).toBe(2);
 			expect(text).toContain('Decided by Ilse Tarn');
 			for (const word of reason.split(' ')) expect(text).toContain(word);
+		}
+	);
+
+	it(
+		'shows after its two pages what was photographed before it was issued, and nothing of later',
+		{ timeout: LONG_MS },
+		async () => {
+			const { installer } = await makeCrew();
+			const { jobId } = await makeAssessableJob(installer);
+			const [, ofCool] = await assessJob(installer, jobId);
+			const { mountId } = ofCool!;
+			const add = async (change: { caption: string; isMountPicture?: boolean }, place = {}) => {
+				const { id, version } = await asIncoming('a.jpg', await telephonePhoto(), (file) =>
+					addFile(installer, mountId, file, place)
+				);
+				return changeFile(installer, id, { version, ...change });
+			};
+			await add({ caption: 'Beside the guard' }, { questionKey: 'fuse' });
+			await add({ caption: 'From the left', isMountPicture: true });
+			const { id } = await makeRecommendation(installer, { assessmentId: ofCool!.id });
+			await add({ caption: 'Long after' });
+			const { pages, text, inkShares } = await readPdf(await writeRecommendationPdf(installer, id));
+			expect(pages).toBe(3);
+			expect(inkShares[2]).toBeGreaterThan(0.05);
+			const told = inOneLine(text);
+			expect(told).toContain('The mount: From the left');
+			expect(told).toContain('Before drilling, fuse: Beside the guard');
+			expect(told).not.toContain('Long after');
 		}
 	);
 

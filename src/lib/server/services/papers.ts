@@ -1,14 +1,15 @@
 import type { MountPaper, Paper, PaperPhoto } from '$lib/schemas/papers';
 import type { SignedInPerson } from '$lib/schemas/people';
-import { Installation, Job, Person, Recommendation } from '../db/models';
+import { Installation, Job, Mount, Person, Recommendation, Sheet } from '../db/models';
 import { AppError, notFound } from '../errors';
 import { allow } from '../policies';
 import { layHandover } from '../papers/handover';
 import type { MountRecord } from '../papers/mount-record';
-import { writePaper } from '../papers/paper-layout';
+import { writePaper, type ReadPhoto } from '../papers/paper-layout';
 import { readRecommendation, type RecommendationPaper } from '../papers/recommendation';
 import { layWarrantyFile } from '../papers/warranty';
 import { writeRecommendation } from '../papers/write-recommendation';
+import { presentPaperPhoto } from '../presenters/files';
 import { listFieldNotes } from './field-notes';
 import { listMountFiles, readFileContent } from './files';
 import { getFitting } from './fittings';
@@ -23,16 +24,23 @@ export async function getRecommendationPaper(
 	recommendationId: number
 ): Promise<RecommendationPaper> {
 	const document = await getRecommendationDocument(person, recommendationId);
+	const { recommendation, assessment } = document;
+	const photos = await listPhotos(person, assessment.mountId, recommendation.createdAt);
 	// Without the other mounts, whose years may be worked out later: a reprint says what the first print said.
-	return readRecommendation(document, await getOutlookReport(person, document.assessment, []));
+	return readRecommendation(document, await getOutlookReport(person, assessment, []), photos);
 }
+
+const readPhotoAs =
+	(person: SignedInPerson): ReadPhoto =>
+	async (fileId) =>
+		(await readFileContent(person, fileId)).bytes;
 
 /** The recommendation as a PDF document. */
 export async function writeRecommendationPdf(
 	person: SignedInPerson,
 	recommendationId: number
 ): Promise<Buffer> {
-	return writeRecommendation(await getRecommendationPaper(person, recommendationId));
+	return writeRecommendation(await getRecommendationPaper(person, recommendationId), readPhotoAs(person));
 }
 
 /** Who of the customer's side has read and acknowledged a recommendation, if anybody. */
@@ -42,13 +50,15 @@ async function findAcknowledgement(person: SignedInPerson, { id, jobId }: Recomm
 	return read ? { name: read.acknowledgedBy ?? '', acknowledgedAt: read.acknowledgedAt! } : null;
 }
 
-/** The photos of a mount, its picture first. */
-async function listPhotos(person: SignedInPerson, mountId: number): Promise<PaperPhoto[]> {
+/** The photos of a mount that stands, its picture first; those that were there at a time, where one is given. */
+async function listPhotos(person: SignedInPerson, mountId: number, until?: string): Promise<PaperPhoto[]> {
+	const where = { id: mountId, workshopId: person.workshopId, removedAt: null };
+	if ((await Mount.count({ where })) === 0) return [];
 	const files = await listMountFiles(person, mountId);
 	return files
-		.filter(({ kind }) => kind === 'photo')
+		.filter(({ kind, uploadedAt }) => kind === 'photo' && (until === undefined || uploadedAt <= until))
 		.sort((a, b) => Number(b.isMountPicture) - Number(a.isMountPicture) || a.id - b.id)
-		.map(({ id, caption }) => ({ fileId: id, caption }));
+		.map(presentPaperPhoto);
 }
 
 /** What is kept of a fitted battery, from its recommendation to the last note. */
@@ -93,16 +103,37 @@ export async function writeMountPaper(
 	name: MountPaper
 ): Promise<Buffer> {
 	const paper = await getMountPaper(person, mountId, name);
-	return writePaper(paper, async (fileId) => (await readFileContent(person, fileId)).bytes);
+	return writePaper(paper, readPhotoAs(person));
+}
+
+/** As whoever of the shop made a paper, for its customer: they see what the shop saw, and no more. */
+async function readAsMaker(personId: number, reader: SignedInPerson): Promise<SignedInPerson> {
+	const { workshopId, workshopName } = reader;
+	const { id, name, email, role } = (await Person.findByPk(personId))!;
+	return { id, workshopId, workshopName, customerId: null, name, email, role };
+}
+
+async function isOwnJob({ workshopId, customerId }: SignedInPerson, jobId: number): Promise<boolean> {
+	return (await Job.count({ where: { id: jobId, workshopId, customerId: customerId! } })) > 0;
 }
 
 /** The handover of a customer's own battery, read as the one of the shop reads it who noted the fitting. */
 export async function writeMyHandover(person: SignedInPerson, mountId: number): Promise<Buffer> {
-	const { workshopId, workshopName, customerId } = allow(person, 'documents.read-own');
+	const { workshopId } = allow(person, 'documents.read-own');
 	const installation = await Installation.findOne({ where: { mountId, workshopId } });
-	const where = { id: installation?.jobId ?? 0, workshopId, customerId: customerId! };
-	if (!installation || (await Job.count({ where })) === 0) throw notFound('handover');
-	const { id, name, email, role } = (await Person.findByPk(installation.createdBy))!;
-	const reader = { id, workshopId, workshopName, customerId: null, name, email, role };
-	return writeMountPaper(reader, mountId, 'handover');
+	if (!installation || !(await isOwnJob(person, installation.jobId))) throw notFound('handover');
+	return writeMountPaper(await readAsMaker(installation.createdBy, person), mountId, 'handover');
+}
+
+/** A recommendation that the customer was sent the page of, read as the one of the shop reads it who made it. */
+export async function writeMyRecommendation(
+	person: SignedInPerson,
+	recommendationId: number
+): Promise<Buffer> {
+	const { workshopId } = allow(person, 'documents.read-own');
+	const where = { recommendationId, workshopId, withdrawnAt: null };
+	const sheet = await Sheet.findOne({ where, attributes: ['jobId'] });
+	if (!sheet || !(await isOwnJob(person, sheet.jobId))) throw notFound('recommendation');
+	const { createdBy } = (await Recommendation.findByPk(recommendationId))!;
+	return writeRecommendationPdf(await readAsMaker(createdBy, person), recommendationId);
 }

@@ -8,6 +8,9 @@ import type { CableReport, OutlookReport } from '../../../schemas/outlook-report
 import type { PreDrillSnapshot } from '../../../schemas/pre-drill';
 import type { ReportDerivation, ReportLine } from '../../../schemas/reports';
 
+/** Over the pages of photos. */
+export const PHOTOS_TITLE = 'What was seen before it was recommended';
+
 /** A proposed cable and fuse as lines of the paper: what, in which air, what came of it. */
 export function listCableLines(cable: CableReport | null): ReportLine[] {
 	if (cable === null) return [{ label: 'Proposed', value: 'none' }];
