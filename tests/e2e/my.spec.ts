@@ -1,4 +1,7 @@
 import { expect, test } from '@playwright/test';
+import { ask } from './assessable-job';
+import { waitForLink } from './mailed';
+import { makeSendableJob, newAddress } from './sent-sheet';
 import { expectNoViolations, ONCE, signInAs } from './support';
 
 test('a customer finds vehicle, documents and history, all within the width of a phone', async ({ page }) => {
@@ -78,5 +81,50 @@ test(
 		await page.reload();
 		await expect(page.getByText('The warranty runs until June.')).toBeVisible();
 		await expectNoViolations(page);
+	}
+);
+
+test(
+	'a customer who was sent a page signs in by e-mail, and is gone everywhere when deletion is granted',
+	ONCE,
+	async ({ page, browser, baseURL }) => {
+		test.slow();
+		const { jobId, recommendationId, cookies, customerName } = await makeSendableJob(browser, baseURL);
+		const email = newAddress();
+		const shop = await browser.newContext({ baseURL: baseURL! });
+		await shop.addCookies(cookies);
+		const desk = await shop.newPage();
+		const job = await ask(desk, 'GET', `/api/v1/jobs/${jobId}`);
+		const { id, name, version } = job.customer as { id: number; name: string; version: number };
+		await ask(desk, 'PUT', `/api/v1/customers/${id}`, { name, phone: '', email, version });
+		await ask(desk, 'POST', `/api/v1/jobs/${jobId}/sheets`, { recommendationId, sendTo: email });
+
+		await page.goto('/sign-in');
+		await page.getByLabel('Your e-mail').fill(email);
+		await page.getByRole('button', { name: 'Send me a link' }).click();
+		await page.goto(await waitForLink(email, /\/sign-in\/link\/[\w-]{22}/));
+		await page.getByRole('button', { name: 'Sign in now' }).click();
+		await expect(page).toHaveURL(/\/my$/);
+		await expect(page.getByRole('link', { name: /^Your battery on a hot day/ })).toBeVisible();
+		await page.goto('/my/data');
+		await page.getByLabel('Yes, delete what is held about me').check();
+		await page.getByRole('button', { name: 'Ask for deletion' }).click();
+		await expect(page.getByText(/^You asked for it on/)).toBeVisible();
+
+		await shop.clearCookies();
+		await signInAs(desk, 'manager');
+		await desk.goto('/erasures', { waitUntil: 'networkidle' });
+		const other = desk.getByRole('link', { name: customerName });
+		if (await other.isVisible()) await other.click();
+		await expect(desk.getByRole('heading', { name: `${customerName} asks for deletion` })).toBeVisible();
+		await desk.getByRole('radio', { name: 'Grant it' }).check();
+		await desk.getByRole('button', { name: 'Decide, and tell the customer' }).click();
+		await expect(desk.getByText(`${customerName} asks for deletion`)).toHaveCount(0);
+		await desk.goto(`/jobs/${jobId}`);
+		await expect(desk.getByText('(erased)').first()).toBeVisible();
+		await expect(desk.getByText(customerName)).toHaveCount(0);
+		await shop.close();
+		await page.goto('/my');
+		await expect(page).toHaveURL(/\/sign-in/);
 	}
 );

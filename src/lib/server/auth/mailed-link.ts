@@ -1,9 +1,10 @@
-import { Person, SignInLink } from '../db/models';
+import { SignInLink } from '../db/models';
 import { inTransaction } from '../db/transaction';
 import { env } from '../env';
 import { newToken, tokenHash } from '../hash';
 import { layOutLetter } from '../mail/layout';
 import { postLetter } from '../mail/outbox';
+import { findAddressee } from './customer-access';
 import { spend } from './rate-limit';
 
 const LIVES_MINUTES = 10;
@@ -23,10 +24,10 @@ export async function mailSignInLink(email: string, address: string): Promise<vo
 }
 
 async function writeLetter(email: string): Promise<void> {
-	const person = await Person.findOne({ where: { email, active: true } });
-	if (!person) return;
-	const token = newToken();
 	await inTransaction(async (transaction) => {
+		const person = await findAddressee(email, transaction);
+		if (!person) return;
+		const token = newToken();
 		const expiresAt = new Date(Date.now() + LIVES_MINUTES * 60_000);
 		await SignInLink.create({ tokenHash: tokenHash(token), personId: person.id, expiresAt }, { transaction });
 		const href = `${env().ORIGIN}/sign-in/link/${token}`;

@@ -9,6 +9,7 @@ const DID: Record<string, string> = {
 	'battery.changed': 'changed a battery',
 	'battery.created': 'added a battery',
 	'book.in-force': 'put a coefficient book in force',
+	'customer.admitted': 'asked for the first time to sign in as a customer',
 	'customer.changed': 'changed a customer',
 	'customer.created': 'added a customer',
 	'customer.data-taken': 'took what is held about them',

@@ -205,6 +205,8 @@ describe('an erasure', () => {
 			await Erasure.update({ state: 'running' }, { where: { id: request.id } });
 			const verdict = Assessment.update({ verdict: 'rides-it-out', headroomK: 99 }, inJob);
 			await expect(verdict).rejects.toThrow('immutable');
+			const warned = Recommendation.update({ cautions: [] }, inJob);
+			await expect(warned).rejects.toThrow('immutable');
 			const acknowledged = Acknowledgement.update({ contentSha256: '0'.repeat(64) }, { where: {} });
 			await expect(acknowledged).rejects.toThrow('immutable');
 		});

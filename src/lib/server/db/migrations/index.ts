@@ -73,6 +73,8 @@ import { migration as m107 } from './107-recommendations-erasure';
 import { migration as m108 } from './108-assessments-erasure';
 import { migration as m109 } from './109-field-notes-erasure';
 import { migration as m109Then } from './109-then-audit-entries-erasure';
+import { migration as m110 } from './110-recommendations-cautions-stay';
+import { migration as m111 } from './111-customers-by-email';
 import type { Migration } from '../migrate';
 
 /** Every migration, in the order in which they run; each is one DDL step that may run again. */
@@ -151,5 +153,7 @@ export const migrations: Migration[] = [
 	m107,
 	m108,
 	m109,
-	m109Then
+	m109Then,
+	m110,
+	m111
 ];
