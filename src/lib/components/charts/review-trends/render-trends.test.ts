@@ -10,8 +10,8 @@ const months = Array.from({ length: 24 }, (_, at) => ({
 }));
 
 describe('the picture of the months', () => {
-	it('says what it shows and styles nothing inline', () => {
-		const svg = renderTrendsSvg({ on: '2026-12-02', months }, 'Months <of> "two" years');
+	it.each(['phone', 'desk'] as const)('of a %s says what it shows and styles nothing inline', (size) => {
+		const svg = renderTrendsSvg({ on: '2026-12-02', months }, 'Months <of> "two" years', size);
 		expect(svg).toContain('aria-label="Months &lt;of&gt; &quot;two&quot; years"');
 		expect(svg).not.toMatch(/style=|<style/);
 		expect(svg).toContain('2025');

@@ -16,5 +16,9 @@ export const load: PageServerLoad = async (event) => {
 		orPageError(reviewTrends(person, query)),
 		orPageError(listZones(person, query.kind))
 	]);
-	return { query, trends, ...zones, picture: renderTrendsSvg(trends, LABEL) };
+	const picture = {
+		phone: renderTrendsSvg(trends, LABEL, 'phone'),
+		desk: renderTrendsSvg(trends, LABEL, 'desk')
+	};
+	return { query, trends, ...zones, picture };
 };
