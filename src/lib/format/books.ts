@@ -1,4 +1,5 @@
-import type { BookState } from '../schemas/books';
+import type { BookState, Origin } from '../schemas/books';
+import { writeNumber } from './numbers';
 
 export const BOOK_STATE_WORDS: Record<BookState, string> = {
 	draft: 'draft',
@@ -23,3 +24,13 @@ const GROUP_WORDS: Record<string, string> = {
 };
 
 export const formatGroup = (group: string): string => GROUP_WORDS[group] ?? group;
+
+export const ORIGIN_WORDS: Record<Origin, string> = {
+	published: 'published',
+	judgement: 'judgement',
+	fitted: 'fitted from traces'
+};
+
+/** A value with its unit; a plain number has none. */
+export const formatCoefficient = (value: number, unit: string): string =>
+	unit === '-' ? writeNumber(value) : `${writeNumber(value)} ${unit}`;

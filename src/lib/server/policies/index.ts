@@ -34,6 +34,7 @@ export const RULES = {
 	'erasures.ask': ['customer'],
 	'erasures.decide': ['manager'],
 	'books.read': BENCH,
+	'books.write': BENCH,
 	'review.read': MANAGER,
 	'own-zones.write': MANAGER,
 	'mailbox.read': WORKSHOP,

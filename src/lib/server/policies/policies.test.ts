@@ -42,6 +42,7 @@ const EXPECTED: Record<Action, string> = {
 	'erasures.ask': 'c',
 	'erasures.decide': 'm',
 	'books.read': 'em',
+	'books.write': 'em',
 	'review.read': 'm',
 	'own-zones.write': 'm',
 	'mailbox.read': 'iem',

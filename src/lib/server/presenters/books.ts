@@ -1,26 +1,58 @@
-import type { BookRow, BookView, CoefficientView } from '$lib/schemas/books';
+import type { BookComparison, BookRow, BookView, CoefficientPair, CoefficientView } from '$lib/schemas/books';
 import type { Coefficient, CoefficientBook } from '../db/models';
 
-export function presentBookRow({ id, number, name, state, note, createdAt }: CoefficientBook): BookRow {
-	return { id, number, name, state, note, createdAt: createdAt.toISOString() };
+/** Names of people by their number. */
+export type NameOf = (personId: number | null | undefined) => string;
+
+export function presentBookRow(book: CoefficientBook, nameOf: NameOf): BookRow {
+	const { id, number, name, state, note, createdAt, madeBy, inForceBy, inForceAt, version } = book;
+	return {
+		...{ id, number, name, state, note, version },
+		madeBy: nameOf(madeBy),
+		inForceBy: nameOf(inForceBy),
+		inForceAt: inForceAt?.toISOString() ?? null,
+		createdAt: createdAt.toISOString()
+	};
 }
 
 /** A coefficient in words: what the thermal model says of its field stands beside the book's value. */
 export function presentCoefficient(
-	{ fieldGroup, fieldKey, value, unit, source }: Coefficient,
+	{ fieldGroup, fieldKey, value, unit, origin, source }: Coefficient,
 	field: { meaning: string; default: number | null } | undefined
 ): CoefficientView {
 	return {
 		group: fieldGroup,
 		key: fieldKey,
-		value,
-		unit,
+		...{ value, unit, origin, source },
 		meaning: field?.meaning ?? '',
-		default: field?.default ?? null,
-		source
+		default: field?.default ?? null
 	};
 }
 
-export function presentBook(book: CoefficientBook, coefficients: CoefficientView[]): BookView {
-	return { ...presentBookRow(book), coefficients };
+export function presentBook(
+	book: CoefficientBook,
+	coefficients: CoefficientView[],
+	nameOf: NameOf
+): BookView {
+	return { ...presentBookRow(book, nameOf), coefficients };
+}
+
+const pathOf = ({ group, key }: CoefficientView): string => `${group}.${key}`;
+
+const isSame = (left: CoefficientView | null, right: CoefficientView | null): boolean =>
+	left?.value === right?.value && left?.origin === right?.origin && left?.source === right?.source;
+
+/** Two books side by side: what differs, in the order of the left one. */
+export function presentComparison(left: BookView, right: BookView): BookComparison {
+	const inLeft = new Map(left.coefficients.map((each) => [pathOf(each), each]));
+	const inRight = new Map(right.coefficients.map((each) => [pathOf(each), each]));
+	const pairs = [...new Set([...inLeft.keys(), ...inRight.keys()])].map((path): CoefficientPair => {
+		const pair = { left: inLeft.get(path) ?? null, right: inRight.get(path) ?? null };
+		const { group, key, meaning, unit } = (pair.left ?? pair.right)!;
+		return { group, key, meaning, unit, ...pair };
+	});
+	const differing = pairs.filter((pair) => !isSame(pair.left, pair.right));
+	const { coefficients: _left, ...leftRow } = left;
+	const { coefficients: _right, ...rightRow } = right;
+	return { left: leftRow, right: rightRow, differing, same: pairs.length - differing.length };
 }

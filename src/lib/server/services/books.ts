@@ -2,19 +2,29 @@ import type { Transaction } from 'sequelize';
 import type { BookRow, BookView } from '$lib/schemas/books';
 import type { SignedInPerson } from '$lib/schemas/people';
 import type { CoefficientBook as Coefficients } from '$lib/thermal/survey';
-import { Coefficient, CoefficientBook } from '../db/models';
+import { Coefficient, CoefficientBook, Person } from '../db/models';
 import { AppError, notFound } from '../errors';
 import { allow } from '../policies';
-import { presentBook, presentBookRow, presentCoefficient } from '../presenters/books';
+import { presentBook, presentBookRow, presentCoefficient, type NameOf } from '../presenters/books';
 import { record } from './audit';
-import { COEFFICIENT_FIELDS, coefficientField, sourceOf } from './coefficient-sources';
+import { COEFFICIENT_FIELDS, coefficientField, originOf, sourceOf } from './coefficient-sources';
 
-async function withCoefficients(book: CoefficientBook): Promise<BookView> {
+/** The names of those whose hands books went through. */
+async function namesFor(books: readonly CoefficientBook[]): Promise<NameOf> {
+	const ids = books.flatMap(({ madeBy, inForceBy }) =>
+		[madeBy, inForceBy].filter((id) => typeof id === 'number')
+	);
+	const people = await Person.findAll({ where: { id: [...new Set(ids)] }, attributes: ['id', 'name'] });
+	const names = new Map(people.map(({ id, name }) => [id, name]));
+	return (id) => names.get(id ?? 0) ?? '';
+}
+
+export async function withCoefficients(book: CoefficientBook): Promise<BookView> {
 	const rows = await Coefficient.findAll({ where: { bookId: book.id }, order: [['id', 'ASC']] });
 	const coefficients = rows.map((row) =>
 		presentCoefficient(row, coefficientField(row.fieldGroup, row.fieldKey))
 	);
-	return presentBook(book, coefficients);
+	return presentBook(book, coefficients, await namesFor([book]));
 }
 
 export async function listBooks(person: SignedInPerson): Promise<BookRow[]> {
@@ -23,14 +33,25 @@ export async function listBooks(person: SignedInPerson): Promise<BookRow[]> {
 		where: { workshopId: person.workshopId },
 		order: [['number', 'DESC']]
 	});
-	return books.map(presentBookRow);
+	const nameOf = await namesFor(books);
+	return books.map((book) => presentBookRow(book, nameOf));
+}
+
+export async function findBook(
+	{ workshopId }: SignedInPerson,
+	bookId: number,
+	transaction?: Transaction
+): Promise<CoefficientBook> {
+	const where = { id: bookId, workshopId };
+	const lock = transaction ? { transaction, lock: transaction.LOCK.UPDATE } : {};
+	const book = await CoefficientBook.findOne({ where, ...lock });
+	if (!book) throw notFound('book');
+	return book;
 }
 
 export async function getBook(person: SignedInPerson, bookId: number): Promise<BookView> {
 	allow(person, 'books.read');
-	const book = await CoefficientBook.findOne({ where: { id: bookId, workshopId: person.workshopId } });
-	if (!book) throw notFound('book');
-	return withCoefficients(book);
+	return withCoefficients(await findBook(person, bookId));
 }
 
 /** The book that every new assessment and every live curve is made with: whoever may assess may know it. */
@@ -73,6 +94,7 @@ export async function createFirstBook(workshopId: number, transaction: Transacti
 		fieldKey: field.key,
 		value: field.default,
 		unit: field.unit,
+		origin: originOf(field),
 		source: sourceOf(field)
 	}));
 	await Coefficient.bulkCreate(rows, { transaction });

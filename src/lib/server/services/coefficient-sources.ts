@@ -1,3 +1,4 @@
+import type { Origin } from '$lib/schemas/books';
 import { SCENARIO_FIELDS, type FieldGroup, type NumberField } from '$lib/thermal/vehicle/scenario-fields';
 
 /** Groups whose every number is a coefficient, and the single ones out of groups that are otherwise surveyed. */
@@ -67,3 +68,7 @@ export function coefficientField(group: string, key: string): NumberField | unde
 export function sourceOf(field: NumberField): string {
 	return PUBLISHED[pathOf(field)] ?? JUDGEMENT;
 }
+
+/** Judgement, where the source says so or is a memory; published otherwise. */
+export const originOf = (field: NumberField): Origin =>
+	/judgement|from memory/i.test(sourceOf(field)) ? 'judgement' : 'published';

@@ -75,6 +75,12 @@ import { migration as m109 } from './109-field-notes-erasure';
 import { migration as m109Then } from './109-then-audit-entries-erasure';
 import { migration as m110 } from './110-recommendations-cautions-stay';
 import { migration as m111 } from './111-customers-by-email';
+import { migration as m112 } from './112-coefficient-books-hands';
+import { migration as m113 } from './113-coefficients-origin';
+import { migration as m114 } from './114-coefficients-published';
+import { migration as m115 } from './115-coefficients-kept';
+import { migration as m116 } from './116-coefficients-stay';
+import { migration as m117 } from './117-coefficient-books-ways';
 import type { Migration } from '../migrate';
 
 /** Every migration, in the order in which they run; each is one DDL step that may run again. */
@@ -155,5 +161,11 @@ export const migrations: Migration[] = [
 	m109,
 	m109Then,
 	m110,
-	m111
+	m111,
+	m112,
+	m113,
+	m114,
+	m115,
+	m116,
+	m117
 ];

@@ -6,7 +6,17 @@ import {
 	type Sequelize
 } from 'sequelize';
 import type { BookState } from '$lib/schemas/books';
-import { edited, id, moment, reference, text, textOrEmpty, whole } from './base';
+import {
+	edited,
+	id,
+	moment,
+	optionalMoment,
+	optionalReference,
+	reference,
+	text,
+	textOrEmpty,
+	whole
+} from './base';
 
 export class CoefficientBook extends Model<
 	InferAttributes<CoefficientBook>,
@@ -18,6 +28,11 @@ export class CoefficientBook extends Model<
 	declare name: string;
 	declare state: BookState;
 	declare note: CreationOptional<string>;
+	declare fromBookId: CreationOptional<number | null>;
+	/** Unknown of a workshop's first book, which nobody made. */
+	declare madeBy: CreationOptional<number | null>;
+	declare inForceBy: CreationOptional<number | null>;
+	declare inForceAt: CreationOptional<Date | null>;
 	declare version: CreationOptional<number>;
 	declare createdAt: CreationOptional<Date>;
 	declare updatedAt: CreationOptional<Date>;
@@ -32,6 +47,10 @@ export function initCoefficientBook(sequelize: Sequelize): void {
 			name: text,
 			state: text,
 			note: textOrEmpty,
+			fromBookId: optionalReference,
+			madeBy: optionalReference,
+			inForceBy: optionalReference,
+			inForceAt: optionalMoment,
 			version: { ...whole, defaultValue: 0 },
 			createdAt: moment,
 			updatedAt: moment

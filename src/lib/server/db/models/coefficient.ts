@@ -5,6 +5,7 @@ import {
 	type InferCreationAttributes,
 	type Sequelize
 } from 'sequelize';
+import type { Origin } from '$lib/schemas/books';
 import { id, number, reference, text } from './base';
 
 export class Coefficient extends Model<InferAttributes<Coefficient>, InferCreationAttributes<Coefficient>> {
@@ -14,6 +15,7 @@ export class Coefficient extends Model<InferAttributes<Coefficient>, InferCreati
 	declare fieldKey: string;
 	declare value: number;
 	declare unit: string;
+	declare origin: CreationOptional<Origin>;
 	declare source: string;
 }
 
@@ -26,6 +28,7 @@ export function initCoefficient(sequelize: Sequelize): void {
 			fieldKey: text,
 			value: number,
 			unit: text,
+			origin: { ...text, defaultValue: 'judgement' },
 			source: text
 		},
 		{ sequelize, tableName: 'coefficients', timestamps: false, modelName: 'Coefficient' }

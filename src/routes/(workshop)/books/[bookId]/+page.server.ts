@@ -1,9 +1,37 @@
+import { redirect } from '@sveltejs/kit';
+import { bookMoveSchema } from '$lib/schemas/books';
+import { readPageForm } from '$lib/server/http/forms';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { pageId } from '$lib/server/http/page-id';
-import { getBook } from '$lib/server/services/books';
-import type { PageServerLoad } from './$types';
+import { validate } from '$lib/server/http/validate';
+import { mayDo } from '$lib/server/policies';
+import { moveBook } from '$lib/server/services/book-changes';
+import { getBook, listBooks } from '$lib/server/services/books';
+import type { Actions, PageServerLoad } from './$types';
 
 export const load: PageServerLoad = async (event) => {
 	const person = guard(event, 'books.read');
-	return { book: await orPageError(getBook(person, pageId(event.params.bookId))) };
+	const [book, books] = await Promise.all([
+		orPageError(getBook(person, pageId(event.params.bookId))),
+		orPageError(listBooks(person))
+	]);
+	return {
+		book,
+		others: books.filter(({ id }) => id !== book.id),
+		mayWrite: mayDo(person, 'books.write'),
+		isOwn: book.madeBy === person.name,
+		isSaved: event.url.searchParams.has('saved')
+	};
+};
+
+export const actions: Actions = {
+	move: async (event) => {
+		const person = guard(event, 'books.write');
+		const bookId = pageId(event.params.bookId);
+		const sent = Object.fromEntries(await readPageForm(event.request));
+		const move = async () =>
+			moveBook(person, bookId, validate(bookMoveSchema, { ...sent, version: Number(sent.version) }));
+		await orPageError(move());
+		redirect(303, `/books/${bookId}?saved`);
+	}
 };

@@ -1,0 +1,164 @@
+import type { Transaction } from 'sequelize';
+import type {
+	BookComparison,
+	BookDraft,
+	BookMove,
+	BookState,
+	BookView,
+	CoefficientChange
+} from '$lib/schemas/books';
+import type { SignedInPerson } from '$lib/schemas/people';
+import type { NumberField } from '$lib/thermal/vehicle/scenario-fields';
+import { Coefficient, CoefficientBook } from '../db/models';
+import { inTransaction } from '../db/transaction';
+import { AppError, notFound } from '../errors';
+import { allow } from '../policies';
+import { presentComparison } from '../presenters/books';
+import { recordBy } from './audit';
+import { findBook, getBook, withCoefficients } from './books';
+import { coefficientField } from './coefficient-sources';
+import { saveVersioned } from './records';
+
+const subjectOf = ({ id }: CoefficientBook) => ({ type: 'book', id });
+
+/** Begins a draft with the values of another book, whichever state that is in. */
+export async function draftBook(
+	person: SignedInPerson,
+	{ fromBookId, name, note }: BookDraft
+): Promise<BookView> {
+	const { workshopId } = allow(person, 'books.write');
+	return inTransaction(async (transaction) => {
+		// All books of the workshop, so that two who begin at once get two numbers.
+		const lock = transaction.LOCK.UPDATE;
+		const books = await CoefficientBook.findAll({ where: { workshopId }, transaction, lock });
+		const from = books.find(({ id }) => id === fromBookId);
+		if (!from) throw notFound('book');
+		const number = Math.max(...books.map((each) => each.number)) + 1;
+		const row = { workshopId, number, name, note, state: 'draft' as const, fromBookId, madeBy: person.id };
+		const book = await CoefficientBook.create(row, { transaction });
+		const values = await Coefficient.findAll({
+			where: { bookId: from.id },
+			order: [['id', 'ASC']],
+			transaction
+		});
+		await Coefficient.bulkCreate(
+			values.map(({ fieldGroup, fieldKey, value, unit, origin, source }) => ({
+				...{ bookId: book.id, fieldGroup, fieldKey, value, unit, origin, source }
+			})),
+			{ transaction }
+		);
+		await recordBy(person, 'book.drafted', subjectOf(book), transaction, { from: from.number, name });
+		return withCoefficients(book);
+	});
+}
+
+function requireWithin(
+	{ meaning, min, max, minExclusive, maxExclusive, unit }: NumberField,
+	value: number
+): void {
+	const above = minExclusive ? value > min : value >= min;
+	const below = maxExclusive ? value < max : value <= max;
+	if (above && below) return;
+	const from = `${minExclusive ? 'more than' : 'at least'} ${min}`;
+	const to = `${maxExclusive ? 'less than' : 'at most'} ${max}`;
+	const message =
+		`${meaning.replace(/\.$/, '')} must be ${from} and ${to} ${unit === '-' ? '' : unit}`.trim() + '.';
+	throw new AppError('invalid_input', message, [{ path: 'value', message }]);
+}
+
+function requireDraft({ state, number }: CoefficientBook): void {
+	if (state === 'draft') return;
+	throw new AppError(
+		'conflict',
+		`Book ${number} is no draft any more, so nothing in it can change: begin a new one.`
+	);
+}
+
+/** Changes one value of a draft, and says where it comes from. */
+export async function changeCoefficient(
+	person: SignedInPerson,
+	bookId: number,
+	{ group, key }: { group: string; key: string },
+	{ version, ...change }: CoefficientChange
+): Promise<BookView> {
+	allow(person, 'books.write');
+	return inTransaction(async (transaction) => {
+		const book = await findBook(person, bookId, transaction);
+		const where = { bookId, fieldGroup: group, fieldKey: key };
+		const coefficient = await Coefficient.findOne({ where, transaction });
+		const field = coefficientField(group, key);
+		if (!coefficient || !field) throw notFound('coefficient');
+		requireDraft(book);
+		requireWithin(field, change.value);
+		book.changed('updatedAt', true);
+		await saveVersioned(book, 'book', version, { updatedAt: new Date() }, transaction);
+		const before = coefficient.value;
+		await coefficient.update(change, { transaction });
+		await recordBy(person, 'book.changed', subjectOf(book), transaction, { group, key, before, ...change });
+		return withCoefficients(book);
+	});
+}
+
+/** Where a book may go from each state. */
+const WAYS: Readonly<Record<BookState, readonly BookMove['to'][]>> = {
+	draft: ['on-trial', 'withdrawn'],
+	'on-trial': ['in-force', 'withdrawn'],
+	// One is withdrawn when another comes in its place: without a book in force nothing could be assessed.
+	'in-force': [],
+	withdrawn: []
+};
+
+function requireWay({ state, number }: CoefficientBook, to: BookMove['to']): void {
+	if (WAYS[state].includes(to)) return;
+	const ways: Record<BookState, string> = {
+		draft: 'goes on trial first, where a second person sees it unchanging',
+		'on-trial': 'is on trial already',
+		'in-force': 'is in force, and is withdrawn when another one takes its place',
+		withdrawn: 'was withdrawn, and stays so: begin a new one from it'
+	};
+	throw new AppError('conflict', `Book ${number} ${ways[state]}.`);
+}
+
+function requireSecondPerson({ madeBy }: CoefficientBook, person: SignedInPerson): void {
+	if (madeBy !== person.id) return;
+	throw new AppError(
+		'conflict',
+		'You made this book: somebody else puts it in force, another engineer or the manager.'
+	);
+}
+
+async function replaceInForce(book: CoefficientBook, transaction: Transaction): Promise<number | null> {
+	const where = { workshopId: book.workshopId, state: 'in-force' as const };
+	const former = await CoefficientBook.findOne({ where, transaction, lock: transaction.LOCK.UPDATE });
+	await former?.update({ state: 'withdrawn' }, { transaction });
+	return former?.number ?? null;
+}
+
+/** Puts a draft on trial, a book on trial in force, or withdraws either. */
+export async function moveBook(
+	person: SignedInPerson,
+	bookId: number,
+	{ to, version }: BookMove
+): Promise<BookView> {
+	allow(person, 'books.write');
+	return inTransaction(async (transaction) => {
+		const book = await findBook(person, bookId, transaction);
+		requireWay(book, to);
+		if (to === 'in-force') requireSecondPerson(book, person);
+		const replaced = to === 'in-force' ? await replaceInForce(book, transaction) : null;
+		const hands = to === 'in-force' ? { inForceBy: person.id, inForceAt: new Date() } : {};
+		await saveVersioned(book, 'book', version, { state: to, ...hands }, transaction);
+		const told = replaced === null ? {} : { replaced };
+		await recordBy(person, `book.${to}`, subjectOf(book), transaction, { number: book.number, ...told });
+		return withCoefficients(book);
+	});
+}
+
+/** What differs between two books. */
+export async function compareBooks(
+	person: SignedInPerson,
+	leftId: number,
+	rightId: number
+): Promise<BookComparison> {
+	return presentComparison(await getBook(person, leftId), await getBook(person, rightId));
+}
