@@ -47,7 +47,8 @@ function requireSignals(signals: readonly ChangeSignal[]): number {
 	if (count === 0) throw new EngineInputError('signals', count, 'at least one series with values');
 	for (const { values, noise } of signals) {
 		requirePositive({ noise });
-		if (values.length !== count) throw new EngineInputError('values.length', values.length, `${count} in each`);
+		if (values.length !== count)
+			throw new EngineInputError('values.length', values.length, `${count} in each`);
 	}
 	return count;
 }

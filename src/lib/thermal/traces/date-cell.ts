@@ -9,10 +9,7 @@ const PLACES: Readonly<Record<DateOrder, { year: number; month: number; day: num
 	mdy: { year: 2, month: 0, day: 1 }
 };
 
-const MONTHS = [
-	...['jan', 'feb', 'mar', 'apr', 'may', 'jun'],
-	...['jul', 'aug', 'sep', 'oct', 'nov', 'dec']
-];
+const MONTHS = [...['jan', 'feb', 'mar', 'apr', 'may', 'jun'], ...['jul', 'aug', 'sep', 'oct', 'nov', 'dec']];
 
 const FIRST_YEAR = 1970;
 const LAST_YEAR = 2199;
@@ -53,7 +50,11 @@ export class DateCell {
 			if (part === 0 && this.digits[0] === 8) return this.splitBasic();
 		}
 		const { year, month, day } = PLACES[this.order];
-		return this.take(fullYear(this.numbers[year]!, this.digits[year]!), this.numbers[month]!, this.numbers[day]!);
+		return this.take(
+			fullYear(this.numbers[year]!, this.digits[year]!),
+			this.numbers[month]!,
+			this.numbers[day]!
+		);
 	}
 
 	private passBetween(bytes: Uint8Array, to: number): void {

@@ -3,7 +3,13 @@ import { findChannel } from './find-channels';
 import { findLayout, type TraceLayout } from './find-layout';
 import { findTime, type SampleColumn, type TimeProposal } from './find-time';
 import { loggerFingerprint } from './fingerprint';
-import { timeColumnsOf, type ColumnMapping, type Decimal, type Delimiter, type TraceMapping } from './mapping';
+import {
+	timeColumnsOf,
+	type ColumnMapping,
+	type Decimal,
+	type Delimiter,
+	type TraceMapping
+} from './mapping';
 import { decodeSample, findTextCode, type TextCode } from './text-source';
 import { TraceError } from './trace-error';
 import { isTimeZone } from './zone-clock';
@@ -121,7 +127,11 @@ export function describeTrace(firstBytes: Uint8Array, timeZone = 'UTC'): TracePr
 	const firstRowLine = rows[0]!.line;
 	if (time === null) {
 		const found = { line: headerRows[0]?.line ?? firstRowLine, column: 1, value: named[0]!.name };
-		throw new TraceError({ code: 'no_time_column', ...found, limit: 'a column with dates, times or seconds' });
+		throw new TraceError({
+			code: 'no_time_column',
+			...found,
+			limit: 'a column with dates, times or seconds'
+		});
 	}
 	const columns = proposeColumns(named, timeColumnsOf(time.mapping));
 	return {

@@ -24,7 +24,8 @@ const CHANNEL_PATTERNS: readonly { channel: TraceChannel; pattern: RegExp }[] = 
 ];
 
 /** Names of what no channel takes. */
-const SOMETHING_ELSE = /\b(v|mv|volts?|voltage|rpm|revs?|%|soc|rh|humidity|pressure|hpa|kpa|bar|w|wh|ah|watts?|power)\b|%/i;
+const SOMETHING_ELSE =
+	/\b(v|mv|volts?|voltage|rpm|revs?|%|soc|rh|humidity|pressure|hpa|kpa|bar|w|wh|ah|watts?|power)\b|%/i;
 
 /** bay_airTemp → bay air temp */
 const toWords = (name: string): string =>

@@ -56,9 +56,14 @@ const withoutComment = ({ line, cells }: SampleRow): SampleRow => ({
 	cells: cells.map((cell, at) => (at === 0 ? cell.replace(COMMENT, '') : cell))
 });
 
+/** What stands in the place of a unit under a time: yyyy-mm-dd hh:mm:ss */
+const TIME_FORM = /^[dmyhs:./\-\s]+$/i;
+const LONGEST_OTHER_UNIT = 5;
+
 /** A line of units alone stands under the line of names. */
 const isUnitLine = ({ cells }: SampleRow): boolean =>
-	cells.some((cell) => findUnit(cell) !== null) && cells.every((cell) => cell.length <= 8 || cell.includes(':'));
+	cells.some((cell) => findUnit(cell) !== null) &&
+	cells.every((cell) => cell.length <= LONGEST_OTHER_UNIT || findUnit(cell) !== null || TIME_FORM.test(cell));
 
 function findHeader({ all, rows, columnCount }: Trial): SampleRow[] {
 	const first = all.findIndex(({ line }) => line === rows[0]!.line);
@@ -67,7 +72,10 @@ function findHeader({ all, rows, columnCount }: Trial): SampleRow[] {
 		.filter(({ cells }) => cells.some((cell) => cell !== ''))
 		.reverse();
 	const isNames = (row: SampleRow | undefined): row is SampleRow =>
-		row !== undefined && Math.abs(row.cells.length - columnCount) <= 1 && row.cells.length >= 2 && !isRow(row);
+		row !== undefined &&
+		Math.abs(row.cells.length - columnCount) <= 1 &&
+		row.cells.length >= 2 &&
+		!isRow(row);
 	const [last, before] = above;
 	if (!isNames(last)) return [];
 	const header = isUnitLine(last) && isNames(before) ? [before, last] : [last];

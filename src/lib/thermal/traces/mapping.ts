@@ -74,7 +74,8 @@ function refuse(code: TraceErrorCode, column: number | null, value: unknown, lim
 
 function requireColumn(column: unknown, what: string): void {
 	const isColumn = Number.isInteger(column) && (column as number) >= 1 && (column as number) <= MOST_COLUMNS;
-	if (!isColumn) refuse('wrong_mapping', null, column, `${what} as a whole number within 1 to ${MOST_COLUMNS}`);
+	if (!isColumn)
+		refuse('wrong_mapping', null, column, `${what} as a whole number within 1 to ${MOST_COLUMNS}`);
 }
 
 function requireOneOf(value: unknown, choices: readonly unknown[], what: string): void {
@@ -84,13 +85,19 @@ function requireOneOf(value: unknown, choices: readonly unknown[], what: string)
 const DAY = /^\d{4}-\d{2}-\d{2}$/;
 
 function checkTime(time: TimeMapping): void {
-	if (typeof time !== 'object' || time === null) refuse('no_time_column', null, time, 'a column with the time');
+	if (typeof time !== 'object' || time === null)
+		refuse('no_time_column', null, time, 'a column with the time');
 	const kinds = [...Object.keys(COUNTED_TIMES), 'calendar', 'time-of-day'];
 	requireOneOf(time.kind, kinds, 'a kind of time');
 	requireColumn(time.column, 'the column of the time');
 	if (time.kind !== 'calendar' && time.kind !== 'time-of-day') return;
 	if (!isTimeZone(time.timeZone)) {
-		refuse('no_such_zone', time.column, time.timeZone, 'the IANA name of a time zone, such as Australia/Darwin');
+		refuse(
+			'no_such_zone',
+			time.column,
+			time.timeZone,
+			'the IANA name of a time zone, such as Australia/Darwin'
+		);
 	}
 	if (time.kind === 'time-of-day') {
 		if (time.firstDay !== null && !DAY.test(time.firstDay)) {

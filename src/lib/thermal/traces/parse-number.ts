@@ -78,7 +78,11 @@ export function parseNumber(bytes: Uint8Array, from: number, to: number, decimal
 	const negative = signed > 0 && first !== BYTE.plus;
 	if (at < to || digits > EXACT_DIGITS) {
 		const size = parseLong(bytes, from + signed, to, decimal);
-		return isDigit(bytes[from + signed]!) || bytes[from + signed] === decimal ? (negative ? -size : size) : NaN;
+		return isDigit(bytes[from + signed]!) || bytes[from + signed] === decimal
+			? negative
+				? -size
+				: size
+			: NaN;
 	}
 	if (pointAt >= 0) value /= POWERS_OF_TEN[to - pointAt - 1]!;
 	return negative ? -value : value;

@@ -1,9 +1,17 @@
 import { BinBuilder } from './bin-builder';
-import type { BinnedTrace } from './binned-trace';
 import type { TraceChannel } from './channels';
 import { FindingList } from './findings';
 import { IntervalTally } from './interval-tally';
 import { checkMapping, timeColumnsOf, type TraceMapping } from './mapping';
+import {
+	GAP_INTERVALS,
+	LONGEST_TRACE_S,
+	MOST_TRACE_BYTES,
+	MOST_TRACE_ROWS,
+	toColumns,
+	type ReadOptions,
+	type TraceReading
+} from './reading-types';
 import { RowGate } from './row-gate';
 import { LINE_AT, RowSorter, TIME_AT, VALUES_FROM } from './row-sorter';
 import { RowSplitter, type CellSpans } from './row-splitter';
@@ -13,32 +21,6 @@ import { makeTimeReader, type TimeReader } from './time-reader';
 import { faultOfWhole, TraceError } from './trace-error';
 import type { TraceReport } from './trace-report';
 import { ValueReader } from './value-reader';
-
-export const MOST_TRACE_BYTES = 200 * 1024 * 1024;
-export const MOST_TRACE_ROWS = 5_000_000;
-export const LONGEST_TRACE_S = 60 * 86_400;
-/** A gap is longer than so many median intervals, where nobody says otherwise. */
-export const GAP_INTERVALS = 5;
-
-/** Kept rows in order of time. The arrays are used again: copy what is to stay. */
-export interface TraceRows {
-	count: number;
-	timeS: Float64Array;
-	/** °C, A or km/h; NaN where there is no value. */
-	values: Partial<Record<TraceChannel, Float64Array>>;
-}
-
-export interface ReadOptions {
-	/** The line of the first row, as describeTrace says; without it the first row is the first that has a time and a number. */
-	firstRowLine?: number;
-	gapIntervals?: number;
-	onRows?: (rows: TraceRows) => void;
-}
-
-export interface TraceReading {
-	trace: BinnedTrace;
-	report: TraceReport;
-}
 
 /**
  * Reads a logger's CSV in a stream: pieces of the file in, kept rows and the binned trace out, in memory that does not grow.
@@ -124,10 +106,12 @@ export class TraceReader {
 	private readonly readRow = (row: CellSpans): void => {
 		const timeS = this.gate.admit(row);
 		if (timeS !== timeS) return;
-		if (this.gate.rows > MOST_TRACE_ROWS) this.refuse('too_many_rows', row, 'one more row', `${MOST_TRACE_ROWS} rows`);
+		if (this.gate.rows > MOST_TRACE_ROWS)
+			this.refuse('too_many_rows', row, 'one more row', `${MOST_TRACE_ROWS} rows`);
 		if (timeS < this.firstS) this.firstS = timeS;
 		if (timeS > this.lastS) this.lastS = timeS;
-		if (this.lastS - this.firstS > LONGEST_TRACE_S) this.refuse('too_long', row, 'a time later or earlier', '60 days');
+		if (this.lastS - this.firstS > LONGEST_TRACE_S)
+			this.refuse('too_long', row, 'a time later or earlier', '60 days');
 		this.row[TIME_AT] = timeS;
 		this.row[LINE_AT] = row.line;
 		for (let at = 0; at < this.values.length; at++) this.row[VALUES_FROM + at] = this.values[at]!.read(row);
@@ -135,7 +119,12 @@ export class TraceReader {
 		this.sorter.add(this.row);
 	};
 
-	private refuse(code: 'too_many_rows' | 'too_long', { line }: CellSpans, value: string, most: string): never {
+	private refuse(
+		code: 'too_many_rows' | 'too_long',
+		{ line }: CellSpans,
+		value: string,
+		most: string
+	): never {
 		const column = code === 'too_long' ? this.mapping.time.column : null;
 		throw new TraceError({ code, line, column, value, limit: `at most ${most}` });
 	}
@@ -152,15 +141,8 @@ export class TraceReader {
 			if (hasValue(rows, from + VALUES_FROM, from + width)) this.usable++;
 		}
 		this.kept += count;
-		this.options.onRows?.(this.asColumns(rows, count));
+		this.options.onRows?.(toColumns(rows, count, this.channels));
 	};
-
-	private asColumns(rows: Float64Array, count: number): TraceRows {
-		const width = this.row.length;
-		const column = (at: number) => Float64Array.from({ length: count }, (_, row) => rows[row * width + at]!);
-		const values = this.channels.map((channel, at) => [channel, column(VALUES_FROM + at)]);
-		return { count, timeS: column(TIME_AT), values: Object.fromEntries(values) };
-	}
 
 	private requireEnough(): void {
 		if (this.usable >= 2) return;

@@ -82,7 +82,11 @@ export class RowGate {
 
 	private isHeader({ bytes, from, to }: CellSpans): boolean {
 		const { header } = this;
-		return to - from === header.length && header.length > 0 && header.every((byte, at) => bytes[from + at] === byte);
+		return (
+			to - from === header.length &&
+			header.length > 0 &&
+			header.every((byte, at) => bytes[from + at] === byte)
+		);
 	}
 }
 

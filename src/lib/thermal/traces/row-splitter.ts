@@ -82,7 +82,13 @@ export class RowSplitter {
 
 	private refuseLong(): never {
 		const limit = `a line end within ${MOST_ROW_BYTES} bytes; a quotation mark may be open`;
-		throw new TraceError({ code: 'row_too_long', line: this.line, column: null, value: 'a longer row', limit });
+		throw new TraceError({
+			code: 'row_too_long',
+			line: this.line,
+			column: null,
+			value: 'a longer row',
+			limit
+		});
 	}
 
 	/** Reads one row and gives it on; the place behind its line end, or −1 where it is not all there yet. */

@@ -103,7 +103,9 @@ function isHead(head: Partial<Head> | null): head is Head {
 
 function knowsChannels(channels: unknown): boolean {
 	if (!Array.isArray(channels) || channels.length === 0) return false;
-	return channels.every((channel, at) => TRACE_CHANNELS.includes(channel) && channels.indexOf(channel) === at);
+	return channels.every(
+		(channel, at) => TRACE_CHANNELS.includes(channel) && channels.indexOf(channel) === at
+	);
 }
 
 function readHead(bytes: Uint8Array, view: DataView): { head: Head; end: number } {

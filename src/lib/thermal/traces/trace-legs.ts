@@ -32,11 +32,12 @@ function requireRoom(input: string, value: number, fromS: number, toS: number): 
 	throw new EngineInputError(input, value, `${limit}, so that no leg is shorter than a minute`);
 }
 
-const replace = (legs: readonly TraceLeg[], from: number, count: number, by: readonly TraceLeg[]): TraceLeg[] => [
-	...legs.slice(0, from),
-	...by,
-	...legs.slice(from + count)
-];
+const replace = (
+	legs: readonly TraceLeg[],
+	from: number,
+	count: number,
+	by: readonly TraceLeg[]
+): TraceLeg[] => [...legs.slice(0, from), ...by, ...legs.slice(from + count)];
 
 /**
  * Moves the end of one leg, and with it the beginning of the next.

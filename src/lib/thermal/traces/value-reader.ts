@@ -39,7 +39,8 @@ export class ValueReader {
 		const from = row.starts[this.column - 1]!;
 		const to = row.ends[this.column - 1]!;
 		const written = from < to ? parseNumber(row.bytes, from, to, this.decimal) : NaN;
-		if (written !== written) return this.passOver(row, this.isBlankCell(row, from, to) ? 'blank' : 'unreadable');
+		if (written !== written)
+			return this.passOver(row, this.isBlankCell(row, from, to) ? 'blank' : 'unreadable');
 		const value = (written + this.shift) * this.factor;
 		if (isNeverMeasured(written) || (this.isTemperature && isSensorMark(value, this.before))) {
 			return this.passOver(row, 'sentinel');

@@ -32,8 +32,8 @@ interface LocalSlot {
 /**
  * Turns local times of one zone into seconds since 1970 UTC, through the hours that come twice and those that never come.
  *
- * An hour that comes twice (a fold): of its two instants the one nearer to the time before is taken, the first where there is
- * none. A time that never comes (a gap) is read with the offset from before the gap. Both are counted.
+ * An hour that comes twice (a fold): of its two instants the one nearer to where the next row was to be expected is taken, the
+ * first where there is none before. A time that never comes (a gap) is read with the offset from before the gap. Both are counted.
  *
  * Validity: from 1980 on, zones whose offset is a whole number of quarter hours.
  * Source: RFC 5545 (2009) 3.3.5 for gaps; the offsets are those of the IANA time zone database that the machine has.
@@ -51,6 +51,7 @@ export class ZoneClock {
 	private lastNumber = NaN;
 	private lastSlot: LocalSlot = { kind: 'plain', offsetS: 0, laterOffsetS: 0 };
 	private beforeS = NaN;
+	private readonly steps: [number, number] = [0, 0];
 
 	constructor(readonly timeZone: string) {
 		this.format = makeFormat(timeZone);
@@ -80,10 +81,20 @@ export class ZoneClock {
 		if (kind === 'fold') {
 			this.foldRows++;
 			const laterS = localS - laterOffsetS;
-			if (Math.abs(laterS - this.beforeS) < Math.abs(utcS - this.beforeS)) utcS = laterS;
+			const expectedS = this.beforeS + Math.min(...this.steps);
+			if (Math.abs(laterS - expectedS) < Math.abs(utcS - expectedS)) utcS = laterS;
+		}
+		this.follow(utcS);
+		return utcS;
+	}
+
+	/** Keeps the last two steps forward: the shorter is the logger's own, the longer may be a silence. */
+	private follow(utcS: number): void {
+		if (utcS > this.beforeS) {
+			this.steps[0] = this.steps[1];
+			this.steps[1] = utcS - this.beforeS;
 		}
 		this.beforeS = utcS;
-		return utcS;
 	}
 
 	private slotAt(number: number): LocalSlot {
