@@ -2,8 +2,8 @@
 export interface TraceGap {
 	fromS: number;
 	toS: number;
-	/** Of the row behind it; null where another part of the file goes on there. */
-	line: number | null;
+	/** Of the row behind it. */
+	line: number;
 }
 
 /** So many of the longest gaps are told; all are counted. */
@@ -30,7 +30,7 @@ export class IntervalTally {
 	private shortestKeptS = 0;
 	private total = 0;
 
-	add(fromS: number, toS: number, line: number | null): void {
+	add(fromS: number, toS: number, line: number): void {
 		const lengthS = toS - fromS;
 		const box = boxOf(lengthS);
 		this.counts[box]!++;

@@ -61,6 +61,15 @@ describe('bins', () => {
 		expectBins(trace, rows);
 	});
 
+	it('of tenths of a second since 1970 hold one row each, however the times are rounded', () => {
+		const text = Array.from({ length: 600 }, (_, at) => `${(1_769_868_000 + at / 10).toFixed(1)},20\n`).join(
+			''
+		);
+		const { trace } = readText(text, { ...SECONDS, time: { kind: 'epoch-s', column: 1 } });
+		expect([trace.stepS, trace.binCount]).toEqual([0.1, 600]);
+		expect([...trace.channels.cellC!.count].every((count) => count === 1)).toBe(true);
+	});
+
 	it('become longer when there would be too many', () => {
 		const rows = rowsOf(3, 1).concat(rowsOf(3, 1).map(([timeS, value]) => [timeS + 200_000, value]));
 		const trace = traceOf(rows);
@@ -211,6 +220,8 @@ describe('the bytes of a kept trace', () => {
 		for (const change of broken) {
 			expect(refusalOf(() => decodeTrace(encodeTrace({ ...trace, ...change }))).code).toBe('wrong_code');
 		}
+		const none = minutesTrace({ cellC: [] });
+		expect(refusalOf(() => decodeTrace(encodeTrace(none))).value).toBe('a head that cannot be');
 		const other = new Uint8Array(encodeTrace(trace));
 		other[4] = 2;
 		expect(refusalOf(() => decodeTrace(other.buffer)).value).toBe('version 2');

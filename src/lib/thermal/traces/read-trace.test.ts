@@ -138,6 +138,17 @@ describe('the bytes of a file', () => {
 		expect(whole.report.lines).toEqual({ total: 7, before: 2, blank: 1, comments: 0 });
 	});
 
+	it('hold quotation marks twice within a cell, and what would part cells behind them', () => {
+		const quoted = '"a"";b";x\n0;2,5\n"1";"2,""5"\n2;3\n';
+		const { report } = readText(quoted, mapping);
+		expect(report.lines).toMatchObject({ total: 4, before: 1 });
+		expect(report.findings).toEqual([{ reason: 'unreadable', line: 3, column: 2, value: '2,""5' }]);
+		const asTime = '0;2\n"1"";9";2\n2;2\n';
+		expect(readText(asTime, mapping).report.findings).toEqual([
+			{ reason: 'noTime', line: 2, column: 1, value: '1"";9' }
+		]);
+	});
+
 	it('may come in pieces cut anywhere', () => {
 		const bytes = toBytes(text);
 		for (let pieceBytes = 1; pieceBytes <= bytes.length; pieceBytes++) {

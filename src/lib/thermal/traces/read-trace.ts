@@ -74,7 +74,10 @@ export class TraceReader {
 		this.row = new Float64Array(VALUES_FROM + columns.length);
 		this.spikes = new SpikeFilter(columns, this.findings);
 		this.bins = new BinBuilder(this.channels);
-		this.sorter = new RowSorter(this.row.length, this.findings, this.takeRows);
+		this.sorter = new RowSorter(this.row.length, this.findings, {
+			take: this.takeRows,
+			join: ({ fromS, toS, line }) => this.intervals.add(fromS, toS, line)
+		});
 		this.gate = new RowGate(mapping, this.time, this.findings, options.firstRowLine ?? null);
 		this.splitter = new RowSplitter(mapping.delimiter.charCodeAt(0), this.readRow);
 	}
@@ -95,7 +98,9 @@ export class TraceReader {
 		this.sorter.flush();
 		this.requireEnough();
 		const { list } = this.sorter.spans;
-		list.slice(1).forEach(({ startS }, at) => this.intervals.add(list[at]!.endS, startS, null));
+		list
+			.slice(1)
+			.forEach(({ startS, startLine }, at) => this.intervals.add(list[at]!.endS, startS, startLine));
 		const medianIntervalS = this.intervals.medianS();
 		const { base, clock } = this.time;
 		const timeZone = clock?.timeZone ?? null;

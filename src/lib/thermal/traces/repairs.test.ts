@@ -27,109 +27,6 @@ function expectWhole({ lines, rows, cells }: TraceReport): void {
 	for (const counts of Object.values(cells)) expect(sum(counts)).toBe(rows.timed);
 }
 
-describe('rows out of order', () => {
-	it('are put in order, and counted', () => {
-		const rows: Row[] = [
-			[0, 20],
-			[3, 20.3],
-			[1, 20.1],
-			[2, 20.2],
-			[4, 20.4]
-		];
-		expect(listRows(secondsText(rows)).map(([timeS]) => timeS)).toEqual([0, 1, 2, 3, 4]);
-		expect(reportOf(rows).rows).toMatchObject({ kept: 5, moved: 2 });
-	});
-
-	it('are put in order up to a thousand rows late, however the pieces are cut', () => {
-		const late: Row[] = [
-			...steady(500),
-			[100.5, 20.2],
-			...steady(2000, 500),
-			[1600.5, 20.2],
-			...steady(900, 2500)
-		];
-		const text = secondsText(late);
-		expect(listRows(text).map(([timeS]) => timeS)).toEqual(
-			late.map(([timeS]) => Number(timeS)).sort((a, b) => a - b)
-		);
-		expect(readBytes(toBytes(text), SECONDS, { pieceBytes: 97 })).toEqual(readText(text));
-	});
-
-	it('are kept where the days of a file stand the wrong way round', () => {
-		const [first, second] = [steady(3000), steady(3000, 86_400)];
-		const { trace, report } = readText(secondsText([...second, ...first]));
-		expect(report.rows).toMatchObject({ kept: 6000, moved: 3000 });
-		expect(trace).toEqual(readText(secondsText([...first, ...second])).trace);
-		expect(report.gaps).toMatchObject({ count: 1, told: [{ fromS: 2999, toS: 86_400, line: null }] });
-	});
-
-	it('are dropped far back in a time that is covered, and counted', () => {
-		const { rows } = reportOf([...steady(4000), ...steady(4000)]);
-		expect(rows).toMatchObject({ read: 8000, kept: 4000, dropped: { alreadyCovered: 4000 } });
-	});
-
-	it('do not hide a second of silence between two parts', () => {
-		const { rows } = reportOf([...steady(2000, 4000), ...steady(2000), ...steady(2000, 2000)]);
-		expect(rows).toMatchObject({ kept: 6000 });
-	});
-});
-
-describe('the same time twice', () => {
-	it('keeps the first row, and tells the same values from others', () => {
-		const rows: Row[] = [
-			[0, 20],
-			[1, 20.1],
-			[1, 20.1],
-			[1, 20.7],
-			[2, 20.2],
-			[2, '']
-		];
-		expect(listRows(secondsText(rows))).toEqual([
-			[0, 20],
-			[1, 20.1],
-			[2, 20.2]
-		]);
-		const report = reportOf(rows);
-		expect(report.rows.dropped).toMatchObject({ repeated: 1, repeatedDiffering: 2 });
-		expect(
-			report.findings.filter(({ reason }) => reason === 'repeatedDiffering').map(({ line }) => line)
-		).toEqual([5, 7]);
-	});
-});
-
-describe('gaps', () => {
-	it('are longer than five median intervals, and told with their line', () => {
-		const rows = [...steady(100), ...steady(100, 105), ...steady(100, 300)].filter(
-			([timeS]) => timeS !== 110
-		);
-		const { gaps, medianIntervalS } = reportOf(rows);
-		expect(medianIntervalS).toBe(1);
-		// From 99 to 105 and from 204 to 300; the one row that is missing is no gap.
-		expect(gaps).toEqual({
-			overS: 5,
-			count: 2,
-			told: [
-				{ fromS: 99, toS: 105, line: 102 },
-				{ fromS: 204, toS: 300, line: 201 }
-			]
-		});
-	});
-
-	it('are as long as one says', () => {
-		const text = secondsText([...steady(100), ...steady(100, 103)]);
-		expect(readText(text, SECONDS, { gapIntervals: 3 }).report.gaps.count).toBe(1);
-		expect(readText(text, SECONDS, { gapIntervals: 4 }).report.gaps.count).toBe(0);
-	});
-
-	it('are all counted and the hundred longest told', () => {
-		const rows: Row[] = [];
-		for (let at = 0, timeS = 0; at < 150; at++, timeS += 40 + at) rows.push(...steady(30, timeS));
-		const { count, told } = reportOf(rows).gaps;
-		expect([count, told.length]).toEqual([149, 100]);
-		expect(told[0]!.toS - told[0]!.fromS).toBe(12 + 49);
-	});
-});
-
 describe('cells that are no measurements', () => {
 	it.each([
 		['blank', ''],
@@ -191,6 +88,19 @@ describe('cells that are no measurements', () => {
 		).toMatchObject({ values: 4, spike: 0 });
 		const current: TraceMapping = { ...SECONDS, columns: [{ column: 2, channel: 'currentA', unit: 'A' }] };
 		expect(readText('0,-3\n1,85\n2,-3\n', current).report.cells.currentA).toMatchObject({ values: 3 });
+	});
+
+	it('are found wherever they stand in a long file', () => {
+		const spikesAt = [1, 1022, 1023, 1024, 1025, 1027, 2047, 2048, 2050, 2998];
+		const rows = steady(3000).map(([timeS, value], at): Row => [
+			timeS,
+			spikesAt.includes(at) && at % 2 === 0 ? 60 : value
+		]);
+		expect(reportOf(rows).cells.cellC!.spike).toBe(spikesAt.filter((at) => at % 2 === 0).length);
+		for (const at of spikesAt) {
+			const one = steady(3000).map(([timeS, value], row): Row => [timeS, row === at ? 60 : value]);
+			expect(reportOf(one).findings).toEqual([{ reason: 'spike', line: at + 2, column: 2, value: '60' }]);
+		}
 	});
 
 	it('do not take what could have risen in between: a spike has near neighbours', () => {
@@ -301,13 +211,6 @@ describe('what cannot be read is refused with its place', () => {
 		expect(fault.message).toBe(
 			'Line 3, column 1: found no time in any row; needed: times as the mapping says.'
 		);
-	});
-
-	it('times that jump about without end', () => {
-		const rows = Array.from({ length: 2000 }, (_, at): Row => [((at * 7919) % 1000) * 4000 + at, 20]);
-		expect(reportOf(rows).rows.read).toBe(2000);
-		const far = Array.from({ length: 5002 }, (_, at): Row => [(at % 2 === 0 ? 5e6 : 2.5e6) - at * 450, 20]);
-		expect(read(secondsText(far)).code).toBe('not_in_order');
 	});
 
 	it('more bytes than 200 MB, before they are looked at', () => {

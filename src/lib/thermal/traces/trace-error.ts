@@ -8,7 +8,6 @@ export const TRACE_ERROR_CODES = {
 	too_many_bytes: 'The file is larger than can be read.',
 	row_too_long: 'A row does not end.',
 	too_long: 'The trace covers more time than can be read.',
-	not_in_order: 'The times jump about too often to be put in order.',
 	wrong_mapping: 'What is said of the columns cannot be.',
 	no_such_zone: 'No time zone has this name.',
 	wrong_code: 'The bytes are not a trace that was kept.'
