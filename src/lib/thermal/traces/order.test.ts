@@ -8,6 +8,7 @@ import {
 	secondsText,
 	toBytes
 } from '../../../../tests/support/trace-files';
+import { CoveredSpans } from './covered-spans';
 import type { TraceReport } from './trace-report';
 
 type Row = readonly [number | string, number | string];
@@ -136,6 +137,44 @@ describe('the same time twice', () => {
 		expect(
 			report.findings.filter(({ reason }) => reason === 'repeatedDiffering').map(({ line }) => line)
 		).toEqual([5, 7]);
+	});
+});
+
+it('the first row may stand there again', () => {
+	const { dropped } = reportOf([
+		[5, 20],
+		[5, 20],
+		[5, 20.2],
+		[6, 20]
+	]).rows;
+	expect(dropped).toMatchObject({ repeated: 1, repeatedDiffering: 1, alreadyCovered: 0 });
+});
+
+describe('stretches of time', () => {
+	it('are made one where they meet when the later one was there first', () => {
+		const spans = new CoveredSpans();
+		spans.openAt(100, 7).endS = 200;
+		const earlier = spans.openAt(20, 9);
+		earlier.endS = 60;
+		expect([60, 61, 99, 100, 200, 201].map((timeS) => spans.covers(timeS))).toEqual([
+			true,
+			false,
+			false,
+			true,
+			true,
+			false
+		]);
+		expect(spans.nextStartS(earlier)).toBe(100);
+		expect(spans.joinWithNext(earlier)).toEqual({ fromS: 60, toS: 100, line: 7 });
+		expect(spans.list).toEqual([{ startS: 20, endS: 200, startLine: 9 }]);
+	});
+
+	it('stay apart over more than a minute', () => {
+		const spans = new CoveredSpans();
+		const [later, earlier] = [spans.openAt(121, 1), spans.openAt(60, 2)];
+		expect([spans.joinWithNext(earlier), spans.joinWithNext(later)]).toEqual([null, null]);
+		expect(spans.openAt(181, 3)).toBe(later);
+		expect(spans.openAt(182, 4)).not.toBe(later);
 	});
 });
 

@@ -26,7 +26,7 @@ import { ValueReader } from './value-reader';
  * Reads a logger's CSV in a stream: pieces of the file in, kept rows and the binned trace out, in memory that does not grow.
  *
  * Feed it with `push` as the pieces come, breathe between them, and ask `finish` for what came of it. Pieces may be cut
- * anywhere: the answer is the same. Rows come to `onRows` in order of time, up to 1,024 a call; rows that a file brings far out
+ * anywhere: the answer is the same. Rows come to `onRows` in order of time, at most 2,047 a call; rows that a file brings far out
  * of order begin again with an earlier time.
  *
  * @throws TraceError from the constructor for a mapping that cannot be; from `push` and `finish` for a file that cannot be read,
