@@ -44,25 +44,31 @@ function rebuild(old: Sums, used: number, capacity: number, shift: number, facto
 	return sums;
 }
 
-function finishBins({ count, sum, min, max }: Sums, used: number): ChannelBins {
-	const bins = emptyBins(used);
-	for (let bin = 0; bin < used; bin++) {
-		const values = count[bin]!;
+function finishBins({ count, sum, min, max }: Sums, from: number, end: number): ChannelBins {
+	const bins = emptyBins(end - from);
+	for (let at = from; at < end; at++) {
+		const values = count[at]!;
 		if (values === 0) continue;
+		const bin = at - from;
 		bins.count[bin] = values;
-		bins.mean[bin] = Math.min(Math.max(sum[bin]! / values, min[bin]!), max[bin]!);
-		bins.min[bin] = min[bin]!;
-		bins.max[bin] = max[bin]!;
+		bins.mean[bin] = Math.min(Math.max(sum[at]! / values, min[at]!), max[at]!);
+		bins.min[bin] = min[at]!;
+		bins.max[bin] = max[at]!;
 	}
 	return bins;
 }
 
-/** Sums rows into bins while they are read: begins with the shortest bins and joins them whenever they become too many. */
+/**
+ * Sums rows into bins while they are read: begins with the shortest bins and joins them whenever they become too many. Bins may
+ * be added at both ends; those in front of the first used one are room for more.
+ */
 export class BinBuilder {
 	private stepAt = 0;
 	private perSecond = 1 / BIN_STEPS_S[0];
+	/** Where bin 0 begins: always on a whole minute. */
 	private originS = NaN;
-	private used = 0;
+	private first = Infinity;
+	private end = 0;
 	private capacity = FIRST_CAPACITY;
 	private sums: Sums[];
 
@@ -87,9 +93,11 @@ export class BinBuilder {
 		while (this.stepAt < BIN_STEPS_S.length - 1 && BIN_STEPS_S[this.stepAt]! < medianIntervalS - HAIR_S) {
 			this.coarsen();
 		}
-		const bins = this.channels.map((channel, at) => [channel, finishBins(this.sums[at]!, this.used)]);
 		const stepS = BIN_STEPS_S[this.stepAt]!;
-		return { startS: this.originS, stepS, binCount: this.used, channels: Object.fromEntries(bins) };
+		const from = this.toMinute(this.first);
+		const bins = this.channels.map((channel, at) => [channel, finishBins(this.sums[at]!, from, this.end)]);
+		const startS = this.originS + Math.round(from * stepS);
+		return { startS, stepS, binCount: this.end - from, channels: Object.fromEntries(bins) };
 	}
 
 	private put(sums: Sums, bin: number, value: number): void {
@@ -100,40 +108,50 @@ export class BinBuilder {
 	}
 
 	private findBin(timeS: number): number {
-		if (!(timeS >= this.originS)) this.beginAt(Math.floor((timeS + HAIR_S) / MINUTE_S) * MINUTE_S);
-		let bin = Math.floor((timeS - this.originS + HAIR_S) * this.perSecond);
-		while (bin >= MOST_BINS) {
+		if (!(timeS >= this.originS)) this.makeRoomBefore(Math.floor((timeS + HAIR_S) / MINUTE_S) * MINUTE_S);
+		const bin = Math.floor((timeS - this.originS + HAIR_S) * this.perSecond);
+		const [first, end] = [Math.min(this.first, bin), Math.max(this.end, bin + 1)];
+		if (end - this.toMinute(first) > MOST_BINS) {
 			this.coarsen();
-			bin = Math.floor((timeS - this.originS + HAIR_S) * this.perSecond);
+			return this.findBin(timeS);
 		}
-		if (bin >= this.capacity) this.grow(bin + 1);
-		if (bin >= this.used) this.used = bin + 1;
+		if (end > this.capacity) this.rebuildAll(end, 0, 1);
+		this.first = first;
+		this.end = end;
 		return bin;
 	}
 
-	private beginAt(originS: number): void {
-		const earlierS = this.originS - originS;
-		this.originS = originS;
-		if (!(earlierS > 0)) return;
-		while (this.used + Math.round(earlierS * this.perSecond) > MOST_BINS) this.coarsen();
-		const shift = Math.round(earlierS * this.perSecond);
-		this.rebuildAll(this.used + shift, shift, 1);
+	/** Lets bin 0 begin at this minute or before: with as much room again, so that a file with its newest row first is quick too. */
+	private makeRoomBefore(minuteS: number): void {
+		const earlierS = this.originS - minuteS;
+		if (!(earlierS > 0)) {
+			this.originS = minuteS;
+			return;
+		}
+		while (this.end + Math.round(earlierS * this.perSecond) > MOST_BINS) this.coarsen();
+		const needed = Math.round(earlierS * this.perSecond);
+		const shift = needed + this.toMinute(Math.min(this.end, MOST_BINS - this.end - needed));
+		this.originS -= Math.round(shift / this.perSecond);
+		this.rebuildAll(this.end + shift, shift, 1);
 	}
 
-	private grow(needed: number): void {
-		this.rebuildAll(needed, 0, 1);
+	/** The bin that begins with the minute in which this one lies. */
+	private toMinute(bin: number): number {
+		const each = Math.round(MINUTE_S * this.perSecond);
+		return Math.floor(bin / each) * each;
 	}
 
 	private coarsen(): void {
 		const factor = Math.round(BIN_STEPS_S[this.stepAt + 1]! / BIN_STEPS_S[this.stepAt]!);
 		this.stepAt++;
 		this.perSecond = 1 / BIN_STEPS_S[this.stepAt]!;
-		this.rebuildAll(Math.ceil(this.used / factor), 0, factor);
+		this.rebuildAll(Math.ceil(this.end / factor), 0, factor);
 	}
 
 	private rebuildAll(needed: number, shift: number, factor: number): void {
-		while (this.capacity < needed) this.capacity = Math.min(2 * this.capacity, MOST_BINS);
-		this.sums = this.sums.map((old) => rebuild(old, this.used, this.capacity, shift, factor));
-		this.used = Math.ceil((this.used + shift) / factor);
+		while (this.capacity < needed) this.capacity *= 2;
+		this.sums = this.sums.map((old) => rebuild(old, this.end, this.capacity, shift, factor));
+		this.first = Math.floor((this.first + shift) / factor);
+		this.end = Math.ceil((this.end + shift) / factor);
 	}
 }

@@ -150,6 +150,19 @@ it('the first row may stand there again', () => {
 	expect(dropped).toMatchObject({ repeated: 1, repeatedDiffering: 1, alreadyCovered: 0 });
 });
 
+it.each([
+	['days', 20, 3600],
+	['hours at a fine step', 4000, 7],
+	['what only just has room', 99_990, 1],
+	['what has a bin too many', 100_020, 1]
+])('bins do not depend on the order: %s', (_, count, stepS) => {
+	const rows = steady(count).map(([timeS, value]): Row => [Number(timeS) * stepS, value]);
+	const middle = Math.floor(count / 2);
+	const inOrder = readText(secondsText(rows)).trace;
+	expect(readText(secondsText([...rows].reverse())).trace).toEqual(inOrder);
+	expect(readText(secondsText([...rows.slice(middle), ...rows.slice(0, middle)])).trace).toEqual(inOrder);
+});
+
 describe('stretches of time', () => {
 	it('are made one where they meet when the later one was there first', () => {
 		const spans = new CoveredSpans();
