@@ -2,15 +2,20 @@
 const style = (options: Intl.DateTimeFormatOptions, timeZone?: string): Intl.DateTimeFormat =>
 	new Intl.DateTimeFormat('en-GB', { ...options, ...(timeZone ? { timeZone } : {}) });
 
+/** A day without a time is that day everywhere; a moment is a day where its reader is. */
+const IS_DAY = /^\d{4}-\d{2}-\d{2}$/;
+const zoneOf = (moment: Date | string | number, timeZone?: string): string | undefined =>
+	typeof moment === 'string' && IS_DAY.test(moment) ? 'UTC' : timeZone;
+
 const toDate = (moment: Date | string | number): Date => (moment instanceof Date ? moment : new Date(moment));
 
 /** "4 March 2026". */
 export const formatDate = (moment: Date | string | number, timeZone?: string): string =>
-	style({ day: 'numeric', month: 'long', year: 'numeric' }, timeZone).format(toDate(moment));
+	style({ day: 'numeric', month: 'long', year: 'numeric' }, zoneOf(moment, timeZone)).format(toDate(moment));
 
 /** "4 Mar 2026", for tables. */
 export const formatShortDate = (moment: Date | string | number, timeZone?: string): string =>
-	style({ day: 'numeric', month: 'short', year: 'numeric' }, timeZone).format(toDate(moment));
+	style({ day: 'numeric', month: 'short', year: 'numeric' }, zoneOf(moment, timeZone)).format(toDate(moment));
 
 /** "14:02". */
 export const formatTimeOfDay = (moment: Date | string | number, timeZone?: string): string =>

@@ -61,8 +61,12 @@ describe('a letter that the mail server does not take', () => {
 		expect(mail).toMatchObject({ state: 'failed', lastError: 'Withdrawn.' });
 	});
 
-	it('is given up after eight tries', async () => {
-		expect(await postAndSend('busy@travellers.example', 7)).toMatchObject({ state: 'failed', attempts: 8 });
+	it('is tried for three days, and then given up', async () => {
+		expect(await postAndSend('busy@travellers.example', 78)).toMatchObject({
+			state: 'waiting',
+			attempts: 79
+		});
+		expect(await postAndSend('busy@travellers.example', 79)).toMatchObject({ state: 'failed', attempts: 80 });
 	});
 
 	it('keeps no other letter from going out', async () => {

@@ -10,8 +10,10 @@ import { closeTransport, deliver, type Letter } from './transport';
 
 const LOOK_EVERY_MS = 5_000;
 const BATCH = 20;
-const MOST_ATTEMPTS = 8;
 const FIRST_PAUSE_MS = 5_000;
+const LONGEST_PAUSE_MS = 60 * 60_000;
+/** Over three days: a mail server that is down over a weekend costs no letter. */
+const MOST_ATTEMPTS = 80;
 /** While one process is busy with a letter, others leave it alone for this long. */
 const CLAIM_MS = 60_000;
 
@@ -40,7 +42,7 @@ const FORGOTTEN = { textBody: '', htmlBody: '' };
 export async function dropMails(ids: number[], reason: string): Promise<void> {
 	await OutgoingMail.update(
 		{ state: 'failed', lastError: reason, ...FORGOTTEN },
-		{ where: { id: ids, state: 'waiting' } }
+		{ where: { id: ids, state: ['waiting', 'failed'] } }
 	);
 }
 
@@ -86,19 +88,33 @@ async function claim(mail: OutgoingMail): Promise<boolean> {
 	return changed === 1;
 }
 
+/** The server has it: that this cannot be noted at once must not send it again. */
+async function noteSent(mail: OutgoingMail): Promise<void> {
+	const sent = {
+		state: 'sent',
+		sentAt: new Date(),
+		lastError: '',
+		...FORGOTTEN,
+		...withoutReader(mail)
+	} as const;
+	const note = () => OutgoingMail.update(sent, { where: { id: mail.id } });
+	await note().catch(note).catch(note);
+}
+
 async function sendOne(mail: OutgoingMail): Promise<void> {
 	if (!(await claim(mail))) return;
 	const attempts = mail.attempts + 1;
-	try {
-		await deliver(mail);
-		await OutgoingMail.update(
-			{ state: 'sent', sentAt: new Date(), lastError: '', ...FORGOTTEN, ...withoutReader(mail) },
-			{ where: { id: mail.id } }
-		);
-	} catch (error) {
+	const refusal = await deliver(mail).then(
+		() => null,
+		(error: unknown) => ({ error })
+	);
+	if (refusal === null) await noteSent(mail);
+	else {
+		const { error } = refusal;
 		const lastError = sayMailError(error);
 		const givenUp = attempts >= MOST_ATTEMPTS || isFinalRefusal(error);
-		const nextAttemptAt = new Date(Date.now() + FIRST_PAUSE_MS * 2 ** attempts);
+		const pauseMs = Math.min(FIRST_PAUSE_MS * 2 ** attempts, LONGEST_PAUSE_MS);
+		const nextAttemptAt = new Date(Date.now() + pauseMs);
 		await OutgoingMail.update(
 			{
 				...{ state: givenUp ? 'failed' : 'waiting', nextAttemptAt, lastError },
@@ -112,8 +128,8 @@ async function sendOne(mail: OutgoingMail): Promise<void> {
 }
 
 /**
- * Sends what is due. A letter that fails waits longer each time and is given up after eight tries, or at once when the
- * server refuses it for good.
+ * Sends what is due. A letter that fails waits longer each time, up to an hour, and is given up after three days, or at
+ * once when the server refuses it for good.
  */
 export async function sendDue(isOver: () => boolean = () => false): Promise<void> {
 	let due: OutgoingMail[];

@@ -11,6 +11,7 @@ import type {
 	Person,
 	Session,
 	Sheet,
+	StoredFile,
 	Vehicle
 } from '../db/models';
 
@@ -25,6 +26,7 @@ export interface HeldRows {
 	sheets: (Sheet & { acknowledgement?: Acknowledgement | null })[];
 	questions: { jobId: number; thread: Question[] }[];
 	letters: OutgoingMail[];
+	files: StoredFile[];
 	story: MyVehicle[];
 	erasure: MyErasure | null;
 }
@@ -57,9 +59,30 @@ const presentLetter = ({ kind, recipient, subject, state, createdAt, sentAt }: O
 	...{ to: recipient, subject, state, writtenAt: iso(createdAt), sentAt: iso(sentAt) }
 });
 
+const presentFile = (file: StoredFile) => ({
+	...{ name: file.name, caption: file.caption, kind: file.kind, addedAt: iso(file.createdAt) },
+	inThisParcel: pathOfFile(file)
+});
+
+/** Where the content of a file lies in the parcel. */
+export const pathOfFile = ({ id, kind }: StoredFile): string =>
+	kind === 'photo' ? `files/photo-${id}.jpg` : `files/document-${id}.pdf`;
+
 /** What is held, under names that a person can read; only what is listed here leaves the house. */
 export function presentHeldData(held: HeldRows) {
-	const { customer, people, sessions, vehicles, jobs, assessments, sheets, questions, letters, story } = held;
+	const {
+		customer,
+		people,
+		sessions,
+		vehicles,
+		jobs,
+		assessments,
+		sheets,
+		questions,
+		letters,
+		files,
+		story
+	} = held;
 	return {
 		aboutYou: {
 			...{ name: customer.name, email: customer.email, telephone: customer.phone },
@@ -76,7 +99,8 @@ export function presentHeldData(held: HeldRows) {
 			...{ number, note, begunAt: iso(createdAt) },
 			estimates: assessments.filter(({ jobId }) => jobId === id).map(presentAssessment),
 			pages: sheets.filter(({ jobId }) => jobId === id).map(presentSheet),
-			questions: questions.find(({ jobId }) => jobId === id)?.thread ?? []
+			questions: questions.find(({ jobId }) => jobId === id)?.thread ?? [],
+			photosAndDocuments: files.filter(({ jobId }) => jobId === id).map(presentFile)
 		})),
 		letters: letters.map(presentLetter),
 		whatHappened: story.map(({ name, history, lessons }) => ({ vehicle: name, history, lessons })),

@@ -11,6 +11,7 @@ import {
 	Acknowledgement,
 	Assessment,
 	AuditEntry,
+	Customer,
 	Erasure,
 	FieldNote,
 	Installation,
@@ -126,6 +127,27 @@ describe('an erasure', () => {
 		await askForAged();
 		expect(await Erasure.count({ where: { workshopId } })).toBe(1);
 		expect((await getRetention(manager)).preview.total).toBe(0);
+	}, 60_000);
+
+	it('by the rule comes after what a customer asked for, and again a year after a refusal', async () => {
+		const { crew, request } = await makeRequest();
+		const { manager, workshopId } = crew;
+		const aged = await Customer.bulkCreate(
+			Array.from({ length: 3 }, (_, at) => ({ workshopId, name: `Aged ${at}` }))
+		);
+		const at = `${addMonths(today(), -30)} 12:00:00`;
+		await connection().query('UPDATE customers SET updated_at = :at WHERE id IN (:ids)', {
+			replacements: { at, ids: aged.map(({ id }) => id) }
+		});
+		await saveRetention(manager, { years: 2, version: 0 });
+		await askForAged();
+		const [first, second] = await listErasures(manager);
+		expect(first!.id).toBe(request.id);
+		const refusal = { decision: 'refuse', reason: 'Under warranty.', version: second!.version } as const;
+		await decideErasure(manager, second!.id, refusal);
+		expect(await askForAged()).toBe(0);
+		expect(await askForAged(addMonths(today(), 13))).toBeGreaterThan(0);
+		expect(await Erasure.count({ where: { customerId: second!.customerId } })).toBe(2);
 	}, 60_000);
 
 	it('leaves nothing of the person in any column of any table, and tells them', async () => {

@@ -1,4 +1,4 @@
-import type { Transaction } from 'sequelize';
+import { literal, Op, type Transaction } from 'sequelize';
 import type { DecideErasure, ErasureView, MyErasure } from '$lib/schemas/erasures';
 import type { SignedInPerson } from '$lib/schemas/people';
 import { Customer, Erasure, Job, Person, Vehicle, Workshop } from '../db/models';
@@ -30,16 +30,22 @@ async function present(erasure: Erasure): Promise<ErasureView> {
 
 /** What customers asked to have deleted: what waits first, then what was decided. */
 export async function listErasures(person: SignedInPerson): Promise<ErasureView[]> {
-	allow(person, 'erasures.decide');
-	const rows = await Erasure.findAll({
-		where: { workshopId: person.workshopId },
+	const { workshopId } = allow(person, 'erasures.decide');
+	const waiting = await Erasure.findAll({
+		where: { workshopId, state: 'asked' },
+		// What a person asked for stands before what a rule put here, and of each the one that waits longest.
 		order: [
-			['state', 'ASC'],
-			['id', 'DESC']
+			[literal('asked_by IS NULL'), 'ASC'],
+			['id', 'ASC']
 		],
 		limit: MOST_LISTED
 	});
-	return Promise.all(rows.map(present));
+	const decided = await Erasure.findAll({
+		where: { workshopId, state: { [Op.ne]: 'asked' } },
+		order: [['id', 'DESC']],
+		limit: MOST_LISTED
+	});
+	return Promise.all([...waiting, ...decided].map(present));
 }
 
 /** A customer's newest request, if they made one. */

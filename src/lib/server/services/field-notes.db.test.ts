@@ -74,6 +74,18 @@ describe('notes from the field', () => {
 		}
 	);
 
+	it('go on teaching after one that fitted nothing', { timeout: LONG_MS }, async () => {
+		const { installer, mountId } = await makeMount();
+		const label = { kind: 'peak-label', place: 'case', hottestDayC: 40 } as const;
+		const mistyped = { ...label, notedOn: '2026-02-10', turnedC: 210, notTurnedC: null };
+		const one = await addFieldNote(installer, mountId, mistyped);
+		expect(one.rows[0]!.finding!.learning!.fits).toBe(false);
+		const two = await addFieldNote(installer, mountId, {
+			...{ ...label, notedOn: '2026-03-10', turnedC: null, notTurnedC: 90 }
+		});
+		expect(two.rows[0]!.finding!.learning!.fits).toBe(true);
+	});
+
 	it('of capacity tests draw where the capacity goes', async () => {
 		const { installer, mountId } = await makeMount();
 		await addFieldNote(installer, mountId, test('2026-02-01', 99));

@@ -19,7 +19,7 @@ import { AppError, notFound } from '../errors';
 import { allow } from '../policies';
 import { presentFieldNote } from '../presenters/field-notes';
 import { recordBy } from './audit';
-import { daysBetween, today } from './days';
+import { daysBetween, latestToday } from './days';
 import { findStandingMount } from './mounts';
 import { listKeptOutlooks } from './outlooks';
 import { refreshReview } from './review/keep-review';
@@ -65,10 +65,11 @@ function readingOf(data: FieldNoteInput): FieldReading | null {
 	return { kind: 'cut-out', report: { wentDarkHour, cameBackHour, withinHours } };
 }
 
-/** Earlier notes that taught something: labels, and what heat had done. */
+/** Earlier notes that taught something: labels, and what heat had done. What fitted nothing does not spoil what follows. */
 function listReadings(assessment: Assessment, notes: readonly FieldNote[]): ReadingDay[] {
 	return notes.flatMap(({ data, finding }) => {
 		if (data.kind === 'cut-out' && finding?.cause?.finding !== 'explained') return [];
+		if (finding?.learning?.fits === false) return [];
 		const reading = readingOf(data);
 		if (reading === null || !('hottestDayC' in data)) return [];
 		return [{ scenario: scenarioOn(assessment, data.hottestDayC), reading }];
@@ -103,7 +104,7 @@ function refuseImpossible(data: FieldNoteInput, fittedOn: string): void {
 	const refuse = (path: string, message: string): never => {
 		throw new AppError('invalid_input', message, [{ path, message }]);
 	};
-	if (data.notedOn > today()) refuse('notedOn', 'The day must not be in the future.');
+	if (data.notedOn > latestToday()) refuse('notedOn', 'The day must not be in the future.');
 	if (data.notedOn < fittedOn) refuse('notedOn', `The day must not be before it was fitted, ${fittedOn}.`);
 	const reading = readingOf(data);
 	if (reading === null) return;

@@ -5,6 +5,7 @@ import { Customer, FollowUp, Job, OutgoingMail } from '../db/models';
 import { addDays, addMonths, daysBetween } from './days';
 import { writeCalendar } from './follow-up-calendar';
 import { finishFollowUp, getFitting, saveFitting } from './fittings';
+import { removeMount } from './mounts';
 import { remindDue } from './reminders';
 
 useTestDatabase();
@@ -88,6 +89,22 @@ describe('the dates', () => {
 		expect(letters[0]!.textBody).toContain('on 28 February 2026 or thereabouts');
 		const reminded = await FollowUp.findByPk(fitting.followUps[0]!.id);
 		expect(reminded!.remindedAt).not.toBeNull();
+	});
+
+	it('that are long past, or of a mount that was taken away, are not reminded of', async () => {
+		const { installer } = await makeCrew();
+		const { fitting } = await makeFitted(installer);
+		const removed = await makeFitted(installer);
+		await removeMount(installer, removed.mountId);
+		await remindDue('2027-01-20');
+		const remindedOf = async ({ followUps }: typeof fitting) =>
+			(
+				await FollowUp.findAll({ where: { id: followUps.map(({ id }) => id) }, order: [['dueOn', 'ASC']] })
+			).map(({ remindedAt }) => remindedAt !== null);
+		expect(await remindedOf(fitting)).toEqual([false, false, false]);
+		await remindDue('2027-01-24');
+		expect(await remindedOf(fitting)).toEqual([false, false, true]);
+		expect(await remindedOf(removed.fitting)).toEqual([false, false, false]);
 	});
 
 	it('that were done are not reminded of', async () => {

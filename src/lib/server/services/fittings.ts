@@ -12,7 +12,7 @@ import { AppError, changedMeanwhile, notFound } from '../errors';
 import { allow } from '../policies';
 import { listAgreed, presentFitting } from '../presenters/fittings';
 import { recordBy } from './audit';
-import { addMonths, today } from './days';
+import { addMonths, latestToday, today } from './days';
 import { findStandingMount } from './mounts';
 import { saveVersioned } from './records';
 import { refreshReview } from './review/keep-review';
@@ -70,7 +70,7 @@ async function setFollowUps(
 }
 
 function refuseFuture({ fittedOn }: FittingChange): void {
-	if (fittedOn <= today()) return;
+	if (fittedOn <= latestToday()) return;
 	const message = 'Fitted on must not be in the future.';
 	throw new AppError('invalid_input', message, [{ path: 'fittedOn', message }]);
 }

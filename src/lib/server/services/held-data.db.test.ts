@@ -1,18 +1,27 @@
 import { strFromU8, unzipSync } from 'fflate';
+import sharp from 'sharp';
 import { describe, expect, it } from 'vitest';
 import { makeKnownCustomer } from '../../../../tests/support/known-customer';
+import { asIncoming, telephonePhoto } from '../../../../tests/support/pictures';
 import { useTestDatabase } from '../../../../tests/support/services';
-import { AuditEntry } from '../db/models';
+import { AuditEntry, Mount } from '../db/models';
+import { addFile } from './files';
 import { getHeldData, packHeldData } from './held-data';
 
 useTestDatabase();
 
 describe('what is held about a customer', () => {
 	it('goes out as one parcel: a first page to read, the data, and every page as text', async () => {
-		const { known, customer, sheet } = await makeKnownCustomer();
+		const { known, customer, crew, jobId, sheet } = await makeKnownCustomer();
+		const mount = (await Mount.findOne({ where: { jobId, letter: 'A' } }))!;
+		const photo = await asIncoming('corner.jpg', await telephonePhoto(300, 200), (file) =>
+			addFile(crew.installer, mount.id, file)
+		);
 		const parcel = unzipSync(await packHeldData(customer));
 		expect(Object.keys(parcel).sort()).toEqual([
-			...['data.json', `documents/page-${sheet.id}.txt`, 'read-me-first.txt']
+			...['data.json', `documents/handover-${mount.id}.pdf`, `documents/page-${sheet.id}.txt`],
+			...[`documents/recommendation-${sheet.recommendationId}.pdf`, `files/photo-${photo.id}.jpg`],
+			'read-me-first.txt'
 		]);
 		const read = (path: string): string => strFromU8(parcel[path]!);
 		for (const words of [known.name, known.email, known.phone, known.registration]) {
@@ -20,6 +29,8 @@ describe('what is held about a customer', () => {
 			expect(read('data.json')).toContain(words);
 		}
 		expect(read(`documents/page-${sheet.id}.txt`)).toContain(`Prepared for ${known.name}`);
+		const seen = await sharp(parcel[`files/photo-${photo.id}.jpg`]!).metadata();
+		expect(seen.format).toBe('jpeg');
 		const data = JSON.parse(read('data.json')) as Awaited<ReturnType<typeof getHeldData>>;
 		expect(data.jobs).toHaveLength(1);
 		expect(data.jobs[0]!.questions).toMatchObject([{ words: known.question, name: known.name }]);

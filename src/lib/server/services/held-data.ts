@@ -1,4 +1,4 @@
-import { strToU8, zipSync } from 'fflate';
+import { strToU8, zipSync, type Zippable } from 'fflate';
 import type { SignedInPerson } from '$lib/schemas/people';
 import {
 	Acknowledgement,
@@ -9,17 +9,27 @@ import {
 	Person,
 	Session,
 	Sheet,
+	StoredFile,
 	Vehicle
 } from '../db/models';
 import { Op } from 'sequelize';
 import { inTransaction } from '../db/transaction';
-import { notFound } from '../errors';
+import { AppError, notFound } from '../errors';
 import { allow } from '../policies';
-import { presentHeldData, textOfSheet, type HeldData, type HeldRows } from '../presenters/held-data';
+import {
+	pathOfFile,
+	presentHeldData,
+	textOfSheet,
+	type HeldData,
+	type HeldRows
+} from '../presenters/held-data';
 import { writeHeldIndex, type ParcelFile } from '../presenters/held-index';
 import { recordBy } from './audit';
+import { listCustomerDocuments } from './customer-documents';
 import { getMyErasure } from './erasures';
+import { readStoredContent } from './files';
 import { listMyVehicles } from './my-vehicles';
+import { writeMyHandover, writeMyRecommendation } from './papers';
 import { readThread } from './question-threads';
 
 async function readHeld(person: SignedInPerson): Promise<HeldRows> {
@@ -45,6 +55,7 @@ async function readHeld(person: SignedInPerson): Promise<HeldRows> {
 			where: { workshopId, [Op.or]: [{ jobId: jobIds }, { recipient: addresses }] },
 			order: [['id', 'ASC']]
 		}),
+		files: await StoredFile.findAll({ where: { jobId: jobIds, removedAt: null }, order: [['id', 'ASC']] }),
 		story: await listMyVehicles(person),
 		erasure: await getMyErasure(person)
 	};
@@ -62,24 +73,67 @@ export async function getHeldData(person: SignedInPerson): Promise<HeldData> {
 	return presentHeldData(held);
 }
 
+/** A file of the parcel with what it holds. */
+interface Content extends ParcelFile {
+	bytes: Uint8Array;
+}
+
 const sheetPath = ({ id }: Sheet): string => `documents/page-${id}.txt`;
+
+/** What a customer can open as a document, by where it stands among their pages. */
+const WRITERS = {
+	handover: writeMyHandover,
+	recommendation: writeMyRecommendation
+} as const;
+
+/** The documents that are written when they are asked for. */
+async function writePapers(person: SignedInPerson, jobs: readonly Job[]): Promise<Content[]> {
+	const papers: Content[] = [];
+	for (const { title, href } of await listCustomerDocuments(jobs.map(({ id }) => id))) {
+		const [, kind, id] = /^\/my\/(handover|recommendation)\/(\d+)\.pdf$/.exec(href) ?? [];
+		if (!kind) continue;
+		const write = WRITERS[kind as keyof typeof WRITERS];
+		// One that cannot be written any more, because its mount was taken away, holds up nothing else.
+		const bytes = await write(person, Number(id)).catch((error: unknown) => {
+			if (error instanceof AppError) return null;
+			throw error;
+		});
+		if (bytes) papers.push({ path: `documents/${kind}-${id}.pdf`, about: title, bytes });
+	}
+	return papers;
+}
+
+async function readFiles(files: readonly StoredFile[]): Promise<Content[]> {
+	const contents: Content[] = [];
+	for (const file of files) {
+		const { bytes } = await readStoredContent(file, 'full');
+		contents.push({ path: pathOfFile(file), about: file.caption || file.name, bytes });
+	}
+	return contents;
+}
 
 /** The same as a parcel to keep: the data for programs, a first page for people, and the documents. */
 export async function packHeldData(person: SignedInPerson, madeAt = new Date()): Promise<Uint8Array> {
 	const held = await readHeld(person);
 	const data = presentHeldData(held);
+	const contents = [...(await writePapers(person, held.jobs)), ...(await readFiles(held.files))];
 	const files: ParcelFile[] = [
 		{ path: 'data.json', about: 'all of it, for programs' },
 		...held.sheets.map((sheet) => ({
 			path: sheetPath(sheet),
 			about: `the page about ${sheet.content.mountName}`
-		}))
+		})),
+		...contents.map(({ path, about }) => ({ path, about }))
 	];
 	const index = writeHeldIndex(data, files, { workshopName: person.workshopName, madeAt });
 	const packed = zipSync({
 		'read-me-first.txt': strToU8(index),
 		'data.json': strToU8(JSON.stringify(data, null, '\t')),
-		...Object.fromEntries(held.sheets.map((sheet) => [sheetPath(sheet), strToU8(textOfSheet(sheet))]))
+		...Object.fromEntries(held.sheets.map((sheet) => [sheetPath(sheet), strToU8(textOfSheet(sheet))])),
+		// Photos and documents are packed already.
+		...Object.fromEntries(
+			contents.map(({ path, bytes }): [string, Zippable[string]] => [path, [bytes, { level: 0 }]])
+		)
 	});
 	await note(person);
 	return packed;

@@ -2,10 +2,13 @@ import { describe, expect, it } from 'vitest';
 import { makeAssessableJob } from '../../../../tests/support/assessable-job';
 import { readPdf } from '../../../../tests/support/documents';
 import { FITTED, makeFitted } from '../../../../tests/support/fitted';
+import { AGM_BATTERY } from '../../../../tests/support/records';
 import { makeCrew, useTestDatabase } from '../../../../tests/support/services';
 import { listCautions } from '$lib/format/cautions';
 import { asIncoming, telephonePhoto } from '../../../../tests/support/pictures';
+import { Job, Mount } from '../db/models';
 import { assessJob } from './assessments';
+import { createBattery } from './batteries';
 import { updateCustomer } from './customers';
 import { addFieldNote } from './field-notes';
 import { addFile, changeFile } from './files';
@@ -143,6 +146,24 @@ describe('the papers of a fitted mount', () => {
 			await expect(writeMountPaper(neighbour, mountId, 'handover')).rejects.toMatchObject({
 				code: 'not_found'
 			});
+		}
+	);
+
+	it(
+		'ask before drilling what the fitted battery asked, whatever the job has by now',
+		{ timeout: LONG_MS },
+		async () => {
+			const { installer, mountId } = await makeNoted();
+			const before = inOneLine(
+				(await readPdf(await writeMountPaper(installer, mountId, 'warranty-file'))).text
+			);
+			const { id } = await createBattery(installer, AGM_BATTERY);
+			const { jobId } = (await Mount.findByPk(mountId))!;
+			await Job.update({ batteryRecordId: id }, { where: { id: jobId } });
+			const after = inOneLine(
+				(await readPdf(await writeMountPaper(installer, mountId, 'warranty-file'))).text
+			);
+			expect(after).toBe(before);
 		}
 	);
 

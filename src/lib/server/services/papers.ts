@@ -1,6 +1,7 @@
 import type { MountPaper, Paper, PaperPhoto } from '$lib/schemas/papers';
 import type { SignedInPerson } from '$lib/schemas/people';
-import { Installation, Job, Mount, Person, Recommendation, Sheet } from '../db/models';
+import type { PreDrillCase } from '$lib/schemas/pre-drill-questions';
+import { Assessment, Installation, Job, Mount, Person, Recommendation, Sheet } from '../db/models';
 import { AppError, notFound } from '../errors';
 import { allow } from '../policies';
 import { layHandover } from '../papers/handover';
@@ -14,7 +15,7 @@ import { listFieldNotes } from './field-notes';
 import { listMountFiles, readFileContent } from './files';
 import { getFitting } from './fittings';
 import { getOutlookReport } from './outlook-reports';
-import { getPreDrill } from './pre-drill';
+import { getPreDrillOf } from './pre-drill';
 import { getRecommendationDocument } from './recommendations';
 import { listSheets } from './sheets';
 
@@ -61,6 +62,13 @@ async function listPhotos(person: SignedInPerson, mountId: number, until?: strin
 		.map(presentPaperPhoto);
 }
 
+/** What the questions before drilling depended on for what was fitted. */
+async function caseOf(assessmentId: number): Promise<PreDrillCase> {
+	const { battery, mount } = (await Assessment.findByPk(assessmentId))!.inputs;
+	const { chemistry, capacityAh } = battery;
+	return { positionKind: mount.survey.positionKind, chemistry, capacityAh };
+}
+
 /** What is kept of a fitted battery, from its recommendation to the last note. */
 async function readMountRecord(person: SignedInPerson, mountId: number): Promise<MountRecord> {
 	const { installation, assessmentId, ...fitting } = await getFitting(person, mountId);
@@ -74,7 +82,7 @@ async function readMountRecord(person: SignedInPerson, mountId: number): Promise
 	return {
 		paper: await getRecommendationPaper(person, recommendation.id),
 		fitting: { ...fitting, assessmentId, installation },
-		preDrill: await getPreDrill(person, mountId),
+		preDrill: await getPreDrillOf(person, mountId, await caseOf(assessmentId)),
 		notes: await listFieldNotes(person, mountId),
 		acknowledgement: await findAcknowledgement(person, recommendation),
 		photos: await listPhotos(person, mountId)

@@ -5,7 +5,13 @@ import { makeCrew, useTestDatabase } from '../../../../tests/support/services';
 import { AuditEntry, Job } from '../db/models';
 import { createBattery } from './batteries';
 import { addMount } from './mounts';
-import { getPreDrill, savePreDrill, signPreDrill, snapshotPreDrill } from './pre-drill';
+import {
+	getPreDrill,
+	listPreDrillQuestions,
+	savePreDrill,
+	signPreDrill,
+	snapshotPreDrill
+} from './pre-drill';
 
 useTestDatabase();
 
@@ -34,6 +40,14 @@ describe('the check before drilling', () => {
 		const inCabin = await keysOf(BATTERY, 'cabin');
 		expect(inCabin).toContain('failingCell');
 		expect(inCabin).not.toContain('clearance');
+	});
+
+	it('asks nothing yet where the job has no battery, so that photos can come before it', async () => {
+		const { installer, mountId, jobId } = await makeMount();
+		expect(await listPreDrillQuestions(installer, mountId)).not.toEqual([]);
+		await Job.update({ batteryRecordId: null }, { where: { id: jobId } });
+		expect(await listPreDrillQuestions(installer, mountId)).toEqual([]);
+		await expect(getPreDrill(installer, mountId)).rejects.toMatchObject({ code: 'conflict' });
 	});
 
 	it('begins with everything open, and keeps answers with what is missing', async () => {

@@ -9,7 +9,11 @@ import {
 	type PreDrillSnapshot,
 	type PreDrillView
 } from '$lib/schemas/pre-drill';
-import { preDrillQuestionsFor, type PreDrillQuestion } from '$lib/schemas/pre-drill-questions';
+import {
+	preDrillQuestionsFor,
+	type PreDrillCase,
+	type PreDrillQuestion
+} from '$lib/schemas/pre-drill-questions';
 import { BatteryRecord, Job, PreDrillCheck, type Mount } from '../db/models';
 import { inTransaction } from '../db/transaction';
 import { AppError } from '../errors';
@@ -26,16 +30,41 @@ interface Asked {
 	questions: PreDrillQuestion[];
 }
 
+async function findBattery({ jobId }: Mount): Promise<BatteryRecord | null> {
+	const job = await Job.findByPk(jobId, { attributes: ['batteryRecordId'] });
+	return job?.batteryRecordId ? BatteryRecord.findByPk(job.batteryRecordId) : null;
+}
+
 async function findAsked(person: SignedInPerson, mountId: number): Promise<Asked> {
 	const mount = await findStandingMount(person, mountId);
-	const job = await Job.findByPk(mount.jobId, { attributes: ['batteryRecordId'] });
-	const battery = job?.batteryRecordId ? await BatteryRecord.findByPk(job.batteryRecordId) : null;
+	const battery = await findBattery(mount);
 	if (!battery) throw new AppError('conflict', NO_BATTERY);
 	const { chemistry, capacityAh } = battery;
 	return {
 		mount,
 		questions: preDrillQuestionsFor({ positionKind: mount.positionKind, chemistry, capacityAh })
 	};
+}
+
+/** The questions of a mount as its job stands; none yet without a battery. */
+export async function listPreDrillQuestions(
+	person: SignedInPerson,
+	mountId: number
+): Promise<PreDrillQuestion[]> {
+	allow(person, 'jobs.read');
+	const mount = await findStandingMount(person, mountId);
+	return (await findBattery(mount)) ? (await findAsked(person, mountId)).questions : [];
+}
+
+/** The check of what was fitted, whatever battery the job has by now. */
+export async function getPreDrillOf(
+	person: SignedInPerson,
+	mountId: number,
+	fitted: PreDrillCase
+): Promise<PreDrillView> {
+	allow(person, 'jobs.read');
+	await findStandingMount(person, mountId);
+	return presentPreDrill(mountId, preDrillQuestionsFor(fitted), await findCheck(mountId));
 }
 
 const findCheck = (mountId: number): Promise<PreDrillCheck | null> =>

@@ -11,12 +11,18 @@ import { stopUrlOf } from './reminder-stops';
 const EVERY_MS = 60 * 60_000;
 /** A reminder goes out so long before the date. */
 const DAYS_AHEAD = 7;
+/** A date that passed longer ago is on the list of the overdue, and nobody's news: a battery may be noted years later. */
+const DAYS_BEHIND = 31;
 const BATCH = 50;
 
 /** Of a row that two processes look at, one has it and the other goes on: nothing is sent twice. */
 const DUE = `
 	SELECT id FROM follow_ups
-	WHERE done_on IS NULL AND reminded_at IS NULL AND due_on <= :until
+	WHERE done_on IS NULL AND reminded_at IS NULL AND due_on BETWEEN :since AND :until
+		AND EXISTS (
+			SELECT 1 FROM installations JOIN mounts ON mounts.id = installations.mount_id
+			WHERE installations.id = follow_ups.installation_id AND mounts.removed_at IS NULL
+		)
 	ORDER BY due_on, id LIMIT ${BATCH} FOR UPDATE SKIP LOCKED
 `;
 
@@ -47,7 +53,7 @@ async function postReminder(
 export async function remindDue(now = today()): Promise<number> {
 	return inTransaction(async (transaction) => {
 		const rows = await connection().query<{ id: number }>(DUE, {
-			replacements: { until: addDays(now, DAYS_AHEAD) },
+			replacements: { since: addDays(now, -DAYS_BEHIND), until: addDays(now, DAYS_AHEAD) },
 			type: QueryTypes.SELECT,
 			transaction
 		});

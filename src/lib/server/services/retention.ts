@@ -35,8 +35,16 @@ export async function findAged(workshopId: number, years: Years, now = today()):
 	});
 }
 
+/** What waits or was granted; a refusal holds for a year, for its reason may be over by then. */
+const stillAnswers = (now: string) => ({
+	[Op.or]: [
+		{ state: { [Op.ne]: 'refused' } },
+		{ decidedAt: { [Op.gte]: new Date(`${addMonths(now, -12)}T00:00:00Z`) } }
+	]
+});
+
 /**
- * Puts those whom the rule of their shop reaches on the list of requests, once each; a manager decides there. Nothing is
+ * Puts those whom the rule of their shop reaches on the list of requests, once each, or again a year after a refusal; a manager decides there. Nothing is
  * deleted unseen: a customer who calls after years may still have a battery under warranty. Says how many are new.
  */
 export async function askForAged(now = today()): Promise<number> {
@@ -53,7 +61,7 @@ export async function askForAged(now = today()): Promise<number> {
 				lock: true
 			};
 			await Customer.findAll(held);
-			const before = await Erasure.findAll({ where: { customerId: ids }, transaction });
+			const before = await Erasure.findAll({ where: { customerId: ids, ...stillAnswers(now) }, transaction });
 			const known = new Set(before.map(({ customerId }) => customerId));
 			const rows = ids.filter((id) => !known.has(id)).map((customerId) => ({ workshopId, customerId }));
 			await Erasure.bulkCreate(rows, { transaction });

@@ -3,9 +3,10 @@ import { receive } from '../../../../tests/support/letters';
 import { makeCrew, useTestDatabase } from '../../../../tests/support/services';
 import { makeSentSheet } from '../../../../tests/support/sheets';
 import { AuditEntry, OutgoingMail } from '../db/models';
-import { stopOutbox } from '../mail/outbox';
+import { inTransaction } from '../db/transaction';
+import { postLetter, stopOutbox } from '../mail/outbox';
 import { askByLink } from './questions';
-import { listSentLetters, sendLetterAgain } from './sent-letters';
+import { listFailedLetters, listSentLetters, sendLetterAgain } from './sent-letters';
 import { withdrawSheet } from './sheets';
 
 useTestDatabase();
@@ -45,6 +46,29 @@ describe('the sending log of a job', () => {
 		expect(texts.filter((text) => text.includes(token))).toHaveLength(1);
 		const where = { action: 'job.letter-tried-again', subjectId: jobId };
 		expect(await AuditEntry.count({ where })).toBe(1);
+	});
+
+	it('shows the manager alone those of no job that were given up, and sends them again', async () => {
+		const { crew } = await makeSentSheet();
+		const recipient = `ilse.${crew.workshopId}@travellers.example`;
+		const letter = {
+			workshopId: crew.workshopId,
+			recipient,
+			subject: 'Done',
+			textBody: 'Done.',
+			htmlBody: '<p>Done.</p>'
+		};
+		await inTransaction((transaction) => postLetter({ ...letter, kind: 'erasure-refused' }, transaction));
+		await inTransaction((transaction) => postLetter({ ...letter, kind: 'sign-in' }, transaction));
+		await OutgoingMail.update({ state: 'failed', attempts: 80 }, { where: { recipient } });
+		const [failed, ...more] = await listFailedLetters(crew.manager);
+		expect(more).toEqual([]);
+		expect(failed).toMatchObject({ kind: 'erasure-refused', canTryAgain: true });
+		await expect(listFailedLetters(crew.installer)).rejects.toMatchObject({ code: 'not_allowed' });
+		await expect(sendLetterAgain(crew.installer, failed!.id)).rejects.toMatchObject({ code: 'not_allowed' });
+		await sendLetterAgain(crew.manager, failed!.id);
+		expect(await receive(recipient)).toHaveLength(1);
+		expect(await listFailedLetters(crew.manager)).toEqual([]);
 	});
 
 	it('does not bring back what was dropped with its sheet, nor show anything to another workshop', async () => {

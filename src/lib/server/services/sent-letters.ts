@@ -1,3 +1,4 @@
+import { Op } from 'sequelize';
 import type { SentLetter } from '$lib/schemas/letters';
 import type { SignedInPerson } from '$lib/schemas/people';
 import { Job, OutgoingMail, Sheet } from '../db/models';
@@ -20,6 +21,20 @@ export async function listSentLetters(person: SignedInPerson, jobId: number): Pr
 	return letters.map(presentSentLetter);
 }
 
+const MOST_LISTED = 100;
+
+/** Letters that were given up and belong to no job, where nobody would look for them. */
+export async function listFailedLetters(person: SignedInPerson): Promise<SentLetter[]> {
+	const { workshopId } = allow(person, 'shop.write');
+	const letters = await OutgoingMail.findAll({
+		// A link to sign in is dead by then: whoever needs one asks for another.
+		where: { workshopId, jobId: null, state: 'failed', kind: { [Op.ne]: 'sign-in' } },
+		order: [['id', 'DESC']],
+		limit: MOST_LISTED
+	});
+	return letters.map(presentSentLetter);
+}
+
 async function refuseWithdrawn({ sheetId }: OutgoingMail): Promise<void> {
 	const sheet = (sheetId ?? null) === null ? null : await Sheet.findByPk(sheetId!);
 	if (sheet?.withdrawnAt) throw new AppError('conflict', 'This sheet was withdrawn: send a new one instead.');
@@ -31,11 +46,13 @@ export async function sendLetterAgain(person: SignedInPerson, letterId: number):
 	return inTransaction(async (transaction) => {
 		const where = { id: letterId, workshopId: person.workshopId };
 		const letter = await OutgoingMail.findOne({ where, transaction, lock: transaction.LOCK.UPDATE });
-		if (!letter?.jobId) throw notFound('letter');
+		if (!letter) throw notFound('letter');
+		if (letter.jobId === null) allow(person, 'shop.write');
 		await refuseWithdrawn(letter);
 		if (!(await tryMailAgain(letter.id, transaction)))
 			throw new AppError('conflict', 'This letter is sent, is being tried already, or was dropped.');
-		const subject = { type: 'job', id: letter.jobId };
+		const subject =
+			letter.jobId === null ? { type: 'letter', id: letterId } : { type: 'job', id: letter.jobId };
 		await recordBy(person, 'job.letter-tried-again', subject, transaction, { letterId });
 		await letter.reload({ transaction });
 		return presentSentLetter(letter);

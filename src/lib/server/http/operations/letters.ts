@@ -14,6 +14,15 @@ export const letterOperations = {
 		answer: z.object({ rows: z.array(sentLetterSchema) }),
 		status: 200
 	}),
+	listFailed: defineOperation({
+		id: 'listFailedLetters',
+		method: 'GET',
+		path: '/api/v1/letters',
+		action: 'shop.write',
+		summary: 'Letters that were given up and belong to no job, the newest first.',
+		answer: z.object({ rows: z.array(sentLetterSchema) }),
+		status: 200
+	}),
 	again: defineOperation({
 		id: 'sendLetterAgain',
 		method: 'POST',

@@ -9,7 +9,7 @@ import { validate } from '$lib/server/http/validate';
 import { mayDo } from '$lib/server/policies';
 import { changeFile, listMountFiles, removeFile, restoreFile } from '$lib/server/services/files';
 import { getJob } from '$lib/server/services/jobs';
-import { getPreDrill } from '$lib/server/services/pre-drill';
+import { listPreDrillQuestions } from '$lib/server/services/pre-drill';
 import { openMount } from '../open-mount';
 import { readPlace, takeFiles, writePlace, type Taken } from './take-files';
 import type { Actions, PageServerLoad } from './$types';
@@ -25,7 +25,7 @@ export const load: PageServerLoad = async (event) => {
 	const mount = await openMount(person, event.params);
 	const job = await orPageError(getJob(person, mount.jobId));
 	const files = await orPageError(listMountFiles(person, mount.id));
-	const { questions } = await orPageError(getPreDrill(person, mount.id));
+	const questions = await orPageError(listPreDrillQuestions(person, mount.id));
 	const { searchParams } = event.url;
 	return {
 		...{ mount, files },

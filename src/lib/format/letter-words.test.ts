@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import type { SentLetter } from '$lib/schemas/letters';
+import type { SentLetter } from '../schemas/letters';
 import { sayLetterState } from './letter-words';
 
 const AT = '2026-03-04T12:00:00.000Z';

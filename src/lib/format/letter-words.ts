@@ -1,5 +1,5 @@
-import { formatDateTime } from '$lib/format/dates';
-import type { SentLetter } from '$lib/schemas/letters';
+import { formatDateTime } from './dates';
+import type { SentLetter } from '../schemas/letters';
 
 const sayTries = (attempts: number): string => (attempts === 1 ? 'tried once' : `tried ${attempts} times`);
 
