@@ -121,6 +121,8 @@ async function findIds(
 		customerId: of(job.customer),
 		vehicleId: of(job.vehicle),
 		bookId: of(books.rows[0]),
+		otherId: of(books.rows[0]),
+		coefficient: 'bay.share',
 		sheetId: of(sheets.rows.find(({ withdrawnAt }) => withdrawnAt === null)),
 		messageId: findSharedLetter(mailbox),
 		letterId: of(letters.rows[0]),

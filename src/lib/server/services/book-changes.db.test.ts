@@ -39,7 +39,7 @@ describe('a draft', () => {
 		});
 		expect(shareOf(changed)).toMatchObject(SAID);
 		const stale = changeCoefficient(crew.manager, draft.id, SHARE, { ...SAID, version: draft.version });
-		await expect(stale).rejects.toMatchObject({ code: 'conflict' });
+		await expect(stale).rejects.toMatchObject({ code: 'changed_meanwhile' });
 		const { version } = changed;
 		const beyond = changeCoefficient(crew.engineer, draft.id, SHARE, { ...SAID, value: 40, version });
 		await expect(beyond).rejects.toMatchObject({ code: 'invalid_input', problems: [{ path: 'value' }] });
