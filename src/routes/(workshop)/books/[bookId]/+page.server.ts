@@ -28,6 +28,8 @@ export const actions: Actions = {
 	move: async (event) => {
 		const person = guard(event, 'books.write');
 		const bookId = pageId(event.params.bookId);
+		// Whose book it is comes before what is to be done with it.
+		await orPageError(getBook(person, bookId));
 		const sent = Object.fromEntries(await readPageForm(event.request));
 		const move = async () =>
 			moveBook(person, bookId, validate(bookMoveSchema, { ...sent, version: Number(sent.version) }));

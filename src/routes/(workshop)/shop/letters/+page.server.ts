@@ -1,8 +1,9 @@
 import { fail, redirect } from '@sveltejs/kit';
+import { idSchema } from '$lib/schemas/fields';
 import { AppError } from '$lib/server/errors';
 import { readPageForm } from '$lib/server/http/forms';
 import { guard, orPageError } from '$lib/server/http/guard';
-import { pageId } from '$lib/server/http/page-id';
+import { validate } from '$lib/server/http/validate';
 import { listFailedLetters, sendLetterAgain } from '$lib/server/services/sent-letters';
 import type { Actions, PageServerLoad } from './$types';
 
@@ -17,9 +18,9 @@ export const load: PageServerLoad = async (event) => {
 export const actions: Actions = {
 	again: async (event) => {
 		const person = guard(event, 'shop.write');
-		const letterId = pageId(String((await readPageForm(event.request)).get('letterId') ?? ''));
+		const sent = await readPageForm(event.request);
 		try {
-			await sendLetterAgain(person, letterId);
+			await sendLetterAgain(person, validate(idSchema, sent.get('letterId') ?? undefined));
 		} catch (error) {
 			if (error instanceof AppError) return fail(error.status, { refusal: error.message });
 			throw error;
