@@ -9,7 +9,7 @@ import { sha256 } from '../hash';
 import type { Action } from '../policies';
 import { readFormData } from './body';
 import { guard, orPageError } from './guard';
-import { answerOnce } from './idempotency';
+import { keepOnce } from './idempotency';
 import { zod4 } from './zod-adapter';
 
 /** A form as the page holds it: numbers are the text that was typed, until the schema has read them. */
@@ -62,19 +62,19 @@ export function onceKeyOf({ url }: Pick<RequestEvent, 'url'>, formData: FormData
 }
 
 /** Does what a form asks once for the page that it stood on: a second press leads to what the first one made. */
-export async function saveOnce(
+export async function saveOnce<Prepared>(
 	{ id: personId }: SignedInPerson,
 	event: RequestEvent,
 	formData: FormData,
-	save: () => Promise<string>
+	save: (prepared: Prepared) => Promise<string>,
+	prepare: () => Promise<Prepared>
 ): Promise<string> {
 	const key = onceKeyOf(event, formData);
-	if (key === null) return save();
-	const answer = await answerOnce({ personId, key, request: key }, async () => ({
+	const { body } = await keepOnce({ personId, key, request: key ?? '' }, prepare, async (prepared) => ({
 		status: 303,
-		body: await save()
+		body: await save(prepared)
 	}));
-	return answer.body;
+	return body;
 }
 
 /** What a page sent, read no further than a form may be long. */
@@ -95,22 +95,26 @@ export async function fillForm<S extends z.ZodObject>(
  * A form's whole way: guard, validate, do (the service authorises, records and keeps it in one transaction), then 303.
  * After any refusal the page comes back with every word still in its box.
  */
-export async function saveForm<S extends z.ZodObject>(
+export async function saveForm<S extends z.ZodObject, Prepared = void>(
 	event: RequestEvent,
 	steps: {
 		action: Action;
 		schema: S;
+		/** What takes seconds and changes nothing: done before, and in no transaction. */
+		prepare?: (person: SignedInPerson, data: z.output<S>) => Promise<Prepared>;
 		/** Does it, and says where to go next. */
-		save: (person: SignedInPerson, data: z.output<S>) => Promise<string>;
+		save: (person: SignedInPerson, data: z.output<S>, prepared: Prepared) => Promise<string>;
 	}
 ) {
 	const person = guard(event, steps.action);
 	const formData = await readPageForm(event.request);
 	const { form, data } = await readForm(formData, steps.schema);
 	if (data === null) return fail(422, { form });
-	const next = await saveOnce(person, event, formData, () => steps.save(person, data)).catch(
-		(error: unknown) => ({ refusal: error })
-	);
+	const prepare = async () => (await steps.prepare?.(person, data)) as Prepared;
+	const save = (prepared: Prepared) => steps.save(person, data, prepared);
+	const next = await saveOnce(person, event, formData, save, prepare).catch((error: unknown) => ({
+		refusal: error
+	}));
 	if (typeof next !== 'string') return refuseForm(form, next.refusal);
 	redirect(303, next);
 }

@@ -82,3 +82,20 @@ export async function answerOnce(
 		return stored;
 	}
 }
+
+/**
+ * Asks whether this was done before, then prepares, then keeps it once for its key: what takes seconds is prepared in no
+ * transaction, so that nobody waits for it.
+ */
+export async function keepOnce<Prepared>(
+	asked: { personId: number; key: string | null; request: string },
+	prepare: () => Promise<Prepared>,
+	keep: (prepared: Prepared) => Promise<StoredAnswer>
+): Promise<StoredAnswer> {
+	const { personId, key, request } = asked;
+	if (key === null) return keep(await prepare());
+	const done = await findAnswer({ personId, key, request });
+	if (done) return done;
+	const prepared = await prepare();
+	return answerOnce({ personId, key, request }, () => keep(prepared));
+}

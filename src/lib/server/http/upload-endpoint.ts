@@ -5,7 +5,7 @@ import { AppError } from '../errors';
 import { allow } from '../policies';
 import { jsonResponse, orProblem } from './endpoint';
 import { FILE_FIELD } from './file-upload';
-import { answerOnce, findAnswer, type StoredAnswer } from './idempotency';
+import { keepOnce } from './idempotency';
 import type { FileOperation } from './operation';
 import { withSentFiles, type IncomingUpload } from './sent-files';
 import { validate } from './validate';
@@ -32,20 +32,6 @@ function theOne(files: readonly IncomingUpload[]): IncomingUpload {
 	if (file) return file;
 	const message = 'The file is missing: choose one.';
 	throw new AppError('invalid_input', message, [{ path: FILE_FIELD, message }]);
-}
-
-/** Asks whether this was done before, then prepares, then keeps it once for its key. */
-export async function keepOnce<Prepared>(
-	asked: { personId: number; key: string | null; request: string },
-	prepare: () => Promise<Prepared>,
-	keep: (prepared: Prepared) => Promise<StoredAnswer>
-): Promise<StoredAnswer> {
-	const { personId, key, request } = asked;
-	if (key === null) return keep(await prepare());
-	const done = await findAnswer({ personId, key, request });
-	if (done) return done;
-	const prepared = await prepare();
-	return answerOnce({ personId, key, request }, () => keep(prepared));
 }
 
 /** An endpoint that takes one file of any size that its operation allows, by way of the disk. */

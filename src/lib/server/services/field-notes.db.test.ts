@@ -3,7 +3,7 @@ import { makeFitted, makeRecommended } from '../../../../tests/support/fitted';
 import { makeCrew, useTestDatabase } from '../../../../tests/support/services';
 import { connection } from '../db/connection';
 import { presentNote, presentTrend } from '../presenters/field-reports';
-import { addFieldNote, listFieldNotes } from './field-notes';
+import { addFieldNote, keepFieldNote, listFieldNotes, weighFieldNote } from './field-notes';
 import { getOutlook } from './outlooks';
 
 useTestDatabase();
@@ -115,6 +115,18 @@ describe('notes from the field', () => {
 			expect(notes.expected![0]!.low).toBeLessThan(notes.expected![0]!.high);
 		}
 	);
+
+	it('that were weighed at once do not pass each other by: the later one is to be weighed again', async () => {
+		const { installer, mountId } = await makeMount();
+		const inspection = { kind: 'inspection', notedOn: '2026-02-01', words: 'Hold-down tight.' } as const;
+		const weighed = [
+			await weighFieldNote(installer, mountId, inspection),
+			await weighFieldNote(installer, mountId, inspection)
+		];
+		await keepFieldNote(installer, mountId, weighed[0]!);
+		await expect(keepFieldNote(installer, mountId, weighed[1]!)).rejects.toMatchObject({ code: 'conflict' });
+		expect((await listFieldNotes(installer, mountId)).rows).toHaveLength(1);
+	});
 
 	it('are kept for good', async () => {
 		const { installer, mountId } = await makeMount();

@@ -175,19 +175,46 @@ export async function listFieldNotes(
 	return show(person, await findFitted(person, mountId), namedAh);
 }
 
-/** Keeps a note for good, with what the model makes of it. */
-export async function addFieldNote(
+/** A note with what the model makes of it, and what was known when it did. */
+export interface WeighedNote {
+	data: FieldNoteInput;
+	finding: FieldFinding | null;
+	/** The newest note that it was weighed with. */
+	after: number | null;
+}
+
+/** Works out what a note says, which takes seconds, and changes nothing. */
+export async function weighFieldNote(
 	person: SignedInPerson,
 	mountId: number,
 	data: FieldNoteInput
-): Promise<FieldNotesView> {
+): Promise<WeighedNote> {
 	allow(person, 'mounts.write');
-	const fitted = await findFitted(person, mountId);
-	const { installation, assessment } = fitted;
+	const { installation, assessment } = await findFitted(person, mountId);
 	refuseImpossible(data, installation.fittedOn);
 	const earlier = await notesOf(installation);
 	const finding = await findOut(assessment, earlier, data, installation.id);
+	return { data, finding, after: newestOf(earlier) };
+}
+
+const newestOf = (notes: readonly FieldNote[]): number | null =>
+	notes.length === 0 ? null : Math.max(...notes.map(({ id }) => id));
+
+const NOTED_MEANWHILE =
+	'Somebody noted something of this battery meanwhile, which counts here: send yours again.';
+
+/** Keeps a weighed note for good. */
+export async function keepFieldNote(
+	person: SignedInPerson,
+	mountId: number,
+	{ data, finding, after }: WeighedNote
+): Promise<FieldNotesView> {
+	allow(person, 'mounts.write');
+	const fitted = await findFitted(person, mountId);
+	const { installation } = fitted;
 	await inTransaction(async (transaction) => {
+		await Installation.findByPk(installation.id, { transaction, lock: transaction.LOCK.UPDATE });
+		if (newestOf(await notesOf(installation)) !== after) throw new AppError('conflict', NOTED_MEANWHILE);
 		const { kind, notedOn } = data;
 		const row = { workshopId: person.workshopId, installationId: installation.id, createdBy: person.id };
 		const told = { kind, notedOn, data, finding, engineVersion: ENGINE_VERSION };
@@ -197,4 +224,13 @@ export async function addFieldNote(
 		await recordBy(person, 'mount.field-note', subject, transaction, { noteId: note.id, ...data });
 	});
 	return show(person, fitted);
+}
+
+/** Weighs and keeps. */
+export async function addFieldNote(
+	person: SignedInPerson,
+	mountId: number,
+	data: FieldNoteInput
+): Promise<FieldNotesView> {
+	return keepFieldNote(person, mountId, await weighFieldNote(person, mountId, data));
 }

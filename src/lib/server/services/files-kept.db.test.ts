@@ -7,8 +7,7 @@ import { makeCrew, useTestDatabase, type Crew } from '../../../../tests/support/
 import type { SignedInPerson } from '$lib/schemas/people';
 import { AuditEntry, StoredFile } from '../db/models';
 import { env } from '../env';
-import { answerOnce } from '../http/idempotency';
-import { keepOnce } from '../http/upload-endpoint';
+import { answerOnce, keepOnce } from '../http/idempotency';
 import { newContentId, storage } from '../storage';
 import { findBreak } from './audit';
 import { clearFiles, KEEP_REMOVED_DAYS } from './clear-files';

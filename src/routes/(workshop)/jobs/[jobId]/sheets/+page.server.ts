@@ -8,6 +8,7 @@ import { guard, orPageError } from '$lib/server/http/guard';
 import { getAssessment } from '$lib/server/services/assessments';
 import { getJob } from '$lib/server/services/jobs';
 import { newestRecommendation } from '$lib/server/services/recommendations';
+import { readSheetSource } from '$lib/server/services/sheet-source';
 import { listSheets, retrySheetLetter, sendSheet, withdrawSheet } from '$lib/server/services/sheets';
 import type { Actions, PageServerLoad } from './$types';
 
@@ -58,6 +59,8 @@ export const actions: Actions = {
 		saveForm(event, {
 			action: 'sheets.write',
 			schema: sendSheetSchema,
+			// What the page is written from may take seconds to work out.
+			prepare: (person, { recommendationId }) => readSheetSource(person, recommendationId),
 			save: async (person, data) => {
 				const jobId = readId(event.params.jobId, 'job');
 				await sendSheet(person, { ...data, jobId });

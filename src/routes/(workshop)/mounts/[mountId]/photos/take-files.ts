@@ -4,7 +4,7 @@ import { MOST_FILE_BYTES, MOST_FILES_AT_ONCE, filePlaceSchema, type FilePlace } 
 import { AppError } from '$lib/server/errors';
 import { sha256 } from '$lib/server/hash';
 import { withSentFiles, type IncomingUpload, type SentForm } from '$lib/server/http/sent-files';
-import { keepOnce } from '$lib/server/http/upload-endpoint';
+import { keepOnce } from '$lib/server/http/idempotency';
 import { keepFile, prepareFile } from '$lib/server/services/files';
 
 const LIMITS = {

@@ -71,7 +71,9 @@ export const actions: Actions = {
 			await takeWeather(person, place.id, reading, { ...choice, version });
 			return `/places/${place.id}?weather`;
 		};
-		const next = await saveOnce(person, event, formData, take).catch((refusal: unknown) => ({ refusal }));
+		const next = await saveOnce(person, event, formData, take, () => Promise.resolve()).catch(
+			(refusal: unknown) => ({ refusal })
+		);
 		if (typeof next === 'string') redirect(303, next);
 		const { refusal } = next;
 		const isLate = refusal instanceof AppError && refusal.code === 'changed_meanwhile';

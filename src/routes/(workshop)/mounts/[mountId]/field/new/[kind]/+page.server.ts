@@ -4,7 +4,7 @@ import { FIELD_NOTE_KINDS, type FieldNoteKind } from '$lib/schemas/field-notes';
 import { loadForm, saveForm } from '$lib/server/http/forms';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { pageId } from '$lib/server/http/page-id';
-import { addFieldNote } from '$lib/server/services/field-notes';
+import { keepFieldNote, weighFieldNote } from '$lib/server/services/field-notes';
 import { getFitting } from '$lib/server/services/fittings';
 import { getJob } from '$lib/server/services/jobs';
 import { openMount } from '../../../open-mount';
@@ -44,8 +44,9 @@ export const actions: Actions = {
 		return saveForm(event, {
 			action: 'mounts.write',
 			schema: FIELD_NOTE_FORMS[kind],
-			save: async (person, form) => {
-				await addFieldNote(person, mountId, fromFieldNoteForm(kind, form));
+			prepare: (person, form) => weighFieldNote(person, mountId, fromFieldNoteForm(kind, form)),
+			save: async (person, _, weighed) => {
+				await keepFieldNote(person, mountId, weighed);
 				return `/mounts/${mountId}/field?added`;
 			}
 		});
