@@ -14,7 +14,12 @@ const details = {
 	address: optionalWords('Address', 240),
 	phone: optionalWords('Telephone', 40),
 	email: optionalEmail('E-mail'),
-	web: optionalWords('Web', 200),
+	web: optionalWords('Web', 200).refine(
+		(web) => web === '' || /^(https?:\/\/)?[^\s./]+(\.[^\s./]+)+(\/\S*)?$/.test(web),
+		{
+			error: 'Web must be an address such as shop.example.'
+		}
+	),
 	businessNumber: optionalWords('Business number', 60)
 };
 

@@ -38,17 +38,33 @@ function tellTrend({ notes }: MountRecord): PaperBlock[] {
 	return [{ kind: 'words', title: 'Where its capacity goes', sentences: [sentence, method] }];
 }
 
+/** The day of the last thing that it tells of: the same record is the same paper. */
+function lastDayOf({ paper, fitting, preDrill, notes, acknowledgement }: MountRecord): string {
+	const days = [
+		fitting.installation.fittedOn,
+		paper.recommendation.createdAt,
+		preDrill.signedAt,
+		acknowledgement?.acknowledgedAt,
+		...fitting.followUps.map(({ doneOn }) => doneOn),
+		...notes.rows.map(({ notedOn }) => notedOn)
+	];
+	return days
+		.flatMap((day) => (day ? [day.slice(0, 10)] : []))
+		.sort()
+		.at(-1)!;
+}
+
 /** Everything about one battery, for its maker: what was said, measured and done, and by whom. */
 export function layWarrantyFile(record: MountRecord): Paper {
-	const { paper, fitting, notes, photos } = record;
+	const { paper, fitting, photos } = record;
 	const { report, recommendation } = paper;
-	const lastNote = notes.rows[0]?.notedOn ?? fitting.installation.fittedOn;
+	const lastDay = lastDayOf(record);
 	return {
 		title: 'Warranty file',
-		under: `Job ${recommendation.jobNumber}, as of ${formatDate(lastNote)}`,
+		under: `Job ${recommendation.jobNumber}, as of ${formatDate(lastDay)}`,
 		shop: paper.workshop,
 		logo: paper.logo,
-		madeAt: `${lastNote}T00:00:00.000Z`,
+		madeAt: `${lastDay}T00:00:00.000Z`,
 		blocks: [
 			{
 				kind: 'words',

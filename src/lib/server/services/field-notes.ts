@@ -100,6 +100,16 @@ async function findOut(
 	});
 }
 
+/** What the engine refuses, under the name that the form has for it. */
+const LABELS: Readonly<Record<string, string>> = {
+	turnedC: 'Highest field that has turned',
+	notTurnedC: 'Lowest field that has not',
+	wentDarkHour: 'Went dark',
+	cameBackHour: 'Came back'
+};
+const sayLabelled = ({ input, message }: EngineInputError): string =>
+	message.startsWith(input) ? `${LABELS[input] ?? input}${message.slice(input.length)}` : message;
+
 function refuseImpossible(data: FieldNoteInput, fittedOn: string): void {
 	const refuse = (path: string, message: string): never => {
 		throw new AppError('invalid_input', message, [{ path, message }]);
@@ -111,7 +121,7 @@ function refuseImpossible(data: FieldNoteInput, fittedOn: string): void {
 	try {
 		checkReading(reading);
 	} catch (error) {
-		if (error instanceof EngineInputError) refuse(error.input, error.message);
+		if (error instanceof EngineInputError) refuse(error.input, sayLabelled(error));
 		throw error;
 	}
 }

@@ -62,10 +62,10 @@ async function setFollowUps(
 			defaults: { workshopId, installationId: id, afterMonths, dueOn },
 			transaction
 		});
-		if (!isNew && followUp.doneOn === null && followUp.dueOn !== dueOn) {
-			// Another day is another reminder.
-			await followUp.update({ dueOn, remindedAt: null }, { transaction });
-		}
+		if (isNew || followUp.dueOn === dueOn) continue;
+		// Another day is another reminder; of a look that is done only its date is put right.
+		const again = followUp.doneOn === null ? { remindedAt: null } : {};
+		await followUp.update({ dueOn, ...again }, { transaction });
 	}
 }
 

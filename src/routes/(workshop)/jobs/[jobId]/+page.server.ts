@@ -7,6 +7,7 @@ import { pageId } from '$lib/server/http/page-id';
 import { assessJob } from '$lib/server/services/assessments';
 import { listMountPictures } from '$lib/server/services/files';
 import { getJob } from '$lib/server/services/jobs';
+import { newestRecommendation } from '$lib/server/services/recommendations';
 import { listSentLetters, sendLetterAgain } from '$lib/server/services/sent-letters';
 import { answerQuestion, listQuestions } from '$lib/server/services/questions';
 import type { Actions, PageServerLoad } from './$types';
@@ -20,16 +21,19 @@ function chooseQuestion(questions: readonly Question[], asked: string | null): Q
 export const load: PageServerLoad = async (event) => {
 	const person = guard(event, 'jobs.read');
 	const jobId = pageId(event.params.jobId);
-	const [job, questions, letters, pictures] = await orPageError(
+	const [job, questions, letters, pictures, recommendation] = await orPageError(
 		Promise.all([
 			getJob(person, jobId),
 			listQuestions(person, jobId),
 			listSentLetters(person, jobId),
-			listMountPictures(person, jobId)
+			listMountPictures(person, jobId),
+			newestRecommendation(person, jobId)
 		])
 	);
 	const toAnswer = chooseQuestion(questions, event.url.searchParams.get('question'));
-	return { job, questions, letters, pictures, toAnswer, answerForm: await loadForm(answerFormSchema) };
+	const recommendedMountId = recommendation?.assessment.mountId ?? null;
+	const answerForm = await loadForm(answerFormSchema);
+	return { job, questions, letters, pictures, toAnswer, answerForm, recommendedMountId };
 };
 
 export const actions: Actions = {

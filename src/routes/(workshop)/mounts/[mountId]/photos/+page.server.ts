@@ -87,7 +87,9 @@ export const actions: Actions = {
 		redirect(303, `/mounts/${mountId}/photos?added=${taken.kept}${of ? `&${kind}=${of}` : ''}`);
 	},
 	caption: (event) => change(event, (sent) => ({ caption: String(sent.get('caption') ?? '') })),
-	picture: (event) => change(event, () => ({ isMountPicture: true })),
+	// With the caption as it stands in its box: what was typed is not lost.
+	picture: (event) =>
+		change(event, (sent) => ({ caption: String(sent.get('caption') ?? ''), isMountPicture: true })),
 	remove: async (event) => {
 		const { mountId, fileId } = await withNamed(event, removeFile);
 		redirect(303, `/mounts/${mountId}/photos?removed=${fileId}`);
