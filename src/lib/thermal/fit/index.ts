@@ -1,4 +1,29 @@
-/** Least squares with priors and bounds. */
+/** Least squares with priors and bounds, and coefficients from measured traces. */
+export type { Candidate } from './candidates';
+export {
+	FITTED_GROUPS,
+	type CoefficientPrior,
+	type FittedCoefficient,
+	type FittedGroup
+} from './coefficients';
+export type { CoefficientEstimate } from './estimates';
+export {
+	fitCoefficients,
+	type CoefficientFit,
+	type CoefficientFitInput,
+	type CoefficientFitOptions,
+	type DoneCoefficientFit,
+	type FitBook
+} from './fit-coefficients';
+export type { FitError, FitErrors } from './fit-errors';
+export type { TraceToFit } from './fit-setup';
 export { fitLeastSquares, type Fit } from './least-squares';
+export type { ErrorsCompared } from './leave-out';
+export type { ChannelNoise, Noises } from './noise';
 export type { Bounds, LeastSquaresProblem, Prior } from './problem';
+export type { ResidualCurve, TemperatureBin } from './residual-views';
+export type { LossName } from './robust-loss';
 export type { FitStatus } from './search';
+export type { UnmeasuredStart } from './start-temps';
+export { CHANNEL_LABELS, CHANNEL_NODES, FIT_CHANNELS, type FitChannel, type FitTrace } from './trace';
+export type { Untold } from './untold';
