@@ -1,5 +1,5 @@
 import type { Leg } from '../types';
-import { addMatrices, informationOf, invertPositive, withPriorInformation, type Asked } from './information';
+import { informationOf, withPriorInformation, type Asked } from './information';
 import type { FitSetup } from './fit-setup';
 import type { ChannelNoise, Noises } from './noise';
 import { LOSSES } from './robust-loss';
@@ -7,6 +7,7 @@ import { CHANNEL_LABELS, FIT_CHANNELS, type FitChannel } from './trace';
 import { TraceModel, type TraceOfScenario } from './trace-model';
 import { TraceProblem, type Sensitivities } from './trace-problem';
 import type { Posterior } from './estimates';
+import { addMatrices, invertPositive } from './small-matrices';
 
 /** Something that could be measured in addition, and what it would make of the intervals. */
 export interface Candidate {
@@ -56,13 +57,13 @@ const CANDIDATE_HOUR = 10;
 const MINUTE_S = 60;
 
 function weighCandidate(
-	{ covariance, dataInformation }: Posterior,
+	{ covarianceOnAir, dataInformation }: Posterior,
 	more: readonly (readonly number[])[],
 	count: number
 ): Pick<Candidate, 'widthLeft' | 'meanLeft'> {
 	const then = invertPositive(withPriorInformation(addMatrices(dataInformation, more)));
 	const widthLeft = Array.from({ length: count }, (_, at) =>
-		Math.sqrt(then[at]![at]! / covariance[at]![at]!)
+		Math.sqrt(then[at]![at]! / covarianceOnAir[at]![at]!)
 	);
 	return { widthLeft, meanLeft: widthLeft.reduce((sum, left) => sum + left, 0) / count };
 }
@@ -121,7 +122,7 @@ function askOf(model: TraceModel, of: TraceOfScenario, channels: ReadonlySet<Fit
 }
 
 /**
- * What each further channel or kind of leg would make of the intervals, the most telling first.
+ * What each further channel or kind of leg would make of the intervals, the most telling first. The error of the air is left aside.
  *
  *     C′ = (I + I′ + 1)⁻¹,   I′ from the derivatives of what the model foretells for it
  *

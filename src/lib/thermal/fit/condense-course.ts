@@ -52,11 +52,12 @@ function bridge(values: readonly number[]): number[] {
 }
 
 /** Outside air at the ends of the pieces: where nothing was measured, the day's curve moved to meet what was. */
-function condenseAir(timeS: Float64Array, ambientC: Float64Array, { climate, start, legs }: Scenario) {
+function condenseAir({ timeS, channels }: FitTrace, { climate, start, legs }: Scenario) {
+	const { ambientC } = channels;
 	const totalS = 60 * legs.reduce((sum, { minutes }) => sum + minutes, 0);
 	const count = Math.ceil(totalS / PIECE_S) + 1;
 	const dayC = (atS: number) => ambientTempC(start.hour + atS / S_PER_H, climate);
-	const off = timeS.map((time, at) => ambientC[at]! - dayC(time));
+	const off = isMeasured(ambientC) ? timeS.map((time, at) => ambientC[at]! - dayC(time)) : timeS.map(() => 0);
 	const offs = bridge(sortIntoPieces(timeS, off, -PIECE_S / 2, count).map(middleOf));
 	return { everyS: PIECE_S, valuesC: Float64Array.from(offs, (value, at) => value + dayC(at * PIECE_S)) };
 }
@@ -68,17 +69,20 @@ function condenseAir(timeS: Float64Array, ambientC: Float64Array, { climate, sta
  *
  * @param trace what was measured
  * @param scenario of the trace, its start at the trace's own
- * @returns air and current as far as there are readings
+ * @returns the air of the whole day, and the current as far as there are readings
  * Validity: gaps of the air are bridged by the day's curve moved to meet both ends; where no current was read the planned one flows.
  * Source: our own.
  * @example
  * const trace = { startedAtHour: 6, timeS: Float64Array.of(30, 90), channels: { ambientC: Float64Array.of(21, 21) } };
  * condenseCourse(trace, defaultScenario([{ minutes: 5 }])).air.valuesC.length; // 2
  */
-export function condenseCourse({ timeS, channels }: FitTrace, scenario: Scenario): MeasuredCourse {
-	const { ambientC, currentA } = channels;
-	const course: MeasuredCourse = {};
-	if (isMeasured(ambientC)) course.air = condenseAir(timeS, ambientC, scenario);
+export function condenseCourse(
+	trace: FitTrace,
+	scenario: Scenario
+): MeasuredCourse & Required<Pick<MeasuredCourse, 'air'>> {
+	const { timeS, channels } = trace;
+	const { currentA } = channels;
+	const course: ReturnType<typeof condenseCourse> = { air: condenseAir(trace, scenario) };
 	if (isMeasured(currentA)) {
 		const count = Math.floor(timeS.at(-1)! / PIECE_S) + 1;
 		const pieces = sortIntoPieces(timeS, currentA, 0, count).map(heatingMean);

@@ -1,5 +1,6 @@
 import { valueAt, type Coefficient } from './coefficients';
-import { informationOf, invertPositive, withPriorInformation } from './information';
+import { informationOf, withPriorInformation } from './information';
+import { addMatrices, invertPositive, multiply, scaleMatrix, type Rows } from './small-matrices';
 import type { Block } from './blocks';
 import type { Noises } from './noise';
 import { studentReach } from './student';
@@ -33,36 +34,45 @@ export interface Posterior {
 	dataInformation: number[][];
 	/** Of all parameters, in standard deviations of their priors. */
 	covariance: number[][];
-	/** Independent readings less what was learnt from them. */
+	/** The same if the air were known exactly. */
+	covarianceOnAir: number[][];
+	/** Independent readings of the channel with the fewest, less its share of what was learnt: by how much σ and τ are known. */
 	degrees: number;
 }
 
 /**
  * The posterior in the normal approximation.
  *
- *     C = (I·(n − q)/n + 1)⁻¹,   n = Σ readings/τ,   q = Σ (1 − Cₖₖ): parameters' worth of what was learnt
+ *     H = I·(n − q)/n + 1,   n = Σ readings/τ,   q = Σ (1 − (H⁻¹)ₖₖ): parameters' worth of what was learnt
+ *     C = H⁻¹ (H + A) H⁻¹,   A: what the error of the air does to the data's pull on the parameters
  *
- * Source: Seber and Wild, Nonlinear Regression (1989), section 2.8 (Laplace's approximation with priors); the count q as the trace of
- * the smoother of Hastie, Tibshirani and Friedman, The Elements of Statistical Learning, 2nd ed., section 7.6.
+ * Readings of all channels are off together where the air is; their own residuals hardly show it, so that it is added.
+ *
+ * Source: Seber and Wild, Nonlinear Regression (1989), chapter 2, from memory; the count q as the trace of
+ * the smoother of Hastie, Tibshirani and Friedman, The Elements of Statistical Learning, 2nd ed., section 7.6; C in the form of
+ * Huber, Robust Statistics (1981), section 6.6, from memory.
  */
 export function findPosterior(
 	blocks: readonly Block[],
 	sensitivities: Sensitivities,
-	noises: Noises
+	noises: Noises,
+	airPull: Rows
 ): Posterior {
 	const data = informationOf(blocks, sensitivities, noises);
-	const independent = Object.values(noises).reduce(
-		(sum, noise) => sum + noise.readings / noise.perIndependent,
-		0
-	);
+	const counts = Object.values(noises).map(({ readings, perIndependent }) => readings / perIndependent);
+	const independent = counts.reduce((sum, count) => sum + count, 0);
 	const first = invertPositive(withPriorInformation(data));
 	const learnt = first.reduce((sum, row, at) => sum + (1 - row[at]!), 0);
 	const left = Math.max((independent - learnt) / independent, LEAST_LEFT);
-	const dataInformation = data.map((row) => row.map((value) => left * value));
+	const dataInformation = scaleMatrix(data, left);
+	const whole = withPriorInformation(dataInformation);
+	const covarianceOnAir = invertPositive(whole);
+	const pulls = addMatrices(whole, scaleMatrix(airPull, left * left));
 	return {
 		dataInformation,
-		covariance: invertPositive(withPriorInformation(dataInformation)),
-		degrees: Math.max(independent - learnt, 1)
+		covarianceOnAir,
+		covariance: multiply(multiply(covarianceOnAir, pulls), covarianceOnAir),
+		degrees: Math.max(Math.min(...counts) - learnt / counts.length, 1)
 	};
 }
 

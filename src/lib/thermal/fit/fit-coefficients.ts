@@ -1,3 +1,5 @@
+import { requirePositive } from '../correlations/require';
+import { findAirPull, READ_AIR_ERROR, requireAirError, type AirError } from './air-error';
 import { listUnused, type UnusedChannel } from './blocks';
 import { weighCandidates, type Candidate } from './candidates';
 import type { FittedCoefficient } from './coefficients';
@@ -27,6 +29,8 @@ export interface CoefficientFitOptions {
 	loss?: LossName;
 	/** What no channel is believed to be better than, K; 0.1 unless said otherwise. */
 	leastSdK?: number;
+	/** How good the readings of the outside air are; ± 0.3 K, off alike for 15 min, unless said otherwise. */
+	airError?: AirError;
 	/** Whether to fit without each trace in turn; so it is unless said otherwise. */
 	leaveOut?: boolean;
 }
@@ -68,8 +72,8 @@ export interface DoneCoefficientFit {
 export type CoefficientFit = DoneCoefficientFit | { status: 'failed'; reason: string };
 
 const LEAST_SD_K = 0.1;
-/** How the work is shared out, for those who wait: the fit, the fits without each trace, what else would tell. */
-const SHARES = { fit: 0.5, leftOut: 0.4, candidates: 0.1 };
+/** How the work is shared out, for those who wait: the fit, the fits without each trace, the air's error, what else would tell. */
+const SHARES = { fit: 0.5, leftOut: 0.35, air: 0.08, candidates: 0.07 };
 
 const REASONS: Readonly<Record<FitStatus, string>> = {
 	converged:
@@ -151,7 +155,7 @@ function describeBefore(
  * @throws EngineInputError with the path for a trace, coefficient, prior or bound that cannot be
  * Validity: the model taken for true but for errors that hang together for much less than a trace is long; sensors without a
  * lasting error of their own; σ, τ and the derivatives taken for known once they are found.
- * Source: Seber and Wild, Nonlinear Regression (1989), sections 2.1 and 2.8; Huber, Robust Statistics (1981), section 7.6; Geyer,
+ * Source: Seber and Wild, Nonlinear Regression (1989), chapter 2; Huber, Robust Statistics (1981), section 7.6; Geyer,
  * Statistical Science 7 (1992) 473.
  * @example
  * const scenario = defaultScenario([{ minutes: 60, engineOn: true, speedKmh: 60 }, { minutes: 60 }]);
@@ -169,7 +173,9 @@ export function* fitCoefficients({
 	book,
 	options = {}
 }: CoefficientFitInput): Generator<number, CoefficientFit> {
-	const { loss = 'soft-l1', leastSdK = LEAST_SD_K, leaveOut = true } = options;
+	const { loss = 'soft-l1', leastSdK = LEAST_SD_K, leaveOut = true, airError = READ_AIR_ERROR } = options;
+	requirePositive({ 'options.leastSdK': leastSdK });
+	requireAirError(airError);
 	const setup = new FitSetup(traces, coefficients);
 	const find: FindOptions = { loss: LOSSES[loss], leastSdK };
 	const middle = setup.problemOf(setup.all, find.loss).middle();
@@ -188,10 +194,15 @@ export function* fitCoefficients({
 			)
 		: null;
 	const sensitivities = yield* sensitivitiesAt(setup, found, loss);
-	const posterior = findPosterior(setup.blocksOf(setup.all, 'fitted'), sensitivities, found.noises);
+	const airPull = yield* shareOf(
+		findAirPull(setup, found.parameters, sensitivities, found.noises, airError),
+		SHARES.fit + SHARES.leftOut,
+		SHARES.air
+	);
+	const posterior = findPosterior(setup.blocksOf(setup.all, 'fitted'), sensitivities, found.noises, airPull);
 	const candidates = yield* shareOf(
 		weighCandidates(setup, found.parameters, sensitivities, found.noises, posterior),
-		SHARES.fit + SHARES.leftOut,
+		1 - SHARES.candidates,
 		SHARES.candidates
 	);
 	return describe(setup, traces, { found, before, posterior, candidates, leftOutTraces });

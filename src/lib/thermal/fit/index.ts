@@ -1,4 +1,5 @@
 /** Least squares with priors and bounds, and coefficients from measured traces. */
+export type { AirError } from './air-error';
 export type { Candidate } from './candidates';
 export {
 	FITTED_GROUPS,

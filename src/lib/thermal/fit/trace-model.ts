@@ -48,7 +48,9 @@ export class TraceModel {
 	private readonly scenario: Scenario;
 	private readonly run: VehicleRun;
 	private readonly sink: TraceSink;
-	private readonly airC: number;
+	/** As it was measured, without what is tried on it. */
+	private readonly course: ReturnType<typeof condenseCourse>;
+	private airC: number;
 
 	constructor(
 		private readonly of: TraceOfScenario,
@@ -56,7 +58,8 @@ export class TraceModel {
 	) {
 		this.scenario = copyScenario(of.scenario);
 		this.scenario.start.hour = of.trace.startedAtHour;
-		this.scenario.measured = condenseCourse(of.trace, this.scenario);
+		this.course = condenseCourse(of.trace, this.scenario);
+		this.scenario.measured = { ...this.course };
 		this.airC = outsideTempC(this.scenario, this.scenario.start.hour);
 		this.run = new VehicleRun(this.scenario.shield !== null, false, TOLERANCE_SHARE);
 		const { names } = this.run.stepper;
@@ -94,6 +97,31 @@ export class TraceModel {
 		if (this.run.run(scenario, this.sink) === null) return this.sink.rows;
 		this.sink.begin();
 		return this.sink.rows;
+	}
+
+	/** How long the legs are, s. */
+	get lengthS(): number {
+		return 60 * this.of.scenario.legs.reduce((sum, { minutes }) => sum + minutes, 0);
+	}
+
+	/** The same on air that is warmer by 1 K at an instant and by less up to `withinS` before and after. */
+	predictWarmer(
+		values: readonly (number | null)[],
+		startValues: readonly number[],
+		atS: number,
+		withinS: number
+	): readonly Float64Array[] {
+		const { everyS, valuesC } = this.course.air;
+		const warmer = valuesC.map((value, at) => value + Math.max(1 - Math.abs(at * everyS - atS) / withinS, 0));
+		this.useAir(warmer);
+		const rows = this.predict(values, startValues);
+		this.useAir(valuesC);
+		return rows;
+	}
+
+	private useAir(valuesC: Float64Array): void {
+		this.scenario.measured!.air = { everyS: this.course.air.everyS, valuesC };
+		this.airC = valuesC[0]!;
 	}
 
 	/** What the nodes come to when the vehicle stands before the trace begins, the air as far off the day's curve as at the start. */
