@@ -19,6 +19,8 @@ export interface Invention {
 	seed: number;
 	/** Length of time that a reading is the mean of, in whole minutes. */
 	everyMin?: number;
+	/** Whether the battery's current is read, too, without error. */
+	withCurrent?: boolean;
 }
 
 /** Numbers as of a normal distribution, always the same for a seed. */
@@ -56,7 +58,14 @@ function meansOf(curve: Float64Array, everyMin: number): Float64Array {
  * A trace of a day that never was: the model run on air that strays from the day's curve, and readings that are off by what hangs
  * together a little from one to the next.
  */
-export function inventTrace({ scenario, channels, noise, seed, everyMin = 1 }: Invention): FitTrace {
+export function inventTrace({
+	scenario,
+	channels,
+	noise,
+	seed,
+	everyMin = 1,
+	withCurrent = false
+}: Invention): FitTrace {
 	const valuesC = inventAir(scenario, seed);
 	const run = runScenario({ ...scenario, measured: { air: { everyS: MINUTE_S, valuesC } } });
 	if (run.status === 'failed') throw new Error(run.reason);
@@ -70,10 +79,11 @@ export function inventTrace({ scenario, channels, noise, seed, everyMin = 1 }: I
 		channel,
 		read(run.minutes.nodes[CHANNEL_NODES[channel]], noise.sdK, stream)
 	]);
+	const current = withCurrent ? { currentA: meansOf(run.minutes.currentA, everyMin) } : {};
 	const ambientC = read(valuesC, noise.sdK, AIR_NOISE_STREAM);
 	return {
 		startedAtHour: scenario.start.hour,
 		timeS: Float64Array.from(ambientC, (_, at) => (at + 0.5) * everyMin * MINUTE_S),
-		channels: { ambientC, ...(Object.fromEntries(temperatures) as FitTrace['channels']) }
+		channels: { ambientC, ...current, ...(Object.fromEntries(temperatures) as FitTrace['channels']) }
 	};
 }
