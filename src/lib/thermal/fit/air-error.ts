@@ -2,10 +2,9 @@ import { requirePositive } from '../correlations/require';
 import type { FitSetup } from './fit-setup';
 import { pullOf } from './information';
 import type { Noises } from './noise';
-import { LOSSES } from './robust-loss';
 import { zeros } from './small-matrices';
 import { isMeasured } from './trace';
-import type { Sensitivities } from './trace-problem';
+import type { Sensitivities, TraceProblem } from './trace-problem';
 
 /** How far the outside air may really have been from what was read, and for how long it is off alike. */
 export interface AirError {
@@ -36,13 +35,13 @@ export function requireAirError({ sdK, alikeMin }: AirError): void {
  */
 export function* findAirPull(
 	setup: FitSetup,
+	problem: TraceProblem,
 	parameters: readonly number[],
 	sensitivities: Sensitivities,
 	noises: Noises,
 	read: AirError
 ): Generator<number, number[][]> {
 	const pulled = zeros(sensitivities.length);
-	const problem = setup.problemOf(setup.all, LOSSES.squares);
 	const values = problem.valuesAt(parameters);
 	for (const trace of setup.all) {
 		const model = setup.models[trace]!;

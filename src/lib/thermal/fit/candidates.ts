@@ -1,8 +1,8 @@
 import type { Leg } from '../types';
+import { partOf } from '../uncertainty/finish-work';
 import { informationOf, withPriorInformation, type Asked } from './information';
 import type { FitSetup } from './fit-setup';
 import type { ChannelNoise, Noises } from './noise';
-import { LOSSES } from './robust-loss';
 import { CHANNEL_LABELS, FIT_CHANNELS, type FitChannel } from './trace';
 import { TraceModel, type TraceOfScenario } from './trace-model';
 import { TraceProblem, type Sensitivities } from './trace-problem';
@@ -143,11 +143,12 @@ export function* weighCandidates(
 	for (const [at, { key, label, legs }] of CANDIDATE_LEGS.entries()) {
 		const day = dayOf(setup.traceAt(0), legs);
 		const model = new TraceModel(day, setup.coefficients);
-		const problem = new TraceProblem([model], setup.coefficients, [], LOSSES.squares);
-		const work = problem.findSensitivities(parameters.slice(0, count));
-		let step = work.next();
-		for (; !step.done; step = work.next()) yield at / CANDIDATE_LEGS.length;
-		const more = informationOf(askOf(model, day, measured), step.value, noises);
+		const problem = new TraceProblem([model], setup.coefficients, []);
+		const felt = yield* partOf(
+			problem.findSensitivities(parameters.slice(0, count)),
+			() => at / CANDIDATE_LEGS.length
+		);
+		const more = informationOf(askOf(model, day, measured), felt, noises);
 		found.push({ kind: 'leg', key, label, ...weighCandidate(posterior, more, count) });
 	}
 	return found.sort((a, b) => a.meanLeft - b.meanLeft);

@@ -1,7 +1,7 @@
+import { partOf } from '../uncertainty/finish-work';
 import { firstNoise, judgeNoise, type ChannelNoise, type Noises } from './noise';
-import type { Loss } from './robust-loss';
 import { Search, type FitStatus } from './search';
-import { LOSSES } from './robust-loss';
+import { LOSSES, type Loss } from './robust-loss';
 import type { TraceProblem } from './trace-problem';
 
 /** What the readings are taken to be good to before their residuals say it, K. */
@@ -43,26 +43,25 @@ function isSettled(before: Noises, after: Noises): boolean {
  * @returns as a generator, yields the share of the work done, as far as that can be told
  */
 export function* findFit(
-	toProblem: (loss: Loss) => TraceProblem,
+	problem: TraceProblem,
 	{ loss, leastSdK }: FindOptions,
 	start: readonly number[],
 	known: Noises | null = null
 ): Generator<number, Found> {
-	let problem = toProblem(known ? loss : LOSSES.squares);
 	let noises = known ?? firstNoise(problem.blocks, FIRST_SD_K);
 	let parameters = [...start];
 	let iterations = 0;
 	for (let round = 1; ; round++) {
-		const search = new Search(problem.toLeastSquares(parameters, noises));
-		const work = search.run();
-		let step = work.next();
-		for (; !step.done; step = work.next()) yield (round - 1 / (1 + search.iterations)) / (MOST_ROUNDS + 1);
+		const counted = round === 1 && !known ? LOSSES.squares : loss;
+		const search = new Search(problem.toLeastSquares(parameters, noises, counted));
+		const status = yield* partOf(
+			search.run(),
+			() => (round - 1 / (1 + search.iterations)) / (MOST_ROUNDS + 1)
+		);
 		parameters = search.parameters;
 		iterations += search.iterations;
-		problem = toProblem(loss);
 		const judged = judgeNoise(problem.blocks, problem.residuals(parameters), loss, leastSdK);
 		const settled = isSettled(noises, judged);
-		const status = step.value;
 		if (settled || round === MOST_ROUNDS || status !== 'converged') {
 			return { parameters, noises: judged, status, rounds: round, settled, iterations };
 		}

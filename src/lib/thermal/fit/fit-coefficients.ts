@@ -1,25 +1,14 @@
 import { requirePositive } from '../correlations/require';
+import { partOf } from '../uncertainty/finish-work';
 import { findAirPull, READ_AIR_ERROR, requireAirError, type AirError } from './air-error';
-import { listUnused, type UnusedChannel } from './blocks';
-import { weighCandidates, type Candidate } from './candidates';
+import { weighCandidates } from './candidates';
 import type { FittedCoefficient } from './coefficients';
-import {
-	describeEstimates,
-	findCorrelation,
-	findPosterior,
-	type CoefficientEstimate,
-	type Posterior
-} from './estimates';
-import { findFit, type FindOptions, type Found } from './find-fit';
-import { measureErrors } from './fit-errors';
+import { describeFit, REASONS, type CoefficientFit } from './describe-fit';
+import { findPosterior } from './estimates';
+import { findFit, type FindOptions } from './find-fit';
 import { FitSetup, type TraceToFit } from './fit-setup';
-import { compareOn, leaveEachOut, type ErrorsCompared } from './leave-out';
-import { residualsOf, type Noises } from './noise';
-import { drawResiduals, sortByTemperature, type ResidualCurve, type TemperatureBin } from './residual-views';
+import { leaveEachOut } from './leave-out';
 import { LOSSES, type LossName } from './robust-loss';
-import type { FitStatus } from './search';
-import type { Sensitivities } from './trace-problem';
-import { findUntold, type Untold } from './untold';
 
 /** The coefficient book: group → key → value. */
 export type FitBook = Readonly<Record<string, Readonly<Record<string, number>>>>;
@@ -42,100 +31,12 @@ export interface CoefficientFitInput {
 	options?: CoefficientFitOptions;
 }
 
-export interface DoneCoefficientFit {
-	status: 'done';
-	/** How the search ended, and in words. */
-	stopped: FitStatus;
-	reason: string;
-	estimates: CoefficientEstimate[];
-	/** Of the coefficients, after the fit, on their priors' scales. */
-	correlation: number[][];
-	noises: Noises;
-	untold: Untold;
-	/** What would tell most, the best first. */
-	candidates: Candidate[];
-	errors: {
-		fitted: ErrorsCompared;
-		heldOutLegs: ErrorsCompared | null;
-		leftOutTraces: ErrorsCompared | null;
-	};
-	residuals: ResidualCurve[];
-	byTemperature: TemperatureBin[];
-	unused: UnusedChannel[];
-	rounds: number;
-	iterations: number;
-	/** How often the vehicle was run. */
-	runs: number;
-}
-
-/** A fit that could not be begun is returned, not thrown. */
-export type CoefficientFit = DoneCoefficientFit | { status: 'failed'; reason: string };
-
 const LEAST_SD_K = 0.1;
 /** How the work is shared out, for those who wait: the fit, the fits without each trace, the air's error, what else would tell. */
 const SHARES = { fit: 0.5, leftOut: 0.35, air: 0.08, candidates: 0.07 };
 
-const REASONS: Readonly<Record<FitStatus, string>> = {
-	converged:
-		'The best fit was found: no step would lower the sum of squares by as much as a thirtieth of a standard deviation does.',
-	'evaluations used up':
-		'The search was given up after 3,000 looks at the traces; the best that was found is shown.',
-	stalled:
-		'The search came to where no step makes the fit better although one should; the best that was found is shown.',
-	'not finite at the start':
-		'The vehicle cannot be run with the middles of the priors, so that there is nothing to begin at.'
-};
-const NOT_SETTLED = ' What the readings are worth had not settled to 3 % by then.';
-
-function* shareOf<T>(work: Generator<number, T>, from: number, size: number): Generator<number, T> {
-	for (let step = work.next(); ; step = work.next()) {
-		if (step.done) return step.value;
-		yield from + size * step.value;
-	}
-}
-
-function* sensitivitiesAt(
-	setup: FitSetup,
-	{ parameters }: Found,
-	loss: LossName
-): Generator<number, Sensitivities> {
-	const work = setup.problemOf(setup.all, LOSSES[loss]).findSensitivities(parameters);
-	for (let step = work.next(); ; step = work.next()) {
-		if (step.done) return step.value;
-		yield SHARES.fit;
-	}
-}
-
-/** What the model gives with the book's values and with those that were found. */
-function compareFitted(setup: FitSetup, { parameters }: Found, book: readonly (number | null)[]) {
-	const problem = setup.problemOf(setup.all, LOSSES.squares);
-	const { blocks } = problem;
-	const foretold = setup.models.map((model) =>
-		model.predict(
-			book,
-			model.starts.map(({ mean }) => mean)
-		)
-	);
-	const before = blocks.map((block) => residualsOf(block, foretold[block.trace]!));
-	const after = problem.residuals(parameters);
-	const timesS = setup.all.map((trace) => setup.traceAt(trace).trace.timeS);
-	return {
-		errors: { before: measureErrors(blocks, before)!, after: measureErrors(blocks, after)! },
-		residuals: drawResiduals(blocks, timesS, before, after),
-		byTemperature: sortByTemperature(blocks, before, after)
-	};
-}
-
-function describeBefore(
-	setup: FitSetup,
-	traces: readonly TraceToFit[],
-	book: readonly (number | null)[]
-): number[] {
-	return setup.coefficients.map(({ group, key }, at) => {
-		const own = traces.map(({ scenario }) => scenario[group] as Readonly<Record<string, number>> | null);
-		return book[at] ?? own.find((values) => values !== null)![key]!;
-	});
-}
+/** A share of a part of the work as one of the whole. */
+const within = (from: number, size: number) => (share: number) => from + size * share;
 
 /**
  * Fits coefficients to measured temperatures of one or many days together.
@@ -178,66 +79,24 @@ export function* fitCoefficients({
 	requireAirError(airError);
 	const setup = new FitSetup(traces, coefficients);
 	const find: FindOptions = { loss: LOSSES[loss], leastSdK };
-	const middle = setup.problemOf(setup.all, find.loss).middle();
-	const found = yield* shareOf(
-		findFit((each) => setup.problemOf(setup.all, each), find, middle),
-		0,
-		SHARES.fit
-	);
+	const problem = setup.problemOf(setup.all);
+	const found = yield* partOf(findFit(problem, find, problem.middle()), within(0, SHARES.fit));
 	if (found.status === 'not finite at the start') return { status: 'failed', reason: REASONS[found.status] };
+	const { parameters, noises } = found;
 	const before = setup.coefficients.map(({ group, key }) => book[group]?.[key] ?? null);
 	const leftOutTraces = leaveOut
-		? yield* shareOf(
-				leaveEachOut(setup, find, found.parameters, found.noises, before),
-				SHARES.fit,
-				SHARES.leftOut
-			)
+		? yield* partOf(leaveEachOut(setup, find, parameters, noises, before), within(SHARES.fit, SHARES.leftOut))
 		: null;
-	const sensitivities = yield* sensitivitiesAt(setup, found, loss);
-	const airPull = yield* shareOf(
-		findAirPull(setup, found.parameters, sensitivities, found.noises, airError),
-		SHARES.fit + SHARES.leftOut,
-		SHARES.air
+	const done = SHARES.fit + SHARES.leftOut;
+	const sensitivities = yield* partOf(problem.findSensitivities(parameters), () => done);
+	const airPull = yield* partOf(
+		findAirPull(setup, problem, parameters, sensitivities, noises, airError),
+		within(done, SHARES.air)
 	);
-	const posterior = findPosterior(setup.blocksOf(setup.all, 'fitted'), sensitivities, found.noises, airPull);
-	const candidates = yield* shareOf(
-		weighCandidates(setup, found.parameters, sensitivities, found.noises, posterior),
-		1 - SHARES.candidates,
-		SHARES.candidates
+	const posterior = findPosterior(problem.blocks, sensitivities, noises, airPull);
+	const candidates = yield* partOf(
+		weighCandidates(setup, parameters, sensitivities, noises, posterior),
+		within(done + SHARES.air, SHARES.candidates)
 	);
-	return describe(setup, traces, { found, before, posterior, candidates, leftOutTraces });
-}
-
-interface Pieces {
-	found: Found;
-	before: readonly (number | null)[];
-	posterior: Posterior;
-	candidates: Candidate[];
-	leftOutTraces: ErrorsCompared | null;
-}
-
-function describe(setup: FitSetup, traces: readonly TraceToFit[], pieces: Pieces): DoneCoefficientFit {
-	const { found, before, posterior, candidates, leftOutTraces } = pieces;
-	const { status, settled, parameters, noises, rounds, iterations } = found;
-	const values = setup.problemOf(setup.all, LOSSES.squares).valuesAt(parameters);
-	const estimates = describeEstimates(
-		setup.coefficients,
-		parameters,
-		posterior,
-		describeBefore(setup, traces, before)
-	);
-	const correlation = findCorrelation(posterior.covariance, estimates.length);
-	const { errors, ...views } = compareFitted(setup, found, before);
-	const heldOutLegs = compareOn(setup, 'heldOut', before, () => values);
-	return {
-		status: 'done',
-		stopped: status,
-		reason: REASONS[status] + (settled ? '' : NOT_SETTLED),
-		...{ estimates, correlation, noises, candidates, rounds, iterations },
-		untold: findUntold(estimates, correlation),
-		errors: { fitted: errors, heldOutLegs, leftOutTraces },
-		...views,
-		unused: listUnused(setup.all.map((at) => setup.traceAt(at))),
-		runs: setup.models.reduce((sum, { runs }) => sum + runs, 0)
-	};
+	return describeFit({ setup, problem, traces, found, before, posterior, candidates, leftOutTraces });
 }

@@ -3,7 +3,6 @@ import type { Scenario } from '../types';
 import { listBlocks, markLegs, type Block } from './blocks';
 import { readCoefficients, type Coefficient, type FittedCoefficient } from './coefficients';
 import type { Asked } from './information';
-import type { Loss } from './robust-loss';
 import { requireStart, type UnmeasuredStart } from './start-temps';
 import { FIT_CHANNELS, requireTrace, type FitChannel, type FitTrace } from './trace';
 import { TraceModel, type TraceOfScenario } from './trace-model';
@@ -88,8 +87,8 @@ export class FitSetup {
 	}
 
 	/** The problem of fitting some of the traces. */
-	problemOf(traces: readonly number[], loss: Loss): TraceProblem {
+	problemOf(traces: readonly number[]): TraceProblem {
 		const models = traces.map((trace) => this.models[trace]!);
-		return new TraceProblem(models, this.coefficients, this.blocksOf(traces, 'fitted'), loss);
+		return new TraceProblem(models, this.coefficients, this.blocksOf(traces, 'fitted'));
 	}
 }

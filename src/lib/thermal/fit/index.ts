@@ -7,13 +7,12 @@ export {
 	type FittedCoefficient,
 	type FittedGroup
 } from './coefficients';
+export type { CoefficientFit, DoneCoefficientFit } from './describe-fit';
 export type { CoefficientEstimate } from './estimates';
 export {
 	fitCoefficients,
-	type CoefficientFit,
 	type CoefficientFitInput,
 	type CoefficientFitOptions,
-	type DoneCoefficientFit,
 	type FitBook
 } from './fit-coefficients';
 export type { FitError, FitErrors } from './fit-errors';

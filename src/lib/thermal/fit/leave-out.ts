@@ -1,3 +1,4 @@
+import { partOf } from '../uncertainty/finish-work';
 import { findFit, type FindOptions } from './find-fit';
 import { measureErrors, type FitErrors } from './fit-errors';
 import type { FitSetup } from './fit-setup';
@@ -60,13 +61,11 @@ export function* leaveEachOut(
 	const valuesWithout: number[][] = [];
 	for (const left of setup.all) {
 		const others = setup.all.filter((trace) => trace !== left);
-		const problem = setup.problemOf(others, options.loss);
+		const problem = setup.problemOf(others);
 		const coefficients = start.slice(0, setup.coefficients.length);
 		const from = [...coefficients, ...problem.middle().slice(coefficients.length)];
-		const work = findFit((loss) => setup.problemOf(others, loss), options, from, noises);
-		let step = work.next();
-		for (; !step.done; step = work.next()) yield (left + step.value) / count;
-		valuesWithout.push(problem.valuesAt(step.value.parameters));
+		const found = yield* partOf(findFit(problem, options, from, noises), (share) => (left + share) / count);
+		valuesWithout.push(problem.valuesAt(found.parameters));
 	}
 	return compareOn(setup, 'fitted', before, (trace) => valuesWithout[trace]!);
 }

@@ -11,6 +11,8 @@ import type { TraceModel } from './trace-model';
 const COEFFICIENT_STEP = 0.1;
 /** And over this much of a start temperature's. */
 const START_STEP = 1;
+/** Derivatives are used again where no parameter is further off than this: they are good to a few hundredths. */
+const REUSED_WITHIN = 0.03;
 /** The first step may go this far, in standard deviations of the priors. */
 const FIRST_STEP = 1;
 /** The search ends where the sum of squares would fall by less: a thirtieth of a standard deviation. */
@@ -28,12 +30,12 @@ export class TraceProblem {
 	/** First parameter of each trace's start temperatures. */
 	private readonly startsFrom: number[] = [];
 	private last: { key: string; foretold: Foretold } | null = null;
+	private known: { at: readonly number[]; sensitivities: Sensitivities } | null = null;
 
 	constructor(
 		readonly models: readonly TraceModel[],
 		readonly coefficients: readonly Coefficient[],
-		readonly blocks: readonly Block[],
-		private readonly loss: Loss
+		readonly blocks: readonly Block[]
 	) {
 		let from = coefficients.length;
 		for (const { starts } of models) {
@@ -65,10 +67,7 @@ export class TraceProblem {
 	foretell(parameters: readonly number[]): Foretold {
 		const key = parameters.join();
 		if (this.last?.key === key) return this.last.foretold;
-		const values = this.valuesAt(parameters);
-		const foretold = this.models.map((model, trace) =>
-			model.predict(values, this.startsAt(parameters, trace))
-		);
+		const foretold = this.models.map((_, trace) => this.foretellTrace(trace, parameters));
 		this.last = { key, foretold };
 		return foretold;
 	}
@@ -78,21 +77,32 @@ export class TraceProblem {
 		return this.blocks.map((block) => residualsOf(block, foretold[block.trace]!));
 	}
 
-	/** By parameter and trace; yields after each run of a trace. */
+	/** By parameter and trace, at these parameters or as near to them that it makes no difference; yields after each trace. */
 	*findSensitivities(parameters: readonly number[]): Generator<void, Sensitivities> {
+		if (this.known?.at.every((value, at) => Math.abs(value - parameters[at]!) <= REUSED_WITHIN)) {
+			return this.known.sensitivities;
+		}
+		const sensitivities = yield* this.tryEach(parameters);
+		this.known = { at: [...parameters], sensitivities };
+		return sensitivities;
+	}
+
+	private *tryEach(parameters: readonly number[]): Generator<void, Sensitivities> {
+		const foretold = this.foretell(parameters);
 		const found: (readonly Float64Array[] | null)[][] = [];
 		for (let at = 0; at < this.count; at++) {
-			const step = at < this.coefficients.length ? COEFFICIENT_STEP : START_STEP;
-			const { lowZ = -Infinity, highZ = Infinity } = this.coefficients[at] ?? {};
-			const [below, above] = [
-				Math.max(parameters[at]! - step, lowZ),
-				Math.min(parameters[at]! + step, highZ)
-			];
+			const [below, above] = this.stepsAround(parameters[at]!, at);
 			const move = (to: number) => parameters.map((old, k) => (k === at ? to : old));
 			const rows: (readonly Float64Array[] | null)[] = [];
 			for (let trace = 0; trace < this.models.length; trace++) {
+				if (!this.isFelt(at, trace)) {
+					rows.push(null);
+					continue;
+				}
+				const low = below === parameters[at] ? foretold[trace]! : this.foretellTrace(trace, move(below));
+				const high = this.foretellTrace(trace, move(above));
 				rows.push(
-					this.isFelt(at, trace) ? this.differ(trace, move(below), move(above), above - below) : null
+					high.map((row, k) => row.map((value, place) => (value - low[k]![place]!) / (above - below)))
 				);
 				yield;
 			}
@@ -102,11 +112,11 @@ export class TraceProblem {
 	}
 
 	/** The problem that least squares solves with these noises. */
-	toLeastSquares(start: readonly number[], noises: Noises): LeastSquaresProblem {
+	toLeastSquares(start: readonly number[], noises: Noises, loss: Loss): LeastSquaresProblem {
 		const each = <T>(of: (at: number) => T) => Array.from({ length: this.count }, (_, at) => of(at));
 		return {
-			residuals: (parameters) => this.weigh(this.residuals(parameters), noises),
-			derivatives: (parameters) => this.differentiate(parameters, noises),
+			residuals: (parameters) => this.weigh(this.residuals(parameters), noises, loss),
+			derivatives: (parameters) => this.differentiate(parameters, noises, loss),
 			start,
 			residualsIn: 'standard deviations',
 			priors: each(() => ({ mean: 0, sd: 1 })),
@@ -129,34 +139,38 @@ export class TraceProblem {
 		);
 	}
 
-	private differ(
-		trace: number,
-		below: readonly number[],
-		above: readonly number[],
-		apart: number
-	): readonly Float64Array[] {
-		const model = this.models[trace]!;
-		const low = model.predict(this.valuesAt(below), this.startsAt(below, trace));
-		const high = model.predict(this.valuesAt(above), this.startsAt(above, trace));
-		return high.map((row, k) => row.map((value, at) => (value - low[k]![at]!) / apart));
+	private foretellTrace(trace: number, parameters: readonly number[]): readonly Float64Array[] {
+		return this.models[trace]!.predict(this.valuesAt(parameters), this.startsAt(parameters, trace));
 	}
 
-	private weigh(residuals: readonly Float64Array[], noises: Noises): Float64Array {
+	/** To both sides for a coefficient, as far as its bounds go; start temperatures are felt in so straight a line that one side does. */
+	private stepsAround(value: number, parameter: number): readonly [number, number] {
+		const coefficient = this.coefficients[parameter];
+		if (!coefficient) return [value, value + START_STEP];
+		const { lowZ, highZ } = coefficient;
+		return [Math.max(value - COEFFICIENT_STEP, lowZ), Math.min(value + COEFFICIENT_STEP, highZ)];
+	}
+
+	private weigh(residuals: readonly Float64Array[], noises: Noises, loss: Loss): Float64Array {
 		const all = new Float64Array(this.blocks.reduce((sum, { at }) => sum + at.length, 0));
 		let next = 0;
 		this.blocks.forEach(({ channel, at }, block) => {
 			const { sdK, weight } = noises[channel]!;
 			const root = Math.sqrt(weight);
-			for (const place of at) all[next++] = root * this.loss.root(residuals[block]![place]! / sdK);
+			for (const place of at) all[next++] = root * loss.root(residuals[block]![place]! / sdK);
 		});
 		return all;
 	}
 
-	private *differentiate(parameters: readonly number[], noises: Noises): Generator<void, Columns> {
+	private *differentiate(
+		parameters: readonly number[],
+		noises: Noises,
+		loss: Loss
+	): Generator<void, Columns> {
 		const slopes = this.residuals(parameters).map((values, block) => {
 			const { sdK, weight } = noises[this.blocks[block]!.channel]!;
 			const factor = Math.sqrt(weight) / sdK;
-			return values.map((value) => factor * this.loss.rootSlope(value / sdK));
+			return values.map((value) => factor * loss.rootSlope(value / sdK));
 		});
 		const sensitivities = yield* this.findSensitivities(parameters);
 		return sensitivities.map((byTrace) => this.layOut(byTrace, slopes));
