@@ -46,7 +46,7 @@ describe('the synthetic traces', () => {
 
 describe('a fit of six coefficients to three days', () => {
 	it.each(SYNTHETIC_COEFFICIENTS)(
-		'finds $group.$key: the truth lies within the interval, which is far narrower than what was believed',
+		'finds $key of the $group: the truth lies within the interval, which is far narrower than what was believed',
 		({ group, key }) => {
 			const estimate = whole().estimates.find((each) => each.group === group && each.key === key)!;
 			const truth = SYNTHETIC_TRUTH.coefficients[group]![key]!;
