@@ -74,10 +74,18 @@ async function compareDays(): Promise<void> {
 
 async function timeWorkloads(): Promise<void> {
 	const child = fork(SELF, ['workloads']);
-	const rows = [['work', 'ms', 'days run', 'ms a day']];
+	const rows = [['work', 'ms', 'days run', 'ms a day', 'times a sampled day']];
+	let sampledMs: number | null = null;
 	for (const [at, { name }] of WORKLOADS.entries()) {
 		const { ms, days } = await ask<{ ms: number; days: number }>(child, { workload: at });
-		rows.push([name, ms.toFixed(1), String(days), (ms / days).toFixed(3)]);
+		sampledMs ??= ms / days;
+		rows.push([
+			name,
+			ms.toFixed(1),
+			String(days),
+			(ms / days).toFixed(3),
+			(ms / days / sampledMs).toFixed(2)
+		]);
 	}
 	child.disconnect();
 	console.log(`\n${formatTable(rows)}`);

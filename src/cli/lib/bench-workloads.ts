@@ -1,7 +1,10 @@
-import { parseScenario, type Scenario } from '../../lib/thermal';
+import { coefficientDefaults, parseScenario, type Scenario } from '../../lib/thermal';
+import { fitCoefficients, type CoefficientFitInput, type FittedCoefficient } from '../../lib/thermal/fit';
+import { finishWork } from '../../lib/thermal/uncertainty/finish-work';
 import { PRIORS, copyScenario, drawScenario } from '../../lib/thermal/uncertainty';
 import { scrambledSobolPoint } from '../../lib/thermal/statistics';
 import { OutcomeRunner } from '../../lib/thermal/vehicle/outcome-run';
+import { inventTrace } from '../../../tests/support/invent-trace';
 import { DAYS } from './bench-contenders';
 import { findMedian } from './bench-table';
 
@@ -49,6 +52,40 @@ function timeOutcomes(scenarios: readonly Scenario[]): { ms: number; days: numbe
 	return { ms, days: scenarios.length };
 }
 
+const lognormal = (group: FittedCoefficient['group'], key: string, middle: number): FittedCoefficient => ({
+	...{ group, key },
+	prior: { law: 'lognormal', middle, spread: 0.3 }
+});
+
+/** Three days of 24 hours, read each minute in three places, of which six coefficients are to be found. */
+function inventFit(leaveOut: boolean): CoefficientFitInput {
+	const coefficients = [
+		lognormal('bay', 'leakClosed', 20),
+		lognormal('bay', 'flowPerSpeed', 0.06),
+		lognormal('exhaust', 'gasConductanceFull', 45),
+		lognormal('engine', 'heatCapacity', 180e3),
+		lognormal('battery', 'filmStill', 5),
+		lognormal('battery', 'caseCellConductance', 2.5)
+	];
+	const traces = [36, 39, 42].map((tMax, seed) => {
+		const scenario = { ...day(), climate: { ...day().climate, tMax } };
+		const truth = copyScenario(scenario);
+		truth.bay.leakClosed = 26;
+		truth.battery.caseCellConductance = 3.1;
+		const noise = { sdK: 0.3, keepsAMinute: 0.6 };
+		const channels = ['bayAirC', 'caseC', 'cellC'] as const;
+		return { trace: inventTrace({ scenario: truth, channels, noise, seed }), scenario };
+	});
+	return { traces, coefficients, book: coefficientDefaults(), options: { leaveOut } };
+}
+
+function timeFit(leaveOut: boolean): { ms: number; days: number } {
+	const input = inventFit(leaveOut);
+	const fit = finishWork(fitCoefficients(input));
+	const ms = timeMedian(() => finishWork(fitCoefficients(input)));
+	return { ms, days: fit.status === 'done' ? fit.runs : 0 };
+}
+
 export const WORKLOADS: readonly Workload[] = [
 	{
 		name: '1,000 sampled scenarios: drawn and run for peak, events and dark hours',
@@ -66,7 +103,9 @@ export const WORKLOADS: readonly Workload[] = [
 	{
 		name: 'a year of 365 different days',
 		time: () => timeOutcomes(listYear())
-	}
+	},
+	{ name: 'six coefficients fitted to three days of 24 hours', time: () => timeFit(false) },
+	{ name: '… and again without each day in turn', time: () => timeFit(true) }
 ];
 
 /** The touring day again and again, as long as asked. */

@@ -168,6 +168,16 @@ export interface StartGroup {
 	soc: number;
 }
 
+/** What was measured of a day and takes the place of what the scenario says; times count in s from its start. */
+export interface MeasuredCourse {
+	/** Outside air, °C, each `everyS`: straight between two readings, level before the first and after the last. */
+	air?: { everyS: number; valuesC: Float64Array };
+	/** Battery current, A, positive charging: one value for each `everyS`; NaN where what is planned flows. */
+	current?: { everyS: number; valuesA: Float64Array };
+	/** What nodes start at, °C; those not named start at the outside air's temperature. */
+	startC?: Partial<Record<NodeName, number>>;
+}
+
 /** A whole scenario, every field filled in. */
 export interface Scenario {
 	vehicle: VehicleGroup;
@@ -185,6 +195,8 @@ export interface Scenario {
 	climate: ClimateGroup;
 	start: StartGroup;
 	legs: Leg[];
+	/** Only where a day is run again that was measured; no part of what people and programs write. */
+	measured?: MeasuredCourse;
 }
 
 type PartialGroup<T> = T extends LimitPair
@@ -193,7 +205,7 @@ type PartialGroup<T> = T extends LimitPair
 
 /** What people and programs write: absent groups and fields take the defaults. */
 export type ScenarioInput = {
-	[K in Exclude<keyof Scenario, 'legs' | 'shield'>]?: PartialGroup<Scenario[K]>;
+	[K in Exclude<keyof Scenario, 'legs' | 'shield' | 'measured'>]?: PartialGroup<Scenario[K]>;
 } & {
 	shield?: Partial<ShieldGroup> | null;
 	legs: (Partial<Leg> & { minutes: number })[];

@@ -1,9 +1,7 @@
-import { solveLower, triangularise, type Columns } from './householder';
+import { norm, solveLower, triangularise, type Columns } from './householder';
 
 /** A diagonal smaller than this, against a column of length 1, says that a parameter is not to be told from the others. */
 const SMALLEST_DIAGONAL = 1e-12;
-
-const lengthOf = (column: Float64Array): number => Math.hypot(...column);
 
 /**
  * Covariance of fitted parameters from the Jacobian of the residuals.
@@ -19,7 +17,7 @@ const lengthOf = (column: Float64Array): number => Math.hypot(...column);
  * findCovariance([Float64Array.of(3, 4)], 50)[0][0]; // 2.000000
  */
 export function findCovariance(jacobian: Columns, scale: number): number[][] | null {
-	const lengths = jacobian.map(lengthOf);
+	const lengths = jacobian.map(norm);
 	if (lengths.some((length) => !(length > 0 && Number.isFinite(length)))) return null;
 	const unit = jacobian.map((column, j) => column.map((value) => value / lengths[j]!));
 	const { r } = triangularise(unit, new Float64Array(unit[0]?.length ?? 0));

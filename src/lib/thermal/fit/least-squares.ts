@@ -1,3 +1,4 @@
+import { finishWork } from '../uncertainty/finish-work';
 import { findCovariance } from './covariance';
 import { sumOfSquares } from './householder';
 import { requireProblem, type LeastSquaresProblem } from './problem';
@@ -88,5 +89,5 @@ function describeFit(search: Search, status: FitStatus, problem: LeastSquaresPro
 export function fitLeastSquares(problem: LeastSquaresProblem): Fit {
 	requireProblem(problem);
 	const search = new Search(problem);
-	return describeFit(search, search.run(), problem);
+	return describeFit(search, finishWork(search.run()), problem);
 }

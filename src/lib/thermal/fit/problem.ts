@@ -1,4 +1,5 @@
 import { EngineInputError, requirePositive } from '../correlations/require';
+import type { Columns } from './householder';
 
 /** What is believed of a parameter before the data: its mean and standard deviation, in its own unit. */
 export interface Prior {
@@ -14,7 +15,7 @@ export interface Bounds {
 
 export interface LeastSquaresProblem {
 	/** Model minus data at these parameters: always as many numbers, in any unit. */
-	residuals: (parameters: readonly number[]) => readonly number[];
+	residuals: (parameters: readonly number[]) => ArrayLike<number>;
 	/** Where to begin, within the bounds. */
 	start: readonly number[];
 	/**
@@ -28,6 +29,12 @@ export interface LeastSquaresProblem {
 	bounds?: readonly (Bounds | null)[];
 	/** Most evaluations of the residuals, those for derivatives included. */
 	mostEvaluations?: number;
+	/** Derivatives of the residuals, one column a parameter, where differences of them all would be waste; yields meanwhile. */
+	derivatives?: (parameters: readonly number[]) => Generator<void, Columns>;
+	/** How far each parameter may go in the first step; else as far as the start is from 0. */
+	firstStep?: readonly number[];
+	/** A fall of the sum of squares for which it is not worth going on; else only rounding ends the search. */
+	leastFall?: number;
 }
 
 function requireFinite(values: Readonly<Record<string, number>>): void {
@@ -60,6 +67,7 @@ export function requireProblem(problem: LeastSquaresProblem): void {
 	if (start.length === 0) throw new EngineInputError('start.length', 0, 'at least 1');
 	requireAsMany('priors', priors, start.length);
 	requireAsMany('bounds', problem.bounds, start.length);
+	requireAsMany('firstStep', problem.firstStep, start.length);
 	requirePositive({ mostEvaluations });
 	start.forEach((value, k) => {
 		requireFinite({ [`start[${k}]`]: value });
@@ -79,6 +87,10 @@ export function withPriors(problem: LeastSquaresProblem): (parameters: readonly 
 		const believed = priors.flatMap((prior, k) =>
 			prior === null ? [] : [(parameters[k]! - prior.mean) / prior.sd]
 		);
-		return Float64Array.from([...residuals(parameters), ...believed]);
+		const data = residuals(parameters);
+		const all = new Float64Array(data.length + believed.length);
+		all.set(data);
+		all.set(believed, data.length);
+		return all;
 	};
 }

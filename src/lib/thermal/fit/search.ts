@@ -32,12 +32,14 @@ export class Search {
 	private radius = 0;
 	private readonly evaluateAll: (parameters: readonly number[]) => Float64Array;
 	private readonly mostEvaluations: number;
+	private readonly leastFall: number;
 
 	constructor(private readonly problem: LeastSquaresProblem) {
 		this.parameters = [...problem.start];
 		this.count = this.parameters.length;
 		this.bounds = this.parameters.map((_, k) => problem.bounds?.[k] ?? null);
 		this.mostEvaluations = problem.mostEvaluations ?? MOST_EVALUATIONS;
+		this.leastFall = problem.leastFall ?? -Infinity;
 		this.evaluateAll = withPriors(problem);
 		this.scales = new Float64Array(this.count);
 		this.residuals = this.evaluate(this.parameters);
@@ -55,6 +57,22 @@ export class Search {
 		return this.evaluateAll(parameters);
 	};
 
+	/** Those of the residuals, with the rows of the priors behind where the problem knows its own. */
+	private *findJacobian(): Generator<void, Columns> {
+		const { derivatives, priors = [] } = this.problem;
+		if (!derivatives) return this.differentiate();
+		const columns = yield* derivatives(this.parameters);
+		const believed = priors.flatMap((prior, at) => (prior === null ? [] : [{ at, slope: 1 / prior.sd }]));
+		return columns.map((column, at) => {
+			const tall = new Float64Array(column.length + believed.length);
+			tall.set(column);
+			believed.forEach((row, k) => {
+				if (row.at === at) tall[column.length + k] = row.slope;
+			});
+			return tall;
+		});
+	}
+
 	differentiate(): Columns {
 		const sizes = this.parameters.map((_, k) => this.problem.priors?.[k]?.sd ?? 1);
 		return differentiate(this.evaluate, this.parameters, sizes, this.bounds);
@@ -68,16 +86,17 @@ export class Search {
 		return (value === low && rise > 0) || (value === high && rise < 0);
 	}
 
-	run(): FitStatus {
+	/** Yields whenever some of the work is done. */
+	*run(): Generator<void, FitStatus> {
 		if (!allFinite(this.residuals)) return 'not finite at the start';
 		for (;;) {
 			if (norm(this.residuals) === 0) return 'converged';
-			const jacobian = this.differentiate();
+			const jacobian = yield* this.findJacobian();
 			if (!jacobian.every(allFinite)) return 'stalled';
 			const free = jacobian.flatMap((column, at) => (this.isHeld(column, at) ? [] : [at]));
 			if (this.isPerpendicular(free.map((at) => jacobian[at]!))) return 'converged';
 			this.updateScales(jacobian);
-			const end = this.findBetter(jacobian, free);
+			const end = yield* this.findBetter(jacobian, free);
 			this.iterations++;
 			if (end !== null) return end;
 		}
@@ -97,7 +116,8 @@ export class Search {
 		this.scales = Float64Array.from(jacobian, (column, at) =>
 			first ? norm(column) || 1 : Math.max(this.scales[at]!, norm(column))
 		);
-		if (first) this.radius = FIRST_RADIUS * (this.scaledLength(this.parameters) || 1);
+		const { firstStep = this.parameters } = this.problem;
+		if (first) this.radius = FIRST_RADIUS * (this.scaledLength(firstStep) || 1);
 	}
 
 	private scaledLength(values: readonly number[]): number {
@@ -105,7 +125,7 @@ export class Search {
 	}
 
 	/** Shortens the step until the sum of squares falls; null when the search goes on from there. */
-	private findBetter(jacobian: Columns, free: readonly number[]): FitStatus | null {
+	private *findBetter(jacobian: Columns, free: readonly number[]): Generator<void, FitStatus | null> {
 		const turned = this.residuals.map((residual) => -residual);
 		const triangle = triangularise(
 			free.map((at) => jacobian[at]!),
@@ -116,6 +136,7 @@ export class Search {
 			if (this.evaluations >= this.mostEvaluations) return 'evaluations used up';
 			const { step, damping } = findTrustStep(triangle, scales, this.radius);
 			const end = this.tryStep(jacobian, free, step, damping);
+			yield;
 			if (end !== 'shorter') return end;
 		}
 	}
@@ -145,6 +166,7 @@ export class Search {
 			this.parameters = next;
 			this.residuals = residuals;
 		}
+		if (foreseen * before <= this.leastFall) return 'converged';
 		if (Math.abs(gained) <= LEAST_GAIN && foreseen <= LEAST_GAIN && share <= 2) return 'converged';
 		if (this.radius <= LEAST_MOVE * this.scaledLength(this.parameters))
 			return taken ? 'converged' : this.judgeRest(foreseen);

@@ -14,7 +14,7 @@ import { PRIORS, type Prior, type Spread } from './priors';
  * copyScenario(defaultScenario([{ minutes: 60 }])).legs.length; // 1
  */
 export function copyScenario(scenario: Scenario): Scenario {
-	const { shield, bms } = scenario;
+	const { shield, bms, measured } = scenario;
 	return {
 		vehicle: { ...scenario.vehicle },
 		engine: { ...scenario.engine },
@@ -30,7 +30,8 @@ export function copyScenario(scenario: Scenario): Scenario {
 		charger: { ...scenario.charger },
 		climate: { ...scenario.climate },
 		start: { ...scenario.start },
-		legs: scenario.legs.map((leg) => ({ ...leg }))
+		legs: scenario.legs.map((leg) => ({ ...leg })),
+		...(measured ? { measured } : {})
 	};
 }
 

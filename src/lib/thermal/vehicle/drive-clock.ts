@@ -2,6 +2,7 @@ import { INSTANTS, planSlots, SLOPE } from '../network/step-generator/slots';
 import { expOf } from '../solve/elementary';
 import { readCurrentA, type ChargeSpan } from './charge';
 import { emptyDrive, findFuelRegime, findUnlitDrive, type Drive } from './leg-drive';
+import { nextAirBendHour } from './measured-course';
 import { DRIVEN, SUNLIT, type Setting } from './network-table';
 import { CELLS_PER_H, findSunPlace, readSunShape, readSunSlopePerH } from './sun-shape';
 import { shapeVehicle } from './vehicle-shape';
@@ -73,8 +74,7 @@ export class DriveClock {
 	enterSegment(timeS: number): void {
 		const { setting, drive, values, startHour } = this;
 		const hour = startHour + timeS / S_PER_H;
-		const wholeHour = Math.floor(hour + SAME_INSTANT_S / S_PER_H) + 1;
-		const endHour = this.findKink(hour, wholeHour);
+		const endHour = this.findKink(hour, nextAirBendHour(setting.scenario, hour));
 		this.segmentStartS = timeS;
 		this.segmentEndS = (endHour - startHour) * S_PER_H;
 		const length = this.segmentEndS - timeS;

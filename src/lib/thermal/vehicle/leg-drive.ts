@@ -1,7 +1,8 @@
 import { KELVIN_AT_ZERO_C } from '../correlations/radiation';
 import { fifthRootOf } from '../solve/elementary';
 import type { Leg, Scenario, Surface } from '../types';
-import { ambientTempC, sunWPerM2 } from './climate';
+import { sunWPerM2 } from './climate';
+import { outsideTempC } from './measured-course';
 
 const GRAVITY_M_PER_S2 = 9.80665;
 const AIR_HEAT_J_PER_KG_K = 1006;
@@ -110,12 +111,13 @@ function findAirDensity({ pressurePa }: Scenario['climate'], ambientC: number): 
 
 /** Which of the limits of the fuel power holds: where it changes, the heats have a kink. */
 export function findFuelRegime(
-	{ vehicle, climate }: Scenario,
+	scenario: Scenario,
 	leg: Leg,
 	{ speedMPerS }: LegConstants,
 	hour: number
 ): 'pulled' | 'between' | 'rated' {
-	const density = findAirDensity(climate, ambientTempC(hour, climate));
+	const { vehicle, climate } = scenario;
+	const density = findAirDensity(climate, outsideTempC(scenario, hour));
 	if (findForceN(vehicle, leg, speedMPerS, density) <= 0) return 'pulled';
 	const powerW = findFuelPowerW(vehicle, leg, speedMPerS, density);
 	return powerW < vehicle.ratedFuelPowerW ? 'between' : 'rated';
@@ -142,7 +144,7 @@ export function findUnlitDrive(
 	drive: Drive
 ): Drive {
 	const { vehicle, exhaust, climate } = scenario;
-	const ambientC = ambientTempC(hour, climate);
+	const ambientC = outsideTempC(scenario, hour);
 	const density = findAirDensity(climate, ambientC);
 	drive.ambientC = ambientC;
 	drive.skyC = ambientC - climate.skyDropK;

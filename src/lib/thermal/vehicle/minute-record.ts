@@ -10,6 +10,7 @@ import {
 } from '../types';
 import { fillCharge } from './charge';
 import { fillAmbient } from './climate';
+import { outsideTempC } from './measured-course';
 import { fillMinutes } from './fill-minutes';
 import type { Standing, StepSink } from './step-sink';
 
@@ -56,7 +57,9 @@ export class MinuteRecord implements StepSink {
 		this.columns = storedNames.map((name) => nodes[name as NodeName]);
 		this.highestC = new Float64Array(storedNames.length).fill(-Infinity);
 		const ambient = column();
-		fillAmbient(ambient, startHour, scenario.climate);
+		if (scenario.measured?.air) {
+			for (let at = 0; at < count; at++) ambient[at] = outsideTempC(scenario, startHour + at / MINUTES_PER_H);
+		} else fillAmbient(ambient, startHour, scenario.climate);
 		if (!scenario.shield) nodes.shield.fill(ambient[0]!);
 		this.minutes = {
 			startHour,

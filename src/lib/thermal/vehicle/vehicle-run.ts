@@ -3,9 +3,9 @@ import type { Step } from '../solve/stepper';
 import type { Leg, Scenario } from '../types';
 import { Bms, type PlannedChange } from './bms';
 import { fillUp, planChargeSpan, readSoc } from './charge';
-import { ambientTempC } from './climate';
 import { findLegConstants } from './leg-drive';
 import { Kinks } from './kinks';
+import { measureSpan, outsideTempC } from './measured-course';
 import { countMinutes } from './minute-record';
 import type { Standing, StepSink } from './step-sink';
 import { VehicleStepper } from './vehicle-stepper';
@@ -109,7 +109,7 @@ export class VehicleRun {
 	}
 
 	private begin(scenario: Scenario, sink: StepSink): void {
-		const { start, climate, legs, bms } = scenario;
+		const { start, legs, bms, measured } = scenario;
 		this.scenario = scenario;
 		this.sink = sink;
 		this.soc = start.soc;
@@ -121,8 +121,11 @@ export class VehicleRun {
 		this.minuteCount = countMinutes(scenario);
 		this.stepper.reset();
 		this.integrator.reset();
-		this.temps.fill(ambientTempC(start.hour, climate));
+		this.temps.fill(outsideTempC(scenario, start.hour));
 		const { names } = this.stepper;
+		for (const [name, startC] of Object.entries(measured?.startC ?? {})) {
+			if (names.includes(name)) this.temps[names.indexOf(name)] = startC;
+		}
 		this.bms = new Bms(
 			bms,
 			SENSOR_NODES[bms.sensor].map((name) => names.indexOf(name))
@@ -146,9 +149,11 @@ export class VehicleRun {
 	}
 
 	private beginSpan(leg: Leg): void {
-		const { standing } = this;
+		const { standing, scenario } = this;
 		this.noteLatches();
-		const span = planChargeSpan(this.scenario, leg, this.soc, standing);
+		const planned = planChargeSpan(scenario, leg, this.soc, standing);
+		const current = scenario.measured?.current;
+		const span = current ? measureSpan(current, planned, this.timeS) : planned;
 		standing.span = span;
 		standing.spanStartS = this.timeS;
 		this.spanMinute = this.nextMinute;
