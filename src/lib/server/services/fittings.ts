@@ -63,9 +63,9 @@ async function setFollowUps(
 			transaction
 		});
 		if (isNew || followUp.dueOn === dueOn) continue;
-		// Another day is another reminder; of a look that is done only its date is put right.
-		const again = followUp.doneOn === null ? { remindedAt: null } : {};
-		await followUp.update({ dueOn, ...again }, { transaction });
+		// Another day is another reminder. What was looked at stays where it was, unless that is now before the fitting.
+		if (followUp.doneOn === null) await followUp.update({ dueOn, remindedAt: null }, { transaction });
+		else if (followUp.dueOn < fittedOn) await followUp.update({ dueOn }, { transaction });
 	}
 }
 
