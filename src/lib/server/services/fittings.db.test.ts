@@ -44,9 +44,9 @@ describe('what was fitted', () => {
 		const moved = await saveFitting(installer, mountId, { ...FITTED, fittedOn: '2026-02-10', version });
 		expect(moved.followUps.map(({ dueOn }) => dueOn)).toEqual(['2026-02-28', '2026-08-10', '2027-02-10']);
 		const later = { ...FITTED, fittedOn: '2026-03-05', version: moved.installation!.version };
-		const [first] = (await saveFitting(installer, mountId, later)).followUps;
-		expect(first).toMatchObject({ dueOn: '2026-04-05' });
-		expect(first!.doneOn).not.toBeNull();
+		const [looked] = (await saveFitting(installer, mountId, later)).followUps;
+		expect(looked).toMatchObject({ dueOn: '2026-04-05' });
+		expect(looked!.doneOn).not.toBeNull();
 	});
 
 	it.each([
