@@ -5,7 +5,6 @@ import { PROJECT } from '../../../../tests/support/source-files';
 import { pastGuard } from '../../../../tests/support/audit-guard';
 import { makeCrew, useTestDatabase, type Crew } from '../../../../tests/support/services';
 import { auditQuerySchema, type AuditQuery } from '$lib/schemas/audit';
-import { connection } from '../db/connection';
 import { AuditEntry } from '../db/models';
 import { inTransaction } from '../db/transaction';
 import { chainHash, GENESIS } from './audit-chain';

@@ -1,7 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { pastGuard } from '../../../../tests/support/audit-guard';
 import { makeCrew, useTestDatabase, type Crew } from '../../../../tests/support/services';
-import { connection } from '../db/connection';
 import { AuditEntry } from '../db/models';
 import { inTransaction } from '../db/transaction';
 import { findBreak, recordBy } from './audit';
