@@ -57,10 +57,10 @@ describe('what a customer finds of their own vehicles', () => {
 		const { customer } = await makeCrew();
 		const stranger = { ...customer, workshopId: crew.workshopId };
 		for (const read of [
-			writeMyHandover(stranger, assessment.mountId),
-			writeMyRecommendation(stranger, sheet.recommendationId)
+			() => writeMyHandover(stranger, assessment.mountId),
+			() => writeMyRecommendation(stranger, sheet.recommendationId)
 		]) {
-			await expect(read).rejects.toMatchObject({ code: 'not_found' });
+			await expect(read()).rejects.toMatchObject({ code: 'not_found' });
 		}
 		const titles = vehicle!.history.map(({ title }) => title);
 		expect([...titles].sort()).toEqual([
