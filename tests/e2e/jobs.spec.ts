@@ -8,7 +8,9 @@ const ownName = (): string => `Ana ${randomUUID().slice(0, 8)}`;
 async function fillNewVehicle(page: Page, customer: string): Promise<void> {
 	const form = page.locator('form', { hasText: 'What the engine has to move' });
 	await form.getByLabel('Customer name').fill(customer);
-	await form.getByLabel('Customer e-mail').fill('ana@travellers.example');
+	await form
+		.getByLabel('Customer e-mail')
+		.fill(`${customer.replace(' ', '.').toLowerCase()}@travellers.example`);
 	await form.getByLabel('Make', { exact: true }).fill('Farrow');
 	await form.getByLabel('Model', { exact: true }).fill('Drover');
 	await form.getByLabel('Year').fill('2019');

@@ -69,10 +69,7 @@ function answer({ report, recommendation, customer }: RecommendationPaper, size:
 					...(preDrill
 						? [
 								{
-									text: [
-										bold('Before drilling, as it stood when this was recommended: '),
-										{ text: sayCheck(preDrill, ' (page 2)') }
-									]
+									text: [bold('Before drilling: '), { text: sayCheck(preDrill, ' (page 2)') }]
 								}
 							]
 						: [])

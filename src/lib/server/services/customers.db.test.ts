@@ -7,7 +7,7 @@ import { createJob } from './jobs';
 useTestDatabase();
 
 describe('a customer', () => {
-	it('is known by their e-mail, however their name was written', async () => {
+	it('is known by their e-mail, and another name with it is asked about', async () => {
 		const { installer, workshopId } = await makeCrew();
 		const email = `ilse.${workshopId}@travellers.example`;
 		const first = await createJob(installer, {
@@ -15,8 +15,10 @@ describe('a customer', () => {
 			customerName: 'Ilse Tarn',
 			customerEmail: email
 		});
-		const second = await createJob(installer, { ...newJob(), customerName: 'I. Tarn', customerEmail: email });
-		expect(second.customer.id).toBe(first.customer.id);
+		const again = { ...newJob(), customerName: 'Ilse Tarn', customerEmail: email };
+		expect((await createJob(installer, again)).customer.id).toBe(first.customer.id);
+		const other = createJob(installer, { ...again, customerName: 'I. Tarn' });
+		await expect(other).rejects.toMatchObject({ code: 'conflict', problems: [{ path: 'customerEmail' }] });
 		const nameless = await createJob(installer, { ...newJob(), customerName: 'Ilse Tarn' });
 		expect(nameless.customer.id).not.toBe(first.customer.id);
 	});

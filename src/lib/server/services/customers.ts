@@ -10,8 +10,8 @@ import { recordBy } from './audit';
 import { saveVersioned } from './records';
 
 /**
- * The customer of this e-mail if the shop knows one, else a new one. Whoever reads that mail is one person here, however
- * their name was written: they sign in by it, and see and have deleted all that is theirs. A name alone is not enough.
+ * The customer of this e-mail if the shop knows one, else a new one. Whoever reads that mail is one person here: they sign
+ * in by it, and see and have deleted all that is theirs. A name alone is not enough, and another name is asked about.
  */
 export async function customerFor(
 	person: SignedInPerson,
@@ -19,8 +19,12 @@ export async function customerFor(
 	transaction: Transaction
 ): Promise<number> {
 	const { workshopId } = person;
-	const { email } = input;
+	const { name, email } = input;
 	const known = email ? await Customer.findOne({ where: { workshopId, email }, transaction }) : null;
+	if (known && known.name !== name) {
+		const message = `${known.name} is the customer of this e-mail: write the name so, or leave the e-mail out.`;
+		throw new AppError('conflict', message, [{ path: 'customerEmail', message }]);
+	}
 	if (known) return known.id;
 	const customer = await Customer.create({ ...input, workshopId }, { transaction });
 	const subject = { type: 'customer', id: customer.id };
