@@ -3,6 +3,7 @@ import type { TraceMapping } from '../../src/lib/thermal/traces/mapping';
 import type { ReadOptions, TraceReading } from '../../src/lib/thermal/traces/reading-types';
 import type { BinnedTrace, ChannelBins } from '../../src/lib/thermal/traces/binned-trace';
 import type { TraceChannel } from '../../src/lib/thermal/traces/channels';
+import type { TraceReport } from '../../src/lib/thermal/traces/trace-report';
 import { TraceError } from '../../src/lib/thermal/traces/trace-error';
 
 export const toBytes = (text: string): Uint8Array => new TextEncoder().encode(text);
@@ -83,3 +84,12 @@ export function minutesTrace(
 
 /** Noise that is the same every time, about −1 to 1. */
 export const noiseAt = (at: number): number => ((Math.imul(at + 1, 0x9e3779b1) >>> 8) % 2001) / 1000 - 1;
+
+/** A time and a value as they are written. */
+export type Row = readonly [number | string, number | string];
+
+/** So many seconds of a reading that hardly moves. */
+export const steadyRows = (count: number, from = 0): Row[] =>
+	Array.from({ length: count }, (_, at) => [from + at, 20 + (at % 5) / 10]);
+
+export const reportOf = (rows: readonly Row[]): TraceReport => readText(secondsText(rows)).report;

@@ -28,6 +28,7 @@ export const bookRowSchema = z.object({
 	state: z.enum(BOOK_STATES),
 	note: z.string(),
 	madeBy: z.string().meta({ description: 'Empty for the first book, which nobody made' }),
+	madeById: z.number().int().nullable().meta({ description: 'Whoever made a book does not put it in force' }),
 	inForceBy: z.string(),
 	inForceAt: z.iso.datetime().nullable(),
 	createdAt: z.iso.datetime(),
@@ -39,6 +40,15 @@ export const bookSchema = bookRowSchema.extend({ coefficients: z.array(coefficie
 export type BookView = z.infer<typeof bookSchema>;
 
 const bookWords = { name: words('Name', 80), note: optionalWords('What it is for', 500) };
+
+/** A coefficient by its group and key, such as "bay.share"; null for what is none. */
+export function readCoefficientPath(path: string): { group: string; key: string } | null {
+	const [, group, key] = /^([a-zA-Z0-9]+)\.([a-zA-Z0-9]+)$/.exec(path) ?? [];
+	return group && key ? { group, key } : null;
+}
+
+export const writeCoefficientPath = ({ group, key }: { group: string; key: string }): string =>
+	`${group}.${key}`;
 
 /** A new draft, with the values of a book that is there. */
 export const bookDraftSchema = z.object({

@@ -38,6 +38,18 @@ export const filePlaceSchema = z.object({
 });
 export type FilePlace = z.infer<typeof filePlaceSchema>;
 
+/** Where files belong, as one word of a form or an address: "question:fuse", "note:7", or nothing for the mount. */
+export function readPlace(text: string): FilePlace {
+	const [kind, of] = text.split(':');
+	const named = kind === 'question' ? { questionKey: of } : kind === 'note' ? { fieldNoteId: of } : {};
+	return filePlaceSchema.safeParse(named).data ?? {};
+}
+
+export function writePlace({ questionKey, fieldNoteId }: FilePlace): string {
+	if (questionKey !== undefined) return `question:${questionKey}`;
+	return fieldNoteId === undefined ? '' : `note:${fieldNoteId}`;
+}
+
 export const fileSchema = z.object({
 	id: z.number().int(),
 	mountId: z.number().int(),

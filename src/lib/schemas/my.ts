@@ -7,7 +7,16 @@ export interface CustomerDocument {
 	about: string;
 	at: string;
 	href: string;
+	/** The paper that is written when it is opened; a page is none. */
+	paper?: CustomerPaper;
 }
+
+export interface CustomerPaper {
+	kind: 'handover' | 'recommendation';
+	id: number;
+}
+
+export const customerPaperPath = ({ kind, id }: CustomerPaper): string => `/my/${kind}/${id}.pdf`;
 
 /** One thing that happened to a customer's battery, in plain words. */
 export interface HistoryEntry {

@@ -22,6 +22,7 @@ export class QueuedFile {
 export const WAITS_MS: readonly number[] = [1_000, 4_000, 12_000];
 
 const UNDER_WAY: readonly FileState[] = ['waiting', 'sending', 'again'];
+export const isUnderWay = ({ state }: QueuedFile): boolean => UNDER_WAY.includes(state);
 
 interface Means {
 	send?: SendFile;
@@ -46,24 +47,27 @@ export class FileQueue {
 	}
 
 	get underWay(): number {
-		return this.files.filter(({ state }) => UNDER_WAY.includes(state)).length;
+		return this.files.filter(isUnderWay).length;
 	}
 
 	get kept(): number {
 		return this.files.filter(({ state }) => state === 'kept').length;
 	}
 
-	add(files: Iterable<File>, path: string): void {
+	/** Each goes to the path with its name, and with what all of them belong to. */
+	add(files: Iterable<File>, path: string, place: Readonly<Record<string, unknown>> = {}): void {
 		for (const file of files) {
-			const address = `${path}${path.includes('?') ? '&' : '?'}fileName=${encodeURIComponent(file.name)}`;
-			this.files.push(new QueuedFile(`${this.onceKey}-${(this.count += 1)}`, file, address));
+			const query = Object.entries({ ...place, fileName: file.name })
+				.map(([name, value]) => `${name}=${encodeURIComponent(String(value))}`)
+				.join('&');
+			this.files.push(new QueuedFile(`${this.onceKey}-${(this.count += 1)}`, file, `${path}?${query}`));
 		}
 		void this.run();
 	}
 
 	/** Calls off one that is not yet kept. */
 	cancel(queued: QueuedFile): void {
-		if (!UNDER_WAY.includes(queued.state)) return;
+		if (!isUnderWay(queued)) return;
 		queued.state = 'cancelled';
 		queued.stop.abort();
 	}

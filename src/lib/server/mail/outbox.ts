@@ -88,7 +88,7 @@ async function claim(mail: OutgoingMail): Promise<boolean> {
 	return changed === 1;
 }
 
-/** The server has it: that this cannot be noted at once must not send it again. */
+/** The server has it: a hiccup of the database must not send it again. */
 async function noteSent(mail: OutgoingMail): Promise<void> {
 	const sent = {
 		state: 'sent',
@@ -101,30 +101,29 @@ async function noteSent(mail: OutgoingMail): Promise<void> {
 	await note().catch(note).catch(note);
 }
 
+async function noteRefused(mail: OutgoingMail, attempts: number, error: unknown): Promise<void> {
+	const lastError = sayMailError(error);
+	const givenUp = attempts >= MOST_ATTEMPTS || isFinalRefusal(error);
+	const pauseMs = Math.min(FIRST_PAUSE_MS * 2 ** attempts, LONGEST_PAUSE_MS);
+	const nextAttemptAt = new Date(Date.now() + pauseMs);
+	await OutgoingMail.update(
+		{
+			...{ state: givenUp ? 'failed' : 'waiting', nextAttemptAt, lastError },
+			...(givenUp ? withoutReader(mail) : {})
+		},
+		// Whoever dropped it meanwhile meant it: it is not put back.
+		{ where: { id: mail.id, state: 'waiting' } }
+	);
+	logger.warn({ mailId: mail.id, attempts, givenUp, lastError }, 'mail not sent');
+}
+
 async function sendOne(mail: OutgoingMail): Promise<void> {
 	if (!(await claim(mail))) return;
 	const attempts = mail.attempts + 1;
-	const refusal = await deliver(mail).then(
-		() => null,
-		(error: unknown) => ({ error })
+	await deliver(mail).then(
+		() => noteSent(mail),
+		(error: unknown) => noteRefused(mail, attempts, error)
 	);
-	if (refusal === null) await noteSent(mail);
-	else {
-		const { error } = refusal;
-		const lastError = sayMailError(error);
-		const givenUp = attempts >= MOST_ATTEMPTS || isFinalRefusal(error);
-		const pauseMs = Math.min(FIRST_PAUSE_MS * 2 ** attempts, LONGEST_PAUSE_MS);
-		const nextAttemptAt = new Date(Date.now() + pauseMs);
-		await OutgoingMail.update(
-			{
-				...{ state: givenUp ? 'failed' : 'waiting', nextAttemptAt, lastError },
-				...(givenUp ? withoutReader(mail) : {})
-			},
-			// Whoever dropped it meanwhile meant it: it is not put back.
-			{ where: { id: mail.id, state: 'waiting' } }
-		);
-		logger.warn({ mailId: mail.id, attempts, givenUp, lastError }, 'mail not sent');
-	}
 }
 
 /**

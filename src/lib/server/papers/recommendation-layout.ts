@@ -67,11 +67,7 @@ function answer({ report, recommendation, customer }: RecommendationPaper, size:
 					{ text: `For ${who}: ${vehicle}, with ${battery}.` },
 					{ text: `Recommended by ${recommendation.recommendedBy}.` },
 					...(preDrill
-						? [
-								{
-									text: [bold('Before drilling: '), { text: sayCheck(preDrill, ' (page 2)') }]
-								}
-							]
+						? [{ text: [bold('Before drilling: '), { text: sayCheck(preDrill, ' (page 2)') }] }]
 						: [])
 				]
 			}

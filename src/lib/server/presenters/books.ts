@@ -1,4 +1,11 @@
-import type { BookComparison, BookRow, BookView, CoefficientPair, CoefficientView } from '$lib/schemas/books';
+import {
+	writeCoefficientPath,
+	type BookComparison,
+	type BookRow,
+	type BookView,
+	type CoefficientPair,
+	type CoefficientView
+} from '$lib/schemas/books';
 import type { Coefficient, CoefficientBook } from '../db/models';
 
 /** Names of people by their number. */
@@ -9,6 +16,7 @@ export function presentBookRow(book: CoefficientBook, nameOf: NameOf): BookRow {
 	return {
 		...{ id, number, name, state, note, version },
 		madeBy: nameOf(madeBy),
+		madeById: madeBy ?? null,
 		inForceBy: nameOf(inForceBy),
 		inForceAt: inForceAt?.toISOString() ?? null,
 		createdAt: createdAt.toISOString()
@@ -37,15 +45,13 @@ export function presentBook(
 	return { ...presentBookRow(book, nameOf), coefficients };
 }
 
-const pathOf = ({ group, key }: CoefficientView): string => `${group}.${key}`;
-
 const isSame = (left: CoefficientView | null, right: CoefficientView | null): boolean =>
 	left?.value === right?.value && left?.origin === right?.origin && left?.source === right?.source;
 
 /** Two books side by side: what differs, in the order of the left one. */
 export function presentComparison(left: BookView, right: BookView): BookComparison {
-	const inLeft = new Map(left.coefficients.map((each) => [pathOf(each), each]));
-	const inRight = new Map(right.coefficients.map((each) => [pathOf(each), each]));
+	const inLeft = new Map(left.coefficients.map((each) => [writeCoefficientPath(each), each]));
+	const inRight = new Map(right.coefficients.map((each) => [writeCoefficientPath(each), each]));
 	const pairs = [...new Set([...inLeft.keys(), ...inRight.keys()])].map((path): CoefficientPair => {
 		const pair = { left: inLeft.get(path) ?? null, right: inRight.get(path) ?? null };
 		const { group, key, meaning, unit } = (pair.left ?? pair.right)!;

@@ -3,7 +3,12 @@ import { formatAmpHours, formatTemperature } from '$lib/format/numbers';
 import { formatClockHour } from '$lib/format/time';
 import { sayVerdict } from '$lib/format/verdict';
 import type { FieldNoteData } from '$lib/schemas/field-notes';
-import type { CustomerDocument, HistoryEntry } from '$lib/schemas/my';
+import {
+	customerPaperPath,
+	type CustomerDocument,
+	type CustomerPaper,
+	type HistoryEntry
+} from '$lib/schemas/my';
 import type { Question } from '$lib/schemas/questions';
 import type { FieldNote, FollowUp, Installation, Sheet } from '../db/models';
 
@@ -17,6 +22,8 @@ export function presentSheetDocument({ id, jobId, content, createdAt }: Sheet): 
 	};
 }
 
+const presentPaper = (paper: CustomerPaper) => ({ paper, href: customerPaperPath(paper) });
+
 /** The whole recommendation behind such pages, once for each however many were sent. */
 export function presentRecommendationDocuments(sheets: readonly Sheet[]): CustomerDocument[] {
 	const newest = new Map(sheets.map((sheet) => [sheet.recommendationId, sheet]));
@@ -24,7 +31,7 @@ export function presentRecommendationDocuments(sheets: readonly Sheet[]): Custom
 		...{ jobId, title: `Recommendation: ${content.mountName} (PDF)` },
 		about: 'All that went into it, its figures and its cautions',
 		at: createdAt.toISOString(),
-		href: `/my/recommendation/${recommendationId}.pdf`
+		...presentPaper({ kind: 'recommendation', id: recommendationId })
 	}));
 }
 
@@ -35,7 +42,7 @@ export const presentHandoverDocument = ({ mountId, jobId, fittedOn }: Installati
 		about: 'What was fitted, what to expect, when to look at it'
 	},
 	at: `${fittedOn}T00:00:00.000Z`,
-	href: `/my/handover/${mountId}.pdf`
+	...presentPaper({ kind: 'handover', id: mountId })
 });
 
 type Told = Omit<HistoryEntry, 'jobId'>;

@@ -108,15 +108,16 @@ const WAYS: Readonly<Record<BookState, readonly BookMove['to'][]>> = {
 	withdrawn: []
 };
 
+const NO_WAY: Readonly<Record<BookState, string>> = {
+	draft: 'goes on trial first, where a second person sees it unchanging',
+	'on-trial': 'is on trial already',
+	'in-force': 'is in force, and is withdrawn when another one takes its place',
+	withdrawn: 'was withdrawn, and stays so: begin a new one from it'
+};
+
 function requireWay({ state, number }: CoefficientBook, to: BookMove['to']): void {
 	if (WAYS[state].includes(to)) return;
-	const ways: Record<BookState, string> = {
-		draft: 'goes on trial first, where a second person sees it unchanging',
-		'on-trial': 'is on trial already',
-		'in-force': 'is in force, and is withdrawn when another one takes its place',
-		withdrawn: 'was withdrawn, and stays so: begin a new one from it'
-	};
-	throw new AppError('conflict', `Book ${number} ${ways[state]}.`);
+	throw new AppError('conflict', `Book ${number} ${NO_WAY[state]}.`);
 }
 
 function requireSecondPerson({ madeBy }: CoefficientBook, person: SignedInPerson): void {

@@ -1,4 +1,5 @@
 import { strToU8, zipSync, type Zippable } from 'fflate';
+import type { CustomerPaper } from '$lib/schemas/my';
 import type { SignedInPerson } from '$lib/schemas/people';
 import {
 	Acknowledgement,
@@ -80,21 +81,19 @@ interface Content extends ParcelFile {
 
 const sheetPath = ({ id }: Sheet): string => `documents/page-${id}.txt`;
 
-/** What a customer can open as a document, by where it stands among their pages. */
-const WRITERS = {
+const WRITERS: Readonly<Record<CustomerPaper['kind'], typeof writeMyHandover>> = {
 	handover: writeMyHandover,
 	recommendation: writeMyRecommendation
-} as const;
+};
 
 /** The documents that are written when they are asked for. */
 async function writePapers(person: SignedInPerson, jobs: readonly Job[]): Promise<Content[]> {
 	const papers: Content[] = [];
-	for (const { title, href } of await listCustomerDocuments(jobs.map(({ id }) => id))) {
-		const [, kind, id] = /^\/my\/(handover|recommendation)\/(\d+)\.pdf$/.exec(href) ?? [];
-		if (!kind) continue;
-		const write = WRITERS[kind as keyof typeof WRITERS];
+	for (const { title, paper } of await listCustomerDocuments(jobs.map(({ id }) => id))) {
+		if (!paper) continue;
+		const { kind, id } = paper;
 		// One that cannot be written any more, because its mount was taken away, holds up nothing else.
-		const bytes = await write(person, Number(id)).catch((error: unknown) => {
+		const bytes = await WRITERS[kind](person, id).catch((error: unknown) => {
 			if (error instanceof AppError) return null;
 			throw error;
 		});

@@ -27,23 +27,26 @@ const NO_BATTERY = 'The questions depend on the battery: choose the battery of t
 
 interface Asked {
 	mount: Mount;
-	questions: PreDrillQuestion[];
+	/** None while the job has no battery. */
+	questions: PreDrillQuestion[] | null;
 }
 
-async function findBattery({ jobId }: Mount): Promise<BatteryRecord | null> {
-	const job = await Job.findByPk(jobId, { attributes: ['batteryRecordId'] });
-	return job?.batteryRecordId ? BatteryRecord.findByPk(job.batteryRecordId) : null;
-}
-
-async function findAsked(person: SignedInPerson, mountId: number): Promise<Asked> {
+async function findMount(person: SignedInPerson, mountId: number): Promise<Asked> {
 	const mount = await findStandingMount(person, mountId);
-	const battery = await findBattery(mount);
-	if (!battery) throw new AppError('conflict', NO_BATTERY);
+	const job = await Job.findByPk(mount.jobId, { attributes: ['batteryRecordId'] });
+	const battery = job?.batteryRecordId ? await BatteryRecord.findByPk(job.batteryRecordId) : null;
+	if (!battery) return { mount, questions: null };
 	const { chemistry, capacityAh } = battery;
 	return {
 		mount,
 		questions: preDrillQuestionsFor({ positionKind: mount.positionKind, chemistry, capacityAh })
 	};
+}
+
+async function findAsked(person: SignedInPerson, mountId: number) {
+	const { mount, questions } = await findMount(person, mountId);
+	if (!questions) throw new AppError('conflict', NO_BATTERY);
+	return { mount, questions };
 }
 
 /** The questions of a mount as its job stands; none yet without a battery. */
@@ -52,8 +55,7 @@ export async function listPreDrillQuestions(
 	mountId: number
 ): Promise<PreDrillQuestion[]> {
 	allow(person, 'jobs.read');
-	const mount = await findStandingMount(person, mountId);
-	return (await findBattery(mount)) ? (await findAsked(person, mountId)).questions : [];
+	return (await findMount(person, mountId)).questions ?? [];
 }
 
 /** The check of what was fitted, whatever battery the job has by now. */

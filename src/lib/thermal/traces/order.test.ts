@@ -4,17 +4,14 @@ import {
 	listRows,
 	readBytes,
 	readText,
+	reportOf,
+	type Row,
 	SECONDS,
 	secondsText,
+	steadyRows,
 	toBytes
 } from '../../../../tests/support/trace-files';
 import { CoveredSpans } from './covered-spans';
-import type { TraceReport } from './trace-report';
-
-type Row = readonly [number | string, number | string];
-const steady = (count: number, from = 0): Row[] =>
-	Array.from({ length: count }, (_, at) => [from + at, 20 + (at % 5) / 10]);
-const reportOf = (rows: readonly Row[]): TraceReport => readText(secondsText(rows)).report;
 
 describe('rows out of order', () => {
 	it('are put in order, and counted', () => {
@@ -31,11 +28,11 @@ describe('rows out of order', () => {
 
 	it('are put in order up to a thousand rows late, however the pieces are cut', () => {
 		const late: Row[] = [
-			...steady(500),
+			...steadyRows(500),
 			[100.5, 20.2],
-			...steady(2000, 500),
+			...steadyRows(2000, 500),
 			[1600.5, 20.2],
-			...steady(900, 2500)
+			...steadyRows(900, 2500)
 		];
 		const text = secondsText(late);
 		expect(listRows(text).map(([timeS]) => timeS)).toEqual(
@@ -45,7 +42,7 @@ describe('rows out of order', () => {
 	});
 
 	it('are kept where the days of a file stand the wrong way round', () => {
-		const [first, second] = [steady(3000), steady(3000, 86_400)];
+		const [first, second] = [steadyRows(3000), steadyRows(3000, 86_400)];
 		const { trace, report } = readText(secondsText([...second, ...first]));
 		expect(report.rows).toMatchObject({ kept: 6000, moved: 3000 });
 		expect(trace).toEqual(readText(secondsText([...first, ...second])).trace);
@@ -53,19 +50,19 @@ describe('rows out of order', () => {
 	});
 
 	it('are dropped far back in a time that is covered, and counted', () => {
-		const { rows } = reportOf([...steady(4000), ...steady(4000)]);
+		const { rows } = reportOf([...steadyRows(4000), ...steadyRows(4000)]);
 		expect(rows).toMatchObject({ read: 8000, kept: 4000, dropped: { alreadyCovered: 4000 } });
 	});
 
 	it('are kept where three parts stand in any order', () => {
-		const parts = [steady(2000), steady(2000, 2000), steady(2000, 4000)] as const;
+		const parts = [steadyRows(2000), steadyRows(2000, 2000), steadyRows(2000, 4000)] as const;
 		const { report } = readText(secondsText([...parts[2], ...parts[0], ...parts[1]]));
 		expect(report.rows).toMatchObject({ kept: 6000, moved: 4000 });
 		expect(report.gaps.count).toBe(0);
 	});
 
 	it('are dropped from where an earlier part runs into one that is there', () => {
-		const { rows } = reportOf([...steady(2000, 4000), ...steady(1500, 3000)]);
+		const { rows } = reportOf([...steadyRows(2000, 4000), ...steadyRows(1500, 3000)]);
 		expect(rows).toMatchObject({ kept: 3000, dropped: { alreadyCovered: 500 } });
 	});
 
@@ -78,7 +75,7 @@ describe('rows out of order', () => {
 	});
 
 	it('may have the newest first', () => {
-		const rows = steady(5000);
+		const rows = steadyRows(5000);
 		const { trace, report } = readText(secondsText([...rows].reverse()));
 		expect(report).toMatchObject({
 			rows: { kept: 5000, moved: 4999 },
@@ -99,7 +96,7 @@ describe('rows out of order', () => {
 			);
 		fc.assert(
 			fc.property(shuffled, ({ lengths, order }) => {
-				const parts = lengths.map((length, at) => steady(length, at * 1000));
+				const parts = lengths.map((length, at) => steadyRows(length, at * 1000));
 				const { trace, report } = readText(
 					secondsText([...order.flatMap((at) => parts[at]!), [9000, 20], [9001, 20]])
 				);
@@ -111,7 +108,7 @@ describe('rows out of order', () => {
 	});
 
 	it('are one where a single row has a clock gone wrong', () => {
-		const { rows, gaps } = reportOf([...steady(1500), [2_000_000, 20], ...steady(1500, 1500)]);
+		const { rows, gaps } = reportOf([...steadyRows(1500), [2_000_000, 20], ...steadyRows(1500, 1500)]);
 		expect(rows).toMatchObject({ kept: 3001 });
 		expect(gaps.told.map(({ fromS, toS }) => [fromS, toS])).toEqual([[2999, 2_000_000]]);
 	});
@@ -156,7 +153,7 @@ it.each([
 	['what only just has room', 99_990, 1],
 	['what has a bin too many', 100_020, 1]
 ])('bins do not depend on the order: %s', (_, count, stepS) => {
-	const rows = steady(count).map(([timeS, value]): Row => [Number(timeS) * stepS, value]);
+	const rows = steadyRows(count).map(([timeS, value]): Row => [Number(timeS) * stepS, value]);
 	const middle = Math.floor(count / 2);
 	const inOrder = readText(secondsText(rows)).trace;
 	expect(readText(secondsText([...rows].reverse())).trace).toEqual(inOrder);
@@ -193,7 +190,7 @@ describe('stretches of time', () => {
 
 describe('gaps', () => {
 	it('are longer than five median intervals, and told with their line', () => {
-		const rows = [...steady(100), ...steady(100, 105), ...steady(100, 300)].filter(
+		const rows = [...steadyRows(100), ...steadyRows(100, 105), ...steadyRows(100, 300)].filter(
 			([timeS]) => timeS !== 110
 		);
 		const { gaps, medianIntervalS } = reportOf(rows);
@@ -210,14 +207,14 @@ describe('gaps', () => {
 	});
 
 	it('are as long as one says', () => {
-		const text = secondsText([...steady(100), ...steady(100, 103)]);
+		const text = secondsText([...steadyRows(100), ...steadyRows(100, 103)]);
 		expect(readText(text, SECONDS, { gapIntervals: 3 }).report.gaps.count).toBe(1);
 		expect(readText(text, SECONDS, { gapIntervals: 4 }).report.gaps.count).toBe(0);
 	});
 
 	it('are all counted and the hundred longest told', () => {
 		const rows: Row[] = [];
-		for (let at = 0, timeS = 0; at < 150; at++, timeS += 40 + at) rows.push(...steady(30, timeS));
+		for (let at = 0, timeS = 0; at < 150; at++, timeS += 40 + at) rows.push(...steadyRows(30, timeS));
 		const { count, told } = reportOf(rows).gaps;
 		expect([count, told.length]).toEqual([149, 100]);
 		expect(told[0]!.toS - told[0]!.fromS).toBe(12 + 49);

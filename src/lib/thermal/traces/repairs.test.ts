@@ -5,8 +5,11 @@ import {
 	readBytes,
 	readText,
 	refusalOf,
+	reportOf,
+	type Row,
 	SECONDS,
 	secondsText,
+	steadyRows,
 	toBytes
 } from '../../../../tests/support/trace-files';
 import type { TraceMapping } from './mapping';
@@ -14,10 +17,6 @@ import { LONGEST_TRACE_S, MOST_TRACE_BYTES } from './reading-types';
 import { TraceReader } from './read-trace';
 import type { TraceReport } from './trace-report';
 
-type Row = readonly [number | string, number | string];
-const steady = (count: number, from = 0): Row[] =>
-	Array.from({ length: count }, (_, at) => [from + at, 20 + (at % 5) / 10]);
-const reportOf = (rows: readonly Row[]): TraceReport => readText(secondsText(rows)).report;
 const sum = (counts: Record<string, number>): number => Object.values(counts).reduce((a, b) => a + b, 0);
 
 /** Everything that went in is somewhere. */
@@ -47,7 +46,7 @@ describe('cells that are no measurements', () => {
 		['spike', '29'],
 		['spike', '11.5']
 	])('%s: %j', (reason, cell) => {
-		const rows: Row[] = [...steady(3), [3, `"${cell}"`], ...steady(3, 4)];
+		const rows: Row[] = [...steadyRows(3), [3, `"${cell}"`], ...steadyRows(3, 4)];
 		const report = reportOf(rows);
 		expect(report.cells.cellC).toMatchObject({ values: 6, [reason]: 1 });
 		const value = reason === 'spike' ? String(Number(cell)) : cell;
@@ -58,7 +57,7 @@ describe('cells that are no measurements', () => {
 	});
 
 	it('are told five times each and counted always', () => {
-		const { findings, cells } = reportOf([...steady(2), ...steady(9, 2).map(([s]): Row => [s, 'x'])]);
+		const { findings, cells } = reportOf([...steadyRows(2), ...steadyRows(9, 2).map(([s]): Row => [s, 'x'])]);
 		expect([findings.length, cells.cellC!.unreadable]).toEqual([5, 9]);
 	});
 
@@ -92,13 +91,13 @@ describe('cells that are no measurements', () => {
 
 	it('are found wherever they stand in a long file', () => {
 		const spikesAt = [1, 1022, 1023, 1024, 1025, 1027, 2047, 2048, 2050, 2998];
-		const rows = steady(3000).map(([timeS, value], at): Row => [
+		const rows = steadyRows(3000).map(([timeS, value], at): Row => [
 			timeS,
 			spikesAt.includes(at) && at % 2 === 0 ? 60 : value
 		]);
 		expect(reportOf(rows).cells.cellC!.spike).toBe(spikesAt.filter((at) => at % 2 === 0).length);
 		for (const at of spikesAt) {
-			const one = steady(3000).map(([timeS, value], row): Row => [timeS, row === at ? 60 : value]);
+			const one = steadyRows(3000).map(([timeS, value], row): Row => [timeS, row === at ? 60 : value]);
 			expect(reportOf(one).findings).toEqual([{ reason: 'spike', line: at + 2, column: 2, value: '60' }]);
 		}
 	});

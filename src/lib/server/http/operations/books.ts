@@ -5,19 +5,18 @@ import {
 	bookMoveSchema,
 	bookRowSchema,
 	bookSchema,
-	coefficientChangeSchema
+	coefficientChangeSchema,
+	readCoefficientPath
 } from '$lib/schemas/books';
 import { idSchema } from '$lib/schemas/fields';
 import { defineOperation } from '../operation';
 
-/** A coefficient by its group and key. */
-export const coefficientPathSchema = z
-	.string()
-	.regex(/^[a-zA-Z0-9]+\.[a-zA-Z0-9]+$/)
-	.transform((path) => {
-		const [group = '', key = ''] = path.split('.');
-		return { group, key };
-	});
+const coefficientPathSchema = z.string().transform((path, context) => {
+	const read = readCoefficientPath(path);
+	if (read) return read;
+	context.addIssue({ code: 'custom', message: 'There is no such coefficient.' });
+	return z.NEVER;
+});
 
 export const bookOperations = {
 	list: defineOperation({

@@ -19,7 +19,7 @@ export const load: PageServerLoad = async (event) => {
 		book,
 		others: books.filter(({ id }) => id !== book.id),
 		mayWrite: mayDo(person, 'books.write'),
-		isOwn: book.madeBy === person.name,
+		isOwn: book.madeById === person.id,
 		isSaved: event.url.searchParams.has('saved')
 	};
 };

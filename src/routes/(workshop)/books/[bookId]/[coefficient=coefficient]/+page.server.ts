@@ -1,5 +1,5 @@
 import { error } from '@sveltejs/kit';
-import { coefficientChangeSchema } from '$lib/schemas/books';
+import { coefficientChangeSchema, readCoefficientPath } from '$lib/schemas/books';
 import type { SignedInPerson } from '$lib/schemas/people';
 import { saveEdited } from '$lib/server/http/edit-form';
 import { loadForm } from '$lib/server/http/forms';
@@ -9,10 +9,8 @@ import { changeCoefficient } from '$lib/server/services/book-changes';
 import { getBook } from '$lib/server/services/books';
 import type { Actions, PageServerLoad } from './$types';
 
-function readPath(path: string) {
-	const [group = '', key = ''] = path.split('.');
-	return { group, key };
-}
+/** The address holds one: its matcher has looked. */
+const readPath = (path: string) => readCoefficientPath(path)!;
 
 async function find(person: SignedInPerson, params: { bookId: string; coefficient: string }) {
 	const book = await orPageError(getBook(person, pageId(params.bookId)));

@@ -1,7 +1,7 @@
 import { randomUUID } from 'node:crypto';
 import { fail, redirect, type RequestEvent } from '@sveltejs/kit';
 import { idSchema } from '$lib/schemas/fields';
-import { fileChangeSchema, type FileChange } from '$lib/schemas/files';
+import { fileChangeSchema, readPlace, writePlace, type FileChange } from '$lib/schemas/files';
 import { AppError } from '$lib/server/errors';
 import { readPageForm } from '$lib/server/http/forms';
 import { guard, orPageError } from '$lib/server/http/guard';
@@ -11,7 +11,7 @@ import { changeFile, listMountFiles, removeFile, restoreFile } from '$lib/server
 import { getJob } from '$lib/server/services/jobs';
 import { listPreDrillQuestions } from '$lib/server/services/pre-drill';
 import { openMount } from '../open-mount';
-import { readPlace, takeFiles, writePlace, type Taken } from './take-files';
+import { takeFiles, type Taken } from './take-files';
 import type { Actions, PageServerLoad } from './$types';
 
 /** The place that the address asks for. */

@@ -1,6 +1,12 @@
 import { randomUUID } from 'node:crypto';
 import type { SignedInPerson } from '$lib/schemas/people';
-import { MOST_FILE_BYTES, MOST_FILES_AT_ONCE, filePlaceSchema, type FilePlace } from '$lib/schemas/files';
+import {
+	MOST_FILE_BYTES,
+	MOST_FILES_AT_ONCE,
+	readPlace,
+	writePlace,
+	type FilePlace
+} from '$lib/schemas/files';
 import { AppError } from '$lib/server/errors';
 import { sha256 } from '$lib/server/hash';
 import { withSentFiles, type IncomingUpload, type SentForm } from '$lib/server/http/sent-files';
@@ -19,18 +25,6 @@ export interface Taken {
 	/** Why the others were not, a sentence for each. */
 	refused: string[];
 	place: string;
-}
-
-/** Where files belong, as one word of a form or an address: "question:fuse", "note:7", or nothing for the mount. */
-export function readPlace(text: string): FilePlace {
-	const [kind, of] = text.split(':');
-	const named = kind === 'question' ? { questionKey: of } : kind === 'note' ? { fieldNoteId: of } : {};
-	return filePlaceSchema.safeParse(named).data ?? {};
-}
-
-export function writePlace({ questionKey, fieldNoteId }: FilePlace): string {
-	if (questionKey !== undefined) return `question:${questionKey}`;
-	return fieldNoteId === undefined ? '' : `note:${fieldNoteId}`;
 }
 
 async function keepOne(
