@@ -7,7 +7,7 @@ import { allow } from '../policies';
 import { readBody } from './body';
 import { contentResponse, type GivenContent } from './content-response';
 import { readSentFile, type SentFile } from './file-upload';
-import { answerOnce, type StoredAnswer } from './idempotency';
+import { keepOnce, type StoredAnswer } from './idempotency';
 import type { ContentOperation, FileOperation, Operation } from './operation';
 import { problemResponse } from './problem';
 import { validate } from './validate';
@@ -43,16 +43,18 @@ export function jsonResponse({ status, body }: StoredAnswer): Response {
 }
 
 /** Answers what the work gives; a repeat with the same key and the same question gets the first answer again. */
-async function answer(
+async function answer<Prepared>(
 	{ request }: RequestEvent,
 	{ method, status }: Pick<Operation, 'method' | 'status'>,
 	{ personId, asked }: { personId: number; asked: unknown },
-	work: () => Promise<unknown>
+	{ prepare, work }: { prepare: () => Promise<Prepared>; work: (prepared: Prepared) => Promise<unknown> }
 ): Promise<Response> {
-	const respond = async (): Promise<StoredAnswer> => ({ status, body: JSON.stringify(await work()) });
-	const key = request.headers.get('idempotency-key');
-	if (method !== 'POST' || key === null) return jsonResponse(await respond());
-	return jsonResponse(await answerOnce({ personId, key, request: JSON.stringify(asked) }, respond));
+	const key = method === 'POST' ? request.headers.get('idempotency-key') : null;
+	const keep = async (prepared: Prepared): Promise<StoredAnswer> => ({
+		status,
+		body: JSON.stringify(await work(prepared))
+	});
+	return jsonResponse(await keepOnce({ personId, key, request: JSON.stringify(asked) }, prepare, keep));
 }
 
 export const orProblem =
@@ -60,15 +62,20 @@ export const orProblem =
 	(event: RequestEvent): Promise<Response> =>
 		handle(event).catch((error: unknown) => problemResponse(error, event.locals.requestId));
 
-/** Guard, authorise, validate, do, present: the same steps for every endpoint, from its operation. */
-export function endpoint<
+/**
+ * Guard, authorise, validate, prepare, do, present: the same steps for every endpoint, from its operation. What takes
+ * seconds and changes nothing is prepared, before and in no transaction.
+ */
+export function preparedEndpoint<
 	Params extends z.ZodObject,
 	Query extends z.ZodObject,
 	Body extends z.ZodType,
-	Answer extends z.ZodType
+	Answer extends z.ZodType,
+	Prepared
 >(
 	operation: Operation<Params, Query, Body, Answer>,
-	handle: (call: Call<Params, Query, Body>) => Promise<z.input<Answer>>
+	prepare: (call: Call<Params, Query, Body>) => Promise<Prepared>,
+	handle: (call: Call<Params, Query, Body>, prepared: Prepared) => Promise<z.input<Answer>>
 ): (event: RequestEvent) => Promise<Response> {
 	return orProblem(async (event) => {
 		const { locals, request, url } = event;
@@ -80,9 +87,27 @@ export function endpoint<
 		const rawBody = operation.body ? await readJson(request) : undefined;
 		const body = operation.body ? validate(operation.body, rawBody) : undefined;
 		const call = { person, params, query, body, event } as Call<Params, Query, Body>;
-		const asked = [url.pathname, rawBody ?? null];
-		return answer(event, operation, { personId: person.id, asked }, () => handle(call));
+		const asked = { personId: person.id, asked: [url.pathname, rawBody ?? null] };
+		return answer(event, operation, asked, {
+			prepare: () => prepare(call),
+			work: (made) => handle(call, made)
+		});
 	});
+}
+
+const NOTHING = (): Promise<void> => Promise.resolve();
+
+/** The same where nothing is to be prepared. */
+export function endpoint<
+	Params extends z.ZodObject,
+	Query extends z.ZodObject,
+	Body extends z.ZodType,
+	Answer extends z.ZodType
+>(
+	operation: Operation<Params, Query, Body, Answer>,
+	handle: (call: Call<Params, Query, Body>) => Promise<z.input<Answer>>
+): (event: RequestEvent) => Promise<Response> {
+	return preparedEndpoint(operation, NOTHING, handle);
 }
 
 /** The same steps for an operation that gives a file. */
@@ -130,8 +155,7 @@ export function fileEndpoint<Params extends z.ZodObject, Query extends z.ZodObje
 		const query = validate(operation.query, Object.fromEntries(url.searchParams));
 		const file = await readSentFile(request, steps.nameOf(query), operation.mostFileBytes);
 		const asked = [url.pathname, url.search, file.name, sha256(file.bytes)];
-		return answer(event, operation, { personId: person.id, asked }, () =>
-			steps.handle({ person, params, query, file })
-		);
+		const work = () => steps.handle({ person, params, query, file });
+		return answer(event, operation, { personId: person.id, asked }, { prepare: NOTHING, work });
 	});
 }
