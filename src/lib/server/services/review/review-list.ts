@@ -64,13 +64,27 @@ const beyond = ({ column, direction }: Order): string => {
 	return `AND ${column} ${inclusive} :day AND (${column} ${strict} :day OR installation_id ${strict} :id)`;
 };
 
+/**
+ * The indexes that a page can be entered through at its beginning. Left to itself, the server takes all rows of the
+ * workshop for the cheaper way and walks from the first page to the one that was asked for.
+ */
+const ENTRIES: Record<Order['column'], string> = {
+	fitted_on: [
+		...['review_rows_in_order', 'review_rows_by_zone', 'review_rows_by_own_zone', 'review_rows_by_place'],
+		...['review_rows_by_verdict', 'review_rows_overridden', 'review_rows_by_sheet', 'review_rows_gone_dark'],
+		'review_rows_overdue'
+	].join(', '),
+	next_due_on: 'review_rows_due, review_rows_overdue'
+};
+const enter = ({ column }: Order): string => `FORCE INDEX (${ENTRIES[column]})`;
+
 /** Of whom each row tells is looked up for the rows of the page alone. */
-const page = (where: string, { column, direction }: Order): string => `
+const page = (where: string, order: Order, isFirst: boolean): string => `
 	SELECT r.*, j.number AS jobNumber, m.letter, m.name AS mountName, c.name AS customer, v.make, v.model,
 		p.name AS place, a.chemistry, n.decided_by AS decidedBy, n.reason, CAST(DATE(s.created_at) AS CHAR) AS sheetSentOn
 	FROM (
-		SELECT * FROM review_rows WHERE ${where}
-		ORDER BY ${column} ${direction}, installation_id ${direction} LIMIT :limit
+		SELECT * FROM review_rows ${isFirst ? '' : enter(order)} WHERE ${where}
+		ORDER BY ${order.column} ${order.direction}, installation_id ${order.direction} LIMIT :limit
 	) r
 		JOIN installations i ON i.id = r.installation_id
 		JOIN assessments a ON a.id = i.assessment_id
@@ -81,7 +95,7 @@ const page = (where: string, { column, direction }: Order): string => `
 		LEFT JOIN places p ON p.id = r.place_id
 		LEFT JOIN recommendations n ON n.id = r.recommendation_id
 		LEFT JOIN sheets s ON s.id = r.sheet_id
-	ORDER BY r.${column} ${direction}, r.installation_id ${direction}
+	ORDER BY r.${order.column} ${order.direction}, r.installation_id ${order.direction}
 `;
 
 /** From the day of fitting to the end of today; null where the chance is not known. */
@@ -124,7 +138,7 @@ async function readPage(workshopId: number, query: ReviewListQuery, from: Positi
 	const { where, replacements } = conditionsOn(workshopId, query, query.list);
 	const dated = order.column === 'next_due_on' ? ' AND next_due_on IS NOT NULL' : '';
 	const stored = await connection().query<StoredRow>(
-		page(`${where}${dated} ${from ? beyond(order) : ''}`, order),
+		page(`${where}${dated} ${from ? beyond(order) : ''}`, order, from === null),
 		{ replacements: { ...replacements, ...(from ?? {}), limit }, type: QueryTypes.SELECT }
 	);
 	const positionOf = (row: StoredRow): Position => ({
