@@ -2,14 +2,12 @@ import { INSTANTS, planSlots, SLOPE } from '../network/step-generator/slots';
 import { expOf } from '../solve/elementary';
 import { readCurrentA, type ChargeSpan } from './charge';
 import { emptyDrive, findFuelRegime, findUnlitDrive, type Drive } from './leg-drive';
-import { nextAirBendHour } from './measured-course';
+import { nextAirBendHour, SAME_INSTANT_S } from './measured-course';
 import { DRIVEN, SUNLIT, type Setting } from './network-table';
 import { CELLS_PER_H, findSunPlace, readSunShape, readSunSlopePerH } from './sun-shape';
 import { shapeVehicle } from './vehicle-shape';
 
 const S_PER_H = 3600;
-/** Two instants nearer than this are one, s. */
-const SAME_INSTANT_S = 1e-3;
 const KINK_HALVINGS = 40;
 
 type Reader = (typeof DRIVEN)[string];

@@ -4,7 +4,7 @@ import { ambientTempC } from './climate';
 
 const S_PER_H = 3600;
 /** Two instants nearer than this are one, s. */
-const SAME_INSTANT_S = 1e-3;
+export const SAME_INSTANT_S = 1e-3;
 
 type Course<K extends keyof MeasuredCourse> = NonNullable<MeasuredCourse[K]>;
 
