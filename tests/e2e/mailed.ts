@@ -5,7 +5,9 @@ import { expect } from '@playwright/test';
 /** Letters to an address in the local mail server's folder, the oldest first, with their lines put together again. */
 export function readMail(email: string): string[] {
 	const folder = process.env.MAILBOX_DIR ?? '';
+	// A letter has its own name only once it is whole.
 	return readdirSync(folder)
+		.filter((name) => name.endsWith('.eml'))
 		.sort()
 		.map((name) => readFileSync(join(folder, name), 'utf8').replace(/=\r?\n/g, ''))
 		.filter((letter) => letter.includes(`To: ${email}`));
