@@ -55,9 +55,10 @@ test('photos of a mount come in together, one that is refused takes none along',
 	await openForm(page, `/mounts/${mountId}/photos`);
 	await goThrough(page, { jobId, mountId }, expectNoViolations);
 
-	await page.goto(`/mounts/${mountId}/pre-drill`);
+	await openForm(page, `/mounts/${mountId}/pre-drill`);
+	await page.getByRole('radio', { name: 'Yes', exact: true }).first().check();
 	await page
-		.getByRole('link', { name: /^Add a photo/ })
+		.getByRole('button', { name: /^Add a photo/ })
 		.first()
 		.click();
 	await page.waitForURL(/photos\?question=/);
@@ -66,7 +67,8 @@ test('photos of a mount come in together, one that is refused takes none along',
 	await page.getByRole('button', { name: 'Add them' }).click();
 	await expect(page.getByText('One file was kept.')).toBeVisible();
 	await page.goto(`/mounts/${mountId}/pre-drill`);
-	await expect(page.getByRole('link', { name: /^One photo, add another/ })).toHaveCount(1);
+	await expect(page.getByRole('button', { name: /^One photo, add another/ })).toHaveCount(1);
+	await expect(page.getByRole('radio', { name: 'Yes', exact: true }).first()).toBeChecked();
 	await expectNoViolations(page);
 });
 

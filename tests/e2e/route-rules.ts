@@ -1,5 +1,12 @@
-/** Who stands before a page or an endpoint. The neighbour is the manager of another workshop. */
-export const VISITORS = ['nobody', 'installer', 'engineer', 'manager', 'customer', 'neighbour'] as const;
+/**
+ * Who stands before a page or an endpoint. The neighbour is the manager of another workshop, the other customer is of
+ * the same workshop as the customer whose page, papers and vehicle are asked for.
+ */
+export const VISITORS = [
+	...(['nobody', 'installer', 'engineer', 'manager', 'customer', 'other customer', 'neighbour'] as const)
+] as const;
+/** For them the records of the test are somebody else’s. */
+const STRANGERS: readonly Visitor[] = ['neighbour', 'other customer'];
 export type Visitor = (typeof VISITORS)[number];
 
 /** Whose a route is. `anyone` needs no sign-in; what a link opens is held by its token. */
@@ -259,7 +266,7 @@ const AUDIENCES: Record<Exclude<Audience, 'anyone'>, readonly Visitor[]> = {
 	workshop: ['installer', 'engineer', 'manager', 'neighbour'],
 	bench: ['engineer', 'manager', 'neighbour'],
 	manager: ['manager', 'neighbour'],
-	customer: ['customer']
+	customer: ['customer', 'other customer']
 };
 
 export type Standing = 'let in' | 'asked to sign in' | 'refused' | 'told there is no such thing';
@@ -270,5 +277,5 @@ export function standingOf(visitor: Visitor, rule: RouteRule, method: string): S
 	if (audience === 'anyone') return 'let in';
 	if (visitor === 'nobody') return 'asked to sign in';
 	if (!AUDIENCES[audience].includes(visitor)) return 'refused';
-	return rule.owned && visitor === 'neighbour' ? 'told there is no such thing' : 'let in';
+	return rule.owned && STRANGERS.includes(visitor) ? 'told there is no such thing' : 'let in';
 }

@@ -134,9 +134,12 @@ async function findIds(
 async function signIn(context: APIRequestContext, visitor: Visitor): Promise<void> {
 	if (visitor === 'nobody') return;
 	const home = people[0]?.workshop;
-	const person = people.find(({ role, workshop }) =>
-		visitor === 'neighbour' ? workshop !== home : role === visitor && workshop === home
-	);
+	const ofHome = (role: string) => people.filter((each) => each.workshop === home && each.role === role);
+	const strangers: Partial<Record<Visitor, (typeof people)[number] | undefined>> = {
+		neighbour: people.find(({ workshop }) => workshop !== home),
+		'other customer': ofHome('customer')[1]
+	};
+	const person = visitor in strangers ? strangers[visitor] : ofHome(visitor)[0];
 	const form = { email: person?.email ?? '', password: person?.password ?? '' };
 	const response = await context.post('/sign-in?/password', {
 		form,

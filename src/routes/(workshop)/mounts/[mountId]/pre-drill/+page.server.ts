@@ -56,7 +56,10 @@ export const actions: Actions = {
 					answers: fromPreDrillForm(form),
 					version: form.version as number
 				});
-				return `/mounts/${mountId}/pre-drill?saved`;
+				const questionKey = event.url.searchParams.get('photo');
+				return questionKey === null
+					? `/mounts/${mountId}/pre-drill?saved`
+					: `/mounts/${mountId}/photos?question=${encodeURIComponent(questionKey)}`;
 			},
 			newest: async (person) => {
 				const check = await getPreDrill(person, mountId);
