@@ -1,7 +1,7 @@
 import type { z } from 'zod';
 import type { AssessmentInputs } from '$lib/schemas/assessments';
 import { batteryInputSchema } from '$lib/schemas/batteries';
-import type { BookView } from '$lib/schemas/books';
+import type { BookView, MountCase } from '$lib/schemas/books';
 import { dayPlanInputSchema } from '$lib/schemas/day-plans';
 import { placeSiteSchema } from '$lib/schemas/places';
 import { vehicleInputSchema } from '$lib/schemas/vehicles';
@@ -42,6 +42,12 @@ export async function findJobParts(job: Job): Promise<JobParts> {
 	const dayPlan = await DayPlan.findOne({ where: { jobId: job.id, workshopId } });
 	return { job, customer, vehicle, battery, place, dayPlan };
 }
+
+/** What the book for a mount is chosen by. */
+export const caseOf = ({ vehicle }: Pick<JobParts, 'vehicle'>, { positionKind }: Mount): MountCase => ({
+	engineLayout: vehicle.engineLayout,
+	positionKind
+});
 
 function listMissing({ battery, place, dayPlan }: JobParts, mount: Mount): Part[] {
 	const present: Record<Part, unknown> = { battery, place, dayPlan, survey: mount.surveyComplete || null };

@@ -7,7 +7,7 @@ import { heatLimitsOf } from '$lib/thermal/chemistries';
 import { Assessment, type Job, type Mount } from '../db/models';
 import { AppError } from '../errors';
 import { canonicalJson, sha256 } from '../hash';
-import { findJobParts, gatherInputs, type JobParts } from './assessment-inputs';
+import { caseOf, findJobParts, gatherInputs, type JobParts } from './assessment-inputs';
 import { recordBy } from './audit';
 import { bookInForce } from './books';
 import { updateJobOutcome } from './job-outcome';
@@ -55,7 +55,7 @@ async function assessOne(
 	mount: Mount,
 	transaction: Transaction
 ): Promise<Assessment> {
-	const book = await bookInForce(person);
+	const book = await bookInForce(person, caseOf(parts, mount));
 	const inputs = gatherInputs(parts, mount, book);
 	const inputsSha256 = hashInputs(inputs);
 	const same = await findSame(mount.id, inputsSha256);
