@@ -89,15 +89,19 @@ export const rerunMoveSchema = z.object({
 });
 export type RerunMove = z.infer<typeof rerunMoveSchema>;
 
+/** The letter as it is written on the page. */
+export const verdictLetterSchema = z.object({ subject: words('Subject', 150), body: words('Letter', 4000) });
+
 /** How somebody was told of a changed verdict: by this letter, or otherwise, which is noted alone. */
 export const tellSchema = z.discriminatedUnion('how', [
-	z.object({
-		how: z.literal('letter'),
-		subject: words('Subject', 150),
-		body: words('Letter', 4000)
-	}),
+	verdictLetterSchema.extend({ how: z.literal('letter') }),
 	z.object({ how: z.literal('otherwise') })
 ]);
 export type Tell = z.infer<typeof tellSchema>;
+
+/** Which page of the changed verdicts. */
+export const changesQuerySchema = z.object({
+	page: z.coerce.number({ error: 'There is no such page.' }).int().min(1).max(10_000).default(1)
+});
 
 export const rerunItemParams = z.object({ rerunId: idSchema, itemId: idSchema });

@@ -79,7 +79,7 @@ function presentChange(item: RerunItem, around: Around, person: SignedInPerson):
 	};
 }
 
-/** Verdicts that changed, those first that nobody was told of, a page at a time. */
+/** Verdicts that changed, a page at a time. */
 export async function listChanges(
 	person: SignedInPerson,
 	rerunId: number,
@@ -100,6 +100,18 @@ export async function listChanges(
 		rows: shown.map((item) => presentChange(item, around, person)),
 		hasMore: items.length > PAGE_ROWS
 	};
+}
+
+/** One verdict that changed. */
+export async function getChange(
+	person: SignedInPerson,
+	{ rerunId, itemId }: { rerunId: number; itemId: number }
+): Promise<RerunChange> {
+	allow(person, 'reruns.read');
+	await findRerun(person, rerunId);
+	const item = await RerunItem.findOne({ where: { id: itemId, rerunId, verdictChanged: true } });
+	if (!item) throw notFound('changed verdict');
+	return presentChange(item, await readAround([item], person), person);
 }
 
 /** What was not assessed again, with the reason. */

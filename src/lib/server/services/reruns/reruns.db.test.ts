@@ -15,7 +15,7 @@ import { bookInForce } from '../books';
 import { removeMount } from '../mounts';
 import { listChanges, listLeft, tellOfChange } from './changes';
 import { getRerun, listReruns, moveRerun } from './reruns';
-import { continueReruns, finishReruns, startReruns, stopReruns } from './run-reruns';
+import { finishReruns, stopReruns } from './run-reruns';
 
 useTestDatabase();
 
@@ -128,7 +128,6 @@ describe('a re-run', () => {
 		expect(rerun).toMatchObject({ state: 'running', total: 3, waiting: 3 });
 		await assessJob(crew.installer, jobId);
 		await removeMount(crew.installer, cool.id);
-		startReruns();
 		await finishReruns();
 		expect(await getRerun(crew.engineer, rerun!.id)).toMatchObject({ state: 'done', done: 0, passedOver: 3 });
 		expect((await listLeft(crew.engineer, rerun!.id)).map(({ reason }) => reason)).toEqual([
@@ -163,7 +162,6 @@ describe('a re-run', () => {
 		await putInForce(crew, 0.4);
 		const { id } = (await listReruns(crew.engineer))[0]!;
 		await moveRerun(crew.engineer, id, { to: 'cancelled' });
-		startReruns();
 		await finishReruns();
 		expect(await getRerun(crew.engineer, id)).toMatchObject({ state: 'cancelled', done: 0, waiting: 20 });
 		await moveRerun(crew.engineer, id, { to: 'running' });
@@ -193,8 +191,6 @@ describe('a re-run', () => {
 		expect(await ended).toBe('SIGKILL');
 		const { done, waiting } = await getRerun(crew.engineer, id);
 		expect([done > 0, waiting > 0, done + waiting]).toEqual([true, true, 90]);
-		startReruns();
-		continueReruns();
 		await finishReruns();
 		expect(await getRerun(crew.engineer, id)).toMatchObject({ state: 'done', done: 90, waiting: 0 });
 		expect(await countMade(crew)).toEqual({ items: 90, perMount: [1], told: 90 });

@@ -72,10 +72,11 @@ async function present(reruns: Rerun[]): Promise<RerunView[]> {
 
 const MOST_LISTED = 50;
 
-/** The workshop's re-runs, the newest first. */
-export async function listReruns(person: SignedInPerson): Promise<RerunView[]> {
+/** The workshop's re-runs, or those of one book, the newest first. */
+export async function listReruns(person: SignedInPerson, bookId?: number): Promise<RerunView[]> {
 	const { workshopId } = allow(person, 'reruns.read');
-	return present(await Rerun.findAll({ where: { workshopId }, order: [['id', 'DESC']], limit: MOST_LISTED }));
+	const where = { workshopId, ...(bookId === undefined ? {} : { bookId }) };
+	return present(await Rerun.findAll({ where, order: [['id', 'DESC']], limit: MOST_LISTED }));
 }
 
 export async function getRerun(person: SignedInPerson, rerunId: number): Promise<RerunView> {
@@ -88,6 +89,23 @@ export async function getRerunProgress(person: SignedInPerson, rerunId: number):
 	allow(person, 'reruns.read');
 	const rerun = await findRerun(person, rerunId);
 	return presentProgress(rerun, (await countItems([rerunId])).get(rerunId)!);
+}
+
+const LOOK_EVERY_MS = 700;
+
+/** Tells how far a re-run is until it is at its end, or nobody listens any more. */
+export async function followRerun(
+	person: SignedInPerson,
+	rerunId: number,
+	tell: (progress: RerunProgress) => void,
+	isOver: () => boolean
+): Promise<void> {
+	for (;;) {
+		const progress = await getRerunProgress(person, rerunId);
+		tell(progress);
+		if (progress.state !== 'running' || isOver()) return;
+		await new Promise((resolve) => setTimeout(resolve, LOOK_EVERY_MS));
+	}
 }
 
 /** Stops a re-run, whose rest then stays as it was assessed before, or lets it go on. */

@@ -151,6 +151,6 @@ export async function stopReruns(): Promise<void> {
 
 /** Until nothing is left to do: for tests and programs. */
 export async function finishReruns(): Promise<void> {
-	continueReruns();
+	startReruns();
 	await current;
 }
