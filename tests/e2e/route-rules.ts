@@ -143,6 +143,8 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 	owned('/books/[bookId]', 'bench', 'move'),
 	owned('/books/[bookId]/[coefficient=coefficient]', 'bench', 'default'),
 	owned('/books/[bookId]/against/[otherId]', 'bench'),
+	page('/accuracy', 'bench'),
+	page('/accuracy/readings.csv', 'bench'),
 	page('/people', 'manager', 'invite', 'again', 'withdraw'),
 	owned('/people/[personId]', 'manager', 'role', 'resetFactor', 'leave', 'comeBack'),
 	{ ...page('/second-factor', 'workshop', 'begin', 'confirm', 'renew', 'off'), leadsOn: true },
@@ -238,6 +240,8 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 		PUT: { value: 0.6, origin: 'judgement', source: 'None.', version: 0 }
 	}),
 	ownedApi('/books/[bookId]/against/[otherId]', 'bench', { GET: null }),
+	api('/accuracy', 'bench', 'GET'),
+	api('/accuracy/readings', 'bench', 'GET'),
 	api('/simulations', 'workshop', 'POST'),
 	api('/people', 'manager', 'GET'),
 	ownedApi('/people/[personId]/role', 'manager', { PUT: { role: 'engineer', version: 0 } }),

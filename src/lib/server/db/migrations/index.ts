@@ -83,6 +83,7 @@ import { migration as m116 } from './116-coefficients-stay';
 import { migration as m117 } from './117-coefficient-books-ways';
 import { migration as m118 } from './118-coefficient-books-scope';
 import { migration as m119 } from './119-coefficient-books-scope-stays';
+import { migration as m160 } from './160-prediction-checks';
 import type { Migration } from '../migrate';
 
 /** Every migration, in the order in which they run; each is one DDL step that may run again. */
@@ -171,5 +172,6 @@ export const migrations: Migration[] = [
 	m116,
 	m117,
 	m118,
-	m119
+	m119,
+	m160
 ];

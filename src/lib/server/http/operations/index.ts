@@ -2,6 +2,7 @@ import type { Operation } from '../operation';
 import { auditOperations } from './audit';
 import { batteryOperations } from './batteries';
 import { customerOperations } from './customers';
+import { accuracyOperations } from './accuracy';
 import { assessmentOperations } from './assessments';
 import { bookOperations } from './books';
 import { dayPlanOperations } from './day-plans';
@@ -41,6 +42,7 @@ export const OPERATIONS: readonly Operation[] = [
 	letterOperations,
 	erasureOperations,
 	bookOperations,
+	accuracyOperations,
 	assessmentOperations,
 	recommendationOperations,
 	remedyOperations,
