@@ -3,7 +3,7 @@ import { EngineInputError } from '../correlations/require';
 import { finishWork } from '../uncertainty/finish-work';
 import { parseScenario } from '../vehicle/parse-scenario';
 import { holdCapacity, holdLabel } from './held-against';
-import { holdDays } from './held-days';
+import { holdDays, tenVehicles } from './held-days';
 import { spreadPeak } from './peak-spread';
 
 const SPREAD = { samples: 64, seed: 1, lowC: 55, middleC: 60, highC: 66, sdK: 3.5 };
@@ -93,40 +93,51 @@ describe('a capacity test held against the ageing band', () => {
 });
 
 describe('reported days held against stated ones', () => {
-	const steady = (days: number) => ({ low: days, middle: days, high: days });
-
 	it('state the chance of one day at least by Poisson’s law where all vehicles are alike', () => {
-		expect(holdDays(0, steady(0.5)).chance).toBeCloseTo(1 - Math.exp(-0.5), 9);
+		expect(holdDays(0, [0.5, 0.5]).chance).toBeCloseTo(1 - Math.exp(-0.5), 9);
 	});
 
 	it('state a lower chance for the same mean where vehicles differ: the few bad ones take most days', () => {
-		const held = holdDays(0, { low: 0, middle: 1, high: 3 });
+		const held = holdDays(0, [0, 0, 0, 4]);
 		expect(held.predicted).toBe(1);
-		expect(held.chance).toBeLessThan(1 - Math.exp(-1));
-		expect(held.chance).toBeGreaterThan(0.2);
+		expect(held.chance).toBeCloseTo((1 - Math.exp(-4)) / 4, 9);
 	});
 
 	it('are no surprise where nothing was stated and nothing happened, and one where it did', () => {
-		expect(Math.abs(holdDays(0, steady(0)).deviations)).toBeLessThan(0.01);
-		expect(holdDays(0, steady(0))).toMatchObject({ stand: 'inside', low: 0, high: 0, chance: 0 });
-		expect(holdDays(2, steady(0)).deviations).toBeGreaterThan(4);
-		expect(holdDays(2, steady(0)).stand).toBe('above');
+		expect(Math.abs(holdDays(0, [0]).deviations)).toBeLessThan(0.01);
+		expect(holdDays(0, [0])).toMatchObject({ stand: 'inside', low: 0, high: 0, chance: 0 });
+		expect(holdDays(2, [0]).deviations).toBeGreaterThan(4);
+		expect(holdDays(2, [0]).stand).toBe('above');
 	});
 
 	it('are few or many by the counts that hold nine of ten', () => {
-		const held = holdDays(4, steady(4));
+		const held = holdDays(4, [4]);
 		expect(held).toMatchObject({ low: 1, high: 8, stand: 'inside', error: 0 });
-		expect(holdDays(0, steady(4)).stand).toBe('below');
-		expect(holdDays(9, steady(4)).stand).toBe('above');
+		expect(holdDays(0, [4]).stand).toBe('below');
+		expect(holdDays(9, [4]).stand).toBe('above');
 		expect(Math.abs(held.deviations)).toBeLessThan(0.2);
+		expect(holdDays(3_000, [3_000]).deviations).toBeCloseTo(0, 1);
 	});
 
-	it('keep the mean, whatever the range beside it', () => {
-		// A middle that must be below nothing is put right by the other two.
-		const held = holdDays(0, { low: 0, middle: 0.5, high: 5 });
-		expect(held.predicted).toBe(0.5);
-		// At least one day on average of 0.5 days: never more than half of the vehicles.
-		expect(held.chance).toBeLessThan(0.5);
-		expect(holdDays(3_000, steady(3_000)).deviations).toBeCloseTo(0, 1);
+	it('cannot be below nothing, nor of no vehicle', () => {
+		expect(() => holdDays(-1, [1])).toThrow(EngineInputError);
+		expect(() => holdDays(0, [])).toThrow(EngineInputError);
+	});
+});
+
+describe('ten vehicles for a mean and a range', () => {
+	const meanOf = (days: readonly number[]): number => days.reduce((sum, each) => sum + each, 0) / 10;
+
+	it.each([
+		['in the middle', { low: 1, middle: 3, high: 5 }],
+		['near the low end', { low: 0, middle: 0.5, high: 5 }],
+		['above the high end', { low: 0, middle: 1, high: 0.2 }],
+		['of nothing', { low: 0, middle: 0, high: 0 }]
+	])('keep the mean %s, and their order', (_, stated) => {
+		const days = tenVehicles(stated);
+		expect(days).toHaveLength(10);
+		expect(meanOf(days)).toBeCloseTo(stated.middle, 12);
+		expect(days).toEqual([...days].sort((a, b) => a - b));
+		expect(days[0]).toBeGreaterThanOrEqual(0);
 	});
 });

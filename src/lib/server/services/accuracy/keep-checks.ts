@@ -2,7 +2,14 @@ import { QueryTypes, type Transaction } from 'sequelize';
 import { hasBms, type BatteryInput } from '$lib/schemas/batteries';
 import { capacityTestSchema } from '$lib/schemas/field-notes';
 import { heatLimitsOf } from '$lib/thermal/chemistries';
-import { holdCapacity, holdDays, toReferenceTemperature, type LifePoint } from '$lib/thermal/field';
+import {
+	holdCapacity,
+	holdDays,
+	tenVehicles,
+	toReferenceTemperature,
+	type LifePoint,
+	type StatedDays
+} from '$lib/thermal/field';
 import { connection } from '../../db/connection';
 import { daysBetween } from '../days';
 import { daysInMonth, predictUntil } from '../review/predicted-days';
@@ -42,6 +49,7 @@ const TESTS = `
 /** Read with a lock: an outlook that is being stored now is waited for, not missed. */
 const OUTLOOKS = `
 	SELECT assessment_id AS assessmentId, JSON_EXTRACT(outlook, '$.year.months') AS months,
+		JSON_EXTRACT(outlook, '$.year.tenths') AS tenths,
 		JSON_EXTRACT(outlook, '$.life.years') AS life
 	FROM assessment_outlooks WHERE assessment_id IN (:ids) LOCK IN SHARE MODE
 `;
@@ -67,13 +75,10 @@ type Watched = About & {
 	darkDays: number;
 };
 type Test = About & { fieldNoteId: number; readOn: string; data: unknown; battery: unknown };
-interface MonthDays {
-	low: number;
-	middle: number;
-	high: number;
-}
 interface Stated {
-	months: MonthDays[] | null;
+	months: StatedDays[] | null;
+	/** Days a year of ten vehicles, where they were kept. */
+	tenths: number[] | null;
 	life: LifePoint[] | null;
 }
 
@@ -92,15 +97,19 @@ async function readStated(
 	transaction: Transaction
 ): Promise<ReadonlyMap<number, Stated>> {
 	if (ids.length === 0) return new Map();
-	const rows = await select<{ assessmentId: number; months: unknown; life: unknown }>(
+	const rows = await select<{ assessmentId: number; months: unknown; tenths: unknown; life: unknown }>(
 		OUTLOOKS,
 		ids,
 		transaction
 	);
 	return new Map(
-		rows.map(({ assessmentId, months, life }) => [
+		rows.map(({ assessmentId, months, tenths, life }) => [
 			assessmentId,
-			{ months: parsed<MonthDays[]>(months), life: parsed<LifePoint[]>(life) }
+			{
+				months: parsed<StatedDays[]>(months),
+				tenths: parsed<number[]>(tenths),
+				life: parsed<LifePoint[]>(life)
+			}
 		])
 	);
 }
@@ -110,16 +119,27 @@ const aboutOf = ({ workshopId, mountId, installationId, assessmentId, bookId, is
 	isEnteredLater: Number(isEnteredLater) === 1
 });
 
-/** Days to be expected from the day of fitting to the last day of which anything is known. */
-function statedUntil(months: readonly MonthDays[], fittedOn: string, until: string): MonthDays {
+/**
+ * Days to be expected of ten equally likely vehicles from the day of fitting to the last day of which anything is known.
+ * Their days are spread over the year as those of all of them together.
+ */
+function statedUntil(
+	months: readonly StatedDays[],
+	tenths: Stated['tenths'],
+	fittedOn: string,
+	until: string
+) {
 	const days = daysInMonth(fittedOn);
 	const left = (days - Number(fittedOn.slice(8, 10)) + 1) / days;
-	const sum = (key: keyof MonthDays): number => {
+	const sum = (key: keyof StatedDays): number => {
 		const monthDays = months.map((month) => month[key]);
 		const firstMonthDays = monthDays[Number(fittedOn.slice(5, 7)) - 1]! * left;
 		return predictUntil({ month: fittedOn.slice(0, 7), firstMonthDays, monthDays }, until);
 	};
-	return { low: sum('low'), middle: sum('middle'), high: sum('high') };
+	const middle = sum('middle');
+	if (!tenths) return tenVehicles({ low: sum('low'), middle, high: sum('high') });
+	const yearDays = tenths.reduce((total, tenth) => total + tenth, 0) / tenths.length;
+	return tenths.map((tenth) => (yearDays > 0 ? (tenth * middle) / yearDays : 0));
 }
 
 /** Reported days against the stated ones, as long as it was watched; nothing where nobody has looked or reported. */
@@ -128,7 +148,10 @@ function checkDays(watched: Watched, stated: Stated | undefined): CheckRow[] {
 	const until = [doneOn, notedOn].reduce<string>((last, day) => (day && day > last ? day : last), fittedOn);
 	const observedDays = daysBetween(fittedOn, until);
 	if (!stated?.months || observedDays < 1 || !hasBms(chemistry)) return [];
-	const { chance, ...held } = holdDays(Number(watched.darkDays), statedUntil(stated.months, fittedOn, until));
+	const { chance, ...held } = holdDays(
+		Number(watched.darkDays),
+		statedUntil(stated.months, stated.tenths, fittedOn, until)
+	);
 	const isLookedAt = doneOn !== null || lookedOn !== null;
 	return [
 		{
