@@ -90,6 +90,9 @@ async function findIds(
 		`/api/v1/jobs/${jobId}/sheets`
 	);
 	const books = await read<{ rows: Record[] }>(context, '/api/v1/books');
+	const reruns = await read<{ rows: Record[] }>(context, '/api/v1/reruns');
+	const rerunId = of(reruns.rows.at(-1));
+	const changes = await read<{ rows: Record[] }>(context, `/api/v1/reruns/${rerunId}/changes`);
 	const jobPage = await (await context.get(`/jobs/${jobId}/recommendation`)).text();
 	const mailbox = await (await context.get('/mailbox')).text();
 	const recommendationId = /\/recommendations\/(\d+)\/print/.exec(jobPage)?.[1] ?? 'none';
@@ -123,6 +126,8 @@ async function findIds(
 		bookId: of(books.rows[0]),
 		otherId: of(books.rows[0]),
 		coefficient: 'bay.share',
+		rerunId,
+		itemId: of(changes.rows[0]),
 		sheetId: of(sheets.rows.find(({ withdrawnAt }) => withdrawnAt === null)),
 		messageId: findSharedLetter(mailbox),
 		letterId: of(letters.rows[0]),

@@ -26,7 +26,7 @@ export interface MountCase {
 export const isGeneral = ({ engineLayout, positionKind }: BookScope): boolean =>
 	engineLayout === 'any' && positionKind === 'any';
 
-const holdsFor = ({ engineLayout, positionKind }: BookScope, mount: MountCase): boolean =>
+export const holdsFor = ({ engineLayout, positionKind }: BookScope, mount: MountCase): boolean =>
 	(engineLayout === 'any' || engineLayout === mount.engineLayout) &&
 	(positionKind === 'any' || positionKind === mount.positionKind);
 

@@ -8,7 +8,11 @@ import { startOutbox, stopOutbox } from './mail/outbox';
 import { clearExpired, startClearing, stopClearing } from './services/clear-expired';
 import { seedDemo } from './services/demo/seed-demo';
 import { startReminders, stopReminders } from './services/reminders';
+<<<<<<< HEAD
 import { completeChecks } from './services/accuracy/complete-checks';
+=======
+import { startReruns, stopReruns } from './services/reruns/run-reruns';
+>>>>>>> main
 import { completeReviews } from './services/review/keep-review';
 
 /** Kept on globalThis so that a development reload, which loads this module again, does not forget it. */
@@ -50,6 +54,7 @@ export async function boot(): Promise<void> {
 		startOutbox();
 		startClearing();
 		startReminders();
+		startReruns();
 		state.soaklineReady = true;
 		logger.info({ step: 'ready', ms: 0, detail: settings.ORIGIN });
 		holdOldNotes();
@@ -63,6 +68,7 @@ export async function shutDown(): Promise<void> {
 	state.soaklineReady = false;
 	stopClearing();
 	stopReminders();
+	await stopReruns();
 	await stopOutbox();
 	await closeConnection();
 }

@@ -15,10 +15,11 @@ import { AppError, notFound } from '../errors';
 import { canonicalJson } from '../hash';
 import { allow } from '../policies';
 import { presentAssessment, presentAssessmentRow } from '../presenters/assessments';
-import { caseOf, findJobParts, gatherInputs, isAssessable, scenarioOf } from './assessment-inputs';
-import { assessMounts, hashInputs, runInputs } from './assessment-runs';
+import { caseOf, findJobParts, gatherInputs, isAssessable } from './assessment-inputs';
+import { assessMounts } from './assessment-runs';
 import { bookInForce } from './books';
 import { WITHOUT_TEXTS, newestByMount } from './job-outcome';
+import { hashInputs, runInputs, scenarioOf } from './run-inputs';
 
 async function findJob(person: SignedInPerson, jobId: number, lock = false): Promise<Job> {
 	const job = await Job.findOne({ where: { id: jobId, workshopId: person.workshopId }, lock });

@@ -19,6 +19,7 @@ import { recordBy } from './audit';
 import { findBook, getBook, withCoefficients } from './books';
 import { coefficientField } from './coefficient-sources';
 import { saveVersioned } from './records';
+import { beginRerun } from './reruns/reruns';
 
 const subjectOf = ({ id }: CoefficientBook) => ({ type: 'book', id });
 
@@ -159,6 +160,7 @@ export async function moveBook(
 	allow(person, 'books.write');
 	return inTransaction(async (transaction) => {
 		const book = await findBook(person, bookId, transaction);
+		const from = book.state;
 		requireWay(book, to);
 		if (to === 'in-force') requireSecondPerson(book, person);
 		const replaced = to === 'in-force' ? await replaceInForce(book, transaction) : null;
@@ -166,6 +168,8 @@ export async function moveBook(
 		await saveVersioned(book, 'book', version, { state: to, ...hands }, transaction);
 		const told = replaced === null ? {} : { replaced };
 		await recordBy(person, `book.${to}`, subjectOf(book), transaction, { number: book.number, ...told });
+		if (to === 'in-force' || (to === 'withdrawn' && from === 'in-force'))
+			await beginRerun(person, book, to, transaction);
 		return withCoefficients(book);
 	});
 }

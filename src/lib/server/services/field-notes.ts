@@ -26,8 +26,14 @@ import { refreshReview } from './review/keep-review';
 import { afterOthers, workInSlices } from './slices';
 import { touringOf } from './touring-year';
 
-const DRAWS = 512;
-const YEAR_DRAWS = 32;
+/** How many vehicles and mounts, and how many of them for the days in a year, are drawn to learn from a note. */
+interface LearningEffort {
+	samples: number;
+	yearSamples: number;
+}
+const FULL_LEARNING: LearningEffort = { samples: 512, yearSamples: 32 };
+/** The same of fewer draws, said beside what comes of it. */
+export const LIGHT_LEARNING: LearningEffort = { samples: 128, yearSamples: 8 };
 const DAYS_A_YEAR = 365.25;
 
 interface Fitted {
@@ -61,7 +67,7 @@ async function findOut(
 	assessment: Assessment,
 	earlier: readonly FieldNote[],
 	data: FieldNoteInput,
-	seed: number
+	{ seed, samples, yearSamples }: LearningEffort & { seed: number }
 ): Promise<FieldFinding | null> {
 	const reading = readingOf(data);
 	if (reading === null || !('hottestDayC' in data)) return null;
@@ -69,12 +75,12 @@ async function findOut(
 	return afterOthers(async () => {
 		const cause =
 			reading.kind === 'cut-out'
-				? await workInSlices(weighHeat(scenario, reading.report, { samples: DRAWS, seed }))
+				? await workInSlices(weighHeat(scenario, reading.report, { samples, seed }))
 				: null;
 		if (cause && cause.finding !== 'explained') return { cause, learning: null };
 		const { tMax } = parseScenario(assessment.inputs.scenario).climate;
 		const days = [...listReadings(assessment, earlier), { scenario, reading }];
-		const options = { samples: DRAWS, yearSamples: YEAR_DRAWS, seed };
+		const options = { samples, yearSamples, seed };
 		const work = learnFrom(scenarioOn(assessment, tMax), days, touringOf(assessment.inputs), options);
 		return { cause, learning: await workInSlices(work) };
 	});
@@ -179,13 +185,14 @@ export interface WeighedNote {
 export async function weighFieldNote(
 	person: SignedInPerson,
 	mountId: number,
-	data: FieldNoteInput
+	data: FieldNoteInput,
+	effort = FULL_LEARNING
 ): Promise<WeighedNote> {
 	allow(person, 'mounts.write');
 	const { installation, assessment } = await findFitted(person, mountId);
 	refuseImpossible(data, installation.fittedOn);
 	const earlier = await notesOf(installation);
-	const finding = await findOut(assessment, earlier, data, installation.id);
+	const finding = await findOut(assessment, earlier, data, { ...effort, seed: installation.id });
 	const check = await checkLabel(installation, data);
 	return { data, finding, check, after: newestOf(earlier) };
 }
@@ -224,7 +231,8 @@ export async function keepFieldNote(
 export async function addFieldNote(
 	person: SignedInPerson,
 	mountId: number,
-	data: FieldNoteInput
+	data: FieldNoteInput,
+	effort = FULL_LEARNING
 ): Promise<FieldNotesView> {
-	return keepFieldNote(person, mountId, await weighFieldNote(person, mountId, data));
+	return keepFieldNote(person, mountId, await weighFieldNote(person, mountId, data, effort));
 }

@@ -5,6 +5,7 @@ import { customerOperations } from './customers';
 import { accuracyOperations } from './accuracy';
 import { assessmentOperations } from './assessments';
 import { bookOperations } from './books';
+import { rerunOperations } from './reruns';
 import { dayPlanOperations } from './day-plans';
 import { fileOperations } from './files';
 import { erasureOperations } from './erasures';
@@ -42,7 +43,11 @@ export const OPERATIONS: readonly Operation[] = [
 	letterOperations,
 	erasureOperations,
 	bookOperations,
+<<<<<<< HEAD
 	accuracyOperations,
+=======
+	rerunOperations,
+>>>>>>> main
 	assessmentOperations,
 	recommendationOperations,
 	remedyOperations,
