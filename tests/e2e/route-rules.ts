@@ -143,10 +143,15 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 	owned('/books/[bookId]', 'bench', 'move'),
 	owned('/books/[bookId]/[coefficient=coefficient]', 'bench', 'default'),
 	owned('/books/[bookId]/against/[otherId]', 'bench'),
+<<<<<<< HEAD
+	page('/accuracy', 'bench'),
+	page('/accuracy/readings.csv', 'bench'),
+=======
 	page('/reruns', 'bench'),
 	owned('/reruns/[rerunId]', 'bench', 'move'),
 	owned('/reruns/[rerunId]/progress', 'bench'),
 	owned('/reruns/[rerunId]/[itemId]', 'bench', 'letter', 'otherwise'),
+>>>>>>> main
 	page('/people', 'manager', 'invite', 'again', 'withdraw'),
 	owned('/people/[personId]', 'manager', 'role', 'resetFactor', 'leave', 'comeBack'),
 	{ ...page('/second-factor', 'workshop', 'begin', 'confirm', 'renew', 'off'), leadsOn: true },
@@ -242,12 +247,17 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 		PUT: { value: 0.6, origin: 'judgement', source: 'None.', version: 0 }
 	}),
 	ownedApi('/books/[bookId]/against/[otherId]', 'bench', { GET: null }),
+<<<<<<< HEAD
+	api('/accuracy', 'bench', 'GET'),
+	api('/accuracy/readings', 'bench', 'GET'),
+=======
 	api('/reruns', 'bench', 'GET'),
 	ownedApi('/reruns/[rerunId]', 'bench', { GET: null }),
 	ownedApi('/reruns/[rerunId]/state', 'bench', { PUT: { to: 'cancelled' } }),
 	ownedApi('/reruns/[rerunId]/changes', 'bench', { GET: null }),
 	ownedApi('/reruns/[rerunId]/left', 'bench', { GET: null }),
 	ownedApi('/reruns/[rerunId]/changes/[itemId]/telling', 'bench', { POST: { how: 'otherwise' } }),
+>>>>>>> main
 	api('/simulations', 'workshop', 'POST'),
 	api('/people', 'manager', 'GET'),
 	ownedApi('/people/[personId]/role', 'manager', { PUT: { role: 'engineer', version: 0 } }),
