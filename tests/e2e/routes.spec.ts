@@ -90,6 +90,7 @@ async function findIds(
 		`/api/v1/jobs/${jobId}/sheets`
 	);
 	const books = await read<{ rows: Record[] }>(context, '/api/v1/books');
+	const traces = await read<{ rows: (Record & { state: string })[] }>(context, '/api/v1/traces');
 	const jobPage = await (await context.get(`/jobs/${jobId}/recommendation`)).text();
 	const mailbox = await (await context.get('/mailbox')).text();
 	const recommendationId = /\/recommendations\/(\d+)\/print/.exec(jobPage)?.[1] ?? 'none';
@@ -122,6 +123,7 @@ async function findIds(
 		vehicleId: of(job.vehicle),
 		bookId: of(books.rows[0]),
 		otherId: of(books.rows[0]),
+		traceId: of(traces.rows.find(({ state }) => state === 'read')),
 		coefficient: 'bay.share',
 		sheetId: of(sheets.rows.find(({ withdrawnAt }) => withdrawnAt === null)),
 		messageId: findSharedLetter(mailbox),

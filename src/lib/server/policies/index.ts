@@ -35,6 +35,8 @@ export const RULES = {
 	'erasures.decide': ['manager'],
 	'books.read': BENCH,
 	'books.write': BENCH,
+	'traces.read': BENCH,
+	'traces.write': BENCH,
 	'review.read': MANAGER,
 	'own-zones.write': MANAGER,
 	'mailbox.read': WORKSHOP,

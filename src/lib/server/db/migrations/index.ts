@@ -81,6 +81,8 @@ import { migration as m114 } from './114-coefficients-published';
 import { migration as m115 } from './115-coefficients-kept';
 import { migration as m116 } from './116-coefficients-stay';
 import { migration as m117 } from './117-coefficient-books-ways';
+import { migration as m130 } from './130-traces';
+import { migration as m131 } from './131-trace-loggers';
 import type { Migration } from '../migrate';
 
 /** Every migration, in the order in which they run; each is one DDL step that may run again. */
@@ -167,5 +169,7 @@ export const migrations: Migration[] = [
 	m114,
 	m115,
 	m116,
-	m117
+	m117,
+	m130,
+	m131
 ];

@@ -30,6 +30,8 @@ import { FollowUp, initFollowUp } from './follow-up';
 import { FieldNote, initFieldNote } from './field-note';
 import { CustomerMessage, initCustomerMessage } from './customer-message';
 import { StoredFile, initStoredFile } from './stored-file';
+import { Trace, initTrace } from './trace';
+import { TraceLogger, initTraceLogger } from './trace-logger';
 import { Erasure, initErasure } from './erasure';
 import { OwnZone, initOwnZone } from './own-zone';
 import { OutgoingMail, initOutgoingMail } from './outgoing-mail';
@@ -68,6 +70,8 @@ export {
 	FieldNote,
 	CustomerMessage,
 	StoredFile,
+	Trace,
+	TraceLogger,
 	Erasure,
 	OwnZone,
 	OutgoingMail,
@@ -107,6 +111,8 @@ const initialisers = [
 	initFieldNote,
 	initCustomerMessage,
 	initStoredFile,
+	initTrace,
+	initTraceLogger,
 	initErasure,
 	initOwnZone,
 	initOutgoingMail,

@@ -22,6 +22,7 @@ import { reviewOperations } from './review';
 import { sheetOperations } from './sheets';
 import { shopOperations } from './shop';
 import { simulationOperations } from './simulations';
+import { traceOperations } from './traces';
 import { vehicleOperations } from './vehicles';
 
 /** Everything that the API does. A route without an entry here, or an entry without a route, fails a test. */
@@ -41,6 +42,7 @@ export const OPERATIONS: readonly Operation[] = [
 	letterOperations,
 	erasureOperations,
 	bookOperations,
+	traceOperations,
 	assessmentOperations,
 	recommendationOperations,
 	remedyOperations,

@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import workshops from '../../../../../seeds/demo-workshops.json';
 import { useTestDatabase } from '../../../../../tests/support/services';
-import { Assessment, Customer, Job, Person, Place, Recommendation, Workshop } from '../../db/models';
+import { Assessment, Customer, Job, Person, Place, Recommendation, Trace, Workshop } from '../../db/models';
 import { reproduceAssessment } from '../assessments';
 import { findBreak } from '../audit';
 import { fillWithDemo, seedDemo } from './seed-demo';
@@ -47,6 +47,11 @@ describe('the demo workshop', () => {
 			const withoutBms = assessments.filter(({ result }) => result.leadAcid);
 			expect(new Set(withoutBms.map(({ jobId }) => jobId)).size).toBe(1);
 			expect(withoutBms).toHaveLength(2);
+			// Three traces that were made up are at hand, and say so.
+			const traces = await Trace.findAll({ where });
+			expect(traces.map(({ state, isSynthetic }) => [state, Boolean(isSynthetic)])).toEqual(
+				Array(3).fill(['read', true])
+			);
 			const manager = await findManager(demo);
 			for (const { id } of assessments)
 				expect(await reproduceAssessment(manager, id)).toMatchObject({ same: true });

@@ -5,6 +5,7 @@ import { inTransaction } from '../../db/transaction';
 import { seedJobs } from './seed-jobs';
 import { seedCrews, seedCustomerSignIns } from './seed-people';
 import { seedShelves } from './seed-shelves';
+import { seedTraces } from './seed-traces';
 
 /** Puts the invented workshops in, all of them or nothing, and says how many jobs that makes. */
 export async function fillWithDemo(): Promise<number> {
@@ -14,6 +15,7 @@ export async function fillWithDemo(): Promise<number> {
 			await seedShelves(crew, transaction);
 			jobs += await seedJobs(crew, transaction);
 			await seedCustomerSignIns(crew, transaction);
+			await seedTraces(crew, transaction);
 		}
 		return jobs;
 	});
