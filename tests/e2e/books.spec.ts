@@ -36,9 +36,12 @@ test('a draft is begun, changed with a source, laid beside its origin, and waits
 	await page.getByRole('button', { name: 'Begin the draft' }).click();
 	await expect(page.getByText('Name is missing.').first()).toBeVisible();
 	const name = `Vans ${Date.now()}`;
+	await page.getByLabel('For positions').selectOption('Under the bonnet');
+	await page.getByLabel('For engines').selectOption('Vee engines');
 	await page.getByLabel('Name', { exact: true }).fill(name);
 	await page.getByRole('button', { name: 'Begin the draft' }).click();
 	await expect(page.getByRole('heading', { level: 1, name: new RegExp(`${name}$`) })).toBeVisible();
+	await expect(page.getByText('For: vee engines, under the bonnet.')).toBeVisible();
 	const book = page.url().replace(/\?.*/, '');
 
 	await page.getByRole('link', { name: /^Gas temperature at full load/ }).click();

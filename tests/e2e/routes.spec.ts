@@ -90,6 +90,9 @@ async function findIds(
 		`/api/v1/jobs/${jobId}/sheets`
 	);
 	const books = await read<{ rows: Record[] }>(context, '/api/v1/books');
+	const reruns = await read<{ rows: Record[] }>(context, '/api/v1/reruns');
+	const rerunId = of(reruns.rows.at(-1));
+	const changes = await read<{ rows: Record[] }>(context, `/api/v1/reruns/${rerunId}/changes`);
 	const traces = await read<{ rows: (Record & { state: string })[] }>(context, '/api/v1/traces');
 	const jobPage = await (await context.get(`/jobs/${jobId}/recommendation`)).text();
 	const mailbox = await (await context.get('/mailbox')).text();
@@ -125,6 +128,8 @@ async function findIds(
 		otherId: of(books.rows[0]),
 		traceId: of(traces.rows.find(({ state }) => state === 'read')),
 		coefficient: 'bay.share',
+		rerunId,
+		itemId: of(changes.rows[0]),
 		sheetId: of(sheets.rows.find(({ withdrawnAt }) => withdrawnAt === null)),
 		messageId: findSharedLetter(mailbox),
 		letterId: of(letters.rows[0]),

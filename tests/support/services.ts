@@ -2,16 +2,22 @@ import { afterAll, beforeAll } from 'vitest';
 import { closeConnection, connection } from '../../src/lib/server/db/connection';
 import { migrate } from '../../src/lib/server/db/migrate';
 import { Customer, Person, Workshop, initModels } from '../../src/lib/server/db/models';
+import { stopReruns } from '../../src/lib/server/services/reruns/run-reruns';
 import { ROLES, type Role, type SignedInPerson } from '../../src/lib/schemas/people';
 
 /** Connects to the database of this run before the tests of a file, with its tables up to date, and leaves it after. */
 export function useTestDatabase(): void {
 	beforeAll(async () => {
+		// A test that wants what a book lets be assessed again asks for it.
+		await stopReruns();
 		const sequelize = connection();
 		initModels(sequelize);
 		await migrate(sequelize);
 	});
-	afterAll(closeConnection);
+	afterAll(async () => {
+		await stopReruns();
+		await closeConnection();
+	});
 }
 
 export type Crew = Record<Role, SignedInPerson> & { workshopId: number };

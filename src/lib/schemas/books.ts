@@ -1,8 +1,45 @@
 import { z } from 'zod';
+import { POSITION_KINDS, type PositionKind } from '../thermal/survey';
 import { idSchema, optionalWords, versionSchema, words } from './fields';
+import { ENGINE_LAYOUTS, type EngineLayout } from './vehicles';
 
 export const BOOK_STATES = ['draft', 'on-trial', 'in-force', 'withdrawn'] as const;
 export type BookState = (typeof BOOK_STATES)[number];
+
+/** Engine layouts that a book can be for: not the unknown one, of which there is nothing to know. */
+export const BOOK_LAYOUTS = ['any', ...ENGINE_LAYOUTS.filter((layout) => layout !== 'unknown')] as const;
+export const BOOK_POSITIONS = ['any', ...POSITION_KINDS] as const;
+
+/** What a book holds for: "any" where it does not matter. */
+const scopeFields = {
+	engineLayout: z.enum(BOOK_LAYOUTS, { error: 'Say which engine layout it is for, or any.' }),
+	positionKind: z.enum(BOOK_POSITIONS, { error: 'Say which kind of position it is for, or any.' })
+};
+export type BookScope = z.infer<z.ZodObject<typeof scopeFields>>;
+
+/** What a mount is, as far as a book is chosen by it. */
+export interface MountCase {
+	engineLayout: EngineLayout;
+	positionKind: PositionKind;
+}
+
+export const isGeneral = ({ engineLayout, positionKind }: BookScope): boolean =>
+	engineLayout === 'any' && positionKind === 'any';
+
+export const holdsFor = ({ engineLayout, positionKind }: BookScope, mount: MountCase): boolean =>
+	(engineLayout === 'any' || engineLayout === mount.engineLayout) &&
+	(positionKind === 'any' || positionKind === mount.positionKind);
+
+/** The place decides more than the engine: a book for both comes first, then one for the place, then one for the engine. */
+const closeness = ({ engineLayout, positionKind }: BookScope): number =>
+	(positionKind === 'any' ? 0 : 2) + (engineLayout === 'any' ? 0 : 1);
+
+/** Of books in force the one that a mount is assessed with: the closest that holds for it. */
+export function closestBook<B extends BookScope>(books: readonly B[], mount: MountCase): B | undefined {
+	return books
+		.filter((book) => holdsFor(book, mount))
+		.sort((left, right) => closeness(right) - closeness(left))[0];
+}
 
 /** Where a value comes from. */
 export const ORIGINS = ['published', 'judgement', 'fitted'] as const;
@@ -27,6 +64,7 @@ export const bookRowSchema = z.object({
 	name: z.string(),
 	state: z.enum(BOOK_STATES),
 	note: z.string(),
+	...scopeFields,
 	madeBy: z.string().meta({ description: 'Empty for the first book, which nobody made' }),
 	madeById: z.number().int().nullable().meta({ description: 'Whoever made a book does not put it in force' }),
 	inForceBy: z.string(),
@@ -53,9 +91,13 @@ export const writeCoefficientPath = ({ group, key }: { group: string; key: strin
 /** A new draft, with the values of a book that is there. */
 export const bookDraftSchema = z.object({
 	fromBookId: idSchema.meta({ label: 'With the values of' }),
+	engineLayout: scopeFields.engineLayout.default('any').meta({ label: 'For engines' }),
+	positionKind: scopeFields.positionKind.default('any').meta({ label: 'For positions' }),
 	...bookWords
 });
-export type BookDraft = z.infer<typeof bookDraftSchema>;
+/** As it is asked for: without a word of what it is for, it is for everything. */
+export type BookDraft = Pick<z.output<typeof bookDraftSchema>, 'fromBookId' | 'name' | 'note'> &
+	Partial<BookScope>;
 
 /** What somebody says of a value; what a fit gives comes from the fit alone. */
 export const coefficientChangeSchema = z.object({

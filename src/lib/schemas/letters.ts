@@ -6,6 +6,7 @@ export const LETTER_KINDS = {
 	sheet: 'The customer’s page',
 	question: 'A question of the customer',
 	answer: 'An answer to the customer',
+	'verdict-changed': 'A verdict that changed',
 	reminder: 'Reminder of a follow-up',
 	'erasure-asked': 'A customer asks for deletion',
 	'erasure-refused': 'A request for deletion, refused',

@@ -8,6 +8,7 @@ import { startOutbox, stopOutbox } from './mail/outbox';
 import { clearExpired, startClearing, stopClearing } from './services/clear-expired';
 import { seedDemo } from './services/demo/seed-demo';
 import { startReminders, stopReminders } from './services/reminders';
+import { startReruns, stopReruns } from './services/reruns/run-reruns';
 import { completeReviews } from './services/review/keep-review';
 
 /** Kept on globalThis so that a development reload, which loads this module again, does not forget it. */
@@ -41,6 +42,7 @@ export async function boot(): Promise<void> {
 		startOutbox();
 		startClearing();
 		startReminders();
+		startReruns();
 		state.soaklineReady = true;
 		logger.info({ step: 'ready', ms: 0, detail: settings.ORIGIN });
 	} catch (error) {
@@ -53,6 +55,7 @@ export async function shutDown(): Promise<void> {
 	state.soaklineReady = false;
 	stopClearing();
 	stopReminders();
+	await stopReruns();
 	await stopOutbox();
 	await closeConnection();
 }

@@ -35,6 +35,8 @@ export const RULES = {
 	'erasures.decide': ['manager'],
 	'books.read': BENCH,
 	'books.write': BENCH,
+	'reruns.read': BENCH,
+	'reruns.write': BENCH,
 	'traces.read': BENCH,
 	'traces.write': BENCH,
 	'review.read': MANAGER,

@@ -43,6 +43,8 @@ const EXPECTED: Record<Action, string> = {
 	'erasures.decide': 'm',
 	'books.read': 'em',
 	'books.write': 'em',
+	'reruns.read': 'em',
+	'reruns.write': 'em',
 	'traces.read': 'em',
 	'traces.write': 'em',
 	'review.read': 'm',

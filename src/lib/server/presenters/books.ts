@@ -12,9 +12,10 @@ import type { Coefficient, CoefficientBook } from '../db/models';
 export type NameOf = (personId: number | null | undefined) => string;
 
 export function presentBookRow(book: CoefficientBook, nameOf: NameOf): BookRow {
-	const { id, number, name, state, note, createdAt, madeBy, inForceBy, inForceAt, version } = book;
+	const { id, number, name, state, note, engineLayout, positionKind, version } = book;
+	const { createdAt, madeBy, inForceBy, inForceAt } = book;
 	return {
-		...{ id, number, name, state, note, version },
+		...{ id, number, name, state, note, engineLayout, positionKind, version },
 		madeBy: nameOf(madeBy),
 		madeById: madeBy ?? null,
 		inForceBy: nameOf(inForceBy),

@@ -1,7 +1,6 @@
 import type { DayPlanInput } from '$lib/schemas/day-plans';
 import type { JobView } from '$lib/schemas/jobs';
 import type { PreviewBase } from '$lib/schemas/preview';
-import type { CoefficientBook } from '$lib/thermal/survey';
 
 /** What a live curve needs of a job besides the survey, or what the job still lacks for it. */
 export interface PreviewView {
@@ -19,10 +18,10 @@ function listMissing({ id, battery, place }: JobView): PreviewView['missing'] {
 
 const DAY_MISSING = (jobId: number) => ({ words: 'Plan the day', href: `/jobs/${jobId}/day` });
 
-export function presentPreview(job: JobView, coefficients: CoefficientBook): PreviewView {
+export function presentPreview(job: JobView, coefficientsAt: PreviewBase['coefficientsAt']): PreviewView {
 	const { vehicle, battery, place, hotDay, dayPlan } = job;
 	const missing = [...listMissing(job), ...(dayPlan ? [] : [DAY_MISSING(job.id)])];
 	if (!battery || !place) return { base: null, dayPlan, missing };
 	const { altitudeM } = place;
-	return { base: { vehicle, battery, hotDay: hotDay ?? place, altitudeM, coefficients }, dayPlan, missing };
+	return { base: { vehicle, battery, hotDay: hotDay ?? place, altitudeM, coefficientsAt }, dayPlan, missing };
 }

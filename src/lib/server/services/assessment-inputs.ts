@@ -1,15 +1,14 @@
 import type { z } from 'zod';
 import type { AssessmentInputs } from '$lib/schemas/assessments';
 import { batteryInputSchema } from '$lib/schemas/batteries';
-import type { BookView } from '$lib/schemas/books';
+import type { BookView, MountCase } from '$lib/schemas/books';
 import { dayPlanInputSchema } from '$lib/schemas/day-plans';
 import { placeSiteSchema } from '$lib/schemas/places';
 import { vehicleInputSchema } from '$lib/schemas/vehicles';
-import { buildScenario } from '$lib/thermal/survey';
 import { BatteryRecord, Customer, DayPlan, Place, Vehicle, type Job, type Mount } from '../db/models';
 import { AppError, notFound } from '../errors';
 import { coefficientsOf } from './books';
-import { asInputError } from './simulations';
+import { completeInputs, type MeasuredInputs } from './run-inputs';
 import { touringYearOf } from './touring-year';
 
 /** What a job must have before anything can be assessed, in the words that its page uses. */
@@ -43,6 +42,12 @@ export async function findJobParts(job: Job): Promise<JobParts> {
 	return { job, customer, vehicle, battery, place, dayPlan };
 }
 
+/** What the book for a mount is chosen by. */
+export const caseOf = ({ vehicle }: Pick<JobParts, 'vehicle'>, { positionKind }: Mount): MountCase => ({
+	engineLayout: vehicle.engineLayout,
+	positionKind
+});
+
 function listMissing({ battery, place, dayPlan }: JobParts, mount: Mount): Part[] {
 	const present: Record<Part, unknown> = { battery, place, dayPlan, survey: mount.surveyComplete || null };
 	return (Object.keys(PARTS) as Part[]).filter((part) => present[part] === null);
@@ -62,7 +67,7 @@ function measuredOf(
 	{ job, customer, vehicle, battery, place, dayPlan }: JobParts,
 	mount: Mount,
 	book: BookView
-): Omit<AssessmentInputs, 'scenario' | 'derivations' | 'assumptions'> {
+): MeasuredInputs {
 	const at = fieldsOf(placeSiteSchema, place!);
 	return {
 		jobNumber: job.number,
@@ -87,19 +92,6 @@ function measuredOf(
 	};
 }
 
-/** The scenario that stored inputs give: what an assessment ran, made again. */
-export function scenarioOf(
-	measured: Omit<AssessmentInputs, 'scenario' | 'derivations' | 'assumptions'>
-): Pick<AssessmentInputs, 'scenario' | 'derivations' | 'assumptions'> {
-	const { vehicle, battery, mount, dayPlan, hotDay, place, book } = measured;
-	return buildScenario({
-		...{ vehicle, battery, dayPlan, hotDay },
-		survey: mount.survey,
-		altitudeM: place.altitudeM,
-		coefficients: book.coefficients
-	});
-}
-
 /** Everything that goes into an assessment as the job stands now; says all that is missing at once. */
 export function gatherInputs(parts: JobParts, mount: Mount, book: BookView): AssessmentInputs {
 	const missing = listMissing(parts, mount);
@@ -108,10 +100,5 @@ export function gatherInputs(parts: JobParts, mount: Mount, book: BookView): Ass
 		const sentences = problems.map(({ message }) => message).join(' ');
 		throw new AppError('conflict', `Mount ${mount.letter} cannot be assessed yet. ${sentences}`, problems);
 	}
-	const measured = measuredOf(parts, mount, book);
-	try {
-		return { ...measured, ...scenarioOf(measured) };
-	} catch (error) {
-		throw asInputError(error);
-	}
+	return completeInputs(measuredOf(parts, mount, book));
 }

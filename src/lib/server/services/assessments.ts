@@ -15,10 +15,11 @@ import { AppError, notFound } from '../errors';
 import { canonicalJson } from '../hash';
 import { allow } from '../policies';
 import { presentAssessment, presentAssessmentRow } from '../presenters/assessments';
-import { findJobParts, gatherInputs, isAssessable, scenarioOf } from './assessment-inputs';
-import { assessMounts, hashInputs, runInputs } from './assessment-runs';
+import { caseOf, findJobParts, gatherInputs, isAssessable } from './assessment-inputs';
+import { assessMounts } from './assessment-runs';
 import { bookInForce } from './books';
 import { WITHOUT_TEXTS, newestByMount } from './job-outcome';
+import { hashInputs, runInputs, scenarioOf } from './run-inputs';
 
 async function findJob(person: SignedInPerson, jobId: number, lock = false): Promise<Job> {
 	const job = await Job.findOne({ where: { id: jobId, workshopId: person.workshopId }, lock });
@@ -41,7 +42,7 @@ async function isCurrent(person: SignedInPerson, assessment: Assessment): Promis
 	if (!mount) return false;
 	const parts = await findJobParts(await findJob(person, assessment.jobId));
 	if (!isAssessable(parts, mount)) return false;
-	const now = gatherInputs(parts, mount, await bookInForce(person));
+	const now = gatherInputs(parts, mount, await bookInForce(person, caseOf(parts, mount)));
 	// Beside what an older assessment did not keep there is nothing to compare.
 	const withYear = assessment.inputs.touring !== undefined;
 	const judged = ({ scenario, battery, cable, touring }: AssessmentInputs): string =>

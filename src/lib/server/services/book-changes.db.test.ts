@@ -1,13 +1,16 @@
 import { describe, expect, it } from 'vitest';
 import { makeAssessableJob } from '../../../../tests/support/assessable-job';
-import { makeCrew, useTestDatabase } from '../../../../tests/support/services';
+import type { BookScope, BookView, MountCase } from '$lib/schemas/books';
+import { makeCrew, useTestDatabase, type Crew } from '../../../../tests/support/services';
 import { Coefficient, CoefficientBook } from '../db/models';
 import { assessJob } from './assessments';
 import { changeCoefficient, compareBooks, draftBook, moveBook } from './book-changes';
 import { bookInForce, getBook, listBooks } from './books';
+import { getJob } from './jobs';
 
 useTestDatabase();
 
+const UNDER_BONNET = { engineLayout: 'inline', positionKind: 'under-bonnet' } as const;
 const SHARE = { group: 'bay', key: 'share' };
 const SAID = { value: 0.52, origin: 'judgement', source: 'Seen on two vans of this shop.' } as const;
 
@@ -15,12 +18,12 @@ const SAID = { value: 0.52, origin: 'judgement', source: 'Seen on two vans of th
 async function makeDraft() {
 	const crew = await makeCrew();
 	const { jobId } = await makeAssessableJob(crew.installer);
-	const first = await bookInForce(crew.installer);
+	const first = await bookInForce(crew.installer, UNDER_BONNET);
 	const draft = await draftBook(crew.engineer, { fromBookId: first.id, name: 'Vans', note: 'Flat noses.' });
 	return { crew, jobId, first, draft };
 }
 
-const shareOf = (book: { coefficients: { group: string; key: string }[] }) =>
+const shareOf = (book: Pick<BookView, 'coefficients'>) =>
 	book.coefficients.find(({ group, key }) => group === SHARE.group && key === SHARE.key);
 
 describe('a draft', () => {
@@ -28,7 +31,7 @@ describe('a draft', () => {
 		const { crew, first, draft } = await makeDraft();
 		expect(draft).toMatchObject({ number: first.number + 1, state: 'draft', madeBy: crew.engineer.name });
 		expect(draft.coefficients).toEqual(first.coefficients);
-		expect(await bookInForce(crew.installer)).toMatchObject({ id: first.id });
+		expect(await bookInForce(crew.installer, UNDER_BONNET)).toMatchObject({ id: first.id });
 	});
 
 	it('takes a value within its limits with where it comes from, and says what was changed meanwhile', async () => {
@@ -108,6 +111,62 @@ describe('a book on its way', () => {
 		await expect(moveBook(crew.manager, draft.id, { to: 'on-trial', version })).rejects.toMatchObject({
 			code: 'conflict'
 		});
+	});
+});
+
+describe('a book for some mounts', () => {
+	const CABIN = { engineLayout: 'inline', positionKind: 'cabin' } as const;
+	const VEE = { engineLayout: 'vee', positionKind: 'under-bonnet' } as const;
+
+	/** A book in force with another share of the heat, for an engine, a position or both. */
+	async function putInForce(crew: Crew, fromBookId: number, scope: Partial<BookScope>, value: number) {
+		const draft = await draftBook(crew.engineer, { fromBookId, name: `For ${value}`, note: '', ...scope });
+		const { version } = await changeCoefficient(crew.engineer, draft.id, SHARE, {
+			...{ ...SAID, value },
+			version: draft.version
+		});
+		const trial = await moveBook(crew.engineer, draft.id, { to: 'on-trial', version });
+		return moveBook(crew.manager, draft.id, { to: 'in-force', version: trial.version });
+	}
+
+	it('is chosen before the one for everything: the closest, the position before the engine', async () => {
+		const crew = await makeCrew();
+		const { jobId } = await makeAssessableJob(crew.installer);
+		const first = await bookInForce(crew.installer, UNDER_BONNET);
+		await putInForce(crew, first.id, { engineLayout: 'inline' }, 0.41);
+		await putInForce(crew, first.id, { positionKind: 'under-bonnet' }, 0.42);
+		const shareFor = async (mount: MountCase) => shareOf(await bookInForce(crew.installer, mount))!.value;
+		expect([await shareFor(UNDER_BONNET), await shareFor(CABIN), await shareFor(VEE)]).toEqual([
+			0.42, 0.41, 0.42
+		]);
+		expect(await shareFor({ engineLayout: 'unknown', positionKind: 'cabin' })).toBe(0.6);
+		await putInForce(crew, first.id, UNDER_BONNET, 0.43);
+		expect([await shareFor(UNDER_BONNET), await shareFor(VEE)]).toEqual([0.43, 0.42]);
+		const [hot, cool] = await assessJob(crew.installer, jobId);
+		expect([hot!.inputs.book.coefficients.bay!.share, cool!.inputs.book.coefficients.bay!.share]).toEqual([
+			0.43, 0.41
+		]);
+		expect(await getJob(crew.installer, jobId)).toMatchObject({
+			standings: [{ changedSince: [] }, { changedSince: [] }]
+		});
+	}, 60_000);
+
+	it('comes in the place of the one for the same alone, and can be withdrawn without another', async () => {
+		const crew = await makeCrew();
+		await makeAssessableJob(crew.installer);
+		const first = await bookInForce(crew.installer, UNDER_BONNET);
+		const one = await putInForce(crew, first.id, { positionKind: 'under-bonnet' }, 0.42);
+		const two = await putInForce(crew, first.id, { positionKind: 'under-bonnet' }, 0.44);
+		expect((await listBooks(crew.manager)).map(({ number, state }) => [number, state])).toEqual([
+			[two.number, 'in-force'],
+			[one.number, 'withdrawn'],
+			[first.number, 'in-force']
+		]);
+		const { id, version } = two;
+		await moveBook(crew.manager, id, { to: 'withdrawn', version });
+		expect(await bookInForce(crew.installer, UNDER_BONNET)).toMatchObject({ id: first.id });
+		const where = { id: two.id };
+		await expect(CoefficientBook.update({ positionKind: 'cabin' }, { where })).rejects.toThrow('immutable');
 	});
 });
 

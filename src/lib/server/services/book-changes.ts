@@ -1,11 +1,12 @@
 import type { Transaction } from 'sequelize';
-import type {
-	BookComparison,
-	BookDraft,
-	BookMove,
-	BookState,
-	BookView,
-	CoefficientChange
+import {
+	isGeneral,
+	type BookComparison,
+	type BookDraft,
+	type BookMove,
+	type BookState,
+	type BookView,
+	type CoefficientChange
 } from '$lib/schemas/books';
 import type { SignedInPerson } from '$lib/schemas/people';
 import type { NumberField } from '$lib/thermal/vehicle/scenario-fields';
@@ -18,13 +19,14 @@ import { recordBy } from './audit';
 import { findBook, getBook, withCoefficients } from './books';
 import { coefficientField } from './coefficient-sources';
 import { saveVersioned } from './records';
+import { beginRerun } from './reruns/reruns';
 
 const subjectOf = ({ id }: CoefficientBook) => ({ type: 'book', id });
 
 /** Begins a draft with the values of another book, whichever state that is in. */
 export async function draftBook(
 	person: SignedInPerson,
-	{ fromBookId, name, note }: BookDraft
+	{ fromBookId, name, note, engineLayout = 'any', positionKind = 'any' }: BookDraft
 ): Promise<BookView> {
 	const { workshopId } = allow(person, 'books.write');
 	return inTransaction(async (transaction) => {
@@ -34,7 +36,10 @@ export async function draftBook(
 		const from = books.find(({ id }) => id === fromBookId);
 		if (!from) throw notFound('book');
 		const number = Math.max(...books.map((each) => each.number)) + 1;
-		const row = { workshopId, number, name, note, state: 'draft' as const, fromBookId, madeBy: person.id };
+		const row = {
+			...{ workshopId, number, name, note, engineLayout, positionKind, fromBookId },
+			...{ state: 'draft' as const, madeBy: person.id }
+		};
 		const book = await CoefficientBook.create(row, { transaction });
 		const values = await Coefficient.findAll({
 			where: { bookId: from.id },
@@ -103,19 +108,26 @@ export async function changeCoefficient(
 const WAYS: Readonly<Record<BookState, readonly BookMove['to'][]>> = {
 	draft: ['on-trial', 'withdrawn'],
 	'on-trial': ['in-force', 'withdrawn'],
-	// One is withdrawn when another comes in its place: without a book in force nothing could be assessed.
-	'in-force': [],
+	'in-force': ['withdrawn'],
 	withdrawn: []
 };
 
 const NO_WAY: Readonly<Record<BookState, string>> = {
 	draft: 'goes on trial first, where a second person sees it unchanging',
 	'on-trial': 'is on trial already',
-	'in-force': 'is in force, and is withdrawn when another one takes its place',
+	'in-force': 'is in force already',
 	withdrawn: 'was withdrawn, and stays so: begin a new one from it'
 };
 
-function requireWay({ state, number }: CoefficientBook, to: BookMove['to']): void {
+function requireWay(book: CoefficientBook, to: BookMove['to']): void {
+	const { state, number } = book;
+	// Without the one for everything some mounts could not be assessed; in the place of another it comes.
+	if (state === 'in-force' && to === 'withdrawn' && isGeneral(book)) {
+		throw new AppError(
+			'conflict',
+			`Book ${number} is in force for everything, and is withdrawn when another one takes its place.`
+		);
+	}
 	if (WAYS[state].includes(to)) return;
 	throw new AppError('conflict', `Book ${number} ${NO_WAY[state]}.`);
 }
@@ -128,8 +140,12 @@ function requireSecondPerson({ madeBy }: CoefficientBook, person: SignedInPerson
 	);
 }
 
-async function replaceInForce(book: CoefficientBook, transaction: Transaction): Promise<number | null> {
-	const where = { workshopId: book.workshopId, state: 'in-force' as const };
+/** Of one scope one book is in force. */
+async function replaceInForce(
+	{ workshopId, engineLayout, positionKind }: CoefficientBook,
+	transaction: Transaction
+): Promise<number | null> {
+	const where = { workshopId, engineLayout, positionKind, state: 'in-force' as const };
 	const former = await CoefficientBook.findOne({ where, transaction, lock: transaction.LOCK.UPDATE });
 	await former?.update({ state: 'withdrawn' }, { transaction });
 	return former?.number ?? null;
@@ -144,6 +160,7 @@ export async function moveBook(
 	allow(person, 'books.write');
 	return inTransaction(async (transaction) => {
 		const book = await findBook(person, bookId, transaction);
+		const from = book.state;
 		requireWay(book, to);
 		if (to === 'in-force') requireSecondPerson(book, person);
 		const replaced = to === 'in-force' ? await replaceInForce(book, transaction) : null;
@@ -151,6 +168,8 @@ export async function moveBook(
 		await saveVersioned(book, 'book', version, { state: to, ...hands }, transaction);
 		const told = replaced === null ? {} : { replaced };
 		await recordBy(person, `book.${to}`, subjectOf(book), transaction, { number: book.number, ...told });
+		if (to === 'in-force' || (to === 'withdrawn' && from === 'in-force'))
+			await beginRerun(person, book, to, transaction);
 		return withCoefficients(book);
 	});
 }

@@ -6,6 +6,8 @@ import { bookInForce, coefficientsOf, createFirstBook, getBook, listBooks } from
 
 useTestDatabase();
 
+const UNDER_BONNET = { engineLayout: 'inline', positionKind: 'under-bonnet' } as const;
+
 async function makeShop() {
 	const crew = await makeCrew();
 	const book = await inTransaction((transaction) => createFirstBook(crew.workshopId, transaction));
@@ -15,7 +17,7 @@ async function makeShop() {
 describe('a workshop’s first book', () => {
 	it('is in force and holds the thermal model’s own values, each with its unit and a source', async () => {
 		const { crew } = await makeShop();
-		const book = await bookInForce(crew.installer);
+		const book = await bookInForce(crew.installer, UNDER_BONNET);
 		const defaults = new Map(SCENARIO_FIELDS.map((field) => [`${field.group}.${field.key}`, field]));
 		expect(book).toMatchObject({ number: 1, state: 'in-force' });
 		for (const { group, key, value, unit, meaning, source } of book.coefficients) {
@@ -63,13 +65,13 @@ describe('who may read books', () => {
 		expect(await listBooks(crew.manager)).toMatchObject([{ id: book.id }]);
 		await expect(listBooks(crew.installer)).rejects.toMatchObject({ code: 'not_allowed' });
 		await expect(getBook(crew.installer, book.id)).rejects.toMatchObject({ code: 'not_allowed' });
-		await expect(bookInForce(crew.customer)).rejects.toMatchObject({ code: 'not_allowed' });
+		await expect(bookInForce(crew.customer, UNDER_BONNET)).rejects.toMatchObject({ code: 'not_allowed' });
 	});
 
 	it('nobody sees another workshop’s', async () => {
 		const { book } = await makeShop();
 		const other = await makeCrew();
 		await expect(getBook(other.engineer, book.id)).rejects.toMatchObject({ code: 'not_found' });
-		await expect(bookInForce(other.engineer)).rejects.toMatchObject({ code: 'not_ready' });
+		await expect(bookInForce(other.engineer, UNDER_BONNET)).rejects.toMatchObject({ code: 'not_ready' });
 	});
 });

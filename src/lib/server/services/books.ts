@@ -1,5 +1,5 @@
 import type { Transaction } from 'sequelize';
-import type { BookRow, BookView } from '$lib/schemas/books';
+import { closestBook, type BookRow, type BookView, type MountCase } from '$lib/schemas/books';
 import type { SignedInPerson } from '$lib/schemas/people';
 import type { CoefficientBook as Coefficients } from '$lib/thermal/survey';
 import { Coefficient, CoefficientBook, Person } from '../db/models';
@@ -54,18 +54,18 @@ export async function getBook(person: SignedInPerson, bookId: number): Promise<B
 	return withCoefficients(await findBook(person, bookId));
 }
 
-/** The book that every new assessment and every live curve is made with: whoever may assess may know it. */
-export async function bookInForce(person: SignedInPerson): Promise<BookView> {
+/** The books in force of a workshop: one for everything, and those for an engine layout or a kind of position. */
+export const listInForce = (workshopId: number): Promise<CoefficientBook[]> =>
+	CoefficientBook.findAll({ where: { workshopId, state: 'in-force' } });
+
+export const noBookInForce = (): AppError =>
+	new AppError('not_ready', 'No coefficient book is in force in this workshop, so nothing can be assessed.');
+
+/** The book that a mount's new assessment and its live curve are made with: whoever may assess may know it. */
+export async function bookInForce(person: SignedInPerson, mount: MountCase): Promise<BookView> {
 	allow(person, 'assessments.run');
-	const book = await CoefficientBook.findOne({
-		where: { workshopId: person.workshopId, state: 'in-force' }
-	});
-	if (!book) {
-		throw new AppError(
-			'not_ready',
-			'No coefficient book is in force in this workshop, so nothing can be assessed.'
-		);
-	}
+	const book = closestBook(await listInForce(person.workshopId), mount);
+	if (!book) throw noBookInForce();
 	return withCoefficients(book);
 }
 

@@ -1,19 +1,9 @@
 import type { SignedInPerson } from '$lib/schemas/people';
-import { ScenarioError, showValue, simulateScenario, type SimulationReport } from '$lib/thermal';
+import { simulateScenario, type SimulationReport } from '$lib/thermal';
 import { spend } from '../auth/rate-limit';
 import { AppError } from '../errors';
 import { allow } from '../policies';
-
-/** A scenario that cannot be run, as the input error that it is: where, what, and what would have been right. */
-export function asInputError(error: unknown): unknown {
-	if (error instanceof ScenarioError) {
-		const { code, path, limit, message } = error;
-		return new AppError('invalid_input', message, [
-			{ code, path, value: showValue(error.value), limit, message }
-		]);
-	}
-	return error;
-}
+import { asInputError } from './input-error';
 
 /** A run holds the process while it lasts, so one person may not ask for any number of them. */
 const RUNS = { points: 300, windowS: 10 * 60 };

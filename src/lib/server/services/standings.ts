@@ -7,9 +7,12 @@ import type { AssessedPart, MountStanding } from '$lib/schemas/jobs';
 import { hotDayFields } from '$lib/schemas/places';
 import { surveyAnswersSchema } from '$lib/schemas/survey';
 import { ENGINE_VERSION } from '$lib/thermal';
-import { Assessment, CoefficientBook, type DayPlan, type Job, type Mount } from '../db/models';
+import { closestBook } from '$lib/schemas/books';
+import { Assessment, type DayPlan, type Job, type Mount } from '../db/models';
 import { canonicalJson } from '../hash';
 import { presentHotDay, presentStanding } from '../presenters/jobs';
+import { caseOf } from './assessment-inputs';
+import { listInForce } from './books';
 import { touringYearOf } from './touring-year';
 
 /** What the job is now, in the parts that an assessment keeps. */
@@ -107,8 +110,7 @@ export async function findStandings(
 	mounts: Mount[],
 	dayPlan: DayPlan | null
 ): Promise<MountStanding[]> {
-	const { workshopId } = job;
-	const inForce = await CoefficientBook.findOne({ where: { workshopId, state: 'in-force' } });
+	const inForce = await listInForce(job.workshopId);
 	const newest = await Assessment.findAll({
 		attributes: [[fn('MAX', col('id')), 'id']],
 		where: { jobId: job.id, mountId: mounts.map((mount) => mount.id) },
@@ -127,7 +129,7 @@ export async function findStandings(
 		if (!mount) return [];
 		const changed = [
 			...partsChangedSince(assessment.inputs, { job, mount, dayPlan }),
-			...toolsChangedSince(assessment, inForce?.id)
+			...toolsChangedSince(assessment, closestBook(inForce, caseOf({ vehicle: job.vehicle! }, mount))?.id)
 		];
 		return [presentStanding(assessment, changed)];
 	});

@@ -6,7 +6,7 @@ import type { SignedInPerson } from '$lib/schemas/people';
 import { estimateMonths } from '$lib/thermal/weather';
 import { Assessment, Job } from '../db/models';
 import { findJobParts } from './assessment-inputs';
-import { hashInputs } from './assessment-runs';
+import { hashInputs } from './run-inputs';
 import { assessMount, getAssessment, reproduceAssessment } from './assessments';
 import { getJob, setJobClimate } from './jobs';
 import { readWeather, takeWeather } from './place-weather';

@@ -7,6 +7,7 @@ export {
 	type DayCount,
 	type TouringYear
 } from './cut-out-days';
+export { finishWork } from './finish-work';
 export { findHottestDay } from './hottest-day';
 export { rankInfluences, type Influence, type Influences } from './influence';
 export { PRIORS, type Prior, type Spread } from './priors';

@@ -81,6 +81,10 @@ import { migration as m114 } from './114-coefficients-published';
 import { migration as m115 } from './115-coefficients-kept';
 import { migration as m116 } from './116-coefficients-stay';
 import { migration as m117 } from './117-coefficient-books-ways';
+import { migration as m118 } from './118-coefficient-books-scope';
+import { migration as m119 } from './119-coefficient-books-scope-stays';
+import { migration as m120 } from './120-reruns';
+import { migration as m121 } from './121-rerun-items';
 import { migration as m130 } from './130-traces';
 import { migration as m131 } from './131-trace-loggers';
 import type { Migration } from '../migrate';
@@ -170,6 +174,10 @@ export const migrations: Migration[] = [
 	m115,
 	m116,
 	m117,
+	m118,
+	m119,
+	m120,
+	m121,
 	m130,
 	m131
 ];

@@ -5,7 +5,7 @@ import {
 	type InferCreationAttributes,
 	type Sequelize
 } from 'sequelize';
-import type { BookState } from '$lib/schemas/books';
+import type { BookScope, BookState } from '$lib/schemas/books';
 import {
 	edited,
 	id,
@@ -28,6 +28,8 @@ export class CoefficientBook extends Model<
 	declare name: string;
 	declare state: BookState;
 	declare note: CreationOptional<string>;
+	declare engineLayout: CreationOptional<BookScope['engineLayout']>;
+	declare positionKind: CreationOptional<BookScope['positionKind']>;
 	declare fromBookId: CreationOptional<number | null>;
 	/** Unknown of a workshop's first book, which nobody made. */
 	declare madeBy: CreationOptional<number | null>;
@@ -47,6 +49,8 @@ export function initCoefficientBook(sequelize: Sequelize): void {
 			name: text,
 			state: text,
 			note: textOrEmpty,
+			engineLayout: { ...text, defaultValue: 'any' },
+			positionKind: { ...text, defaultValue: 'any' },
 			fromBookId: optionalReference,
 			madeBy: optionalReference,
 			inForceBy: optionalReference,

@@ -20,6 +20,8 @@ import { CoefficientBook, initCoefficientBook } from './coefficient-book';
 import { Coefficient, initCoefficient } from './coefficient';
 import { Assessment, initAssessment } from './assessment';
 import { AssessmentOutlook, initAssessmentOutlook } from './assessment-outlook';
+import { Rerun, initRerun } from './rerun';
+import { RerunItem, initRerunItem } from './rerun-item';
 import { RemedyList, initRemedyList } from './remedy-list';
 import { PreDrillCheck, initPreDrillCheck } from './pre-drill-check';
 import { Recommendation, initRecommendation } from './recommendation';
@@ -60,6 +62,8 @@ export {
 	Coefficient,
 	Assessment,
 	AssessmentOutlook,
+	Rerun,
+	RerunItem,
 	RemedyList,
 	PreDrillCheck,
 	Recommendation,
@@ -101,6 +105,8 @@ const initialisers = [
 	initCoefficient,
 	initAssessment,
 	initAssessmentOutlook,
+	initRerun,
+	initRerunItem,
 	initRemedyList,
 	initPreDrillCheck,
 	initRecommendation,

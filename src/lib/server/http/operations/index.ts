@@ -4,6 +4,7 @@ import { batteryOperations } from './batteries';
 import { customerOperations } from './customers';
 import { assessmentOperations } from './assessments';
 import { bookOperations } from './books';
+import { rerunOperations } from './reruns';
 import { dayPlanOperations } from './day-plans';
 import { fileOperations } from './files';
 import { erasureOperations } from './erasures';
@@ -42,6 +43,7 @@ export const OPERATIONS: readonly Operation[] = [
 	letterOperations,
 	erasureOperations,
 	bookOperations,
+	rerunOperations,
 	traceOperations,
 	assessmentOperations,
 	recommendationOperations,

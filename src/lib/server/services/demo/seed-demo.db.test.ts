@@ -1,9 +1,20 @@
 import { describe, expect, it } from 'vitest';
 import workshops from '../../../../../seeds/demo-workshops.json';
 import { useTestDatabase } from '../../../../../tests/support/services';
-import { Assessment, Customer, Job, Person, Place, Recommendation, Trace, Workshop } from '../../db/models';
+import {
+	Assessment,
+	Customer,
+	Job,
+	Person,
+	Place,
+	Recommendation,
+	RerunItem,
+	Trace,
+	Workshop
+} from '../../db/models';
 import { reproduceAssessment } from '../assessments';
 import { findBreak } from '../audit';
+import { finishReruns } from '../reruns/run-reruns';
 import { fillWithDemo, seedDemo } from './seed-demo';
 import { VERDICTS } from '$lib/schemas/verdicts';
 import type { SignedInPerson } from '$lib/schemas/people';
@@ -47,6 +58,9 @@ describe('the demo workshop', () => {
 			const withoutBms = assessments.filter(({ result }) => result.leadAcid);
 			expect(new Set(withoutBms.map(({ jobId }) => jobId)).size).toBe(1);
 			expect(withoutBms).toHaveLength(2);
+			// A book for some mounts came into force, and changed what was said of one.
+			await finishReruns();
+			expect(await RerunItem.findAll({ where })).toMatchObject([{ state: 'done', verdictChanged: true }]);
 			// Three traces that were made up are at hand, and say so.
 			const traces = await Trace.findAll({ where });
 			expect(traces.map(({ state, isSynthetic }) => [state, Boolean(isSynthetic)])).toEqual(

@@ -2,6 +2,7 @@ import { connection } from '../../db/connection';
 import { Workshop } from '../../db/models';
 import { withNamedLock } from '../../db/named-lock';
 import { inTransaction } from '../../db/transaction';
+import { seedBooks } from './seed-books';
 import { seedJobs } from './seed-jobs';
 import { seedCrews, seedCustomerSignIns } from './seed-people';
 import { seedShelves } from './seed-shelves';
@@ -15,6 +16,7 @@ export async function fillWithDemo(): Promise<number> {
 			await seedShelves(crew, transaction);
 			jobs += await seedJobs(crew, transaction);
 			await seedCustomerSignIns(crew, transaction);
+			await seedBooks(crew);
 			await seedTraces(crew, transaction);
 		}
 		return jobs;

@@ -7,16 +7,20 @@ import { validate } from '$lib/server/http/validate';
 import { mayDo } from '$lib/server/policies';
 import { moveBook } from '$lib/server/services/book-changes';
 import { getBook, listBooks } from '$lib/server/services/books';
+import { listReruns } from '$lib/server/services/reruns/reruns';
 import type { Actions, PageServerLoad } from './$types';
 
 export const load: PageServerLoad = async (event) => {
 	const person = guard(event, 'books.read');
-	const [book, books] = await Promise.all([
-		orPageError(getBook(person, pageId(event.params.bookId))),
-		orPageError(listBooks(person))
+	const bookId = pageId(event.params.bookId);
+	const [book, books, reruns] = await Promise.all([
+		orPageError(getBook(person, bookId)),
+		orPageError(listBooks(person)),
+		orPageError(listReruns(person, bookId))
 	]);
 	return {
 		book,
+		reruns,
 		others: books.filter(({ id }) => id !== book.id),
 		mayWrite: mayDo(person, 'books.write'),
 		isOwn: book.madeById === person.id,
