@@ -10,6 +10,7 @@ await build({
 	configFile: false,
 	root: PROJECT,
 	logLevel: 'error',
+	resolve: { alias: { $lib: join(PROJECT, 'src', 'lib') } },
 	build: {
 		ssr: 'src/cli/bench.ts',
 		outDir,

@@ -1,29 +1,37 @@
 import { fork, type ChildProcess } from 'node:child_process';
 import { once } from 'node:events';
-import { cpus } from 'node:os';
+import { mkdtemp, rm } from 'node:fs/promises';
+import { cpus, tmpdir } from 'node:os';
+import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { findMedian, formatTable } from './lib/bench-table';
 import { CONTENDERS, DAYS, findTruth, type Contender } from './lib/bench-contenders';
+import { readTraceFile, TRACE_ROWS, writeTraceFile, type TraceRead } from './lib/bench-trace';
 import { LONG_RUNS, WORKLOADS } from './lib/bench-workloads';
 
 const ROUNDS = 9;
+const MEGABYTE = 1024 * 1024;
 const SELF = fileURLToPath(import.meta.url);
 /** Young memory so large that nothing is collected while a run is watched. */
 const WATCHED = ['--expose-gc', '--max-semi-space-size=64'];
 
 /** What a process of its own is asked for, and how it answers. */
-type Request = { warmUp: number } | { day: number } | { workload: number } | { hours: number };
+type Request =
+	{ warmUp: number } | { day: number } | { workload: number } | { hours: number } | { trace: string };
 
 /** One contender in a process of its own, so that none runs on what another has done to the compiler. */
 async function serve(name: string): Promise<void> {
 	const contender = await CONTENDERS[name]?.();
-	process.on('message', (request: Request) => process.send?.(answer(request, contender)));
+	process.on('message', (request: Request) => {
+		void answer(request, contender).then((told) => process.send?.(told));
+	});
 }
 
-function answer(request: Request, contender: Contender | undefined): unknown {
+async function answer(request: Request, contender: Contender | undefined): Promise<unknown> {
 	if ('warmUp' in request) return contender!.warmUp(request.warmUp) ?? null;
 	if ('day' in request) return contender!.time(request.day);
 	if ('workload' in request) return WORKLOADS[request.workload]!.time();
+	if ('trace' in request) return readTraceFile(request.trace);
 	return LONG_RUNS.watch(request.hours);
 }
 
@@ -107,6 +115,32 @@ async function watchLongRuns(): Promise<void> {
 	console.log(`\nThe same day over and over, for its outcome alone:\n${formatTable(rows)}`);
 }
 
+/** Each file in a process of its own, whose peak of memory is then that file's. */
+async function readTraces(): Promise<void> {
+	const rows = [['rows of a trace', 'MB', 's', 'rows a second', 'peak memory MB']];
+	const folder = await mkdtemp(join(tmpdir(), 'soakline-bench-'));
+	try {
+		for (const count of TRACE_ROWS) {
+			const path = join(folder, `${count}.csv`);
+			const bytes = await writeTraceFile(path, count);
+			const child = fork(SELF, ['trace']);
+			const { ms, kept, peakBytes } = await ask<TraceRead>(child, { trace: path });
+			child.disconnect();
+			if (kept !== count) throw new Error(`${kept} of ${count} rows were kept.`);
+			rows.push([
+				String(count),
+				(bytes / MEGABYTE).toFixed(1),
+				(ms / 1000).toFixed(2),
+				String(Math.round(count / (ms / 1000))),
+				(peakBytes / MEGABYTE).toFixed(0)
+			]);
+		}
+	} finally {
+		await rm(folder, { recursive: true });
+	}
+	console.log(`\nA logger's file, read as it comes from the disk:\n${formatTable(rows)}`);
+}
+
 const [role] = process.argv.slice(2);
 if (role) await serve(role);
 else {
@@ -114,4 +148,5 @@ else {
 	await compareDays();
 	await timeWorkloads();
 	await watchLongRuns();
+	await readTraces();
 }

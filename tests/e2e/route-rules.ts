@@ -65,6 +65,10 @@ const CLIMATE = { placeId: 1, hotDayMaxC: 40, dailyRangeK: 15, sunPeakWPerM2: 10
 const SURVEY = { survey: { positionKind: 'cabin' }, complete: false, version: 0 };
 const FITTING = { fittedOn: '2026-01-05', fittedBy: 'Nobody', differences: [], version: null };
 const OWN_ZONE = { name: 'None', position: 1, rule: 'latitude', fromValue: 0, toValue: 1, version: 0 };
+const MAPPING = {
+	...{ version: 1, delimiter: ',', decimal: '.', time: { kind: 'elapsed-s', column: 1 } },
+	columns: [{ column: 2, channel: 'cellC', unit: '°C' }]
+};
 const FIELD_NOTE = { kind: 'inspection', notedOn: '2026-01-06', words: 'Nothing' };
 
 const page = (route: string, audience: Audience, ...methods: string[]): RouteRule => ({
@@ -143,15 +147,16 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 	owned('/books/[bookId]', 'bench', 'move'),
 	owned('/books/[bookId]/[coefficient=coefficient]', 'bench', 'default'),
 	owned('/books/[bookId]/against/[otherId]', 'bench'),
-<<<<<<< HEAD
 	page('/accuracy', 'bench'),
 	page('/accuracy/readings.csv', 'bench'),
-=======
 	page('/reruns', 'bench'),
 	owned('/reruns/[rerunId]', 'bench', 'move'),
 	owned('/reruns/[rerunId]/progress', 'bench'),
 	owned('/reruns/[rerunId]/[itemId]', 'bench', 'letter', 'otherwise'),
->>>>>>> main
+	page('/traces', 'bench'),
+	owned('/traces/[traceId]', 'bench', 'read', 'legs', 'plan', 'remove'),
+	owned('/traces/[traceId]/progress', 'bench'),
+	owned('/mounts/[mountId]/traces', 'bench', 'add', 'restore'),
 	page('/people', 'manager', 'invite', 'again', 'withdraw'),
 	owned('/people/[personId]', 'manager', 'role', 'resetFactor', 'leave', 'comeBack'),
 	{ ...page('/second-factor', 'workshop', 'begin', 'confirm', 'renew', 'off'), leadsOn: true },
@@ -247,17 +252,27 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 		PUT: { value: 0.6, origin: 'judgement', source: 'None.', version: 0 }
 	}),
 	ownedApi('/books/[bookId]/against/[otherId]', 'bench', { GET: null }),
-<<<<<<< HEAD
 	api('/accuracy', 'bench', 'GET'),
 	api('/accuracy/readings', 'bench', 'GET'),
-=======
 	api('/reruns', 'bench', 'GET'),
 	ownedApi('/reruns/[rerunId]', 'bench', { GET: null }),
 	ownedApi('/reruns/[rerunId]/state', 'bench', { PUT: { to: 'cancelled' } }),
 	ownedApi('/reruns/[rerunId]/changes', 'bench', { GET: null }),
 	ownedApi('/reruns/[rerunId]/left', 'bench', { GET: null }),
 	ownedApi('/reruns/[rerunId]/changes/[itemId]/telling', 'bench', { POST: { how: 'otherwise' } }),
->>>>>>> main
+	api('/traces', 'bench', 'GET'),
+	ownedApi('/mounts/[mountId]/traces', 'bench', { GET: null, POST: null }),
+	ownedApi('/traces/[traceId]', 'bench', { GET: null, DELETE: null }),
+	ownedApi('/traces/[traceId]/mapping', 'bench', { PUT: { mapping: MAPPING, version: 0 } }),
+	ownedApi('/traces/[traceId]/curve', 'bench', { GET: null }),
+	ownedApi('/traces/[traceId]/legs', 'bench', {
+		GET: null,
+		PUT: { legs: [{ endS: 60, kind: 'stopped' }], version: 0 }
+	}),
+	ownedApi('/traces/[traceId]/day-plan', 'bench', {
+		PUT: { name: 'None', startSoc: 60, chargerMaxA: 40, version: null }
+	}),
+	ownedApi('/traces/[traceId]/restore', 'bench', { POST: null }),
 	api('/simulations', 'workshop', 'POST'),
 	api('/people', 'manager', 'GET'),
 	ownedApi('/people/[personId]/role', 'manager', { PUT: { role: 'engineer', version: 0 } }),

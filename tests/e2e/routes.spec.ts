@@ -93,6 +93,7 @@ async function findIds(
 	const reruns = await read<{ rows: Record[] }>(context, '/api/v1/reruns');
 	const rerunId = of(reruns.rows.at(-1));
 	const changes = await read<{ rows: Record[] }>(context, `/api/v1/reruns/${rerunId}/changes`);
+	const traces = await read<{ rows: (Record & { state: string })[] }>(context, '/api/v1/traces');
 	const jobPage = await (await context.get(`/jobs/${jobId}/recommendation`)).text();
 	const mailbox = await (await context.get('/mailbox')).text();
 	const recommendationId = /\/recommendations\/(\d+)\/print/.exec(jobPage)?.[1] ?? 'none';
@@ -125,6 +126,7 @@ async function findIds(
 		vehicleId: of(job.vehicle),
 		bookId: of(books.rows[0]),
 		otherId: of(books.rows[0]),
+		traceId: of(traces.rows.find(({ state }) => state === 'read')),
 		coefficient: 'bay.share',
 		rerunId,
 		itemId: of(changes.rows[0]),

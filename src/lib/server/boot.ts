@@ -8,11 +8,8 @@ import { startOutbox, stopOutbox } from './mail/outbox';
 import { clearExpired, startClearing, stopClearing } from './services/clear-expired';
 import { seedDemo } from './services/demo/seed-demo';
 import { startReminders, stopReminders } from './services/reminders';
-<<<<<<< HEAD
 import { completeChecks } from './services/accuracy/complete-checks';
-=======
 import { startReruns, stopReruns } from './services/reruns/run-reruns';
->>>>>>> main
 import { completeReviews } from './services/review/keep-review';
 
 /** Kept on globalThis so that a development reload, which loads this module again, does not forget it. */

@@ -1,6 +1,8 @@
 /** What became of one sending: kept, refused in words, or broken off on the way, which may be tried again. */
 export type Sent =
-	{ kind: 'kept' } | { kind: 'refused'; sentence: string } | { kind: 'broken'; sentence: string };
+	| { kind: 'kept'; /** What was answered. */ text?: string }
+	| { kind: 'refused'; sentence: string }
+	| { kind: 'broken'; sentence: string };
 
 export interface Sending {
 	/** From 0 to 1, of what has left this device. */
@@ -25,7 +27,7 @@ function readDetail(text: string): string {
 }
 
 function tell({ status, responseText }: XMLHttpRequest): Sent {
-	if (status >= 200 && status < 300) return { kind: 'kept' };
+	if (status >= 200 && status < 300) return { kind: 'kept', text: responseText };
 	const sentence = readDetail(responseText) || `The workshop answered with ${status}.`;
 	return { kind: MAY_PASS(status) ? 'broken' : 'refused', sentence };
 }

@@ -37,6 +37,8 @@ export const RULES = {
 	'books.write': BENCH,
 	'reruns.read': BENCH,
 	'reruns.write': BENCH,
+	'traces.read': BENCH,
+	'traces.write': BENCH,
 	'review.read': MANAGER,
 	'own-zones.write': MANAGER,
 	'mailbox.read': WORKSHOP,

@@ -45,6 +45,8 @@ const EXPECTED: Record<Action, string> = {
 	'books.write': 'em',
 	'reruns.read': 'em',
 	'reruns.write': 'em',
+	'traces.read': 'em',
+	'traces.write': 'em',
 	'review.read': 'm',
 	'own-zones.write': 'm',
 	'mailbox.read': 'iem',

@@ -12,6 +12,7 @@ import type {
 	Session,
 	Sheet,
 	StoredFile,
+	Trace,
 	Vehicle
 } from '../db/models';
 
@@ -27,6 +28,7 @@ export interface HeldRows {
 	questions: { jobId: number; thread: Question[] }[];
 	letters: OutgoingMail[];
 	files: StoredFile[];
+	traces: Trace[];
 	story: MyVehicle[];
 	erasure: MyErasure | null;
 }
@@ -64,6 +66,11 @@ const presentFile = (file: StoredFile) => ({
 	inThisParcel: pathOfFile(file)
 });
 
+const presentMeasurement = ({ name, createdAt, span, isSynthetic }: Trace) => ({
+	...{ file: name, addedAt: iso(createdAt), madeUp: Boolean(isSynthetic) },
+	measured: span?.channels ?? []
+});
+
 /** Where the content of a file lies in the parcel. */
 export const pathOfFile = ({ id, kind }: StoredFile): string =>
 	kind === 'photo' ? `files/photo-${id}.jpg` : `files/document-${id}.pdf`;
@@ -81,6 +88,7 @@ export function presentHeldData(held: HeldRows) {
 		questions,
 		letters,
 		files,
+		traces,
 		story
 	} = held;
 	return {
@@ -100,7 +108,8 @@ export function presentHeldData(held: HeldRows) {
 			estimates: assessments.filter(({ jobId }) => jobId === id).map(presentAssessment),
 			pages: sheets.filter(({ jobId }) => jobId === id).map(presentSheet),
 			questions: questions.find(({ jobId }) => jobId === id)?.thread ?? [],
-			photosAndDocuments: files.filter(({ jobId }) => jobId === id).map(presentFile)
+			photosAndDocuments: files.filter(({ jobId }) => jobId === id).map(presentFile),
+			measurements: traces.filter(({ jobId }) => jobId === id).map(presentMeasurement)
 		})),
 		letters: letters.map(presentLetter),
 		whatHappened: story.map(({ name, history, lessons }) => ({ vehicle: name, history, lessons })),

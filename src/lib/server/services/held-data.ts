@@ -11,6 +11,7 @@ import {
 	Session,
 	Sheet,
 	StoredFile,
+	Trace,
 	Vehicle
 } from '../db/models';
 import { Op } from 'sequelize';
@@ -57,6 +58,11 @@ async function readHeld(person: SignedInPerson): Promise<HeldRows> {
 			order: [['id', 'ASC']]
 		}),
 		files: await StoredFile.findAll({ where: { jobId: jobIds, removedAt: null }, order: [['id', 'ASC']] }),
+		traces: await Trace.findAll({
+			where: { jobId: jobIds, removedAt: null },
+			attributes: ['jobId', 'name', 'createdAt', 'span', 'isSynthetic'],
+			order: [['id', 'ASC']]
+		}),
 		story: await listMyVehicles(person),
 		erasure: await getMyErasure(person)
 	};

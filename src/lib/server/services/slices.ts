@@ -6,6 +6,16 @@ function giveWay(): Promise<void> {
 	return new Promise((resolve) => setImmediate(resolve));
 }
 
+/** For work that comes piece by piece: asked after each, it lets others go first whenever its slice is over. */
+export function makePace(): () => Promise<void> {
+	let until = performance.now() + SLICE_MS;
+	return async () => {
+		if (performance.now() < until) return;
+		await giveWay();
+		until = performance.now() + SLICE_MS;
+	};
+}
+
 /**
  * Drives long work to its end in slices, so that requests are answered between them.
  *

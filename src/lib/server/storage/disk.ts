@@ -4,6 +4,8 @@ import { join } from 'node:path';
 import { STORAGE_KEY, type Storage, type StoredContent } from './storage';
 
 const FOLDER_LETTERS = 2;
+/** Of a content that is read piece by piece. */
+const PIECE_BYTES = 64 * 1024;
 
 function requireKey(key: string): string {
 	if (!STORAGE_KEY.test(key)) throw new Error(`"${key}" is not a key of the storage.`);
@@ -17,6 +19,16 @@ async function writeThrough(path: string, content: Uint8Array): Promise<void> {
 	const handle = await open(path, 'wx', 0o600);
 	try {
 		await handle.writeFile(content);
+		await handle.sync();
+	} finally {
+		await handle.close();
+	}
+}
+
+/** To the disk itself, as with what is written here. */
+async function syncFile(path: string): Promise<void> {
+	const handle = await open(path, 'r+');
+	try {
 		await handle.sync();
 	} finally {
 		await handle.close();
@@ -55,6 +67,22 @@ export function diskStorage(root: string): Storage {
 				await syncFolder(folder);
 			} catch (error) {
 				await rm(unfinished, { force: true });
+				throw error;
+			}
+		},
+		async putFile(key, path) {
+			const folder = folderOf(key);
+			await mkdir(folder, { recursive: true, mode: 0o700 });
+			await syncFile(path);
+			await rename(path, pathOf(key));
+			await syncFolder(folder);
+		},
+		async readPieces(key) {
+			try {
+				const handle = await open(pathOf(key), 'r');
+				return handle.createReadStream({ highWaterMark: PIECE_BYTES }) as AsyncIterable<Uint8Array>;
+			} catch (error) {
+				if (isMissing(error)) return null;
 				throw error;
 			}
 		},

@@ -11,6 +11,10 @@ export interface StoredContent {
 export interface Storage {
 	/** Keeps a content, whole or not at all. */
 	put(key: string, content: Uint8Array): Promise<void>;
+	/** Keeps a file that has come in by moving it: however large it is, nothing of it is held. */
+	putFile(key: string, path: string): Promise<void>;
+	/** A content piece by piece; null where nothing is kept under the key. */
+	readPieces(key: string): Promise<AsyncIterable<Uint8Array> | null>;
 	/** Null where nothing is kept under the key. */
 	read(key: string): Promise<Buffer | null>;
 	/** To remove what is not there is no fault. */

@@ -83,12 +83,11 @@ import { migration as m116 } from './116-coefficients-stay';
 import { migration as m117 } from './117-coefficient-books-ways';
 import { migration as m118 } from './118-coefficient-books-scope';
 import { migration as m119 } from './119-coefficient-books-scope-stays';
-<<<<<<< HEAD
-import { migration as m160 } from './160-prediction-checks';
-=======
 import { migration as m120 } from './120-reruns';
 import { migration as m121 } from './121-rerun-items';
->>>>>>> main
+import { migration as m130 } from './130-traces';
+import { migration as m131 } from './131-trace-loggers';
+import { migration as m160 } from './160-prediction-checks';
 import type { Migration } from '../migrate';
 
 /** Every migration, in the order in which they run; each is one DDL step that may run again. */
@@ -178,10 +177,9 @@ export const migrations: Migration[] = [
 	m117,
 	m118,
 	m119,
-<<<<<<< HEAD
-	m160
-=======
 	m120,
-	m121
->>>>>>> main
+	m121,
+	m130,
+	m131,
+	m160
 ];

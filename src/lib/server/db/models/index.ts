@@ -32,6 +32,8 @@ import { FollowUp, initFollowUp } from './follow-up';
 import { FieldNote, initFieldNote } from './field-note';
 import { CustomerMessage, initCustomerMessage } from './customer-message';
 import { StoredFile, initStoredFile } from './stored-file';
+import { Trace, initTrace } from './trace';
+import { TraceLogger, initTraceLogger } from './trace-logger';
 import { Erasure, initErasure } from './erasure';
 import { OwnZone, initOwnZone } from './own-zone';
 import { OutgoingMail, initOutgoingMail } from './outgoing-mail';
@@ -72,6 +74,8 @@ export {
 	FieldNote,
 	CustomerMessage,
 	StoredFile,
+	Trace,
+	TraceLogger,
 	Erasure,
 	OwnZone,
 	OutgoingMail,
@@ -113,6 +117,8 @@ const initialisers = [
 	initFieldNote,
 	initCustomerMessage,
 	initStoredFile,
+	initTrace,
+	initTraceLogger,
 	initErasure,
 	initOwnZone,
 	initOutgoingMail,

@@ -24,6 +24,7 @@ import { reviewOperations } from './review';
 import { sheetOperations } from './sheets';
 import { shopOperations } from './shop';
 import { simulationOperations } from './simulations';
+import { traceOperations } from './traces';
 import { vehicleOperations } from './vehicles';
 
 /** Everything that the API does. A route without an entry here, or an entry without a route, fails a test. */
@@ -43,11 +44,9 @@ export const OPERATIONS: readonly Operation[] = [
 	letterOperations,
 	erasureOperations,
 	bookOperations,
-<<<<<<< HEAD
 	accuracyOperations,
-=======
 	rerunOperations,
->>>>>>> main
+	traceOperations,
 	assessmentOperations,
 	recommendationOperations,
 	remedyOperations,

@@ -9,6 +9,7 @@ import {
 	Place,
 	Recommendation,
 	RerunItem,
+	Trace,
 	Workshop
 } from '../../db/models';
 import { reproduceAssessment } from '../assessments';
@@ -60,6 +61,11 @@ describe('the demo workshop', () => {
 			// A book for some mounts came into force, and changed what was said of one.
 			await finishReruns();
 			expect(await RerunItem.findAll({ where })).toMatchObject([{ state: 'done', verdictChanged: true }]);
+			// Three traces that were made up are at hand, and say so.
+			const traces = await Trace.findAll({ where });
+			expect(traces.map(({ state, isSynthetic }) => [state, Boolean(isSynthetic)])).toEqual(
+				Array(3).fill(['read', true])
+			);
 			const manager = await findManager(demo);
 			for (const { id } of assessments)
 				expect(await reproduceAssessment(manager, id)).toMatchObject({ same: true });

@@ -6,6 +6,7 @@ import { seedBooks } from './seed-books';
 import { seedJobs } from './seed-jobs';
 import { seedCrews, seedCustomerSignIns } from './seed-people';
 import { seedShelves } from './seed-shelves';
+import { seedTraces } from './seed-traces';
 
 /** Puts the invented workshops in, all of them or nothing, and says how many jobs that makes. */
 export async function fillWithDemo(): Promise<number> {
@@ -16,6 +17,7 @@ export async function fillWithDemo(): Promise<number> {
 			jobs += await seedJobs(crew, transaction);
 			await seedCustomerSignIns(crew, transaction);
 			await seedBooks(crew);
+			await seedTraces(crew, transaction);
 		}
 		return jobs;
 	});

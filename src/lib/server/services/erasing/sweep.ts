@@ -14,7 +14,8 @@ import {
 	Recommendation,
 	Session,
 	SignInLink,
-	StoredFile
+	StoredFile,
+	Trace
 } from '../../db/models';
 import { canonicalJson, newToken, sha256, tokenHash } from '../../hash';
 import type { Persona } from './find-persona';
@@ -143,6 +144,18 @@ const eraseFromField: Step = async ({ ids, installationIds, scrub }, transaction
 const eraseFiles: Step = ({ ids }, transaction) =>
 	StoredFile.destroy({ where: { mountId: ids.mounts }, transaction });
 
+/** What a logger measured names nobody; what the file was called, and its first rows as they stood, may. */
+const eraseFromTraces: Step = async ({ ids, scrub }, transaction) => {
+	await rewrite(
+		await Trace.findAll({ where: { jobId: ids.jobs }, transaction }),
+		({ name, proposal }) => ({
+			name: scrub.free(name),
+			proposal: { ...scrub.freeJson(proposal), firstRows: [] }
+		}),
+		transaction
+	);
+};
+
 const TO_SHOP = new Set(['question', 'erasure-asked']);
 
 /** The sending log keeps that something was sent, and when; what waits is not sent any more. */
@@ -190,5 +203,5 @@ const eraseFormerRequests: Step = async ({ customer, scrub }, transaction) => {
  */
 export const STEPS: readonly Step[] = [
 	...[eraseSignIn, eraseFromPlans, eraseFromPapers, eraseFromSheets, eraseMessages, eraseFromField],
-	...[eraseFiles, eraseLetters, eraseKeptAnswers, eraseFormerRequests, eraseContact]
+	...[eraseFiles, eraseFromTraces, eraseLetters, eraseKeptAnswers, eraseFormerRequests, eraseContact]
 ];

@@ -4,6 +4,7 @@ import { AppError } from '$lib/server/errors';
 import { loadForm, readPageForm, saveForm } from '$lib/server/http/forms';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { pageId } from '$lib/server/http/page-id';
+import { mayDo } from '$lib/server/policies';
 import { assessJob } from '$lib/server/services/assessments';
 import { listMountPictures } from '$lib/server/services/files';
 import { getJob } from '$lib/server/services/jobs';
@@ -33,7 +34,8 @@ export const load: PageServerLoad = async (event) => {
 	const toAnswer = chooseQuestion(questions, event.url.searchParams.get('question'));
 	const recommendedMountId = recommendation?.assessment.mountId ?? null;
 	const answerForm = await loadForm(answerFormSchema);
-	return { job, questions, letters, pictures, toAnswer, answerForm, recommendedMountId };
+	const hasTraces = mayDo(person, 'traces.read');
+	return { job, questions, letters, pictures, toAnswer, answerForm, recommendedMountId, hasTraces };
 };
 
 export const actions: Actions = {
