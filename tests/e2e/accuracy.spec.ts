@@ -1,0 +1,52 @@
+import { expect, test } from '@playwright/test';
+import { expectNoViolations, signInAs } from './support';
+
+for (const role of ['engineer', 'manager'] as const) {
+	test(`the ${role} sees how the predictions did, the furthest off first, each with its mount`, async ({
+		page
+	}) => {
+		test.slow();
+		await signInAs(page, role);
+		await page.goto('/accuracy');
+		await expect(page.getByRole('heading', { level: 1, name: 'How good are we?' })).toBeVisible();
+		await expect(page.getByRole('heading', { level: 2, name: 'Cut-outs' })).toBeVisible();
+		await expect(page.getByText('People report trouble more often than quiet')).toBeVisible();
+		await expectNoViolations(page);
+
+		const rows = page.getByRole('table', { name: /^Single readings/ }).getByRole('row');
+		await expect(rows.nth(1)).toBeVisible();
+		const assessment = rows.nth(1).getByRole('link', { name: /^Assessment \d+$/ });
+		await assessment.click();
+		await expect(page).toHaveURL(/\/assessments\/\d+$/);
+		await page.goBack();
+		await rows.nth(1).getByRole('link').first().click();
+		await expect(page).toHaveURL(/\/mounts\/\d+\/field$/);
+	});
+}
+
+test('readings are narrowed down in the address, with and without a script, and taken along as a table', async ({
+	page,
+	browser,
+	baseURL
+}) => {
+	await signInAs(page, 'engineer');
+	await page.goto('/accuracy');
+	await page.getByLabel('Kind of reading').selectOption('Only peak labels');
+	await expect(page).toHaveURL(/kind=label/);
+	const rows = page.getByRole('table', { name: /^Single readings/ }).getByRole('row');
+	for (const text of (await rows.allInnerTexts()).slice(1)) expect(text).toContain('Label');
+	const [file] = await Promise.all([
+		page.waitForEvent('download'),
+		page.getByRole('link', { name: 'Readings (CSV)' }).click()
+	]);
+	expect(file.suggestedFilename()).toBe('readings.csv');
+
+	const context = await browser.newContext({ baseURL: baseURL!, javaScriptEnabled: false });
+	const plain = await context.newPage();
+	await signInAs(plain, 'manager');
+	await plain.goto('/accuracy?kind=label&position=chassis-rail');
+	await expect(plain.getByText('No reading is like that')).toBeVisible();
+	await plain.getByRole('link', { name: 'Show all readings' }).click();
+	await expect(plain.getByRole('table', { name: /^Single readings/ })).toBeVisible();
+	await context.close();
+});
