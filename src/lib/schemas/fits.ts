@@ -47,7 +47,9 @@ export const fitInputSchema = z.object({
 	coefficients: z
 		.array(fitCoefficientSchema)
 		.min(1, { error: 'Choose at least one coefficient.' })
-		.max(MOST_FIT_COEFFICIENTS, { error: `At most ${MOST_FIT_COEFFICIENTS} coefficients are fitted together.` }),
+		.max(MOST_FIT_COEFFICIENTS, {
+			error: `At most ${MOST_FIT_COEFFICIENTS} coefficients are fitted together.`
+		}),
 	loss: z.enum(FIT_LOSSES).default('soft-l1'),
 	leaveOut: z.boolean().default(true).meta({ description: 'Whether to fit without each trace in turn' })
 });

@@ -18,7 +18,9 @@ const round = (value: number): number => Number(value.toPrecision(SIGNIFICANT));
 function sayFigure(value: number): string {
 	const rounded = round(value);
 	const decimals = Math.max(0, SIGNIFICANT - 1 - Math.floor(Math.log10(Math.abs(rounded) || 1)));
-	return formatNumber(rounded, Math.min(decimals, 6)).replace(/(\.\d*?)0+$/, '$1').replace(/\.$/, '');
+	return formatNumber(rounded, Math.min(decimals, 6))
+		.replace(/(\.\d*?)0+$/, '$1')
+		.replace(/\.$/, '');
 }
 
 /** Where a fitted value comes from: the fit, its traces, and between what it lies. */
@@ -58,7 +60,11 @@ export async function draftFittedBook(
 		const book = await draftBook(person, { fromBookId, ...words, positionKind });
 		for (const estimate of result.estimates) {
 			const { group: fieldGroup, key: fieldKey } = estimate;
-			const fitted = { value: round(estimate.value), origin: 'fitted', source: sourceOf(fit, estimate) } as const;
+			const fitted = {
+				value: round(estimate.value),
+				origin: 'fitted',
+				source: sourceOf(fit, estimate)
+			} as const;
 			const where = { bookId: book.id, fieldGroup, fieldKey };
 			await Coefficient.update({ ...fitted, fitId }, { where, transaction });
 		}

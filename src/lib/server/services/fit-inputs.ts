@@ -11,8 +11,10 @@ import {
 	type TraceLeg
 } from '$lib/thermal/traces';
 import { Assessment, type Trace } from '../db/models';
+import { EngineInputError } from '$lib/thermal/correlations/require';
 import { AppError } from '../errors';
 import { startHourOf } from '../presenters/traces';
+import { asInputError } from './input-error';
 import { openBins } from './trace-views';
 import { findTrace } from './traces';
 
@@ -24,6 +26,13 @@ export function sayUnfit(trace: Trace, assessment: Assessment | null): string {
 	if (trace.state !== 'read') return 'it has not been read yet';
 	if (startHourOf(trace) === null) return 'nobody said at which time of day it begins';
 	return assessment ? '' : 'its mount has not been assessed yet';
+}
+
+/** What the engine refuses, as the input error that it is; anything else is a fault of ours. */
+export function asFitError(error: unknown): unknown {
+	if (!(error instanceof EngineInputError)) return asInputError(error);
+	const { message, input: path, limit } = error;
+	return new AppError('invalid_input', message, [{ path, message, limit }]);
 }
 
 /** The newest assessment of each mount. */
@@ -71,7 +80,11 @@ function requireLegs({ legs, name }: Trace, heldOut: readonly number[], path: st
 }
 
 /** A trace with the scenario that its mount was assessed with, its legs as the day, and the air as it was measured. */
-async function toFit(trace: Trace, assessment: Assessment, heldOutLegs: readonly number[]): Promise<TraceToFit> {
+async function toFit(
+	trace: Trace,
+	assessment: Assessment,
+	heldOutLegs: readonly number[]
+): Promise<TraceToFit> {
 	const bins = await openBins(trace);
 	const startHour = startHourOf(trace)!;
 	const known = parseScenario(assessment.inputs.scenario);

@@ -13,9 +13,8 @@ import type { NameOf } from '../presenters/books';
 import { presentFit, presentFitRow } from '../presenters/fits';
 import { record, recordBy } from './audit';
 import { coefficientsOf, listInForce, noBookInForce, withCoefficients } from './books';
-import { gatherFit, newestAssessments, sayUnfit } from './fit-inputs';
+import { asFitError, gatherFit, newestAssessments, sayUnfit } from './fit-inputs';
 import { listFitChoices } from './fit-priors';
-import { asInputError } from './input-error';
 import { afterOthers, workInSlices } from './slices';
 import { listTraces } from './traces';
 
@@ -28,7 +27,10 @@ async function namesOf(fits: readonly Fit[]): Promise<NameOf> {
 
 async function showFit(fit: Fit): Promise<FitView> {
 	const ids = fit.inputs.traces.map(({ traceId }) => traceId);
-	const traces = await Trace.findAll({ where: { id: ids, removedAt: null }, attributes: ['id', 'name', 'isSynthetic'] });
+	const traces = await Trace.findAll({
+		where: { id: ids, removedAt: null },
+		attributes: ['id', 'name', 'isSynthetic']
+	});
 	return presentFit(fit, traces, await namesOf([fit]));
 }
 
@@ -86,7 +88,7 @@ function requireFittable(input: CoefficientFitInput): void {
 	try {
 		work.next();
 	} catch (error) {
-		throw asInputError(error);
+		throw asFitError(error);
 	} finally {
 		work.return(undefined as never);
 	}
@@ -137,7 +139,10 @@ const running = new Map<number, Running>();
 class CalledOff extends Error {}
 
 /** The same work, until it is called off. */
-function* untilStopped(work: Generator<number, CoefficientFit>, signal: AbortSignal): Generator<number, CoefficientFit> {
+function* untilStopped(
+	work: Generator<number, CoefficientFit>,
+	signal: AbortSignal
+): Generator<number, CoefficientFit> {
 	for (let step = work.next(); ; step = work.next()) {
 		if (step.done) return step.value;
 		if (signal.aborted) throw new CalledOff();
@@ -179,20 +184,19 @@ async function work(fit: Fit, tell: (share: number) => void, signal: AbortSignal
 		await settle(fit, { state: 'failed', failure: fitted.reason });
 	} catch (error) {
 		if (error instanceof CalledOff) return;
-		const said = error instanceof AppError ? error : toAppError(error);
+		const said = asFitError(error);
+		if (!(said instanceof AppError)) throw error;
 		await settle(fit, { state: 'failed', failure: said.message.slice(0, LONGEST_FAILURE) });
 	}
 }
 
-/** What the engine refuses is said in words; anything else is a fault of ours. */
-function toAppError(error: unknown): AppError {
-	const said = asInputError(error);
-	if (said instanceof AppError) return said;
-	throw error;
-}
-
 function begin(fit: Fit): Running {
-	const now: Running = { done: Promise.resolve(), share: 0, listeners: new Set(), stop: new AbortController() };
+	const now: Running = {
+		done: Promise.resolve(),
+		share: 0,
+		listeners: new Set(),
+		stop: new AbortController()
+	};
 	const tell = (share: number): void => {
 		now.share = share;
 		for (const listener of now.listeners) listener(share);
