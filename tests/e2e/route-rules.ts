@@ -147,6 +147,8 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 	owned('/books/[bookId]', 'bench', 'move'),
 	owned('/books/[bookId]/[coefficient=coefficient]', 'bench', 'default'),
 	owned('/books/[bookId]/against/[otherId]', 'bench'),
+	page('/accuracy', 'bench'),
+	page('/accuracy/readings.csv', 'bench'),
 	page('/reruns', 'bench'),
 	owned('/reruns/[rerunId]', 'bench', 'move'),
 	owned('/reruns/[rerunId]/progress', 'bench'),
@@ -250,6 +252,8 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 		PUT: { value: 0.6, origin: 'judgement', source: 'None.', version: 0 }
 	}),
 	ownedApi('/books/[bookId]/against/[otherId]', 'bench', { GET: null }),
+	api('/accuracy', 'bench', 'GET'),
+	api('/accuracy/readings', 'bench', 'GET'),
 	api('/reruns', 'bench', 'GET'),
 	ownedApi('/reruns/[rerunId]', 'bench', { GET: null }),
 	ownedApi('/reruns/[rerunId]/state', 'bench', { PUT: { to: 'cancelled' } }),

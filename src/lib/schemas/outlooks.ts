@@ -60,7 +60,11 @@ export const outlookSchema = z.object({
 		samples: z.number().int(),
 		seed: z.number().int(),
 		year: daysSchema,
-		months: z.array(daysSchema)
+		months: z.array(daysSchema),
+		tenths: z
+			.array(z.number())
+			.optional()
+			.meta({ description: 'Expected days a year of ten equally likely vehicles, fewest first' })
 	}),
 	influences: z.object({
 		seed: z.number().int(),

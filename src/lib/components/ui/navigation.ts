@@ -11,6 +11,7 @@ const ENTRIES: (NavEntry & { roles?: Role[]; demoOnly?: boolean })[] = [
 	{ label: 'Places', href: '/places' },
 	{ label: 'Remedies', href: '/remedies' },
 	{ label: 'Books', href: '/books', roles: ['engineer', 'manager'] },
+	{ label: 'Accuracy', href: '/accuracy', roles: ['engineer', 'manager'] },
 	{ label: 'Traces', href: '/traces', roles: ['engineer', 'manager'] },
 	{ label: 'Shop', href: '/shop', roles: ['manager'] },
 	{ label: 'Review', href: '/review', roles: ['manager'] },

@@ -1,15 +1,13 @@
 import type { FieldFinding, FieldNoteInput, FieldNotesView } from '$lib/schemas/field-notes';
 import type { SignedInPerson } from '$lib/schemas/people';
-import { ENGINE_VERSION, parseScenario, type Scenario } from '$lib/thermal';
+import { ENGINE_VERSION, parseScenario } from '$lib/thermal';
 import { heatLimitsOf } from '$lib/thermal/chemistries';
-import { watchUseLimit } from '$lib/thermal/assess';
 import {
 	checkReading,
 	learnFrom,
 	projectCapacity,
 	weighHeat,
 	type CapacityTrend,
-	type FieldReading,
 	type ReadingDay
 } from '$lib/thermal/field';
 import { EngineInputError } from '$lib/thermal/correlations';
@@ -18,19 +16,25 @@ import { inTransaction } from '../db/transaction';
 import { AppError, notFound } from '../errors';
 import { allow } from '../policies';
 import { presentFieldNote } from '../presenters/field-notes';
+import { checkLabel, keepLabelCheck, type LabelCheck } from './accuracy/label-checks';
 import { recordBy } from './audit';
 import { daysBetween, latestToday } from './days';
+import { readingOf, scenarioOn } from './field-readings';
 import { findStandingMount } from './mounts';
 import { listKeptOutlooks } from './outlooks';
 import { refreshReview } from './review/keep-review';
 import { afterOthers, workInSlices } from './slices';
 import { touringOf } from './touring-year';
 
-const DRAWS = 512;
-const YEAR_DRAWS = 32;
+/** How many vehicles and mounts, and how many of them for the days in a year, are drawn to learn from a note. */
+interface LearningEffort {
+	samples: number;
+	yearSamples: number;
+}
+const FULL_LEARNING: LearningEffort = { samples: 512, yearSamples: 32 };
+/** The same of fewer draws, said beside what comes of it. */
+export const LIGHT_LEARNING: LearningEffort = { samples: 128, yearSamples: 8 };
 const DAYS_A_YEAR = 365.25;
-/** Of a label that turns at a temperature, K: 1 K to 2 K are usual, from memory. */
-const LABEL_WITHIN_K = 1.5;
 
 interface Fitted {
 	installation: Installation;
@@ -45,24 +49,6 @@ async function findFitted(person: SignedInPerson, mountId: number): Promise<Fitt
 	const assessment = await Assessment.findByPk(installation.assessmentId);
 	if (!assessment) throw notFound('assessment');
 	return { installation, assessment };
-}
-
-/** The mount on a day as hot as was said. */
-function scenarioOn({ inputs }: Assessment, hottestDayC: number): Scenario {
-	const scenario = parseScenario(inputs.scenario);
-	const watched = watchUseLimit(scenario, heatLimitsOf(inputs.battery));
-	return { ...watched, climate: { ...watched.climate, tMax: hottestDayC } };
-}
-
-/** What a note says to the model; null for what says nothing of heat. */
-function readingOf(data: FieldNoteInput): FieldReading | null {
-	if (data.kind === 'peak-label') {
-		const { place, turnedC, notTurnedC } = data;
-		return { kind: 'peak-label', place, turnedC, notTurnedC, withinK: LABEL_WITHIN_K };
-	}
-	if (data.kind !== 'cut-out') return null;
-	const { wentDarkHour, cameBackHour, withinHours } = data;
-	return { kind: 'cut-out', report: { wentDarkHour, cameBackHour, withinHours } };
 }
 
 /** Earlier notes that taught something: labels, and what heat had done. What fitted nothing does not spoil what follows. */
@@ -81,7 +67,7 @@ async function findOut(
 	assessment: Assessment,
 	earlier: readonly FieldNote[],
 	data: FieldNoteInput,
-	seed: number
+	{ seed, samples, yearSamples }: LearningEffort & { seed: number }
 ): Promise<FieldFinding | null> {
 	const reading = readingOf(data);
 	if (reading === null || !('hottestDayC' in data)) return null;
@@ -89,12 +75,12 @@ async function findOut(
 	return afterOthers(async () => {
 		const cause =
 			reading.kind === 'cut-out'
-				? await workInSlices(weighHeat(scenario, reading.report, { samples: DRAWS, seed }))
+				? await workInSlices(weighHeat(scenario, reading.report, { samples, seed }))
 				: null;
 		if (cause && cause.finding !== 'explained') return { cause, learning: null };
 		const { tMax } = parseScenario(assessment.inputs.scenario).climate;
 		const days = [...listReadings(assessment, earlier), { scenario, reading }];
-		const options = { samples: DRAWS, yearSamples: YEAR_DRAWS, seed };
+		const options = { samples, yearSamples, seed };
 		const work = learnFrom(scenarioOn(assessment, tMax), days, touringOf(assessment.inputs), options);
 		return { cause, learning: await workInSlices(work) };
 	});
@@ -189,6 +175,8 @@ export async function listFieldNotes(
 export interface WeighedNote {
 	data: FieldNoteInput;
 	finding: FieldFinding | null;
+	/** A label, held against what was predicted at the time; nothing of other notes. */
+	check: LabelCheck | null;
 	/** The newest note that it was weighed with. */
 	after: number | null;
 }
@@ -197,14 +185,16 @@ export interface WeighedNote {
 export async function weighFieldNote(
 	person: SignedInPerson,
 	mountId: number,
-	data: FieldNoteInput
+	data: FieldNoteInput,
+	effort = FULL_LEARNING
 ): Promise<WeighedNote> {
 	allow(person, 'mounts.write');
 	const { installation, assessment } = await findFitted(person, mountId);
 	refuseImpossible(data, installation.fittedOn);
 	const earlier = await notesOf(installation);
-	const finding = await findOut(assessment, earlier, data, installation.id);
-	return { data, finding, after: newestOf(earlier) };
+	const finding = await findOut(assessment, earlier, data, { ...effort, seed: installation.id });
+	const check = await checkLabel(installation, data);
+	return { data, finding, check, after: newestOf(earlier) };
 }
 
 const newestOf = (notes: readonly FieldNote[]): number | null =>
@@ -217,7 +207,7 @@ const NOTED_MEANWHILE =
 export async function keepFieldNote(
 	person: SignedInPerson,
 	mountId: number,
-	{ data, finding, after }: WeighedNote
+	{ data, finding, check, after }: WeighedNote
 ): Promise<FieldNotesView> {
 	allow(person, 'mounts.write');
 	const fitted = await findFitted(person, mountId);
@@ -229,6 +219,7 @@ export async function keepFieldNote(
 		const row = { workshopId: person.workshopId, installationId: installation.id, createdBy: person.id };
 		const told = { kind, notedOn, data, finding, engineVersion: ENGINE_VERSION };
 		const note = await FieldNote.create({ ...row, ...told }, { transaction });
+		if (check) await keepLabelCheck(note, installation.mountId, check, transaction);
 		await refreshReview('installation', installation.id, transaction);
 		const subject = { type: 'mount', id: mountId };
 		await recordBy(person, 'mount.field-note', subject, transaction, { noteId: note.id, ...data });
@@ -240,7 +231,8 @@ export async function keepFieldNote(
 export async function addFieldNote(
 	person: SignedInPerson,
 	mountId: number,
-	data: FieldNoteInput
+	data: FieldNoteInput,
+	effort = FULL_LEARNING
 ): Promise<FieldNotesView> {
-	return keepFieldNote(person, mountId, await weighFieldNote(person, mountId, data));
+	return keepFieldNote(person, mountId, await weighFieldNote(person, mountId, data, effort));
 }

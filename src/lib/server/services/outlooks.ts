@@ -70,12 +70,13 @@ interface Running {
 const running = new Map<number, Running>();
 
 async function store(assessment: Assessment, request: OutlookRequest, outlook: Outlook): Promise<Outlook> {
-	const { id: assessmentId, workshopId } = assessment;
+	const { id: assessmentId, workshopId, mountId } = assessment;
 	const row = { workshopId, assessmentId, engineVersion: outlook.engineVersion, request, outlook };
 	try {
 		await inTransaction(async (transaction) => {
 			await AssessmentOutlook.create(row, { transaction });
-			await refreshReview('assessment', assessmentId, transaction);
+			// By its mount: what was noted there may be held against an assessment that was not the one agreed on.
+			await refreshReview('mount', mountId, transaction);
 		});
 		return outlook;
 	} catch (error) {

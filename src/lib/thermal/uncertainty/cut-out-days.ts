@@ -31,6 +31,8 @@ export interface CutOutDays {
 	seed: number;
 	year: DayCount;
 	months: DayCount[];
+	/** Days a year of ten equally likely vehicles, fewest first, with the same mean; not in what was stored before it was kept. */
+	tenths?: number[];
 }
 
 export interface CutOutDaysOptions {
@@ -65,6 +67,22 @@ function countDays(values: readonly number[]): DayCount {
 	};
 }
 
+const TENTHS = 10;
+
+/** The mean of each tenth of the draws, where a draw may lie partly in one and partly in the next. */
+function tenthsOf(values: readonly number[]): number[] {
+	const sorted = [...values].sort((a, b) => a - b);
+	const size = sorted.length / TENTHS;
+	return Array.from({ length: TENTHS }, (_, tenth) => {
+		const [from, to] = [tenth * size, (tenth + 1) * size];
+		let sum = 0;
+		for (let at = Math.floor(from); at < Math.min(Math.ceil(to), sorted.length); at++) {
+			sum += sorted[at]! * (Math.min(at + 1, to) - Math.max(at, from));
+		}
+		return sum / size;
+	});
+}
+
 /**
  * On how many days a year the battery goes dark, with the same plan for each day on the road.
  *
@@ -74,7 +92,7 @@ function countDays(values: readonly number[]): DayCount {
  * @param year mean and spread of the daily maxima in °C and K, days on the road, month by month
  * @param options number of draws and seed, or the points themselves
  * @returns as a generator, yields the share of the work done; the expected days by month and in the year: the mean over
- *   the draws, and what a tenth of them stay below and exceed
+ *   the draws, and what a tenth of them stay below and exceed; the means of the year's ten tenths
  * @throws RangeError when there are not twelve months, EngineInputError for a month that cannot be
  * Validity: daily maxima about normal within a month; sun and daily range as on the hot day; a hotter day no better.
  * Source: total probability over day and vehicle; Wilks, Statistical Methods in the Atmospheric Sciences, ch. 4, for the
@@ -111,5 +129,5 @@ export function* countCutOutDays(
 		sums.push(sum);
 		yield (draw + 1) / samples;
 	}
-	return { samples, seed, year: countDays(sums), months: byMonth.map(countDays) };
+	return { samples, seed, year: countDays(sums), months: byMonth.map(countDays), tenths: tenthsOf(sums) };
 }

@@ -164,6 +164,16 @@ describe('cut-out days in a year', () => {
 		expect(countAt(36).year.middle).toBeGreaterThan(countAt(32).year.middle);
 	});
 
+	it('come with ten equally likely vehicles, which keep the mean and their order', () => {
+		const { year, tenths } = countAt(34);
+		expect(tenths).toHaveLength(10);
+		expect(tenths).toEqual([...tenths!].sort((a, b) => a - b));
+		expect(tenths!.reduce((sum, days) => sum + days, 0) / 10).toBeCloseTo(year.middle, 9);
+		expect(tenths![0]).toBeLessThanOrEqual(year.low);
+		expect(tenths![9]).toBeGreaterThanOrEqual(year.high);
+		expect(tenths![0]).toBeLessThan(tenths![9]!);
+	});
+
 	it('are in proportion to the days on the road, and add up over the months', () => {
 		const { year, months: byMonth } = countAt(38);
 		expect(countAt(38, 10).year.middle).toBeCloseTo(2 * year.middle, 9);

@@ -2,6 +2,7 @@ import type { Operation } from '../operation';
 import { auditOperations } from './audit';
 import { batteryOperations } from './batteries';
 import { customerOperations } from './customers';
+import { accuracyOperations } from './accuracy';
 import { assessmentOperations } from './assessments';
 import { bookOperations } from './books';
 import { rerunOperations } from './reruns';
@@ -43,6 +44,7 @@ export const OPERATIONS: readonly Operation[] = [
 	letterOperations,
 	erasureOperations,
 	bookOperations,
+	accuracyOperations,
 	rerunOperations,
 	traceOperations,
 	assessmentOperations,

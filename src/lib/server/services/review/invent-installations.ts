@@ -218,7 +218,8 @@ async function storeChunk(
 		'workshop_id assessment_id engine_version request outlook created_at',
 		invented.flatMap(({ fittedOn, expected }, k) => {
 			if (!expected) return [];
-			const outlook = JSON.stringify({ year: { months: expected.map((middle) => ({ middle })) } });
+			const months = expected.map((middle) => ({ low: 0.4 * middle, middle, high: 1.8 * middle }));
+			const outlook = JSON.stringify({ year: { months } });
 			return [[workshopId, assessments[k], ENGINE_VERSION, NOTHING, outlook, at(fittedOn)]];
 		})
 	);

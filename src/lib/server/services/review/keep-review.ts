@@ -1,6 +1,7 @@
 import { QueryTypes, type Transaction } from 'sequelize';
 import { connection } from '../../db/connection';
 import { inTransaction } from '../../db/transaction';
+import { refreshChecks } from '../accuracy/keep-checks';
 import {
 	readRow,
 	ROW_COLUMNS,
@@ -176,7 +177,9 @@ async function refreshBatch(ids: readonly number[], transaction: Transaction): P
 
 async function refreshAll(ids: readonly number[], transaction: Transaction): Promise<void> {
 	for (let from = 0; from < ids.length; from += BATCH) {
-		await refreshBatch(ids.slice(from, from + BATCH), transaction);
+		const batch = ids.slice(from, from + BATCH);
+		await refreshBatch(batch, transaction);
+		await refreshChecks(batch, transaction);
 	}
 }
 
