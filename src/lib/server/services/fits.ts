@@ -13,7 +13,7 @@ import type { NameOf } from '../presenters/books';
 import { presentFit, presentFitRow } from '../presenters/fits';
 import { record, recordBy } from './audit';
 import { coefficientsOf, listInForce, noBookInForce, withCoefficients } from './books';
-import { asFitError, gatherFit, newestAssessments, sayUnfit } from './fit-inputs';
+import { asFitError, gatherFit, type GatheredFit, newestAssessments, sayUnfit } from './fit-inputs';
 import { listFitChoices } from './fit-priors';
 import { afterOthers, workInSlices } from './slices';
 import { listTraces } from './traces';
@@ -102,15 +102,29 @@ function requireInBook({ coefficients }: FitInput, choices: readonly FitChoice[]
 	});
 }
 
-/** Keeps what is to be fitted; the work begins outside, once this is kept. */
-export async function createFit(person: SignedInPerson, input: FitInput): Promise<FitView> {
-	const { workshopId } = allow(person, 'traces.write');
+/** A fit that could be begun. */
+export interface PreparedFit extends Omit<GatheredFit, 'engineInput'> {
+	book: CoefficientBook;
+}
+
+/** Looks whether a fit can be begun, in no transaction: the vehicle is run for it. */
+export async function prepareFit(person: SignedInPerson, input: FitInput): Promise<PreparedFit> {
+	allow(person, 'traces.write');
 	const row = await generalBook(person);
 	const book = await withCoefficients(row);
 	requireInBook(input, listFitChoices(book));
-	const { engineInput, traces, isSynthetic } = await gatherFit(person, input, coefficientsOf(book));
+	const { engineInput, ...gathered } = await gatherFit(person, input, coefficientsOf(book));
 	requireFittable(engineInput);
-	const { name, coefficients, loss, leaveOut } = input;
+	return { ...gathered, book: row };
+}
+
+/** Keeps what is to be fitted; the work begins when somebody looks, once this is kept. */
+export async function createFit(
+	person: SignedInPerson,
+	{ name, coefficients, loss, leaveOut }: FitInput,
+	{ book: row, traces, isSynthetic }: PreparedFit
+): Promise<FitView> {
+	const { workshopId } = allow(person, 'traces.write');
 	return inTransaction(async (transaction) => {
 		const fit = await Fit.create(
 			{
