@@ -56,7 +56,7 @@ async function choose(page: Page, traceName: RegExp): Promise<void> {
 	await openForm(page, '/fits/new');
 	await page.getByRole('checkbox', { name: traceName }).first().check();
 	await page.locator('summary', { hasText: 'Battery' }).click();
-	await page.getByRole('checkbox', { name: /^Conductance case to cells/i }).check();
+	await page.getByRole('checkbox', { name: 'Case to cells', exact: true }).check();
 	await page.getByRole('button', { name: 'Next: what is held of them' }).click();
 	await expect(page.getByRole('heading', { name: 'What is held of them before' })).toBeVisible();
 }
