@@ -69,6 +69,20 @@ async function findZone(context: APIRequestContext): Promise<string> {
 	return String(((await made.json()) as { id: number }).id);
 }
 
+/** A fit of the shop: a small one is begun where there is none. */
+async function findFit(context: APIRequestContext, traceId: string): Promise<string> {
+	const { rows } = await read<{ rows: { id: number }[] }>(context, '/api/v1/fits');
+	if (rows[0]) return String(rows[0].id);
+	const prior = { law: 'lognormal', middle: 20, spread: 0.4 };
+	const data = {
+		...{ name: 'For every door', traces: [{ traceId: Number(traceId) }], leaveOut: false },
+		coefficients: [{ group: 'bay', key: 'leakClosed', prior }]
+	};
+	const made = await context.post('/api/v1/fits', { data });
+	expect(made.status(), await made.text()).toBe(201);
+	return String(((await made.json()) as { id: number }).id);
+}
+
 /** Ids of one demo job and everything that hangs on it, to put into the routes. */
 async function findIds(
 	context: APIRequestContext,
@@ -93,7 +107,11 @@ async function findIds(
 	const reruns = await read<{ rows: Record[] }>(context, '/api/v1/reruns');
 	const rerunId = of(reruns.rows.at(-1));
 	const changes = await read<{ rows: Record[] }>(context, `/api/v1/reruns/${rerunId}/changes`);
-	const traces = await read<{ rows: (Record & { state: string })[] }>(context, '/api/v1/traces');
+	const traces = await read<{ rows: (Record & { state: string; name: string })[] }>(
+		context,
+		'/api/v1/traces'
+	);
+	const traceId = of(traces.rows.find(({ name }) => name === 'trace-1.csv'));
 	const jobPage = await (await context.get(`/jobs/${jobId}/recommendation`)).text();
 	const mailbox = await (await context.get('/mailbox')).text();
 	const recommendationId = /\/recommendations\/(\d+)\/print/.exec(jobPage)?.[1] ?? 'none';
@@ -126,7 +144,8 @@ async function findIds(
 		vehicleId: of(job.vehicle),
 		bookId: of(books.rows[0]),
 		otherId: of(books.rows[0]),
-		traceId: of(traces.rows.find(({ state }) => state === 'read')),
+		traceId,
+		fitId: await findFit(context, traceId),
 		coefficient: 'bay.share',
 		rerunId,
 		itemId: of(changes.rows[0]),

@@ -54,7 +54,8 @@ export const coefficientSchema = z.object({
 	/** The thermal model's own value; null where it has none. */
 	default: z.number().nullable(),
 	origin: z.enum(ORIGINS),
-	source: z.string()
+	source: z.string(),
+	fitId: z.number().int().nullable().meta({ description: 'The fit that the value came from' })
 });
 export type CoefficientView = z.infer<typeof coefficientSchema>;
 

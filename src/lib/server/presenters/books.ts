@@ -26,13 +26,14 @@ export function presentBookRow(book: CoefficientBook, nameOf: NameOf): BookRow {
 
 /** A coefficient in words: what the thermal model says of its field stands beside the book's value. */
 export function presentCoefficient(
-	{ fieldGroup, fieldKey, value, unit, origin, source }: Coefficient,
+	{ fieldGroup, fieldKey, value, unit, origin, source, fitId }: Coefficient,
 	field: { meaning: string; default: number | null } | undefined
 ): CoefficientView {
 	return {
 		group: fieldGroup,
 		key: fieldKey,
 		...{ value, unit, origin, source },
+		fitId: fitId ?? null,
 		meaning: field?.meaning ?? '',
 		default: field?.default ?? null
 	};

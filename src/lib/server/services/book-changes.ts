@@ -47,8 +47,8 @@ export async function draftBook(
 			transaction
 		});
 		await Coefficient.bulkCreate(
-			values.map(({ fieldGroup, fieldKey, value, unit, origin, source }) => ({
-				...{ bookId: book.id, fieldGroup, fieldKey, value, unit, origin, source }
+			values.map(({ fieldGroup, fieldKey, value, unit, origin, fitId = null, source }) => ({
+				...{ bookId: book.id, fieldGroup, fieldKey, value, unit, origin, fitId, source }
 			})),
 			{ transaction }
 		);
@@ -98,7 +98,7 @@ export async function changeCoefficient(
 		book.changed('updatedAt', true);
 		await saveVersioned(book, 'book', version, { updatedAt: new Date() }, transaction);
 		const before = coefficient.value;
-		await coefficient.update(change, { transaction });
+		await coefficient.update({ ...change, fitId: null }, { transaction });
 		await recordBy(person, 'book.changed', subjectOf(book), transaction, { group, key, before, ...change });
 		return withCoefficients(book);
 	});

@@ -87,6 +87,8 @@ import { migration as m120 } from './120-reruns';
 import { migration as m121 } from './121-rerun-items';
 import { migration as m130 } from './130-traces';
 import { migration as m131 } from './131-trace-loggers';
+import { migration as m132 } from './132-fits';
+import { migration as m133 } from './133-coefficients-fit';
 import { migration as m160 } from './160-prediction-checks';
 import type { Migration } from '../migrate';
 
@@ -181,5 +183,7 @@ export const migrations: Migration[] = [
 	m121,
 	m130,
 	m131,
+	m132,
+	m133,
 	m160
 ];

@@ -6,7 +6,7 @@ import {
 	type Sequelize
 } from 'sequelize';
 import type { Origin } from '$lib/schemas/books';
-import { id, number, reference, text } from './base';
+import { id, number, optionalReference, reference, text } from './base';
 
 export class Coefficient extends Model<InferAttributes<Coefficient>, InferCreationAttributes<Coefficient>> {
 	declare id: CreationOptional<number>;
@@ -16,6 +16,8 @@ export class Coefficient extends Model<InferAttributes<Coefficient>, InferCreati
 	declare value: number;
 	declare unit: string;
 	declare origin: CreationOptional<Origin>;
+	/** That a fitted value came from. */
+	declare fitId: CreationOptional<number | null>;
 	declare source: string;
 }
 
@@ -29,6 +31,7 @@ export function initCoefficient(sequelize: Sequelize): void {
 			value: number,
 			unit: text,
 			origin: { ...text, defaultValue: 'judgement' },
+			fitId: optionalReference,
 			source: text
 		},
 		{ sequelize, tableName: 'coefficients', timestamps: false, modelName: 'Coefficient' }

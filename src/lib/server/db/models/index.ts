@@ -34,6 +34,7 @@ import { CustomerMessage, initCustomerMessage } from './customer-message';
 import { StoredFile, initStoredFile } from './stored-file';
 import { Trace, initTrace } from './trace';
 import { TraceLogger, initTraceLogger } from './trace-logger';
+import { Fit, initFit } from './fit';
 import { Erasure, initErasure } from './erasure';
 import { OwnZone, initOwnZone } from './own-zone';
 import { OutgoingMail, initOutgoingMail } from './outgoing-mail';
@@ -76,6 +77,7 @@ export {
 	StoredFile,
 	Trace,
 	TraceLogger,
+	Fit,
 	Erasure,
 	OwnZone,
 	OutgoingMail,
@@ -119,6 +121,7 @@ const initialisers = [
 	initStoredFile,
 	initTrace,
 	initTraceLogger,
+	initFit,
 	initErasure,
 	initOwnZone,
 	initOutgoingMail,

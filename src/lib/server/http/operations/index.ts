@@ -10,6 +10,7 @@ import { dayPlanOperations } from './day-plans';
 import { fileOperations } from './files';
 import { erasureOperations } from './erasures';
 import { fittingOperations } from './fittings';
+import { fitOperations } from './fits';
 import { jobOperations } from './jobs';
 import { letterOperations } from './letters';
 import { mountOperations } from './mounts';
@@ -47,6 +48,7 @@ export const OPERATIONS: readonly Operation[] = [
 	accuracyOperations,
 	rerunOperations,
 	traceOperations,
+	fitOperations,
 	assessmentOperations,
 	recommendationOperations,
 	remedyOperations,

@@ -1,0 +1,49 @@
+import type { FitState } from '../schemas/fits';
+import { formatNumber, THIN_SPACE } from './numbers';
+
+export const FIT_STATE_WORDS: Readonly<Record<FitState, string>> = {
+	running: 'being worked out',
+	done: 'done',
+	failed: 'could not be made',
+	cancelled: 'called off'
+};
+
+export const LAW_WORDS = {
+	lognormal: 'by a factor',
+	'logit-normal': 'as a share of 0 to 1',
+	normal: 'by an amount'
+} as const;
+
+export const LOSS_WORDS = {
+	'soft-l1': 'less and less, gradually',
+	huber: 'less from 1.3 standard deviations on',
+	squares: 'in full'
+} as const;
+
+const SIGNIFICANT = 4;
+/** From here on figures are grouped whole numbers. */
+const LARGE = 10_000;
+
+/** A fitted figure: four digits that mean something, no more. */
+export function formatFitted(value: number, unit = '-'): string {
+	const rounded = Number(value.toPrecision(SIGNIFICANT));
+	const digits = SIGNIFICANT - 1 - Math.floor(Math.log10(Math.abs(rounded) || 1));
+	const plain = formatNumber(rounded, Math.min(Math.max(digits, 0), 8));
+	const short = plain.includes('.') ? plain.replace(/\.?0+$/, '') : plain;
+	const text = Math.abs(rounded) >= LARGE ? rounded.toLocaleString('en-GB') : short;
+	return unit === '-' ? text : `${text}${THIN_SPACE}${unit}`;
+}
+
+/** How much narrower what is held of a coefficient has become. */
+export function sayLearnt(spreadLeft: number): string {
+	const percent = Math.round(spreadLeft * 100);
+	if (percent >= 98) return 'nothing was learnt';
+	return `${percent}${THIN_SPACE}% of the spread is left`;
+}
+
+/** "2, 4" → [2, 4]; null for what is no list of whole numbers. */
+export function readLegNumbers(text: string): number[] | null {
+	const parts = text.split(/[\s,;]+/).filter(Boolean);
+	const numbers = parts.map(Number);
+	return numbers.every((each) => Number.isInteger(each) && each > 0) ? [...new Set(numbers)] : null;
+}

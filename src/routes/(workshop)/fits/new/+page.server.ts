@@ -1,0 +1,50 @@
+import { fail, redirect } from '@sveltejs/kit';
+import { fitInputSchema } from '$lib/schemas/fits';
+import { AppError } from '$lib/server/errors';
+import { readPageForm } from '$lib/server/http/forms';
+import { guard, orPageError } from '$lib/server/http/guard';
+import { validate } from '$lib/server/http/validate';
+import { createFit, listChoices, prepareFit, type FitChoices } from '$lib/server/services/fits';
+import { readFitForm, type FitDraft } from './fit-form';
+import type { Actions, PageServerLoad } from './$types';
+
+/** What the address has chosen of what there is. */
+function chosenBy({ searchParams }: URL, { traces, coefficients }: FitChoices) {
+	const [traceIds, paths] = [searchParams.getAll('trace'), searchParams.getAll('coefficient')];
+	return {
+		traces: traces.filter(({ id, unfit }) => unfit === '' && traceIds.includes(String(id))),
+		coefficients: coefficients.filter(({ group, key }) => paths.includes(`${group}.${key}`))
+	};
+}
+
+export const load: PageServerLoad = async (event) => {
+	const person = guard(event, 'traces.write');
+	const choices = await orPageError(listChoices(person));
+	const { searchParams } = event.url;
+	return { choices, chosen: chosenBy(event.url, choices), isAsked: searchParams.has('choose') };
+};
+
+/** Each problem once, in words: where it stands is said by the sentence. */
+const sentencesOf = ({ problems, message }: AppError): string[] =>
+	problems.length > 0 ? [...new Set(problems.map((each) => each.message))] : [message];
+
+export const actions: Actions = {
+	default: async (event) => {
+		const person = guard(event, 'traces.write');
+		const sent = await readPageForm(event.request);
+		const draft: FitDraft = Object.fromEntries([...sent].map(([name, value]) => [name, String(value)]));
+		const { traces, coefficients } = chosenBy(event.url, await orPageError(listChoices(person)));
+		const ids = traces.map(({ id }) => id);
+		const made = await Promise.resolve()
+			.then(async () => {
+				const input = validate(fitInputSchema, readFitForm(draft, ids, coefficients));
+				return createFit(person, input, await prepareFit(person, input));
+			})
+			.catch((error: unknown) => {
+				if (error instanceof AppError) return error;
+				throw error;
+			});
+		if (made instanceof AppError) return fail(made.status, { draft, problems: sentencesOf(made) });
+		redirect(303, `/fits/${made.id}`);
+	}
+};

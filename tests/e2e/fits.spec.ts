@@ -1,0 +1,145 @@
+import { expect, test, type Page } from '@playwright/test';
+import { expectNoViolations, ONCE, openForm, signInAs } from './support';
+
+interface Row {
+	id: number;
+	mountId: number;
+	name: string;
+	state: string;
+	version: number;
+	mapping: object;
+}
+
+const twoDigits = (value: number): string => String(value).padStart(2, '0');
+
+/** A day of the test's own, not called synthetic in it: a morning's stop, a drive, and the heat after it. */
+function dayText(): string {
+	const rows = Array.from({ length: 420 }, (_, minute) => {
+		const isDriving = minute >= 60 && minute < 210;
+		const airC = 24 + minute / 60;
+		const excess = isDriving
+			? 20 * (1 - Math.exp(-(minute - 60) / 40))
+			: minute < 60
+				? 0
+				: 20 * Math.exp(-(minute - 210) / 150);
+		const time = `2026-02-03 ${twoDigits(7 + Math.floor(minute / 60))}:${twoDigits(minute % 60)}`;
+		const cellC = airC + 0.6 * excess + (minute % 5) / 10;
+		return [time, airC.toFixed(1), (airC + excess).toFixed(1), cellC.toFixed(1), isDriving ? 80 : 0].join(
+			','
+		);
+	});
+	return ['Time,Ambient (°C),Bay air (°C),Cell (°C),Speed (km/h)', ...rows, ''].join('\n');
+}
+
+async function listTraces(page: Page): Promise<Row[]> {
+	return ((await (await page.request.get('/api/v1/traces')).json()) as { rows: Row[] }).rows;
+}
+
+/** Sends a trace to the mount of the demo, lets it be read as it is proposed, and waits for that. */
+async function sendTrace(page: Page, name: string): Promise<Row> {
+	const { mountId } = (await listTraces(page)).find((trace) => trace.name === 'trace-1.csv')!;
+	const headers = { 'content-type': 'text/csv' };
+	const sent = await page.request.post(`/api/v1/mounts/${mountId}/traces?fileName=${name}`, {
+		...{ headers, data: dayText() }
+	});
+	const trace = (await sent.json()) as Row;
+	const { mapping, version } = trace;
+	await page.request.put(`/api/v1/traces/${trace.id}/mapping`, { data: { mapping, version } });
+	const stateOf = async () =>
+		((await (await page.request.get(`/api/v1/traces/${trace.id}`)).json()) as Row).state;
+	await expect.poll(stateOf).toBe('read');
+	return trace;
+}
+
+/** Chooses a trace and the two coefficients of the battery, as the first page asks. */
+async function choose(page: Page, traceName: RegExp): Promise<void> {
+	await openForm(page, '/fits/new');
+	await page.getByRole('checkbox', { name: traceName }).first().check();
+	await page.locator('summary', { hasText: 'Battery' }).click();
+	await page.getByRole('checkbox', { name: 'Case to cells', exact: true }).check();
+	await page.getByRole('button', { name: 'Next: what is held of them' }).click();
+	await expect(page.getByRole('heading', { name: 'What is held of them before' })).toBeVisible();
+}
+
+test('an engineer fits a coefficient to a synthetic trace, reads what came of it, and gets no book', async ({
+	page
+}) => {
+	test.slow();
+	await signInAs(page, 'engineer');
+	await openForm(page, '/fits/new');
+	await page.getByRole('button', { name: 'Next: what is held of them' }).click();
+	await expect(page.getByText('Choose at least one trace.')).toBeVisible();
+	await expectNoViolations(page);
+	await choose(page, /^trace-2\.csv \(synthetic\)/);
+	await expect(page.getByText('A trace among them was made up')).toBeVisible();
+	await expectNoViolations(page);
+	await page.getByLabel('Spread', { exact: true }).fill('-1');
+	await page.getByLabel('Legs of trace-2.csv that are kept back').fill('2');
+	await page.getByRole('button', { name: 'Begin the fit' }).click();
+	await expect(page.getByText('Spread must be above 0.').first()).toBeVisible();
+	await expect(page.getByLabel('Legs of trace-2.csv that are kept back')).toHaveValue('2');
+	await page.getByLabel('Spread', { exact: true }).fill('0,35');
+	await page.getByRole('button', { name: 'Begin the fit' }).click();
+
+	await expect(page.getByRole('heading', { name: 'Estimates' })).toBeVisible({ timeout: 60_000 });
+	await expect(page.getByRole('row', { name: /case to cells/i }).first()).toContainText('W/K');
+	await expect(page.getByText('Legs that were kept back')).toBeVisible();
+	await expect(page.getByRole('heading', { name: 'What would tell most' })).toBeVisible();
+	await expect(page.getByRole('img', { name: /model less reading/ }).first()).toBeVisible();
+	await expect(page.getByText('so no coefficient book is made from')).toBeVisible();
+	await expect(page.getByRole('button', { name: 'Begin a draft book' })).toHaveCount(0);
+	await expect(page).toHaveTitle(/synthetic/);
+	await expectNoViolations(page);
+	const refused = await page.request.post(`/api/v1/fits/${/\d+$/.exec(page.url())![0]}/book`, {
+		data: { name: 'Made up' }
+	});
+	expect(refused.status()).toBe(409);
+	await page.goto('/fits');
+	await expect(page.getByRole('link', { name: /\(synthetic\)$/ }).first()).toBeVisible();
+	await expectNoViolations(page);
+});
+
+test('a fit to what a test measured becomes a draft book that leads back to it', ONCE, async ({ page }) => {
+	test.slow();
+	await signInAs(page, 'engineer');
+	const name = `fit-${Date.now()}.csv`;
+	await sendTrace(page, name);
+	await choose(page, new RegExp(`^${name}`));
+	await page.getByLabel('Name', { exact: true }).fill('Cells, one day');
+	await page.getByRole('button', { name: 'Begin the fit' }).click();
+	await expect(page.getByRole('heading', { name: 'Estimates' })).toBeVisible({ timeout: 60_000 });
+	const fit = new URL(page.url()).pathname;
+	await page.getByLabel('What it is for').fill('Nothing but this test.');
+	await page.getByRole('button', { name: 'Begin a draft book with these values' }).click();
+	await expect(page.getByRole('heading', { level: 1, name: /Cells, one day$/ })).toBeVisible();
+	const row = page.getByRole('row', { name: /case to cells/i });
+	await expect(row).toContainText('Fitted from traces');
+	await expect(row).toContainText(/nine chances in ten between/);
+	await row.getByRole('link', { name: /Look at fit/ }).click();
+	await expect(page).toHaveURL(new RegExp(`${fit}$`));
+});
+
+test('a fit can be called off, and an installer is shown none', ONCE, async ({ page, browser, baseURL }) => {
+	await signInAs(page, 'engineer');
+	const traces = (await listTraces(page)).filter(({ name }) => /^trace-\d\.csv$/.test(name));
+	const prior = { law: 'lognormal', middle: 20, spread: 0.4 };
+	const data = {
+		...{ name: 'Too many', traces: traces.map(({ id }) => ({ traceId: id })), leaveOut: true },
+		coefficients: [
+			{ group: 'bay', key: 'leakClosed', prior },
+			{ group: 'bay', key: 'share', prior: { law: 'logit-normal', middle: 0.6, spread: 0.5 } }
+		]
+	};
+	const made = await page.request.post('/api/v1/fits', { data });
+	expect(made.status(), await made.text()).toBe(201);
+	const { id } = (await made.json()) as { id: number };
+	await page.goto(`/fits/${id}`);
+	await page.getByRole('button', { name: 'Call it off' }).click();
+	await expect(page.getByText('It was called off')).toBeVisible();
+
+	const context = await browser.newContext({ baseURL: baseURL! });
+	const installer = await context.newPage();
+	await signInAs(installer, 'installer');
+	expect((await installer.goto('/fits'))?.status()).toBe(403);
+	await context.close();
+});
