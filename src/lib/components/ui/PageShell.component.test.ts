@@ -55,8 +55,12 @@ describe('the frame of a page', () => {
 describe('the entries', () => {
 	it.each([
 		['installer', false, ['Jobs', 'Batteries', 'Places', 'Remedies']],
-		['engineer', false, ['Jobs', 'Batteries', 'Places', 'Remedies', 'Books']],
-		['manager', true, ['Jobs', 'Batteries', 'Places', 'Remedies', 'Books', 'Shop', 'Review', 'Mailbox']]
+		['engineer', false, ['Jobs', 'Batteries', 'Places', 'Remedies', 'Books', 'Accuracy', 'Traces']],
+		[
+			'manager',
+			true,
+			['Jobs', 'Batteries', 'Places', 'Remedies', 'Books', 'Accuracy', 'Traces', 'Shop', 'Review', 'Mailbox']
+		]
 	] as const)('of the %s (demo: %s)', (role, isDemo, labels) => {
 		expect(listNavigation(role, isDemo).map((entry) => entry.label)).toEqual(labels);
 	});
