@@ -31,10 +31,10 @@ test('readings are narrowed down in the address, with and without a script, and 
 }) => {
 	await signInAs(page, 'engineer');
 	await page.goto('/accuracy');
-	await page.getByLabel('Kind of reading').selectOption('Only peak labels');
+	await page.getByLabel('Kind of reading').selectOption('Only label readings');
 	await expect(page).toHaveURL(/kind=label/);
 	const rows = page.getByRole('table', { name: /^Single readings/ }).getByRole('row');
-	for (const text of (await rows.allInnerTexts()).slice(1)) expect(text).toContain('Label');
+	for (const text of (await rows.allInnerTexts()).slice(1)) expect(text).toContain('Peak label');
 	const [file] = await Promise.all([
 		page.waitForEvent('download'),
 		page.getByRole('link', { name: 'Readings (CSV)' }).click()
