@@ -17,38 +17,51 @@ export interface AuditRecord {
 	detail?: Record<string, unknown>;
 }
 
-/** Appends one entry to the workshop's chain, inside the transaction whose change it tells of. */
-export async function record(entry: AuditRecord, transaction: Transaction): Promise<void> {
-	const { workshopId } = entry;
+type Head = { sequence: number; hash: string };
+
+/** Locks the end of a workshop's chain, which begins with nothing. */
+async function lockHead(workshopId: number, transaction: Transaction): Promise<Head> {
 	await connection().query(
 		'INSERT IGNORE INTO audit_heads (workshop_id, sequence, hash) VALUES (:workshopId, 0, :genesis)',
 		{ replacements: { workshopId, genesis: GENESIS }, transaction }
 	);
-	const [head] = await connection().query<{ sequence: number; hash: string }>(
+	const [head] = await connection().query<Head>(
 		'SELECT sequence, hash FROM audit_heads WHERE workshop_id = :workshopId FOR UPDATE',
 		{ replacements: { workshopId }, transaction, type: QueryTypes.SELECT }
 	);
+	return head ?? { sequence: 0, hash: GENESIS };
+}
+
+function chain(entry: AuditRecord, { sequence, hash: previousHash }: Head): Chained & { hash: string } {
+	const { workshopId, personId, action, subjectType, subjectId, detail = {} } = entry;
 	const chained: Chained = {
-		workshopId,
-		sequence: (head?.sequence ?? 0) + 1,
-		at: new Date(),
-		personId: entry.personId,
-		action: entry.action,
-		subjectType: entry.subjectType,
-		subjectId: entry.subjectId,
-		detail: entry.detail ?? {},
-		previousHash: head?.hash ?? GENESIS
+		...{ workshopId, sequence: sequence + 1, at: new Date(), personId, action },
+		...{ subjectType, subjectId, detail, previousHash }
 	};
-	const hash = chainHash(chained);
-	await AuditEntry.create({ ...chained, hash }, { transaction });
+	return { ...chained, hash: chainHash(chained) };
+}
+
+/** Appends entries, all of one workshop, to its chain, inside the transaction whose changes they tell of. */
+export async function recordAll(entries: readonly AuditRecord[], transaction: Transaction): Promise<void> {
+	const [first] = entries;
+	if (!first) return;
+	const { workshopId } = first;
+	let head: Head = await lockHead(workshopId, transaction);
+	const rows = entries.map((entry) => {
+		const row = chain(entry, head);
+		head = row;
+		return row;
+	});
+	await AuditEntry.bulkCreate(rows, { transaction });
 	await connection().query(
 		'UPDATE audit_heads SET sequence = :sequence, hash = :hash WHERE workshop_id = :workshopId',
-		{
-			replacements: { sequence: chained.sequence, hash, workshopId },
-			transaction
-		}
+		{ replacements: { sequence: head.sequence, hash: head.hash, workshopId }, transaction }
 	);
 }
+
+/** Appends one entry. */
+export const record = (entry: AuditRecord, transaction: Transaction): Promise<void> =>
+	recordAll([entry], transaction);
 
 /** The usual entry: a signed-in person did something in their own workshop. */
 export async function recordBy(

@@ -1,4 +1,5 @@
 /** How far an estimate can be trusted: draws of what is not known, and what they come to. */
+export { drawCutOuts, type CutOutChance } from './draw-cut-outs';
 export { copyScenario, drawScenario, moveBy } from './draw-scenario';
 export {
 	countCutOutDays,

@@ -2,7 +2,7 @@ import type { AssessmentInputs, AssessmentResult } from '$lib/schemas/assessment
 import { parseScenario } from '$lib/thermal';
 import { watchUseLimit } from '$lib/thermal/assess';
 import { heatLimitsOf } from '$lib/thermal/chemistries';
-import { finishWork, spreadDay } from '$lib/thermal/uncertainty';
+import { drawCutOuts } from '$lib/thermal/uncertainty';
 import { completeInputs, hashInputs, runInputs } from '../run-inputs';
 
 /** So many days like the assessed one are drawn: enough for a share to five in a hundred. */
@@ -27,7 +27,7 @@ export type RerunAnswer = { outcome: RerunOutcome } | { reason: string };
 
 function drawDays({ scenario, battery }: AssessmentInputs, seed: number): number {
 	const watched = watchUseLimit(parseScenario(scenario), heatLimitsOf(battery));
-	return finishWork(spreadDay(watched, { samples: DAYS_DRAWN, seed })).cutOutShare;
+	return drawCutOuts(watched, { samples: DAYS_DRAWN, seed }).share;
 }
 
 /**

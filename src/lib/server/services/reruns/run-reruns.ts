@@ -10,7 +10,7 @@ import { storeOutcomes, type Ran } from './store-outcomes';
 import type { WorkerPool } from './worker-pool';
 
 /** So many are kept in one transaction. */
-const BATCH = 16;
+const BATCH = 32;
 
 type Threads = WorkerPool<RerunTask, RerunAnswer>;
 type Book = RerunTask['book'];

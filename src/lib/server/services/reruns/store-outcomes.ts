@@ -2,8 +2,8 @@ import { Op, QueryTypes, type Transaction } from 'sequelize';
 import { connection } from '../../db/connection';
 import { Assessment, Job, Mount, Rerun, RerunItem } from '../../db/models';
 import { inTransaction } from '../../db/transaction';
-import { record } from '../audit';
-import { updateJobOutcome, WITHOUT_TEXTS } from '../job-outcome';
+import { recordAll, type AuditRecord } from '../audit';
+import { refreshOutcomes } from '../job-outcome';
 import { columnsOf } from '../run-inputs';
 import type { RerunAnswer, RerunOutcome } from './rerun-inputs';
 
@@ -23,7 +23,6 @@ const REMOVED = 'Its mount was removed meanwhile.';
 /** What the rows are now, read under locks. */
 interface Standing {
 	rerun: Rerun;
-	jobs: Map<number, Job>;
 	mounts: Map<number, Mount>;
 	/** The newest assessment of each mount. */
 	newest: Map<number, Assessment>;
@@ -32,77 +31,113 @@ interface Standing {
 const byId = <Row extends { id: number }>(rows: readonly Row[]): Map<number, Row> =>
 	new Map(rows.map((row) => [row.id, row]));
 
+async function newestIds(mountIds: number[], transaction: Transaction): Promise<Map<number, number>> {
+	const rows = await connection().query<{ id: number; mountId: number }>(
+		'SELECT MAX(id) AS id, mount_id AS mountId FROM assessments WHERE mount_id IN (:mountIds) GROUP BY mount_id',
+		{ replacements: { mountIds }, transaction, type: QueryTypes.SELECT }
+	);
+	return new Map(rows.map(({ id, mountId }) => [mountId, id]));
+}
+
 async function readStanding(rerun: Rerun, items: RerunItem[], transaction: Transaction): Promise<Standing> {
 	const lock = transaction.LOCK.UPDATE;
 	const mountIds = items.map(({ mountId }) => mountId);
-	const jobs = await Job.findAll({
+	// Held, so that nobody assesses on the same job meanwhile.
+	await Job.findAll({
 		where: { id: items.map(({ jobId }) => jobId) },
+		attributes: ['id'],
 		order: [['id', 'ASC']],
 		...{ transaction, lock }
 	});
 	const mounts = await Mount.findAll({ where: { id: mountIds }, transaction });
-	const newest = await connection().query<{ id: number }>(
-		'SELECT MAX(id) AS id FROM assessments WHERE mount_id IN (:mountIds) GROUP BY mount_id',
-		{ replacements: { mountIds }, transaction, type: QueryTypes.SELECT }
-	);
+	const newest = await newestIds(mountIds, transaction);
 	const assessments = await Assessment.findAll({
-		where: { id: newest.map(({ id }) => id) },
-		attributes: WITHOUT_TEXTS,
+		where: { id: [...newest.values()] },
+		attributes: ['id', 'mountId', 'verdict', 'inputsSha256'],
 		transaction
 	});
 	return {
 		rerun,
-		jobs: byId(jobs),
 		mounts: byId(mounts),
 		newest: new Map(assessments.map((each) => [each.mountId, each]))
 	};
 }
 
-async function keep(
-	item: RerunItem,
-	before: Assessment,
-	{ bookId, outcome }: { bookId: number; outcome: RerunOutcome },
-	{ rerun, jobs }: Standing,
-	transaction: Transaction
-): Promise<void> {
-	const { inputs, inputsSha256, result, cutOutShare } = outcome;
-	const { workshopId, jobId, mountId } = item;
-	const { begunBy: createdBy } = rerun;
-	const made = await Assessment.create(
-		{
-			...{ workshopId, jobId, mountId, bookId, inputs, inputsSha256, result, createdBy },
-			...columnsOf(result),
-			chemistry: inputs.battery.chemistry
-		},
-		{ transaction }
-	);
-	await updateJobOutcome(jobs.get(jobId)!, transaction);
-	const verdictChanged = before.verdict !== result.verdict;
-	const done = { state: 'done', newAssessmentId: made.id, cutOutShare, verdictChanged } as const;
-	await item.update(done, { transaction });
-	const { verdict, headroomK } = result;
-	const detail = { jobId, mountId, verdict, headroomK, inputsSha256, rerunId: rerun.id };
-	const subject = { subjectType: 'assessment', subjectId: made.id, detail };
-	await record({ workshopId, personId: createdBy, action: 'assessment.made-again', ...subject }, transaction);
+interface Kept {
+	item: RerunItem;
+	before: Assessment;
+	bookId: number;
+	outcome: RerunOutcome;
 }
 
-async function settle(
-	item: RerunItem,
-	{ fromSha256, bookId, answer }: Ran,
-	standing: Standing,
-	transaction: Transaction
-): Promise<void> {
-	const leave = (state: 'passed-over' | 'failed', reason: string) =>
-		item.update({ state, reason: reason.slice(0, LONGEST_REASON) }, { transaction });
-	const before = standing.newest.get(item.mountId);
-	if (standing.mounts.get(item.mountId)?.removedAt !== null)
-		return void (await leave('passed-over', REMOVED));
-	if (before?.id !== item.assessmentId) return void (await leave('passed-over', SUPERSEDED));
-	// Changed since it was read: it waits, and is read again.
-	if (before.inputsSha256 !== fromSha256) return;
-	if ('reason' in answer) return void (await leave('failed', answer.reason));
-	await keep(item, before, { bookId, outcome: answer.outcome }, standing, transaction);
+type Settled = { kept: Kept } | { left: Pick<RerunItem, 'state' | 'reason'> } | null;
+
+/** What becomes of an item; null where what it was made from has changed since it was read: it waits, and is read again. */
+function settle(item: RerunItem, { fromSha256, bookId, answer }: Ran, { mounts, newest }: Standing): Settled {
+	const before = newest.get(item.mountId);
+	if (mounts.get(item.mountId)?.removedAt !== null)
+		return { left: { state: 'passed-over', reason: REMOVED } };
+	if (before?.id !== item.assessmentId) return { left: { state: 'passed-over', reason: SUPERSEDED } };
+	if (before.inputsSha256 !== fromSha256) return null;
+	if ('reason' in answer) {
+		return { left: { state: 'failed', reason: answer.reason.slice(0, LONGEST_REASON) } };
+	}
+	return { kept: { item, before, bookId, outcome: answer.outcome } };
 }
+
+function rowOf({ item, bookId, outcome }: Kept, { begunBy: createdBy }: Rerun) {
+	const { workshopId, jobId, mountId } = item;
+	const { inputs, inputsSha256, result } = outcome;
+	return {
+		...{ workshopId, jobId, mountId, bookId, inputs, inputsSha256, result, createdBy },
+		...columnsOf(result),
+		chemistry: inputs.battery.chemistry
+	};
+}
+
+function entryOf({ item, outcome }: Kept, subjectId: number, { id: rerunId, begunBy }: Rerun): AuditRecord {
+	const { workshopId, jobId, mountId } = item;
+	const { inputsSha256, result } = outcome;
+	const { verdict, headroomK } = result;
+	return {
+		...{
+			workshopId,
+			personId: begunBy,
+			action: 'assessment.made-again',
+			subjectType: 'assessment',
+			subjectId
+		},
+		detail: { jobId, mountId, verdict, headroomK, inputsSha256, rerunId }
+	};
+}
+
+/** Keeps new assessments, all at once, and lets items, jobs and the trail tell of them. */
+async function keepAll(kept: readonly Kept[], { rerun }: Standing, transaction: Transaction): Promise<void> {
+	if (kept.length === 0) return;
+	await Assessment.bulkCreate(
+		kept.map((each) => rowOf(each, rerun)),
+		{ transaction }
+	);
+	const idOf = await newestIds(
+		kept.map(({ item }) => item.mountId),
+		transaction
+	);
+	for (const { item, before, outcome } of kept) {
+		const { result, cutOutShare } = outcome;
+		const verdictChanged = before.verdict !== result.verdict;
+		item.set({ state: 'done', newAssessmentId: idOf.get(item.mountId)!, cutOutShare, verdictChanged });
+	}
+	await refreshOutcomes([...new Set(kept.map(({ item }) => item.jobId))], transaction);
+	await recordAll(
+		kept.map((each) => entryOf(each, idOf.get(each.item.mountId)!, rerun)),
+		transaction
+	);
+}
+
+/** Columns of an item that its end changes. */
+const ENDED: (keyof RerunItem['_attributes'])[] = [
+	...(['state', 'reason', 'newAssessmentId', 'cutOutShare', 'verdictChanged'] as const)
+];
 
 /**
  * Keeps what the threads made, all of it or nothing. An item that is not waiting any more, or whose re-run was cancelled,
@@ -118,13 +153,19 @@ export async function storeOutcomes(rerunId: number, ran: readonly Ran[]): Promi
 		const items = await RerunItem.findAll({ where, order: [['id', 'ASC']], transaction, lock });
 		if (items.length === 0) return;
 		const standing = await readStanding(rerun, items, transaction);
+		const kept: Kept[] = [];
 		for (const item of items) {
-			await settle(
+			const settled = settle(
 				item,
 				ran.find(({ itemId }) => itemId === item.id)!,
-				standing,
-				transaction
+				standing
 			);
+			if (settled === null) continue;
+			if ('kept' in settled) kept.push(settled.kept);
+			else item.set(settled.left);
 		}
+		await keepAll(kept, standing, transaction);
+		const ended = items.filter(({ state }) => state !== 'waiting').map((item) => item.get());
+		await RerunItem.bulkCreate(ended, { updateOnDuplicate: ENDED, transaction });
 	});
 }
