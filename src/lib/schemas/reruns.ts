@@ -11,6 +11,12 @@ export type RerunItemState = (typeof RERUN_ITEM_STATES)[number];
 export const TOLD_HOW = ['letter', 'otherwise'] as const;
 export type ToldHow = (typeof TOLD_HOW)[number];
 
+/**
+ * So many days like the assessed one are drawn for each mount: enough to tell one day of twenty from three, and few enough for
+ * a workshop of 10,000. The full outlook draws 512, when somebody looks.
+ */
+export const DAYS_DRAWN = 32;
+
 const count = z.number().int().min(0);
 
 /** How far a re-run is. */

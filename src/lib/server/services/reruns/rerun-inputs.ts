@@ -1,12 +1,10 @@
 import type { AssessmentInputs, AssessmentResult } from '$lib/schemas/assessments';
+import { DAYS_DRAWN } from '$lib/schemas/reruns';
 import { parseScenario } from '$lib/thermal';
 import { watchUseLimit } from '$lib/thermal/assess';
 import { heatLimitsOf } from '$lib/thermal/chemistries';
 import { drawCutOuts } from '$lib/thermal/uncertainty';
 import { completeInputs, hashInputs, runInputs } from '../run-inputs';
-
-/** So many days like the assessed one are drawn: enough for a share to five in a hundred. */
-const DAYS_DRAWN = 64;
 
 export interface RerunTask {
 	/** Of the item, and the seed of what is drawn for it. */
