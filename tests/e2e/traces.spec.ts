@@ -86,6 +86,15 @@ test('an engineer sends a file with faults, puts its columns right, sees what wa
 	await page.reload();
 	await expect(page.getByLabel('ends at minute').nth(1)).toHaveValue('129');
 	await expect(page.getByLabel('Leg 2', { exact: true })).toHaveValue('driving');
+	const tracePath = new URL(page.url()).pathname;
+
+	// What was measured stands beside what had been predicted of it, straight away.
+	await page.goto('/accuracy?kind=trace');
+	await expect(page.getByRole('heading', { level: 2, name: 'Traces' })).toBeVisible();
+	const held = page.getByRole('row').filter({ hasText: 'Trace, 3 Feb 2026' }).first();
+	await expect(held.getByText('entered after the day')).toBeVisible();
+	await expectNoViolations(page);
+	await expect(page.locator(`a[href="${tracePath}"]`).first()).toBeVisible();
 
 	await send(page, mountId, 'wednesday.csv', dayOf(probe, '2026-02-04'));
 	await expect(page.getByText('This logger is known')).toBeVisible();

@@ -56,16 +56,16 @@ export async function makeFittable(
 	{ installer, engineer }: { installer: SignedInPerson; engineer: SignedInPerson },
 	seeds: readonly number[] = [1],
 	isSynthetic = false
-): Promise<{ jobId: number; mountId: number; traces: TraceView[] }> {
+): Promise<{ jobId: number; mountId: number; traces: TraceView[]; texts: string[] }> {
 	const { jobId, hot } = await makeAssessableJob(installer);
 	const assessments = await assessJob(installer, jobId);
 	const { inputs } = assessments.find(({ mountId }) => mountId === hot.id)!;
 	const traces: TraceView[] = [];
-	for (const seed of seeds) {
-		const text = writeDay(trueDay(inputs.scenario), seed);
+	const texts = seeds.map((seed) => writeDay(trueDay(inputs.scenario), seed));
+	for (const [at, text] of texts.entries()) {
 		traces.push(
-			await readAs(engineer, await sendTrace(engineer, hot.id, text, `day-${seed}.csv`), { isSynthetic })
+			await readAs(engineer, await sendTrace(engineer, hot.id, text, `day-${seeds[at]}.csv`), { isSynthetic })
 		);
 	}
-	return { jobId, mountId: hot.id, traces };
+	return { jobId, mountId: hot.id, traces, texts };
 }

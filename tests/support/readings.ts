@@ -34,7 +34,13 @@ interface About {
 
 /** Keeps invented readings beside an installation: they have no note. */
 export async function inventLabels(about: About, errorsK: readonly number[]): Promise<void> {
-	const common = { kind: 'label', fieldNoteId: null, watched: null, isEnteredLater: false } as const;
+	const common = {
+		kind: 'label',
+		fieldNoteId: null,
+		traceId: null,
+		watched: null,
+		isEnteredLater: false
+	} as const;
 	await inTransaction((transaction) =>
 		writeChecks(
 			errorsK.map((error) => ({

@@ -47,7 +47,8 @@ export const GROUPING_WORDS: Record<Grouping, string> = {
 
 export const LEFT_OUT_WORDS: Record<LeftOut, string> = {
 	'noted-again': 'put right by a later note of the same day',
-	'fits-nothing': 'outside, with those before it, of all that was held possible'
+	'fits-nothing': 'outside, with those before it, of all that was held possible',
+	'fitted-to': 'foretold by a book that had been fitted to it'
 };
 
 export const TOO_FEW = 'too few to tell';

@@ -10,8 +10,11 @@ export type ReadingKind = (typeof READING_KINDS)[number];
 /** Of these the error is in kelvin. */
 export const TEMPERATURE_KINDS = ['label', 'trace'] as const satisfies readonly ReadingKind[];
 
-/** Why a reading does not count: put right by a later one of the same day, or, with those before it, outside of all that is held possible. */
-export const LEFT_OUT = ['noted-again', 'fits-nothing'] as const;
+/**
+ * Why a reading does not count: put right by a later one of the same day; with those before it, outside of all that is held
+ * possible; or the book that foretold it had been fitted to it.
+ */
+export const LEFT_OUT = ['noted-again', 'fits-nothing', 'fitted-to'] as const;
 export type LeftOut = (typeof LEFT_OUT)[number];
 
 /** With fewer, a group says that it is too few to tell. */
@@ -152,6 +155,10 @@ export const readingSchema = z.object({
 	label: z
 		.object({ place: z.string(), turnedC: z.number().nullable(), notTurnedC: z.number().nullable() })
 		.nullable(),
+	trace: z
+		.object({ id: z.number().int(), name: z.string(), place: z.string() })
+		.nullable()
+		.meta({ description: 'Of traces: measured and predicted are means over the trace, at its place' }),
 	predicted: z.number(),
 	low: z.number(),
 	high: z.number(),

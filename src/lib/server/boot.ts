@@ -26,8 +26,8 @@ async function timed(step: string, work: () => Promise<string>): Promise<void> {
 /** Notes from before they were held against their predictions; each takes part of a second, and nobody waits for them. */
 function holdOldNotes(): void {
 	timed('accuracy', async () => {
-		const { labels, installations } = await completeChecks();
-		return `${labels} labels and ${installations} installations held against their predictions`;
+		const { labels, installations, traces } = await completeChecks();
+		return `${labels} labels, ${installations} installations and ${traces} traces held against their predictions`;
 	}).catch((error: unknown) => logger.error({ err: error }, 'old notes could not be held against anything'));
 }
 

@@ -26,6 +26,10 @@ export function presentReading(stored: StoredReading): Reading {
 			stored.kind === 'label'
 				? { place: text('place'), turnedC: optional('turnedC'), notTurnedC: optional('notTurnedC') }
 				: null,
+		trace:
+			stored.kind === 'trace'
+				? { id: number('traceId'), name: text('traceName'), place: text('tracePlace') }
+				: null,
 		predicted: number('predicted'),
 		low: number('low'),
 		high: number('high'),

@@ -15,6 +15,7 @@ import { AppError, notFound } from '../errors';
 import { canonicalJson } from '../hash';
 import { allow } from '../policies';
 import { presentAssessment, presentAssessmentRow } from '../presenters/assessments';
+import { holdTraces } from './accuracy/trace-checks';
 import { caseOf, findJobParts, gatherInputs, isAssessable } from './assessment-inputs';
 import { assessMounts } from './assessment-runs';
 import { bookInForce } from './books';
@@ -71,7 +72,7 @@ export async function assessMount(
 	{ mountId }: { mountId: number }
 ): Promise<AssessmentView> {
 	allow(person, 'assessments.run');
-	return inTransaction(async (transaction) => {
+	const made = await inTransaction(async (transaction) => {
 		const { workshopId } = person;
 		const mount = await Mount.findOne({ where: { id: mountId, workshopId, removedAt: null } });
 		if (!mount) throw notFound('mount');
@@ -79,12 +80,14 @@ export async function assessMount(
 		const [made] = await assessMounts(person, job, [mount], transaction);
 		return show(person, made!);
 	});
+	await holdTraces({ mountId });
+	return made;
 }
 
 /** Assesses every mount of a job whose survey is finished: all of them, or none. */
 export async function assessJob(person: SignedInPerson, jobId: number): Promise<AssessmentView[]> {
 	allow(person, 'assessments.run');
-	return inTransaction(async (transaction) => {
+	const views = await inTransaction(async (transaction) => {
 		const job = await findJob(person, jobId, true);
 		const mounts = await Mount.findAll({
 			where: { jobId, workshopId: person.workshopId, removedAt: null, surveyComplete: true },
@@ -94,12 +97,14 @@ export async function assessJob(person: SignedInPerson, jobId: number): Promise<
 			const message = 'No mount of this job has a finished survey yet.';
 			throw new AppError('conflict', message, [{ path: 'survey', message }]);
 		}
-		const views: AssessmentView[] = [];
-		for (const made of await assessMounts(person, job, mounts, transaction)) {
-			views.push(await show(person, made));
+		const made: AssessmentView[] = [];
+		for (const each of await assessMounts(person, job, mounts, transaction)) {
+			made.push(await show(person, each));
 		}
-		return views;
+		return made;
 	});
+	for (const { mountId } of views) await holdTraces({ mountId });
+	return views;
 }
 
 export async function getAssessment(person: SignedInPerson, assessmentId: number): Promise<AssessmentView> {

@@ -2,7 +2,7 @@ import { Op } from 'sequelize';
 import { StoredFile, Trace } from '../db/models';
 import { clearIncoming, storage } from '../storage';
 import { removeContents } from './files';
-import { removeTraceContents } from './traces';
+import { removeTraceContents } from './trace-bins';
 
 const HOUR_MS = 60 * 60_000;
 /** For so long a removed file can be put back. */

@@ -1,25 +1,13 @@
 import type { FitInput, FitInputs } from '$lib/schemas/fits';
 import type { SignedInPerson } from '$lib/schemas/people';
-import { parseScenario } from '$lib/thermal';
-import type { CoefficientFitInput, FitBook, FitTrace, TraceToFit } from '$lib/thermal/fit';
-import {
-	ambientFromTrace,
-	dayPlanFromLegs,
-	minuteBins,
-	scenarioLegs,
-	type BinnedTrace,
-	type TraceLeg
-} from '$lib/thermal/traces';
+import type { CoefficientFitInput, FitBook, TraceToFit } from '$lib/thermal/fit';
 import { Assessment, type Trace } from '../db/models';
 import { EngineInputError } from '$lib/thermal/correlations/require';
 import { AppError } from '../errors';
 import { startHourOf } from '../presenters/traces';
 import { asInputError } from './input-error';
-import { openBins } from './trace-views';
+import { traceToFit } from './trace-scenario';
 import { findTrace } from './traces';
-
-const MINUTE_S = 60;
-const LONGEST_LEG_MINUTES = 24 * 60;
 
 /** Why a trace cannot be fitted to, in words; empty where it can. */
 export function sayUnfit(trace: Trace, assessment: Assessment | null): string {
@@ -45,29 +33,6 @@ export async function newestAssessments(mountIds: readonly number[]): Promise<Ma
 	return new Map(found.map((assessment) => [assessment.mountId, assessment]));
 }
 
-/** Means of a minute each, as a fit takes them. */
-function toFitTrace(bins: BinnedTrace, startedAtHour: number): FitTrace {
-	const { binCount, channels } = minuteBins(bins);
-	return {
-		startedAtHour,
-		timeS: Float64Array.from({ length: binCount }, (_, at) => (at + 0.5) * MINUTE_S),
-		channels: Object.fromEntries(
-			Object.entries(channels).map(([channel, { mean }]) => [channel, Float64Array.from(mean)])
-		)
-	};
-}
-
-/** Places of legs in a scenario, where a leg of more than a day stands as several. */
-function placesOf(legs: readonly TraceLeg[], heldOut: readonly number[]): number[] {
-	let place = 0;
-	return legs.flatMap(({ startS, endS }, at) => {
-		const parts = Math.ceil((endS - startS) / MINUTE_S / LONGEST_LEG_MINUTES);
-		const places = Array.from({ length: parts }, (_, part) => place + part);
-		place += parts;
-		return heldOut.includes(at + 1) ? places : [];
-	});
-}
-
 function requireLegs({ legs, name }: Trace, heldOut: readonly number[], path: string): void {
 	const beyond = heldOut.find((leg) => leg > legs.length);
 	const message =
@@ -77,34 +42,6 @@ function requireLegs({ legs, name }: Trace, heldOut: readonly number[], path: st
 				? `Of “${name}” every leg is kept back, so that nothing is left to fit to.`
 				: '';
 	if (message) throw new AppError('invalid_input', message, [{ path, message }]);
-}
-
-/** A trace with the scenario that its mount was assessed with, its legs as the day, and the air as it was measured. */
-async function toFit(
-	trace: Trace,
-	assessment: Assessment,
-	heldOutLegs: readonly number[]
-): Promise<TraceToFit> {
-	const bins = await openBins(trace);
-	const startHour = startHourOf(trace)!;
-	const known = parseScenario(assessment.inputs.scenario);
-	const { soc: startSoc } = known.start;
-	const plan = dayPlanFromLegs(bins, trace.legs, {
-		...{ name: trace.name, startSoc, chargerMaxA: 0, startHour },
-		loadA: known.legs.find(({ engineOn }) => !engineOn)?.loadA ?? 0
-	});
-	const climate = ambientFromTrace(bins, startHour)?.climate ?? {};
-	const { scenario } = assessment.inputs;
-	return {
-		trace: toFitTrace(bins, startHour),
-		scenario: parseScenario({
-			...scenario,
-			climate: { ...scenario.climate, ...climate },
-			start: { ...scenario.start, hour: startHour },
-			legs: scenarioLegs(plan)
-		}),
-		heldOutLegs: placesOf(trace.legs, heldOutLegs)
-	};
 }
 
 export interface GatheredFit {
@@ -130,7 +67,7 @@ export async function gatherFit(
 		const message = `“${row.name}” cannot be fitted to: ${why}.`;
 		if (why) throw new AppError('conflict', message, [{ path, message }]);
 		requireLegs(row, wanted[at]!.heldOutLegs, `${path}.heldOutLegs`);
-		traces.push(await toFit(row, assessment!, wanted[at]!.heldOutLegs));
+		traces.push(await traceToFit(row, assessment!, wanted[at]!.heldOutLegs));
 	}
 	return {
 		engineInput: { traces, coefficients, book, options: { loss, leaveOut } },

@@ -19,7 +19,9 @@ import { record } from './audit';
 import { sayTraceError } from './describe-file';
 import { readTracePieces } from './read-pieces';
 import { afterOthers } from './slices';
-import { binsKeyOf, findTrace, rawKeyOf, showTrace } from './traces';
+import { holdTraces } from './accuracy/trace-checks';
+import { binsKeyOf, rawKeyOf } from './trace-bins';
+import { findTrace, showTrace } from './traces';
 
 interface Running {
 	done: Promise<void>;
@@ -83,6 +85,7 @@ async function read(trace: Trace, tell: (share: number) => void): Promise<void> 
 		});
 		const legs = measureLegs(reading.trace, proposeLegs(reading.trace));
 		await keepReading(trace, reading, legs);
+		await holdTraces({ traceId: trace.id });
 	} catch (error) {
 		if (!(error instanceof TraceError)) throw error;
 		const failure = { message: sayTraceError(error), line: error.line, column: error.column };

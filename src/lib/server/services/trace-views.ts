@@ -19,63 +19,23 @@ import {
 	ambientFromTrace,
 	channelsOf,
 	dayPlanFromLegs,
-	decodeTrace,
 	endOf,
 	measureLegs,
-	TraceView,
-	type BinnedTrace,
 	type TraceChannel,
 	type TraceCurve,
 	type TraceLeg
 } from '$lib/thermal/traces';
 import type { Trace } from '../db/models';
 import { inTransaction } from '../db/transaction';
-import { AppError, notFound } from '../errors';
+import { AppError } from '../errors';
 import { allow } from '../policies';
 import { startHourOf } from '../presenters/traces';
-import { storage } from '../storage';
 import { recordBy } from './audit';
 import { saveDayPlan } from './day-plans';
 import { saveVersioned } from './records';
-import { binsKeyOf, findTrace, showTrace } from './traces';
-
-interface Opened {
-	trace: BinnedTrace;
-	view: TraceView;
-}
-
-/** The traces looked at last: whoever zooms asks for the same one again and again. */
-const opened = new Map<string, Opened>();
-const MOST_OPENED = 3;
-
-function remember(contentId: string, made: Opened): Opened {
-	opened.delete(contentId);
-	opened.set(contentId, made);
-	for (const key of opened.keys()) {
-		if (opened.size <= MOST_OPENED) break;
-		opened.delete(key);
-	}
-	return made;
-}
-
-function requireRead({ state }: Trace): void {
-	if (state === 'read') return;
-	throw new AppError('conflict', 'This trace has not been read yet: confirm its columns first.');
-}
-
-async function openTrace(row: Trace): Promise<Opened> {
-	requireRead(row);
-	const { contentId } = row;
-	const known = opened.get(contentId);
-	if (known) return remember(contentId, known);
-	const bytes = await storage().read(binsKeyOf(contentId));
-	if (!bytes) throw notFound('trace');
-	const trace = decodeTrace(Uint8Array.from(bytes).buffer);
-	return remember(contentId, { trace, view: new TraceView(trace) });
-}
-
-/** The bins of a trace; for services that know already who may see it. */
-export const openBins = async (row: Trace): Promise<BinnedTrace> => (await openTrace(row)).trace;
+import { forgetTraceCheck, holdTraces } from './accuracy/trace-checks';
+import { openBins, openTrace, requireRead } from './trace-bins';
+import { findTrace, showTrace } from './traces';
 
 const plain = (values: Float32Array): (number | null)[] =>
 	// What a thermometer tells, and a point of a picture can show.
@@ -164,7 +124,7 @@ export async function saveLegs(
 	allow(person, 'traces.write');
 	const before = await findTrace(person, traceId);
 	const bins = await openBins(before);
-	return inTransaction(async (transaction) => {
+	const shown = await inTransaction(async (transaction) => {
 		const trace = await findTrace(person, traceId, { transaction });
 		const whole = wholeLegs(sent, trace.legs);
 		requireLegs(whole, trace.legs.at(-1)!.endS);
@@ -174,8 +134,11 @@ export async function saveLegs(
 		const told = legs.map(({ startS, endS, kind, meanSpeedKmh }) => ({ startS, endS, kind, meanSpeedKmh }));
 		const detail = { legs: told, startHour: trace.startHour ?? null };
 		await recordBy(person, 'trace.legs-set', { type: 'trace', id: traceId }, transaction, detail);
+		await forgetTraceCheck(traceId, transaction);
 		return showTrace(trace);
 	});
+	await holdTraces({ traceId });
+	return shown;
 }
 
 /** The design day that is nearest to the air outside as it was measured; null where the trace does not tell. */

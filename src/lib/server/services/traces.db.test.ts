@@ -9,18 +9,10 @@ import { clearFiles } from './clear-files';
 import { getDayPlan } from './day-plans';
 import { removeMount } from './mounts';
 import { beginReading, followReading } from './trace-reading';
+import { binsKeyOf, rawKeyOf } from './trace-bins';
 import { legsChangeSchema } from '$lib/schemas/traces';
 import { findAir, getCurve, getLegs, planOfTrace, saveLegs as setLegs, useAsDayPlan } from './trace-views';
-import {
-	binsKeyOf,
-	confirmMapping,
-	getTrace,
-	listMountTraces,
-	listTraces,
-	rawKeyOf,
-	removeTrace,
-	restoreTrace
-} from './traces';
+import { confirmMapping, getTrace, listMountTraces, listTraces, removeTrace, restoreTrace } from './traces';
 
 useTestDatabase();
 

@@ -8,11 +8,13 @@ import { AppError, notFound } from '../errors';
 import { allow } from '../policies';
 import { presentTrace, presentTraceRow, type TraceSurroundings } from '../presenters/traces';
 import { newContentId, storage } from '../storage';
+import { forgetTraceCheck, holdTraces } from './accuracy/trace-checks';
 import { recordBy } from './audit';
 import { describeSample, forAnotherFile, keepProposal, readSample, refuseTrace } from './describe-file';
 import { cleanFileName } from './file-names';
 import { findStandingMount } from './mounts';
 import { saveVersioned } from './records';
+import { rawKeyOf } from './trace-bins';
 
 /** A logger's file as it came, on the disk. */
 export interface IncomingTrace {
@@ -33,15 +35,6 @@ export interface PreparedTrace extends Pick<IncomingTrace, 'name' | 'bytes' | 's
 export const MOST_TRACES_OF_MOUNT = 200;
 const NAMELESS = 'trace.csv';
 const NO_ZONE_KNOWN = 'UTC';
-
-/** The file as it came, kept until it is read; and what is kept of it for good. */
-export const rawKeyOf = (contentId: string): string => `${contentId}.raw`;
-export const binsKeyOf = (contentId: string): string => `${contentId}.bins`;
-
-export async function removeTraceContents(contentId: string): Promise<void> {
-	await storage().remove(rawKeyOf(contentId));
-	await storage().remove(binsKeyOf(contentId));
-}
 
 async function surroundingsOf(traces: readonly Trace[]): Promise<(trace: Trace) => TraceSurroundings> {
 	const mounts = await Mount.findAll({ where: { id: [...new Set(traces.map(({ mountId }) => mountId))] } });
@@ -255,6 +248,7 @@ async function setRemoved(
 		if (wasRemoved === (removedAt !== null)) return showTrace(trace);
 		if (removedAt === null) await refuseTooMany(trace.mountId, transaction);
 		await trace.update({ removedAt }, { transaction });
+		await forgetTraceCheck(traceId, transaction);
 		await recordBy(person, action, { type: 'trace', id: traceId }, transaction);
 		return showTrace(trace);
 	});
@@ -265,5 +259,8 @@ export const removeTrace = (person: SignedInPerson, traceId: number): Promise<Tr
 	setRemoved(person, traceId, { removedAt: new Date(), action: 'trace.removed' });
 
 /** Puts a removed trace back; one that is there is left alone. */
-export const restoreTrace = (person: SignedInPerson, traceId: number): Promise<TraceView> =>
-	setRemoved(person, traceId, { removedAt: null, action: 'trace.restored' });
+export async function restoreTrace(person: SignedInPerson, traceId: number): Promise<TraceView> {
+	const restored = await setRemoved(person, traceId, { removedAt: null, action: 'trace.restored' });
+	await holdTraces({ traceId });
+	return restored;
+}

@@ -33,6 +33,42 @@ function sigmaOfLabel(withinK: number, widthK: number): number {
 	return rootOfSquares(withinK / NINE_OF_TEN, widthK / Math.sqrt(12));
 }
 
+/** What a prediction says, without how it came about. */
+type Spread = Pick<PeakSpread, 'lowC' | 'middleC' | 'highC' | 'sdK'>;
+
+/** The stated band, widened by what the measurement itself leaves open. */
+function bandOf({ lowC, middleC, highC }: Spread, sigmaK: number): { low: number; high: number } {
+	const reachK = NINE_OF_TEN * sigmaK;
+	return {
+		low: middleC - rootOfSquares(middleC - lowC, reachK),
+		high: middleC + rootOfSquares(highC - middleC, reachK)
+	};
+}
+
+/**
+ * A measured temperature against what was predicted of it.
+ *
+ *     error = measured − middle;  deviations = error / √(σ_predicted² + σ_measured²)
+ *     band: middle ∓ √(edge² + (1.6449 σ_measured)²)
+ *
+ * @param measuredC what was measured, °C
+ * @param spread what was predicted: middle, edges of the nine-in-ten band (°C) and standard deviation (K)
+ * @param sigmaK what the measurement leaves open, K
+ * @returns the measurement held against it, °C and K
+ * Validity: errors of measurement and prediction independent; low ≤ middle ≤ high.
+ * Source: sum of independent variances.
+ * @example
+ * holdMeasured(62, { lowC: 55, middleC: 60, highC: 65, sdK: 3 }, 0).stand; // 'inside'
+ */
+export function holdMeasured(measuredC: number, spread: Spread, sigmaK: number): Held {
+	const { middleC, sdK } = spread;
+	const { low, high } = bandOf(spread, sigmaK);
+	const error = measuredC - middleC;
+	const deviations = error / rootOfSquares(sdK, sigmaK);
+	const stand = standOf(measuredC, low, high);
+	return { measured: measuredC, predicted: middleC, low, high, error, deviations, stand };
+}
+
 /**
  * A label against the spread of the peak. The band is widened by what the label itself leaves open.
  *
@@ -58,23 +94,14 @@ export function holdLabel(
 	const { turnedC, notTurnedC, withinK } = reading;
 	const isOpen = turnedC === null || notTurnedC === null;
 	const sigmaK = sigmaOfLabel(withinK, isOpen ? 0 : notTurnedC - turnedC);
-	const reachK = NINE_OF_TEN * sigmaK;
-	const low = middleC - rootOfSquares(middleC - lowC, reachK);
-	const high = middleC + rootOfSquares(highC - middleC, reachK);
-	const band = { predicted: middleC, low, high };
-	const deviationsOf = (errorK: number): number => errorK / rootOfSquares(sdK, sigmaK);
-	if (!isOpen) {
-		const measured = (turnedC + notTurnedC) / 2;
-		const error = measured - middleC;
-		return {
-			...{ measured, ...band, error },
-			...{ deviations: deviationsOf(error), stand: standOf(measured, low, high) }
-		};
-	}
+	const spread = { lowC, middleC, highC, sdK };
+	if (!isOpen) return holdMeasured((turnedC + notTurnedC) / 2, spread, sigmaK);
+	const { low, high } = bandOf(spread, sigmaK);
 	// A field that turned says "at least", one that did not "at most": only beyond the prediction does it gainsay it.
 	const beyondK = turnedC === null ? Math.min(notTurnedC! - middleC, 0) : Math.max(turnedC - middleC, 0);
 	const stand = beyondK === 0 ? 'inside' : standOf(middleC + beyondK, low, high);
-	return { measured: null, ...band, error: null, deviations: deviationsOf(beyondK), stand };
+	const deviations = beyondK / rootOfSquares(sdK, sigmaK);
+	return { measured: null, predicted: middleC, low, high, error: null, deviations, stand };
 }
 
 /** A test is right to this share of the capacity, and a new battery holds its rated capacity to this: judgement. */

@@ -8,7 +8,15 @@ export {
 	type YearsRange
 } from './capacity-trend';
 export { weighReport, type CutOutReport } from './cut-out-report';
-export { holdCapacity, holdLabel, STANDS, type Held, type LifePoint, type Stand } from './held-against';
+export {
+	holdCapacity,
+	holdLabel,
+	holdMeasured,
+	STANDS,
+	type Held,
+	type LifePoint,
+	type Stand
+} from './held-against';
 export { holdDays, tenVehicles, type HeldDays, type StatedDays } from './held-days';
 export { learnFrom, type Belief, type LearntUnknown, type Learning, type ReadingDay } from './learn';
 export { OTHER_CAUSES, type RankedCause } from './other-causes';

@@ -1,4 +1,4 @@
-import { sampleQuantile, scrambledSobolPoint } from '../statistics';
+import { sampleQuantile, scrambledSobolPoint, standardDeviation } from '../statistics';
 import type { Scenario } from '../types';
 import { drawScenario } from '../uncertainty/draw-scenario';
 import { PRIORS } from '../uncertainty/priors';
@@ -19,12 +19,6 @@ export interface PeakSpread {
 	sdK: number;
 }
 
-function standardDeviation(values: readonly number[]): number {
-	const mean = values.reduce((sum, value) => sum + value, 0) / values.length;
-	const squares = values.reduce((sum, value) => sum + (value - mean) ** 2, 0);
-	return Math.sqrt(squares / Math.max(values.length - 1, 1));
-}
-
 /**
  * What an estimate says of the hottest that a place of the battery gets on a day: what a label there should show.
  *
@@ -33,8 +27,8 @@ function standardDeviation(values: readonly number[]): number {
  * @param scenario the mount on that day
  * @param place where the label is
  * @param options number of draws (a power of two keeps them even) and seed
- * @returns as a generator, yields the share of the work done, and returns the spread; null when no draw could be run to
- *   its end
+ * @returns as a generator, yields the share of the work done, and returns the spread; null when fewer than two draws
+ *   could be run to their ends
  * Validity: the priors of PRIORS, independent of one another; one day, as the label's hottest.
  * Source: Owen, Randomly permuted (t,m,s)-nets (1995) for the points.
  * @example
@@ -54,7 +48,7 @@ export function* spreadPeak(
 		if (run.status !== 'failed') peaks.push(run.report.peaks[place]);
 		yield (draw + 1) / samples;
 	}
-	if (peaks.length === 0) return null;
+	if (peaks.length < 2) return null;
 	const [lowC, middleC, highC] = [EDGE, 0.5, 1 - EDGE].map((share) => sampleQuantile(peaks, share));
 	return {
 		...{ samples, seed, sdK: standardDeviation(peaks) },

@@ -17,6 +17,7 @@ export {
 } from './fit-coefficients';
 export type { FitError, FitErrors } from './fit-errors';
 export type { TraceToFit } from './fit-setup';
+export { holdTrace, type HeldTrace } from './hold-trace';
 export { fitLeastSquares, type Fit } from './least-squares';
 export type { ErrorsCompared } from './leave-out';
 export type { ChannelNoise, Noises } from './noise';

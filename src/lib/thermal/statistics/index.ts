@@ -22,3 +22,4 @@ export {
 	sobolCoordinate,
 	sobolPoint
 } from './sobol';
+export { standardDeviation } from './standard-deviation';

@@ -1,4 +1,5 @@
 import { sampleQuantile } from '../statistics/sample-quantile';
+import { standardDeviation } from '../statistics/standard-deviation';
 import { HOURS_A_DAY, MONTH_NAMES, monthOfDay } from './calendar';
 import type { WeatherHour } from './weather-file';
 
@@ -42,23 +43,6 @@ function gatherDays(hours: readonly WeatherHour[]): Day[] {
 
 const mean = (values: readonly number[]): number =>
 	values.reduce((sum, value) => sum + value, 0) / values.length;
-
-/**
- * How far values of a sample lie from their mean.
- *
- *     s = √( Σ (x − x̄)² / (n − 1) )
- *
- * @param values at least two finite numbers
- * @returns standard deviation, in the unit of the values
- * Validity: two passes, so that a large mean costs no digits.
- * Source: the unbiased estimate of a variance, any book of statistics.
- * @example
- * standardDeviation([2, 4, 4, 4, 5, 5, 7, 9]); // 2.138
- */
-export function standardDeviation(values: readonly number[]): number {
-	const centre = mean(values);
-	return Math.sqrt(values.reduce((sum, value) => sum + (value - centre) ** 2, 0) / (values.length - 1));
-}
 
 function findHottestMonth(hours: readonly WeatherHour[]): number {
 	const means = MONTH_NAMES.map((_, month) =>

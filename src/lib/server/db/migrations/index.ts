@@ -90,6 +90,7 @@ import { migration as m131 } from './131-trace-loggers';
 import { migration as m132 } from './132-fits';
 import { migration as m133 } from './133-coefficients-fit';
 import { migration as m160 } from './160-prediction-checks';
+import { migration as m161 } from './161-prediction-checks-traces';
 import type { Migration } from '../migrate';
 
 /** Every migration, in the order in which they run; each is one DDL step that may run again. */
@@ -185,5 +186,6 @@ export const migrations: Migration[] = [
 	m131,
 	m132,
 	m133,
-	m160
+	m160,
+	m161
 ];

@@ -1,6 +1,7 @@
 import type { Transaction } from 'sequelize';
 import type { LeftOut, ReadingKind } from '$lib/schemas/accuracy';
 import type { Held } from '$lib/thermal/field';
+import type { HeldTrace } from '$lib/thermal/fit';
 import { connection } from '../../db/connection';
 
 /** A row of prediction_checks. */
@@ -8,12 +9,14 @@ export interface CheckRow {
 	kind: ReadingKind;
 	workshopId: number;
 	mountId: number;
-	installationId: number;
+	/** Null of traces: they are measured at mounts, before or after anything was fitted. */
+	installationId: number | null;
 	fieldNoteId: number | null;
+	traceId: number | null;
 	assessmentId: number;
 	bookId: number;
 	readOn: string;
-	held: Held;
+	held: Held | HeldTrace;
 	/** Of cut-outs: the stated chance of one at least, for how long it was watched, and whether anybody looked. */
 	watched: { chance: number; observedDays: number; isLookedAt: boolean } | null;
 	isEnteredLater: boolean;
@@ -21,7 +24,8 @@ export interface CheckRow {
 }
 
 const COLUMNS = [
-	...['kind', 'workshop_id', 'mount_id', 'installation_id', 'field_note_id', 'assessment_id', 'book_id'],
+	...['kind', 'workshop_id', 'mount_id', 'installation_id', 'field_note_id', 'trace_id'],
+	...['assessment_id', 'book_id', 'place'],
 	...['read_on', 'measured', 'predicted', 'low', 'high', 'error', 'square', 'deviations', 'misfit', 'stand'],
 	...['chance', 'observed_days', 'is_looked_at', 'is_entered_later', 'left_out']
 ];
@@ -31,10 +35,24 @@ const flag = (holds: boolean | undefined): number | null => (holds === undefined
 /** In the order of COLUMNS. */
 function valuesOf({ held, watched, ...row }: CheckRow): unknown[] {
 	const { measured, predicted, low, high, error, deviations, stand } = held;
-	const square = error === null ? null : error * error;
+	const isTrace = 'meanSquare' in held;
+	const square = isTrace ? held.meanSquare : error === null ? null : error * error;
 	return [
-		...[row.kind, row.workshopId, row.mountId, row.installationId, row.fieldNoteId, row.assessmentId],
-		...[row.bookId, row.readOn, measured, predicted, low, high, error, square, deviations],
+		...[row.kind, row.workshopId, row.mountId, row.installationId, row.fieldNoteId],
+		...[
+			row.traceId,
+			row.assessmentId,
+			row.bookId,
+			isTrace ? held.place : null,
+			row.readOn,
+			measured,
+			predicted,
+			low,
+			high,
+			error,
+			square,
+			deviations
+		],
 		...[Math.abs(deviations), stand, watched?.chance ?? null, watched?.observedDays ?? null],
 		...[flag(watched?.isLookedAt), flag(row.isEnteredLater), row.leftOut]
 	];

@@ -5,6 +5,7 @@ import { inTransaction } from '../../db/transaction';
 import { refreshChecks } from './keep-checks';
 import { holdNote, keepLabelCheck } from './label-checks';
 import { predictionAt } from './prediction-at';
+import { holdTraces } from './trace-checks';
 
 const BATCH = 500;
 
@@ -60,12 +61,12 @@ async function completeLabels(): Promise<number> {
 	return missing.length;
 }
 
-/** Holds against its prediction what was noted before this was done; says how many labels and installations. */
-export async function completeChecks(): Promise<{ labels: number; installations: number }> {
+/** Holds against its prediction what was noted before this was done; says how many labels, installations and traces. */
+export async function completeChecks(): Promise<{ labels: number; installations: number; traces: number }> {
 	const ids = (await select<{ id: number }>(INSTALLATIONS)).map(({ id }) => id);
 	for (let from = 0; from < ids.length; from += BATCH) {
 		const batch = ids.slice(from, from + BATCH);
 		await inTransaction((transaction) => refreshChecks(batch, transaction));
 	}
-	return { labels: await completeLabels(), installations: ids.length };
+	return { labels: await completeLabels(), installations: ids.length, traces: await holdTraces() };
 }

@@ -155,7 +155,15 @@ function checkDays(watched: Watched, stated: Stated | undefined): CheckRow[] {
 	const isLookedAt = doneOn !== null || lookedOn !== null;
 	return [
 		{
-			...{ kind: 'cut-out', ...aboutOf(watched), fieldNoteId: null, readOn: until, held, leftOut: '' },
+			...{
+				kind: 'cut-out',
+				...aboutOf(watched),
+				fieldNoteId: null,
+				traceId: null,
+				readOn: until,
+				held,
+				leftOut: ''
+			},
 			watched: { chance, observedDays, isLookedAt }
 		}
 	];
@@ -178,7 +186,7 @@ function checkCapacity(test: Test, all: readonly Test[], stated: Stated | undefi
 	);
 	return [
 		{
-			...{ kind: 'capacity', ...aboutOf(test), fieldNoteId, readOn, held, watched: null },
+			...{ kind: 'capacity', ...aboutOf(test), fieldNoteId, traceId: null, readOn, held, watched: null },
 			leftOut: isAgain ? 'noted-again' : ''
 		}
 	];

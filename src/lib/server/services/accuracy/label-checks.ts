@@ -59,7 +59,15 @@ export async function keepLabelCheck(
 	transaction: Transaction
 ): Promise<void> {
 	const leftOut = finding?.learning?.fits === false ? 'fits-nothing' : '';
-	const about = { workshopId, mountId, installationId, fieldNoteId: noteId, assessmentId, bookId };
+	const about = {
+		workshopId,
+		mountId,
+		installationId,
+		fieldNoteId: noteId,
+		traceId: null,
+		assessmentId,
+		bookId
+	};
 	await writeChecks(
 		[{ kind: 'label', ...about, readOn: notedOn, held, watched: null, isEnteredLater, leftOut }],
 		transaction

@@ -1,0 +1,176 @@
+import { beforeEach, describe, expect, it } from 'vitest';
+import { QueryTypes } from 'sequelize';
+import { makeAssessableJob } from '../../../../../tests/support/assessable-job';
+import { makeFittable } from '../../../../../tests/support/fit-traces';
+import { askReadings } from '../../../../../tests/support/readings';
+import { makeCrew, useTestDatabase, type Crew } from '../../../../../tests/support/services';
+import { dayText, readAs, sendTrace, type Confirmed } from '../../../../../tests/support/traces';
+import { fitInputSchema } from '$lib/schemas/fits';
+import { legsChangeSchema } from '$lib/schemas/traces';
+import { connection } from '../../db/connection';
+import { assessMount } from '../assessments';
+import { moveBook } from '../book-changes';
+import { today } from '../days';
+import { draftFittedBook } from '../fit-books';
+import { createFit, followFit, prepareFit } from '../fits';
+import { getJob, setJobClimate } from '../jobs';
+import { saveLegs } from '../trace-views';
+import { removeTrace, restoreTrace } from '../traces';
+import { completeChecks } from './complete-checks';
+import { listReadings } from './list-readings';
+import { readAccuracy } from './read-accuracy';
+
+useTestDatabase();
+
+const PRIOR = { law: 'lognormal', middle: 2.5, spread: 0.35 };
+const LONG_MS = 120_000;
+let crew: Crew;
+let mountId: number;
+let jobId: number;
+
+beforeEach(async () => {
+	crew = await makeCrew();
+	const made = await makeAssessableJob(crew.installer);
+	({ jobId } = made);
+	mountId = made.hot.id;
+});
+
+const sendDay = async (text = dayText(), said: Confirmed = {}) =>
+	readAs(crew.engineer, await sendTrace(crew.engineer, mountId, text), said);
+
+async function checksOf(traceId: number) {
+	const sql = 'SELECT * FROM prediction_checks WHERE trace_id = :traceId';
+	return connection().query<Record<string, unknown>>(sql, {
+		replacements: { traceId },
+		type: QueryTypes.SELECT
+	});
+}
+
+/** The same job on a cooler day: another assessment. */
+async function assessCooler() {
+	const job = await getJob(crew.installer, jobId);
+	const hotDay = { ...job.hotDay!, hotDayMaxC: job.hotDay!.hotDayMaxC - 6 };
+	const place = { placeId: job.place!.id, daysOnRoad: null, version: job.version };
+	await setJobClimate(crew.installer, jobId, { ...hotDay, ...place });
+	return assessMount(crew.installer, { mountId });
+}
+
+describe('a measured trace', () => {
+	it('is held against the assessment that was there before it, the mean over its minutes', async () => {
+		const assessment = await assessMount(crew.installer, { mountId });
+		const trace = await sendDay(dayText({ date: today() }));
+		const [check, ...others] = await checksOf(trace.id);
+		expect(others).toEqual([]);
+		expect(check).toMatchObject({
+			...{ kind: 'trace', assessment_id: assessment.id, place: 'cells', read_on: today() },
+			...{ is_entered_later: 0, left_out: '', mount_id: mountId, installation_id: null }
+		});
+		// The mean of the file's cells, worked out here: air 24 °C rising 1 K an hour, 4 K above it for 2 of 6 hours, 1 K else.
+		const minutes = Array.from({ length: 360 }, (_, at) => at);
+		const cellC = minutes.map((at) => 24 + at / 60 + (at >= 60 && at < 180 ? 4 : 1) + (at % 7) / 10);
+		expect(check!.measured).toBeCloseTo(cellC.reduce((sum, c) => sum + c, 0) / 360, 1);
+		expect(Number(check!.measured) - Number(check!.predicted)).toBeCloseTo(Number(check!.error), 9);
+		expect(Number(check!.square)).toBeGreaterThanOrEqual(Number(check!.error) ** 2);
+		expect([
+			Number(check!.low) < Number(check!.predicted),
+			Number(check!.predicted) < Number(check!.high)
+		]).toEqual([true, true]);
+
+		await assessCooler();
+		expect(await checksOf(trace.id)).toEqual([check]);
+		const { temperatures } = await readAccuracy(crew.engineer);
+		expect(temperatures.map(({ kind, all }) => [kind, all.readings])).toEqual([['trace', 1]]);
+		const { readings } = await listReadings(crew.manager, askReadings({ kind: 'trace' }));
+		expect(readings).toMatchObject([
+			{ trace: { id: trace.id, name: 'day.csv', place: 'cells' }, label: null }
+		]);
+	});
+
+	it('of a day before its mount was entered goes with the newest assessment before it was sent in, and says so', async () => {
+		await assessMount(crew.installer, { mountId });
+		const newest = await assessCooler();
+		const trace = await sendDay(dayText({ date: '2025-02-03' }));
+		expect(await checksOf(trace.id)).toMatchObject([
+			{ assessment_id: newest.id, is_entered_later: 1, read_on: '2025-02-03' }
+		]);
+	});
+
+	it('waits for the first assessment of its mount, and for the hour at which it began', async () => {
+		const trace = await sendDay();
+		expect(await checksOf(trace.id)).toEqual([]);
+		const assessment = await assessMount(crew.installer, { mountId });
+		expect(await checksOf(trace.id)).toMatchObject([{ assessment_id: assessment.id }]);
+
+		const elapsed = dayText().replaceAll(/^2026-02-03 (\d\d):(\d\d):00/gm, (_, h: string, m: string) =>
+			String((Number(h) * 60 + Number(m)) * 60)
+		);
+		const hourless = await sendDay(elapsed.replace('Time', 'Elapsed (s)'));
+		expect(hourless.startHour).toBeNull();
+		expect(await checksOf(hourless.id)).toEqual([]);
+		const legs = hourless.legs.map(({ endS, kind, meanSpeedKmh }) => ({
+			endS,
+			kind,
+			speedKmh: meanSpeedKmh
+		}));
+		const change = legsChangeSchema.parse({ legs, startHour: 8, version: hourless.version });
+		await saveLegs(crew.engineer, hourless.id, change);
+		expect(await checksOf(hourless.id)).toMatchObject([{ read_on: today(), is_entered_later: 0 }]);
+	});
+
+	it('is held anew when its legs are put right, is forgotten while removed, and is held at the start where it was not', async () => {
+		await assessMount(crew.installer, { mountId });
+		const trace = await sendDay();
+		const [before] = await checksOf(trace.id);
+		const endS = trace.legs.at(-1)!.endS;
+		const oneStop = { legs: [{ endS, kind: 'stopped', speedKmh: null }], version: trace.version };
+		await saveLegs(crew.engineer, trace.id, legsChangeSchema.parse(oneStop));
+		const [stood] = await checksOf(trace.id);
+		// An engine that never ran heats nothing.
+		expect(Number(stood!.predicted)).toBeLessThan(Number(before!.predicted) - 0.5);
+
+		await removeTrace(crew.engineer, trace.id);
+		expect(await checksOf(trace.id)).toEqual([]);
+		await completeChecks();
+		expect(await checksOf(trace.id)).toEqual([]);
+		await restoreTrace(crew.engineer, trace.id);
+		const { id: _gone, ...kept } = stood!;
+		expect(await checksOf(trace.id)).toMatchObject([kept]);
+
+		await connection().query(`DELETE FROM prediction_checks WHERE trace_id = ${trace.id}`);
+		expect((await completeChecks()).traces).toBe(1);
+		expect(await checksOf(trace.id)).toMatchObject([kept]);
+		expect((await completeChecks()).traces).toBe(0);
+	});
+
+	it('that was made up is held against nothing', async () => {
+		await assessMount(crew.installer, { mountId });
+		const trace = await sendDay(dayText(), { isSynthetic: true });
+		await completeChecks();
+		expect(await checksOf(trace.id)).toEqual([]);
+	});
+
+	it(
+		'does not count when it is sent in once more, after a book was fitted to it',
+		async () => {
+			const { engineer, manager } = crew;
+			const { mountId: fittedMountId, traces, texts } = await makeFittable(crew);
+			const coefficients = [{ group: 'battery', key: 'caseCellConductance', prior: PRIOR }];
+			const asked = { name: 'One day', traces: [{ traceId: traces[0]!.id }], coefficients, leaveOut: false };
+			const input = fitInputSchema.parse(asked);
+			const { id: fitId } = await createFit(engineer, input, await prepareFit(engineer, input));
+			await followFit(engineer, fitId);
+			const { id, version } = await draftFittedBook(engineer, fitId, { name: 'One day', note: '' });
+			const onTrial = await moveBook(engineer, id, { to: 'on-trial', version });
+			await moveBook(manager, id, { to: 'in-force', version: onTrial.version });
+			await assessMount(crew.installer, { mountId: fittedMountId });
+
+			const again = await readAs(engineer, await sendTrace(engineer, fittedMountId, texts[0]!));
+			expect(await checksOf(traces[0]!.id)).toMatchObject([{ left_out: '' }]);
+			expect(await checksOf(again.id)).toMatchObject([{ book_id: id, left_out: 'fitted-to' }]);
+			const { temperatures, leftOut } = await readAccuracy(engineer);
+			expect(temperatures.map(({ kind, all }) => [kind, all.readings])).toEqual([['trace', 1]]);
+			expect(leftOut).toMatchObject([{ kind: 'trace', why: 'fitted-to', readings: 1 }]);
+		},
+		LONG_MS
+	);
+});

@@ -1,0 +1,128 @@
+import { QueryTypes, type Transaction } from 'sequelize';
+import { ScenarioError } from '$lib/thermal';
+import { EngineInputError } from '$lib/thermal/correlations/require';
+import { holdTrace, type HeldTrace } from '$lib/thermal/fit';
+import { connection } from '../../db/connection';
+import { Assessment, Coefficient, Fit, Trace } from '../../db/models';
+import { inTransaction } from '../../db/transaction';
+import { startHourOf } from '../../presenters/traces';
+import { today } from '../days';
+import { workInSlices } from '../slices';
+import { traceToFit } from '../trace-scenario';
+import { writeChecks } from './check-rows';
+
+const DRAWS = 64;
+const MS_PER_S = 1000;
+
+/** Traces that were measured and read, and that nothing was held against yet. */
+const WAITING = `
+	SELECT t.id FROM traces t LEFT JOIN prediction_checks c ON c.trace_id = t.id
+	WHERE t.state = 'read' AND NOT t.is_synthetic AND t.removed_at IS NULL AND c.id IS NULL
+`;
+
+interface Prediction {
+	assessment: Assessment;
+	/** The day of the trace; where the logger told no date, the day it was sent in. */
+	readOn: string;
+	isEnteredLater: boolean;
+}
+
+/** By the calendar of the trace's place, where its logger told a date. */
+function dayOf({ span, createdAt }: Trace): string {
+	if (span?.timeBase !== 'utc') return today(createdAt);
+	const place = new Intl.DateTimeFormat('sv-SE', { timeZone: span.timeZone ?? 'UTC' });
+	return place.format(new Date(span.startS * MS_PER_S));
+}
+
+/**
+ * The newest assessment that was there by the day of a trace. Where none was, the newest before the trace was sent in stands in;
+ * where the mount was assessed only afterwards, the first.
+ */
+async function predictionOf(trace: Trace): Promise<Prediction | null> {
+	const { mountId, createdAt: sentAt } = trace;
+	const attributes = ['id', 'createdAt'];
+	const all = await Assessment.findAll({ where: { mountId }, attributes, order: [['id', 'DESC']] });
+	const readOn = dayOf(trace);
+	const before = all.filter(({ createdAt }) => createdAt < sentAt);
+	const found = before.find(({ createdAt }) => today(createdAt) <= readOn) ?? before[0] ?? all.at(-1);
+	if (!found) return null;
+	const assessment = (await Assessment.findByPk(found.id))!;
+	return { assessment, readOn, isEnteredLater: today(found.createdAt) > readOn };
+}
+
+/** Whether a book has values that were fitted to this very file, sent in before: then nothing was predicted of it. */
+async function isFittedTo({ bookId }: Assessment, { sha256 }: Trace): Promise<boolean> {
+	const fitted = await Coefficient.findAll({ where: { bookId }, attributes: ['fitId'] });
+	const ids = new Set(fitted.flatMap(({ fitId }) => fitId ?? []));
+	const fits = await Fit.findAll({ where: { id: [...ids] }, attributes: ['inputs'] });
+	return fits.some(({ inputs }) => inputs.traces.some((each) => each.sha256 === sha256));
+}
+
+/** Null of what no prediction can be held against: nothing of the battery was measured, or its day cannot be run. */
+async function hold(trace: Trace, assessment: Assessment): Promise<HeldTrace | null> {
+	try {
+		const given = await traceToFit(trace, assessment, []);
+		return await workInSlices(holdTrace(given, { samples: DRAWS, seed: trace.id }));
+	} catch (error) {
+		if (error instanceof EngineInputError || error instanceof ScenarioError) return null;
+		throw error;
+	}
+}
+
+/** Whoever comes second finds the first one's, or a trace that is another by now. */
+async function isAsItWas({ id, version }: Trace, transaction: Transaction): Promise<boolean> {
+	const now = await Trace.findByPk(id, { transaction, lock: transaction.LOCK.UPDATE });
+	if (now?.version !== version || (now.removedAt ?? null) !== null) return false;
+	const [row] = await connection().query<{ held: number }>(
+		'SELECT COUNT(*) AS held FROM prediction_checks WHERE trace_id = :id',
+		{ replacements: { id }, type: QueryTypes.SELECT, transaction }
+	);
+	return Number(row?.held) === 0;
+}
+
+async function holdOne(id: number): Promise<boolean> {
+	const trace = await Trace.findByPk(id);
+	if (!trace || startHourOf(trace) === null) return false;
+	const prediction = await predictionOf(trace);
+	const held = prediction && (await hold(trace, prediction.assessment));
+	if (!held) return false;
+	const { assessment, readOn, isEnteredLater } = prediction;
+	const { workshopId, mountId } = trace;
+	const { id: assessmentId, bookId } = assessment;
+	const about = { workshopId, mountId, installationId: null, fieldNoteId: null, traceId: id };
+	const leftOut = (await isFittedTo(assessment, trace)) ? 'fitted-to' : '';
+	return inTransaction(async (transaction) => {
+		if (!(await isAsItWas(trace, transaction))) return false;
+		const row = { kind: 'trace', ...about, assessmentId, bookId, readOn, held, isEnteredLater } as const;
+		await writeChecks([{ ...row, watched: null, leftOut }], transaction);
+		return true;
+	});
+}
+
+/**
+ * Holds traces that wait for it against what had been predicted of their days: those of a mount, one, or all. Says how many.
+ * What had been predicted comes from the assessment of the time, run with the legs as they were driven on the air as it was.
+ */
+export async function holdTraces(of: { mountId?: number; traceId?: number } = {}): Promise<number> {
+	const { mountId, traceId } = of;
+	const narrowed = [
+		...(mountId === undefined ? [] : ['AND t.mount_id = :mountId']),
+		...(traceId === undefined ? [] : ['AND t.id = :traceId'])
+	];
+	const rows = await connection().query<{ id: number }>(`${WAITING} ${narrowed.join(' ')} ORDER BY t.id`, {
+		replacements: { mountId, traceId },
+		type: QueryTypes.SELECT
+	});
+	let count = 0;
+	for (const { id } of rows) if (await holdOne(Number(id))) count++;
+	return count;
+}
+
+/** Forgets what a trace was held against, inside the transaction that changed the trace. */
+export async function forgetTraceCheck(traceId: number, transaction: Transaction): Promise<void> {
+	await connection().query('DELETE FROM prediction_checks WHERE trace_id = :traceId', {
+		replacements: { traceId },
+		type: QueryTypes.DELETE,
+		transaction
+	});
+}

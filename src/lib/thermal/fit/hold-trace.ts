@@ -1,0 +1,104 @@
+import { holdMeasured, READING_PLACES, type Held, type ReadingPlace } from '../field';
+import { sampleQuantile, scrambledSobolPoint, standardDeviation } from '../statistics';
+import { drawScenario } from '../uncertainty/draw-scenario';
+import { PRIORS } from '../uncertainty/priors';
+import { listBlocks, markLegs, type Block } from './blocks';
+import type { TraceToFit } from './fit-setup';
+import { requireStart } from './start-temps';
+import { CHANNEL_NODES, requireTrace } from './trace';
+import { TraceModel, type TraceOfScenario } from './trace-model';
+
+const EDGE = 0.05;
+/** What a logger's thermometer is right to, K; engineering judgement. */
+const SENSOR_SD_K = 0.5;
+/** The nearer to the cells, the more a measurement says of what was predicted of them. */
+const NEAREST_FIRST: readonly ReadingPlace[] = ['cells', 'board', 'case'];
+
+/** A whole trace held against what had been predicted of its day, °C and K. */
+export interface HeldTrace extends Held {
+	/** Where it was measured: the measured place nearest to the cells. */
+	place: ReadingPlace;
+	/** Mean of the squared errors of its readings, K². */
+	meanSquare: number;
+}
+
+/** The readings that the prediction is held against; undefined where nothing of the battery was measured. */
+function nearestBlock(of: TraceOfScenario): Block | undefined {
+	const within = markLegs(of, [...of.scenario.legs.keys()]);
+	const blocks = listBlocks(of, 0, within);
+	return NEAREST_FIRST.flatMap((place) =>
+		blocks.filter(({ channel }) => CHANNEL_NODES[channel] === place)
+	).at(0);
+}
+
+/** What is foretold at the readings of a block, from the first readings on. */
+function foretell(of: TraceOfScenario, { row, at }: Block): Float64Array {
+	const model = new TraceModel(of, []);
+	const rows = model.predict(
+		[],
+		model.starts.map(({ mean }) => mean)
+	);
+	return Float64Array.from(at, (place) => rows[row]![place]!);
+}
+
+const meanOf = (values: Float64Array): number =>
+	values.reduce((sum, value) => sum + value, 0) / values.length;
+
+/**
+ * A trace against what had been predicted of its day: the mean over the day, with the band that the unknowns make.
+ *
+ *     error = mean(measured − predicted);  σ² = σ_draws² + 0.5²
+ *     band: predicted ∓ √(edge² + (1.6449 · 0.5)²), edges the quantiles 0.05 and 0.95 of the mean over draws
+ *
+ * The day is run with the legs of the scenario, on the air and current that were measured, from the first readings on.
+ *
+ * @param of trace and the scenario that its mount had been assessed with, its legs those that were driven
+ * @param options number of draws (a power of two keeps them even) and seed
+ * @returns as a generator, yields the share of the work done, and returns the trace held against it; null where no temperature
+ *   of the battery was measured, or the day cannot be run to its end
+ * @throws EngineInputError with the path for a trace that cannot be
+ * Validity: the priors of PRIORS, independent of one another; legs as they were driven; sensors right to ± 0.5 K (judgement).
+ * Source: sum of independent variances; Owen, Randomly permuted (t,m,s)-nets (1995) for the points.
+ * @example
+ * const scenario = defaultScenario([{ minutes: 60, engineOn: true, speedKmh: 60 }]);
+ * const caseC = runScenario(scenario).minutes.nodes.case;
+ * const timeS = Float64Array.from(caseC.keys(), (minute) => 60 * minute);
+ * const trace = { startedAtHour: 6, timeS, channels: { caseC: caseC.map((value) => value + 2) } };
+ * const work = holdTrace({ trace, scenario }, { samples: 8, seed: 1 });
+ * let step = work.next();
+ * while (!step.done) step = work.next();
+ * step.value.place; // 'case'
+ */
+export function* holdTrace(
+	{ trace, scenario, start = { kind: 'air' } }: TraceToFit,
+	{ samples, seed }: { samples: number; seed: number }
+): Generator<number, HeldTrace | null> {
+	requireTrace(trace, 'trace');
+	requireStart(start, 'start');
+	const of = { trace, scenario, start };
+	const block = nearestBlock(of);
+	if (!block) return null;
+	const measured = Float64Array.from(block.at, (place) => block.measured[place]!);
+	const foretold = foretell(of, block);
+	if (foretold.some(Number.isNaN)) return null;
+	const means: number[] = [];
+	for (let draw = 0; draw < samples; draw++) {
+		const drawn = drawScenario(scenario, scrambledSobolPoint(draw, PRIORS.length, seed));
+		const mean = meanOf(foretell({ ...of, scenario: drawn }, block));
+		if (!Number.isNaN(mean)) means.push(mean);
+		yield (draw + 1) / samples;
+	}
+	if (means.length < 2) return null;
+	const middleC = meanOf(foretold);
+	const spread = {
+		lowC: Math.min(sampleQuantile(means, EDGE), middleC),
+		middleC,
+		highC: Math.max(sampleQuantile(means, 1 - EDGE), middleC),
+		sdK: standardDeviation(means)
+	};
+	return {
+		...holdMeasured(meanOf(measured), spread, SENSOR_SD_K),
+		place: READING_PLACES.find((place) => place === CHANNEL_NODES[block.channel])!,
+		meanSquare: meanOf(measured.map((value, at) => (value - foretold[at]!) ** 2))
+	};
+}
