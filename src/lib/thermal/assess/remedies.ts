@@ -1,9 +1,16 @@
 import type { Scenario } from '../types';
-import { GAP_AIR, PLATE_HEAT_J_PER_M2K, SHIELD_COVERAGE, SHIELD_EMISSIVITY } from '../survey/judgement';
+import {
+	ENCLOSURES,
+	FLOOR_W_PER_M2K,
+	GAP_AIR,
+	PLATE_HEAT_J_PER_M2K,
+	SHIELD_COVERAGE,
+	SHIELD_EMISSIVITY
+} from '../survey/judgement';
 import { SCENARIO_FIELDS } from '../vehicle/scenario-fields';
 
-/** Remedies of which only one can be had at a time. */
-export type RemedyGroup = 'shield' | 'charge';
+/** Remedies of which only one can be had at a time; another place goes with another charge, and with nothing else. */
+export type RemedyGroup = 'shield' | 'charge' | 'place';
 
 /** Something that can be done about a mount that runs too hot. */
 export interface Remedy {
@@ -68,6 +75,24 @@ function restCharger(scenario: Scenario): void {
 
 function openBonnetAtStops({ legs }: Scenario): void {
 	for (const leg of legs) if (!leg.engineOn) leg.bonnetOpen = true;
+}
+
+/** Of all faces of a usual battery, the one that it stands on. */
+const BASE_SHARE = 0.21;
+/** As the survey has a battery in the cargo area, with sun through the windows. */
+function standInCargoArea(scenario: Scenario): void {
+	const { solarArea, ...space } = ENCLOSURES['cargo-area'];
+	const away = { bayAirFraction: 0, roadUplift: 0, airExposure: 0, guardFraction: 0 };
+	const unseen = { exhaustView: 0, engineView: 0, bonnetView: 0 };
+	scenario.position = { ...scenario.position, ...away, ...unseen, enclosureFraction: 1 };
+	scenario.enclosure = {
+		...scenario.enclosure,
+		...space,
+		coolGain: 0,
+		solarArea: solarArea['through-windows']
+	};
+	scenario.tray.guardConductance = FLOOR_W_PER_M2K * BASE_SHARE * scenario.battery.caseArea;
+	scenario.shield = null;
 }
 
 /** What can be done, each with what the run takes it to do: engineering judgement where nothing else is said. */
@@ -202,5 +227,16 @@ export const REMEDIES: readonly Remedy[] = [
 			position.exhaustView /= 2;
 			position.engineView /= 2;
 		}
+	},
+	{
+		key: 'cargoArea',
+		label: 'Cargo area instead',
+		effect:
+			'The battery stands on the floor of the cargo area, sun through the windows, nothing hot in view. The cable grows longer and thicker, and a chemistry that gasses needs a vent to the outside.',
+		group: 'place',
+		cost: 220,
+		hours: 5,
+		fits: inBay,
+		apply: standInCargoArea
 	}
 ];

@@ -102,7 +102,13 @@ export function priceRemedies(offers: readonly RemedyOffer[] = []): Offered[] {
 }
 
 function goTogether(remedies: readonly Remedy[], next: Remedy): boolean {
-	return next.group === null || remedies.every(({ group }) => group !== next.group);
+	if (next.group !== null && remedies.some(({ group }) => group === next.group)) return false;
+	const all = [...remedies, next];
+	// What is done about the bay does nothing for a battery that has left it.
+	return (
+		!all.some(({ group }) => group === 'place') ||
+		all.every(({ group }) => group === 'place' || group === 'charge')
+	);
 }
 
 /** Every set of up to so many that go together, the empty one left out. */
@@ -172,7 +178,7 @@ function listNotTried(offered: readonly Offered[], scenario: Scenario, together:
 		`More than ${together} together.`,
 		...(withheld.length > 0 ? [`What the workshop does not offer: ${withheld.join(', ')}.`] : []),
 		...(unfit.length > 0 ? [`What does not apply to this mount: ${unfit.join(', ')}.`] : []),
-		'Other positions: each is a mount of its own, beside this one.'
+		'Positions other than the cargo area: each is a mount of its own, beside this one.'
 	];
 }
 
