@@ -17,7 +17,6 @@ import {
 	wangThroughputAh
 } from '../../src/lib/thermal/ageing';
 import { checkAgainst, type PublishedValue } from './support/check-against';
-import { checkDescriptions } from './support/descriptions';
 
 const percent = (share: number) => 100 * share;
 const LAST_DIGIT = 'half a unit of the last digit given';
@@ -352,5 +351,3 @@ describe('Arrhenius', () => {
 		expect(() => arrheniusFactor(1, -101, 25)).toThrow('tempC is -101');
 	});
 });
-
-checkDescriptions('ageing');

@@ -1,7 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { fitLeastSquares, type LeastSquaresProblem } from '../../src/lib/thermal/fit';
 import { checkAgainst } from './support/check-against';
-import { checkDescriptions } from './support/descriptions';
 
 const X = [0, 1, 2, 3, 4];
 const Y = [1.1, 2.9, 5.2, 6.8, 9.1];
@@ -234,5 +233,3 @@ describe('fits that cannot succeed', () => {
 		expect(() => fitLeastSquares(change({ mostEvaluations: 0 }))).toThrow('mostEvaluations is 0');
 	});
 });
-
-checkDescriptions('fit');

@@ -1,7 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import * as statistics from '../../src/lib/thermal/statistics';
 import { checkAgainst, type PublishedValue } from './support/check-against';
-import { checkDescriptions } from './support/descriptions';
 import { readTable } from './support/reference-data';
 
 const rows = readTable('special-functions/values.csv');
@@ -70,5 +69,3 @@ describe('quantiles and shares', () => {
 		expect(() => incompleteBeta(1.01, 1, 1)).toThrow('x is 1.01');
 	});
 });
-
-checkDescriptions('statistics');

@@ -15,7 +15,6 @@ import {
 	type InsulationC
 } from '../../src/lib/thermal/wiring';
 import { checkAgainst } from './support/check-against';
-import { checkDescriptions } from './support/descriptions';
 import { readTable } from './support/reference-data';
 
 const ROUNDED = {
@@ -230,5 +229,3 @@ describe('short circuits', () => {
 		expect(() => shortCircuitWithstandS(16, 115, 0)).toThrow('currentA is 0');
 	});
 });
-
-checkDescriptions('wiring');

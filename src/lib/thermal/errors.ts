@@ -60,7 +60,16 @@ const LONGEST_SHOWN = 60;
 const shorten = (text: string): string =>
 	text.length > LONGEST_SHOWN ? `${text.slice(0, LONGEST_SHOWN)}…` : text;
 
-/** A faulty value as JSON can carry it: small ones as they are, large ones and those without a JSON form in words. */
+/**
+ * A faulty value as JSON can carry it: small ones as they are, large ones and those without a JSON form in words.
+ *
+ * @param value anything
+ * @returns a number, a boolean, null, or a text of at most some sixty characters
+ * Validity: every value, however large or deep.
+ * Source: our own.
+ * @example
+ * showValue([1, 2, 3]); // 'a list'
+ */
 export function showValue(value: unknown): unknown {
 	if (value === undefined || value === null || typeof value === 'boolean') return value ?? null;
 	if (typeof value === 'number' && Number.isFinite(value)) return value;

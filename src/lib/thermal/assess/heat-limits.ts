@@ -31,6 +31,10 @@ function findPeakC(cells: Float64Array, count: number): number {
  * @throws EngineInputError when the capacity is above 5000 Ah
  * Validity: charging goes on at any temperature, as an alternator without a sensor does it.
  * Source: as chargeVoltageV and findGasNeeds.
+ * @example
+ * const scenario = defaultScenario([{ minutes: 60 }]);
+ * const limits = { chemistry: 'lead-acid-agm', highestUseC: 60, highestChargeC: 50, ratedLifeYears: 6, compensatesCharge: true };
+ * weighHeat(scenario, runScenario(scenario).minutes, limits).hoursAboveUseLimit; // 0
  */
 export function weighHeat({ battery }: Scenario, minutes: MinuteSeries, limits: HeatLimits): LeadAcidFigures {
 	const { chemistry, highestUseC: useLimitC, highestChargeC: chargeLimitC } = limits;

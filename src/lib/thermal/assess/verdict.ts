@@ -28,6 +28,9 @@ export function judgeHeat({ chargedTooHot }: { chargedTooHot: boolean }, headroo
  * @returns the verdict, by the same rules as an assessment
  * Validity: as the run.
  * Source: our own rules.
+ * @example
+ * const outcome = { cutsOut: true, peakSensorC: 70, missedAh: 0, peakChargingC: 40 };
+ * judgeOutcome(defaultScenario([{ minutes: 60 }]), outcome, null); // 'cuts-out'
  */
 export function judgeOutcome(
 	{ battery, bms }: Scenario,

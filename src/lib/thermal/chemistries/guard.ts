@@ -111,6 +111,11 @@ export function guardOf(battery: HeatFields): HeatGuard {
  * @returns its limits; null for one with a BMS
  * Validity: as guardOf.
  * Source: as guardOf.
+ * @example
+ * const noBms = { sensor: null, cutDelayS: null, autoReset: null };
+ * const noCuts = { chargeCutC: null, chargeResetC: null, dischargeCutC: null, dischargeResetC: null };
+ * const limits = { highestChargeC: 50, highestUseC: 60, ratedLifeYears: 6, compensatesCharge: true };
+ * heatLimitsOf({ chemistry: 'lead-acid-agm', ...noBms, ...noCuts, ...limits }).highestUseC; // 60
  */
 export function heatLimitsOf(battery: HeatFields): HeatLimits | null {
 	const guard = guardOf(battery);

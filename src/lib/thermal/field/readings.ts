@@ -30,7 +30,17 @@ export interface RunForReading {
 	tempC: number;
 }
 
-/** Refuses a reading that cannot be. */
+/**
+ * Refuses a reading that cannot be.
+ *
+ * @param reading a label, a thermometer or a report, °C, h and K
+ * @returns nothing
+ * @throws EngineInputError with the field that cannot be: fields of a label out of order or all missing, a tolerance not above 0
+ * Validity: what is refused says nothing of the estimate.
+ * Source: our own.
+ * @example
+ * checkReading({ kind: 'thermometer', place: 'case', hour: 15, tempC: 52, withinK: 1 }); // undefined
+ */
 export function checkReading(reading: FieldReading): void {
 	if (reading.kind === 'cut-out') {
 		checkReport(reading.report);

@@ -195,7 +195,21 @@ function sizeCable({ scenario, cable }: OutlookRequest): Outlook['cable'] {
 	return { ...sizeCableAndFuse({ ...cable, cableAirC: airC, fuseAirC: airC }), airC };
 }
 
-/** The outlook at once, for who has nothing else to do. */
+/**
+ * The outlook at once, for who has nothing else to do.
+ *
+ * @param request as makeOutlook takes it
+ * @returns as makeOutlook
+ * @throws as makeOutlook
+ * Validity: as makeOutlook.
+ * Source: as makeOutlook.
+ * @example
+ * const scenario = defaultScenario([{ minutes: 60, engineOn: true }]);
+ * const year = { months: Array(12).fill({ meanMaxC: 20, spreadK: 3 }), daysOnRoad: Array(12).fill(2) };
+ * const effort = { daySamples: 16, yearSamples: 2, influencePoints: 2, influenceReplicates: 2, remedySamples: 2, remediesTogether: 1, envelopeSamples: 0 };
+ * const rest = { offers: [], moneyPerHour: 100, cable: null, limits: null, effort, mostCutOutShare: 0.05 };
+ * finishOutlook({ scenario, year, wear: { law: 'none' }, seed: 7, ...rest }).seed; // 7
+ */
 export function finishOutlook(request: OutlookRequest): Outlook {
 	return finishWork(makeOutlook(request));
 }

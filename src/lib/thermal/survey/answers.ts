@@ -45,7 +45,16 @@ function assumeQuestion(question: SurveyQuestion, answers: SurveyAnswers): strin
 	return [`${question.title} ${what}. Assumed: ${question.ifUnknown}`];
 }
 
-/** One sentence for each answer that is missing or not known; one for a whole question without any. */
+/**
+ * One sentence for each answer that is missing or not known; one for a whole question without any.
+ *
+ * @param answers of one position
+ * @returns the sentences, in the order of the questions
+ * Validity: every position; what the other answers make needless is not missed.
+ * Source: the questions say what is assumed.
+ * @example
+ * listAssumptions({ positionKind: 'cabin' }).length; // 2
+ */
 export function listAssumptions(answers: SurveyAnswers): string[] {
 	return questionsFor(answers.positionKind).flatMap((question) => assumeQuestion(question, answers));
 }

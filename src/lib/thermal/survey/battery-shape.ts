@@ -17,6 +17,10 @@ export interface BatteryShape {
  *
  *     case area = L W + 2 H (L + W)
  *
+ * @param battery length, width and height, mm
+ * @returns lengths in m, areas in m²; the longer of length and width is the long side
+ * Validity: a box; handles and ribs are passed over.
+ * Source: geometry.
  * @example
  * measureBattery({ lengthMm: 330, widthMm: 172, heightMm: 215 }).caseAreaM2 // 0.27262
  */

@@ -12,7 +12,16 @@ export interface DescribedAnswer {
 	assumed: string | null;
 }
 
-/** A field's cautious value in words. */
+/**
+ * A field's cautious value in words.
+ *
+ * @param field of the survey
+ * @returns its label, or the length with its unit
+ * Validity: every field.
+ * Source: the field says what is assumed.
+ * @example
+ * describeAssumed(SURVEY_FIELDS.trayMaterial); // 'Steel'
+ */
 export function describeAssumed(field: SurveyField): string {
 	if (field.kind === 'choice') return describeValue(field, field.assumed);
 	return field.assumedMm === null ? (field.assumedWords ?? '') : describeValue(field, field.assumedMm);
@@ -35,6 +44,11 @@ function describeField(key: SurveyKey, answers: SurveyAnswers): DescribedAnswer 
 /**
  * What was answered to a question, field by field, without those that the other answers make needless.
  *
+ * @param question of the survey
+ * @param answers of one position
+ * @returns label and answer of each field, and what is assumed where it is not known
+ * Validity: a question that the position gets.
+ * Source: our own.
  * @example
  * describeAnswer(questionsFor('cabin')[0]!, { positionKind: 'cabin', enclosureCooling: 'cooled' })
  * // [{ key: 'enclosureCooling', label: 'Air conditioning', answer: 'Runs while driving', assumed: null }]

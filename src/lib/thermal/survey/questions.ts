@@ -120,7 +120,16 @@ export const SURVEY_QUESTIONS: readonly SurveyQuestion[] = [
 	}
 ];
 
-/** The questions that a position gets, in order. */
+/**
+ * The questions that a position gets, in order.
+ *
+ * @param kind of position
+ * @returns questions, each with its reason and its fields
+ * Validity: every kind of position.
+ * Source: our own.
+ * @example
+ * questionsFor('cabin').length; // 2
+ */
 export function questionsFor(kind: PositionKind): SurveyQuestion[] {
 	return SURVEY_QUESTIONS.filter((question) => question.kinds.includes(kind));
 }
@@ -154,7 +163,17 @@ const fieldsByKind = new Map<PositionKind, ReadonlySet<SurveyKey>>(
 	POSITION_KINDS.map((kind) => [kind, new Set(questionsFor(kind).flatMap(({ fields }) => fields))])
 );
 
-/** Whether this position, with these answers, is asked for the field at all. */
+/**
+ * Whether this position, with these answers, is asked for the field at all.
+ *
+ * @param key of a field of the survey
+ * @param answers so far
+ * @returns false where the position has no such question, or another answer makes it needless
+ * Validity: every field.
+ * Source: our own.
+ * @example
+ * isAsked('exhaustGapMm', { positionKind: 'under-bonnet', exhaustFacing: 'hidden' }); // false
+ */
 export function isAsked(key: SurveyKey, answers: SurveyAnswers): boolean {
 	const asked = fieldsByKind.get(answers.positionKind)?.has(key) ?? false;
 	return asked && (CONDITIONS[key]?.(answers) ?? true);

@@ -1,4 +1,15 @@
-/** Drives work that yields how far it is to its end at once. */
+/**
+ * Drives work that yields how far it is to its end at once.
+ *
+ * @param work a generator
+ * @returns what it returns
+ * @throws what it throws
+ * Validity: work that ends.
+ * Source: our own.
+ * @example
+ * const work = spreadPeak(defaultScenario([{ minutes: 60 }]), 'case', { samples: 4, seed: 1 });
+ * finishWork(work).samples; // 4
+ */
 export function finishWork<T>(work: Generator<unknown, T>): T {
 	for (;;) {
 		const step = work.next();

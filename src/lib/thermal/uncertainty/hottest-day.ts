@@ -16,6 +16,9 @@ export const HOTTEST_TRIED_C = 56;
  * @returns the limit in °C; −Infinity when not even the coolest day tried is borne, Infinity when all are
  * Validity: a hotter day is not borne better, which holds for this model to a few tenths of a kelvin.
  * Source: bisection.
+ * @example
+ * const bears = ({ peakSensorC }) => peakSensorC < 40;
+ * findHottestDay(defaultScenario([{ minutes: 60 }]), new OutcomeRunner(), bears, 0.5) > 8; // true
  */
 export function findHottestDay(
 	scenario: Scenario,

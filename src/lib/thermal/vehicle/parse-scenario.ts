@@ -63,7 +63,16 @@ function ownValue(values: Values, key: string): unknown {
 	return Object.hasOwn(values, key) ? values[key] : undefined;
 }
 
-/** The range of a number field in words: `more than 0 and at most 1 W/K`. */
+/**
+ * The range of a number field in words.
+ *
+ * @param field one of SCENARIO_FIELDS that is a number
+ * @returns a part of a sentence, with the unit
+ * Validity: every number field.
+ * Source: our own.
+ * @example
+ * describeRange({ kind: 'number', unit: 'W/K', min: 0, max: 1, minExclusive: true }); // 'a number, more than 0 and at most 1 W/K'
+ */
 export function describeRange(field: NumberField): string {
 	const unit = field.unit === '-' ? '' : ` ${field.unit}`;
 	const low = `${field.minExclusive ? 'more than' : 'at least'} ${field.min}`;

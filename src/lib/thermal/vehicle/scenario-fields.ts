@@ -325,6 +325,9 @@ export type CoefficientGroup = (typeof COEFFICIENT_GROUPS)[number];
 /**
  * The defaults of the groups that an engineer tunes, by group and field; a fresh copy each time.
  *
+ * @returns values in the units of SCENARIO_FIELDS
+ * Validity: the default vehicle.
+ * Source: the thermal model; engineering judgement unless reference-data names a source.
  * @example
  * coefficientDefaults().bay.leakClosed; // 20
  */
