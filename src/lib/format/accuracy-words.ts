@@ -48,7 +48,10 @@ export const GROUPING_WORDS: Record<Grouping, string> = {
 export const LEFT_OUT_WORDS: Record<LeftOut, string> = {
 	'noted-again': 'put right by a later note of the same day',
 	'fits-nothing': 'outside, with those before it, of all that was held possible',
-	'fitted-to': 'foretold by a book that had been fitted to it'
+	'fitted-to': 'foretold by a book that had been fitted to it',
+	'sent-again': 'sent in before as the same file',
+	'no-date': 'of a day that its logger did not tell',
+	'legs-open': 'with legs that nobody has confirmed yet'
 };
 
 export const TOO_FEW = 'too few to tell';

@@ -35,9 +35,12 @@ export function formatFitted(value: number, unit = '-'): string {
 }
 
 /** How much narrower what is held of a coefficient has become. */
+/** Whether the data narrowed what was held before by more than rounding. */
+export const isLearnt = (spreadLeft: number): boolean => Math.round(spreadLeft * 100) < 98;
+
 export function sayLearnt(spreadLeft: number): string {
 	const percent = Math.round(spreadLeft * 100);
-	if (percent >= 98) return 'nothing was learnt';
+	if (!isLearnt(spreadLeft)) return 'nothing was learnt';
 	return `${percent}${THIN_SPACE}% of the spread is left`;
 }
 

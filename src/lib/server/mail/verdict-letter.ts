@@ -20,7 +20,9 @@ const isWorse = ({ before, after }: About): boolean => VERDICTS.indexOf(after) >
 
 function sayWhatNext(about: About): string {
 	if (!isWorse(about)) {
-		return 'That is good news, and you need not do anything. What we advised otherwise stays as it was.';
+		return about.after === 'rides-it-out'
+			? 'That is better than we thought. What we advised for hot days stays as it was.'
+			: 'That is better than we thought, but still close: on some hot days the heat can win all the same. What we advised stays as it was, and we would like to talk with you about what can be done about the heat.';
 	}
 	return about.isFitted
 		? 'Please talk to us before your next hot trip: we would like to look at the mount with you, and at what can be done about the heat.'

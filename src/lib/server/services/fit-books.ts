@@ -1,6 +1,7 @@
 import type { BookView } from '$lib/schemas/books';
 import type { FittedDraft } from '$lib/schemas/fits';
 import type { SignedInPerson } from '$lib/schemas/people';
+import { isLearnt } from '$lib/format/fits';
 import { formatNumber } from '$lib/format/numbers';
 import type { CoefficientEstimate } from '$lib/thermal/fit';
 import { Coefficient, Fit, Trace } from '../db/models';
@@ -42,7 +43,7 @@ async function refuseSynthetic({ isSynthetic, inputs }: Fit): Promise<void> {
 	);
 }
 
-/** Begins a draft with the values of the book that the fit began from, and the fitted ones in their places. */
+/** Begins a draft with the values of the book that the fit began from, and the fitted ones in their places, as far as something was learnt of them. */
 export async function draftFittedBook(
 	person: SignedInPerson,
 	fitId: number,
@@ -55,10 +56,17 @@ export async function draftFittedBook(
 		throw new AppError('conflict', 'This fit has not come to values that a book could have.');
 	}
 	await refuseSynthetic(fit);
+	const learnt = result.estimates.filter(({ spreadLeft }) => isLearnt(spreadLeft));
+	if (learnt.length === 0) {
+		throw new AppError(
+			'conflict',
+			'This fit has learnt nothing of any coefficient: a book would have nothing new.'
+		);
+	}
 	const positionKind = await positionOf(fit);
 	return inTransaction(async (transaction) => {
 		const book = await draftBook(person, { fromBookId, ...words, positionKind });
-		for (const estimate of result.estimates) {
+		for (const estimate of learnt) {
 			const { group: fieldGroup, key: fieldKey } = estimate;
 			const fitted = {
 				value: round(estimate.value),

@@ -137,7 +137,7 @@ export async function saveLegs(
 		await forgetTraceCheck(traceId, transaction);
 		return showTrace(trace);
 	});
-	await holdTraces({ traceId });
+	await holdTraces({ sha256: shown.sha256 });
 	return shown;
 }
 

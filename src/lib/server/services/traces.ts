@@ -242,7 +242,7 @@ async function setRemoved(
 	{ removedAt, action }: { removedAt: Date | null; action: string }
 ): Promise<TraceView> {
 	allow(person, 'traces.write');
-	return inTransaction(async (transaction) => {
+	const shown = await inTransaction(async (transaction) => {
 		const trace = await findTrace(person, traceId, { removed: removedAt === null, transaction });
 		const wasRemoved = (trace.removedAt ?? null) !== null;
 		if (wasRemoved === (removedAt !== null)) return showTrace(trace);
@@ -252,6 +252,9 @@ async function setRemoved(
 		await recordBy(person, action, { type: 'trace', id: traceId }, transaction);
 		return showTrace(trace);
 	});
+	// The same file may have been sent in elsewhere, and count there now, or no more.
+	await holdTraces({ sha256: shown.sha256 });
+	return shown;
 }
 
 /** Takes a trace away; for some weeks it can be put back. */
@@ -259,8 +262,5 @@ export const removeTrace = (person: SignedInPerson, traceId: number): Promise<Tr
 	setRemoved(person, traceId, { removedAt: new Date(), action: 'trace.removed' });
 
 /** Puts a removed trace back; one that is there is left alone. */
-export async function restoreTrace(person: SignedInPerson, traceId: number): Promise<TraceView> {
-	const restored = await setRemoved(person, traceId, { removedAt: null, action: 'trace.restored' });
-	await holdTraces({ traceId });
-	return restored;
-}
+export const restoreTrace = (person: SignedInPerson, traceId: number): Promise<TraceView> =>
+	setRemoved(person, traceId, { removedAt: null, action: 'trace.restored' });

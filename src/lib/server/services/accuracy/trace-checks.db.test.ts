@@ -7,6 +7,7 @@ import { makeCrew, useTestDatabase, type Crew } from '../../../../../tests/suppo
 import { dayText, readAs, sendTrace, type Confirmed } from '../../../../../tests/support/traces';
 import { fitInputSchema } from '$lib/schemas/fits';
 import { legsChangeSchema } from '$lib/schemas/traces';
+import type { TraceView } from '$lib/schemas/traces';
 import { connection } from '../../db/connection';
 import { assessMount } from '../assessments';
 import { moveBook } from '../book-changes';
@@ -38,6 +39,12 @@ beforeEach(async () => {
 const sendDay = async (text = dayText(), said: Confirmed = {}) =>
 	readAs(crew.engineer, await sendTrace(crew.engineer, mountId, text), said);
 
+/** Says of the legs as they were proposed that they are right. */
+async function confirmLegs({ id, legs, version }: TraceView) {
+	const sent = legs.map(({ endS, kind, meanSpeedKmh }) => ({ endS, kind, speedKmh: meanSpeedKmh }));
+	await saveLegs(crew.engineer, id, legsChangeSchema.parse({ legs: sent, version }));
+}
+
 async function checksOf(traceId: number) {
 	const sql = 'SELECT * FROM prediction_checks WHERE trace_id = :traceId';
 	return connection().query<Record<string, unknown>>(sql, {
@@ -59,6 +66,8 @@ describe('a measured trace', () => {
 	it('is held against the assessment that was there before it, the mean over its minutes', async () => {
 		const assessment = await assessMount(crew.installer, { mountId });
 		const trace = await sendDay(dayText({ date: today() }));
+		expect(await checksOf(trace.id)).toMatchObject([{ left_out: 'legs-open' }]);
+		await confirmLegs(trace);
 		const [check, ...others] = await checksOf(trace.id);
 		expect(others).toEqual([]);
 		expect(check).toMatchObject({
@@ -114,7 +123,7 @@ describe('a measured trace', () => {
 		}));
 		const change = legsChangeSchema.parse({ legs, startHour: 8, version: hourless.version });
 		await saveLegs(crew.engineer, hourless.id, change);
-		expect(await checksOf(hourless.id)).toMatchObject([{ read_on: today(), is_entered_later: 0 }]);
+		expect(await checksOf(hourless.id)).toMatchObject([{ read_on: today(), left_out: 'no-date' }]);
 	});
 
 	it('is held anew when its legs are put right, is forgotten while removed, and is held at the start where it was not', async () => {
@@ -142,6 +151,18 @@ describe('a measured trace', () => {
 		expect((await completeChecks()).traces).toBe(0);
 	});
 
+	it('counts once when it is sent in twice, and the second one when the first is taken away', async () => {
+		await assessMount(crew.installer, { mountId });
+		const [first, second] = [await sendDay(), await sendDay()];
+		for (const each of [first, second]) await confirmLegs(each);
+		expect(await checksOf(first.id)).toMatchObject([{ left_out: '' }]);
+		expect(await checksOf(second.id)).toMatchObject([{ left_out: 'sent-again' }]);
+		await removeTrace(crew.engineer, first.id);
+		expect(await checksOf(second.id)).toMatchObject([{ left_out: '' }]);
+		await restoreTrace(crew.engineer, first.id);
+		expect(await checksOf(second.id)).toMatchObject([{ left_out: 'sent-again' }]);
+	});
+
 	it('that was made up is held against nothing', async () => {
 		await assessMount(crew.installer, { mountId });
 		const trace = await sendDay(dayText(), { isSynthetic: true });
@@ -154,6 +175,7 @@ describe('a measured trace', () => {
 		async () => {
 			const { engineer, manager } = crew;
 			const { mountId: fittedMountId, traces, texts } = await makeFittable(crew);
+			await confirmLegs(traces[0]!);
 			const coefficients = [{ group: 'battery', key: 'caseCellConductance', prior: PRIOR }];
 			const asked = { name: 'One day', traces: [{ traceId: traces[0]!.id }], coefficients, leaveOut: false };
 			const input = fitInputSchema.parse(asked);

@@ -1,4 +1,5 @@
-import { QueryTypes, type Transaction } from 'sequelize';
+import { Op, QueryTypes, type Transaction } from 'sequelize';
+import type { LeftOut } from '$lib/schemas/accuracy';
 import { ScenarioError } from '$lib/thermal';
 import { EngineInputError } from '$lib/thermal/correlations/require';
 import { holdTrace, type HeldTrace } from '$lib/thermal/fit';
@@ -58,6 +59,23 @@ async function isFittedTo({ bookId }: Assessment, { sha256 }: Trace): Promise<bo
 	return fits.some(({ inputs }) => inputs.traces.some((each) => each.sha256 === sha256));
 }
 
+/** Why a trace does not count; empty where it does. */
+async function findLeftOut(trace: Trace, assessment: Assessment): Promise<LeftOut | ''> {
+	const { id, workshopId, sha256, span, legsBy } = trace;
+	if (await isFittedTo(assessment, trace)) return 'fitted-to';
+	const same = {
+		workshopId,
+		sha256,
+		id: { [Op.lt]: id },
+		isSynthetic: false,
+		state: 'read',
+		removedAt: null
+	};
+	if ((await Trace.count({ where: same })) > 0) return 'sent-again';
+	if (span?.timeBase !== 'utc') return 'no-date';
+	return (legsBy ?? null) === null ? 'legs-open' : '';
+}
+
 /** Null of what no prediction can be held against: nothing of the battery was measured, or its day cannot be run. */
 async function hold(trace: Trace, assessment: Assessment): Promise<HeldTrace | null> {
 	try {
@@ -90,7 +108,7 @@ async function holdOne(id: number): Promise<boolean> {
 	const { workshopId, mountId } = trace;
 	const { id: assessmentId, bookId } = assessment;
 	const about = { workshopId, mountId, installationId: null, fieldNoteId: null, traceId: id };
-	const leftOut = (await isFittedTo(assessment, trace)) ? 'fitted-to' : '';
+	const leftOut = await findLeftOut(trace, assessment);
 	return inTransaction(async (transaction) => {
 		if (!(await isAsItWas(trace, transaction))) return false;
 		const row = { kind: 'trace', ...about, assessmentId, bookId, readOn, held, isEnteredLater } as const;
@@ -100,17 +118,20 @@ async function holdOne(id: number): Promise<boolean> {
 }
 
 /**
- * Holds traces that wait for it against what had been predicted of their days: those of a mount, one, or all. Says how many.
+ * Holds traces that wait for it against what had been predicted of their days: those of a mount, of a file, one, or all.
  * What had been predicted comes from the assessment of the time, run with the legs as they were driven on the air as it was.
  */
-export async function holdTraces(of: { mountId?: number; traceId?: number } = {}): Promise<number> {
-	const { mountId, traceId } = of;
+export async function holdTraces(
+	of: { mountId?: number; traceId?: number; sha256?: string } = {}
+): Promise<number> {
+	const { mountId, traceId, sha256 } = of;
 	const narrowed = [
 		...(mountId === undefined ? [] : ['AND t.mount_id = :mountId']),
-		...(traceId === undefined ? [] : ['AND t.id = :traceId'])
+		...(traceId === undefined ? [] : ['AND t.id = :traceId']),
+		...(sha256 === undefined ? [] : ['AND t.sha256 = :sha256'])
 	];
 	const rows = await connection().query<{ id: number }>(`${WAITING} ${narrowed.join(' ')} ORDER BY t.id`, {
-		replacements: { mountId, traceId },
+		replacements: { mountId, traceId, sha256 },
 		type: QueryTypes.SELECT
 	});
 	let count = 0;
@@ -118,9 +139,16 @@ export async function holdTraces(of: { mountId?: number; traceId?: number } = {}
 	return count;
 }
 
-/** Forgets what a trace was held against, inside the transaction that changed the trace. */
+const FORGET = `
+	DELETE c FROM prediction_checks c
+		JOIN traces t ON t.id = c.trace_id
+		JOIN traces s ON s.sha256 = t.sha256 AND s.workshop_id = t.workshop_id
+	WHERE s.id = :traceId
+`;
+
+/** Forgets what a file was held against, wherever it was sent in, inside the transaction that changed a trace of it. */
 export async function forgetTraceCheck(traceId: number, transaction: Transaction): Promise<void> {
-	await connection().query('DELETE FROM prediction_checks WHERE trace_id = :traceId', {
+	await connection().query(FORGET, {
 		replacements: { traceId },
 		type: QueryTypes.DELETE,
 		transaction
