@@ -79,6 +79,16 @@ test('an engineer sends a file with faults, puts its columns right, sees what wa
 	await expect(end).toHaveValue('130');
 	await page.getByRole('slider', { name: 'End of leg 1' }).press('ArrowLeft');
 	await expect(end).toHaveValue('129');
+	// What cannot be is said at its box, holds up the saving, and nothing is lost.
+	await end.fill('2000');
+	await end.press('Tab');
+	await expect(page.getByText(/“2000” is no minute from 1 to \d+, between the ends/)).toBeVisible();
+	await page.getByRole('button', { name: 'Save the legs' }).last().click();
+	await expect(end).toBeFocused();
+	await expect(end).toHaveValue('2000');
+	await end.fill('129');
+	await end.press('Tab');
+	await expect(page.getByText('is no minute from')).toHaveCount(0);
 	await page.getByRole('button', { name: 'Split leg 1' }).click();
 	await page.getByLabel('Leg 2', { exact: true }).selectOption('Driving');
 	await page.getByRole('button', { name: 'Save the legs' }).last().click();
