@@ -51,6 +51,7 @@ export const LEFT_OUT_WORDS: Record<LeftOut, string> = {
 	'fitted-to': 'foretold by a book that had been fitted to it',
 	'sent-again': 'sent in before as the same file',
 	'no-date': 'of a day that its logger did not tell',
+	'no-air': 'without the outside air, which makes the day',
 	'legs-open': 'with legs that nobody has confirmed yet'
 };
 

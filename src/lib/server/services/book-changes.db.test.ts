@@ -88,6 +88,17 @@ describe('a book on its way', () => {
 		expect(assessed!.inputs.scenario.bay!.share).toBe(SAID.value);
 	}, 60_000);
 
+	it('is not put in force by who changed a value in it either, though another began it', async () => {
+		const { crew, draft } = await makeDraft();
+		const said = { ...SAID, version: draft.version };
+		const changed = await changeCoefficient(crew.manager, draft.id, SHARE, said);
+		const trial = await moveBook(crew.engineer, draft.id, { to: 'on-trial', version: changed.version });
+		for (const person of [crew.engineer, crew.manager]) {
+			const own = moveBook(person, draft.id, { to: 'in-force', version: trial.version });
+			await expect(own).rejects.toMatchObject({ code: 'conflict' });
+		}
+	}, 60_000);
+
 	it('changes in nothing, neither by the service nor past it', async () => {
 		const { crew, draft } = await makeDraft();
 		const trial = await moveBook(crew.engineer, draft.id, { to: 'on-trial', version: draft.version });

@@ -10,7 +10,7 @@ import {
 } from '$lib/schemas/books';
 import type { SignedInPerson } from '$lib/schemas/people';
 import type { NumberField } from '$lib/thermal/vehicle/scenario-fields';
-import { Coefficient, CoefficientBook } from '../db/models';
+import { AuditEntry, Coefficient, CoefficientBook } from '../db/models';
 import { inTransaction } from '../db/transaction';
 import { AppError, notFound } from '../errors';
 import { allow } from '../policies';
@@ -132,11 +132,23 @@ function requireWay(book: CoefficientBook, to: BookMove['to']): void {
 	throw new AppError('conflict', `Book ${number} ${NO_WAY[state]}.`);
 }
 
-function requireSecondPerson({ madeBy }: CoefficientBook, person: SignedInPerson): void {
-	if (madeBy !== person.id) return;
+/** Whose values they are does not put them in force: neither who began the book nor who changed something in it. */
+async function requireSecondPerson(
+	book: CoefficientBook,
+	{ id: personId }: SignedInPerson,
+	transaction: Transaction
+): Promise<void> {
+	const changes = { action: 'book.changed', subjectType: 'book', subjectId: book.id, personId };
+	const did =
+		book.madeBy === personId
+			? 'made this book'
+			: (await AuditEntry.count({ where: changes, transaction })) > 0
+				? 'changed values in this book'
+				: '';
+	if (!did) return;
 	throw new AppError(
 		'conflict',
-		'You made this book: somebody else puts it in force, another engineer or the manager.'
+		`You ${did}: somebody else puts it in force, another engineer or the manager.`
 	);
 }
 
@@ -162,7 +174,7 @@ export async function moveBook(
 		const book = await findBook(person, bookId, transaction);
 		const from = book.state;
 		requireWay(book, to);
-		if (to === 'in-force') requireSecondPerson(book, person);
+		if (to === 'in-force') await requireSecondPerson(book, person, transaction);
 		const replaced = to === 'in-force' ? await replaceInForce(book, transaction) : null;
 		const hands = to === 'in-force' ? { inForceBy: person.id, inForceAt: new Date() } : {};
 		await saveVersioned(book, 'book', version, { state: to, ...hands }, transaction);

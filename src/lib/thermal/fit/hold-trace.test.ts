@@ -45,6 +45,27 @@ describe('a trace held against what had been predicted of its day', () => {
 		expect(held.deviations).toBeGreaterThan(2);
 	});
 
+	it('is far off where single hours are, though the mean is right by chance', () => {
+		const right = hold(invent(['cellC']))!;
+		const trace = invent(['cellC']);
+		// Twenty kelvin above for the second hour, as much below for the third.
+		trace.channels.cellC = trace.channels.cellC!.map((c, at) => {
+			const hour = Math.floor(trace.timeS[at]! / 3600);
+			return c + (hour === 1 ? 20 : hour === 2 ? -20 : 0);
+		});
+		const held = hold(trace)!;
+		expect(Math.abs(held.error!)).toBeLessThan(0.5);
+		expect(held.stand).toBe('inside');
+		expect(held.misfit).toBeGreaterThan(right.misfit + 3);
+	});
+
+	it('of a drive alone is held with every draw, for its length is no unknown', () => {
+		const drive = parseScenario({ ...DAY, legs: [DAY.legs[0]!] });
+		const noise = { sdK: 0.01, keepsAMinute: 0 };
+		const trace = inventTrace({ scenario: drive, channels: ['cellC'], noise, seed: 5, everyMin: 5 });
+		expect(finishWork(holdTrace({ trace, scenario: drive }, EFFORT))).not.toBeNull();
+	});
+
 	it('is read at the measured place that is nearest to the cells', () => {
 		expect(hold(invent(['bayAirC', 'caseC', 'boardC']))!.place).toBe('board');
 		expect(hold(invent(['bayAirC', 'caseC']))!.place).toBe('case');

@@ -1,14 +1,16 @@
 import { holdMeasured, READING_PLACES, type Held, type ReadingPlace } from '../field';
 import { sampleQuantile, scrambledSobolPoint, standardDeviation } from '../statistics';
 import { drawScenario } from '../uncertainty/draw-scenario';
-import { PRIORS } from '../uncertainty/priors';
+import { PRIORS, type Prior } from '../uncertainty/priors';
 import { listBlocks, markLegs, type Block } from './blocks';
 import type { TraceToFit } from './fit-setup';
 import { requireStart } from './start-temps';
-import { CHANNEL_NODES, requireTrace } from './trace';
+import { CHANNEL_NODES, isMeasured, requireTrace, type FitTrace } from './trace';
 import { TraceModel, type TraceOfScenario } from './trace-model';
 
 const EDGE = 0.05;
+/** With fewer draws run to their ends the rest would be a choice among them. */
+const LEAST_SHARE_RUN = 0.9;
 /** What a logger's thermometer is right to, K; engineering judgement. */
 const SENSOR_SD_K = 0.5;
 /** The nearer to the cells, the more a measurement says of what was predicted of them. */
@@ -20,6 +22,20 @@ export interface HeldTrace extends Held {
 	place: ReadingPlace;
 	/** Mean of the squared errors of its readings, K². */
 	meanSquare: number;
+	/** How far off it is in stated standard deviations: its mean, or its single readings where these are further off. */
+	misfit: number;
+}
+
+/** The legs are those that were driven. */
+const NEVER_DRAWN = ['driveLength'];
+/** What is known once the outside air, or the current, was measured. */
+const KNOWN_BY = { ambientC: ['dayMax', 'dayRange'], currentA: ['loads'] } as const;
+
+function listUnknowns({ channels }: FitTrace): Prior[] {
+	const known = (['ambientC', 'currentA'] as const).flatMap((channel) =>
+		isMeasured(channels[channel]) ? [...KNOWN_BY[channel]] : []
+	);
+	return PRIORS.filter(({ key }) => ![...NEVER_DRAWN, ...known].includes(key));
 }
 
 /** The readings that the prediction is held against; undefined where nothing of the battery was measured. */
@@ -50,12 +66,13 @@ const meanOf = (values: Float64Array): number =>
  *     error = mean(measured − predicted);  σ² = σ_draws² + 0.5²
  *     band: predicted ∓ √(edge² + (1.6449 · 0.5)²), edges the quantiles 0.05 and 0.95 of the mean over draws
  *
- * The day is run with the legs of the scenario, on the air and current that were measured, from the first readings on.
+ * The day is run with the legs of the scenario, on the air and current that were measured, from the first readings on; what was
+ * measured is not drawn. misfit = max(|error|, √mean((measured − predicted)²)) / σ: a mean may be right by chance.
  *
  * @param of trace and the scenario that its mount had been assessed with, its legs those that were driven
  * @param options number of draws (a power of two keeps them even) and seed
  * @returns as a generator, yields the share of the work done, and returns the trace held against it; null where no temperature
- *   of the battery was measured, or the day cannot be run to its end
+ *   of the battery was measured, or the day or more than a tenth of its draws cannot be run to their ends
  * @throws EngineInputError with the path for a trace that cannot be
  * Validity: the priors of PRIORS, independent of one another; legs as they were driven; sensors right to ± 0.5 K (judgement).
  * Source: sum of independent variances; Owen, Randomly permuted (t,m,s)-nets (1995) for the points.
@@ -81,14 +98,15 @@ export function* holdTrace(
 	const measured = Float64Array.from(block.at, (place) => block.measured[place]!);
 	const foretold = foretell(of, block);
 	if (foretold.some(Number.isNaN)) return null;
+	const unknowns = listUnknowns(trace);
 	const means: number[] = [];
 	for (let draw = 0; draw < samples; draw++) {
-		const drawn = drawScenario(scenario, scrambledSobolPoint(draw, PRIORS.length, seed));
+		const drawn = drawScenario(scenario, scrambledSobolPoint(draw, unknowns.length, seed), unknowns);
 		const mean = meanOf(foretell({ ...of, scenario: drawn }, block));
 		if (!Number.isNaN(mean)) means.push(mean);
 		yield (draw + 1) / samples;
 	}
-	if (means.length < 2) return null;
+	if (means.length < LEAST_SHARE_RUN * samples || means.length < 2) return null;
 	const middleC = meanOf(foretold);
 	const spread = {
 		lowC: Math.min(sampleQuantile(means, EDGE), middleC),
@@ -96,9 +114,9 @@ export function* holdTrace(
 		highC: Math.max(sampleQuantile(means, 1 - EDGE), middleC),
 		sdK: standardDeviation(means)
 	};
-	return {
-		...holdMeasured(meanOf(measured), spread, SENSOR_SD_K),
-		place: READING_PLACES.find((place) => place === CHANNEL_NODES[block.channel])!,
-		meanSquare: meanOf(measured.map((value, at) => (value - foretold[at]!) ** 2))
-	};
+	const held = holdMeasured(meanOf(measured), spread, SENSOR_SD_K);
+	const meanSquare = meanOf(measured.map((value, at) => (value - foretold[at]!) ** 2));
+	const misfit = Math.max(Math.abs(held.error!), Math.sqrt(meanSquare)) / Math.hypot(spread.sdK, SENSOR_SD_K);
+	const place = READING_PLACES.find((each) => each === CHANNEL_NODES[block.channel])!;
+	return { ...held, place, meanSquare, misfit };
 }

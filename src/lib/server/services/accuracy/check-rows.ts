@@ -53,7 +53,12 @@ function valuesOf({ held, watched, ...row }: CheckRow): unknown[] {
 			square,
 			deviations
 		],
-		...[Math.abs(deviations), stand, watched?.chance ?? null, watched?.observedDays ?? null],
+		...[
+			isTrace ? held.misfit : Math.abs(deviations),
+			stand,
+			watched?.chance ?? null,
+			watched?.observedDays ?? null
+		],
 		...[flag(watched?.isLookedAt), flag(row.isEnteredLater), row.leftOut]
 	];
 }

@@ -1,4 +1,4 @@
-import { Op, QueryTypes, type Transaction } from 'sequelize';
+import { QueryTypes, type Transaction } from 'sequelize';
 import type { LeftOut } from '$lib/schemas/accuracy';
 import { ScenarioError } from '$lib/thermal';
 import { EngineInputError } from '$lib/thermal/correlations/require';
@@ -6,6 +6,7 @@ import { holdTrace, type HeldTrace } from '$lib/thermal/fit';
 import { connection } from '../../db/connection';
 import { Assessment, Coefficient, Fit, Trace } from '../../db/models';
 import { inTransaction } from '../../db/transaction';
+import { logger } from '../../logger';
 import { startHourOf } from '../../presenters/traces';
 import { today } from '../days';
 import { workInSlices } from '../slices';
@@ -59,21 +60,31 @@ async function isFittedTo({ bookId }: Assessment, { sha256 }: Trace): Promise<bo
 	return fits.some(({ inputs }) => inputs.traces.some((each) => each.sha256 === sha256));
 }
 
+/** Other traces of the same file that count, at mounts that stand. */
+const COUNTED_ALREADY = `
+	SELECT COUNT(*) AS count FROM prediction_checks c
+		JOIN traces t ON t.id = c.trace_id
+		JOIN mounts m ON m.id = t.mount_id AND m.removed_at IS NULL
+	WHERE t.workshop_id = :workshopId AND t.sha256 = :sha256 AND t.id <> :id AND c.left_out = ''
+`;
+
 /** Why a trace does not count; empty where it does. */
-async function findLeftOut(trace: Trace, assessment: Assessment): Promise<LeftOut | ''> {
+async function findLeftOut(
+	trace: Trace,
+	assessment: Assessment,
+	transaction: Transaction
+): Promise<LeftOut | ''> {
 	const { id, workshopId, sha256, span, legsBy } = trace;
 	if (await isFittedTo(assessment, trace)) return 'fitted-to';
-	const same = {
-		workshopId,
-		sha256,
-		id: { [Op.lt]: id },
-		isSynthetic: false,
-		state: 'read',
-		removedAt: null
-	};
-	if ((await Trace.count({ where: same })) > 0) return 'sent-again';
 	if (span?.timeBase !== 'utc') return 'no-date';
-	return (legsBy ?? null) === null ? 'legs-open' : '';
+	if (!span.channels.includes('ambientC')) return 'no-air';
+	if ((legsBy ?? null) === null) return 'legs-open';
+	const [row] = await connection().query<{ count: number }>(COUNTED_ALREADY, {
+		replacements: { id, workshopId, sha256 },
+		type: QueryTypes.SELECT,
+		transaction
+	});
+	return Number(row?.count) > 0 ? 'sent-again' : '';
 }
 
 /** Null of what no prediction can be held against: nothing of the battery was measured, or its day cannot be run. */
@@ -108,9 +119,9 @@ async function holdOne(id: number): Promise<boolean> {
 	const { workshopId, mountId } = trace;
 	const { id: assessmentId, bookId } = assessment;
 	const about = { workshopId, mountId, installationId: null, fieldNoteId: null, traceId: id };
-	const leftOut = await findLeftOut(trace, assessment);
 	return inTransaction(async (transaction) => {
 		if (!(await isAsItWas(trace, transaction))) return false;
+		const leftOut = await findLeftOut(trace, assessment, transaction);
 		const row = { kind: 'trace', ...about, assessmentId, bookId, readOn, held, isEnteredLater } as const;
 		await writeChecks([{ ...row, watched: null, leftOut }], transaction);
 		return true;
@@ -135,7 +146,14 @@ export async function holdTraces(
 		type: QueryTypes.SELECT
 	});
 	let count = 0;
-	for (const { id } of rows) if (await holdOne(Number(id))) count++;
+	for (const { id } of rows) {
+		try {
+			if (await holdOne(Number(id))) count++;
+		} catch (error) {
+			// What somebody asked for is done; this waits, and is tried again at the next start.
+			logger.error({ err: error, traceId: id }, 'a trace could not be held against its prediction');
+		}
+	}
 	return count;
 }
 

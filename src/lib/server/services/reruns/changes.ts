@@ -150,6 +150,19 @@ async function sendTo(
 	await postLetter({ ...laidOut, ...about, replyTo: workshop?.email ?? '' }, transaction);
 }
 
+/** A letter tells of what holds now: not of a mount that is gone, nor of a verdict that another assessment has overtaken. */
+async function requireNewest(
+	{ mountId, newAssessmentId }: RerunItem,
+	transaction: Transaction
+): Promise<void> {
+	const mount = await Mount.findByPk(mountId, { transaction });
+	const newest = await Assessment.max<number, Assessment>('id', { where: { mountId }, transaction });
+	if (mount && (mount.removedAt ?? null) === null && newest === newAssessmentId) return;
+	const message =
+		'This verdict does not hold any more: the mount was assessed again since, or taken away. Look at the job before you tell anybody.';
+	throw new AppError('conflict', message);
+}
+
 /** Tells a customer of a changed verdict by letter, or notes that they were told otherwise; once. */
 export async function tellOfChange(
 	person: SignedInPerson,
@@ -164,7 +177,10 @@ export async function tellOfChange(
 		if (!item) throw notFound('changed verdict');
 		if (item.toldAt) throw new AppError('conflict', 'Somebody has told them already.');
 		const present = async () => presentChange(item, await readAround([item], person), person);
-		if (tell.how === 'letter') await sendTo(await present(), tell, person, transaction);
+		if (tell.how === 'letter') {
+			await requireNewest(item, transaction);
+			await sendTo(await present(), tell, person, transaction);
+		}
 		await item.update({ toldAt: new Date(), toldBy: person.id, toldHow: tell.how }, { transaction });
 		const detail = { rerunId, mountId: item.mountId, how: tell.how };
 		await recordBy(person, 'rerun.told', { type: 'job', id: item.jobId }, transaction, detail);

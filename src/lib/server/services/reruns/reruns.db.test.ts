@@ -8,7 +8,7 @@ import {
 } from '../../../../../tests/support/assessable-job';
 import { makeCrew, useTestDatabase, type Crew } from '../../../../../tests/support/services';
 import { Assessment, AuditEntry, Customer, Job, OutgoingMail, Rerun, RerunItem } from '../../db/models';
-import { assessJob, reproduceAssessment } from '../assessments';
+import { assessJob, assessMount, reproduceAssessment } from '../assessments';
 import { checkTrails } from '../audit-check';
 import { changeCoefficient, draftBook, moveBook } from '../book-changes';
 import { bookInForce } from '../books';
@@ -243,6 +243,20 @@ describe('a verdict that changed', () => {
 		const again = tellOfChange(crew.manager, where, { how: 'otherwise' });
 		await expect(again).rejects.toMatchObject({ code: 'conflict' });
 		expect(await getRerun(crew.engineer, rerun.id)).toMatchObject({ changed: 1, untold: 0 });
+	}, 120_000);
+
+	it('is not told by letter once another assessment has overtaken it', async () => {
+		const crew = await makeCrew();
+		const { rerun, change } = await changeOne(crew);
+		const item = await RerunItem.findByPk(change.id);
+		await assessMount(crew.installer, { mountId: item!.mountId });
+		const where = { rerunId: rerun.id, itemId: change.id };
+		const letter = { how: 'letter', subject: 'It got better', body: 'It rides it out.' } as const;
+		await expect(tellOfChange(crew.engineer, where, letter)).rejects.toMatchObject({ code: 'conflict' });
+		expect(await OutgoingMail.count({ where: { jobId: item!.jobId, kind: 'verdict-changed' } })).toBe(0);
+		expect(await tellOfChange(crew.engineer, where, { how: 'otherwise' })).toMatchObject({
+			toldHow: 'otherwise'
+		});
 	}, 120_000);
 
 	it('is nobody else’s: no installer’s, and no other workshop’s', async () => {
