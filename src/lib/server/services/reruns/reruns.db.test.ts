@@ -249,6 +249,7 @@ describe('a verdict that changed', () => {
 		const crew = await makeCrew();
 		const { rerun, change } = await changeOne(crew);
 		const item = await RerunItem.findByPk(change.id);
+		await Job.update({ hotDayMaxC: 30 }, { where: { id: item!.jobId } });
 		await assessMount(crew.installer, { mountId: item!.mountId });
 		const where = { rerunId: rerun.id, itemId: change.id };
 		const letter = { how: 'letter', subject: 'It got better', body: 'It rides it out.' } as const;
