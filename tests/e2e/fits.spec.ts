@@ -1,8 +1,11 @@
 import { expect, test, type Page } from '@playwright/test';
+import type { ScenarioInput } from '../../src/lib/thermal';
+import { writeTrueDay } from '../support/fit-day';
 import { expectNoViolations, ONCE, openForm, signInAs } from './support';
 
 interface Row {
 	id: number;
+	jobId: number;
 	mountId: number;
 	name: string;
 	state: string;
@@ -10,37 +13,28 @@ interface Row {
 	mapping: object;
 }
 
-const twoDigits = (value: number): string => String(value).padStart(2, '0');
-
-/** A day of the test's own, not called synthetic in it: a morning's stop, a drive, and the heat after it. */
-function dayText(): string {
-	const rows = Array.from({ length: 420 }, (_, minute) => {
-		const isDriving = minute >= 60 && minute < 210;
-		const airC = 24 + minute / 60;
-		const excess = isDriving
-			? 20 * (1 - Math.exp(-(minute - 60) / 40))
-			: minute < 60
-				? 0
-				: 20 * Math.exp(-(minute - 210) / 150);
-		const time = `2026-02-03 ${twoDigits(7 + Math.floor(minute / 60))}:${twoDigits(minute % 60)}`;
-		const cellC = airC + 0.6 * excess + (minute % 5) / 10;
-		return [time, airC.toFixed(1), (airC + excess).toFixed(1), cellC.toFixed(1), isDriving ? 80 : 0].join(
-			','
-		);
-	});
-	return ['Time,Ambient (°C),Bay air (°C),Cell (°C),Speed (km/h)', ...rows, ''].join('\n');
-}
-
 async function listTraces(page: Page): Promise<Row[]> {
 	return ((await (await page.request.get('/api/v1/traces')).json()) as { rows: Row[] }).rows;
 }
 
+/** A day of the mount as the model has it, but for the path between case and cells; not called synthetic in this test. */
+async function dayText(page: Page, { jobId, mountId }: Row): Promise<string> {
+	const read = async <Answer>(path: string) =>
+		(await (await page.request.get(`/api/v1${path}`)).json()) as Answer;
+	type Assessed = { id: number; mountId: number };
+	const { rows } = await read<{ rows: Assessed[] }>(`/jobs/${jobId}/assessments`);
+	const { id } = rows.find((each) => each.mountId === mountId)!;
+	const { inputs } = await read<{ inputs: { scenario: ScenarioInput } }>(`/assessments/${id}`);
+	return writeTrueDay(inputs.scenario, 1);
+}
+
 /** Sends a trace to the mount of the demo, lets it be read as it is proposed, and waits for that. */
 async function sendTrace(page: Page, name: string): Promise<Row> {
-	const { mountId } = (await listTraces(page)).find((trace) => trace.name === 'trace-1.csv')!;
+	const demo = (await listTraces(page)).find((trace) => trace.name === 'trace-1.csv')!;
+	const { mountId } = demo;
 	const headers = { 'content-type': 'text/csv' };
 	const sent = await page.request.post(`/api/v1/mounts/${mountId}/traces?fileName=${name}`, {
-		...{ headers, data: dayText() }
+		...{ headers, data: await dayText(page, demo) }
 	});
 	const trace = (await sent.json()) as Row;
 	const { mapping, version } = trace;

@@ -89,6 +89,14 @@ test('an engineer sends a file with faults, puts its columns right, sees what wa
 	await end.fill('129');
 	await end.press('Tab');
 	await expect(page.getByText('is no minute from')).toHaveCount(0);
+	// A box that is moved otherwise shows what it moved to, and holds nothing up.
+	await end.fill('2000');
+	await end.press('Tab');
+	await page.getByRole('slider', { name: 'End of leg 1' }).press('ArrowLeft');
+	await expect(end).toHaveValue('128');
+	await expect(page.getByText('is no minute from')).toHaveCount(0);
+	await page.getByRole('slider', { name: 'End of leg 1' }).press('ArrowRight');
+	await expect(end).toHaveValue('129');
 	await page.getByRole('button', { name: 'Split leg 1' }).click();
 	await page.getByLabel('Leg 2', { exact: true }).selectOption('Driving');
 	await page.getByRole('button', { name: 'Save the legs' }).last().click();

@@ -34,14 +34,13 @@ export function formatFitted(value: number, unit = '-'): string {
 	return unit === '-' ? text : `${text}${THIN_SPACE}${unit}`;
 }
 
-/** How much narrower what is held of a coefficient has become. */
 /** Whether the data narrowed what was held before by more than rounding. */
 export const isLearnt = (spreadLeft: number): boolean => Math.round(spreadLeft * 100) < 98;
 
+/** How much narrower what is held of a coefficient has become. */
 export function sayLearnt(spreadLeft: number): string {
-	const percent = Math.round(spreadLeft * 100);
 	if (!isLearnt(spreadLeft)) return 'nothing was learnt';
-	return `${percent}${THIN_SPACE}% of the spread is left`;
+	return `${Math.round(spreadLeft * 100)}${THIN_SPACE}% of the spread is left`;
 }
 
 /** "2, 4" → [2, 4]; null for what is no list of whole numbers. */

@@ -173,6 +173,9 @@ export const curveSchema = z.object({
 export type CurveView = z.infer<typeof curveSchema>;
 
 export const MOST_TRACE_LEGS = 200;
+/** Faster no leg is driven, km/h. */
+export const MOST_LEG_KMH = 200;
+
 /** Legs follow each other: each begins where the one before ends, the first with the trace. */
 export const legsChangeSchema = z.object({
 	legs: z
@@ -180,7 +183,7 @@ export const legsChangeSchema = z.object({
 			z.object({
 				endS: z.number(),
 				kind: z.enum(LEG_KINDS_OF_TRACE),
-				speedKmh: measure('Mean speed', 'km/h', 0, 200)
+				speedKmh: measure('Mean speed', 'km/h', 0, MOST_LEG_KMH)
 					.nullable()
 					.default(null)
 					.meta({ description: 'Taken only where the trace does not tell' })

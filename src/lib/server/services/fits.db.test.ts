@@ -1,6 +1,7 @@
 import { beforeAll, describe, expect, it } from 'vitest';
 import { makeAssessableJob } from '../../../../tests/support/assessable-job';
-import { makeFittable, TRUE_CONDUCTANCE } from '../../../../tests/support/fit-traces';
+import { TRUE_CONDUCTANCE } from '../../../../tests/support/fit-day';
+import { makeFittable } from '../../../../tests/support/fit-traces';
 import { makeCrew, useTestDatabase, type Crew } from '../../../../tests/support/services';
 import { dayText, readAs, sendTrace } from '../../../../tests/support/traces';
 import { fitInputSchema, type FitView } from '$lib/schemas/fits';
