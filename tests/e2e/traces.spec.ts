@@ -86,6 +86,10 @@ test('an engineer sends a file with faults, puts its columns right, sees what wa
 	await page.getByRole('button', { name: 'Save the legs' }).last().click();
 	await expect(end).toBeFocused();
 	await expect(end).toHaveValue('2000');
+	const { width, height } = page.viewportSize()!;
+	await page.setViewportSize({ width: width + 40, height });
+	await expect(end).toHaveValue('2000');
+	await page.setViewportSize({ width, height });
 	await end.fill('129');
 	await end.press('Tab');
 	await expect(page.getByText('is no minute from')).toHaveCount(0);
