@@ -23,50 +23,49 @@ export interface CheckRow {
 	leftOut: LeftOut | '';
 }
 
-const COLUMNS = [
-	...['kind', 'workshop_id', 'mount_id', 'installation_id', 'field_note_id', 'trace_id'],
-	...['assessment_id', 'book_id', 'place'],
-	...['read_on', 'measured', 'predicted', 'low', 'high', 'error', 'square', 'deviations', 'misfit', 'stand'],
-	...['chance', 'observed_days', 'is_looked_at', 'is_entered_later', 'left_out']
-];
-
 const flag = (holds: boolean | undefined): number | null => (holds === undefined ? null : holds ? 1 : 0);
 
-/** In the order of COLUMNS. */
-function valuesOf({ held, watched, ...row }: CheckRow): unknown[] {
-	const { measured, predicted, low, high, error, deviations, stand } = held;
-	const isTrace = 'meanSquare' in held;
-	const square = isTrace ? held.meanSquare : error === null ? null : error * error;
-	return [
-		...[row.kind, row.workshopId, row.mountId, row.installationId, row.fieldNoteId],
-		...[
-			row.traceId,
-			row.assessmentId,
-			row.bookId,
-			isTrace ? held.place : null,
-			row.readOn,
-			measured,
-			predicted,
-			low,
-			high,
-			error,
-			square,
-			deviations
-		],
-		...[
-			isTrace ? held.misfit : Math.abs(deviations),
-			stand,
-			watched?.chance ?? null,
-			watched?.observedDays ?? null
-		],
-		...[flag(watched?.isLookedAt), flag(row.isEnteredLater), row.leftOut]
-	];
+/** Of one reading its square and how far off it is follow from its error; a trace is many readings, and says its own. */
+function sumUp(held: CheckRow['held']): { square: number | null; misfit: number; place: string | null } {
+	if ('meanSquare' in held) return { square: held.meanSquare, misfit: held.misfit, place: held.place };
+	const { error, deviations } = held;
+	return { square: error === null ? null : error * error, misfit: Math.abs(deviations), place: null };
 }
+
+/** What each column takes of a row. */
+const COLUMNS: Record<string, (row: CheckRow) => unknown> = {
+	kind: ({ kind }) => kind,
+	workshop_id: ({ workshopId }) => workshopId,
+	mount_id: ({ mountId }) => mountId,
+	installation_id: ({ installationId }) => installationId,
+	field_note_id: ({ fieldNoteId }) => fieldNoteId,
+	trace_id: ({ traceId }) => traceId,
+	assessment_id: ({ assessmentId }) => assessmentId,
+	book_id: ({ bookId }) => bookId,
+	place: ({ held }) => sumUp(held).place,
+	read_on: ({ readOn }) => readOn,
+	measured: ({ held }) => held.measured,
+	predicted: ({ held }) => held.predicted,
+	low: ({ held }) => held.low,
+	high: ({ held }) => held.high,
+	error: ({ held }) => held.error,
+	square: ({ held }) => sumUp(held).square,
+	deviations: ({ held }) => held.deviations,
+	misfit: ({ held }) => sumUp(held).misfit,
+	stand: ({ held }) => held.stand,
+	chance: ({ watched }) => watched?.chance ?? null,
+	observed_days: ({ watched }) => watched?.observedDays ?? null,
+	is_looked_at: ({ watched }) => flag(watched?.isLookedAt),
+	is_entered_later: ({ isEnteredLater }) => flag(isEnteredLater),
+	left_out: ({ leftOut }) => leftOut
+};
+const NAMES = Object.keys(COLUMNS).join(', ');
+const READERS = Object.values(COLUMNS);
 
 export async function writeChecks(rows: readonly CheckRow[], transaction: Transaction): Promise<void> {
 	if (rows.length === 0) return;
-	await connection().query(`INSERT INTO prediction_checks (${COLUMNS.join(', ')}) VALUES :rows`, {
-		replacements: { rows: rows.map(valuesOf) },
+	await connection().query(`INSERT INTO prediction_checks (${NAMES}) VALUES :rows`, {
+		replacements: { rows: rows.map((row) => READERS.map((read) => read(row))) },
 		transaction
 	});
 }

@@ -33,9 +33,12 @@ const page = (where: string): string => `
 		c.mount_id AS mountId, m.letter, m.name, c.assessment_id AS assessmentId, b.number AS book, ${ZONE} AS zone,
 		m.position_kind AS position, c.measured, c.predicted, c.low, c.high, c.error, c.deviations, c.misfit, c.stand,
 		c.chance, c.observed_days AS observedDays, c.is_entered_later AS isEnteredLater, c.left_out AS leftOut,
-		c.trace_id AS traceId, t.name AS traceName, c.place AS tracePlace, JSON_VALUE(n.data, '$.place') AS place, JSON_VALUE(n.data, '$.turnedC') AS turnedC,
+		c.trace_id AS traceId, t.name AS traceName, c.place AS tracePlace,
+		JSON_VALUE(n.data, '$.place') AS place, JSON_VALUE(n.data, '$.turnedC') AS turnedC,
 		JSON_VALUE(n.data, '$.notTurnedC') AS notTurnedC
-	FROM ${CHECKS} LEFT JOIN field_notes n ON n.id = c.field_note_id LEFT JOIN traces t ON t.id = c.trace_id
+	FROM ${CHECKS}
+		LEFT JOIN field_notes n ON n.id = c.field_note_id
+		LEFT JOIN traces t ON t.id = c.trace_id
 	WHERE ${where} ORDER BY c.misfit DESC, c.id DESC LIMIT :limit
 `;
 
