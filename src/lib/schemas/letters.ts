@@ -24,12 +24,13 @@ export const sentLetterSchema = z.object({
 	about: z.string(),
 	recipient: z.string(),
 	subject: z.string(),
-	state: z.enum(MAIL_STATES).meta({ description: 'failed: given up' }),
+	state: z.enum(MAIL_STATES).meta({ description: 'failed: given up; unsure: it may have arrived' }),
 	attempts: z.number().int(),
 	createdAt: z.iso.datetime(),
 	sentAt: z.iso.datetime().nullable(),
 	nextTryAt: z.iso.datetime().nullable(),
 	lastError: z.string(),
-	canTryAgain: z.boolean()
+	canTryAgain: z.boolean(),
+	mayHaveArrived: z.boolean()
 });
 export type SentLetter = z.infer<typeof sentLetterSchema>;

@@ -77,7 +77,9 @@ export type Acknowledge = z.infer<typeof acknowledgeSchema>;
 /** Of a battery as it was then: it tells how its verdict is worded. */
 const chemistryName = z.string().meta({ description: 'Chemistry of the battery' });
 
-export const MAIL_STATES = ['waiting', 'sent', 'failed'] as const;
+/** unsure: handed to a mail server that did not answer, so that it may have arrived. */
+export const MAIL_STATES = ['waiting', 'sent', 'failed', 'unsure'] as const;
+export type MailState = (typeof MAIL_STATES)[number];
 
 export const sheetStatusSchema = z.object({
 	id: z.number().int(),

@@ -15,6 +15,12 @@ export function isFinalRefusal(error: unknown): boolean {
 	return responseCode >= 500 && responseCode < 600;
 }
 
+/** The server answered no, so it does not have the letter; a broken line leaves that open. */
+export function isRefusal(error: unknown): boolean {
+	const { responseCode = 0 } = error as MailFailure;
+	return responseCode >= 400;
+}
+
 /** Why a letter did not go out, for the people of the shop. */
 export function sayMailError(error: unknown): string {
 	const { code = '', response, message = '' } = error as MailFailure;

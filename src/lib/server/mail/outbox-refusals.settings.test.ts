@@ -4,12 +4,17 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { post } from '../../../../tests/support/letters';
 import { makeCrew, useTestDatabase } from '../../../../tests/support/services';
 import { OutgoingMail } from '../db/models';
+import { listFailedLetters, noteLetterArrived, sendLetterAgain } from '../services/sent-letters';
 import { sendDue, stopOutbox } from './outbox';
+import { deliver } from './transport';
 
 const dropAll = (recipient: string) =>
 	OutgoingMail.update({ state: 'failed', lastError: 'Withdrawn.' }, { where: { recipient } });
 
-/** A real server of its own that knows nobody called "nobody", is too busy for "busy", and slow for "dropped". */
+/** How often each address was sent a letter to its end. */
+const taken = new Map<string, number>();
+
+/** A real server of its own: knows no "nobody", is too busy for "busy", slow for "dropped", hangs up on "unsaid". */
 const server = new SMTPServer({
 	authOptional: true,
 	disabledCommands: ['AUTH', 'STARTTLS'],
@@ -20,6 +25,15 @@ const server = new SMTPServer({
 		else if (address.startsWith('dropped'))
 			void dropAll(address).then(() => done(Object.assign(new Error('Try later'), { responseCode: 451 })));
 		else done();
+	},
+	onData: (stream, { envelope }, done) => {
+		const { address } = envelope.rcptTo[0]!;
+		stream.resume().on('end', () => {
+			taken.set(address, (taken.get(address) ?? 0) + 1);
+			if (address.startsWith('unsaid')) for (const each of server.connections) each._socket.destroy();
+			else if (address.startsWith('full')) done(Object.assign(new Error('No room'), { responseCode: 452 }));
+			else done();
+		});
 	}
 });
 
@@ -75,6 +89,68 @@ describe('a letter that the mail server does not take', () => {
 		const { id } = await post(workshopId, 'somebody@travellers.example');
 		await sendDue();
 		expect((await OutgoingMail.findByPk(id))!.state).toBe('sent');
+	});
+});
+
+/** As a process leaves it that dies between a letter's end and the answer. */
+const dieAtItsEnd = (id: number) =>
+	OutgoingMail.update(
+		{ attempts: 1, handedOverAt: new Date(Date.now() - 1), nextAttemptAt: new Date(Date.now() - 1) },
+		{ where: { id } }
+	);
+
+describe('a letter that the mail server may have', () => {
+	it('is sent once and set aside when the line breaks between its end and the answer', async () => {
+		const letter = await postAndSend('unsaid@travellers.example');
+		expect(letter).toMatchObject({ state: 'unsure', attempts: 1, textBody: 'Hello.' });
+		expect(letter.lastError).toContain('may have arrived');
+		await OutgoingMail.update({ nextAttemptAt: new Date(0) }, { where: { id: letter.id } });
+		await sendDue();
+		expect(taken.get('unsaid@travellers.example')).toBe(1);
+	});
+
+	it('is set aside, unsent, when the process died there', async () => {
+		const { workshopId } = await makeCrew();
+		const { id } = await post(workshopId, 'died@travellers.example');
+		await dieAtItsEnd(id);
+		await sendDue();
+		expect((await OutgoingMail.findByPk(id))!.state).toBe('unsure');
+		expect(taken.get('died@travellers.example')).toBeUndefined();
+	});
+
+	it('is tried again by itself when the server answered its end with a no', async () => {
+		expect(await postAndSend('full@travellers.example')).toMatchObject({
+			...{ state: 'waiting', attempts: 1, handedOverAt: null },
+			lastError: 'The mail server answered: 452 No room'
+		});
+	});
+
+	it('goes out again, or is noted as arrived, when a person says so', async () => {
+		const { workshopId, manager } = await makeCrew();
+		const again = await post(workshopId, 'again@travellers.example');
+		const there = await post(workshopId, 'there@travellers.example');
+		for (const { id } of [again, there]) await dieAtItsEnd(id);
+		await sendDue();
+		expect(await listFailedLetters(manager)).toMatchObject([
+			{ id: there.id, state: 'unsure', mayHaveArrived: true, canTryAgain: true },
+			{ id: again.id, state: 'unsure', mayHaveArrived: true, canTryAgain: true }
+		]);
+		await sendLetterAgain(manager, again.id);
+		expect(await noteLetterArrived(manager, there.id)).toMatchObject({ state: 'sent' });
+		await expect(noteLetterArrived(manager, there.id)).rejects.toMatchObject({ code: 'conflict' });
+		await sendDue();
+		expect((await OutgoingMail.findByPk(again.id))!.state).toBe('sent');
+		expect(taken.get('again@travellers.example')).toBe(1);
+		expect(taken.get('there@travellers.example')).toBeUndefined();
+	});
+
+	it('is never handed over to its end by a process that lost it to another', async () => {
+		const { workshopId } = await makeCrew();
+		const { id } = await post(workshopId, 'lost@travellers.example');
+		const letter = (await OutgoingMail.findByPk(id))!;
+		const lost = deliver(letter, () => Promise.reject(new Error('Another process took it over.')));
+		await expect(lost).rejects.toThrow('took it over');
+		expect(taken.get('lost@travellers.example')).toBeUndefined();
 	});
 });
 

@@ -1,12 +1,12 @@
 import { randomUUID } from 'node:crypto';
-import { Op, type Transaction } from 'sequelize';
+import { col, Op, type Transaction } from 'sequelize';
 import type { LetterKind } from '$lib/schemas/letters';
 import { OutgoingMail } from '../db/models';
 import { outsideTransaction } from '../db/transaction';
 import { logger } from '../logger';
 import { withLetterhead } from './letterhead';
-import { isFinalRefusal, sayMailError } from './mail-error';
-import { closeTransport, deliver, type Letter } from './transport';
+import { isFinalRefusal, isRefusal, sayMailError } from './mail-error';
+import { deliver, type Letter } from './transport';
 
 const LOOK_EVERY_MS = 5_000;
 const BATCH = 20;
@@ -15,7 +15,8 @@ const LONGEST_PAUSE_MS = 60 * 60_000;
 /** Over three days: a mail server that is down over a weekend costs no letter. */
 const MOST_ATTEMPTS = 80;
 /** While one process is busy with a letter, others leave it alone for this long. */
-const CLAIM_MS = 60_000;
+const CLAIM_MS = 120_000;
+const UNSURE = 'Its end was handed over, but no answer of the mail server came: it may have arrived.';
 
 export type NewLetter = Omit<Letter, 'messageId'> & {
 	kind: LetterKind;
@@ -38,12 +39,13 @@ export async function postLetter(letter: NewLetter, transaction: Transaction): P
 /** What a letter says holds a link that opens something: it is kept no longer than it takes to send it. */
 const FORGOTTEN = { textBody: '', htmlBody: '' };
 
-/** A letter whose matter is over is not sent any more; one that is out already stays as it is. */
+/** A letter whose matter is over is not sent any more; one that is out, or may be, stays as it is but for its words. */
 export async function dropMails(ids: number[], reason: string): Promise<void> {
 	await OutgoingMail.update(
 		{ state: 'failed', lastError: reason, ...FORGOTTEN },
-		{ where: { id: ids, state: ['waiting', 'failed'] } }
+		{ where: { id: ids, state: ['waiting', 'failed'], handedOverAt: null } }
 	);
+	await OutgoingMail.update(FORGOTTEN, { where: { id: ids, handedOverAt: { [Op.ne]: null } } });
 }
 
 /** The same for the letters of these sheets. */
@@ -52,7 +54,7 @@ export async function dropLetters(
 	reason: string,
 	transaction: Transaction
 ): Promise<void> {
-	const where = { sheetId: sheetIds, state: 'waiting' };
+	const where = { sheetId: sheetIds, state: ['waiting', 'unsure'] };
 	const letters = await OutgoingMail.findAll({ where, attributes: ['id'], transaction });
 	await dropMails(
 		letters.map(({ id }) => id),
@@ -60,11 +62,11 @@ export async function dropLetters(
 	);
 }
 
-/** Gives a letter that was given up its tries again; says whether it is one. What was dropped has no words left. */
+/** Gives a letter that stopped its tries again; says whether it is one. What was dropped has no words left. */
 export async function tryMailAgain(id: number, transaction: Transaction): Promise<boolean> {
 	const [changed] = await OutgoingMail.update(
-		{ state: 'waiting', attempts: 0, nextAttemptAt: new Date() },
-		{ where: { id, state: 'failed', textBody: { [Op.ne]: '' } }, transaction }
+		{ state: 'waiting', attempts: 0, nextAttemptAt: new Date(), handedOverAt: null },
+		{ where: { id, state: ['failed', 'unsure'], textBody: { [Op.ne]: '' } }, transaction }
 	);
 	transaction.afterCommit(() => outsideTransaction(nudge));
 	return changed > 0;
@@ -76,16 +78,39 @@ export async function tryLetterAgain(sheetId: number, transaction: Transaction):
 	return letter !== null && tryMailAgain(letter.id, transaction);
 }
 
+/** A person found out that a letter of which this was not known did arrive; says whether it is such a letter. */
+export async function noteArrived(id: number, transaction: Transaction): Promise<boolean> {
+	const [changed] = await OutgoingMail.update(
+		{ state: 'sent', sentAt: col('handed_over_at'), lastError: '', ...FORGOTTEN },
+		{ where: { id, state: 'unsure' }, transaction }
+	);
+	return changed > 0;
+}
+
 /** Whose data was deleted is not kept as the reader of the letter that says so either. */
 const withoutReader = ({ kind }: OutgoingMail): Partial<OutgoingMail> =>
 	kind === 'erasure-granted' ? { recipient: '(erased)', lastError: '', ...FORGOTTEN } : {};
 
-async function claim(mail: OutgoingMail): Promise<boolean> {
+/** Takes a letter for a while; gives until when, or null where another process was faster. */
+async function claim(mail: OutgoingMail): Promise<Date | null> {
+	const until = new Date(Date.now() + CLAIM_MS);
 	const [changed] = await OutgoingMail.update(
-		{ nextAttemptAt: new Date(Date.now() + CLAIM_MS), attempts: mail.attempts + 1 },
-		{ where: { id: mail.id, state: 'waiting', attempts: mail.attempts } }
+		{ nextAttemptAt: until, attempts: mail.attempts + 1 },
+		{ where: { id: mail.id, state: 'waiting', attempts: mail.attempts, handedOverAt: null } }
 	);
-	return changed === 1;
+	return changed === 1 ? until : null;
+}
+
+/**
+ * Written before the server can have the letter: whatever happens from here to its answer, the letter is not sent by
+ * itself a second time. A process that was held up for longer than its claim finds it gone and lets go of the letter.
+ */
+async function noteHandedOver({ id }: OutgoingMail, claimedUntil: Date): Promise<void> {
+	const [changed] = await OutgoingMail.update(
+		{ handedOverAt: new Date(), nextAttemptAt: new Date(claimedUntil.getTime() + CLAIM_MS) },
+		{ where: { id, state: 'waiting', nextAttemptAt: claimedUntil } }
+	);
+	if (changed !== 1) throw new Error('It was dropped, or another process took it over.');
 }
 
 /** The server has it: a hiccup of the database must not send it again. */
@@ -93,6 +118,7 @@ async function noteSent(mail: OutgoingMail): Promise<void> {
 	const sent = {
 		state: 'sent',
 		sentAt: new Date(),
+		handedOverAt: null,
 		lastError: '',
 		...FORGOTTEN,
 		...withoutReader(mail)
@@ -108,7 +134,7 @@ async function noteRefused(mail: OutgoingMail, attempts: number, error: unknown)
 	const nextAttemptAt = new Date(Date.now() + pauseMs);
 	await OutgoingMail.update(
 		{
-			...{ state: givenUp ? 'failed' : 'waiting', nextAttemptAt, lastError },
+			...{ state: givenUp ? 'failed' : 'waiting', nextAttemptAt, lastError, handedOverAt: null },
 			...(givenUp ? withoutReader(mail) : {})
 		},
 		// Whoever dropped it meanwhile meant it: it is not put back.
@@ -117,17 +143,30 @@ async function noteRefused(mail: OutgoingMail, attempts: number, error: unknown)
 	logger.warn({ mailId: mail.id, attempts, givenUp, lastError }, 'mail not sent');
 }
 
+/** The line broke, or the process died, between a letter's end and the answer: a person decides whether to send it again. */
+async function noteUnsure(id: number): Promise<void> {
+	await OutgoingMail.update({ state: 'unsure', lastError: UNSURE }, { where: { id, state: 'waiting' } });
+	logger.warn({ mailId: id }, 'mail may have arrived');
+}
+
 async function sendOne(mail: OutgoingMail): Promise<void> {
-	if (!(await claim(mail))) return;
-	const attempts = mail.attempts + 1;
-	await deliver(mail).then(
+	if (mail.handedOverAt !== null) return noteUnsure(mail.id);
+	const claimedUntil = await claim(mail);
+	if (!claimedUntil) return;
+	let isHandedOver = false;
+	const handOver = async () => {
+		await noteHandedOver(mail, claimedUntil);
+		isHandedOver = true;
+	};
+	await deliver(mail, handOver).then(
 		() => noteSent(mail),
-		(error: unknown) => noteRefused(mail, attempts, error)
+		(error: unknown) =>
+			isHandedOver && !isRefusal(error) ? noteUnsure(mail.id) : noteRefused(mail, mail.attempts + 1, error)
 	);
 }
 
 /**
- * Sends what is due. A letter that fails waits longer each time, up to an hour, and is given up after three days, or at
+ * Sends what is due. What the server may have already is not sent again, but set aside for a person to decide. A letter that fails waits longer each time, up to an hour, and is given up after three days, or at
  * once when the server refuses it for good.
  */
 export async function sendDue(isOver: () => boolean = () => false): Promise<void> {
@@ -174,5 +213,4 @@ export async function stopOutbox(): Promise<void> {
 	clearInterval(timer);
 	timer = undefined;
 	await running;
-	closeTransport();
 }

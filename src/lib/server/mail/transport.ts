@@ -1,3 +1,4 @@
+import { Readable } from 'node:stream';
 import { createTransport, type Transporter } from 'nodemailer';
 import { env } from '../env';
 import { listPictures } from './letterhead';
@@ -14,10 +15,9 @@ export interface Letter {
 	htmlBody: string;
 }
 
-/** Shorter than an outbox claim, so that one slow server does not make two processes send the same letter. */
-const PATIENCE_MS = 10_000;
-
-let transporter: Transporter | undefined;
+/** How long a server may take to greet, and to answer: shorter than an outbox claim. */
+const GREETING_MS = 10_000;
+const ANSWER_MS = 45_000;
 
 /** Mail programs show a button of their own that stops such letters with one press (RFC 2369, RFC 8058). */
 const stopHeaders = (stopUrl: string) => ({
@@ -25,18 +25,32 @@ const stopHeaders = (stopUrl: string) => ({
 	'List-Unsubscribe-Post': 'List-Unsubscribe=One-Click'
 });
 
-/** Hands one letter to the mail server; resolves once the server has taken it. */
-export async function deliver(letter: Letter): Promise<void> {
-	const { messageId, recipient, replyTo, stopUrl, subject, textBody, htmlBody } = letter;
-	transporter ??= createTransport({
+async function* withholdEnd(words: Readable, beforeEnd: () => Promise<void>): AsyncGenerator<Buffer> {
+	yield* words;
+	await beforeEnd();
+}
+
+/** A server takes a letter by its end and drops one without (RFC 5321, 4.1.1.4 and 4.2.5): the end waits for `beforeEnd`. */
+function connect(beforeEnd: () => Promise<void>): Transporter {
+	const transporter = createTransport({
 		url: env().SMTP_URL,
-		connectionTimeout: PATIENCE_MS,
-		greetingTimeout: PATIENCE_MS,
-		socketTimeout: PATIENCE_MS,
+		connectionTimeout: GREETING_MS,
+		greetingTimeout: GREETING_MS,
+		socketTimeout: ANSWER_MS,
 		disableFileAccess: true,
 		disableUrlAccess: true
 	});
-	await transporter.sendMail({
+	transporter.use('stream', ({ message }, done) => {
+		message.processFunc((words) => Readable.from(withholdEnd(words, beforeEnd), { objectMode: false }));
+		done();
+	});
+	return transporter;
+}
+
+/** Hands one letter to the mail server; resolves once the server has taken it, and fails untaken if `beforeEnd` does. */
+export async function deliver(letter: Letter, beforeEnd: () => Promise<void>): Promise<void> {
+	const { messageId, recipient, replyTo, stopUrl, subject, textBody, htmlBody } = letter;
+	await connect(beforeEnd).sendMail({
 		messageId,
 		from: env().MAIL_FROM,
 		to: recipient,
@@ -47,9 +61,4 @@ export async function deliver(letter: Letter): Promise<void> {
 		html: htmlBody,
 		attachments: await listPictures(htmlBody)
 	});
-}
-
-export function closeTransport(): void {
-	transporter?.close();
-	transporter = undefined;
 }

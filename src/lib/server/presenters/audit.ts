@@ -36,6 +36,7 @@ const DID: Record<string, string> = {
 	'invitation.withdrawn': 'withdrew an invitation',
 	'job.answer': 'answered a customer’s question',
 	'job.created': 'began a job',
+	'job.letter-arrived': 'noted that a letter arrived',
 	'job.letter-tried-again': 'sent a letter again',
 	'mount.added': 'added a mount',
 	'mount.cable': 'changed the proposed cable',

@@ -10,6 +10,7 @@ export function presentSentLetter(letter: OutgoingMail): SentLetter {
 		createdAt: letter.createdAt.toISOString(),
 		sentAt: letter.sentAt?.toISOString() ?? null,
 		nextTryAt: state === 'waiting' ? letter.nextAttemptAt.toISOString() : null,
-		canTryAgain: state === 'failed' && textBody !== ''
+		canTryAgain: (state === 'failed' || state === 'unsure') && textBody !== '',
+		mayHaveArrived: state === 'unsure'
 	};
 }

@@ -44,7 +44,11 @@ export async function openReminderChoice(stop: string): Promise<ReminderChoice> 
 async function dropWaiting(customerId: number): Promise<void> {
 	const jobs = await Job.findAll({ where: { customerId }, attributes: ['id'] });
 	const waiting = await OutgoingMail.findAll({
-		where: { jobId: { [Op.in]: jobs.map(({ id }) => id) }, kind: 'reminder', state: ['waiting', 'failed'] },
+		where: {
+			jobId: { [Op.in]: jobs.map(({ id }) => id) },
+			kind: 'reminder',
+			state: ['waiting', 'failed', 'unsure']
+		},
 		attributes: ['id']
 	});
 	await dropMails(

@@ -1,10 +1,10 @@
-import { Op } from 'sequelize';
+import { Op, type Transaction } from 'sequelize';
 import type { SentLetter } from '$lib/schemas/letters';
 import type { SignedInPerson } from '$lib/schemas/people';
 import { Job, OutgoingMail, Sheet } from '../db/models';
 import { inTransaction } from '../db/transaction';
 import { AppError, notFound } from '../errors';
-import { tryMailAgain } from '../mail/outbox';
+import { noteArrived, tryMailAgain } from '../mail/outbox';
 import { allow } from '../policies';
 import { presentSentLetter } from '../presenters/sent-letters';
 import { recordBy } from './audit';
@@ -23,12 +23,12 @@ export async function listSentLetters(person: SignedInPerson, jobId: number): Pr
 
 const MOST_LISTED = 100;
 
-/** Letters that were given up and belong to no job, where nobody would look for them. */
+/** Letters that were given up, or may have arrived, and belong to no job, where nobody would look for them. */
 export async function listFailedLetters(person: SignedInPerson): Promise<SentLetter[]> {
 	const { workshopId } = allow(person, 'shop.write');
 	const letters = await OutgoingMail.findAll({
 		// A link to sign in is dead by then: whoever needs one asks for another.
-		where: { workshopId, jobId: null, state: 'failed', kind: { [Op.ne]: 'sign-in' } },
+		where: { workshopId, jobId: null, state: ['failed', 'unsure'], kind: { [Op.ne]: 'sign-in' } },
 		order: [['id', 'DESC']],
 		limit: MOST_LISTED
 	});
@@ -40,21 +40,41 @@ async function refuseWithdrawn({ sheetId }: OutgoingMail): Promise<void> {
 	if (sheet?.withdrawnAt) throw new AppError('conflict', 'This sheet was withdrawn: send a new one instead.');
 }
 
-/** Gives a letter that was given up another row of tries. */
-export async function sendLetterAgain(person: SignedInPerson, letterId: number): Promise<SentLetter> {
+type Decision = (letter: OutgoingMail, transaction: Transaction) => Promise<void>;
+
+/** What a person decides about a letter that is at rest, written down. */
+async function decide(
+	person: SignedInPerson,
+	letterId: number,
+	action: 'job.letter-tried-again' | 'job.letter-arrived',
+	settle: Decision
+): Promise<SentLetter> {
 	allow(person, 'sheets.write');
 	return inTransaction(async (transaction) => {
 		const where = { id: letterId, workshopId: person.workshopId };
 		const letter = await OutgoingMail.findOne({ where, transaction, lock: transaction.LOCK.UPDATE });
 		if (!letter) throw notFound('letter');
 		if (letter.jobId === null) allow(person, 'shop.write');
-		await refuseWithdrawn(letter);
-		if (!(await tryMailAgain(letter.id, transaction)))
-			throw new AppError('conflict', 'This letter is sent, is being tried already, or was dropped.');
+		await settle(letter, transaction);
 		const subject =
 			letter.jobId === null ? { type: 'letter', id: letterId } : { type: 'job', id: letter.jobId };
-		await recordBy(person, 'job.letter-tried-again', subject, transaction, { letterId });
+		await recordBy(person, action, subject, transaction, { letterId });
 		await letter.reload({ transaction });
 		return presentSentLetter(letter);
 	});
 }
+
+/** Gives a letter that was given up, or may have arrived, another row of tries. */
+export const sendLetterAgain = (person: SignedInPerson, letterId: number): Promise<SentLetter> =>
+	decide(person, letterId, 'job.letter-tried-again', async (letter, transaction) => {
+		await refuseWithdrawn(letter);
+		if (!(await tryMailAgain(letter.id, transaction)))
+			throw new AppError('conflict', 'This letter is sent, is being tried already, or was dropped.');
+	});
+
+/** Somebody asked its reader: a letter that may have arrived did. */
+export const noteLetterArrived = (person: SignedInPerson, letterId: number): Promise<SentLetter> =>
+	decide(person, letterId, 'job.letter-arrived', async (letter, transaction) => {
+		if (!(await noteArrived(letter.id, transaction)))
+			throw new AppError('conflict', 'Nobody is in doubt about this letter any more: look at it again.');
+	});

@@ -91,6 +91,7 @@ import { migration as m132 } from './132-fits';
 import { migration as m133 } from './133-coefficients-fit';
 import { migration as m160 } from './160-prediction-checks';
 import { migration as m161 } from './161-prediction-checks-traces';
+import { migration as m162 } from './162-outgoing-mails-handed-over';
 import type { Migration } from '../migrate';
 
 /** Every migration, in the order in which they run; each is one DDL step that may run again. */
@@ -187,5 +188,6 @@ export const migrations: Migration[] = [
 	m132,
 	m133,
 	m160,
-	m161
+	m161,
+	m162
 ];

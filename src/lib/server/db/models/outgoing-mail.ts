@@ -7,6 +7,7 @@ import {
 	type Sequelize
 } from 'sequelize';
 import type { LetterKind } from '$lib/schemas/letters';
+import type { MailState } from '$lib/schemas/sheets';
 import {
 	id,
 	moment,
@@ -37,10 +38,12 @@ export class OutgoingMail extends Model<
 	declare subject: string;
 	declare textBody: string;
 	declare htmlBody: string;
-	declare state: CreationOptional<'waiting' | 'sent' | 'failed'>;
+	declare state: CreationOptional<MailState>;
 	declare attempts: CreationOptional<number>;
 	declare nextAttemptAt: Date;
 	declare lastError: CreationOptional<string>;
+	/** From just before the server can have it until its answer. */
+	declare handedOverAt: CreationOptional<Date | null>;
 	declare sentAt: CreationOptional<Date | null>;
 	declare createdAt: CreationOptional<Date>;
 }
@@ -64,6 +67,7 @@ export function initOutgoingMail(sequelize: Sequelize): void {
 			attempts: { ...whole, defaultValue: 0 },
 			nextAttemptAt: moment,
 			lastError: textOrEmpty,
+			handedOverAt: optionalMoment,
 			sentAt: optionalMoment,
 			createdAt: moment
 		},

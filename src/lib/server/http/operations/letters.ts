@@ -19,7 +19,7 @@ export const letterOperations = {
 		method: 'GET',
 		path: '/api/v1/letters',
 		action: 'shop.write',
-		summary: 'Letters that were given up and belong to no job, the newest first.',
+		summary: 'Letters that were given up, or may have arrived, and belong to no job, the newest first.',
 		answer: z.object({ rows: z.array(sentLetterSchema) }),
 		status: 200
 	}),
@@ -28,7 +28,17 @@ export const letterOperations = {
 		method: 'POST',
 		path: '/api/v1/letters/[letterId]/tries',
 		action: 'sheets.write',
-		summary: 'Gives a letter that was given up another row of tries.',
+		summary: 'Gives a letter that was given up, or may have arrived, another row of tries.',
+		params: z.object({ letterId: idSchema }),
+		answer: sentLetterSchema,
+		status: 200
+	}),
+	arrived: defineOperation({
+		id: 'noteLetterArrived',
+		method: 'POST',
+		path: '/api/v1/letters/[letterId]/arrivals',
+		action: 'sheets.write',
+		summary: 'Notes that a letter which may have arrived did, as its reader says.',
 		params: z.object({ letterId: idSchema }),
 		answer: sentLetterSchema,
 		status: 200

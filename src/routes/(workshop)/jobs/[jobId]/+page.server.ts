@@ -1,4 +1,4 @@
-import { fail, redirect } from '@sveltejs/kit';
+import { fail, redirect, type RequestEvent } from '@sveltejs/kit';
 import { answerFormSchema, type Question } from '$lib/schemas/questions';
 import { AppError } from '$lib/server/errors';
 import { loadForm, readPageForm, saveForm } from '$lib/server/http/forms';
@@ -9,7 +9,7 @@ import { assessJob } from '$lib/server/services/assessments';
 import { listMountPictures } from '$lib/server/services/files';
 import { getJob } from '$lib/server/services/jobs';
 import { newestRecommendation } from '$lib/server/services/recommendations';
-import { listSentLetters, sendLetterAgain } from '$lib/server/services/sent-letters';
+import { listSentLetters, noteLetterArrived, sendLetterAgain } from '$lib/server/services/sent-letters';
 import { answerQuestion, listQuestions } from '$lib/server/services/questions';
 import type { Actions, PageServerLoad } from './$types';
 
@@ -38,6 +38,18 @@ export const load: PageServerLoad = async (event) => {
 	return { job, questions, letters, pictures, toAnswer, answerForm, recommendedMountId, hasTraces };
 };
 
+async function decideLetter(event: RequestEvent, decide: typeof sendLetterAgain) {
+	const person = guard(event, 'sheets.write');
+	const letterId = pageId(String((await readPageForm(event.request)).get('letterId') ?? ''));
+	try {
+		await decide(person, letterId);
+	} catch (error) {
+		if (error instanceof AppError) return fail(error.status, { letterRefusal: error.message });
+		throw error;
+	}
+	redirect(303, `/jobs/${pageId(event.params.jobId)}#letters`);
+}
+
 export const actions: Actions = {
 	/** Works out every surveyed mount; one leads to its assessment, several to their comparison. */
 	assess: async (event) => {
@@ -51,18 +63,10 @@ export const actions: Actions = {
 		const [only] = made;
 		redirect(303, only && made.length === 1 ? `/assessments/${only.id}` : `/jobs/${jobId}/compare`);
 	},
-	/** Another row of tries for a letter that was given up. */
-	again: async (event) => {
-		const person = guard(event, 'sheets.write');
-		const letterId = pageId(String((await readPageForm(event.request)).get('letterId') ?? ''));
-		try {
-			await sendLetterAgain(person, letterId);
-		} catch (error) {
-			if (error instanceof AppError) return fail(error.status, { letterRefusal: error.message });
-			throw error;
-		}
-		redirect(303, `/jobs/${pageId(event.params.jobId)}#letters`);
-	},
+	/** Another row of tries for a letter at rest. */
+	again: (event) => decideLetter(event, sendLetterAgain),
+	/** Its reader says that it is there. */
+	arrived: (event) => decideLetter(event, noteLetterArrived),
 	answer: (event) =>
 		saveForm(event, {
 			action: 'questions.answer',

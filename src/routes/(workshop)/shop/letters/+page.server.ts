@@ -1,10 +1,10 @@
-import { fail, redirect } from '@sveltejs/kit';
+import { fail, redirect, type RequestEvent } from '@sveltejs/kit';
 import { idSchema } from '$lib/schemas/fields';
 import { AppError } from '$lib/server/errors';
 import { readPageForm } from '$lib/server/http/forms';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { validate } from '$lib/server/http/validate';
-import { listFailedLetters, sendLetterAgain } from '$lib/server/services/sent-letters';
+import { listFailedLetters, noteLetterArrived, sendLetterAgain } from '$lib/server/services/sent-letters';
 import type { Actions, PageServerLoad } from './$types';
 
 export const load: PageServerLoad = async (event) => {
@@ -15,16 +15,19 @@ export const load: PageServerLoad = async (event) => {
 	};
 };
 
-export const actions: Actions = {
-	again: async (event) => {
-		const person = guard(event, 'shop.write');
-		const sent = await readPageForm(event.request);
-		try {
-			await sendLetterAgain(person, validate(idSchema, sent.get('letterId') ?? undefined));
-		} catch (error) {
-			if (error instanceof AppError) return fail(error.status, { refusal: error.message });
-			throw error;
-		}
-		redirect(303, '/shop/letters?again');
+async function decideLetter(event: RequestEvent, decide: typeof sendLetterAgain, next: string) {
+	const person = guard(event, 'shop.write');
+	const sent = await readPageForm(event.request);
+	try {
+		await decide(person, validate(idSchema, sent.get('letterId') ?? undefined));
+	} catch (error) {
+		if (error instanceof AppError) return fail(error.status, { refusal: error.message });
+		throw error;
 	}
+	redirect(303, next);
+}
+
+export const actions: Actions = {
+	again: (event) => decideLetter(event, sendLetterAgain, '/shop/letters?again'),
+	arrived: (event) => decideLetter(event, noteLetterArrived, '/shop/letters')
 };

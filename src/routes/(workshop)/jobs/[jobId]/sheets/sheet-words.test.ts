@@ -19,6 +19,8 @@ describe('what became of a sheet', () => {
 		[{}, 'On its way'],
 		[SENT, 'Sent, not opened'],
 		[{ mail: 'failed' } as const, 'Letter not sent'],
+		[{ mail: 'unsure' } as const, 'May have arrived: ask'],
+		[{ ...OPENED, mail: 'unsure' } as const, 'Opened, not acknowledged'],
 		[OPENED, 'Opened, not acknowledged'],
 		[ACKNOWLEDGED, 'Acknowledged'],
 		[{ ...OPENED, withdrawnAt: AT }, 'Withdrawn'],
@@ -32,6 +34,7 @@ describe('what became of a sheet', () => {
 		const failing = { mailAttempts: 2, mailError: 'The mail server cannot be reached.' };
 		expect(sayLetter(status(failing))).toBe('waiting for its next try');
 		expect(sayLetter(status({ mail: 'failed' }))).toBe('not sent');
+		expect(sayLetter(status({ mail: 'unsure' }))).toBe('may have arrived');
 		expect(sayLetter(status(SENT))).toContain('sent 4 March 2026');
 	});
 

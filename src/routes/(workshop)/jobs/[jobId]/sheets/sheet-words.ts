@@ -5,6 +5,7 @@ import type { SheetStatus } from '$lib/schemas/sheets';
 export function sayLetter({ mail, mailSentAt, mailError, mailAttempts }: SheetStatus): string {
 	if (mail === 'sent') return mailSentAt ? `sent ${formatDateTime(mailSentAt)}` : 'sent';
 	if (mail === 'failed') return 'not sent';
+	if (mail === 'unsure') return 'may have arrived';
 	return mailAttempts > 0 && mailError ? 'waiting for its next try' : 'waiting to be sent';
 }
 
@@ -14,6 +15,7 @@ export function saySheetState(sheet: SheetStatus): string {
 	if (sheet.withdrawnAt) return 'Withdrawn';
 	if (sheet.mail === 'failed') return 'Letter not sent';
 	if (sheet.linkFirstOpenedAt) return 'Opened, not acknowledged';
+	if (sheet.mail === 'unsure') return 'May have arrived: ask';
 	return sheet.mail === 'sent' ? 'Sent, not opened' : 'On its way';
 }
 
