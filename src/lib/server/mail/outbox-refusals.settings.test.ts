@@ -118,6 +118,17 @@ describe('a letter that the mail server may have', () => {
 		expect(taken.get('died@travellers.example')).toBeUndefined();
 	});
 
+	it('keeps no reader whose data was deleted', async () => {
+		const { workshopId } = await makeCrew();
+		const { id } = await post(workshopId, 'deleted@travellers.example');
+		await OutgoingMail.update({ kind: 'erasure-granted' }, { where: { id } });
+		await dieAtItsEnd(id);
+		await sendDue();
+		expect(await OutgoingMail.findByPk(id)).toMatchObject({
+			...{ state: 'unsure', recipient: '(erased)', textBody: '' }
+		});
+	});
+
 	it('is tried again by itself when the server answered its end with a no', async () => {
 		expect(await postAndSend('full@travellers.example')).toMatchObject({
 			...{ state: 'waiting', attempts: 1, handedOverAt: null },

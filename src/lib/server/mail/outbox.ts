@@ -144,13 +144,16 @@ async function noteRefused(mail: OutgoingMail, attempts: number, error: unknown)
 }
 
 /** The line broke, or the process died, between a letter's end and the answer: a person decides whether to send it again. */
-async function noteUnsure(id: number): Promise<void> {
-	await OutgoingMail.update({ state: 'unsure', lastError: UNSURE }, { where: { id, state: 'waiting' } });
-	logger.warn({ mailId: id }, 'mail may have arrived');
+async function noteUnsure(mail: OutgoingMail): Promise<void> {
+	await OutgoingMail.update(
+		{ state: 'unsure', lastError: UNSURE, ...withoutReader(mail) },
+		{ where: { id: mail.id, state: 'waiting' } }
+	);
+	logger.warn({ mailId: mail.id }, 'mail may have arrived');
 }
 
 async function sendOne(mail: OutgoingMail): Promise<void> {
-	if (mail.handedOverAt !== null) return noteUnsure(mail.id);
+	if (mail.handedOverAt !== null) return noteUnsure(mail);
 	const claimedUntil = await claim(mail);
 	if (!claimedUntil) return;
 	let isHandedOver = false;
@@ -161,7 +164,7 @@ async function sendOne(mail: OutgoingMail): Promise<void> {
 	await deliver(mail, handOver).then(
 		() => noteSent(mail),
 		(error: unknown) =>
-			isHandedOver && !isRefusal(error) ? noteUnsure(mail.id) : noteRefused(mail, mail.attempts + 1, error)
+			isHandedOver && !isRefusal(error) ? noteUnsure(mail) : noteRefused(mail, mail.attempts + 1, error)
 	);
 }
 
