@@ -27,6 +27,18 @@ async function keep(stream, mailbox) {
 	await writeWhole(join(mailbox, messageFile(new Date())), message);
 }
 
+/**
+ * Whoever wants to see what becomes of a letter whose answer is never heard writes to an address that begins so.
+ * @param {import('smtp-server').SMTPServerSession} session
+ */
+const isToHangUpOn = ({ envelope }) =>
+	envelope.rcptTo.some(({ address }) => address.startsWith('unanswered.'));
+
+/** @param {import('smtp-server').SMTPServerSession} session */
+function hangUp({ id }) {
+	for (const each of server.connections) if (each.session.id === id) each._socket.destroy();
+}
+
 if (!portWords || !folder) {
 	console.error('Usage: local-mail.mjs PORT FOLDER');
 	process.exit(2);
@@ -37,8 +49,8 @@ const server = new SMTPServer({
 	disabledCommands: ['AUTH', 'STARTTLS'],
 	disableReverseLookup: true,
 	size: LARGEST_MESSAGE_BYTES,
-	onData: (stream, _session, done) => {
-		keep(stream, folder).then(() => done(), done);
+	onData: (stream, session, done) => {
+		keep(stream, folder).then(() => (isToHangUpOn(session) ? hangUp(session) : done()), done);
 	}
 });
 server.on('error', (error) => {
