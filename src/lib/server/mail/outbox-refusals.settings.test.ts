@@ -103,7 +103,7 @@ describe('a letter that the mail server may have', () => {
 	it('is sent once and set aside when the line breaks between its end and the answer', async () => {
 		const letter = await postAndSend('unsaid@travellers.example');
 		expect(letter).toMatchObject({ state: 'unsure', attempts: 1, textBody: 'Hello.' });
-		expect(letter.lastError).toContain('may have arrived');
+		expect(letter.lastError).toContain('did not answer');
 		await OutgoingMail.update({ nextAttemptAt: new Date(0) }, { where: { id: letter.id } });
 		await sendDue();
 		expect(taken.get('unsaid@travellers.example')).toBe(1);

@@ -16,7 +16,7 @@ const LONGEST_PAUSE_MS = 60 * 60_000;
 const MOST_ATTEMPTS = 80;
 /** While one process is busy with a letter, others leave it alone for this long. */
 const CLAIM_MS = 120_000;
-const UNSURE = 'Its end was handed over, but no answer of the mail server came: it may have arrived.';
+const UNSURE = 'The mail server was given all of it and did not answer: ask its reader whether it is there.';
 
 export type NewLetter = Omit<Letter, 'messageId'> & {
 	kind: LetterKind;
