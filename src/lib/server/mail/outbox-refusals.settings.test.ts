@@ -5,11 +5,20 @@ import { post } from '../../../../tests/support/letters';
 import { makeCrew, useTestDatabase } from '../../../../tests/support/services';
 import { OutgoingMail } from '../db/models';
 import { listFailedLetters, noteLetterArrived, sendLetterAgain } from '../services/sent-letters';
-import { sendDue, stopOutbox } from './outbox';
+import { dropMails, sendDue, stopOutbox } from './outbox';
 import { deliver } from './transport';
 
 const dropAll = (recipient: string) =>
 	OutgoingMail.update({ state: 'failed', lastError: 'Withdrawn.' }, { where: { recipient } });
+
+async function dropIfAsked(recipient: string): Promise<void> {
+	if (!recipient.includes('.dropped')) return;
+	const letters = await OutgoingMail.findAll({ where: { recipient }, attributes: ['id'] });
+	await dropMails(
+		letters.map(({ id }) => id),
+		'Withdrawn.'
+	);
+}
 
 /** How often each address was sent a letter to its end. */
 const taken = new Map<string, number>();
@@ -31,7 +40,10 @@ const server = new SMTPServer({
 		stream.resume().on('end', () => {
 			taken.set(address, (taken.get(address) ?? 0) + 1);
 			if (address.startsWith('unsaid')) for (const each of server.connections) each._socket.destroy();
-			else if (address.startsWith('full')) done(Object.assign(new Error('No room'), { responseCode: 452 }));
+			else if (address.startsWith('full'))
+				void dropIfAsked(address).then(() =>
+					done(Object.assign(new Error('No room'), { responseCode: 452 }))
+				);
 			else done();
 		});
 	}
@@ -134,6 +146,14 @@ describe('a letter that the mail server may have', () => {
 			...{ state: 'waiting', attempts: 1, handedOverAt: null },
 			lastError: 'The mail server answered: 452 No room'
 		});
+	});
+
+	it('has no words left, and never goes out empty, when it was dropped before the server’s no', async () => {
+		const recipient = 'full.dropped@travellers.example';
+		expect(await postAndSend(recipient)).toMatchObject({ state: 'unsure', attempts: 1, textBody: '' });
+		await OutgoingMail.update({ nextAttemptAt: new Date(0) }, { where: { recipient } });
+		await sendDue();
+		expect(taken.get(recipient)).toBe(1);
 	});
 
 	it('goes out again, or is noted as arrived, when a person says so', async () => {

@@ -39,13 +39,16 @@ export async function postLetter(letter: NewLetter, transaction: Transaction): P
 /** What a letter says holds a link that opens something: it is kept no longer than it takes to send it. */
 const FORGOTTEN = { textBody: '', htmlBody: '' };
 
-/** A letter whose matter is over is not sent any more; one that is out, or may be, stays as it is but for its words. */
+/** A letter whose matter is over is not sent any more, nor again: of one that may be out only its words go. */
 export async function dropMails(ids: number[], reason: string): Promise<void> {
 	await OutgoingMail.update(
 		{ state: 'failed', lastError: reason, ...FORGOTTEN },
 		{ where: { id: ids, state: ['waiting', 'failed'], handedOverAt: null } }
 	);
-	await OutgoingMail.update(FORGOTTEN, { where: { id: ids, handedOverAt: { [Op.ne]: null } } });
+	await OutgoingMail.update(
+		{ state: 'unsure', lastError: UNSURE, ...FORGOTTEN },
+		{ where: { id: ids, state: ['waiting', 'unsure'], handedOverAt: { [Op.ne]: null } } }
+	);
 }
 
 /** The same for the letters of these sheets. */

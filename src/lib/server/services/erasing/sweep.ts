@@ -158,6 +158,12 @@ const eraseFromTraces: Step = async ({ ids, scrub }, transaction) => {
 
 const TO_SHOP = new Set(['question', 'erasure-asked']);
 
+/** What the mail server may have already is in doubt for good: its words are gone. */
+const fateOfWaiting = ({ handedOverAt }: OutgoingMail): Partial<OutgoingMail> =>
+	handedOverAt === null
+		? { state: 'failed', lastError: 'Not sent: the customer’s data was deleted first.' }
+		: { state: 'unsure', lastError: 'It was being sent when the customer’s data was deleted.' };
+
 /** The sending log keeps that something was sent, and when; what waits is not sent any more. */
 const eraseLetters: Step = async ({ workshopId, ids, terms, scrub }, transaction) => {
 	const letters = await OutgoingMail.findAll({
@@ -167,12 +173,10 @@ const eraseLetters: Step = async ({ workshopId, ids, terms, scrub }, transaction
 		},
 		transaction
 	});
-	const changeLetter = ({ kind, recipient, subject, state, lastError }: OutgoingMail) => ({
-		...{ textBody: '', htmlBody: '', stopUrl: '', subject: scrub.text(subject) },
-		recipient: TO_SHOP.has(kind) ? recipient : ERASED,
-		...(state === 'waiting'
-			? ({ state: 'failed', lastError: 'Not sent: the customer’s data was deleted first.' } as const)
-			: { lastError: scrub.text(lastError) })
+	const changeLetter = (letter: OutgoingMail) => ({
+		...{ textBody: '', htmlBody: '', stopUrl: '', subject: scrub.text(letter.subject) },
+		recipient: TO_SHOP.has(letter.kind) ? letter.recipient : ERASED,
+		...(letter.state === 'waiting' ? fateOfWaiting(letter) : { lastError: scrub.text(letter.lastError) })
 	});
 	await rewrite(letters, changeLetter, transaction);
 };
