@@ -1,7 +1,8 @@
 import { fail, redirect, type RequestEvent } from '@sveltejs/kit';
 import { answerFormSchema, type Question } from '$lib/schemas/questions';
 import { AppError } from '$lib/server/errors';
-import { loadForm, readPageForm, saveForm } from '$lib/server/http/forms';
+import { doOrSay } from '$lib/server/http/do-or-say';
+import { loadForm, saveForm } from '$lib/server/http/forms';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { pageId } from '$lib/server/http/page-id';
 import { mayDo } from '$lib/server/policies';
@@ -38,16 +39,13 @@ export const load: PageServerLoad = async (event) => {
 	return { job, questions, letters, pictures, toAnswer, answerForm, recommendedMountId, hasTraces };
 };
 
+/** One button on one letter; a refusal stands with the letters. */
 async function decideLetter(event: RequestEvent, decide: typeof sendLetterAgain) {
-	const person = guard(event, 'sheets.write');
-	const letterId = pageId(String((await readPageForm(event.request)).get('letterId') ?? ''));
-	try {
-		await decide(person, letterId);
-	} catch (error) {
-		if (error instanceof AppError) return fail(error.status, { letterRefusal: error.message });
-		throw error;
-	}
-	redirect(303, `/jobs/${pageId(event.params.jobId)}#letters`);
+	const refused = await doOrSay(event, 'sheets.write', async (person, sent): Promise<never> => {
+		await decide(person, pageId(String(sent.get('letterId') ?? '')));
+		redirect(303, `/jobs/${pageId(event.params.jobId)}#letters`);
+	});
+	return fail(refused.status, { letterRefusal: refused.data.refusal });
 }
 
 export const actions: Actions = {

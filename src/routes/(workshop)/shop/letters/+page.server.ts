@@ -1,7 +1,6 @@
-import { fail, redirect, type RequestEvent } from '@sveltejs/kit';
+import { redirect, type RequestEvent } from '@sveltejs/kit';
 import { idSchema } from '$lib/schemas/fields';
-import { AppError } from '$lib/server/errors';
-import { readPageForm } from '$lib/server/http/forms';
+import { doOrSay } from '$lib/server/http/do-or-say';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { validate } from '$lib/server/http/validate';
 import { listFailedLetters, noteLetterArrived, sendLetterAgain } from '$lib/server/services/sent-letters';
@@ -15,17 +14,11 @@ export const load: PageServerLoad = async (event) => {
 	};
 };
 
-async function decideLetter(event: RequestEvent, decide: typeof sendLetterAgain, next: string) {
-	const person = guard(event, 'shop.write');
-	const sent = await readPageForm(event.request);
-	try {
+const decideLetter = (event: RequestEvent, decide: typeof sendLetterAgain, next: string) =>
+	doOrSay(event, 'shop.write', async (person, sent): Promise<never> => {
 		await decide(person, validate(idSchema, sent.get('letterId') ?? undefined));
-	} catch (error) {
-		if (error instanceof AppError) return fail(error.status, { refusal: error.message });
-		throw error;
-	}
-	redirect(303, next);
-}
+		redirect(303, next);
+	});
 
 export const actions: Actions = {
 	again: (event) => decideLetter(event, sendLetterAgain, '/shop/letters?again'),
