@@ -1,6 +1,6 @@
 import { expect, test, type Page } from '@playwright/test';
 import { ask } from './assessable-job';
-import { makeSendableJob, newAddress, type SendableJob } from './sent-sheet';
+import { makeSendableJob, newAddress, openLetter, type SendableJob } from './sent-sheet';
 import { readMail } from './mailed';
 import { expectNoViolations } from './support';
 
@@ -48,4 +48,5 @@ test('such a letter goes out a second time only once a person says so', async ({
 	expect(readMail(sendTo)).toHaveLength(1);
 	await rowOf(page, sendTo).getByRole('button', { name: 'Send again' }).click();
 	await expect.poll(() => readMail(sendTo).length, { timeout: 20_000 }).toBe(2);
+	await openLetter(page, sendTo);
 });

@@ -4,7 +4,9 @@ import { describe, expect, it } from 'vitest';
 import { post } from '../../../../tests/support/letters';
 import { makeCrew, useTestDatabase } from '../../../../tests/support/services';
 import { makeSentSheet } from '../../../../tests/support/sheets';
+import { OutgoingMail } from '../db/models';
 import { env } from '../env';
+import { listKeptLetters } from '../mail/mailbox-folder';
 import { sendDue } from '../mail/outbox';
 import { getLetter, listLetters } from './mailbox';
 
@@ -21,6 +23,17 @@ describe('the local mailbox of a demonstration', () => {
 		const letter = await getLetter(crew.installer, row!.messageId);
 		expect(letter.lines).toContainEqual({ kind: 'link', href: `${env().ORIGIN}/sheet/${token}` });
 		expect(letter.subject).toBe(row!.subject);
+	});
+
+	it('lists once what was sent again, for it has the same message id', async () => {
+		const { installer, workshopId } = await makeCrew();
+		const { id, messageId } = await post(workshopId, installer.email);
+		await sendDue();
+		await OutgoingMail.update({ state: 'waiting', nextAttemptAt: new Date(0) }, { where: { id } });
+		await sendDue();
+		const kept = await listKeptLetters(env().MAILBOX_DIR!, 500);
+		expect(kept.filter((each) => each.messageId === messageId)).toHaveLength(2);
+		expect(await listLetters(installer)).toHaveLength(1);
 	});
 
 	it('shows another workshop nothing of it', async () => {

@@ -36,6 +36,8 @@ async function findOwn(person: SignedInPerson) {
 	const rowOf = new Map(rows.map((row) => [row.messageId, row]));
 	return kept.flatMap(({ file, messageId }) => {
 		const row = rowOf.get(messageId);
+		// What somebody sent again lies here twice under one id: the newest is listed, as most mail programs do.
+		rowOf.delete(messageId);
 		return row && mayRead(person, row) ? [{ file, row }] : [];
 	});
 }
