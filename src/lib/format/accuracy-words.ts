@@ -238,3 +238,7 @@ export function sayLeftOut({
 }): string {
 	return `${sayLeftOutKind(kind, readings)}, ${LEFT_OUT_WORDS[why]} (${inside} of ${readings} inside the stated band)`;
 }
+
+/** Says of measured traces that they stand in none of the figures, and what each may lack. */
+export const sayUnheld = (traces: number): string =>
+	`${traces} measured ${traces === 1 ? 'trace is' : 'traces are'} in none of these figures: nothing could be held against ${traces === 1 ? 'it' : 'them'}, for want of an assessment of the mount, the hour at which it began, a temperature of the battery, or legs that can be run.`;

@@ -120,7 +120,10 @@ export const accuracySchema = z.object({
 			readings: count,
 			inside: count.meta({ description: 'Of those, the ones inside the stated band' })
 		})
-	)
+	),
+	unheldTraces: count.meta({
+		description: 'Measured traces that no prediction could be held against'
+	})
 });
 export type Accuracy = z.infer<typeof accuracySchema>;
 

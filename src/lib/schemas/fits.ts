@@ -55,9 +55,9 @@ export const fitInputSchema = z.object({
 });
 export type FitInput = z.infer<typeof fitInputSchema>;
 
-/** What went in, as it was then: a trace whose legs are changed later makes another fit. */
+/** What went in, as it was then: a trace that is changed later makes another fit. */
 export interface FitInputs extends Omit<FitInput, 'name' | 'traces'> {
-	traces: (FitInput['traces'][number] & { assessmentId: number; sha256: string })[];
+	traces: (FitInput['traces'][number] & { assessmentId: number; sha256: string; version: number })[];
 	bookNumber: number;
 }
 

@@ -188,6 +188,7 @@ export interface CountedChecks {
 	leftOut: readonly { kind: ReadingKind; why: LeftOut; readings: number; inside: number }[];
 	/** Capacity tests that no outlook has been held against. */
 	waiting: number;
+	unheldTraces: number;
 	books: ReadonlyMap<number, string>;
 }
 
@@ -222,6 +223,7 @@ export function presentAccuracy(counted: CountedChecks): Accuracy {
 						by: groupAll(tests, nameOf, errorFigures),
 						waiting: counted.waiting
 					},
-		leftOut: [...counted.leftOut]
+		leftOut: [...counted.leftOut],
+		unheldTraces: counted.unheldTraces
 	};
 }

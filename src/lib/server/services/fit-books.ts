@@ -4,14 +4,15 @@ import type { SignedInPerson } from '$lib/schemas/people';
 import { isLearnt } from '$lib/format/fits';
 import { formatNumber } from '$lib/format/numbers';
 import type { CoefficientEstimate } from '$lib/thermal/fit';
-import { Coefficient, Fit, Trace } from '../db/models';
+import { Coefficient, CoefficientBook, Fit, Trace } from '../db/models';
 import { inTransaction } from '../db/transaction';
 import { AppError } from '../errors';
 import { allow } from '../policies';
 import { recordBy } from './audit';
 import { draftBook } from './book-changes';
 import { getBook } from './books';
-import { findFit, positionOf } from './fits';
+import { scopeOfFit } from './fit-scope';
+import { findFit } from './fits';
 
 const SIGNIFICANT = 4;
 const round = (value: number): number => Number(value.toPrecision(SIGNIFICANT));
@@ -63,9 +64,11 @@ export async function draftFittedBook(
 			'This fit has learnt nothing of any coefficient: a book would have nothing new.'
 		);
 	}
-	const positionKind = await positionOf(fit);
+	const from = (await CoefficientBook.findByPk(fromBookId))!;
+	const traceIds = fit.inputs.traces.map(({ traceId }) => traceId);
+	const scope = await scopeOfFit(person, traceIds, from);
 	return inTransaction(async (transaction) => {
-		const book = await draftBook(person, { fromBookId, ...words, positionKind });
+		const book = await draftBook(person, { fromBookId, ...words, ...scope });
 		for (const estimate of learnt) {
 			const { group: fieldGroup, key: fieldKey } = estimate;
 			const fitted = {

@@ -50,15 +50,13 @@ export interface GatheredFit {
 	isSynthetic: boolean;
 }
 
-/** All that a fit takes, read anew: the traces with their legs, the newest assessments of their mounts. */
-export async function gatherFit(
-	person: SignedInPerson,
+/** The traces with their legs and the assessments of their mounts, as the engine takes them. */
+async function gather(
+	rows: readonly Trace[],
+	assessments: ReadonlyMap<number, Assessment>,
 	{ traces: wanted, coefficients, loss, leaveOut }: Omit<FitInput, 'name'>,
 	book: FitBook
-): Promise<GatheredFit> {
-	const rows: Trace[] = [];
-	for (const { traceId } of wanted) rows.push(await findTrace(person, traceId));
-	const assessments = await newestAssessments(rows.map(({ mountId }) => mountId));
+): Promise<CoefficientFitInput> {
 	const traces: TraceToFit[] = [];
 	for (const [at, row] of rows.entries()) {
 		const assessment = assessments.get(row.mountId) ?? null;
@@ -69,13 +67,54 @@ export async function gatherFit(
 		requireLegs(row, wanted[at]!.heldOutLegs, `${path}.heldOutLegs`);
 		traces.push(await traceToFit(row, assessment!, wanted[at]!.heldOutLegs));
 	}
+	return { traces, coefficients, book, options: { loss, leaveOut } };
+}
+
+async function findTraces(person: SignedInPerson, wanted: readonly { traceId: number }[]): Promise<Trace[]> {
+	const rows: Trace[] = [];
+	for (const { traceId } of wanted) rows.push(await findTrace(person, traceId));
+	return rows;
+}
+
+/** All that a fit takes as it is now: with the newest assessments of the mounts. */
+export async function gatherFit(
+	person: SignedInPerson,
+	input: Omit<FitInput, 'name'>,
+	book: FitBook
+): Promise<GatheredFit> {
+	const rows = await findTraces(person, input.traces);
+	const assessments = await newestAssessments(rows.map(({ mountId }) => mountId));
 	return {
-		engineInput: { traces, coefficients, book, options: { loss, leaveOut } },
-		traces: wanted.map((each, at) => ({
+		engineInput: await gather(rows, assessments, input, book),
+		traces: input.traces.map((each, at) => ({
 			...each,
 			assessmentId: assessments.get(rows[at]!.mountId)!.id,
-			sha256: rows[at]!.sha256
+			sha256: rows[at]!.sha256,
+			version: rows[at]!.version
 		})),
 		isSynthetic: rows.some(({ isSynthetic }) => isSynthetic)
 	};
+}
+
+function requireUnchanged({ name, version }: Trace, asked: FitInputs['traces'][number]): void {
+	if (version === asked.version) return;
+	throw new AppError(
+		'conflict',
+		`“${name}” was changed after this fit was asked for, its legs or what its columns mean: begin another fit.`
+	);
+}
+
+/** All that a fit takes as it was when it was asked for; a trace that is another by now is refused. */
+export async function gatherAgain(
+	person: SignedInPerson,
+	inputs: FitInputs,
+	book: FitBook
+): Promise<CoefficientFitInput> {
+	const rows = await findTraces(person, inputs.traces);
+	for (const [at, row] of rows.entries()) requireUnchanged(row, inputs.traces[at]!);
+	const then = await Assessment.findAll({
+		where: { id: inputs.traces.map(({ assessmentId }) => assessmentId) },
+		attributes: ['id', 'mountId', 'inputs']
+	});
+	return gather(rows, new Map(then.map((each) => [each.mountId, each])), inputs, book);
 }

@@ -6,13 +6,16 @@ import { makeCrew, useTestDatabase, type Crew } from '../../../../tests/support/
 import { dayText, readAs, sendTrace } from '../../../../tests/support/traces';
 import { fitInputSchema, type FitView } from '$lib/schemas/fits';
 import type { SignedInPerson } from '$lib/schemas/people';
-import type { TraceView } from '$lib/schemas/traces';
+import { legsChangeSchema, type TraceView } from '$lib/schemas/traces';
 import { ENGINE_VERSION } from '$lib/thermal';
 import { AuditEntry, Fit } from '../db/models';
-import { changeCoefficient, draftBook } from './book-changes';
+import { assessMount } from './assessments';
+import { changeCoefficient, draftBook, moveBook } from './book-changes';
 import { getBook, listBooks } from './books';
 import { draftFittedBook } from './fit-books';
 import { cancelFit, createFit, followFit, getFit, listChoices, listFits, prepareFit } from './fits';
+import { saveLegs } from './trace-views';
+import { getTrace } from './traces';
 
 useTestDatabase();
 
@@ -46,6 +49,17 @@ async function fitAs(person: SignedInPerson, what: object): Promise<FitView> {
 	const { id } = await beginAs(person, what);
 	await followFit(person, id);
 	return getFit(person, id);
+}
+
+/** A book for batteries under the bonnet in which one value is another, in force beside the one for everything. */
+async function putNarrowInForce({ engineer, manager }: Crew, fromBookId: number) {
+	const scope = { engineLayout: 'any', positionKind: 'under-bonnet' } as const;
+	const draft = await draftBook(engineer, { fromBookId, name: 'Narrow', note: '', ...scope });
+	const share = { value: 0.5, origin: 'judgement', source: 'Made up for this test.' } as const;
+	const at = { group: 'bay', key: 'share' };
+	const { version } = await changeCoefficient(engineer, draft.id, at, { ...share, version: draft.version });
+	const trial = await moveBook(engineer, draft.id, { to: 'on-trial', version });
+	return moveBook(manager, draft.id, { to: 'in-force', version: trial.version });
 }
 
 describe('a fit', () => {
@@ -119,6 +133,26 @@ describe('a fit', () => {
 		});
 	});
 
+	it('is not made of a trace that was changed after it was asked for', async () => {
+		const { id } = await beginAs(crew.engineer, asked());
+		const { legs, version, name } = await getTrace(crew.engineer, traces[0]!.id);
+		const sent = legs.map(({ endS, kind, meanSpeedKmh }) => ({ endS, kind, speedKmh: meanSpeedKmh }));
+		await saveLegs(crew.engineer, traces[0]!.id, legsChangeSchema.parse({ legs: sent, version }));
+		await followFit(crew.engineer, id);
+		const { state, failure } = await getFit(crew.engineer, id);
+		expect(state).toBe('failed');
+		expect(failure).toContain(`“${name}” was changed after this fit was asked for`);
+	});
+
+	it('goes by the assessment that was the newest when it was asked for', async () => {
+		const { id } = await beginAs(crew.engineer, asked());
+		const { assessmentId } = (await Fit.findByPk(id))!.inputs.traces[0]!;
+		await assessMount(crew.installer, { mountId: traces[0]!.mountId });
+		await followFit(crew.engineer, id);
+		const kept = (await Fit.findByPk(id))!;
+		expect(kept).toMatchObject({ state: 'done', inputs: { traces: [{ assessmentId }] } });
+	}, 120_000);
+
 	it('is refused in words where it could not be begun', async () => {
 		const begin = (changes: object) => beginAs(crew.engineer, asked(changes));
 		const { hot } = await makeAssessableJob(crew.installer);
@@ -171,6 +205,28 @@ describe('a book with fitted values', () => {
 			const said = { value: 3, origin: 'judgement', source: 'Rounded.', version: book.version } as const;
 			const changed = await changeCoefficient(crew.engineer, book.id, CELL_PATH, said);
 			expect(changed.coefficients.find(({ key }) => key === CELL_PATH.key)).toMatchObject({ fitId: null });
+		},
+		LONG_MS
+	);
+
+	it(
+		'begins from the book that its mounts are assessed with, and takes the place of no other',
+		async () => {
+			const others = await makeCrew();
+			const { traces: days } = await makeFittable(others, [1]);
+			const general = (await listChoices(others.engineer)).book;
+			const narrow = await putNarrowInForce(others, general.id);
+			expect((await listChoices(others.engineer)).book.id).toBe(general.id);
+			const choices = await listChoices(others.engineer, [days[0]!.id]);
+			expect(choices.book.id).toBe(narrow.id);
+			const middle = choices.coefficients.find(({ group, key }) => `${group}.${key}` === 'bay.share')!;
+			expect(middle.prior.middle).toBe(0.5);
+
+			const fit = await fitAs(others.engineer, asked({ traces: [{ traceId: days[0]!.id }] }));
+			expect(fit.bookId).toBe(narrow.id);
+			const book = await draftFittedBook(others.engineer, fit.id, { name: 'Fitted', note: '' });
+			expect(book).toMatchObject({ engineLayout: narrow.engineLayout, positionKind: 'under-bonnet' });
+			expect(book.coefficients.find(({ key }) => key === 'share')!.value).toBe(0.5);
 		},
 		LONG_MS
 	);

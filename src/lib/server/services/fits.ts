@@ -4,17 +4,24 @@ import type { SignedInPerson } from '$lib/schemas/people';
 import type { TraceRow } from '$lib/schemas/traces';
 import { ENGINE_VERSION } from '$lib/thermal';
 import { fitCoefficients, type CoefficientFit, type CoefficientFitInput } from '$lib/thermal/fit';
-import { isGeneral } from '$lib/schemas/books';
-import { CoefficientBook, Fit, Mount, Person, Trace } from '../db/models';
+import { CoefficientBook, Fit, Person, Trace } from '../db/models';
 import { inTransaction, outsideTransaction } from '../db/transaction';
 import { AppError, notFound } from '../errors';
 import { allow } from '../policies';
 import type { NameOf } from '../presenters/books';
 import { presentFit, presentFitRow } from '../presenters/fits';
 import { record, recordBy } from './audit';
-import { coefficientsOf, listInForce, noBookInForce, withCoefficients } from './books';
-import { asFitError, gatherFit, type GatheredFit, newestAssessments, sayUnfit } from './fit-inputs';
+import { coefficientsOf, withCoefficients } from './books';
+import {
+	asFitError,
+	gatherAgain,
+	gatherFit,
+	type GatheredFit,
+	newestAssessments,
+	sayUnfit
+} from './fit-inputs';
 import { listFitChoices } from './fit-priors';
+import { bookForAll } from './fit-scope';
 import { afterOthers, workInSlices } from './slices';
 import { listTraces } from './traces';
 
@@ -49,13 +56,6 @@ export async function listFits(person: SignedInPerson): Promise<FitRow[]> {
 	return fits.map((fit) => presentFitRow(fit, nameOf));
 }
 
-/** The book that fits begin from: the one in force for everything. */
-async function generalBook({ workshopId }: SignedInPerson): Promise<CoefficientBook> {
-	const book = (await listInForce(workshopId)).find(isGeneral);
-	if (!book) throw noBookInForce();
-	return book;
-}
-
 export interface FitChoices {
 	book: Pick<BookRow, 'id' | 'number' | 'name'>;
 	coefficients: FitChoice[];
@@ -63,10 +63,13 @@ export interface FitChoices {
 	traces: (TraceRow & { unfit: string; legCount: number })[];
 }
 
-/** What can be fitted to what. */
-export async function listChoices(person: SignedInPerson): Promise<FitChoices> {
+/** What can be fitted to what, beginning from the book of the traces that are chosen. */
+export async function listChoices(
+	person: SignedInPerson,
+	chosenIds: readonly number[] = []
+): Promise<FitChoices> {
 	allow(person, 'traces.write');
-	const book = await withCoefficients(await generalBook(person));
+	const book = await withCoefficients(await bookForAll(person, chosenIds));
 	const shown = await listTraces(person);
 	const rows = await Trace.findAll({ where: { id: shown.map(({ id }) => id) } });
 	const assessments = await newestAssessments(rows.map(({ mountId }) => mountId));
@@ -110,7 +113,8 @@ export interface PreparedFit extends Omit<GatheredFit, 'engineInput'> {
 /** Looks whether a fit can be begun, in no transaction: the vehicle is run for it. */
 export async function prepareFit(person: SignedInPerson, input: FitInput): Promise<PreparedFit> {
 	allow(person, 'traces.write');
-	const row = await generalBook(person);
+	const traceIds = input.traces.map(({ traceId }) => traceId);
+	const row = await bookForAll(person, traceIds);
 	const book = await withCoefficients(row);
 	requireInBook(input, listFitChoices(book));
 	const { engineInput, ...gathered } = await gatherFit(person, input, coefficientsOf(book));
@@ -192,7 +196,7 @@ async function personOf({ madeBy, workshopId }: Fit): Promise<SignedInPerson> {
 async function work(fit: Fit, tell: (share: number) => void, signal: AbortSignal): Promise<void> {
 	try {
 		const book = await withCoefficients((await CoefficientBook.findByPk(fit.bookId))!);
-		const { engineInput } = await gatherFit(await personOf(fit), fit.inputs, coefficientsOf(book));
+		const engineInput = await gatherAgain(await personOf(fit), fit.inputs, coefficientsOf(book));
 		const fitted = await workInSlices(untilStopped(fitCoefficients(engineInput), signal), tell);
 		if (fitted.status === 'done') return await settle(fit, { state: 'done', result: fitted });
 		await settle(fit, { state: 'failed', failure: fitted.reason });
@@ -269,13 +273,4 @@ export async function cancelFit(person: SignedInPerson, fitId: number): Promise<
 	});
 	running.get(fitId)?.stop.abort();
 	return showFit(fit);
-}
-
-/** The scope of the mounts of a fit, where all have the same kind of position. */
-export async function positionOf({ inputs }: Fit): Promise<Mount['positionKind'] | 'any'> {
-	const ids = inputs.traces.map(({ traceId }) => traceId);
-	const traces = await Trace.findAll({ where: { id: ids }, attributes: ['mountId'] });
-	const mounts = await Mount.findAll({ where: { id: traces.map(({ mountId }) => mountId) } });
-	const kinds = [...new Set(mounts.map(({ positionKind }) => positionKind))];
-	return kinds.length === 1 ? kinds[0]! : 'any';
 }

@@ -2,7 +2,14 @@ import { describe, expect, it } from 'vitest';
 import type { Accuracy } from '$lib/schemas/accuracy';
 import { listChoices, readingsHref, toList } from './accuracy-query';
 
-const EMPTY: Accuracy = { fewest: 5, temperatures: [], cutOuts: null, capacity: null, leftOut: [] };
+const EMPTY: Accuracy = {
+	fewest: 5,
+	temperatures: [],
+	cutOuts: null,
+	capacity: null,
+	leftOut: [],
+	unheldTraces: 0
+};
 const group = (key: string, name: string) => ({ key, name, figures: {} as never });
 
 describe('the address of the list', () => {

@@ -55,6 +55,15 @@ const WAITING = `
 	WHERE n.workshop_id = :workshopId AND n.kind = 'capacity-test' AND c.id IS NULL
 `;
 
+/** Measured traces that nothing could be held against: no assessment, no hour of beginning, nothing of the battery, or a day that cannot be run. */
+const UNHELD_TRACES = `
+	SELECT COUNT(*) AS traces FROM traces t
+		JOIN mounts m ON m.id = t.mount_id AND m.removed_at IS NULL
+		LEFT JOIN prediction_checks c ON c.trace_id = t.id
+	WHERE t.workshop_id = :workshopId AND t.state = 'read' AND NOT t.is_synthetic
+		AND t.removed_at IS NULL AND c.id IS NULL
+`;
+
 type Stored = Record<string, string | number>;
 
 const select = (sql: string, replacements: Record<string, unknown>): Promise<Stored[]> =>
@@ -83,12 +92,13 @@ function readSums(row: Stored): CheckSums {
 export async function readAccuracy(person: SignedInPerson): Promise<Accuracy> {
 	const { workshopId } = allow(person, 'books.read');
 	const where = { workshopId };
-	const [sums, steps, chances, leftOut, waiting, books] = await Promise.all([
+	const [sums, steps, chances, leftOut, waiting, unheld, books] = await Promise.all([
 		select(SUMS, where),
 		select(STEPS, { ...where, stepK: STEP_K, lowest: -STEPS_EACH_SIDE, highest: STEPS_EACH_SIDE - 1 }),
 		select(CHANCES, { ...where, inner: CHANCE_EDGES.slice(1, -1) }),
 		select(LEFT_OUT, where),
 		select(WAITING, where),
+		select(UNHELD_TRACES, where),
 		CoefficientBook.findAll({ where, attributes: ['number', 'name'] })
 	]);
 	return presentAccuracy({
@@ -105,6 +115,7 @@ export async function readAccuracy(person: SignedInPerson): Promise<Accuracy> {
 			...numbersOf(row, ['readings', 'inside'])
 		})),
 		waiting: Number(waiting[0]?.waiting ?? 0),
+		unheldTraces: Number(unheld[0]?.traces ?? 0),
 		books: new Map(books.map(({ number, name }) => [number, name]))
 	});
 }

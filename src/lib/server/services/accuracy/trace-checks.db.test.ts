@@ -62,6 +62,19 @@ async function assessCooler() {
 	return assessMount(crew.installer, { mountId });
 }
 
+/** A book with what one trace tells, in the place of the book that holds. */
+async function putFitInForce({ id: traceId }: TraceView) {
+	const { engineer, manager } = crew;
+	const coefficients = [{ group: 'battery', key: 'caseCellConductance', prior: PRIOR }];
+	const asked = { name: 'One day', traces: [{ traceId }], coefficients, leaveOut: false };
+	const input = fitInputSchema.parse(asked);
+	const { id: fitId } = await createFit(engineer, input, await prepareFit(engineer, input));
+	await followFit(engineer, fitId);
+	const { id, version } = await draftFittedBook(engineer, fitId, { name: 'One day', note: '' });
+	const onTrial = await moveBook(engineer, id, { to: 'on-trial', version });
+	return moveBook(manager, id, { to: 'in-force', version: onTrial.version });
+}
+
 describe('a measured trace', () => {
 	it('is held against the assessment that was there before it, the mean over its minutes', async () => {
 		const assessment = await assessMount(crew.installer, { mountId });
@@ -107,8 +120,10 @@ describe('a measured trace', () => {
 	it('waits for the first assessment of its mount, and for the hour at which it began', async () => {
 		const trace = await sendDay();
 		expect(await checksOf(trace.id)).toEqual([]);
+		expect((await readAccuracy(crew.engineer)).unheldTraces).toBe(1);
 		const assessment = await assessMount(crew.installer, { mountId });
 		expect(await checksOf(trace.id)).toMatchObject([{ assessment_id: assessment.id }]);
+		expect((await readAccuracy(crew.engineer)).unheldTraces).toBe(0);
 
 		const elapsed = dayText().replaceAll(/^2026-02-03 (\d\d):(\d\d):00/gm, (_, h: string, m: string) =>
 			String((Number(h) * 60 + Number(m)) * 60)
@@ -168,30 +183,30 @@ describe('a measured trace', () => {
 		const trace = await sendDay(dayText(), { isSynthetic: true });
 		await completeChecks();
 		expect(await checksOf(trace.id)).toEqual([]);
+		expect((await readAccuracy(crew.engineer)).unheldTraces).toBe(0);
 	});
 
 	it(
-		'does not count when it is sent in once more, after a book was fitted to it',
+		'does not count when it is sent in once more, after a book was fitted to it, nor after one that began from this',
 		async () => {
-			const { engineer, manager } = crew;
-			const { mountId: fittedMountId, traces, texts } = await makeFittable(crew);
-			await confirmLegs(traces[0]!);
-			const coefficients = [{ group: 'battery', key: 'caseCellConductance', prior: PRIOR }];
-			const asked = { name: 'One day', traces: [{ traceId: traces[0]!.id }], coefficients, leaveOut: false };
-			const input = fitInputSchema.parse(asked);
-			const { id: fitId } = await createFit(engineer, input, await prepareFit(engineer, input));
-			await followFit(engineer, fitId);
-			const { id, version } = await draftFittedBook(engineer, fitId, { name: 'One day', note: '' });
-			const onTrial = await moveBook(engineer, id, { to: 'on-trial', version });
-			await moveBook(manager, id, { to: 'in-force', version: onTrial.version });
+			const { engineer } = crew;
+			const { mountId: fittedMountId, traces, texts } = await makeFittable(crew, [1, 2]);
+			for (const trace of traces) await confirmLegs(trace);
+			const first = await putFitInForce(traces[0]!);
 			await assessMount(crew.installer, { mountId: fittedMountId });
-
-			const again = await readAs(engineer, await sendTrace(engineer, fittedMountId, texts[0]!));
+			const sendAgain = async () => readAs(engineer, await sendTrace(engineer, fittedMountId, texts[0]!));
+			const again = await sendAgain();
 			expect(await checksOf(traces[0]!.id)).toMatchObject([{ left_out: '' }]);
-			expect(await checksOf(again.id)).toMatchObject([{ book_id: id, left_out: 'fitted-to' }]);
+			expect(await checksOf(again.id)).toMatchObject([{ book_id: first.id, left_out: 'fitted-to' }]);
 			const { temperatures, leftOut } = await readAccuracy(engineer);
-			expect(temperatures.map(({ kind, all }) => [kind, all.readings])).toEqual([['trace', 1]]);
+			expect(temperatures.map(({ kind, all }) => [kind, all.readings])).toEqual([['trace', 2]]);
 			expect(leftOut).toMatchObject([{ kind: 'trace', why: 'fitted-to', readings: 1 }]);
+
+			const second = await putFitInForce(traces[1]!);
+			expect(second.coefficients.flatMap(({ fitId }) => fitId ?? [])).toHaveLength(1);
+			await assessMount(crew.installer, { mountId: fittedMountId });
+			const later = await sendAgain();
+			expect(await checksOf(later.id)).toMatchObject([{ book_id: second.id, left_out: 'fitted-to' }]);
 		},
 		LONG_MS
 	);

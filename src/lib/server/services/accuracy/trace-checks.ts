@@ -52,11 +52,26 @@ async function predictionOf(trace: Trace): Promise<Prediction | null> {
 	return { assessment, readOn, isEnteredLater: today(found.createdAt) > readOn };
 }
 
-/** Whether a book has values that were fitted to this very file, sent in before: then nothing was predicted of it. */
+/** The fits that the values of a book came from, and those behind the books that these began from. */
+async function fitsBehind(bookId: number): Promise<Fit[]> {
+	const bookIds = new Set([bookId]);
+	const fits = new Map<number, Fit>();
+	// A set is walked to its end, also over what is added on the way.
+	for (const each of bookIds) {
+		const fitted = await Coefficient.findAll({ where: { bookId: each }, attributes: ['fitId'] });
+		const ids = new Set(fitted.flatMap(({ fitId }) => fitId ?? []));
+		const found = await Fit.findAll({ where: { id: [...ids] }, attributes: ['id', 'bookId', 'inputs'] });
+		for (const fit of found) {
+			fits.set(fit.id, fit);
+			bookIds.add(fit.bookId);
+		}
+	}
+	return [...fits.values()];
+}
+
+/** Whether a book has values that were learnt from this very file, sent in before: then nothing was predicted of it. */
 async function isFittedTo({ bookId }: Assessment, { sha256 }: Trace): Promise<boolean> {
-	const fitted = await Coefficient.findAll({ where: { bookId }, attributes: ['fitId'] });
-	const ids = new Set(fitted.flatMap(({ fitId }) => fitId ?? []));
-	const fits = await Fit.findAll({ where: { id: [...ids] }, attributes: ['inputs'] });
+	const fits = await fitsBehind(bookId);
 	return fits.some(({ inputs }) => inputs.traces.some((each) => each.sha256 === sha256));
 }
 

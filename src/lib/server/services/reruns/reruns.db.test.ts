@@ -7,7 +7,16 @@ import {
 	makeAssessableJob
 } from '../../../../../tests/support/assessable-job';
 import { makeCrew, useTestDatabase, type Crew } from '../../../../../tests/support/services';
-import { Assessment, AuditEntry, Customer, Job, OutgoingMail, Rerun, RerunItem } from '../../db/models';
+import {
+	Assessment,
+	AuditEntry,
+	CoefficientBook,
+	Customer,
+	Job,
+	OutgoingMail,
+	Rerun,
+	RerunItem
+} from '../../db/models';
 import { assessJob, assessMount, reproduceAssessment } from '../assessments';
 import { checkTrails } from '../audit-check';
 import { changeCoefficient, draftBook, moveBook } from '../book-changes';
@@ -153,6 +162,19 @@ describe('a re-run', () => {
 		expect(await listLeft(crew.engineer, rerun!.id)).toMatchObject([
 			{ mountLetter: 'A', state: 'failed', reason: expect.stringMatching(/leg/i) }
 		]);
+	}, 120_000);
+
+	it('does not hold up those of other workshops when it cannot go on', async () => {
+		const [stuck, other] = [await makeCrew(), await makeCrew()];
+		for (const crew of [stuck, other]) await makeAssessed(crew);
+		await stopReruns();
+		for (const crew of [stuck, other]) await putInForce(crew, 0.4);
+		// Without a book in force there is nothing to assess with.
+		await CoefficientBook.update({ state: 'withdrawn' }, { where: { workshopId: stuck.workshopId } });
+		await finishReruns();
+		expect(await listReruns(stuck.engineer)).toMatchObject([{ state: 'running', done: 0 }]);
+		expect(await listReruns(other.engineer)).toMatchObject([{ state: 'done', done: 2 }]);
+		await Rerun.update({ state: 'cancelled' }, { where: { workshopId: stuck.workshopId } });
 	}, 120_000);
 
 	it('stops when it is called off, keeps what it made, and goes on where it was', async () => {

@@ -54,7 +54,8 @@ async function runItems(items: RerunItem[], shelf: Shelf, threads: Threads): Pro
 		const { inputs, inputsSha256 } = assessments.find((each) => each.id === assessmentId)!;
 		const { positionKind } = mounts.find((each) => each.id === mountId)!;
 		const { engineLayout } = jobs.find((each) => each.id === jobId)!.vehicle!;
-		const book = closestBook(inForce, { engineLayout, positionKind })!;
+		const book = closestBook(inForce, { engineLayout, positionKind });
+		if (!book) throw noBookInForce();
 		const answer = await threads.run({ id, inputs, book: await shelf.valuesOf(book) });
 		return { itemId: id, fromSha256: inputsSha256, bookId: book.id, answer };
 	};
@@ -96,24 +97,37 @@ async function runOne(rerunId: number, threads: Threads): Promise<void> {
 	}
 }
 
-async function runAll(): Promise<void> {
-	const threads = openRerunThreads();
-	try {
-		for (;;) {
-			const next = await Rerun.findOne({ where: { state: 'running' }, order: [['id', 'ASC']] });
-			if (!next || isStopping) return;
-			await runOne(next.id, threads);
-		}
-	} finally {
-		await threads.close();
-	}
-}
-
 const AGAIN_AFTER_MS = 30_000;
 let isStopping = false;
 let current: Promise<void> | null = null;
 let isAskedFor = false;
 let timer: NodeJS.Timeout | undefined;
+
+function tryAgainSoon(): void {
+	timer = setTimeout(continueReruns, AGAIN_AFTER_MS);
+	timer.unref();
+}
+
+/** One that cannot go on stands back for the others, and is tried again later. */
+async function runAll(): Promise<void> {
+	const threads = openRerunThreads();
+	const stuck = new Set<number>();
+	try {
+		for (;;) {
+			const begun = await Rerun.findAll({ where: { state: 'running' }, order: [['id', 'ASC']] });
+			const next = begun.find(({ id }) => !stuck.has(id));
+			if (!next || isStopping) break;
+			await runOne(next.id, threads).catch((error: unknown) => {
+				if (isStopping) return;
+				logger.error({ err: error, rerunId: next.id }, 're-run could not go on, tried again soon');
+				stuck.add(next.id);
+			});
+		}
+	} finally {
+		await threads.close();
+	}
+	if (stuck.size > 0 && !isStopping) tryAgainSoon();
+}
 
 /** Sees to it that every re-run that is not at its end is worked on, by this process alone one after the other. */
 export function continueReruns(): void {
@@ -129,9 +143,8 @@ async function work(): Promise<void> {
 		isAskedFor = false;
 		await runAll().catch((error: unknown) => {
 			if (isStopping) return;
-			logger.error({ err: error }, 're-run failed, tried again soon');
-			timer = setTimeout(continueReruns, AGAIN_AFTER_MS);
-			timer.unref();
+			logger.error({ err: error }, 're-runs failed, tried again soon');
+			tryAgainSoon();
 		});
 	}
 }

@@ -8,6 +8,10 @@ import { createFit, listChoices, prepareFit, type FitChoices } from '$lib/server
 import { readFitForm, type FitDraft } from './fit-form';
 import type { Actions, PageServerLoad } from './$types';
 
+/** The traces that an address names. */
+const traceIdsOf = ({ searchParams }: URL): number[] =>
+	searchParams.getAll('trace').map(Number).filter(Number.isSafeInteger);
+
 /** What the address has chosen of what there is. */
 function chosenBy({ searchParams }: URL, { traces, coefficients }: FitChoices) {
 	const [traceIds, paths] = [searchParams.getAll('trace'), searchParams.getAll('coefficient')];
@@ -19,7 +23,7 @@ function chosenBy({ searchParams }: URL, { traces, coefficients }: FitChoices) {
 
 export const load: PageServerLoad = async (event) => {
 	const person = guard(event, 'traces.write');
-	const choices = await orPageError(listChoices(person));
+	const choices = await orPageError(listChoices(person, traceIdsOf(event.url)));
 	const { searchParams } = event.url;
 	return { choices, chosen: chosenBy(event.url, choices), isAsked: searchParams.has('choose') };
 };
@@ -33,7 +37,8 @@ export const actions: Actions = {
 		const person = guard(event, 'traces.write');
 		const sent = await readPageForm(event.request);
 		const draft: FitDraft = Object.fromEntries([...sent].map(([name, value]) => [name, String(value)]));
-		const { traces, coefficients } = chosenBy(event.url, await orPageError(listChoices(person)));
+		const choices = await orPageError(listChoices(person, traceIdsOf(event.url)));
+		const { traces, coefficients } = chosenBy(event.url, choices);
 		const ids = traces.map(({ id }) => id);
 		const made = await Promise.resolve()
 			.then(async () => {
