@@ -67,11 +67,17 @@ test('an engineer fits a coefficient to a synthetic trace, reads what came of it
 	await choose(page, /^trace-2\.csv \(synthetic\)/);
 	await expect(page.getByText('A trace among them was made up')).toBeVisible();
 	await expectNoViolations(page);
+	await page.getByRole('link', { name: 'Choose anew' }).click();
+	await expect(page.getByRole('checkbox', { name: 'Case to cells', exact: true })).toBeChecked();
+	await page.getByRole('button', { name: 'Next: what is held of them' }).click();
 	await page.getByLabel('Spread', { exact: true }).fill('-1');
+	await expect(page.getByRole('listitem').filter({ hasText: /^3: 11:00, driving at / })).toBeVisible();
 	await page.getByLabel('Legs of trace-2.csv that are kept back').fill('2');
 	await page.getByRole('button', { name: 'Begin the fit' }).click();
-	await expect(page.getByText('Spread must be above 0.').first()).toBeVisible();
+	await page.getByRole('link', { name: 'Case to cells: Spread must be above 0.' }).click();
+	await expect(page.getByLabel('Spread', { exact: true })).toBeFocused();
 	await expect(page.getByLabel('Legs of trace-2.csv that are kept back')).toHaveValue('2');
+	await expectNoViolations(page);
 	await page.getByLabel('Spread', { exact: true }).fill('0,35');
 	await page.getByRole('button', { name: 'Begin the fit' }).click();
 
@@ -84,9 +90,12 @@ test('an engineer fits a coefficient to a synthetic trace, reads what came of it
 	await expect(page.getByRole('button', { name: 'Begin a draft book' })).toHaveCount(0);
 	await expect(page).toHaveTitle(/synthetic/);
 	await expectNoViolations(page);
-	const refused = await page.request.post(`/api/v1/fits/${/\d+$/.exec(page.url())![0]}/book`, {
-		data: { name: 'Made up' }
-	});
+	const refused = await page.request.post(
+		`/api/v1/fits/${/\d+$/.exec(new URL(page.url()).pathname)![0]}/book`,
+		{
+			data: { name: 'Made up' }
+		}
+	);
 	expect(refused.status()).toBe(409);
 	await page.goto('/fits');
 	await expect(page.getByRole('link', { name: /\(synthetic\)$/ }).first()).toBeVisible();
@@ -109,6 +118,9 @@ test('a fit to what a test measured becomes a draft book that leads back to it',
 	const row = page.getByRole('row', { name: /case to cells/i });
 	await expect(row).toContainText('Fitted from traces');
 	await expect(row).toContainText(/nine chances in ten between/);
+	await row.getByRole('link', { name: /case to cells/i }).click();
+	await expect(page.getByLabel('Source')).toHaveValue('');
+	await page.goBack();
 	await row.getByRole('link', { name: /Look at fit/ }).click();
 	await expect(page).toHaveURL(new RegExp(`${fit}$`));
 });

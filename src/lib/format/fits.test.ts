@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { formatFitted, readLegNumbers, sayLearnt } from './fits';
+import { formatFitted, nameFit, readLegNumbers, sayLearnt, sayLegOf } from './fits';
 
 const plain = (text: string): string => text.replace(/\u202f/g, ' ');
 
@@ -24,5 +24,21 @@ describe('legs that are kept back', () => {
 		expect(readLegNumbers('2, 4;5  2')).toEqual([2, 4, 5]);
 		expect(readLegNumbers(' ')).toEqual([]);
 		expect(readLegNumbers('2, last')).toBeNull();
+	});
+
+	it('are told from the others by when they were and what was done', () => {
+		const leg = { startS: 3600, endS: 12_600, kind: 'driving', meanSpeedKmh: 80, why: '' } as const;
+		expect(plain(sayLegOf(leg, 1, 8))).toBe('2: 09:00, driving at 80 km/h for 2 h 30 min');
+		const stopped = { ...leg, kind: 'stopped', meanSpeedKmh: null } as const;
+		expect(plain(sayLegOf(stopped, 0, null))).toBe('1: stopped for 2 h 30 min');
+	});
+});
+
+describe('the name of a fit', () => {
+	it('has as many of its coefficients as there is room for, none of them cut', () => {
+		expect(nameFit(['Case to cells', 'Leak'])).toBe('Case to cells, Leak');
+		const long = 'A coefficient with a name that takes about half of the room';
+		expect(nameFit([long, long, long])).toBe(`${long} and 2 more`);
+		expect(nameFit([long + long, long])).toBe('2 coefficients');
 	});
 });

@@ -1,5 +1,7 @@
 import type { FitState } from '../schemas/fits';
-import { formatNumber, THIN_SPACE } from './numbers';
+import type { TraceLeg } from '../thermal/traces';
+import { formatNumber, formatWithUnit, THIN_SPACE } from './numbers';
+import { formatClockHour, formatHours } from './time';
 
 export const FIT_STATE_WORDS: Readonly<Record<FitState, string>> = {
 	running: 'being worked out',
@@ -48,4 +50,28 @@ export function readLegNumbers(text: string): number[] | null {
 	const parts = text.split(/[\s,;]+/).filter(Boolean);
 	const numbers = parts.map(Number);
 	return numbers.every((each) => Number.isInteger(each) && each > 0) ? [...new Set(numbers)] : null;
+}
+
+const HOUR_S = 3600;
+const MOST_NAME = 80;
+
+/** A leg of a trace in a few words: "2: 09:00, driving at 80 km/h for 2 h 30 min". */
+export function sayLegOf(
+	{ startS, endS, kind, meanSpeedKmh }: TraceLeg,
+	at: number,
+	startHour: number | null
+): string {
+	const from = startHour === null ? '' : `${formatClockHour(startHour + startS / HOUR_S)}, `;
+	const speed = meanSpeedKmh ? ` at ${formatWithUnit(meanSpeedKmh, 'km/h', 0)}` : '';
+	return `${at + 1}: ${from}${kind}${speed} for ${formatHours((endS - startS) / HOUR_S)}`;
+}
+
+/** What a fit is called unless somebody says otherwise: as many of its coefficients as there is room for. */
+export function nameFit(meanings: readonly string[]): string {
+	for (let count = meanings.length; count > 0; count--) {
+		const more = meanings.length - count;
+		const name = meanings.slice(0, count).join(', ') + (more > 0 ? ` and ${more} more` : '');
+		if (name.length <= MOST_NAME) return name;
+	}
+	return `${meanings.length} coefficients`;
 }

@@ -31,7 +31,9 @@ const fitCoefficientSchema = z.object({
 const fitTraceSchema = z.object({
 	traceId: idSchema,
 	heldOutLegs: z
-		.array(z.number().int().min(1))
+		.array(z.number().int().min(1), {
+			error: 'Legs that are kept back are whole numbers with commas between, such as 2, 4.'
+		})
 		.max(200)
 		.default([])
 		.meta({ description: 'Counted from 1: kept back to test the fit with' })

@@ -4,7 +4,7 @@ import type { BookScope, BookView, MountCase } from '$lib/schemas/books';
 import { makeCrew, useTestDatabase, type Crew } from '../../../../tests/support/services';
 import { Coefficient, CoefficientBook } from '../db/models';
 import { assessJob } from './assessments';
-import { changeCoefficient, compareBooks, draftBook, moveBook } from './book-changes';
+import { changeCoefficient, compareBooks, draftBook, isByOwnHand, moveBook } from './book-changes';
 import { bookInForce, getBook, listBooks } from './books';
 import { getJob } from './jobs';
 
@@ -91,9 +91,11 @@ describe('a book on its way', () => {
 	it('is not put in force by who changed a value in it either, though another began it', async () => {
 		const { crew, draft } = await makeDraft();
 		const said = { ...SAID, version: draft.version };
+		expect(await isByOwnHand(crew.manager, draft.id)).toBe(false);
 		const changed = await changeCoefficient(crew.manager, draft.id, SHARE, said);
 		const trial = await moveBook(crew.engineer, draft.id, { to: 'on-trial', version: changed.version });
 		for (const person of [crew.engineer, crew.manager]) {
+			expect(await isByOwnHand(person, draft.id)).toBe(true);
 			const own = moveBook(person, draft.id, { to: 'in-force', version: trial.version });
 			await expect(own).rejects.toMatchObject({ code: 'conflict' });
 		}

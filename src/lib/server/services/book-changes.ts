@@ -132,19 +132,31 @@ function requireWay(book: CoefficientBook, to: BookMove['to']): void {
 	throw new AppError('conflict', `Book ${number} ${NO_WAY[state]}.`);
 }
 
+/** What somebody did to a book by which its values are theirs too; empty where nothing. */
+async function findHandIn(
+	{ id: subjectId, madeBy }: Pick<CoefficientBook, 'id' | 'madeBy'>,
+	{ id: personId }: SignedInPerson,
+	transaction?: Transaction
+): Promise<string> {
+	if (madeBy === personId) return 'made this book';
+	const changes = { action: 'book.changed', subjectType: 'book', subjectId, personId };
+	const count = await AuditEntry.count({ where: changes, ...(transaction ? { transaction } : {}) });
+	return count > 0 ? 'changed values in this book' : '';
+}
+
+/** Whether a book waits for another than this person to be put in force. */
+export async function isByOwnHand(person: SignedInPerson, bookId: number): Promise<boolean> {
+	allow(person, 'books.read');
+	return (await findHandIn(await findBook(person, bookId), person)) !== '';
+}
+
 /** Whose values they are does not put them in force: neither who began the book nor who changed something in it. */
 async function requireSecondPerson(
 	book: CoefficientBook,
-	{ id: personId }: SignedInPerson,
+	person: SignedInPerson,
 	transaction: Transaction
 ): Promise<void> {
-	const changes = { action: 'book.changed', subjectType: 'book', subjectId: book.id, personId };
-	const did =
-		book.madeBy === personId
-			? 'made this book'
-			: (await AuditEntry.count({ where: changes, transaction })) > 0
-				? 'changed values in this book'
-				: '';
+	const did = await findHandIn(book, person, transaction);
 	if (!did) return;
 	throw new AppError(
 		'conflict',

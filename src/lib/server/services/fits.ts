@@ -4,6 +4,7 @@ import type { SignedInPerson } from '$lib/schemas/people';
 import type { TraceRow } from '$lib/schemas/traces';
 import { ENGINE_VERSION } from '$lib/thermal';
 import { fitCoefficients, type CoefficientFit, type CoefficientFitInput } from '$lib/thermal/fit';
+import type { TraceLeg } from '$lib/thermal/traces';
 import { CoefficientBook, Fit, Person, Trace } from '../db/models';
 import { inTransaction, outsideTransaction } from '../db/transaction';
 import { AppError, notFound } from '../errors';
@@ -60,7 +61,7 @@ export interface FitChoices {
 	book: Pick<BookRow, 'id' | 'number' | 'name'>;
 	coefficients: FitChoice[];
 	/** Why a trace cannot be fitted to; empty where it can. */
-	traces: (TraceRow & { unfit: string; legCount: number })[];
+	traces: (TraceRow & { unfit: string; legs: TraceLeg[] })[];
 }
 
 /** What can be fitted to what, beginning from the book of the traces that are chosen. */
@@ -80,7 +81,7 @@ export async function listChoices(
 		traces: shown.map((trace) => {
 			const row = rowOf.get(trace.id)!;
 			const unfit = sayUnfit(row, assessments.get(row.mountId) ?? null);
-			return { ...trace, unfit, legCount: row.legs?.length ?? 0 };
+			return { ...trace, unfit, legs: row.legs ?? [] };
 		})
 	};
 }

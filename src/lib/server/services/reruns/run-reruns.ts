@@ -3,7 +3,7 @@ import { closestBook } from '$lib/schemas/books';
 import { Assessment, Job, Mount, Rerun, RerunItem, type CoefficientBook } from '../../db/models';
 import { outsideTransaction } from '../../db/transaction';
 import { logger } from '../../logger';
-import { coefficientsOf, listInForce, withCoefficients } from '../books';
+import { coefficientsOf, listInForce, noBookInForce, withCoefficients } from '../books';
 import type { RerunAnswer, RerunTask } from './rerun-inputs';
 import { openRerunThreads } from './rerun-threads';
 import { storeOutcomes, type Ran } from './store-outcomes';

@@ -5,7 +5,7 @@ import { guard, orPageError } from '$lib/server/http/guard';
 import { pageId } from '$lib/server/http/page-id';
 import { validate } from '$lib/server/http/validate';
 import { mayDo } from '$lib/server/policies';
-import { moveBook } from '$lib/server/services/book-changes';
+import { isByOwnHand, moveBook } from '$lib/server/services/book-changes';
 import { getBook, listBooks } from '$lib/server/services/books';
 import { listReruns } from '$lib/server/services/reruns/reruns';
 import type { Actions, PageServerLoad } from './$types';
@@ -13,17 +13,18 @@ import type { Actions, PageServerLoad } from './$types';
 export const load: PageServerLoad = async (event) => {
 	const person = guard(event, 'books.read');
 	const bookId = pageId(event.params.bookId);
-	const [book, books, reruns] = await Promise.all([
+	const [book, books, reruns, isOwn] = await Promise.all([
 		orPageError(getBook(person, bookId)),
 		orPageError(listBooks(person)),
-		orPageError(listReruns(person, bookId))
+		orPageError(listReruns(person, bookId)),
+		orPageError(isByOwnHand(person, bookId))
 	]);
 	return {
 		book,
 		reruns,
 		others: books.filter(({ id }) => id !== book.id),
 		mayWrite: mayDo(person, 'books.write'),
-		isOwn: book.madeById === person.id,
+		isOwn,
 		isSaved: event.url.searchParams.has('saved')
 	};
 };

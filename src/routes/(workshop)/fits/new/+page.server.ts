@@ -5,7 +5,7 @@ import { readPageForm } from '$lib/server/http/forms';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { validate } from '$lib/server/http/validate';
 import { createFit, listChoices, prepareFit, type FitChoices } from '$lib/server/services/fits';
-import { readFitForm, type FitDraft } from './fit-form';
+import { listFitProblems, readFitForm, type FitDraft } from './fit-form';
 import type { Actions, PageServerLoad } from './$types';
 
 /** The traces that an address names. */
@@ -28,10 +28,6 @@ export const load: PageServerLoad = async (event) => {
 	return { choices, chosen: chosenBy(event.url, choices), isAsked: searchParams.has('choose') };
 };
 
-/** Each problem once, in words: where it stands is said by the sentence. */
-const sentencesOf = ({ problems, message }: AppError): string[] =>
-	problems.length > 0 ? [...new Set(problems.map((each) => each.message))] : [message];
-
 export const actions: Actions = {
 	default: async (event) => {
 		const person = guard(event, 'traces.write');
@@ -49,7 +45,8 @@ export const actions: Actions = {
 				if (error instanceof AppError) return error;
 				throw error;
 			});
-		if (made instanceof AppError) return fail(made.status, { draft, problems: sentencesOf(made) });
+		if (made instanceof AppError)
+			return fail(made.status, { draft, problems: listFitProblems(made, ids, coefficients) });
 		redirect(303, `/fits/${made.id}`);
 	}
 };

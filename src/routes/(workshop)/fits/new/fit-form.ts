@@ -1,6 +1,7 @@
 import { readLegNumbers } from '$lib/format/fits';
 import { parseDecimal } from '$lib/format/parse';
 import type { FitChoice } from '$lib/schemas/fits';
+import type { FieldProblem } from '$lib/components/forms/field';
 
 /** What stands in the boxes, by their names. */
 export type FitDraft = Record<string, string>;
@@ -34,4 +35,41 @@ export function readFitForm(
 			return { group: choice.group, key: choice.key, prior };
 		})
 	};
+}
+
+/** What was refused, as far as this page must know of it. */
+interface Refusal {
+	message: string;
+	problems: readonly { path: string; message: string; limit?: string }[];
+}
+
+const PRIOR_LABELS: Readonly<Record<string, string>> = { middle: 'Middle', spread: 'Spread', law: 'Off' };
+
+/** Where in what was asked a problem lies: "coefficients[1].prior.middle", "traces[0].heldOutLegs". */
+function placeOf(path: string): { list: string; at: number; part: string } | null {
+	const [, list, at, part = ''] = /^(coefficients|traces)\[(\d+)\]\.?(?:prior\.)?(\w*)/.exec(path) ?? [];
+	return list ? { list, at: Number(at), part } : null;
+}
+
+/** Every problem once, at the box that it is about and in words that say which one that is. */
+export function listFitProblems(
+	{ message, problems }: Refusal,
+	traceIds: readonly number[],
+	choices: readonly FitChoice[]
+): FieldProblem[] {
+	if (problems.length === 0) return [{ path: '', message }];
+	const told = problems.map((problem): FieldProblem => {
+		const place = placeOf(problem.path);
+		if (!place) return { path: problem.path === 'name' ? 'name' : '', message: problem.message };
+		if (place.list === 'traces') return { path: `held.${traceIds[place.at]}`, message: problem.message };
+		const choice = choices[place.at];
+		const label = PRIOR_LABELS[place.part];
+		if (!choice || !label) return { path: '', message: problem.message };
+		const said = problem.limit ? `${label} must be ${problem.limit}.` : problem.message;
+		return { path: `${pathOf(choice)}.${place.part}`, message: `${choice.meaning}: ${said}` };
+	});
+	return told.filter(
+		({ path, message: said }, at) =>
+			told.findIndex((each) => each.path === path && each.message === said) === at
+	);
 }

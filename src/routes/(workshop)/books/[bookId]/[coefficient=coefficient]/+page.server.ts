@@ -20,16 +20,11 @@ async function find(person: SignedInPerson, params: { bookId: string; coefficien
 	return { book, coefficient };
 }
 
-/** As the form takes it: what was fitted becomes somebody's word when they change it by hand. */
 async function toForm(person: SignedInPerson, params: { bookId: string; coefficient: string }) {
 	const { book, coefficient } = await find(person, params);
 	const { value, source, origin } = coefficient;
-	return {
-		value,
-		source,
-		origin: origin === 'fitted' ? ('judgement' as const) : origin,
-		version: book.version
-	};
+	const said = origin === 'fitted' ? { source: '', origin: 'judgement' as const } : { source, origin };
+	return { value, ...said, version: book.version };
 }
 
 export const load: PageServerLoad = async (event) => {
