@@ -19,6 +19,7 @@ describe('the boxes about a file’s columns', () => {
 	it.each<[string, TraceMappingInput['time']]>([
 		['a date and a time of day', MAPPING.time],
 		['a time of day alone', { kind: 'time-of-day', column: 2, firstDay: '2026-02-03', timeZone: 'UTC' }],
+		['milliseconds since 1970', { kind: 'epoch-ms', column: 1, timeZone: 'Australia/Darwin' }],
 		['seconds from the start', { kind: 'elapsed-s', column: 1 }]
 	])('say with %s what the mapping says', (_what, time) => {
 		const mapping = { ...MAPPING, time };

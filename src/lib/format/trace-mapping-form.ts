@@ -1,5 +1,5 @@
 import type { TraceMappingInput, TraceProposalView } from '../schemas/traces';
-import { DATE_ORDER_WORDS, type TraceChannel, type TraceUnit } from '../thermal/traces';
+import { DATE_ORDER_WORDS, zoneOf, type TraceChannel, type TraceUnit } from '../thermal/traces';
 import { UNIT_NAMES } from '../schemas/traces';
 import { CHANNEL_WORDS } from './traces';
 import { TRACE_CHANNELS } from '../thermal/traces';
@@ -70,7 +70,7 @@ export function toMappingDraft(
 		timeColumn: String(time.column),
 		clockColumn: time.kind === 'calendar' && time.clockColumn !== null ? String(time.clockColumn) : '',
 		order: time.kind === 'calendar' ? time.order : 'ymd',
-		timeZone: 'timeZone' in time ? time.timeZone : 'UTC',
+		timeZone: zoneOf(time) ?? 'UTC',
 		firstDay: time.kind === 'time-of-day' ? (time.firstDay ?? '') : '',
 		startHour: writeHour(startHour),
 		isSynthetic: isSynthetic ? 'true' : ''
@@ -84,6 +84,9 @@ export function toMappingDraft(
 	return draft;
 }
 
+/** Whether a kind of time counts from 1970, so that the zone says the time of day alone. */
+export const isEpoch = (kind: string | undefined): boolean => kind === 'epoch-s' || kind === 'epoch-ms';
+
 function readTime(draft: MappingDraft): unknown {
 	const { timeKind: kind, timeZone } = draft;
 	const column = Number(draft.timeColumn);
@@ -91,9 +94,8 @@ function readTime(draft: MappingDraft): unknown {
 		const clockColumn = draft.clockColumn ? Number(draft.clockColumn) : null;
 		return { kind, column, clockColumn, order: draft.order, timeZone };
 	}
-	return kind === 'time-of-day'
-		? { kind, column, firstDay: draft.firstDay || null, timeZone }
-		: { kind, column };
+	if (kind === 'time-of-day') return { kind, column, firstDay: draft.firstDay || null, timeZone };
+	return isEpoch(kind) ? { kind, column, timeZone } : { kind, column };
 }
 
 /** What the boxes say, for the schema to check. */

@@ -19,6 +19,8 @@ export const UNIT_NAMES = Object.keys(TRACE_UNITS) as TraceUnit[];
 const columnNumber = z.number().int().min(1).max(256);
 const countedTime = <K extends string>(kind: K) => z.object({ kind: z.literal(kind), column: columnNumber });
 const timeZone = z.string().max(60).meta({ description: 'IANA name, such as Australia/Darwin' });
+/** What counts from 1970 says the instant; the time of day is that of the zone, UTC where none is said. */
+const epochTime = <K extends string>(kind: K) => countedTime(kind).extend({ timeZone: timeZone.optional() });
 
 /** How a logger writes: which column is what, and how it tells the time. */
 export const traceMappingSchema = z.object({
@@ -26,8 +28,8 @@ export const traceMappingSchema = z.object({
 	delimiter: z.enum(DELIMITERS),
 	decimal: z.enum(DECIMALS),
 	time: z.discriminatedUnion('kind', [
-		countedTime('epoch-s'),
-		countedTime('epoch-ms'),
+		epochTime('epoch-s'),
+		epochTime('epoch-ms'),
 		countedTime('elapsed-s'),
 		countedTime('elapsed-min'),
 		z.object({

@@ -1,7 +1,7 @@
 import type { Transaction } from 'sequelize';
 import type { SignedInPerson } from '$lib/schemas/people';
 import type { TraceMappingChange, TraceRow, TraceView } from '$lib/schemas/traces';
-import { checkMapping, MOST_TRACE_BYTES, type TraceMapping } from '$lib/thermal/traces';
+import { checkMapping, MOST_TRACE_BYTES, zoneOf, type TraceMapping } from '$lib/thermal/traces';
 import { Job, Mount, Person, Trace, TraceLogger } from '../db/models';
 import { inTransaction } from '../db/transaction';
 import { AppError, notFound } from '../errors';
@@ -89,7 +89,8 @@ export async function prepareTrace(incoming: IncomingTrace): Promise<PreparedTra
 async function lastZoneOf({ workshopId }: SignedInPerson): Promise<string> {
 	const loggers = await TraceLogger.findAll({ where: { workshopId }, order: [['updatedAt', 'DESC']] });
 	for (const { mapping } of loggers) {
-		if ('timeZone' in mapping.time) return mapping.time.timeZone;
+		const zone = zoneOf(mapping.time);
+		if (zone !== undefined) return zone;
 	}
 	return NO_ZONE_KNOWN;
 }

@@ -1,9 +1,10 @@
 import { describe, expect, it } from 'vitest';
-import { refusalOf, toBytes } from '../../../../tests/support/trace-files';
+import { readText, refusalOf, toBytes } from '../../../../tests/support/trace-files';
 import { describeTrace } from './describe-trace';
 import { findChannel } from './find-channels';
 import { loggerFingerprint } from './fingerprint';
-import { checkMapping } from './mapping';
+import { checkMapping, type TraceMapping } from './mapping';
+import { clockHourAt } from './plan-from-legs';
 
 const look = (lines: readonly string[], timeZone?: string) =>
 	describeTrace(toBytes(lines.join('\n')), timeZone);
@@ -147,6 +148,20 @@ describe('the time', () => {
 		['seconds since the start', ['0', '1'], 'elapsed-s']
 	])('may be %s', (_, cells, kind) => {
 		expect(look(['t,cell', ...cells.map((cell) => `${cell},20`)]).time.mapping.kind).toBe(kind);
+	});
+
+	it('since 1970 is of a zone all the same: that of the vehicle, for the time of day', () => {
+		const lines = ['t,cell', '1769868000,20', '1769868060,20'];
+		const { time, mapping, notes } = look(lines, 'Australia/Darwin');
+		expect(time.mapping).toEqual({ kind: 'epoch-s', column: 1, timeZone: 'Australia/Darwin' });
+		expect(notes).toContain('The file says no time zone; Australia/Darwin is taken.');
+		// 2026-01-31T14:00Z; Darwin is 9 h 30 min ahead of UTC all year (IANA time zone database).
+		const hourOf = (asked: TraceMapping) => {
+			const { trace } = readText(lines.join('\n'), asked, { firstRowLine: 2 });
+			return clockHourAt(trace, trace.startS);
+		};
+		expect(hourOf(mapping)).toBeCloseTo(23.5, 9);
+		expect(hourOf({ ...mapping, time: { kind: 'epoch-s', column: 1 } })).toBeCloseTo(14, 9);
 	});
 
 	it('counts minutes where the name says so, and seconds where none does, which is said', () => {

@@ -113,14 +113,14 @@ const findDateAndClock: Finder = (columns, timeZone) => {
 	});
 };
 
-const findEpoch: Finder = (columns, _timeZone, decimal) =>
+const findEpoch: Finder = (columns, timeZone, decimal) =>
 	firstOf(columns, (column) => {
 		const numbers = told(column).map((cell) => numberOf(cell, decimal));
 		const epoch = EPOCHS.find(({ from, to }) => numbers.every((value) => value >= from && value <= to));
 		if (!epoch || numbers.length === 0) return null;
 		const why = `Column ${column.number} counts ${epoch.unit} since 1970 UTC.`;
-		const mapping = { kind: epoch.kind, column: column.number };
-		return { mapping, why, ambiguous: false, needsZone: false };
+		const mapping = { kind: epoch.kind, column: column.number, timeZone };
+		return { mapping, why, ambiguous: false, needsZone: true };
 	});
 
 const findClock: Finder = (columns, timeZone) => {

@@ -36,6 +36,7 @@ export {
 	DATE_ORDERS,
 	DECIMALS,
 	DELIMITERS,
+	zoneOf,
 	type ColumnMapping,
 	type DateOrder,
 	type Decimal,

@@ -20,10 +20,21 @@ export const COUNTED_TIMES = {
 } as const;
 export type CountedTime = keyof typeof COUNTED_TIMES;
 
-export interface CountedTimeMapping {
-	kind: CountedTime;
+/** Counted from 1970 UTC, so that the instant is known. */
+export interface EpochMapping {
+	kind: 'epoch-s' | 'epoch-ms';
+	column: number;
+	/** IANA name of the zone where the vehicle was, for the time of day; UTC where nothing is said. */
+	timeZone?: string | undefined;
+}
+
+/** Counted from the start of the file. */
+export interface ElapsedMapping {
+	kind: 'elapsed-s' | 'elapsed-min';
 	column: number;
 }
+
+export type CountedTimeMapping = EpochMapping | ElapsedMapping;
 
 /** A date and a time of day, in one column or in two; an offset in the cell comes before the zone. */
 export interface CalendarMapping {
@@ -84,21 +95,34 @@ function requireOneOf(value: unknown, choices: readonly unknown[], what: string)
 
 const DAY = /^\d{4}-\d{2}-\d{2}$/;
 
+/**
+ * The time zone that a mapping names.
+ *
+ * @param time where a row says its time
+ * @returns IANA name; undefined where it names none
+ * Validity: every mapping.
+ * Source: this program's own form of a mapping; names after the IANA time zone database.
+ * @example
+ * zoneOf({ kind: 'epoch-s', column: 1, timeZone: 'Australia/Darwin' }); // 'Australia/Darwin'
+ * zoneOf({ kind: 'elapsed-s', column: 1 }); // undefined
+ */
+export function zoneOf(time: TimeMapping): string | undefined {
+	return 'timeZone' in time ? time.timeZone : undefined;
+}
+
 function checkTime(time: TimeMapping): void {
 	if (typeof time !== 'object' || time === null)
 		refuse('no_time_column', null, time, 'a column with the time');
 	const kinds = [...Object.keys(COUNTED_TIMES), 'calendar', 'time-of-day'];
 	requireOneOf(time.kind, kinds, 'a kind of time');
 	requireColumn(time.column, 'the column of the time');
-	if (time.kind !== 'calendar' && time.kind !== 'time-of-day') return;
-	if (!isTimeZone(time.timeZone)) {
-		refuse(
-			'no_such_zone',
-			time.column,
-			time.timeZone,
-			'the IANA name of a time zone, such as Australia/Darwin'
-		);
+	const isCounted = time.kind !== 'calendar' && time.kind !== 'time-of-day';
+	const zone = zoneOf(time);
+	const needsZone = !isCounted || zone !== undefined;
+	if (needsZone && !isTimeZone(zone)) {
+		refuse('no_such_zone', time.column, zone, 'the IANA name of a time zone, such as Australia/Darwin');
 	}
+	if (isCounted) return;
 	if (time.kind === 'time-of-day') {
 		if (time.firstDay !== null && !DAY.test(time.firstDay)) {
 			refuse('wrong_mapping', time.column, time.firstDay, 'the first day as yyyy-mm-dd, or null');

@@ -235,6 +235,11 @@ describe('what cannot be read is refused with its place', () => {
 			'no_such_zone'
 		],
 		[
+			'a zone that there is not, of seconds since 1970',
+			{ time: { kind: 'epoch-s', column: 1, timeZone: 'Mars/North' } },
+			'no_such_zone'
+		],
+		[
 			'a first day that is none',
 			{ time: { kind: 'time-of-day', column: 1, firstDay: 'today', timeZone: 'UTC' } },
 			'wrong_mapping'

@@ -6,7 +6,8 @@ import {
 	type CalendarMapping,
 	type CountedTimeMapping,
 	type TimeMapping,
-	type TimeOfDayMapping
+	type TimeOfDayMapping,
+	zoneOf
 } from './mapping';
 import { parseNumber } from './parse-number';
 import type { CellSpans } from './row-splitter';
@@ -30,16 +31,18 @@ const HALF_DAY_S = DAY_S / 2;
 
 class CountedTimeReader implements TimeReader {
 	readonly base: TimeBase;
-	readonly clock = null;
+	readonly clock: ZoneClock | null;
 	private readonly secondsEach: number;
 	private readonly at: number;
 
 	constructor(
-		{ kind, column }: CountedTimeMapping,
+		time: CountedTimeMapping,
 		private readonly decimal: number
 	) {
-		({ base: this.base, secondsEach: this.secondsEach } = COUNTED_TIMES[kind]);
-		this.at = column - 1;
+		({ base: this.base, secondsEach: this.secondsEach } = COUNTED_TIMES[time.kind]);
+		const zone = zoneOf(time);
+		this.clock = zone === undefined ? null : new ZoneClock(zone);
+		this.at = time.column - 1;
 	}
 
 	read({ bytes, starts, ends }: CellSpans): number {
