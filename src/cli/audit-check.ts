@@ -1,7 +1,7 @@
 import { applicationEnv } from './lib/application.mjs';
 import { STATE, stateFolders } from './lib/folders.mjs';
 import { databaseEnv, localConnection } from './lib/mariadb.mjs';
-import { rememberedPorts } from './lib/ports.mjs';
+import { heldPorts } from './lib/ports.mjs';
 import { loadSecrets } from './lib/secrets.mjs';
 
 const WHOLE = 0;
@@ -11,7 +11,7 @@ const NOT_CHECKED = 2;
 /** Where the database is: as the environment says, or the one that `npm start` keeps here. */
 async function findDatabase(): Promise<NodeJS.ProcessEnv> {
 	if (process.env.DATABASE_PASSWORD) return process.env;
-	const [secrets, ports] = await Promise.all([loadSecrets(STATE), rememberedPorts(STATE)]);
+	const [secrets, ports] = await Promise.all([loadSecrets(STATE), heldPorts(STATE)]);
 	const database = databaseEnv(localConnection({ port: ports.database, password: secrets.databasePassword }));
 	const mail = { SMTP_URL: `smtp://127.0.0.1:${ports.mail}` };
 	return applicationEnv({

@@ -5,7 +5,7 @@ import { applicationEnv } from './lib/application.mjs';
 import { STATE, stateFolders } from './lib/folders.mjs';
 import { inventWorkshop } from './lib/invent-workshop';
 import { databaseEnv, localConnection } from './lib/mariadb.mjs';
-import { rememberedPorts } from './lib/ports.mjs';
+import { heldPorts } from './lib/ports.mjs';
 import { loadSecrets } from './lib/secrets.mjs';
 
 const MOST = 1_000_000;
@@ -25,7 +25,7 @@ const { values } = parseArgs({
 const installations = readWhole('installations', values.installations, MOST);
 const seed = readWhole('seed', values.seed, 2 ** 31);
 const secrets = await loadSecrets(STATE);
-const { database } = await rememberedPorts(STATE);
+const { database } = await heldPorts(STATE);
 const connection = localConnection({ port: database, password: secrets.databasePassword });
 const env = applicationEnv(
 	{

@@ -86,25 +86,48 @@ async function isFreeHere(port) {
 	return (await portTrouble(port, '127.0.0.1')) === null;
 }
 
+/** @param {string} folder */
+const fileIn = (folder) => join(folder, 'ports.json');
+
+/**
+ * @param {string} folder
+ * @returns {Promise<Record<string, unknown>>}
+ */
+async function readPorts(folder) {
+	return /** @type {Record<string, unknown>} */ ((await readJson(fileIn(folder))) ?? {});
+}
+
+/** @param {unknown} port @returns {port is number} */
+const isPort = (port) => typeof port === 'number' && Number.isInteger(port) && port > 1023 && port < 65_536;
+
+/**
+ * The ports that a running start holds, for a command beside it: as they were written down, never chosen anew.
+ * @param {string} folder
+ * @returns {Promise<{ database: number, mail: number }>}
+ */
+export async function heldPorts(folder) {
+	const { database, mail } = await readPorts(folder);
+	if (isPort(database) && isPort(mail)) return { database, mail };
+	throw new Trouble('Nothing was ever started here.');
+}
+
 /**
  * The ports of the database and the mail server: the same ones as last time, unless somebody else has them now.
  * @param {string} folder
  * @returns {Promise<{ database: number, mail: number }>}
  */
 export async function rememberedPorts(folder) {
-	const file = join(folder, 'ports.json');
-	const last = /** @type {Record<string, unknown>} */ ((await readJson(file)) ?? {});
+	const last = await readPorts(folder);
 	const database = await keepOrChoose(last.database, []);
 	const mail = await keepOrChoose(last.mail, [database]);
 	if (database !== last.database || mail !== last.mail) {
-		await writeWhole(file, `${JSON.stringify({ database, mail })}\n`);
+		await writeWhole(fileIn(folder), `${JSON.stringify({ database, mail })}\n`);
 	}
 	return { database, mail };
 }
 
 /** @param {unknown} last @param {number[]} taken */
 async function keepOrChoose(last, taken) {
-	const usable = typeof last === 'number' && Number.isInteger(last) && last > 1023 && last < 65_536;
-	if (usable && !taken.includes(last) && (await isFreeHere(last))) return last;
+	if (isPort(last) && !taken.includes(last) && (await isFreeHere(last))) return last;
 	return chooseFreePort(taken);
 }

@@ -3,7 +3,14 @@ import { createServer, type AddressInfo, type Server } from 'node:net';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
-import { addressSentence, chooseFreePort, parsePort, rememberedPorts, requireFreeAddress } from './ports.mjs';
+import {
+	addressSentence,
+	chooseFreePort,
+	heldPorts,
+	parsePort,
+	rememberedPorts,
+	requireFreeAddress
+} from './ports.mjs';
 
 let other: Server;
 let taken: number;
@@ -85,5 +92,33 @@ describe('rememberedPorts', () => {
 		} finally {
 			await rm(folder, { recursive: true });
 		}
+	});
+});
+
+describe('heldPorts', () => {
+	let folder: string;
+
+	beforeEach(async () => {
+		folder = await mkdtemp(join(tmpdir(), 'ports-'));
+	});
+
+	afterEach(async () => {
+		await rm(folder, { recursive: true });
+	});
+
+	it('are those that a running start listens on, and stay written down', async () => {
+		const running = await rememberedPorts(folder);
+		const database = createServer();
+		await new Promise<void>((resolve) => database.listen(running.database, '127.0.0.1', resolve));
+		try {
+			expect(await heldPorts(folder)).toEqual(running);
+			expect(await heldPorts(folder)).toEqual(running);
+		} finally {
+			database.close();
+		}
+	});
+
+	it('are refused where nothing was ever started', async () => {
+		await expect(heldPorts(folder)).rejects.toThrow('Nothing was ever started here.');
 	});
 });
