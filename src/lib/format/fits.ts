@@ -1,4 +1,4 @@
-import type { FitState } from '../schemas/fits';
+import { MOST_FIT_NAME, type FitState } from '../schemas/fits';
 import type { TraceLeg } from '../thermal/traces';
 import { formatNumber, formatWithUnit, THIN_SPACE } from './numbers';
 import { formatClockHour, formatHours } from './time';
@@ -53,7 +53,6 @@ export function readLegNumbers(text: string): number[] | null {
 }
 
 const HOUR_S = 3600;
-const MOST_NAME = 80;
 
 /** A leg of a trace in a few words: "2: 09:00, driving at 80 km/h for 2 h 30 min". */
 export function sayLegOf(
@@ -71,7 +70,7 @@ export function nameFit(meanings: readonly string[]): string {
 	for (let count = meanings.length; count > 0; count--) {
 		const more = meanings.length - count;
 		const name = meanings.slice(0, count).join(', ') + (more > 0 ? ` and ${more} more` : '');
-		if (name.length <= MOST_NAME) return name;
+		if (name.length <= MOST_FIT_NAME) return name;
 	}
 	return `${meanings.length} coefficients`;
 }

@@ -7,6 +7,7 @@ export type FitState = (typeof FIT_STATES)[number];
 export const PRIOR_LAWS = ['lognormal', 'logit-normal', 'normal'] as const;
 export const FIT_LOSSES = ['soft-l1', 'huber', 'squares'] as const;
 
+export const MOST_FIT_NAME = 80;
 export const MOST_FIT_TRACES = 12;
 export const MOST_FIT_COEFFICIENTS = 12;
 
@@ -41,7 +42,7 @@ const fitTraceSchema = z.object({
 
 /** What somebody asks to be fitted, to which traces. */
 export const fitInputSchema = z.object({
-	name: words('Name', 80),
+	name: words('Name', MOST_FIT_NAME),
 	traces: z
 		.array(fitTraceSchema)
 		.min(1, { error: 'Choose at least one trace.' })

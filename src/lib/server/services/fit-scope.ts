@@ -39,8 +39,9 @@ export async function bookForAll(
 export async function scopeOfFit(
 	person: SignedInPerson,
 	traceIds: readonly number[],
-	{ engineLayout }: BookScope
+	{ engineLayout, positionKind }: BookScope
 ): Promise<BookScope> {
-	const kinds = new Set((await casesOf(person, traceIds)).map(({ positionKind }) => positionKind));
+	if (positionKind !== 'any') return { engineLayout, positionKind };
+	const kinds = new Set((await casesOf(person, traceIds)).map((mount) => mount.positionKind));
 	return { engineLayout, positionKind: kinds.size === 1 ? [...kinds][0]! : 'any' };
 }

@@ -14,6 +14,7 @@ import { changeCoefficient, draftBook, moveBook } from './book-changes';
 import { getBook, listBooks } from './books';
 import { draftFittedBook } from './fit-books';
 import { cancelFit, createFit, followFit, getFit, listChoices, listFits, prepareFit } from './fits';
+import { scopeOfFit } from './fit-scope';
 import { saveLegs } from './trace-views';
 import { getTrace } from './traces';
 
@@ -227,6 +228,8 @@ describe('a book with fitted values', () => {
 			const book = await draftFittedBook(others.engineer, fit.id, { name: 'Fitted', note: '' });
 			expect(book).toMatchObject({ engineLayout: narrow.engineLayout, positionKind: 'under-bonnet' });
 			expect(book.coefficients.find(({ key }) => key === 'share')!.value).toBe(0.5);
+			// Also where nothing is left of what was measured.
+			expect(await scopeOfFit(others.engineer, [], narrow)).toMatchObject({ positionKind: 'under-bonnet' });
 		},
 		LONG_MS
 	);

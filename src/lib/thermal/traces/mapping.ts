@@ -18,7 +18,6 @@ export const COUNTED_TIMES = {
 	'elapsed-s': { secondsEach: 1, base: 'elapsed' },
 	'elapsed-min': { secondsEach: 60, base: 'elapsed' }
 } as const;
-export type CountedTime = keyof typeof COUNTED_TIMES;
 
 /** Counted from 1970 UTC, so that the instant is known. */
 export interface EpochMapping {

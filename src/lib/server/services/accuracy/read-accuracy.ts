@@ -13,7 +13,7 @@ import {
 	type CheckSums,
 	type StepSums
 } from '../../presenters/accuracy';
-import { CHECKS, ZONE } from './check-scope';
+import { CHECKS, UNHELD_TRACES, ZONE } from './check-scope';
 
 /** One row for each kind, book, zone and kind of position that occurs: a few hundred at most, whatever was read. */
 const SUMS = `
@@ -55,13 +55,10 @@ const WAITING = `
 	WHERE n.workshop_id = :workshopId AND n.kind = 'capacity-test' AND c.id IS NULL
 `;
 
-/** Measured traces that nothing could be held against: no assessment, no hour of beginning, nothing of the battery, or a day that cannot be run. */
-const UNHELD_TRACES = `
-	SELECT COUNT(*) AS traces FROM traces t
-		JOIN mounts m ON m.id = t.mount_id AND m.removed_at IS NULL
-		LEFT JOIN prediction_checks c ON c.trace_id = t.id
-	WHERE t.workshop_id = :workshopId AND t.state = 'read' AND NOT t.is_synthetic
-		AND t.removed_at IS NULL AND c.id IS NULL
+/** At mounts that stand: for want of an assessment, an hour of beginning, a reading of the battery, or a day that can be run. */
+const UNHELD = `
+	SELECT COUNT(*) AS traces FROM ${UNHELD_TRACES} AND t.workshop_id = :workshopId
+		AND EXISTS (SELECT 1 FROM mounts m WHERE m.id = t.mount_id AND m.removed_at IS NULL)
 `;
 
 type Stored = Record<string, string | number>;
@@ -98,7 +95,7 @@ export async function readAccuracy(person: SignedInPerson): Promise<Accuracy> {
 		select(CHANCES, { ...where, inner: CHANCE_EDGES.slice(1, -1) }),
 		select(LEFT_OUT, where),
 		select(WAITING, where),
-		select(UNHELD_TRACES, where),
+		select(UNHELD, where),
 		CoefficientBook.findAll({ where, attributes: ['number', 'name'] })
 	]);
 	return presentAccuracy({

@@ -11,16 +11,11 @@ import { startHourOf } from '../../presenters/traces';
 import { today } from '../days';
 import { workInSlices } from '../slices';
 import { traceToFit } from '../trace-scenario';
+import { UNHELD_TRACES } from './check-scope';
 import { writeChecks } from './check-rows';
 
 const DRAWS = 64;
 const MS_PER_S = 1000;
-
-/** Traces that were measured and read, and that nothing was held against yet. */
-const WAITING = `
-	SELECT t.id FROM traces t LEFT JOIN prediction_checks c ON c.trace_id = t.id
-	WHERE t.state = 'read' AND NOT t.is_synthetic AND t.removed_at IS NULL AND c.id IS NULL
-`;
 
 interface Prediction {
 	assessment: Assessment;
@@ -156,10 +151,13 @@ export async function holdTraces(
 		...(traceId === undefined ? [] : ['AND t.id = :traceId']),
 		...(sha256 === undefined ? [] : ['AND t.sha256 = :sha256'])
 	];
-	const rows = await connection().query<{ id: number }>(`${WAITING} ${narrowed.join(' ')} ORDER BY t.id`, {
-		replacements: { mountId, traceId, sha256 },
-		type: QueryTypes.SELECT
-	});
+	const rows = await connection().query<{ id: number }>(
+		`SELECT t.id FROM ${UNHELD_TRACES} ${narrowed.join(' ')} ORDER BY t.id`,
+		{
+			replacements: { mountId, traceId, sha256 },
+			type: QueryTypes.SELECT
+		}
+	);
 	let count = 0;
 	for (const { id } of rows) {
 		try {

@@ -13,10 +13,10 @@ const traceIdsOf = ({ searchParams }: URL): number[] =>
 	searchParams.getAll('trace').map(Number).filter(Number.isSafeInteger);
 
 /** What the address has chosen of what there is. */
-function chosenBy({ searchParams }: URL, { traces, coefficients }: FitChoices) {
-	const [traceIds, paths] = [searchParams.getAll('trace'), searchParams.getAll('coefficient')];
+function chosenBy(url: URL, { traces, coefficients }: FitChoices) {
+	const [traceIds, paths] = [traceIdsOf(url), url.searchParams.getAll('coefficient')];
 	return {
-		traces: traces.filter(({ id, unfit }) => unfit === '' && traceIds.includes(String(id))),
+		traces: traces.filter(({ id, unfit }) => unfit === '' && traceIds.includes(id)),
 		coefficients: coefficients.filter(({ group, key }) => paths.includes(`${group}.${key}`))
 	};
 }

@@ -20,6 +20,7 @@ async function find(person: SignedInPerson, params: { bookId: string; coefficien
 	return { book, coefficient };
 }
 
+/** As the form takes it: what was fitted becomes somebody’s word when they change it by hand, with a source of their own. */
 async function toForm(person: SignedInPerson, params: { bookId: string; coefficient: string }) {
 	const { book, coefficient } = await find(person, params);
 	const { value, source, origin } = coefficient;
