@@ -1,13 +1,14 @@
 import { z } from 'zod';
-import { optionalWords, versionSchema } from './fields';
+import { optionalWords, versionSchema, words } from './fields';
 import {
 	NOTE_CHARS,
 	PRE_DRILL_ANSWERS,
 	sayMissingNote,
+	SIGNER_CHARS,
 	type PreDrillAnswers,
 	type PreDrillWord
 } from './pre-drill';
-import { PRE_DRILL_KEYS } from './pre-drill-questions';
+import { PRE_DRILL_KEYS, preDrillLabelOf } from './pre-drill-questions';
 
 /** The box beside an answer. */
 export const noteName = (key: string): string => `${key}Note`;
@@ -15,20 +16,29 @@ export const noteName = (key: string): string => `${key}Note`;
 const fields = Object.fromEntries(
 	PRE_DRILL_KEYS.flatMap((key) => [
 		[key, z.enum(['', ...PRE_DRILL_ANSWERS]).default('')],
-		[noteName(key), optionalWords('Note', NOTE_CHARS)]
+		[noteName(key), optionalWords(`${preDrillLabelOf(key)}: the note`, NOTE_CHARS)]
 	])
 );
 
-/** All questions as one form has them: a choice and a note each; what is not asked stays empty. */
+/** All questions as one form has them: a choice and a note each; what is not asked stays empty. The name is for signing. */
 export const preDrillFormSchema = z
-	.object({ ...fields, version: versionSchema })
+	.object({ ...fields, signerName: optionalWords('Your name', SIGNER_CHARS), version: versionSchema })
 	.superRefine((form, context) => {
 		const given = form as Record<string, unknown>;
 		for (const key of PRE_DRILL_KEYS) {
-			const message = sayMissingNote(given[key] as PreDrillWord | '', String(given[noteName(key)] ?? ''));
+			const message = sayMissingNote(
+				key,
+				given[key] as PreDrillWord | '',
+				String(given[noteName(key)] ?? '')
+			);
 			if (message) context.addIssue({ code: 'custom', path: [noteName(key)], message });
 		}
 	});
+
+/** The same form sent to be signed: then it takes a name. */
+export const preDrillSigningSchema = preDrillFormSchema.safeExtend({
+	signerName: words('Your name', SIGNER_CHARS)
+});
 
 export const toPreDrillForm = (answers: PreDrillAnswers): Record<string, string> =>
 	Object.fromEntries(

@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { optionalWords, versionSchema, words } from './fields';
-import { PRE_DRILL_KEYS, type PreDrillQuestion } from './pre-drill-questions';
+import { PRE_DRILL_KEYS, preDrillLabelOf, type PreDrillQuestion } from './pre-drill-questions';
 
 /** It holds, it does not, or it does not arise here (which takes a word why). */
 export const PRE_DRILL_ANSWERS = ['holds', 'does-not', 'not-here'] as const;
@@ -20,10 +20,11 @@ const preDrillAnswerSchema = z.object({
 });
 export type PreDrillAnswer = z.infer<typeof preDrillAnswerSchema>;
 
-/** What is missing beside an answer; null when nothing is. Only a plain yes stands without a word. */
-export function sayMissingNote(answer: PreDrillWord | '', note: string): string | null {
+/** What is missing beside the answer to a question; null when nothing is. Only a plain yes stands without a word. */
+export function sayMissingNote(key: string, answer: PreDrillWord | '', note: string): string | null {
 	if (answer === '' || answer === 'holds' || note !== '') return null;
-	return answer === 'does-not' ? 'Say what is missing.' : 'Say why it does not arise here.';
+	const what = answer === 'does-not' ? 'say what is missing.' : 'say why it does not arise here.';
+	return `${preDrillLabelOf(key)}: ${what}`;
 }
 
 /** The answers so far, by question. */
@@ -31,7 +32,7 @@ export const preDrillAnswersSchema = z
 	.partialRecord(z.enum(PRE_DRILL_KEYS), preDrillAnswerSchema)
 	.superRefine((answers, context) => {
 		for (const [key, given] of Object.entries(answers)) {
-			const message = given ? sayMissingNote(given.answer, given.note) : null;
+			const message = given ? sayMissingNote(key, given.answer, given.note) : null;
 			if (message) context.addIssue({ code: 'custom', path: [key, 'note'], message });
 		}
 	});
@@ -40,8 +41,13 @@ export type PreDrillAnswers = z.infer<typeof preDrillAnswersSchema>;
 export const preDrillChangeSchema = z.object({ answers: preDrillAnswersSchema, version: versionSchema });
 export type PreDrillChange = z.infer<typeof preDrillChangeSchema>;
 
+export const SIGNER_CHARS = 120;
+
 /** A name under the answers as they stand. */
-export const preDrillSignatureSchema = z.object({ name: words('Your name', 120), version: versionSchema });
+export const preDrillSignatureSchema = z.object({
+	name: words('Your name', SIGNER_CHARS),
+	version: versionSchema
+});
 export type PreDrillSignature = z.infer<typeof preDrillSignatureSchema>;
 
 /** What stands open before drilling, as it is printed. */

@@ -1,8 +1,14 @@
 import type { FileView } from '$lib/schemas/files';
-import { preDrillSignatureSchema, type PreDrillView } from '$lib/schemas/pre-drill';
-import { fromPreDrillForm, preDrillFormSchema, toPreDrillForm } from '$lib/schemas/pre-drill-form';
+import type { SignedInPerson } from '$lib/schemas/people';
+import type { PreDrillView } from '$lib/schemas/pre-drill';
+import {
+	fromPreDrillForm,
+	preDrillFormSchema,
+	preDrillSigningSchema,
+	toPreDrillForm
+} from '$lib/schemas/pre-drill-form';
 import { saveEdited } from '$lib/server/http/edit-form';
-import { loadForm, saveForm } from '$lib/server/http/forms';
+import { loadForm } from '$lib/server/http/forms';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { pageId } from '$lib/server/http/page-id';
 import { listMountFiles } from '$lib/server/services/files';
@@ -37,13 +43,26 @@ export const load: PageServerLoad = async (event) => {
 	return {
 		...{ mount, check, assessmentId },
 		job: { id: job.id, number: job.number, chemistry: job.battery?.chemistry ?? '' },
-		form: await loadForm(preDrillFormSchema, { version, ...toPreDrillForm(answersOf(check)) }),
-		signature: await loadForm(preDrillSignatureSchema, { version, name: person.name }),
+		form: await loadForm(preDrillFormSchema, {
+			...{ version, signerName: person.name },
+			...toPreDrillForm(answersOf(check))
+		}),
 		photosOf: countPhotos(files),
 		isSaved: event.url.searchParams.has('saved'),
 		isSigned: event.url.searchParams.has('signed')
 	};
 };
+
+type SentForm = Record<string, unknown>;
+
+const keep = (person: SignedInPerson, mountId: number, form: SentForm): Promise<PreDrillView> =>
+	savePreDrill(person, mountId, { answers: fromPreDrillForm(form), version: form.version as number });
+
+/** The form as the answers stand by now. */
+async function readNewest(person: SignedInPerson, mountId: number) {
+	const check = await getPreDrill(person, mountId);
+	return { version: check.version, ...toPreDrillForm(answersOf(check)) };
+}
 
 export const actions: Actions = {
 	save: (event) => {
@@ -52,30 +71,27 @@ export const actions: Actions = {
 			action: 'mounts.write',
 			schema: preDrillFormSchema,
 			save: async (person, form) => {
-				await savePreDrill(person, mountId, {
-					answers: fromPreDrillForm(form),
-					version: form.version as number
-				});
+				await keep(person, mountId, form);
 				const questionKey = event.url.searchParams.get('photo');
 				return questionKey === null
 					? `/mounts/${mountId}/pre-drill?saved`
 					: `/mounts/${mountId}/photos?question=${encodeURIComponent(questionKey)}`;
 			},
-			newest: async (person) => {
-				const check = await getPreDrill(person, mountId);
-				return { version: check.version, ...toPreDrillForm(answersOf(check)) };
-			}
+			newest: (person) => readNewest(person, mountId)
 		});
 	},
+	// What is signed is what stands on the screen: the answers are kept with the name, or neither is.
 	sign: (event) => {
 		const mountId = pageId(event.params.mountId);
-		return saveForm(event, {
+		return saveEdited(event, {
 			action: 'mounts.write',
-			schema: preDrillSignatureSchema,
-			save: async (person, signature) => {
-				await signPreDrill(person, mountId, signature);
+			schema: preDrillSigningSchema,
+			save: async (person, form) => {
+				const { version } = await keep(person, mountId, form);
+				await signPreDrill(person, mountId, { name: String(form.signerName), version });
 				return `/mounts/${mountId}/pre-drill?signed`;
-			}
+			},
+			newest: (person) => readNewest(person, mountId)
 		});
 	}
 };
