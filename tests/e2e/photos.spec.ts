@@ -72,6 +72,37 @@ test('photos of a mount come in together, one that is refused takes none along',
 	await expectNoViolations(page);
 });
 
+test('pressed twice, captions typed meanwhile, and one that is too long: nothing is lost or doubled', async ({
+	page
+}) => {
+	test.slow();
+	const { mountIds } = await makeAssessableJob(page, { mounts: 1 });
+	await openForm(page, `/mounts/${mountIds[0]}/photos`);
+	await page.getByRole('button', { name: 'Add them' }).click();
+	await expect(page.getByText('No file was chosen: choose one or more.')).toBeVisible();
+	await page
+		.getByLabel('Photos or documents')
+		.setInputFiles([await photo('left.jpg', '#884422'), await photo('right.jpg', '#224488')]);
+	await page.getByRole('button', { name: 'Add them' }).dblclick();
+	await expect(page.getByText('2 files were kept.')).toBeVisible();
+	await expect(page.getByText('No file was chosen')).toHaveCount(0);
+	await expect(page.getByRole('img', { name: /\.jpg$/ })).toHaveCount(2);
+
+	const left = page.getByLabel('Caption of left.jpg');
+	await left.fill('x'.repeat(201));
+	await page.getByLabel('Caption of right.jpg').fill('The right guard');
+	await page.getByRole('button', { name: 'Save the caption of left.jpg' }).click();
+	await expect(page.getByText('Caption must be 200 characters or fewer.')).toBeVisible();
+	await expect(left).toHaveValue('x'.repeat(201));
+	await left.fill('The left guard');
+	await page.getByRole('button', { name: 'Save the caption of left.jpg' }).click();
+	await expect(page.getByText('Saved.')).toBeVisible();
+	await page.getByLabel('Photos or documents').setInputFiles(await photo('rear.jpg', '#228844'));
+	await page.getByRole('button', { name: 'Add them' }).click();
+	await expect(page.getByLabel('Caption of rear.jpg')).toBeVisible();
+	await expect(page.getByLabel('Caption of right.jpg')).toHaveValue('The right guard');
+});
+
 test('a photo that breaks off on the way is sent again by itself, and can be called off', async ({
 	page
 }) => {

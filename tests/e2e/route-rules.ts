@@ -101,7 +101,7 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 	page('/sign-in/second-step', 'anyone', 'default'),
 	page('/sign-in/invitation/[token]', 'anyone', 'default'),
 	{ ...page('/sign-out', 'anyone', 'default'), leadsOn: true },
-	page('/sheet/[token]', 'anyone', 'acknowledge', 'ask'),
+	page('/sheet/[token]', 'anyone', 'acknowledge', 'ask', 'send'),
 
 	page('/reminders/[stop]', 'anyone', 'default'),
 
@@ -186,7 +186,7 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 	page('/my', 'customer'),
 	page('/my/data', 'customer', 'default'),
 	page('/my/data.zip', 'customer'),
-	owned('/my/[sheetId]', 'customer', 'acknowledge', 'ask'),
+	owned('/my/[sheetId]', 'customer', 'acknowledge', 'ask', 'send'),
 	owned('/my/handover/[mountId].pdf', 'customer'),
 	owned('/my/recommendation/[recommendationId].pdf', 'customer'),
 

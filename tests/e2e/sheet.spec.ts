@@ -80,6 +80,27 @@ test('the page keeps every word when something is missing, and says what', async
 	await customer.context().close();
 });
 
+test('what is typed for the one survives sending the other, refused or not', async ({ page, browser }) => {
+	const { link } = await sendSheet(page, job);
+	const customer = await openPlainly(browser, link);
+	const question = customer.getByLabel('What would you like to know?');
+	await question.fill('May it go into the canopy instead?');
+	await send(customer);
+	await expect(customer.getByText('Your name is missing.').first()).toBeVisible();
+	await expect(question).toHaveValue('May it go into the canopy instead?');
+	await customer.getByLabel('Your name').fill(READER);
+	await customer.getByLabel('I have read this page').check();
+	// Enter beside a question sends the question.
+	await customer.getByLabel('Name', { exact: true }).press('Enter');
+	await expect(customer.getByText('Your name is missing.').first()).toBeVisible();
+	await expect(customer.getByLabel('I have read this page')).toBeChecked();
+	await send(customer);
+	await expect(customer.getByText(`Acknowledged by ${READER}`)).toBeVisible();
+	await expect(customer.getByText('Your question below is not sent yet.')).toBeVisible();
+	await expect(question).toHaveValue('May it go into the canopy instead?');
+	await customer.context().close();
+});
+
 test(
 	'a changed hash is refused, and two who acknowledge at once see one name',
 	ONCE,

@@ -19,8 +19,11 @@ export const THUMB_EDGE_PX = 400;
 /** More than the largest sensors of telephones and cameras give, which is 108 million. */
 export const MOST_PIXELS = 120_000_000;
 
-/** What a chooser of files offers; what a file really is, is looked at when it is there. */
-export const PHOTO_TYPES = 'image/jpeg,image/png,image/webp,image/heic';
+/**
+ * What a chooser of files offers; what a file really is, is looked at when it is there. Without HEIC, a telephone that
+ * takes such photos hands them over as JPEG.
+ */
+const PHOTO_TYPES = 'image/jpeg,image/png,image/webp';
 export const FILE_TYPES = `${PHOTO_TYPES},application/pdf,.pdf`;
 
 const CAPTION_CHARS = 200;

@@ -1,3 +1,4 @@
+import { refuseLarge, sayRefused } from '../../format/files';
 import { sendFile, type SendFile } from './send-file';
 
 export type FileState = 'waiting' | 'sending' | 'again' | 'kept' | 'refused' | 'broken' | 'cancelled';
@@ -25,6 +26,8 @@ const UNDER_WAY: readonly FileState[] = ['waiting', 'sending', 'again'];
 export const isUnderWay = ({ state }: QueuedFile): boolean => UNDER_WAY.includes(state);
 
 interface Means {
+	/** What is larger is refused before it is sent. */
+	mostBytes?: number;
 	send?: SendFile;
 	wait?: (ms: number) => Promise<void>;
 	/** After the last one under way has come to its end. */
@@ -43,7 +46,7 @@ export class FileQueue {
 		means: Means
 	) {
 		const wait = (ms: number) => new Promise<void>((resolve) => setTimeout(resolve, ms));
-		this.means = { send: sendFile, wait, ...means };
+		this.means = { mostBytes: Infinity, send: sendFile, wait, ...means };
 	}
 
 	get underWay(): number {
@@ -60,7 +63,12 @@ export class FileQueue {
 			const query = Object.entries({ ...place, fileName: file.name })
 				.map(([name, value]) => `${name}=${encodeURIComponent(String(value))}`)
 				.join('&');
-			this.files.push(new QueuedFile(`${this.onceKey}-${(this.count += 1)}`, file, `${path}?${query}`));
+			const queued = new QueuedFile(`${this.onceKey}-${(this.count += 1)}`, file, `${path}?${query}`);
+			if (file.size > this.means.mostBytes) {
+				queued.state = 'refused';
+				queued.sentence = sayRefused(file.name, refuseLarge(this.means.mostBytes));
+			}
+			this.files.push(queued);
 		}
 		void this.run();
 	}

@@ -30,7 +30,7 @@ function begin() {
 			tries.push({ path, sending, answer });
 		});
 	const wait = (ms: number) => Promise.resolve(void waits.push(ms));
-	const queue = new FileQueue('once', { send, wait, onDone });
+	const queue = new FileQueue('once', { mostBytes: 100, send, wait, onDone });
 	render(FileQueueList, { queue });
 	const add = (...names: string[]) => {
 		queue.add(names.map(photo), '/files');
@@ -90,6 +90,14 @@ describe('files on their way', () => {
 		await last().answer({ kind: 'kept' });
 		expect(screen.getByText('“notes.jpg” is text.')).toBeTruthy();
 		expect(screen.queryByRole('button')).toBeNull();
+	});
+
+	it('are not sent when they are larger than what is taken', async () => {
+		const { tries, queue } = begin();
+		queue.add([new File(['x'.repeat(101)], 'film.jpg'), photo('left.jpg')], '/files');
+		flushSync();
+		expect(tries.map(({ path }) => path)).toEqual(['/files?fileName=left.jpg']);
+		expect(screen.getByText(/^“film\.jpg” is larger than/)).toBeTruthy();
 	});
 
 	it('can be called off, one under way and one that waits', async () => {

@@ -1,18 +1,14 @@
-import { formatWithUnit } from '$lib/format/numbers';
+import { refuseLarge, sayRefused, type FileRefusal } from '$lib/format/files';
 import { MOST_FILE_BYTES, MOST_PIXELS } from '$lib/schemas/files';
 import { AppError } from '../errors';
 
-const MEGABYTE = 1024 * 1024;
 const TAKEN = 'Taken are photos as JPEG, PNG or WebP, and PDF documents.';
 const grouped = (count: number): string => count.toLocaleString('en-GB');
 
 /** Why a file is not taken: what it is, and what is taken instead. */
 const SAYINGS = {
 	empty: () => ({ is: 'has nothing in it', instead: 'Choose it again.' }),
-	large: () => ({
-		is: `is larger than ${formatWithUnit(MOST_FILE_BYTES / MEGABYTE, 'MB')}`,
-		instead: 'That is the most that is taken: send a smaller one.'
-	}),
+	large: () => refuseLarge(MOST_FILE_BYTES),
 	svg: () => ({ is: 'is a drawing in SVG, which can hold programs', instead: TAKEN }),
 	heic: () => ({
 		is: 'is a photo in HEIC, which cannot be read here',
@@ -43,9 +39,8 @@ export function refuseFile<R extends RefusalReason>(
 	reason: R,
 	...detail: Parameters<(typeof SAYINGS)[R]>
 ): AppError {
-	const say = SAYINGS[reason] as (...detail: unknown[]) => { is: string; instead: string };
-	const { is, instead } = say(...detail);
-	const message = `“${name}” ${is}. ${instead}`;
+	const say = SAYINGS[reason] as (...detail: unknown[]) => FileRefusal;
+	const message = sayRefused(name, say(...detail));
 	const limit = reason === 'large' ? `${MOST_FILE_BYTES} bytes` : undefined;
 	const code = reason === 'large' ? 'too_large' : 'invalid_input';
 	return new AppError(code, message, [{ path: 'file', code: reason, message, ...(limit ? { limit } : {}) }]);

@@ -6,8 +6,9 @@ import { saveForm } from '$lib/server/http/forms';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { askOnMySheet } from '$lib/server/services/questions';
 import { acknowledgeMySheet, getMySheet } from '$lib/server/services/sheet-readers';
+import { isQuestion, sendOneOfTwo } from '../../both-forms';
 import { showSheet } from '../../show-sheet';
-import type { Actions, PageServerLoad } from './$types';
+import type { Actions, PageServerLoad, RequestEvent } from './$types';
 
 function readSheetId(text: string): number {
 	return idSchema.safeParse(text).data ?? error(404, { message: 'There is no such page here.' });
@@ -19,8 +20,8 @@ export const load: PageServerLoad = async (event) => {
 	return showSheet(sheet, person.name);
 };
 
-export const actions: Actions = {
-	acknowledge: (event) =>
+const acknowledge = (event: RequestEvent) =>
+	sendOneOfTwo(event, 'acknowledge', () =>
 		saveForm(event, {
 			action: 'documents.read-own',
 			schema: acknowledgeSchema,
@@ -29,8 +30,10 @@ export const actions: Actions = {
 				await acknowledgeMySheet(person, sheetId, data);
 				return `/my/${sheetId}#acknowledged`;
 			}
-		}),
-	ask: (event) =>
+		})
+	);
+const ask = (event: RequestEvent) =>
+	sendOneOfTwo(event, 'ask', () =>
 		saveForm(event, {
 			action: 'questions.ask',
 			schema: askSchema,
@@ -40,4 +43,9 @@ export const actions: Actions = {
 				return `/my/${sheetId}#questions`;
 			}
 		})
+	);
+
+export const actions: Actions = {
+	...{ acknowledge, ask },
+	send: async (event) => ((await isQuestion(event)) ? ask(event) : acknowledge(event))
 };

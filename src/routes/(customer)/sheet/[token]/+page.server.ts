@@ -7,8 +7,9 @@ import { onceKeyOf, readForm, readPageForm, refuseForm } from '$lib/server/http/
 import { orPageError } from '$lib/server/http/guard';
 import { askByLink } from '$lib/server/services/questions';
 import { acknowledgeSheet, openSheet } from '$lib/server/services/sheet-readers';
+import { isQuestion, sendOneOfTwo } from '../../both-forms';
 import { showSheet } from '../../show-sheet';
-import type { Actions, PageServerLoad } from './$types';
+import type { Actions, PageServerLoad, RequestEvent as Event } from './$types';
 
 /** Whoever holds the link may read; nobody signs in here. */
 export const load: PageServerLoad = async (event) =>
@@ -32,11 +33,16 @@ async function sendByLink<S extends z.ZodObject>(
 	redirect(303, `${event.url.pathname}#${place}`);
 }
 
-export const actions: Actions = {
-	acknowledge: (event) =>
-		sendByLink(event, acknowledgeSchema, 'acknowledged', (data) =>
-			acknowledgeSheet(event.params.token, data)
-		),
-	ask: (event) =>
+const acknowledge = (event: Event) =>
+	sendOneOfTwo(event, 'acknowledge', () =>
+		sendByLink(event, acknowledgeSchema, 'acknowledged', (data) => acknowledgeSheet(event.params.token, data))
+	);
+const ask = (event: Event) =>
+	sendOneOfTwo(event, 'ask', () =>
 		sendByLink(event, askSchema, 'questions', (data, onceKey) => askByLink(event.params.token, data, onceKey))
+	);
+
+export const actions: Actions = {
+	...{ acknowledge, ask },
+	send: async (event) => ((await isQuestion(event)) ? ask(event) : acknowledge(event))
 };

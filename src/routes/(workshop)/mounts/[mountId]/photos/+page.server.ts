@@ -41,12 +41,12 @@ export const load: PageServerLoad = async (event) => {
 };
 
 /** Does it, or says on the page why not. */
-async function orRefusal<T>(work: Promise<T>) {
+async function orRefusal<T>(work: Promise<T>, typed: Taken['typed'] = null) {
 	try {
 		return { done: await work };
 	} catch (error) {
 		if (!(error instanceof AppError)) throw error;
-		const taken: Taken = { kept: 0, refused: [error.message], place: '' };
+		const taken: Taken = { kept: 0, refused: [error.message], place: '', typed };
 		return { refusal: fail(error.status, { taken }) };
 	}
 }
@@ -61,7 +61,8 @@ async function change(event: RequestEvent, what: (sent: FormData) => Omit<Partia
 		const version = sent.get('version') ?? undefined;
 		await changeFile(person, fileId, validate(fileChangeSchema, { ...what(sent), version }));
 	};
-	const { refusal } = await orRefusal(work());
+	const typed = { fileId: Number(sent.get('file')), caption: String(sent.get('caption') ?? '') };
+	const { refusal } = await orRefusal(work(), typed);
 	if (refusal) return refusal;
 	redirect(303, `/mounts/${mountId}/photos?saved`);
 }

@@ -25,6 +25,8 @@ export interface Taken {
 	/** Why the others were not, a sentence for each. */
 	refused: string[];
 	place: string;
+	/** A caption that was refused. */
+	typed: { fileId: number; caption: string } | null;
 }
 
 async function keepOne(
@@ -52,7 +54,7 @@ async function keepEach(
 ): Promise<Taken> {
 	const place = readPlace(fields.get('place') ?? '');
 	const once = fields.get('onceKey') ?? randomUUID();
-	const taken: Taken = { kept: 0, refused: [], place: writePlace(place) };
+	const taken: Taken = { kept: 0, refused: [], place: writePlace(place), typed: null };
 	if (files.length === 0) taken.refused.push('No file was chosen: choose one or more.');
 	for (const file of files) {
 		try {
