@@ -35,7 +35,7 @@ test('what was fitted is kept against what was agreed, looked at again by date, 
 	await page.getByLabel('The day', { exact: true }).fill('2026-02-10');
 	await page.getByLabel('Went dark at').fill('half past five');
 	await page.getByRole('button', { name: 'Keep this note' }).click();
-	await expect(page.getByText('Went dark must be a time such as 17:30.').first()).toBeVisible();
+	await expect(page.getByText('Went dark at must be a time such as 17:30.').first()).toBeVisible();
 	await expectNoViolations(page);
 	await page.getByLabel('Went dark at').fill('4:30');
 	await page.getByLabel('Came back by itself at').fill('4:40');
@@ -47,7 +47,7 @@ test('what was fitted is kept against what was agreed, looked at again by date, 
 	await expectNoViolations(page);
 
 	await openForm(page, `/mounts/${mountIds[0]}/field/new/peak-label`);
-	await page.getByLabel('Day', { exact: true }).fill('2026-02-20');
+	await page.getByLabel('Read on', { exact: true }).fill('2026-02-20');
 	await page.getByRole('radio', { name: 'On the case' }).check();
 	await page.getByLabel('Highest field that has turned').fill('77');
 	await page.getByLabel('Hottest of that day').fill('42');

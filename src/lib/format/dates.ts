@@ -9,6 +9,11 @@ const zoneOf = (moment: Date | string | number, timeZone?: string): string | und
 
 const toDate = (moment: Date | string | number): Date => (moment instanceof Date ? moment : new Date(moment));
 
+/** East of all others the day is fourteen hours ahead: what somebody calls today is not in the future. */
+const FURTHEST_EAST_MS = 14 * 3_600_000;
+export const latestToday = (now = new Date()): string =>
+	new Date(now.getTime() + FURTHEST_EAST_MS).toISOString().slice(0, 10);
+
 /** "4 March 2026". */
 export const formatDate = (moment: Date | string | number, timeZone?: string): string =>
 	style({ day: 'numeric', month: 'long', year: 'numeric' }, zoneOf(moment, timeZone)).format(toDate(moment));

@@ -35,6 +35,10 @@ export function formatKelvinChange(differenceK: number, decimals = 1): string {
 export const formatAmpHours = (chargeAh: number): string =>
 	formatWithUnit(chargeAh, 'Ah', Math.abs(chargeAh) < 9.95 ? 1 : 0);
 
+/** A capacity as it was given or measured: to a tenth where it is not whole. */
+export const formatCapacity = (capacityAh: number): string =>
+	formatWithUnit(capacityAh, 'Ah', Number.isInteger(capacityAh) ? 0 : 1);
+
 export const formatAmps = (currentA: number): string =>
 	formatWithUnit(currentA, 'A', Number.isInteger(currentA) ? 0 : 1);
 

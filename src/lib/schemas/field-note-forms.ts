@@ -32,15 +32,15 @@ export const FIELD_NOTE_FORMS = {
 	'peak-label': peakLabelSchema.omit({ kind: true }),
 	'cut-out': z.object({
 		notedOn,
-		wentDark: clock('Went dark'),
+		wentDark: clock('Went dark at'),
 		cameBack: z
 			.string()
 			.trim()
 			.refine((text) => text === '' || CLOCK.test(text), {
-				error: 'Came back must be a time such as 19:30, or empty.'
+				error: 'Came back by itself at must be a time such as 19:30, or empty.'
 			})
 			.default('')
-			.meta({ label: 'Came back by itself' }),
+			.meta({ label: 'Came back by itself at' }),
 		within: z
 			.enum(
 				WITHIN_CHOICES.map(({ value }) => value),

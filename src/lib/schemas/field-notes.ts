@@ -44,8 +44,8 @@ export const peakLabelSchema = z.object({
 export const cutOutSchema = z.object({
 	kind: z.literal('cut-out'),
 	notedOn: pastDay('The day'),
-	wentDarkHour: hour('Went dark'),
-	cameBackHour: hour('Came back by itself').nullable(),
+	wentDarkHour: hour('Went dark at'),
+	cameBackHour: hour('Came back by itself at').nullable(),
 	withinHours: measure('Known to within', 'h', 0.05, 6),
 	hottestDayC
 });

@@ -1,9 +1,13 @@
 import { z } from 'zod';
+import { latestToday } from '../format/dates';
 import { optionalWords, versionSchema, words } from './fields';
 
 /** One thing that was agreed before it was fitted. */
 export const agreedItemSchema = z.object({ key: z.string(), label: z.string(), agreed: z.string() });
 export type AgreedItem = z.infer<typeof agreedItemSchema>;
+
+/** Of what the shop has proposed nothing for. */
+export const NOT_PROPOSED = 'not proposed';
 
 /** Everything that may be agreed, in the order in which one would look. */
 export const FITTED_KEYS = ['battery', 'position', 'shield', 'cable', 'fuse', 'charger'] as const;
@@ -21,6 +25,7 @@ export const pastDay = (label: string) =>
 	z.iso
 		.date({ error: `${label} must be a day, such as 2026-03-04.` })
 		.refine((day) => day >= '2000-01-01', { error: `${label} must be 2000-01-01 or later.` })
+		.refine((day) => day <= latestToday(), { error: `${label} must not be in the future.` })
 		.meta({ label });
 
 const fittingFields = {

@@ -1,6 +1,6 @@
 import type { LifeCurve } from '../../schemas/outlook-reports';
 
-export const LIFE_BOX = { width: 340, height: 200, left: 34, right: 52, top: 18, bottom: 34 } as const;
+export const LIFE_BOX = { width: 340, height: 200, left: 34, right: 62, top: 18, bottom: 34 } as const;
 
 export interface LifeDrawing {
 	/** Of the first curve: where what is left may lie. */

@@ -1,5 +1,6 @@
 import { DEFERENCE } from '$lib/format/deference';
 import { formatDate } from '$lib/format/dates';
+import { hasBms } from '$lib/schemas/batteries';
 import type { Paper, PaperBlock } from '$lib/schemas/papers';
 import {
 	tellBattery,
@@ -17,6 +18,21 @@ const WHEN_DARK = [
 	'Write down when it went dark, when it came back and how hot the day was: with that the workshop can tell whether it was heat.',
 	'If it went dark on a cool day, or does not come back within a day, have it looked at.'
 ];
+
+/** The same of a battery that nothing switches off: engineering judgement, no source. */
+const WHEN_TOO_HOT = [
+	'Nothing switches this battery off when it gets too hot: it goes on being charged, gives off more gas and wears out sooner.',
+	'On a hot day stop charging it where you can, stand in the shade with the engine off and the bonnet up, and give it hours to cool before it is charged again.',
+	'Write down the day, how hot it was, and what the heat label on the case shows: with that the workshop can tell how hot it got.',
+	'A smell of bad eggs, a case that is wet or swollen, or terminals too hot to touch: stop charging, keep flames and sparks away, and have it looked at before it is used again.'
+];
+
+const tellHeat = ({ paper }: MountRecord): PaperBlock => {
+	const kind = 'words';
+	return hasBms(paper.chemistry)
+		? { kind, title: 'When it goes dark', sentences: WHEN_DARK }
+		: { kind, title: 'When it gets too hot', sentences: WHEN_TOO_HOT };
+};
 
 const tellEstimate = ({ paper: { outlook } }: MountRecord): PaperBlock => ({
 	...{ kind: 'words', title: 'What to expect' },
@@ -47,7 +63,7 @@ export function layHandover(record: MountRecord): Paper {
 				: []),
 			tellEstimate(record),
 			tellDay(record),
-			{ kind: 'words', title: 'When it goes dark', sentences: WHEN_DARK },
+			tellHeat(record),
 			tellFollowUps(record),
 			{ kind: 'cautions', cautions: paper.cautions },
 			{ kind: 'words', sentences: [DEFERENCE.replace('recommendation', 'handover')] },

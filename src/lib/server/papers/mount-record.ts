@@ -1,5 +1,5 @@
 import type { FieldNotesView } from '$lib/schemas/field-notes';
-import type { FittingView } from '$lib/schemas/fitting';
+import { NOT_PROPOSED, type AgreedItem, type FittingView } from '$lib/schemas/fitting';
 import type { PaperBlock, PaperPhoto } from '$lib/schemas/papers';
 import type { PreDrillView } from '$lib/schemas/pre-drill';
 import type { AcknowledgementView } from '$lib/schemas/sheets';
@@ -21,12 +21,14 @@ export interface MountRecord {
 }
 
 export const AS_AGREED = 'as agreed';
+const NOT_NOTED = 'not noted';
 
 /** What was agreed and what was fitted, one beside the other. */
 export function tellFitted({ agreed, installation }: MountRecord['fitting']): PaperBlock[] {
 	const { differences, note } = installation;
-	const fittedOf = (key: string): string =>
-		differences.find((difference) => difference.key === key)?.fitted ?? AS_AGREED;
+	const fittedOf = ({ key, agreed }: AgreedItem): string =>
+		differences.find((difference) => difference.key === key)?.fitted ??
+		(agreed === NOT_PROPOSED ? NOT_NOTED : AS_AGREED);
 	const sentence =
 		differences.length === 0
 			? 'Everything was fitted as agreed.'
@@ -35,7 +37,7 @@ export function tellFitted({ agreed, installation }: MountRecord['fitting']): Pa
 		{
 			...{ kind: 'table', title: 'What was agreed, and what was fitted', empty: '' },
 			heads: ['', 'Agreed', 'Fitted'],
-			rows: agreed.map(({ key, label, agreed }) => [label, agreed, fittedOf(key)])
+			rows: agreed.map((item) => [item.label, item.agreed, fittedOf(item)])
 		},
 		{ kind: 'words', sentences: [sentence, ...(note ? [`Note: ${note}`] : [])] }
 	];

@@ -23,7 +23,9 @@ function sayRead(data: FieldNoteData): string {
 	return `The heat label on the battery has turned at ${formatTemperature(data.turnedC)}, on days of up to ${formatTemperature(data.hottestDayC)}.`;
 }
 
-function sayLesson({ fits, before, after }: Learning, event: string): string {
+function sayLesson({ fits, before, after }: Learning, event: string, isCutOut: boolean): string {
+	if (!fits && isCutOut)
+		return 'Heat explains that by itself, but it does not agree with what was read on this battery before. The estimate stays as it was, and we look at the battery and the readings again.';
 	if (!fits)
 		return 'That does not fit what we had thought possible. The estimate stays as it was, and we look at the battery and the reading again.';
 	const [was, is] = [before.year.year.middle, after.year.year.middle];
@@ -53,7 +55,7 @@ export function presentLesson(note: FieldNote, { jobId, mountId, chemistry }: No
 	return [
 		{
 			...{ jobId, mountId, on: note.notedOn, read: sayRead(note.data) },
-			sentence: sayLesson(learning, event),
+			sentence: sayLesson(learning, event, note.data.kind === 'cut-out'),
 			figures: fits ? figures : null
 		}
 	];

@@ -1,6 +1,6 @@
 import { formatDate } from '$lib/format/dates';
 import {
-	formatAmpHours,
+	formatCapacity,
 	formatAmps,
 	formatKelvin,
 	formatNumber,
@@ -26,7 +26,7 @@ function sayData(data: FieldNoteData): string {
 		case 'inspection':
 			return data.words;
 		case 'capacity-test':
-			return `${formatAmpHours(data.capacityAh)} at ${formatAmps(data.currentA)} down to ${formatWithUnit(data.cutOffV, 'V', 1)}, battery at ${formatTemperature(data.tempC)}.`;
+			return `${formatCapacity(data.capacityAh)} at ${formatAmps(data.currentA)} down to ${formatWithUnit(data.cutOffV, 'V', 1)}, battery at ${formatTemperature(data.tempC)}.`;
 		case 'peak-label': {
 			const turned =
 				data.turnedC === null ? 'No field has turned' : `${formatTemperature(data.turnedC)} has turned`;
@@ -77,18 +77,26 @@ function presentCause(cause: HeatCause | null): NoteReport['cause'] {
 	};
 }
 
-function sayLearnt({ fits, unknowns, before, after }: Learning): string {
+function sayLearnt({ fits, unknowns, before, after }: Learning, cause: HeatCause | null): string {
+	if (!fits && cause?.finding === 'explained') {
+		return 'By itself heat explains it, but not together with what was noted of this mount before: one of the two is off, or the mount is not as it was. Look at the earlier readings, the label and the shielding before you go by either. Nothing was changed.';
+	}
 	if (!fits) {
 		return 'This lies outside of what the estimate held possible: look at the reading again, and at the survey. Nothing was changed.';
 	}
 	const [was, is] = [before.year.year.middle, after.year.year.middle];
 	const told = unknowns.slice(0, 3).map(({ label }) => label);
 	const about = told.length > 0 ? ` It tells most of ${joinWords(told)}.` : '';
-	const change = is < was * 0.95 ? 'fewer' : is > was * 1.05 ? 'more' : 'about as many';
-	return `With this ${change} dark days are to be expected than before.${about}`;
+	const change =
+		is < was * 0.95
+			? 'fewer dark days than'
+			: is > was * 1.05
+				? 'more dark days than'
+				: 'about as many dark days as';
+	return `With this ${change} before are to be expected.${about}`;
 }
 
-function presentLearning(learning: Learning | null): NoteReport['learning'] {
+function presentLearning(learning: Learning | null, cause: HeatCause | null): NoteReport['learning'] {
 	if (!learning) return null;
 	const { before, after, fits, samples, seed, effectiveSamples } = learning;
 	const range = ({ headroomLowK, headroomMiddleK, headroomHighK }: typeof before): string =>
@@ -97,7 +105,7 @@ function presentLearning(learning: Learning | null): NoteReport['learning'] {
 		...{ label, before: read(before), after: read(after) }
 	});
 	return {
-		sentence: sayLearnt(learning),
+		sentence: sayLearnt(learning, cause),
 		rows: fits
 			? [
 					row('Dark days a year', ({ year }) => sayDayCount(year.year)),
@@ -117,7 +125,7 @@ export function presentNote({ id, kind, notedOn, notedBy, data, finding }: Field
 		when: `${formatDate(notedOn)}, noted by ${notedBy}`,
 		words: sayData(data),
 		cause: presentCause(finding?.cause ?? null),
-		learning: presentLearning(finding?.learning ?? null)
+		learning: presentLearning(finding?.learning ?? null, finding?.cause ?? null)
 	};
 }
 
@@ -184,7 +192,7 @@ export function presentTrend({ trend, ratedAh, namedAh, expected }: FieldNotesVi
 				fiveYears: `${formatPercent(middle)} (${formatPercent(low)} to ${formatPercent(high)})`
 			};
 		}),
-		named: namedAh === null ? '' : formatAmpHours(namedAh),
+		named: namedAh === null ? '' : formatCapacity(namedAh),
 		curves: [
 			...(expected && expected.length > 0 ? [{ label: ESTIMATE, years: expected }] : []),
 			{ label: BY_TESTS, years: by.points.filter(({ years }) => years > 0) }

@@ -1,5 +1,5 @@
 import { formatAmps } from '$lib/format/numbers';
-import type { AgreedItem, FittingView, FollowUpView } from '$lib/schemas/fitting';
+import { NOT_PROPOSED, type AgreedItem, type FittingView, type FollowUpView } from '$lib/schemas/fitting';
 import type { SurveyAnswers } from '$lib/schemas/survey';
 import { describeAssumed, SURVEY_FIELDS } from '$lib/thermal/survey';
 import type { Assessment, FollowUp, Installation, Mount } from '../db/models';
@@ -19,8 +19,8 @@ export function listAgreed({ inputs }: Assessment): AgreedItem[] {
 		{ key: 'battery', label: 'Battery', agreed: `${battery.maker} ${battery.model}` },
 		{ key: 'position', label: 'Position', agreed: `${mount.letter}: ${mount.name}` },
 		{ key: 'shield', label: 'Shield', agreed: sayShield(mount.survey) },
-		{ key: 'cable', label: 'Cable', agreed: cable ? sayProposal(cable) : 'not proposed' },
-		{ key: 'fuse', label: 'Fuse', agreed: cable ? formatAmps(cable.fuseRatedA) : 'not proposed' },
+		{ key: 'cable', label: 'Cable', agreed: cable ? sayProposal(cable) : NOT_PROPOSED },
+		{ key: 'fuse', label: 'Fuse', agreed: cable ? formatAmps(cable.fuseRatedA) : NOT_PROPOSED },
 		{ key: 'charger', label: 'Charger', agreed: `at most ${formatAmps(dayPlan.chargerMaxA)}` }
 	];
 }

@@ -1,5 +1,5 @@
 import { formatDate } from '$lib/format/dates';
-import { formatAmpHours, formatTemperature } from '$lib/format/numbers';
+import { formatCapacity, formatTemperature } from '$lib/format/numbers';
 import { formatClockHour } from '$lib/format/time';
 import { sayVerdict } from '$lib/format/verdict';
 import type { FieldNoteData } from '$lib/schemas/field-notes';
@@ -105,7 +105,7 @@ function sayNote(data: FieldNoteData): string {
 		case 'inspection':
 			return data.words;
 		case 'capacity-test':
-			return `It holds ${formatAmpHours(data.capacityAh)}.`;
+			return `It holds ${formatCapacity(data.capacityAh)}.`;
 		case 'peak-label':
 			return data.turnedC === null
 				? 'No field of it has turned.'

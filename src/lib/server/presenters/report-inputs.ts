@@ -4,7 +4,7 @@ import { formatClimateZone } from '$lib/format/climate-zones';
 import { sayDaysOnRoad } from '$lib/format/days-on-road';
 import {
 	formatAmps,
-	formatAmpHours,
+	formatCapacity,
 	formatKelvin,
 	formatMass,
 	formatNumber,
@@ -69,7 +69,7 @@ export function listBattery(inputs: AssessmentInputs): ReportLine[] {
 	const { maker, model, chemistry, capacityAh, lengthMm, widthMm, heightMm, massKg } = battery;
 	const size = [lengthMm, widthMm, heightMm].map((each) => formatNumber(each)).join(' × ');
 	return [
-		{ label: 'Battery', value: `${maker} ${model}, ${formatAmpHours(capacityAh)}` },
+		{ label: 'Battery', value: `${maker} ${model}, ${formatCapacity(capacityAh)}` },
 		{ label: 'Chemistry', value: CHEMISTRY_WORDS[chemistry] },
 		{ label: 'Size and mass', value: `${size} mm, ${formatWithUnit(massKg, 'kg', 1)}` },
 		...listGuard(battery),

@@ -1,10 +1,6 @@
 /** Days without a time, as "2026-03-04". */
 export const today = (now = new Date()): string => now.toISOString().slice(0, 10);
 
-/** East of all others the day is fourteen hours ahead: what somebody calls today is not in the future. */
-const FURTHEST_EAST_MS = 14 * 3_600_000;
-export const latestToday = (now = new Date()): string => today(new Date(now.getTime() + FURTHEST_EAST_MS));
-
 const DAY_MS = 86_400_000;
 
 export const addDays = (day: string, days: number): string =>

@@ -1,9 +1,10 @@
 import { describe, expect, it } from 'vitest';
-import { makeFitted, makeRecommended } from '../../../../tests/support/fitted';
+import { FITTED, makeFitted, makeRecommended } from '../../../../tests/support/fitted';
 import { makeCrew, useTestDatabase } from '../../../../tests/support/services';
 import { connection } from '../db/connection';
 import { presentNote, presentTrend } from '../presenters/field-reports';
 import { addFieldNote, keepFieldNote, listFieldNotes, weighFieldNote } from './field-notes';
+import { getFitting, saveFitting } from './fittings';
 import { getOutlook } from './outlooks';
 
 useTestDatabase();
@@ -138,7 +139,6 @@ describe('notes from the field', () => {
 
 	it.each([
 		['a day before it was fitted', { notedOn: '2025-12-31' }, 'notedOn'],
-		['a day that has not come', { notedOn: '2999-01-01' }, 'notedOn'],
 		['a label on which nothing was read', { turnedC: null, notTurnedC: null }, 'turnedC']
 	])('are refused for %s, and nothing is kept', async (_, change, path) => {
 		const { installer, mountId } = await makeMount();
@@ -146,6 +146,17 @@ describe('notes from the field', () => {
 		const note = { ...label, turnedC: 60, notTurnedC: 65, ...change };
 		await expect(addFieldNote(installer, mountId, note)).rejects.toMatchObject({ problems: [{ path }] });
 		expect((await listFieldNotes(installer, mountId)).rows).toEqual([]);
+	});
+
+	it('take no capacity that the battery cannot have, unless another one was fitted', async () => {
+		const { installer, mountId } = await makeMount();
+		const refusal = addFieldNote(installer, mountId, test('2026-02-10', 450));
+		await expect(refusal).rejects.toMatchObject({ problems: [{ path: 'capacityAh' }] });
+		await expect(refusal).rejects.toThrow(/^Capacity found must be at most 150\\sAh/);
+		const { installation } = await getFitting(installer, mountId);
+		const differences = [{ key: 'battery' as const, fitted: 'One of 400 Ah' }];
+		await saveFitting(installer, mountId, { ...FITTED, differences, version: installation!.version });
+		expect((await addFieldNote(installer, mountId, test('2026-02-10', 450))).rows).toHaveLength(1);
 	});
 
 	it('wait until something is fitted, and are not there for another workshop', async () => {

@@ -1,3 +1,5 @@
+import { formatDate } from '$lib/format/dates';
+import { formatCapacity } from '$lib/format/numbers';
 import type { FieldFinding, FieldNoteInput, FieldNotesView } from '$lib/schemas/field-notes';
 import type { SignedInPerson } from '$lib/schemas/people';
 import { ENGINE_VERSION, parseScenario } from '$lib/thermal';
@@ -18,7 +20,7 @@ import { allow } from '../policies';
 import { presentFieldNote } from '../presenters/field-notes';
 import { checkLabel, keepLabelCheck, type LabelCheck } from './accuracy/label-checks';
 import { recordBy } from './audit';
-import { daysBetween, latestToday } from './days';
+import { daysBetween } from './days';
 import { readingOf, scenarioOn } from './field-readings';
 import { findStandingMount } from './mounts';
 import { listKeptOutlooks } from './outlooks';
@@ -90,18 +92,36 @@ async function findOut(
 const LABELS: Readonly<Record<string, string>> = {
 	turnedC: 'Highest field that has turned',
 	notTurnedC: 'Lowest field that has not',
-	wentDarkHour: 'Went dark',
-	cameBackHour: 'Came back'
+	wentDarkHour: 'Went dark at',
+	cameBackHour: 'Came back by itself at'
 };
 const sayLabelled = ({ input, message }: EngineInputError): string =>
 	message.startsWith(input) ? `${LABELS[input] ?? input}${message.slice(input.length)}` : message;
 
-function refuseImpossible(data: FieldNoteInput, fittedOn: string): void {
+/** A new battery holds some more than its rating, hardly half as much again: judgement, no source. */
+const MOST_OF_RATED = 1.5;
+
+/** The most that a test can have found; unknown where another battery was fitted than the one that was agreed. */
+function mostCapacityAh({ installation, assessment }: Fitted): number | null {
+	const isOther = installation.differences.some(({ key }) => key === 'battery');
+	return isOther ? null : MOST_OF_RATED * assessment.inputs.battery.capacityAh;
+}
+
+function refuseImpossible(data: FieldNoteInput, fitted: Fitted): void {
+	const { fittedOn } = fitted.installation;
 	const refuse = (path: string, message: string): never => {
 		throw new AppError('invalid_input', message, [{ path, message }]);
 	};
-	if (data.notedOn > latestToday()) refuse('notedOn', 'The day must not be in the future.');
-	if (data.notedOn < fittedOn) refuse('notedOn', `The day must not be before it was fitted, ${fittedOn}.`);
+	if (data.notedOn < fittedOn)
+		refuse('notedOn', `The day must not be before it was fitted, ${formatDate(fittedOn)}.`);
+	const mostAh = mostCapacityAh(fitted);
+	if (data.kind === 'capacity-test' && mostAh !== null && data.capacityAh > mostAh) {
+		const rated = formatCapacity(fitted.assessment.inputs.battery.capacityAh);
+		refuse(
+			'capacityAh',
+			`Capacity found must be at most ${formatCapacity(mostAh)}, one and a half times the ${rated} of this battery.`
+		);
+	}
 	const reading = readingOf(data);
 	if (reading === null) return;
 	try {
@@ -189,8 +209,9 @@ export async function weighFieldNote(
 	effort = FULL_LEARNING
 ): Promise<WeighedNote> {
 	allow(person, 'mounts.write');
-	const { installation, assessment } = await findFitted(person, mountId);
-	refuseImpossible(data, installation.fittedOn);
+	const fitted = await findFitted(person, mountId);
+	const { installation, assessment } = fitted;
+	refuseImpossible(data, fitted);
 	const earlier = await notesOf(installation);
 	const finding = await findOut(assessment, earlier, data, { ...effort, seed: installation.id });
 	const check = await checkLabel(installation, data);

@@ -4,6 +4,7 @@ import { makeCrew, useTestDatabase } from '../../../../tests/support/services';
 import { Customer, FollowUp, Job, OutgoingMail } from '../db/models';
 import { addDays, addMonths, daysBetween } from './days';
 import { writeCalendar } from './follow-up-calendar';
+import { addFieldNote } from './field-notes';
 import { finishFollowUp, getFitting, saveFitting } from './fittings';
 import { removeMount } from './mounts';
 import { remindDue } from './reminders';
@@ -49,13 +50,35 @@ describe('what was fitted', () => {
 		expect(looked!.doneOn).not.toBeNull();
 	});
 
-	it.each([
-		['a day that has not come', { fittedOn: '2999-01-01' }, 'invalid_input'],
-		['an older version', { version: 7 }, 'changed_meanwhile']
-	])('refuses %s', async (_, change, code) => {
+	it('refuses an older version', async () => {
 		const { installer } = await makeCrew();
 		const { mountId } = await makeFitted(installer);
-		await expect(saveFitting(installer, mountId, { ...FITTED, ...change })).rejects.toMatchObject({ code });
+		await expect(saveFitting(installer, mountId, { ...FITTED, version: 7 })).rejects.toMatchObject({
+			code: 'changed_meanwhile'
+		});
+	});
+
+	it('was not fitted after somebody had noted something of it, or looked at it', async () => {
+		const { installer } = await makeCrew();
+		const { mountId, fitting } = await makeFitted(installer);
+		const move = (fittedOn: string, version: number) =>
+			saveFitting(installer, mountId, { ...FITTED, fittedOn, version });
+		await addFieldNote(installer, mountId, { kind: 'inspection', notedOn: '2026-02-20', words: 'Sound.' });
+		const { installation } = await move('2026-02-20', fitting.installation!.version);
+		await expect(move('2026-02-21', installation!.version)).rejects.toMatchObject({
+			message: 'Fitted on must not be after the first field note of it, 20 February 2026.',
+			problems: [{ path: 'fittedOn' }]
+		});
+		const other = await makeFitted(installer);
+		const [look] = other.fitting.followUps;
+		await finishFollowUp(installer, look!.id, { isDone: true, version: look!.version });
+		await FollowUp.update({ doneOn: '2026-03-01' }, { where: { id: look!.id } });
+		await expect(
+			saveFitting(installer, other.mountId, {
+				...{ ...FITTED, fittedOn: '2026-03-02' },
+				version: other.fitting.installation!.version
+			})
+		).rejects.toThrow('Fitted on must not be after the first look at it, 1 March 2026.');
 	});
 
 	it('waits for a recommendation, and is not there for another workshop', async () => {

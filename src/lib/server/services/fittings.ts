@@ -5,14 +5,15 @@ import {
 	type FittingView,
 	type FollowUpChange
 } from '$lib/schemas/fitting';
+import { formatDate } from '$lib/format/dates';
 import type { SignedInPerson } from '$lib/schemas/people';
-import { Assessment, FollowUp, Installation, Recommendation, type Mount } from '../db/models';
+import { Assessment, FieldNote, FollowUp, Installation, Recommendation, type Mount } from '../db/models';
 import { inTransaction } from '../db/transaction';
 import { AppError, changedMeanwhile, notFound } from '../errors';
 import { allow } from '../policies';
 import { listAgreed, presentFitting } from '../presenters/fittings';
 import { recordBy } from './audit';
-import { addMonths, latestToday, today } from './days';
+import { addMonths, today } from './days';
 import { findStandingMount } from './mounts';
 import { saveVersioned } from './records';
 import { refreshReview } from './review/keep-review';
@@ -69,10 +70,20 @@ async function setFollowUps(
 	}
 }
 
-function refuseFuture({ fittedOn }: FittingChange): void {
-	if (fittedOn <= latestToday()) return;
-	const message = 'Fitted on must not be in the future.';
-	throw new AppError('invalid_input', message, [{ path: 'fittedOn', message }]);
+/** Nothing can have been noted or looked at before it was fitted. */
+async function refuseAfterwards({ id: installationId }: Installation, fittedOn: string): Promise<void> {
+	const where = { installationId };
+	const firstNote = await FieldNote.findOne({ where, order: [['notedOn', 'ASC']] });
+	const looks = await FollowUp.findAll({ where });
+	const refuse = (what: string): never => {
+		const message = `Fitted on must not be after ${what}.`;
+		throw new AppError('invalid_input', message, [{ path: 'fittedOn', message }]);
+	};
+	if (firstNote && firstNote.notedOn < fittedOn) {
+		refuse(`the first field note of it, ${formatDate(firstNote.notedOn)}`);
+	}
+	const [firstLook] = looks.flatMap(({ doneOn }) => doneOn ?? []).sort();
+	if (firstLook && firstLook < fittedOn) refuse(`the first look at it, ${formatDate(firstLook)}`);
 }
 
 /** Keeps what was fitted against what was agreed, and sets the dates at which it is to be looked at. */
@@ -82,13 +93,13 @@ export async function saveFitting(
 	change: FittingChange
 ): Promise<FittingView> {
 	allow(person, 'mounts.write');
-	refuseFuture(change);
 	const { version, ...fitted } = change;
 	return inTransaction(async (transaction) => {
 		const mount = await findStandingMount(person, mountId);
 		let installation = await Installation.findOne({ where: { mountId }, lock: true, transaction });
 		if (installation) {
 			if (version === null) throw changedMeanwhile('fitting');
+			await refuseAfterwards(installation, fitted.fittedOn);
 			await saveVersioned(installation, 'fitting', version, fitted, transaction);
 		} else {
 			const agreed = await findAgreed(mount);
