@@ -72,13 +72,8 @@ const LAY_OUT: LayOut = {
 		rows.length === 0 ? { text: empty, color: MUTED } : ruled(heads, rows, [], WIDTHS)
 	],
 	picture: ({ svg, caption }) => [
-		{
-			stack: [
-				{ svg, width: mm(170) },
-				{ text: caption, margin: [0, mm(1.5), 0, 0] }
-			],
-			unbreakable: true
-		}
+		{ svg, width: mm(170) },
+		{ text: caption, margin: [0, mm(1.5), 0, 0] }
 	],
 	photos: async ({ photos }, read) => [await layPhotos(photos, read)],
 	cautions: ({ cautions }) => [
@@ -103,6 +98,7 @@ async function layBlock(block: PaperBlock, read: ReadPhoto): Promise<Content> {
 	const content = await lay(block, read);
 	return {
 		stack: [...(title ? [heading(title, HEADING)] : []), ...content],
+		unbreakable: block.kind === 'words' || block.kind === 'picture',
 		margin: [0, mm(title ? 4 : 1), 0, 0]
 	};
 }

@@ -152,7 +152,7 @@ describe('notes from the field', () => {
 		const { installer, mountId } = await makeMount();
 		const refusal = addFieldNote(installer, mountId, test('2026-02-10', 450));
 		await expect(refusal).rejects.toMatchObject({ problems: [{ path: 'capacityAh' }] });
-		await expect(refusal).rejects.toThrow(/^Capacity found must be at most 150\\sAh/);
+		await expect(refusal).rejects.toThrow(/^Capacity found must be at most 150\sAh/);
 		const { installation } = await getFitting(installer, mountId);
 		const differences = [{ key: 'battery' as const, fitted: 'One of 400 Ah' }];
 		await saveFitting(installer, mountId, { ...FITTED, differences, version: installation!.version });
