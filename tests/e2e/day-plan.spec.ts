@@ -152,7 +152,7 @@ test.describe('with a script', () => {
 		await legs(page).nth(2).getByLabel('Length').fill('all day');
 		await opener(page, 1).click();
 		await save(page).click();
-		const problem = page.getByRole('link', { name: 'Leg 3: Length must be a number of min.' });
+		const problem = page.getByRole('link', { name: 'Leg 3: Length must be a number of min from 1 to 1440.' });
 		await expect(problem).toBeVisible();
 		await expect(page).toHaveTitle(/^Error: /);
 		await expect(legs(page).nth(2).getByLabel('Length')).toHaveValue('all day');
@@ -216,7 +216,9 @@ test.describe('without a script', () => {
 		await page.getByRole('button', { name: 'Put it back' }).click();
 		await expect(page.getByLabel('Length').nth(1)).toHaveValue('two hours');
 		await save(page).click();
-		await expect(page.getByRole('link', { name: 'Leg 2: Length must be a number of min.' })).toBeVisible();
+		await expect(
+			page.getByRole('link', { name: 'Leg 2: Length must be a number of min from 1 to 1440.' })
+		).toBeVisible();
 		await page.getByLabel('Length').nth(1).fill('2 h');
 		await save(page).click();
 		await page.waitForURL((url) => url.pathname === `/jobs/${jobId}`);

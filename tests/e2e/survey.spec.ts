@@ -310,7 +310,7 @@ test.describe('without a script', () => {
 		await page.getByLabel('Rubber mat').check();
 		await next(page).click();
 		await expect(
-			page.getByRole('link', { name: 'Thickness of the tray must be a number of mm.' })
+			page.getByRole('link', { name: 'Thickness of the tray must be a number of mm from' })
 		).toBeVisible();
 		await expect(page.getByRole('textbox', { name: 'Length of the tray' })).toHaveValue('40 cm');
 		await expect(page.getByLabel('Width of the tray: I do not know')).toBeChecked();

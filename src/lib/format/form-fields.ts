@@ -1,4 +1,4 @@
-import type { z } from 'zod';
+import { z } from 'zod';
 import type { FieldMeta } from '../schemas/fields';
 
 /** How a field is written in a form: as text that is a number, as text, as a box to tick, or in parts. */
@@ -56,6 +56,20 @@ export function blankOf(schema: z.ZodType): null | undefined {
 	const { type, innerType } = defOf(schema);
 	if (type === 'nullable') return null;
 	return innerType && type === 'optional' ? blankOf(innerType) : undefined;
+}
+
+const isLimit = (value: number | null): value is number =>
+	value !== null && Number.isFinite(value) && Math.abs(value) < Number.MAX_SAFE_INTEGER;
+
+/** The least and the most that a number may be; null where either is open. */
+export function limitsOf(schema: z.ZodType): { least: number; most: number } | null {
+	const inner = unwrapField(schema);
+	if (!(inner instanceof z.ZodNumber)) {
+		const number = defOf(inner).options?.find((option) => kindOfField(option) === 'number');
+		return number ? limitsOf(number) : null;
+	}
+	const { minValue: least, maxValue: most } = inner;
+	return isLimit(least) && isLimit(most) ? { least, most } : null;
 }
 
 /** The label of each field of an object schema; a field without one is left out. */

@@ -24,7 +24,7 @@ describe('a form held by superforms', () => {
 		expect(form.data).toMatchObject({ make: 'Marl', massKg: '2,9 t', dragAreaM2: 'like a barn', model: '' });
 		expect(form.errors).toMatchObject({
 			model: ['Model is missing.'],
-			dragAreaM2: ['Drag area must be a number of m².']
+			dragAreaM2: ['Drag area must be a number of m² from 0.3 to 6.']
 		});
 		expect(form.errors.massKg).toBeUndefined();
 	});

@@ -71,7 +71,7 @@ describe('parseForm', () => {
 	it('keeps what was typed, word for word, beside the errors', () => {
 		const answer = parseForm(bench, { ...TYPED, gapMm: 'a hand', name: ' x ' });
 		expect(answer).toEqual({
-			errors: [{ path: 'gapMm', message: 'Gap must be a number of mm.' }],
+			errors: [{ path: 'gapMm', message: 'Gap must be a number of mm from 0 to 2000.' }],
 			values: { ...TYPED, gapMm: 'a hand', name: ' x ', wrapped: false, read: true }
 		});
 	});
@@ -81,7 +81,7 @@ describe('parseForm', () => {
 			{ path: 'name', message: 'Name is missing.' },
 			{ path: 'gapMm', message: 'Gap must be at most 2000 mm.' },
 			{ path: 'tempC', message: 'Hottest is missing.' },
-			{ path: 'year', message: 'Year must be a number.' },
+			{ path: 'year', message: 'Year must be a number from 1950 to 2050.' },
 			{ path: 'facing', message: 'How it faces is missing.' },
 			{ path: 'read', message: 'Tick the box.' }
 		]);
@@ -89,7 +89,7 @@ describe('parseForm', () => {
 
 	it('refuses a choice that is not one, and a unit of another kind', () => {
 		expect(errorsOf({ facing: 'sideways', gapMm: '20 kg' })).toEqual([
-			{ path: 'gapMm', message: 'Gap must be a number of mm.' },
+			{ path: 'gapMm', message: 'Gap must be a number of mm from 0 to 2000.' },
 			{ path: 'facing', message: 'How it faces: choose one of the answers.' }
 		]);
 	});
@@ -98,7 +98,7 @@ describe('parseForm', () => {
 		const answer = parseForm(bench, { ...TYPED, spareMm: 'unknown' });
 		expect('data' in answer && answer.data.spareMm).toBe('unknown');
 		expect(errorsOf({ spareMm: 'perhaps' })).toEqual([
-			{ path: 'spareMm', message: 'Spare must be a number of mm.' }
+			{ path: 'spareMm', message: 'Spare must be a number of mm from 0 to 100.' }
 		]);
 	});
 
@@ -184,7 +184,7 @@ describe('lists in a form', () => {
 		);
 		const answer = parseForm(dayPlanInputSchema, { ...moved, 'legs.7.minutes': 'all night' });
 		expect('errors' in answer && answer.errors).toEqual([
-			{ path: 'legs.1.minutes', message: 'Length must be a number of min.' }
+			{ path: 'legs.1.minutes', message: 'Length must be a number of min from 1 to 1440.' }
 		]);
 	});
 

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { blankOf, elementOf, kindOfField, metaOfField, shapeOf, unwrapField } from './form-fields';
+import { blankOf, elementOf, kindOfField, limitsOf, metaOfField, shapeOf, unwrapField } from './form-fields';
 import { writeNumber } from './numbers';
 import { parseDecimal } from './parse';
 import { parseMeasure } from './units';
@@ -105,9 +105,17 @@ class FormReader {
 		if (value !== null) return value;
 		// A field may also take a word in place of a number, such as that nobody knows.
 		if (schema.safeParse(text.trim()).success) return text.trim();
-		this.problems.push({ path, message: `${label} must be a number${unit ? ` of ${unit}` : ''}.` });
+		this.problems.push({ path, message: `${label} must be ${sayNumber(schema)}.` });
 		return undefined;
 	}
+}
+
+/** "a number of mm from 0 to 2000". */
+function sayNumber(schema: z.ZodType): string {
+	const { unit } = metaOfField(schema);
+	const limits = limitsOf(schema);
+	const range = limits ? ` from ${writeNumber(limits.least)} to ${writeNumber(limits.most)}` : '';
+	return `a number${unit ? ` of ${unit}` : ''}${range}`;
 }
 
 function listIndexes(entries: FormEntries, start: string): number[] {

@@ -78,7 +78,7 @@ describe('a day plan in boxes', () => {
 		const typed = draft();
 		typed.legs[2]!.minutes = 'long';
 		expect(parsePlan(typed)).toEqual({
-			problems: [{ path: 'legs.2.minutes', message: 'Leg 3: Length must be a number of min.' }]
+			problems: [{ path: 'legs.2.minutes', message: 'Leg 3: Length must be a number of min from 1 to 1440.' }]
 		});
 		const speeding = draft();
 		speeding.legs[1]!.speedKmh = '30';

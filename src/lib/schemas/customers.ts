@@ -1,10 +1,10 @@
 import { z } from 'zod';
-import { editedSchema, optionalEmail, optionalWords, words } from './fields';
+import { editedSchema, optionalEmail, optionalPhone, words } from './fields';
 
 export const customerInputSchema = z.object({
 	name: words('Customer name', 120),
 	email: optionalEmail('Customer e-mail'),
-	phone: optionalWords('Customer phone', 40)
+	phone: optionalPhone('Customer phone')
 });
 export type CustomerInput = z.infer<typeof customerInputSchema>;
 

@@ -41,7 +41,7 @@ export function measure(label: string, unit: MeasureUnit, min: number, max: numb
 export function wholeNumber(label: string, min: number, max: number) {
 	return z
 		.number({ error: `${label} must be a number.` })
-		.int({ error: `${label} must be a whole number.` })
+		.int({ error: `${label} must be a whole number from ${min} to ${max}.` })
 		.min(min, { error: `${label} must be at least ${min}.` })
 		.max(max, { error: `${label} must be at most ${max}.` })
 		.meta({ label });
@@ -92,6 +92,18 @@ export function optionalEmail(label: string) {
 		.refine((value) => value === '' || z.email().safeParse(value).success, {
 			error: `${label} ${EMAIL_WORDS}`
 		})
+		.meta({ label });
+}
+
+/** Digits and what people put between them, then perhaps an extension; the first of them is a digit but for signs. */
+const PHONE = /^(?=[\s+()./-]*\d)[\d\s+()./-]+((ext\.?|extension|x)\s*\d+)?$/i;
+const PHONE_CHARS = 40;
+const PHONE_WORDS = 'takes only digits, spaces, + ( ) - . / and an extension such as "ext 12" at its end.';
+
+/** A telephone number as people write it, or nothing. */
+export function optionalPhone(label: string) {
+	return optionalWords(label, PHONE_CHARS)
+		.refine((value) => value === '' || PHONE.test(value), { error: `${label} ${PHONE_WORDS}` })
 		.meta({ label });
 }
 

@@ -6,6 +6,7 @@ import {
 	editedSchema,
 	idSchema,
 	optionalEmail,
+	optionalPhone,
 	optionalWords,
 	versionSchema,
 	wholeNumber,
@@ -24,7 +25,7 @@ export type JobStage = (typeof JOB_STAGES)[number];
 export const newJobSchema = z.object({
 	customerName: words('Customer name', 120),
 	customerEmail: optionalEmail('Customer e-mail'),
-	customerPhone: optionalWords('Customer phone', 40),
+	customerPhone: optionalPhone('Customer phone'),
 	...vehicleInputSchema.shape,
 	note: optionalWords('Note', 1_000)
 });

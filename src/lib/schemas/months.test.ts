@@ -64,7 +64,10 @@ describe('the months of a place in its form', () => {
 
 	it('say their month where one is no number or cannot be', () => {
 		expect(problemsOf({ ...SITE, ...MONTHS, monthlyMaxCMay: 'mild', monthlySpreadKDec: '21' })).toEqual([
-			{ path: 'monthlyMaxCMay', message: 'May, mean of the daily highest must be a number of °C.' },
+			{
+				path: 'monthlyMaxCMay',
+				message: 'May, mean of the daily highest must be a number of °C from −60 to 60.'
+			},
 			{ path: 'monthlySpreadKDec', message: 'December, spread from day to day must be at most 20 K.' }
 		]);
 	});
@@ -122,7 +125,7 @@ describe('the days on the road in the form of a job', () => {
 		]);
 		expect(problems({ daysOnRoadJun: '32', daysOnRoadJul: '2,5', daysOnRoadAug: '-1' })).toEqual([
 			'June, days on the road must be at most 31.',
-			'July, days on the road must be a whole number.',
+			'July, days on the road must be a whole number from 0 to 31.',
 			'August, days on the road must be at least 0.'
 		]);
 	});

@@ -5,18 +5,17 @@ import { measure, versionSchema } from './fields';
 const KEYS = REMEDIES.map(({ key }) => key);
 
 const MOST_MONEY = 100_000;
-const amount = (label: string, most: number) =>
-	z
-		.number({ error: `${label} must be a number.` })
-		.min(0, { error: `${label} must be at least 0.` })
-		.max(most, { error: `${label} must be at most ${most}.` })
-		.meta({ label });
+export const moneyAmount = (label: string) => {
+	const error = `${label} must be a number from 0 to ${MOST_MONEY}.`;
+	return z.number({ error }).min(0, { error }).max(MOST_MONEY, { error }).meta({ label });
+};
+export const workHours = (label: string) => measure(label, 'h', 0, 200);
 
 /** What the workshop asks for one remedy, in its own currency. */
 export const remedyOfferSchema = z.object({
 	key: z.enum(KEYS),
-	cost: amount('Cost of the parts', MOST_MONEY),
-	hours: measure('Work', 'h', 0, 200),
+	cost: moneyAmount('Cost of the parts'),
+	hours: workHours('Work'),
 	offered: z.boolean().meta({ label: 'Offered' })
 });
 
@@ -31,7 +30,7 @@ function checkOnceEach(offers: { key: string }[], context: z.RefinementCtx): voi
 }
 
 export const remedyListInputSchema = z.object({
-	moneyPerHour: amount('An hour of work', MOST_MONEY),
+	moneyPerHour: moneyAmount('An hour of work'),
 	offers: z.array(remedyOfferSchema).max(KEYS.length).superRefine(checkOnceEach),
 	/** Null when no list has been kept yet. */
 	version: versionSchema.nullable()

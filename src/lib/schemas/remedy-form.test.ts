@@ -35,8 +35,21 @@ describe('the list of remedies as a form', () => {
 		const { cost, hours } = remedyBoxes('wrap');
 		const answer = parseForm(remedyFormSchema, typed({ [cost]: 'cheap', [hours]: '' }));
 		expect('errors' in answer && answer.errors).toEqual([
-			{ path: cost, message: 'Reflective wrap, parts must be a number.' },
+			{ path: cost, message: 'Reflective wrap, parts must be a number from 0 to 100000.' },
 			{ path: hours, message: 'Reflective wrap, work is missing.' }
+		]);
+	});
+
+	it('names it with the limit, too, where a figure is beyond it', () => {
+		const { cost, hours } = remedyBoxes('wrap');
+		const answer = parseForm(
+			remedyFormSchema,
+			typed({ [cost]: '200000', [hours]: '300', moneyPerHour: '-1' })
+		);
+		expect('errors' in answer && answer.errors).toEqual([
+			{ path: 'moneyPerHour', message: 'An hour of work must be a number from 0 to 100000.' },
+			{ path: cost, message: 'Reflective wrap, parts must be a number from 0 to 100000.' },
+			{ path: hours, message: 'Reflective wrap, work must be at most 200 h.' }
 		]);
 	});
 

@@ -1,25 +1,20 @@
 import { z } from 'zod';
 import { REMEDIES } from '../thermal/outlook';
-import { remedyListInputSchema, remedyOfferSchema, type RemedyListInput } from './remedies';
+import { moneyAmount, remedyListInputSchema, workHours, type RemedyListInput } from './remedies';
 
 /** The boxes of one remedy. */
 export const remedyBoxes = (key: string) =>
 	({ cost: `${key}Cost`, hours: `${key}Hours`, offered: `${key}Offered` }) as const;
 
-const { cost, hours, offered } = remedyOfferSchema.shape;
 const { moneyPerHour, version } = remedyListInputSchema.shape;
 
-/** A field of an offer under the name of its remedy, so that what is wrong says with which. */
-function named<T extends z.ZodType>(field: T, remedy: string, what: string): T {
-	return field.meta({ ...field.meta(), label: `${remedy}, ${what}` });
-}
-
+// Every label has the name of its remedy, so that what is wrong says with which.
 const boxes = REMEDIES.flatMap(({ key, label }): [string, z.ZodType][] => {
 	const box = remedyBoxes(key);
 	return [
-		[box.cost, named(cost, label, 'parts')],
-		[box.hours, named(hours, label, 'work')],
-		[box.offered, named(offered, label, 'offered')]
+		[box.cost, moneyAmount(`${label}, parts`)],
+		[box.hours, workHours(`${label}, work`)],
+		[box.offered, z.boolean().meta({ label: `${label}, offered` })]
 	];
 });
 

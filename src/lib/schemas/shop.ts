@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { optionalEmail, optionalWords, versionSchema, words } from './fields';
+import { optionalEmail, optionalPhone, optionalWords, versionSchema, words } from './fields';
 
 /** A picture of a known size, ready for a page. */
 export const logoSchema = z.object({
@@ -12,7 +12,7 @@ export type LogoView = z.infer<typeof logoSchema>;
 const details = {
 	name: words('Name of the shop', 120),
 	address: optionalWords('Address', 240),
-	phone: optionalWords('Telephone', 40),
+	phone: optionalPhone('Telephone'),
 	email: optionalEmail('E-mail'),
 	web: optionalWords('Web', 200).refine(
 		(web) => web === '' || /^(https?:\/\/)?[^\s./]+(\.[^\s./]+)+(\/\S*)?$/.test(web),

@@ -77,7 +77,10 @@ describe('the form of a step', () => {
 	it('says the limit that a length is beyond, and what is no length', () => {
 		expect(errorsOf({ exhaustGapMm: '5 m', exhaustSeenWidthMm: 'a hand' })).toEqual([
 			{ path: 'exhaustGapMm', message: 'Gap to the exhaust must be at most 2000 mm.' },
-			{ path: 'exhaustSeenWidthMm', message: 'Width of hot pipe in view must be a number of mm.' }
+			{
+				path: 'exhaustSeenWidthMm',
+				message: 'Width of hot pipe in view must be a number of mm from 10 to 1500.'
+			}
 		]);
 	});
 
