@@ -106,6 +106,10 @@ test('a zone of one’s own takes its places, and is changed and removed', ONCE,
 	await page.getByLabel('Rule').selectOption('latitude');
 	await page.getByRole('button', { name: 'Add the zone' }).click();
 	await expect(page.getByText('Give where the range begins, or where it ends.').first()).toBeVisible();
+	await page.getByLabel('From', { exact: true }).fill('about -20');
+	await page.getByRole('button', { name: 'Add the zone' }).click();
+	await expect(page.getByRole('link', { name: 'From must be a number from −90 to 90.' })).toBeVisible();
+	await expectNoViolations(page);
 	await page.getByLabel('From', { exact: true }).fill('-20');
 	await page.getByLabel('To below').fill('20');
 	await page.getByRole('button', { name: 'Add the zone' }).click();
@@ -119,6 +123,8 @@ test('a zone of one’s own takes its places, and is changed and removed', ONCE,
 	await page.getByRole('link', { name }).click();
 	await page.waitForLoadState('networkidle');
 	await page.getByLabel('Rule').selectOption('places');
+	// A list of places has no use for a range: what is wrong with it holds nothing up.
+	await page.getByLabel('To below').fill('somewhere');
 	await page.getByLabel('Places, one a line').fill('Nowhere at all');
 	await page.getByRole('button', { name: 'Save the zone' }).click();
 	await expect(page.getByText('There is no place called Nowhere at all.').first()).toBeVisible();

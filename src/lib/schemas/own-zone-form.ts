@@ -1,16 +1,32 @@
 import { z } from 'zod';
 import { optionalWords } from './fields';
-import { ownZoneFields, refuseOddRange, type OwnZoneInput, type OwnZoneView } from './own-zones';
+import {
+	isRangeRule,
+	ownZoneFields,
+	RANGE_LIMITS,
+	rangeEnds,
+	refuseOddRange,
+	type OwnZoneInput,
+	type OwnZoneView
+} from './own-zones';
 
 /** A zone as its form has it: its places as one name a line. */
-export const ownZoneFormSchema = z
-	.object({
-		...ownZoneFields,
-		places: optionalWords('Places, one a line', 8_000),
-		version: z.string().default('')
-	})
-	.superRefine(refuseOddRange);
+export const ownZoneFormSchema = z.object({
+	...ownZoneFields,
+	places: optionalWords('Places, one a line', 8_000),
+	version: z.string().default('')
+});
 export type OwnZoneForm = z.infer<typeof ownZoneFormSchema>;
+
+/** A box that the chosen rule does not use: whatever stands in it is nothing. */
+const unusedEnd = z.string().transform(() => null) as unknown as (typeof ownZoneFields)['fromValue'];
+const UNUSED_ENDS = { fromValue: unusedEnd, toValue: unusedEnd };
+
+/** The form under the rule that was chosen in it: only the boxes of that rule are looked at, within its limits. */
+export const ownZoneFormOf = (rule: unknown): typeof ownZoneFormSchema =>
+	ownZoneFormSchema
+		.extend(isRangeRule(rule) ? rangeEnds(RANGE_LIMITS[rule]) : UNUSED_ENDS)
+		.superRefine(refuseOddRange);
 
 export interface NamedPlace {
 	id: number;

@@ -55,7 +55,7 @@ describe('a zone of the shop’s own', () => {
 		expect(problems({})).toEqual(['fromValue: Give where the range begins, or where it ends.']);
 		expect(problems({ fromValue: 5, toValue: 5 })).toEqual(['toValue: To below must be above from.']);
 		expect(problems({ rule: 'hottest-month', toValue: 60 })).toEqual([
-			'toValue: To below must be within -60 and 50.'
+			'toValue: To below must be a number from −60 to 50.'
 		]);
 		expect(problems({ rule: 'places' })).toBeUndefined();
 		expect(problems({ toValue: -30 })).toBeUndefined();

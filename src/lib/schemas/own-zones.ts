@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { writeNumber } from '../format/numbers';
 import { estimateMonths } from '../thermal/weather';
 import { editedSchema, idSchema, versionSchema, wholeNumber, words } from './fields';
 
@@ -11,23 +12,36 @@ export const ZONE_RULE_LABELS: Readonly<Record<ZoneRule, string>> = {
 	places: 'by a list of places'
 };
 
-const LIMITS = { 'hottest-month': [-60, 50], latitude: [-90, 90] } as const;
+type RangeRule = Exclude<ZoneRule, 'places'>;
+type Limits = readonly [least: number, most: number];
+export const RANGE_LIMITS: Readonly<Record<RangeRule, Limits>> = {
+	'hottest-month': [-60, 50],
+	latitude: [-90, 90]
+};
+export const isRangeRule = (rule: unknown): rule is RangeRule =>
+	typeof rule === 'string' && Object.hasOwn(RANGE_LIMITS, rule);
 
-const bound = (label: string) =>
-	z
-		.number({ error: `${label} must be a number.` })
-		.min(-90, { error: `${label} must be at least −90.` })
-		.max(90, { error: `${label} must be at most 90.` })
-		.nullable()
-		.default(null)
-		.meta({ label });
+const sayLimits = (label: string, [least, most]: Limits): string =>
+	`${label} must be a number from ${writeNumber(least)} to ${writeNumber(most)}.`;
+
+/** One end of a range; it may stay open. */
+function rangeEnd(label: string, limits: Limits) {
+	const error = sayLimits(label, limits);
+	const [least, most] = limits;
+	const end = z.number({ error }).min(least, { error }).max(most, { error });
+	return end.nullable().default(null).meta({ label });
+}
+
+export const rangeEnds = (limits: Limits) => ({
+	fromValue: rangeEnd('From', limits),
+	toValue: rangeEnd('To below', limits)
+});
 
 export const ownZoneFields = {
 	name: words('Name of the zone', 60),
 	position: wholeNumber('Place in the order', 1, 999),
 	rule: z.enum(ZONE_RULES, { error: 'Choose how the zone takes its places.' }),
-	fromValue: bound('From'),
-	toValue: bound('To below')
+	...rangeEnds(RANGE_LIMITS.latitude)
 };
 
 interface Bounds {
@@ -37,32 +51,39 @@ interface Bounds {
 }
 type Issues = { addIssue: (issue: { code: 'custom'; path: string[]; message: string }) => void };
 
-/** A range has at least one end, in order, and within what there is. */
+/** A range has at least one end, and its ends in order. */
 export function refuseOddRange({ rule, fromValue, toValue }: Bounds, { addIssue }: Issues): void {
-	if (rule === 'places') return;
+	if (!isRangeRule(rule)) return;
 	const refuse = (path: string, message: string): void => addIssue({ code: 'custom', path: [path], message });
 	if (fromValue === null && toValue === null)
 		refuse('fromValue', 'Give where the range begins, or where it ends.');
 	if (fromValue !== null && toValue !== null && fromValue >= toValue)
 		refuse('toValue', 'To below must be above from.');
-	const [least, most] = LIMITS[rule];
+}
+
+/** The ends are within what the rule goes by. */
+function refuseBeyondLimits({ rule, fromValue, toValue }: Bounds, { addIssue }: Issues): void {
+	if (!isRangeRule(rule)) return;
+	const limits = RANGE_LIMITS[rule];
 	for (const [path, label, value] of [
 		['fromValue', 'From', fromValue],
 		['toValue', 'To below', toValue]
 	] as const) {
-		if (value !== null && (value < least || value > most))
-			refuse(path, `${label} must be within ${least} and ${most}.`);
+		if (value !== null && (value < limits[0] || value > limits[1]))
+			addIssue({ code: 'custom', path: [path], message: sayLimits(label, limits) });
 	}
 }
 
 export const ownZoneInputSchema = z
 	.object({ ...ownZoneFields, placeIds: z.array(idSchema).max(1_000).default([]) })
-	.superRefine(refuseOddRange);
+	.superRefine(refuseOddRange)
+	.superRefine(refuseBeyondLimits);
 export type OwnZoneInput = z.infer<typeof ownZoneInputSchema>;
 
 export const ownZoneChangeSchema = z
 	.object({ ...ownZoneFields, placeIds: z.array(idSchema).max(1_000).default([]), version: versionSchema })
-	.superRefine(refuseOddRange);
+	.superRefine(refuseOddRange)
+	.superRefine(refuseBeyondLimits);
 export type OwnZoneChange = z.infer<typeof ownZoneChangeSchema>;
 
 export const ownZoneSchema = editedSchema.extend({

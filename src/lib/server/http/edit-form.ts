@@ -15,13 +15,15 @@ export async function saveEdited<S extends z.ZodObject>(
 	steps: {
 		action: Action;
 		schema: S;
+		schemaFor?: (sent: FormData) => S;
 		save: (person: SignedInPerson, data: z.output<S>) => Promise<string>;
 		/** The record as it is now. */
 		newest: (person: SignedInPerson) => Promise<Partial<z.input<S>>>;
 	}
 ) {
-	const { action, schema, save, newest } = steps;
-	const answer = await saveForm(event, { action, schema, save });
+	const { newest, ...form } = steps;
+	const { action, schema } = form;
+	const answer = await saveForm(event, form);
 	if (!('status' in answer) || answer.status !== 409) return answer;
 	const now = toFormValues(schema, await newest(guard(event, action)));
 	return fail(409, { ...answer.data, newest: now });

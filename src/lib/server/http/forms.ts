@@ -100,6 +100,8 @@ export async function saveForm<S extends z.ZodObject, Prepared = void>(
 	steps: {
 		action: Action;
 		schema: S;
+		/** The schema for what was sent, where one answer says how others are read. */
+		schemaFor?: (sent: FormData) => S;
 		/** What takes seconds and changes nothing: done before, and in no transaction. */
 		prepare?: (person: SignedInPerson, data: z.output<S>) => Promise<Prepared>;
 		/** Does it, and says where to go next. */
@@ -108,7 +110,7 @@ export async function saveForm<S extends z.ZodObject, Prepared = void>(
 ) {
 	const person = guard(event, steps.action);
 	const formData = await readPageForm(event.request);
-	const { form, data } = await readForm(formData, steps.schema);
+	const { form, data } = await readForm(formData, steps.schemaFor?.(formData) ?? steps.schema);
 	if (data === null) return fail(422, { form });
 	const prepare = async () => (await steps.prepare?.(person, data)) as Prepared;
 	const save = (prepared: Prepared) => steps.save(person, data, prepared);

@@ -6,7 +6,7 @@ import { guard, orPageError } from '$lib/server/http/guard';
 import { pageId } from '$lib/server/http/page-id';
 import { listPlaces } from '$lib/server/services/places';
 import { getOwnZone, removeOwnZone, updateOwnZone } from '$lib/server/services/review/own-zones';
-import { readZoneForm } from '../save-zone';
+import { readZoneForm, zoneFormFor } from '../save-zone';
 import type { Actions, PageServerLoad } from './$types';
 
 export const load: PageServerLoad = async (event) => {
@@ -26,6 +26,7 @@ export const actions: Actions = {
 		return saveEdited(event, {
 			action: 'own-zones.write',
 			schema: ownZoneFormSchema,
+			schemaFor: zoneFormFor,
 			save: async (person, form) => {
 				await getOwnZone(person, id);
 				await updateOwnZone(person, id, {

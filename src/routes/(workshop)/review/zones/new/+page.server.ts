@@ -3,7 +3,7 @@ import { loadForm, saveForm } from '$lib/server/http/forms';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { listPlaces } from '$lib/server/services/places';
 import { createOwnZone, listOwnZones } from '$lib/server/services/review/own-zones';
-import { readZoneForm } from '../save-zone';
+import { readZoneForm, zoneFormFor } from '../save-zone';
 import type { Actions, PageServerLoad } from './$types';
 
 export const load: PageServerLoad = async (event) => {
@@ -24,6 +24,7 @@ export const actions: Actions = {
 		saveForm(event, {
 			action: 'own-zones.write',
 			schema: ownZoneFormSchema,
+			schemaFor: zoneFormFor,
 			save: async (person, form) => {
 				await createOwnZone(person, await readZoneForm(person, form));
 				return '/review/zones?saved';
