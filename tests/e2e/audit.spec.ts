@@ -31,6 +31,25 @@ test('the trail is searched, read in plain words, taken as CSV, and found whole'
 	await expectNoViolations(page);
 });
 
+test('days the wrong way round are said at their box, and people are found by name', async ({ page }) => {
+	await page.goto('/audit');
+	const who = await page.getByRole('listitem').locator('b').first().innerText();
+	await page.getByLabel('From').fill('2026-03-04');
+	await page.getByLabel('To', { exact: true }).fill('2026-03-03');
+	await page.getByRole('button', { name: 'Look' }).click();
+	await expect(page).toHaveTitle(/^Error: Audit trail/);
+	await expectNoViolations(page);
+	await page.getByRole('link', { name: 'To must be 2026-03-04 or later, as From is.' }).click();
+	await expect(page.getByLabel('To', { exact: true })).toBeFocused();
+	await expect(page.getByLabel('From')).toHaveValue('2026-03-04');
+	await page.goto('/audit');
+	await page.getByLabel('With the words').fill(who);
+	await page.getByRole('button', { name: 'Look' }).click();
+	await expect(page).toHaveURL(/words=/);
+	await expect(page.getByRole('listitem').filter({ hasText: who }).first()).toBeVisible();
+	await expectNoViolations(page);
+});
+
 test('a long trail goes on page by page', async ({ page }) => {
 	await page.goto('/audit');
 	const first = await page

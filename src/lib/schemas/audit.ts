@@ -2,9 +2,10 @@ import { z } from 'zod';
 import { idSchema } from './fields';
 
 const AUDIT_PAGE = 50;
-const day = z.iso.date({ error: 'A day is written like 2026-03-04.' }).optional();
+const day = (label: string) =>
+	z.iso.date({ error: `${label} must be a day, such as 2026-03-04.` }).optional();
 
-export const auditQuerySchema = z.object({
+const auditFields = z.object({
 	person: idSchema.optional().meta({ description: 'Who did it' }),
 	action: z
 		.string()
@@ -20,11 +21,15 @@ export const auditQuerySchema = z.object({
 		.trim()
 		.max(80, { error: 'Search for 80 characters or fewer.' })
 		.default('')
-		.meta({ description: 'Parts of what was recorded, or the number of a subject' }),
-	from: day,
-	to: day,
+		.meta({ description: 'Parts of what was recorded, of a name, or the number of a subject' }),
+	from: day('From'),
+	to: day('To'),
 	cursor: z.string().max(1_200).optional().meta({ description: 'Where the page before ended' }),
 	limit: z.coerce.number().int().min(1).max(100).default(AUDIT_PAGE)
+});
+export const auditQuerySchema = auditFields.superRefine(({ from, to }, { addIssue }) => {
+	if (from === undefined || to === undefined || from <= to) return;
+	addIssue({ code: 'custom', path: ['to'], message: `To must be ${from} or later, as From is.` });
 });
 export type AuditQuery = z.infer<typeof auditQuerySchema>;
 
@@ -39,6 +44,8 @@ export const auditRowSchema = z.object({
 	did: z.string(),
 	subject: z.string(),
 	subjectId: z.number().int(),
+	/** Of a person or a customer. */
+	subjectName: z.string().nullable(),
 	/** The page of the subject, where it has one. */
 	href: z.string().nullable(),
 	/** What was recorded beside it, in words. */

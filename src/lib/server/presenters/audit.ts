@@ -99,6 +99,10 @@ const DID: Record<string, string> = {
 
 export const sayAction = (action: string): string => DID[action] ?? action.replace(/[.-]/g, ' ');
 
+/** The actions in whose plain words a word stands. */
+export const actionsSaying = (word: string): string[] =>
+	Object.keys(DID).filter((action) => DID[action]!.toLowerCase().includes(word.toLowerCase()));
+
 const PAGES: Record<string, (id: number) => string> = {
 	assessment: (id) => `/assessments/${id}`,
 	battery: (id) => `/batteries/${id}`,
@@ -128,14 +132,25 @@ function sayValue(value: unknown): string {
 	return String(value as string | number);
 }
 
-export function presentAuditEntry(entry: AuditEntry, nameOf: ReadonlyMap<number, string>): AuditRow {
+type Names = ReadonlyMap<number, string>;
+/** Of those who did things, and of those to whom they were done, by what they are. */
+export interface AuditNames {
+	person: Names;
+	customer: Names;
+}
+
+const nameOfSubject = (type: string, id: number, names: AuditNames): string | null =>
+	(type === 'person' || type === 'customer' ? names[type].get(id) : undefined) ?? null;
+
+export function presentAuditEntry(entry: AuditEntry, names: AuditNames): AuditRow {
 	const { sequence, at, personId, action, subjectType, subjectId, detail } = entry;
 	return {
 		...{ sequence, action, subjectId },
 		at: at.toISOString(),
-		who: personId === null ? NOBODY : (nameOf.get(personId) ?? `person ${personId}`),
+		who: personId === null ? NOBODY : (names.person.get(personId) ?? `person ${personId}`),
 		did: sayAction(action),
 		subject: subjectType,
+		subjectName: nameOfSubject(subjectType, subjectId, names),
 		href: PAGES[subjectType]?.(subjectId) ?? null,
 		detail: Object.entries(detail).map(([key, value]) => ({ label: sayKey(key), value: sayValue(value) }))
 	};

@@ -5,7 +5,7 @@ import { PROJECT } from '../../../../tests/support/source-files';
 import { pastGuard } from '../../../../tests/support/audit-guard';
 import { makeCrew, useTestDatabase, type Crew } from '../../../../tests/support/services';
 import { auditQuerySchema, type AuditQuery } from '$lib/schemas/audit';
-import { AuditEntry } from '../db/models';
+import { AuditEntry, Customer, Person } from '../db/models';
 import { inTransaction } from '../db/transaction';
 import { chainHash, GENESIS } from './audit-chain';
 import { recordBy } from './audit';
@@ -153,6 +153,9 @@ const ask = (changes: Partial<AuditQuery> = {}): AuditQuery => ({
 
 async function makeMixed(): Promise<Crew> {
 	const crew = await makeCrew();
+	Object.assign(crew.manager, { name: 'Bea Quill' });
+	Object.assign(crew.installer, { name: 'Otto Sedge' });
+	for (const { id, name } of [crew.manager, crew.installer]) await Person.update({ name }, { where: { id } });
 	await note(crew, 'manager', 'place.changed', 7, { heatC: 44 });
 	await note(crew, 'installer', 'mount.surveyed', 7, { name: 'Behind the battery' });
 	await note(crew, 'installer', 'customer.changed', 8, { '=1+1': '-Ida' });
@@ -171,6 +174,25 @@ describe('the list of the trail', () => {
 		expect(await found({ words: 'BEHIND battery' })).toEqual([2]);
 		expect(await found({ words: '7' })).toEqual([2, 1]);
 		expect(await found({ words: '100%' })).toEqual([]);
+	});
+
+	it('is searched by names, of whom an entry is by and of whom it is about, and by its plain words', async () => {
+		const [crew, other] = [await makeMixed(), await makeCrew()];
+		const { id } = await Customer.create({ workshopId: crew.workshopId, name: 'Ida 100% Fenn' });
+		await note(crew, 'manager', 'customer.changed', id);
+		await note(crew, 'manager', 'person.left', crew.installer.id);
+		const stranger = await Customer.create({ workshopId: other.workshopId, name: 'Otto Fenn' });
+		await note(crew, 'manager', 'customer.changed', stranger.id);
+		const found = async (words: string) =>
+			(await listAudit(crew.manager, ask({ words }))).rows.map(({ sequence }) => sequence);
+		expect(await found('otto')).toEqual([5, 3, 2]);
+		expect(await found('Sedge Quill')).toEqual([5]);
+		expect(await found('fenn 100%')).toEqual([4]);
+		expect(await found('Fenn Sedge')).toEqual([]);
+		expect(await found('ended access')).toEqual([5]);
+		const { rows } = await listAudit(crew.manager, ask());
+		const nameAt = (at: number) => rows.find(({ sequence }) => sequence === at)?.subjectName;
+		expect([6, 5, 4, 1].map(nameAt)).toEqual([null, 'Otto Sedge', 'Ida 100% Fenn', null]);
 	});
 
 	it('is searched by days, both of them in', async () => {

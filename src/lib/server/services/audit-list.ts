@@ -1,11 +1,11 @@
-import { Op, QueryTypes, col, where as whereColumn, type WhereOptions } from 'sequelize';
+import { Op, QueryTypes, col, literal, where as whereColumn, type WhereOptions } from 'sequelize';
 import { z } from 'zod';
 import type { AuditChoices, AuditPage, AuditQuery, AuditRow } from '$lib/schemas/audit';
 import type { SignedInPerson } from '$lib/schemas/people';
 import { connection } from '../db/connection';
-import { AuditEntry, Person } from '../db/models';
+import { AuditEntry, Customer, Person } from '../db/models';
 import { allow } from '../policies';
-import { presentAuditEntry, sayAction } from '../presenters/audit';
+import { actionsSaying, presentAuditEntry, sayAction } from '../presenters/audit';
 import { readCursor, writeCursor } from './cursors';
 import { addDays } from './days';
 
@@ -14,17 +14,32 @@ const MOST_WORDS = 8;
 
 const escapePattern = (word: string): string => word.replace(/[\\%_]/g, '\\$&');
 
-/** Every word stands somewhere in what was recorded, or names the action, or is the subject's number. */
-function matchAll(words: string): WhereOptions[] {
+/** Who of a workshop has a word in their name, as a condition on a number. */
+function namedBy(table: 'people' | 'customers', workshopId: number, pattern: string) {
+	const named = `SELECT id FROM ${table} WHERE workshop_id = ${Number(workshopId)} AND name LIKE ${connection().escape(pattern)}`;
+	return { [Op.in]: literal(`(${named})`) };
+}
+
+/** Every word stands in what was recorded, in the action, in a name of whom it was by or about, or is a number. */
+function matchAll(workshopId: number, words: string): WhereOptions[] {
 	return words
 		.split(/\s+/)
 		.filter(Boolean)
 		.slice(0, MOST_WORDS)
 		.map((word) => {
-			const like = { [Op.like]: `%${escapePattern(word)}%` };
+			const pattern = `%${escapePattern(word)}%`;
+			const like = { [Op.like]: pattern };
+			const people = namedBy('people', workshopId, pattern);
+			const customers = namedBy('customers', workshopId, pattern);
 			const number = /^\d{1,15}$/.test(word) ? [{ subjectId: Number(word) }] : [];
 			return {
-				[Op.or]: [whereColumn(col('detail'), like), { action: like }, { subjectType: like }, ...number]
+				[Op.or]: [
+					whereColumn(col('detail'), like),
+					...[{ action: like }, { action: actionsSaying(word) }, { subjectType: like }, ...number],
+					{ personId: people },
+					{ subjectType: 'person', subjectId: people },
+					{ subjectType: 'customer', subjectId: customers }
+				]
 			};
 		});
 }
@@ -40,16 +55,28 @@ function filterOf(workshopId: number, query: AuditQuery): WhereOptions {
 			...(from === undefined ? [] : [{ at: { [Op.gte]: new Date(from) } }]),
 			// The day that was named is in.
 			...(to === undefined ? [] : [{ at: { [Op.lt]: new Date(addDays(to, 1)) } }]),
-			...matchAll(words)
+			...matchAll(workshopId, words)
 		]
 	};
 }
 
-async function presentAll(entries: readonly AuditEntry[]): Promise<AuditRow[]> {
-	const ids = [...new Set(entries.flatMap(({ personId }) => personId ?? []))];
-	const people = await Person.findAll({ where: { id: ids }, attributes: ['id', 'name'] });
-	const nameOf = new Map(people.map(({ id, name }) => [id, name]));
-	return entries.map((entry) => presentAuditEntry(entry, nameOf));
+const subjectsOf = (entries: readonly AuditEntry[], type: string): number[] =>
+	entries.filter(({ subjectType }) => subjectType === type).map(({ subjectId }) => subjectId);
+
+const toNames = (rows: readonly { id: number; name: string }[]): Map<number, string> =>
+	new Map(rows.map(({ id, name }) => [id, name]));
+
+async function presentAll(workshopId: number, entries: readonly AuditEntry[]): Promise<AuditRow[]> {
+	const people = [...entries.flatMap(({ personId }) => personId ?? []), ...subjectsOf(entries, 'person')];
+	const ask = (ids: number[]) => ({
+		where: { id: [...new Set(ids)], workshopId },
+		attributes: ['id', 'name']
+	});
+	const names = {
+		person: toNames(await Person.findAll(ask(people))),
+		customer: toNames(await Customer.findAll(ask(subjectsOf(entries, 'customer'))))
+	};
+	return entries.map((entry) => presentAuditEntry(entry, names));
 }
 
 function readBefore(filter: WhereOptions, before: number | null, limit: number): Promise<AuditEntry[]> {
@@ -68,7 +95,7 @@ export async function listAudit(person: SignedInPerson, query: AuditQuery): Prom
 	const found = await readBefore(filter, before, limit + 1);
 	const page = found.slice(0, limit);
 	return {
-		rows: await presentAll(page),
+		rows: await presentAll(workshopId, page),
 		total: await AuditEntry.count({ where: filter }),
 		next: found.length > limit ? writeCursor(scope, { before: page.at(-1)!.sequence }) : null
 	};
@@ -103,7 +130,7 @@ export async function* readAudit(person: SignedInPerson, query: AuditQuery): Asy
 	let before: number | null = null;
 	for (;;) {
 		const batch: AuditEntry[] = await readBefore(filter, before, BATCH);
-		if (batch.length > 0) yield await presentAll(batch);
+		if (batch.length > 0) yield await presentAll(workshopId, batch);
 		if (batch.length < BATCH) return;
 		before = batch.at(-1)!.sequence;
 	}

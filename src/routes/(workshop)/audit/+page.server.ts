@@ -10,8 +10,8 @@ export const load: PageServerLoad = async (event) => {
 	const asked = readAuditAsked(event.url.searchParams);
 	const parsed = parseAsked(asked);
 	const [choices, check] = await orPageError(Promise.all([listAuditChoices(person), lastCheck(person)]));
-	if ('problem' in parsed) return { asked, choices, check, page: null, problem: parsed.problem };
-	return { asked, choices, check, page: await orPageError(listAudit(person, parsed.query)), problem: null };
+	if ('problems' in parsed) return { asked, choices, check, page: null, problems: parsed.problems };
+	return { asked, choices, check, page: await orPageError(listAudit(person, parsed.query)), problems: [] };
 };
 
 export const actions: Actions = {

@@ -1,3 +1,4 @@
+import type { FieldProblem } from '$lib/components/forms/field';
 import { auditQuerySchema, type AuditQuery } from '$lib/schemas/audit';
 
 export type AuditAsked = Partial<
@@ -16,11 +17,17 @@ export function readAuditAsked(params: URLSearchParams): AuditAsked {
 	return asked;
 }
 
-/** What was asked, checked; or what is wrong with it, in words. */
-export function parseAsked(asked: AuditAsked): { query: AuditQuery } | { problem: string } {
+const NOBODY_LIKE_THAT = 'Choose somebody from the list.';
+
+/** What was asked, checked; or what is wrong with it, box by box. */
+export function parseAsked(asked: AuditAsked): { query: AuditQuery } | { problems: FieldProblem[] } {
 	const parsed = auditQuerySchema.safeParse(asked);
 	if (parsed.success) return { query: parsed.data };
-	return { problem: parsed.error.issues[0]?.message ?? 'The list cannot be shown like that.' };
+	const problems = parsed.error.issues.map(({ path: [box], message }) => ({
+		path: String(box),
+		message: box === 'person' ? NOBODY_LIKE_THAT : message
+	}));
+	return { problems };
 }
 
 export function auditHref(asked: AuditAsked, path = '/audit'): string {

@@ -9,7 +9,10 @@ export const GET: RequestHandler = (event) => {
 	const person = guard(event, 'audit.read');
 	const { cursor: _page, ...asked } = readAuditAsked(event.url.searchParams);
 	const parsed = parseAsked(asked);
-	if ('problem' in parsed) error(422, { message: parsed.problem, code: 'invalid_input' });
+	if ('problems' in parsed) {
+		const message = parsed.problems.map((problem) => problem.message).join(' ');
+		error(422, { message, code: 'invalid_input' });
+	}
 	const parts = writeAuditCsv(person, parsed.query);
 	const encoder = new TextEncoder();
 	const body = new ReadableStream<Uint8Array>({
