@@ -58,9 +58,15 @@ test('what is to be seen to has lists of its own', async ({ page }) => {
 	await page.goto('/review/installations?since=2031-01');
 	await expect(page.getByText('No installation is like that')).toBeVisible();
 	await expectNoViolations(page);
-	await page.goto('/review?verdict=perhaps');
-	await expect(page.getByRole('heading', { level: 1 })).toBeVisible();
-	await expect(page.getByText(/verdict/).first()).toBeVisible();
+	await page.goto('/review?verdict=perhaps&since=spring');
+	await expect(page.getByRole('heading', { level: 1, name: 'Review' })).toBeVisible();
+	await expect(page.getByText('There is no verdict “perhaps”.')).toBeVisible();
+	await expect(page.getByText('Fitted since must be a month, such as 2026-03.')).toBeVisible();
+	await expect(page.getByRole('link', { name: 'Hot desert (BWh)' })).toBeVisible();
+	await expectNoViolations(page);
+	await page.goto('/review/installations?cursor=made.up');
+	await page.getByRole('link', { name: 'Back to the review' }).click();
+	await expect(page.getByRole('heading', { level: 1, name: 'Review' })).toBeVisible();
 });
 
 test('the table for other programs says what the page says', async ({ page }) => {

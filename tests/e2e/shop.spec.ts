@@ -66,5 +66,12 @@ test(
 		await expect(page.getByText('Nobody’s data are older than that.')).toBeVisible();
 		await expect(page.getByRole('button', { name: 'Keep them 2 years' })).toBeVisible();
 		await expectNoViolations(page);
+		for (const years of ['-4', 'many']) {
+			await page.goto(`/shop/retention?years=${years}`);
+			await page.getByRole('link', { name: 'Choose 2, 3, 5, 7 or 10 years, or no limit.' }).click();
+			await expect(page.getByLabel('Keep them')).toBeFocused();
+		}
+		await expect(page.getByRole('heading', { name: 'With the rule of now' })).toBeVisible();
+		await expectNoViolations(page);
 	}
 );

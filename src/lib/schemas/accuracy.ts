@@ -128,8 +128,14 @@ export const accuracySchema = z.object({
 export type Accuracy = z.infer<typeof accuracySchema>;
 
 export const readingsQuerySchema = z.object({
-	kind: z.enum(READING_KINDS).optional(),
-	book: z.coerce.number().int().positive().max(1e9).optional().meta({ description: 'Number of a book' }),
+	kind: z.enum(READING_KINDS).optional().meta({ label: 'Kind of reading' }),
+	book: z.coerce
+		.number()
+		.int()
+		.positive()
+		.max(1e9)
+		.optional()
+		.meta({ label: 'Book', description: 'Number of a book' }),
 	zone: z
 		.string()
 		.regex(/^(none|[A-Z][A-Za-z]{1,2})$/, { error: 'There is no such zone.' })

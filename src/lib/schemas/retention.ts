@@ -4,7 +4,15 @@ import { versionSchema } from './fields';
 /** So long customers' personal data may be kept; "none" keeps them. */
 export const RETENTION_YEARS = [2, 3, 5, 7, 10] as const;
 
-const years = z.union(RETENTION_YEARS.map((each) => z.literal(each))).nullable();
+/** What cannot be chosen, said with all that can. */
+export const NOT_THESE_YEARS = `Choose ${RETENTION_YEARS.slice(0, -1).join(', ')} or ${RETENTION_YEARS.at(-1)} years, or no limit.`;
+
+const years = z
+	.union(
+		RETENTION_YEARS.map((each) => z.literal(each)),
+		{ error: NOT_THESE_YEARS }
+	)
+	.nullable();
 export const retentionInputSchema = z.object({ years, version: versionSchema });
 export type RetentionInput = z.infer<typeof retentionInputSchema>;
 

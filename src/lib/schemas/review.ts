@@ -27,8 +27,8 @@ export const reviewFilterSchema = z.object({
 	kind: z
 		.enum(ZONE_KINDS)
 		.default('climate')
-		.meta({ description: 'Climate classes, or the shop’s own zones' }),
-	verdict: z.enum(VERDICTS).optional(),
+		.meta({ label: 'Kind of zone', description: 'Climate classes, or the shop’s own zones' }),
+	verdict: z.enum(VERDICTS).optional().meta({ label: 'Verdict' }),
 	since: month('Fitted since').meta({ description: 'Fitted in this month or later' }),
 	until: month('Fitted until').meta({ description: 'Fitted in this month or earlier' })
 });
@@ -42,7 +42,7 @@ const zone = z
 
 export const reviewScopeSchema = reviewFilterSchema.extend({
 	zone,
-	place: z.coerce.number().int().positive().max(Number.MAX_SAFE_INTEGER).optional()
+	place: z.coerce.number().int().positive().max(Number.MAX_SAFE_INTEGER).optional().meta({ label: 'Place' })
 });
 export type ReviewScope = z.infer<typeof reviewScopeSchema>;
 
@@ -50,11 +50,11 @@ export const REVIEW_SORTS = ['newest', 'oldest', 'longest-due'] as const;
 export type ReviewSort = (typeof REVIEW_SORTS)[number];
 
 export const reviewListQuerySchema = reviewScopeSchema.extend({
-	list: z.enum(REVIEW_LISTS).optional().meta({ description: 'Only these' }),
+	list: z.enum(REVIEW_LISTS).optional().meta({ label: 'List', description: 'Only these' }),
 	sort: z
 		.enum(REVIEW_SORTS)
 		.optional()
-		.meta({ description: 'Newest first, and overdue looks the longest due first' }),
+		.meta({ label: 'Order', description: 'Newest first, and overdue looks the longest due first' }),
 	cursor: z.string().max(400).optional().meta({ description: 'Where the page before ended' }),
 	limit: z.coerce.number().int().min(1).max(200).default(50)
 });

@@ -1,11 +1,11 @@
 import { reviewFilterSchema } from '$lib/schemas/review';
 import { guard, orPageError } from '$lib/server/http/guard';
-import { pageQuery } from '$lib/server/http/page-query';
+import { readPageQuery } from '$lib/server/http/page-query';
 import { reviewZones } from '$lib/server/services/review/review-zones';
 import type { PageServerLoad } from './$types';
 
 export const load: PageServerLoad = async (event) => {
 	const person = guard(event, 'review.read');
-	const query = await pageQuery(reviewFilterSchema, event.url);
-	return { query, review: await orPageError(reviewZones(person, query)) };
+	const { query, leftOut } = readPageQuery(reviewFilterSchema, event.url);
+	return { query, leftOut, review: await orPageError(reviewZones(person, query)) };
 };

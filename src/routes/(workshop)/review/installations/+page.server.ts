@@ -1,16 +1,16 @@
 import { reviewListQuerySchema } from '$lib/schemas/review';
 import { guard, orPageError } from '$lib/server/http/guard';
-import { pageQuery } from '$lib/server/http/page-query';
+import { readPageQuery } from '$lib/server/http/page-query';
 import { listInstallations } from '$lib/server/services/review/review-list';
 import { listZones } from '$lib/server/services/review/review-zones';
 import type { PageServerLoad } from './$types';
 
 export const load: PageServerLoad = async (event) => {
 	const person = guard(event, 'review.read');
-	const query = await pageQuery(reviewListQuerySchema, event.url);
+	const { query, leftOut } = readPageQuery(reviewListQuerySchema, event.url);
 	const [page, zones] = await Promise.all([
 		orPageError(listInstallations(person, query)),
 		orPageError(listZones(person, query.kind))
 	]);
-	return { query, page, ...zones };
+	return { query, leftOut, page, ...zones };
 };

@@ -1,6 +1,6 @@
 import { reviewFilterSchema } from '$lib/schemas/review';
 import { guard, orPageError } from '$lib/server/http/guard';
-import { pageQuery } from '$lib/server/http/page-query';
+import { readPageQuery } from '$lib/server/http/page-query';
 import { drawReviewMap } from '$lib/server/presenters/review-map';
 import { reviewMap } from '$lib/server/services/review/review-map';
 import { listZones } from '$lib/server/services/review/review-zones';
@@ -8,10 +8,10 @@ import type { PageServerLoad } from './$types';
 
 export const load: PageServerLoad = async (event) => {
 	const person = guard(event, 'review.read');
-	const query = await pageQuery(reviewFilterSchema, event.url);
+	const { query, leftOut } = readPageQuery(reviewFilterSchema, event.url);
 	const [map, { on }] = await Promise.all([
 		orPageError(reviewMap(person, query)),
 		orPageError(listZones(person, query.kind))
 	]);
-	return { query, map, on, drawing: drawReviewMap(map.places) };
+	return { query, leftOut, map, on, drawing: drawReviewMap(map.places) };
 };

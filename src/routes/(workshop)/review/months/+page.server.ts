@@ -1,7 +1,7 @@
 import { renderTrendsSvg } from '$lib/components/charts/review-trends/render-trends';
 import { reviewScopeSchema } from '$lib/schemas/review';
 import { guard, orPageError } from '$lib/server/http/guard';
-import { pageQuery } from '$lib/server/http/page-query';
+import { readPageQuery } from '$lib/server/http/page-query';
 import { reviewTrends } from '$lib/server/services/review/review-trends';
 import { listZones } from '$lib/server/services/review/review-zones';
 import type { PageServerLoad } from './$types';
@@ -11,7 +11,7 @@ const LABEL =
 
 export const load: PageServerLoad = async (event) => {
 	const person = guard(event, 'review.read');
-	const query = await pageQuery(reviewScopeSchema, event.url);
+	const { query, leftOut } = readPageQuery(reviewScopeSchema, event.url);
 	const [trends, zones] = await Promise.all([
 		orPageError(reviewTrends(person, query)),
 		orPageError(listZones(person, query.kind))
@@ -20,5 +20,5 @@ export const load: PageServerLoad = async (event) => {
 		phone: renderTrendsSvg(trends, LABEL, 'phone'),
 		desk: renderTrendsSvg(trends, LABEL, 'desk')
 	};
-	return { query, trends, ...zones, picture };
+	return { query, leftOut, trends, ...zones, picture };
 };

@@ -1,5 +1,10 @@
 import { redirect } from '@sveltejs/kit';
-import { retentionInputSchema, RETENTION_YEARS, type RetentionView } from '$lib/schemas/retention';
+import {
+	NOT_THESE_YEARS,
+	retentionInputSchema,
+	RETENTION_YEARS,
+	type RetentionView
+} from '$lib/schemas/retention';
 import { doOrSay } from '$lib/server/http/do-or-say';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { validate } from '$lib/server/http/validate';
@@ -14,8 +19,10 @@ function readYears(text: FormDataEntryValue | null): RetentionView['years'] | un
 
 export const load: PageServerLoad = async (event) => {
 	const person = guard(event, 'shop.write');
-	const asked = readYears(event.url.searchParams.get('years'));
+	const written = event.url.searchParams.get('years');
+	const asked = readYears(written);
 	return {
+		problem: written && asked === undefined ? NOT_THESE_YEARS : null,
 		retention: await orPageError(getRetention(person, asked)),
 		choices: [...RETENTION_YEARS],
 		isSaved: event.url.searchParams.has('saved')
