@@ -37,7 +37,12 @@ export type ShopView = z.infer<typeof shopSchema>;
 export const factorRuleSchema = z.object({ requiresSecondFactor: z.boolean(), version: versionSchema });
 export type FactorRule = z.infer<typeof factorRuleSchema>;
 
-export const shopFormSchema = z.object({ ...details, version: z.string().default('') });
+export const shopFormSchema = z.object({
+	...details,
+	version: z.string().default(''),
+	/** The box of the logo, for what is wrong with it: the picture itself goes another way. */
+	file: z.string().default('')
+});
 
 /** Who stands at the head of what is printed or sent; pages from before have no more than the first four. */
 export interface WorkshopHead {

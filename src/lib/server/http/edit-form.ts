@@ -2,21 +2,16 @@ import { fail, type RequestEvent } from '@sveltejs/kit';
 import type { z } from 'zod';
 import { toFormValues } from '$lib/format/form-values';
 import type { SignedInPerson } from '$lib/schemas/people';
-import type { Action } from '../policies';
-import { saveForm } from './forms';
+import { saveForm, type FormSteps } from './forms';
 import { guard } from './guard';
 
 /**
  * A form that changes a record: like any form, and when somebody saved the record meanwhile the page also gets what it
  * says now, so that the person can compare and decide.
  */
-export async function saveEdited<S extends z.ZodObject>(
+export async function saveEdited<S extends z.ZodObject, Prepared = void>(
 	event: RequestEvent,
-	steps: {
-		action: Action;
-		schema: S;
-		schemaFor?: (sent: FormData) => S;
-		save: (person: SignedInPerson, data: z.output<S>) => Promise<string>;
+	steps: FormSteps<S, Prepared> & {
 		/** The record as it is now. */
 		newest: (person: SignedInPerson) => Promise<Partial<z.input<S>>>;
 	}

@@ -15,19 +15,21 @@ export const FILE_MEDIA = ['text/plain', 'text/csv', 'application/octet-stream']
 /** Boundaries and the other fields of a form around its file. */
 const FORM_AROUND_FILE_BYTES = 64 * 1024;
 
-function fileTooLarge(mostBytes: number): AppError {
+export function fileTooLarge(mostBytes: number): AppError {
 	const limit = `${Math.floor(mostBytes / 1024 / 1024)} MB`;
 	const message = `The file is larger than ${limit}, the most that is read here.`;
 	return new AppError('too_large', message, [{ path: FILE_FIELD, message }]);
 }
 
+export function fileMissing(): AppError {
+	const message = 'The file is missing, or there is nothing in it: choose one.';
+	return new AppError('invalid_input', message, [{ path: FILE_FIELD, message }]);
+}
+
 /** The file of a form that was read already; none and an empty one are told at its field. */
 export async function fileOf(formData: FormData, mostBytes: number): Promise<SentFile> {
 	const file = formData.get(FILE_FIELD);
-	if (!(file instanceof File) || file.size === 0) {
-		const message = 'The file is missing, or there is nothing in it: choose one.';
-		throw new AppError('invalid_input', message, [{ path: FILE_FIELD, message }]);
-	}
+	if (!(file instanceof File) || file.size === 0) throw fileMissing();
 	if (file.size > mostBytes) throw fileTooLarge(mostBytes);
 	return { name: file.name, bytes: new Uint8Array(await file.arrayBuffer()) };
 }

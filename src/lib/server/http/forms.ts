@@ -91,25 +91,30 @@ export async function fillForm<S extends z.ZodObject>(
 	return { ...form, data: { ...form.data, ...filled } };
 }
 
+/** What a form is read by, and what it does. */
+export interface FormSteps<S extends z.ZodObject, Prepared> {
+	action: Action;
+	schema: S;
+	/** The schema for what was sent, where one answer says how others are read. */
+	schemaFor?: (sent: FormData) => S;
+	/** What was sent, where it was read already. */
+	sent?: FormData;
+	/** What takes seconds and changes nothing: done before, and in no transaction. */
+	prepare?: (person: SignedInPerson, data: z.output<S>) => Promise<Prepared>;
+	/** Does it, and says where to go next. */
+	save: (person: SignedInPerson, data: z.output<S>, prepared: Prepared) => Promise<string>;
+}
+
 /**
  * A form's whole way: guard, validate, do (the service authorises, records and keeps it in one transaction), then 303.
  * After any refusal the page comes back with every word still in its box.
  */
 export async function saveForm<S extends z.ZodObject, Prepared = void>(
 	event: RequestEvent,
-	steps: {
-		action: Action;
-		schema: S;
-		/** The schema for what was sent, where one answer says how others are read. */
-		schemaFor?: (sent: FormData) => S;
-		/** What takes seconds and changes nothing: done before, and in no transaction. */
-		prepare?: (person: SignedInPerson, data: z.output<S>) => Promise<Prepared>;
-		/** Does it, and says where to go next. */
-		save: (person: SignedInPerson, data: z.output<S>, prepared: Prepared) => Promise<string>;
-	}
+	steps: FormSteps<S, Prepared>
 ) {
 	const person = guard(event, steps.action);
-	const formData = await readPageForm(event.request);
+	const formData = steps.sent ?? (await readPageForm(event.request));
 	const { form, data } = await readForm(formData, steps.schemaFor?.(formData) ?? steps.schema);
 	if (data === null) return fail(422, { form });
 	const prepare = async () => (await steps.prepare?.(person, data)) as Prepared;

@@ -12,12 +12,17 @@ function notALogo(message: string): AppError {
 	return new AppError('invalid_input', message, [{ path: 'file', message }]);
 }
 
+export interface MadeLogo {
+	png: Buffer;
+	widthPx: number;
+	heightPx: number;
+}
+
 /** Makes a logo anew from what was sent, at most 600 × 200 px, with nothing in it but the picture. */
-export async function makeLogo(
-	bytes: Uint8Array
-): Promise<{ png: Buffer; widthPx: number; heightPx: number }> {
+export async function makeLogo(bytes: Uint8Array): Promise<MadeLogo> {
 	const type = await fileTypeFromBuffer(bytes);
-	if (!type || !TAKEN.has(type.mime)) throw notALogo('The logo must be a PNG or JPEG picture.');
+	if (!type || !TAKEN.has(type.mime))
+		throw notALogo('The logo must be a PNG or JPEG picture of at most 5 MB.');
 	try {
 		const { data, info } = await sharp(bytes, { limitInputPixels: MOST_PIXELS })
 			.rotate()

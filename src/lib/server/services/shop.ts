@@ -6,7 +6,7 @@ import { notFound } from '../errors';
 import { sha256 } from '../hash';
 import { allow } from '../policies';
 import { recordBy } from './audit';
-import { makeLogo } from './logo-picture';
+import { makeLogo, type MadeLogo } from './logo-picture';
 import { saveVersioned } from './records';
 
 /** One of a workshop's logos, ready for a page. */
@@ -63,8 +63,16 @@ async function changeShop(
 	});
 }
 
-export function saveShop(person: SignedInPerson, { version, ...details }: ShopDetails): Promise<ShopView> {
-	return changeShop(person, 'shop.changed', version, details);
+/** The details, and the logo that was sent along with them. */
+export function saveShop(
+	person: SignedInPerson,
+	{ version, ...details }: ShopDetails,
+	logo: MadeLogo | null = null
+): Promise<ShopView> {
+	return inTransaction(async () => {
+		const shop = await changeShop(person, 'shop.changed', version, details);
+		return logo ? keepLogo(person, logo) : shop;
+	});
 }
 
 /** Whether managers and engineers must have a second factor; from their next request on. */
@@ -75,8 +83,12 @@ export function saveFactorRule(person: SignedInPerson, rule: FactorRule): Promis
 
 /** Takes a logo, made anew from what was sent. Pages that were sent before keep theirs. */
 export async function saveLogo(person: SignedInPerson, bytes: Uint8Array): Promise<ShopView> {
-	const { workshopId } = allow(person, 'shop.write');
-	const { png, widthPx, heightPx } = await makeLogo(bytes);
+	allow(person, 'shop.write');
+	return keepLogo(person, await makeLogo(bytes));
+}
+
+function keepLogo(person: SignedInPerson, { png, widthPx, heightPx }: MadeLogo): Promise<ShopView> {
+	const { workshopId } = person;
 	const logoSha256 = sha256(png);
 	return inTransaction(async (transaction) => {
 		const row = { workshopId, sha256: logoSha256 };

@@ -1,8 +1,8 @@
-import { redirect, type RequestEvent } from '@sveltejs/kit';
+import type { RequestEvent } from '@sveltejs/kit';
 import { invitationInputSchema, type SignedInPerson } from '$lib/schemas/people';
 import { idSchema } from '$lib/schemas/fields';
-import { doOrSay } from '$lib/server/http/do-or-say';
-import { loadForm, saveForm } from '$lib/server/http/forms';
+import { besideForm } from '$lib/server/http/beside-form';
+import { loadForm, readPageForm, saveForm } from '$lib/server/http/forms';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { validate } from '$lib/server/http/validate';
 import { invite, inviteAgain, withdrawInvitation } from '$lib/server/services/invitations';
@@ -18,15 +18,17 @@ export const load: PageServerLoad = async (event) => {
 	};
 };
 
-/** One button on one invitation. */
+/** One button on one invitation; what is typed for the next one stays. */
 async function doWithInvitation(
 	event: RequestEvent,
 	done: string,
 	work: (person: SignedInPerson, invitationId: number) => Promise<unknown>
 ) {
-	return doOrSay(event, 'people.write', async (person, sent) => {
+	const person = guard(event, 'people.write');
+	const sent = await readPageForm(event.request);
+	return besideForm({ sent, schema: invitationInputSchema }, async () => {
 		await work(person, validate(idSchema, sent.get('invitation') ?? undefined));
-		redirect(303, `/people?done=${done}#invitations`);
+		return { done };
 	});
 }
 

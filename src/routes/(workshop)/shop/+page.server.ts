@@ -1,19 +1,14 @@
-import { fail, redirect } from '@sveltejs/kit';
+import type { RequestEvent } from '@sveltejs/kit';
 import { versionSchema } from '$lib/schemas/fields';
-import {
-	factorRuleSchema,
-	MOST_LOGO_BYTES,
-	shopDetailsSchema,
-	shopFormSchema,
-	type ShopView
-} from '$lib/schemas/shop';
-import { AppError } from '$lib/server/errors';
-import { doOrSay } from '$lib/server/http/do-or-say';
+import { MOST_LOGO_BYTES, shopDetailsSchema, shopFormSchema, type ShopView } from '$lib/schemas/shop';
+import type { SignedInPerson } from '$lib/schemas/people';
+import { besideForm } from '$lib/server/http/beside-form';
 import { saveEdited } from '$lib/server/http/edit-form';
-import { fileOf, readFileForm } from '$lib/server/http/file-upload';
+import { bytesOf, readFormAroundFile, type FormAroundFile } from '$lib/server/http/form-around-file';
 import { loadForm } from '$lib/server/http/forms';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { validate } from '$lib/server/http/validate';
+import { makeLogo } from '$lib/server/services/logo-picture';
 import { getShop, removeLogo, saveFactorRule, saveLogo, saveShop } from '$lib/server/services/shop';
 import type { Actions, PageServerLoad } from './$types';
 
@@ -31,38 +26,47 @@ export const load: PageServerLoad = async (event) => {
 	};
 };
 
+/** The details and what stands beside them come as one form, so that none of it costs what was typed in the other. */
+const readShopForm = (event: RequestEvent): Promise<FormAroundFile> =>
+	orPageError(readFormAroundFile(event.request, MOST_LOGO_BYTES));
+
+async function beside(
+	event: RequestEvent,
+	done: string,
+	work: (person: SignedInPerson, form: FormAroundFile, version: number) => Promise<ShopView>
+) {
+	const person = guard(event, 'shop.write');
+	const form = await readShopForm(event);
+	const { sent } = form;
+	return besideForm({ sent, schema: shopFormSchema }, async () => {
+		const seen = validate(versionSchema, sent.get('version') ?? undefined);
+		const { version } = await work(person, form, seen);
+		// Where somebody else changed the shop meanwhile, the details must still find out.
+		return { done, filled: { version: String(version === seen + 1 ? version : seen) } };
+	});
+}
+
 export const actions: Actions = {
-	details: (event) =>
-		saveEdited(event, {
+	details: async (event) => {
+		guard(event, 'shop.write');
+		const form = await readShopForm(event);
+		return saveEdited(event, {
 			action: 'shop.write',
 			schema: shopFormSchema,
-			save: async (person, form) => {
-				await saveShop(person, validate(shopDetailsSchema, form));
+			sent: form.sent,
+			prepare: async () => (form.file ? makeLogo(bytesOf(form, MOST_LOGO_BYTES)) : null),
+			save: async (person, details, logo) => {
+				await saveShop(person, validate(shopDetailsSchema, details), logo);
 				return '/shop?done=details';
 			},
 			newest: async (person) => toShopForm(await getShop(person))
-		}),
-	logo: async (event) => {
-		const person = guard(event, 'shop.write');
-		try {
-			const file = await fileOf(await readFileForm(event.request, MOST_LOGO_BYTES), MOST_LOGO_BYTES);
-			await saveLogo(person, file.bytes);
-		} catch (refusal) {
-			if (!(refusal instanceof AppError)) throw refusal;
-			return fail(refusal.status, { refusal: refusal.message });
-		}
-		redirect(303, '/shop?done=logo#logo');
+		});
 	},
-	removeLogo: (event) =>
-		doOrSay(event, 'shop.write', async (person, sent) => {
-			await removeLogo(person, validate(versionSchema, sent.get('version') ?? undefined));
-			redirect(303, '/shop?done=noLogo#logo');
-		}),
+	logo: (event) => beside(event, 'logo', (person, form) => saveLogo(person, bytesOf(form, MOST_LOGO_BYTES))),
+	removeLogo: (event) => beside(event, 'noLogo', (person, _form, version) => removeLogo(person, version)),
 	secondFactor: (event) =>
-		doOrSay(event, 'shop.write', async (person, sent) => {
-			const version = sent.get('version') ?? undefined;
-			const rule = { requiresSecondFactor: sent.get('requires') === 'true', version };
-			await saveFactorRule(person, validate(factorRuleSchema, rule));
-			redirect(303, '/shop?done=factor#second-factor');
+		beside(event, 'factor', (person, { sent }, version) => {
+			const requiresSecondFactor = sent.get('requires') === 'true';
+			return saveFactorRule(person, { requiresSecondFactor, version });
 		})
 };
