@@ -17,6 +17,22 @@ async function inviteByPage(page: Page, name: string, role: string): Promise<str
 	return email;
 }
 
+test('a button on one invitation leaves the next as it is typed', ONCE, async ({ page }) => {
+	await signInAs(page, 'manager');
+	const name = `Rowan ${randomUUID().slice(0, 8)}`;
+	await inviteByPage(page, name, 'installer');
+	await openForm(page, '/people');
+	await page.getByLabel('Name').fill('Somebody else');
+	await page.getByRole('button', { name: `Send it again, to ${name}` }).click();
+	await expect(page.getByText(/^The invitation is on its way once more/)).toBeVisible();
+	await expect(page.getByLabel('Name')).toHaveValue('Somebody else');
+	await page.getByRole('button', { name: `Withdraw it, from ${name}` }).click();
+	await expect(page.getByText(/^The invitation is withdrawn/)).toBeVisible();
+	await expect(page.getByLabel('Name')).toHaveValue('Somebody else');
+	await expect(page.getByText(name)).toHaveCount(0);
+	await expectNoViolations(page);
+});
+
 test('somebody is invited, joins by the letter’s link, gets another role, and is out at once on leaving', async ({
 	page,
 	browser,

@@ -27,12 +27,59 @@ test('the manager keeps the details of the shop, and they stay as they were type
 	).toBeVisible();
 });
 
+const NOT_A_LOGO = 'The logo must be a PNG or JPEG picture of at most 5 MB.';
+const TOO_LARGE = 'The file is larger than 5 MB, the most that is read here.';
+const pictureOf = (buffer: Buffer) => ({ name: 'logo.png', mimeType: 'image/png', buffer });
+const drawLogo = (): Promise<Buffer> =>
+	sharp({ create: { width: 90, height: 30, channels: 3, background: '#0f4c4a' } })
+		.png()
+		.toBuffer();
+
+for (const javaScriptEnabled of [true, false]) {
+	test.describe(`the details of the shop, ${javaScriptEnabled ? 'with' : 'without'} a script`, () => {
+		test.use({ javaScriptEnabled });
+
+		test(
+			'stay as typed whatever is done beside them, and take only a telephone number',
+			ONCE,
+			async ({ page }) => {
+				await openForm(page, '/shop');
+				const number = page.getByLabel('Business number');
+				const phone = page.getByLabel('Telephone');
+				await number.fill('BN not saved yet');
+				await phone.fill('ask for Ada');
+				const choices = [
+					[Buffer.from('<svg xmlns="a"></svg>'), NOT_A_LOGO],
+					[Buffer.alloc(6 * 1024 * 1024), TOO_LARGE]
+				] as const;
+				for (const [buffer, refusal] of choices) {
+					await page.getByLabel(/logo$/).setInputFiles(pictureOf(buffer));
+					await page.getByRole('button', { name: 'Take this logo' }).click();
+					await expect(page.getByRole('link', { name: refusal })).toHaveAttribute('href', '#field-file');
+					await expect(page.getByLabel(/logo$/)).toHaveAccessibleDescription(new RegExp(refusal));
+					await expect(number).toHaveValue('BN not saved yet');
+				}
+				await page.getByLabel(/logo$/).setInputFiles(pictureOf(await drawLogo()));
+				await page.getByRole('button', { name: 'Take this logo' }).click();
+				await expect(page.getByText(/^The logo stands on prints/)).toBeVisible();
+				await expect(number).toHaveValue('BN not saved yet');
+				await page.getByRole('button', { name: 'Go on without it' }).click();
+				await expect(page.getByText(/go on without a logo/)).toBeVisible();
+				await expect(number).toHaveValue('BN not saved yet');
+				await page.getByRole('button', { name: 'Save the shop' }).click();
+				await expect(page.getByRole('link', { name: /^Telephone takes only digits, spaces,/ })).toBeVisible();
+				await expect(phone).toHaveValue('ask for Ada');
+			}
+		);
+	});
+}
+
 test('a logo is taken from a picture and nothing else, and can go', ONCE, async ({ page }) => {
 	await page.goto('/shop');
 	const svg = { name: 'logo.png', mimeType: 'image/png', buffer: Buffer.from('<svg xmlns="a"></svg>') };
 	await page.getByLabel(/logo$/).setInputFiles(svg);
 	await page.getByRole('button', { name: 'Take this logo' }).click();
-	await expect(page.getByText('The logo must be a PNG or JPEG picture.')).toBeVisible();
+	await expect(page.getByRole('link', { name: NOT_A_LOGO })).toBeVisible();
 	const background = '#0f4c4a';
 	const create = { width: 240, height: 60, channels: 3 as const, background };
 	const buffer = await sharp({ create }).png().toBuffer();

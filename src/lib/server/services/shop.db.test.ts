@@ -11,6 +11,7 @@ import { getCautionText, listIssuedCautions, saveCautionText } from './caution-t
 import { getRecommendationDocument } from './recommendations';
 import { addMonths, today } from './days';
 import { getRetention, saveRetention } from './retention';
+import { makeLogo } from './logo-picture';
 import { getShop, removeLogo, saveFactorRule, saveLogo, saveShop } from './shop';
 
 useTestDatabase();
@@ -68,6 +69,19 @@ describe('a logo', () => {
 		const row = await WorkshopLogo.findOne({ where: { workshopId } });
 		expect((await sharp(row!.png).metadata()).format).toBe('png');
 		expect(row!.png.includes('Somebody')).toBe(false);
+	});
+
+	it('comes along with the details or not at all', async () => {
+		const { manager } = await makeCrew();
+		const logo = await makeLogo(await picture(90, 30).png().toBuffer());
+		expect(await saveShop(manager, { ...DETAILS, version: 0 }, logo)).toMatchObject({
+			...DETAILS,
+			...{ logo: { widthPx: 90, heightPx: 30 }, version: 2 }
+		});
+		const other = await makeLogo(await picture(60, 30).png().toBuffer());
+		const late = saveShop(manager, { ...DETAILS, version: 0 }, other);
+		await expect(late).rejects.toMatchObject({ code: 'changed_meanwhile' });
+		expect((await getShop(manager)).logo).toMatchObject({ widthPx: 90 });
 	});
 
 	it.each([
