@@ -5,7 +5,7 @@ import type { Found } from './find-fit';
 import { measureErrors } from './fit-errors';
 import type { FitSetup, TraceToFit } from './fit-setup';
 import { compareOn, type ErrorsCompared } from './leave-out';
-import { residualsOf, type Noises } from './noise';
+import type { Noises } from './noise';
 import { drawResiduals, sortByTemperature, type ResidualCurve, type TemperatureBin } from './residual-views';
 import type { FitStatus } from './search';
 import type { TraceProblem } from './trace-problem';
@@ -52,16 +52,9 @@ export const REASONS: Readonly<Record<FitStatus, string>> = {
 };
 const NOT_SETTLED = ' What the readings are worth had not settled to 3 % by then.';
 
-/** What the model gives with the book's values and with those that were found. */
-function compareFitted({ setup, problem, found, before: book }: FitPieces) {
+/** What the model gives with the book's values and with those that were found, each from the starts that fit best to them. */
+function compareFitted({ setup, problem, found, residualsBefore: before }: FitPieces) {
 	const { blocks } = problem;
-	const foretold = setup.models.map((model) =>
-		model.predict(
-			book,
-			model.starts.map(({ mean }) => mean)
-		)
-	);
-	const before = blocks.map((block) => residualsOf(block, foretold[block.trace]!));
 	const after = problem.residuals(found.parameters);
 	const timesS = setup.all.map((trace) => setup.traceAt(trace).trace.timeS);
 	return {
@@ -85,6 +78,8 @@ export interface FitPieces {
 	traces: readonly TraceToFit[];
 	found: Found;
 	before: readonly (number | null)[];
+	/** With the values of before, K, block by block. */
+	residualsBefore: readonly Float64Array[];
 	posterior: Posterior;
 	candidates: Candidate[];
 	leftOutTraces: ErrorsCompared | null;

@@ -163,6 +163,17 @@ describe('a fit to a trace', () => {
 		expect(off(({ afterK }) => afterK)).toBeLessThan(off(({ beforeK }) => beforeK) / 2);
 	});
 
+	it('lets the values of before begin where they fit best, too: a book that has the fitted ones is as near', () => {
+		const traces = [invent()];
+		// The first readings are off, so that from them even the right values would be.
+		traces[0]!.trace.channels.cellC!.subarray(0, 2).forEach((value, at, cells) => (cells[at] = value + 3));
+		const { estimates } = fit({ traces });
+		const book = { battery: { caseCellConductance: estimates[0]!.value } };
+		const { before, after } = fit({ traces, book }).errors.fitted;
+		expect(before.all.rmsK).toBeCloseTo(after.all.rmsK, 2);
+		expect(before.byChannel.cellC!.biasK).toBeCloseTo(after.byChannel.cellC!.biasK, 2);
+	});
+
 	it('does not hold a heat shield’s reading against a mount that has none, and says so', () => {
 		const shielded = parseScenario({ ...DAY, shield: {} });
 		const { unused } = fit({ traces: [invent(['exhaustShieldC', 'cellC'], shielded)] });

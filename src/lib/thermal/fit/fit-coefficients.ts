@@ -7,6 +7,7 @@ import { describeFit, REASONS, type CoefficientFit } from './describe-fit';
 import { findPosterior } from './estimates';
 import { findFit, type FindOptions } from './find-fit';
 import { FitSetup, type TraceToFit } from './fit-setup';
+import { holdValues } from './hold-values';
 import { leaveEachOut } from './leave-out';
 import { LOSSES, type LossName } from './robust-loss';
 
@@ -46,7 +47,7 @@ const within = (from: number, size: number) => (share: number) => from + size * 
  * θ moves in standard deviations z of its prior, and is kept within its bounds by projecting each step onto them. σ and the number of
  * readings that say as much as an independent one are read from the residuals of each channel, and w counts the readings down by it:
  * readings a minute apart are off by much the same. Each measured node's start temperature is fitted along, believed to be its first
- * reading ± 1 K. Intervals are those of the normal approximation at the best fit, in z, with Student's distribution for σ.
+ * reading ± 1 K; so it is to the values of before, for the comparison. Intervals are those of the normal approximation at the best fit, in z, with Student's distribution for σ.
  *
  * @param input traces with their scenarios (K, s, A as FitTrace says), coefficients with priors and bounds, the book that holds
  *   before, and options
@@ -88,6 +89,7 @@ export function* fitCoefficients({
 		? yield* partOf(leaveEachOut(setup, find, parameters, noises, before), within(SHARES.fit, SHARES.leftOut))
 		: null;
 	const done = SHARES.fit + SHARES.leftOut;
+	const residualsBefore = yield* partOf(holdValues(setup, before, noises, find.loss), () => done);
 	const sensitivities = yield* partOf(problem.findSensitivities(parameters), () => done);
 	const airPull = yield* partOf(
 		findAirPull(setup, problem, parameters, sensitivities, noises, airError),
@@ -98,5 +100,10 @@ export function* fitCoefficients({
 		weighCandidates(setup, parameters, sensitivities, noises, posterior),
 		within(done + SHARES.air, SHARES.candidates)
 	);
-	return describeFit({ setup, problem, traces, found, before, posterior, candidates, leftOutTraces });
+	return describeFit({
+		...{ setup, problem, traces, found, before, residualsBefore },
+		posterior,
+		candidates,
+		leftOutTraces
+	});
 }

@@ -91,4 +91,9 @@ export class FitSetup {
 		const models = traces.map((trace) => this.models[trace]!);
 		return new TraceProblem(models, this.coefficients, this.blocksOf(traces, 'fitted'));
 	}
+
+	/** The problem of the start temperatures alone, with the coefficients held. */
+	startsProblemOf(held: readonly (number | null)[]): TraceProblem {
+		return new TraceProblem(this.models, [], this.blocksOf(this.all, 'fitted'), held);
+	}
 }

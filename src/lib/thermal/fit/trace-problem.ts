@@ -35,7 +35,9 @@ export class TraceProblem {
 	constructor(
 		readonly models: readonly TraceModel[],
 		readonly coefficients: readonly Coefficient[],
-		readonly blocks: readonly Block[]
+		readonly blocks: readonly Block[],
+		/** Values of the models' coefficients that stay as they are, where none is to be found. */
+		private readonly held: readonly (number | null)[] | null = null
 	) {
 		let from = coefficients.length;
 		for (const { starts } of models) {
@@ -140,7 +142,8 @@ export class TraceProblem {
 	}
 
 	private foretellTrace(trace: number, parameters: readonly number[]): readonly Float64Array[] {
-		return this.models[trace]!.predict(this.valuesAt(parameters), this.startsAt(parameters, trace));
+		const values = this.held ?? this.valuesAt(parameters);
+		return this.models[trace]!.predict(values, this.startsAt(parameters, trace));
 	}
 
 	/** To both sides for a coefficient, as far as its bounds go; start temperatures are felt in so straight a line that one side does. */
