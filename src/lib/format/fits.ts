@@ -1,4 +1,5 @@
 import { MOST_FIT_NAME, type FitState } from '../schemas/fits';
+import type { DoneCoefficientFit } from '../thermal/fit';
 import type { TraceLeg } from '../thermal/traces';
 import { formatNumber, formatWithUnit, THIN_SPACE } from './numbers';
 import { formatClockHour, formatHours } from './time';
@@ -43,6 +44,12 @@ export const isLearnt = (spreadLeft: number): boolean => Math.round(spreadLeft *
 export function sayLearnt(spreadLeft: number): string {
 	if (!isLearnt(spreadLeft)) return 'nothing was learnt';
 	return `${Math.round(spreadLeft * 100)}${THIN_SPACE}% of the spread is left`;
+}
+
+/** Why no book is made from a fit that was worked out; empty where one may be. */
+export function sayNoBook({ stopped }: Pick<DoneCoefficientFit, 'stopped'>): string {
+	if (stopped === 'converged') return '';
+	return 'This fit did not come to a best fit: its values are only where the search was given up, so no coefficient book is made from it. Begin another fit, with fewer coefficients or with less spread held of them before.';
 }
 
 /** "2, 4" → [2, 4]; null for what is no list of whole numbers. */

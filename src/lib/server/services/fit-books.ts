@@ -1,7 +1,7 @@
 import type { BookView } from '$lib/schemas/books';
 import type { FittedDraft } from '$lib/schemas/fits';
 import type { SignedInPerson } from '$lib/schemas/people';
-import { isLearnt } from '$lib/format/fits';
+import { isLearnt, sayNoBook } from '$lib/format/fits';
 import { formatNumber } from '$lib/format/numbers';
 import type { CoefficientEstimate } from '$lib/thermal/fit';
 import { Coefficient, CoefficientBook, Fit, Trace } from '../db/models';
@@ -57,6 +57,8 @@ export async function draftFittedBook(
 		throw new AppError('conflict', 'This fit has not come to values that a book could have.');
 	}
 	await refuseSynthetic(fit);
+	const noBook = sayNoBook(result);
+	if (noBook) throw new AppError('conflict', noBook);
 	const learnt = result.estimates.filter(({ spreadLeft }) => isLearnt(spreadLeft));
 	if (learnt.length === 0) {
 		throw new AppError(

@@ -251,6 +251,24 @@ describe('a book with fitted values', () => {
 		LONG_MS
 	);
 
+	it(
+		'is not begun from a fit whose search was given up',
+		async () => {
+			const { id, result } = await fitAs(crew.engineer, asked());
+			const before = await listBooks(crew.engineer);
+			for (const stopped of ['stalled', 'evaluations used up'] as const) {
+				await Fit.update({ result: { ...result!, stopped } }, { where: { id } });
+				const draft = draftFittedBook(crew.engineer, id, { name: 'Given up', note: '' });
+				await expect(draft).rejects.toMatchObject({
+					code: 'conflict',
+					message: expect.stringContaining('did not come to a best fit') as string
+				});
+			}
+			expect(await listBooks(crew.engineer)).toEqual(before);
+		},
+		LONG_MS
+	);
+
 	it('is not begun from a fit that came to nothing', async () => {
 		const { id } = await beginAs(crew.engineer, asked());
 		await cancelFit(crew.engineer, id);
