@@ -4,6 +4,7 @@ import { parseScenario } from '$lib/thermal';
 import { watchUseLimit } from '$lib/thermal/assess';
 import { heatLimitsOf } from '$lib/thermal/chemistries';
 import { drawCutOuts } from '$lib/thermal/uncertainty';
+import { AppError } from '../../errors';
 import { completeInputs, hashInputs, runInputs } from '../run-inputs';
 
 export interface RerunTask {
@@ -21,11 +22,20 @@ export interface RerunOutcome {
 	cutOutShare: number;
 }
 
-export type RerunAnswer = { outcome: RerunOutcome } | { reason: string };
+/** A reason is for people; a fault, where it was ours, for the log. */
+export type RerunAnswer = { outcome: RerunOutcome } | { reason: string; fault?: string };
+
+const OUR_FAULT = 'It could not be assessed again, through a fault of ours. What holds of it is what was assessed before.';
 
 function drawDays({ scenario, battery }: AssessmentInputs, seed: number): number {
 	const watched = watchUseLimit(parseScenario(scenario), heatLimitsOf(battery));
 	return drawCutOuts(watched, { samples: DAYS_DRAWN, seed }).share;
+}
+
+/** What is said of an error: its own words where they were written for people, else ours. */
+function describeFailure(error: unknown): { reason: string; fault?: string } {
+	if (error instanceof AppError) return { reason: error.message };
+	return { reason: OUR_FAULT, fault: error instanceof Error ? (error.stack ?? error.message) : String(error) };
 }
 
 /**
@@ -41,6 +51,6 @@ export function rerunInputs({ id, inputs: then, book }: RerunTask): RerunAnswer 
 			outcome: { inputs, inputsSha256: hashInputs(inputs), result, cutOutShare: drawDays(inputs, id) }
 		};
 	} catch (error) {
-		return { reason: error instanceof Error ? error.message : String(error) };
+		return describeFailure(error);
 	}
 }

@@ -1,5 +1,5 @@
 import { spawn } from 'node:child_process';
-import { describe, expect, it } from 'vitest';
+import { describe, expect, it, vi } from 'vitest';
 import {
 	addSurveyedMount,
 	COOL_CABIN,
@@ -17,6 +17,7 @@ import {
 	Rerun,
 	RerunItem
 } from '../../db/models';
+import { logger } from '../../logger';
 import { assessJob, assessMount, reproduceAssessment } from '../assessments';
 import { checkTrails } from '../audit-check';
 import { changeCoefficient, draftBook, moveBook } from '../book-changes';
@@ -162,6 +163,27 @@ describe('a re-run', () => {
 		expect(await listLeft(crew.engineer, rerun!.id)).toMatchObject([
 			{ mountLetter: 'A', state: 'failed', reason: expect.stringMatching(/leg/i) }
 		]);
+	}, 120_000);
+
+	it('says of a fault of ours that it is one, and tells the log alone what it was', async () => {
+		const crew = await makeCrew();
+		const { hot } = await makeAssessed(crew);
+		const { id: _, ...kept } = (await Assessment.findOne({ where: { mountId: hot.id } }))!.get();
+		const dayPlan = null as unknown as typeof kept.inputs.dayPlan;
+		await Assessment.create({ ...kept, inputs: { ...kept.inputs, dayPlan } });
+		const log = vi.spyOn(logger, 'error').mockReturnValue();
+		await putInForce(crew, 0.4);
+		await finishReruns();
+		const logged = log.mock.calls;
+		log.mockRestore();
+		const [rerun] = await listReruns(crew.engineer);
+		expect(rerun).toMatchObject({ state: 'done', done: 1, failed: 1 });
+		const left = await listLeft(crew.engineer, rerun!.id);
+		expect(left).toMatchObject([{ mountLetter: 'A', state: 'failed' }]);
+		expect(left[0]!.reason).toMatch(/^It could not be assessed again, through a fault of ours\./);
+		expect(left[0]!.reason).not.toMatch(/null|undefined|TypeError|legs/);
+		const told = logged.find(([, words]) => words === 'a mount could not be assessed again');
+		expect(told?.[0]).toMatchObject({ err: expect.stringContaining('TypeError') as string });
 	}, 120_000);
 
 	it('does not hold up those of other workshops when it cannot go on', async () => {

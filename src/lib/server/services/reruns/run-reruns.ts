@@ -57,6 +57,9 @@ async function runItems(items: RerunItem[], shelf: Shelf, threads: Threads): Pro
 		const book = closestBook(inForce, { engineLayout, positionKind });
 		if (!book) throw noBookInForce();
 		const answer = await threads.run({ id, inputs, book: await shelf.valuesOf(book) });
+		if ('fault' in answer) {
+			logger.error({ err: answer.fault, rerunItemId: id }, 'a mount could not be assessed again');
+		}
 		return { itemId: id, fromSha256: inputsSha256, bookId: book.id, answer };
 	};
 	return Promise.all(items.map(runOne));
