@@ -101,6 +101,23 @@ describe('a book on its way', () => {
 		}
 	}, 60_000);
 
+	it('is not put in force by who changed a value in it past the service either', async () => {
+		const { crew, draft } = await makeDraft();
+		const said = { ...SAID, version: draft.version };
+		const changed = await changeCoefficient(crew.manager, draft.id, SHARE, said);
+		await moveBook(crew.engineer, draft.id, { to: 'on-trial', version: changed.version });
+		await CoefficientBook.update(
+			{ state: 'withdrawn' },
+			{ where: { workshopId: crew.workshopId, state: 'in-force' } }
+		);
+		const putInForceBy = (inForceBy: number) =>
+			CoefficientBook.update({ state: 'in-force', inForceBy }, { where: { id: draft.id } });
+		await expect(putInForceBy(crew.manager.id)).rejects.toThrow('changed a value');
+		expect(await CoefficientBook.findByPk(draft.id)).toMatchObject({ state: 'on-trial' });
+		await putInForceBy(crew.installer.id);
+		expect(await CoefficientBook.findByPk(draft.id)).toMatchObject({ state: 'in-force' });
+	});
+
 	it('changes in nothing, neither by the service nor past it', async () => {
 		const { crew, draft } = await makeDraft();
 		const trial = await moveBook(crew.engineer, draft.id, { to: 'on-trial', version: draft.version });

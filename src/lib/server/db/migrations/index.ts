@@ -89,6 +89,7 @@ import { migration as m130 } from './130-traces';
 import { migration as m131 } from './131-trace-loggers';
 import { migration as m132 } from './132-fits';
 import { migration as m133 } from './133-coefficients-fit';
+import { migration as m134 } from './134-coefficient-books-hands-in';
 import { migration as m160 } from './160-prediction-checks';
 import { migration as m161 } from './161-prediction-checks-traces';
 import { migration as m162 } from './162-outgoing-mails-handed-over';
@@ -187,6 +188,7 @@ export const migrations: Migration[] = [
 	m131,
 	m132,
 	m133,
+	m134,
 	m160,
 	m161,
 	m162
