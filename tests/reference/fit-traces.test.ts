@@ -52,7 +52,10 @@ describe('a fit of six coefficients to three days', () => {
 			const truth = SYNTHETIC_TRUTH.coefficients[group]![key]!;
 			expect(estimate.low).toBeLessThan(truth);
 			expect(estimate.high).toBeGreaterThan(truth);
-			expect(estimate.spreadLeft).toBeLessThan(0.1);
+			expect(Math.abs(estimate.value / truth - 1)).toBeLessThan(0.03);
+			expect(estimate.spreadLeft).toBeLessThan(0.05);
+			// What stood in the book is not what these days say.
+			expect(estimate.before < estimate.low || estimate.before > estimate.high).toBe(true);
 		},
 		PATIENCE_MS
 	);
@@ -62,13 +65,21 @@ describe('a fit of six coefficients to three days', () => {
 		expect(whole().reason).toMatch(/^The best fit was found/);
 	});
 
-	it('comes from errors of a kelvin down to the noise that was put in', () => {
+	it('comes from errors of a kelvin down to the noise that was put in, at every channel', () => {
 		const { before, after } = whole().errors.fitted;
-		expect(before.byChannel.cellC!.rmsK).toBeGreaterThan(0.6);
-		// The glitch stays in the error, four readings some 60 K off among 4,000; the nineteen of twenty do not see it.
-		expect(after.byChannel.cellC!.p95K).toBeLessThan(0.7);
-		expect(after.byChannel.caseC!.rmsK).toBeLessThan(0.35);
-		expect(Math.abs(after.byChannel.caseC!.biasK)).toBeLessThan(0.03);
+		// A normal number of 0.3 K has nineteen of twenty within 0.59 K.
+		for (const channel of ['bayAirC', 'exhaustShieldC', 'caseC', 'cellC'] as const) {
+			expect(before.byChannel[channel]!.p95K, channel).toBeGreaterThan(1.5);
+			expect(after.byChannel[channel]!.p95K, channel).toBeGreaterThan(0.55);
+			expect(after.byChannel[channel]!.p95K, channel).toBeLessThan(0.68);
+		}
+		// The glitch stays in the error of the cells alone, four readings some 60 K off among 4,270.
+		for (const channel of ['bayAirC', 'exhaustShieldC', 'caseC'] as const) {
+			expect(before.byChannel[channel]!.rmsK, channel).toBeGreaterThan(0.8);
+			expect(after.byChannel[channel]!.rmsK, channel).toBeGreaterThan(0.28);
+			expect(after.byChannel[channel]!.rmsK, channel).toBeLessThan(0.38);
+			expect(Math.abs(after.byChannel[channel]!.biasK), channel).toBeLessThan(0.02);
+		}
 	});
 
 	it('does as well on each day when it has not seen it', () => {
@@ -109,7 +120,9 @@ describe('a fit of six coefficients to three days', () => {
 			expect(worst(fitWith({ loss: 'huber', leaveOut: false }))).toBeLessThan(0.5);
 			const square = fitWith({ loss: 'squares', leaveOut: false });
 			const width = ({ estimates }: DoneCoefficientFit) => estimates[5]!.high - estimates[5]!.low;
-			expect(worst(square) + width(square) / width(whole())).toBeGreaterThan(1.5);
+			// The truth is outside an interval that is twice as wide besides.
+			expect(worst(square)).toBeGreaterThan(0.5);
+			expect(width(square) / width(whole())).toBeGreaterThan(2);
 		},
 		PATIENCE_MS
 	);

@@ -8,13 +8,17 @@ import { dayText, readAs, sendTrace, type Confirmed } from '../../../../../tests
 import { fitInputSchema } from '$lib/schemas/fits';
 import { legsChangeSchema } from '$lib/schemas/traces';
 import type { TraceView } from '$lib/schemas/traces';
+import { FIT_CHANNELS } from '$lib/thermal/fit';
+import { TraceModel } from '$lib/thermal/fit/trace-model';
 import { connection } from '../../db/connection';
+import { Assessment, Trace } from '../../db/models';
 import { assessMount } from '../assessments';
 import { moveBook } from '../book-changes';
 import { today } from '../days';
 import { draftFittedBook } from '../fit-books';
 import { createFit, followFit, prepareFit } from '../fits';
 import { getJob, setJobClimate } from '../jobs';
+import { traceToFit } from '../trace-scenario';
 import { saveLegs } from '../trace-views';
 import { removeTrace, restoreTrace } from '../traces';
 import { completeChecks } from './complete-checks';
@@ -51,6 +55,15 @@ async function checksOf(traceId: number) {
 		replacements: { traceId },
 		type: QueryTypes.SELECT
 	});
+}
+
+/** The cells, minute by minute, as the model has them on the day of a trace. */
+async function foretellCells(traceId: number, assessmentId: number): Promise<Float64Array> {
+	const assessment = (await Assessment.findByPk(assessmentId))!;
+	const { trace, scenario } = await traceToFit((await Trace.findByPk(traceId))!, assessment, []);
+	const model = new TraceModel({ trace, scenario, start: { kind: 'air' } }, []);
+	const starts = model.starts.map(({ mean }) => mean);
+	return model.predict([], starts)[FIT_CHANNELS.filter((each) => model.foretells(each)).indexOf('cellC')]!;
 }
 
 /** The same job on a cooler day: another assessment. */
@@ -92,7 +105,14 @@ describe('a measured trace', () => {
 		const cellC = minutes.map((at) => 24 + at / 60 + (at >= 60 && at < 180 ? 4 : 1) + (at % 7) / 10);
 		expect(check!.measured).toBeCloseTo(cellC.reduce((sum, c) => sum + c, 0) / 360, 1);
 		expect(Number(check!.measured) - Number(check!.predicted)).toBeCloseTo(Number(check!.error), 9);
-		expect(Number(check!.square)).toBeGreaterThanOrEqual(Number(check!.error) ** 2);
+		// Mean and mean square against the day as the model runs it, worked out here minute by minute.
+		const foretoldC = await foretellCells(trace.id, assessment.id);
+		const errors = cellC.map((c, at) => c - foretoldC[at]!);
+		const meanOf = (values: number[]) => values.reduce((sum, value) => sum + value, 0) / values.length;
+		expect(Number(check!.error)).toBeCloseTo(meanOf(errors), 2);
+		expect(Number(check!.square)).toBeCloseTo(meanOf(errors.map((error) => error ** 2)), 1);
+		// No minute is off by the mean alone, so that one cannot stand for the other.
+		expect(Number(check!.square) - Number(check!.error) ** 2).toBeGreaterThan(1);
 		expect([
 			Number(check!.low) < Number(check!.predicted),
 			Number(check!.predicted) < Number(check!.high)
