@@ -55,9 +55,15 @@ test('an engineer sends a file with faults, puts its columns right, sees what wa
 	await expectNoViolations(page);
 	await page.getByLabel('Column 3 is').selectOption('Cells');
 	await page.getByLabel('Time zone of the logger’s clock').fill('Nowhere/Else');
+	await page.getByLabel('Column 2 is').selectOption('Cells');
 	await page.getByRole('button', { name: 'Read the file' }).click();
-	await expect(page.getByText('No time zone has this name.').first()).toBeVisible();
+	// Both at once, each at its box.
+	await expect(page.getByText('there is none called “Nowhere/Else”').first()).toBeVisible();
+	await page.getByRole('link', { name: /^Column 3 is Cells, and so is column 2/ }).click();
+	await expect(page.getByLabel('Column 3 is')).toBeFocused();
 	await expect(page.getByLabel('Column 3 is')).toHaveValue('cellC');
+	await expectNoViolations(page);
+	await page.getByLabel('Column 2 is').selectOption('Outside air');
 	await page.getByLabel('Time zone of the logger’s clock').fill('Australia/Darwin');
 	await page.getByRole('button', { name: 'Read the file' }).click();
 

@@ -12,7 +12,17 @@ function makeFormat(timeZone: string): Intl.DateTimeFormat {
 	});
 }
 
-/** Whether the machine knows a time zone of this name. */
+/**
+ * Whether the machine knows a time zone of this name.
+ *
+ * @param timeZone anything; a name is a text
+ * @returns true for an IANA name, or another that the machine takes for one
+ * Validity: depends on the time zone database that the machine has.
+ * Source: IANA time zone database, as the machine's own clock knows it.
+ * @example
+ * isTimeZone('Australia/Darwin'); // true
+ * isTimeZone('Nowhere/Else'); // false
+ */
 export function isTimeZone(timeZone: unknown): boolean {
 	if (typeof timeZone !== 'string' || timeZone === '') return false;
 	try {

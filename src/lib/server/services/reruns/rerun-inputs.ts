@@ -25,7 +25,8 @@ export interface RerunOutcome {
 /** A reason is for people; a fault, where it was ours, for the log. */
 export type RerunAnswer = { outcome: RerunOutcome } | { reason: string; fault?: string };
 
-const OUR_FAULT = 'It could not be assessed again, through a fault of ours. What holds of it is what was assessed before.';
+const OUR_FAULT =
+	'It could not be assessed again, through a fault of ours. What holds of it is what was assessed before.';
 
 function drawDays({ scenario, battery }: AssessmentInputs, seed: number): number {
 	const watched = watchUseLimit(parseScenario(scenario), heatLimitsOf(battery));
@@ -35,7 +36,10 @@ function drawDays({ scenario, battery }: AssessmentInputs, seed: number): number
 /** What is said of an error: its own words where they were written for people, else ours. */
 function describeFailure(error: unknown): { reason: string; fault?: string } {
 	if (error instanceof AppError) return { reason: error.message };
-	return { reason: OUR_FAULT, fault: error instanceof Error ? (error.stack ?? error.message) : String(error) };
+	return {
+		reason: OUR_FAULT,
+		fault: error instanceof Error ? (error.stack ?? error.message) : String(error)
+	};
 }
 
 /**

@@ -1,5 +1,6 @@
 import { fail, redirect, type RequestEvent } from '@sveltejs/kit';
 import { readMappingDraft, toMappingDraft } from '$lib/format/trace-mapping-form';
+import { listMappingProblems } from '$lib/format/trace-mapping-problems';
 import type { SignedInPerson } from '$lib/schemas/people';
 import {
 	curveQuerySchema,
@@ -86,34 +87,20 @@ async function open(event: RequestEvent) {
 	return { person, trace };
 }
 
-/** Boxes of the form by what the mapping calls them; what concerns no box stands above the form. */
-const BOXES: Readonly<Record<string, string>> = {
-	'mapping.time.timeZone': 'timeZone',
-	'mapping.time.firstDay': 'firstDay',
-	startHour: 'startHour'
-};
-
-function problemsOf({ problems, message }: AppError): { path: string; message: string }[] {
-	if (problems.length === 0) return [{ path: '', message }];
-	return problems.map(({ path, code, column, message: sentence }) => {
-		if (code === 'no_such_zone') return { path: 'timeZone', message: sentence };
-		const box = column ? `unit.${column.number}` : (BOXES[path] ?? '');
-		return { path: box, message: sentence };
-	});
-}
-
 export const actions: Actions = {
 	read: async (event) => {
 		const { person, trace } = await open(event);
 		const sent = await readPageForm(event.request);
 		const draft = Object.fromEntries([...sent].map(([name, value]) => [name, String(value)]));
+		const problems = listMappingProblems(draft, trace.proposal);
+		if (problems.length > 0) return fail(422, { draft, problems });
 		try {
 			const { version } = draft;
 			const said = readMappingDraft(draft, trace.mapping.delimiter, trace.proposal) as object;
 			await confirmMapping(person, trace.id, validate(traceMappingChangeSchema, { ...said, version }));
 		} catch (error) {
 			if (!(error instanceof AppError)) throw error;
-			return fail(error.status, { draft, problems: problemsOf(error) });
+			return fail(error.status, { draft, problems: [{ path: '', message: error.message }] });
 		}
 		await beginReading(person, trace.id, sayTrouble(trace.id));
 		redirect(303, `/traces/${trace.id}`);
