@@ -72,6 +72,9 @@ test('an engineer fits a coefficient to a synthetic trace, reads what came of it
 	await page.getByRole('button', { name: 'Next: what is held of them' }).click();
 	await page.getByLabel('Spread', { exact: true }).fill('-1');
 	await expect(page.getByRole('listitem').filter({ hasText: /^3: 11:00, driving at / })).toBeVisible();
+	await page.getByLabel('Legs of trace-2.csv that are kept back').fill('99');
+	await page.getByRole('button', { name: 'Begin the fit' }).click();
+	await expect(page.getByText('“trace-2.csv” has no leg 99').first()).toBeVisible();
 	await page.getByLabel('Legs of trace-2.csv that are kept back').fill('2');
 	await page.getByRole('button', { name: 'Begin the fit' }).click();
 	await page.getByRole('link', { name: 'Case to cells: Spread must be above 0.' }).click();

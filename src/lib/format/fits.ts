@@ -59,6 +59,14 @@ export function readLegNumbers(text: string): number[] | null {
 	return numbers.every((each) => Number.isInteger(each) && each > 0) ? [...new Set(numbers)] : null;
 }
 
+/** Why legs of a trace cannot be kept back; empty where they can. */
+export function sayWrongLegs(traceName: string, legCount: number, heldOut: readonly number[]): string {
+	const beyond = heldOut.filter((leg) => leg > legCount);
+	if (beyond.length > 0) return `“${traceName}” has no leg ${beyond.join(', ')}: it has ${legCount}.`;
+	if (new Set(heldOut).size < legCount) return '';
+	return `Of “${traceName}” every leg is kept back, so that nothing is left to fit to.`;
+}
+
 const HOUR_S = 3600;
 
 /** A leg of a trace in a few words: "2: 09:00, driving at 80 km/h for 2 h 30 min". */

@@ -1,9 +1,11 @@
+import { sayWrongLegs } from '$lib/format/fits';
 import type { FitInput, FitInputs } from '$lib/schemas/fits';
 import type { SignedInPerson } from '$lib/schemas/people';
 import type { CoefficientFitInput, FitBook, TraceToFit } from '$lib/thermal/fit';
 import { Assessment, type Trace } from '../db/models';
 import { EngineInputError } from '$lib/thermal/correlations/require';
-import { AppError } from '../errors';
+import { findPriorFaults } from '$lib/thermal/fit/coefficients';
+import { AppError, type FieldProblem } from '../errors';
 import { startHourOf } from '../presenters/traces';
 import { asInputError } from './input-error';
 import { traceToFit } from './trace-scenario';
@@ -33,15 +35,25 @@ export async function newestAssessments(mountIds: readonly number[]): Promise<Ma
 	return new Map(found.map((assessment) => [assessment.mountId, assessment]));
 }
 
-function requireLegs({ legs, name }: Trace, heldOut: readonly number[], path: string): void {
-	const beyond = heldOut.find((leg) => leg > legs.length);
-	const message =
-		beyond !== undefined
-			? `“${name}” has no leg ${beyond}: it has ${legs.length}.`
-			: new Set(heldOut).size === legs.length
-				? `Of “${name}” every leg is kept back, so that nothing is left to fit to.`
-				: '';
-	if (message) throw new AppError('invalid_input', message, [{ path, message }]);
+function requireFit(row: Trace, assessment: Assessment | null, at: number): asserts assessment is Assessment {
+	const why = sayUnfit(row, assessment);
+	const message = `“${row.name}” cannot be fitted to: ${why}.`;
+	if (why) throw new AppError('conflict', message, [{ path: `traces[${at}]`, message }]);
+}
+
+/** Legs that cannot be kept back, and priors that the engine does not take: everything that is wrong, at once. */
+function requireRight(rows: readonly Trace[], { traces, coefficients }: Omit<FitInput, 'name'>): void {
+	const ofLegs = rows.flatMap(({ name, legs }, at): FieldProblem[] => {
+		const message = sayWrongLegs(name, legs.length, traces[at]!.heldOutLegs);
+		return message ? [{ path: `traces[${at}].heldOutLegs`, message }] : [];
+	});
+	const ofPriors = findPriorFaults(coefficients).map(({ input: path, message, limit }): FieldProblem => ({
+		path,
+		message,
+		limit
+	}));
+	const problems = [...ofPriors, ...ofLegs];
+	if (problems[0]) throw new AppError('invalid_input', problems[0].message, problems);
 }
 
 export interface GatheredFit {
@@ -60,12 +72,8 @@ async function gather(
 	const traces: TraceToFit[] = [];
 	for (const [at, row] of rows.entries()) {
 		const assessment = assessments.get(row.mountId) ?? null;
-		const why = sayUnfit(row, assessment);
-		const path = `traces[${at}]`;
-		const message = `“${row.name}” cannot be fitted to: ${why}.`;
-		if (why) throw new AppError('conflict', message, [{ path, message }]);
-		requireLegs(row, wanted[at]!.heldOutLegs, `${path}.heldOutLegs`);
-		traces.push(await traceToFit(row, assessment!, wanted[at]!.heldOutLegs));
+		requireFit(row, assessment, at);
+		traces.push(await traceToFit(row, assessment, wanted[at]!.heldOutLegs));
 	}
 	return { traces, coefficients, book, options: { loss, leaveOut } };
 }
@@ -84,6 +92,8 @@ export async function gatherFit(
 ): Promise<GatheredFit> {
 	const rows = await findTraces(person, input.traces);
 	const assessments = await newestAssessments(rows.map(({ mountId }) => mountId));
+	rows.forEach((row, at) => requireFit(row, assessments.get(row.mountId) ?? null, at));
+	requireRight(rows, input);
 	return {
 		engineInput: await gather(rows, assessments, input, book),
 		traces: input.traces.map((each, at) => ({

@@ -171,6 +171,13 @@ describe('a fit', () => {
 		await expect(begin({ traces: [{ traceId, heldOutLegs: [9] }] })).rejects.toMatchObject({
 			message: expect.stringContaining('has no leg 9') as string
 		});
+		const both = begin({
+			traces: [{ traceId, heldOutLegs: [9] }],
+			coefficients: [{ ...CELL_PATH, prior: { ...CELL_PATH.prior, middle: -1 } }]
+		});
+		await expect(both).rejects.toMatchObject({
+			problems: [{ path: 'coefficients[0].prior.middle' }, { path: 'traces[0].heldOutLegs' }]
+		});
 		const nowhere = { ...CELL_PATH, key: 'colour' };
 		await expect(begin({ coefficients: [nowhere] })).rejects.toMatchObject({ code: 'invalid_input' });
 		const beyond = { ...CELL_PATH, prior: { law: 'logit-normal', middle: 2.5, spread: 0.3 } };

@@ -126,6 +126,19 @@ export function readCoefficients(wanted: readonly FittedCoefficient[]): Coeffici
 	});
 }
 
+/** Everything that readCoefficients would refuse of single coefficients, where that stops at the first. */
+export function findPriorFaults(wanted: readonly FittedCoefficient[]): EngineInputError[] {
+	return wanted.flatMap((each, at) => {
+		try {
+			readCoefficient(each, `coefficients[${at}]`);
+			return [];
+		} catch (error) {
+			if (error instanceof EngineInputError) return [error];
+			throw error;
+		}
+	});
+}
+
 /** Writes a value into a scenario of the writer's own; nothing where the scenario has no such group. */
 export function setCoefficient(
 	scenario: Scenario,

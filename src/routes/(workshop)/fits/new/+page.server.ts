@@ -5,7 +5,7 @@ import { readPageForm } from '$lib/server/http/forms';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { validate } from '$lib/server/http/validate';
 import { createFit, listChoices, prepareFit, type FitChoices } from '$lib/server/services/fits';
-import { listFitProblems, readFitForm, type FitDraft } from './fit-form';
+import { listFitProblems, listHeldProblems, readFitForm, type FitDraft } from './fit-form';
 import type { Actions, PageServerLoad } from './$types';
 
 /** The traces that an address names. */
@@ -45,8 +45,12 @@ export const actions: Actions = {
 				if (error instanceof AppError) return error;
 				throw error;
 			});
-		if (made instanceof AppError)
-			return fail(made.status, { draft, problems: listFitProblems(made, ids, coefficients) });
+		if (made instanceof AppError) {
+			const problems = listFitProblems(made, ids, coefficients);
+			const isTold = ({ path }: { path: string }) => problems.some((each) => each.path === path);
+			const ofLegs = listHeldProblems(draft, traces).filter((problem) => !isTold(problem));
+			return fail(made.status, { draft, problems: [...problems, ...ofLegs] });
+		}
 		redirect(303, `/fits/${made.id}`);
 	}
 };

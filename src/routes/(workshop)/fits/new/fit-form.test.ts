@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { fitInputSchema, type FitChoice } from '$lib/schemas/fits';
 import { AppError } from '$lib/server/errors';
 import { validate } from '$lib/server/http/validate';
-import { listFitProblems, readFitForm } from './fit-form';
+import { listFitProblems, listHeldProblems, readFitForm } from './fit-form';
 
 const CHOICE: FitChoice = {
 	...{ group: 'battery', key: 'caseCellConductance', meaning: 'Case to cells', unit: 'W/K', basis: '' },
@@ -58,5 +58,17 @@ describe('the form about a fit', () => {
 				message: 'Case to cells: Middle must be above 0 and below 1.'
 			}
 		]);
+	});
+
+	it('says of legs that are kept back which there are not, and that one must be left', () => {
+		const traces = [{ id: 7, name: 'ridge.csv', legs: [1, 2, 3] }];
+		const said = (text: string) => listHeldProblems({ 'held.7': text }, traces);
+		expect(said('2, 9, 12')).toEqual([
+			{ path: 'held.7', message: '“ridge.csv” has no leg 9, 12: it has 3.' }
+		]);
+		expect(said('1 2 3')).toMatchObject([
+			{ path: 'held.7', message: expect.stringContaining('every leg is kept back') as string }
+		]);
+		expect([said('2, 3'), said(''), said('last')]).toEqual([[], [], []]);
 	});
 });

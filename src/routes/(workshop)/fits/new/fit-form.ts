@@ -1,4 +1,4 @@
-import { readLegNumbers } from '$lib/format/fits';
+import { readLegNumbers, sayWrongLegs } from '$lib/format/fits';
 import { parseDecimal } from '$lib/format/parse';
 import type { FitChoice } from '$lib/schemas/fits';
 import type { FieldProblem } from '$lib/components/forms/field';
@@ -35,6 +35,18 @@ export function readFitForm(
 			return { group: choice.group, key: choice.key, prior };
 		})
 	};
+}
+
+/** Legs that are kept back of traces that have no such ones. */
+export function listHeldProblems(
+	draft: FitDraft,
+	traces: readonly { id: number; name: string; legs: readonly unknown[] }[]
+): FieldProblem[] {
+	return traces.flatMap(({ id, name, legs }) => {
+		const path = `held.${id}`;
+		const message = sayWrongLegs(name, legs.length, readLegNumbers(draft[path] ?? '') ?? []);
+		return message ? [{ path, message }] : [];
+	});
 }
 
 /** What was refused, as far as this page must know of it. */
