@@ -83,6 +83,14 @@ describe('the header', () => {
 describe('names of columns', () => {
 	it.each([
 		['Ambient temperature (°C)', 'ambientC', '°C', true],
+		['amb', 'ambientC', '°C', false],
+		['T_amb', 'ambientC', '°C', false],
+		['t_ambient', 'ambientC', '°C', false],
+		['Tamb [°C]', 'ambientC', '°C', true],
+		['ambTemp_F', 'ambientC', '°F', true],
+		['AMB_1', 'ambientC', '°C', false],
+		['lamb', null, null, false],
+		['chamber', null, null, false],
 		['Bay_Air_degF', 'bayAirC', '°F', true],
 		['underBonnetTemp', 'bayAirC', '°C', false],
 		['Exhaust shield [Â°C]', 'exhaustShieldC', '°C', true],

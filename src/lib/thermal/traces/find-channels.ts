@@ -19,7 +19,10 @@ const CHANNEL_PATTERNS: readonly { channel: TraceChannel; pattern: RegExp }[] = 
 	{ channel: 'boardC', pattern: /\bboard\b|\bbms\b|\bpcb\b|\bfets?\b/ },
 	{ channel: 'cellC', pattern: /\bcells?\b|\bcore\b/ },
 	{ channel: 'bayAirC', pattern: /\bbay\b|\bunder ?(bonnet|hood)\b|\bengine (compartment|room)\b/ },
-	{ channel: 'ambientC', pattern: /\bambient\b|\boutside\b|\boutdoors?\b|\boat\b/ },
+	{
+		channel: 'ambientC',
+		pattern: /\bt?amb(ient)?(temp)?\d*\b|\boutside\b|\boutdoors?\b|\boat\b/
+	},
 	{ channel: 'caseC', pattern: /\bcas(e|ing)\b|\bbatt(ery)?\b/ }
 ];
 
