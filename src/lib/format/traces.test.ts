@@ -4,6 +4,7 @@ import {
 	formatReading,
 	listFigureTicks,
 	listTimeTicks,
+	sayJump,
 	sayTraceSpan,
 	sayTraceTime,
 	type TraceClock
@@ -29,6 +30,16 @@ describe('a time of a trace', () => {
 	it('names the day of a span once', () => {
 		expect(sayTraceSpan(UTC, UTC.startS, UTC.startS + 3600)).toBe('3 Feb 2026, 09:30 to 10:30');
 		expect(sayTraceSpan(UTC, UTC.startS, UTC.startS + 86_400)).toBe('3 Feb 2026, 09:30 to 4 Feb 2026, 09:30');
+	});
+
+	it('says of a change that cannot be from when to when it lasted, and how far off it was', () => {
+		const jump = { channel: 'cellC', fromS: UTC.startS, toS: UTC.startS + 240, offK: 62.4 } as const;
+		expect(plain(sayJump(UTC, { ...jump, stays: false }))).toBe(
+			'Cells, 3 Feb 2026, 09:30 to 09:34: up to 62 K off what stood before'
+		);
+		expect(plain(sayJump(UTC, { ...jump, stays: true }))).toBe(
+			'Cells, 3 Feb 2026, 09:30: 62 K at once, and not back'
+		);
 	});
 
 	it('is marked at round times of the clock, the day where it changes', () => {

@@ -7,6 +7,7 @@ import {
 	type CellReason,
 	type RowReason,
 	type TraceChannel,
+	type TraceReport,
 	type TraceUnit
 } from '../thermal/traces';
 import { formatDate, formatShortDate } from './dates';
@@ -119,6 +120,15 @@ export function sayTraceSpan(clock: TraceClock, fromS: number, toS: number): str
 	const [from, to] = [sayTraceTime(clock, fromS), sayTraceTime(clock, toS)];
 	const sameDay = isDated(clock) && dateAt(clock, fromS, formatDate) === dateAt(clock, toS, formatDate);
 	return `${from} to ${sameDay ? to.split(', ')[1]! : to}`;
+}
+
+type TraceJump = NonNullable<TraceReport['jumps']>['told'][number];
+
+/** A stretch that begins faster than the measured thing can change: "Cells, 10:02 to 10:06: up to 62 K off what stood before". */
+export function sayJump(clock: TraceClock, { channel, fromS, toS, offK, stays }: TraceJump): string {
+	const off = formatWithUnit(offK, 'K', 0);
+	if (stays) return `${CHANNEL_WORDS[channel]}, ${sayTraceTime(clock, fromS)}: ${off} at once, and not back`;
+	return `${CHANNEL_WORDS[channel]}, ${sayTraceSpan(clock, fromS, toS)}: up to ${off} off what stood before`;
 }
 
 const TICK_STEPS_S = [

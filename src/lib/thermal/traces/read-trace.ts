@@ -1,8 +1,9 @@
 import { BinBuilder } from './bin-builder';
 import type { TraceChannel } from './channels';
+import { findJumps, JUMPS_TOLD, type TraceJump } from './find-jumps';
 import { FindingList } from './findings';
 import { IntervalTally } from './interval-tally';
-import { checkMapping, timeColumnsOf, type TraceMapping } from './mapping';
+import { checkMapping, type TraceMapping } from './mapping';
 import {
 	GAP_INTERVALS,
 	LONGEST_TRACE_S,
@@ -105,7 +106,7 @@ export class TraceReader {
 		const { base, clock } = this.time;
 		const timeZone = clock?.timeZone ?? null;
 		const trace = { timeBase: base, timeZone, ...this.bins.finish(medianIntervalS) };
-		return { trace, report: this.makeReport(medianIntervalS) };
+		return { trace, report: this.makeReport(medianIntervalS, findJumps(trace)) };
 	}
 
 	private readonly readRow = (row: CellSpans): void => {
@@ -154,7 +155,7 @@ export class TraceReader {
 		const { rows, lastLine } = this.gate;
 		const place = { line: lastLine === 0 ? null : lastLine, column: null };
 		if (rows > 0 && rows === this.findings.dropped.noTime) {
-			const column = timeColumnsOf(this.mapping.time)[0]!;
+			const column = this.time.wrongColumn;
 			const limit = 'times as the mapping says';
 			throw new TraceError({ code: 'no_time_column', ...place, column, value: 'no time in any row', limit });
 		}
@@ -163,7 +164,7 @@ export class TraceReader {
 		throw new TraceError({ code, ...place, value: `${this.usable} such rows to the end`, limit });
 	}
 
-	private makeReport(medianIntervalS: number): TraceReport {
+	private makeReport(medianIntervalS: number, jumps: TraceJump[]): TraceReport {
 		const { gate, findings, sorter, time, timed, kept } = this;
 		const overS = (this.options.gapIntervals ?? GAP_INTERVALS) * medianIntervalS;
 		const { dropped } = findings;
@@ -174,6 +175,7 @@ export class TraceReader {
 			cells: Object.fromEntries(this.channels.map((channel, at) => [channel, { ...findings.cells[at]! }])),
 			medianIntervalS,
 			gaps: { overS, ...this.intervals.gapsOver(overS) },
+			jumps: { count: jumps.length, told: jumps.slice(0, JUMPS_TOLD) },
 			clockChanges: { twiceRows: time.clock?.foldRows ?? 0, neverRows: time.clock?.gapRows ?? 0 },
 			findings: [...findings.told]
 		};

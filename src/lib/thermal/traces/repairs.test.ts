@@ -89,6 +89,17 @@ describe('cells that are no measurements', () => {
 		expect(readText('0,-3\n1,85\n2,-3\n', current).report.cells.currentA).toMatchObject({ values: 3 });
 	});
 
+	it('may last for minutes: those are kept, and marked', () => {
+		const rows = Array.from({ length: 60 }, (_, at): Row => [60 * at, at >= 20 && at < 24 ? 95 : 30]);
+		const report = reportOf(rows);
+		expect(report.cells.cellC).toMatchObject({ values: 60, spike: 0 });
+		expect(report.jumps).toEqual({
+			count: 1,
+			told: [{ channel: 'cellC', fromS: 1200, toS: 1440, offK: 65, stays: false }]
+		});
+		expect(reportOf(steadyRows(60)).jumps).toEqual({ count: 0, told: [] });
+	});
+
 	it('are found wherever they stand in a long file', () => {
 		const spikesAt = [1, 1022, 1023, 1024, 1025, 1027, 2047, 2048, 2050, 2998];
 		const rows = steadyRows(3000).map(([timeS, value], at): Row => [
@@ -145,6 +156,22 @@ describe('lines that are no rows', () => {
 			['noTime', 9, 1]
 		]);
 		expectWhole(report);
+	});
+
+	it('are told with the column that says no time: that of the date, or that of the time of day', () => {
+		const time = { kind: 'calendar', column: 1, clockColumn: 2, order: 'ymd', timeZone: 'UTC' } as const;
+		const columns = [{ column: 3, channel: 'cellC', unit: '°C' } as const];
+		const row = (day: string, clock: string) => `${day},${clock},20\n`;
+		const text = [
+			...['day,clock,cell\n', row('2026-02-03', '08:00'), row('2026-02-03', '25:99'), row('soon', '08:02')],
+			...[row('2026-02-03', '08:03'), row('2026-02-03', 'noon')]
+		].join('');
+		const { findings } = readText(text, { ...SECONDS, time, columns }).report;
+		expect(findings.map(({ reason, line, column, value }) => [reason, line, column, value])).toEqual([
+			['noTime', 3, 2, '25:99'],
+			['noTime', 4, 1, 'soon'],
+			['noTime', 6, 2, 'noon']
+		]);
 	});
 
 	it('above the first row are as many as one says', () => {

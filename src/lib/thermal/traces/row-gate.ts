@@ -22,7 +22,7 @@ export class RowGate {
 	private readonly needed: number;
 
 	constructor(
-		private readonly mapping: TraceMapping,
+		mapping: TraceMapping,
 		private readonly time: TimeReader,
 		private readonly findings: FindingList,
 		private readonly firstRowLine: number | null
@@ -74,7 +74,7 @@ export class RowGate {
 		if (this.isHeader(row)) this.findings.dropRow('repeatedHeader', row.line, null, () => textOfRow(row));
 		else if (row.count < this.needed) this.findings.dropRow('shortRow', row.line, null, () => textOfRow(row));
 		else {
-			const { column } = this.mapping.time;
+			const column = this.time.wrongColumn;
 			const cell = () => textOf(row.bytes, row.starts[column - 1]!, row.ends[column - 1]!);
 			this.findings.dropRow('noTime', row.line, column, cell);
 		}

@@ -22,6 +22,8 @@ export interface TimeReader {
 	readonly base: TimeBase;
 	/** The zone whose offsets were used; null where none is needed. */
 	readonly clock: ZoneClock | null;
+	/** Column of the cell by which the last row without a time said none, counted from 1. */
+	readonly wrongColumn: number;
 	read(row: CellSpans): number;
 }
 
@@ -32,6 +34,7 @@ const HALF_DAY_S = DAY_S / 2;
 class CountedTimeReader implements TimeReader {
 	readonly base: TimeBase;
 	readonly clock: ZoneClock | null;
+	readonly wrongColumn: number;
 	private readonly secondsEach: number;
 	private readonly at: number;
 
@@ -42,6 +45,7 @@ class CountedTimeReader implements TimeReader {
 		({ base: this.base, secondsEach: this.secondsEach } = COUNTED_TIMES[time.kind]);
 		const zone = zoneOf(time);
 		this.clock = zone === undefined ? null : new ZoneClock(zone);
+		this.wrongColumn = time.column;
 		this.at = time.column - 1;
 	}
 
@@ -55,6 +59,7 @@ class CountedTimeReader implements TimeReader {
 class CalendarReader implements TimeReader {
 	readonly base = 'utc';
 	readonly clock: ZoneClock;
+	wrongColumn: number;
 	private readonly date: DateCell;
 	private readonly timeOfDay = new ClockCell();
 	private readonly dateAt: number;
@@ -63,6 +68,7 @@ class CalendarReader implements TimeReader {
 	constructor({ column, clockColumn, order, timeZone }: CalendarMapping) {
 		this.clock = new ZoneClock(timeZone);
 		this.date = new DateCell(order);
+		this.wrongColumn = column;
 		this.dateAt = column - 1;
 		this.clockAt = clockColumn === null ? -1 : clockColumn - 1;
 	}
@@ -70,9 +76,11 @@ class CalendarReader implements TimeReader {
 	read({ bytes, starts, ends }: CellSpans): number {
 		const { date, timeOfDay, dateAt, clockAt } = this;
 		const dateEnd = ends[dateAt]!;
+		this.wrongColumn = dateAt + 1;
 		if (!date.read(bytes, starts[dateAt]!, dateEnd)) return NaN;
 		const apart = clockAt >= 0;
 		if (apart && date.end < dateEnd) return NaN;
+		if (apart) this.wrongColumn = clockAt + 1;
 		const from = apart ? starts[clockAt]! : passToClock(bytes, date.end, dateEnd);
 		if (!timeOfDay.read(bytes, from, apart ? ends[clockAt]! : dateEnd)) return NaN;
 		const localS = date.days * DAY_S + timeOfDay.secondOfDay;
@@ -84,6 +92,7 @@ class CalendarReader implements TimeReader {
 class TimeOfDayReader implements TimeReader {
 	readonly base: TimeBase;
 	readonly clock: ZoneClock | null;
+	readonly wrongColumn: number;
 	private readonly timeOfDay = new ClockCell();
 	private readonly at: number;
 	private dayStartS: number;
@@ -91,6 +100,7 @@ class TimeOfDayReader implements TimeReader {
 	private beforeS = NaN;
 
 	constructor({ column, firstDay, timeZone }: TimeOfDayMapping) {
+		this.wrongColumn = column;
 		this.at = column - 1;
 		this.base = firstDay === null ? 'time-of-day' : 'utc';
 		this.clock = firstDay === null ? null : new ZoneClock(timeZone);

@@ -1,5 +1,6 @@
 import type { TraceChannel } from './channels';
 import type { CellCounts, RowReason, TraceFinding } from './findings';
+import type { TraceJump } from './find-jumps';
 import type { TraceGap } from './interval-tally';
 
 /**
@@ -32,6 +33,8 @@ export interface TraceReport {
 	medianIntervalS: number;
 	/** Stretches without rows longer than `overS`: all of them counted, the longest told. */
 	gaps: { overS: number; count: number; told: TraceGap[] };
+	/** Stretches that begin faster than the measured thing can change: kept, to be looked at. Not there in older reports. */
+	jumps?: { count: number; told: TraceJump[] };
 	/** Rows at local times that come twice or never, where the clocks are changed. */
 	clockChanges: { twiceRows: number; neverRows: number };
 	/** The first few of each reason, in the order in which they were found. */
