@@ -99,12 +99,30 @@ const ENGINE = numbers('engine', [
 	['thermostatOpen', '°C', 82, SMALL_TEMP, 'Engine temperature at which the thermostat begins to open.'],
 	['thermostatFull', '°C', 95, SMALL_TEMP, 'Engine temperature at which the thermostat is fully open.'],
 	['radiatorStill', 'W/K', 300, CONDUCTANCE, 'Radiator conductance at a standstill, fan running.'],
-	['radiatorPerSpeed', 'W/K per m/s', 90, CONDUCTANCE, 'What each metre per second adds to it.'],
+	[
+		'radiatorPerSpeed',
+		'W/K per m/s',
+		90,
+		CONDUCTANCE,
+		'What each metre per second adds to the conductance of the radiator.'
+	],
 	['radiatorMax', 'W/K', 2600, CONDUCTANCE, 'The most that the radiator can conduct.'],
 	['underStill', 'W/K', 8, CONDUCTANCE, 'Engine to the air beneath it, at a standstill.'],
-	['underPerSpeed', 'W/K per m/s', 1.2, CONDUCTANCE, 'What each metre per second adds to it.'],
+	[
+		'underPerSpeed',
+		'W/K per m/s',
+		1.2,
+		CONDUCTANCE,
+		'What each metre per second adds to the conductance to the air beneath the engine.'
+	],
 	['filmStill', 'W/m²K', 8, FILM, 'Film between engine and bay air at a standstill.'],
-	['filmPerSqrtSpeed', 'W/m²K per √(m/s)', 5, FILM, 'What the root of the speed adds to it.'],
+	[
+		'filmPerSqrtSpeed',
+		'W/m²K per √(m/s)',
+		5,
+		FILM,
+		'What the root of the speed adds to the film between engine and bay air.'
+	],
 	['area', 'm²', 1.3, AREA, 'Surface of the engine in the bay.'],
 	['emissivity', '-', 0.9, FRACTION, 'Emissivity of the engine.']
 ]);
@@ -117,13 +135,25 @@ const EXHAUST = numbers('exhaust', [
 	['area', 'm²', 0.25, AREA, 'Surface of the exhaust in the bay.'],
 	['emissivity', '-', 0.8, FRACTION, 'Emissivity of the exhaust.'],
 	['filmStill', 'W/m²K', 8, FILM, 'Film between exhaust and bay air at a standstill.'],
-	['filmPerSqrtSpeed', 'W/m²K per √(m/s)', 5, FILM, 'What the root of the speed adds to it.']
+	[
+		'filmPerSqrtSpeed',
+		'W/m²K per √(m/s)',
+		5,
+		FILM,
+		'What the root of the speed adds to the film between exhaust and bay air.'
+	]
 ]);
 
 const BAY = numbers('bay', [
 	['heatCapacity', 'J/K', 9e3, CAPACITY, 'Heat capacity of bay air and thin parts.'],
 	['fanFlow', 'm³/s', 0.45, closed(0, 1000), 'Air through the radiator at a standstill, fan running.'],
-	['flowPerSpeed', 'm³/s per m/s', 0.06, closed(0, 1000), 'What each metre per second adds to it.'],
+	[
+		'flowPerSpeed',
+		'm³/s per m/s',
+		0.06,
+		closed(0, 1000),
+		'What each metre per second adds to the air through the radiator.'
+	],
 	['maxFlow', 'm³/s', 2.4, closed(0, 1000), 'The most air that passes the radiator.'],
 	['share', '-', 0.6, FRACTION, 'Share of that air which goes on through the bay.'],
 	['leakClosed', 'W/K', 20, CONDUCTANCE, 'Air exchange of the bay, bonnet closed.'],
@@ -136,14 +166,26 @@ const BONNET = numbers('bonnet', [
 	['absorptivity', '-', 0.7, FRACTION, 'Share of the sun that its paint takes up.'],
 	['emissivity', '-', 0.9, FRACTION, 'Emissivity of the bonnet, both faces.'],
 	['outStill', 'W/m²K', 8, FILM, 'Outer film at a standstill.'],
-	['outPerSpeed', 'W/m²K per m/s', 2.5, FILM, 'What each metre per second adds to it.'],
+	[
+		'outPerSpeed',
+		'W/m²K per m/s',
+		2.5,
+		FILM,
+		'What each metre per second adds to the outer film of the bonnet.'
+	],
 	['inside', 'W/m²K', 5, FILM, 'Inner film to the bay air.']
 ]);
 
 const ENCLOSURE = numbers('enclosure', [
 	['heatCapacity', 'J/K', 40e3, CAPACITY, 'Heat capacity of the cabin, canopy or box.'],
 	['uaStill', 'W/K', 35, CONDUCTANCE, 'Walls to the outside at a standstill.'],
-	['uaPerSpeed', 'W/K per m/s', 2, CONDUCTANCE, 'What each metre per second adds to it.'],
+	[
+		'uaPerSpeed',
+		'W/K per m/s',
+		2,
+		CONDUCTANCE,
+		'What each metre per second adds to the conductance of the walls.'
+	],
 	['solarArea', 'm²', 0.9, AREA, 'Area that turns sun into heat inside.'],
 	['coolGain', 'W/K', 0, CONDUCTANCE, 'Cooling per kelvin above the setting, engine running.'],
 	['coolSet', '°C', 26, SMALL_TEMP, 'Temperature that the cooling aims at.']
@@ -184,7 +226,13 @@ const BATTERY = numbers('battery', [
 	['caseHeatCapacity', 'J/K', 2500, CAPACITY, 'Heat capacity of the case.'],
 	['caseEmissivity', '-', 0.92, FRACTION, 'Emissivity of the case.'],
 	['filmStill', 'W/m²K', 5, FILM, 'Film between case and local air in still air.'],
-	['filmPerSqrtSpeed', 'W/m²K per √(m/s)', 4, FILM, 'What the root of the local speed adds to it.'],
+	[
+		'filmPerSqrtSpeed',
+		'W/m²K per √(m/s)',
+		4,
+		FILM,
+		'What the root of the local speed adds to the film between case and local air.'
+	],
 	['caseCellConductance', 'W/K', 2.5, CONDUCTANCE, 'Case to cells.'],
 	['cellHeatCapacity', 'J/K', 11000, CAPACITY, 'Heat capacity of the cells.'],
 	['r25', 'Ω', 0.012, closed(0, 10), 'Internal resistance at 25 °C.'],
