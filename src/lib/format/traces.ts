@@ -1,4 +1,4 @@
-import type { TraceSpan, TraceState } from '../schemas/traces';
+import type { NoTraceAir, TraceSpan, TraceState } from '../schemas/traces';
 import {
 	CELL_REASONS,
 	CHANNEL_LAWS,
@@ -198,3 +198,14 @@ export const sayAir = ({
 	offByK: number;
 }): string =>
 	`${formatNumber(tMaxC, 1)}${THIN_SPACE}°C at the hottest, ${formatNumber(dailyRangeK, 1)}${THIN_SPACE}K from there down to the coolest; the measured air lies ${formatNumber(offByK, 1)}${THIN_SPACE}K from such a day`;
+
+/** Why no design day is found in a trace. */
+export const NO_AIR_WORDS: Readonly<Record<NoTraceAir['whyNone'], string>> = {
+	'no-air': 'The trace has no outside air, so that no design day can be found in it.',
+	'no-hour':
+		'The trace does not tell at which time of day it begins: once you say it beside the legs, the design day is looked for.',
+	'too-little':
+		'The trace sees too little of a day to find the design day in it: less than half of the way from the coolest hour to the hottest.',
+	'unlike-a-day':
+		'The outside air was told, but it does not go with a design day: it was no warmer at the hours that usually are the hottest. The day that the mount was assessed with stays.'
+};

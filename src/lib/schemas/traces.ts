@@ -5,6 +5,7 @@ import {
 	DELIMITERS,
 	TRACE_CHANNELS,
 	TRACE_UNITS,
+	type MeasuredAmbient,
 	type TraceLeg,
 	type TraceReport,
 	type TraceUnit
@@ -132,7 +133,16 @@ export const traceSchema = traceRowSchema.extend({
 	failure: traceFailureSchema.nullable(),
 	report: z.custom<TraceReport>().nullable().meta({ type: 'object' }),
 	legs: z.array(traceLegSchema),
-	legsBy: z.string().meta({ description: 'Empty while they are as they were proposed' })
+	legsBy: z.string().meta({ description: 'Empty while they are as they were proposed' }),
+	sentBefore: z
+		.object({
+			id: z.number().int(),
+			name: z.string(),
+			jobNumber: z.number().int(),
+			mountLetter: z.string()
+		})
+		.nullable()
+		.meta({ description: 'The trace of the same file that was sent in first; null where there is none' })
 });
 export type TraceView = z.infer<typeof traceSchema>;
 
@@ -214,4 +224,9 @@ export interface TraceAir {
 	tMaxC: number;
 	dailyRangeK: number;
 	offByK: number;
+}
+
+/** Why there is no design day in a trace: no air, or as the engine says. */
+export interface NoTraceAir {
+	whyNone: 'no-air' | NonNullable<MeasuredAmbient['whyNone']>;
 }

@@ -11,6 +11,7 @@ import {
 	type CurveQuery,
 	type CurveView,
 	type LegsChange,
+	type NoTraceAir,
 	type TraceAir,
 	type TracePlan,
 	type TraceView as TraceShown
@@ -141,13 +142,14 @@ export async function saveLegs(
 	return shown;
 }
 
-/** The design day that is nearest to the air outside as it was measured; null where the trace does not tell. */
-export async function findAir(person: SignedInPerson, traceId: number): Promise<TraceAir | null> {
+/** The design day that is nearest to the air outside as it was measured, or why there is none. */
+export async function findAir(person: SignedInPerson, traceId: number): Promise<TraceAir | NoTraceAir> {
 	allow(person, 'traces.read');
 	const trace = await findTrace(person, traceId);
 	const measured = ambientFromTrace(await openBins(trace), startHourOf(trace) ?? undefined);
-	if (!measured?.climate) return null;
-	const { climate, offByK } = measured;
+	if (!measured) return { whyNone: 'no-air' };
+	const { climate, whyNone, offByK } = measured;
+	if (!climate) return { whyNone: whyNone! };
 	return { tMaxC: climate.tMax, dailyRangeK: climate.dailyRange, offByK };
 }
 

@@ -8,8 +8,10 @@ export interface MeasuredAmbient {
 	startHour: number | null;
 	/** °C a minute, NaN where nothing was measured. */
 	tempC: Float32Array;
-	/** The design day that fits best; null where the trace does not tell the hour, or too little of a day. */
+	/** The design day that fits best; null where there is none in the trace. */
 	climate: Pick<ClimateGroup, 'tMax' | 'dailyRange'> | null;
+	/** Why there is none: no hour is told, too little of a day is seen, or the air was no warmer at the hotter hours. */
+	whyNone: 'no-hour' | 'too-little' | 'unlike-a-day' | null;
 	/** How far the measured minutes lie from that day, root mean square, K; NaN without one. */
 	offByK: number;
 }
@@ -60,8 +62,10 @@ export function ambientFromTrace(trace: BinnedTrace, startHour?: number): Measur
 	if (!bins) return null;
 	const fromHour = startHour ?? clockHourAt(trace, trace.startS);
 	const tempC = Float32Array.from(bins.mean);
-	const unknown = { startHour: fromHour, tempC, climate: null, offByK: NaN };
-	if (fromHour === null) return unknown;
+	const without = (whyNone: MeasuredAmbient['whyNone']): MeasuredAmbient => ({
+		...{ startHour: fromHour, tempC, climate: null, whyNone, offByK: NaN }
+	});
+	if (fromHour === null) return without('no-hour');
 	const told = Array.from(tempC.keys()).filter((minute) => !Number.isNaN(tempC[minute]));
 	// The middle of each minute; f itself is what a day with a highest of 0 and a range of 1 lies below it.
 	const belowHottest = told.map((minute) =>
@@ -69,8 +73,9 @@ export function ambientFromTrace(trace: BinnedTrace, startHour?: number): Measur
 	);
 	const measured = told.map((minute) => tempC[minute]!);
 	const line = fitLine(belowHottest, measured);
-	if (line === null || line.slope < 0) return unknown;
+	if (line === null) return without('too-little');
+	if (line.slope < 0) return without('unlike-a-day');
 	const squares = measured.map((value, at) => (value - line.intercept - line.slope * belowHottest[at]!) ** 2);
 	const offByK = Math.sqrt(squares.reduce((sum, square) => sum + square, 0) / squares.length);
-	return { ...unknown, climate: { tMax: line.intercept, dailyRange: line.slope }, offByK };
+	return { ...without(null), climate: { tMax: line.intercept, dailyRange: line.slope }, offByK };
 }

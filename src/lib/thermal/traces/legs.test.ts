@@ -372,14 +372,18 @@ describe('the air of a trace', () => {
 	});
 
 	it('gives no day from two hours, from an air that cools towards noon, or without an hour', () => {
-		expect(
-			ambientFromTrace(minutesTrace({ ambientC: airFrom(13, 2) }, { startS: 13 * 3600 }))!.climate
-		).toBeNull();
+		expect(ambientFromTrace(minutesTrace({ ambientC: airFrom(13, 2) }, { startS: 13 * 3600 }))).toMatchObject(
+			{ climate: null, whyNone: 'too-little' }
+		);
 		const falling = Array.from({ length: 8 * 60 }, (_, minute) => 40 - minute / 60);
-		expect(ambientFromTrace(minutesTrace({ ambientC: falling }, { startS: 6 * 3600 }))!.climate).toBeNull();
+		expect(ambientFromTrace(minutesTrace({ ambientC: falling }, { startS: 6 * 3600 }))).toMatchObject({
+			climate: null,
+			whyNone: 'unlike-a-day'
+		});
 		const elapsed = minutesTrace({ ambientC: airFrom(0, 24) }, { timeBase: 'elapsed' });
-		expect(ambientFromTrace(elapsed)).toMatchObject({ startHour: null, climate: null });
+		expect(ambientFromTrace(elapsed)).toMatchObject({ startHour: null, climate: null, whyNone: 'no-hour' });
 		expect(ambientFromTrace(elapsed, 0)!.climate!.tMax).toBeCloseTo(39, 4);
+		expect(ambientFromTrace(elapsed, 0)!.whyNone).toBeNull();
 	});
 
 	it('is nobody’s where the trace has none', () => {
