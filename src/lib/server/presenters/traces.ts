@@ -32,7 +32,7 @@ export function presentTraceRow(trace: Trace, { job, mount, nameOf }: TraceSurro
 	};
 }
 
-export function presentTrace(trace: Trace, surroundings: TraceSurroundings): TraceView {
+export function presentTrace(trace: Trace, surroundings: TraceSurroundings): Omit<TraceView, 'sentBefore'> {
 	const { mapping, proposal, legs, legsBy } = trace;
 	return {
 		...presentTraceRow(trace, surroundings),

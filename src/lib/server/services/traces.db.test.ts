@@ -4,7 +4,7 @@ import { listKept } from '../../../../tests/support/mount-files';
 import { makeCrew, useTestDatabase, type Crew } from '../../../../tests/support/services';
 import { dayText, readAs, sendTrace } from '../../../../tests/support/traces';
 import type { SignedInPerson } from '$lib/schemas/people';
-import { AuditEntry, Trace } from '../db/models';
+import { AuditEntry, Job, Place, Trace } from '../db/models';
 import { clearFiles } from './clear-files';
 import { getDayPlan } from './day-plans';
 import { removeMount } from './mounts';
@@ -40,7 +40,7 @@ describe('a file of a logger', () => {
 	it('is described first, with its first rows, and read only when its columns are confirmed', async () => {
 		const sent = await sendTrace(crew.engineer, mountId, dayText(), 'monday.csv');
 		expect(sent).toMatchObject({ state: 'described', name: 'monday.csv', rowsKept: null, legs: [] });
-		expect(sent.mapping.time).toMatchObject({ kind: 'calendar', column: 1, order: 'ymd', timeZone: 'UTC' });
+		expect(sent.mapping.time).toMatchObject({ kind: 'calendar', column: 1, order: 'ymd' });
 		expect(sent.mapping.columns.map(({ channel }) => channel)).toEqual(['ambientC', 'cellC', 'speedKmh']);
 		expect(sent.proposal.firstRows[0]).toEqual(['2026-02-03 00:00:00', '24.0', '25.0', '0']);
 		expect(await listKept()).toContain(rawKeyOf(await contentOf(sent.id)));
@@ -51,6 +51,41 @@ describe('a file of a logger', () => {
 		const kept = await listKept();
 		const contentId = await contentOf(sent.id);
 		expect([kept.includes(rawKeyOf(contentId)), kept.includes(binsKeyOf(contentId))]).toEqual([false, true]);
+	});
+
+	it('is taken to be in the time zone of the job’s place, whatever was said of another', async () => {
+		const first = await readDay();
+		await readAs(crew.engineer, await sendTrace(crew.engineer, mountId, dayText({ minutes: 30 })), {
+			mapping: { ...first.mapping, time: { ...first.mapping.time, timeZone: 'Asia/Tokyo' } as never }
+		});
+		const { placeId } = (await Job.findByPk(jobId))!;
+		await Place.update({ latitudeDeg: -12.4, longitudeDeg: 130.9 }, { where: { id: placeId! } });
+		const text = dayText({ minutes: 20 }).replace('Cell (°C)', 'Probe 9');
+		const { mapping, proposal } = await sendTrace(crew.engineer, mountId, text);
+		expect(mapping.time).toMatchObject({ timeZone: 'Australia/Darwin' });
+		expect(proposal.notes).toContain(
+			'Australia/Darwin is the time zone nearest to the place of the job, Salt Lake.'
+		);
+		await Job.update({ placeId: null }, { where: { id: jobId } });
+		const nowhere = await sendTrace(crew.engineer, mountId, text.replace('Probe 9', 'Probe 10'));
+		expect(nowhere.mapping.time).toMatchObject({ timeZone: 'UTC' });
+		await Job.update({ placeId: placeId! }, { where: { id: jobId } });
+	});
+
+	it('that was sent in before says so, with the first one while that stands', async () => {
+		const text = dayText({ date: '2026-03-07' });
+		const first = await readDay(text);
+		expect(first.sentBefore).toBeNull();
+		const again = await sendTrace(crew.engineer, mountId, text, 'again.csv');
+		const { id, name, jobNumber, mountLetter } = first;
+		expect(again.sentBefore).toEqual({ id, name, jobNumber, mountLetter });
+		expect(await readAs(crew.engineer, again)).toMatchObject({ state: 'read', sentBefore: { id } });
+		expect((await getTrace(crew.engineer, id)).sentBefore).toBeNull();
+		await removeTrace(crew.engineer, id);
+		expect((await getTrace(crew.engineer, again.id)).sentBefore).toBeNull();
+		const { engineer: neighbour, installer } = await makeCrew();
+		const { cool } = await makeAssessableJob(installer);
+		expect((await sendTrace(neighbour, cool.id, text)).sentBefore).toBeNull();
 	});
 
 	it('is refused in words that point at the place where it is no trace', async () => {
@@ -257,9 +292,21 @@ describe('a trace that was read', () => {
 			startHour: 0
 		});
 		const air = await findAir(crew.engineer, trace.id);
-		expect(air!.tMaxC).toBeGreaterThan(35);
-		expect(air!.tMaxC).toBeLessThan(41);
-		expect(await findAir(crew.engineer, (await readDay(dayText({ minutes: 30 }))).id)).toBeNull();
+		const { tMaxC } = air as Extract<typeof air, { tMaxC: number }>;
+		expect(tMaxC).toBeGreaterThan(35);
+		expect(tMaxC).toBeLessThan(41);
+		const whyNone = async (other: string) => findAir(crew.engineer, (await readDay(other)).id);
+		expect(await whyNone(dayText({ minutes: 30 }))).toEqual({ whyNone: 'too-little' });
+		const cooling = Array.from({ length: 600 }, (_, minute) => {
+			const at = `${String(6 + Math.floor(minute / 60)).padStart(2, '0')}:${String(minute % 60).padStart(2, '0')}`;
+			return `2026-02-03 ${at},${40 - minute / 60},25`;
+		});
+		expect(await whyNone(['time,ambient,cell', ...cooling, ''].join('\n'))).toEqual({
+			whyNone: 'unlike-a-day'
+		});
+		expect(await whyNone('time,cell\n2026-02-03 08:00,25\n2026-02-03 08:01,26\n')).toEqual({
+			whyNone: 'no-air'
+		});
 	});
 
 	it('is taken away, can be put back, and is gone for good after its time, with what was kept of it', async () => {

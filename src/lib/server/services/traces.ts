@@ -1,8 +1,8 @@
-import type { Transaction } from 'sequelize';
+import { Op, type Transaction } from 'sequelize';
 import type { SignedInPerson } from '$lib/schemas/people';
 import type { TraceMappingChange, TraceRow, TraceView } from '$lib/schemas/traces';
-import { checkMapping, MOST_TRACE_BYTES, zoneOf, type TraceMapping } from '$lib/thermal/traces';
-import { Job, Mount, Person, Trace, TraceLogger } from '../db/models';
+import { checkMapping, MOST_TRACE_BYTES, type TraceMapping } from '$lib/thermal/traces';
+import { Job, Mount, Person, Place, Trace, TraceLogger } from '../db/models';
 import { inTransaction } from '../db/transaction';
 import { AppError, notFound } from '../errors';
 import { allow } from '../policies';
@@ -13,6 +13,7 @@ import { recordBy } from './audit';
 import { describeSample, forAnotherFile, keepProposal, readSample, refuseTrace } from './describe-file';
 import { cleanFileName } from './file-names';
 import { findStandingMount } from './mounts';
+import { nearestZone } from './nearest-zone';
 import { saveVersioned } from './records';
 import { rawKeyOf } from './trace-bins';
 
@@ -49,9 +50,25 @@ async function surroundingsOf(traces: readonly Trace[]): Promise<(trace: Trace) 
 	});
 }
 
+/** The trace of the same file that was sent in first, where one stands. */
+async function findSentBefore({ id, workshopId, sha256 }: Trace): Promise<TraceView['sentBefore']> {
+	const earlier = await Trace.findAll({
+		where: { workshopId, sha256, removedAt: null, id: { [Op.lt]: id } },
+		attributes: ['id', 'name', 'jobId', 'mountId'],
+		order: [['id', 'ASC']]
+	});
+	for (const { id: earlierId, name, jobId, mountId } of earlier) {
+		const mount = await Mount.findOne({ where: { id: mountId, removedAt: null } });
+		if (!mount) continue;
+		const { number: jobNumber } = (await Job.findByPk(jobId, { attributes: ['number'] }))!;
+		return { id: earlierId, name, jobNumber, mountLetter: mount.letter };
+	}
+	return null;
+}
+
 export async function showTrace(trace: Trace): Promise<TraceView> {
 	const of = await surroundingsOf([trace]);
-	return presentTrace(trace, of(trace));
+	return { ...presentTrace(trace, of(trace)), sentBefore: await findSentBefore(trace) };
 }
 
 /** A trace of a mount that stands; one that was removed is there only for who puts it back. */
@@ -85,14 +102,14 @@ export async function prepareTrace(incoming: IncomingTrace): Promise<PreparedTra
 	return { name, bytes, sha256, contentId, sample };
 }
 
-/** The zone that somebody of the workshop said last. */
-async function lastZoneOf({ workshopId }: SignedInPerson): Promise<string> {
-	const loggers = await TraceLogger.findAll({ where: { workshopId }, order: [['updatedAt', 'DESC']] });
-	for (const { mapping } of loggers) {
-		const zone = zoneOf(mapping.time);
-		if (zone !== undefined) return zone;
-	}
-	return NO_ZONE_KNOWN;
+/** The place of a job with the zone that is nearest to it; null where the job has no place. */
+async function zoneOfJob(
+	jobId: number,
+	transaction: Transaction
+): Promise<{ place: string; timeZone: string } | null> {
+	const job = await Job.findByPk(jobId, { transaction });
+	const place = job?.placeId ? await Place.findByPk(job.placeId, { transaction }) : null;
+	return place && { place: place.name, timeZone: nearestZone(place) };
 }
 
 const columnsOf = ({ time, columns }: TraceMapping): number[] => [
@@ -121,7 +138,13 @@ export async function keepTrace(
 	return inTransaction(async (transaction) => {
 		const mount = await findStandingMount(person, mountId, transaction);
 		await refuseTooMany(mountId, transaction);
-		const proposal = describeSample(sample, await lastZoneOf(person));
+		const zone = await zoneOfJob(mount.jobId, transaction);
+		const proposal = describeSample(sample, zone?.timeZone ?? NO_ZONE_KNOWN);
+		if (zone && proposal.time.needsZone) {
+			proposal.notes.push(
+				`${zone.timeZone} is the time zone nearest to the place of the job, ${zone.place}.`
+			);
+		}
 		const { fingerprint } = proposal;
 		const logger = await TraceLogger.findOne({ where: { workshopId, fingerprint }, transaction });
 		const known = logger && Math.max(...columnsOf(logger.mapping)) <= proposal.columns.length ? logger : null;
