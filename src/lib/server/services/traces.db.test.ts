@@ -63,8 +63,9 @@ describe('a file of a logger', () => {
 		const text = dayText({ minutes: 20 }).replace('Cell (°C)', 'Probe 9');
 		const { mapping, proposal } = await sendTrace(crew.engineer, mountId, text);
 		expect(mapping.time).toMatchObject({ timeZone: 'Australia/Darwin' });
+		const { name } = (await Place.findByPk(placeId!))!;
 		expect(proposal.notes).toContain(
-			'Australia/Darwin is the time zone nearest to the place of the job, Salt Lake.'
+			`Australia/Darwin is the time zone nearest to the place of the job, ${name}.`
 		);
 		await Job.update({ placeId: null }, { where: { id: jobId } });
 		const nowhere = await sendTrace(crew.engineer, mountId, text.replace('Probe 9', 'Probe 10'));
