@@ -209,8 +209,28 @@ test(
 		await plain.getByRole('button', { name: 'Split leg 1' }).click();
 		await expect(plain.getByText('Saved.')).toBeVisible();
 		await expect(plain.getByLabel('ends at minute')).toHaveCount(legs + 1);
+		// What cannot be is refused with everything as it was typed.
+		await plain.getByLabel('Leg 2', { exact: true }).selectOption('Driving');
+		await plain.getByLabel('ends at minute').nth(1).fill('91');
+		await plain.getByLabel('ends at minute').first().fill('soon');
+		await plain.getByRole('button', { name: 'Save the legs' }).last().click();
+		await expect(plain.getByText('“soon” is no minute from').first()).toBeVisible();
+		await expect(plain.getByLabel('ends at minute').first()).toHaveValue('soon');
+		await expect(plain.getByLabel('ends at minute').nth(1)).toHaveValue('91');
+		await expect(plain.getByLabel('Leg 2', { exact: true })).toHaveValue('driving');
+		await plain.getByLabel('ends at minute').first().fill('40');
+		await plain.getByRole('button', { name: 'Save the legs' }).last().click();
+		await expect(plain.getByText('Saved.')).toBeVisible();
+		await expect(plain.getByLabel('ends at minute').nth(1)).toHaveValue('91');
 		await plain.getByRole('link', { name: 'Closer' }).click();
 		await expect(plain.getByRole('link', { name: 'Farther' })).toBeVisible();
+		// The same file once more is taken, and said to be the same.
+		await plain.goto(`/mounts/${mountId}/traces`);
+		await plain.getByLabel('The logger’s file').setInputFiles(asFile('again.csv', text));
+		await plain.getByRole('button', { name: 'Send it' }).click();
+		await expect(plain.getByText('This file was sent in before')).toBeVisible();
+		await expect(plain.getByRole('link', { name: 'plain.csv' })).toBeVisible();
+		await expect(plain.getByRole('button', { name: 'Read the file' })).toBeVisible();
 		await context.close();
 	}
 );

@@ -6,6 +6,8 @@ import {
 	type LegState,
 	type TraceLeg
 } from '../thermal/traces';
+import { MOST_LEG_KMH } from '../schemas/traces';
+import { readHour } from './trace-mapping-form';
 
 const MINUTE_S = 60;
 const SHORTEST_TO_SPLIT_S = 2 * MINUTE_S;
@@ -52,3 +54,73 @@ export function editLegs(legs: readonly TraceLeg[], edit: LegEdit): TraceLeg[] {
 /** Minutes from the start of the trace, as they stand in a box. */
 export const minutesInto = (legs: readonly TraceLeg[], atS: number): number =>
 	Math.round((atS - legs[0]!.startS) / MINUTE_S);
+
+/** What stands in the boxes about legs, by their names: "legs.0.endMin", "legs.0.kind", "legs.0.speedKmh". */
+export type LegsDraft = Record<string, string>;
+
+/** A number as people type it; NaN for an empty box and for what is none. */
+export const readBox = (text: string): number =>
+	text.trim() === '' ? NaN : Number(text.trim().replace(',', '.'));
+
+/** Why a leg cannot end at what was typed; empty where it can. */
+export function sayWrongEnd(legs: readonly TraceLeg[], at: number, text: string): string {
+	const minutes = readBox(text);
+	const low = minutesInto(legs, legs[at]!.startS) + 1;
+	const high = minutesInto(legs, legs[at + 1]!.endS) - 1;
+	if (minutes >= low && minutes <= high) return '';
+	return `“${text}” is no minute from ${low} to ${high}, between the ends of the legs before and after.`;
+}
+
+/** Why a leg cannot have been driven at what was typed; empty where it can, or where nothing was. */
+export function sayWrongSpeed(text: string): string {
+	const speedKmh = readBox(text);
+	if (text.trim() === '' || (speedKmh >= 0 && speedKmh <= MOST_LEG_KMH)) return '';
+	return `“${text}” is no speed from 0 to ${MOST_LEG_KMH} km/h.`;
+}
+
+/**
+ * The legs of boxes as near as legs can be to them: an end that cannot be is put where there is room. As they are known where the
+ * boxes are of more legs than the trace has minutes.
+ */
+export function legsOfDraft(draft: LegsDraft, known: readonly TraceLeg[]): TraceLeg[] {
+	const count = Object.keys(draft).filter((name) => /^legs\.\d+\.endMin$/.test(name)).length;
+	const [startS, endS] = [known[0]!.startS, known.at(-1)!.endS];
+	if (count === 0 || endS - startS < count * MINUTE_S) return [...known];
+	const legs: TraceLeg[] = [];
+	for (let at = 0; at < count; at++) {
+		const fromS = legs.at(-1)?.endS ?? startS;
+		const typedS = startS + Math.round(readBox(draft[`legs.${at}.endMin`] ?? '')) * MINUTE_S;
+		const lastS = endS - (count - 1 - at) * MINUTE_S;
+		const wantedS = Number.isNaN(typedS) ? fromS : typedS;
+		const toS = at === count - 1 ? endS : Math.min(Math.max(wantedS, fromS + MINUTE_S), lastS);
+		const speed = draft[`legs.${at}.speedKmh`] ?? '';
+		const meanSpeedKmh = speed.trim() === '' || sayWrongSpeed(speed) ? null : readBox(speed);
+		const kind = draft[`legs.${at}.kind`] === 'driving' ? 'driving' : 'stopped';
+		const same = known.find((leg) => leg.startS === fromS && leg.endS === toS && leg.kind === kind);
+		legs.push({
+			...{ startS: fromS, endS: toS, kind, why: same?.why ?? '' },
+			meanSpeedKmh: speed === '' ? (same?.meanSpeedKmh ?? null) : meanSpeedKmh
+		});
+	}
+	return legs;
+}
+
+/** What cannot be taken of the boxes about legs, each with its name. */
+export function listLegProblems(
+	draft: LegsDraft,
+	known: readonly TraceLeg[]
+): { path: string; message: string }[] {
+	const legs = legsOfDraft(draft, known);
+	const ofLegs = legs.flatMap((_, at) => {
+		const [end, speed] = [`legs.${at}.endMin`, `legs.${at}.speedKmh`];
+		return [
+			{ path: end, message: at < legs.length - 1 ? sayWrongEnd(legs, at, draft[end] ?? '') : '' },
+			{ path: speed, message: sayWrongSpeed(draft[speed] ?? '') }
+		];
+	});
+	const hour = draft.startHour ?? '';
+	const ofHour = `“${hour}” is no time of day: write it such as 06:30.`;
+	return [{ path: 'startHour', message: Number.isNaN(readHour(hour)) ? ofHour : '' }, ...ofLegs].filter(
+		({ message }) => message !== ''
+	);
+}

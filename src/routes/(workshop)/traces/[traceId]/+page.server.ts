@@ -1,5 +1,6 @@
 import { fail, redirect, type RequestEvent } from '@sveltejs/kit';
 import { readMappingDraft, toMappingDraft } from '$lib/format/trace-mapping-form';
+import { listLegProblems } from '$lib/format/trace-legs';
 import { listMappingProblems } from '$lib/format/trace-mapping-problems';
 import type { SignedInPerson } from '$lib/schemas/people';
 import {
@@ -10,7 +11,6 @@ import {
 	type TraceView
 } from '$lib/schemas/traces';
 import { AppError } from '$lib/server/errors';
-import { doOrSay } from '$lib/server/http/do-or-say';
 import { loadForm, readPageForm, saveForm } from '$lib/server/http/forms';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { pageId } from '$lib/server/http/page-id';
@@ -106,12 +106,20 @@ export const actions: Actions = {
 		redirect(303, `/traces/${trace.id}`);
 	},
 	legs: async (event) => {
-		const { trace } = await open(event);
-		const answer = await doOrSay(event, 'traces.write', async (person, sent) => {
+		const { person, trace } = await open(event);
+		const sent = await readPageForm(event.request);
+		const legsDraft = Object.fromEntries([...sent].map(([name, value]) => [name, String(value)]));
+		const problems = listLegProblems(legsDraft, trace.legs);
+		if (problems.length > 0) {
+			return fail(422, { legsDraft, legsRefusal: problems.map(({ message }) => message).join(' ') });
+		}
+		try {
 			await saveLegs(person, trace.id, validate(legsChangeSchema, readLegsForm(sent, trace.legs)));
-			return null;
-		});
-		if (answer) return fail(answer.status, { legsRefusal: answer.data.refusal });
+		} catch (error) {
+			if (!(error instanceof AppError)) throw error;
+			const [first] = error.problems;
+			return fail(error.status, { legsDraft, legsRefusal: first?.message ?? error.message });
+		}
 		const query = event.url.searchParams.get('window') ?? '';
 		redirect(303, `/traces/${trace.id}?${query ? `${query}&` : ''}saved#legs`);
 	},
