@@ -78,6 +78,15 @@ export function sayWrongSpeed(text: string): string {
 	return `“${text}” is no speed from 0 to ${MOST_LEG_KMH} km/h.`;
 }
 
+/** An end as it was typed, or as near to it as the ends after it leave room. */
+function placeEnd(typedS: readonly number[], at: number, fromS: number): number {
+	const wantedS = typedS[at]!;
+	const roomS = typedS
+		.map((toS, later) => toS - (later - at) * MINUTE_S)
+		.filter((toS, later) => later > at && toS > fromS);
+	return Math.min(Math.max(Number.isNaN(wantedS) ? fromS : wantedS, fromS + MINUTE_S), ...roomS);
+}
+
 /**
  * The legs of boxes as near as legs can be to them: an end that cannot be is put where there is room. As they are known where the
  * boxes are of more legs than the trace has minutes.
@@ -86,13 +95,15 @@ export function legsOfDraft(draft: LegsDraft, known: readonly TraceLeg[]): Trace
 	const count = Object.keys(draft).filter((name) => /^legs\.\d+\.endMin$/.test(name)).length;
 	const [startS, endS] = [known[0]!.startS, known.at(-1)!.endS];
 	if (count === 0 || endS - startS < count * MINUTE_S) return [...known];
+	const typedS = Array.from(
+		{ length: count },
+		(_, at) => startS + Math.round(readBox(draft[`legs.${at}.endMin`] ?? '')) * MINUTE_S
+	);
+	typedS[count - 1] = endS;
 	const legs: TraceLeg[] = [];
 	for (let at = 0; at < count; at++) {
 		const fromS = legs.at(-1)?.endS ?? startS;
-		const typedS = startS + Math.round(readBox(draft[`legs.${at}.endMin`] ?? '')) * MINUTE_S;
-		const lastS = endS - (count - 1 - at) * MINUTE_S;
-		const wantedS = Number.isNaN(typedS) ? fromS : typedS;
-		const toS = at === count - 1 ? endS : Math.min(Math.max(wantedS, fromS + MINUTE_S), lastS);
+		const toS = placeEnd(typedS, at, fromS);
 		const speed = draft[`legs.${at}.speedKmh`] ?? '';
 		const meanSpeedKmh = speed.trim() === '' || sayWrongSpeed(speed) ? null : readBox(speed);
 		const kind = draft[`legs.${at}.kind`] === 'driving' ? 'driving' : 'stopped';
