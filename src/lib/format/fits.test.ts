@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { formatFitted, nameFit, readLegNumbers, sayLearnt, sayLegOf } from './fits';
+import { formatFitted, nameFit, readLegNumbers, sayLearnt, sayLegOf, sayMisfit, sayNoBook } from './fits';
 
 const plain = (text: string): string => text.replace(/\u202f/g, ' ');
 
@@ -16,6 +16,21 @@ describe('a fitted figure', () => {
 	it('says how much was learnt of it', () => {
 		expect(plain(sayLearnt(0.312))).toBe('31 % of the spread is left');
 		expect(sayLearnt(0.995)).toBe('nothing was learnt');
+	});
+});
+
+describe('a fit that is to be doubted', () => {
+	it('says what the model does not follow, and by how many times the noise', () => {
+		const misfit = { trace: 0, channel: 'cellC', residualK: 3.24, noiseK: 0.5 } as const;
+		expect(plain(sayMisfit(misfit, 'ridge.csv'))).toBe(
+			'The model does not follow ridge.csv: cells off by 3.2 K, 6 times what the readings stray by (0.5 K).'
+		);
+	});
+
+	it('says why no book is made from it, unless it came to a best fit', () => {
+		expect(sayNoBook({ stopped: 'converged' })).toBe('');
+		for (const stopped of ['stalled', 'evaluations used up'] as const)
+			expect(sayNoBook({ stopped })).toContain('no coefficient book is made from it');
 	});
 });
 

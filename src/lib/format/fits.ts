@@ -1,8 +1,9 @@
 import { MOST_FIT_NAME, type FitState } from '../schemas/fits';
-import type { DoneCoefficientFit } from '../thermal/fit';
+import type { DoneCoefficientFit, Misfit } from '../thermal/fit';
 import type { TraceLeg } from '../thermal/traces';
-import { formatNumber, formatWithUnit, THIN_SPACE } from './numbers';
+import { formatKelvin, formatNumber, formatWithUnit, THIN_SPACE } from './numbers';
 import { formatClockHour, formatHours } from './time';
+import { CHANNEL_WORDS } from './traces';
 
 export const FIT_STATE_WORDS: Readonly<Record<FitState, string>> = {
 	running: 'being worked out',
@@ -50,6 +51,12 @@ export function sayLearnt(spreadLeft: number): string {
 export function sayNoBook({ stopped }: Pick<DoneCoefficientFit, 'stopped'>): string {
 	if (stopped === 'converged') return '';
 	return 'This fit did not come to a best fit: its values are only where the search was given up, so no coefficient book is made from it. Begin another fit, with fewer coefficients or with less spread held of them before.';
+}
+
+/** Which channel of a trace the model does not follow, and by how much. */
+export function sayMisfit({ channel, residualK, noiseK }: Misfit, traceName: string): string {
+	const times = formatNumber(residualK / noiseK, 0);
+	return `The model does not follow ${traceName}: ${CHANNEL_WORDS[channel].toLowerCase()} off by ${formatKelvin(residualK)}, ${times} times what the readings stray by (${formatKelvin(noiseK)}).`;
 }
 
 /** "2, 4" → [2, 4]; null for what is no list of whole numbers. */

@@ -5,6 +5,7 @@ import type { Found } from './find-fit';
 import { measureErrors } from './fit-errors';
 import type { FitSetup, TraceToFit } from './fit-setup';
 import { compareOn, type ErrorsCompared } from './leave-out';
+import { findMisfits, type Misfit } from './misfits';
 import type { Noises } from './noise';
 import { drawResiduals, sortByTemperature, type ResidualCurve, type TemperatureBin } from './residual-views';
 import type { FitStatus } from './search';
@@ -30,6 +31,8 @@ export interface DoneCoefficientFit {
 	};
 	residuals: ResidualCurve[];
 	byTemperature: TemperatureBin[];
+	/** What the model does not follow. Not there in older fits. */
+	misfits?: Misfit[];
 	unused: UnusedChannel[];
 	rounds: number;
 	iterations: number;
@@ -60,7 +63,8 @@ function compareFitted({ setup, problem, found, residualsBefore: before }: FitPi
 	return {
 		errors: { before: measureErrors(blocks, before)!, after: measureErrors(blocks, after)! },
 		residuals: drawResiduals(blocks, timesS, before, after),
-		byTemperature: sortByTemperature(blocks, before, after)
+		byTemperature: sortByTemperature(blocks, before, after),
+		misfits: findMisfits(blocks, after)
 	};
 }
 

@@ -174,6 +174,17 @@ describe('a fit to a trace', () => {
 		expect(before.byChannel.cellC!.biasK).toBeCloseTo(after.byChannel.cellC!.biasK, 2);
 	});
 
+	it('names what the model does not follow, with how far off it is and what its readings stray by', () => {
+		expect(fit().misfits).toEqual([]);
+		const traces = [invent(['caseC', 'cellC']), invent(['caseC', 'cellC'])];
+		const { trace } = traces[1]!;
+		// A slow wave that no path between case and cells makes.
+		trace.channels.cellC = trace.channels.cellC!.map((c, at) => c + 8 * Math.sin(trace.timeS[at]! / 900));
+		const { misfits } = fit({ traces });
+		expect(misfits).toMatchObject([{ trace: 1, channel: 'cellC', noiseK: expect.any(Number) as number }]);
+		expect(misfits![0]!.residualK / misfits![0]!.noiseK).toBeGreaterThan(4);
+	});
+
 	it('does not hold a heat shield’s reading against a mount that has none, and says so', () => {
 		const shielded = parseScenario({ ...DAY, shield: {} });
 		const { unused } = fit({ traces: [invent(['exhaustShieldC', 'cellC'], shielded)] });

@@ -20,6 +20,7 @@ export type { TraceToFit } from './fit-setup';
 export { holdTrace, type HeldTrace } from './hold-trace';
 export { fitLeastSquares, type Fit } from './least-squares';
 export type { ErrorsCompared } from './leave-out';
+export type { Misfit } from './misfits';
 export type { ChannelNoise, Noises } from './noise';
 export type { Bounds, LeastSquaresProblem, Prior } from './problem';
 export type { ResidualCurve, TemperatureBin } from './residual-views';
