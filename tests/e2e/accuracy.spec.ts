@@ -52,3 +52,31 @@ test('readings are narrowed down in the address, with and without a script, and 
 	await expect(plain.getByRole('table', { name: /^Single readings/ })).toBeVisible();
 	await context.close();
 });
+
+test('the page folds its figures on a phone, shows that tables go on sideways, and prints them all with captions', async ({
+	page
+}) => {
+	await page.setViewportSize({ width: 360, height: 740 });
+	await signInAs(page, 'engineer');
+	await page.goto('/accuracy');
+	const summary = page.locator('summary', { hasText: 'Cut-outs in figures' });
+	const table = page.getByRole('table', { name: 'Stated chances against what happened' });
+	await expect(summary).toBeVisible();
+	await expect(table).toBeHidden();
+	await summary.click();
+	await expect(table).toBeVisible();
+	const region = page.getByRole('region', { name: 'Stated chances against what happened' });
+	expect(await region.evaluate((box) => box.scrollWidth > box.clientWidth)).toBe(true);
+	expect(await region.evaluate((box) => getComputedStyle(box).backgroundImage)).toContain('linear-gradient');
+	await expectNoViolations(page);
+	await summary.click();
+	await page.emulateMedia({ media: 'print' });
+	await page.evaluate(() => window.dispatchEvent(new Event('beforeprint')));
+	const captions = page.locator('.prints-captions caption');
+	expect(await captions.count()).toBeGreaterThan(3);
+	for (const caption of await captions.all()) {
+		const box = await caption.evaluate((each) => [each.clientHeight, each.checkVisibility()]);
+		const isFolded = await caption.evaluate((each) => each.closest('.no-print') !== null);
+		if (!isFolded) expect([Number(box[0]) > 8, box[1]]).toEqual([true, true]);
+	}
+});
