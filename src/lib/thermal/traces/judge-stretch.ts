@@ -15,33 +15,45 @@ const CHARGING_A = 1;
 const HOT_SHARE = 0.5;
 const CHANGE_SHARE = 0.1;
 
-type Judge = (values: Float64Array, from: number, to: number) => Judgement | null;
+/** Above the outside air: less than this the sun alone makes, in all and where it stays; engineering judgement. */
+const LEAST_EXCESS_K = 8;
+const WARM_EXCESS_K = 4;
+
+type Judge = (evidence: Evidence, from: number, to: number) => Judgement | null;
 
 const meanOf = (values: Float64Array): number =>
 	values.reduce((sum, value) => sum + value, 0) / values.length;
 const show = (value: number): string => String(Math.round(value));
 
-const judgeSpeed: Judge = (values, from, to) => {
+const judgeSpeed: Judge = ({ values }, from, to) => {
 	const speedKmh = meanOf(values.subarray(from, to));
 	return { kind: speedKmh >= MOVING_KMH ? 'driving' : 'stopped', why: `speed ${show(speedKmh)} km/h` };
 };
 
 /** A full battery takes no charge while driving: no charge alone says nothing. */
-const judgeCurrent: Judge = (values, from, to) => {
+const judgeCurrent: Judge = ({ values }, from, to) => {
 	const currentA = meanOf(values.subarray(from, to));
 	return currentA >= CHARGING_A ? { kind: 'driving', why: `charging with ${show(currentA)} A` } : null;
 };
 
+/** A temperature is a guess: a bay warms once more after a stop, and an engine may run while the vehicle stands. */
 function judgeHeat(name: string): Judge {
-	return (values, from, to) => {
+	return ({ values, isExcess }, from, to) => {
 		const low = values.reduce((a, b) => Math.min(a, b), Infinity);
 		const range = values.reduce((a, b) => Math.max(a, b), -Infinity) - low;
+		if (isExcess && range < LEAST_EXCESS_K) return null;
 		const part = values.subarray(from, to);
 		const riseK = part.at(-1)! - part[0]!;
-		if (riseK > CHANGE_SHARE * range) return { kind: 'driving', why: `${name} warms by ${show(riseK)} K` };
-		if (riseK < -CHANGE_SHARE * range) return { kind: 'stopped', why: `${name} cools by ${show(-riseK)} K` };
-		const isHot = meanOf(part) > low + HOT_SHARE * range;
-		return { kind: isHot ? 'driving' : 'stopped', why: `${name} stays ${isHot ? 'hot' : 'cool'}` };
+		const over = isExcess ? ' over the outside air' : '';
+		if (riseK > CHANGE_SHARE * range)
+			return { kind: 'driving', why: `a guess: ${name} warms by ${show(riseK)} K${over}` };
+		if (riseK < -CHANGE_SHARE * range)
+			return { kind: 'stopped', why: `a guess: ${name} cools by ${show(-riseK)} K${over}` };
+		const isHot = meanOf(part) > (isExcess ? WARM_EXCESS_K : low + HOT_SHARE * range);
+		return {
+			kind: isHot ? 'driving' : 'stopped',
+			why: `a guess: ${name} stays ${isHot ? 'hot' : 'cool'}${over}`
+		};
 	};
 }
 
@@ -54,8 +66,8 @@ const JUDGES: Partial<Record<TraceChannel, Judge>> = {
 
 /** What the vehicle did in a stretch, by the first channel that can tell. */
 export function judgeStretch(evidence: readonly Evidence[], from: number, to: number): Judgement {
-	for (const { channel, values } of evidence) {
-		const judgement = JUDGES[channel]?.(values, from, to) ?? null;
+	for (const each of evidence) {
+		const judgement = JUDGES[each.channel]?.(each, from, to) ?? null;
 		if (judgement !== null) return judgement;
 	}
 	const why =

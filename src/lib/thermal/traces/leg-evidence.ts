@@ -1,6 +1,6 @@
 import { sampleQuantile } from '../statistics';
 import { coarsenTrace, minuteBins, type BinnedTrace } from './binned-trace';
-import type { TraceChannel } from './channels';
+import { CHANNEL_LAWS, type TraceChannel } from './channels';
 import type { ChangeSignal } from './change-points';
 
 /** What a channel says of driving, and how it changes where the driving does. */
@@ -30,6 +30,8 @@ const SD_PER_MAD = 1.4826;
 export interface Evidence {
 	channel: TraceChannel;
 	values: Float64Array;
+	/** The values count from the outside air. */
+	isExcess: boolean;
 	signal: ChangeSignal;
 }
 
@@ -63,13 +65,22 @@ function findNoise(values: Float64Array, least: number): number {
 	return Math.max((SD_PER_MAD * median) / Math.SQRT2, least);
 }
 
-function toEvidence(grid: BinnedTrace, { channel, shape, leastNoise }: EvidenceLaw): Evidence[] {
-	const bins = grid.channels[channel];
-	if (!bins) return [];
+/** What a channel measured, its silences bridged; null where it was silent for too long. */
+function readChannel({ channels, binCount }: BinnedTrace, channel: TraceChannel): Float64Array | null {
+	const bins = channels[channel];
+	if (!bins) return null;
 	const told = bins.count.filter((count) => count > 0).length;
-	if (told < LEAST_TOLD * grid.binCount || told === 0) return [];
-	const values = bridge(bins.mean);
-	return [{ channel, values, signal: { values, shape, noise: findNoise(values, leastNoise) } }];
+	return told < LEAST_TOLD * binCount || told === 0 ? null : bridge(bins.mean);
+}
+
+/** Temperatures count from the outside air where that was measured: what warms with the day was not driven. */
+function toEvidence(grid: BinnedTrace, { channel, shape, leastNoise }: EvidenceLaw): Evidence[] {
+	const measured = readChannel(grid, channel);
+	if (!measured) return [];
+	const airC = CHANNEL_LAWS[channel].quantity === 'temperature' ? readChannel(grid, 'ambientC') : null;
+	const values = airC ? measured.map((value, at) => value - airC[at]!) : measured;
+	const noise = findNoise(values, leastNoise);
+	return [{ channel, values, isExcess: airC !== null, signal: { values, shape, noise } }];
 }
 
 /** What the trace has to tell of driving: the speed alone where there is one, else everything that there is. */

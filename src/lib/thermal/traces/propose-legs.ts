@@ -77,8 +77,8 @@ function joinShort(legs: readonly TraceLeg[], shortestS: number, mostLegs: numbe
  * Proposes the legs of a trace, for somebody to put right: where it changes, and whether the vehicle drove.
  *
  * Changes are found by PELT on whole minutes: in the level of the speed where there is one; else in the level of the current and
- * in the slopes of exhaust shield and bay air together. Stretches are judged by speed, charge, or warming and cooling, in this
- * order; neighbours that are alike are joined.
+ * in the slopes of exhaust shield and bay air together, over the outside air where that was measured. Stretches are judged by speed,
+ * charge, or warming and cooling, in this order; neighbours that are alike are joined.
  *
  *     β = 3 (p + 1) ln n,   p = 1 for each level, 2 for each line
  *
@@ -86,7 +86,7 @@ function joinShort(legs: readonly TraceLeg[], shortestS: number, mostLegs: numbe
  * @param options shortestMinutes, 5 unless said; mostLegs, 48 unless said
  * @returns at least one leg; the first begins and the last ends with the trace's minutes, none shorter than a minute
  * @throws EngineInputError for a length not above zero or no whole number of legs
- * Validity: a proposal. Without speed, an engine that runs while the vehicle stands looks like driving, and a boundary can be
+ * Validity: a proposal. Without speed and charge it is a guess, and says so: an engine that runs while the vehicle stands looks like driving, and a boundary can be
  *   minutes late. Traces over 5,000 minutes are looked at on a coarser grid of whole minutes.
  * Source: changes after Killick, Fearnhead and Eckley (2012), see findChangePoints; the penalty grows as the criterion of Schwarz,
  *   Annals of Statistics 6 (1978) 461; the limits are engineering judgement.
