@@ -29,4 +29,14 @@ describe('a form around a file', () => {
 		expect(form.sent.get('name')).toBe('Quiet Creek');
 		expect(() => bytesOf(form, MOST_BYTES)).toThrow('The file is missing, or there is nothing in it');
 	});
+
+	it('may be one that can hold no file', async () => {
+		const body = new URLSearchParams({ name: 'Quiet Creek' });
+		const form = await readFormAroundFile(
+			new Request('http://localhost/', { method: 'POST', body }),
+			MOST_BYTES
+		);
+		expect(form.sent.get('name')).toBe('Quiet Creek');
+		expect(form.file).toBeNull();
+	});
 });

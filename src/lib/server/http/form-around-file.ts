@@ -1,5 +1,7 @@
 import { readFile } from 'node:fs/promises';
+import { readFormData } from './body';
 import { fileMissing, fileTooLarge, FILE_FIELD } from './file-upload';
+import { boundaryOf } from './multipart';
 import { withSentFiles } from './sent-files';
 
 /** A file that is too large is read past as far as this, so that the words beside it are not lost. */
@@ -12,8 +14,11 @@ export interface FormAroundFile {
 	file: { bytes: Uint8Array | null } | null;
 }
 
-/** A form with one small file in it, whatever that file is like. */
-export function readFormAroundFile(request: Request, mostFileBytes: number): Promise<FormAroundFile> {
+/** A form with one small file in it, whatever that file is like; one that can hold no file has none. */
+export async function readFormAroundFile(request: Request, mostFileBytes: number): Promise<FormAroundFile> {
+	if (boundaryOf(request.headers.get('content-type') ?? '') === null) {
+		return { sent: await readFormData(request), file: null };
+	}
 	const limits = { mostFileBytes, mostFiles: 1, mostBytes: MOST_READ_BYTES };
 	return withSentFiles(request, limits, async ({ fields, files: [file] }) => {
 		const sent = new FormData();

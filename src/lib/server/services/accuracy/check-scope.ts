@@ -5,8 +5,10 @@ export const CHECKS = `prediction_checks c
 	LEFT JOIN places p ON p.id = j.place_id
 	JOIN coefficient_books b ON b.id = c.book_id`;
 
-/** Traces that were measured and read, and that nothing was held against. */
-export const UNHELD_TRACES = `traces t LEFT JOIN prediction_checks c ON c.trace_id = t.id
+/** Traces that were measured and read at mounts that stand, and that nothing was held against. */
+export const UNHELD_TRACES = `traces t
+	JOIN mounts m ON m.id = t.mount_id AND m.removed_at IS NULL
+	LEFT JOIN prediction_checks c ON c.trace_id = t.id
 	WHERE t.state = 'read' AND NOT t.is_synthetic AND t.removed_at IS NULL AND c.id IS NULL`;
 
 export const ZONE = "COALESCE(p.computed_zone, p.climate_zone, '')";

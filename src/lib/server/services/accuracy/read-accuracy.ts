@@ -58,7 +58,6 @@ const WAITING = `
 /** At mounts that stand: for want of an assessment, an hour of beginning, a reading of the battery, or a day that can be run. */
 const UNHELD = `
 	SELECT COUNT(*) AS traces FROM ${UNHELD_TRACES} AND t.workshop_id = :workshopId
-		AND EXISTS (SELECT 1 FROM mounts m WHERE m.id = t.mount_id AND m.removed_at IS NULL)
 `;
 
 type Stored = Record<string, string | number>;

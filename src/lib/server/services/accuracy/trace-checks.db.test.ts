@@ -18,6 +18,7 @@ import { today } from '../days';
 import { draftFittedBook } from '../fit-books';
 import { createFit, followFit, prepareFit } from '../fits';
 import { getJob, setJobClimate } from '../jobs';
+import { removeMount, restoreMount } from '../mounts';
 import { traceToFit } from '../trace-scenario';
 import { saveLegs } from '../trace-views';
 import { removeTrace, restoreTrace } from '../traces';
@@ -31,6 +32,7 @@ const PRIOR = { law: 'lognormal', middle: 2.5, spread: 0.35 };
 const LONG_MS = 120_000;
 let crew: Crew;
 let mountId: number;
+let otherMountId: number;
 let jobId: number;
 
 beforeEach(async () => {
@@ -38,6 +40,7 @@ beforeEach(async () => {
 	const made = await makeAssessableJob(crew.installer);
 	({ jobId } = made);
 	mountId = made.hot.id;
+	otherMountId = made.cool.id;
 });
 
 const sendDay = async (text = dayText(), said: Confirmed = {}) =>
@@ -195,6 +198,22 @@ describe('a measured trace', () => {
 		await removeTrace(crew.engineer, first.id);
 		expect(await checksOf(second.id)).toMatchObject([{ left_out: '' }]);
 		await restoreTrace(crew.engineer, first.id);
+		expect(await checksOf(second.id)).toMatchObject([{ left_out: 'sent-again' }]);
+	});
+
+	it('counts at another mount while its own is taken away', async () => {
+		await assessMount(crew.installer, { mountId });
+		await assessMount(crew.installer, { mountId: otherMountId });
+		const first = await sendDay();
+		const sent = await sendTrace(crew.engineer, otherMountId, dayText());
+		const second = await readAs(crew.engineer, sent);
+		for (const each of [first, second]) await confirmLegs(each);
+		expect(await checksOf(second.id)).toMatchObject([{ left_out: 'sent-again' }]);
+		await removeMount(crew.installer, mountId);
+		expect(await checksOf(first.id)).toEqual([]);
+		expect(await checksOf(second.id)).toMatchObject([{ left_out: '' }]);
+		await restoreMount(crew.installer, mountId);
+		expect(await checksOf(first.id)).toMatchObject([{ left_out: '' }]);
 		expect(await checksOf(second.id)).toMatchObject([{ left_out: 'sent-again' }]);
 	});
 

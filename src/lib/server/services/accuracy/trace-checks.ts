@@ -170,18 +170,28 @@ export async function holdTraces(
 	return count;
 }
 
+/** Of a file everywhere it was sent in, for which of its traces counts depends on the others. */
 const FORGET = `
 	DELETE c FROM prediction_checks c
 		JOIN traces t ON t.id = c.trace_id
 		JOIN traces s ON s.sha256 = t.sha256 AND s.workshop_id = t.workshop_id
-	WHERE s.id = :traceId
 `;
 
-/** Forgets what a file was held against, wherever it was sent in, inside the transaction that changed a trace of it. */
-export async function forgetTraceCheck(traceId: number, transaction: Transaction): Promise<void> {
-	await connection().query(FORGET, {
-		replacements: { traceId },
-		type: QueryTypes.DELETE,
-		transaction
-	});
+async function forget(where: string, id: number, transaction: Transaction): Promise<void> {
+	const options = { replacements: { id }, type: QueryTypes.DELETE, transaction };
+	await connection().query(`${FORGET} WHERE ${where}`, options);
+}
+
+/** Forgets what a file was held against, inside the transaction that changed a trace of it. */
+export const forgetTraceCheck = (traceId: number, transaction: Transaction): Promise<void> =>
+	forget('s.id = :id', traceId, transaction);
+
+/** The same of every file of a mount that goes or comes back. */
+export const forgetTraceChecksOf = (mountId: number, transaction: Transaction): Promise<void> =>
+	forget('s.mount_id = :id', mountId, transaction);
+
+/** Holds anew, wherever they were sent in, the files of a mount that went or came back. */
+export async function holdTracesOf(mountId: number): Promise<void> {
+	const traces = await Trace.findAll({ where: { mountId }, attributes: ['sha256'] });
+	for (const sha256 of new Set(traces.map((trace) => trace.sha256))) await holdTraces({ sha256 });
 }
