@@ -69,6 +69,7 @@ const MAPPING = {
 	...{ version: 1, delimiter: ',', decimal: '.', time: { kind: 'elapsed-s', column: 1 } },
 	columns: [{ column: 2, channel: 'cellC', unit: '°C' }]
 };
+const STRIKE = { reason: 'Nothing of it holds' };
 const FIELD_NOTE = { kind: 'inspection', notedOn: '2026-01-06', words: 'Nothing' };
 
 const page = (route: string, audience: Audience, ...methods: string[]): RouteRule => ({
@@ -128,6 +129,7 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 	owned('/mounts/[mountId]/follow-ups.ics', 'workshop'),
 	owned('/mounts/[mountId]/field', 'workshop'),
 	owned('/mounts/[mountId]/field/new/[kind]', 'workshop', 'default'),
+	owned('/mounts/[mountId]/field/[noteId]/strike', 'workshop', 'default'),
 	owned('/assessments/[assessmentId]', 'workshop', 'again', 'others', 'reproduce'),
 	owned('/assessments/[assessmentId]/outlook-progress', 'workshop'),
 	owned('/recommendations/[recommendationId]/print', 'workshop'),
@@ -219,6 +221,7 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 	ownedApi('/mounts/[mountId]/pre-drill', 'workshop', { GET: null, PUT: { answers: {}, version: 0 } }),
 	ownedApi('/mounts/[mountId]/fitting', 'workshop', { GET: null, PUT: FITTING }),
 	ownedApi('/mounts/[mountId]/field-notes', 'workshop', { GET: null, POST: FIELD_NOTE }),
+	ownedApi('/mounts/[mountId]/field-notes/[noteId]/strike', 'workshop', { POST: STRIKE }),
 	ownedApi('/follow-ups/[followUpId]/done', 'workshop', { POST: { isDone: true, version: 0 } }),
 	ownedApi('/mounts/[mountId]/files', 'workshop', { GET: null, POST: null }),
 	ownedApi('/files/[fileId]', 'workshop', { GET: null, PATCH: { version: 0 }, DELETE: null }),

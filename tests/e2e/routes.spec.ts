@@ -126,12 +126,17 @@ async function findIds(
 	const file = { name: 'a.png', mimeType: 'image/png', buffer: ONE_PIXEL };
 	const sent = await context.post(`/api/v1/mounts/${mountId}/files`, { multipart: { file } });
 	expect(sent.status(), await sent.text()).toBe(201);
+	const note = { kind: 'inspection', notedOn: new Date().toISOString().slice(0, 10), words: 'Dry and tight' };
+	const noted = await context.post(`/api/v1/mounts/${mountId}/field-notes`, { data: note });
+	expect(noted.status(), await noted.text()).toBe(201);
+	const { rows: notes } = (await noted.json()) as { rows: Record[] };
 	return {
 		...(await findPeople(context)),
 		zoneId: await findZone(context),
 		jobId,
 		mountId,
 		fileId: of((await sent.json()) as Record),
+		noteId: of(notes[0]),
 		followUpId: of(fitting.followUps[0]),
 		kind: 'inspection',
 		paper: 'handover',

@@ -5,6 +5,7 @@ import { LIGHT_EFFORT } from './sheets';
 import { assessJob } from '../../src/lib/server/services/assessments';
 import { updateCustomer } from '../../src/lib/server/services/customers';
 import { addFieldNote } from '../../src/lib/server/services/field-notes';
+import { strikeFieldNote } from '../../src/lib/server/services/field-strikes';
 import { saveFitting } from '../../src/lib/server/services/fittings';
 import { ensureOutlook } from '../../src/lib/server/services/outlooks';
 import { answerQuestion, askByLink } from '../../src/lib/server/services/questions';
@@ -53,10 +54,10 @@ export async function makeKnownCustomer() {
 	await answerQuestion(crew.installer, question!.id, `Dear Zita, yes: ${known.question}`);
 	await saveFitting(crew.installer, assessment.mountId, { ...FITTED, note: `${name} was there.` });
 	const words = `Ms ${surname} says that it smells of nothing.`;
-	await addFieldNote(crew.installer, assessment.mountId, {
-		kind: 'inspection',
-		notedOn: '2026-02-10',
-		words
+	const inspection = { kind: 'inspection', notedOn: '2026-02-10', words } as const;
+	const { rows } = await addFieldNote(crew.installer, assessment.mountId, inspection);
+	await strikeFieldNote(crew.installer, assessment.mountId, rows[0]!.id, {
+		reason: `Ms ${surname} said so of another battery.`
 	});
 	return { known, crew, customer, jobId, sheet, token, assessmentId: chosen.id };
 }

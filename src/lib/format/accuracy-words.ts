@@ -46,6 +46,7 @@ export const GROUPING_WORDS: Record<Grouping, string> = {
 };
 
 export const LEFT_OUT_WORDS: Record<LeftOut, string> = {
+	struck: 'struck out as a slip of the pen',
 	'noted-again': 'put right by a later note of the same day',
 	'fits-nothing': 'outside, with those before it, of all that was held possible',
 	'fitted-to': 'foretold by a book that had been fitted to it',

@@ -11,12 +11,12 @@ export type ReadingKind = (typeof READING_KINDS)[number];
 export const TEMPERATURE_KINDS = ['label', 'trace'] as const satisfies readonly ReadingKind[];
 
 /**
- * Why a reading does not count: put right by a later one of the same day; with those before it, outside of all that is held
+ * Why a reading does not count: struck out; put right by a later one of the same day; with those before it, outside of all that is held
  * possible; of a trace: the book that foretold it had been fitted to it, the same file is there already, its logger told no
  * date, or not the outside air, or nobody has confirmed its legs.
  */
 export const LEFT_OUT = [
-	...(['noted-again', 'fits-nothing'] as const),
+	...(['struck', 'noted-again', 'fits-nothing'] as const),
 	...(['fitted-to', 'sent-again', 'no-date', 'no-air', 'legs-open'] as const)
 ] as const;
 export type LeftOut = (typeof LEFT_OUT)[number];

@@ -72,9 +72,36 @@ export const fieldNoteSchema = z.object({
 	notedBy: z.string(),
 	data: fieldNoteInputSchema,
 	finding: z.custom<FieldFinding>().nullable().meta({ type: 'object' }),
-	engineVersion: z.string()
+	engineVersion: z.string(),
+	struck: z
+		.object({ by: z.string(), at: z.iso.datetime(), reason: z.string() })
+		.nullable()
+		.meta({ description: 'Struck out: it stays on record and counts nowhere' }),
+	restsOnStruck: z
+		.object({ noteId: z.number().int(), notedOn: z.iso.date(), isNotedAnew: z.boolean() })
+		.nullable()
+		.meta({
+			description:
+				'The note with which this one had learnt before that was struck out: what it learnt does not count until it is noted anew, on the same day and, of a label, at the same place'
+		})
 });
 export type FieldNoteView = z.infer<typeof fieldNoteSchema>;
+
+const LEAST_REASON = 5;
+const MOST_REASON = 300;
+
+/** Why a note is struck out. */
+export const fieldNoteStrikeSchema = z.object({
+	reason: z
+		.string({ error: 'Reason is missing.' })
+		.trim()
+		.min(LEAST_REASON, {
+			error: `Reason must be at least ${LEAST_REASON} characters: it stands beside the note for good.`
+		})
+		.max(MOST_REASON, { error: `Reason must be ${MOST_REASON} characters or fewer.` })
+		.meta({ label: 'Reason' })
+});
+export type FieldNoteStrikeChange = z.infer<typeof fieldNoteStrikeSchema>;
 
 /** The least capacity that the customer can do with, and from how much on it could be asked for. */
 const namedAh = z.coerce

@@ -6,6 +6,8 @@ export interface NoteReport {
 	title: string;
 	when: string;
 	words: string;
+	/** By whom, when and why it was struck out; null where it counts. */
+	struck: { who: string; reason: string } | null;
 	cause: {
 		/** "Yes", "Perhaps", "Hardly". */
 		word: string;

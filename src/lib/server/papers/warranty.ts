@@ -21,7 +21,11 @@ function tellMaker({ paper: { report } }: MountRecord): PaperBlock[] {
 /** Each note with what the model made of it, the oldest first. */
 function tellNotes({ notes }: MountRecord): PaperBlock {
 	const rows = [...notes.rows].reverse().map((row) => {
-		const { title, when, words, cause, learning } = presentNote(row);
+		const { title, when, words, struck, cause, learning } = presentNote(row);
+		if (struck) {
+			const said = `${words} ${struck.who}, and counts nowhere: ${struck.reason}`;
+			return [`${title}, struck out`, when, said];
+		}
 		const heat = cause ? `Was it heat? ${cause.word}. ${cause.sentence} ${cause.usual}` : '';
 		return [title, when, [words, heat, learning?.sentence ?? ''].filter(Boolean).join(' ')];
 	});
@@ -46,7 +50,7 @@ function lastDayOf({ paper, fitting, preDrill, notes, acknowledgement }: MountRe
 		preDrill.signedAt,
 		acknowledgement?.acknowledgedAt,
 		...fitting.followUps.map(({ doneOn }) => doneOn),
-		...notes.rows.map(({ notedOn }) => notedOn)
+		...notes.rows.flatMap(({ notedOn, struck }) => [notedOn, struck?.at])
 	];
 	return days
 		.flatMap((day) => (day ? [day.slice(0, 10)] : []))

@@ -41,6 +41,7 @@ const DID: Record<string, string> = {
 	'mount.added': 'added a mount',
 	'mount.cable': 'changed the proposed cable',
 	'mount.field-note': 'kept a field note',
+	'mount.field-note-struck': 'struck a field note out',
 	'mount.file-added': 'added a photo or document',
 	'mount.file-changed': 'changed what is said of a photo',
 	'mount.file-removed': 'removed a photo or document',

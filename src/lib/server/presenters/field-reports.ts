@@ -117,15 +117,42 @@ function presentLearning(learning: Learning | null, cause: HeatCause | null): No
 	};
 }
 
-/** A note with what the model makes of it. */
-export function presentNote({ id, kind, notedOn, notedBy, data, finding }: FieldNoteView): NoteReport {
+/** What was learnt with a note that was struck out since does not count, and says what to do about it. */
+function presentResting({ notedOn, isNotedAnew }: Resting): NonNullable<NoteReport['learning']> {
+	const next = isNotedAnew
+		? 'This reading was noted once more, and weighed without that one.'
+		: 'Note this reading once more, with the same day and the same figures: it is then weighed without that one.';
 	return {
-		id,
-		title: FIELD_NOTE_LABELS[kind],
+		sentence: `What it taught rested on the note of ${formatDate(notedOn)}, which was struck out since, and does not count. ${next}`,
+		rows: [],
+		method: ''
+	};
+}
+type Resting = NonNullable<FieldNoteView['restsOnStruck']>;
+
+function presentFinding({
+	finding,
+	struck,
+	restsOnStruck
+}: FieldNoteView): Pick<NoteReport, 'cause' | 'learning'> {
+	if (!finding || struck) return { cause: null, learning: null };
+	const { cause, learning } = finding;
+	return {
+		cause: presentCause(cause),
+		learning: restsOnStruck ? presentResting(restsOnStruck) : presentLearning(learning, cause)
+	};
+}
+
+/** A note with what the model makes of it; of one that was struck out nothing is made. */
+export function presentNote(note: FieldNoteView): NoteReport {
+	const { id, kind, notedOn, notedBy, data, struck } = note;
+	return {
+		...{ id, title: FIELD_NOTE_LABELS[kind], words: sayData(data) },
 		when: `${formatDate(notedOn)}, noted by ${notedBy}`,
-		words: sayData(data),
-		cause: presentCause(finding?.cause ?? null),
-		learning: presentLearning(finding?.learning ?? null, finding?.cause ?? null)
+		struck: struck && {
+			...{ who: `Struck out by ${struck.by} on ${formatDate(struck.at)}`, reason: struck.reason }
+		},
+		...presentFinding(note)
 	};
 }
 

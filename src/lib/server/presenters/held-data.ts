@@ -1,3 +1,4 @@
+import { FIELD_NOTE_LABELS } from '$lib/schemas/field-notes';
 import { LETTER_KINDS, type LetterKind } from '$lib/schemas/letters';
 import type { MyErasure } from '$lib/schemas/erasures';
 import type { Question } from '$lib/schemas/questions';
@@ -6,6 +7,8 @@ import type {
 	Acknowledgement,
 	Assessment,
 	Customer,
+	FieldNote,
+	FieldNoteStrike,
 	Job,
 	OutgoingMail,
 	Person,
@@ -29,6 +32,8 @@ export interface HeldRows {
 	letters: OutgoingMail[];
 	files: StoredFile[];
 	traces: Trace[];
+	/** What was noted and struck out: the story tells no more of it than that. */
+	struckNotes: { jobId: number; note: FieldNote; strike: FieldNoteStrike }[];
 	story: MyVehicle[];
 	erasure: MyErasure | null;
 }
@@ -71,6 +76,11 @@ const presentMeasurement = ({ name, createdAt, span, isSynthetic }: Trace) => ({
 	measured: span?.channels ?? []
 });
 
+const presentStruckNote = ({ note, strike }: HeldRows['struckNotes'][number]) => ({
+	...{ about: FIELD_NOTE_LABELS[note.kind], notedOn: note.notedOn, asNoted: note.data },
+	...{ struckOutAt: iso(strike.createdAt), reason: strike.reason }
+});
+
 /** Where the content of a file lies in the parcel. */
 export const pathOfFile = ({ id, kind }: StoredFile): string =>
 	kind === 'photo' ? `files/photo-${id}.jpg` : `files/document-${id}.pdf`;
@@ -89,6 +99,7 @@ export function presentHeldData(held: HeldRows) {
 		letters,
 		files,
 		traces,
+		struckNotes,
 		story
 	} = held;
 	return {
@@ -109,7 +120,8 @@ export function presentHeldData(held: HeldRows) {
 			pages: sheets.filter(({ jobId }) => jobId === id).map(presentSheet),
 			questions: questions.find(({ jobId }) => jobId === id)?.thread ?? [],
 			photosAndDocuments: files.filter(({ jobId }) => jobId === id).map(presentFile),
-			measurements: traces.filter(({ jobId }) => jobId === id).map(presentMeasurement)
+			measurements: traces.filter(({ jobId }) => jobId === id).map(presentMeasurement),
+			notesStruckOut: struckNotes.filter(({ jobId }) => jobId === id).map(presentStruckNote)
 		})),
 		letters: letters.map(presentLetter),
 		whatHappened: story.map(({ name, history, lessons }) => ({ vehicle: name, history, lessons })),

@@ -10,7 +10,7 @@ import {
 	type HistoryEntry
 } from '$lib/schemas/my';
 import type { Question } from '$lib/schemas/questions';
-import type { FieldNote, FollowUp, Installation, Sheet } from '../db/models';
+import type { FieldNote, FieldNoteStrike, FollowUp, Installation, Sheet } from '../db/models';
 
 export function presentSheetDocument({ id, jobId, content, createdAt }: Sheet): CustomerDocument {
 	const verdict = sayVerdict(content.verdict, content.chemistry ?? '');
@@ -124,9 +124,19 @@ const CAUSES = {
 	'not-explained': 'Heat alone hardly explains it: the shop looks for another cause.'
 } as const;
 
-export function tellNote({ data, notedOn, finding }: FieldNote, jobId: number): HistoryEntry {
+/** A note that was struck out says so, and no more: its figures, and the reason with them, were a slip. */
+export function tellNote(
+	{ data, notedOn, finding }: FieldNote,
+	jobId: number,
+	strike: FieldNoteStrike | null
+): HistoryEntry {
+	const title = NOTE_TITLES[data.kind];
+	if (strike) {
+		const words = `Struck out by the shop on ${formatDate(strike.createdAt)}: it does not count.`;
+		return { jobId, ...onDay(notedOn, title, words) };
+	}
 	const cause = finding?.cause ? ` ${CAUSES[finding.cause.finding]}` : '';
-	return { jobId, ...onDay(notedOn, NOTE_TITLES[data.kind], sayNote(data) + cause) };
+	return { jobId, ...onDay(notedOn, title, sayNote(data) + cause) };
 }
 
 export function tellQuestions(questions: readonly Question[], jobId: number): HistoryEntry[] {

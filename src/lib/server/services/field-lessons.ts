@@ -1,8 +1,9 @@
 import type { FieldLesson } from '$lib/schemas/my';
-import { Assessment, FieldNote, Installation } from '../db/models';
+import { Assessment, FieldNote, FieldNoteStrike, Installation } from '../db/models';
 import { presentLesson } from '../presenters/field-lessons';
+import { standNotes } from './field-standing';
 
-/** What the field has taught about the fitted batteries of these jobs, the newest first. */
+/** What the field has taught about the fitted batteries of these jobs, the newest first; not what a strike took away. */
 export async function listLessons(jobIds: readonly number[]): Promise<FieldLesson[]> {
 	const installations = await Installation.findAll({ where: { jobId: [...jobIds] } });
 	const assessments = await Assessment.findAll({
@@ -16,7 +17,11 @@ export async function listLessons(jobIds: readonly number[]): Promise<FieldLesso
 			['id', 'DESC']
 		]
 	});
+	const strikes = await FieldNoteStrike.findAll({ where: { fieldNoteId: notes.map(({ id }) => id) } });
+	const standings = standNotes(notes, strikes);
 	return notes.flatMap((note) => {
+		const { strike, restsOn } = standings.get(note.id)!;
+		if (strike || restsOn) return [];
 		const { jobId, mountId, assessmentId } = installations.find(({ id }) => id === note.installationId)!;
 		const chemistry = assessments.find(({ id }) => id === assessmentId)?.chemistry ?? '';
 		return presentLesson(note, { jobId, mountId, chemistry });

@@ -13,7 +13,7 @@ import {
 	type ReadingDay
 } from '$lib/thermal/field';
 import { EngineInputError } from '$lib/thermal/correlations';
-import { Assessment, FieldNote, Installation, Person } from '../db/models';
+import { Assessment, FieldNote, FieldNoteStrike, Installation, Person } from '../db/models';
 import { inTransaction } from '../db/transaction';
 import { AppError, notFound } from '../errors';
 import { allow } from '../policies';
@@ -22,6 +22,7 @@ import { checkLabel, keepLabelCheck, type LabelCheck } from './accuracy/label-ch
 import { recordBy } from './audit';
 import { daysBetween } from './days';
 import { readingOf, scenarioOn } from './field-readings';
+import { listTeaching, standNotes } from './field-standing';
 import { findStandingMount } from './mounts';
 import { listKeptOutlooks } from './outlooks';
 import { refreshReview } from './review/keep-review';
@@ -53,11 +54,14 @@ async function findFitted(person: SignedInPerson, mountId: number): Promise<Fitt
 	return { installation, assessment };
 }
 
-/** Earlier notes that taught something: labels, and what heat had done. What fitted nothing does not spoil what follows. */
-function listReadings(assessment: Assessment, notes: readonly FieldNote[]): ReadingDay[] {
-	return notes.flatMap(({ data, finding }) => {
-		if (data.kind === 'cut-out' && finding?.cause?.finding !== 'explained') return [];
-		if (finding?.learning?.fits === false) return [];
+/** The notes of a battery as they came, and what was struck out of them. */
+interface Noted {
+	notes: FieldNote[];
+	strikes: FieldNoteStrike[];
+}
+
+function listReadings(assessment: Assessment, { notes, strikes }: Noted): ReadingDay[] {
+	return listTeaching(notes, strikes).flatMap(({ data }) => {
 		const reading = readingOf(data);
 		if (reading === null || !('hottestDayC' in data)) return [];
 		return [{ scenario: scenarioOn(assessment, data.hottestDayC), reading }];
@@ -67,7 +71,7 @@ function listReadings(assessment: Assessment, notes: readonly FieldNote[]): Read
 /** Was it heat, and what does it teach? Worked out in slices, one after the other. */
 async function findOut(
 	assessment: Assessment,
-	earlier: readonly FieldNote[],
+	earlier: Noted,
 	data: FieldNoteInput,
 	{ seed, samples, yearSamples }: LearningEffort & { seed: number }
 ): Promise<FieldFinding | null> {
@@ -132,24 +136,27 @@ function refuseImpossible(data: FieldNoteInput, fitted: Fitted): void {
 	}
 }
 
-async function notesOf({ id: installationId }: Installation): Promise<FieldNote[]> {
-	return FieldNote.findAll({
+async function notesOf({ id: installationId }: Installation): Promise<Noted> {
+	const notes = await FieldNote.findAll({
 		where: { installationId },
 		order: [
 			['notedOn', 'ASC'],
 			['id', 'ASC']
 		]
 	});
+	const where = { fieldNoteId: notes.map(({ id }) => id) };
+	return { notes, strikes: await FieldNoteStrike.findAll({ where, order: [['id', 'ASC']] }) };
 }
 
 function trendOf(
 	{ installation, assessment }: Fitted,
-	notes: readonly FieldNote[],
+	{ notes, strikes }: Noted,
 	namedAh: number | null
 ): CapacityTrend | null {
 	const { battery } = assessment.inputs;
-	const tests = notes.flatMap(({ data }) => {
-		if (data.kind !== 'capacity-test') return [];
+	const struck = new Set(strikes.map(({ fieldNoteId }) => fieldNoteId));
+	const tests = notes.flatMap(({ id, data }) => {
+		if (data.kind !== 'capacity-test' || struck.has(id)) return [];
 		const { notedOn, capacityAh, currentA, cutOffV, tempC } = data;
 		const years = Math.max(daysBetween(installation.fittedOn, notedOn), 0) / DAYS_A_YEAR;
 		return [{ years, capacityAh, currentA, cutOffV, tempC }];
@@ -170,12 +177,16 @@ async function show(
 	fitted: Fitted,
 	namedAh: number | null = null
 ): Promise<FieldNotesView> {
-	const notes = await notesOf(fitted.installation);
-	const people = await Person.findAll({ where: { id: notes.map(({ createdBy }) => createdBy) } });
+	const noted = await notesOf(fitted.installation);
+	const { notes, strikes } = noted;
+	const people = await Person.findAll({
+		where: { id: [...notes, ...strikes].map(({ createdBy }) => createdBy) }
+	});
 	const nameOf = (id: number): string => people.find((person) => person.id === id)?.name ?? '';
+	const standings = standNotes(notes, strikes);
 	return {
-		rows: [...notes].reverse().map((note) => presentFieldNote(note, nameOf(note.createdBy))),
-		trend: trendOf(fitted, notes, namedAh),
+		rows: [...notes].reverse().map((note) => presentFieldNote(note, standings.get(note.id)!, nameOf)),
+		trend: trendOf(fitted, noted, namedAh),
 		...{ namedAh, ratedAh: fitted.assessment.inputs.battery.capacityAh },
 		expected: await expectedOf(person, fitted)
 	};
@@ -197,8 +208,8 @@ export interface WeighedNote {
 	finding: FieldFinding | null;
 	/** A label, held against what was predicted at the time; nothing of other notes. */
 	check: LabelCheck | null;
-	/** The newest note that it was weighed with. */
-	after: number | null;
+	/** The newest note that it was weighed with, and the newest strike. */
+	after: Newest;
 }
 
 /** Works out what a note says, which takes seconds, and changes nothing. */
@@ -218,11 +229,18 @@ export async function weighFieldNote(
 	return { data, finding, check, after: newestOf(earlier) };
 }
 
-const newestOf = (notes: readonly FieldNote[]): number | null =>
-	notes.length === 0 ? null : Math.max(...notes.map(({ id }) => id));
+interface Newest {
+	noteId: number;
+	strikeId: number;
+}
+
+const newestOf = ({ notes, strikes }: Noted): Newest => ({
+	noteId: Math.max(0, ...notes.map(({ id }) => id)),
+	strikeId: Math.max(0, ...strikes.map(({ id }) => id))
+});
 
 const NOTED_MEANWHILE =
-	'Somebody noted something of this battery meanwhile, which counts here: send yours again.';
+	'Somebody noted something of this battery meanwhile, or struck it out, which counts here: send yours again.';
 
 /** Keeps a weighed note for good. */
 export async function keepFieldNote(
@@ -235,7 +253,9 @@ export async function keepFieldNote(
 	const { installation } = fitted;
 	await inTransaction(async (transaction) => {
 		await Installation.findByPk(installation.id, { transaction, lock: transaction.LOCK.UPDATE });
-		if (newestOf(await notesOf(installation)) !== after) throw new AppError('conflict', NOTED_MEANWHILE);
+		const { noteId, strikeId } = newestOf(await notesOf(installation));
+		if (noteId !== after.noteId || strikeId !== after.strikeId)
+			throw new AppError('conflict', NOTED_MEANWHILE);
 		const { kind, notedOn } = data;
 		const row = { workshopId: person.workshopId, installationId: installation.id, createdBy: person.id };
 		const told = { kind, notedOn, data, finding, engineVersion: ENGINE_VERSION };

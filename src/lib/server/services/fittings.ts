@@ -1,4 +1,4 @@
-import type { Transaction } from 'sequelize';
+import { literal, Op, type Transaction } from 'sequelize';
 import {
 	FOLLOW_UP_MONTHS,
 	type FittingChange,
@@ -14,6 +14,7 @@ import { allow } from '../policies';
 import { listAgreed, presentFitting } from '../presenters/fittings';
 import { recordBy } from './audit';
 import { addMonths, today } from './days';
+import { isUnstruck } from './field-standing';
 import { findStandingMount } from './mounts';
 import { saveVersioned } from './records';
 import { refreshReview } from './review/keep-review';
@@ -73,7 +74,10 @@ async function setFollowUps(
 /** Nothing can have been noted or looked at before it was fitted. */
 async function refuseAfterwards({ id: installationId }: Installation, fittedOn: string): Promise<void> {
 	const where = { installationId };
-	const firstNote = await FieldNote.findOne({ where, order: [['notedOn', 'ASC']] });
+	const firstNote = await FieldNote.findOne({
+		where: { ...where, [Op.and]: literal(isUnstruck('FieldNote')) },
+		order: [['notedOn', 'ASC']]
+	});
 	const looks = await FollowUp.findAll({ where });
 	const refuse = (what: string): never => {
 		const message = `Fitted on must not be after ${what}.`;

@@ -35,6 +35,15 @@ describe('what is held about a customer', () => {
 		expect(data.jobs).toHaveLength(1);
 		expect(data.jobs[0]!.questions).toMatchObject([{ words: known.question, name: known.name }]);
 		expect(data.jobs[0]!.pages).toMatchObject([{ sentTo: known.email, acknowledged: { by: known.name } }]);
+		// What the story tells no more is held all the same, with why it was struck out.
+		expect(data.jobs[0]!.notesStruckOut).toMatchObject([
+			{
+				...{ about: 'Inspection', notedOn: '2026-02-10' },
+				asNoted: { words: expect.stringContaining(known.surname) },
+				reason: `Ms ${known.surname} said so of another battery.`
+			}
+		]);
+		expect(read('read-me-first.txt')).toContain('Struck out by the shop on');
 		expect(data.letters.map(({ about }) => about)).toContain('The customer’s page');
 	}, 60_000);
 

@@ -5,6 +5,9 @@ import {
 	Acknowledgement,
 	Assessment,
 	Customer,
+	FieldNote,
+	FieldNoteStrike,
+	Installation,
 	Job,
 	OutgoingMail,
 	Person,
@@ -33,6 +36,21 @@ import { readStoredContent } from './files';
 import { listMyVehicles } from './my-vehicles';
 import { writeMyHandover, writeMyRecommendation } from './papers';
 import { readThread } from './question-threads';
+
+async function readStruckNotes(jobIds: number[]): Promise<HeldRows['struckNotes']> {
+	const installations = await Installation.findAll({ where: { jobId: jobIds }, attributes: ['id', 'jobId'] });
+	const where = { installationId: installations.map(({ id }) => id) };
+	const notes = await FieldNote.findAll({ where, attributes: { exclude: ['finding'] } });
+	const strikes = await FieldNoteStrike.findAll({
+		where: { fieldNoteId: notes.map(({ id }) => id) },
+		order: [['id', 'ASC']]
+	});
+	return strikes.map((strike) => {
+		const note = notes.find(({ id }) => id === strike.fieldNoteId)!;
+		const { jobId } = installations.find(({ id }) => id === note.installationId)!;
+		return { jobId, note, strike };
+	});
+}
 
 async function readHeld(person: SignedInPerson): Promise<HeldRows> {
 	const { workshopId, customerId } = allow(person, 'held-data.read-own');
@@ -63,6 +81,7 @@ async function readHeld(person: SignedInPerson): Promise<HeldRows> {
 			attributes: ['jobId', 'name', 'createdAt', 'span', 'isSynthetic'],
 			order: [['id', 'ASC']]
 		}),
+		struckNotes: await readStruckNotes(jobIds),
 		story: await listMyVehicles(person),
 		erasure: await getMyErasure(person)
 	};

@@ -1,6 +1,15 @@
 import type { HistoryEntry, MyVehicle } from '$lib/schemas/my';
 import type { SignedInPerson } from '$lib/schemas/people';
-import { Acknowledgement, FieldNote, FollowUp, Installation, Job, Sheet, Vehicle } from '../db/models';
+import {
+	Acknowledgement,
+	FieldNote,
+	FieldNoteStrike,
+	FollowUp,
+	Installation,
+	Job,
+	Sheet,
+	Vehicle
+} from '../db/models';
 import { allow } from '../policies';
 import {
 	sayDue,
@@ -22,9 +31,11 @@ async function readFitted(jobIds: number[]) {
 		FollowUp.findAll({ where, order: [['dueOn', 'ASC']] }),
 		FieldNote.findAll({ where })
 	]);
+	const strikes = await FieldNoteStrike.findAll({ where: { fieldNoteId: notes.map(({ id }) => id) } });
+	const strikeOf = ({ id }: FieldNote) => strikes.find(({ fieldNoteId }) => fieldNoteId === id) ?? null;
 	const jobOf = (installationId: number): number =>
 		installations.find(({ id }) => id === installationId)!.jobId;
-	return { installations, followUps, notes, jobOf };
+	return { installations, followUps, notes, strikeOf, jobOf };
 }
 
 async function tellAll(jobIds: number[]) {
@@ -33,12 +44,12 @@ async function tellAll(jobIds: number[]) {
 		readFitted(jobIds),
 		Promise.all(jobIds.map(async (jobId) => tellQuestions(await readThread(jobId), jobId)))
 	]);
-	const { installations, followUps, notes, jobOf } = fitted;
+	const { installations, followUps, notes, strikeOf, jobOf } = fitted;
 	const history: HistoryEntry[] = [
 		...sheets.flatMap(tellSheet),
 		...installations.map(tellFitting),
 		...followUps.flatMap((followUp) => tellFollowUp(followUp, jobOf(followUp.installationId))),
-		...notes.map((note) => tellNote(note, jobOf(note.installationId))),
+		...notes.map((note) => tellNote(note, jobOf(note.installationId), strikeOf(note))),
 		...threads.flat()
 	];
 	const due = followUps

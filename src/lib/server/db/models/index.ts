@@ -30,6 +30,7 @@ import { Acknowledgement, initAcknowledgement } from './acknowledgement';
 import { Installation, initInstallation } from './installation';
 import { FollowUp, initFollowUp } from './follow-up';
 import { FieldNote, initFieldNote } from './field-note';
+import { FieldNoteStrike, initFieldNoteStrike } from './field-note-strike';
 import { CustomerMessage, initCustomerMessage } from './customer-message';
 import { StoredFile, initStoredFile } from './stored-file';
 import { Trace, initTrace } from './trace';
@@ -73,6 +74,7 @@ export {
 	Installation,
 	FollowUp,
 	FieldNote,
+	FieldNoteStrike,
 	CustomerMessage,
 	StoredFile,
 	Trace,
@@ -117,6 +119,7 @@ const initialisers = [
 	initInstallation,
 	initFollowUp,
 	initFieldNote,
+	initFieldNoteStrike,
 	initCustomerMessage,
 	initStoredFile,
 	initTrace,

@@ -1,5 +1,10 @@
 import { z } from 'zod';
-import { fieldNoteInputSchema, fieldNotesQuerySchema, fieldNotesSchema } from '$lib/schemas/field-notes';
+import {
+	fieldNoteInputSchema,
+	fieldNotesQuerySchema,
+	fieldNotesSchema,
+	fieldNoteStrikeSchema
+} from '$lib/schemas/field-notes';
 import { idSchema } from '$lib/schemas/fields';
 import { fittingChangeSchema, fittingSchema, followUpChangeSchema } from '$lib/schemas/fitting';
 import { defineOperation } from '../operation';
@@ -58,6 +63,17 @@ export const fittingOperations = {
 		summary: 'Keeps a note for good, with what the model makes of it: was it heat, and what does it teach.',
 		params,
 		body: fieldNoteInputSchema,
+		answer: fieldNotesSchema,
+		status: 201
+	}),
+	strikeNote: defineOperation({
+		id: 'strikeFieldNote',
+		method: 'POST',
+		path: '/api/v1/mounts/[mountId]/field-notes/[noteId]/strike',
+		action: 'mounts.write',
+		summary: 'Strikes a note out, once and for good: it stays on record with the reason, and counts nowhere.',
+		params: params.extend({ noteId: idSchema }),
+		body: fieldNoteStrikeSchema,
 		answer: fieldNotesSchema,
 		status: 201
 	})

@@ -2,6 +2,7 @@ import { QueryTypes } from 'sequelize';
 import { connection } from '../../db/connection';
 import { FieldNote, Installation } from '../../db/models';
 import { inTransaction } from '../../db/transaction';
+import { isUnstruck } from '../field-standing';
 import { refreshChecks } from './keep-checks';
 import { holdNote, keepLabelCheck } from './label-checks';
 import { predictionAt } from './prediction-at';
@@ -26,7 +27,8 @@ const INSTALLATIONS = `
 		LEFT JOIN prediction_checks c ON c.installation_id = i.id AND c.kind IN ('cut-out', 'capacity')
 	WHERE c.id IS NULL AND (
 		EXISTS (SELECT 1 FROM follow_ups f WHERE f.installation_id = i.id AND f.done_on > i.fitted_on)
-		OR EXISTS (SELECT 1 FROM field_notes n WHERE n.installation_id = i.id AND n.noted_on > i.fitted_on))
+		OR EXISTS (SELECT 1 FROM field_notes n WHERE n.installation_id = i.id AND n.noted_on > i.fitted_on
+			AND ${isUnstruck('n')}))
 	ORDER BY i.id
 `;
 

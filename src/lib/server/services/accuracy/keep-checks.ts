@@ -12,6 +12,7 @@ import {
 } from '$lib/thermal/field';
 import { connection } from '../../db/connection';
 import { daysBetween } from '../days';
+import { isUnstruck } from '../field-standing';
 import { daysInMonth, predictUntil } from '../review/predicted-days';
 import { writeChecks, type CheckRow } from './check-rows';
 import { predictionAt } from './prediction-at';
@@ -30,7 +31,7 @@ const WATCHED = `
 	FROM installations i
 		JOIN mounts m ON m.id = i.mount_id AND m.removed_at IS NULL
 		JOIN assessments a ON a.id = i.assessment_id
-		LEFT JOIN field_notes n ON n.installation_id = i.id
+		LEFT JOIN field_notes n ON n.installation_id = i.id AND ${isUnstruck('n')}
 	WHERE i.id IN (:ids) GROUP BY i.id
 `;
 
@@ -38,7 +39,7 @@ const TESTS = `
 	SELECT n.id AS fieldNoteId, n.data, CAST(n.noted_on AS CHAR) AS readOn, i.id AS installationId,
 		i.workshop_id AS workshopId, i.mount_id AS mountId, CAST(i.fitted_on AS CHAR) AS fittedOn,
 		a.id AS assessmentId, a.book_id AS bookId, JSON_EXTRACT(a.inputs, '$.battery') AS battery,
-		DATE(a.created_at) > n.noted_on AS isEnteredLater
+		DATE(a.created_at) > n.noted_on AS isEnteredLater, NOT ${isUnstruck('n')} AS isStruck
 	FROM field_notes n
 		JOIN installations i ON i.id = n.installation_id
 		JOIN mounts m ON m.id = i.mount_id AND m.removed_at IS NULL
@@ -74,7 +75,13 @@ type Watched = About & {
 	notedOn: string | null;
 	darkDays: number;
 };
-type Test = About & { fieldNoteId: number; readOn: string; data: unknown; battery: unknown };
+type Test = About & {
+	fieldNoteId: number;
+	readOn: string;
+	isStruck: number;
+	data: unknown;
+	battery: unknown;
+};
 interface Stated {
 	months: StatedDays[] | null;
 	/** Days a year of ten vehicles, where they were kept. */
@@ -169,25 +176,37 @@ function checkDays(watched: Watched, stated: Stated | undefined): CheckRow[] {
 	];
 }
 
-/** A capacity test against the ageing band at its age; of several on one day the last counts. */
+const isStruck = (test: Test): boolean => Number(test.isStruck) === 1;
+
+/** Of several tests on one day the last counts; what was struck out neither counts nor puts another right. */
+function findLeftOut(test: Test, all: readonly Test[]): CheckRow['leftOut'] {
+	const { installationId, readOn, fieldNoteId } = test;
+	if (isStruck(test)) return 'struck';
+	const isAgain = all.some(
+		(other) =>
+			other.installationId === installationId &&
+			other.readOn === readOn &&
+			other.fieldNoteId > fieldNoteId &&
+			!isStruck(other)
+	);
+	return isAgain ? 'noted-again' : '';
+}
+
+/** A capacity test against the ageing band at its age. */
 function checkCapacity(test: Test, all: readonly Test[], stated: Stated | undefined): CheckRow[] {
 	const battery = parsed<BatteryInput>(test.battery);
 	if (!stated?.life || !battery) return [];
-	const { fieldNoteId, readOn, fittedOn, installationId } = test;
+	const { fieldNoteId, readOn, fittedOn } = test;
 	const years = Math.max(daysBetween(fittedOn, readOn), 0) / DAYS_A_YEAR;
 	const { capacityAh, currentA, cutOffV, tempC } = capacityTestSchema.parse(parsed(test.data));
 	const isLeadAcid = heatLimitsOf(battery) !== null;
 	const foundAh = toReferenceTemperature({ years, capacityAh, currentA, cutOffV, tempC }, isLeadAcid);
 	const held = holdCapacity(foundAh / battery.capacityAh, years, stated.life);
 	if (!held) return [];
-	const isAgain = all.some(
-		(other) =>
-			other.installationId === installationId && other.readOn === readOn && other.fieldNoteId > fieldNoteId
-	);
 	return [
 		{
 			...{ kind: 'capacity', ...aboutOf(test), fieldNoteId, traceId: null, readOn, held, watched: null },
-			leftOut: isAgain ? 'noted-again' : ''
+			leftOut: findLeftOut(test, all)
 		}
 	];
 }

@@ -5,6 +5,7 @@ import { connection } from '../../db/connection';
 import { Assessment, type FieldNote, type Installation } from '../../db/models';
 import { today } from '../days';
 import { labelOf, scenarioOn } from '../field-readings';
+import { isUnstruck } from '../field-standing';
 import { afterOthers, workInSlices } from '../slices';
 import { writeChecks } from './check-rows';
 import { findPredictionNow } from './prediction-at';
@@ -43,22 +44,36 @@ export async function checkLabel({ id }: Installation, data: FieldNoteInput): Pr
 	return holdNote(await findPredictionNow(id, data.notedOn), data, id);
 }
 
-/** Whoever notes the same place on the same day once more puts the earlier reading right: notes cannot be changed. */
-const NOTED_AGAIN = `
+/**
+ * What was struck out does not count. Whoever notes the same place on the same day once more puts the earlier reading
+ * right, unless that was struck out itself.
+ */
+const SETTLE = `
 	UPDATE prediction_checks c JOIN field_notes n ON n.id = c.field_note_id
-	SET c.left_out = 'noted-again'
-	WHERE c.installation_id = :installationId AND c.kind = 'label' AND c.read_on = :notedOn
-		AND c.field_note_id < :noteId AND JSON_VALUE(n.data, '$.place') = :place
+	SET c.left_out = CASE
+		WHEN NOT ${isUnstruck('n')} THEN 'struck'
+		WHEN EXISTS (SELECT 1 FROM field_notes later
+			WHERE later.installation_id = n.installation_id AND later.kind = n.kind AND later.noted_on = n.noted_on
+				AND later.id > n.id AND JSON_VALUE(later.data, '$.place') = JSON_VALUE(n.data, '$.place')
+				AND ${isUnstruck('later')}) THEN 'noted-again'
+		WHEN JSON_EXTRACT(n.finding, '$.learning.fits') = 'false' THEN 'fits-nothing'
+		ELSE '' END
+	WHERE c.installation_id = :installationId AND c.kind = 'label'
 `;
+
+/** Says anew which labels of an installation count, inside the transaction that added or struck one. */
+export async function settleLabels(installationId: number, transaction: Transaction): Promise<void> {
+	const replacements = { installationId };
+	await connection().query(SETTLE, { replacements, type: QueryTypes.UPDATE, transaction });
+}
 
 /** Keeps what a label says of the prediction, inside the transaction that keeps its note. */
 export async function keepLabelCheck(
-	{ id: noteId, workshopId, installationId, notedOn, data, finding }: FieldNote,
+	{ id: noteId, workshopId, installationId, notedOn }: FieldNote,
 	mountId: number,
 	{ assessmentId, bookId, isEnteredLater, held }: LabelCheck,
 	transaction: Transaction
 ): Promise<void> {
-	const leftOut = finding?.learning?.fits === false ? 'fits-nothing' : '';
 	const about = {
 		workshopId,
 		mountId,
@@ -69,13 +84,8 @@ export async function keepLabelCheck(
 		bookId
 	};
 	await writeChecks(
-		[{ kind: 'label', ...about, readOn: notedOn, held, watched: null, isEnteredLater, leftOut }],
+		[{ kind: 'label', ...about, readOn: notedOn, held, watched: null, isEnteredLater, leftOut: '' }],
 		transaction
 	);
-	const place = data.kind === 'peak-label' ? data.place : '';
-	await connection().query(NOTED_AGAIN, {
-		replacements: { installationId, notedOn, noteId, place },
-		type: QueryTypes.UPDATE,
-		transaction
-	});
+	await settleLabels(installationId, transaction);
 }

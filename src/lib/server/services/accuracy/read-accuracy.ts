@@ -13,6 +13,7 @@ import {
 	type CheckSums,
 	type StepSums
 } from '../../presenters/accuracy';
+import { isUnstruck } from '../field-standing';
 import { CHECKS, UNHELD_TRACES, ZONE } from './check-scope';
 
 /** One row for each kind, book, zone and kind of position that occurs: a few hundred at most, whatever was read. */
@@ -52,7 +53,7 @@ const WAITING = `
 		JOIN installations i ON i.id = n.installation_id
 		JOIN mounts m ON m.id = i.mount_id AND m.removed_at IS NULL
 		LEFT JOIN prediction_checks c ON c.field_note_id = n.id
-	WHERE n.workshop_id = :workshopId AND n.kind = 'capacity-test' AND c.id IS NULL
+	WHERE n.workshop_id = :workshopId AND n.kind = 'capacity-test' AND c.id IS NULL AND ${isUnstruck('n')}
 `;
 
 /** At mounts that stand: for want of an assessment, an hour of beginning, a reading of the battery, or a day that can be run. */

@@ -7,6 +7,7 @@ import {
 	DayPlan,
 	Erasure,
 	FieldNote,
+	FieldNoteStrike,
 	Installation,
 	Mount,
 	OutgoingMail,
@@ -133,9 +134,11 @@ const eraseFromField: Step = async ({ ids, installationIds, scrub }, transaction
 		}),
 		transaction
 	);
+	const notes = await FieldNote.findAll({ where: { installationId: installationIds }, transaction });
+	await rewrite(notes, ({ data }) => ({ data: scrub.freeJson(data) }), transaction);
 	await rewrite(
-		await FieldNote.findAll({ where: { installationId: installationIds }, transaction }),
-		({ data }) => ({ data: scrub.freeJson(data) }),
+		await FieldNoteStrike.findAll({ where: { fieldNoteId: notes.map(({ id }) => id) }, transaction }),
+		({ reason }) => ({ reason: scrub.free(reason) }),
 		transaction
 	);
 };

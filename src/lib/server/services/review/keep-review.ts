@@ -2,6 +2,7 @@ import { QueryTypes, type Transaction } from 'sequelize';
 import { connection } from '../../db/connection';
 import { inTransaction } from '../../db/transaction';
 import { refreshChecks } from '../accuracy/keep-checks';
+import { isUnstruck } from '../field-standing';
 import {
 	readRow,
 	ROW_COLUMNS,
@@ -51,7 +52,7 @@ const OUTLOOKS = `
 const DARK_DAYS = `
 	SELECT installation_id AS installationId, CAST(noted_on AS CHAR) AS darkOn,
 		MAX(COALESCE(JSON_VALUE(finding, '$.cause.finding'), '') <> 'not-explained') AS isHeat
-	FROM field_notes WHERE installation_id IN (:ids) AND kind = 'cut-out'
+	FROM field_notes n WHERE installation_id IN (:ids) AND kind = 'cut-out' AND ${isUnstruck('n')}
 	GROUP BY installation_id, noted_on ORDER BY noted_on
 `;
 

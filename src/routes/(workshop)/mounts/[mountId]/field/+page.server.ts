@@ -1,5 +1,6 @@
 import { fieldNotesQuerySchema } from '$lib/schemas/field-notes';
 import { guard, orPageError } from '$lib/server/http/guard';
+import { mayDo } from '$lib/server/policies';
 import { presentTrend, presentNote } from '$lib/server/presenters/field-reports';
 import { listFieldNotes } from '$lib/server/services/field-notes';
 import { getJob } from '$lib/server/services/jobs';
@@ -28,6 +29,8 @@ export const load: PageServerLoad = async (event) => {
 		notes: notes.rows.map(presentNote),
 		trend: presentTrend(notes),
 		asked: { text: event.url.searchParams.get('capacity') ?? '', problem },
+		mayStrike: mayDo(person, 'mounts.write'),
+		isStruck: event.url.searchParams.has('struck'),
 		isAdded: event.url.searchParams.has('added')
 	};
 };
