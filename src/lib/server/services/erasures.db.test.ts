@@ -14,6 +14,7 @@ import {
 	Customer,
 	Erasure,
 	FieldNote,
+	FieldNoteStrike,
 	Installation,
 	Mount,
 	OutgoingMail,
@@ -218,6 +219,7 @@ describe('an erasure', () => {
 			() => Assessment.update({ inputsSha256: '0'.repeat(64) }, inJob),
 			() => Acknowledgement.update({ name: 'Another' }, { where: {} }),
 			() => FieldNote.update({ notedOn: '2026-02-11' }, { where: { workshopId } }),
+			() => FieldNoteStrike.update({ reason: 'Another reason.' }, { where: { workshopId } }),
 			() => AuditEntry.update({ detail: {} }, { where: { workshopId } })
 		];
 		for (const change of changes()) await expect(change()).rejects.toThrow(/immutable|append-only/);
@@ -229,6 +231,8 @@ describe('an erasure', () => {
 			await expect(verdict).rejects.toThrow('immutable');
 			const warned = Recommendation.update({ cautions: [] }, inJob);
 			await expect(warned).rejects.toThrow('immutable');
+			const struck = FieldNoteStrike.update({ createdBy: crew.manager.id }, { where: { workshopId } });
+			await expect(struck).rejects.toThrow('immutable');
 			const acknowledged = Acknowledgement.update({ contentSha256: '0'.repeat(64) }, { where: {} });
 			await expect(acknowledged).rejects.toThrow('immutable');
 		});

@@ -168,7 +168,7 @@ describe('a note that was struck out', () => {
 		async () => {
 			const { engineer, installationId, note, strike } = await makeMount();
 			await note({ ...LABEL, turnedC: 60, notTurnedC: 65 });
-			const slip = await note({ ...LABEL, turnedC: 50, notTurnedC: 55 });
+			const slip = await note({ ...LABEL, turnedC: 62, notTurnedC: 68 });
 			const leftOut = async () => (await readChecks(installationId)).map(({ left_out }) => left_out);
 			expect(await leftOut()).toEqual(['noted-again', '']);
 			await strike(slip);
@@ -187,7 +187,7 @@ describe('a note that was struck out', () => {
 		'is neither a capacity that was held against its band, nor a look at the battery, nor a day that was dark',
 		async () => {
 			const { engineer, workshopId, assessment, installationId, note, strike } = await makeMount();
-			const waiting = async () => (await readAccuracy(engineer)).waiting;
+			const waiting = async () => (await readAccuracy(engineer)).capacity?.waiting ?? 0;
 			const early = await note(test('2026-10-01', 45));
 			expect(await waiting()).toBe(1);
 			await strike(early);
@@ -266,7 +266,7 @@ describe('others read', () => {
 			const { installer, mountId, note, strike } = await makeMount();
 			const slip = await note(test('2026-03-02', 45));
 			const read = async () =>
-				inOneLine((await readPdf(await writeMountPaper(installer, mountId, 'warranty'))).text);
+				inOneLine((await readPdf(await writeMountPaper(installer, mountId, 'warranty-file'))).text);
 			expect(await read()).toContain('Where its capacity goes');
 			await strike(slip);
 			const text = await read();
