@@ -44,6 +44,7 @@ test(
 		await expect(page.getByText(/^By 2 tests it is down to 80/)).toBeVisible();
 		const slip = page.getByRole('listitem').filter({ hasText: '1 June 2026' });
 		await slip.getByRole('link', { name: /^Strike it out/ }).click();
+		await page.waitForURL(/\/strike$/);
 		await openForm(page, page.url());
 		await expect(page.getByText(/^It stays on record/)).toBeVisible();
 		await expectNoViolations(page);
