@@ -1,5 +1,6 @@
 import type { Ratio, ReviewFigures, ReviewInstallation, ReviewList } from '../schemas/review';
 import type { Verdict } from '../schemas/verdicts';
+import { formatShortDate } from './dates';
 import { formatNumber } from './numbers';
 import { sayVerdict } from './verdict';
 
@@ -70,6 +71,14 @@ export const LIST_TITLES: Record<ReviewList | 'all', string> = {
 /** "due 4 days ago". */
 export const sayOverdue = ({ overdueDays }: ReviewInstallation): string =>
 	overdueDays === 1 ? '1 day late' : `${overdueDays} days late`;
+
+/** Who went ahead, and why: of the recommendation under which it was fitted. */
+export const sayOverride = ({ override }: Pick<ReviewInstallation, 'override'>): string =>
+	override ? `${override.decidedBy}: ${override.reason}` : '';
+
+/** What was recommended after the fitting changes nothing of what it was fitted under. */
+export const sayLater = ({ id, on, recommendedBy }: NonNullable<ReviewInstallation['later']>): string =>
+	`Recommended again after the fitting: recommendation ${id}, ${formatShortDate(on)}, by ${recommendedBy}.`;
 
 export const SHEET_WORDS = {
 	acknowledged: 'acknowledged',

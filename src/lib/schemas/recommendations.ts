@@ -26,7 +26,12 @@ export const recommendationSchema = z.object({
 	/** As they read when it was issued; null for those from before they were kept. */
 	cautions: z.array(cautionLineSchema).nullable(),
 	recommendedBy: z.string(),
-	createdAt: z.iso.datetime()
+	createdAt: z.iso.datetime(),
+	replacedBy: z
+		.object({ id: z.number().int(), recommendedBy: z.string(), createdAt: z.iso.datetime() })
+		.nullable()
+		.meta({ description: 'The next recommendation of the same mount' }),
+	isFittedUnder: z.boolean().meta({ description: 'Whether the battery was fitted under this one' })
 });
 export type RecommendationView = z.infer<typeof recommendationSchema>;
 

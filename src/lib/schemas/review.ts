@@ -112,6 +112,10 @@ export const reviewInstallationSchema = z.object({
 	nextDueOn: z.iso.date().nullable(),
 	overdueDays: count,
 	override: z.object({ decidedBy: z.string(), reason: z.string() }).nullable(),
+	later: z
+		.object({ id: z.number().int(), on: z.iso.date(), recommendedBy: z.string() })
+		.nullable()
+		.meta({ description: 'The newest recommendation that was made after the one it was fitted under' }),
 	sheetState: z.enum(SHEET_STATES),
 	sheetSentOn: z.iso.date().nullable()
 });

@@ -12,6 +12,7 @@ import {
 import { formatDate } from '$lib/format/dates';
 import { formatKelvin } from '$lib/format/numbers';
 import { DEFERENCE } from '$lib/format/deference';
+import { sayReplaced } from '$lib/format/recommendations';
 import { sayVerdict } from '$lib/format/verdict';
 import type { MountOutcome } from '$lib/schemas/assessments';
 import type { ReportLine } from '$lib/schemas/reports';
@@ -65,7 +66,12 @@ function answer({ report, recommendation, customer }: RecommendationPaper, size:
 					{ text: report.sentence, fontSize: size * 1.3, margin: [0, 0, 0, mm(1)] },
 					{ text: `${report.mount} ${report.day}` },
 					{ text: `For ${who}: ${vehicle}, with ${battery}.` },
-					{ text: `Recommended by ${recommendation.recommendedBy}.` },
+					{
+						text: [
+							{ text: `Recommended by ${recommendation.recommendedBy}. ` },
+							bold(sayReplaced(recommendation))
+						]
+					},
 					...(preDrill
 						? [{ text: [bold('Before drilling: '), { text: sayCheck(preDrill, ' (page 2)') }] }]
 						: [])

@@ -4,7 +4,9 @@ import type { Recommendation } from '../db/models';
 
 export function presentRecommendation(
 	{ id, jobId, againstVerdict, decidedBy, reason, preDrill, cautions, createdAt }: Recommendation,
-	more: { jobNumber: number; assessment: AssessmentRow; recommendedBy: string }
+	more: Pick<RecommendationView, 'jobNumber' | 'recommendedBy' | 'replacedBy' | 'isFittedUnder'> & {
+		assessment: AssessmentRow;
+	}
 ): RecommendationView {
 	return {
 		...{ id, jobId, againstVerdict, decidedBy, reason },

@@ -16,6 +16,7 @@ import { listMountFiles, readFileContent } from './files';
 import { getFitting } from './fittings';
 import { getOutlookReport } from './outlook-reports';
 import { getPreDrillOf } from './pre-drill';
+import { findFittedUnder } from './recommendation-history';
 import { getRecommendationDocument } from './recommendations';
 import { listSheets } from './sheets';
 
@@ -72,12 +73,10 @@ async function caseOf(assessmentId: number): Promise<PreDrillCase> {
 /** What is kept of a fitted battery, from its recommendation to the last note. */
 async function readMountRecord(person: SignedInPerson, mountId: number): Promise<MountRecord> {
 	const { installation, assessmentId, ...fitting } = await getFitting(person, mountId);
-	if (!installation)
+	const kept = await Installation.findOne({ where: { mountId, workshopId: person.workshopId } });
+	if (!installation || !kept)
 		throw new AppError('conflict', 'This mount has not been fitted yet: say first what was.');
-	const recommendation = await Recommendation.findOne({
-		where: { assessmentId, workshopId: person.workshopId },
-		order: [['id', 'DESC']]
-	});
+	const recommendation = await findFittedUnder(kept);
 	if (!recommendation) throw new AppError('conflict', 'Nothing is agreed for this mount yet.');
 	return {
 		paper: await getRecommendationPaper(person, recommendation.id),

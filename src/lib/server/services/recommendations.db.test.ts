@@ -1,12 +1,15 @@
 import { describe, expect, it } from 'vitest';
 import { makeAssessableJob } from '../../../../tests/support/assessable-job';
+import { FITTED } from '../../../../tests/support/fitted';
 import { makeCrew, useTestDatabase } from '../../../../tests/support/services';
 import { connection } from '../db/connection';
 import { Job, Mount, Place, Recommendation } from '../db/models';
 import { assessJob } from './assessments';
+import { saveFitting } from './fittings';
 import {
 	getRecommendation,
 	getRecommendationDocument,
+	listRecommendations,
 	makeRecommendation,
 	newestRecommendation
 } from './recommendations';
@@ -86,6 +89,24 @@ describe('a recommendation', () => {
 			code: 'conflict'
 		});
 		expect(await newestRecommendation(crew.installer, jobId)).toBeNull();
+	});
+
+	it('stands beside an earlier one, which says so, and leaves the fitting where it was', async () => {
+		const { crew, jobId, hot, ofHot, ofCool } = await makeAssessedJob();
+		const first = await makeRecommendation(crew.installer, { assessmentId: ofHot.id, ...WHY });
+		expect(first).toMatchObject({ replacedBy: null, isFittedUnder: false });
+		await saveFitting(crew.installer, hot.id, FITTED);
+		await makeRecommendation(crew.installer, { assessmentId: ofCool.id });
+		expect((await getRecommendation(crew.installer, first.id)).replacedBy).toBeNull();
+		const again = { decidedBy: 'Odo Marsh', reason: 'The duct is in, and it stays where it is.' };
+		const later = await makeRecommendation(crew.manager, { assessmentId: ofHot.id, ...again });
+		const made = await listRecommendations(crew.installer, jobId);
+		expect(made.map(({ assessment }) => assessment.mountLetter)).toEqual(['A', 'B', 'A']);
+		expect(made[0]).toMatchObject({ id: later.id, ...again, replacedBy: null, isFittedUnder: false });
+		expect(made[2]).toMatchObject({
+			...{ id: first.id, ...WHY, isFittedUnder: true },
+			replacedBy: { id: later.id, recommendedBy: crew.manager.name, createdAt: later.createdAt }
+		});
 	});
 
 	it('cannot be changed or deleted', async () => {

@@ -17,6 +17,7 @@ import { recordBy } from './audit';
 import { listIssuedCautions } from './caution-texts';
 import { WITHOUT_TEXTS, newestByMount, updateJobOutcome } from './job-outcome';
 import { snapshotPreDrill } from './pre-drill';
+import { findAftermath } from './recommendation-history';
 import { findLogo, headOf } from './shop';
 import { refreshReview } from './review/keep-review';
 
@@ -30,7 +31,8 @@ async function show(recommendation: Recommendation): Promise<RecommendationView>
 	return presentRecommendation(recommendation, {
 		jobNumber: job.number,
 		assessment: row,
-		recommendedBy: author?.name ?? ''
+		recommendedBy: author?.name ?? '',
+		...(await findAftermath(recommendation, row.mountId))
 	});
 }
 
@@ -120,6 +122,17 @@ export async function newestRecommendation(
 	const where = { jobId, workshopId: person.workshopId };
 	const newest = await Recommendation.findOne({ where, order: [['id', 'DESC']] });
 	return newest ? show(newest) : null;
+}
+
+/** Every recommendation of a job, the newest first. */
+export async function listRecommendations(
+	person: SignedInPerson,
+	jobId: number
+): Promise<RecommendationView[]> {
+	allow(person, 'assessments.read');
+	const where = { jobId, workshopId: person.workshopId };
+	const made = await Recommendation.findAll({ where, order: [['id', 'DESC']] });
+	return Promise.all(made.map(show));
 }
 
 /** The job's other mounts as they stood at that moment: a reprint says what the first print said. */

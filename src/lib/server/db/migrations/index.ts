@@ -93,6 +93,7 @@ import { migration as m134 } from './134-coefficient-books-hands-in';
 import { migration as m150 } from './150-field-note-strikes';
 import { migration as m151 } from './151-field-note-strikes-no-update';
 import { migration as m152 } from './152-field-note-strikes-no-delete';
+import { migration as m140 } from './140-review-rows-fitted-under';
 import { migration as m160 } from './160-prediction-checks';
 import { migration as m161 } from './161-prediction-checks-traces';
 import { migration as m162 } from './162-outgoing-mails-handed-over';
@@ -195,6 +196,7 @@ export const migrations: Migration[] = [
 	m150,
 	m151,
 	m152,
+	m140,
 	m160,
 	m161,
 	m162

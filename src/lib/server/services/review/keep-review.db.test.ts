@@ -5,7 +5,8 @@ import { readReview } from '../../../../../tests/support/review';
 import { makeCrew, useTestDatabase } from '../../../../../tests/support/services';
 import { LIGHT_EFFORT, makeSentSheet, readToken } from '../../../../../tests/support/sheets';
 import { connection } from '../../db/connection';
-import { Assessment } from '../../db/models';
+import { reviewListQuerySchema } from '$lib/schemas/review';
+import { Assessment, Recommendation } from '../../db/models';
 import { addFieldNote } from '../field-notes';
 import { finishFollowUp, getFitting, saveFitting } from '../fittings';
 import { getJob, setJobClimate } from '../jobs';
@@ -17,6 +18,7 @@ import { acknowledgeSheet, openSheet } from '../sheet-readers';
 import { sendSheet, withdrawSheet } from '../sheets';
 import { completeReviews, rebuildReview } from './keep-review';
 import { createOwnZone, removeOwnZone, updateOwnZone } from './own-zones';
+import { listInstallations } from './review-list';
 
 useTestDatabase();
 
@@ -75,7 +77,17 @@ describe('the review of a workshop', () => {
 			expect(await keptRow()).toMatchObject({ sheet_state: 'missing', sheet_id: null });
 			const words = { decidedBy: 'Ilse Tarn', reason: 'A second look: the duct is in now.' };
 			const again = await makeRecommendation(installer, { assessmentId: assessment.id, ...words });
-			expect(await keptRow()).toMatchObject({ recommendation_id: again.id });
+			// It was fitted under the first, whatever is recommended afterwards.
+			expect(await keptRow()).toMatchObject({ recommendation_id: recommendationId });
+			const overrides = reviewListQuerySchema.parse({ list: 'overrides' });
+			const { rows } = await listInstallations(manager, overrides);
+			const { decidedBy, reason } = (await Recommendation.findByPk(recommendationId))!;
+			expect(rows).toMatchObject([
+				{
+					override: { decidedBy, reason },
+					later: { id: again.id, on: again.createdAt.slice(0, 10), recommendedBy: installer.name }
+				}
+			]);
 			const sent = await sendSheet(installer, {
 				recommendationId: again.id,
 				sendTo: 'ilse@travellers.example'

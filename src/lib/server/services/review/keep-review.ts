@@ -19,7 +19,7 @@ import {
 /** So many are read and written at a time. */
 const BATCH = 500;
 
-/** The newest recommendation of what was agreed, and the newest page of it that still stands. */
+/** The recommendation under which it was fitted, and the newest page of what was agreed that still stands. */
 const SOURCES = `
 	SELECT i.id AS installationId, i.workshop_id AS workshopId, i.mount_id AS mountId, i.job_id AS jobId,
 		i.assessment_id AS assessmentId, CAST(i.fitted_on AS CHAR) AS fittedOn, a.verdict, a.chemistry,
@@ -39,7 +39,8 @@ const SOURCES = `
 		JOIN jobs j ON j.id = i.job_id
 		LEFT JOIN places p ON p.id = j.place_id
 		LEFT JOIN recommendations r ON r.id = (
-			SELECT MAX(n.id) FROM recommendations n WHERE n.job_id = i.job_id AND n.assessment_id = i.assessment_id)
+			SELECT COALESCE(MAX(IF(n.created_at <= i.created_at, n.id, NULL)), MIN(n.id))
+			FROM recommendations n WHERE n.job_id = i.job_id AND n.assessment_id = i.assessment_id)
 	WHERE i.id IN (:ids)
 `;
 

@@ -27,6 +27,7 @@ const COLUMNS: Record<string, (row: ReviewInstallation) => string | number> = {
 	'Days overdue': ({ overdueDays }) => overdueDays,
 	'Went ahead by': ({ override }) => override?.decidedBy ?? '',
 	Reason: ({ override }) => override?.reason ?? '',
+	'Recommended again on': ({ later }) => later?.on ?? '',
 	Sheet: ({ sheetState }) => SHEET_WORDS[sheetState],
 	'Sheet sent on': ({ sheetSentOn }) => sheetSentOn ?? ''
 };

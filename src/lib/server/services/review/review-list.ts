@@ -81,7 +81,8 @@ const enter = ({ column }: Order): string => `FORCE INDEX (${ENTRIES[column]})`;
 /** Of whom each row tells is looked up for the rows of the page alone. */
 const page = (where: string, order: Order, isFirst: boolean): string => `
 	SELECT r.*, j.number AS jobNumber, m.letter, m.name AS mountName, c.name AS customer, v.make, v.model,
-		p.name AS place, a.chemistry, n.decided_by AS decidedBy, n.reason, CAST(DATE(s.created_at) AS CHAR) AS sheetSentOn
+		p.name AS place, a.chemistry, n.decided_by AS decidedBy, n.reason, CAST(DATE(s.created_at) AS CHAR) AS sheetSentOn,
+		l.id AS laterId, CAST(DATE(l.created_at) AS CHAR) AS laterOn, w.name AS laterBy
 	FROM (
 		SELECT * FROM review_rows ${isFirst ? '' : enter(order)} WHERE ${where}
 		ORDER BY ${order.column} ${order.direction}, installation_id ${order.direction} LIMIT :limit
@@ -95,6 +96,10 @@ const page = (where: string, order: Order, isFirst: boolean): string => `
 		LEFT JOIN places p ON p.id = r.place_id
 		LEFT JOIN recommendations n ON n.id = r.recommendation_id
 		LEFT JOIN sheets s ON s.id = r.sheet_id
+		LEFT JOIN recommendations l ON l.id = (
+			SELECT MAX(o.id) FROM recommendations o JOIN assessments b ON b.id = o.assessment_id
+			WHERE o.job_id = r.job_id AND b.mount_id = r.mount_id AND o.id > r.recommendation_id)
+		LEFT JOIN people w ON w.id = l.created_by
 	ORDER BY r.${order.column} ${order.direction}, r.installation_id ${order.direction}
 `;
 
@@ -126,6 +131,10 @@ function present(stored: StoredRow, kind: ReviewScope['kind'], now: string): Rev
 		reportedDays: row.darkDays,
 		overdueDays: nextDueOn === null ? 0 : Math.max(daysBetween(nextDueOn, now), 0),
 		override: row.againstVerdict ? { decidedBy: text('decidedBy'), reason: text('reason') } : null,
+		later:
+			stored.laterId === null
+				? null
+				: { id: Number(stored.laterId), on: text('laterOn'), recommendedBy: text('laterBy') },
 		sheetSentOn: sheetState === 'missing' || stored.sheetSentOn === null ? null : text('sheetSentOn')
 	};
 }

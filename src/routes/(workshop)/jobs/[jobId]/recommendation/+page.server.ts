@@ -1,6 +1,6 @@
 import { error } from '@sveltejs/kit';
 import type { SignedInPerson } from '$lib/schemas/people';
-import { recommendationInputSchema } from '$lib/schemas/recommendations';
+import { recommendationInputSchema, type RecommendationView } from '$lib/schemas/recommendations';
 import { loadForm, saveForm } from '$lib/server/http/forms';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { pageId } from '$lib/server/http/page-id';
@@ -8,7 +8,7 @@ import { presentReport } from '$lib/server/presenters/reports';
 import { getAssessment, listMountOutcomes } from '$lib/server/services/assessments';
 import { getJob } from '$lib/server/services/jobs';
 import { snapshotPreDrill } from '$lib/server/services/pre-drill';
-import { makeRecommendation, newestRecommendation } from '$lib/server/services/recommendations';
+import { listRecommendations, makeRecommendation } from '$lib/server/services/recommendations';
 import type { Actions, PageServerLoad } from './$types';
 
 /** The assessment that the address asks to recommend, in the words that matter here. */
@@ -26,8 +26,7 @@ async function loadChosen(person: SignedInPerson, jobId: number, asked: string |
 }
 
 /** The recommendation that stands, with what its maker says and whether its assessment still holds. */
-async function loadStanding(person: SignedInPerson, jobId: number) {
-	const recommendation = await newestRecommendation(person, jobId);
+async function loadStanding(person: SignedInPerson, recommendation: RecommendationView | undefined) {
 	if (!recommendation) return null;
 	const assessment = await getAssessment(person, recommendation.assessment.id);
 	return { ...recommendation, isCurrent: assessment.isCurrent, maker: presentReport(assessment).maker };
@@ -40,11 +39,12 @@ export const load: PageServerLoad = async (event) => {
 	const asked = event.url.searchParams.get('assessment');
 	const chosen = await orPageError(loadChosen(person, jobId, asked));
 	const job = await orPageError(getJob(person, jobId));
+	const made = await orPageError(listRecommendations(person, jobId));
 	return {
-		...{ jobId, outcomes, chosen },
+		...{ jobId, outcomes, chosen, made },
 		jobNumber: job.number,
 		chemistry: job.battery?.chemistry ?? '',
-		standing: await orPageError(loadStanding(person, jobId)),
+		standing: await orPageError(loadStanding(person, made[0])),
 		isMade: event.url.searchParams.has('made'),
 		form: await loadForm(recommendationInputSchema, chosen ? { assessmentId: chosen.id } : {})
 	};

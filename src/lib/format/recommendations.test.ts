@@ -1,0 +1,17 @@
+import { describe, expect, it } from 'vitest';
+import { sayReplaced } from './recommendations';
+
+const replacedBy = { id: 9, recommendedBy: 'Odo Marsh', createdAt: '2026-03-04T12:00:00.000Z' };
+
+describe('what is said of an earlier recommendation', () => {
+	it.each([
+		[{ replacedBy: null, isFittedUnder: true }, ''],
+		[{ replacedBy, isFittedUnder: false }, 'Replaced by recommendation 9 on 4 March 2026, by Odo Marsh.'],
+		[
+			{ replacedBy, isFittedUnder: true },
+			'The battery was fitted under this one; later came recommendation 9 on 4 March 2026, by Odo Marsh.'
+		]
+	])('%j: "%s"', (standing, words) => {
+		expect(sayReplaced(standing)).toBe(words);
+	});
+});
