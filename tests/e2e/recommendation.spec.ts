@@ -50,16 +50,56 @@ test('going ahead against the verdict takes a named person and a reason', async 
 	await page.goto(`/jobs/${jobId}/recommendation?assessment=${String(hot!.id)}`);
 	await expectNoViolations(page);
 	await page.getByLabel('Who decided').fill(WHO);
+	await expect(
+		page.getByText('in words that the customer understands: at least 10 characters.')
+	).toBeVisible();
 	await page.getByRole('button', { name: 'Recommend it against the verdict' }).click();
 	await expect(page.getByRole('link', { name: 'Say why it goes ahead although it cuts out.' })).toBeVisible();
+	await page.getByLabel('Reason').fill('duct');
+	await page.getByRole('button', { name: 'Recommend it against the verdict' }).click();
+	const tooShort = 'Reason must have at least 10 characters: “duct” has 4.';
+	await expect(page.getByRole('link', { name: tooShort })).toBeVisible();
 	await expect(page.getByLabel('Who decided')).toHaveValue(WHO);
 	await expectNoViolations(page);
 	await page.getByLabel('Reason').fill(WHY);
 	await page.getByRole('button', { name: 'Recommend it against the verdict' }).click();
 	await expect(page.getByText('Recommended and kept.')).toBeVisible();
 	await page.getByRole('link', { name: 'Print the recommendation' }).click();
-	await expect(page.getByText(`Decided by ${WHO}.`)).toBeVisible();
+	await expect(page.getByText(`Decided by ${WHO}, entered by`)).toBeVisible();
 	await expect(page.getByText(`Reason: ${WHY}`)).toBeVisible();
+});
+
+test('a later recommendation stands beside the one that the battery was fitted under', async ({ page }) => {
+	test.slow();
+	const { jobId, mountIds } = await makeAssessableJob(page, { mounts: 1 });
+	const [hot] = await assessAll(page, jobId);
+	const decision = { assessmentId: hot!.id, decidedBy: WHO, reason: WHY };
+	const { id: firstId } = await ask(page, 'POST', '/api/v1/recommendations', decision);
+	const again = `/jobs/${jobId}/recommendation?assessment=${String(hot!.id)}`;
+	await page.goto(again);
+	await expect(page.getByText('Mount A has a recommendation already')).toBeVisible();
+	await expect(page.getByText('The battery was fitted under')).toHaveCount(0);
+	await ask(page, 'PUT', `/api/v1/mounts/${mountIds[0]}/fitting`, {
+		...{ fittedOn: '2026-01-31', fittedBy: 'Ida Fenn', serialNumber: '', note: '' },
+		...{ differences: [], version: null }
+	});
+	await page.goto(again);
+	await expect(
+		page.getByText(`The battery was fitted under recommendation ${String(firstId)}.`)
+	).toBeVisible();
+	await expectNoViolations(page);
+	await page.getByLabel('Who decided').fill('Odo Marsh');
+	await page.getByLabel('Reason').fill('The duct is in now, and it stays.');
+	await page.getByRole('button', { name: 'Recommend it against the verdict' }).click();
+	await expect(page.getByText('The battery was fitted under an earlier one')).toBeVisible();
+	await expectNoViolations(page);
+	const before = page.getByRole('region', { name: 'Recommended before' });
+	await expect(before.getByText(/fitted under this one; later came recommendation \d+ on/)).toBeVisible();
+	await before.getByRole('link', { name: `Recommendation ${String(firstId)},` }).click();
+	await expect(page.getByText(/fitted under this one; later came recommendation \d+ on/)).toBeVisible();
+	await page.getByRole('link', { name: /the later one$/ }).click();
+	await expect(page.getByText('Decided by Odo Marsh, entered by')).toBeVisible();
+	await expect(page.getByText('later came')).toHaveCount(0);
 });
 
 test('a recommendation whose day changed since says so, where it is shown and where it would be sent', async ({

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { sayReplaced } from './recommendations';
+import { findEntrant, sayDecider, sayReplaced } from './recommendations';
 
 const replacedBy = { id: 9, recommendedBy: 'Odo Marsh', createdAt: '2026-03-04T12:00:00.000Z' };
 
@@ -13,5 +13,22 @@ describe('what is said of an earlier recommendation', () => {
 		]
 	])('%j: "%s"', (standing, words) => {
 		expect(sayReplaced(standing)).toBe(words);
+	});
+});
+
+describe('who entered a decision', () => {
+	it.each([
+		['Ilse Tarn', 'Ilse Tarn', null],
+		[' ilse  TARN', 'Ilse Tarn', null],
+		['Ilse Tarn', 'Odo Marsh', 'Odo Marsh']
+	])('decided by "%s", recommended by "%s": %s', (decidedBy, recommendedBy, entrant) => {
+		expect(findEntrant(decidedBy, recommendedBy)).toBe(entrant);
+	});
+
+	it('is said where it is somebody else', () => {
+		expect(sayDecider({ decidedBy: 'Ilse Tarn', recommendedBy: 'Odo Marsh' })).toBe(
+			'Ilse Tarn, entered by Odo Marsh'
+		);
+		expect(sayDecider({ decidedBy: 'Odo Marsh', recommendedBy: 'Odo Marsh' })).toBe('Odo Marsh');
 	});
 });

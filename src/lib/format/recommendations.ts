@@ -13,3 +13,18 @@ export function sayReplaced({
 		? `The battery was fitted under this one; later came ${later}.`
 		: `Replaced by ${later}.`;
 }
+
+const plainName = (name: string): string => name.normalize('NFC').trim().replace(/\s+/g, ' ').toLowerCase();
+
+/** Who entered a decision, where that is somebody else than the one who took it. */
+export const findEntrant = (decidedBy: string, recommendedBy: string): string | null =>
+	plainName(decidedBy) === plainName(recommendedBy) ? null : recommendedBy;
+
+/** Who decided: "Ilse Tarn, entered by Odo Marsh". */
+export function sayDecider({
+	decidedBy,
+	recommendedBy
+}: Pick<RecommendationView, 'decidedBy' | 'recommendedBy'>): string {
+	const entrant = findEntrant(decidedBy ?? '', recommendedBy);
+	return `${decidedBy}${entrant ? `, entered by ${entrant}` : ''}`;
+}

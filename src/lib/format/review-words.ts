@@ -74,7 +74,9 @@ export const sayOverdue = ({ overdueDays }: ReviewInstallation): string =>
 
 /** Who went ahead, and why: of the recommendation under which it was fitted. */
 export const sayOverride = ({ override }: Pick<ReviewInstallation, 'override'>): string =>
-	override ? `${override.decidedBy}: ${override.reason}` : '';
+	override
+		? `${override.decidedBy}: ${override.reason}${override.enteredBy ? ` (entered by ${override.enteredBy})` : ''}`
+		: '';
 
 /** What was recommended after the fitting changes nothing of what it was fitted under. */
 export const sayLater = ({ id, on, recommendedBy }: NonNullable<ReviewInstallation['later']>): string =>

@@ -5,6 +5,9 @@ import { cautionLineSchema } from './caution-texts';
 import { preDrillSnapshotSchema } from './pre-drill';
 import type { LogoView, WorkshopHead } from './shop';
 
+/** Less is no name and no reason: both are kept for good, and the customer reads them. */
+export const FEWEST_CHARACTERS = { decidedBy: 3, reason: 10 } as const;
+
 /** Going ahead against "cuts out" takes a named person and a written reason; otherwise neither is asked for. */
 export const recommendationInputSchema = z.object({
 	assessmentId: idSchema,

@@ -111,7 +111,13 @@ export const reviewInstallationSchema = z.object({
 	reportedDays: count,
 	nextDueOn: z.iso.date().nullable(),
 	overdueDays: count,
-	override: z.object({ decidedBy: z.string(), reason: z.string() }).nullable(),
+	override: z
+		.object({
+			decidedBy: z.string(),
+			reason: z.string(),
+			enteredBy: z.string().nullable().meta({ description: 'Where that is somebody else' })
+		})
+		.nullable(),
 	later: z
 		.object({ id: z.number().int(), on: z.iso.date(), recommendedBy: z.string() })
 		.nullable()

@@ -4,6 +4,7 @@ import type { PaperBlock, PaperPhoto } from '$lib/schemas/papers';
 import type { PreDrillView } from '$lib/schemas/pre-drill';
 import type { AcknowledgementView } from '$lib/schemas/sheets';
 import { formatDate, formatDateTime } from '$lib/format/dates';
+import { sayDecider } from '$lib/format/recommendations';
 import { sayVerdict } from '$lib/format/verdict';
 import { PRE_DRILL_LABELS } from '$lib/schemas/pre-drill';
 import { drawRibbon } from './ribbon-picture';
@@ -80,7 +81,7 @@ export const tellFollowUps = ({ fitting }: MountRecord): PaperBlock => ({
 
 export const tellAgreement = ({ paper, acknowledgement }: MountRecord): PaperBlock => {
 	const { recommendation } = paper;
-	const { id, createdAt, recommendedBy, againstVerdict, decidedBy, reason, assessment } = recommendation;
+	const { id, createdAt, recommendedBy, againstVerdict, reason, assessment } = recommendation;
 	const verdict = sayVerdict(assessment.verdict, assessment.chemistry);
 	return {
 		...{ kind: 'lines', title: 'What was recommended' },
@@ -91,7 +92,7 @@ export const tellAgreement = ({ paper, acknowledgement }: MountRecord): PaperBlo
 				? [
 						{
 							label: `Went ahead although it ${verdict}`,
-							value: `decided by ${decidedBy}. Reason: ${reason}`
+							value: `decided by ${sayDecider(recommendation)}. Reason: ${reason}`
 						}
 					]
 				: []),

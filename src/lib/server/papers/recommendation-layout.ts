@@ -12,7 +12,7 @@ import {
 import { formatDate } from '$lib/format/dates';
 import { formatKelvin } from '$lib/format/numbers';
 import { DEFERENCE } from '$lib/format/deference';
-import { sayReplaced } from '$lib/format/recommendations';
+import { sayDecider, sayReplaced } from '$lib/format/recommendations';
 import { sayVerdict } from '$lib/format/verdict';
 import type { MountOutcome } from '$lib/schemas/assessments';
 import type { ReportLine } from '$lib/schemas/reports';
@@ -84,7 +84,7 @@ function answer({ report, recommendation, customer }: RecommendationPaper, size:
 }
 
 function warnings({ report, recommendation }: RecommendationPaper): Content[] {
-	const { againstVerdict, decidedBy, reason, assessment } = recommendation;
+	const { againstVerdict, reason, assessment } = recommendation;
 	const verdict = sayVerdict(assessment.verdict, assessment.chemistry);
 	return [
 		...(report.maker
@@ -96,7 +96,7 @@ function warnings({ report, recommendation }: RecommendationPaper): Content[] {
 						{
 							text: [
 								bold(`Goes ahead although it ${verdict}. `),
-								{ text: `Decided by ${decidedBy}. Reason: ${reason}` }
+								{ text: `Decided by ${sayDecider(recommendation)}. Reason: ${reason}` }
 							]
 						}
 					])

@@ -47,14 +47,22 @@ describe('a recommendation', () => {
 		const { crew, jobId, ofHot } = await makeAssessedJob();
 		await expect(makeRecommendation(crew.installer, { assessmentId: ofHot.id })).rejects.toMatchObject({
 			code: 'invalid_input',
-			problems: [{ path: 'decidedBy' }, { path: 'reason' }]
+			problems: [
+				{ path: 'decidedBy', message: 'Say who decided to go ahead although it cuts out.' },
+				{ path: 'reason', message: 'Say why it goes ahead although it cuts out.' }
+			]
 		});
 		await expect(
 			makeRecommendation(crew.installer, { assessmentId: ofHot.id, ...WHY, reason: '   ' })
 		).rejects.toMatchObject({ problems: [{ path: 'reason' }] });
 		await expect(
 			makeRecommendation(crew.installer, { assessmentId: ofHot.id, decidedBy: 'x', reason: 'ok' })
-		).rejects.toMatchObject({ problems: [{ path: 'decidedBy' }, { path: 'reason' }] });
+		).rejects.toMatchObject({
+			problems: [
+				{ path: 'decidedBy', message: 'Who decided must have at least 3 characters: “x” has 1.' },
+				{ path: 'reason', message: 'Reason must have at least 10 characters: “ok” has 2.' }
+			]
+		});
 		expect(await Recommendation.count({ where: { jobId } })).toBe(0);
 		const made = await makeRecommendation(crew.installer, { assessmentId: ofHot.id, ...WHY });
 		expect(made).toMatchObject({ againstVerdict: true, ...WHY });

@@ -2,10 +2,11 @@ import { Op } from 'sequelize';
 import { sayVerdict } from '$lib/format/verdict';
 import type { AssessmentView, MountOutcome } from '$lib/schemas/assessments';
 import type { SignedInPerson } from '$lib/schemas/people';
-import type {
-	RecommendationDocument,
-	RecommendationInput,
-	RecommendationView
+import {
+	FEWEST_CHARACTERS,
+	type RecommendationDocument,
+	type RecommendationInput,
+	type RecommendationView
 } from '$lib/schemas/recommendations';
 import { Assessment, Customer, Job, Mount, Person, Recommendation, Workshop } from '../db/models';
 import { inTransaction } from '../db/transaction';
@@ -37,22 +38,29 @@ async function show(recommendation: Recommendation): Promise<RecommendationView>
 }
 
 const OVERRIDE_WORDS = {
-	decidedBy: (verdict: string) => `Say who decided to go ahead although it ${verdict}.`,
-	reason: (verdict: string) => `Say why it goes ahead although it ${verdict}.`
+	decidedBy: {
+		label: 'Who decided',
+		missing: (verdict: string) => `Say who decided to go ahead although it ${verdict}.`
+	},
+	reason: { label: 'Reason', missing: (verdict: string) => `Say why it goes ahead although it ${verdict}.` }
 } as const;
-/** Less is no name and no reason: both are kept for good, and the customer reads them. */
-const FEWEST_CHARACTERS = { decidedBy: 3, reason: 10 } as const;
+
+/** What is wrong with one of the two answers, or nothing. */
+function refuseWords(path: keyof typeof OVERRIDE_WORDS, given: string, verdict: string): FieldProblem[] {
+	const [fewest, { label, missing }] = [FEWEST_CHARACTERS[path], OVERRIDE_WORDS[path]];
+	if (given.length >= fewest) return [];
+	const tooShort = `${label} must have at least ${fewest} characters: “${given}” has ${given.length}.`;
+	return [{ path, message: given === '' ? missing(verdict) : tooShort, limit: `at least ${fewest}` }];
+}
 
 /** Against "cuts out", the two answers that it takes; for any other verdict, nobody decides against anything. */
 function readOverride({ verdict, chemistry }: AssessmentView, input: RecommendationInput) {
 	if (verdict !== 'cuts-out') return { againstVerdict: false, decidedBy: null, reason: null };
 	const decidedBy = input.decidedBy?.trim() ?? '';
 	const reason = input.reason?.trim() ?? '';
-	const given = { decidedBy, reason };
-	const missing: FieldProblem[] = (['decidedBy', 'reason'] as const)
-		.filter((path) => given[path].length < FEWEST_CHARACTERS[path])
-		.map((path) => ({ path, message: OVERRIDE_WORDS[path](sayVerdict(verdict, chemistry)) }));
-	if (missing.length > 0) throw new AppError('invalid_input', missing[0]!.message, missing);
+	const words = sayVerdict(verdict, chemistry);
+	const problems = [...refuseWords('decidedBy', decidedBy, words), ...refuseWords('reason', reason, words)];
+	if (problems.length > 0) throw new AppError('invalid_input', problems[0]!.message, problems);
 	return { againstVerdict: true, decidedBy, reason };
 }
 

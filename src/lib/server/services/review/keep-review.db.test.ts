@@ -18,6 +18,7 @@ import { acknowledgeSheet, openSheet } from '../sheet-readers';
 import { sendSheet, withdrawSheet } from '../sheets';
 import { completeReviews, rebuildReview } from './keep-review';
 import { createOwnZone, removeOwnZone, updateOwnZone } from './own-zones';
+import { writeReviewCsv } from './review-csv';
 import { listInstallations } from './review-list';
 
 useTestDatabase();
@@ -84,7 +85,7 @@ describe('the review of a workshop', () => {
 			const { decidedBy, reason } = (await Recommendation.findByPk(recommendationId))!;
 			expect(rows).toMatchObject([
 				{
-					override: { decidedBy, reason },
+					override: { decidedBy, reason, enteredBy: installer.name },
 					later: { id: again.id, on: again.createdAt.slice(0, 10), recommendedBy: installer.name }
 				}
 			]);
@@ -97,6 +98,12 @@ describe('the review of a workshop', () => {
 			const { contentSha256 } = await openSheet(token);
 			await acknowledgeSheet(token, { name: 'Ilse Tarn', understood: true, contentSha256 });
 			expect(await keptRow()).toMatchObject({ sheet_state: 'acknowledged' });
+
+			const pieces: string[] = [];
+			for await (const piece of writeReviewCsv(manager, overrides)) pieces.push(piece);
+			const csv = pieces.join('').split('\r\n');
+			expect(csv[0]).toContain('Went ahead by,Entered by,Reason,Recommended again on');
+			expect(csv[1]).toContain(`${decidedBy},${installer.name},`);
 
 			const place = await createPlace(installer, { ...PLACE, name: `Elsewhere ${jobId}`, climateZone: 'Aw' });
 			const job = await getJob(installer, jobId);

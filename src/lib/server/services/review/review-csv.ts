@@ -26,6 +26,7 @@ const COLUMNS: Record<string, (row: ReviewInstallation) => string | number> = {
 	'Next look due on': ({ nextDueOn }) => nextDueOn ?? '',
 	'Days overdue': ({ overdueDays }) => overdueDays,
 	'Went ahead by': ({ override }) => override?.decidedBy ?? '',
+	'Entered by': ({ override }) => override?.enteredBy ?? '',
 	Reason: ({ override }) => override?.reason ?? '',
 	'Recommended again on': ({ later }) => later?.on ?? '',
 	Sheet: ({ sheetState }) => SHEET_WORDS[sheetState],

@@ -10,6 +10,7 @@ import {
 	type ReviewSort
 } from '$lib/schemas/review';
 import type { SignedInPerson } from '$lib/schemas/people';
+import { findEntrant } from '$lib/format/recommendations';
 import { connection } from '../../db/connection';
 import { allow } from '../../policies';
 import { readCursor, writeCursor } from '../cursors';
@@ -81,7 +82,7 @@ const enter = ({ column }: Order): string => `FORCE INDEX (${ENTRIES[column]})`;
 /** Of whom each row tells is looked up for the rows of the page alone. */
 const page = (where: string, order: Order, isFirst: boolean): string => `
 	SELECT r.*, j.number AS jobNumber, m.letter, m.name AS mountName, c.name AS customer, v.make, v.model,
-		p.name AS place, a.chemistry, n.decided_by AS decidedBy, n.reason, CAST(DATE(s.created_at) AS CHAR) AS sheetSentOn,
+		p.name AS place, a.chemistry, n.decided_by AS decidedBy, n.reason, e.name AS enteredBy, CAST(DATE(s.created_at) AS CHAR) AS sheetSentOn,
 		l.id AS laterId, CAST(DATE(l.created_at) AS CHAR) AS laterOn, w.name AS laterBy
 	FROM (
 		SELECT * FROM review_rows ${isFirst ? '' : enter(order)} WHERE ${where}
@@ -95,6 +96,7 @@ const page = (where: string, order: Order, isFirst: boolean): string => `
 		JOIN vehicles v ON v.id = j.vehicle_id
 		LEFT JOIN places p ON p.id = r.place_id
 		LEFT JOIN recommendations n ON n.id = r.recommendation_id
+		LEFT JOIN people e ON e.id = n.created_by
 		LEFT JOIN sheets s ON s.id = r.sheet_id
 		LEFT JOIN recommendations l ON l.id = (
 			SELECT MAX(o.id) FROM recommendations o JOIN assessments b ON b.id = o.assessment_id
@@ -130,7 +132,12 @@ function present(stored: StoredRow, kind: ReviewScope['kind'], now: string): Rev
 		predictedDays: predictedOf(row, now),
 		reportedDays: row.darkDays,
 		overdueDays: nextDueOn === null ? 0 : Math.max(daysBetween(nextDueOn, now), 0),
-		override: row.againstVerdict ? { decidedBy: text('decidedBy'), reason: text('reason') } : null,
+		override: row.againstVerdict
+			? {
+					...{ decidedBy: text('decidedBy'), reason: text('reason') },
+					enteredBy: findEntrant(text('decidedBy'), text('enteredBy'))
+				}
+			: null,
 		later:
 			stored.laterId === null
 				? null
