@@ -1,7 +1,7 @@
 import { expect, test, type Browser, type Page } from '@playwright/test';
 import { ask, assessAll, makeAssessableJob } from './assessable-job';
 import { makeSendableJob, newAddress, openLetter, readLink, sendSheet, type SendableJob } from './sent-sheet';
-import { expectNoViolations, signInAs, signInAsNeighbour, ONCE } from './support';
+import { expectNoViolations, openForm, signInAs, signInAsNeighbour, ONCE } from './support';
 
 const READER = 'Ilse Tarn';
 let job: SendableJob;
@@ -212,6 +212,26 @@ test('sending again stops the link before', ONCE, async ({ page, request }) => {
 	const second = await sendSheet(page, job);
 	expect((await request.get(first.link)).status()).toBe(410);
 	expect((await request.get(second.link)).status()).toBe(200);
+});
+
+test('a second tab does not make a link dead that it did not know of, unless it is told to', async ({
+	page,
+	request
+}) => {
+	const first = await sendSheet(page, job);
+	await openForm(page, `/jobs/${job.jobId}/sheets`);
+	const meanwhile = await sendSheet(await page.context().newPage(), job);
+	expect((await request.get(first.link)).status()).toBe(410);
+	await page.getByLabel('Send to').fill(first.sendTo);
+	await page.getByRole('button', { name: 'Send a new link' }).click();
+	const question = page.getByRole('listitem').filter({ hasText: `sent this page to ${meanwhile.sendTo} on` });
+	await expect(question).toContainText('Send a new link all the same?');
+	await expect(page.getByLabel('Send to')).toHaveValue(first.sendTo);
+	expect((await request.get(meanwhile.link)).status()).toBe(200);
+	await expectNoViolations(page);
+	await page.getByRole('button', { name: 'Send a new link all the same' }).click();
+	await expect(sent(page, first.sendTo)).toHaveCount(2);
+	expect((await request.get(meanwhile.link)).status()).toBe(410);
 });
 
 test('a link that leads nowhere says so', ONCE, async ({ page }) => {

@@ -2,7 +2,7 @@ import { z } from 'zod';
 import type { DayLimits } from '../format/heat-limits';
 import type { AssessmentResult } from './assessments';
 import type { PositionKind } from './survey';
-import { email, idSchema, words } from './fields';
+import { email, idSchema, versionSchema, words } from './fields';
 import type { FieldLesson } from './my';
 import type { Question } from './questions';
 import { VERDICTS, type Verdict } from './verdicts';
@@ -64,6 +64,10 @@ export interface SheetContent {
 
 export const sendSheetSchema = z.object({ recommendationId: idSchema, sendTo: email('Send to') });
 export type SendSheet = z.infer<typeof sendSheetSchema>;
+
+/** The form of the page knows the newest sheet that it was opened beside: its number, or 0 for none. */
+export const sendSheetFormSchema = sendSheetSchema.extend({ version: versionSchema });
+export type SendSheetForm = z.infer<typeof sendSheetFormSchema>;
 
 export const acknowledgeSchema = z.object({
 	name: words('Your name', 120),

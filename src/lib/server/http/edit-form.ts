@@ -17,9 +17,8 @@ export async function saveEdited<S extends z.ZodObject, Prepared = void>(
 	}
 ) {
 	const { newest, ...form } = steps;
-	const { action, schema } = form;
 	const answer = await saveForm(event, form);
 	if (!('status' in answer) || answer.status !== 409) return answer;
-	const now = toFormValues(schema, await newest(guard(event, action)));
+	const now = toFormValues(form.schema, await newest(guard(event, form.action)));
 	return fail(409, { ...answer.data, newest: now });
 }

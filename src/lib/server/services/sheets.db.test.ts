@@ -69,6 +69,25 @@ describe('sending a sheet', () => {
 		expect(sheets.filter(({ withdrawnAt }) => withdrawnAt === null)).toHaveLength(1);
 	});
 
+	it('is refused beside one that its sender did not know of, and done once they do', async () => {
+		const { crew, jobId, recommendationId, sheet, token } = await makeSentSheet();
+		const input = { recommendationId, sendTo: SEND_TO };
+		await expect(sendSheet(crew.manager, { ...input, newestId: 0 })).rejects.toMatchObject({
+			code: 'changed_meanwhile',
+			message: expect.stringMatching(
+				new RegExp(`^${crew.installer.name} sent this page to ${sheet.sentTo} on .*all the same\\?`)
+			)
+		});
+		expect(await openSheet(token)).toMatchObject({ newerSentAt: null });
+		await sendSheet(crew.manager, { ...input, newestId: sheet.id });
+		await expect(openSheet(token)).rejects.toMatchObject({ status: 410 });
+		const [newest] = await listSheets(crew.installer, jobId);
+		await withdrawSheet(crew.installer, newest!.id);
+		// What was withdrawn meanwhile is dead already.
+		await sendSheet(crew.manager, { ...input, newestId: sheet.id });
+		expect(await listSheets(crew.installer, jobId)).toHaveLength(3);
+	});
+
 	it('leaves an acknowledged sheet open beside the new one', async () => {
 		const { crew, recommendationId, token } = await makeSentSheet();
 		const { contentSha256 } = await openSheet(token);

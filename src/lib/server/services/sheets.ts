@@ -1,5 +1,6 @@
 import type { Transaction } from 'sequelize';
 import { CAUTION_TEXT_VERSION } from '$lib/format/cautions';
+import { saySent } from '$lib/format/sheets';
 import type { SignedInPerson } from '$lib/schemas/people';
 import type { SendSheet, SheetStatus } from '$lib/schemas/sheets';
 import { Acknowledgement, Job, OutgoingMail, Person, Sheet } from '../db/models';
@@ -72,13 +73,22 @@ async function findUnanswered(jobId: number, transaction: Transaction): Promise<
 	return open.filter((sheet) => !sheet.acknowledgement);
 }
 
+/** A page that was sent after somebody opened the form is dead as soon as theirs goes out: they decide, knowing of it. */
+async function refuseUnknown(person: SignedInPerson, jobId: number, newestId: number): Promise<void> {
+	const [newest] = await listSheets(person, jobId);
+	if (!newest || newest.id === newestId || newest.withdrawnAt !== null) return;
+	const stops = newest.acknowledgedAt ? '' : ' The one that is out then stops working.';
+	throw new AppError('changed_meanwhile', `${saySent(newest)} Send a new link all the same?${stops}`);
+}
+
 /**
  * Writes the customer's page from a recommendation and posts its link. The link is in the letter alone: to send it
- * again makes a new one, and the one before it stops working unless it was acknowledged.
+ * again makes a new one, and the one before it stops working unless it was acknowledged. With the newest sheet that
+ * somebody knew of, a later one is not made dead unseen.
  */
 export async function sendSheet(
 	person: SignedInPerson,
-	{ recommendationId, sendTo, jobId: askedJobId }: SendSheet & { jobId?: number }
+	{ recommendationId, sendTo, jobId: askedJobId, newestId }: SendSheet & { jobId?: number; newestId?: number }
 ): Promise<{ sheet: SheetStatus }> {
 	allow(person, 'sheets.write');
 	// What takes seconds is worked out first: nobody is kept waiting by a lock meanwhile.
@@ -87,6 +97,7 @@ export async function sendSheet(
 		const { jobId, ...source } = await readSheetSource(person, recommendationId);
 		if (askedJobId !== undefined && askedJobId !== jobId) throw notFound('recommendation');
 		await lockJob(person.workshopId, jobId, transaction);
+		if (newestId !== undefined) await refuseUnknown(person, jobId, newestId);
 		await withdrawAll(person, await findUnanswered(jobId, transaction), 'sent again', transaction);
 		const content = writeSheetContent(source);
 		const contentSha256 = sha256(canonicalJson(content));

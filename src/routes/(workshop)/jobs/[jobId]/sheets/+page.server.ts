@@ -1,9 +1,10 @@
 import { error, fail, redirect, type RequestEvent } from '@sveltejs/kit';
 import { idSchema } from '$lib/schemas/fields';
 import type { SignedInPerson } from '$lib/schemas/people';
-import { sendSheetSchema } from '$lib/schemas/sheets';
+import { sendSheetFormSchema } from '$lib/schemas/sheets';
 import { AppError } from '$lib/server/errors';
-import { loadForm, readPageForm, saveForm } from '$lib/server/http/forms';
+import { saveEdited } from '$lib/server/http/edit-form';
+import { loadForm, readPageForm } from '$lib/server/http/forms';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { getAssessment } from '$lib/server/services/assessments';
 import { getJob } from '$lib/server/services/jobs';
@@ -15,6 +16,9 @@ import type { Actions, PageServerLoad } from './$types';
 function readId(text: unknown, what: string): number {
 	return idSchema.safeParse(text).data ?? error(404, { message: `There is no such ${what} here.` });
 }
+
+/** What the form was opened beside; sheets come the newest first. */
+const newestIdOf = (sheets: readonly { id: number }[]): number => sheets[0]?.id ?? 0;
 
 export const load: PageServerLoad = async (event) => {
 	const person = guard(event, 'sheets.write');
@@ -31,7 +35,8 @@ export const load: PageServerLoad = async (event) => {
 		...{ job, recommendation, sheets },
 		isOutOfDate: assessment?.isCurrent === false,
 		toWithdraw: sheets.find(({ id, withdrawnAt }) => id === asked && withdrawnAt === null) ?? null,
-		form: await loadForm(sendSheetSchema, {
+		form: await loadForm(sendSheetFormSchema, {
+			version: newestIdOf(sheets),
 			sendTo: job.customer.email,
 			...(recommendation ? { recommendationId: recommendation.id } : {})
 		})
@@ -56,16 +61,19 @@ async function doWithSheet(
 
 export const actions: Actions = {
 	send: (event) =>
-		saveForm(event, {
+		saveEdited(event, {
 			action: 'sheets.write',
-			schema: sendSheetSchema,
+			schema: sendSheetFormSchema,
 			// What the page is written from may take seconds to work out.
 			prepare: (person, { recommendationId }) => readSheetSource(person, recommendationId),
-			save: async (person, data) => {
+			save: async (person, { version, ...data }) => {
 				const jobId = readId(event.params.jobId, 'job');
-				await sendSheet(person, { ...data, jobId });
+				await sendSheet(person, { ...data, jobId, newestId: version });
 				return `/jobs/${jobId}/sheets`;
-			}
+			},
+			newest: async (person) => ({
+				version: newestIdOf(await listSheets(person, readId(event.params.jobId, 'job')))
+			})
 		}),
 	withdraw: (event) => doWithSheet(event, withdrawSheet),
 	retry: (event) => doWithSheet(event, retrySheetLetter)
