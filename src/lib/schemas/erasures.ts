@@ -1,6 +1,9 @@
 import { z } from 'zod';
 import { idSchema, optionalWords, versionSchema } from './fields';
 
+/** Stands where something of a person stood. */
+export const ERASED = '(erased)';
+
 export const ERASURE_STATES = ['asked', 'granted', 'refused'] as const;
 export type ErasureState = (typeof ERASURE_STATES)[number];
 

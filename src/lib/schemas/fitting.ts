@@ -49,9 +49,22 @@ export const followUpSchema = z.object({
 	doneOn: z.iso.date().nullable(),
 	doneBy: z.string().nullable(),
 	isOverdue: z.boolean(),
+	isEarly: z.boolean().meta({ description: 'Not done, and due in more than a month' }),
 	version: versionSchema
 });
 export type FollowUpView = z.infer<typeof followUpSchema>;
+
+/** What a job's next step asks of a fitted mount. */
+export interface FittedMount {
+	mountId: number;
+	letter: string;
+	/** The first date at which nobody has looked yet; null when all looks are done. */
+	nextDueOn: string | null;
+	isOverdue: boolean;
+}
+
+/** To whom reminders of the dates go: nobody where no address is known, or since they were stopped or erased. */
+export type Reminded = 'customer' | 'workshop' | 'stopped' | 'erased' | 'nobody';
 
 /** Whether somebody has looked. */
 export const followUpChangeSchema = z.object({

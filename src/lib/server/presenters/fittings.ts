@@ -5,6 +5,12 @@ import { describeAssumed, SURVEY_FIELDS } from '$lib/thermal/survey';
 import type { Assessment, FollowUp, Installation, Mount } from '../db/models';
 import { sayProposal } from './outlook/cable';
 
+/** Today, and the last day of which a look today would not be early. */
+interface Days {
+	now: string;
+	soon: string;
+}
+
 const SHIELD = SURVEY_FIELDS.shieldKind;
 
 /** In the words of the survey; where nobody said, as it was taken to be. */
@@ -27,12 +33,13 @@ export function listAgreed({ inputs }: Assessment): AgreedItem[] {
 
 const presentFollowUp = (
 	{ id, afterMonths, dueOn, doneOn, doneBy, version }: FollowUp,
-	now: string
+	{ now, soon }: Days
 ): FollowUpView => ({
 	...{ id, afterMonths, dueOn, version },
 	doneOn: doneOn ?? null,
 	doneBy: doneBy ?? null,
-	isOverdue: (doneOn ?? null) === null && dueOn < now
+	isOverdue: (doneOn ?? null) === null && dueOn < now,
+	isEarly: (doneOn ?? null) === null && dueOn > soon
 });
 
 export function presentFitting(
@@ -40,7 +47,7 @@ export function presentFitting(
 	agreed: Assessment,
 	installation: Installation | null,
 	followUps: readonly FollowUp[],
-	now: string
+	days: Days
 ): FittingView {
 	return {
 		...{ mountId, jobId, assessmentId: agreed.id },
@@ -54,6 +61,6 @@ export function presentFitting(
 			differences: installation.differences,
 			version: installation.version
 		},
-		followUps: followUps.map((followUp) => presentFollowUp(followUp, now))
+		followUps: followUps.map((followUp) => presentFollowUp(followUp, days))
 	};
 }

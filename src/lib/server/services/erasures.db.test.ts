@@ -33,6 +33,7 @@ import { addMonths, today } from './days';
 import { addFile } from './files';
 import { askForAged, getRetention, saveRetention } from './retention';
 import { listQuestions } from './questions';
+import { findReminded } from './reminders';
 import { openSheet } from './sheet-readers';
 
 useTestDatabase();
@@ -169,6 +170,13 @@ describe('an erasure', () => {
 		const mail = await readKeptLetter(arrived!.file);
 		expect(mail.to).toMatchObject({ text: known.email });
 		expect(mail.text).toContain('has deleted what it held about you');
+	}, 60_000);
+
+	it('leaves nobody to remind', async () => {
+		const { crew, jobId, request } = await makeRequest();
+		expect(await findReminded(crew.installer, jobId)).toBe('customer');
+		await decideErasure(crew.manager, request.id, GRANT(request.version));
+		expect(await findReminded(crew.installer, jobId)).toBe('erased');
 	}, 60_000);
 
 	it('ends sign-in and links, and keeps what was measured and worked out', async () => {

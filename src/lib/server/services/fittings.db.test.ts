@@ -2,10 +2,10 @@ import { describe, expect, it } from 'vitest';
 import { FITTED, makeFitted, makeRecommended } from '../../../../tests/support/fitted';
 import { makeCrew, useTestDatabase } from '../../../../tests/support/services';
 import { Customer, FollowUp, Job, OutgoingMail } from '../db/models';
-import { addDays, addMonths, daysBetween } from './days';
+import { addDays, addMonths, daysBetween, today } from './days';
 import { writeCalendar } from './follow-up-calendar';
 import { addFieldNote } from './field-notes';
-import { finishFollowUp, getFitting, saveFitting } from './fittings';
+import { finishFollowUp, getFitting, listFitted, saveFitting } from './fittings';
 import { removeMount } from './mounts';
 import { remindDue } from './reminders';
 
@@ -132,6 +132,28 @@ describe('the dates', () => {
 		await remindDue('2027-01-24');
 		expect(await remindedOf(fitting)).toEqual([false, false, true]);
 		expect(await remindedOf(removed.fitting)).toEqual([false, false, false]);
+	});
+
+	it('say which look is next, and which would be early', async () => {
+		const { installer, customer } = await makeCrew();
+		const { mountId, jobId } = await makeRecommended(installer);
+		expect(await listFitted(installer, jobId)).toEqual([]);
+		const fitting = await saveFitting(installer, mountId, { ...FITTED, fittedOn: addDays(today(), -40) });
+		const [first, second, third] = fitting.followUps;
+		expect(fitting.followUps.map(({ isEarly }) => isEarly)).toEqual([false, true, true]);
+		const fitted = { mountId, letter: 'A' };
+		expect(await listFitted(installer, jobId)).toEqual([
+			{ ...fitted, nextDueOn: first!.dueOn, isOverdue: true }
+		]);
+		await finishFollowUp(installer, first!.id, { isDone: true, version: first!.version });
+		expect(await listFitted(installer, jobId)).toEqual([
+			{ ...fitted, nextDueOn: second!.dueOn, isOverdue: false }
+		]);
+		for (const { id, version } of [second!, third!])
+			await finishFollowUp(installer, id, { isDone: true, version });
+		expect((await getFitting(installer, mountId)).followUps.some(({ isEarly }) => isEarly)).toBe(false);
+		expect(await listFitted(installer, jobId)).toEqual([{ ...fitted, nextDueOn: null, isOverdue: false }]);
+		await expect(listFitted(customer, jobId)).rejects.toMatchObject({ code: 'not_allowed' });
 	});
 
 	it('that were done are not reminded of', async () => {

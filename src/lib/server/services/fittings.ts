@@ -1,13 +1,14 @@
 import { literal, Op, type Transaction } from 'sequelize';
 import {
 	FOLLOW_UP_MONTHS,
+	type FittedMount,
 	type FittingChange,
 	type FittingView,
 	type FollowUpChange
 } from '$lib/schemas/fitting';
 import { formatDate } from '$lib/format/dates';
 import type { SignedInPerson } from '$lib/schemas/people';
-import { Assessment, FieldNote, FollowUp, Installation, Recommendation, type Mount } from '../db/models';
+import { Assessment, FieldNote, FollowUp, Installation, Mount, Recommendation } from '../db/models';
 import { inTransaction } from '../db/transaction';
 import { AppError, changedMeanwhile, notFound } from '../errors';
 import { allow } from '../policies';
@@ -18,6 +19,9 @@ import { isUnstruck } from './field-standing';
 import { findStandingMount } from './mounts';
 import { saveVersioned } from './records';
 import { refreshReview } from './review/keep-review';
+
+/** A look so long before its date is more likely a slip of the thumb: the page asks. */
+const EARLY_MONTHS = 1;
 
 const NOTHING_AGREED = 'Nothing is agreed for this mount yet: recommend it first.';
 
@@ -43,13 +47,33 @@ async function show(mount: Mount): Promise<FittingView> {
 		? await Assessment.findByPk(installation.assessmentId)
 		: await findAgreed(mount);
 	if (!agreed) throw notFound('assessment');
-	return presentFitting(mount, agreed, installation, followUps, today());
+	const days = { now: today(), soon: addMonths(today(), EARLY_MONTHS) };
+	return presentFitting(mount, agreed, installation, followUps, days);
 }
 
 /** What was agreed for a mount, what was fitted, and when it is to be looked at. */
 export async function getFitting(person: SignedInPerson, mountId: number): Promise<FittingView> {
 	allow(person, 'jobs.read');
 	return show(await findStandingMount(person, mountId));
+}
+
+/** The mounts of a job in which a battery is fitted, and when each is to be looked at next. */
+export async function listFitted(person: SignedInPerson, jobId: number): Promise<FittedMount[]> {
+	const { workshopId } = allow(person, 'jobs.read');
+	const installations = await Installation.findAll({ where: { jobId, workshopId } });
+	const standing = { jobId, workshopId, removedAt: null };
+	const mounts = await Mount.findAll({ where: standing, order: [['letter', 'ASC']] });
+	const open = await FollowUp.findAll({
+		where: { installationId: installations.map(({ id }) => id), doneOn: null },
+		order: [['dueOn', 'ASC']]
+	});
+	return mounts.flatMap(({ id: mountId, letter }) => {
+		const installation = installations.find((each) => each.mountId === mountId);
+		if (!installation) return [];
+		const next = open.find(({ installationId }) => installationId === installation.id);
+		const nextDueOn = next?.dueOn ?? null;
+		return [{ mountId, letter, nextDueOn, isOverdue: nextDueOn !== null && nextDueOn < today() }];
+	});
 }
 
 /** The dates by rule; those of looks that were not done move with the day of fitting. */

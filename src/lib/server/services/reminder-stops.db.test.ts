@@ -8,7 +8,7 @@ import { env } from '../env';
 import { stopOutbox } from '../mail/outbox';
 import { saveFitting } from './fittings';
 import { chooseReminders, openReminderChoice, stopPathOf } from './reminder-stops';
-import { remindDue } from './reminders';
+import { findReminded, remindDue } from './reminders';
 
 useTestDatabase();
 afterAll(stopOutbox);
@@ -39,12 +39,14 @@ describe('a reminder', () => {
 	});
 
 	it('goes out no more once it was stopped, not even one that was waiting, until it is wanted again', async () => {
-		const { address, customerId, stop } = await makeReminded();
+		const { address, customerId, stop, installer, jobId } = await makeReminded();
+		expect(await findReminded(installer, jobId)).toBe('customer');
 		await remindDue('2026-02-21');
 		expect(await OutgoingMail.count({ where: { recipient: address, state: 'waiting' } })).toBe(1);
 		expect((await openReminderChoice(stop)).stoppedAt).toBeNull();
 		for (let time = 0; time < 2; time++)
 			expect((await chooseReminders(stop, false)).stoppedAt).not.toBeNull();
+		expect(await findReminded(installer, jobId)).toBe('stopped');
 		await remindDue('2026-07-24');
 		expect(await receive(address)).toEqual([]);
 		expect(await OutgoingMail.findAll({ where: { recipient: address } })).toMatchObject([

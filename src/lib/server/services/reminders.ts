@@ -1,10 +1,15 @@
 import { QueryTypes } from 'sequelize';
+import { ERASED } from '$lib/schemas/erasures';
+import type { Reminded } from '$lib/schemas/fitting';
+import type { SignedInPerson } from '$lib/schemas/people';
 import { connection } from '../db/connection';
 import { Customer, FollowUp, Installation, Job, Vehicle, Workshop } from '../db/models';
 import { inTransaction } from '../db/transaction';
+import { notFound } from '../errors';
 import { logger } from '../logger';
 import { postLetter } from '../mail/outbox';
 import { writeReminder } from '../mail/reminder-letter';
+import { allow } from '../policies';
 import { addDays, today } from './days';
 import { stopUrlOf } from './reminder-stops';
 
@@ -26,6 +31,24 @@ const DUE = `
 	ORDER BY due_on, id LIMIT ${BATCH} FOR UPDATE SKIP LOCKED
 `;
 
+/** Whoever stopped them is left in peace; the date stays on the shop's list. */
+function sayWhom({ name, email, remindersStoppedAt }: Customer, workshop: Workshop): Reminded {
+	if (name === ERASED) return 'erased';
+	if (remindersStoppedAt) return 'stopped';
+	if (email) return 'customer';
+	return workshop.email ? 'workshop' : 'nobody';
+}
+
+/** To whom the reminders of a job go. */
+export async function findReminded(person: SignedInPerson, jobId: number): Promise<Reminded> {
+	const { workshopId } = allow(person, 'jobs.read');
+	const job = await Job.findOne({ where: { id: jobId, workshopId } });
+	const customer = job && (await Customer.findByPk(job.customerId));
+	const workshop = await Workshop.findByPk(workshopId);
+	if (!customer || !workshop) throw notFound('job');
+	return sayWhom(customer, workshop);
+}
+
 async function postReminder(
 	followUp: FollowUp,
 	transaction: Parameters<typeof postLetter>[1]
@@ -38,11 +61,10 @@ async function postReminder(
 		Workshop.findByPk(followUp.workshopId, { transaction })
 	]);
 	await followUp.update({ remindedAt: new Date() }, { transaction });
-	// Whoever stopped them is left in peace; the date stays on the shop's list.
-	if (customer!.remindersStoppedAt) return;
-	const recipient = customer!.email || workshop!.email;
-	if (!recipient) return;
-	const stopUrl = customer!.email ? stopUrlOf(customer!.id) : '';
+	const reminded = sayWhom(customer!, workshop!);
+	if (reminded !== 'customer' && reminded !== 'workshop') return;
+	const recipient = reminded === 'customer' ? customer!.email : workshop!.email;
+	const stopUrl = reminded === 'customer' ? stopUrlOf(customer!.id) : '';
 	const about = { followUp, customer: customer!, vehicle: vehicle!, workshop: workshop!, stopUrl };
 	const { id: jobId, workshopId } = job!;
 	const posted = { kind: 'reminder', workshopId, jobId, recipient, stopUrl } as const;

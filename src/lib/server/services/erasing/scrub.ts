@@ -1,5 +1,4 @@
-/** Stands where something of a person stood. */
-export const ERASED = '(erased)';
+import { ERASED } from '$lib/schemas/erasures';
 
 const escape = (text: string): string => text.replace(/[.*+?^${}()|[\]\\]/g, '\\$&');
 

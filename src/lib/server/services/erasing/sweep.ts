@@ -1,4 +1,5 @@
 import { Op, QueryTypes, type Model, type Transaction } from 'sequelize';
+import { ERASED } from '$lib/schemas/erasures';
 import { connection } from '../../db/connection';
 import {
 	Acknowledgement,
@@ -20,7 +21,6 @@ import {
 } from '../../db/models';
 import { canonicalJson, newToken, sha256, tokenHash } from '../../hash';
 import type { Persona } from './find-persona';
-import { ERASED } from './scrub';
 
 type Step = (persona: Persona, transaction: Transaction) => Promise<unknown>;
 

@@ -8,6 +8,7 @@ import { pageId } from '$lib/server/http/page-id';
 import { mayDo } from '$lib/server/policies';
 import { assessJob } from '$lib/server/services/assessments';
 import { listMountPictures } from '$lib/server/services/files';
+import { listFitted } from '$lib/server/services/fittings';
 import { getJob } from '$lib/server/services/jobs';
 import { newestRecommendation } from '$lib/server/services/recommendations';
 import { listSentLetters, noteLetterArrived, sendLetterAgain } from '$lib/server/services/sent-letters';
@@ -23,20 +24,21 @@ function chooseQuestion(questions: readonly Question[], asked: string | null): Q
 export const load: PageServerLoad = async (event) => {
 	const person = guard(event, 'jobs.read');
 	const jobId = pageId(event.params.jobId);
-	const [job, questions, letters, pictures, recommendation] = await orPageError(
+	const [job, questions, letters, pictures, recommendation, fitted] = await orPageError(
 		Promise.all([
 			getJob(person, jobId),
 			listQuestions(person, jobId),
 			listSentLetters(person, jobId),
 			listMountPictures(person, jobId),
-			newestRecommendation(person, jobId)
+			newestRecommendation(person, jobId),
+			listFitted(person, jobId)
 		])
 	);
 	const toAnswer = chooseQuestion(questions, event.url.searchParams.get('question'));
 	const recommendedMountId = recommendation?.assessment.mountId ?? null;
 	const answerForm = await loadForm(answerFormSchema);
 	const hasTraces = mayDo(person, 'traces.read');
-	return { job, questions, letters, pictures, toAnswer, answerForm, recommendedMountId, hasTraces };
+	return { job, questions, letters, pictures, toAnswer, answerForm, recommendedMountId, fitted, hasTraces };
 };
 
 /** One button on one letter; a refusal stands with the letters. */

@@ -1,4 +1,6 @@
+import { formatDate } from '$lib/format/dates';
 import { sayMounts } from '$lib/format/jobs';
+import type { FittedMount } from '$lib/schemas/fitting';
 import type { JobView } from '$lib/schemas/jobs';
 
 /** The one thing that is to be done next. */
@@ -11,21 +13,48 @@ export interface NextStep {
 	href: string | null;
 }
 
-type Rule = (job: JobView, at: string) => NextStep | null;
+/** What the next step is found from, beside the job itself. */
+export interface Around {
+	/** The mount of the newest recommendation. */
+	recommendedMountId: number | null;
+	fitted: readonly FittedMount[];
+}
 
-const unfinished = (job: JobView) => job.mounts.find((mount) => !mount.surveyComplete);
+type Rule = (job: JobView, at: string, around: Around) => NextStep | null;
+
+const isFitted = ({ fitted }: Around, mountId: number | null) =>
+	fitted.some((each) => each.mountId === mountId);
+
+/** Once the recommended battery is in, the positions that were not chosen ask for nothing more. */
+const openMounts = (job: JobView, around: Around) =>
+	isFitted(around, around.recommendedMountId)
+		? job.mounts.filter((mount) => isFitted(around, mount.id))
+		: job.mounts;
+
+const unfinished = (job: JobView, around: Around) =>
+	openMounts(job, around).find((mount) => !mount.surveyComplete);
 const standingOf = (job: JobView, mountId: number) =>
 	job.standings.find((standing) => standing.mountId === mountId);
 
 /** Mounts that could be assessed and were not, or were before something changed. */
-export const mountsToAssess = (job: JobView) =>
-	job.mounts.filter((mount) => {
+const mountsToAssess = (job: JobView, around: Around) =>
+	openMounts(job, around).filter((mount) => {
 		const standing = standingOf(job, mount.id);
 		return mount.surveyComplete && (!standing || standing.changedSince.length > 0);
 	});
 
 /** In the order in which a job is done; the first rule that has something to say is the next step. */
 const RULES: readonly Rule[] = [
+	(_, __, { fitted }) => {
+		const late = fitted.find(({ isOverdue }) => isOverdue);
+		return late?.nextDueOn
+			? {
+					label: `Look at mount ${late.letter}`,
+					text: `The look at mount ${late.letter} was due on ${formatDate(late.nextDueOn)}, and nobody has noted it as done.`,
+					href: `/mounts/${late.mountId}/fitted#dates`
+				}
+			: null;
+	},
 	(job, at) =>
 		job.battery
 			? null
@@ -58,8 +87,8 @@ const RULES: readonly Rule[] = [
 					text: 'Where the battery might go. Each position is surveyed with a tape measure.',
 					href: `${at}/mounts/new`
 				},
-	(job) => {
-		const mount = unfinished(job);
+	(job, _, around) => {
+		const mount = unfinished(job, around);
 		return mount
 			? {
 					label: `Survey mount ${mount.letter}`,
@@ -68,8 +97,8 @@ const RULES: readonly Rule[] = [
 				}
 			: null;
 	},
-	(job) => {
-		const mounts = mountsToAssess(job);
+	(job, _, around) => {
+		const mounts = mountsToAssess(job, around);
 		if (mounts.length === 0) return null;
 		const which = sayMounts(mounts.map((mount) => mount.letter));
 		const again = mounts.some((mount) => standingOf(job, mount.id));
@@ -80,6 +109,23 @@ const RULES: readonly Rule[] = [
 				: `All is there to work out the hot day of ${which}.`,
 			href: null
 		};
+	},
+	(_, __, around) => {
+		if (!isFitted(around, around.recommendedMountId)) return null;
+		const [next] = around.fitted
+			.filter(({ nextDueOn }) => nextDueOn !== null)
+			.sort((a, b) => a.nextDueOn!.localeCompare(b.nextDueOn!));
+		return next
+			? {
+					label: 'See the dates',
+					text: `The battery is fitted. Mount ${next.letter} is to be looked at next on ${formatDate(next.nextDueOn!)}.`,
+					href: `/mounts/${next.mountId}/fitted#dates`
+				}
+			: {
+					label: 'Note what the field says',
+					text: 'The battery is fitted and every look at it is done: nothing is left to do here.',
+					href: `/mounts/${around.recommendedMountId}/field`
+				};
 	},
 	(job, at) =>
 		job.stage === 'assessed' && job.mounts.length > 1
@@ -112,13 +158,21 @@ const RULES: readonly Rule[] = [
 					text: 'The customer has not acknowledged the sheet yet.',
 					href: `${at}/sheets`
 				}
+			: null,
+	(job, _, { recommendedMountId }) =>
+		job.stage === 'acknowledged' && recommendedMountId !== null
+			? {
+					label: 'Say what was fitted',
+					text: 'The customer has acknowledged the sheet. What comes next is the fitting, and what the field says of it.',
+					href: `/mounts/${recommendedMountId}/fitted`
+				}
 			: null
 ];
 
-/** What is to do next in a job; null when its customer has acknowledged it and nothing changed since. */
-export function findNextStep(job: JobView): NextStep | null {
+/** What is to do next in a job; none where its stage has no rule. */
+export function findNextStep(job: JobView, around: Around): NextStep | null {
 	for (const rule of RULES) {
-		const step = rule(job, `/jobs/${job.id}`);
+		const step = rule(job, `/jobs/${job.id}`, around);
 		if (step) return step;
 	}
 	return null;
