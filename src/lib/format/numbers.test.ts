@@ -10,6 +10,18 @@ describe('formatNumber', () => {
 	});
 });
 
+describe('formatMoney', () => {
+	it.each([
+		[75.5, '75.50'],
+		[76, '76'],
+		[0.05, '0.05'],
+		[120.999, '121'],
+		[1_200.25, '1200.25']
+	])('says %s as "%s"', (amount, text) => {
+		expect(numbers.formatMoney(amount)).toBe(text);
+	});
+});
+
 describe('writeNumber', () => {
 	it.each([
 		[177.8, '177.8'],

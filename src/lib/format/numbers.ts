@@ -16,6 +16,10 @@ export function writeNumber(value: number): string {
 	return text.replace('-', MINUS);
 }
 
+/** Money of the workshop's own: to the cent where it is not whole. */
+export const formatMoney = (amount: number): string =>
+	formatNumber(amount, Number.isInteger(Number(amount.toFixed(2))) ? 0 : 2);
+
 export function formatWithUnit(value: number, unit: string, decimals = 0): string {
 	return `${formatNumber(value, decimals)}${THIN_SPACE}${unit}`;
 }

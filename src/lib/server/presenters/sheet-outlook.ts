@@ -1,4 +1,4 @@
-import { formatNumber, formatTemperature } from '$lib/format/numbers';
+import { formatMoney, formatNumber, formatTemperature } from '$lib/format/numbers';
 import { hasBms } from '$lib/schemas/batteries';
 import type { SheetContent } from '$lib/schemas/sheets';
 import type { Outlook } from '$lib/schemas/outlooks';
@@ -49,7 +49,7 @@ function sayWhatHelps({ outlook: { remedies }, chemistry }: SheetBeside): Line {
 	if (least.keys.length === 0) return { label, text: 'Nothing more is needed for a day like this.' };
 	const money = sumMoney(least, moneyPerHour);
 	const price =
-		money > 0 ? `roughly ${formatNumber(money)} at our prices, parts and work` : 'it costs nothing';
+		money > 0 ? `roughly ${formatMoney(money)} at our prices, parts and work` : 'it costs nothing';
 	const event = hasBms(chemistry) ? 'it would go dark' : 'it would get too hot';
 	return {
 		label,

@@ -1,4 +1,4 @@
-import { formatKelvin, formatNumber } from '$lib/format/numbers';
+import { formatKelvin, formatMoney, formatNumber } from '$lib/format/numbers';
 import { formatHours } from '$lib/format/time';
 import type { RemedyLine, RemedyReport } from '$lib/schemas/outlook-reports';
 import { REMEDIES, type RemedySearch, type RemedySet } from '$lib/thermal/outlook';
@@ -16,7 +16,7 @@ export function sayGain(gainK: number): string {
 }
 
 const sayWork = (hours: number): string => (hours > 0 ? formatHours(hours) : 'none');
-const sayParts = (cost: number): string => (cost > 0 ? formatNumber(cost) : 'none');
+const sayParts = (cost: number): string => (cost > 0 ? formatMoney(cost) : 'none');
 
 /** "Reflective wrap and fresh-air duct", as a sentence begins. */
 function nameSet({ keys }: RemedySet): string {
@@ -41,10 +41,10 @@ function presentSet(
 	};
 }
 
-/** What a set costs with its work, in round figures of the workshop's money. */
+/** What a set costs with its work, in round figures of the workshop's money; a few coins are not rounded to nothing. */
 export function sumMoney({ cost, hours }: RemedySet, moneyPerHour: number): number {
 	const money = cost + hours * moneyPerHour;
-	return Math.round(money / 10) * 10;
+	return money < 10 ? money : Math.round(money / 10) * 10;
 }
 
 export const nameRemedies = (set: RemedySet): string => small(nameSet(set));
@@ -52,7 +52,7 @@ export const nameRemedies = (set: RemedySet): string => small(nameSet(set));
 function sayCost(set: RemedySet, moneyPerHour: number): string {
 	const money = sumMoney(set, moneyPerHour);
 	if (money === 0) return 'and costs nothing';
-	return `parts ${sayParts(set.cost)}, work ${sayWork(set.hours)}, together about ${formatNumber(money)}`;
+	return `parts ${sayParts(set.cost)}, work ${sayWork(set.hours)}, together about ${formatMoney(money)}`;
 }
 
 function sayLeast(search: RemedySearch, { adjective, sayVerdict }: EventWords): string {
@@ -91,6 +91,6 @@ export function presentRemedies(search: RemedySearch, words: EventWords): Remedy
 		hotter: sayHotter(alone),
 		front: front.map((set) => presentSet(set, least, words)),
 		notTried,
-		method: `${tried} sets of remedies were each run on the planned day. Money is the workshop’s own; an hour of work counts as ${formatNumber(moneyPerHour)}. What a remedy does is mostly judgement, and said beside it.`
+		method: `${tried} sets of remedies were each run on the planned day. Money is the workshop’s own; an hour of work counts as ${formatMoney(moneyPerHour)}. What a remedy does is mostly judgement, and said beside it.`
 	};
 }
