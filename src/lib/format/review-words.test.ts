@@ -1,5 +1,13 @@
 import { describe, expect, it } from 'vitest';
-import { countVerdict, formatDays, formatRatioRange, sayApart, sayRatio } from './review-words';
+import {
+	countVerdict,
+	formatDays,
+	formatRatioRange,
+	sayApart,
+	sayDarkDays,
+	sayRatio,
+	sayUncounted
+} from './review-words';
 
 describe('a ratio of reported to predicted', () => {
 	it('is said with its range, and judged by it alone', () => {
@@ -20,6 +28,16 @@ describe('a ratio of reported to predicted', () => {
 		expect(sayApart(figures)[0]).toMatch(/^Of 1 installation the chance is not known/);
 		expect(sayApart(figures)[1]).toMatch(/^2 installations have a battery that nothing switches off/);
 		expect(sayApart({ ...figures, chance: { known: 3, unknown: 0, never: 0 }, notHeatDays: 0 })).toEqual([]);
+	});
+
+	it.each([
+		[{ known: 2, unknown: 0, never: 0 }, '1.3, 2', ''],
+		[{ known: 2, unknown: 3, never: 0 }, '1.3, 2', 'not known for 3'],
+		[{ known: 0, unknown: 2, never: 1 }, 'not known', 'not known for 2, no BMS for 1'],
+		[{ known: 0, unknown: 0, never: 4 }, 'no BMS', 'no BMS for 4']
+	])('takes nothing that is not known for a zero: %j', (chance, words, uncounted) => {
+		expect(sayDarkDays({ chance, predictedDays: 1.3, reportedDays: 2 })).toBe(words);
+		expect(sayUncounted({ chance })).toBe(uncounted);
 	});
 
 	it('counts verdicts as one speaks', () => {

@@ -17,6 +17,23 @@ export const countVerdict = (verdict: Verdict, count: number): string =>
 /** Days as a manager counts them: one decimal below ten, none above. */
 export const formatDays = (days: number): string => formatNumber(days, days < 9.95 ? 1 : 0);
 
+/** Of which installations nothing can be held against a prediction, and why: "not known for 2, no BMS for 1". */
+export function sayUncounted({ chance }: Pick<ReviewFigures, 'chance'>): string {
+	return [
+		...(chance.unknown > 0 ? [`not known for ${chance.unknown}`] : []),
+		...(chance.never > 0 ? [`no BMS for ${chance.never}`] : [])
+	].join(', ');
+}
+
+/** Predicted and reported days side by side; where no chance is known there is no figure, not a zero. */
+export function sayDarkDays(
+	figures: Pick<ReviewFigures, 'chance' | 'predictedDays' | 'reportedDays'>
+): string {
+	const { chance, predictedDays, reportedDays } = figures;
+	if (chance.known > 0) return `${formatDays(predictedDays)}, ${reportedDays}`;
+	return chance.unknown > 0 ? 'not known' : 'no BMS';
+}
+
 const formatRatio = (value: number): string => formatNumber(value, value < 9.95 ? 2 : 0);
 
 /** "0.82 (0.40 to 1.51)". */
