@@ -23,6 +23,13 @@ test('what was fitted is kept against what was agreed, looked at again by date, 
 	await expect(page.getByText('28 February 2026').first()).toBeVisible();
 	await expectNoViolations(page);
 	await page.getByRole('button', { name: /^Done.*28 February/ }).click();
+	const news = page.getByRole('status').filter({ hasText: 'The look of 28 February 2026 is noted as done.' });
+	await expect(news).toBeFocused();
+	await expectNoViolations(page);
+	await page.getByRole('button', { name: 'Undo, 28 February 2026' }).click();
+	await expect(page.getByText('The look of 28 February 2026 stands open again.')).toBeVisible();
+	await expect(page.getByText(/done .* by/)).toHaveCount(0);
+	await page.getByRole('button', { name: /^Done.*28 February/ }).click();
 	await expect(page.getByText(/done .* by/)).toBeVisible();
 	const calendar = await page.request.get(`/mounts/${mountIds[0]}/follow-ups.ics`);
 	expect(calendar.headers()['content-type']).toContain('text/calendar');
@@ -55,5 +62,49 @@ test('what was fitted is kept against what was agreed, looked at again by date, 
 	await expect(page.getByText('Noted, and kept for good.')).toBeVisible({ timeout: 30_000 });
 	await expect(page.getByRole('heading', { name: 'What it teaches' })).toBeVisible();
 	await expect(page.getByRole('row', { name: /Dark days a year/ })).toBeVisible();
+	await expectNoViolations(page);
+});
+
+test('a look long before its date asks first, without a script too; the job says what is next', async ({
+	browser,
+	page,
+	baseURL
+}) => {
+	test.slow();
+	const { jobId, mountIds } = await makeAssessableJob(page, { mounts: 1 });
+	const [hot] = await assessAll(page, jobId);
+	const words = { assessmentId: hot!.id, decidedBy: 'Ida Fenn', reason: 'A duct is fitted before summer.' };
+	await ask(page, 'POST', '/api/v1/recommendations', words);
+	const today = new Date().toISOString().slice(0, 10);
+	await ask(page, 'PUT', `/api/v1/mounts/${mountIds[0]}/fitting`, {
+		...{ fittedOn: today, fittedBy: 'Ida Fenn', serialNumber: '', note: '', differences: [], version: null }
+	});
+	await page.goto(`/jobs/${jobId}`);
+	await expect(page.getByText('The battery is fitted. Mount A is to be looked at next on')).toBeVisible();
+	await page.getByRole('link', { name: 'See the dates' }).click();
+	await expect(page.getByText(/reminder goes to the (customer|workshop) by e-mail/)).toBeVisible();
+
+	const storageState = await page.context().storageState();
+	const context = await browser.newContext({ javaScriptEnabled: false, storageState, baseURL: baseURL! });
+	const plain = await context.newPage();
+	await plain.goto(`/mounts/${mountIds[0]}/fitted`);
+	const lastLook = plain.getByRole('listitem').filter({ hasText: 'After 12 months' });
+	await lastLook.getByRole('button', { name: /^Done/ }).click();
+	const question = plain.getByRole('region', { name: /^Done already\? It is due on/ });
+	await expect(question).toBeVisible();
+	await expect(plain.getByText(/, done .* by/)).toHaveCount(0);
+	await question.getByRole('link', { name: 'Not yet' }).click();
+	await expect(question).toHaveCount(0);
+	await lastLook.getByRole('button', { name: /^Done/ }).click();
+	await question.getByRole('button', { name: 'Yes, it is done' }).click();
+	await expect(lastLook.getByText(/, done .* by/)).toBeVisible();
+	await plain.getByRole('button', { name: /^Undo/ }).click();
+	await expect(plain.getByText(/stands open again/)).toBeVisible();
+	await expect(plain.getByText(/, done .* by/)).toHaveCount(0);
+	await context.close();
+
+	await openForm(page, `/mounts/${mountIds[0]}/fitted`);
+	await page.getByRole('button', { name: /^Done/ }).last().click();
+	await expect(page.getByRole('region', { name: /^Done already/ })).toBeFocused();
 	await expectNoViolations(page);
 });

@@ -21,7 +21,7 @@ export const actions: Actions = {
 			schema: erasureFormSchema,
 			save: async (person, { erasureId, ...decision }) => {
 				await decideErasure(person, erasureId, decision);
-				return '/erasures';
+				return `/erasures#request-${erasureId}`;
 			}
 		})
 };

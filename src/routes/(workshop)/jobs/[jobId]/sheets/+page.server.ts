@@ -56,7 +56,7 @@ async function doWithSheet(
 		if (!(refusal instanceof AppError)) throw refusal;
 		return fail(refusal.status, { refusal: refusal.message });
 	}
-	redirect(303, event.url.pathname);
+	redirect(303, `${event.url.pathname}#sent`);
 }
 
 export const actions: Actions = {

@@ -7,6 +7,7 @@ import { guard, orPageError } from '$lib/server/http/guard';
 import { pageId } from '$lib/server/http/page-id';
 import { validate } from '$lib/server/http/validate';
 import { finishFollowUp, getFitting, saveFitting } from '$lib/server/services/fittings';
+import { findReminded } from '$lib/server/services/reminders';
 import { getJob } from '$lib/server/services/jobs';
 import { openMount } from '../open-mount';
 import type { Actions, PageServerLoad } from './$types';
@@ -16,9 +17,15 @@ export const load: PageServerLoad = async (event) => {
 	const mount = await openMount(person, event.params);
 	const fitting = await orPageError(getFitting(person, mount.id));
 	const job = await orPageError(getJob(person, mount.jobId));
+	const followUpAt = (name: string) =>
+		fitting.followUps.find(({ id }) => String(id) === event.url.searchParams.get(name)) ?? null;
+	const early = followUpAt('early');
 	const known = fitting.installation ? toFittingForm(fitting.installation) : { fittedBy: person.name };
 	return {
 		...{ mount, fitting },
+		reminded: await orPageError(findReminded(person, mount.jobId)),
+		early: early?.isEarly ? early : null,
+		looked: followUpAt('looked'),
 		job: { id: job.id, number: job.number },
 		form: await loadForm(fittingFormSchema, known),
 		isSaved: event.url.searchParams.has('saved')
@@ -45,9 +52,13 @@ export const actions: Actions = {
 		const change = async () => {
 			const followUpId = validate(idSchema, sent.get('followUp') ?? undefined);
 			const version = validate(versionSchema, sent.get('version') ?? undefined);
-			await finishFollowUp(person, followUpId, { isDone: sent.get('isDone') === 'true', version });
+			const isDone = sent.get('isDone') === 'true';
+			const { followUps } = await getFitting(person, id);
+			const isEarly = followUps.some((each) => each.id === followUpId && each.isEarly);
+			if (isDone && isEarly && sent.get('isSure') !== 'true') return `?early=${followUpId}#early`;
+			await finishFollowUp(person, followUpId, { isDone, version });
+			return `?looked=${followUpId}#dates`;
 		};
-		await orPageError(change());
-		redirect(303, `/mounts/${id}/fitted#dates`);
+		redirect(303, `/mounts/${id}/fitted${await orPageError(change())}`);
 	}
 };
