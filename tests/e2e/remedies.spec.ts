@@ -10,7 +10,7 @@ test(
 	async ({ page }) => {
 		await signInAs(page, 'engineer');
 		const before = await ask(page, 'GET', '/api/v1/remedies');
-		const parts = String(randomInt(100, 900));
+		const parts = `${randomInt(100, 900)}.5`;
 		await openForm(page, '/remedies');
 		const wrap = page.getByRole('group', { name: 'Reflective wrap' });
 		await wrap.getByLabel('Parts').fill('cheap');
@@ -26,6 +26,10 @@ test(
 		await expect(wrap.getByLabel('Parts')).toHaveValue(parts);
 		await expect(wrap.getByLabel('Work')).toHaveValue('0.75');
 		await expectNoViolations(page);
+		await signInAs(page, 'installer');
+		await page.goto('/remedies');
+		await expect(page.getByText(`parts ${parts}0, work`)).toBeVisible();
+		await signInAs(page, 'engineer');
 		const { version } = await ask(page, 'GET', '/api/v1/remedies');
 		const offers = (before.offers as Record<string, unknown>[]).map(({ key, cost, hours, offered }) => ({
 			...{ key, cost, hours, offered }
