@@ -37,9 +37,14 @@ test('the review leads from a zone to its installations and on to each mount', a
 	await page.getByRole('link', { name: 'Hot desert (BWh)' }).click();
 	await expect(page.getByRole('heading', { level: 1 })).toHaveText('Installations: Hot desert (BWh)');
 	await expectNoViolations(page);
-	const listed = await cellsOf(page);
-	const desert = zones.find(([name]) => name === 'Hot desert (BWh)');
-	expect(String(listed.length)).toBe(desert![1]!.replace(/\D/g, ''));
+	// Other tests fit batteries there meanwhile: the two are read again until none came in between.
+	await expect(async () => {
+		await page.goto('/review');
+		const desert = (await cellsOf(page)).find(([name]) => name === 'Hot desert (BWh)');
+		await page.getByRole('link', { name: 'Hot desert (BWh)' }).click();
+		await expect(page.getByRole('heading', { level: 1 })).toHaveText('Installations: Hot desert (BWh)');
+		expect(String((await cellsOf(page)).length)).toBe(desert![1]!.replace(/\D/g, ''));
+	}).toPass();
 	await page.getByRole('link', { name: 'Ignatius Pell' }).click();
 	await page.waitForURL(/\/mounts\/\d+\/fitted$/);
 	await expect(page.getByRole('heading', { level: 1 })).toBeVisible();
