@@ -2,7 +2,7 @@ import { expect, test } from '@playwright/test';
 import { ask } from './assessable-job';
 import { waitForLink } from './mailed';
 import { makeSendableJob, newAddress } from './sent-sheet';
-import { expectNoViolations, ONCE, signInAs } from './support';
+import { expectNoViolations, ONCE, openForm, signInAs } from './support';
 
 test('a customer finds vehicle, documents and history, all within the width of a phone', async ({ page }) => {
 	await signInAs(page, 'customer');
@@ -113,9 +113,17 @@ test(
 
 		await shop.clearCookies();
 		await signInAs(desk, 'manager');
-		await desk.goto('/erasures', { waitUntil: 'networkidle' });
-		const other = desk.getByRole('link', { name: customerName });
-		if (await other.isVisible()) await other.click();
+		await desk.goto('/shop');
+		await expect(
+			desk.getByText(/^(One request waits, since|\d+ requests wait, the oldest since) /)
+		).toBeVisible();
+		await desk.goto('/jobs');
+		await expect(desk.getByText(/(One request waits|requests wait), /)).toBeVisible();
+		await expectNoViolations(desk);
+		await openForm(desk, `/jobs/${jobId}`);
+		await expect(desk.getByText('The customer asks for deletion')).toBeVisible();
+		await expectNoViolations(desk);
+		await desk.getByRole('link', { name: 'Look, and decide' }).click();
 		await expect(desk.getByRole('heading', { name: `${customerName} asks for deletion` })).toBeVisible();
 		await desk.getByRole('radio', { name: 'Grant it' }).check();
 		await desk.getByRole('button', { name: 'Decide, and tell the customer' }).click();

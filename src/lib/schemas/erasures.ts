@@ -58,3 +58,17 @@ export const myErasureSchema = z.object({
 	reason: z.string()
 });
 export type MyErasure = z.infer<typeof myErasureSchema>;
+
+/** What waits for a decision. */
+export interface WaitingErasures {
+	count: number;
+	/** Null where nothing waits. */
+	oldestAt: string | null;
+}
+
+export interface WaitingErasure {
+	id: number;
+	askedAt: string;
+	/** The rule of the shop put it there, not the customer. */
+	isByRule: boolean;
+}

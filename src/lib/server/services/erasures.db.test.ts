@@ -35,6 +35,7 @@ import { askForAged, getRetention, saveRetention } from './retention';
 import { listQuestions } from './questions';
 import { findReminded } from './reminders';
 import { openSheet } from './sheet-readers';
+import { countWaitingErasures, findWaitingErasure } from './waiting-erasures';
 
 useTestDatabase();
 afterAll(stopOutbox);
@@ -83,6 +84,29 @@ describe('a request for deletion', () => {
 		const decided = decideErasure(neighbour, request.id, GRANT(request.version));
 		await expect(decided).rejects.toMatchObject({ code: 'not_found' });
 	}, 60_000);
+
+	it('is counted for the manager alone, with the oldest, and stands on the customer’s jobs', async () => {
+		const crew = await makeCrew();
+		const { manager, customer, workshopId } = crew;
+		expect(await countWaitingErasures(manager)).toEqual({ count: 0, oldestAt: null });
+		expect(await findWaitingErasure(manager, customer.customerId!)).toBeNull();
+		await askErasure(customer);
+		const aged = await Customer.create({ workshopId, name: 'Aged' });
+		await Erasure.create({ workshopId, customerId: aged.id });
+		const [request, byRule] = await listErasures(manager);
+		expect(await countWaitingErasures(manager)).toEqual({ count: 2, oldestAt: request!.askedAt });
+		expect(await findWaitingErasure(manager, customer.customerId!)).toEqual({
+			...{ id: request!.id, askedAt: request!.askedAt, isByRule: false }
+		});
+		expect(await findWaitingErasure(manager, aged.id)).toMatchObject({ id: byRule!.id, isByRule: true });
+		const { manager: neighbour } = await makeCrew();
+		expect(await findWaitingErasure(neighbour, customer.customerId!)).toBeNull();
+		expect(await findWaitingErasure(crew.installer, customer.customerId!)).toBeNull();
+		await expect(countWaitingErasures(crew.engineer)).rejects.toMatchObject({ code: 'not_allowed' });
+		const refusal = { decision: 'refuse', reason: 'Under warranty.', version: request!.version } as const;
+		await decideErasure(manager, request!.id, refusal);
+		expect(await countWaitingErasures(manager)).toMatchObject({ count: 1 });
+	});
 
 	it('is refused with a reason, word for word in a letter, and everything stays', async () => {
 		const { crew, customer, known, request } = await makeRequest();

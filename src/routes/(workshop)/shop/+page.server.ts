@@ -10,6 +10,7 @@ import { guard, orPageError } from '$lib/server/http/guard';
 import { validate } from '$lib/server/http/validate';
 import { makeLogo } from '$lib/server/services/logo-picture';
 import { getShop, removeLogo, saveFactorRule, saveLogo, saveShop } from '$lib/server/services/shop';
+import { countWaitingErasures } from '$lib/server/services/waiting-erasures';
 import type { Actions, PageServerLoad } from './$types';
 
 const toShopForm = ({ name, address, phone, email, web, businessNumber, version }: ShopView) => ({
@@ -20,8 +21,9 @@ const toShopForm = ({ name, address, phone, email, web, businessNumber, version 
 export const load: PageServerLoad = async (event) => {
 	const person = guard(event, 'shop.write');
 	const shop = await orPageError(getShop(person));
+	const waiting = await orPageError(countWaitingErasures(person));
 	return {
-		...{ shop, done: event.url.searchParams.get('done') },
+		...{ shop, waiting, done: event.url.searchParams.get('done') },
 		form: await loadForm(shopFormSchema, toShopForm(shop))
 	};
 };

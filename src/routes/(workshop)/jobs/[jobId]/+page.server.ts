@@ -13,6 +13,7 @@ import { getJob } from '$lib/server/services/jobs';
 import { newestRecommendation } from '$lib/server/services/recommendations';
 import { listSentLetters, noteLetterArrived, sendLetterAgain } from '$lib/server/services/sent-letters';
 import { answerQuestion, listQuestions } from '$lib/server/services/questions';
+import { findWaitingErasure } from '$lib/server/services/waiting-erasures';
 import type { Actions, PageServerLoad } from './$types';
 
 /** The question that was chosen; else the first that nobody has answered. */
@@ -34,11 +35,15 @@ export const load: PageServerLoad = async (event) => {
 			listFitted(person, jobId)
 		])
 	);
+	const erasure = await orPageError(findWaitingErasure(person, job.customer.id));
 	const toAnswer = chooseQuestion(questions, event.url.searchParams.get('question'));
 	const recommendedMountId = recommendation?.assessment.mountId ?? null;
 	const answerForm = await loadForm(answerFormSchema);
 	const hasTraces = mayDo(person, 'traces.read');
-	return { job, questions, letters, pictures, toAnswer, answerForm, recommendedMountId, fitted, hasTraces };
+	return {
+		...{ job, questions, letters, pictures, erasure },
+		...{ toAnswer, answerForm, recommendedMountId, fitted, hasTraces }
+	};
 };
 
 /** One button on one letter; a refusal stands with the letters. */
