@@ -77,6 +77,17 @@ test(
 		await manager.getByLabel('Reason', { exact: true }).fill('The warranty runs until June.');
 		await manager.getByRole('button', { name: 'Decide, and tell the customer' }).click();
 		await expect(manager.getByText('“The warranty runs until June.”')).toBeVisible();
+		await expect(
+			manager.getByText(/^Letter to the customer: (Waiting to be sent|Sent )/).first()
+		).toBeVisible();
+		await expect(async () => {
+			await manager.goto('/mailbox');
+			await manager
+				.getByRole('link', { name: /^Your request for deletion/ })
+				.first()
+				.click({ timeout: 1_000 });
+		}).toPass({ timeout: 20_000 });
+		await expect(manager.getByText('The warranty runs until June.')).toBeVisible();
 		await context.close();
 		await page.reload();
 		await expect(page.getByText('The warranty runs until June.')).toBeVisible();

@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { idSchema, optionalWords, versionSchema } from './fields';
+import { sentLetterSchema } from './letters';
 
 /** Stands where something of a person stood. */
 export const ERASED = '(erased)';
@@ -47,6 +48,9 @@ export const erasureSchema = z.object({
 	reason: z.string(),
 	jobs: z.array(z.number().int()).meta({ description: 'Numbers of the jobs that it is about' }),
 	vehicles: z.number().int(),
+	letter: sentLetterSchema
+		.nullable()
+		.meta({ description: 'What tells the customer of the decision; null where there is none' }),
 	version: versionSchema
 });
 export type ErasureView = z.infer<typeof erasureSchema>;

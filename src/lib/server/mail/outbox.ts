@@ -24,6 +24,7 @@ export type NewLetter = Omit<Letter, 'messageId'> & {
 	/** The job in whose sending log it stands. */
 	jobId?: number;
 	sheetId?: number;
+	erasureId?: number;
 };
 
 /** Puts a letter into the same transaction as what it tells of: both are kept, or neither. */

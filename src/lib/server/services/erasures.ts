@@ -1,7 +1,7 @@
 import { literal, Op, type Transaction } from 'sequelize';
 import type { DecideErasure, ErasureView, MyErasure } from '$lib/schemas/erasures';
 import type { SignedInPerson } from '$lib/schemas/people';
-import { Customer, Erasure, Job, Person, Vehicle, Workshop } from '../db/models';
+import { Customer, Erasure, Job, OutgoingMail, Person, Vehicle, Workshop } from '../db/models';
 import { inTransaction } from '../db/transaction';
 import { env } from '../env';
 import { AppError, notFound } from '../errors';
@@ -19,13 +19,14 @@ import { saveVersioned } from './records';
 const MOST_LISTED = 50;
 
 async function present(erasure: Erasure): Promise<ErasureView> {
-	const { customerId } = erasure;
-	const [customer, jobs, vehicles] = await Promise.all([
+	const { id: erasureId, customerId } = erasure;
+	const [customer, jobs, vehicles, letter] = await Promise.all([
 		Customer.findByPk(customerId),
 		Job.findAll({ where: { customerId }, attributes: ['number'], order: [['number', 'ASC']] }),
-		Vehicle.count({ where: { customerId } })
+		Vehicle.count({ where: { customerId } }),
+		OutgoingMail.findOne({ where: { erasureId }, order: [['id', 'DESC']] })
 	]);
-	return presentErasure(erasure, customer, jobs, vehicles);
+	return presentErasure(erasure, { customer, jobs, vehicles, letter });
 }
 
 /** What customers asked to have deleted: what waits first, then what was decided. */
@@ -116,7 +117,8 @@ async function refuse(
 	await erasure.update({ state: 'refused', reason, ...decided(person) }, { transaction });
 	const { workshopId } = person;
 	const letter = writeErasureRefused(customer.name, workshop, reason);
-	const posted = { kind: 'erasure-refused', workshopId, recipient, replyTo: workshop.email } as const;
+	const about = { kind: 'erasure-refused', workshopId, erasureId: erasure.id } as const;
+	const posted = { ...about, recipient, replyTo: workshop.email };
 	if (recipient) await postLetter({ ...letter, ...posted }, transaction);
 	const subject = { type: 'customer', id: customer.id };
 	await recordBy(person, 'customer.erasure-refused', subject, transaction, { erasureId: erasure.id });
@@ -137,7 +139,7 @@ async function eraseCustomer(
 	await erasure.reload({ transaction });
 	await erasure.update({ state: 'granted' }, { transaction });
 	const { workshopId } = person;
-	const posted = { kind: 'erasure-granted', workshopId, recipient } as const;
+	const posted = { kind: 'erasure-granted', workshopId, erasureId: erasure.id, recipient } as const;
 	if (recipient) await postLetter({ ...writeErasureGranted(workshop), ...posted }, transaction);
 	const subject = { type: 'customer', id: customer.id };
 	await recordBy(person, ERASED_ACTION, subject, transaction, { erasureId: erasure.id, blanked });

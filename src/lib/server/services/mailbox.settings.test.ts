@@ -4,11 +4,17 @@ import { describe, expect, it } from 'vitest';
 import { post } from '../../../../tests/support/letters';
 import { makeCrew, useTestDatabase } from '../../../../tests/support/services';
 import { makeSentSheet } from '../../../../tests/support/sheets';
-import { OutgoingMail } from '../db/models';
+import type { SignedInPerson } from '$lib/schemas/people';
+import { mailSignInLink } from '../auth/mailed-link';
+import { Customer, OutgoingMail, SecondFactor } from '../db/models';
 import { env } from '../env';
 import { listKeptLetters } from '../mail/mailbox-folder';
 import { sendDue } from '../mail/outbox';
+import { askErasure, decideErasure, listErasures } from './erasures';
+import { invite } from './invitations';
 import { getLetter, listLetters } from './mailbox';
+import { changeRole } from './people';
+import { beginSetUp, resetFactor } from './second-factor';
 
 process.env.SOAKLINE_DEMO = '1';
 useTestDatabase();
@@ -71,6 +77,36 @@ describe('the local mailbox of a demonstration', () => {
 		await post(workshopId, installer.email);
 		await sendDue();
 		expect(await listLetters(installer)).toHaveLength(1);
+	});
+
+	it('shows the manager what the shop sends of no job, and others none of it', async () => {
+		const { manager, installer, engineer, customer } = await makeCrew();
+		await Customer.update({ email: customer.email }, { where: { id: customer.customerId! } });
+		await changeRole(manager, engineer.id, { role: 'manager', version: 0 });
+		await askErasure(customer);
+		const [request] = await listErasures(manager);
+		expect(request!.letter).toBeNull();
+		const refusal = { decision: 'refuse', reason: 'Under warranty.', version: request!.version } as const;
+		expect(await decideErasure(manager, request!.id, refusal)).toMatchObject({
+			letter: { state: 'waiting' }
+		});
+		await invite(manager, { name: 'Wren', email: `wren-${manager.id}@shop.example`, role: 'installer' });
+		await beginSetUp(installer);
+		await SecondFactor.update({ confirmedAt: new Date() }, { where: { personId: installer.id } });
+		await resetFactor(manager, installer.id);
+		await mailSignInLink(customer.email, '127.0.0.1');
+		await sendDue();
+		const subjectsFor = async (person: SignedInPerson) =>
+			(await listLetters(person)).map(({ recipient, subject }) => `${subject} > ${recipient}`).sort();
+		const all = await subjectsFor({ ...engineer, role: 'manager' });
+		expect(all).toEqual([
+			expect.stringMatching(/^A customer asks that their data be deleted > /),
+			expect.stringMatching(/^Join .* > wren-/),
+			expect.stringContaining(`> ${installer.email}`),
+			expect.stringMatching(/^Your request for deletion: .* > customer-/)
+		]);
+		expect(await subjectsFor(installer)).toEqual([expect.stringContaining(`> ${installer.email}`)]);
+		expect((await listErasures(manager))[0]).toMatchObject({ letter: { state: 'sent' } });
 	});
 
 	it('keeps a letter without a sheet, such as a link to sign in, for its reader alone', async () => {

@@ -1,10 +1,11 @@
+import type { LetterKind } from '$lib/schemas/letters';
 import type { LetterRow, LetterView } from '$lib/schemas/mailbox';
 import type { SignedInPerson } from '$lib/schemas/people';
 import { OutgoingMail } from '../db/models';
 import { env } from '../env';
 import { notFound } from '../errors';
 import { listKeptLetters, readKeptLetter } from '../mail/mailbox-folder';
-import { allow, mayDo } from '../policies';
+import { allow, mayDo, type Action } from '../policies';
 import { presentLetterLines, presentLetterRow, shortMessageId } from '../presenters/letters';
 
 /** Older letters stay in the folder and are not listed. */
@@ -17,15 +18,21 @@ function requireMailbox(): string {
 	return MAILBOX_DIR;
 }
 
-/**
- * What belongs to a job is the shop's matter, and invitations are the manager's; a link that signs somebody in is for
- * that person alone.
- */
-const mayRead = (person: SignedInPerson, { sheetId, jobId, kind, recipient }: OutgoingMail): boolean =>
-	sheetId !== null ||
-	jobId !== null ||
-	recipient === person.email ||
-	(kind === 'invitation' && mayDo(person, 'people.write'));
+/** Who else than its reader may see a letter of no job; a link that signs somebody in is for that person alone. */
+const OF_NO_JOB: Partial<Record<LetterKind, Action>> = {
+	invitation: 'people.write',
+	'second-factor': 'people.write',
+	'erasure-asked': 'erasures.decide',
+	'erasure-refused': 'erasures.decide',
+	'erasure-granted': 'erasures.decide'
+};
+
+/** What belongs to a job is the shop's matter. */
+function mayRead(person: SignedInPerson, { sheetId, jobId, kind, recipient }: OutgoingMail): boolean {
+	if (sheetId !== null || jobId !== null || recipient === person.email) return true;
+	const action = OF_NO_JOB[kind];
+	return action !== undefined && mayDo(person, action);
+}
 
 /** The letters in the folder that this workshop sent: a file alone proves nothing, its message id must be on record. */
 async function findOwn(person: SignedInPerson) {

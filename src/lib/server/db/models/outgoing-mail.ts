@@ -29,6 +29,8 @@ export class OutgoingMail extends Model<
 	declare kind: LetterKind;
 	declare sheetId: CreationOptional<number | null>;
 	declare jobId: CreationOptional<number | null>;
+	/** The request for deletion that it answers. */
+	declare erasureId: CreationOptional<number | null>;
 	declare messageId: string;
 	declare recipient: string;
 	/** Whom an answer reaches, where that is not the sender. */
@@ -56,6 +58,7 @@ export function initOutgoingMail(sequelize: Sequelize): void {
 			kind: text,
 			sheetId: optionalReference,
 			jobId: optionalReference,
+			erasureId: optionalReference,
 			messageId: text,
 			recipient: text,
 			replyTo: textOrEmpty,
