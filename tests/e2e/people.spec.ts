@@ -69,6 +69,10 @@ test('somebody is invited, joins by the letter’s link, gets another role, and 
 	await page.getByLabel('Role', { exact: true }).selectOption('engineer');
 	await page.getByRole('button', { name: 'Change the role' }).click();
 	await expect(page.getByText('The role is changed.')).toBeVisible();
+	await expect(page.getByText('Is an engineer here.')).toBeVisible();
+	await page.getByRole('button', { name: 'Change the role' }).click();
+	await expect(page.getByText(`${name} is an engineer already: nothing was changed.`)).toBeVisible();
+	await expect(page.getByText('The role is changed.')).toHaveCount(0);
 	await other
 		.getByRole('link', { name: 'Batteries' })
 		.filter({ visible: true })
@@ -83,6 +87,7 @@ test('somebody is invited, joins by the letter’s link, gets another role, and 
 	await page.getByText('They leave').click();
 	await page.getByRole('button', { name: `End ${name}’s access now` }).click();
 	await expect(page.getByText('Gone, at once and on every device.')).toBeVisible();
+	await expect(page.getByText(/Signed in as/)).toBeVisible();
 	await expectNoViolations(page);
 	await other.reload();
 	await expect(other).toHaveURL(/\/sign-in/);
@@ -128,5 +133,6 @@ test('nobody changes their own role, and the last manager cannot leave', ONCE, a
 	await page.getByText('I leave').click();
 	await page.getByRole('button', { name: 'End my access now' }).click();
 	await expect(page.getByText('The last manager cannot leave')).toBeVisible();
+	await expect(page.getByRole('region', { name: 'Something here needs another look' })).toBeFocused();
 	await expectNoViolations(page);
 });

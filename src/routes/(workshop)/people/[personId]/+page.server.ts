@@ -2,6 +2,7 @@ import { redirect, type RequestEvent } from '@sveltejs/kit';
 import { versionSchema } from '$lib/schemas/fields';
 import { roleChangeSchema, type SignedInPerson } from '$lib/schemas/people';
 import { doOrSay } from '$lib/server/http/do-or-say';
+import { loadForm, saveForm } from '$lib/server/http/forms';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { pageId } from '$lib/server/http/page-id';
 import { validate } from '$lib/server/http/validate';
@@ -12,8 +13,10 @@ import type { Actions, PageServerLoad } from './$types';
 export const load: PageServerLoad = async (event) => {
 	const manager = guard(event, 'people.read');
 	const personId = pageId(event.params.personId);
+	const each = await orPageError(getPerson(manager, personId));
 	return {
-		each: await orPageError(getPerson(manager, personId)),
+		each,
+		form: await loadForm(roleChangeSchema, { role: each.role, version: each.version }),
 		done: event.url.searchParams.get('done')
 	};
 };
@@ -29,14 +32,18 @@ const change = (event: RequestEvent, done: string, work: Change) =>
 	});
 
 export const actions: Actions = {
-	role: (event) =>
-		doOrSay(event, 'people.write', async (manager, sent) => {
-			const personId = pageId(event.params.personId);
-			await getPerson(manager, personId);
-			const asked = { role: sent.get('role'), version: sent.get('version') ?? undefined };
-			await changeRole(manager, personId, validate(roleChangeSchema, asked));
-			redirect(303, `/people/${personId}?done=role`);
-		}),
+	role: async (event) => {
+		const personId = pageId(event.params.personId);
+		const before = await orPageError(getPerson(guard(event, 'people.write'), personId));
+		return saveForm(event, {
+			action: 'people.write',
+			schema: roleChangeSchema,
+			save: async (manager, asked) => {
+				const { role } = await changeRole(manager, personId, asked);
+				return `/people/${personId}?done=${role === before.role ? 'same' : 'role'}`;
+			}
+		});
+	},
 	resetFactor: (event) =>
 		doOrSay(event, 'people.write', async (manager) => {
 			const personId = pageId(event.params.personId);
