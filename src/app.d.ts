@@ -1,4 +1,4 @@
-import type { SignedInPerson } from '$lib/schemas/people';
+import type { SessionEnd, SignedInPerson } from '$lib/schemas/people';
 
 declare global {
 	namespace App {
@@ -12,6 +12,8 @@ declare global {
 			/** Nobody is signed in when null. */
 			person: SignedInPerson | null;
 			sessionId: string | null;
+			/** Why the session that came along lets nobody in; null where none came, or it does. */
+			sessionEnd: SessionEnd | null;
 			requestId: string;
 		}
 	}

@@ -4,7 +4,7 @@ import { sequence } from '@sveltejs/kit/hooks';
 import { building } from '$app/environment';
 import { CLIENT_ADDRESS_HEADER, handle as handleAuth } from '$lib/server/auth';
 import { mustSetUpFactor } from '$lib/server/auth/second-factor';
-import { personOfSession } from '$lib/server/auth/sessions';
+import { personOfSession, whySessionEnded } from '$lib/server/auth/sessions';
 import { boot, shutDown } from '$lib/server/boot';
 import { env, isSecureOrigin } from '$lib/server/env';
 import { AppError } from '$lib/server/errors';
@@ -32,6 +32,7 @@ const number: Handle = ({ event, resolve }) => {
 	event.locals.requestId = randomUUID();
 	event.locals.person = null;
 	event.locals.sessionId = null;
+	event.locals.sessionEnd = null;
 	return resolve(event);
 };
 
@@ -59,6 +60,7 @@ const identify: Handle = async ({ event, resolve }) => {
 	if (secret) {
 		event.locals.person = await personOfSession(secret);
 		event.locals.sessionId = event.locals.person ? secret : null;
+		if (!event.locals.person) event.locals.sessionEnd = await whySessionEnded(secret);
 	}
 	const { person } = event.locals;
 	const led = person && (await mustSetUpFactor(person)) ? leadToSetUp(event) : null;

@@ -63,6 +63,9 @@ test('somebody is invited, joins by the letter’s link, gets another role, and 
 	await expect(other.getByRole('link', { name: 'Books' }).first()).toHaveCount(0);
 	await theirs.request.get(link).then((answer) => expect(answer.status()).toBe(410));
 
+	await openForm(other, '/jobs/new');
+	await other.getByLabel('Customer name').fill('Ida Fernleigh');
+
 	await page.goto('/people');
 	await page.getByRole('link', { name }).click();
 	await expectNoViolations(page);
@@ -73,14 +76,14 @@ test('somebody is invited, joins by the letter’s link, gets another role, and 
 	await page.getByRole('button', { name: 'Change the role' }).click();
 	await expect(page.getByText(`${name} is an engineer already: nothing was changed.`)).toBeVisible();
 	await expect(page.getByText('The role is changed.')).toHaveCount(0);
-	await other
-		.getByRole('link', { name: 'Batteries' })
-		.filter({ visible: true })
-		.or(other.getByText('Menu'))
-		.first()
-		.click();
+	await other.getByRole('button', { name: 'Begin the job' }).click();
+	await expect(other.getByText(/^You are signed out, and nothing was saved/)).toBeVisible();
+	await expect(other.getByLabel('Customer name')).toHaveValue('Ida Fernleigh');
+	await expectNoViolations(other);
 	await other.goto('/batteries');
 	await expect(other).toHaveURL(/\/sign-in/);
+	await expect(other.getByText('Your role was changed')).toBeVisible();
+	await expectNoViolations(other);
 	await signInWith(other, { email, password: PASSWORD });
 	expect((await other.goto('/books'))?.status()).toBe(200);
 
@@ -91,6 +94,7 @@ test('somebody is invited, joins by the letter’s link, gets another role, and 
 	await expectNoViolations(page);
 	await other.reload();
 	await expect(other).toHaveURL(/\/sign-in/);
+	await expect(other.getByText('Your access to the workshop was ended.')).toBeVisible();
 	expect((await theirs.request.get('/api/v1/places')).status()).toBe(401);
 	await theirs.close();
 

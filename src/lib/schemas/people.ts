@@ -4,6 +4,9 @@ import { email, idSchema, versionSchema, words } from './fields';
 export const ROLES = ['installer', 'engineer', 'manager', 'customer'] as const;
 export type Role = (typeof ROLES)[number];
 
+/** Why a session is over. */
+export type SessionEnd = 'role-changed' | 'left' | 'factor-reset' | 'too-old' | 'idle' | 'signed-out';
+
 /** Those who work in the shop. */
 export const STAFF_ROLES = ['installer', 'engineer', 'manager'] as const satisfies readonly Role[];
 export type StaffRole = (typeof STAFF_ROLES)[number];

@@ -5,7 +5,14 @@ import { sha256 } from '../hash';
 import { mailSignInLink } from './mailed-link';
 import { hashPassword, passwordMatches } from './passwords';
 import { giveBack, spend } from './rate-limit';
-import { ABSOLUTE_MS, IDLE_MS, closeSession, openSession, personOfSession } from './sessions';
+import {
+	ABSOLUTE_MS,
+	IDLE_MS,
+	closeSession,
+	openSession,
+	personOfSession,
+	whySessionEnded
+} from './sessions';
 
 useTestDatabase();
 
@@ -20,14 +27,15 @@ describe('a session', () => {
 	});
 
 	it.each([
-		['was idle for half an hour', { lastSeenAt: ago(IDLE_MS + 1000) }],
-		['is eight hours old', { createdAt: ago(ABSOLUTE_MS + 1000) }],
-		['was ended', { revokedAt: new Date() }]
-	])('is over once it %s', async (_what, change) => {
+		['was idle for half an hour', { lastSeenAt: ago(IDLE_MS + 1000) }, 'idle'],
+		['is eight hours old', { createdAt: ago(ABSOLUTE_MS + 1000) }, 'too-old'],
+		['was ended', { revokedAt: new Date() }, 'signed-out']
+	])('is over once it %s, and says so', async (_what, change, end) => {
 		const { installer } = await makeCrew();
 		const secret = await openSession(installer.id);
 		await Session.update(change, { where: { id: sha256(secret) }, silent: true });
 		expect(await personOfSession(secret)).toBeNull();
+		expect(await whySessionEnded(secret)).toBe(end);
 	});
 
 	it('is over at sign-out, and when its person has left', async () => {

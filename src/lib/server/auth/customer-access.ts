@@ -21,7 +21,7 @@ async function findCustomerSentTo(email: string, transaction: Transaction): Prom
 
 /** A customer's sign-in goes with the address that the shop has of them: whoever reads the old one is out at once. */
 async function moveTo(person: Person, email: string, transaction: Transaction): Promise<Person> {
-	await endSessions(person.id, transaction);
+	await endSessions(person.id, 'signed-out', transaction);
 	return person.update({ email }, { transaction });
 }
 

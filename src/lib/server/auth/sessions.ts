@@ -1,6 +1,6 @@
 import { randomBytes } from 'node:crypto';
 import type { Transaction } from 'sequelize';
-import type { SignedInPerson } from '$lib/schemas/people';
+import type { SessionEnd, SignedInPerson } from '$lib/schemas/people';
 import { connection } from '../db/connection';
 import { Person, Session, SignInLink, SignInStep, Workshop } from '../db/models';
 import { inTransaction } from '../db/transaction';
@@ -39,8 +39,15 @@ export async function closeSession(secret: string): Promise<void> {
 }
 
 /** Ends every session of a person, on any device, from their next request on. */
-export async function endSessions(personId: number, transaction: Transaction): Promise<void> {
-	await Session.update({ revokedAt: new Date() }, { where: { personId, revokedAt: null }, transaction });
+export async function endSessions(
+	personId: number,
+	endReason: SessionEnd,
+	transaction: Transaction
+): Promise<void> {
+	await Session.update(
+		{ revokedAt: new Date(), endReason },
+		{ where: { personId, revokedAt: null }, transaction }
+	);
 	await SignInLink.destroy({ where: { personId }, transaction });
 	await SignInStep.destroy({ where: { personId }, transaction });
 }
@@ -52,13 +59,23 @@ async function note(personId: number, action: string, transaction: Transaction):
 	await record({ workshopId, personId, action, subjectType: 'person', subjectId: personId }, transaction);
 }
 
+function endOf(session: Session, now: number): SessionEnd | null {
+	if (session.revokedAt) return session.endReason ?? 'signed-out';
+	if (now - session.createdAt.getTime() > ABSOLUTE_MS) return 'too-old';
+	return now - session.lastSeenAt.getTime() > IDLE_MS ? 'idle' : null;
+}
+
+/** Why a session that lets nobody in is over; only who holds its secret is told. */
+export async function whySessionEnded(secret: string): Promise<SessionEnd> {
+	const session = await Session.findByPk(sha256(secret));
+	return (session && endOf(session, Date.now())) ?? 'signed-out';
+}
+
 /** Who a session belongs to, while it lives; null once it is idle, too old, revoked, or its person has left. */
 export async function personOfSession(secret: string): Promise<SignedInPerson | null> {
 	const session = await Session.findByPk(sha256(secret));
 	const now = Date.now();
-	if (!session || session.revokedAt) return null;
-	if (now - session.createdAt.getTime() > ABSOLUTE_MS) return null;
-	if (now - session.lastSeenAt.getTime() > IDLE_MS) return null;
+	if (!session || endOf(session, now) !== null) return null;
 	const person = await Person.findByPk(session.personId);
 	if (!person?.active) return null;
 	const workshop = await Workshop.findByPk(person.workshopId);

@@ -102,8 +102,8 @@ describe('the local mailbox of a demonstration', () => {
 		expect(all).toEqual([
 			expect.stringMatching(/^A customer asks that their data be deleted > /),
 			expect.stringMatching(/^Join .* > wren-/),
-			expect.stringContaining(`> ${installer.email}`),
-			expect.stringMatching(/^Your request for deletion: .* > customer-/)
+			expect.stringMatching(/^Your request for deletion: .* > customer-/),
+			expect.stringContaining(`> ${installer.email}`)
 		]);
 		expect(await subjectsFor(installer)).toEqual([expect.stringContaining(`> ${installer.email}`)]);
 		expect((await listErasures(manager))[0]).toMatchObject({ letter: { state: 'sent' } });

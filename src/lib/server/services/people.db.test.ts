@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { readTokens } from '../../../../tests/support/invited';
 import { makeCrew, useTestDatabase, type Crew } from '../../../../tests/support/services';
 import { passwordMatches } from '../auth/passwords';
-import { openSession, personOfSession } from '../auth/sessions';
+import { openSession, personOfSession, whySessionEnded } from '../auth/sessions';
 import { AuditEntry, Invitation, OutgoingMail, Person } from '../db/models';
 import { tokenHash } from '../hash';
 import { acceptInvitation, invite, inviteAgain, openInvitation, withdrawInvitation } from './invitations';
@@ -132,6 +132,7 @@ describe('a role', () => {
 		const changed = await changeRole(crew.manager, crew.installer.id, { role: 'engineer', version: 0 });
 		expect(changed).toMatchObject({ role: 'engineer', version: 1 });
 		expect(await personOfSession(secret)).toBeNull();
+		expect(await whySessionEnded(secret)).toBe('role-changed');
 		const again = await openSession(crew.installer.id);
 		expect(await personOfSession(again)).toMatchObject({ role: 'engineer' });
 	});
@@ -170,6 +171,7 @@ describe('somebody who leaves', () => {
 		const secrets = [await openSession(crew.installer.id), await openSession(crew.installer.id)];
 		const { version } = await leave(crew.manager, crew.installer.id, 0);
 		for (const secret of secrets) expect(await personOfSession(secret)).toBeNull();
+		expect(await whySessionEnded(secrets[0]!)).toBe('left');
 		const row = (await listPeople(crew.manager)).people.find(({ id }) => id === crew.installer.id);
 		expect(row).toMatchObject({ name: crew.installer.name, leftAt: expect.any(String) as string });
 		expect(row!.lastSignedInAt).not.toBeNull();

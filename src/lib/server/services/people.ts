@@ -90,7 +90,7 @@ export function changeRole(
 		const before = person.role;
 		if (before === role && person.version === version) return;
 		await saveVersioned(person, 'person', version, { role }, transaction);
-		await endSessions(person.id, transaction);
+		await endSessions(person.id, 'role-changed', transaction);
 		await recordBy(manager, 'person.role-changed', subjectOf(person), transaction, { before, role });
 	});
 }
@@ -108,7 +108,7 @@ export function leave(manager: SignedInPerson, personId: number, version: number
 		if (person.role === 'manager') await requireAnotherManager(person, transaction);
 		const left = { active: false, leftAt: new Date() };
 		await saveVersioned(person, 'person', version, left, transaction);
-		await endSessions(person.id, transaction);
+		await endSessions(person.id, 'left', transaction);
 		await recordBy(manager, 'person.left', subjectOf(person), transaction);
 	});
 }

@@ -133,7 +133,7 @@ export async function resetFactor(manager: SignedInPerson, personId: number): Pr
 		if (!(await dropSecondFactor(person.id))) {
 			throw new AppError('conflict', `${person.name} has no second factor.`);
 		}
-		await endSessions(person.id, transaction);
+		await endSessions(person.id, 'factor-reset', transaction);
 		const about = {
 			name: person.name,
 			by: manager.name,

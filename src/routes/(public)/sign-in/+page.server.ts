@@ -14,7 +14,10 @@ export const load: PageServerLoad = async ({ locals, url }) => {
 	const [password, link] = await Promise.all([loadForm(signInSchema), loadForm(signInLinkSchema)]);
 	password.id = 'password';
 	link.id = 'link';
-	return { password, link, mailed: url.searchParams.has('mailed'), isDemo: env().SOAKLINE_DEMO === '1' };
+	return {
+		...{ password, link, sessionEnd: locals.sessionEnd },
+		...{ mailed: url.searchParams.has('mailed'), isDemo: env().SOAKLINE_DEMO === '1' }
+	};
 };
 
 export const actions: Actions = {

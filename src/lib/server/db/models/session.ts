@@ -6,7 +6,8 @@ import {
 	type InferCreationAttributes,
 	type Sequelize
 } from 'sequelize';
-import { moment, optionalMoment, reference } from './base';
+import type { SessionEnd } from '$lib/schemas/people';
+import { moment, optionalMoment, optionalText, reference } from './base';
 
 export class Session extends Model<InferAttributes<Session>, InferCreationAttributes<Session>> {
 	declare id: string;
@@ -14,6 +15,8 @@ export class Session extends Model<InferAttributes<Session>, InferCreationAttrib
 	declare createdAt: Date;
 	declare lastSeenAt: Date;
 	declare revokedAt: CreationOptional<Date | null>;
+	/** Why somebody else ended it. */
+	declare endReason: CreationOptional<SessionEnd | null>;
 }
 
 export function initSession(sequelize: Sequelize): void {
@@ -23,7 +26,8 @@ export function initSession(sequelize: Sequelize): void {
 			personId: reference,
 			createdAt: moment,
 			lastSeenAt: moment,
-			revokedAt: optionalMoment
+			revokedAt: optionalMoment,
+			endReason: optionalText
 		},
 		{ sequelize, tableName: 'sessions', timestamps: false, modelName: 'Session' }
 	);
