@@ -65,6 +65,8 @@ test(
 		await page.getByLabel('Yes, delete what is held about me').check();
 		await page.getByRole('button', { name: 'Ask for deletion' }).click();
 		await expect(page.getByText(/^You asked for it on/)).toBeVisible();
+		await expect(page).toHaveTitle(/^What is held about you/);
+		await expect(page.locator(':focus')).toContainText('You asked for it on');
 
 		const context = await browser.newContext({ baseURL: baseURL! });
 		const manager = await context.newPage();
@@ -74,9 +76,15 @@ test(
 		await manager.getByRole('radio', { name: 'Refuse it' }).check();
 		await manager.getByRole('button', { name: 'Decide, and tell the customer' }).click();
 		await expect(manager.getByText('Reason is missing').first()).toBeVisible();
+		await expect(manager).toHaveTitle(/^Error: Requests for deletion/);
 		await manager.getByLabel('Reason', { exact: true }).fill('The warranty runs until June.');
 		await manager.getByRole('button', { name: 'Decide, and tell the customer' }).click();
 		await expect(manager.getByText('“The warranty runs until June.”')).toBeVisible();
+		await expect(manager).toHaveTitle(/^Requests for deletion/);
+		await expect(manager.locator(':focus')).toHaveText(
+			/^Refused\. A letter with the reason is on its way\.$/
+		);
+		await expectNoViolations(manager);
 		await expect(
 			manager.getByText(/^Letter to the customer: (Waiting to be sent|Sent )/).first()
 		).toBeVisible();
@@ -138,6 +146,7 @@ test(
 		await expect(desk.getByRole('heading', { name: `${customerName} asks for deletion` })).toBeVisible();
 		await desk.getByRole('radio', { name: 'Grant it' }).check();
 		await desk.getByRole('button', { name: 'Decide, and tell the customer' }).click();
+		await expect(desk.getByText(/^Granted, and everything is deleted\. A letter/)).toBeVisible();
 		await expect(desk.getByText(`${customerName} asks for deletion`)).toHaveCount(0);
 		await desk.goto(`/jobs/${jobId}`);
 		await expect(desk.getByText('(erased)').first()).toBeVisible();

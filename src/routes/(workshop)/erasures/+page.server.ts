@@ -11,7 +11,8 @@ export const load: PageServerLoad = async (event) => {
 	const asked = event.url.searchParams.get('request');
 	const chosen = waiting.find(({ id }) => String(id) === asked) ?? waiting[0] ?? null;
 	const known = chosen ? { erasureId: chosen.id, version: chosen.version } : {};
-	return { rows, chosen, form: await loadForm(erasureFormSchema, known) };
+	const done = event.url.searchParams.get('done');
+	return { rows, chosen, done, form: await loadForm(erasureFormSchema, known) };
 };
 
 export const actions: Actions = {
@@ -20,8 +21,8 @@ export const actions: Actions = {
 			action: 'erasures.decide',
 			schema: erasureFormSchema,
 			save: async (person, { erasureId, ...decision }) => {
-				await decideErasure(person, erasureId, decision);
-				return `/erasures#request-${erasureId}`;
+				const { state, letter } = await decideErasure(person, erasureId, decision);
+				return `/erasures?done=${state}${letter ? '' : '-untold'}`;
 			}
 		})
 };

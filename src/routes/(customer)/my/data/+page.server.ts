@@ -6,7 +6,11 @@ import type { Actions, PageServerLoad } from './$types';
 
 export const load: PageServerLoad = async (event) => {
 	const person = guard(event, 'erasures.ask');
-	return { erasure: await orPageError(getMyErasure(person)), form: await loadForm(askErasureSchema) };
+	return {
+		erasure: await orPageError(getMyErasure(person)),
+		isJustAsked: event.url.searchParams.has('asked'),
+		form: await loadForm(askErasureSchema)
+	};
 };
 
 export const actions: Actions = {
@@ -16,7 +20,7 @@ export const actions: Actions = {
 			schema: askErasureSchema,
 			save: async (person) => {
 				await askErasure(person);
-				return '/my/data#deletion';
+				return '/my/data?asked#deletion';
 			}
 		})
 };
