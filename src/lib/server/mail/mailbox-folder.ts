@@ -1,4 +1,4 @@
-import { open, readFile, readdir } from 'node:fs/promises';
+import { open, readFile, readdir, rm } from 'node:fs/promises';
 import { join } from 'node:path';
 import { simpleParser, type ParsedMail } from 'mailparser';
 
@@ -44,4 +44,12 @@ export async function readKeptLetter(file: string): Promise<ParsedMail> {
 		skipTextToHtml: true,
 		skipImageLinks: true
 	});
+}
+
+/** Takes letters out of the folder for good, each as often as it lies there. */
+export async function removeKeptLetters(folder: string, messageIds: readonly string[]): Promise<void> {
+	const wanted = new Set(messageIds);
+	const kept = await listKeptLetters(folder, Infinity);
+	const theirs = kept.filter(({ messageId }) => wanted.has(messageId));
+	await Promise.all(theirs.map(({ file }) => rm(file, { force: true })));
 }

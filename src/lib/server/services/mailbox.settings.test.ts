@@ -1,9 +1,11 @@
-import { writeFile } from 'node:fs/promises';
+import { readFile, rm, writeFile } from 'node:fs/promises';
 import { join } from 'node:path';
 import { describe, expect, it } from 'vitest';
+import { makeKnownCustomer } from '../../../../tests/support/known-customer';
 import { post } from '../../../../tests/support/letters';
 import { makeCrew, useTestDatabase } from '../../../../tests/support/services';
 import { makeSentSheet } from '../../../../tests/support/sheets';
+import type { ErasureView } from '$lib/schemas/erasures';
 import type { SignedInPerson } from '$lib/schemas/people';
 import { mailSignInLink } from '../auth/mailed-link';
 import { Customer, OutgoingMail, SecondFactor } from '../db/models';
@@ -108,6 +110,34 @@ describe('the local mailbox of a demonstration', () => {
 		expect(await subjectsFor(installer)).toEqual([expect.stringContaining(`> ${installer.email}`)]);
 		expect((await listErasures(manager))[0]).toMatchObject({ letter: { state: 'sent' } });
 	});
+
+	it('loses what was written to and of an erased person, and shows nothing of it that comes late', async () => {
+		const { crew, customer, known, jobId } = await makeKnownCustomer();
+		await askErasure(customer);
+		await sendDue();
+		const letters = await OutgoingMail.findAll({ where: { jobId } });
+		const ids = letters.map(({ messageId }) => messageId);
+		const folder = env().MAILBOX_DIR!;
+		const findTheirs = async () =>
+			(await listKeptLetters(folder, 500)).filter(({ messageId }) => ids.includes(messageId));
+		const files = (await findTheirs()).map(({ file }) => file);
+		const kinds = new Set(letters.map(({ kind }) => kind));
+		expect([...kinds].sort()).toEqual(['answer', 'question', 'sheet']);
+		expect(files).toHaveLength(letters.length);
+		const texts = await Promise.all(files.map((file) => readFile(file)));
+		const [{ id, version }] = (await listErasures(crew.manager)) as [ErasureView];
+		await decideErasure(crew.manager, id, { decision: 'grant', reason: '', version });
+		expect(await findTheirs()).toEqual([]);
+		await Promise.all(files.map((file, at) => writeFile(file, texts[at]!)));
+		await sendDue();
+		const shown = await listLetters(crew.manager);
+		expect(shown.map(({ subject }) => subject).sort()).toEqual([
+			'A customer asks that their data be deleted',
+			`Your data was deleted: ${crew.manager.workshopName}`
+		]);
+		expect(JSON.stringify(shown)).not.toContain(known.email);
+		await Promise.all(files.map((file) => rm(file)));
+	}, 60_000);
 
 	it('keeps a letter without a sheet, such as a link to sign in, for its reader alone', async () => {
 		const { installer, manager, workshopId } = await makeCrew();

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import type { SheetStatus } from '$lib/schemas/sheets';
-import { listSheetFacts, sayLetter, saySheetState } from './sheet-words';
+import { listSheetFacts, sayLetter, saySending, saySheetState } from './sheet-words';
 
 const AT = '2026-03-04T12:00:00.000Z';
 const status = (changes: Partial<SheetStatus> = {}): SheetStatus => ({
@@ -27,6 +27,11 @@ describe('what became of a sheet', () => {
 		[{ ...ACKNOWLEDGED, withdrawnAt: AT }, 'Acknowledged, then withdrawn']
 	])('%j is said as "%s"', (changes, words) => {
 		expect(saySheetState(status(changes))).toBe(words);
+	});
+
+	it('says to whom it went, and that this is erased where it is', () => {
+		expect(saySending(status())).toMatch(/^To a@b\.example by Noor, 4 March 2026, /);
+		expect(saySending(status({ sentTo: '' }))).toMatch(/^To \(erased\) by Noor, /);
 	});
 
 	it('says of the letter whether it waits, waits again, went or failed', () => {

@@ -19,6 +19,13 @@ export function saySheetState(sheet: SheetStatus): string {
 	return sheet.mail === 'sent' ? 'Sent, not opened' : 'On its way';
 }
 
+/** Whom it went to; the address goes with the customer's data. */
+export const sayReader = ({ sentTo }: SheetStatus): string => sentTo || '(erased)';
+
+/** To whom, by whom and when. */
+export const saySending = (sheet: SheetStatus): string =>
+	`To ${sayReader(sheet)} by ${sheet.sentBy}, ${formatDateTime(sheet.createdAt)}`;
+
 /** The sheet's story as a list of figures. */
 export function listSheetFacts(sheet: SheetStatus): { label: string; value: string; note?: string }[] {
 	const { mailError, linkFirstOpenedAt, acknowledgedAt, acknowledgedBy, withdrawnAt } = sheet;
