@@ -105,6 +105,8 @@ test(
 		await page.getByLabel('Rules in').selectOption('north-america');
 		await expect(page.getByText(/NFPA 1192/)).toBeVisible();
 		await expect(page.getByText('An estimate, not a certificate')).toBeVisible();
+		const forged = await page.request.post('/shop/retention', { form: { years: '4', version: '0' } });
+		expect(await forged.text()).toContain('Choose how long they are kept: 2, 3, 5, 7 or 10 years');
 		await page.goto('/shop/retention');
 		await expectNoViolations(page);
 		await page.getByLabel('Keep them').selectOption('2');

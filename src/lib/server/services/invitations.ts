@@ -42,7 +42,10 @@ function refuseAddress(message: string): AppError {
 	return new AppError('conflict', message, [{ path: 'email', message }]);
 }
 
-/** One address signs in once, wherever; and one invitation at a time. */
+/**
+ * One address signs in once, and has one invitation at a time. That it belongs to somebody of another workshop is not
+ * said here: whoever reads its letter is told when they follow the link.
+ */
 async function requireFreeAddress(
 	email: string,
 	workshopId: number,
@@ -56,7 +59,9 @@ async function requireFreeAddress(
 				: `${known.name} had this address and has left: bring them back instead.`
 		);
 	}
-	if (known) throw refuseAddress('This address cannot be invited: it signs in already. Use another one.');
+	if (known?.workshopId === workshopId) {
+		throw refuseAddress('A customer of yours signs in with this address: use another one.');
+	}
 	const where = { email, workshopId, acceptedAt: null, withdrawnAt: null };
 	if ((await Invitation.count({ where, transaction })) > 0) {
 		throw refuseAddress('This address has an invitation already: send that one again, or withdraw it.');

@@ -95,14 +95,24 @@ describe('an invitation', () => {
 		});
 	});
 
-	it('is for an address that signs in nowhere yet, and for each once', async () => {
-		const [crew, other] = [await makeCrew(), await makeCrew()];
+	it('is for an address that does not sign in here yet, and for each once', async () => {
+		const crew = await makeCrew();
 		const { email } = await ask(crew);
-		const taken = [email, crew.installer.email, other.installer.email, crew.customer.email];
+		const taken = [email, crew.installer.email, crew.customer.email];
 		for (const address of taken) {
 			const again = invite(crew.manager, { name: 'Again', email: address, role: 'installer' });
 			await expect(again).rejects.toMatchObject({ code: 'conflict', problems: [{ path: 'email' }] });
 		}
+	});
+
+	it('says nothing of somebody of another workshop, and makes no second person of them', async () => {
+		const [crew, other] = [await makeCrew(), await makeCrew()];
+		const { email } = other.installer;
+		const asked = await invite(crew.manager, { name: 'Wren Tollgate', email, role: 'installer' });
+		expect(asked).toMatchObject({ email, role: 'installer', isTooOld: false });
+		const [token = ''] = await readTokens(email, PATH);
+		await expect(acceptInvitation(token, PASSWORD)).rejects.toMatchObject({ code: 'conflict' });
+		expect(await Person.findAll({ where: { email } })).toMatchObject([{ workshopId: other.workshopId }]);
 	});
 
 	it('of two workshops makes one person, of the one that was accepted first', async () => {

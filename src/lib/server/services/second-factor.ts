@@ -73,7 +73,7 @@ export async function beginSetUp(person: SignedInPerson): Promise<void> {
 }
 
 const WRONG_CODE =
-	'This code is not right. Look whether the clock of the telephone is, and take the next code.';
+	'This code is not right. Check that the telephone’s clock is right, and take the next code.';
 
 function wrongCode(): AppError {
 	return new AppError('invalid_input', WRONG_CODE, [{ path: 'code', message: WRONG_CODE }]);
