@@ -106,7 +106,7 @@ test(
 		await expect(page.getByText(/NFPA 1192/)).toBeVisible();
 		await expect(page.getByText('An estimate, not a certificate')).toBeVisible();
 		const forged = await page.request.post('/shop/retention', { form: { years: '4', version: '0' } });
-		expect(await forged.text()).toContain('Choose how long they are kept: 2, 3, 5, 7 or 10 years');
+		expect(await forged.text()).toContain('Choose 2, 3, 5, 7 or 10 years, or no limit.');
 		await page.goto('/shop/retention');
 		await expectNoViolations(page);
 		await page.getByLabel('Keep them').selectOption('2');

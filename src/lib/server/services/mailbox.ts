@@ -1,3 +1,4 @@
+import { ERASED } from '$lib/schemas/erasures';
 import type { LetterKind } from '$lib/schemas/letters';
 import type { LetterRow, LetterView } from '$lib/schemas/mailbox';
 import type { SignedInPerson } from '$lib/schemas/people';
@@ -7,7 +8,6 @@ import { notFound } from '../errors';
 import { listKeptLetters, readKeptLetter } from '../mail/mailbox-folder';
 import { allow, mayDo, type Action } from '../policies';
 import { presentLetterLines, presentLetterRow, shortMessageId } from '../presenters/letters';
-import { ERASED } from './erasing/scrub';
 
 /** Older letters stay in the folder and are not listed. */
 const MOST_LISTED = 200;

@@ -90,12 +90,12 @@ import { migration as m131 } from './131-trace-loggers';
 import { migration as m132 } from './132-fits';
 import { migration as m133 } from './133-coefficients-fit';
 import { migration as m134 } from './134-coefficient-books-hands-in';
-import { migration as m150 } from './150-field-note-strikes';
-import { migration as m151 } from './151-field-note-strikes-no-update';
-import { migration as m152 } from './152-field-note-strikes-no-delete';
 import { migration as m140 } from './140-review-rows-fitted-under';
 import { migration as m145 } from './145-outgoing-mails-erasure';
 import { migration as m146 } from './146-sessions-end-reason';
+import { migration as m150 } from './150-field-note-strikes';
+import { migration as m151 } from './151-field-note-strikes-no-update';
+import { migration as m152 } from './152-field-note-strikes-no-delete';
 import { migration as m160 } from './160-prediction-checks';
 import { migration as m161 } from './161-prediction-checks-traces';
 import { migration as m162 } from './162-outgoing-mails-handed-over';
@@ -195,12 +195,12 @@ export const migrations: Migration[] = [
 	m132,
 	m133,
 	m134,
-	m150,
-	m151,
-	m152,
 	m140,
 	m145,
 	m146,
+	m150,
+	m151,
+	m152,
 	m160,
 	m161,
 	m162
