@@ -46,6 +46,7 @@ const ask = (event: RequestEvent) =>
 	);
 
 export const actions: Actions = {
-	...{ acknowledge, ask },
+	acknowledge,
+	ask,
 	send: async (event) => ((await isQuestion(event)) ? ask(event) : acknowledge(event))
 };

@@ -43,6 +43,7 @@ const ask = (event: Event) =>
 	);
 
 export const actions: Actions = {
-	...{ acknowledge, ask },
+	acknowledge,
+	ask,
 	send: async (event) => ((await isQuestion(event)) ? ask(event) : acknowledge(event))
 };
