@@ -56,7 +56,13 @@ test('a second factor is set up, asked for after password and link, and reset by
 		generate({ secret: key, epoch: Math.floor(Date.now() / 1000) + 30 * stepsOn });
 	await theirs.getByLabel('Code').fill('000 00');
 	await theirs.getByRole('button', { name: 'Turn it on' }).click();
-	await expect(theirs.getByText(/^This code is not right/)).toBeVisible();
+	const wrong = theirs.getByRole('link', { name: /^This code is not right/ });
+	await expect(wrong).toBeVisible();
+	await expect(theirs.getByRole('region', { name: 'Something here needs another look' })).toBeFocused();
+	await wrong.click();
+	await expect(theirs.getByLabel('Code')).toBeFocused();
+	await theirs.getByRole('button', { name: 'Turn it on' }).click();
+	await expect(theirs.getByRole('link', { name: 'Code is missing.' })).toBeVisible();
 	await theirs.getByLabel('Code').fill(await codeNow(0));
 	await theirs.getByRole('button', { name: 'Turn it on' }).click();
 	await expect(theirs.getByText('this page shows them once')).toBeVisible();

@@ -1,4 +1,4 @@
-import { redirect, type RequestEvent } from '@sveltejs/kit';
+import { fail, redirect, type RequestEvent } from '@sveltejs/kit';
 import { secondFactorCodeSchema } from '$lib/schemas/second-factor';
 import type { SignedInPerson } from '$lib/schemas/people';
 import { doOrSay } from '$lib/server/http/do-or-say';
@@ -22,11 +22,17 @@ export const load: PageServerLoad = async (event) => {
 };
 
 /** What a code brings: recovery codes, which the answer to this one form shows and no page again. */
-const withCode = (event: RequestEvent, work: (person: SignedInPerson, code: string) => Promise<string[]>) =>
-	doOrSay(event, 'second-factor.own', async (person, sent) => {
+async function withCode(
+	event: RequestEvent,
+	of: 'confirm' | 'renew' | 'off',
+	work: (person: SignedInPerson, code: string) => Promise<string[]>
+) {
+	const answer = await doOrSay(event, 'second-factor.own', async (person, sent) => {
 		const { code } = validate(secondFactorCodeSchema, { code: sent.get('code') ?? undefined });
 		return { codes: await work(person, code) };
 	});
+	return 'codes' in answer ? answer : fail(answer.status, { ...answer.data, of });
+}
 
 export const actions: Actions = {
 	begin: (event) =>
@@ -34,10 +40,10 @@ export const actions: Actions = {
 			await beginSetUp(person);
 			redirect(303, '/second-factor');
 		}),
-	confirm: (event) => withCode(event, confirmSetUp),
-	renew: (event) => withCode(event, renewRecoveryCodes),
+	confirm: (event) => withCode(event, 'confirm', confirmSetUp),
+	renew: (event) => withCode(event, 'renew', renewRecoveryCodes),
 	off: (event) =>
-		withCode(event, async (person, code) => {
+		withCode(event, 'off', async (person, code) => {
 			await turnOff(person, code);
 			redirect(303, '/second-factor?off');
 		})
