@@ -67,7 +67,6 @@ export type SendSheet = z.infer<typeof sendSheetSchema>;
 
 /** The form of the page knows the newest sheet that it was opened beside: its number, or 0 for none. */
 export const sendSheetFormSchema = sendSheetSchema.extend({ version: versionSchema });
-export type SendSheetForm = z.infer<typeof sendSheetFormSchema>;
 
 export const acknowledgeSchema = z.object({
 	name: words('Your name', 120),

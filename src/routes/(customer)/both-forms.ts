@@ -19,9 +19,11 @@ const OTHERS = {
 
 const copyOf = ({ request }: RequestEvent): Promise<FormData> => readPageForm(request.clone());
 
-/** Which of the two the Enter key sends: the question, once there is one. */
-export const isQuestion = async (event: RequestEvent): Promise<boolean> =>
-	String((await copyOf(event)).get('question') ?? '').trim() !== '';
+/** Which of the two the Enter key sends: the question, once there is one, or where only questions are left. */
+export async function isQuestion(event: RequestEvent): Promise<boolean> {
+	const sent = await copyOf(event);
+	return !sent.has('contentSha256') || String(sent.get('question') ?? '').trim() !== '';
+}
 
 /** Sends one of the two; what stands in the boxes of the other comes back with the page. */
 export async function sendOneOfTwo(

@@ -1,5 +1,6 @@
 import { randomUUID } from 'node:crypto';
 import { col, Op, type Transaction } from 'sequelize';
+import { ERASED } from '$lib/schemas/erasures';
 import type { LetterKind } from '$lib/schemas/letters';
 import { OutgoingMail } from '../db/models';
 import { outsideTransaction } from '../db/transaction';
@@ -93,7 +94,7 @@ export async function noteArrived(id: number, transaction: Transaction): Promise
 
 /** Whose data was deleted is not kept as the reader of the letter that says so either. */
 const withoutReader = ({ kind }: OutgoingMail): Partial<OutgoingMail> =>
-	kind === 'erasure-granted' ? { recipient: '(erased)', lastError: '', ...FORGOTTEN } : {};
+	kind === 'erasure-granted' ? { recipient: ERASED, lastError: '', ...FORGOTTEN } : {};
 
 /** Takes a letter for a while; gives until when, or null where another process was faster. */
 async function claim(mail: OutgoingMail): Promise<Date | null> {

@@ -1,9 +1,10 @@
 import type { FieldNotesView } from '$lib/schemas/field-notes';
-import { NOT_PROPOSED, type AgreedItem, type FittingView } from '$lib/schemas/fitting';
+import type { AgreedItem, FittingView } from '$lib/schemas/fitting';
 import type { PaperBlock, PaperPhoto } from '$lib/schemas/papers';
 import type { PreDrillView } from '$lib/schemas/pre-drill';
 import type { AcknowledgementView } from '$lib/schemas/sheets';
 import { formatDate, formatDateTime } from '$lib/format/dates';
+import { isNotNoted, sayFitted } from '$lib/format/fitted';
 import { sayDecider } from '$lib/format/recommendations';
 import { sayVerdict } from '$lib/format/verdict';
 import { PRE_DRILL_LABELS } from '$lib/schemas/pre-drill';
@@ -27,13 +28,13 @@ const NOT_NOTED = 'not noted';
 /** What was agreed and what was fitted, one beside the other. */
 export function tellFitted({ agreed, installation }: MountRecord['fitting']): PaperBlock[] {
 	const { differences, note } = installation;
-	const fittedOf = ({ key, agreed }: AgreedItem): string =>
-		differences.find((difference) => difference.key === key)?.fitted ??
-		(agreed === NOT_PROPOSED ? NOT_NOTED : AS_AGREED);
-	const sentence =
-		differences.length === 0
-			? 'Everything was fitted as agreed.'
-			: `${differences.length === 1 ? 'One thing is' : `${differences.length} things are`} not as agreed. The estimate was made for what was agreed.`;
+	const fittedOf = (item: AgreedItem): string =>
+		differences.find(({ key }) => key === item.key)?.fitted ??
+		(isNotNoted(item, differences) ? NOT_NOTED : AS_AGREED);
+	const ofEstimate = 'The estimate was made for what was agreed.';
+	const sentence = [sayFitted(agreed, differences), ...(differences.length > 0 ? [ofEstimate] : [])].join(
+		' '
+	);
 	return [
 		{
 			...{ kind: 'table', title: 'What was agreed, and what was fitted', empty: '' },

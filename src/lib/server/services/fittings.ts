@@ -127,7 +127,7 @@ export async function saveFitting(
 		let installation = await Installation.findOne({ where: { mountId }, lock: true, transaction });
 		if (installation) {
 			if (version === null) throw changedMeanwhile('fitting');
-			await refuseAfterwards(installation, fitted.fittedOn);
+			if (fitted.fittedOn !== installation.fittedOn) await refuseAfterwards(installation, fitted.fittedOn);
 			await saveVersioned(installation, 'fitting', version, fitted, transaction);
 		} else {
 			const agreed = await findAgreed(mount);
@@ -159,7 +159,9 @@ export async function finishFollowUp(
 		const installation = await Installation.findByPk(followUp.installationId, { transaction });
 		const mount = await findStandingMount(person, installation!.mountId);
 		if (isDone === ((followUp.doneOn ?? null) !== null)) return show(mount);
-		const done = isDone ? { doneOn: today(), doneBy: person.name } : { doneOn: null, doneBy: null };
+		// Where the day began earlier than ours, it was fitted on a day that has not come here.
+		const doneOn = [today(), installation!.fittedOn].sort().at(-1)!;
+		const done = isDone ? { doneOn, doneBy: person.name } : { doneOn: null, doneBy: null };
 		await saveVersioned(followUp, 'follow-up', version, done, transaction);
 		await refreshReview('installation', followUp.installationId, transaction);
 		const subject = { type: 'mount', id: mount.id };

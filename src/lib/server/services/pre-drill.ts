@@ -140,6 +140,19 @@ export async function signPreDrill(
 	});
 }
 
+/** Keeps the answers and puts a name under them, or does neither. */
+export async function saveAndSignPreDrill(
+	person: SignedInPerson,
+	mountId: number,
+	{ name, ...change }: PreDrillChange & Pick<PreDrillSignature, 'name'>
+): Promise<PreDrillView> {
+	allow(person, 'mounts.write');
+	return inTransaction(async () => {
+		const { version } = await savePreDrill(person, mountId, change);
+		return signPreDrill(person, mountId, { name, version });
+	});
+}
+
 /** What a recommendation for the mount says of its check: as it stands at this moment. */
 export async function snapshotPreDrill(person: SignedInPerson, mountId: number): Promise<PreDrillSnapshot> {
 	const { questions } = await findAsked(person, mountId);

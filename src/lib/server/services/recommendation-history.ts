@@ -12,12 +12,12 @@ export async function findFittedUnder({
 	return made.filter((each) => each.createdAt <= createdAt).at(-1) ?? made[0] ?? null;
 }
 
-/** The next recommendation of the same mount. */
-async function findNext({ id, jobId }: Recommendation, mountId: number): Promise<Recommendation | null> {
+/** The newest recommendation of the same mount, where it came later. */
+async function findNewer({ id, jobId }: Recommendation, mountId: number): Promise<Recommendation | null> {
 	const assessments = await Assessment.findAll({ where: { jobId, mountId }, attributes: ['id'] });
 	return Recommendation.findOne({
 		where: { id: { [Op.gt]: id }, assessmentId: assessments.map((each) => each.id) },
-		order: [['id', 'ASC']]
+		order: [['id', 'DESC']]
 	});
 }
 
@@ -26,15 +26,15 @@ export async function findAftermath(
 	recommendation: Recommendation,
 	mountId: number
 ): Promise<Pick<RecommendationView, 'replacedBy' | 'isFittedUnder'>> {
-	const next = await findNext(recommendation, mountId);
-	const author = next && (await Person.findByPk(next.createdBy));
+	const newer = await findNewer(recommendation, mountId);
+	const author = newer && (await Person.findByPk(newer.createdBy));
 	const installation = await Installation.findOne({ where: { mountId } });
 	const under = installation && (await findFittedUnder(installation));
 	return {
-		replacedBy: next && {
-			id: next.id,
+		replacedBy: newer && {
+			id: newer.id,
 			recommendedBy: author?.name ?? '',
-			createdAt: next.createdAt.toISOString()
+			createdAt: newer.createdAt.toISOString()
 		},
 		isFittedUnder: under?.id === recommendation.id
 	};

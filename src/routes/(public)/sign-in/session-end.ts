@@ -17,7 +17,7 @@ export const SESSION_END_WORDS: Readonly<Record<SessionEnd, { title: string; wor
 	'too-old': { title: 'You were signed out', words: 'A session ends after eight hours. Sign in to go on.' },
 	idle: {
 		title: 'You were signed out',
-		words: 'Nothing was asked of us for half an hour. Sign in to go on.'
+		words: 'It had not been used for half an hour. Sign in to go on.'
 	},
 	'signed-out': { title: 'You were signed out', words: 'Sign in to go on.' }
 };

@@ -140,7 +140,7 @@ async function sendTo(
 ): Promise<void> {
 	const { recipient, jobId } = change;
 	if (recipient === '') {
-		const message = 'The shop knows no e-mail of this customer: tell them otherwise, and note that.';
+		const message = 'The shop knows no e-mail of this customer: tell them in another way, and note that.';
 		throw new AppError('conflict', message, [{ path: 'body', message }]);
 	}
 	const { workshopId, workshopName } = person;

@@ -1,4 +1,5 @@
 import { formatDateTime } from '$lib/format/dates';
+import { ERASED } from '$lib/schemas/erasures';
 import type { SheetStatus } from '$lib/schemas/sheets';
 
 /** What became of the letter. */
@@ -20,7 +21,7 @@ export function saySheetState(sheet: SheetStatus): string {
 }
 
 /** Whom it went to; the address goes with the customer's data. */
-export const sayReader = ({ sentTo }: SheetStatus): string => sentTo || '(erased)';
+export const sayReader = ({ sentTo }: SheetStatus): string => sentTo || ERASED;
 
 /** To whom, by whom and when. */
 export const saySending = (sheet: SheetStatus): string =>

@@ -13,7 +13,7 @@ import { guard, orPageError } from '$lib/server/http/guard';
 import { pageId } from '$lib/server/http/page-id';
 import { listMountFiles } from '$lib/server/services/files';
 import { getJob } from '$lib/server/services/jobs';
-import { getPreDrill, savePreDrill, signPreDrill } from '$lib/server/services/pre-drill';
+import { getPreDrill, saveAndSignPreDrill, savePreDrill } from '$lib/server/services/pre-drill';
 import { openMount } from '../open-mount';
 import type { Actions, PageServerLoad } from './$types';
 
@@ -55,8 +55,10 @@ export const load: PageServerLoad = async (event) => {
 
 type SentForm = Record<string, unknown>;
 
-const keep = (person: SignedInPerson, mountId: number, form: SentForm): Promise<PreDrillView> =>
-	savePreDrill(person, mountId, { answers: fromPreDrillForm(form), version: form.version as number });
+const toChange = (form: SentForm) => ({
+	answers: fromPreDrillForm(form),
+	version: form.version as number
+});
 
 /** The form as the answers stand by now. */
 async function readNewest(person: SignedInPerson, mountId: number) {
@@ -71,7 +73,7 @@ export const actions: Actions = {
 			action: 'mounts.write',
 			schema: preDrillFormSchema,
 			save: async (person, form) => {
-				await keep(person, mountId, form);
+				await savePreDrill(person, mountId, toChange(form));
 				const questionKey = event.url.searchParams.get('photo');
 				return questionKey === null
 					? `/mounts/${mountId}/pre-drill?saved`
@@ -87,8 +89,7 @@ export const actions: Actions = {
 			action: 'mounts.write',
 			schema: preDrillSigningSchema,
 			save: async (person, form) => {
-				const { version } = await keep(person, mountId, form);
-				await signPreDrill(person, mountId, { name: String(form.signerName), version });
+				await saveAndSignPreDrill(person, mountId, { ...toChange(form), name: String(form.signerName) });
 				return `/mounts/${mountId}/pre-drill?signed`;
 			},
 			newest: (person) => readNewest(person, mountId)
