@@ -8,6 +8,7 @@ import { addMount } from './mounts';
 import {
 	getPreDrill,
 	listPreDrillQuestions,
+	saveAndSignPreDrill,
 	savePreDrill,
 	signPreDrill,
 	snapshotPreDrill
@@ -81,6 +82,20 @@ describe('the check before drilling', () => {
 		expect(changed).toMatchObject({ signedBy: null, signedAt: null });
 		const actions = await AuditEntry.findAll({ where: { subjectType: 'mount', subjectId: mountId } });
 		expect(actions.map(({ action }) => action)).toContain('mount.pre-drill-signed');
+	});
+
+	it('is kept and signed at once, or neither', async () => {
+		const { installer, mountId } = await makeMount();
+		const first = await savePreDrill(installer, mountId, { answers: { fuse: HOLDS }, version: 0 });
+		const nothing = { answers: {}, name: 'Ida Fenn', version: first.version };
+		await expect(saveAndSignPreDrill(installer, mountId, nothing)).rejects.toMatchObject({
+			code: 'conflict'
+		});
+		expect(await getPreDrill(installer, mountId)).toEqual(first);
+		const both = { ...nothing, answers: { fuse: MISSING } };
+		const signed = await saveAndSignPreDrill(installer, mountId, both);
+		expect(signed.signedBy).toBe('Ida Fenn');
+		expect(signed.open.find(({ key }) => key === 'fuse')).toMatchObject({ note: MISSING.note });
 	});
 
 	it('gives a recommendation what is open at that moment', async () => {
