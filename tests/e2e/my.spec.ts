@@ -81,9 +81,8 @@ test(
 		await manager.getByRole('button', { name: 'Decide, and tell the customer' }).click();
 		await expect(manager.getByText('“The warranty runs until June.”')).toBeVisible();
 		await expect(manager).toHaveTitle(/^Requests for deletion/);
-		await expect(manager.locator(':focus')).toHaveText(
-			/^Refused\. A letter with the reason is on its way\.$/
-		);
+		const told = 'Refused. A letter with the reason is on its way.';
+		await expect(manager.locator(':focus')).toContainText(told);
 		await expectNoViolations(manager);
 		await expect(
 			manager.getByText(/^Letter to the customer: (Waiting to be sent|Sent )/).first()
