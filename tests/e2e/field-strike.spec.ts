@@ -1,6 +1,6 @@
 import { expect, test, type Page } from '@playwright/test';
 import { ask, assessAll, makeAssessableJob } from './assessable-job';
-import { waitForLink } from './mailed';
+import { signInByLetter } from './mailed';
 import { newAddress } from './sent-sheet';
 import { expectNoViolations, ONCE, openForm, signInAs } from './support';
 
@@ -70,11 +70,7 @@ test(
 
 		const visit = await browser.newContext({ baseURL: baseURL! });
 		const own = await visit.newPage();
-		await own.goto('/sign-in');
-		await own.getByLabel('Your e-mail').fill(email);
-		await own.getByRole('button', { name: 'Send me a link' }).click();
-		await own.goto(await waitForLink(email, /\/sign-in\/link\/[\w-]{22}/));
-		await own.getByRole('button', { name: 'Sign in now' }).click();
+		await signInByLetter(own, email);
 		await expect(own).toHaveURL(/\/my$/);
 		await expect(own.getByText(/Struck out by the shop on .*: it does not count\./)).toBeVisible();
 		await expect(own.getByText('It holds 95')).toBeVisible();

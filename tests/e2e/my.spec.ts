@@ -1,6 +1,6 @@
 import { expect, test } from '@playwright/test';
 import { ask } from './assessable-job';
-import { waitForLink } from './mailed';
+import { signInByLetter } from './mailed';
 import { makeSendableJob, newAddress } from './sent-sheet';
 import { expectNoViolations, ONCE, openForm, signInAs } from './support';
 
@@ -115,11 +115,7 @@ test(
 		await ask(desk, 'PUT', `/api/v1/customers/${id}`, { name, phone: '', email, version });
 		await ask(desk, 'POST', `/api/v1/jobs/${jobId}/sheets`, { recommendationId, sendTo: email });
 
-		await page.goto('/sign-in');
-		await page.getByLabel('Your e-mail').fill(email);
-		await page.getByRole('button', { name: 'Send me a link' }).click();
-		await page.goto(await waitForLink(email, /\/sign-in\/link\/[\w-]{22}/));
-		await page.getByRole('button', { name: 'Sign in now' }).click();
+		await signInByLetter(page, email);
 		await expect(page).toHaveURL(/\/my$/);
 		await expect(page.getByRole('link', { name: /^Your battery on a hot day/ })).toBeVisible();
 		await page.goto('/my/data');

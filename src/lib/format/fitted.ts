@@ -1,5 +1,5 @@
 import { NOT_PROPOSED, type AgreedItem, type Difference } from '../schemas/fitting';
-import { joinWords } from './outlook-words';
+import { joinWords } from './join-words';
 
 /** Nothing was proposed for it, and nobody noted what was fitted. */
 export const isNotNoted = ({ key, agreed }: AgreedItem, differences: readonly Difference[]): boolean =>

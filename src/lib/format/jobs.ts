@@ -1,4 +1,5 @@
 import type { AssessedPart, JobStage } from '../schemas/jobs';
+import { joinWords } from './join-words';
 
 /** How far a job has come, as a table says it. */
 export const STAGE_WORDS: Record<JobStage, string> = {
@@ -24,17 +25,12 @@ const PART_WORDS: Record<AssessedPart, string> = {
 
 /** "the battery, the hot day and the day plan". */
 export function sayParts(parts: readonly AssessedPart[]): string {
-	return sayList(parts.map((part) => PART_WORDS[part]));
+	return joinWords(parts.map((part) => PART_WORDS[part]));
 }
 
 /** "mount B", "mounts A, B and C". */
 export function sayMounts(letters: readonly string[]): string {
-	return `${letters.length === 1 ? 'mount' : 'mounts'} ${sayList(letters)}`;
-}
-
-function sayList(words: readonly string[]): string {
-	if (words.length < 2) return words.join('');
-	return `${words.slice(0, -1).join(', ')} and ${words.at(-1)}`;
+	return `${letters.length === 1 ? 'mount' : 'mounts'} ${joinWords(letters)}`;
 }
 
 export const sayOpenQuestions = (count: number): string =>

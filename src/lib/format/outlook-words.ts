@@ -79,11 +79,5 @@ const SHARES: readonly [below: number, words: string][] = [
 export const sayShare = (share: number): string =>
 	SHARES.find(([below]) => share < below)?.[1] ?? 'nearly all';
 
-/** "A", "A and B", "A, B and C". */
-export function joinWords(words: readonly string[]): string {
-	if (words.length < 2) return words.join('');
-	return `${words.slice(0, -1).join(', ')} and ${words.at(-1)}`;
-}
-
 /** The first letter small, so that a name can stand inside a sentence. */
 export const small = (words: string): string => `${words.charAt(0).toLowerCase()}${words.slice(1)}`;

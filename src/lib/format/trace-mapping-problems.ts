@@ -1,6 +1,7 @@
 import type { TraceProposalView } from '../schemas/traces';
 import { CHANNEL_LAWS, isTimeZone, TRACE_UNITS, type TraceChannel, type TraceUnit } from '../thermal/traces';
 import { UNIT_NAMES } from '../schemas/traces';
+import { joinWords } from './join-words';
 import { isEpoch, readHour, type MappingDraft } from './trace-mapping-form';
 import { CHANNEL_WORDS } from './traces';
 
@@ -34,8 +35,7 @@ function findUnitProblem({ number, channel, unit }: Chosen): BoxProblem[] {
 	const { quantity } = CHANNEL_LAWS[channel];
 	if (TRACE_UNITS[unit]?.quantity === quantity) return [];
 	const units = UNIT_NAMES.filter((each) => TRACE_UNITS[each].quantity === quantity);
-	const can = units.length > 1 ? `${units.slice(0, -1).join(', ')} or ${units.at(-1)}` : units.join('');
-	const message = `Column ${number} is ${CHANNEL_WORDS[channel]}: that is measured in ${can}, not in ${unit}.`;
+	const message = `Column ${number} is ${CHANNEL_WORDS[channel]}: that is measured in ${joinWords(units, 'or')}, not in ${unit}.`;
 	return [{ path: `unit.${number}`, message }];
 }
 

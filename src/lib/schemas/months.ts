@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { MONTH_NAMES } from '../thermal/weather';
+import { joinWords } from '../format/join-words';
 
 export const MONTH_KEYS = [
 	...(['Jan', 'Feb', 'Mar', 'Apr', 'May', 'Jun'] as const),
@@ -52,10 +53,8 @@ export function fromMonthBoxes<Name extends string>(
 	return values.every((value) => value !== null) ? values : null;
 }
 
-function sayMonths(months: readonly string[]): string {
-	if (months.length < 2) return `${months.join('')} is`;
-	return `${months.slice(0, -1).join(', ')} and ${months.at(-1)} are`;
-}
+const sayMonths = (months: readonly string[]): string =>
+	`${joinWords(months)} ${months.length < 2 ? 'is' : 'are'}`;
 
 /** Where a row is begun or needed, and boxes of it are empty: the first of them, and a sentence that names all. */
 export function findEmptyBoxes<Name extends string>(

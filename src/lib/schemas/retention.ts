@@ -1,11 +1,12 @@
 import { z } from 'zod';
+import { joinWords } from '../format/join-words';
 import { versionSchema } from './fields';
 
 /** So long customers' personal data may be kept; "none" keeps them. */
 export const RETENTION_YEARS = [2, 3, 5, 7, 10] as const;
 
 /** What cannot be chosen, said with all that can. */
-export const NOT_THESE_YEARS = `Choose ${RETENTION_YEARS.slice(0, -1).join(', ')} or ${RETENTION_YEARS.at(-1)} years, or no limit.`;
+export const NOT_THESE_YEARS = `Choose ${joinWords(RETENTION_YEARS.map(String), 'or')} years, or no limit.`;
 
 const years = z
 	.union(

@@ -1,4 +1,5 @@
 import { formatDate } from '$lib/format/dates';
+import { joinWords } from '$lib/format/join-words';
 import {
 	formatCapacity,
 	formatAmps,
@@ -8,7 +9,7 @@ import {
 	formatTemperature,
 	formatWithUnit
 } from '$lib/format/numbers';
-import { joinWords, sayDayCount, sayOfTwenty } from '$lib/format/outlook-words';
+import { sayDayCount, sayOfTwenty } from '$lib/format/outlook-words';
 import { formatClockHour, formatHours } from '$lib/format/time';
 import {
 	FIELD_NOTE_LABELS,

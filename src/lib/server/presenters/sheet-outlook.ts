@@ -1,3 +1,4 @@
+import { joinWords } from '$lib/format/join-words';
 import { formatMoney, formatNumber, formatTemperature } from '$lib/format/numbers';
 import { hasBms } from '$lib/schemas/batteries';
 import type { SheetContent } from '$lib/schemas/sheets';
@@ -5,7 +6,7 @@ import type { Outlook } from '$lib/schemas/outlooks';
 import { limitAt } from './outlook/envelope';
 import { sayWornAfter, type LifeElsewhere } from './outlook/life';
 import { nameRemedies, sumMoney } from './outlook/remedies';
-import { joinWords, sayDayCount, sayDaysLikeThis, sayOfTwenty } from '$lib/format/outlook-words';
+import { sayDayCount, sayDaysLikeThis, sayOfTwenty } from '$lib/format/outlook-words';
 import type { CountedYear } from './outlook/year';
 
 /** What stands beside the assessment that a sheet is written from. */

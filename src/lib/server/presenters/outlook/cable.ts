@@ -3,7 +3,7 @@ import type { CableInput } from '$lib/schemas/cables';
 import type { Outlook } from '$lib/schemas/outlooks';
 import type { CableFindingReport, CableReport } from '$lib/schemas/outlook-reports';
 import { WIRING_SOURCES, type CableCheck, type CableFinding } from '$lib/thermal/wiring';
-import { joinWords } from '$lib/format/outlook-words';
+import { joinWords } from '$lib/format/join-words';
 
 type Source = keyof typeof WIRING_SOURCES;
 

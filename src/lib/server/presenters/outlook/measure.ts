@@ -1,7 +1,8 @@
+import { joinWords } from '$lib/format/join-words';
 import { formatKelvin, formatNumber, formatPercent } from '$lib/format/numbers';
 import type { MeasureReport, UnknownReport } from '$lib/schemas/outlook-reports';
 import type { DaySpread, Influence, Influences } from '$lib/thermal/outlook';
-import { joinWords, sayShare } from '$lib/format/outlook-words';
+import { sayShare } from '$lib/format/outlook-words';
 
 /** At least and at most so many are told first. */
 const FEWEST = 3;

@@ -1,8 +1,9 @@
+import { joinWords } from '$lib/format/join-words';
 import { formatKelvin, formatMoney, formatNumber } from '$lib/format/numbers';
 import { formatHours } from '$lib/format/time';
 import type { RemedyLine, RemedyReport } from '$lib/schemas/outlook-reports';
 import { REMEDIES, type RemedySearch, type RemedySet } from '$lib/thermal/outlook';
-import { joinWords, sayOfTwenty, small, type EventWords } from '$lib/format/outlook-words';
+import { sayOfTwenty, small, type EventWords } from '$lib/format/outlook-words';
 
 /** Less than this is neither cooler nor hotter. */
 const LEAST_K = 0.05;
