@@ -136,6 +136,26 @@ test.describe('with a script', () => {
 		await expect(page).toHaveTitle(/^Error: /);
 	});
 
+	test('nothing moves under the thumb while the day is drawn', async ({ page }) => {
+		const { mountId } = await begin(page);
+		let comes = () => {};
+		const script = new Promise<void>((resolve) => (comes = resolve));
+		await page.route('**/_app/**/*.js', async (route) => {
+			await script;
+			await route.continue();
+		});
+		await page.goto(`/mounts/${mountId}/survey/shield`, { waitUntil: 'commit' });
+		const button = page.getByRole('button', { name: 'Next: check your answers' });
+		await expect(button).toBeVisible();
+		await page.evaluate(() => document.fonts.ready);
+		const before = await button.boundingBox();
+		comes();
+		await expect(verdict(page)).toBeVisible();
+		await expect(page.getByRole('status').filter({ has: verdict(page) })).toHaveText(/of 20 days/);
+		const after = await button.boundingBox();
+		expect(Math.abs(after!.y - before!.y)).toBeLessThan(2);
+	});
+
 	test('the curve and the verdict follow each answer', async ({ page }) => {
 		const { mountId } = await begin(page);
 		await page.goto(`/mounts/${mountId}/survey/exhaust`);

@@ -7,12 +7,18 @@ const TAKES =
 const refusalOf = (text: string): string | undefined => phone.safeParse(text).error?.issues[0]?.message;
 
 describe('a telephone number', () => {
-	it.each(['', '112', '00 0000 0101', '+61 (0)8 0000-0000', '00.00/000', '00 0000 ext 12', '000 000 x7'])(
-		'may be written "%s"',
-		(text) => {
-			expect(phone.parse(text)).toBe(text);
-		}
-	);
+	it.each([
+		'',
+		'112',
+		'00 0000 0101',
+		'+61 (0)8 0000-0000',
+		'00.00/000',
+		'00–00‑00—0',
+		'00 0000 ext 12',
+		'000 000 x7'
+	])('may be written "%s"', (text) => {
+		expect(phone.parse(text)).toBe(text);
+	});
 
 	it.each(['call Ada', '00 0000 Ada', '+ ( )', 'ext 12', '+ ext 12', '00 0000 ext', '00 0000; 00 0001'])(
 		'may not be "%s"',

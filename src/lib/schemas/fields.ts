@@ -95,8 +95,8 @@ export function optionalEmail(label: string) {
 		.meta({ label });
 }
 
-/** Digits and what people put between them, then perhaps an extension; the first of them is a digit but for signs. */
-const PHONE = /^(?=[\s+()./-]*\d)[\d\s+()./-]+((ext\.?|extension|x)\s*\d+)?$/i;
+/** Digits and what people put between them, dashes of every kind too, then perhaps an extension; the first of them is a digit but for signs. */
+const PHONE = /^(?=[\s+()./\p{Pd}]*\d)[\d\s+()./\p{Pd}]+((ext\.?|extension|x)\s*\d+)?$/iu;
 const PHONE_CHARS = 40;
 const PHONE_WORDS = 'takes only digits, spaces, + ( ) - . / and an extension such as "ext 12" at its end.';
 

@@ -3,6 +3,8 @@ import { join } from 'node:path';
 import { simpleParser, type ParsedMail } from 'mailparser';
 
 const HEADER_BYTES = 8_192;
+/** Files that are open at a time. */
+const AT_ONCE = 50;
 const MESSAGE_ID = /^message-id:\s*(<[^<>\s]+>)/im;
 const END_OF_HEADERS = /\r?\n\r?\n/;
 
@@ -27,14 +29,16 @@ export async function listKeptLetters(folder: string, most: number): Promise<Kep
 	const names = await readdir(folder).catch(() => []);
 	const files = names.filter((name) => name.endsWith('.eml')).sort();
 	const newest = files.slice(-most).reverse();
-	const letters = await Promise.all(
-		newest.map(async (name) => {
+	const letters: KeptLetter[] = [];
+	for (let from = 0; from < newest.length; from += AT_ONCE) {
+		const read = newest.slice(from, from + AT_ONCE).map(async (name) => {
 			const file = join(folder, name);
 			const messageId = await readMessageId(file).catch(() => null);
 			return messageId === null ? [] : [{ file, messageId }];
-		})
-	);
-	return letters.flat();
+		});
+		letters.push(...(await Promise.all(read)).flat());
+	}
+	return letters;
 }
 
 /** One letter, its text as it came; its HTML is never used. */
@@ -46,10 +50,5 @@ export async function readKeptLetter(file: string): Promise<ParsedMail> {
 	});
 }
 
-/** Takes letters out of the folder for good, each as often as it lies there. */
-export async function removeKeptLetters(folder: string, messageIds: readonly string[]): Promise<void> {
-	const wanted = new Set(messageIds);
-	const kept = await listKeptLetters(folder, Infinity);
-	const theirs = kept.filter(({ messageId }) => wanted.has(messageId));
-	await Promise.all(theirs.map(({ file }) => rm(file, { force: true })));
-}
+/** Takes a letter out of its folder for good; one that is gone already is no error. */
+export const removeKeptLetter = (file: string): Promise<void> => rm(file, { force: true });

@@ -2,6 +2,7 @@ import { QueryTypes } from 'sequelize';
 import { connection } from '../db/connection';
 import { logger } from '../logger';
 import { clearFiles } from './clear-files';
+import { clearErasedLetters } from './erasing/erased-letters';
 import { askForAged } from './retention';
 
 const EVERY_MS = 60 * 60_000;
@@ -24,7 +25,7 @@ export async function clearExpired(): Promise<number> {
 			type: QueryTypes.BULKDELETE
 		});
 	}
-	return cleared + (await clearFiles()) + (await askForAged());
+	return cleared + (await clearFiles()) + (await clearErasedLetters()) + (await askForAged());
 }
 
 let timer: NodeJS.Timeout | undefined;

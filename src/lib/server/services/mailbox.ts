@@ -1,13 +1,13 @@
-import { ERASED } from '$lib/schemas/erasures';
 import type { LetterKind } from '$lib/schemas/letters';
 import type { LetterRow, LetterView } from '$lib/schemas/mailbox';
 import type { SignedInPerson } from '$lib/schemas/people';
-import { Erasure, Job, OutgoingMail } from '../db/models';
+import { OutgoingMail } from '../db/models';
 import { env } from '../env';
 import { notFound } from '../errors';
 import { listKeptLetters, readKeptLetter } from '../mail/mailbox-folder';
 import { allow, mayDo, type Action } from '../policies';
 import { presentLetterLines, presentLetterRow, shortMessageId } from '../presenters/letters';
+import { withoutErased } from './erasing/erased-letters';
 
 /** Older letters stay in the folder and are not listed. */
 const MOST_LISTED = 200;
@@ -35,32 +35,18 @@ function mayRead(person: SignedInPerson, { sheetId, jobId, kind, recipient }: Ou
 	return action !== undefined && mayDo(person, action);
 }
 
-/** Of whom nothing is held any more nothing is shown, even where a letter came too late to be taken out. */
-async function findErasedJobs({ workshopId }: SignedInPerson): Promise<Set<number>> {
-	const granted = await Erasure.findAll({
-		where: { workshopId, state: 'granted' },
-		attributes: ['customerId']
-	});
-	const where = { customerId: granted.map(({ customerId }) => customerId) };
-	return new Set((await Job.findAll({ where, attributes: ['id'] })).map(({ id }) => id));
-}
-
-const isErased = ({ jobId, kind, recipient }: OutgoingMail, erasedJobs: Set<number>): boolean =>
-	(jobId !== null && erasedJobs.has(jobId)) || (recipient === ERASED && kind !== 'erasure-granted');
-
 /** The letters in the folder that this workshop sent: a file alone proves nothing, its message id must be on record. */
 async function findOwn(person: SignedInPerson) {
 	const kept = await listKeptLetters(requireMailbox(), MOST_LISTED);
 	const rows = await OutgoingMail.findAll({
 		where: { workshopId: person.workshopId, messageId: kept.map((letter) => letter.messageId) }
 	});
-	const erasedJobs = await findErasedJobs(person);
-	const rowOf = new Map(rows.map((row) => [row.messageId, row]));
+	const rowOf = new Map((await withoutErased(rows)).map((row) => [row.messageId, row]));
 	return kept.flatMap(({ file, messageId }) => {
 		const row = rowOf.get(messageId);
 		// What somebody sent again lies here twice under one id: the newest is listed, as most mail programs do.
 		rowOf.delete(messageId);
-		return row && mayRead(person, row) && !isErased(row, erasedJobs) ? [{ file, row }] : [];
+		return row && mayRead(person, row) ? [{ file, row }] : [];
 	});
 }
 

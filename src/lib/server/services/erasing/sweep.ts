@@ -19,10 +19,10 @@ import {
 	StoredFile,
 	Trace
 } from '../../db/models';
-import { env } from '../../env';
+import { outsideTransaction } from '../../db/transaction';
 import { canonicalJson, newToken, sha256, tokenHash } from '../../hash';
 import { logger } from '../../logger';
-import { removeKeptLetters } from '../../mail/mailbox-folder';
+import { clearErasedLetters } from './erased-letters';
 import type { Persona } from './find-persona';
 
 type Step = (persona: Persona, transaction: Transaction) => Promise<unknown>;
@@ -170,17 +170,6 @@ const fateOfWaiting = ({ handedOverAt }: OutgoingMail): Partial<OutgoingMail> =>
 		? { state: 'failed', lastError: 'Not sent: the customer’s data was deleted first.' }
 		: { state: 'unsure', lastError: 'It was being sent when the customer’s data was deleted.' };
 
-/** Where letters are kept to be read here, theirs go once it is certain that the rest does. */
-function eraseFromMailbox(messageIds: string[], transaction: Transaction): void {
-	const { MAILBOX_DIR } = env();
-	if (!MAILBOX_DIR) return;
-	transaction.afterCommit(() =>
-		removeKeptLetters(MAILBOX_DIR, messageIds).catch((error: unknown) =>
-			logger.error({ err: error }, 'letters of an erased person stay in the mailbox')
-		)
-	);
-}
-
 /** The sending log keeps that something was sent, and when; what waits is not sent any more. */
 const eraseLetters: Step = async ({ workshopId, ids, terms, scrub }, transaction) => {
 	const letters = await OutgoingMail.findAll({
@@ -196,10 +185,12 @@ const eraseLetters: Step = async ({ workshopId, ids, terms, scrub }, transaction
 		...(letter.state === 'waiting' ? fateOfWaiting(letter) : { lastError: scrub.text(letter.lastError) })
 	});
 	await rewrite(letters, changeLetter, transaction);
-	eraseFromMailbox(
-		letters.map(({ messageId }) => messageId),
-		transaction
-	);
+	// Where letters are kept to be read here, theirs go once it is certain that the rest does, or with the next clearing.
+	transaction.afterCommit(async () => {
+		await outsideTransaction(clearErasedLetters).catch((error: unknown) =>
+			logger.error({ err: error }, 'letters of an erased person stay in the mailbox for now')
+		);
+	});
 };
 
 /** Answers that are kept for a day in case a question is repeated. */
