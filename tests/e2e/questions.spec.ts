@@ -53,3 +53,21 @@ test('a customer asks on the page without a script, the shop answers on the job,
 	await expect(page.getByText(`> ${ANSWER}`)).toBeVisible();
 	await expect(page.getByText(`> ${question}`)).toBeVisible();
 });
+
+test('a question sent by the Enter key and again by its button is one', async ({ page }) => {
+	const { link, sendTo } = await sendSheet(page, job);
+	const question = `Is the tray at ${sendTo} better?`;
+	await page.goto(link);
+	const onceKey = await page.locator('input[name="onceKey"]').first().inputValue();
+	const headers = { origin: new URL(link).origin };
+	for (const [button, name] of [
+		['send', ''],
+		['ask', READER]
+	] as const) {
+		const form = { onceKey, askedBy: READER, question, contentSha256: 'x', name };
+		const answer = await page.request.post(`${link}?/${button}`, { form, headers });
+		expect(answer.ok()).toBe(true);
+	}
+	await page.reload();
+	await expect(page.getByRole('listitem').filter({ hasText: question })).toHaveCount(1);
+});

@@ -55,10 +55,22 @@ export function refuseForm(form: PageForm, error: unknown) {
 	return message(form, error.message, { status: error.status as 400 });
 }
 
+/** What a form does where several buttons and the Enter key can ask for it, and the boxes that are about it. */
+export interface Deed {
+	name: string;
+	schema: z.ZodObject;
+}
+
 /** What is the same when the same form is sent twice with the same words in it; null for a form that may be. */
-export function onceKeyOf({ url }: Pick<RequestEvent, 'url'>, formData: FormData): string | null {
+export function onceKeyOf(
+	{ url }: Pick<RequestEvent, 'url'>,
+	formData: FormData,
+	deed?: Deed
+): string | null {
 	if (!formData.has(ONCE_KEY)) return null;
-	return `form-${sha256(JSON.stringify([url.pathname, url.search, ...formData]))}`;
+	const isAbout = (box: string): boolean => !deed || box === ONCE_KEY || box in deed.schema.shape;
+	const sent = [...formData].filter(([box]) => isAbout(box));
+	return `form-${sha256(JSON.stringify([url.pathname, deed?.name ?? url.search, ...sent]))}`;
 }
 
 /** Does what a form asks once for the page that it stood on: a second press leads to what the first one made. */
@@ -67,9 +79,10 @@ export async function saveOnce<Prepared>(
 	event: RequestEvent,
 	formData: FormData,
 	save: (prepared: Prepared) => Promise<string>,
-	prepare: () => Promise<Prepared>
+	prepare: () => Promise<Prepared>,
+	deed?: Deed
 ): Promise<string> {
-	const key = onceKeyOf(event, formData);
+	const key = onceKeyOf(event, formData, deed);
 	const { body } = await keepOnce({ personId, key, request: key ?? '' }, prepare, async (prepared) => ({
 		status: 303,
 		body: await save(prepared)
@@ -97,6 +110,8 @@ export interface FormSteps<S extends z.ZodObject, Prepared> {
 	schema: S;
 	/** The schema for what was sent, where one answer says how others are read. */
 	schemaFor?: (sent: FormData) => S;
+	/** What it does, where more than one button asks for it. */
+	does?: string;
 	/** What was sent, where it was read already. */
 	sent?: FormData;
 	/** What takes seconds and changes nothing: done before, and in no transaction. */
@@ -119,7 +134,8 @@ export async function saveForm<S extends z.ZodObject, Prepared = void>(
 	if (data === null) return fail(422, { form });
 	const prepare = async () => (await steps.prepare?.(person, data)) as Prepared;
 	const save = (prepared: Prepared) => steps.save(person, data, prepared);
-	const next = await saveOnce(person, event, formData, save, prepare).catch((error: unknown) => ({
+	const deed = steps.does === undefined ? undefined : { name: steps.does, schema: steps.schema };
+	const next = await saveOnce(person, event, formData, save, prepare, deed).catch((error: unknown) => ({
 		refusal: error
 	}));
 	if (typeof next !== 'string') return refuseForm(form, next.refusal);

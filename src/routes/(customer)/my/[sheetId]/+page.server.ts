@@ -25,6 +25,7 @@ const acknowledge = (event: RequestEvent) =>
 		saveForm(event, {
 			action: 'documents.read-own',
 			schema: acknowledgeSchema,
+			does: 'acknowledge',
 			save: async (person, data) => {
 				const sheetId = readSheetId(event.params.sheetId);
 				await acknowledgeMySheet(person, sheetId, data);
@@ -37,6 +38,7 @@ const ask = (event: RequestEvent) =>
 		saveForm(event, {
 			action: 'questions.ask',
 			schema: askSchema,
+			does: 'ask',
 			save: async (person, data) => {
 				const sheetId = readSheetId(event.params.sheetId);
 				await askOnMySheet(person, sheetId, data);

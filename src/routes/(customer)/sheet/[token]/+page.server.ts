@@ -3,7 +3,7 @@ import type { z } from 'zod';
 import { askSchema } from '$lib/schemas/questions';
 import { acknowledgeSchema } from '$lib/schemas/sheets';
 import { readByLink, writeByLink } from '$lib/server/http/by-link';
-import { onceKeyOf, readForm, readPageForm, refuseForm } from '$lib/server/http/forms';
+import { onceKeyOf, readForm, readPageForm, refuseForm, type Deed } from '$lib/server/http/forms';
 import { orPageError } from '$lib/server/http/guard';
 import { askByLink } from '$lib/server/services/questions';
 import { acknowledgeSheet, openSheet } from '$lib/server/services/sheet-readers';
@@ -18,7 +18,7 @@ export const load: PageServerLoad = async (event) =>
 /** What somebody sends through the link: read, done, and shown where it stands now. */
 async function sendByLink<S extends z.ZodObject>(
 	event: RequestEvent,
-	schema: S,
+	{ schema, ...deed }: Deed & { schema: S },
 	place: string,
 	save: (data: z.output<S>, onceKey: string | null) => Promise<unknown>
 ) {
@@ -26,7 +26,7 @@ async function sendByLink<S extends z.ZodObject>(
 	const { form, data } = await readForm(formData, schema);
 	if (data === null) return fail(422, { form });
 	try {
-		await writeByLink(event, () => save(data, onceKeyOf(event, formData)));
+		await writeByLink(event, () => save(data, onceKeyOf(event, formData, { ...deed, schema })));
 	} catch (error) {
 		return refuseForm(form, error);
 	}
@@ -35,11 +35,15 @@ async function sendByLink<S extends z.ZodObject>(
 
 const acknowledge = (event: Event) =>
 	sendOneOfTwo(event, 'acknowledge', () =>
-		sendByLink(event, acknowledgeSchema, 'acknowledged', (data) => acknowledgeSheet(event.params.token, data))
+		sendByLink(event, { name: 'acknowledge', schema: acknowledgeSchema }, 'acknowledged', (data) =>
+			acknowledgeSheet(event.params.token, data)
+		)
 	);
 const ask = (event: Event) =>
 	sendOneOfTwo(event, 'ask', () =>
-		sendByLink(event, askSchema, 'questions', (data, onceKey) => askByLink(event.params.token, data, onceKey))
+		sendByLink(event, { name: 'ask', schema: askSchema }, 'questions', (data, onceKey) =>
+			askByLink(event.params.token, data, onceKey)
+		)
 	);
 
 export const actions: Actions = {
