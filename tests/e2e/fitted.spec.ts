@@ -20,6 +20,7 @@ test('what was fitted is kept against what was agreed, looked at again by date, 
 	await page.getByLabel('Fuse', { exact: true }).fill('80 A, bolted');
 	await page.getByRole('button', { name: 'Keep what was fitted' }).click();
 	await expect(page.getByText('One thing is not as agreed.')).toBeVisible();
+	await expect(page.getByText('That is before it was recommended')).toBeVisible();
 	await expect(page.getByText('28 February 2026').first()).toBeVisible();
 	await expectNoViolations(page);
 	await page.getByRole('button', { name: /^Done.*28 February/ }).click();

@@ -14,6 +14,11 @@ const FURTHEST_EAST_MS = 14 * 3_600_000;
 export const latestToday = (now = new Date()): string =>
 	new Date(now.getTime() + FURTHEST_EAST_MS).toISOString().slice(0, 10);
 
+/** West of all others the day is twelve hours behind: nobody anywhere calls it an earlier day. */
+const FURTHEST_WEST_MS = 12 * 3_600_000;
+export const earliestDayOf = (moment: Date | string): string =>
+	new Date(toDate(moment).getTime() - FURTHEST_WEST_MS).toISOString().slice(0, 10);
+
 /** "4 March 2026". */
 export const formatDate = (moment: Date | string | number, timeZone?: string): string =>
 	style({ day: 'numeric', month: 'long', year: 'numeric' }, zoneOf(moment, timeZone)).format(toDate(moment));

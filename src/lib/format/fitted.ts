@@ -1,4 +1,5 @@
 import { NOT_PROPOSED, type AgreedItem, type Difference } from '../schemas/fitting';
+import { earliestDayOf, formatDate } from './dates';
 import { joinWords } from './join-words';
 
 /** Nothing was proposed for it, and nobody noted what was fitted. */
@@ -15,4 +16,10 @@ export function sayFitted(agreed: readonly AgreedItem[], differences: readonly D
 	const open = agreed.filter((item) => isNotNoted(item, differences)).map(({ label }) => label.toLowerCase());
 	const what = sayDifferences(differences.length);
 	return open.length === 0 ? what : `${what} Not proposed and not noted: ${joinWords(open)}.`;
+}
+
+/** What is odd about a day of fitting that lies before anything was agreed; empty where nothing is. */
+export function sayTooEarly(fittedOn: string, agreedAt: string): string {
+	if (fittedOn >= earliestDayOf(agreedAt)) return '';
+	return `That is before it was recommended, on ${formatDate(agreedAt)}. If the day is a slip, change it below and keep it again.`;
 }

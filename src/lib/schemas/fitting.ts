@@ -78,6 +78,9 @@ export const fittingSchema = z.object({
 	mountId: z.number().int(),
 	jobId: z.number().int(),
 	assessmentId: z.number().int(),
+	agreedAt: z.iso
+		.datetime()
+		.meta({ description: 'When the first recommendation by this assessment was made' }),
 	agreed: z.array(agreedItemSchema),
 	installation: z
 		.object({

@@ -4,6 +4,10 @@ import { email, idSchema, versionSchema, words } from './fields';
 export const ROLES = ['installer', 'engineer', 'manager', 'customer'] as const;
 export type Role = (typeof ROLES)[number];
 
+/** A session ends when it was not used for so long, and after so many hours in any case. */
+export const SESSION_IDLE_MINUTES = 30;
+export const SESSION_MOST_HOURS = 8;
+
 /** Why a session is over. */
 export type SessionEnd = 'role-changed' | 'left' | 'factor-reset' | 'too-old' | 'idle' | 'signed-out';
 

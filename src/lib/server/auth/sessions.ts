@@ -1,6 +1,11 @@
 import { randomBytes } from 'node:crypto';
 import type { Transaction } from 'sequelize';
-import type { SessionEnd, SignedInPerson } from '$lib/schemas/people';
+import {
+	SESSION_IDLE_MINUTES,
+	SESSION_MOST_HOURS,
+	type SessionEnd,
+	type SignedInPerson
+} from '$lib/schemas/people';
 import { connection } from '../db/connection';
 import { Person, Session, SignInLink, SignInStep, Workshop } from '../db/models';
 import { inTransaction } from '../db/transaction';
@@ -8,8 +13,8 @@ import { sha256 } from '../hash';
 import { record } from '../services/audit';
 
 const MINUTE_MS = 60_000;
-export const IDLE_MS = 30 * MINUTE_MS;
-export const ABSOLUTE_MS = 8 * 60 * MINUTE_MS;
+export const IDLE_MS = SESSION_IDLE_MINUTES * MINUTE_MS;
+export const ABSOLUTE_MS = SESSION_MOST_HOURS * 60 * MINUTE_MS;
 /** Seen-times are written at most this often, so that reading a page is not a write. */
 const TOUCH_EVERY_MS = MINUTE_MS;
 
@@ -65,10 +70,13 @@ function endOf(session: Session, now: number): SessionEnd | null {
 	return now - session.lastSeenAt.getTime() > IDLE_MS ? 'idle' : null;
 }
 
-/** Why a session that lets nobody in is over; only who holds its secret is told. */
+/** Why a session that lets nobody in is over; only who holds its secret is told. Who was brought back has not left. */
 export async function whySessionEnded(secret: string): Promise<SessionEnd> {
 	const session = await Session.findByPk(sha256(secret));
-	return (session && endOf(session, Date.now())) ?? 'signed-out';
+	const end = (session && endOf(session, Date.now())) ?? 'signed-out';
+	if (end !== 'left') return end;
+	const person = await Person.findByPk(session!.personId, { attributes: ['active'] });
+	return person?.active ? 'signed-out' : 'left';
 }
 
 /** Who a session belongs to, while it lives; null once it is idle, too old, revoked, or its person has left. */

@@ -42,16 +42,22 @@ const presentFollowUp = (
 	isEarly: (doneOn ?? null) === null && dueOn > soon
 });
 
+/** The assessment that the fitting is held against, and when it was recommended first. */
+export interface Agreed {
+	assessment: Assessment;
+	at: Date;
+}
+
 export function presentFitting(
 	{ id: mountId, jobId }: Mount,
-	agreed: Assessment,
+	{ assessment, at }: Agreed,
 	installation: Installation | null,
 	followUps: readonly FollowUp[],
 	days: Days
 ): FittingView {
 	return {
-		...{ mountId, jobId, assessmentId: agreed.id },
-		agreed: installation?.agreed ?? listAgreed(agreed),
+		...{ mountId, jobId, assessmentId: assessment.id, agreedAt: at.toISOString() },
+		agreed: installation?.agreed ?? listAgreed(assessment),
 		installation: installation && {
 			id: installation.id,
 			fittedOn: installation.fittedOn,

@@ -47,8 +47,10 @@ async function show(mount: Mount): Promise<FittingView> {
 		? await Assessment.findByPk(installation.assessmentId)
 		: await findAgreed(mount);
 	if (!agreed) throw notFound('assessment');
+	const first = await Recommendation.findOne({ where: { assessmentId: agreed.id }, order: [['id', 'ASC']] });
+	const agreement = { assessment: agreed, at: first?.createdAt ?? agreed.createdAt };
 	const days = { now: today(), soon: addMonths(today(), EARLY_MONTHS) };
-	return presentFitting(mount, agreed, installation, followUps, days);
+	return presentFitting(mount, agreement, installation, followUps, days);
 }
 
 /** What was agreed for a mount, what was fitted, and when it is to be looked at. */

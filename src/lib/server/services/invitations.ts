@@ -143,9 +143,16 @@ async function findOpen(token: string, transaction?: Transaction): Promise<Invit
 	return invitation;
 }
 
+const signsInAlready = (): AppError =>
+	new AppError(
+		'conflict',
+		'This address signs in already, and each address signs in at one shop alone. Ask the shop to invite another one.'
+	);
+
 /** What the page of the link says. Looking accepts nothing: programs that scan mail open links too. */
 export async function openInvitation(token: string): Promise<InvitationView> {
 	const { workshopId, name, email, role } = await findOpen(token);
+	if ((await Person.count({ where: { email } })) > 0) throw signsInAlready();
 	const workshop = await Workshop.findByPk(workshopId);
 	return { workshopName: workshop?.name ?? '', name, email, role };
 }
@@ -156,7 +163,7 @@ const TOO_COMMON =
 /** Invited by two workshops: the one that was accepted first has the address. */
 function orSignsInAlready(error: unknown): never {
 	if (!(error instanceof UniqueConstraintError)) throw error;
-	throw new AppError('conflict', 'This address signs in already. Ask the shop to invite another one.');
+	throw signsInAlready();
 }
 
 /** Joins: from now on there is a person with this password. Gives back the address to sign in with. */

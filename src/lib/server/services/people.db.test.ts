@@ -111,6 +111,7 @@ describe('an invitation', () => {
 		const asked = await invite(crew.manager, { name: 'Wren Tollgate', email, role: 'installer' });
 		expect(asked).toMatchObject({ email, role: 'installer', isTooOld: false });
 		const [token = ''] = await readTokens(email, PATH);
+		await expect(openInvitation(token)).rejects.toMatchObject({ code: 'conflict' });
 		await expect(acceptInvitation(token, PASSWORD)).rejects.toMatchObject({ code: 'conflict' });
 		expect(await Person.findAll({ where: { email } })).toMatchObject([{ workshopId: other.workshopId }]);
 	});
@@ -187,6 +188,7 @@ describe('somebody who leaves', () => {
 		expect(row!.lastSignedInAt).not.toBeNull();
 		expect(await comeBack(crew.manager, crew.installer.id, version)).toMatchObject({ leftAt: null });
 		for (const secret of secrets) expect(await personOfSession(secret)).toBeNull();
+		expect(await whySessionEnded(secrets[0]!)).toBe('signed-out');
 		const again = await openSession(crew.installer.id);
 		expect(await personOfSession(again)).not.toBeNull();
 		expect((await actionsOf(crew)).filter((each) => each !== 'person.signed-in')).toEqual([

@@ -1,4 +1,4 @@
-import type { SessionEnd } from '$lib/schemas/people';
+import { SESSION_IDLE_MINUTES, SESSION_MOST_HOURS, type SessionEnd } from '$lib/schemas/people';
 
 /** What somebody reads who comes with a session that is over. */
 export const SESSION_END_WORDS: Readonly<Record<SessionEnd, { title: string; words: string }>> = {
@@ -14,10 +14,13 @@ export const SESSION_END_WORDS: Readonly<Record<SessionEnd, { title: string; wor
 		title: 'You were signed out',
 		words: 'Your second factor was reset. Sign in, and set it up again.'
 	},
-	'too-old': { title: 'You were signed out', words: 'A session ends after eight hours. Sign in to go on.' },
+	'too-old': {
+		title: 'You were signed out',
+		words: `A session ends after ${SESSION_MOST_HOURS} hours. Sign in to go on.`
+	},
 	idle: {
 		title: 'You were signed out',
-		words: 'It had not been used for half an hour. Sign in to go on.'
+		words: `It had not been used for ${SESSION_IDLE_MINUTES} minutes. Sign in to go on.`
 	},
 	'signed-out': { title: 'You were signed out', words: 'Sign in to go on.' }
 };

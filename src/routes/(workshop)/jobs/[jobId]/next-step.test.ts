@@ -142,9 +142,9 @@ describe('the next step of a job', () => {
 			'recommended',
 			[done],
 			1,
-			'Note what the field says',
-			'/mounts/1/field',
-			'nothing is left'
+			'Send the customer’s sheet',
+			'/jobs/7/sheets',
+			'has not gone to the customer'
 		],
 		[
 			'all done here, another mount recommended since',

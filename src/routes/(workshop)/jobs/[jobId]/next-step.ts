@@ -110,6 +110,14 @@ const RULES: readonly Rule[] = [
 			href: null
 		};
 	},
+	(job, at, around) =>
+		job.stage === 'recommended' && isFitted(around, around.recommendedMountId)
+			? {
+					label: 'Send the customer’s sheet',
+					text: 'The battery is fitted, but what was recommended has not gone to the customer.',
+					href: `${at}/sheets`
+				}
+			: null,
 	(_, __, around) => {
 		if (!isFitted(around, around.recommendedMountId)) return null;
 		const [next] = around.fitted
