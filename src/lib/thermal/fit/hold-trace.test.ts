@@ -66,6 +66,13 @@ describe('a trace held against what had been predicted of its day', () => {
 		expect(finishWork(holdTrace({ trace, scenario: drive }, EFFORT))).not.toBeNull();
 	});
 
+	it('gives way after each leg of each run, however long the trace is', () => {
+		const shares = [...holdTrace({ trace: invent(['cellC']), scenario: DAY }, EFFORT)];
+		expect(shares).toHaveLength((1 + EFFORT.samples) * DAY.legs.length + EFFORT.samples);
+		expect(shares).toEqual(shares.toSorted((a, b) => a - b));
+		expect([shares[0], shares.at(-1)]).toEqual([0, 1]);
+	});
+
 	it('is read at the measured place that is nearest to the cells', () => {
 		expect(hold(invent(['bayAirC', 'caseC', 'boardC']))!.place).toBe('board');
 		expect(hold(invent(['bayAirC', 'caseC']))!.place).toBe('case');

@@ -47,14 +47,22 @@ function nearestBlock(of: TraceOfScenario): Block | undefined {
 	).at(0);
 }
 
-/** What is foretold at the readings of a block, from the first readings on. */
-function foretell(of: TraceOfScenario, { row, at }: Block): Float64Array {
+/** What is foretold at the readings of a block, from the first readings on, leg by leg. */
+function* foretell(of: TraceOfScenario, { row, at }: Block): Generator<void, Float64Array> {
 	const model = new TraceModel(of, []);
-	const rows = model.predict(
+	const rows = yield* model.predictByLegs(
 		[],
 		model.starts.map(({ mean }) => mean)
 	);
 	return Float64Array.from(at, (place) => rows[row]![place]!);
+}
+
+/** The same work, yielding how far the whole is of which it is a part. */
+function* asPartOf<Result>(work: Generator<void, Result>, share: number): Generator<number, Result> {
+	for (let step = work.next(); ; step = work.next()) {
+		if (step.done) return step.value;
+		yield share;
+	}
 }
 
 const meanOf = (values: Float64Array): number =>
@@ -71,7 +79,7 @@ const meanOf = (values: Float64Array): number =>
  *
  * @param of trace and the scenario that its mount had been assessed with, its legs those that were driven
  * @param options number of draws (a power of two keeps them even) and seed
- * @returns as a generator, yields the share of the work done, and returns the trace held against it; null where no temperature
+ * @returns as a generator, yields the share of the work done after each leg, and returns the trace held against it; null where no temperature
  *   of the battery was measured, or the day or more than a tenth of its draws cannot be run to their ends
  * @throws EngineInputError with the path for a trace that cannot be
  * Validity: the priors of PRIORS, independent of one another; legs as they were driven; sensors right to ± 0.5 K (judgement).
@@ -96,13 +104,14 @@ export function* holdTrace(
 	const block = nearestBlock(of);
 	if (!block) return null;
 	const measured = Float64Array.from(block.at, (place) => block.measured[place]!);
-	const foretold = foretell(of, block);
+	const foretold = yield* asPartOf(foretell(of, block), 0);
 	if (foretold.some(Number.isNaN)) return null;
 	const unknowns = listUnknowns(trace);
 	const means: number[] = [];
 	for (let draw = 0; draw < samples; draw++) {
 		const drawn = drawScenario(scenario, scrambledSobolPoint(draw, unknowns.length, seed), unknowns);
-		const mean = meanOf(foretell({ ...of, scenario: drawn }, block));
+		const running = foretell({ ...of, scenario: drawn }, block);
+		const mean = meanOf(yield* asPartOf(running, draw / samples));
 		if (!Number.isNaN(mean)) means.push(mean);
 		yield (draw + 1) / samples;
 	}

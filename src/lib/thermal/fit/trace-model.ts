@@ -1,4 +1,5 @@
 import { ScenarioError } from '../errors';
+import type { Failure } from '../solve/integrator';
 import { NODE_NAMES, type NodeName, type Scenario } from '../types';
 import { copyScenario } from '../uncertainty/draw-scenario';
 import { checkConsistency } from '../vehicle/check-consistency';
@@ -83,6 +84,21 @@ export class TraceModel {
 	 * @returns NaN everywhere where the coefficients contradict one another or the run cannot be finished
 	 */
 	predict(values: readonly (number | null)[], startValues: readonly number[]): readonly Float64Array[] {
+		if (!this.prepare(values, startValues)) return this.sink.rows;
+		return this.rowsAfter(this.run.run(this.scenario, this.sink));
+	}
+
+	/** The same, leg by leg. */
+	*predictByLegs(
+		values: readonly (number | null)[],
+		startValues: readonly number[]
+	): Generator<void, readonly Float64Array[]> {
+		if (!this.prepare(values, startValues)) return this.sink.rows;
+		return this.rowsAfter(yield* this.run.runByLegs(this.scenario, this.sink));
+	}
+
+	/** Sets what the next run is made with; false where that contradicts itself. */
+	private prepare(values: readonly (number | null)[], startValues: readonly number[]): boolean {
 		const scenario = this.scenario;
 		this.coefficients.forEach((coefficient, at) => {
 			const value = values[at] ?? null;
@@ -90,12 +106,15 @@ export class TraceModel {
 			setCoefficient(scenario, coefficient, value ?? own?.[coefficient.key] ?? NaN);
 		});
 		this.sink.begin();
-		if (!isPossible(scenario)) return this.sink.rows;
+		if (!isPossible(scenario)) return false;
 		const settledC = this.of.start.kind === 'stood' ? this.settle(this.of.start.hours) : {};
 		scenario.measured!.startC = placeStarts(this.starts, startValues, this.airC, settledC);
 		this.runs++;
-		if (this.run.run(scenario, this.sink) === null) return this.sink.rows;
-		this.sink.begin();
+		return true;
+	}
+
+	private rowsAfter(failure: Failure | null): readonly Float64Array[] {
+		if (failure !== null) this.sink.begin();
 		return this.sink.rows;
 	}
 

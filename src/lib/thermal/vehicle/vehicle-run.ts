@@ -59,6 +59,7 @@ export class VehicleRun {
 	private scenario!: Scenario;
 	private sink!: StepSink;
 	private standing!: Standing;
+	private legEndS = 0;
 	private nextMinute = 0;
 	private minuteCount = 0;
 	private spanMinute = 0;
@@ -89,19 +90,22 @@ export class VehicleRun {
 	/** Runs one scenario, whose shield is there or not as this run was made for; null, or why it was given up. */
 	run(scenario: Scenario, sink: StepSink): Failure | null {
 		this.begin(scenario, sink);
-		this.bms.settle(0, this.hourAt(0), this.temps);
-		let legEndS = 0;
 		for (const leg of scenario.legs) {
-			legEndS += leg.minutes * S_PER_MIN;
-			this.stepper.startLeg({ scenario, leg, constants: findLegConstants(scenario, leg) }, this.timeS);
-			this.kinks.startLeg(scenario, leg);
-			this.integrator.restart(FIRST_STEP_S);
-			const failure = this.runLeg(leg, legEndS);
+			const failure = this.runLeg(leg);
 			if (failure) return failure;
 		}
-		this.noteLatches();
-		sink.takeEnd(this.temps, this.standing, this.nextMinute);
-		return null;
+		return this.end();
+	}
+
+	/** The same, leg by leg: of a trace of weeks nothing else would get its turn for as long as a whole run takes. */
+	*runByLegs(scenario: Scenario, sink: StepSink): Generator<void, Failure | null> {
+		this.begin(scenario, sink);
+		for (const leg of scenario.legs) {
+			const failure = this.runLeg(leg);
+			if (failure) return failure;
+			yield;
+		}
+		return this.end();
 	}
 
 	hourAt(timeS: number): number {
@@ -117,6 +121,7 @@ export class VehicleRun {
 		this.missedAh = 0;
 		this.missedSoc = 0;
 		this.timeS = 0;
+		this.legEndS = 0;
 		this.nextMinute = 0;
 		this.minuteCount = countMinutes(scenario);
 		this.stepper.reset();
@@ -135,16 +140,28 @@ export class VehicleRun {
 			spanStartS: 0,
 			...CLOSED
 		};
+		this.bms.settle(0, this.hourAt(0), this.temps);
 	}
 
-	/** Runs to the end of a leg, span by span of the battery's current. */
-	private runLeg(leg: Leg, legEndS: number): Failure | null {
+	/** Runs to the end of the next leg, span by span of the battery's current. */
+	private runLeg(leg: Leg): Failure | null {
+		const { scenario } = this;
+		this.legEndS += leg.minutes * S_PER_MIN;
+		this.stepper.startLeg({ scenario, leg, constants: findLegConstants(scenario, leg) }, this.timeS);
+		this.kinks.startLeg(scenario, leg);
+		this.integrator.restart(FIRST_STEP_S);
 		do {
 			this.beginSpan(leg);
-			const failure = this.runSpan(legEndS);
+			const failure = this.runSpan(this.legEndS);
 			if (failure) return failure;
 			this.endSpan(leg);
-		} while (this.timeS < legEndS);
+		} while (this.timeS < this.legEndS);
+		return null;
+	}
+
+	private end(): null {
+		this.noteLatches();
+		this.sink.takeEnd(this.temps, this.standing, this.nextMinute);
 		return null;
 	}
 
