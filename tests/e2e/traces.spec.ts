@@ -1,6 +1,9 @@
 import { expect, test, type Page } from '@playwright/test';
 import { expectNoViolations, ONCE, openForm, signInAs } from './support';
 
+/** Others' long work may be before it. */
+const LONG_WORK_MS = 90_000;
+
 interface Row {
 	id: number;
 	mountId: number;
@@ -116,7 +119,11 @@ test('an engineer sends a file with faults, puts its columns right, sees what wa
 	await expect(page.getByLabel('Leg 2', { exact: true })).toHaveValue('driving');
 	const tracePath = new URL(page.url()).pathname;
 
-	// What was measured stands beside what had been predicted of it, straight away.
+	// What was measured stands beside what had been predicted of it, once that is worked out, without anybody looking again.
+	const beside = page.getByRole('region', { name: 'Against what was predicted' });
+	await expect(beside.getByText('Measured at the cells')).toBeVisible({ timeout: LONG_WORK_MS });
+	await expect(beside.getByText('It is counted.')).toBeVisible();
+	await expectNoViolations(page);
 	await page.goto('/accuracy?kind=trace');
 	await expect(page.getByRole('heading', { level: 2, name: 'Traces' })).toBeVisible();
 	const held = page.getByRole('row').filter({ hasText: 'Trace, 3 Feb 2026' }).first();

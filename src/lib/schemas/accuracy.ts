@@ -121,6 +121,9 @@ export const accuracySchema = z.object({
 			inside: count.meta({ description: 'Of those, the ones inside the stated band' })
 		})
 	),
+	waitingTraces: count.meta({
+		description: 'Measured traces that are being held against what had been predicted of them'
+	}),
 	unheldTraces: count.meta({
 		description: 'Measured traces that no prediction could be held against'
 	})
@@ -191,3 +194,15 @@ export const readingsSchema = z.object({
 	next: z.string().nullable()
 });
 export type Readings = z.infer<typeof readingsSchema>;
+
+/** What a measured trace says beside what had been predicted of its day. */
+export type TraceHold =
+	| { state: 'waits'; share: number }
+	| { state: 'held'; reading: Reading }
+	| { state: 'none'; why: 'no-assessment' | 'no-hour' | 'no-run' };
+
+/** How many traces are still to be held, and how far that is, 0 to 1. */
+export interface HoldsProgress {
+	waiting: number;
+	share: number;
+}

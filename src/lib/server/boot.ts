@@ -9,6 +9,7 @@ import { clearExpired, startClearing, stopClearing } from './services/clear-expi
 import { seedDemo } from './services/demo/seed-demo';
 import { startReminders, stopReminders } from './services/reminders';
 import { completeChecks } from './services/accuracy/complete-checks';
+import { startHolding, stopHolding } from './services/accuracy/hold-waiting';
 import { startReruns, stopReruns } from './services/reruns/run-reruns';
 import { completeReviews } from './services/review/keep-review';
 
@@ -52,6 +53,7 @@ export async function boot(): Promise<void> {
 		startClearing();
 		startReminders();
 		startReruns();
+		startHolding();
 		state.soaklineReady = true;
 		logger.info({ step: 'ready', ms: 0, detail: settings.ORIGIN });
 		holdOldNotes();
@@ -66,6 +68,7 @@ export async function shutDown(): Promise<void> {
 	stopClearing();
 	stopReminders();
 	await stopReruns();
+	await stopHolding();
 	await stopOutbox();
 	await closeConnection();
 }

@@ -2,6 +2,7 @@ import { cleanup, fireEvent, render, screen } from '@testing-library/svelte';
 import axe from 'axe-core';
 import { tick } from 'svelte';
 import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
+import { SpokenStream } from '../../../../tests/support/spoken-stream';
 import { invalidateAll } from '$app/navigation';
 import type { CableReport, RemedyLine, RemedyReport } from '../../schemas/outlook-reports';
 import CablePart from './CablePart.svelte';
@@ -25,22 +26,6 @@ const NOT_HERE = {
 async function findViolations(container: Element): Promise<string[]> {
 	const { violations } = await axe.run(container, { rules: NOT_HERE });
 	return violations.map(({ id }) => id);
-}
-
-/** A stream of events that the test speaks into. */
-class SpokenStream extends EventTarget {
-	static open: SpokenStream[] = [];
-	isClosed = false;
-	constructor(readonly url: string) {
-		super();
-		SpokenStream.open.push(this);
-	}
-	close(): void {
-		this.isClosed = true;
-	}
-	say(name: string, data: unknown = {}): void {
-		this.dispatchEvent(new MessageEvent(name, { data: JSON.stringify(data) }));
-	}
 }
 
 beforeEach(() => {

@@ -17,7 +17,7 @@ const SUMS: CheckSums = {
 };
 const sums = (changes: Partial<CheckSums>): CheckSums => ({ ...SUMS, ...changes });
 const counted = (changes: Partial<CountedChecks>): CountedChecks => ({
-	...{ sums: [], steps: [], chances: [], leftOut: [], waiting: 0, unheldTraces: 0 },
+	...{ sums: [], steps: [], chances: [], leftOut: [], waiting: 0, waitingTraces: 0, unheldTraces: 0 },
 	books: new Map([[1, 'First']]),
 	...changes
 });

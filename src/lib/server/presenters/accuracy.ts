@@ -188,6 +188,8 @@ export interface CountedChecks {
 	leftOut: readonly { kind: ReadingKind; why: LeftOut; readings: number; inside: number }[];
 	/** Capacity tests that no outlook has been held against. */
 	waiting: number;
+	/** Traces that are being held against what had been predicted of them. */
+	waitingTraces: number;
 	unheldTraces: number;
 	books: ReadonlyMap<number, string>;
 }
@@ -224,6 +226,7 @@ export function presentAccuracy(counted: CountedChecks): Accuracy {
 						waiting: counted.waiting
 					},
 		leftOut: [...counted.leftOut],
+		waitingTraces: counted.waitingTraces,
 		unheldTraces: counted.unheldTraces
 	};
 }

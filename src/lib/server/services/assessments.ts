@@ -15,7 +15,7 @@ import { AppError, notFound } from '../errors';
 import { canonicalJson } from '../hash';
 import { allow } from '../policies';
 import { presentAssessment, presentAssessmentRow } from '../presenters/assessments';
-import { holdTraces } from './accuracy/trace-checks';
+import { askToHold } from './accuracy/ask-to-hold';
 import { caseOf, findJobParts, gatherInputs, isAssessable } from './assessment-inputs';
 import { assessMounts } from './assessment-runs';
 import { bookInForce } from './books';
@@ -72,22 +72,21 @@ export async function assessMount(
 	{ mountId }: { mountId: number }
 ): Promise<AssessmentView> {
 	allow(person, 'assessments.run');
-	const made = await inTransaction(async (transaction) => {
+	return inTransaction(async (transaction) => {
 		const { workshopId } = person;
 		const mount = await Mount.findOne({ where: { id: mountId, workshopId, removedAt: null } });
 		if (!mount) throw notFound('mount');
 		const job = await findJob(person, mount.jobId, true);
 		const [made] = await assessMounts(person, job, [mount], transaction);
+		await askToHold('mount', mountId, transaction);
 		return show(person, made!);
 	});
-	await holdTraces({ mountId });
-	return made;
 }
 
 /** Assesses every mount of a job whose survey is finished: all of them, or none. */
 export async function assessJob(person: SignedInPerson, jobId: number): Promise<AssessmentView[]> {
 	allow(person, 'assessments.run');
-	const views = await inTransaction(async (transaction) => {
+	return inTransaction(async (transaction) => {
 		const job = await findJob(person, jobId, true);
 		const mounts = await Mount.findAll({
 			where: { jobId, workshopId: person.workshopId, removedAt: null, surveyComplete: true },
@@ -99,12 +98,11 @@ export async function assessJob(person: SignedInPerson, jobId: number): Promise<
 		}
 		const made: AssessmentView[] = [];
 		for (const each of await assessMounts(person, job, mounts, transaction)) {
+			await askToHold('mount', each.mountId, transaction);
 			made.push(await show(person, each));
 		}
 		return made;
 	});
-	for (const { mountId } of views) await holdTraces({ mountId });
-	return views;
 }
 
 export async function getAssessment(person: SignedInPerson, assessmentId: number): Promise<AssessmentView> {

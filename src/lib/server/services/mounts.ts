@@ -9,7 +9,7 @@ import { inTransaction } from '../db/transaction';
 import { AppError, notFound } from '../errors';
 import { allow } from '../policies';
 import { presentMount } from '../presenters/mounts';
-import { forgetTraceChecksOf, holdTracesOf } from './accuracy/trace-checks';
+import { holdMountAnew } from './accuracy/ask-to-hold';
 import { recordBy } from './audit';
 import { saveVersioned } from './records';
 import { refreshReview } from './review/keep-review';
@@ -141,22 +141,20 @@ export async function saveCable(
 
 export async function removeMount(person: SignedInPerson, mountId: number): Promise<MountView> {
 	allow(person, 'mounts.write');
-	const removed = await inTransaction(async (transaction) => {
+	return inTransaction(async (transaction) => {
 		const mount = await findStandingMount(person, mountId, transaction);
 		await mount.update({ removedAt: new Date() }, { transaction });
 		await refreshReview('mount', mount.id, transaction);
-		await forgetTraceChecksOf(mount.id, transaction);
+		await holdMountAnew(mount.id, transaction);
 		await recordBy(person, 'mount.removed', { type: 'mount', id: mount.id }, transaction);
 		return presentMount(mount);
 	});
-	await holdTracesOf(mountId);
-	return removed;
 }
 
 /** Puts a removed mount back, its letter and answers as they were; one that stands is left alone. */
 export async function restoreMount(person: SignedInPerson, mountId: number): Promise<MountView> {
 	allow(person, 'mounts.write');
-	const restored = await inTransaction(async (transaction) => {
+	return inTransaction(async (transaction) => {
 		const { jobId } = await findMount(person, mountId, transaction);
 		await holdJob(person, jobId, transaction);
 		const mount = await findMount(person, mountId, transaction);
@@ -164,10 +162,8 @@ export async function restoreMount(person: SignedInPerson, mountId: number): Pro
 		refuseTooMany(await mountsOf(jobId, transaction));
 		await mount.update({ removedAt: null }, { transaction });
 		await refreshReview('mount', mount.id, transaction);
-		await forgetTraceChecksOf(mount.id, transaction);
+		await holdMountAnew(mount.id, transaction);
 		await recordBy(person, 'mount.restored', { type: 'mount', id: mount.id }, transaction);
 		return presentMount(mount);
 	});
-	await holdTracesOf(mountId);
-	return restored;
 }

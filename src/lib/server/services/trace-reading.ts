@@ -19,7 +19,7 @@ import { record } from './audit';
 import { sayTraceError } from './describe-file';
 import { readTracePieces } from './read-pieces';
 import { afterOthers } from './slices';
-import { holdTraces } from './accuracy/trace-checks';
+import { askToHold } from './accuracy/ask-to-hold';
 import { binsKeyOf, rawKeyOf } from './trace-bins';
 import { findTrace, showTrace } from './traces';
 
@@ -51,6 +51,7 @@ async function settle(
 		const trace = await Trace.findByPk(id, { transaction, lock: transaction.LOCK.UPDATE });
 		if (trace?.state !== 'reading') return;
 		await trace.update(changes, { transaction });
+		if (action === 'trace.read') await askToHold('file', id, transaction);
 		const { workshopId, mappedBy: personId } = trace;
 		const entry = { workshopId, personId: personId ?? null, action, subjectType: 'trace', subjectId: id };
 		await record({ ...entry, detail: { ...detail, readWith: version } }, transaction);
@@ -85,7 +86,6 @@ async function read(trace: Trace, tell: (share: number) => void): Promise<void> 
 		});
 		const legs = measureLegs(reading.trace, proposeLegs(reading.trace));
 		await keepReading(trace, reading, legs);
-		await holdTraces({ traceId: trace.id });
 	} catch (error) {
 		if (!(error instanceof TraceError)) throw error;
 		const failure = { message: sayTraceError(error), line: error.line, column: error.column };

@@ -34,7 +34,7 @@ import { startHourOf } from '../presenters/traces';
 import { recordBy } from './audit';
 import { saveDayPlan } from './day-plans';
 import { saveVersioned } from './records';
-import { forgetTraceCheck, holdTraces } from './accuracy/trace-checks';
+import { holdFileAnew } from './accuracy/ask-to-hold';
 import { openBins, openTrace, requireRead } from './trace-bins';
 import { findTrace, showTrace } from './traces';
 
@@ -125,7 +125,7 @@ export async function saveLegs(
 	allow(person, 'traces.write');
 	const before = await findTrace(person, traceId);
 	const bins = await openBins(before);
-	const shown = await inTransaction(async (transaction) => {
+	return inTransaction(async (transaction) => {
 		const trace = await findTrace(person, traceId, { transaction });
 		const whole = wholeLegs(sent, trace.legs);
 		requireLegs(whole, trace.legs.at(-1)!.endS);
@@ -135,11 +135,9 @@ export async function saveLegs(
 		const told = legs.map(({ startS, endS, kind, meanSpeedKmh }) => ({ startS, endS, kind, meanSpeedKmh }));
 		const detail = { legs: told, startHour: trace.startHour ?? null };
 		await recordBy(person, 'trace.legs-set', { type: 'trace', id: traceId }, transaction, detail);
-		await forgetTraceCheck(traceId, transaction);
+		await holdFileAnew(traceId, transaction);
 		return showTrace(trace);
 	});
-	await holdTraces({ sha256: shown.sha256 });
-	return shown;
 }
 
 /** The design day that is nearest to the air outside as it was measured, or why there is none. */

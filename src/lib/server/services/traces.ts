@@ -8,7 +8,7 @@ import { AppError, notFound } from '../errors';
 import { allow } from '../policies';
 import { presentTrace, presentTraceRow, type TraceSurroundings } from '../presenters/traces';
 import { newContentId, storage } from '../storage';
-import { forgetTraceCheck, holdTraces } from './accuracy/trace-checks';
+import { holdFileAnew } from './accuracy/ask-to-hold';
 import { recordBy } from './audit';
 import { describeSample, forAnotherFile, keepProposal, readSample, refuseTrace } from './describe-file';
 import { cleanFileName } from './file-names';
@@ -266,19 +266,17 @@ async function setRemoved(
 	{ removedAt, action }: { removedAt: Date | null; action: string }
 ): Promise<TraceView> {
 	allow(person, 'traces.write');
-	const shown = await inTransaction(async (transaction) => {
+	return inTransaction(async (transaction) => {
 		const trace = await findTrace(person, traceId, { removed: removedAt === null, transaction });
 		const wasRemoved = (trace.removedAt ?? null) !== null;
 		if (wasRemoved === (removedAt !== null)) return showTrace(trace);
 		if (removedAt === null) await refuseTooMany(trace.mountId, transaction);
 		await trace.update({ removedAt }, { transaction });
-		await forgetTraceCheck(traceId, transaction);
+		// The same file may have been sent in elsewhere, and count there now, or no more.
+		await holdFileAnew(traceId, transaction);
 		await recordBy(person, action, { type: 'trace', id: traceId }, transaction);
 		return showTrace(trace);
 	});
-	// The same file may have been sent in elsewhere, and count there now, or no more.
-	await holdTraces({ sha256: shown.sha256 });
-	return shown;
 }
 
 /** Takes a trace away; for some weeks it can be put back. */

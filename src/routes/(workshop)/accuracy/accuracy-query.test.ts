@@ -8,6 +8,7 @@ const EMPTY: Accuracy = {
 	cutOuts: null,
 	capacity: null,
 	leftOut: [],
+	waitingTraces: 0,
 	unheldTraces: 0
 };
 const group = (key: string, name: string) => ({ key, name, figures: {} as never });

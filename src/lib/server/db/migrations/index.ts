@@ -99,6 +99,8 @@ import { migration as m152 } from './152-field-note-strikes-no-delete';
 import { migration as m160 } from './160-prediction-checks';
 import { migration as m161 } from './161-prediction-checks-traces';
 import { migration as m162 } from './162-outgoing-mails-handed-over';
+import { migration as m170 } from './170-traces-to-hold';
+import { migration as m171 } from './171-traces-by-file';
 import type { Migration } from '../migrate';
 
 /** Every migration, in the order in which they run; each is one DDL step that may run again. */
@@ -203,5 +205,7 @@ export const migrations: Migration[] = [
 	m152,
 	m160,
 	m161,
-	m162
+	m162,
+	m170,
+	m171
 ];

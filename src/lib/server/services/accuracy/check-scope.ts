@@ -11,4 +11,7 @@ export const UNHELD_TRACES = `traces t
 	LEFT JOIN prediction_checks c ON c.trace_id = t.id
 	WHERE t.state = 'read' AND NOT t.is_synthetic AND t.removed_at IS NULL AND c.id IS NULL`;
 
+/** Of those, the ones that somebody has asked to have held. */
+export const WAITS = 'EXISTS (SELECT 1 FROM traces_to_hold a WHERE a.trace_id = t.id)';
+
 export const ZONE = "COALESCE(p.computed_zone, p.climate_zone, '')";

@@ -6,7 +6,8 @@ import { isUnstruck } from '../field-standing';
 import { refreshChecks } from './keep-checks';
 import { holdNote, keepLabelCheck } from './label-checks';
 import { predictionAt } from './prediction-at';
-import { holdTraces } from './trace-checks';
+import { askToHold } from './ask-to-hold';
+import { finishHolding } from './hold-waiting';
 
 const BATCH = 500;
 
@@ -70,5 +71,6 @@ export async function completeChecks(): Promise<{ labels: number; installations:
 		const batch = ids.slice(from, from + BATCH);
 		await inTransaction((transaction) => refreshChecks(batch, transaction));
 	}
-	return { labels: await completeLabels(), installations: ids.length, traces: await holdTraces() };
+	await inTransaction((transaction) => askToHold('all', 0, transaction));
+	return { labels: await completeLabels(), installations: ids.length, traces: await finishHolding() };
 }

@@ -55,6 +55,18 @@ function readPage(
 	});
 }
 
+/** What a trace was held against; null where it was not. */
+export async function findTraceReading(
+	{ workshopId }: SignedInPerson,
+	traceId: number
+): Promise<Reading | null> {
+	const [stored] = await connection().query<StoredReading>(
+		page('c.workshop_id = :workshopId AND c.trace_id = :traceId'),
+		{ replacements: { workshopId, traceId, limit: 1 }, type: QueryTypes.SELECT }
+	);
+	return stored ? presentReading(stored) : null;
+}
+
 async function countReadings(workshopId: number, query: ReadingsQuery): Promise<number> {
 	const { where, replacements } = conditionsOn(workshopId, query);
 	const [row] = await connection().query<{ count: number }>(

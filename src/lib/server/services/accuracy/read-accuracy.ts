@@ -14,7 +14,7 @@ import {
 	type StepSums
 } from '../../presenters/accuracy';
 import { isUnstruck } from '../field-standing';
-import { CHECKS, UNHELD_TRACES, ZONE } from './check-scope';
+import { CHECKS, UNHELD_TRACES, WAITS, ZONE } from './check-scope';
 
 /** One row for each kind, book, zone and kind of position that occurs: a few hundred at most, whatever was read. */
 const SUMS = `
@@ -56,9 +56,12 @@ const WAITING = `
 	WHERE n.workshop_id = :workshopId AND n.kind = 'capacity-test' AND c.id IS NULL AND ${isUnstruck('n')}
 `;
 
-/** At mounts that stand: for want of an assessment, an hour of beginning, a reading of the battery, or a day that can be run. */
+/**
+ * At mounts that stand: those that are being worked out, and those that cannot be, for want of an assessment, an hour of
+ * beginning, a reading of the battery, or a day that can be run.
+ */
 const UNHELD = `
-	SELECT COUNT(*) AS traces FROM ${UNHELD_TRACES} AND t.workshop_id = :workshopId
+	SELECT COALESCE(SUM(${WAITS}), 0) AS waiting, COUNT(*) AS traces FROM ${UNHELD_TRACES} AND t.workshop_id = :workshopId
 `;
 
 type Stored = Record<string, string | number>;
@@ -112,7 +115,8 @@ export async function readAccuracy(person: SignedInPerson): Promise<Accuracy> {
 			...numbersOf(row, ['readings', 'inside'])
 		})),
 		waiting: Number(waiting[0]?.waiting ?? 0),
-		unheldTraces: Number(unheld[0]?.traces ?? 0),
+		waitingTraces: Number(unheld[0]?.waiting ?? 0),
+		unheldTraces: Number(unheld[0]?.traces ?? 0) - Number(unheld[0]?.waiting ?? 0),
 		books: new Map(books.map(({ number, name }) => [number, name]))
 	});
 }

@@ -1,7 +1,7 @@
 import { beforeEach, describe, expect, it } from 'vitest';
-import { QueryTypes } from 'sequelize';
 import { makeAssessableJob } from '../../../../../tests/support/assessable-job';
 import { makeFittable } from '../../../../../tests/support/fit-traces';
+import { checksOf, confirmLegs, saveOneStop } from '../../../../../tests/support/held-traces';
 import { askReadings } from '../../../../../tests/support/readings';
 import { makeCrew, useTestDatabase, type Crew } from '../../../../../tests/support/services';
 import { dayText, readAs, sendTrace, type Confirmed } from '../../../../../tests/support/traces';
@@ -46,20 +46,6 @@ beforeEach(async () => {
 const sendDay = async (text = dayText(), said: Confirmed = {}) =>
 	readAs(crew.engineer, await sendTrace(crew.engineer, mountId, text), said);
 
-/** Says of the legs as they were proposed that they are right. */
-async function confirmLegs({ id, legs, version }: TraceView) {
-	const sent = legs.map(({ endS, kind, meanSpeedKmh }) => ({ endS, kind, speedKmh: meanSpeedKmh }));
-	await saveLegs(crew.engineer, id, legsChangeSchema.parse({ legs: sent, version }));
-}
-
-async function checksOf(traceId: number) {
-	const sql = 'SELECT * FROM prediction_checks WHERE trace_id = :traceId';
-	return connection().query<Record<string, unknown>>(sql, {
-		replacements: { traceId },
-		type: QueryTypes.SELECT
-	});
-}
-
 /** The cells, minute by minute, as the model has them on the day of a trace. */
 async function foretellCells(traceId: number, assessmentId: number): Promise<Float64Array> {
 	const assessment = (await Assessment.findByPk(assessmentId))!;
@@ -96,7 +82,7 @@ describe('a measured trace', () => {
 		const assessment = await assessMount(crew.installer, { mountId });
 		const trace = await sendDay(dayText({ date: today() }));
 		expect(await checksOf(trace.id)).toMatchObject([{ left_out: 'legs-open' }]);
-		await confirmLegs(trace);
+		await confirmLegs(crew.engineer, trace);
 		const [check, ...others] = await checksOf(trace.id);
 		expect(others).toEqual([]);
 		expect(check).toMatchObject({
@@ -168,9 +154,7 @@ describe('a measured trace', () => {
 		await assessMount(crew.installer, { mountId });
 		const trace = await sendDay();
 		const [before] = await checksOf(trace.id);
-		const endS = trace.legs.at(-1)!.endS;
-		const oneStop = { legs: [{ endS, kind: 'stopped', speedKmh: null }], version: trace.version };
-		await saveLegs(crew.engineer, trace.id, legsChangeSchema.parse(oneStop));
+		await saveOneStop(crew.engineer, trace);
 		const [stood] = await checksOf(trace.id);
 		// An engine that never ran heats nothing.
 		expect(Number(stood!.predicted)).toBeLessThan(Number(before!.predicted) - 0.5);
@@ -192,7 +176,7 @@ describe('a measured trace', () => {
 	it('counts once when it is sent in twice, and the second one when the first is taken away', async () => {
 		await assessMount(crew.installer, { mountId });
 		const [first, second] = [await sendDay(), await sendDay()];
-		for (const each of [first, second]) await confirmLegs(each);
+		for (const each of [first, second]) await confirmLegs(crew.engineer, each);
 		expect(await checksOf(first.id)).toMatchObject([{ left_out: '' }]);
 		expect(await checksOf(second.id)).toMatchObject([{ left_out: 'sent-again' }]);
 		await removeTrace(crew.engineer, first.id);
@@ -207,7 +191,7 @@ describe('a measured trace', () => {
 		const first = await sendDay();
 		const sent = await sendTrace(crew.engineer, otherMountId, dayText());
 		const second = await readAs(crew.engineer, sent);
-		for (const each of [first, second]) await confirmLegs(each);
+		for (const each of [first, second]) await confirmLegs(crew.engineer, each);
 		expect(await checksOf(second.id)).toMatchObject([{ left_out: 'sent-again' }]);
 		await removeMount(crew.installer, mountId);
 		expect(await checksOf(first.id)).toEqual([]);
@@ -222,7 +206,7 @@ describe('a measured trace', () => {
 		const trace = await sendDay(dayText(), { isSynthetic: true });
 		await completeChecks();
 		expect(await checksOf(trace.id)).toEqual([]);
-		expect((await readAccuracy(crew.engineer)).unheldTraces).toBe(0);
+		expect(await readAccuracy(crew.engineer)).toMatchObject({ unheldTraces: 0, waitingTraces: 0 });
 	});
 
 	it(
@@ -230,7 +214,7 @@ describe('a measured trace', () => {
 		async () => {
 			const { engineer } = crew;
 			const { mountId: fittedMountId, traces, texts } = await makeFittable(crew, [1, 2]);
-			for (const trace of traces) await confirmLegs(trace);
+			for (const trace of traces) await confirmLegs(crew.engineer, trace);
 			const first = await putFitInForce(traces[0]!);
 			await assessMount(crew.installer, { mountId: fittedMountId });
 			const sendAgain = async () => readAs(engineer, await sendTrace(engineer, fittedMountId, texts[0]!));

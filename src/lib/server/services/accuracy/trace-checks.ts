@@ -6,7 +6,6 @@ import { holdTrace, type HeldTrace } from '$lib/thermal/fit';
 import { connection } from '../../db/connection';
 import { Assessment, Coefficient, Fit, Trace } from '../../db/models';
 import { inTransaction } from '../../db/transaction';
-import { logger } from '../../logger';
 import { startHourOf } from '../../presenters/traces';
 import { today } from '../days';
 import { workInSlices } from '../slices';
@@ -98,100 +97,88 @@ async function findLeftOut(
 }
 
 /** Null of what no prediction can be held against: nothing of the battery was measured, or its day cannot be run. */
-async function hold(trace: Trace, assessment: Assessment): Promise<HeldTrace | null> {
+async function hold(
+	trace: Trace,
+	assessment: Assessment,
+	tell: (share: number) => void
+): Promise<HeldTrace | null> {
 	try {
 		const given = await traceToFit(trace, assessment, []);
-		return await workInSlices(holdTrace(given, { samples: DRAWS, seed: trace.id }));
+		return await workInSlices(holdTrace(given, { samples: DRAWS, seed: trace.id }), tell);
 	} catch (error) {
 		if (error instanceof EngineInputError || error instanceof ScenarioError) return null;
 		throw error;
 	}
 }
 
-/** Whoever comes second finds the first one's, or a trace that is another by now. */
-async function isAsItWas({ id, version }: Trace, transaction: Transaction): Promise<boolean> {
-	const now = await Trace.findByPk(id, { transaction, lock: transaction.LOCK.UPDATE });
-	if (now?.version !== version || (now.removedAt ?? null) !== null) return false;
-	const [row] = await connection().query<{ held: number }>(
-		'SELECT COUNT(*) AS held FROM prediction_checks WHERE trace_id = :id',
-		{ replacements: { id }, type: QueryTypes.SELECT, transaction }
+/** Whoever changes one of these, its mount or what is held against it comes before this or after. */
+async function lockFile({ workshopId, sha256 }: Trace, transaction: Transaction): Promise<void> {
+	await connection().query(
+		'SELECT id FROM traces WHERE workshop_id = :workshopId AND sha256 = :sha256 ORDER BY id FOR UPDATE',
+		{ replacements: { workshopId, sha256 }, type: QueryTypes.SELECT, transaction }
 	);
-	return Number(row?.held) === 0;
 }
 
-async function holdOne(id: number): Promise<boolean> {
-	const trace = await Trace.findByPk(id);
-	if (!trace || startHourOf(trace) === null) return false;
-	const prediction = await predictionOf(trace);
-	const held = prediction && (await hold(trace, prediction.assessment));
-	if (!held) return false;
-	const { assessment, readOn, isEnteredLater } = prediction;
-	const { workshopId, mountId } = trace;
+/** Whoever comes second finds the first one's, or a trace that is another by now, or was asked for anew. */
+async function isAsItWas(
+	{ id, version }: Trace,
+	askIds: readonly number[],
+	transaction: Transaction
+): Promise<boolean> {
+	const [row] = await connection().query<{ unheld: number }>(
+		`SELECT COUNT(*) AS unheld FROM ${UNHELD_TRACES} AND t.id = :id AND t.version = :version
+			AND NOT EXISTS (SELECT 1 FROM traces_to_hold a WHERE a.trace_id = t.id AND a.id NOT IN (:askIds))`,
+		{ replacements: { id, version, askIds }, type: QueryTypes.SELECT, transaction }
+	);
+	return Number(row?.unheld) > 0;
+}
+
+async function write(
+	trace: Trace,
+	{ assessment, readOn, isEnteredLater }: Prediction,
+	held: HeldTrace,
+	transaction: Transaction
+): Promise<void> {
+	const leftOut = await findLeftOut(trace, assessment, transaction);
+	const { id: traceId, workshopId, mountId } = trace;
 	const { id: assessmentId, bookId } = assessment;
-	const about = { workshopId, mountId, installationId: null, fieldNoteId: null, traceId: id };
-	return inTransaction(async (transaction) => {
-		if (!(await isAsItWas(trace, transaction))) return false;
-		const leftOut = await findLeftOut(trace, assessment, transaction);
-		const row = { kind: 'trace', ...about, assessmentId, bookId, readOn, held, isEnteredLater } as const;
-		await writeChecks([{ ...row, watched: null, leftOut }], transaction);
-		return true;
+	const about = { workshopId, mountId, installationId: null, fieldNoteId: null, traceId };
+	const row = { kind: 'trace', ...about, assessmentId, bookId, readOn, held, isEnteredLater } as const;
+	await writeChecks([{ ...row, watched: null, leftOut }], transaction);
+}
+
+const drop = (askIds: readonly number[], transaction?: Transaction) =>
+	connection().query('DELETE FROM traces_to_hold WHERE id IN (:askIds)', {
+		...{ replacements: { askIds }, type: QueryTypes.DELETE },
+		...(transaction ? { transaction } : {})
 	});
+
+/** What can be said of a trace, where anything can. */
+async function work(trace: Trace | null, tell: (share: number) => void) {
+	if (!trace || trace.state !== 'read' || startHourOf(trace) === null) return null;
+	const prediction = await predictionOf(trace);
+	const held = prediction && (await hold(trace, prediction.assessment, tell));
+	return held && { trace, prediction, held };
 }
 
 /**
- * Holds traces that wait for it against what had been predicted of their days: those of a mount, of a file, one, or all.
- * What had been predicted comes from the assessment of the time, run with the legs as they were driven on the air as it was.
+ * Holds a trace against what had been predicted of its day, and keeps that in one transaction with the end of the asking; says
+ * whether it did. What had been predicted comes from the assessment of the time, run with the legs as they were driven on the
+ * air as it was.
+ *
+ * @param askIds the rows that asked for it: one that came later asks for another trace than this
  */
-export async function holdTraces(
-	of: { mountId?: number; traceId?: number; sha256?: string } = {}
-): Promise<number> {
-	const { mountId, traceId, sha256 } = of;
-	const narrowed = [
-		...(mountId === undefined ? [] : ['AND t.mount_id = :mountId']),
-		...(traceId === undefined ? [] : ['AND t.id = :traceId']),
-		...(sha256 === undefined ? [] : ['AND t.sha256 = :sha256'])
-	];
-	const rows = await connection().query<{ id: number }>(
-		`SELECT t.id FROM ${UNHELD_TRACES} ${narrowed.join(' ')} ORDER BY t.id`,
-		{
-			replacements: { mountId, traceId, sha256 },
-			type: QueryTypes.SELECT
-		}
-	);
-	let count = 0;
-	for (const { id } of rows) {
-		try {
-			if (await holdOne(Number(id))) count++;
-		} catch (error) {
-			// What somebody asked for is done; this waits, and is tried again at the next start.
-			logger.error({ err: error, traceId: id }, 'a trace could not be held against its prediction');
-		}
-	}
-	return count;
-}
-
-/** Of a file everywhere it was sent in, for which of its traces counts depends on the others. */
-const FORGET = `
-	DELETE c FROM prediction_checks c
-		JOIN traces t ON t.id = c.trace_id
-		JOIN traces s ON s.sha256 = t.sha256 AND s.workshop_id = t.workshop_id
-`;
-
-async function forget(where: string, id: number, transaction: Transaction): Promise<void> {
-	const options = { replacements: { id }, type: QueryTypes.DELETE, transaction };
-	await connection().query(`${FORGET} WHERE ${where}`, options);
-}
-
-/** Forgets what a file was held against, inside the transaction that changed a trace of it. */
-export const forgetTraceCheck = (traceId: number, transaction: Transaction): Promise<void> =>
-	forget('s.id = :id', traceId, transaction);
-
-/** The same of every file of a mount that goes or comes back. */
-export const forgetTraceChecksOf = (mountId: number, transaction: Transaction): Promise<void> =>
-	forget('s.mount_id = :id', mountId, transaction);
-
-/** Holds anew, wherever they were sent in, the files of a mount that went or came back. */
-export async function holdTracesOf(mountId: number): Promise<void> {
-	const traces = await Trace.findAll({ where: { mountId }, attributes: ['sha256'] });
-	for (const sha256 of new Set(traces.map((trace) => trace.sha256))) await holdTraces({ sha256 });
+export async function holdTraceAsked(
+	traceId: number,
+	askIds: readonly number[],
+	tell: (share: number) => void = () => {}
+): Promise<boolean> {
+	const found = await work(await Trace.findByPk(traceId), tell);
+	return inTransaction(async (transaction) => {
+		if (found) await lockFile(found.trace, transaction);
+		const isToBeKept = found !== null && (await isAsItWas(found.trace, askIds, transaction));
+		if (isToBeKept) await write(found.trace, found.prediction, found.held, transaction);
+		await drop(askIds, transaction);
+		return isToBeKept;
+	});
 }

@@ -17,6 +17,7 @@ import { pageId } from '$lib/server/http/page-id';
 import { validate } from '$lib/server/http/validate';
 import { logger } from '$lib/server/logger';
 import { mayDo } from '$lib/server/policies';
+import { findTraceHold } from '$lib/server/services/accuracy/trace-hold';
 import { getDayPlan } from '$lib/server/services/day-plans';
 import { beginReading } from '$lib/server/services/trace-reading';
 import { findAir, getCurve, saveLegs, useAsDayPlan } from '$lib/server/services/trace-views';
@@ -62,6 +63,7 @@ async function loadRead(person: SignedInPerson, trace: TraceView, url: URL) {
 		curve,
 		figures: await getCurve(person, trace.id, { channels: query.channels, fromS, toS, points: TABLE_ROWS }),
 		air: await findAir(person, trace.id),
+		hold: await findTraceHold(person, trace.id),
 		planForm: await loadForm(tracePlanSchema, { ...first, version: plan?.version ?? null })
 	};
 }
