@@ -3,7 +3,7 @@ import { writeFileSync } from 'node:fs';
 import { fileURLToPath } from 'node:url';
 import { parseScenario, type ScenarioInput } from '../../src/lib/thermal';
 import type { FitChannel, FitTrace } from '../../src/lib/thermal/fit';
-import { inventTrace } from '../../tests/support/invent-trace';
+import { inventTrace, writeTraceCsv } from '../../tests/support/invent-trace';
 
 const SEED = 20261202;
 const CHANNELS: readonly FitChannel[] = ['bayAirC', 'exhaustShieldC', 'caseC', 'cellC'];
@@ -76,19 +76,12 @@ function spoil(trace: FitTrace, at: number): FitTrace {
 	return trace;
 }
 
-function toCsv({ timeS, channels }: FitTrace): string {
-	const columns = Object.entries(channels);
-	const cell = (value: number) => (Number.isNaN(value) ? '' : value.toFixed(1));
-	const rows = [...timeS].map((time, at) => [time, ...columns.map(([, values]) => cell(values[at]!))].join());
-	return [['timeS', ...columns.map(([name]) => name)].join(), ...rows].join('\n') + '\n';
-}
-
 /** What each file holds, by its name. */
 export function makeFiles(): Record<string, string> {
 	const traces = DAYS.map((day, at) => {
 		const scenario = parseScenario(addTrue(day));
 		const invention = { scenario, channels: CHANNELS, noise: NOISE, seed: SEED + at, withCurrent: true };
-		return [`trace-${at + 1}.csv`, toCsv(spoil(inventTrace(invention), at))];
+		return [`trace-${at + 1}.csv`, writeTraceCsv(spoil(inventTrace(invention), at))];
 	});
 	const truth = {
 		synthetic: true,

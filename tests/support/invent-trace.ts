@@ -87,3 +87,11 @@ export function inventTrace({
 		channels: { ambientC, ...current, ...(Object.fromEntries(temperatures) as FitTrace['channels']) }
 	};
 }
+
+/** The file that a logger would have written of it: tenths, empty where nothing was logged. */
+export function writeTraceCsv({ timeS, channels }: FitTrace): string {
+	const columns = Object.entries(channels);
+	const cell = (value: number) => (Number.isNaN(value) ? '' : value.toFixed(1));
+	const rows = [...timeS].map((time, at) => [time, ...columns.map(([, values]) => cell(values[at]!))].join());
+	return [['timeS', ...columns.map(([name]) => name)].join(), ...rows].join('\n') + '\n';
+}

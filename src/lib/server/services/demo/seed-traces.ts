@@ -12,7 +12,7 @@ import { addTrace, confirmMapping, getTrace } from '../traces';
 import type { Crew } from './seed-people';
 
 /** The application runs in the project's folder, where its reference data lie. */
-const FOLDER = join('reference-data', 'synthetic-traces');
+const FOLDER = join('reference-data', 'demo-traces');
 
 const MINUTE_S = 60;
 
@@ -34,7 +34,7 @@ async function findMount(workshopId: number, transaction: Transaction): Promise<
 	return mount;
 }
 
-/** Three days that were made up, and say so, at a mount that is like the one that they were made for. */
+/** Three days that were made up, and say so, at the mount that they were made for. */
 export async function seedTraces({ key, workshopId, staff }: Crew, transaction: Transaction): Promise<void> {
 	if (key !== demo.workshop) return;
 	const engineer = staff.find(({ role }) => role === 'engineer');
