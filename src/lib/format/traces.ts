@@ -188,16 +188,11 @@ export const sayStep = (stepS: number): string =>
 export const sayLength = (seconds: number): string => saySinceStart(seconds);
 
 /** What the air outside was, as a design day. */
-export const sayAir = ({
-	tMaxC,
-	dailyRangeK,
-	offByK
-}: {
-	tMaxC: number;
-	dailyRangeK: number;
-	offByK: number;
-}): string =>
-	`${formatNumber(tMaxC, 1)}${THIN_SPACE}°C at the hottest, ${formatNumber(dailyRangeK, 1)}${THIN_SPACE}K from there down to the coolest; the measured air lies ${formatNumber(offByK, 1)}${THIN_SPACE}K from such a day`;
+export const sayAir = (
+	{ tMaxC, dailyRangeK, offByK }: { tMaxC: number; dailyRangeK: number; offByK: number },
+	isSynthetic = false
+): string =>
+	`${formatNumber(tMaxC, 1)}${THIN_SPACE}°C at the hottest, ${formatNumber(dailyRangeK, 1)}${THIN_SPACE}K from there down to the coolest; ${isSynthetic ? 'the air that was made up' : 'the measured air'} lies ${formatNumber(offByK, 1)}${THIN_SPACE}K from such a day`;
 
 /** Why no design day is found in a trace. */
 export const NO_AIR_WORDS: Readonly<Record<NoTraceAir['whyNone'], string>> = {

@@ -1,4 +1,4 @@
-export const STEPS_BOX = { width: 340, height: 168, left: 30, right: 4, top: 18, bottom: 40 } as const;
+export const STEPS_BOX = { width: 340, height: 168, left: 30, right: 16, top: 18, bottom: 40 } as const;
 
 export interface ErrorStep {
 	fromK: number;

@@ -2,7 +2,7 @@ import { formatNumber } from '../../../format/numbers';
 import { listFigureTicks } from '../../../format/traces';
 import { drawLine } from '../trace-plot/plot-drawing';
 
-export const RESIDUAL_BOX = { width: 480, height: 170, left: 36, right: 8, top: 18, bottom: 26 } as const;
+export const RESIDUAL_BOX = { width: 480, height: 170, left: 36, right: 8, top: 10, bottom: 24 } as const;
 
 export interface ResidualSeries {
 	/** Across: hours from the start, or °C. */
