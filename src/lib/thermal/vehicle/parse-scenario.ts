@@ -131,6 +131,9 @@ function parseTopGroup(group: FieldGroup, input: unknown): Values | null {
 	return parseGroup(group, input, group);
 }
 
+/** Legs that were split into equal parts do not add up to the last digit, min. */
+const ROUNDING_MIN = 1e-6;
+
 function parseLegs(input: unknown): Leg[] {
 	const limit = `a list of 1 to ${MOST_LEGS} legs`;
 	if (input === undefined) fail('missing_field', 'legs', input, limit);
@@ -142,7 +145,7 @@ function parseLegs(input: unknown): Leg[] {
 		return parseGroup('legs', leg === undefined ? null : leg, path) as unknown as Leg;
 	});
 	const minutes = legs.reduce((sum, leg) => sum + leg.minutes, 0);
-	if (minutes > LONGEST_PLAN_MINUTES) {
+	if (minutes > LONGEST_PLAN_MINUTES + ROUNDING_MIN) {
 		fail('too_long', 'legs', minutes, `at most ${LONGEST_PLAN_MINUTES} minutes (60 days)`);
 	}
 	return legs;

@@ -231,6 +231,16 @@ describe('a run', () => {
 	});
 });
 
+describe('legs', () => {
+	it('may be sixty days together, also of parts that do not add up to the last digit, and no minute more', () => {
+		const parts = Array.from({ length: 61 }, () => ({ minutes: 86_400 / 61 }));
+		expect(parts.reduce((sum, { minutes }) => sum + minutes, 0)).toBeGreaterThan(86_400);
+		expect(parseScenario({ legs: parts }).legs).toHaveLength(61);
+		const longer = [...parts, { minutes: 1 }];
+		expect(() => parseScenario({ legs: longer })).toThrow('(60 days)');
+	});
+});
+
 describe('the table of fields', () => {
 	it('names each field once, with a default inside its range', () => {
 		const names = SCENARIO_FIELDS.map(({ group, key }) => `${group}.${key}`);
