@@ -1,8 +1,9 @@
 import pdfmake from 'pdfmake';
-import type { TDocumentDefinitions, TFontDictionary } from 'pdfmake/interfaces';
+import type { Content, DynamicContent, TDocumentDefinitions, TFontDictionary } from 'pdfmake/interfaces';
 import { RIBBON_FONT } from '$lib/components/charts/day-ribbon/marks-series';
 import { cutFont, isCut, type Cut } from './fonts';
-import { splitByScript, widenSpaces, type Script } from './scripts';
+import { mm } from './parts';
+import { MISSING_LETTER, spellOut, splitByScript, type Script } from './scripts';
 
 // A document is made of what is given, never of what an address or a path inside it leads to.
 pdfmake.setUrlAccessPolicy(() => false);
@@ -26,26 +27,47 @@ async function provideFonts(scripts: ReadonlySet<Script>): Promise<TFontDictiona
 	return fonts;
 }
 
-/** Says of every text in which part of the typeface its characters are, and notes which parts it takes. */
-function dress(node: unknown, scripts: Set<Script>): unknown {
-	if (Array.isArray(node)) return node.map((each) => dress(each, scripts));
+/** What the texts of a document take of the typeface, and whether it has no shape for a letter of them. */
+interface Taken {
+	scripts: Set<Script>;
+	lacks: boolean;
+}
+
+/** Says of every text in which part of the typeface its characters are, and notes what it takes. */
+function dress(node: unknown, taken: Taken): unknown {
+	if (Array.isArray(node)) return node.map((each) => dress(each, taken));
 	if (typeof node !== 'object' || node === null) return node;
 	return Object.fromEntries(
 		Object.entries(node).map(([key, value]) => [
 			key,
-			key === 'text' && typeof value === 'string' ? dressText(value, scripts) : dress(value, scripts)
+			key === 'text' && typeof value === 'string' ? dressText(value, taken) : dress(value, taken)
 		])
 	);
 }
 
-function dressText(given: string, scripts: Set<Script>) {
-	const text = widenSpaces(given);
-	const runs = splitByScript(text);
-	if (runs.every(({ script }) => script === TEXT_FAMILY)) return text;
+function dressText(given: string, taken: Taken) {
+	const { runs, lacks } = splitByScript(spellOut(given));
+	taken.lacks ||= lacks;
+	if (runs.every(({ script }) => script === TEXT_FAMILY)) return runs.map(({ text }) => text).join('');
 	return runs.map(({ text, script }) => {
-		scripts.add(script);
+		taken.scripts.add(script);
 		return script === TEXT_FAMILY ? { text } : { text, font: script };
 	});
+}
+
+const LACKS: Content = {
+	text: `“${MISSING_LETTER}” in a name stands for a letter that this paper’s typeface does not have. The screen shows it.`,
+	fontSize: 7,
+	margin: [mm(14), mm(3), 0, 0]
+};
+
+/** The foot of each page, and beside it what the paper has to say of itself. */
+function dressFoot({ footer }: TDocumentDefinitions, taken: Taken): DynamicContent {
+	return (page, count, size) => {
+		const given = typeof footer === 'function' ? footer(page, count, size) : footer;
+		const foot = dress(given ?? '', taken) as Content;
+		return taken.lacks ? { columns: [LACKS, foot] } : foot;
+	};
 }
 
 export interface PaperMeta {
@@ -60,14 +82,18 @@ export interface PaperMeta {
  * (title, language), and without anything from elsewhere.
  */
 export async function makePdf(definition: TDocumentDefinitions, meta: PaperMeta): Promise<Buffer> {
-	const scripts = new Set<Script>([TEXT_FAMILY]);
-	const content = dress(definition.content, scripts) as TDocumentDefinitions['content'];
-	const fonts = await provideFonts(scripts);
+	const taken: Taken = { scripts: new Set([TEXT_FAMILY]), lacks: false };
+	const content = dress(definition.content, taken) as TDocumentDefinitions['content'];
+	const footer = dressFoot(definition, taken);
+	// Once before, for the fonts that it takes.
+	footer(1, 1, { width: 0, height: 0, orientation: 'portrait' });
+	const fonts = await provideFonts(taken.scripts);
 	// The library takes the fonts over and changes them: each document has its own.
 	pdfmake.setFonts(fonts);
 	const document = pdfmake.createPdf({
 		...definition,
 		content,
+		footer,
 		info: { title: meta.title, author: meta.author, creator: 'Soakline', creationDate: meta.madeAt },
 		...{ language: 'en-GB', displayTitle: true, compress: true }
 	} as TDocumentDefinitions);

@@ -1,5 +1,5 @@
 import { renderDayRibbonSvg } from '$lib/components/charts/day-ribbon/render-day-ribbon';
-import { widenSpaces } from './scripts';
+import { spellOut } from './scripts';
 import type { RibbonData } from '$lib/components/charts/day-ribbon/ribbon-data';
 
 const HALO_TEXT = /<text\b[^>]*\bpaint-order="stroke"[^>]*>[\s\S]*?<\/text>/g;
@@ -17,4 +17,4 @@ export const layHalosBelow = (svg: string): string =>
 
 /** The day in black and white, for a document. */
 export const drawRibbon = (data: RibbonData): string =>
-	widenSpaces(layHalosBelow(renderDayRibbonSvg(data, { size: 'print', scheme: 'print', idPrefix: 'day' })));
+	spellOut(layHalosBelow(renderDayRibbonSvg(data, { size: 'print', scheme: 'print', idPrefix: 'day' })));

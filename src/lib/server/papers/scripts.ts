@@ -36,22 +36,49 @@ export function scriptOf(character: string): Script | null {
 	return COVERAGE.find(holds)?.script ?? null;
 }
 
+/** Stands for a letter that the typeface does not have: seen and spoken of, where nothing at all would mislead. */
+export const MISSING_LETTER = '?';
+
+/** Marks that are no letters: they join, turn or colour what stands before them. */
+const SILENT = /[\p{Cf}\u{fe00}-\u{fe0f}]/u;
+
 export interface Run {
 	text: string;
 	script: Script;
 }
 
-/** A text in runs of one part each, as a browser does it; what no part holds stays with the usual one. */
-export function splitByScript(text: string): Run[] {
+export interface Split {
+	runs: Run[];
+	/** Whether a letter had to be left out for want of its shape. */
+	lacks: boolean;
+}
+
+/** A text in runs of one part each, as a browser does it; what no part holds is shown to be missing. */
+export function splitByScript(text: string): Split {
 	const runs: Run[] = [];
-	for (const character of text) {
-		const script = scriptOf(character) ?? 'latin';
+	let lacks = false;
+	for (const given of text.normalize('NFC')) {
+		const known = scriptOf(given);
+		if (known === null && SILENT.test(given)) continue;
+		if (known === null) lacks = true;
+		const [script, character] = known ? [known, given] : (['latin', MISSING_LETTER] as const);
 		const last = runs.at(-1);
 		if (last?.script === script) last.text += character;
 		else runs.push({ text: character, script });
 	}
-	return runs;
+	return { runs, lacks };
 }
 
-/** Browsers take a narrow space from another typeface; ours has the usual one only. */
-export const widenSpaces = (text: string): string => text.replaceAll('\u202f', '\u00a0');
+/**
+ * What browsers take from another typeface and ours has no shape for: the usual space for the narrow one, and in words
+ * what formulas have as signs.
+ */
+const SPELT: Readonly<Record<string, string>> = {
+	'\u202f': '\u00a0',
+	'√': 'root of ',
+	'≤': 'at most',
+	'⅓': '1/3'
+};
+const TO_SPELL = new RegExp(`[${Object.keys(SPELT).join('')}]`, 'g');
+
+export const spellOut = (text: string): string => text.replace(TO_SPELL, (sign) => SPELT[sign]!);

@@ -103,17 +103,31 @@ describe('a recommendation as a document', () => {
 		}
 	);
 
-	it('spells names in the letters of their own script', { timeout: LONG_MS }, async () => {
+	async function readPaperFor(name: string) {
 		const { installer } = await makeCrew();
 		const { jobId } = await makeAssessableJob(installer);
 		const { customer } = await getJob(installer, jobId);
-		const name = 'Łucja Παπαδάκη Дмитрий Nguyễn';
 		const { phone, email, version } = customer;
 		await updateCustomer(installer, customer.id, { name, phone, email, version });
 		const [, ofCool] = await assessJob(installer, jobId);
 		const { id } = await makeRecommendation(installer, { assessmentId: ofCool!.id });
-		const { text } = await readPdf(await writeRecommendationPdf(installer, id));
-		expect(inOneLine(text).normalize('NFC')).toContain(name);
+		const { pages, text } = await readPdf(await writeRecommendationPdf(installer, id));
+		return { pages, text: inOneLine(text).normalize('NFC') };
+	}
+	const LACKS = 'stands for a letter that this paper’s typeface does not have';
+
+	it('spells names in the letters of their own script', { timeout: LONG_MS }, async () => {
+		const name = 'Łucja Παπαδάκη Дмитрий Nguyễn';
+		const { text } = await readPaperFor(name);
+		expect(text).toContain(name);
+		expect(text).not.toContain(LACKS);
+	});
+
+	it('shows where its typeface lacks a letter, and says so on each page', { timeout: LONG_MS }, async () => {
+		const { pages, text } = await readPaperFor('Ilse 漢字');
+		expect(pages).toBe(2);
+		expect(text).toContain('Ilse ??');
+		expect(text.split(LACKS)).toHaveLength(3);
 	});
 });
 
