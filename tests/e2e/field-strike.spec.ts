@@ -18,8 +18,8 @@ async function makeTested(page: Page, email: string) {
 		...{ fittedOn: '2026-01-31', fittedBy: 'Ida Fenn', serialNumber: 'X-1', differences: [], version: null }
 	});
 	for (const [notedOn, capacityAh] of [
-		['2026-05-01', 95],
-		['2026-06-01', 45]
+		['2026-09-01', 95],
+		['2026-10-01', 45]
 	] as const)
 		await ask(page, 'POST', `${mount}/field-notes`, { ...CAPACITY_TEST, notedOn, capacityAh });
 	const { customer } = (await ask(page, 'GET', `/api/v1/jobs/${jobId}`)) as {
@@ -42,7 +42,7 @@ test(
 
 		await page.goto(notes);
 		await expect(page.getByText(/^By 2 tests it is down to 80/)).toBeVisible();
-		const slip = page.getByRole('listitem').filter({ hasText: '1 June 2026' });
+		const slip = page.getByRole('listitem').filter({ hasText: '1 October 2026' });
 		await slip.getByRole('link', { name: /^Strike it out/ }).click();
 		await page.waitForURL(/\/strike$/);
 		await openForm(page, page.url());

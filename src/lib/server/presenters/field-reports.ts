@@ -85,16 +85,24 @@ function sayLearnt({ fits, unknowns, before, after }: Learning, cause: HeatCause
 	if (!fits) {
 		return 'This lies outside of what the estimate held possible: look at the reading again, and at the survey. Nothing was changed.';
 	}
-	const [was, is] = [before.year.year.middle, after.year.year.middle];
 	const told = unknowns.slice(0, 3).map(({ label }) => label);
 	const about = told.length > 0 ? ` It tells most of ${joinWords(told)}.` : '';
-	const change =
-		is < was * 0.95
-			? 'fewer dark days than'
-			: is > was * 1.05
-				? 'more dark days than'
-				: 'about as many dark days as';
-	return `With this ${change} before are to be expected.${about}`;
+	return `With this ${sayChange(before, after)}.${about}`;
+}
+
+type Belief = Learning['before'];
+
+/** No more than the figures beside it show: what both read alike is called alike. */
+function sayChange(before: Belief, after: Belief): string {
+	const [was, is] = [before.year.year, after.year.year];
+	const isAlike =
+		sayDayCount(was) === sayDayCount(is) || Math.abs(is.middle - was.middle) <= was.middle * 0.05;
+	const days = isAlike
+		? 'about as many dark days as'
+		: `${is.middle < was.middle ? 'fewer' : 'more'} dark days than`;
+	const gainedK = after.headroomMiddleK - before.headroomMiddleK;
+	const headroom = Math.abs(gainedK) < 1 ? '' : `, with ${gainedK < 0 ? 'less' : 'more'} headroom`;
+	return `${days} before are to be expected${headroom}`;
 }
 
 function presentLearning(learning: Learning | null, cause: HeatCause | null): NoteReport['learning'] {
@@ -200,10 +208,24 @@ function saySide(
 }
 const TEST_SHARE = 0.02;
 
+/** Nothing of years can be read from less: judgement, no source. */
+const LEAST_YEARS = 0.5;
+
+/** What tests of the first months say: nothing of how it wears. */
+function presentEarly(count: number): TrendReport {
+	const tests = count === 1 ? 'one test' : `${count} tests`;
+	return {
+		sentence: `By ${tests} in its first half year nothing can be said of how it wears. What lies far from its rating by now is no wear: look at how it was tested, and for a fault.`,
+		...{ rows: [], named: '', curves: [], tests: [], picture: '' },
+		method: 'Where the tests lead is said from half a year after the fitting on.'
+	};
+}
+
 /** Capacity tests over time, and where they lead; null without a test. */
 export function presentTrend({ trend, ratedAh, namedAh, expected }: FieldNotesView): TrendReport | null {
 	if (!trend) return null;
 	const { tests, projections, honest, toldByTests } = trend;
+	if (tests.every(({ years }) => years < LEAST_YEARS)) return presentEarly(tests.length);
 	const by = projections.find(({ law }) => law === honest)!;
 	const why = toldByTests
 		? 'The tests themselves tell which.'

@@ -100,6 +100,15 @@ describe('notes from the field', () => {
 		expect(told.named).toBe('');
 	});
 
+	it('of capacity tests within months of the fitting say nothing of years', async () => {
+		const { installer, mountId } = await makeMount();
+		await addFieldNote(installer, mountId, test('2026-02-20', 98));
+		await addFieldNote(installer, mountId, test('2026-07-20', 40));
+		const told = presentTrend(await listFieldNotes(installer, mountId))!;
+		expect(told.sentence).toMatch(/^By 2 tests in its first half year nothing can be said/);
+		expect(told).toMatchObject({ rows: [], curves: [] });
+	});
+
 	it(
 		'of capacity tests are held against the ageing that was expected, and say when a named capacity is reached',
 		{ timeout: LONG_MS },
