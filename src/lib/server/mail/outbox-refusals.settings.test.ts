@@ -179,7 +179,7 @@ describe('a letter that the mail server may have', () => {
 		const { workshopId } = await makeCrew();
 		const { id } = await post(workshopId, 'lost@travellers.example');
 		const letter = (await OutgoingMail.findByPk(id))!;
-		const lost = deliver(letter, () => Promise.reject(new Error('Another process took it over.')));
+		const lost = deliver(letter, 'A shop', () => Promise.reject(new Error('Another process took it over.')));
 		await expect(lost).rejects.toThrow('took it over');
 		expect(taken.get('lost@travellers.example')).toBeUndefined();
 	});

@@ -19,7 +19,7 @@ async function readArrived(messageId: string) {
 
 describe('the outbox', () => {
 	it('hands a letter to the mail server with its words as they were written', async () => {
-		const { workshopId } = await makeCrew();
+		const { workshopId, installer } = await makeCrew();
 		const text = 'Dark at 16:51, 80 °C – “too hot”.\n\nhttp://localhost/sheet/abc\n';
 		const { id, messageId } = await post(workshopId, 'ilse@travellers.example', text);
 		await sendDue();
@@ -31,6 +31,9 @@ describe('the outbox', () => {
 		expect(letter!.text).toBe(text);
 		expect(letter!.subject).toBe('A day at 45 °C');
 		expect(letter!.to).toMatchObject({ text: 'ilse@travellers.example' });
+		expect(letter!.from!.value).toMatchObject([
+			{ name: installer.workshopName, address: 'soakline@localhost' }
+		]);
 		expect(letter!.html).toContain('<p>Hello.</p>');
 	});
 

@@ -2,7 +2,7 @@ import { randomUUID } from 'node:crypto';
 import { col, Op, type Transaction } from 'sequelize';
 import { ERASED } from '$lib/schemas/erasures';
 import type { LetterKind } from '$lib/schemas/letters';
-import { OutgoingMail } from '../db/models';
+import { OutgoingMail, Workshop } from '../db/models';
 import { outsideTransaction } from '../db/transaction';
 import { logger } from '../logger';
 import { withLetterhead } from './letterhead';
@@ -166,7 +166,8 @@ async function sendOne(mail: OutgoingMail): Promise<void> {
 		await noteHandedOver(mail, claimedUntil);
 		isHandedOver = true;
 	};
-	await deliver(mail, handOver).then(
+	const shop = await Workshop.findByPk(mail.workshopId, { attributes: ['name'] });
+	await deliver(mail, shop?.name ?? '', handOver).then(
 		() => noteSent(mail),
 		(error: unknown) =>
 			isHandedOver && !isRefusal(error) ? noteUnsure(mail) : noteRefused(mail, mail.attempts + 1, error)

@@ -47,12 +47,27 @@ function connect(beforeEnd: () => Promise<void>): Transporter {
 	return transporter;
 }
 
-/** Hands one letter to the mail server; resolves once the server has taken it, and fails untaken if `beforeEnd` does. */
-export async function deliver(letter: Letter, beforeEnd: () => Promise<void>): Promise<void> {
+const ADDRESS = /<([^<>]+)>\s*$/;
+
+/** Readers know the shop, not the program that sends for it. */
+function senderFor(shopName: string): { name: string; address: string } {
+	const { MAIL_FROM } = env();
+	return { name: shopName, address: ADDRESS.exec(MAIL_FROM)?.[1] ?? MAIL_FROM.trim() };
+}
+
+/**
+ * Hands one letter to the mail server in a shop's name; resolves once the server has taken it, and fails untaken if
+ * `beforeEnd` does.
+ */
+export async function deliver(
+	letter: Letter,
+	shopName: string,
+	beforeEnd: () => Promise<void>
+): Promise<void> {
 	const { messageId, recipient, replyTo, stopUrl, subject, textBody, htmlBody } = letter;
 	await connect(beforeEnd).sendMail({
 		messageId,
-		from: env().MAIL_FROM,
+		from: senderFor(shopName),
 		to: recipient,
 		...(replyTo ? { replyTo } : {}),
 		...(stopUrl ? { headers: stopHeaders(stopUrl) } : {}),

@@ -9,6 +9,8 @@ export interface ParcelFile {
 
 const sayEmpty = (text: string): string => (text === '' ? 'not known' : text);
 
+const sayTimes = (count: number): string => (count === 1 ? 'once' : `${count} times`);
+
 /** The first page of the parcel, for people: what is held, in words, and what each file is. */
 export function writeHeldIndex(
 	{ aboutYou, signIns, vehicles, jobs, letters, whatHappened }: HeldData,
@@ -22,7 +24,7 @@ export function writeHeldIndex(
 		`E-mail: ${sayEmpty(aboutYou.email)}`,
 		`Telephone: ${sayEmpty(aboutYou.telephone)}`,
 		`Reminders by e-mail: ${aboutYou.remindersStoppedAt ? 'stopped' : 'wanted'}`,
-		...signIns.map(({ email, sessions }) => `Signs in as: ${email}, ${sessions.length} times on record`),
+		...signIns.map(({ email, sessions }) => `Signs in as: ${email}, ${sayTimes(sessions.length)} on record`),
 		'',
 		'Vehicles',
 		...vehicles.map(
