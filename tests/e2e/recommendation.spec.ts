@@ -69,7 +69,7 @@ test('going ahead against the verdict takes a named person and a reason', async 
 	await expect(page.getByText(`Reason: ${WHY}`)).toBeVisible();
 });
 
-test('a later recommendation stands beside the one that the battery was fitted under', async ({ page }) => {
+test('a later recommendation stands beside the one that a fitting is held against', async ({ page }) => {
 	test.slow();
 	const { jobId, mountIds } = await makeAssessableJob(page, { mounts: 1 });
 	const [hot] = await assessAll(page, jobId);
@@ -78,25 +78,25 @@ test('a later recommendation stands beside the one that the battery was fitted u
 	const again = `/jobs/${jobId}/recommendation?assessment=${String(hot!.id)}`;
 	await page.goto(again);
 	await expect(page.getByText('Mount A has a recommendation already')).toBeVisible();
-	await expect(page.getByText('The battery was fitted under')).toHaveCount(0);
+	await expect(page.getByText('What was fitted is held against')).toHaveCount(0);
 	await ask(page, 'PUT', `/api/v1/mounts/${mountIds[0]}/fitting`, {
 		...{ fittedOn: '2026-01-31', fittedBy: 'Ida Fenn', serialNumber: '', note: '' },
 		...{ differences: [], version: null }
 	});
 	await page.goto(again);
 	await expect(
-		page.getByText(`The battery was fitted under recommendation ${String(firstId)}.`)
+		page.getByText(`What was fitted is held against recommendation ${String(firstId)},`)
 	).toBeVisible();
 	await expectNoViolations(page);
 	await page.getByLabel('Who decided').fill('Odo Marsh');
 	await page.getByLabel('Reason').fill('The duct is in now, and it stays.');
 	await page.getByRole('button', { name: 'Recommend it against the verdict' }).click();
-	await expect(page.getByText('The battery was fitted under an earlier one')).toBeVisible();
+	await expect(page.getByText('What was fitted is held against an earlier one')).toBeVisible();
 	await expectNoViolations(page);
 	const before = page.getByRole('region', { name: 'Recommended before' });
-	await expect(before.getByText(/fitted under this one; later came recommendation \d+ on/)).toBeVisible();
+	await expect(before.getByText(/held against this one; later came recommendation \d+ on/)).toBeVisible();
 	await before.getByRole('link', { name: `Recommendation ${String(firstId)},` }).click();
-	await expect(page.getByText(/fitted under this one; later came recommendation \d+ on/)).toBeVisible();
+	await expect(page.getByText(/held against this one; later came recommendation \d+ on/)).toBeVisible();
 	await page.getByRole('link', { name: /the later one$/ }).click();
 	await expect(page.getByText('Decided by Odo Marsh, entered by')).toBeVisible();
 	await expect(page.getByText('later came')).toHaveCount(0);

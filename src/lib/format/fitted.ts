@@ -1,4 +1,4 @@
-import { NOT_PROPOSED, type AgreedItem, type Difference } from '../schemas/fitting';
+import { NOT_PROPOSED, type AgreedItem, type Difference, type FittedKey } from '../schemas/fitting';
 import { earliestDayOf, formatDate } from './dates';
 import { joinWords } from './join-words';
 
@@ -23,3 +23,32 @@ export function sayTooEarly(fittedOn: string, agreedAt: string): string {
 	if (fittedOn >= earliestDayOf(agreedAt)) return '';
 	return `That is before it was recommended, on ${formatDate(agreedAt)}. If the day is a slip, change it below and keep it again.`;
 }
+
+/** What the heat depends on: a cable or a fuse of another kind leaves the estimate as good as it was. */
+export const HEAT_KEYS: readonly FittedKey[] = ['battery', 'position', 'shield', 'charger'];
+
+/** One of these, as it was agreed and as it was fitted. */
+export interface HeatDifference extends Difference {
+	label: string;
+	agreed: string;
+}
+
+/** What was fitted otherwise than the estimate knows it. */
+export const listHeatDifferences = ({
+	agreed,
+	differences
+}: {
+	agreed: readonly AgreedItem[];
+	differences: readonly Difference[];
+}): HeatDifference[] =>
+	differences
+		.filter(({ key }) => HEAT_KEYS.includes(key))
+		.map(({ key, fitted }) => {
+			const item = agreed.find((each) => each.key === key);
+			return { key, fitted, label: item?.label ?? key, agreed: item?.agreed ?? '' };
+		});
+
+/** "battery: Ridge 65; shield: none" */
+export const sayHeatDifferences = (
+	differences: readonly Pick<HeatDifference, 'label' | 'fitted'>[]
+): string => differences.map(({ label, fitted }) => `${label.toLowerCase()}: ${fitted}`).join('; ');

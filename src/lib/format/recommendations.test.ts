@@ -9,7 +9,7 @@ describe('what is said of an earlier recommendation', () => {
 		[{ replacedBy, isFittedUnder: false }, 'Replaced by recommendation 9 on 4 March 2026, by Odo Marsh.'],
 		[
 			{ replacedBy, isFittedUnder: true },
-			'The battery was fitted under this one; later came recommendation 9 on 4 March 2026, by Odo Marsh.'
+			'What was fitted is held against this one; later came recommendation 9 on 4 March 2026, by Odo Marsh.'
 		]
 	])('%j: "%s"', (standing, words) => {
 		expect(sayReplaced(standing)).toBe(words);

@@ -1,7 +1,7 @@
 import type { RecommendationView } from '../schemas/recommendations';
 import { formatDate } from './dates';
 
-/** That a later one was made; nothing while none has been. What a battery was fitted under stays with it. */
+/** That a later one was made; nothing while none has been. */
 export function sayReplaced({
 	replacedBy,
 	isFittedUnder
@@ -10,7 +10,7 @@ export function sayReplaced({
 	const { id, recommendedBy, createdAt } = replacedBy;
 	const later = `recommendation ${id} on ${formatDate(createdAt)}, by ${recommendedBy}`;
 	return isFittedUnder
-		? `The battery was fitted under this one; later came ${later}.`
+		? `What was fitted is held against this one; later came ${later}.`
 		: `Replaced by ${later}.`;
 }
 

@@ -95,7 +95,7 @@ export const sayOverride = ({ override }: Pick<ReviewInstallation, 'override'>):
 		? `${override.decidedBy}: ${override.reason}${override.enteredBy ? ` (entered by ${override.enteredBy})` : ''}`
 		: '';
 
-/** What was recommended after the fitting changes nothing of what it was fitted under. */
+/** What was recommended after the fitting changes nothing until the fitting is held against it. */
 export const sayLater = ({ id, on, recommendedBy }: NonNullable<ReviewInstallation['later']>): string =>
 	`Recommended again after the fitting: recommendation ${id}, ${formatShortDate(on)}, by ${recommendedBy}.`;
 

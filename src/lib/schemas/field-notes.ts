@@ -2,7 +2,7 @@ import { z } from 'zod';
 import type { CapacityTrend, HeatCause, Learning } from '../thermal/field';
 import { READING_PLACES } from '../thermal/field';
 import { measure, words } from './fields';
-import { pastDay } from './fitting';
+import { differenceSchema, pastDay } from './fitting';
 
 export const FIELD_NOTE_KINDS = ['capacity-test', 'inspection', 'peak-label', 'cut-out'] as const;
 export type FieldNoteKind = (typeof FIELD_NOTE_KINDS)[number];
@@ -72,6 +72,21 @@ export const fieldNoteSchema = z.object({
 	notedBy: z.string(),
 	data: fieldNoteInputSchema,
 	finding: z.custom<FieldFinding>().nullable().meta({ type: 'object' }),
+	findingThen: z.custom<FieldFinding>().nullable().meta({
+		type: 'object',
+		description:
+			'What was found when it was noted, where the fitting is held against another recommendation since and the finding was worked out anew'
+	}),
+	judgedBy: z
+		.object({ battery: z.string(), otherwise: z.array(differenceSchema.extend({ label: z.string() })) })
+		.meta({
+			description:
+				'The battery by whose limits it is judged, and what was fitted otherwise than agreed: while there is any, the finding is not of what was fitted'
+		}),
+	doubts: z.number().int().meta({
+		description:
+			'How many hot days with a dark evening the estimate does not explain, where this is one of two or more: then the estimate itself may be wrong'
+	}),
 	engineVersion: z.string(),
 	struck: z
 		.object({ by: z.string(), at: z.iso.datetime(), reason: z.string() })

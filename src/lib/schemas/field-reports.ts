@@ -9,12 +9,16 @@ export interface NoteReport {
 	/** By whom, when and why it was struck out; null where it counts. */
 	struck: { who: string; reason: string } | null;
 	cause: {
-		/** "Yes", "Perhaps", "Hardly". */
+		/** "Yes", "Perhaps", "Hardly", or that it cannot be judged. */
 		word: string;
 		sentence: string;
 		usual: string;
+		/** Why the estimate itself may be wrong, before any other cause is looked for; empty where nothing speaks for it. */
+		doubt: string;
 		others: { label: string; measure: string }[];
 	} | null;
+	/** What was said when it was noted, and that it was worked out anew since; empty where it was not. */
+	anew: string;
 	learning: {
 		sentence: string;
 		rows: { label: string; before: string; after: string }[];

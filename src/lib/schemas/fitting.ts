@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { latestToday } from '../format/dates';
-import { optionalWords, versionSchema, words } from './fields';
+import { idSchema, optionalWords, versionSchema, words } from './fields';
 
 /** One thing that was agreed before it was fitted. */
 export const agreedItemSchema = z.object({ key: z.string(), label: z.string(), agreed: z.string() });
@@ -13,10 +13,12 @@ export const NOT_PROPOSED = 'not proposed';
 export const FITTED_KEYS = ['battery', 'position', 'shield', 'cable', 'fuse', 'charger'] as const;
 export type FittedKey = (typeof FITTED_KEYS)[number];
 
+export const MOST_FITTED_CHARACTERS = 200;
+
 /** What was made otherwise than agreed. */
 export const differenceSchema = z.object({
 	key: z.enum(FITTED_KEYS),
-	fitted: words('What was fitted instead', 200)
+	fitted: words('What was fitted instead', MOST_FITTED_CHARACTERS)
 });
 export type Difference = z.infer<typeof differenceSchema>;
 
@@ -61,7 +63,12 @@ export interface FittedMount {
 	/** The first date at which nobody has looked yet; null when all looks are done. */
 	nextDueOn: string | null;
 	isOverdue: boolean;
+	/** What is to do where another battery was fitted than agreed; null where it is the one that was agreed. */
+	mismatch: Mismatch | null;
 }
+
+/** The way from another battery in the mount to papers and answers about that battery. */
+export type Mismatch = 'assess' | 'recommend' | 'hold';
 
 /** To whom reminders of the dates go: nobody where no address is known, or since they were stopped or erased. */
 export type Reminded = 'customer' | 'workshop' | 'stopped' | 'erased' | 'nobody';
@@ -73,15 +80,27 @@ export const followUpChangeSchema = z.object({
 });
 export type FollowUpChange = z.infer<typeof followUpChangeSchema>;
 
+/** A recommendation of a mount against which a fitting may be held. */
+const agreementSchema = z.object({ id: z.number().int(), recommendedAt: z.iso.datetime() });
+export type AgreementView = z.infer<typeof agreementSchema>;
+
+/** The recommendation against which a fitting is to be held from now on. */
+export const agreementChangeSchema = z.object({ recommendationId: idSchema, version: versionSchema });
+export type AgreementChange = z.infer<typeof agreementChangeSchema>;
+
 /** What was fitted; null where nothing has been yet. */
 export const fittingSchema = z.object({
 	mountId: z.number().int(),
 	jobId: z.number().int(),
 	assessmentId: z.number().int(),
-	agreedAt: z.iso
-		.datetime()
-		.meta({ description: 'When the first recommendation by this assessment was made' }),
+	agreedAt: z.iso.datetime().meta({ description: 'When the first recommendation of this position was made' }),
 	agreed: z.array(agreedItemSchema),
+	recommendation: agreementSchema.meta({
+		description: 'What it is held against, or would be if it were fitted now'
+	}),
+	newer: agreementSchema
+		.nullable()
+		.meta({ description: 'The newest recommendation of this position, where it came later' }),
 	installation: z
 		.object({
 			id: z.number().int(),
@@ -100,7 +119,7 @@ export type FittingView = z.infer<typeof fittingSchema>;
 /** A look at the battery is due so many months after it was fitted: common practice, no source. */
 export const FOLLOW_UP_MONTHS = [1, 6, 12] as const;
 
-const otherwise = (label: string) => optionalWords(`${label}, if otherwise`, 200);
+const otherwise = (label: string) => optionalWords(`${label}, if otherwise`, MOST_FITTED_CHARACTERS);
 
 /** One box an item: empty where it was fitted as agreed. */
 export const fittingFormSchema = z.object({

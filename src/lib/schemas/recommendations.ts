@@ -34,7 +34,7 @@ export const recommendationSchema = z.object({
 		.object({ id: z.number().int(), recommendedBy: z.string(), createdAt: z.iso.datetime() })
 		.nullable()
 		.meta({ description: 'The next recommendation of the same mount' }),
-	isFittedUnder: z.boolean().meta({ description: 'Whether the battery was fitted under this one' })
+	isFittedUnder: z.boolean().meta({ description: 'Whether what was fitted is held against this one' })
 });
 export type RecommendationView = z.infer<typeof recommendationSchema>;
 

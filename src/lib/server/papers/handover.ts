@@ -8,6 +8,7 @@ import {
 	tellFitted,
 	tellFollowUps,
 	tellVehicle,
+	warnOtherwise,
 	type MountRecord
 } from './mount-record';
 
@@ -34,15 +35,11 @@ const tellHeat = ({ paper }: MountRecord): PaperBlock => {
 		: { kind, title: 'When it gets too hot', sentences: WHEN_TOO_HOT };
 };
 
-const tellEstimate = ({ paper: { outlook } }: MountRecord): PaperBlock => ({
-	...{ kind: 'words', title: 'What to expect' },
-	sentences: [
-		outlook.chance.sentence,
-		outlook.year.sentence,
-		outlook.envelope.sentence,
-		outlook.life.sentence
-	]
-});
+const tellEstimate = (record: MountRecord): PaperBlock => {
+	const { chance, year, envelope, life } = record.paper.outlook;
+	const told = [chance, year, envelope, life].map(({ sentence }) => sentence);
+	return { ...{ kind: 'words', title: 'What to expect' }, sentences: [...warnOtherwise(record), ...told] };
+};
 
 /** What goes to the customer with the vehicle. */
 export function layHandover(record: MountRecord): Paper {

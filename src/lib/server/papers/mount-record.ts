@@ -2,9 +2,10 @@ import type { FieldNotesView } from '$lib/schemas/field-notes';
 import type { AgreedItem, FittingView } from '$lib/schemas/fitting';
 import type { PaperBlock, PaperPhoto } from '$lib/schemas/papers';
 import type { PreDrillView } from '$lib/schemas/pre-drill';
+import type { ReportLine } from '$lib/schemas/reports';
 import type { AcknowledgementView } from '$lib/schemas/sheets';
 import { formatDate, formatDateTime } from '$lib/format/dates';
-import { isNotNoted, sayFitted } from '$lib/format/fitted';
+import { isNotNoted, listHeatDifferences, sayFitted, sayHeatDifferences } from '$lib/format/fitted';
 import { sayDecider } from '$lib/format/recommendations';
 import { sayVerdict } from '$lib/format/verdict';
 import { PRE_DRILL_LABELS } from '$lib/schemas/pre-drill';
@@ -45,28 +46,65 @@ export function tellFitted({ agreed, installation }: MountRecord['fitting']): Pa
 	];
 }
 
-export const tellBattery = ({ paper, fitting }: MountRecord): PaperBlock => ({
-	...{ kind: 'lines', title: 'The battery' },
-	lines: [
-		...paper.report.battery,
-		{ label: 'Serial number', value: fitting.installation.serialNumber || 'not noted' },
-		{ label: 'Position', value: paper.report.mount },
-		{
-			label: 'Fitted',
-			value: `${formatDate(fitting.installation.fittedOn)}, by ${fitting.installation.fittedBy}`
-		}
-	]
-});
+const heatDifferencesOf = ({ fitting: { agreed, installation } }: MountRecord) =>
+	listHeatDifferences({ agreed, differences: installation.differences });
+
+/** What an estimate has to say before its figures, where something else was fitted; nothing otherwise. */
+export function warnOtherwise(record: MountRecord): string[] {
+	const otherwise = heatDifferencesOf(record);
+	if (otherwise.length === 0) return [];
+	return [
+		`This was worked out for what was agreed, and not for what was fitted (${sayHeatDifferences(otherwise)}).`
+	];
+}
+
+/** What was fitted instead, and whose lines the others are; null where all that matters is as agreed. */
+function tellOtherwise(record: MountRecord): { instead: ReportLine[]; agreed: ReportLine } | null {
+	const otherwise = heatDifferencesOf(record);
+	if (otherwise.length === 0) return null;
+	const isOther = otherwise.some(({ key }) => key === 'battery');
+	const instead = otherwise.map(({ label, fitted }) => ({
+		label: `${label}, fitted instead`,
+		value: fitted
+	}));
+	const value = isOther
+		? 'The lines that follow are of the battery that was agreed, which is not the one that was fitted'
+		: 'The lines that follow are as it was agreed';
+	return { instead, agreed: { label: 'As agreed', value } };
+}
+
+function tellSerialNumber({ fitting: { installation } }: MountRecord): ReportLine {
+	const isOther = installation.differences.some(({ key }) => key === 'battery');
+	const label = isOther ? 'Serial number of the fitted battery' : 'Serial number';
+	return { label, value: installation.serialNumber || 'not noted' };
+}
+
+export const tellBattery = (record: MountRecord): PaperBlock => {
+	const { paper, fitting } = record;
+	const { fittedOn, fittedBy } = fitting.installation;
+	const serial = tellSerialNumber(record);
+	const position = { label: 'Position', value: paper.report.mount };
+	const fitted = { label: 'Fitted', value: `${formatDate(fittedOn)}, by ${fittedBy}` };
+	const otherwise = tellOtherwise(record);
+	const lines = otherwise
+		? [...otherwise.instead, serial, fitted, otherwise.agreed, ...paper.report.battery, position]
+		: [...paper.report.battery, serial, position, fitted];
+	return { ...{ kind: 'lines', title: 'The battery' }, lines };
+};
 
 export const tellVehicle = ({ paper }: MountRecord): PaperBlock => ({
 	...{ kind: 'lines', title: 'Customer and vehicle' },
 	lines: [{ label: 'Customer', value: paper.customer.name }, ...paper.report.vehicle]
 });
 
-export const tellDay = ({ paper: { ribbon, report } }: MountRecord): PaperBlock => ({
-	...{ kind: 'picture', title: 'The hot day it was estimated for', svg: drawRibbon(ribbon) },
-	caption: `${report.headline}. ${report.sentence} ${report.day}`
-});
+export const tellDay = (record: MountRecord): PaperBlock => {
+	const { ribbon, report } = record.paper;
+	const caption = [...warnOtherwise(record), `${report.headline}.`, report.sentence, report.day].join(' ');
+	return {
+		...{ kind: 'picture', title: 'The hot day it was estimated for', svg: drawRibbon(ribbon) },
+		caption
+	};
+};
 
 const monthsAfter = (months: number): string => (months === 1 ? 'one month' : `${months} months`);
 

@@ -10,6 +10,7 @@ import {
 	tellFollowUps,
 	tellPreDrill,
 	tellVehicle,
+	warnOtherwise,
 	type MountRecord
 } from './mount-record';
 
@@ -18,16 +19,21 @@ function tellMaker({ paper: { report } }: MountRecord): PaperBlock[] {
 	return [{ kind: 'words', strong: report.maker.title, sentences: [report.maker.text] }];
 }
 
+function warnFigures(record: MountRecord): PaperBlock[] {
+	const sentences = warnOtherwise(record);
+	return sentences.length > 0 ? [{ kind: 'words', sentences }] : [];
+}
+
 /** Each note with what the model made of it, the oldest first. */
 function tellNotes({ notes }: MountRecord): PaperBlock {
 	const rows = [...notes.rows].reverse().map((row) => {
-		const { title, when, words, struck, cause, learning } = presentNote(row);
+		const { title, when, words, struck, cause, anew, learning } = presentNote(row);
 		if (struck) {
 			const said = `${words} ${struck.who}, and counts nowhere: ${struck.reason}`;
 			return [`${title}, struck out`, when, said];
 		}
-		const heat = cause ? `Was it heat? ${cause.word}. ${cause.sentence} ${cause.usual}` : '';
-		return [title, when, [words, heat, learning?.sentence ?? ''].filter(Boolean).join(' ')];
+		const heat = cause ? [`Was it heat? ${cause.word}.`, cause.sentence, cause.usual, cause.doubt] : [];
+		return [title, when, [words, ...heat, anew, learning?.sentence ?? ''].filter(Boolean).join(' ')];
 	});
 	return {
 		...{ kind: 'table', title: 'Noted since it was fitted', empty: 'Nothing has been noted.' },
@@ -83,6 +89,7 @@ export function layWarrantyFile(record: MountRecord): Paper {
 			...tellFitted(fitting),
 			tellPreDrill(record),
 			{ kind: 'figures', title: 'Figures of the estimate', lines: report.figures },
+			...warnFigures(record),
 			tellDay(record),
 			tellNotes(record),
 			...tellTrend(record),

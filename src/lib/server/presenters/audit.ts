@@ -47,6 +47,7 @@ const DID: Record<string, string> = {
 	'mount.file-removed': 'removed a photo or document',
 	'mount.file-restored': 'put a photo or document back',
 	'mount.fitted': 'said what was fitted',
+	'mount.fitting-held': 'held what was fitted against another recommendation',
 	'mount.follow-up': 'looked at a battery again',
 	'mount.pre-drill': 'answered the check before drilling',
 	'mount.pre-drill-signed': 'signed the check before drilling',

@@ -5,18 +5,23 @@ import { hasBms } from '$lib/schemas/batteries';
 import type { FieldNoteData } from '$lib/schemas/field-notes';
 import type { FieldLesson } from '$lib/schemas/my';
 import type { Learning } from '$lib/thermal/field';
-import type { FieldNote } from '../db/models';
+import type { JudgedNote } from './field-notes';
 
 /** Of which fitted battery a note tells. */
 export interface NotedMount {
 	jobId: number;
 	mountId: number;
 	chemistry: string;
+	/** Something that the heat depends on is not as it was agreed. */
+	isOtherwise: boolean;
 }
 
-function sayRead(data: FieldNoteData): string {
+const OTHERWISE =
+	'That does not change the estimate yet: it was made for what was agreed, and something else was fitted. We work it out for what was fitted first.';
+
+function sayRead(data: FieldNoteData, why: string): string {
 	if (data.kind === 'cut-out')
-		return `The battery went dark at ${formatClockHour(data.wentDarkHour)} on a day of ${formatTemperature(data.hottestDayC)}, from heat.`;
+		return `The battery went dark at ${formatClockHour(data.wentDarkHour)} on a day of ${formatTemperature(data.hottestDayC)}${why}.`;
 	if (data.kind !== 'peak-label') return '';
 	if (data.turnedC === null)
 		return `The heat label on the battery has not turned, on days of up to ${formatTemperature(data.hottestDayC)}.`;
@@ -35,9 +40,16 @@ function sayLesson({ fits, before, after }: Learning, event: string, isCutOut: b
 }
 
 /** What a note taught about the mount, before and after, in words for the customer; nothing where it taught nothing. */
-export function presentLesson(note: FieldNote, { jobId, mountId, chemistry }: NotedMount): FieldLesson[] {
+export function presentLesson(
+	note: JudgedNote,
+	{ jobId, mountId, chemistry, isOtherwise }: NotedMount
+): FieldLesson[] {
 	const learning = note.finding?.learning ?? null;
 	if (learning === null) return [];
+	if (isOtherwise) {
+		const read = sayRead(note.data, '');
+		return [{ jobId, mountId, on: note.notedOn, read, sentence: OTHERWISE, figures: null }];
+	}
 	const event = hasBms(chemistry) ? 'goes dark' : 'gets too hot';
 	const { before, after, fits } = learning;
 	const figures = [
@@ -54,7 +66,7 @@ export function presentLesson(note: FieldNote, { jobId, mountId, chemistry }: No
 	];
 	return [
 		{
-			...{ jobId, mountId, on: note.notedOn, read: sayRead(note.data) },
+			...{ jobId, mountId, on: note.notedOn, read: sayRead(note.data, ', from heat') },
 			sentence: sayLesson(learning, event, note.data.kind === 'cut-out'),
 			figures: fits ? figures : null
 		}

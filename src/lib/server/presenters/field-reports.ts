@@ -9,10 +9,12 @@ import {
 	formatTemperature,
 	formatWithUnit
 } from '$lib/format/numbers';
+import { sayDoubt, sayTeachesNothing, sayUnjudged, UNJUDGED } from '$lib/format/field-doubt-words';
 import { sayDayCount, sayOfTwenty } from '$lib/format/outlook-words';
 import { formatClockHour, formatHours } from '$lib/format/time';
 import {
 	FIELD_NOTE_LABELS,
+	type FieldFinding,
 	type FieldNoteData,
 	type FieldNotesView,
 	type FieldNoteView
@@ -67,12 +69,19 @@ function sayCause(cause: HeatCause): string {
 	return `Heat alone hardly explains it, ${chance}. ${when}`;
 }
 
-function presentCause(cause: HeatCause | null): NoteReport['cause'] {
+function presentCause(cause: HeatCause | null, note: FieldNoteView): NoteReport['cause'] {
 	if (!cause) return null;
+	const word = WORDS[cause.finding];
+	if (note.judgedBy.otherwise.length > 0)
+		return {
+			...{ word: UNJUDGED, sentence: sayUnjudged(note.judgedBy, word) },
+			...{ usual: '', doubt: '', others: [] }
+		};
 	return {
-		word: WORDS[cause.finding],
+		word,
 		sentence: sayCause(cause),
 		usual: sayUsual(cause),
+		doubt: note.doubts > 0 ? sayDoubt(note.doubts) : '',
 		others:
 			cause.finding === 'explained' ? [] : cause.otherCauses.map(({ label, measure }) => ({ label, measure }))
 	};
@@ -139,17 +148,28 @@ function presentResting({ notedOn, isNotedAnew }: Resting): NonNullable<NoteRepo
 }
 type Resting = NonNullable<FieldNoteView['restsOnStruck']>;
 
-function presentFinding({
-	finding,
-	struck,
-	restsOnStruck
-}: FieldNoteView): Pick<NoteReport, 'cause' | 'learning'> {
-	if (!finding || struck) return { cause: null, learning: null };
-	const { cause, learning } = finding;
+function presentFinding(note: FieldNoteView): Pick<NoteReport, 'cause' | 'learning' | 'anew'> {
+	const { finding, findingThen, struck } = note;
+	if (!finding || struck) return { cause: null, learning: null, anew: '' };
 	return {
-		cause: presentCause(cause),
-		learning: restsOnStruck ? presentResting(restsOnStruck) : presentLearning(learning, cause)
+		cause: presentCause(finding.cause, note),
+		learning: presentLearnt(finding, note),
+		anew: findingThen ? sayAnew(findingThen) : ''
 	};
+}
+
+function presentLearnt({ cause, learning }: FieldFinding, note: FieldNoteView): NoteReport['learning'] {
+	if (note.restsOnStruck) return presentResting(note.restsOnStruck);
+	const { otherwise } = note.judgedBy;
+	if (learning && otherwise.length > 0)
+		return { sentence: sayTeachesNothing(otherwise), rows: [], method: '' };
+	return presentLearning(learning, cause);
+}
+
+/** The record of what was answered at the time. */
+function sayAnew({ cause }: FieldFinding): string {
+	const then = cause ? ` The answer then was: ${WORDS[cause.finding].toLowerCase()}.` : '';
+	return `Worked out anew for what is agreed now. When it was noted, it was held against what was agreed then.${then}`;
 }
 
 /** A note with what the model makes of it; of one that was struck out nothing is made. */

@@ -1,8 +1,14 @@
 import { formatAmps } from '$lib/format/numbers';
-import { NOT_PROPOSED, type AgreedItem, type FittingView, type FollowUpView } from '$lib/schemas/fitting';
+import {
+	NOT_PROPOSED,
+	type AgreedItem,
+	type AgreementView,
+	type FittingView,
+	type FollowUpView
+} from '$lib/schemas/fitting';
 import type { SurveyAnswers } from '$lib/schemas/survey';
 import { describeAssumed, SURVEY_FIELDS } from '$lib/thermal/survey';
-import type { Assessment, FollowUp, Installation, Mount } from '../db/models';
+import type { Assessment, FollowUp, Installation, Mount, Recommendation } from '../db/models';
 import { sayProposal } from './outlook/cable';
 
 /** Today, and the last day of which a look today would not be early. */
@@ -42,21 +48,30 @@ const presentFollowUp = (
 	isEarly: (doneOn ?? null) === null && dueOn > soon
 });
 
-/** The assessment that the fitting is held against, and when it was recommended first. */
+/** What the fitting is held against, and the recommendations of its mount around it. */
 export interface Agreed {
 	assessment: Assessment;
-	at: Date;
+	held: Recommendation;
+	newest: Recommendation;
+	first: Recommendation;
 }
+
+const presentAgreement = ({ id, createdAt }: Recommendation): AgreementView => ({
+	id,
+	recommendedAt: createdAt.toISOString()
+});
 
 export function presentFitting(
 	{ id: mountId, jobId }: Mount,
-	{ assessment, at }: Agreed,
+	{ assessment, held, newest, first }: Agreed,
 	installation: Installation | null,
 	followUps: readonly FollowUp[],
 	days: Days
 ): FittingView {
 	return {
-		...{ mountId, jobId, assessmentId: assessment.id, agreedAt: at.toISOString() },
+		...{ mountId, jobId, assessmentId: assessment.id, agreedAt: first.createdAt.toISOString() },
+		recommendation: presentAgreement(held),
+		newer: newest.id > held.id ? presentAgreement(newest) : null,
 		agreed: installation?.agreed ?? listAgreed(assessment),
 		installation: installation && {
 			id: installation.id,

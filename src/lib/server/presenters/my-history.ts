@@ -1,4 +1,5 @@
 import { formatDate } from '$lib/format/dates';
+import { JUDGED_ANEW_PLAINLY, sayDoubtPlainly, UNJUDGED_PLAINLY } from '$lib/format/field-doubt-words';
 import { formatCapacity, formatTemperature } from '$lib/format/numbers';
 import { formatClockHour } from '$lib/format/time';
 import { sayVerdict } from '$lib/format/verdict';
@@ -10,7 +11,8 @@ import {
 	type HistoryEntry
 } from '$lib/schemas/my';
 import type { Question } from '$lib/schemas/questions';
-import type { FieldNote, FieldNoteStrike, FollowUp, Installation, Sheet } from '../db/models';
+import type { FieldNoteStrike, FollowUp, Installation, Sheet } from '../db/models';
+import type { JudgedNote } from './field-notes';
 
 export function presentSheetDocument({ id, jobId, content, createdAt }: Sheet): CustomerDocument {
 	const verdict = sayVerdict(content.verdict, content.chemistry ?? '');
@@ -124,19 +126,34 @@ const CAUSES = {
 	'not-explained': 'Heat alone hardly explains it: the shop looks for another cause.'
 } as const;
 
+/** How the answers about a battery are to be taken. */
+interface NoteAround {
+	/** Something that the heat depends on is not as it was agreed. */
+	isOtherwise: boolean;
+	/** Evenings as heat makes them that the estimate does not explain, this being one of several. */
+	doubts: number;
+}
+
+function sayCause({ finding, findingThen }: JudgedNote, { isOtherwise, doubts }: NoteAround): string[] {
+	if (!finding?.cause) return [];
+	if (isOtherwise) return [UNJUDGED_PLAINLY];
+	const cause = doubts > 0 ? sayDoubtPlainly(doubts) : CAUSES[finding.cause.finding];
+	return findingThen ? [cause, JUDGED_ANEW_PLAINLY] : [cause];
+}
+
 /** A note that was struck out says so, and no more: its figures, and the reason with them, were a slip. */
 export function tellNote(
-	{ data, notedOn, finding }: FieldNote,
+	note: JudgedNote,
 	jobId: number,
-	strike: FieldNoteStrike | null
+	{ strike, ...around }: NoteAround & { strike: FieldNoteStrike | null }
 ): HistoryEntry {
+	const { data, notedOn } = note;
 	const title = NOTE_TITLES[data.kind];
 	if (strike) {
 		const words = `Struck out by the shop on ${formatDate(strike.createdAt)}: it does not count.`;
 		return { jobId, ...onDay(notedOn, title, words) };
 	}
-	const cause = finding?.cause ? ` ${CAUSES[finding.cause.finding]}` : '';
-	return { jobId, ...onDay(notedOn, title, sayNote(data) + cause) };
+	return { jobId, ...onDay(notedOn, title, [sayNote(data), ...sayCause(note, around)].join(' ')) };
 }
 
 export function tellQuestions(questions: readonly Question[], jobId: number): HistoryEntry[] {

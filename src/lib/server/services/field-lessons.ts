@@ -1,7 +1,9 @@
+import { listHeatDifferences } from '$lib/format/fitted';
 import type { FieldLesson } from '$lib/schemas/my';
-import { Assessment, FieldNote, FieldNoteStrike, Installation } from '../db/models';
+import { Assessment, Installation } from '../db/models';
 import { presentLesson } from '../presenters/field-lessons';
 import { standNotes } from './field-standing';
+import { readNoted } from './judged-notes';
 
 /** What the field has taught about the fitted batteries of these jobs, the newest first; not what a strike took away. */
 export async function listLessons(jobIds: readonly number[]): Promise<FieldLesson[]> {
@@ -10,20 +12,15 @@ export async function listLessons(jobIds: readonly number[]): Promise<FieldLesso
 		where: { id: installations.map(({ assessmentId }) => assessmentId) },
 		attributes: ['id', 'chemistry']
 	});
-	const notes = await FieldNote.findAll({
-		where: { installationId: installations.map(({ id }) => id) },
-		order: [
-			['notedOn', 'DESC'],
-			['id', 'DESC']
-		]
-	});
-	const strikes = await FieldNoteStrike.findAll({ where: { fieldNoteId: notes.map(({ id }) => id) } });
+	const { notes, strikes } = await readNoted(installations);
 	const standings = standNotes(notes, strikes);
-	return notes.flatMap((note) => {
+	return [...notes].reverse().flatMap((note) => {
 		const { strike, restsOn } = standings.get(note.id)!;
 		if (strike || restsOn) return [];
-		const { jobId, mountId, assessmentId } = installations.find(({ id }) => id === note.installationId)!;
+		const installation = installations.find(({ id }) => id === note.installationId)!;
+		const { jobId, mountId, assessmentId } = installation;
 		const chemistry = assessments.find(({ id }) => id === assessmentId)?.chemistry ?? '';
-		return presentLesson(note, { jobId, mountId, chemistry });
+		const isOtherwise = listHeatDifferences(installation).length > 0;
+		return presentLesson(note, { jobId, mountId, chemistry, isOtherwise });
 	});
 }

@@ -2,41 +2,27 @@ import { formatDate } from '$lib/format/dates';
 import { formatCapacity } from '$lib/format/numbers';
 import type { FieldFinding, FieldNoteInput, FieldNotesView } from '$lib/schemas/field-notes';
 import type { SignedInPerson } from '$lib/schemas/people';
-import { ENGINE_VERSION, parseScenario } from '$lib/thermal';
+import { ENGINE_VERSION } from '$lib/thermal';
 import { heatLimitsOf } from '$lib/thermal/chemistries';
-import {
-	checkReading,
-	learnFrom,
-	projectCapacity,
-	weighHeat,
-	type CapacityTrend,
-	type ReadingDay
-} from '$lib/thermal/field';
+import { checkReading, projectCapacity, type CapacityTrend } from '$lib/thermal/field';
 import { EngineInputError } from '$lib/thermal/correlations';
-import { Assessment, FieldNote, FieldNoteStrike, Installation, Person } from '../db/models';
+import { Assessment, FieldNote, Installation, Person } from '../db/models';
 import { inTransaction } from '../db/transaction';
 import { AppError, notFound } from '../errors';
 import { allow } from '../policies';
-import { presentFieldNote } from '../presenters/field-notes';
+import { presentFieldNote, presentJudge, type JudgedNote } from '../presenters/field-notes';
 import { checkLabel, keepLabelCheck, type LabelCheck } from './accuracy/label-checks';
 import { recordBy } from './audit';
 import { daysBetween } from './days';
-import { readingOf, scenarioOn } from './field-readings';
-import { listTeaching, standNotes } from './field-standing';
+import { countDoubts } from './field-doubts';
+import { findOut, FULL_LEARNING } from './field-findings';
+import { readingOf } from './field-readings';
+import { standNotes } from './field-standing';
+import { isSameKnown, knownOf, readNoted, type KnownThen, type Noted } from './judged-notes';
 import { findStandingMount } from './mounts';
 import { listKeptOutlooks } from './outlooks';
 import { refreshReview } from './review/keep-review';
-import { afterOthers, workInSlices } from './slices';
-import { touringOf } from './touring-year';
 
-/** How many vehicles and mounts, and how many of them for the days in a year, are drawn to learn from a note. */
-interface LearningEffort {
-	samples: number;
-	yearSamples: number;
-}
-const FULL_LEARNING: LearningEffort = { samples: 512, yearSamples: 32 };
-/** The same of fewer draws, said beside what comes of it. */
-export const LIGHT_LEARNING: LearningEffort = { samples: 128, yearSamples: 8 };
 const DAYS_A_YEAR = 365.25;
 
 interface Fitted {
@@ -52,44 +38,6 @@ async function findFitted(person: SignedInPerson, mountId: number): Promise<Fitt
 	const assessment = await Assessment.findByPk(installation.assessmentId);
 	if (!assessment) throw notFound('assessment');
 	return { installation, assessment };
-}
-
-/** The notes of a battery as they came, and what was struck out of them. */
-interface Noted {
-	notes: FieldNote[];
-	strikes: FieldNoteStrike[];
-}
-
-function listReadings(assessment: Assessment, { notes, strikes }: Noted): ReadingDay[] {
-	return listTeaching(notes, strikes).flatMap(({ data }) => {
-		const reading = readingOf(data);
-		if (reading === null || !('hottestDayC' in data)) return [];
-		return [{ scenario: scenarioOn(assessment, data.hottestDayC), reading }];
-	});
-}
-
-/** Was it heat, and what does it teach? Worked out in slices, one after the other. */
-async function findOut(
-	assessment: Assessment,
-	earlier: Noted,
-	data: FieldNoteInput,
-	{ seed, samples, yearSamples }: LearningEffort & { seed: number }
-): Promise<FieldFinding | null> {
-	const reading = readingOf(data);
-	if (reading === null || !('hottestDayC' in data)) return null;
-	const scenario = scenarioOn(assessment, data.hottestDayC);
-	return afterOthers(async () => {
-		const cause =
-			reading.kind === 'cut-out'
-				? await workInSlices(weighHeat(scenario, reading.report, { samples, seed }))
-				: null;
-		if (cause && cause.finding !== 'explained') return { cause, learning: null };
-		const { tMax } = parseScenario(assessment.inputs.scenario).climate;
-		const days = [...listReadings(assessment, earlier), { scenario, reading }];
-		const options = { samples, yearSamples, seed };
-		const work = learnFrom(scenarioOn(assessment, tMax), days, touringOf(assessment.inputs), options);
-		return { cause, learning: await workInSlices(work) };
-	});
 }
 
 /** What the engine refuses, under the name that the form has for it. */
@@ -136,18 +84,6 @@ function refuseImpossible(data: FieldNoteInput, fitted: Fitted): void {
 	}
 }
 
-async function notesOf({ id: installationId }: Installation): Promise<Noted> {
-	const notes = await FieldNote.findAll({
-		where: { installationId },
-		order: [
-			['notedOn', 'ASC'],
-			['id', 'ASC']
-		]
-	});
-	const where = { fieldNoteId: notes.map(({ id }) => id) };
-	return { notes, strikes: await FieldNoteStrike.findAll({ where, order: [['id', 'ASC']] }) };
-}
-
 function trendOf(
 	{ installation, assessment }: Fitted,
 	{ notes, strikes }: Noted,
@@ -177,15 +113,19 @@ async function show(
 	fitted: Fitted,
 	namedAh: number | null = null
 ): Promise<FieldNotesView> {
-	const noted = await notesOf(fitted.installation);
+	const noted = await readNoted([fitted.installation]);
 	const { notes, strikes } = noted;
 	const people = await Person.findAll({
 		where: { id: [...notes, ...strikes].map(({ createdBy }) => createdBy) }
 	});
 	const nameOf = (id: number): string => people.find((person) => person.id === id)?.name ?? '';
 	const standings = standNotes(notes, strikes);
+	const judgedBy = presentJudge(fitted.assessment, fitted.installation);
+	const doubts = countDoubts(noted, [fitted.installation]);
+	const present = (note: JudgedNote) =>
+		presentFieldNote(note, standings.get(note.id)!, { nameOf, judgedBy, doubts: doubts.get(note.id) ?? 0 });
 	return {
-		rows: [...notes].reverse().map((note) => presentFieldNote(note, standings.get(note.id)!, nameOf)),
+		rows: [...notes].reverse().map(present),
 		trend: trendOf(fitted, noted, namedAh),
 		...{ namedAh, ratedAh: fitted.assessment.inputs.battery.capacityAh },
 		expected: await expectedOf(person, fitted)
@@ -208,8 +148,8 @@ export interface WeighedNote {
 	finding: FieldFinding | null;
 	/** A label, held against what was predicted at the time; nothing of other notes. */
 	check: LabelCheck | null;
-	/** The newest note that it was weighed with, and the newest strike. */
-	after: Newest;
+	/** The assessment by which it was weighed; the newest note that it was weighed with, and the newest strike. */
+	after: KnownThen;
 }
 
 /** Works out what a note says, which takes seconds, and changes nothing. */
@@ -223,24 +163,14 @@ export async function weighFieldNote(
 	const fitted = await findFitted(person, mountId);
 	const { installation, assessment } = fitted;
 	refuseImpossible(data, fitted);
-	const earlier = await notesOf(installation);
+	const earlier = await readNoted([installation]);
 	const finding = await findOut(assessment, earlier, data, { ...effort, seed: installation.id });
 	const check = await checkLabel(installation, data);
-	return { data, finding, check, after: newestOf(earlier) };
+	return { data, finding, check, after: knownOf(installation, earlier) };
 }
-
-interface Newest {
-	noteId: number;
-	strikeId: number;
-}
-
-const newestOf = ({ notes, strikes }: Noted): Newest => ({
-	noteId: Math.max(0, ...notes.map(({ id }) => id)),
-	strikeId: Math.max(0, ...strikes.map(({ id }) => id))
-});
 
 const NOTED_MEANWHILE =
-	'Somebody noted something of this battery meanwhile, or struck it out, which counts here: send yours again.';
+	'Somebody noted something of this battery meanwhile, struck it out or held it against another recommendation, which counts here: send yours again.';
 
 /** Keeps a weighed note for good. */
 export async function keepFieldNote(
@@ -252,9 +182,9 @@ export async function keepFieldNote(
 	const fitted = await findFitted(person, mountId);
 	const { installation } = fitted;
 	await inTransaction(async (transaction) => {
-		await Installation.findByPk(installation.id, { transaction, lock: transaction.LOCK.UPDATE });
-		const { noteId, strikeId } = newestOf(await notesOf(installation));
-		if (noteId !== after.noteId || strikeId !== after.strikeId)
+		const lock = transaction.LOCK.UPDATE;
+		const now = await Installation.findByPk(installation.id, { transaction, lock });
+		if (!isSameKnown(knownOf(now!, await readNoted([now!])), after))
 			throw new AppError('conflict', NOTED_MEANWHILE);
 		const { kind, notedOn } = data;
 		const row = { workshopId: person.workshopId, installationId: installation.id, createdBy: person.id };

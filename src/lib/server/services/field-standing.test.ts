@@ -17,7 +17,7 @@ const TEST = {
 function note(id: number, data: FieldNoteData = LABEL, { fits = true, of = 1 } = {}) {
 	const finding = data.kind === 'peak-label' ? ({ cause: null, learning: { fits } } as never) : null;
 	const { kind, notedOn } = data;
-	return { id, installationId: of, kind, notedOn, data, finding, createdAt: at(id) };
+	return { id, installationId: of, kind, notedOn, data, finding, learntAt: at(id) };
 }
 const strike = (fieldNoteId: number, minute: number) => ({ fieldNoteId, createdAt: at(minute) });
 

@@ -1,7 +1,8 @@
-import type { FieldNote, FieldNoteStrike } from '../db/models';
+import type { FieldNoteStrike } from '../db/models';
 import { readingOf } from './field-readings';
+import type { JudgedNote } from '../presenters/field-notes';
 
-type Note = Pick<FieldNote, 'id' | 'installationId' | 'kind' | 'notedOn' | 'data' | 'finding' | 'createdAt'>;
+type Note = Pick<JudgedNote, 'id' | 'installationId' | 'kind' | 'notedOn' | 'data' | 'finding' | 'learntAt'>;
 type Strike = Pick<FieldNoteStrike, 'fieldNoteId' | 'createdAt'>;
 
 /** What has become of a note since it was kept. */
@@ -34,8 +35,8 @@ const isSameReading = (a: Note, b: Note): boolean =>
 	placeOf(a) === placeOf(b);
 
 /**
- * How each note stands, from when it was noted and when others were struck out; nothing of it is kept. A note learnt with
- * those before it that were good at the time: it rests on one that was struck out after that.
+ * How each note stands, from when it was weighed and when others were struck out; nothing of it is kept. A note learnt
+ * with those before it that were good at the time: it rests on one that was struck out after that.
  */
 export function standNotes<N extends Note, S extends Strike>(
 	notes: readonly N[],
@@ -46,14 +47,14 @@ export function standNotes<N extends Note, S extends Strike>(
 
 	function findRest(note: N, until = Infinity): N | null {
 		if (!hasLearning(note)) return null;
-		const notedAt = note.createdAt.getTime();
+		const learntAt = note.learntAt.getTime();
 		const hadLearntWith = (other: N): boolean =>
 			other.installationId === note.installationId &&
 			other.id < note.id &&
 			hasReading(other) &&
-			struckAt(other) >= notedAt &&
+			struckAt(other) >= learntAt &&
 			struckAt(other) < until &&
-			findRest(other, notedAt) === null;
+			findRest(other, learntAt) === null;
 		return notes.find(hadLearntWith) ?? null;
 	}
 

@@ -16,7 +16,9 @@ import { listAgreed, presentFitting } from '../presenters/fittings';
 import { recordBy } from './audit';
 import { addMonths, today } from './days';
 import { isUnstruck } from './field-standing';
+import { findMismatches } from './fitting-mismatch';
 import { findStandingMount } from './mounts';
+import { findFittedUnder, listOfMount } from './recommendation-history';
 import { saveVersioned } from './records';
 import { refreshReview } from './review/keep-review';
 
@@ -25,17 +27,12 @@ const EARLY_MONTHS = 1;
 
 const NOTHING_AGREED = 'Nothing is agreed for this mount yet: recommend it first.';
 
-/** The assessment that the newest recommendation of the mount rests on. */
-async function findAgreed({ id: mountId, jobId, workshopId }: Mount): Promise<Assessment> {
-	const recommendations = await Recommendation.findAll({
-		where: { jobId, workshopId },
-		order: [['id', 'DESC']]
-	});
-	const ids = recommendations.map(({ assessmentId }) => assessmentId);
-	const assessments = await Assessment.findAll({ where: { id: ids, mountId } });
-	const [agreed] = ids.flatMap((id) => assessments.find((each) => each.id === id) ?? []);
-	if (!agreed) throw new AppError('conflict', NOTHING_AGREED);
-	return agreed;
+/** The newest recommendation of the mount, with all of the mount's before it. */
+async function findAgreed(mount: Mount): Promise<{ held: Recommendation; all: Recommendation[] }> {
+	const all = await listOfMount(mount);
+	const [held] = all;
+	if (!held) throw new AppError('conflict', NOTHING_AGREED);
+	return { held, all };
 }
 
 async function show(mount: Mount): Promise<FittingView> {
@@ -43,12 +40,11 @@ async function show(mount: Mount): Promise<FittingView> {
 	const followUps = installation
 		? await FollowUp.findAll({ where: { installationId: installation.id }, order: [['dueOn', 'ASC']] })
 		: [];
-	const agreed = installation
-		? await Assessment.findByPk(installation.assessmentId)
-		: await findAgreed(mount);
-	if (!agreed) throw notFound('assessment');
-	const first = await Recommendation.findOne({ where: { assessmentId: agreed.id }, order: [['id', 'ASC']] });
-	const agreement = { assessment: agreed, at: first?.createdAt ?? agreed.createdAt };
+	const { held: newest, all } = await findAgreed(mount);
+	const held = (installation && (await findFittedUnder(installation))) ?? newest;
+	const assessment = await Assessment.findByPk(installation?.assessmentId ?? held.assessmentId);
+	if (!assessment) throw notFound('assessment');
+	const agreement = { assessment, held, newest, first: all.at(-1)! };
 	const days = { now: today(), soon: addMonths(today(), EARLY_MONTHS) };
 	return presentFitting(mount, agreement, installation, followUps, days);
 }
@@ -69,12 +65,14 @@ export async function listFitted(person: SignedInPerson, jobId: number): Promise
 		where: { installationId: installations.map(({ id }) => id), doneOn: null },
 		order: [['dueOn', 'ASC']]
 	});
+	const mismatches = await findMismatches(installations);
 	return mounts.flatMap(({ id: mountId, letter }) => {
 		const installation = installations.find((each) => each.mountId === mountId);
 		if (!installation) return [];
 		const next = open.find(({ installationId }) => installationId === installation.id);
 		const nextDueOn = next?.dueOn ?? null;
-		return [{ mountId, letter, nextDueOn, isOverdue: nextDueOn !== null && nextDueOn < today() }];
+		const isOverdue = nextDueOn !== null && nextDueOn < today();
+		return [{ mountId, letter, nextDueOn, isOverdue, mismatch: mismatches.get(mountId) ?? null }];
 	});
 }
 
@@ -132,9 +130,11 @@ export async function saveFitting(
 			if (fitted.fittedOn !== installation.fittedOn) await refuseAfterwards(installation, fitted.fittedOn);
 			await saveVersioned(installation, 'fitting', version, fitted, transaction);
 		} else {
-			const agreed = await findAgreed(mount);
+			const { held } = await findAgreed(mount);
+			const agreed = (await Assessment.findByPk(held.assessmentId))!;
 			const { workshopId, jobId } = mount;
-			const made = { workshopId, jobId, mountId, assessmentId: agreed.id, createdBy: person.id };
+			const under = { assessmentId: agreed.id, recommendationId: held.id };
+			const made = { workshopId, jobId, mountId, ...under, createdBy: person.id };
 			installation = await Installation.create(
 				{ ...made, ...fitted, agreed: listAgreed(agreed) },
 				{ transaction }

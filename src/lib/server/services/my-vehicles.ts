@@ -1,16 +1,8 @@
 import type { HistoryEntry, MyVehicle } from '$lib/schemas/my';
 import type { SignedInPerson } from '$lib/schemas/people';
-import {
-	Acknowledgement,
-	FieldNote,
-	FieldNoteStrike,
-	FollowUp,
-	Installation,
-	Job,
-	Sheet,
-	Vehicle
-} from '../db/models';
+import { Acknowledgement, FollowUp, Installation, Job, Sheet, Vehicle } from '../db/models';
 import { allow } from '../policies';
+import type { JudgedNote } from '../presenters/field-notes';
 import {
 	sayDue,
 	tellFitting,
@@ -19,23 +11,32 @@ import {
 	tellQuestions,
 	tellSheet
 } from '../presenters/my-history';
+import { listHeatDifferences } from '$lib/format/fitted';
 import { formatVehicle } from '$lib/format/vehicles';
 import { listCustomerDocuments } from './customer-documents';
+import { countDoubts } from './field-doubts';
 import { listLessons } from './field-lessons';
+import { readNoted } from './judged-notes';
 import { readThread } from './question-threads';
 
 async function readFitted(jobIds: number[]) {
 	const installations = await Installation.findAll({ where: { jobId: jobIds } });
 	const where = { installationId: installations.map(({ id }) => id) };
-	const [followUps, notes] = await Promise.all([
+	const [followUps, noted] = await Promise.all([
 		FollowUp.findAll({ where, order: [['dueOn', 'ASC']] }),
-		FieldNote.findAll({ where })
+		readNoted(installations)
 	]);
-	const strikes = await FieldNoteStrike.findAll({ where: { fieldNoteId: notes.map(({ id }) => id) } });
-	const strikeOf = ({ id }: FieldNote) => strikes.find(({ fieldNoteId }) => fieldNoteId === id) ?? null;
-	const jobOf = (installationId: number): number =>
-		installations.find(({ id }) => id === installationId)!.jobId;
-	return { installations, followUps, notes, strikeOf, jobOf };
+	const { notes, strikes } = noted;
+	const doubts = countDoubts(noted, installations);
+	const installationOf = ({ installationId }: { installationId: number }) =>
+		installations.find(({ id }) => id === installationId)!;
+	const aroundOf = (note: JudgedNote) => ({
+		strike: strikes.find(({ fieldNoteId }) => fieldNoteId === note.id) ?? null,
+		isOtherwise: listHeatDifferences(installationOf(note)).length > 0,
+		doubts: doubts.get(note.id) ?? 0
+	});
+	const jobOf = (row: { installationId: number }): number => installationOf(row).jobId;
+	return { installations, followUps, notes, aroundOf, jobOf };
 }
 
 async function tellAll(jobIds: number[]) {
@@ -44,17 +45,17 @@ async function tellAll(jobIds: number[]) {
 		readFitted(jobIds),
 		Promise.all(jobIds.map(async (jobId) => tellQuestions(await readThread(jobId), jobId)))
 	]);
-	const { installations, followUps, notes, strikeOf, jobOf } = fitted;
+	const { installations, followUps, notes, aroundOf, jobOf } = fitted;
 	const history: HistoryEntry[] = [
 		...sheets.flatMap(tellSheet),
 		...installations.map(tellFitting),
-		...followUps.flatMap((followUp) => tellFollowUp(followUp, jobOf(followUp.installationId))),
-		...notes.map((note) => tellNote(note, jobOf(note.installationId), strikeOf(note))),
+		...followUps.flatMap((followUp) => tellFollowUp(followUp, jobOf(followUp))),
+		...notes.map((note) => tellNote(note, jobOf(note), aroundOf(note))),
 		...threads.flat()
 	];
 	const due = followUps
 		.filter(({ doneOn }) => (doneOn ?? null) === null)
-		.map((followUp) => ({ jobId: jobOf(followUp.installationId), words: sayDue(followUp) }));
+		.map((followUp) => ({ jobId: jobOf(followUp), words: sayDue(followUp) }));
 	return { history: history.sort((a, b) => (a.at < b.at ? 1 : a.at > b.at ? -1 : 0)), due };
 }
 

@@ -1,22 +1,21 @@
-import { Op } from 'sequelize';
 import type { RecommendationView } from '$lib/schemas/recommendations';
-import { Assessment, Installation, Person, Recommendation } from '../db/models';
+import { Assessment, Installation, Person, Recommendation, type Mount } from '../db/models';
 
-/** What is kept under the agreement of a fitting: the newest recommendation that was there by then. */
-export async function findFittedUnder({
-	assessmentId,
-	workshopId,
-	createdAt
-}: Pick<Installation, 'assessmentId' | 'workshopId' | 'createdAt'>): Promise<Recommendation | null> {
-	const made = await Recommendation.findAll({ where: { assessmentId, workshopId }, order: [['id', 'ASC']] });
-	return made.filter((each) => each.createdAt <= createdAt).at(-1) ?? made[0] ?? null;
-}
+/** The recommendation that a fitting is held against. */
+export const findFittedUnder = async ({
+	recommendationId
+}: Pick<Installation, 'recommendationId'>): Promise<Recommendation | null> =>
+	recommendationId === null ? null : Recommendation.findByPk(recommendationId);
 
-/** The newest recommendation of the same mount, where it came later. */
-async function findNewer({ id, jobId }: Recommendation, mountId: number): Promise<Recommendation | null> {
+/** The recommendations of one mount, the newest first. */
+export async function listOfMount({
+	id: mountId,
+	jobId,
+	workshopId
+}: Pick<Mount, 'id' | 'jobId' | 'workshopId'>): Promise<Recommendation[]> {
 	const assessments = await Assessment.findAll({ where: { jobId, mountId }, attributes: ['id'] });
-	return Recommendation.findOne({
-		where: { id: { [Op.gt]: id }, assessmentId: assessments.map((each) => each.id) },
+	return Recommendation.findAll({
+		where: { jobId, workshopId, assessmentId: assessments.map(({ id }) => id) },
 		order: [['id', 'DESC']]
 	});
 }
@@ -26,7 +25,9 @@ export async function findAftermath(
 	recommendation: Recommendation,
 	mountId: number
 ): Promise<Pick<RecommendationView, 'replacedBy' | 'isFittedUnder'>> {
-	const newer = await findNewer(recommendation, mountId);
+	const { id, jobId, workshopId } = recommendation;
+	const [newest] = await listOfMount({ id: mountId, jobId, workshopId });
+	const newer = newest && newest.id > id ? newest : null;
 	const author = newer && (await Person.findByPk(newer.createdBy));
 	const installation = await Installation.findOne({ where: { mountId } });
 	const under = installation && (await findFittedUnder(installation));

@@ -8,6 +8,7 @@ export {
 	type YearsRange
 } from './capacity-trend';
 export { weighReport, type CutOutReport } from './cut-out-report';
+export { isEveningPattern } from './evening-pattern';
 export {
 	holdCapacity,
 	holdLabel,

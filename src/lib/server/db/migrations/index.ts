@@ -101,6 +101,11 @@ import { migration as m161 } from './161-prediction-checks-traces';
 import { migration as m162 } from './162-outgoing-mails-handed-over';
 import { migration as m170 } from './170-traces-to-hold';
 import { migration as m171 } from './171-traces-by-file';
+import { migration as m185 } from './185-installations-recommendation';
+import { migration as m186 } from './186-installations-recommendation-known';
+import { migration as m187 } from './187-field-note-findings';
+import { migration as m188 } from './188-field-note-findings-no-update';
+import { migration as m189 } from './189-field-note-findings-no-delete';
 import type { Migration } from '../migrate';
 
 /** Every migration, in the order in which they run; each is one DDL step that may run again. */
@@ -207,5 +212,10 @@ export const migrations: Migration[] = [
 	m161,
 	m162,
 	m170,
-	m171
+	m171,
+	m185,
+	m186,
+	m187,
+	m188,
+	m189
 ];

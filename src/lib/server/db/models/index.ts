@@ -30,6 +30,7 @@ import { Acknowledgement, initAcknowledgement } from './acknowledgement';
 import { Installation, initInstallation } from './installation';
 import { FollowUp, initFollowUp } from './follow-up';
 import { FieldNote, initFieldNote } from './field-note';
+import { FieldNoteFinding, initFieldNoteFinding } from './field-note-finding';
 import { FieldNoteStrike, initFieldNoteStrike } from './field-note-strike';
 import { CustomerMessage, initCustomerMessage } from './customer-message';
 import { StoredFile, initStoredFile } from './stored-file';
@@ -74,6 +75,7 @@ export {
 	Installation,
 	FollowUp,
 	FieldNote,
+	FieldNoteFinding,
 	FieldNoteStrike,
 	CustomerMessage,
 	StoredFile,
@@ -119,6 +121,7 @@ const initialisers = [
 	initInstallation,
 	initFollowUp,
 	initFieldNote,
+	initFieldNoteFinding,
 	initFieldNoteStrike,
 	initCustomerMessage,
 	initStoredFile,

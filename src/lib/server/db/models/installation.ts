@@ -6,7 +6,18 @@ import {
 	type Sequelize
 } from 'sequelize';
 import type { AgreedItem, Difference } from '$lib/schemas/fitting';
-import { day, edited, id, json, moment, reference, text, textOrEmpty, whole } from './base';
+import {
+	day,
+	edited,
+	id,
+	json,
+	moment,
+	optionalReference,
+	reference,
+	text,
+	textOrEmpty,
+	whole
+} from './base';
 
 /** A battery that was fitted, one a mount. */
 export class Installation extends Model<
@@ -17,12 +28,13 @@ export class Installation extends Model<
 	declare workshopId: number;
 	declare jobId: number;
 	declare mountId: number;
-	/** What it was agreed on. */
+	/** What it was agreed on, and the recommendation that said so. */
 	declare assessmentId: number;
+	declare recommendationId: number | null;
 	declare fittedOn: string;
 	declare fittedBy: string;
 	declare serialNumber: CreationOptional<string>;
-	/** As it was agreed when it was fitted, and what was made otherwise. */
+	/** As it is agreed with that recommendation, and what was made otherwise. */
 	declare agreed: AgreedItem[];
 	declare differences: Difference[];
 	declare note: CreationOptional<string>;
@@ -40,6 +52,7 @@ export function initInstallation(sequelize: Sequelize): void {
 			jobId: reference,
 			mountId: reference,
 			assessmentId: reference,
+			recommendationId: optionalReference,
 			fittedOn: day,
 			fittedBy: text,
 			serialNumber: textOrEmpty,

@@ -6,7 +6,12 @@ import {
 	fieldNoteStrikeSchema
 } from '$lib/schemas/field-notes';
 import { idSchema } from '$lib/schemas/fields';
-import { fittingChangeSchema, fittingSchema, followUpChangeSchema } from '$lib/schemas/fitting';
+import {
+	agreementChangeSchema,
+	fittingChangeSchema,
+	fittingSchema,
+	followUpChangeSchema
+} from '$lib/schemas/fitting';
 import { defineOperation } from '../operation';
 
 const params = z.object({ mountId: idSchema });
@@ -30,6 +35,18 @@ export const fittingOperations = {
 		summary: 'Keeps what was fitted; the first time it also sets the dates of the follow-ups.',
 		params,
 		body: fittingChangeSchema,
+		answer: fittingSchema,
+		status: 200
+	}),
+	hold: defineOperation({
+		id: 'holdFitting',
+		method: 'PUT',
+		path: '/api/v1/mounts/[mountId]/fitting/agreement',
+		action: 'mounts.write',
+		summary:
+			'Holds what was fitted against another recommendation of its position: differences are compared anew, and papers, expectations and findings follow. Works out every note anew first.',
+		params,
+		body: agreementChangeSchema,
 		answer: fittingSchema,
 		status: 200
 	}),

@@ -6,6 +6,7 @@ import { Assessment, type FieldNote, type Installation } from '../../db/models';
 import { today } from '../days';
 import { labelOf, scenarioOn } from '../field-readings';
 import { isUnstruck } from '../field-standing';
+import { findingBy } from '../judged-notes';
 import { afterOthers, workInSlices } from '../slices';
 import { writeChecks } from './check-rows';
 import { findPredictionNow } from './prediction-at';
@@ -50,13 +51,14 @@ export async function checkLabel({ id }: Installation, data: FieldNoteInput): Pr
  */
 const SETTLE = `
 	UPDATE prediction_checks c JOIN field_notes n ON n.id = c.field_note_id
+		JOIN installations i ON i.id = n.installation_id
 	SET c.left_out = CASE
 		WHEN NOT ${isUnstruck('n')} THEN 'struck'
 		WHEN EXISTS (SELECT 1 FROM field_notes later
 			WHERE later.installation_id = n.installation_id AND later.kind = n.kind AND later.noted_on = n.noted_on
 				AND later.id > n.id AND JSON_VALUE(later.data, '$.place') = JSON_VALUE(n.data, '$.place')
 				AND ${isUnstruck('later')}) THEN 'noted-again'
-		WHEN JSON_EXTRACT(n.finding, '$.learning.fits') = 'false' THEN 'fits-nothing'
+		WHEN JSON_EXTRACT(${findingBy('n', 'i')}, '$.learning.fits') = 'false' THEN 'fits-nothing'
 		ELSE '' END
 	WHERE c.installation_id = :installationId AND c.kind = 'label'
 `;

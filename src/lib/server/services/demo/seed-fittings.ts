@@ -2,7 +2,8 @@ import { Op, type Transaction } from 'sequelize';
 import type { SignedInPerson } from '$lib/schemas/people';
 import { FollowUp } from '../../db/models';
 import { addDays, today } from '../days';
-import { addFieldNote, LIGHT_LEARNING } from '../field-notes';
+import { LIGHT_LEARNING } from '../field-findings';
+import { addFieldNote } from '../field-notes';
 import { finishFollowUp, saveFitting } from '../fittings';
 
 /** When a demo battery was fitted, how many of its looks are done, when it went dark since, and what was read of it. */

@@ -252,10 +252,10 @@ async function storeChunk(
 	);
 	const installations = await add(
 		'installations',
-		'workshop_id job_id mount_id assessment_id fitted_on fitted_by agreed differences created_by created_at updated_at',
+		'workshop_id job_id mount_id assessment_id recommendation_id fitted_on fitted_by agreed differences created_by created_at updated_at',
 		invented.map(({ fittedOn }, k) => [
-			...[workshopId, jobs[k], mounts[k], assessments[k], fittedOn, 'Invented', '[]', '[]', managerId],
-			...[at(fittedOn), at(fittedOn)]
+			...[workshopId, jobs[k], mounts[k], assessments[k], recommendations[k], fittedOn, 'Invented'],
+			...['[]', '[]', managerId, at(fittedOn), at(fittedOn)]
 		])
 	);
 	await add(

@@ -3,6 +3,7 @@ import { connection } from '../../db/connection';
 import { inTransaction } from '../../db/transaction';
 import { refreshChecks } from '../accuracy/keep-checks';
 import { isUnstruck } from '../field-standing';
+import { findingBy, isOtherwise } from '../judged-notes';
 import {
 	readRow,
 	ROW_COLUMNS,
@@ -19,7 +20,7 @@ import {
 /** So many are read and written at a time. */
 const BATCH = 500;
 
-/** The recommendation under which it was fitted, and the newest page of what was agreed that still stands. */
+/** The recommendation that it is held against, and the newest page of what was agreed that still stands. */
 const SOURCES = `
 	SELECT i.id AS installationId, i.workshop_id AS workshopId, i.mount_id AS mountId, i.job_id AS jobId,
 		i.assessment_id AS assessmentId, CAST(i.fitted_on AS CHAR) AS fittedOn, a.verdict, a.chemistry,
@@ -38,9 +39,7 @@ const SOURCES = `
 		JOIN assessments a ON a.id = i.assessment_id
 		JOIN jobs j ON j.id = i.job_id
 		LEFT JOIN places p ON p.id = j.place_id
-		LEFT JOIN recommendations r ON r.id = (
-			SELECT COALESCE(MAX(IF(n.created_at <= i.created_at, n.id, NULL)), MIN(n.id))
-			FROM recommendations n WHERE n.job_id = i.job_id AND n.assessment_id = i.assessment_id)
+		LEFT JOIN recommendations r ON r.id = i.recommendation_id
 	WHERE i.id IN (:ids)
 `;
 
@@ -50,11 +49,14 @@ const OUTLOOKS = `
 	FROM assessment_outlooks WHERE assessment_id IN (:ids) LOCK IN SHARE MODE
 `;
 
+/** Nothing is taken off that cannot be judged: not held against anything, or against what was not fitted. */
 const DARK_DAYS = `
-	SELECT installation_id AS installationId, CAST(noted_on AS CHAR) AS darkOn,
-		MAX(COALESCE(JSON_VALUE(finding, '$.cause.finding'), '') <> 'not-explained') AS isHeat
-	FROM field_notes n WHERE installation_id IN (:ids) AND kind = 'cut-out' AND ${isUnstruck('n')}
-	GROUP BY installation_id, noted_on ORDER BY noted_on
+	SELECT n.installation_id AS installationId, CAST(n.noted_on AS CHAR) AS darkOn,
+		MAX(COALESCE(JSON_VALUE(${findingBy('n', 'i')}, '$.cause.finding'), '') <> 'not-explained'
+			OR ${isOtherwise('i')}) AS isHeat
+	FROM field_notes n JOIN installations i ON i.id = n.installation_id
+	WHERE n.installation_id IN (:ids) AND n.kind = 'cut-out' AND ${isUnstruck('n')}
+	GROUP BY n.installation_id, n.noted_on ORDER BY n.noted_on
 `;
 
 async function select<Row extends object>(

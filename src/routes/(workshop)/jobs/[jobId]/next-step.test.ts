@@ -67,7 +67,7 @@ describe('the next step of a job', () => {
 	});
 
 	const dates = (nextDueOn: string | null, isOverdue = false, at = MOUNT_A) => ({
-		...{ mountId: at.id, letter: at.letter, nextDueOn, isOverdue }
+		...{ mountId: at.id, letter: at.letter, nextDueOn, isOverdue, mismatch: null }
 	});
 	const OPEN_B = { ...MOUNT_B, surveyComplete: false };
 	const [late, later, done] = [dates('2026-03-04', true), dates('2026-09-04'), dates(null)];
@@ -176,6 +176,18 @@ describe('the next step of a job', () => {
 		const around = { fitted: [later], recommendedMountId: 1 };
 		const given = { stage: 'acknowledged', mounts: [MOUNT_A, OPEN_B] };
 		expect(find(job({ ...given, standings: [standing(1)] }), around)?.label).toBe('See the dates');
+		const changed = { ...given, standings: [standing(1, ['battery'])] };
+		expect(find(job(changed), around)?.label).toBe('Assess again');
+	});
+
+	it.each([
+		['assess', 'Assess it as it was fitted', '/jobs/7/battery'],
+		['recommend', 'Recommend it as it was fitted', '/jobs/7/recommendation'],
+		['hold', 'Hold the fitting against the newer recommendation', '/mounts/1/fitted#agreement']
+	] as const)('with another battery fitted, is to %s it', (mismatch, label, href) => {
+		const around = { fitted: [{ ...later, mismatch }], recommendedMountId: 1 };
+		const given = { stage: 'acknowledged', mounts: [MOUNT_A] };
+		expect(find(job({ ...given, standings: [standing(1)] }), around)).toMatchObject({ label, href });
 		const changed = { ...given, standings: [standing(1, ['battery'])] };
 		expect(find(job(changed), around)?.label).toBe('Assess again');
 	});

@@ -1,6 +1,6 @@
 import { formatDate } from '$lib/format/dates';
 import { sayMounts } from '$lib/format/jobs';
-import type { FittedMount } from '$lib/schemas/fitting';
+import type { FittedMount, Mismatch } from '$lib/schemas/fitting';
 import type { JobView } from '$lib/schemas/jobs';
 
 /** The one thing that is to be done next. */
@@ -42,6 +42,27 @@ const mountsToAssess = (job: JobView, around: Around) =>
 		const standing = standingOf(job, mount.id);
 		return mount.surveyComplete && (!standing || standing.changedSince.length > 0);
 	});
+
+type MismatchStep = (mount: FittedMount, at: string) => NextStep;
+
+/** From another battery in a mount to an estimate, a recommendation and papers of that battery. */
+const MISMATCH_STEPS: Readonly<Record<Mismatch, MismatchStep>> = {
+	assess: ({ letter }, at) => ({
+		label: 'Assess it as it was fitted',
+		text: `Mount ${letter} has another battery than was agreed, of which nothing is worked out: choose the fitted one here, then assess again.`,
+		href: `${at}/battery`
+	}),
+	recommend: ({ letter }, at) => ({
+		label: 'Recommend it as it was fitted',
+		text: `Mount ${letter} is assessed with another battery than was agreed: recommend that, then hold the fitting against it.`,
+		href: `${at}/recommendation`
+	}),
+	hold: ({ letter, mountId }) => ({
+		label: 'Hold the fitting against the newer recommendation',
+		text: `What was fitted at mount ${letter} is still held against the earlier one: its papers and answers are of another battery.`,
+		href: `/mounts/${mountId}/fitted#agreement`
+	})
+};
 
 /** In the order in which a job is done; the first rule that has something to say is the next step. */
 const RULES: readonly Rule[] = [
@@ -109,6 +130,10 @@ const RULES: readonly Rule[] = [
 				: `All is there to work out the hot day of ${which}.`,
 			href: null
 		};
+	},
+	(_, at, { fitted }) => {
+		const other = fitted.find(({ mismatch }) => mismatch !== null);
+		return other?.mismatch ? MISMATCH_STEPS[other.mismatch](other, at) : null;
 	},
 	(job, at, around) =>
 		job.stage === 'recommended' && isFitted(around, around.recommendedMountId)

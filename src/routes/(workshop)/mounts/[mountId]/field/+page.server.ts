@@ -1,4 +1,5 @@
-import { fieldNotesQuerySchema } from '$lib/schemas/field-notes';
+import { sayDoubtInShort, sayOtherwise } from '$lib/format/field-doubt-words';
+import { fieldNotesQuerySchema, type FieldNoteView } from '$lib/schemas/field-notes';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { mayDo } from '$lib/server/policies';
 import { presentTrend, presentNote } from '$lib/server/presenters/field-reports';
@@ -17,6 +18,16 @@ function readNamed(url: URL): { namedAh: number | null; problem: string } {
 		: { namedAh: null, problem: read.error.issues[0]!.message };
 }
 
+/** What holds for every answer on the page, before the first of them. */
+function warnOf(rows: readonly FieldNoteView[]): string[] {
+	const otherwise = rows[0]?.judgedBy.otherwise ?? [];
+	const doubts = Math.max(0, ...rows.map((row) => row.doubts));
+	return [
+		...(otherwise.length > 0 ? [sayOtherwise(otherwise)] : []),
+		...(doubts > 0 ? [sayDoubtInShort(doubts)] : [])
+	];
+}
+
 export const load: PageServerLoad = async (event) => {
 	const person = guard(event, 'jobs.read');
 	const mount = await openMount(person, event.params);
@@ -27,6 +38,7 @@ export const load: PageServerLoad = async (event) => {
 		mount,
 		job: { id: job.id, number: job.number },
 		notes: notes.rows.map(presentNote),
+		warnings: warnOf(notes.rows),
 		trend: presentTrend(notes),
 		asked: { text: event.url.searchParams.get('capacity') ?? '', problem },
 		mayStrike: mayDo(person, 'mounts.write'),

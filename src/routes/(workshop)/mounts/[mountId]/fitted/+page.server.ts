@@ -1,16 +1,29 @@
 import { redirect } from '@sveltejs/kit';
 import { idSchema, versionSchema } from '$lib/schemas/fields';
-import { fittingFormSchema, fromFittingForm, toFittingForm } from '$lib/schemas/fitting';
+import {
+	agreementChangeSchema,
+	fittingFormSchema,
+	fromFittingForm,
+	toFittingForm
+} from '$lib/schemas/fitting';
+import { doOrSay } from '$lib/server/http/do-or-say';
 import { saveEdited } from '$lib/server/http/edit-form';
 import { loadForm } from '$lib/server/http/forms';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { pageId } from '$lib/server/http/page-id';
 import { validate } from '$lib/server/http/validate';
+import { holdFitting } from '$lib/server/services/fitting-agreement';
 import { finishFollowUp, getFitting, saveFitting } from '$lib/server/services/fittings';
 import { findReminded } from '$lib/server/services/reminders';
 import { getJob } from '$lib/server/services/jobs';
 import { openMount } from '../open-mount';
 import type { Actions, PageServerLoad } from './$types';
+
+/** The recommendation that it was held against until a moment ago. */
+function readHeldBefore(url: URL): number | null {
+	const read = idSchema.safeParse(url.searchParams.get('heldBefore') ?? undefined);
+	return read.success ? read.data : null;
+}
 
 export const load: PageServerLoad = async (event) => {
 	const person = guard(event, 'mounts.write');
@@ -28,7 +41,8 @@ export const load: PageServerLoad = async (event) => {
 		looked: followUpAt('looked'),
 		job: { id: job.id, number: job.number },
 		form: await loadForm(fittingFormSchema, known),
-		isSaved: event.url.searchParams.has('saved')
+		isSaved: event.url.searchParams.has('saved'),
+		heldBefore: readHeldBefore(event.url)
 	};
 };
 
@@ -45,6 +59,14 @@ export const actions: Actions = {
 			newest: async (person) => toFittingForm((await getFitting(person, mountId)).installation)
 		});
 	},
+	hold: (event) =>
+		doOrSay(event, 'mounts.write', async (person, sent): Promise<never> => {
+			const mountId = pageId(event.params.mountId);
+			const change = validate(agreementChangeSchema, Object.fromEntries(sent));
+			const before = (await getFitting(person, mountId)).recommendation.id;
+			await holdFitting(person, mountId, change);
+			redirect(303, `/mounts/${mountId}/fitted?heldBefore=${before}`);
+		}),
 	done: async (event) => {
 		const person = guard(event, 'mounts.write');
 		const { id } = await openMount(person, event.params);

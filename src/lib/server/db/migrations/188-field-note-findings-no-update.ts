@@ -1,0 +1,10 @@
+import type { Migration } from '../migrate';
+
+export const migration: Migration = {
+	name: '188-field-note-findings-no-update',
+	up: (run) =>
+		run(`
+			CREATE TRIGGER IF NOT EXISTS field_note_findings_no_update BEFORE UPDATE ON field_note_findings
+			FOR EACH ROW SIGNAL SQLSTATE '45000' SET MESSAGE_TEXT = 'A finding is immutable'
+		`)
+};
