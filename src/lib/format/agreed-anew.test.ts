@@ -9,12 +9,12 @@ const NOW = [item('battery', 'Ridge 65'), item('charger', 'at most 40 A'), item(
 describe('what is otherwise once another agreement holds', () => {
 	it('is no longer what is agreed now, however it was spaced and written', () => {
 		const differences = [{ key: 'battery' as const, fitted: ' ridge  65' }];
-		expect(compareAnew(BEFORE, [NOW[0]!], differences)).toEqual([]);
+		expect(compareAnew([BEFORE[0]!], [NOW[0]!], differences)).toEqual([]);
 	});
 
 	it('is still what was named in other words: that is for whoever noted it', () => {
 		const differences = [{ key: 'battery' as const, fitted: 'The 65 Ah one' }];
-		expect(compareAnew(BEFORE, [NOW[0]!], differences)).toEqual(differences);
+		expect(compareAnew([BEFORE[0]!], [NOW[0]!], differences)).toEqual(differences);
 	});
 
 	it('is what was as agreed before, where the agreement changed; what nobody noted is not claimed', () => {

@@ -141,7 +141,7 @@ describe('the dates', () => {
 		const fitting = await saveFitting(installer, mountId, { ...FITTED, fittedOn: addDays(today(), -40) });
 		const [first, second, third] = fitting.followUps;
 		expect(fitting.followUps.map(({ isEarly }) => isEarly)).toEqual([false, true, true]);
-		const fitted = { mountId, letter: 'A' };
+		const fitted = { mountId, letter: 'A', mismatch: null };
 		expect(await listFitted(installer, jobId)).toEqual([
 			{ ...fitted, nextDueOn: first!.dueOn, isOverdue: true }
 		]);
