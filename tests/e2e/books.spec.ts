@@ -82,3 +82,50 @@ test('a draft is begun, changed with a source, laid beside its origin, and waits
 	await expect(manager.getByText(/^Withdrawn, made/)).toBeVisible();
 	await context.close();
 });
+
+test(
+	'a draft that contradicts itself says so and waits; a book on trial says that it is no draft',
+	ONCE,
+	async ({ page }) => {
+		test.slow();
+		await signInAs(page, 'engineer');
+		await openForm(page, '/books/new');
+		await page.getByLabel('For positions').selectOption('Under the bonnet');
+		await page.getByLabel('For engines').selectOption('Flat engines');
+		await page.getByLabel('Name', { exact: true }).fill(`Thermostats ${Date.now()}`);
+		await page.getByRole('button', { name: 'Begin the draft' }).click();
+		await expect(page.getByText('For: flat engines, under the bonnet.')).toBeVisible();
+		const book = page.url().replace(/\?.*/, '');
+
+		await openForm(page, `${book}/engine.thermostatOpen`);
+		await page.getByLabel('Value').fill('99');
+		await page.getByLabel('Source').fill('Another thermostat.');
+		await page.getByRole('button', { name: 'Save the value' }).click();
+		await expect(page.getByText('it must be above engine.thermostatOpen, 99 °C')).toBeVisible();
+		await expect(page.getByRole('button', { name: 'Put it on trial' })).toHaveCount(0);
+		await expectNoViolations(page);
+		await page.getByRole('link', { name: 'Change engine.thermostatFull' }).click();
+		await page.getByLabel('Value').fill('108');
+		await page.getByLabel('Source').fill('The same.');
+		await page.getByRole('button', { name: 'Save the value' }).click();
+		await expect(page.getByRole('button', { name: 'Put it on trial' })).toBeVisible();
+		await expect(page.getByText('contradict each other')).toHaveCount(0);
+
+		const other = await page.context().newPage();
+		await openForm(other, `${book}/engine.thermostatOpen`);
+		await page.getByRole('button', { name: 'Put it on trial' }).click();
+		await expect(page.getByText('It waits for a second person')).toBeVisible();
+		await other.getByLabel('Value').fill('97');
+		await other.getByRole('button', { name: 'Save the value' }).click();
+		await expect(other.getByText(/is no draft any more/)).toBeVisible();
+		await expect(other.getByText('Save again')).toHaveCount(0);
+		await expect(other.getByLabel('Value')).toHaveValue('97');
+		await expectNoViolations(other);
+
+		await page.getByRole('button', { name: 'Withdraw it' }).click();
+		await expect(page.getByText('A withdrawn book stays withdrawn.')).toBeVisible();
+		await page.getByRole('link', { name: 'Begin a new book from it' }).click();
+		await expect(page.getByLabel('For positions')).toHaveValue('under-bonnet');
+		await expect(page.getByLabel('For engines')).toHaveValue('flat');
+	}
+);

@@ -25,4 +25,16 @@ describe('a re-run in words', () => {
 		expect(sayChanged({ ...PROGRESS, changed: 1, untold: 1 })).toBe('1 verdict changed, 1 still to be told');
 		expect(sayChanged({ ...PROGRESS, changed: 4 })).toBe('4 verdicts changed, everybody told');
 	});
+
+	it('puts mounts that could not be run before what changed', () => {
+		expect(sayChanged({ ...PROGRESS, total: 20, waiting: 0, done: 0, failed: 20 })).toBe(
+			'20 mounts could not be run, so their verdicts are not known'
+		);
+		expect(sayChanged({ ...PROGRESS, failed: 1 })).toBe(
+			'1 mount could not be run; of the others, no verdict changed'
+		);
+		expect(sayChanged({ ...PROGRESS, failed: 2, changed: 1, untold: 1 })).toBe(
+			'2 mounts could not be run; of the others, 1 verdict changed, 1 still to be told'
+		);
+	});
 });

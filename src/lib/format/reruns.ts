@@ -22,9 +22,17 @@ export const RERUN_STATE_WORDS: Record<RerunProgress['state'], string> = {
 	done: 'done'
 };
 
-/** "3 verdicts changed, 1 still to be told". */
-export function sayChanged({ changed, untold }: RerunProgress): string {
-	if (changed === 0) return 'No verdict changed';
+function sayVerdicts({ changed, untold }: RerunProgress): string {
+	if (changed === 0) return 'no verdict changed';
 	const words = changed === 1 ? '1 verdict changed' : `${changed} verdicts changed`;
 	return untold === 0 ? `${words}, everybody told` : `${words}, ${untold} still to be told`;
+}
+
+/** "3 verdicts changed, 1 still to be told"; mounts of which nothing is known come first. */
+export function sayChanged(progress: RerunProgress): string {
+	const { failed, done } = progress;
+	const verdicts = sayVerdicts(progress);
+	if (failed === 0) return `${verdicts.charAt(0).toUpperCase()}${verdicts.slice(1)}`;
+	const left = `${mounts(failed)} could not be run`;
+	return done === 0 ? `${left}, so their verdicts are not known` : `${left}; of the others, ${verdicts}`;
 }

@@ -75,7 +75,21 @@ export const bookRowSchema = z.object({
 });
 export type BookRow = z.infer<typeof bookRowSchema>;
 
-export const bookSchema = bookRowSchema.extend({ coefficients: z.array(coefficientSchema) });
+/** Values of one book that cannot be true together. */
+export const contradictionSchema = z.object({
+	paths: z.array(z.string()).meta({ description: 'The coefficients that it is between' }),
+	value: z.number(),
+	limit: z.string(),
+	message: z.string()
+});
+export type ContradictionView = z.infer<typeof contradictionSchema>;
+
+export const bookSchema = bookRowSchema.extend({
+	coefficients: z.array(coefficientSchema),
+	contradictions: z
+		.array(contradictionSchema)
+		.meta({ description: 'With one of them a book goes neither on trial nor into force' })
+});
 export type BookView = z.infer<typeof bookSchema>;
 
 const bookWords = { name: words('Name', 80), note: optionalWords('What it is for', 500) };

@@ -5,7 +5,8 @@ export * from './types';
 export { ambientTempC, sunWPerM2 } from './vehicle/climate';
 export { heatFlowsAt } from './vehicle/heat-flows';
 export type { HeatFlow } from './vehicle/heat-flows';
-export { defaultScenario, describeRange, parseScenario } from './vehicle/parse-scenario';
+export type { Contradiction } from './vehicle/check-consistency';
+export { defaultScenario, describeRange, findContradictions, parseScenario } from './vehicle/parse-scenario';
 export {
 	COEFFICIENT_GROUPS,
 	coefficientDefaults,

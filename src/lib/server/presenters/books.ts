@@ -4,8 +4,11 @@ import {
 	type BookRow,
 	type BookView,
 	type CoefficientPair,
-	type CoefficientView
+	type CoefficientView,
+	type ContradictionView
 } from '$lib/schemas/books';
+import { formatCoefficient } from '$lib/format/books';
+import type { Contradiction } from '$lib/thermal';
 import type { Coefficient, CoefficientBook } from '../db/models';
 
 /** Names of people by their number. */
@@ -39,12 +42,30 @@ export function presentCoefficient(
 	};
 }
 
+/** A contradiction with the names that its coefficients have in the book. */
+export function presentContradiction(
+	{ path, against, value, limit }: Contradiction,
+	coefficients: readonly CoefficientView[]
+): ContradictionView {
+	const concerned = [path, against].map((each) =>
+		coefficients.find((coefficient) => writeCoefficientPath(coefficient) === each)
+	);
+	const [own] = concerned;
+	const name = own ? `${own.meaning.replace(/\.$/, '')} (${path})` : path;
+	return {
+		paths: concerned.filter((each) => each !== undefined).map(writeCoefficientPath),
+		...{ value: Number(value), limit },
+		message: `${name} is ${formatCoefficient(Number(value), own?.unit ?? '-')}: it must be ${limit}.`
+	};
+}
+
 export function presentBook(
 	book: CoefficientBook,
 	coefficients: CoefficientView[],
+	contradictions: ContradictionView[],
 	nameOf: NameOf
 ): BookView {
-	return { ...presentBookRow(book, nameOf), coefficients };
+	return { ...presentBookRow(book, nameOf), coefficients, contradictions };
 }
 
 const isSame = (left: CoefficientView | null, right: CoefficientView | null): boolean =>

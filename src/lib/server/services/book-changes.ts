@@ -16,6 +16,7 @@ import { AppError, notFound } from '../errors';
 import { allow } from '../policies';
 import { presentComparison } from '../presenters/books';
 import { recordBy } from './audit';
+import { requireConsistent } from './book-consistency';
 import { findBook, getBook, withCoefficients } from './books';
 import { coefficientField } from './coefficient-sources';
 import { saveVersioned } from './records';
@@ -186,6 +187,7 @@ export async function moveBook(
 		const book = await findBook(person, bookId, transaction);
 		const from = book.state;
 		requireWay(book, to);
+		if (to !== 'withdrawn') await requireConsistent(book);
 		if (to === 'in-force') await requireSecondPerson(book, person, transaction);
 		const replaced = to === 'in-force' ? await replaceInForce(book, transaction) : null;
 		const hands = to === 'in-force' ? { inForceBy: person.id, inForceAt: new Date() } : {};

@@ -1,11 +1,24 @@
 import type { Transaction } from 'sequelize';
-import { closestBook, type BookRow, type BookView, type MountCase } from '$lib/schemas/books';
+import {
+	closestBook,
+	type BookRow,
+	type BookView,
+	type CoefficientView,
+	type MountCase
+} from '$lib/schemas/books';
 import type { SignedInPerson } from '$lib/schemas/people';
+import { findContradictions, ScenarioError, type Contradiction } from '$lib/thermal';
 import type { CoefficientBook as Coefficients } from '$lib/thermal/survey';
 import { Coefficient, CoefficientBook, Person } from '../db/models';
 import { AppError, notFound } from '../errors';
 import { allow } from '../policies';
-import { presentBook, presentBookRow, presentCoefficient, type NameOf } from '../presenters/books';
+import {
+	presentBook,
+	presentBookRow,
+	presentCoefficient,
+	presentContradiction,
+	type NameOf
+} from '../presenters/books';
 import { record } from './audit';
 import { COEFFICIENT_FIELDS, coefficientField, originOf, sourceOf } from './coefficient-sources';
 
@@ -19,12 +32,23 @@ async function namesFor(books: readonly CoefficientBook[]): Promise<NameOf> {
 	return (id) => names.get(id ?? 0) ?? '';
 }
 
+/** What the engine would refuse these values for: one out of its own limits, or those that contradict each other. */
+function faultsOf(coefficients: CoefficientView[]): Contradiction[] {
+	try {
+		return findContradictions(coefficientsOf({ coefficients }));
+	} catch (error) {
+		if (error instanceof ScenarioError) return [{ ...error, against: null }];
+		throw error;
+	}
+}
+
 export async function withCoefficients(book: CoefficientBook): Promise<BookView> {
 	const rows = await Coefficient.findAll({ where: { bookId: book.id }, order: [['id', 'ASC']] });
 	const coefficients = rows.map((row) =>
 		presentCoefficient(row, coefficientField(row.fieldGroup, row.fieldKey))
 	);
-	return presentBook(book, coefficients, await namesFor([book]));
+	const contradictions = faultsOf(coefficients).map((each) => presentContradiction(each, coefficients));
+	return presentBook(book, coefficients, contradictions, await namesFor([book]));
 }
 
 export async function listBooks(person: SignedInPerson): Promise<BookRow[]> {
@@ -70,7 +94,7 @@ export async function bookInForce(person: SignedInPerson, mount: MountCase): Pro
 }
 
 /** A book's values as the engine takes them: by group, then key. */
-export function coefficientsOf({ coefficients }: BookView): Coefficients {
+export function coefficientsOf({ coefficients }: Pick<BookView, 'coefficients'>): Coefficients {
 	const groups: Coefficients = {};
 	for (const { group, key, value } of coefficients) (groups[group] ??= {})[key] = value;
 	return groups;

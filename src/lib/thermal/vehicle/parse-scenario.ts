@@ -1,6 +1,6 @@
 import { ScenarioError, type ScenarioErrorCode } from '../errors';
 import type { Leg, Scenario, ScenarioInput } from '../types';
-import { checkConsistency } from './check-consistency';
+import { checkConsistency, contradictionsOf, type Contradiction } from './check-consistency';
 import {
 	FIELD_GROUPS,
 	LONGEST_PLAN_MINUTES,
@@ -151,6 +151,16 @@ function parseLegs(input: unknown): Leg[] {
 	return legs;
 }
 
+/** Each field for itself, with the defaults filled in. */
+function parseFields(input: unknown): Scenario {
+	const values = requireObject(input, '');
+	requireKnownKeys(values, [...TOP_GROUPS, 'legs'], '');
+	const parsed: Values = {};
+	for (const group of TOP_GROUPS) parsed[group] = parseTopGroup(group, ownValue(values, group));
+	parsed.legs = parseLegs(ownValue(values, 'legs'));
+	return parsed as unknown as Scenario;
+}
+
 /**
  * Checks what people or programs wrote and fills in the defaults.
  *
@@ -166,14 +176,25 @@ function parseLegs(input: unknown): Leg[] {
  * parseScenario({ legs: [{ minutes: 60 }] }).charger.maxA; // 40
  */
 export function parseScenario(input: unknown): Scenario {
-	const values = requireObject(input, '');
-	requireKnownKeys(values, [...TOP_GROUPS, 'legs'], '');
-	const parsed: Values = {};
-	for (const group of TOP_GROUPS) parsed[group] = parseTopGroup(group, ownValue(values, group));
-	parsed.legs = parseLegs(ownValue(values, 'legs'));
-	const scenario = parsed as unknown as Scenario;
+	const scenario = parseFields(input);
 	checkConsistency(scenario);
 	return scenario;
+}
+
+/**
+ * What a set of coefficients says that cannot be true together, among themselves or beside the thermal model's own values
+ * of what is surveyed.
+ *
+ * @param coefficients values by group and key, each within its own limits
+ * @returns every rule that is broken: where, the value, the limit, and the field that it is held against; empty where none is
+ * @throws ScenarioError when a value lies outside its own limits
+ * Validity: the limits of SCENARIO_FIELDS.
+ * Source: the rules that every scenario is held to.
+ * @example
+ * findContradictions({ engine: { thermostatOpen: 99 } })[0]?.limit; // 'above engine.thermostatOpen, 99 °C'
+ */
+export function findContradictions(coefficients: Record<string, Record<string, number>>): Contradiction[] {
+	return contradictionsOf(parseFields({ ...coefficients, legs: [{ minutes: 60 }] }));
 }
 
 /**

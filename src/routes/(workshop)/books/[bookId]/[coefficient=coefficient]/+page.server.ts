@@ -31,10 +31,11 @@ async function toForm(person: SignedInPerson, params: { bookId: string; coeffici
 export const load: PageServerLoad = async (event) => {
 	const person = guard(event, 'books.write');
 	const { book, coefficient } = await find(person, event.params);
-	const { coefficients: _, ...row } = book;
+	const { coefficients: _, contradictions, ...row } = book;
 	return {
 		book: row,
 		coefficient,
+		contradictions: contradictions.filter(({ paths }) => paths.includes(event.params.coefficient)),
 		form: await loadForm(coefficientChangeSchema, await toForm(person, event.params))
 	};
 };
