@@ -10,7 +10,7 @@ interface Row {
 	name: string;
 	state: string;
 	version: number;
-	mapping: object;
+	mapping: { time: { timeZone?: string } };
 }
 
 async function listTraces(page: Page): Promise<Row[]> {
@@ -37,7 +37,8 @@ async function sendTrace(page: Page, name: string): Promise<Row> {
 		...{ headers, data: await dayText(page, demo) }
 	});
 	const trace = (await sent.json()) as Row;
-	const { mapping, version } = trace;
+	const { mapping: proposed, version } = trace;
+	const mapping = { ...proposed, time: { ...proposed.time, timeZone: 'Australia/Darwin' } };
 	await page.request.put(`/api/v1/traces/${trace.id}/mapping`, { data: { mapping, version } });
 	const stateOf = async () =>
 		((await (await page.request.get(`/api/v1/traces/${trace.id}`)).json()) as Row).state;

@@ -26,13 +26,27 @@ export interface Confirmed {
 	startHour?: number | null;
 }
 
+/** What a person writes who knows the clock of the logger, where the box of the zone is empty. */
+const KNOWN_ZONE = 'Australia/Darwin';
+
+/** A proposed mapping, its zone filled in where it was left open. */
+export const fillZone = (mapping: TraceMappingInput): TraceMappingInput =>
+	'timeZone' in mapping.time && mapping.time.timeZone === ''
+		? { ...mapping, time: { ...mapping.time, timeZone: KNOWN_ZONE } }
+		: mapping;
+
 /** Confirms the columns, as they are proposed unless said otherwise, and waits until the file is read. */
 export async function readAs(
 	person: SignedInPerson,
 	{ id, mapping, version }: TraceView,
 	{ isSynthetic = false, startHour = null, ...said }: Confirmed = {}
 ): Promise<TraceView> {
-	await confirmMapping(person, id, { mapping: said.mapping ?? mapping, isSynthetic, startHour, version });
+	await confirmMapping(person, id, {
+		mapping: fillZone(said.mapping ?? mapping),
+		isSynthetic,
+		startHour,
+		version
+	});
 	await followReading(person, id);
 	return getTrace(person, id);
 }

@@ -43,9 +43,28 @@ describe('legs that are kept back', () => {
 
 	it('are told from the others by when they were and what was done', () => {
 		const leg = { startS: 3600, endS: 12_600, kind: 'driving', meanSpeedKmh: 80, why: '' } as const;
-		expect(plain(sayLegOf(leg, 1, 8))).toBe('2: 09:00, driving at 80 km/h for 2 h 30 min');
+		const clock = { timeBase: 'elapsed', timeZone: null, startS: 0 } as const;
+		expect(plain(sayLegOf(leg, 1, { ...clock, startHour: 8 }))).toBe(
+			'2: 09:00, driving at 80 km/h for 2 h 30 min'
+		);
 		const stopped = { ...leg, kind: 'stopped', meanSpeedKmh: null } as const;
-		expect(plain(sayLegOf(stopped, 0, null))).toBe('1: stopped for 2 h 30 min');
+		expect(plain(sayLegOf(stopped, 0, { ...clock, startHour: null }))).toBe('1: stopped for 2 h 30 min');
+	});
+
+	it('says of a dated trace when it was by the clock of its zone', () => {
+		// 27 November 2025, 20:30 UTC: in Darwin, 9 h 30 min ahead, it is 06:00 of the next day.
+		const startS = Date.UTC(2025, 10, 27, 20, 30) / 1000;
+		const clock = { timeBase: 'utc', timeZone: 'Australia/Darwin', startS, startHour: 6 } as const;
+		const first = { startS, endS: startS + 9000, kind: 'stopped', meanSpeedKmh: null, why: '' } as const;
+		expect(plain(sayLegOf(first, 0, clock))).toBe('1: 28 Nov 2025, 06:00, stopped for 2 h 30 min');
+		const second = { ...first, startS: startS + 9000, endS: startS + 12_600 };
+		expect(plain(sayLegOf(second, 1, clock))).toBe('2: 28 Nov 2025, 08:30, stopped for 1 h');
+	});
+
+	it('says of a trace that knows the time of day alone when it was, once', () => {
+		const clock = { timeBase: 'time-of-day', timeZone: null, startS: 21_600, startHour: 6 } as const;
+		const first = { startS: 21_600, endS: 25_200, kind: 'stopped', meanSpeedKmh: null, why: '' } as const;
+		expect(plain(sayLegOf(first, 0, clock))).toBe('1: 06:00, stopped for 1 h');
 	});
 });
 

@@ -2,8 +2,8 @@ import { MOST_FIT_NAME, type FitState } from '../schemas/fits';
 import type { DoneCoefficientFit, Misfit } from '../thermal/fit';
 import type { TraceLeg } from '../thermal/traces';
 import { formatKelvin, formatNumber, formatWithUnit, THIN_SPACE } from './numbers';
-import { formatClockHour, formatHours } from './time';
-import { CHANNEL_WORDS } from './traces';
+import { formatHours } from './time';
+import { CHANNEL_WORDS, sayTraceTime, type TraceClock } from './traces';
 
 export const FIT_STATE_WORDS: Readonly<Record<FitState, string>> = {
 	running: 'being worked out',
@@ -80,9 +80,9 @@ const HOUR_S = 3600;
 export function sayLegOf(
 	{ startS, endS, kind, meanSpeedKmh }: TraceLeg,
 	at: number,
-	startHour: number | null
+	clock: TraceClock
 ): string {
-	const from = startHour === null ? '' : `${formatClockHour(startHour + startS / HOUR_S)}, `;
+	const from = clock.startHour === null ? '' : `${sayTraceTime(clock, startS)}, `;
 	const speed = meanSpeedKmh ? ` at ${formatWithUnit(meanSpeedKmh, 'km/h', 0)}` : '';
 	return `${at + 1}: ${from}${kind}${speed} for ${formatHours((endS - startS) / HOUR_S)}`;
 }

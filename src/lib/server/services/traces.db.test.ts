@@ -4,7 +4,7 @@ import { listKept } from '../../../../tests/support/mount-files';
 import { makeCrew, useTestDatabase, type Crew } from '../../../../tests/support/services';
 import { dayText, readAs, sendTrace } from '../../../../tests/support/traces';
 import type { SignedInPerson } from '$lib/schemas/people';
-import { AuditEntry, Job, Place, Trace } from '../db/models';
+import { AuditEntry, Trace } from '../db/models';
 import { clearFiles } from './clear-files';
 import { getDayPlan } from './day-plans';
 import { removeMount } from './mounts';
@@ -51,26 +51,6 @@ describe('a file of a logger', () => {
 		const kept = await listKept();
 		const contentId = await contentOf(sent.id);
 		expect([kept.includes(rawKeyOf(contentId)), kept.includes(binsKeyOf(contentId))]).toEqual([false, true]);
-	});
-
-	it('is taken to be in the time zone of the job’s place, whatever was said of another', async () => {
-		const first = await readDay();
-		await readAs(crew.engineer, await sendTrace(crew.engineer, mountId, dayText({ minutes: 30 })), {
-			mapping: { ...first.mapping, time: { ...first.mapping.time, timeZone: 'Asia/Tokyo' } as never }
-		});
-		const { placeId } = (await Job.findByPk(jobId))!;
-		await Place.update({ latitudeDeg: -12.4, longitudeDeg: 130.9 }, { where: { id: placeId! } });
-		const text = dayText({ minutes: 20 }).replace('Cell (°C)', 'Probe 9');
-		const { mapping, proposal } = await sendTrace(crew.engineer, mountId, text);
-		expect(mapping.time).toMatchObject({ timeZone: 'Australia/Darwin' });
-		const { name } = (await Place.findByPk(placeId!))!;
-		expect(proposal.notes).toContain(
-			`Australia/Darwin is the time zone nearest to the place of the job, ${name}.`
-		);
-		await Job.update({ placeId: null }, { where: { id: jobId } });
-		const nowhere = await sendTrace(crew.engineer, mountId, text.replace('Probe 9', 'Probe 10'));
-		expect(nowhere.mapping.time).toMatchObject({ timeZone: 'UTC' });
-		await Job.update({ placeId: placeId! }, { where: { id: jobId } });
 	});
 
 	it('that was sent in before says so, with the first one while that stands', async () => {

@@ -1,8 +1,8 @@
 import { Op, type Transaction } from 'sequelize';
 import type { SignedInPerson } from '$lib/schemas/people';
 import type { TraceMappingChange, TraceRow, TraceView } from '$lib/schemas/traces';
-import { checkMapping, MOST_TRACE_BYTES, type TraceMapping } from '$lib/thermal/traces';
-import { Job, Mount, Person, Place, Trace, TraceLogger } from '../db/models';
+import { checkMapping, MOST_TRACE_BYTES, zoneOf, type TraceMapping } from '$lib/thermal/traces';
+import { Job, Mount, Person, Trace, TraceLogger } from '../db/models';
 import { inTransaction } from '../db/transaction';
 import { AppError, notFound } from '../errors';
 import { allow } from '../policies';
@@ -13,9 +13,9 @@ import { recordBy } from './audit';
 import { describeSample, forAnotherFile, keepProposal, readSample, refuseTrace } from './describe-file';
 import { cleanFileName } from './file-names';
 import { findStandingMount } from './mounts';
-import { nearestZone } from './nearest-zone';
 import { saveVersioned } from './records';
 import { rawKeyOf } from './trace-bins';
+import { sayZone, withZone, zoneOfJob } from './trace-zones';
 
 /** A logger's file as it came, on the disk. */
 export interface IncomingTrace {
@@ -102,16 +102,6 @@ export async function prepareTrace(incoming: IncomingTrace): Promise<PreparedTra
 	return { name, bytes, sha256, contentId, sample };
 }
 
-/** The place of a job with the zone that is nearest to it; null where the job has no place. */
-async function zoneOfJob(
-	jobId: number,
-	transaction: Transaction
-): Promise<{ place: string; timeZone: string } | null> {
-	const job = await Job.findByPk(jobId, { transaction });
-	const place = job?.placeId ? await Place.findByPk(job.placeId, { transaction }) : null;
-	return place && { place: place.name, timeZone: nearestZone(place) };
-}
-
 const columnsOf = ({ time, columns }: TraceMapping): number[] => [
 	time.column,
 	...(time.kind === 'calendar' && time.clockColumn !== null ? [time.clockColumn] : []),
@@ -139,20 +129,19 @@ export async function keepTrace(
 		const mount = await findStandingMount(person, mountId, transaction);
 		await refuseTooMany(mountId, transaction);
 		const zone = await zoneOfJob(mount.jobId, transaction);
-		const proposal = describeSample(sample, zone?.timeZone ?? NO_ZONE_KNOWN);
-		if (zone && proposal.time.needsZone) {
-			proposal.notes.push(
-				`${zone.timeZone} is the time zone nearest to the place of the job, ${zone.place}.`
-			);
-		}
+		const proposal = describeSample(sample, NO_ZONE_KNOWN);
 		const { fingerprint } = proposal;
 		const logger = await TraceLogger.findOne({ where: { workshopId, fingerprint }, transaction });
 		const known = logger && Math.max(...columnsOf(logger.mapping)) <= proposal.columns.length ? logger : null;
+		const mapping = known ? forAnotherFile(known.mapping) : withZone(proposal.mapping, zone?.clear ?? '');
+		const inBox = zoneOf(mapping.time);
+		if (inBox !== undefined && (proposal.time.needsZone || inBox === ''))
+			proposal.notes.push(sayZone(inBox, known !== null, zone));
 		const trace = await Trace.create(
 			{
 				...{ workshopId, jobId: mount.jobId, mountId, ...prepared, fingerprint, state: 'described' },
 				proposal: keepProposal(proposal, sample, known?.updatedAt ?? null),
-				mapping: known ? forAnotherFile(known.mapping) : proposal.mapping,
+				mapping,
 				uploadedBy: person.id
 			},
 			{ transaction }

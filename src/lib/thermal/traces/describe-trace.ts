@@ -87,10 +87,9 @@ function proposeColumns(columns: readonly SampleColumn[], timeColumns: readonly 
 const toMapping = ({ number, channel, unit }: ColumnProposal): ColumnMapping[] =>
 	channel === null || unit === null ? [] : [{ column: number, channel, unit }];
 
-function makeNotes(time: TimeProposal, columns: readonly ColumnProposal[], timeZone: string): string[] {
+function makeNotes(time: TimeProposal, columns: readonly ColumnProposal[]): string[] {
 	const notes: string[] = [];
 	if (time.ambiguous) notes.push(time.why);
-	if (time.needsZone) notes.push(`The file says no time zone; ${timeZone} is taken.`);
 	const granted = columns.filter(({ channel, unitSaid }) => channel !== null && !unitSaid);
 	for (const { name, unit } of granted) notes.push(`The unit of “${name}” is not said; ${unit} is taken.`);
 	if (columns.every(({ channel }) => channel === null)) notes.push('No name of a column was recognised.');
@@ -139,6 +138,6 @@ export function describeTrace(firstBytes: Uint8Array, timeZone = 'UTC'): TracePr
 		headerLine: headerRows[0]?.line ?? null,
 		mapping: { version: 1, delimiter, decimal, time: time.mapping, columns: columns.flatMap(toMapping) },
 		fingerprint: loggerFingerprint(named.map(({ name }) => name)),
-		notes: makeNotes(time, columns, timeZone)
+		notes: makeNotes(time, columns)
 	};
 }

@@ -70,4 +70,4 @@ export {
 } from './trace-legs';
 export type { TraceReport } from './trace-report';
 export { TraceView, type TraceCurve } from './trace-view';
-export { isTimeZone } from './zone-clock';
+export { isTimeZone, ZoneClock } from './zone-clock';
