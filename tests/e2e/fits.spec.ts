@@ -1,7 +1,7 @@
 import { expect, test, type Page } from '@playwright/test';
 import type { ScenarioInput } from '../../src/lib/thermal';
 import { writeTrueDay } from '../support/fit-day';
-import { expectNoViolations, ONCE, openForm, signInAs } from './support';
+import { expectNoViolations, ONCE, openForm, signInAs, watchHydration } from './support';
 
 interface Row {
 	id: number;
@@ -94,6 +94,9 @@ test('an engineer fits a coefficient to a synthetic trace, reads what came of it
 	await expect(page.getByRole('button', { name: 'Begin a draft book' })).toHaveCount(0);
 	await expect(page).toHaveTitle(/synthetic/);
 	await expectNoViolations(page);
+	const mismatches = watchHydration(page);
+	await openForm(page, new URL(page.url()).pathname);
+	expect(mismatches).toEqual([]);
 	const refused = await page.request.post(
 		`/api/v1/fits/${/\d+$/.exec(new URL(page.url()).pathname)![0]}/book`,
 		{

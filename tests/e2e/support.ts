@@ -72,3 +72,12 @@ export async function expectNoViolations(page: Page): Promise<void> {
 	);
 	expect(found).toEqual([]);
 }
+
+/** Collects what the browser says where a page as it was sent is not the page that its script would have made. */
+export function watchHydration(page: Page): string[] {
+	const said: string[] = [];
+	page.on('console', (message) => {
+		if (/hydration/i.test(message.text())) said.push(`${page.url()}: ${message.text()}`);
+	});
+	return said;
+}

@@ -23,7 +23,10 @@ describe('a fit that is to be doubted', () => {
 	it('says what the model does not follow, and by how many times the noise', () => {
 		const misfit = { trace: 0, channel: 'cellC', residualK: 3.24, noiseK: 0.5 } as const;
 		expect(plain(sayMisfit(misfit, 'ridge.csv'))).toBe(
-			'The model does not follow ridge.csv: cells off by 3.2 K, 6 times what the readings stray by (0.5 K).'
+			'The model does not follow ridge.csv: cells off by 3.2 K (by the middle of its readings), 6 times what the readings stray by (0.5 K).'
+		);
+		expect(plain(sayMisfit({ ...misfit, measure: 'rms' }, 'ridge.csv'))).toContain(
+			'cells off by 3.2 K (root mean square of all its readings), 6 times'
 		);
 	});
 

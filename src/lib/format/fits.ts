@@ -54,9 +54,10 @@ export function sayNoBook({ stopped }: Pick<DoneCoefficientFit, 'stopped'>): str
 }
 
 /** Which channel of a trace the model does not follow, and by how much. */
-export function sayMisfit({ channel, residualK, noiseK }: Misfit, traceName: string): string {
+export function sayMisfit({ channel, residualK, measure, noiseK }: Misfit, traceName: string): string {
 	const times = formatNumber(residualK / noiseK, 0);
-	return `The model does not follow ${traceName}: ${CHANNEL_WORDS[channel].toLowerCase()} off by ${formatKelvin(residualK)}, ${times} times what the readings stray by (${formatKelvin(noiseK)}).`;
+	const by = measure === 'rms' ? 'root mean square of all its readings' : 'by the middle of its readings';
+	return `The model does not follow ${traceName}: ${CHANNEL_WORDS[channel].toLowerCase()} off by ${formatKelvin(residualK)} (${by}), ${times} times what the readings stray by (${formatKelvin(noiseK)}).`;
 }
 
 /** "2, 4" → [2, 4]; null for what is no list of whole numbers. */

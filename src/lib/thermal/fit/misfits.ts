@@ -6,8 +6,10 @@ import type { FitChannel } from './trace';
 export interface Misfit {
 	trace: number;
 	channel: FitChannel;
-	/** How far off the model is after the fit, as a standard deviation, K. */
+	/** How far off the model is after the fit, K. */
 	residualK: number;
+	/** Root mean square. Not there in older fits, which told of the middle of the readings. */
+	measure?: 'rms';
 	/** How far readings stray by themselves, K. */
 	noiseK: number;
 }
@@ -31,18 +33,25 @@ function findNoise({ measured }: Block): number {
 	return Math.max(ownK, LEAST_NOISE_K);
 }
 
+/** A model that is off throughout every drive is off, though the battery stood most of the day: the middle would hide it. */
+function rootMeanSquare(values: readonly number[]): number {
+	return values.length === 0 ? 0 : Math.hypot(...values) / Math.sqrt(values.length);
+}
+
 /**
  * The blocks whose residuals are many times what their readings stray by.
  *
- *     σ_e = 1.4826 median|e|,   σ_m = max(1.4826 median|Δ²T|/√6, 0.5),   told from σ_e ≥ 4 σ_m on
+ *     σ_e = √mean(e²),   σ_m = max(1.4826 median|Δ²T|/√6, 0.5),   told from σ_e ≥ 4 σ_m on
  *
  * @param residuals after the fit, block by block
  */
 export function findMisfits(blocks: readonly Block[], residuals: readonly Float64Array[]): Misfit[] {
 	return blocks.flatMap((block, at) => {
-		const residualK = spreadOf([...residuals[at]!].filter((value) => !Number.isNaN(value)));
+		const residualK = rootMeanSquare([...residuals[at]!].filter((value) => !Number.isNaN(value)));
 		const noiseK = findNoise(block);
 		const { trace, channel } = block;
-		return residualK >= MANY_TIMES * noiseK ? [{ trace, channel, residualK, noiseK }] : [];
+		return residualK >= MANY_TIMES * noiseK
+			? [{ trace, channel, residualK, measure: 'rms' as const, noiseK }]
+			: [];
 	});
 }
