@@ -1,5 +1,6 @@
 import { expect, test, type Page } from '@playwright/test';
 import type { ScenarioInput } from '../../src/lib/thermal';
+import { readPdf } from '../support/documents';
 import { writeTrueDay } from '../support/fit-day';
 import { expectNoViolations, ONCE, openForm, signInAs, watchHydration } from './support';
 
@@ -119,6 +120,17 @@ test('a fit to what a test measured becomes a draft book that leads back to it',
 	await page.getByRole('button', { name: 'Begin the fit' }).click();
 	await expect(page.getByRole('heading', { name: 'Estimates' })).toBeVisible({ timeout: 60_000 });
 	const fit = new URL(page.url()).pathname;
+	const mismatches = watchHydration(page);
+	await openForm(page, fit);
+	expect(mismatches).toEqual([]);
+	await expect(page.getByText(/, job \d+, mount [A-Z]: .*; 3 February 2026$/)).toBeVisible();
+	await expect(page.getByRole('row', { name: /^of these, cells/ })).toBeVisible();
+	await expect(page.getByText('An estimate, not a certificate.')).toBeVisible();
+	await expectNoViolations(page);
+	const { text } = await readPdf(await page.pdf({ format: 'A4' }));
+	const heading = text.split('\f').filter((sheet) => sheet.includes('What is left over'));
+	expect(heading).toHaveLength(1);
+	expect(heading[0]).toContain('hours from the start');
 	await page.getByLabel('What it is for').fill('Nothing but this test.');
 	await page.getByRole('button', { name: 'Begin a draft book with these values' }).click();
 	await expect(page.getByRole('heading', { level: 1, name: /Cells, one day$/ })).toBeVisible();

@@ -1,9 +1,9 @@
-import { MOST_FIT_NAME, type FitState } from '../schemas/fits';
+import { MOST_FIT_NAME, type FitState, type FitView } from '../schemas/fits';
 import type { DoneCoefficientFit, Misfit } from '../thermal/fit';
 import type { TraceLeg } from '../thermal/traces';
 import { formatKelvin, formatNumber, formatWithUnit, THIN_SPACE } from './numbers';
 import { formatHours } from './time';
-import { CHANNEL_WORDS, sayTraceTime, type TraceClock } from './traces';
+import { CHANNEL_WORDS, SYNTHETIC, sayTraceTime, type TraceClock } from './traces';
 
 export const FIT_STATE_WORDS: Readonly<Record<FitState, string>> = {
 	running: 'being worked out',
@@ -86,6 +86,17 @@ export function sayLegOf(
 	const from = clock.startHour === null ? '' : `${sayTraceTime(clock, startS)}, `;
 	const speed = meanSpeedKmh ? ` at ${formatWithUnit(meanSpeedKmh, 'km/h', 0)}` : '';
 	return `${at + 1}: ${from}${kind}${speed} for ${formatHours((endS - startS) / HOUR_S)}`;
+}
+
+/** Where and when a trace of a fit was measured, and what was kept back of it: "Farrow Drover 2019, job 3, mount A: behind the lamp; 3 February 2026". */
+export function sayFittedTrace({ mount, day, isSynthetic, heldOutLegs }: FitView['traces'][number]): string {
+	const parts = [
+		mount ? `${mount.vehicle}, job ${mount.jobNumber}, mount ${mount.letter}: ${mount.name}` : '',
+		mount ? day || 'a day that the file does not say' : '',
+		isSynthetic ? SYNTHETIC.toLowerCase() : '',
+		heldOutLegs.length > 0 ? `kept back: leg ${heldOutLegs.join(', ')}` : ''
+	];
+	return parts.filter(Boolean).join('; ');
 }
 
 /** What a fit is called unless somebody says otherwise: as many of its coefficients as there is room for. */

@@ -84,6 +84,18 @@ export const fitSchema = fitRowSchema.extend({
 			id: z.number().int(),
 			name: z.string().meta({ description: 'Empty where it is gone' }),
 			isSynthetic: z.boolean(),
+			mount: z
+				.object({
+					jobNumber: z.number().int(),
+					letter: z.string(),
+					name: z.string(),
+					vehicle: z.string()
+				})
+				.nullable()
+				.meta({ description: 'Where it was measured; null where the trace is gone' }),
+			day: z
+				.string()
+				.meta({ description: 'When it was measured, by its own clock; empty where the file does not say' }),
 			heldOutLegs: z.array(z.number().int())
 		})
 	),

@@ -1,6 +1,8 @@
 import type { FitRow, FitView } from '$lib/schemas/fits';
 import { SCENARIO_FIELDS } from '$lib/thermal/vehicle/scenario-fields';
-import type { Fit, Trace } from '../db/models';
+import { formatDate } from '$lib/format/dates';
+import { formatVehicle } from '$lib/format/vehicles';
+import type { Fit, Job, Mount, Trace, Vehicle } from '../db/models';
 import type { NameOf } from './books';
 
 export function presentFitRow(fit: Fit, nameOf: NameOf): FitRow {
@@ -16,20 +18,41 @@ export function presentFitRow(fit: Fit, nameOf: NameOf): FitRow {
 	};
 }
 
+/** A trace with where it was measured. */
+export interface FittedTrace {
+	trace: Trace;
+	mount: Mount;
+	job: Job;
+	vehicle: Vehicle;
+}
+
+/** The day on which a trace begins, by the clock of its zone; empty where the file does not say. */
+function dayOf({ span }: Trace): string {
+	if (span?.timeBase !== 'utc') return '';
+	return formatDate(new Date(span.startS * 1000), span.timeZone ?? 'UTC');
+}
+
+function presentTrace(found: FittedTrace | undefined) {
+	if (!found) return { name: '', isSynthetic: false, mount: null, day: '' };
+	const { trace, mount, job, vehicle } = found;
+	const { letter, name } = mount;
+	return {
+		...{ name: trace.name, isSynthetic: Boolean(trace.isSynthetic), day: dayOf(trace) },
+		mount: { letter, name, jobNumber: job.number, vehicle: formatVehicle(vehicle) }
+	};
+}
+
 /** A fit with what its traces are called now and what its coefficients mean. */
-export function presentFit(fit: Fit, traces: readonly Trace[], nameOf: NameOf): FitView {
+export function presentFit(fit: Fit, traces: readonly FittedTrace[], nameOf: NameOf): FitView {
 	const { inputs, bookId, failure, result } = fit;
 	const { loss, leaveOut, bookNumber } = inputs;
 	return {
 		...presentFitRow(fit, nameOf),
 		...{ loss, leaveOut, bookId, bookNumber },
-		traces: inputs.traces.map(({ traceId, heldOutLegs }) => {
-			const trace = traces.find(({ id }) => id === traceId);
-			return {
-				...{ id: traceId, heldOutLegs, name: trace?.name ?? '' },
-				isSynthetic: Boolean(trace?.isSynthetic)
-			};
-		}),
+		traces: inputs.traces.map(({ traceId, heldOutLegs }) => ({
+			...{ id: traceId, heldOutLegs },
+			...presentTrace(traces.find(({ trace }) => trace.id === traceId))
+		})),
 		coefficients: inputs.coefficients.map((coefficient) => {
 			const { group, key } = coefficient;
 			const field = SCENARIO_FIELDS.find((each) => each.group === group && each.key === key);

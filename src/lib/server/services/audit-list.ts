@@ -3,7 +3,7 @@ import { z } from 'zod';
 import type { AuditChoices, AuditPage, AuditQuery, AuditRow } from '$lib/schemas/audit';
 import type { SignedInPerson } from '$lib/schemas/people';
 import { connection } from '../db/connection';
-import { AuditEntry, Customer, Person } from '../db/models';
+import { AuditEntry, CoefficientBook, Customer, Person } from '../db/models';
 import { allow } from '../policies';
 import { actionsSaying, presentAuditEntry, sayAction } from '../presenters/audit';
 import { readCursor, writeCursor } from './cursors';
@@ -20,6 +20,17 @@ function namedBy(table: 'people' | 'customers', workshopId: number, pattern: str
 	return { [Op.in]: literal(`(${named})`) };
 }
 
+/** Books by the number that the workshop knows them by; everything else by its own. */
+function numberedBy(workshopId: number, word: string): WhereOptions[] {
+	if (!/^\d{1,9}$/.test(word)) return [];
+	const number = Number(word);
+	const book = `SELECT id FROM coefficient_books WHERE workshop_id = ${Number(workshopId)} AND number = ${number}`;
+	return [
+		{ subjectType: { [Op.ne]: 'book' }, subjectId: number },
+		{ subjectType: 'book', subjectId: { [Op.in]: literal(`(${book})`) } }
+	];
+}
+
 /** Every word stands in what was recorded, in the action, in a name of whom it was by or about, or is a number. */
 function matchAll(workshopId: number, words: string): WhereOptions[] {
 	return words
@@ -31,7 +42,7 @@ function matchAll(workshopId: number, words: string): WhereOptions[] {
 			const like = { [Op.like]: pattern };
 			const people = namedBy('people', workshopId, pattern);
 			const customers = namedBy('customers', workshopId, pattern);
-			const number = /^\d{1,15}$/.test(word) ? [{ subjectId: Number(word) }] : [];
+			const number = numberedBy(workshopId, word);
 			return {
 				[Op.or]: [
 					whereColumn(col('detail'), like),
@@ -66,6 +77,12 @@ const subjectsOf = (entries: readonly AuditEntry[], type: string): number[] =>
 const toNames = (rows: readonly { id: number; name: string }[]): Map<number, string> =>
 	new Map(rows.map(({ id, name }) => [id, name]));
 
+async function numbersOf(workshopId: number, ids: number[]): Promise<Map<number, number>> {
+	const where = { id: [...new Set(ids)], workshopId };
+	const books = await CoefficientBook.findAll({ where, attributes: ['id', 'number'] });
+	return new Map(books.map(({ id, number }) => [id, number]));
+}
+
 async function presentAll(workshopId: number, entries: readonly AuditEntry[]): Promise<AuditRow[]> {
 	const people = [...entries.flatMap(({ personId }) => personId ?? []), ...subjectsOf(entries, 'person')];
 	const ask = (ids: number[]) => ({
@@ -74,7 +91,8 @@ async function presentAll(workshopId: number, entries: readonly AuditEntry[]): P
 	});
 	const names = {
 		person: toNames(await Person.findAll(ask(people))),
-		customer: toNames(await Customer.findAll(ask(subjectsOf(entries, 'customer'))))
+		customer: toNames(await Customer.findAll(ask(subjectsOf(entries, 'customer')))),
+		book: await numbersOf(workshopId, subjectsOf(entries, 'book'))
 	};
 	return entries.map((entry) => presentAuditEntry(entry, names));
 }

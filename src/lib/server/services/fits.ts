@@ -5,12 +5,12 @@ import type { TraceRow } from '$lib/schemas/traces';
 import { ENGINE_VERSION } from '$lib/thermal';
 import { fitCoefficients, type CoefficientFit, type CoefficientFitInput } from '$lib/thermal/fit';
 import type { TraceLeg } from '$lib/thermal/traces';
-import { CoefficientBook, Fit, Person, Trace } from '../db/models';
+import { CoefficientBook, Fit, Job, Mount, Person, Trace, Vehicle } from '../db/models';
 import { inTransaction, outsideTransaction } from '../db/transaction';
 import { AppError, notFound } from '../errors';
 import { allow } from '../policies';
 import type { NameOf } from '../presenters/books';
-import { presentFit, presentFitRow } from '../presenters/fits';
+import { presentFit, presentFitRow, type FittedTrace } from '../presenters/fits';
 import { record, recordBy } from './audit';
 import { coefficientsOf, withCoefficients } from './books';
 import {
@@ -33,12 +33,23 @@ async function namesOf(fits: readonly Fit[]): Promise<NameOf> {
 	return (id) => names.get(id ?? 0) ?? '';
 }
 
-async function showFit(fit: Fit): Promise<FitView> {
-	const ids = fit.inputs.traces.map(({ traceId }) => traceId);
+/** The traces that stand, with where they were measured. */
+async function findFitted(ids: readonly number[]): Promise<FittedTrace[]> {
 	const traces = await Trace.findAll({
-		where: { id: ids, removedAt: null },
-		attributes: ['id', 'name', 'isSynthetic']
+		where: { id: [...ids], removedAt: null },
+		attributes: ['id', 'name', 'isSynthetic', 'span', 'mountId', 'jobId']
 	});
+	return Promise.all(
+		traces.map(async (trace) => {
+			const job = (await Job.findByPk(trace.jobId))!;
+			const [mount, vehicle] = [await Mount.findByPk(trace.mountId), await Vehicle.findByPk(job.vehicleId)];
+			return { trace, job, mount: mount!, vehicle: vehicle! };
+		})
+	);
+}
+
+async function showFit(fit: Fit): Promise<FitView> {
+	const traces = await findFitted(fit.inputs.traces.map(({ traceId }) => traceId));
 	return presentFit(fit, traces, await namesOf([fit]));
 }
 

@@ -17,6 +17,7 @@ export const load: PageServerLoad = async (event) => {
 	const fit = await orPageError(getFit(person, fitId, sayTrouble));
 	return {
 		fit,
+		shopName: person.workshopName,
 		mayDraft: mayDo(person, 'books.write'),
 		draftForm: await loadForm(fittedDraftSchema, { name: fit.name })
 	};
