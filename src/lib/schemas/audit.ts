@@ -44,6 +44,8 @@ export const auditRowSchema = z.object({
 	did: z.string(),
 	subject: z.string(),
 	subjectId: z.number().int(),
+	/** What the workshop knows it by: of a book and a job its own number. */
+	subjectNumber: z.number().int(),
 	/** Of a person or a customer. */
 	subjectName: z.string().nullable(),
 	/** The page of the subject, where it has one. */

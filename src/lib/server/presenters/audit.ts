@@ -139,6 +139,8 @@ type Names = ReadonlyMap<number, string>;
 export interface AuditNames {
 	person: Names;
 	customer: Names;
+	/** The number that a subject has for the people of the workshop. */
+	numberOf: (type: string, id: number) => number;
 }
 
 const nameOfSubject = (type: string, id: number, names: AuditNames): string | null =>
@@ -152,6 +154,7 @@ export function presentAuditEntry(entry: AuditEntry, names: AuditNames): AuditRo
 		who: personId === null ? NOBODY : (names.person.get(personId) ?? `person ${personId}`),
 		did: sayAction(action),
 		subject: subjectType,
+		subjectNumber: names.numberOf(subjectType, subjectId),
 		subjectName: nameOfSubject(subjectType, subjectId, names),
 		href: PAGES[subjectType]?.(subjectId) ?? null,
 		detail: Object.entries(detail).map(([key, value]) => ({ label: sayKey(key), value: sayValue(value) }))

@@ -11,7 +11,7 @@ const sayDetail = ({ detail }: AuditRow): string =>
 
 const rowOf = (row: AuditRow): (string | number)[] => [
 	...[row.sequence, row.at, safeText(row.who), safeText(row.action), safeText(row.did)],
-	...[safeText(row.subject), row.subjectId, safeText(sayDetail(row))]
+	...[safeText(row.subject), row.subjectNumber, safeText(sayDetail(row))]
 ];
 
 /** The trail as a table, written while it is read. */

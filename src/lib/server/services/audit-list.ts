@@ -3,9 +3,10 @@ import { z } from 'zod';
 import type { AuditChoices, AuditPage, AuditQuery, AuditRow } from '$lib/schemas/audit';
 import type { SignedInPerson } from '$lib/schemas/people';
 import { connection } from '../db/connection';
-import { AuditEntry, CoefficientBook, Customer, Person } from '../db/models';
+import { AuditEntry, Customer, Person } from '../db/models';
 import { allow } from '../policies';
 import { actionsSaying, presentAuditEntry, sayAction } from '../presenters/audit';
+import { findNumbers, numberOf, subjectsNumbered, takeCounted } from './audit-numbers';
 import { readCursor, writeCursor } from './cursors';
 import { addDays } from './days';
 
@@ -20,29 +21,17 @@ function namedBy(table: 'people' | 'customers', workshopId: number, pattern: str
 	return { [Op.in]: literal(`(${named})`) };
 }
 
-/** Books by the number that the workshop knows them by; everything else by its own. */
-function numberedBy(workshopId: number, word: string): WhereOptions[] {
-	if (!/^\d{1,9}$/.test(word)) return [];
-	const number = Number(word);
-	const book = `SELECT id FROM coefficient_books WHERE workshop_id = ${Number(workshopId)} AND number = ${number}`;
-	return [
-		{ subjectType: { [Op.ne]: 'book' }, subjectId: number },
-		{ subjectType: 'book', subjectId: { [Op.in]: literal(`(${book})`) } }
-	];
-}
-
 /** Every word stands in what was recorded, in the action, in a name of whom it was by or about, or is a number. */
 function matchAll(workshopId: number, words: string): WhereOptions[] {
-	return words
-		.split(/\s+/)
-		.filter(Boolean)
-		.slice(0, MOST_WORDS)
-		.map((word) => {
+	const { pairs, rest } = takeCounted(workshopId, words.split(/\s+/).filter(Boolean).slice(0, MOST_WORDS));
+	return [
+		...pairs,
+		...rest.map((word) => {
 			const pattern = `%${escapePattern(word)}%`;
 			const like = { [Op.like]: pattern };
 			const people = namedBy('people', workshopId, pattern);
 			const customers = namedBy('customers', workshopId, pattern);
-			const number = numberedBy(workshopId, word);
+			const number = subjectsNumbered(workshopId, word);
 			return {
 				[Op.or]: [
 					whereColumn(col('detail'), like),
@@ -52,7 +41,8 @@ function matchAll(workshopId: number, words: string): WhereOptions[] {
 					{ subjectType: 'customer', subjectId: customers }
 				]
 			};
-		});
+		})
+	];
 }
 
 function filterOf(workshopId: number, query: AuditQuery): WhereOptions {
@@ -77,22 +67,17 @@ const subjectsOf = (entries: readonly AuditEntry[], type: string): number[] =>
 const toNames = (rows: readonly { id: number; name: string }[]): Map<number, string> =>
 	new Map(rows.map(({ id, name }) => [id, name]));
 
-async function numbersOf(workshopId: number, ids: number[]): Promise<Map<number, number>> {
-	const where = { id: [...new Set(ids)], workshopId };
-	const books = await CoefficientBook.findAll({ where, attributes: ['id', 'number'] });
-	return new Map(books.map(({ id, number }) => [id, number]));
-}
-
 async function presentAll(workshopId: number, entries: readonly AuditEntry[]): Promise<AuditRow[]> {
 	const people = [...entries.flatMap(({ personId }) => personId ?? []), ...subjectsOf(entries, 'person')];
 	const ask = (ids: number[]) => ({
 		where: { id: [...new Set(ids)], workshopId },
 		attributes: ['id', 'name']
 	});
+	const numbers = await findNumbers(workshopId, entries);
 	const names = {
 		person: toNames(await Person.findAll(ask(people))),
 		customer: toNames(await Customer.findAll(ask(subjectsOf(entries, 'customer')))),
-		book: await numbersOf(workshopId, subjectsOf(entries, 'book'))
+		numberOf: (type: string, id: number) => numberOf(type, id, numbers)
 	};
 	return entries.map((entry) => presentAuditEntry(entry, names));
 }

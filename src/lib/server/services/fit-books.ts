@@ -82,7 +82,7 @@ export async function draftFittedBook(
 			await Coefficient.update({ ...fitted, fitId }, { where, transaction });
 		}
 		const subject = { type: 'fit', id: fitId };
-		await recordBy(person, 'fit.drafted', subject, transaction, { bookId: book.id, number: book.number });
+		await recordBy(person, 'fit.drafted', subject, transaction, { book: book.number });
 		return getBook(person, book.id);
 	});
 }

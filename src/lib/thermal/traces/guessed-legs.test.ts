@@ -28,4 +28,21 @@ describe('legs from temperatures alone', () => {
 			{ kind: 'stopped', why: 'no charge, and no temperature tells' }
 		]);
 	});
+
+	it('are the same where the bay rests a few kelvin above the outside air all night', () => {
+		const night = Array.from({ length: 480 }, () => 20);
+		const trace = minutesTrace({
+			ambientC: [...night, ...airC],
+			bayAirC: [...night.map((air, at) => air + 5 + 0.3 * noiseAt(at)), ...bayAirC.map((bay) => bay + 5)]
+		});
+		const legs = proposeLegs(trace);
+		expect(legs.map(({ kind }) => kind)).toEqual(['stopped', 'driving', 'stopped']);
+		expect(Math.abs(legs[0]!.endS / 60 - 570)).toBeLessThanOrEqual(5);
+	});
+
+	it('are one drive where the bay warms once and stays hot to the end', () => {
+		const hot = airC.map((air, at) => air + Math.min(18, at / 2) + 0.3 * noiseAt(at));
+		const kinds = proposeLegs(minutesTrace({ ambientC: airC, bayAirC: hot })).map(({ kind }) => kind);
+		expect(kinds).toEqual(['driving']);
+	});
 });

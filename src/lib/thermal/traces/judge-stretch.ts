@@ -1,3 +1,4 @@
+import { sampleQuantile } from '../statistics';
 import type { TraceChannel } from './channels';
 import type { Evidence } from './leg-evidence';
 import type { LegState } from './trace-legs';
@@ -18,6 +19,16 @@ const CHANGE_SHARE = 0.1;
 /** Above the outside air: less than this the sun alone makes, in all and where it stays; engineering judgement. */
 const LEAST_EXCESS_K = 8;
 const WARM_EXCESS_K = 4;
+
+/** So cool it is for a tenth of a day that was not driven through. */
+const REST_QUANTILE = 0.1;
+
+/**
+ * What stands between a bay and the outside air while the vehicle rests, K: two sensors are not one, and a wall holds warmth. No
+ * more than the sun alone makes, so that a day of nothing but driving is not taken for rest.
+ */
+const findRest = (values: Float64Array): number =>
+	Math.min(Math.max(sampleQuantile([...values], REST_QUANTILE), 0), LEAST_EXCESS_K);
 
 type Judge = (evidence: Evidence, from: number, to: number) => Judgement | null;
 
@@ -49,7 +60,7 @@ function judgeHeat(name: string): Judge {
 			return { kind: 'driving', why: `a guess: ${name} warms by ${show(riseK)} K${over}` };
 		if (riseK < -CHANGE_SHARE * range)
 			return { kind: 'stopped', why: `a guess: ${name} cools by ${show(-riseK)} K${over}` };
-		const isHot = meanOf(part) > (isExcess ? WARM_EXCESS_K : low + HOT_SHARE * range);
+		const isHot = meanOf(part) > (isExcess ? findRest(values) + WARM_EXCESS_K : low + HOT_SHARE * range);
 		return {
 			kind: isHot ? 'driving' : 'stopped',
 			why: `a guess: ${name} stays ${isHot ? 'hot' : 'cool'}${over}`
