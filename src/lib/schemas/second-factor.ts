@@ -1,4 +1,8 @@
 import { z } from 'zod';
+import type { Role } from './people';
+
+/** Whom a workshop can ask for a second factor. */
+export const FACTOR_ROLES: readonly Role[] = ['engineer', 'manager'];
 
 export const secondFactorCodeSchema = z.object({
 	code: z
@@ -22,4 +26,11 @@ export interface SecondFactorView {
 	setUp: SecondFactorSetUp | null;
 	/** The workshop asks managers and engineers for it. */
 	isRequired: boolean;
+}
+
+/** Whom a rule that asks for a second factor would reach: those named can open nothing else until they have one. */
+export interface FactorReach {
+	isOwnOn: boolean;
+	/** Managers and engineers who have none, but for who asks. */
+	others: { name: string; role: Role }[];
 }

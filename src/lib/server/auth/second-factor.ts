@@ -1,6 +1,7 @@
 import { randomInt } from 'node:crypto';
 import { Op, QueryTypes, type Transaction } from 'sequelize';
 import type { SignedInPerson } from '$lib/schemas/people';
+import { FACTOR_ROLES } from '$lib/schemas/second-factor';
 import { connection } from '../db/connection';
 import { RecoveryCode, SecondFactor } from '../db/models';
 import { inTransaction } from '../db/transaction';
@@ -22,7 +23,7 @@ export async function hasSecondFactor(personId: number): Promise<boolean> {
 
 /** Whether the workshop asks for a second factor that this person has not set up: nothing else goes before it. */
 export async function mustSetUpFactor({ id, workshopId, role }: SignedInPerson): Promise<boolean> {
-	if (role !== 'manager' && role !== 'engineer') return false;
+	if (!FACTOR_ROLES.includes(role)) return false;
 	const [row] = await connection().query<{ isMissing: number }>(
 		`SELECT w.requires_second_factor AND NOT EXISTS (
 			SELECT 1 FROM second_factors f WHERE f.person_id = :id AND f.confirmed_at IS NOT NULL

@@ -1,16 +1,25 @@
 import { generate } from 'otplib';
 import { describe, expect, it } from 'vitest';
 import { makeCrew, useTestDatabase } from '../../../../tests/support/services';
-import { hasSecondFactor, mustSetUpFactor, passSecondFactor } from '../auth/second-factor';
+import { dropSecondFactor, hasSecondFactor, mustSetUpFactor, passSecondFactor } from '../auth/second-factor';
 import { passSecondStep } from '../auth/second-step';
 import { openSession, personOfSession } from '../auth/sessions';
-import { AuditEntry, OutgoingMail, RecoveryCode, SecondFactor, SignInStep, Workshop } from '../db/models';
+import {
+	AuditEntry,
+	OutgoingMail,
+	Person,
+	RecoveryCode,
+	SecondFactor,
+	SignInStep,
+	Workshop
+} from '../db/models';
 import { newToken, tokenHash } from '../hash';
 import { lockText, unlockText } from '../secret-box';
 import type { SignedInPerson } from '$lib/schemas/people';
 import {
 	beginSetUp,
 	confirmSetUp,
+	findFactorReach,
 	getSecondFactor,
 	renewRecoveryCodes,
 	resetFactor,
@@ -146,6 +155,24 @@ describe('a workshop that asks for one', () => {
 		expect(await mustSetUpFactor(engineer)).toBe(true);
 		await turnOn(engineer);
 		expect(await asked()).toEqual([true, false, false, false]);
+	});
+});
+
+describe('whom a rule would reach', () => {
+	it('is every other manager and engineer without one, and the reader is told of their own', async () => {
+		const { engineer, manager, installer } = await makeCrew();
+		const them = { name: engineer.name, role: 'engineer' };
+		expect(await findFactorReach(manager)).toEqual({ isOwnOn: false, others: [them] });
+		await beginSetUp(manager);
+		expect((await findFactorReach(manager)).isOwnOn).toBe(false);
+		await turnOn(manager);
+		expect(await findFactorReach(manager)).toEqual({ isOwnOn: true, others: [them] });
+		await turnOn(engineer);
+		expect((await findFactorReach(manager)).others).toEqual([]);
+		await dropSecondFactor(engineer.id);
+		await Person.update({ active: false }, { where: { id: engineer.id } });
+		expect((await findFactorReach(manager)).others).toEqual([]);
+		await expect(findFactorReach(installer)).rejects.toMatchObject({ code: 'not_allowed' });
 	});
 });
 

@@ -1,6 +1,12 @@
 import { create as drawQr } from 'qrcode';
+import { Op } from 'sequelize';
 import type { PersonRow, SignedInPerson } from '$lib/schemas/people';
-import type { SecondFactorSetUp, SecondFactorView } from '$lib/schemas/second-factor';
+import {
+	FACTOR_ROLES,
+	type FactorReach,
+	type SecondFactorSetUp,
+	type SecondFactorView
+} from '$lib/schemas/second-factor';
 import {
 	dropSecondFactor,
 	keyPurpose,
@@ -11,7 +17,7 @@ import {
 import { endSessions } from '../auth/sessions';
 import { giveBack, spend } from '../auth/rate-limit';
 import { keyAddress, newKey } from '../auth/totp';
-import { RecoveryCode, SecondFactor, Workshop } from '../db/models';
+import { Person, RecoveryCode, SecondFactor, Workshop } from '../db/models';
 import { inTransaction } from '../db/transaction';
 import { env } from '../env';
 import { AppError } from '../errors';
@@ -53,7 +59,27 @@ export async function getSecondFactor(person: SignedInPerson): Promise<SecondFac
 		since: confirmedAt?.toISOString() ?? null,
 		codesLeft: confirmedAt ? await RecoveryCode.count({ where: { personId: person.id } }) : 0,
 		setUp: factor && !confirmedAt ? presentSetUp(factor, person.email) : null,
-		isRequired: person.role !== 'installer' && (workshop?.requiresSecondFactor ?? false)
+		isRequired: FACTOR_ROLES.includes(person.role) && (workshop?.requiresSecondFactor ?? false)
+	};
+}
+
+/** Who of those that the workshop can ask for a second factor has none, by name. */
+export async function findFactorReach(manager: SignedInPerson): Promise<FactorReach> {
+	const { workshopId, id } = allow(manager, 'shop.write');
+	const people = await Person.findAll({
+		where: { workshopId, active: true, role: [...FACTOR_ROLES] },
+		order: [
+			['name', 'ASC'],
+			['id', 'ASC']
+		]
+	});
+	const where = { personId: people.map((each) => each.id), confirmedAt: { [Op.not]: null } };
+	const having = new Set((await SecondFactor.findAll({ where })).map(({ personId }) => personId));
+	return {
+		isOwnOn: having.has(id),
+		others: people
+			.filter((each) => each.id !== id && !having.has(each.id))
+			.map(({ name, role }) => ({ name, role }))
 	};
 }
 

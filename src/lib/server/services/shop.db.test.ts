@@ -5,7 +5,7 @@ import { post } from '../../../../tests/support/letters';
 import { makeCrew, useTestDatabase } from '../../../../tests/support/services';
 import { CAUTIONS } from '$lib/format/cautions';
 import { connection } from '../db/connection';
-import { AuditEntry, Customer, OutgoingMail, Recommendation, WorkshopLogo } from '../db/models';
+import { AuditEntry, Customer, OutgoingMail, Recommendation, SecondFactor, WorkshopLogo } from '../db/models';
 import { listPictures } from '../mail/letterhead';
 import { getCautionText, listIssuedCautions, saveCautionText } from './caution-texts';
 import { getRecommendationDocument } from './recommendations';
@@ -35,8 +35,14 @@ describe('the details of the shop', () => {
 		expect(await AuditEntry.count({ where: { workshopId, action: 'shop.changed' } })).toBe(1);
 	});
 
-	it('hold the rule of the second factor', async () => {
+	it('hold the rule of the second factor, which nobody sets who has none', async () => {
 		const { manager } = await makeCrew();
+		await expect(saveFactorRule(manager, { requiresSecondFactor: true, version: 0 })).rejects.toMatchObject({
+			code: 'conflict',
+			message: 'Set up your own second factor before you ask others for theirs.'
+		});
+		expect(await getShop(manager)).toMatchObject({ requiresSecondFactor: false, version: 0 });
+		await SecondFactor.create({ personId: manager.id, lockedKey: 'locked', confirmedAt: new Date() });
 		const { version } = await saveFactorRule(manager, { requiresSecondFactor: true, version: 0 });
 		expect(await saveFactorRule(manager, { requiresSecondFactor: false, version })).toMatchObject({
 			requiresSecondFactor: false

@@ -1,8 +1,9 @@
 import type { FactorRule, LogoView, ShopDetails, ShopView, WorkshopHead } from '$lib/schemas/shop';
 import type { SignedInPerson } from '$lib/schemas/people';
+import { hasSecondFactor } from '../auth/second-factor';
 import { Workshop, WorkshopLogo } from '../db/models';
 import { inTransaction } from '../db/transaction';
-import { notFound } from '../errors';
+import { AppError, notFound } from '../errors';
 import { sha256 } from '../hash';
 import { allow } from '../policies';
 import { recordBy } from './audit';
@@ -75,10 +76,19 @@ export function saveShop(
 	});
 }
 
-/** Whether managers and engineers must have a second factor; from their next request on. */
-export function saveFactorRule(person: SignedInPerson, rule: FactorRule): Promise<ShopView> {
+/**
+ * Whether managers and engineers must have a second factor; from their next request on. Who asks others for it has one:
+ * else the page with the way back would be shut to them, too.
+ */
+export async function saveFactorRule(person: SignedInPerson, rule: FactorRule): Promise<ShopView> {
+	allow(person, 'shop.write');
 	const { requiresSecondFactor, version } = rule;
-	return changeShop(person, 'shop.second-factor-rule', version, { requiresSecondFactor });
+	return inTransaction(async () => {
+		if (requiresSecondFactor && !(await hasSecondFactor(person.id))) {
+			throw new AppError('conflict', 'Set up your own second factor before you ask others for theirs.');
+		}
+		return changeShop(person, 'shop.second-factor-rule', version, { requiresSecondFactor });
+	});
 }
 
 /** Takes a logo, made anew from what was sent. Pages that were sent before keep theirs. */

@@ -9,6 +9,7 @@ import { loadForm } from '$lib/server/http/forms';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { validate } from '$lib/server/http/validate';
 import { makeLogo } from '$lib/server/services/logo-picture';
+import { findFactorReach } from '$lib/server/services/second-factor';
 import { getShop, removeLogo, saveFactorRule, saveLogo, saveShop } from '$lib/server/services/shop';
 import { countWaitingErasures } from '$lib/server/services/waiting-erasures';
 import type { Actions, PageServerLoad } from './$types';
@@ -20,10 +21,11 @@ const toShopForm = ({ name, address, phone, email, web, businessNumber, version 
 
 export const load: PageServerLoad = async (event) => {
 	const person = guard(event, 'shop.write');
-	const shop = await orPageError(getShop(person));
-	const waiting = await orPageError(countWaitingErasures(person));
+	const [shop, waiting, reach] = await orPageError(
+		Promise.all([getShop(person), countWaitingErasures(person), findFactorReach(person)])
+	);
 	return {
-		...{ shop, waiting, done: event.url.searchParams.get('done') },
+		...{ shop, waiting, reach, done: event.url.searchParams.get('done') },
 		form: await loadForm(shopFormSchema, toShopForm(shop))
 	};
 };
