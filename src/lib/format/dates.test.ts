@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { formatDate, formatShortDate } from './dates';
+import { formatDate, formatShortDate, sayMonth } from './dates';
 
 describe('a day without a time', () => {
 	it.each(['America/Los_Angeles', 'Australia/Darwin', 'UTC'])('is that day for a reader in %s', (zone) => {
@@ -10,5 +10,11 @@ describe('a day without a time', () => {
 	it('is another day there when it is a moment', () => {
 		expect(formatDate('2026-12-02T02:00:00Z', 'America/Los_Angeles')).toBe('1 December 2026');
 		expect(formatDate('2026-12-02T20:00:00Z', 'Australia/Darwin')).toBe('3 December 2026');
+	});
+});
+
+describe('a month', () => {
+	it('is said shortly', () => {
+		expect(sayMonth('2026-03')).toBe('Mar 2026');
 	});
 });

@@ -1,3 +1,5 @@
+import { MONTH_KEYS } from '../schemas/months';
+
 /** Dates in British form, in the workshop's own time zone. */
 const style = (options: Intl.DateTimeFormatOptions, timeZone?: string): Intl.DateTimeFormat =>
 	new Intl.DateTimeFormat('en-GB', { ...options, ...(timeZone ? { timeZone } : {}) });
@@ -26,6 +28,10 @@ export const formatDate = (moment: Date | string | number, timeZone?: string): s
 /** "4 Mar 2026", for tables. */
 export const formatShortDate = (moment: Date | string | number, timeZone?: string): string =>
 	style({ day: 'numeric', month: 'short', year: 'numeric' }, zoneOf(moment, timeZone)).format(toDate(moment));
+
+/** "Mar 2026", of a month such as "2026-03". */
+export const sayMonth = (month: string): string =>
+	`${MONTH_KEYS[Number(month.slice(5, 7)) - 1]!} ${month.slice(0, 4)}`;
 
 /** "14:02". */
 export const formatTimeOfDay = (moment: Date | string | number, timeZone?: string): string =>

@@ -3,6 +3,7 @@ import {
 	countVerdict,
 	formatDays,
 	formatRatioRange,
+	listToSeeTo,
 	sayApart,
 	sayDarkDays,
 	sayRatio,
@@ -43,6 +44,16 @@ describe('a ratio of reported to predicted', () => {
 	it('counts verdicts as one speaks', () => {
 		expect(countVerdict('cuts-out', 1)).toBe('1 cuts out');
 		expect(countVerdict('rides-it-out', 3)).toBe('3 ride it out');
+	});
+
+	it('lists what is to be seen to, and leaves out what is not', () => {
+		expect(listToSeeTo({ overdue: 2, overrides: 1, sheetsWaiting: 3 })).toEqual([
+			'2 overdue',
+			'1 override',
+			'3 sheets not acknowledged'
+		]);
+		expect(listToSeeTo({ overdue: 0, overrides: 0, sheetsWaiting: 1 })).toEqual(['1 sheet not acknowledged']);
+		expect(listToSeeTo({ overdue: 0, overrides: 0, sheetsWaiting: 0 })).toEqual([]);
 	});
 
 	it('counts few days with a decimal', () => {

@@ -76,6 +76,17 @@ export function sayApart({ chance, reportedElsewhere, notHeatDays }: ReviewFigur
 	];
 }
 
+/** What somebody should look at, each shortly: "2 overdue", "1 override", "3 sheets not acknowledged". */
+export const listToSeeTo = ({
+	overdue,
+	overrides,
+	sheetsWaiting
+}: Pick<ReviewFigures, 'overdue' | 'overrides' | 'sheetsWaiting'>): string[] => [
+	...(overdue > 0 ? [`${overdue} overdue`] : []),
+	...(overrides > 0 ? [plural(overrides, 'override', 'overrides')] : []),
+	...(sheetsWaiting > 0 ? [`${plural(sheetsWaiting, 'sheet', 'sheets')} not acknowledged`] : [])
+];
+
 export const LIST_TITLES: Record<ReviewList | 'all', string> = {
 	all: 'Installations',
 	overdue: 'Overdue follow-ups',

@@ -1,6 +1,5 @@
 import { describe, expect, it } from 'vitest';
 import { renderTrendsSvg } from './render-trends';
-import { sayMonth } from './trends-option';
 
 const months = Array.from({ length: 24 }, (_, at) => ({
 	month: `${2025 + Math.floor(at / 12)}-${String((at % 12) + 1).padStart(2, '0')}`,
@@ -16,9 +15,5 @@ describe('the picture of the months', () => {
 		expect(svg).not.toMatch(/style=|<style/);
 		expect(svg).toContain('2025');
 		expect(svg).toContain('2026');
-	});
-
-	it('says a month shortly', () => {
-		expect(sayMonth('2026-03')).toBe('Mar 2026');
 	});
 });

@@ -12,10 +12,6 @@ export type TrendsSize = keyof typeof TRENDS_SIZES;
 /** Letters of so many months have room side by side; where they have not, every third stands. */
 const TICK_EVERY: Record<TrendsSize, number> = { phone: 3, desk: 1 };
 
-/** "Mar 2026"; on the axis the year stands with its first month alone. */
-export const sayMonth = (month: string): string =>
-	`${MONTH_KEYS[Number(month.slice(5, 7)) - 1]!} ${month.slice(0, 4)}`;
-
 const LEFT: Record<TrendsSize, number> = { phone: 28, desk: 48 };
 
 /** Every so many months, counted from January, so that the years stand. */

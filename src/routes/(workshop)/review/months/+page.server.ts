@@ -2,6 +2,7 @@ import { renderTrendsSvg } from '$lib/components/charts/review-trends/render-tre
 import { reviewScopeSchema } from '$lib/schemas/review';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { readPageQuery } from '$lib/server/http/page-query';
+import { nameScope } from '$lib/server/services/review/name-scope';
 import { reviewTrends } from '$lib/server/services/review/review-trends';
 import { listZones } from '$lib/server/services/review/review-zones';
 import type { PageServerLoad } from './$types';
@@ -12,13 +13,14 @@ const LABEL =
 export const load: PageServerLoad = async (event) => {
 	const person = guard(event, 'review.read');
 	const { query, leftOut } = readPageQuery(reviewScopeSchema, event.url);
-	const [trends, zones] = await Promise.all([
+	const [trends, zones, names] = await Promise.all([
 		orPageError(reviewTrends(person, query)),
-		orPageError(listZones(person, query.kind))
+		orPageError(listZones(person, query.kind)),
+		orPageError(nameScope(person, query))
 	]);
 	const picture = {
 		phone: renderTrendsSvg(trends, LABEL, 'phone'),
 		desk: renderTrendsSvg(trends, LABEL, 'desk')
 	};
-	return { query, leftOut, trends, ...zones, picture };
+	return { query, leftOut, trends, ...zones, names, picture };
 };
