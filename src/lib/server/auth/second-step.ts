@@ -31,7 +31,7 @@ export async function beginSecondStep(cookies: Cookies, personId: number): Promi
 export const readStepToken = (cookies: Cookies): string | undefined => cookies.get(cookieName());
 
 async function noteRecovery({ id, workshopId }: Person): Promise<void> {
-	const entry = { workshopId, personId: id, action: 'second-factor.recovery-code-used' };
+	const entry = { workshopId, personId: id, action: 'second-factor.recovery-code-used' } as const;
 	await inTransaction((transaction) =>
 		record({ ...entry, subjectType: 'person', subjectId: id }, transaction)
 	);

@@ -10,7 +10,7 @@ import { connection } from '../db/connection';
 import { Person, Session, SignInLink, SignInStep, Workshop } from '../db/models';
 import { inTransaction } from '../db/transaction';
 import { sha256 } from '../hash';
-import { record } from '../services/audit';
+import { record, type AuditAction } from '../services/audit';
 
 const MINUTE_MS = 60_000;
 export const IDLE_MS = SESSION_IDLE_MINUTES * MINUTE_MS;
@@ -57,7 +57,7 @@ export async function endSessions(
 	await SignInStep.destroy({ where: { personId }, transaction });
 }
 
-async function note(personId: number, action: string, transaction: Transaction): Promise<void> {
+async function note(personId: number, action: AuditAction, transaction: Transaction): Promise<void> {
 	const person = await Person.findByPk(personId, { attributes: ['workshopId'], transaction });
 	if (!person) return;
 	const { workshopId } = person;

@@ -3,8 +3,8 @@ import type { AuditEntry } from '../db/models';
 
 const NOBODY = 'a customer or the program';
 
-/** What each action is called; one that is not here is read out by its own words. */
-const DID: Record<string, string> = {
+/** What each action is called: what somebody did, so that it reads on from their name. */
+export const DID = {
 	'assessment.made': 'assessed a mount',
 	'battery.changed': 'changed a battery',
 	'battery.created': 'added a battery',
@@ -15,7 +15,7 @@ const DID: Record<string, string> = {
 	'rerun.cancelled': 'stopped assessments from being made again',
 	'rerun.running': 'let assessments be made again go on',
 	'rerun.told': 'told a customer of a changed verdict',
-	'assessment.made-again': 'an assessment was made again with another book',
+	'assessment.made-again': 'had an assessment made again with another book',
 	'book.on-trial': 'put a coefficient book on trial',
 	'book.withdrawn': 'withdrew a coefficient book',
 	'customer.admitted': 'asked for the first time to sign in as a customer',
@@ -27,14 +27,18 @@ const DID: Record<string, string> = {
 	'customer.erasure-refused': 'refused a request for deletion',
 	'customer.reminders-stopped': 'stopped the reminders',
 	'customer.reminders-wanted': 'wanted the reminders again',
+	'day-plan.changed': 'changed a day plan',
+	'day-plan.drawn': 'drew a day plan',
 	'fit.begun': 'began to fit coefficients to traces',
 	'fit.cancelled': 'called a fit off',
-	'fit.done': 'a fit was found',
+	'fit.done': 'had a fit worked out',
 	'fit.drafted': 'began a draft book with the values of a fit',
-	'fit.failed': 'a fit could not be made',
+	'fit.failed': 'had a fit tried that could not be made',
 	'invitation.sent-again': 'sent an invitation again',
 	'invitation.withdrawn': 'withdrew an invitation',
 	'job.answer': 'answered a customer’s question',
+	'job.battery-set': 'chose the battery of a job',
+	'job.climate-set': 'chose the climate of a job',
 	'job.created': 'began a job',
 	'job.letter-arrived': 'noted that a letter arrived',
 	'job.letter-tried-again': 'sent a letter again',
@@ -89,21 +93,27 @@ const DID: Record<string, string> = {
 	'trace.added': 'sent a logger’s file',
 	'trace.legs-set': 'set the legs of a trace',
 	'trace.mapped': 'said what the columns of a trace are',
-	'trace.not-read': 'a trace could not be read',
-	'trace.read': 'a trace was read',
+	'trace.not-read': 'had a trace looked at that could not be read',
+	'trace.read': 'had a trace read',
 	'trace.removed': 'removed a trace',
 	'trace.restored': 'put a trace back',
 	'shop.retention-changed': 'changed how long customers’ data are kept',
 	'shop.second-factor-rule': 'changed whether a second factor is asked for',
 	'vehicle.changed': 'changed a vehicle',
 	'vehicle.created': 'added a vehicle'
-};
+} as const satisfies Record<string, string>;
+/** All that is ever recorded: what is not here has no words, and the types refuse it. */
+export type AuditAction = keyof typeof DID;
 
-export const sayAction = (action: string): string => DID[action] ?? action.replace(/[.-]/g, ' ');
+/** An action of an earlier edition that is not here any more is read out by its own words. */
+export const sayAction = (action: string): string =>
+	action in DID ? DID[action as AuditAction] : action.replace(/[.-]/g, ' ');
 
 /** The actions in whose plain words a word stands. */
 export const actionsSaying = (word: string): string[] =>
-	Object.keys(DID).filter((action) => DID[action]!.toLowerCase().includes(word.toLowerCase()));
+	Object.entries(DID)
+		.filter(([, words]) => words.toLowerCase().includes(word.toLowerCase()))
+		.map(([action]) => action);
 
 const PAGES: Record<string, (id: number) => string> = {
 	assessment: (id) => `/assessments/${id}`,
@@ -111,8 +121,6 @@ const PAGES: Record<string, (id: number) => string> = {
 	book: (id) => `/books/${id}`,
 	job: (id) => `/jobs/${id}`,
 	mount: (id) => `/mounts/${id}`,
-	person: (id) => `/people/${id}`,
-	'own-zone': (id) => `/review/zones/${id}`,
 	place: (id) => `/places/${id}`,
 	recommendation: (id) => `/recommendations/${id}/print`
 };
@@ -141,10 +149,21 @@ export interface AuditNames {
 	customer: Names;
 	/** The number that a subject has for the people of the workshop. */
 	numberOf: (type: string, id: number) => number;
+	/** Of the people, those who work or worked in the shop: customers who sign in have no page. */
+	staff: ReadonlySet<number>;
+	/** The zones of the shop's own that there still are. */
+	zones: ReadonlySet<number>;
 }
 
 const nameOfSubject = (type: string, id: number, names: AuditNames): string | null =>
 	(type === 'person' || type === 'customer' ? names[type].get(id) : undefined) ?? null;
+
+/** The page of a subject, where there is one. */
+function pageOf(type: string, id: number, { staff, zones }: AuditNames): string | null {
+	if (type === 'person') return staff.has(id) ? `/people/${id}` : null;
+	if (type === 'own-zone') return zones.has(id) ? `/review/zones/${id}` : null;
+	return PAGES[type]?.(id) ?? null;
+}
 
 export function presentAuditEntry(entry: AuditEntry, names: AuditNames): AuditRow {
 	const { sequence, at, personId, action, subjectType, subjectId, detail } = entry;
@@ -156,7 +175,7 @@ export function presentAuditEntry(entry: AuditEntry, names: AuditNames): AuditRo
 		subject: subjectType,
 		subjectNumber: names.numberOf(subjectType, subjectId),
 		subjectName: nameOfSubject(subjectType, subjectId, names),
-		href: PAGES[subjectType]?.(subjectId) ?? null,
+		href: pageOf(subjectType, subjectId, names),
 		detail: Object.entries(detail).map(([key, value]) => ({ label: sayKey(key), value: sayValue(value) }))
 	};
 }

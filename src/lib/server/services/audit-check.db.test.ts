@@ -8,14 +8,14 @@ import { auditQuerySchema, type AuditQuery } from '$lib/schemas/audit';
 import { AuditEntry, Customer, Person } from '../db/models';
 import { inTransaction } from '../db/transaction';
 import { chainHash, GENESIS } from './audit-chain';
-import { recordBy } from './audit';
+import { recordBy, type AuditAction } from './audit';
 import { checkOwnTrail, lastCheck } from './audit-check';
 import { writeAuditCsv } from './audit-csv';
 import { listAudit, listAuditChoices } from './audit-list';
 
 useTestDatabase();
 
-async function note(crew: Crew, role: 'manager' | 'installer', action: string, id: number, detail = {}) {
+async function note(crew: Crew, role: 'manager' | 'installer', action: AuditAction, id: number, detail = {}) {
 	await inTransaction((transaction) =>
 		recordBy(crew[role], action, { type: action.split('.')[0]!, id }, transaction, detail)
 	);

@@ -3,7 +3,7 @@ import { z } from 'zod';
 import type { AuditChoices, AuditPage, AuditQuery, AuditRow } from '$lib/schemas/audit';
 import type { SignedInPerson } from '$lib/schemas/people';
 import { connection } from '../db/connection';
-import { AuditEntry, Customer, Person } from '../db/models';
+import { AuditEntry, Customer, OwnZone, Person } from '../db/models';
 import { allow } from '../policies';
 import { actionsSaying, presentAuditEntry, sayAction } from '../presenters/audit';
 import { findNumbers, numberOf, subjectsNumbered, takeCounted } from './audit-numbers';
@@ -69,14 +69,18 @@ const toNames = (rows: readonly { id: number; name: string }[]): Map<number, str
 
 async function presentAll(workshopId: number, entries: readonly AuditEntry[]): Promise<AuditRow[]> {
 	const people = [...entries.flatMap(({ personId }) => personId ?? []), ...subjectsOf(entries, 'person')];
-	const ask = (ids: number[]) => ({
-		where: { id: [...new Set(ids)], workshopId },
-		attributes: ['id', 'name']
-	});
-	const numbers = await findNumbers(workshopId, entries);
+	const ask = (ids: number[]) => ({ where: { id: [...new Set(ids)], workshopId } });
+	const [persons, customers, zones, numbers] = await Promise.all([
+		Person.findAll(ask(people)),
+		Customer.findAll(ask(subjectsOf(entries, 'customer'))),
+		OwnZone.findAll(ask(subjectsOf(entries, 'own-zone'))),
+		findNumbers(workshopId, entries)
+	]);
 	const names = {
-		person: toNames(await Person.findAll(ask(people))),
-		customer: toNames(await Customer.findAll(ask(subjectsOf(entries, 'customer')))),
+		person: toNames(persons),
+		customer: toNames(customers),
+		staff: new Set(persons.filter(({ role }) => role !== 'customer').map(({ id }) => id)),
+		zones: new Set(zones.map(({ id }) => id)),
 		numberOf: (type: string, id: number) => numberOf(type, id, numbers)
 	};
 	return entries.map((entry) => presentAuditEntry(entry, names));

@@ -3,15 +3,17 @@ import { QueryTypes } from 'sequelize';
 import type { SignedInPerson } from '$lib/schemas/people';
 import { connection } from '../db/connection';
 import { AuditEntry } from '../db/models';
+import type { AuditAction } from '../presenters/audit';
 import { GENESIS, chainHash, type Chained } from './audit-chain';
 
+export type { AuditAction } from '../presenters/audit';
 export { findBreak } from './audit-walk';
 
 export interface AuditRecord {
 	workshopId: number;
 	/** Null when nobody was signed in: a customer by link, or the program itself. */
 	personId: number | null;
-	action: string;
+	action: AuditAction;
 	subjectType: string;
 	subjectId: number;
 	detail?: Record<string, unknown>;
@@ -66,7 +68,7 @@ export const record = (entry: AuditRecord, transaction: Transaction): Promise<vo
 /** The usual entry: a signed-in person did something in their own workshop. */
 export async function recordBy(
 	person: SignedInPerson,
-	action: string,
+	action: AuditAction,
 	subject: { type: string; id: number },
 	transaction: Transaction,
 	detail?: Record<string, unknown>

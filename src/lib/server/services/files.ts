@@ -16,7 +16,7 @@ import { sha256 } from '../hash';
 import { allow } from '../policies';
 import { presentFile } from '../presenters/files';
 import { newContentId, storage } from '../storage';
-import { recordBy } from './audit';
+import { recordBy, type AuditAction } from './audit';
 import { lookAtFile } from './file-looks';
 import { cleanFileName } from './file-names';
 import { refuseFile } from './file-refusals';
@@ -272,7 +272,7 @@ export async function changeFile(
 async function setRemoved(
 	person: SignedInPerson,
 	fileId: number,
-	{ removedAt, action }: { removedAt: Date | null; action: string }
+	{ removedAt, action }: { removedAt: Date | null; action: AuditAction }
 ): Promise<FileView> {
 	allow(person, 'mounts.write');
 	return inTransaction(async (transaction) => {

@@ -179,7 +179,7 @@ export async function acceptInvitation(token: string, password: string): Promise
 		const joining = { workshopId, name, email, role, passwordHash };
 		const { id } = await Person.create(joining, { transaction }).catch(orSignsInAlready);
 		await invitation.update({ acceptedAt: new Date() }, { transaction });
-		const joined = { action: 'person.joined', subjectType: 'person', subjectId: id };
+		const joined = { action: 'person.joined' as const, subjectType: 'person', subjectId: id };
 		const detail = { invitationId: invitation.id, role };
 		await record({ workshopId, personId: id, ...joined, detail }, transaction);
 		return email;

@@ -15,7 +15,7 @@ import { inTransaction } from '../db/transaction';
 import { notFound } from '../errors';
 import { allow } from '../policies';
 import { presentJob, presentJobRow } from '../presenters/jobs';
-import { recordBy } from './audit';
+import { recordBy, type AuditAction } from './audit';
 import { customerFor } from './customers';
 import { findJobs } from './job-list';
 import { countOpenQuestions } from './question-threads';
@@ -124,7 +124,7 @@ async function findJob(
 async function changeJob(
 	person: SignedInPerson,
 	job: Job,
-	action: string,
+	action: AuditAction,
 	version: number,
 	changes: Partial<JobClimate> & { batteryRecordId?: number },
 	transaction: Transaction

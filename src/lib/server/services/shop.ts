@@ -6,7 +6,7 @@ import { inTransaction } from '../db/transaction';
 import { AppError, notFound } from '../errors';
 import { sha256 } from '../hash';
 import { allow } from '../policies';
-import { recordBy } from './audit';
+import { recordBy, type AuditAction } from './audit';
 import { makeLogo, type MadeLogo } from './logo-picture';
 import { saveVersioned } from './records';
 
@@ -49,7 +49,7 @@ export async function getShop(person: SignedInPerson): Promise<ShopView> {
 
 async function changeShop(
 	person: SignedInPerson,
-	action: string,
+	action: AuditAction,
 	seenVersion: number | null,
 	changes: Partial<
 		Pick<Workshop, keyof ShopDetails | 'requiresSecondFactor' | 'logoSha256' | 'retentionYears'>

@@ -9,7 +9,7 @@ import { allow } from '../policies';
 import { presentTrace, presentTraceRow, type TraceSurroundings } from '../presenters/traces';
 import { newContentId, storage } from '../storage';
 import { holdFileAnew } from './accuracy/ask-to-hold';
-import { recordBy } from './audit';
+import { recordBy, type AuditAction } from './audit';
 import { describeSample, forAnotherFile, keepProposal, readSample, refuseTrace } from './describe-file';
 import { cleanFileName } from './file-names';
 import { findStandingMount } from './mounts';
@@ -252,7 +252,7 @@ export async function confirmMapping(
 async function setRemoved(
 	person: SignedInPerson,
 	traceId: number,
-	{ removedAt, action }: { removedAt: Date | null; action: string }
+	{ removedAt, action }: { removedAt: Date | null; action: AuditAction }
 ): Promise<TraceView> {
 	allow(person, 'traces.write');
 	return inTransaction(async (transaction) => {
