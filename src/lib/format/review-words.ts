@@ -1,4 +1,4 @@
-import type { Ratio, ReviewFigures, ReviewInstallation, ReviewList } from '../schemas/review';
+import type { Chance, Ratio, ReviewFigures, ReviewInstallation, ReviewList } from '../schemas/review';
 import type { Verdict } from '../schemas/verdicts';
 import { formatShortDate } from './dates';
 import { formatNumber } from './numbers';
@@ -31,7 +31,7 @@ export function sayDarkDays(
 ): string {
 	const { chance, predictedDays, reportedDays } = figures;
 	if (chance.known > 0) return `${formatDays(predictedDays)}, ${reportedDays}`;
-	return chance.unknown > 0 ? 'not known' : 'no BMS';
+	return CHANCE_WORDS[chance.unknown > 0 ? 'unknown' : 'never'];
 }
 
 const formatRatio = (value: number): string => formatNumber(value, value < 9.95 ? 2 : 0);
@@ -109,6 +109,20 @@ export const sayOverride = ({ override }: Pick<ReviewInstallation, 'override'>):
 /** What was recommended after the fitting changes nothing until the fitting is held against it. */
 export const sayLater = ({ id, on, recommendedBy }: NonNullable<ReviewInstallation['later']>): string =>
 	`Recommended again after the fitting: recommendation ${id}, ${formatShortDate(on)}, by ${recommendedBy}.`;
+
+/** Whether a prediction can be held against an installation, and if not, why. */
+export const CHANCE_WORDS: Record<Chance, string> = {
+	known: 'known',
+	unknown: 'not known',
+	never: 'no BMS'
+};
+
+/** Dark days predicted of one installation; where there is no figure, why. */
+export const sayPredicted = ({
+	predictedDays,
+	chance
+}: Pick<ReviewInstallation, 'predictedDays' | 'chance'>): string =>
+	predictedDays === null ? CHANCE_WORDS[chance] : formatDays(predictedDays);
 
 export const SHEET_WORDS = {
 	acknowledged: 'acknowledged',

@@ -1,6 +1,6 @@
 import { stringify } from 'csv-stringify/sync';
 import { formatVerdict } from '$lib/format/verdict';
-import { SHEET_WORDS } from '$lib/format/review-words';
+import { CHANCE_WORDS, SHEET_WORDS } from '$lib/format/review-words';
 import type { SignedInPerson } from '$lib/schemas/people';
 import type { ReviewInstallation, ReviewListQuery } from '$lib/schemas/review';
 import { safeText } from '../safe-csv';
@@ -20,6 +20,8 @@ const COLUMNS: Record<string, (row: ReviewInstallation) => string | number> = {
 	Zone: ({ zone }) => zone,
 	'Fitted on': ({ fittedOn }) => fittedOn,
 	Verdict: ({ verdict, chemistry }) => formatVerdict(verdict, chemistry),
+	// A figure that there is not stays empty: why, stands in a column of its own.
+	'Chance of going dark': ({ chance }) => CHANCE_WORDS[chance],
 	'Expected dark days a year': ({ expectedDaysAYear }) => rounded(expectedDaysAYear),
 	'Predicted dark days since fitted': ({ predictedDays }) => rounded(predictedDays),
 	'Reported dark days': ({ reportedDays }) => reportedDays,
