@@ -51,6 +51,17 @@ describe('errors in steps', () => {
 		expect(yTicks.length).toBeLessThanOrEqual(5);
 	});
 
+	it('leave room for the words of the outermost numbers on either side', () => {
+		const { xTicks } = drawErrorSteps(
+			Array.from({ length: 20 }, (_, at) => ({ fromK: at * 2 - 20, toK: at * 2 - 18, readings: at }))
+		);
+		/** Eight pixels a letter is more than any of "+20" takes at the size of the picture's words. */
+		const half = ('+20'.length * 8) / 2;
+		expect(xTicks[0]!.x).toBeGreaterThanOrEqual(half);
+		expect(xTicks.at(-1)!.kelvin).toBe(20);
+		expect(xTicks.at(-1)!.x).toBeLessThanOrEqual(STEPS_BOX.width - half);
+	});
+
 	it('have round numbers beneath, and a picture also of nothing', () => {
 		expect(drawErrorSteps(steps).xTicks.map(({ kelvin }) => kelvin)).toContain(0);
 		const { bars } = drawErrorSteps(steps.map((step) => ({ ...step, readings: 0 })));

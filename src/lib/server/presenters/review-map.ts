@@ -24,13 +24,15 @@ export interface MapDrawing {
 	marks: MapMark[];
 }
 
-const WIDTH = 720;
-const HEIGHT = 400;
-const EDGE = 40;
+/** Each is shown about as large as it is drawn, so that names can be read and marks be met by a thumb. */
+const MAP_SIZES = {
+	phone: { width: 340, height: 300, edge: 28, largestRadius: 18 },
+	desk: { width: 720, height: 400, edge: 40, largestRadius: 22 }
+} as const;
+export type MapSize = keyof typeof MAP_SIZES;
 /** A single place is shown with so much around it, degrees. */
 const LEAST_SPAN_DEG = 30;
 const SMALLEST_RADIUS = 6;
-const LARGEST_RADIUS = 22;
 const CHARACTER_PX = 6.6;
 const LINE_PX = 15;
 
@@ -79,14 +81,15 @@ const meet = (a: Box, b: Box): boolean =>
 function placeName(
 	name: string,
 	{ x, y, radius }: Pick<MapMark, 'x' | 'y' | 'radius'>,
-	taken: readonly Box[]
+	taken: readonly Box[],
+	paperWidth: number
 ) {
 	const width = name.length * CHARACTER_PX;
 	for (const isNameLeft of [false, true]) {
 		const nameX = isNameLeft ? x - radius - 5 : x + radius + 5;
 		const left = isNameLeft ? nameX - width : nameX;
 		const box = { left, right: left + width, top: y - LINE_PX / 2, bottom: y + LINE_PX / 2 };
-		if (box.left > 0 && box.right < WIDTH && !taken.some((other) => meet(box, other)))
+		if (box.left > 0 && box.right < paperWidth && !taken.some((other) => meet(box, other)))
 			return { nameX, isNameLeft, box };
 	}
 	return null;
@@ -112,29 +115,30 @@ function drawCoasts(projection: GeoProjection, frame: string): string {
 }
 
 /** Coasts and marks as numbers and paths; the page draws them. */
-export function drawReviewMap(places: readonly ReviewPlace[]): MapDrawing {
+export function drawReviewMap(places: readonly ReviewPlace[], size: MapSize): MapDrawing {
+	const { width, height, edge, largestRadius } = MAP_SIZES[size];
 	const extent: [[number, number], [number, number]] = [
-		[EDGE, EDGE],
-		[WIDTH - EDGE, HEIGHT - EDGE]
+		[edge, edge],
+		[width - edge, height - edge]
 	];
 	const frame = frameOf(places);
 	const projection = geoEquirectangular().fitExtent(extent, frame as GeoJSON.MultiPoint);
 	projection.clipExtent([
 		[0, 0],
-		[WIDTH, HEIGHT]
+		[width, height]
 	]);
 	const most = Math.max(...places.map(({ installations }) => installations), 1);
 	const spots = places.map((place) => {
 		const [x = 0, y = 0] = projection([place.longitudeDeg, place.latitudeDeg]) ?? [];
 		// The area tells the count.
-		const radius = Math.max(LARGEST_RADIUS * Math.sqrt(place.installations / most), SMALLEST_RADIUS);
+		const radius = Math.max(largestRadius * Math.sqrt(place.installations / most), SMALLEST_RADIUS);
 		return { place, x: round(x), y: round(y), radius: round(radius) };
 	});
 	const taken: Box[] = spots.map(({ x, y, radius }) => ({
 		...{ left: x - radius, right: x + radius, top: y - radius, bottom: y + radius }
 	}));
 	const marks = spots.map(({ place, ...spot }): MapMark => {
-		const named = placeName(place.name, spot, taken);
+		const named = placeName(place.name, spot, taken, width);
 		if (named) taken.push(named.box);
 		return {
 			...{ placeId: place.placeId, isFilled: place.goneDark > 0, label: sayMark(place), ...spot },
@@ -142,5 +146,5 @@ export function drawReviewMap(places: readonly ReviewPlace[]): MapDrawing {
 			isNameLeft: named?.isNameLeft ?? false
 		};
 	});
-	return { width: WIDTH, height: HEIGHT, land: drawCoasts(projection, JSON.stringify(frame)), marks };
+	return { width, height, land: drawCoasts(projection, JSON.stringify([size, frame])), marks };
 }

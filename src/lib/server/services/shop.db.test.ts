@@ -106,6 +106,20 @@ describe('a logo', () => {
 		expect((await getShop(manager)).logo).toBeNull();
 	});
 
+	it.each([
+		[1, 1, '1 × 1 px'],
+		[90, 23, '90 × 23 px'],
+		[6000, 30, '600 × 3 px']
+	])('of %i × %i px is too small, and told so', async (width, height, size) => {
+		const { manager } = await makeCrew();
+		await expect(saveLogo(manager, await picture(width, height).png().toBuffer())).rejects.toMatchObject({
+			code: 'invalid_input',
+			message: `The logo must be at least 24 px wide and 24 px high: this one would be ${size}.`
+		});
+		expect((await getShop(manager)).logo).toBeNull();
+		expect(await makeLogo(await picture(24, 24).png().toBuffer())).toMatchObject({ heightPx: 24 });
+	});
+
 	it('goes along with letters as a picture of their own', async () => {
 		const { manager, workshopId } = await makeCrew();
 		const plain = await post(workshopId, 'before@travellers.example');

@@ -13,5 +13,11 @@ export const load: PageServerLoad = async (event) => {
 		orPageError(reviewMap(person, query)),
 		orPageError(listZones(person, query.kind))
 	]);
-	return { query, leftOut, map, on, drawing: drawReviewMap(map.places) };
+	return {
+		query,
+		leftOut,
+		map,
+		on,
+		drawings: { phone: drawReviewMap(map.places, 'phone'), desk: drawReviewMap(map.places, 'desk') }
+	};
 };
