@@ -1,11 +1,11 @@
 import { QueryTypes, type Transaction } from 'sequelize';
 import type { Verdict } from '$lib/schemas/verdicts';
 import { ENGINE_VERSION } from '$lib/thermal';
-import { hashWords } from '$lib/thermal/statistics';
 import { connection } from '../../db/connection';
 import { CoefficientBook, Customer, Person, Place, Vehicle, Workshop } from '../../db/models';
 import { inTransaction } from '../../db/transaction';
-import { addDays, addMonths, daysBetween } from '../days';
+import { addDays, addMonths } from '../days';
+import { draw, inventDarkDays, spreadOverYear, type DarkDay, type DrawName } from './invent-dark-days';
 import { placeInZones } from './place-zones';
 
 /** How a workshop is invented: the same seed and day give the same rows. */
@@ -26,16 +26,6 @@ const YEARS = 5;
 const DAYS_A_YEAR = 365.25;
 const ZONES = ['Aw', 'BWh', 'BWk', 'BSh', 'BSk', 'Csa', 'Csb', 'Cfa', 'Cfb', 'Dfb'] as const;
 
-/** What each part of an installation draws from; one number never serves two of them. */
-const DRAWS = {
-	...{ place: 1, fitted: 2, verdict: 3, chemistry: 4, outlook: 5, days: 6, reports: 7, looked: 8, sheet: 9 },
-	...{ acknowledged: 10, removed: 11, darkOn: 12, cause: 13, latitude: 14, longitude: 15 }
-} as const;
-type Draw = (seed: number, index: number, what: keyof typeof DRAWS, again?: number) => number;
-
-/** Within 0 to below 1. */
-const draw: Draw = (seed, index, what, again = 0) => hashWords(seed, index, DRAWS[what], again) / 2 ** 32;
-
 const VERDICT_SHARES: [Verdict, number][] = [
 	['cuts-out', 0.06],
 	['runs-close', 0.3],
@@ -45,21 +35,10 @@ const VERDICT_SHARES: [Verdict, number][] = [
 const MOST_DAYS: Record<Verdict, number> = { 'cuts-out': 8, 'runs-close': 1, 'rides-it-out': 0.05 };
 const WITHOUT_BMS_SHARE = 0.08;
 const OUTLOOK_SHARE = 0.95;
-const REPORTED_SHARE = 0.6;
-const HEAT_SHARE = 0.85;
 const LOOKED_SHARE = 0.8;
 const SHEET_SHARE = 0.9;
 const ACKNOWLEDGED_SHARE = 0.85;
 const REMOVED_SHARE = 0.01;
-
-/** Twelve months of dark days: all of them in the warm half of the year. */
-function monthDays(yearDays: number, isSouth: boolean): number[] {
-	const weights = Array.from({ length: 12 }, (_, month) =>
-		Math.max(Math.cos((2 * Math.PI * (month - (isSouth ? 0 : 6))) / 12), 0)
-	);
-	const sum = weights.reduce((total, weight) => total + weight, 0);
-	return weights.map((weight) => (yearDays * weight) / sum);
-}
 
 interface Invented {
 	index: number;
@@ -68,35 +47,20 @@ interface Invented {
 	verdict: Verdict;
 	chemistry: string;
 	expected: number[] | null;
-	darkDays: { on: string; isHeat: boolean }[];
+	darkDays: DarkDay[];
 	followUps: { months: number; dueOn: string; isDone: boolean }[];
 	sheet: 'none' | 'sent' | 'acknowledged';
 	isRemoved: boolean;
 }
 
-function inventDarkDays(
-	{ seed, today }: Invention,
-	index: number,
-	fittedOn: string,
-	yearDays: number
-): Invented['darkDays'] {
-	const exposedDays = daysBetween(fittedOn, today);
-	const likely = (yearDays * exposedDays * REPORTED_SHARE) / DAYS_A_YEAR;
-	const count = Math.floor(2 * likely * draw(seed, index, 'reports') + 0.5);
-	return Array.from({ length: count }, (_, again) => ({
-		on: addDays(fittedOn, Math.floor(draw(seed, index, 'darkOn', again) * (exposedDays + 1))),
-		isHeat: draw(seed, index, 'cause', again) < HEAT_SHARE
-	}));
-}
-
 function inventOne(invention: Invention, index: number, places: readonly Place[]): Invented {
 	const { seed, today } = invention;
-	const random = (what: keyof typeof DRAWS, again?: number): number => draw(seed, index, what, again);
+	const random = (what: DrawName, again?: number): number => draw(seed, index, what, again);
 	// Few places have many of the installations, as in any shop.
 	const place = places[Math.floor(random('place') ** 2 * places.length)]!;
 	const fittedOn = addDays(today, -Math.floor(random('fitted') * YEARS * DAYS_A_YEAR));
 	const [verdict] = VERDICT_SHARES.find(([, share]) => random('verdict') < share)!;
-	const yearDays = MOST_DAYS[verdict] * random('days');
+	const monthDays = spreadOverYear(MOST_DAYS[verdict] * random('days'), place.latitudeDeg < 0);
 	const chemistry = random('chemistry') < WITHOUT_BMS_SHARE ? 'lead-acid-agm' : 'lithium-iron-phosphate';
 	const followUps = [1, 6, 12].map((months) => {
 		const dueOn = addMonths(fittedOn, months);
@@ -105,8 +69,8 @@ function inventOne(invention: Invention, index: number, places: readonly Place[]
 	const isSent = random('sheet') < SHEET_SHARE;
 	return {
 		...{ index, place, fittedOn, verdict, chemistry, followUps },
-		expected: random('outlook') < OUTLOOK_SHARE ? monthDays(yearDays, place.latitudeDeg < 0) : null,
-		darkDays: inventDarkDays(invention, index, fittedOn, yearDays),
+		expected: random('outlook') < OUTLOOK_SHARE ? monthDays : null,
+		darkDays: inventDarkDays({ seed, index, fittedOn, today, monthDays }),
 		sheet: isSent ? (random('acknowledged') < ACKNOWLEDGED_SHARE ? 'acknowledged' : 'sent') : 'none',
 		isRemoved: random('removed') < REMOVED_SHARE
 	};
