@@ -1,5 +1,5 @@
 import { expect, test } from '@playwright/test';
-import { expectNoViolations, signInAs } from './support';
+import { expectNoViolations, ONCE, personOf, signInAs, signInWith } from './support';
 
 test.beforeEach(({ page }) => signInAs(page, 'manager'));
 
@@ -65,3 +65,26 @@ test('a long trail goes on page by page', async ({ page }) => {
 	const numberOf = (text: string): number => Number(/entry (\d+)/.exec(text)?.[1]);
 	expect(numberOf(next)).toBeLessThanOrEqual(numberOf(first) - 50);
 });
+
+test(
+	'what the trail links to is there, also after a customer signed in',
+	ONCE,
+	async ({ page, browser, baseURL }) => {
+		const context = await browser.newContext(baseURL ? { baseURL } : {});
+		await signInWith(await context.newPage(), personOf('customer'));
+		await context.close();
+		const answer = await page.request.get('/api/v1/audit?subject=person&limit=100');
+		const { rows } = (await answer.json()) as { rows: { href: string | null; subjectName: string | null }[] };
+		expect(rows.some(({ href }) => href === null)).toBe(true);
+		const hrefs = [...new Set(rows.flatMap(({ href }) => href ?? []))];
+		expect(hrefs.length).toBeGreaterThan(0);
+		for (const href of hrefs) expect((await page.request.get(href)).status()).toBe(200);
+		await page.goto('/audit?subject=person');
+		const customer = page
+			.getByRole('listitem')
+			.filter({ hasText: /Odile Vantongeren signed in/ })
+			.first();
+		await expect(customer).toBeVisible();
+		await expect(customer.getByRole('link')).toHaveCount(0);
+	}
+);

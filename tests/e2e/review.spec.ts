@@ -88,6 +88,8 @@ test('the table for other programs says what the page says', async ({ page }) =>
 	const overridden = rows.find((row) => row[heads!.indexOf('Customer')] === 'Ignatius Pell')!;
 	expect(overridden[heads!.indexOf('Reported dark days')]).toBe('2');
 	expect(overridden[heads!.indexOf('Reason')]).toContain('fridge goes dark');
+	const chances = new Set(rows.map((row) => row[heads!.indexOf('Chance of going dark')]));
+	expect(chances).toEqual(new Set(['known', 'not known', 'no BMS']));
 });
 
 test('the map needs no network and its marks lead on', async ({ page }) => {

@@ -2,15 +2,17 @@ import { randomUUID } from 'node:crypto';
 import { expect, test, type Browser, type Page } from '@playwright/test';
 import { generate } from 'otplib';
 import { readMail, signInByLetter, waitForLink } from './mailed';
-import { expectNoViolations, signInAs, signInWith } from './support';
+import { expectNoViolations, ONCE, signInAs, signInWith } from './support';
 
 const PASSWORD = 'nine goats on the roof';
 
-/** A new engineer of the demo workshop, invited by its manager, in a browser of their own. */
-async function joinAsEngineer(manager: Page, browser: Browser, baseURL: string | undefined) {
+type Joining = 'engineer' | 'manager';
+
+/** Somebody new in the demo workshop, invited by its manager, in a browser of their own. */
+async function join(role: Joining, manager: Page, browser: Browser, baseURL: string | undefined) {
 	const name = `Vesna ${randomUUID().slice(0, 8)}`;
 	const email = `vesna-${randomUUID()}@shop.example`;
-	const data = { name, email, role: 'engineer' };
+	const data = { name, email, role };
 	const asked = await manager.request.post('/api/v1/invitations', { data });
 	expect(asked.status()).toBe(201);
 	const link = await waitForLink(email, /\/sign-in\/invitation\/[\w-]{22}/);
@@ -44,7 +46,7 @@ test('a second factor is set up, asked for after password and link, and reset by
 }) => {
 	test.slow();
 	await signInAs(page, 'manager');
-	const engineer = await joinAsEngineer(page, browser, baseURL);
+	const engineer = await join('engineer', page, browser, baseURL);
 	const theirs = engineer.page;
 	await theirs.goto('/second-factor');
 	await expectNoViolations(theirs);
@@ -112,3 +114,39 @@ test('nobody gets to the second step without the first', async ({ page }) => {
 	await page.goto('/sign-in/second-step');
 	await expect(page).toHaveURL(/\/sign-in$/);
 });
+
+test(
+	'who asks others for a second factor has one, and reads beforehand whom it holds up',
+	ONCE,
+	async ({ page, browser, baseURL }) => {
+		await signInAs(page, 'manager');
+		await page.goto('/shop');
+		const rule = (of: Page) => of.getByRole('region', { name: 'Second factor' });
+		await expect(rule(page).getByText('Before you can ask others for it, set up your own.')).toBeVisible();
+		await expect(rule(page).getByRole('button')).toHaveCount(0);
+		const { version } = (await (await page.request.get('/api/v1/shop')).json()) as { version: number };
+		const asked = await page.request.put('/api/v1/shop/second-factor', {
+			data: { requiresSecondFactor: true, version }
+		});
+		expect(asked.status()).toBe(409);
+		expect(await asked.text()).toContain('Set up your own second factor before');
+
+		const second = await join('manager', page, browser, baseURL);
+		const theirs = second.page;
+		await theirs.goto('/second-factor');
+		await theirs.getByRole('button', { name: 'Set it up' }).click();
+		const key = (await theirs.locator('[data-key]').innerText()).replace(/\s/g, '');
+		await theirs.getByLabel('Code').fill(await generate({ secret: key }));
+		await theirs.getByRole('button', { name: 'Turn it on' }).click();
+		await theirs.getByRole('link', { name: 'I have them' }).click();
+		await theirs.goto('/shop');
+		await expect(
+			rule(theirs).getByText(/nothing but the page that sets it up.*Marit Oakshott \(manager\)/)
+		).toBeVisible();
+		await expect(
+			rule(theirs).getByRole('button', { name: 'Ask managers and engineers for it' })
+		).toBeVisible();
+		await expectNoViolations(theirs);
+		await second.context.close();
+	}
+);
