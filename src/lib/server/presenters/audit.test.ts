@@ -14,7 +14,8 @@ const NAMES: AuditNames = {
 	]),
 	customer: new Map([[2, 'Odile Vantongeren']]),
 	staff: new Set([5]),
-	zones: new Set([8])
+	zones: new Set([8]),
+	numberOf: (_, id) => id
 };
 
 const show = (action: string, subjectType: string, subjectId: number) =>

@@ -17,7 +17,8 @@ function reportOf(before: ReturnType<typeof belief>, after: ReturnType<typeof be
 	const data = { kind: 'peak-label', place: 'case', turnedC: 60, notTurnedC: 65, hottestDayC: 40 };
 	const note = {
 		...{ id: 1, kind: 'peak-label', notedOn: '2026-02-01', notedBy: 'Ida Fenn', data, struck: null },
-		...{ restsOnStruck: null, finding: { cause: null, learning } }
+		...{ restsOnStruck: null, doubts: 0, judgedBy: { battery: 'Cindervale Ridge 4', otherwise: [] } },
+		finding: { cause: null, learning }
 	};
 	return presentNote(note as unknown as FieldNoteView).learning!;
 }
