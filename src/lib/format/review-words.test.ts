@@ -6,6 +6,7 @@ import {
 	listToSeeTo,
 	sayApart,
 	sayDarkDays,
+	sayMonths,
 	sayRatio,
 	sayUncounted
 } from './review-words';
@@ -54,6 +55,16 @@ describe('a ratio of reported to predicted', () => {
 		]);
 		expect(listToSeeTo({ overdue: 0, overrides: 0, sheetsWaiting: 1 })).toEqual(['1 sheet not acknowledged']);
 		expect(listToSeeTo({ overdue: 0, overrides: 0, sheetsWaiting: 0 })).toEqual([]);
+	});
+
+	it('says of the months what holds of what is shown', () => {
+		const sums = { fitted: 8, predicted: 6.4, reported: 2 };
+		expect(sayMonths({ ...sums, isNarrowed: false })).toBe(
+			'In these 24 months 8 installations were fitted; of all that is fitted, 6.4 dark days were predicted and 2 reported.'
+		);
+		expect(sayMonths({ ...sums, fitted: 1, isNarrowed: true })).toBe(
+			'In these 24 months 1 installation like that was fitted; of all installations like that, 6.4 dark days were predicted and 2 reported.'
+		);
 	});
 
 	it('counts few days with a decimal', () => {

@@ -50,6 +50,22 @@ export function sayRatio(ratio: Ratio | null): string {
 
 const plural = (count: number, one: string, many: string): string => `${count} ${count === 1 ? one : many}`;
 
+interface MonthSums {
+	fitted: number;
+	predicted: number;
+	reported: number;
+	/** Part of what is fitted, not all of it. */
+	isNarrowed: boolean;
+}
+
+/** The months in a sentence, which holds of part of the stock too. */
+export function sayMonths({ fitted, predicted, reported, isNarrowed }: MonthSums): string {
+	const like = isNarrowed ? ' like that' : '';
+	const were = plural(fitted, `installation${like} was`, `installations${like} were`);
+	const stock = isNarrowed ? 'installations like that' : 'that is fitted';
+	return `In these 24 months ${were} fitted; of all ${stock}, ${formatDays(predicted)} dark days were predicted and ${reported} reported.`;
+}
+
 /** What stands apart from the ratio, each in a sentence; nothing where nothing does. */
 export function sayApart({ chance, reportedElsewhere, notHeatDays }: ReviewFigures): string[] {
 	return [
