@@ -188,7 +188,15 @@ describe('the next step of a job', () => {
 		const around = { fitted: [{ ...later, mismatch }], recommendedMountId: 1 };
 		const given = { stage: 'acknowledged', mounts: [MOUNT_A] };
 		expect(find(job({ ...given, standings: [standing(1)] }), around)).toMatchObject({ label, href });
-		const changed = { ...given, standings: [standing(1, ['battery'])] };
-		expect(find(job(changed), around)?.label).toBe('Assess again');
+		const overdue = { fitted: [{ ...late, mismatch }], recommendedMountId: 1 };
+		expect(find(job({ ...given, standings: [standing(1)] }), overdue)).toMatchObject({ label, href });
+	});
+
+	it('with another battery fitted and chosen for the job, is to assess again', () => {
+		const around = { fitted: [{ ...late, mismatch: 'assess' as const }], recommendedMountId: 1 };
+		const given = { stage: 'acknowledged', mounts: [MOUNT_A] };
+		const changed = (what: string) => job({ ...given, standings: [standing(1, [what])] });
+		expect(find(changed('battery'), around)).toMatchObject({ label: 'Assess again', href: null });
+		expect(find(changed('hot day'), around)?.label).toBe('Assess it as it was fitted');
 	});
 });

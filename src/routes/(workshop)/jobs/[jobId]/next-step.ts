@@ -43,6 +43,18 @@ const mountsToAssess = (job: JobView, around: Around) =>
 		return mount.surveyComplete && (!standing || standing.changedSince.length > 0);
 	});
 
+/** To assess these mounts, by the button itself. */
+function sayAssess(letters: readonly string[], again: boolean): NextStep {
+	const which = sayMounts([...letters]);
+	return {
+		label: again ? 'Assess again' : 'Assess',
+		text: again
+			? `Assessed before something changed: ${which}.`
+			: `All is there to work out the hot day of ${which}.`,
+		href: null
+	};
+}
+
 type MismatchStep = (mount: FittedMount, at: string) => NextStep;
 
 /** From another battery in a mount to an estimate, a recommendation and papers of that battery. */
@@ -66,6 +78,16 @@ const MISMATCH_STEPS: Readonly<Record<Mismatch, MismatchStep>> = {
 
 /** In the order in which a job is done; the first rule that has something to say is the next step. */
 const RULES: readonly Rule[] = [
+	// Before a look that is due: whoever looks would hold what is found against another battery.
+	(job, at, { fitted }) => {
+		const other = fitted.find(({ mismatch }) => mismatch !== null);
+		if (!other?.mismatch) return null;
+		const changed = standingOf(job, other.mountId)?.changedSince ?? [];
+		const isToAssess = other.mismatch === 'assess' ? changed.includes('battery') : changed.length > 0;
+		return isToAssess && other.mismatch !== 'hold'
+			? sayAssess([other.letter], true)
+			: MISMATCH_STEPS[other.mismatch](other, at);
+	},
 	(_, __, { fitted }) => {
 		const late = fitted.find(({ isOverdue }) => isOverdue);
 		return late?.nextDueOn
@@ -121,19 +143,11 @@ const RULES: readonly Rule[] = [
 	(job, _, around) => {
 		const mounts = mountsToAssess(job, around);
 		if (mounts.length === 0) return null;
-		const which = sayMounts(mounts.map((mount) => mount.letter));
 		const again = mounts.some((mount) => standingOf(job, mount.id));
-		return {
-			label: again ? 'Assess again' : 'Assess',
-			text: again
-				? `Assessed before something changed: ${which}.`
-				: `All is there to work out the hot day of ${which}.`,
-			href: null
-		};
-	},
-	(_, at, { fitted }) => {
-		const other = fitted.find(({ mismatch }) => mismatch !== null);
-		return other?.mismatch ? MISMATCH_STEPS[other.mismatch](other, at) : null;
+		return sayAssess(
+			mounts.map((mount) => mount.letter),
+			again
+		);
 	},
 	(job, at, around) =>
 		job.stage === 'recommended' && isFitted(around, around.recommendedMountId)
