@@ -197,6 +197,6 @@ describe('the next step of a job', () => {
 		const given = { stage: 'acknowledged', mounts: [MOUNT_A] };
 		const changed = (what: string) => job({ ...given, standings: [standing(1, [what])] });
 		expect(find(changed('battery'), around)).toMatchObject({ label: 'Assess again', href: null });
-		expect(find(changed('hot day'), around)?.label).toBe('Assess it as it was fitted');
+		expect(find(changed('hot-day'), around)?.label).toBe('Assess it as it was fitted');
 	});
 });
