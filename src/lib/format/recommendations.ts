@@ -1,5 +1,23 @@
-import type { RecommendationView } from '../schemas/recommendations';
+import type { Against, RecommendationView } from '../schemas/recommendations';
 import { formatDate } from './dates';
+import { sayVerdict } from './verdict';
+
+const MAKER_FORBIDS = 'the battery’s maker does not allow it under the bonnet';
+
+/** In spite of what it goes ahead, after "although"; nothing where it goes against nothing. */
+export function sayAgainst(
+	{ againstVerdict, againstMaker }: Against,
+	{ verdict, chemistry }: Pick<RecommendationView['assessment'], 'verdict' | 'chemistry'>
+): string {
+	return [
+		...(againstVerdict ? [`it ${sayVerdict(verdict, chemistry)}`] : []),
+		...(againstMaker ? [MAKER_FORBIDS] : [])
+	].join(' and ');
+}
+
+/** The same as a name: "the verdict and the maker’s word". */
+export const nameAgainst = ({ againstVerdict, againstMaker }: Against): string =>
+	[...(againstVerdict ? ['the verdict'] : []), ...(againstMaker ? ['the maker’s word'] : [])].join(' and ');
 
 /** That a later one was made; nothing while none has been. */
 export function sayReplaced({

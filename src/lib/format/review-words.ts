@@ -2,6 +2,7 @@ import type { Chance, Ratio, ReviewFigures, ReviewInstallation, ReviewList } fro
 import type { Verdict } from '../schemas/verdicts';
 import { formatShortDate } from './dates';
 import { formatNumber } from './numbers';
+import { nameAgainst } from './recommendations';
 import { sayVerdict } from './verdict';
 
 const OF_MANY: Record<Verdict, string> = {
@@ -106,7 +107,7 @@ export const listToSeeTo = ({
 export const LIST_TITLES: Record<ReviewList | 'all', string> = {
 	all: 'Installations',
 	overdue: 'Overdue follow-ups',
-	overrides: 'Gone ahead against the verdict',
+	overrides: 'Gone ahead against the verdict or the maker',
 	waiting: 'Sheets not acknowledged',
 	missing: 'Without a sheet',
 	'gone-dark': 'Reported dark'
@@ -119,7 +120,7 @@ export const sayOverdue = ({ overdueDays }: ReviewInstallation): string =>
 /** Who went ahead, and why: of the recommendation under which it was fitted. */
 export const sayOverride = ({ override }: Pick<ReviewInstallation, 'override'>): string =>
 	override
-		? `${override.decidedBy}: ${override.reason}${override.enteredBy ? ` (entered by ${override.enteredBy})` : ''}`
+		? `Against ${nameAgainst(override)}, ${override.decidedBy}: ${override.reason}${override.enteredBy ? ` (entered by ${override.enteredBy})` : ''}`
 		: '';
 
 /** What was recommended after the fitting changes nothing until the fitting is held against it. */

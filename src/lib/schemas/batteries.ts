@@ -8,6 +8,7 @@ import {
 	heatFieldsOf,
 	type ChemistryKey
 } from '../thermal/chemistries';
+import type { PositionKind } from '../thermal/survey/types';
 import { SENSORS, type Sensor } from '../thermal/types';
 import { editedSchema, measure, optionalWords, versionSchema, words } from './fields';
 
@@ -19,6 +20,12 @@ export type Chemistry = ChemistryKey;
 
 export const UNDER_BONNET_WORDS = ['allowed', 'conditional', 'silent', 'excluded'] as const;
 export type UnderBonnetWord = (typeof UNDER_BONNET_WORDS)[number];
+
+/** Whether a battery's maker does not allow it where it is to go: that word is about the bonnet alone. */
+export const isExcludedAt = (
+	{ underBonnet }: { underBonnet: UnderBonnetWord },
+	positionKind: PositionKind
+): boolean => positionKind === 'under-bonnet' && underBonnet === 'excluded';
 
 /** Whether electronics of its own switch a battery of this chemistry off; a name that is none has them. */
 export const hasBms = (chemistry: string): boolean => findChemistry(chemistry)?.hasBms ?? true;

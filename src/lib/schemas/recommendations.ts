@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { assessmentRowSchema, type AssessmentView, type MountOutcome } from './assessments';
+import { isExcludedAt } from './batteries';
 import { idSchema, words } from './fields';
 import { cautionLineSchema } from './caution-texts';
 import { preDrillSnapshotSchema } from './pre-drill';
@@ -8,7 +9,18 @@ import type { LogoView, WorkshopHead } from './shop';
 /** Less is no name and no reason: both are kept for good, and the customer reads them. */
 export const FEWEST_CHARACTERS = { decidedBy: 3, reason: 10 } as const;
 
-/** Going ahead against "cuts out" takes a named person and a written reason; otherwise neither is asked for. */
+/** What goes against something: either takes a named person and a written reason. */
+export interface Against {
+	againstVerdict: boolean;
+	againstMaker: boolean;
+}
+
+export const findAgainst = ({ verdict, inputs }: Pick<AssessmentView, 'verdict' | 'inputs'>): Against => ({
+	againstVerdict: verdict === 'cuts-out',
+	againstMaker: isExcludedAt(inputs.battery, inputs.mount.survey.positionKind)
+});
+
+/** Going ahead against "cuts out" or the maker's word takes a named person and a written reason; otherwise neither is asked for. */
 export const recommendationInputSchema = z.object({
 	assessmentId: idSchema,
 	decidedBy: words('Who decided', 120).optional(),
@@ -22,8 +34,19 @@ export const recommendationSchema = z.object({
 	jobNumber: z.number().int(),
 	assessment: assessmentRowSchema,
 	againstVerdict: z.boolean(),
+	againstMaker: z
+		.boolean()
+		.meta({
+			description:
+				'The maker does not allow it there; false too where nobody was asked yet who answers for it'
+		}),
 	decidedBy: z.string().nullable(),
 	reason: z.string().nullable(),
+	madeOutTo: z.string().meta({ description: 'The customer as they were called when it was made' }),
+	customerNow: z
+		.string()
+		.nullable()
+		.meta({ description: 'What they are called now, where that is another name' }),
 	/** The check before drilling as it stood; null for those that were made before there was one. */
 	preDrill: preDrillSnapshotSchema.nullable(),
 	/** As they read when it was issued; null for those from before they were kept. */
@@ -37,6 +60,12 @@ export const recommendationSchema = z.object({
 	isFittedUnder: z.boolean().meta({ description: 'Whether what was fitted is held against this one' })
 });
 export type RecommendationView = z.infer<typeof recommendationSchema>;
+
+/** Made against the maker's word before anybody was asked who answers for that. */
+export const isUndecided = (
+	{ decidedBy }: Pick<RecommendationView, 'decidedBy'>,
+	assessment: Pick<AssessmentView, 'verdict' | 'inputs'>
+): boolean => decidedBy === null && findAgainst(assessment).againstMaker;
 
 /** Everything that the printed recommendation says. */
 export interface RecommendationDocument {

@@ -113,6 +113,8 @@ export const reviewInstallationSchema = z.object({
 	overdueDays: count,
 	override: z
 		.object({
+			againstVerdict: z.boolean(),
+			againstMaker: z.boolean().meta({ description: 'The maker of the battery does not allow it there' }),
 			decidedBy: z.string(),
 			reason: z.string(),
 			enteredBy: z.string().nullable().meta({ description: 'Where that is somebody else' })

@@ -48,8 +48,10 @@ export interface SheetContent {
 	paragraphs: string[];
 	/** What the shop would do. */
 	advice: string;
-	/** Said when the shop goes ahead against the verdict. */
+	/** Said when the shop goes ahead against the verdict or the maker's word. */
 	override: { decidedBy: string; reason: string } | null;
+	/** What the check before drilling left open; pages from before that was told have none. */
+	beforeDrilling?: string[];
 	/** The other positions that were worked out for this job. */
 	alternatives: { mountName: string; verdict: Verdict; chemistry?: string }[];
 	figures: { label: string; value: string }[];

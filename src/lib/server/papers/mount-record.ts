@@ -6,7 +6,7 @@ import type { ReportLine } from '$lib/schemas/reports';
 import type { AcknowledgementView } from '$lib/schemas/sheets';
 import { formatDate, formatDateTime } from '$lib/format/dates';
 import { isNotNoted, listHeatDifferences, sayFitted, sayHeatDifferences } from '$lib/format/fitted';
-import { sayDecider } from '$lib/format/recommendations';
+import { sayAgainst, sayDecider } from '$lib/format/recommendations';
 import { sayVerdict } from '$lib/format/verdict';
 import { PRE_DRILL_LABELS } from '$lib/schemas/pre-drill';
 import { drawRibbon } from './ribbon-picture';
@@ -94,7 +94,11 @@ export const tellBattery = (record: MountRecord): PaperBlock => {
 
 export const tellVehicle = ({ paper }: MountRecord): PaperBlock => ({
 	...{ kind: 'lines', title: 'Customer and vehicle' },
-	lines: [{ label: 'Customer', value: paper.customer.name }, ...paper.report.vehicle]
+	// Written today, unlike the recommendation in it.
+	lines: [
+		{ label: 'Customer', value: paper.recommendation.customerNow ?? paper.customer.name },
+		...paper.report.vehicle
+	]
 });
 
 export const tellDay = (record: MountRecord): PaperBlock => {
@@ -120,17 +124,18 @@ export const tellFollowUps = ({ fitting }: MountRecord): PaperBlock => ({
 
 export const tellAgreement = ({ paper, acknowledgement }: MountRecord): PaperBlock => {
 	const { recommendation } = paper;
-	const { id, createdAt, recommendedBy, againstVerdict, reason, assessment } = recommendation;
+	const { id, createdAt, recommendedBy, reason, assessment } = recommendation;
+	const against = sayAgainst(recommendation, assessment);
 	const verdict = sayVerdict(assessment.verdict, assessment.chemistry);
 	return {
 		...{ kind: 'lines', title: 'What was recommended' },
 		lines: [
 			{ label: `Recommendation ${id}`, value: `${formatDateTime(createdAt)}, by ${recommendedBy}` },
 			{ label: 'Verdict', value: verdict },
-			...(againstVerdict
+			...(against
 				? [
 						{
-							label: `Went ahead although it ${verdict}`,
+							label: `Went ahead although ${against}`,
 							value: `decided by ${sayDecider(recommendation)}. Reason: ${reason}`
 						}
 					]

@@ -12,7 +12,7 @@ import {
 import { formatDate } from '$lib/format/dates';
 import { formatKelvin } from '$lib/format/numbers';
 import { DEFERENCE } from '$lib/format/deference';
-import { sayDecider, sayReplaced } from '$lib/format/recommendations';
+import { sayAgainst, sayDecider, sayReplaced } from '$lib/format/recommendations';
 import { sayVerdict } from '$lib/format/verdict';
 import type { MountOutcome } from '$lib/schemas/assessments';
 import type { ReportLine } from '$lib/schemas/reports';
@@ -84,18 +84,18 @@ function answer({ report, recommendation, customer }: RecommendationPaper, size:
 }
 
 function warnings({ report, recommendation }: RecommendationPaper): Content[] {
-	const { againstVerdict, reason, assessment } = recommendation;
-	const verdict = sayVerdict(assessment.verdict, assessment.chemistry);
+	const { reason, assessment } = recommendation;
+	const against = sayAgainst(recommendation, assessment);
 	return [
 		...(report.maker
 			? [between([{ text: [bold(`${report.maker.title} `), { text: report.maker.text }] }])]
 			: []),
-		...(againstVerdict
+		...(against
 			? [
 					between([
 						{
 							text: [
-								bold(`Goes ahead although it ${verdict}. `),
+								bold(`Goes ahead although ${against}. `),
 								{ text: `Decided by ${sayDecider(recommendation)}. Reason: ${reason}` }
 							]
 						}

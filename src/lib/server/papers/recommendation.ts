@@ -40,7 +40,7 @@ export function readRecommendation(
 	const { positionKind } = inputs.mount.survey;
 	return {
 		...{ recommendation, workshop, logo, others, photos },
-		customer: { name: inputs.customerName, ...customer },
+		customer: { name: recommendation.madeOutTo, ...customer },
 		chemistry,
 		cautions: recommendation.cautions ?? listCautions(chemistry),
 		ribbon: toRibbonData(result, dayLimitsOf(inputs.battery), positionKind, outlook.day.band),

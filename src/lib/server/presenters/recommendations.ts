@@ -3,13 +3,26 @@ import type { RecommendationView } from '$lib/schemas/recommendations';
 import type { Recommendation } from '../db/models';
 
 export function presentRecommendation(
-	{ id, jobId, againstVerdict, decidedBy, reason, preDrill, cautions, createdAt }: Recommendation,
-	more: Pick<RecommendationView, 'jobNumber' | 'recommendedBy' | 'replacedBy' | 'isFittedUnder'> & {
+	{
+		id,
+		jobId,
+		againstVerdict,
+		againstMaker,
+		decidedBy,
+		reason,
+		preDrill,
+		cautions,
+		createdAt
+	}: Recommendation,
+	more: Pick<
+		RecommendationView,
+		'jobNumber' | 'madeOutTo' | 'customerNow' | 'recommendedBy' | 'replacedBy' | 'isFittedUnder'
+	> & {
 		assessment: AssessmentRow;
 	}
 ): RecommendationView {
 	return {
-		...{ id, jobId, againstVerdict, decidedBy, reason },
+		...{ id, jobId, againstVerdict, againstMaker, decidedBy, reason },
 		preDrill: preDrill ?? null,
 		cautions: cautions ?? null,
 		...more,

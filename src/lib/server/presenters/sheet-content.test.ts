@@ -69,6 +69,8 @@ function write(
 		preparedBy: 'Noor Pellegrin',
 		preparedAt: new Date('2026-03-04T12:00:00Z'),
 		assessmentId: 7,
+		customerName: INPUTS.customerName,
+		preDrill: null,
 		inputs: { ...INPUTS, battery: { ...INPUTS.battery, ...battery } },
 		result: { ...RESULT, ...result },
 		override: null,
@@ -142,6 +144,42 @@ describe('the customer’s page', () => {
 		const inCabin = { ...INPUTS.mount, survey: { positionKind: 'cabin' } } as AssessmentInputs['mount'];
 		const cabin = write({ inputs: { ...INPUTS, mount: inCabin } });
 		expect(cabin.paragraphs.join(' ')).not.toContain('maker');
+	});
+
+	it.each(['rides-it-out', 'runs-close', 'cuts-out'] as const)(
+		'never recommends what the maker does not allow, but says that somebody decided it (%s)',
+		(verdict) => {
+			const { advice } = write({}, { ...STAYS_ON, verdict }, { underBonnet: 'excluded' });
+			expect(advice).not.toContain('We recommend');
+			expect(advice).toContain('The battery’s maker does not allow it under the bonnet');
+			expect(advice).toContain('by a decision that is written here');
+		}
+	);
+
+	it('recommends elsewhere, whatever the maker says about the bonnet', () => {
+		const mount = { ...INPUTS.mount, survey: { positionKind: 'cabin' } } as AssessmentInputs['mount'];
+		const battery = { ...INPUTS.battery, underBonnet: 'excluded' as const };
+		const { advice } = write(
+			{ inputs: { ...INPUTS, mount, battery } },
+			{ ...STAYS_ON, verdict: 'rides-it-out' }
+		);
+		expect(advice).toBe('We recommend this position.');
+	});
+
+	it('says what the check before drilling left open', () => {
+		const item = (label: string, state: 'failed' | 'unanswered', note = '') => ({
+			...{ key: label, label, state, note }
+		});
+		const open = [
+			...[item('Clearances', 'unanswered'), item('Fuse', 'failed', 'None yet.')],
+			item('Terminals', 'unanswered')
+		];
+		const check = { open, signedBy: null, signedAt: null };
+		expect(write({ preDrill: check }).beforeDrilling).toEqual([
+			'Fuse: not in order yet. None yet.',
+			'Not looked at yet: clearances and terminals.'
+		]);
+		expect(write({ preDrill: { ...check, open: [] } }).beforeDrilling).toEqual([]);
 	});
 
 	it('counts every dark stretch of the day', () => {

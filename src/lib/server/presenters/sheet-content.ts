@@ -5,6 +5,8 @@ import { dayLimitsOf } from '$lib/format/heat-limits';
 import { formatNumber, formatTemperature } from '$lib/format/numbers';
 import { formatClock, formatClockHour, formatHours, sayHours } from '$lib/format/time';
 import type { AssessmentInputs, AssessmentResult } from '$lib/schemas/assessments';
+import { isExcludedAt } from '$lib/schemas/batteries';
+import type { PreDrillSnapshot } from '$lib/schemas/pre-drill';
 import type { SheetContent, SheetRibbon } from '$lib/schemas/sheets';
 import type { Verdict } from '$lib/schemas/verdicts';
 import { guardOf, type CutOffs, type HeatGuard } from '$lib/thermal/chemistries';
@@ -12,10 +14,11 @@ import type { Sensor } from '$lib/thermal/types';
 import { listLeadAcidSheetFigures, sayLeadAcid } from './lead-acid-sheet';
 import { makerCaution } from './report-inputs';
 import { writeSheetDots } from './sheet-dots';
+import { sayBeforeDrilling } from './sheet-pre-drill';
 import { writeSheetOutlook, type SheetBeside } from './sheet-outlook';
 
 /** Changes with every change of the sheet's own words: an acknowledgement is tied to what was read. */
-export const SHEET_WORDS_VERSION = 5;
+export const SHEET_WORDS_VERSION = 6;
 
 /** What a sheet is written from. */
 export interface SheetSource {
@@ -23,9 +26,13 @@ export interface SheetSource {
 	preparedBy: string;
 	preparedAt: Date;
 	assessmentId: number;
+	/** As the customer is called on the day that it is written. */
+	customerName: string;
 	inputs: AssessmentInputs;
 	result: AssessmentResult;
 	override: SheetContent['override'];
+	/** The check before drilling as it stood when it was recommended. */
+	preDrill: PreDrillSnapshot | null;
 	/** As they were issued with the recommendation; null for those from before they were kept. */
 	cautions: SheetContent['cautions'] | null;
 	/** The newest answer for each other position of the job. */
@@ -98,15 +105,25 @@ const ADVICE: Record<HeatGuard['kind'], Record<Verdict, string>> = {
 		'rides-it-out': 'We recommend this position.',
 		'runs-close':
 			'We recommend this position, with little to spare: on a hotter or longer day than this one the fridge may go dark. Ask us what would give it more room.',
-		'cuts-out': `On a day like this the position does not keep the fridge on. ${DECIDED}`
+		'cuts-out': 'On a day like this the position does not keep the fridge on.'
 	},
 	'heat-limits': {
 		'rides-it-out': 'We recommend this position.',
 		'runs-close':
 			'We recommend this position, with little to spare: on a hotter or longer day than this one the battery may get hotter than its maker allows. Ask us what would give it more room.',
-		'cuts-out': `On a day like this the battery gets hotter here than its maker allows. ${DECIDED}`
+		'cuts-out': 'On a day like this the battery gets hotter here than its maker allows.'
 	}
 };
+
+const MAKER_FORBIDS = 'The battery’s maker does not allow it under the bonnet, however it stands the heat.';
+
+/** What the shop says to it; against the verdict or the maker's word it recommends nothing, and names who decided. */
+function sayAdvice({ inputs: { battery, mount }, result: { verdict } }: SheetSource): string {
+	const isExcluded = isExcludedAt(battery, mount.survey.positionKind);
+	const ofHeat = ADVICE[guardOf(battery).kind][verdict];
+	if (verdict !== 'cuts-out') return isExcluded ? `${MAKER_FORBIDS} ${DECIDED}` : ofHeat;
+	return [ofHeat, ...(isExcluded ? [MAKER_FORBIDS] : []), DECIDED].join(' ');
+}
 
 function sayDark({ darkHours, cutAtHour, resetAtHour, darkSpans }: AssessmentResult): string {
 	if (darkHours === 0 || cutAtHour === null) return 'not at all';
@@ -170,7 +187,7 @@ function sayMaker({ inputs }: SheetSource): string[] {
 
 /** Writes the customer's page in plain words, once: what is stored is what everybody reads from then on. */
 export function writeSheetContent(source: SheetSource): SheetContent {
-	const { inputs, result, workshop, preparedBy, override, assessmentId } = source;
+	const { inputs, result, workshop, preparedBy, override, assessmentId, customerName } = source;
 	const { vehicle, battery } = inputs;
 	const dots = writeSheetDots(source.beside.outlook.day, battery.chemistry);
 	const { headline, sentence: summary } = describeVerdict(
@@ -178,10 +195,9 @@ export function writeSheetContent(source: SheetSource): SheetContent {
 		'customer'
 	);
 	return {
-		...{ workshop, preparedBy, override, assessmentId },
+		...{ workshop, preparedBy, override, assessmentId, customerName },
 		preparedOn: formatDate(source.preparedAt),
 		jobNumber: inputs.jobNumber,
-		customerName: inputs.customerName,
 		vehicle: `${vehicle.make} ${vehicle.model}, ${vehicle.modelYear}`,
 		chemistry: battery.chemistry,
 		battery: `${battery.maker} ${battery.model}, ${formatNumber(battery.capacityAh)} Ah`,
@@ -191,7 +207,8 @@ export function writeSheetContent(source: SheetSource): SheetContent {
 		headline,
 		summary,
 		paragraphs: [...sayMaker(source), sayTheDay(source), ...sayWhyLater(source), ...sayGuard(source)],
-		advice: ADVICE[guardOf(battery).kind][result.verdict],
+		advice: sayAdvice(source),
+		beforeDrilling: sayBeforeDrilling(source.preDrill),
 		alternatives: source.others,
 		figures: listFigures(source),
 		outlook: writeSheetOutlook({

@@ -6,6 +6,7 @@ import type {
 	MountOutcome,
 	Reproduction
 } from '$lib/schemas/assessments';
+import { isExcludedAt } from '$lib/schemas/batteries';
 import type { SignedInPerson } from '$lib/schemas/people';
 import { ENGINE_VERSION } from '$lib/thermal';
 import { heatLimitsOf } from '$lib/thermal/chemistries';
@@ -35,7 +36,7 @@ async function findAssessment(person: SignedInPerson, assessmentId: number): Pro
 	return assessment;
 }
 
-/** Whether assessing its mount now would run the very same scenario on the same engine, with the same year, cable and limits. */
+/** Whether assessing its mount now would run the very same scenario on the same engine, with the same year, cable, limits and word of the maker. */
 async function isCurrent(person: SignedInPerson, assessment: Assessment): Promise<boolean> {
 	if (assessment.engineVersion !== ENGINE_VERSION) return false;
 	const { workshopId } = person;
@@ -46,9 +47,10 @@ async function isCurrent(person: SignedInPerson, assessment: Assessment): Promis
 	const now = gatherInputs(parts, mount, await bookInForce(person, caseOf(parts, mount)));
 	// Beside what an older assessment did not keep there is nothing to compare.
 	const withYear = assessment.inputs.touring !== undefined;
-	const judged = ({ scenario, battery, cable, touring }: AssessmentInputs): string =>
+	const judged = ({ scenario, battery, cable, touring, mount: { survey } }: AssessmentInputs): string =>
 		canonicalJson({
 			...{ scenario, limits: heatLimitsOf(battery), cable: cable ?? null },
+			isExcluded: isExcludedAt(battery, survey.positionKind),
 			...(withYear && touring ? { months: touring.months, daysOnRoad: touring.daysOnRoad } : {})
 		});
 	return judged(now) === judged(assessment.inputs);

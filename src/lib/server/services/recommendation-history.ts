@@ -1,5 +1,5 @@
 import type { RecommendationView } from '$lib/schemas/recommendations';
-import { Assessment, Installation, Person, Recommendation, type Mount } from '../db/models';
+import { Assessment, type Customer, Installation, type Mount, Person, Recommendation } from '../db/models';
 
 /** The recommendation that a fitting is held against. */
 export const findFittedUnder = async ({
@@ -18,6 +18,16 @@ export async function listOfMount({
 		where: { jobId, workshopId, assessmentId: assessments.map(({ id }) => id) },
 		order: [['id', 'DESC']]
 	});
+}
+
+/** Whom a recommendation is made out to, and what that customer is called since, where it is another name. */
+export async function findAddressee(
+	{ madeOutTo: kept, assessmentId }: Recommendation,
+	{ name }: Customer
+): Promise<Pick<RecommendationView, 'madeOutTo' | 'customerNow'>> {
+	const madeOutTo =
+		kept ?? (await Assessment.findByPk(assessmentId, { attributes: ['inputs'] }))!.inputs.customerName;
+	return { madeOutTo, customerNow: name === madeOutTo ? null : name };
 }
 
 /** What became of a recommendation after it was made. */

@@ -1,9 +1,10 @@
 import { Op } from 'sequelize';
-import { sayVerdict } from '$lib/format/verdict';
+import { sayAgainst } from '$lib/format/recommendations';
 import type { AssessmentView, MountOutcome } from '$lib/schemas/assessments';
 import type { SignedInPerson } from '$lib/schemas/people';
 import {
 	FEWEST_CHARACTERS,
+	findAgainst,
 	type RecommendationDocument,
 	type RecommendationInput,
 	type RecommendationView
@@ -18,7 +19,7 @@ import { recordBy } from './audit';
 import { listIssuedCautions } from './caution-texts';
 import { WITHOUT_TEXTS, newestByMount, updateJobOutcome } from './job-outcome';
 import { snapshotPreDrill } from './pre-drill';
-import { findAftermath } from './recommendation-history';
+import { findAddressee, findAftermath } from './recommendation-history';
 import { findLogo, headOf } from './shop';
 import { refreshReview } from './review/keep-review';
 
@@ -28,11 +29,13 @@ async function show(recommendation: Recommendation): Promise<RecommendationView>
 	const author = await Person.findByPk(createdBy);
 	const assessment = await Assessment.findByPk(assessmentId, { attributes: WITHOUT_TEXTS });
 	const [row] = assessment ? await presentRows([assessment]) : [];
-	if (!job || !row) throw notFound('recommendation');
+	const customer = job && (await Customer.findByPk(job.customerId));
+	if (!customer || !row) throw notFound('recommendation');
 	return presentRecommendation(recommendation, {
 		jobNumber: job.number,
 		assessment: row,
 		recommendedBy: author?.name ?? '',
+		...(await findAddressee(recommendation, customer)),
 		...(await findAftermath(recommendation, row.mountId))
 	});
 }
@@ -40,28 +43,29 @@ async function show(recommendation: Recommendation): Promise<RecommendationView>
 const OVERRIDE_WORDS = {
 	decidedBy: {
 		label: 'Who decided',
-		missing: (verdict: string) => `Say who decided to go ahead although it ${verdict}.`
+		missing: (against: string) => `Say who decided to go ahead although ${against}.`
 	},
-	reason: { label: 'Reason', missing: (verdict: string) => `Say why it goes ahead although it ${verdict}.` }
+	reason: { label: 'Reason', missing: (against: string) => `Say why it goes ahead although ${against}.` }
 } as const;
 
 /** What is wrong with one of the two answers, or nothing. */
-function refuseWords(path: keyof typeof OVERRIDE_WORDS, given: string, verdict: string): FieldProblem[] {
+function refuseWords(path: keyof typeof OVERRIDE_WORDS, given: string, against: string): FieldProblem[] {
 	const [fewest, { label, missing }] = [FEWEST_CHARACTERS[path], OVERRIDE_WORDS[path]];
 	if (given.length >= fewest) return [];
 	const tooShort = `${label} must have at least ${fewest} characters: “${given}” has ${given.length}.`;
-	return [{ path, message: given === '' ? missing(verdict) : tooShort, limit: `at least ${fewest}` }];
+	return [{ path, message: given === '' ? missing(against) : tooShort, limit: `at least ${fewest}` }];
 }
 
-/** Against "cuts out", the two answers that it takes; for any other verdict, nobody decides against anything. */
-function readOverride({ verdict, chemistry }: AssessmentView, input: RecommendationInput) {
-	if (verdict !== 'cuts-out') return { againstVerdict: false, decidedBy: null, reason: null };
+/** Against "cuts out" or the maker's word, the two answers that it takes; else nobody decides against anything. */
+function readOverride(assessment: AssessmentView, input: RecommendationInput) {
+	const against = findAgainst(assessment);
+	const words = sayAgainst(against, assessment);
+	if (words === '') return { ...against, decidedBy: null, reason: null };
 	const decidedBy = input.decidedBy?.trim() ?? '';
 	const reason = input.reason?.trim() ?? '';
-	const words = sayVerdict(verdict, chemistry);
 	const problems = [...refuseWords('decidedBy', decidedBy, words), ...refuseWords('reason', reason, words)];
 	if (problems.length > 0) throw new AppError('invalid_input', problems[0]!.message, problems);
-	return { againstVerdict: true, decidedBy, reason };
+	return { ...against, decidedBy, reason };
 }
 
 function requireCurrent({ isCurrent, id }: AssessmentView): void {
@@ -72,7 +76,7 @@ function requireCurrent({ isCurrent, id }: AssessmentView): void {
 	);
 }
 
-/** Recommends what was assessed, and keeps it for good. Going ahead against "cuts out" takes a person and a reason. */
+/** Recommends what was assessed, and keeps it for good. Going ahead against "cuts out" or the maker's word takes a person and a reason. */
 export async function makeRecommendation(
 	person: SignedInPerson,
 	input: RecommendationInput
@@ -85,11 +89,12 @@ export async function makeRecommendation(
 		const { workshopId } = person;
 		const job = await Job.findOne({ where: { id: assessment.jobId, workshopId }, lock: true });
 		if (!job) throw notFound('job');
+		const { name: madeOutTo } = (await Customer.findByPk(job.customerId))!;
 		const preDrill = await snapshotPreDrill(person, assessment.mountId);
 		const cautions = await listIssuedCautions(workshopId, person.workshopName, assessment.chemistry);
 		const made = { workshopId, jobId: job.id, assessmentId: assessment.id, createdBy: person.id };
 		const recommendation = await Recommendation.create(
-			{ ...made, ...override, preDrill, cautions },
+			{ ...made, ...override, madeOutTo, preDrill, cautions },
 			{ transaction }
 		);
 		await updateJobOutcome(job, transaction, 'recommended');

@@ -106,6 +106,11 @@ import { migration as m186 } from './186-installations-recommendation-known';
 import { migration as m187 } from './187-field-note-findings';
 import { migration as m188 } from './188-field-note-findings-no-update';
 import { migration as m189 } from './189-field-note-findings-no-delete';
+import { migration as m190 } from './190-recommendations-against-maker';
+import { migration as m191 } from './191-recommendations-reasoned';
+import { migration as m192 } from './192-recommendations-made-out-to';
+import { migration as m193 } from './193-recommendations-against-stays';
+import { migration as m194 } from './194-erasures-withdrawn';
 import type { Migration } from '../migrate';
 
 /** Every migration, in the order in which they run; each is one DDL step that may run again. */
@@ -218,4 +223,9 @@ export const migrations: Migration[] = [
 	m187,
 	m188,
 	m189
+	m190,
+	m191,
+	m192,
+	m193,
+	m194
 ];

@@ -18,8 +18,12 @@ export class Recommendation extends Model<
 	declare jobId: number;
 	declare assessmentId: number;
 	declare againstVerdict: boolean;
+	/** The maker does not allow it there; asked only since somebody has to answer for it. */
+	declare againstMaker: CreationOptional<boolean>;
 	declare decidedBy: string | null;
 	declare reason: string | null;
+	/** Whom the paper names; null for those that name whom their assessment names. */
+	declare madeOutTo: CreationOptional<string | null>;
 	/** The check before drilling as it stood; null for those that were made before there was one. */
 	declare preDrill: CreationOptional<PreDrillSnapshot | null>;
 	/** The cautions as they read when it was issued; null for those from before they were kept. */
@@ -36,8 +40,10 @@ export function initRecommendation(sequelize: Sequelize): void {
 			jobId: reference,
 			assessmentId: reference,
 			againstVerdict: flag,
+			againstMaker: { ...flag, defaultValue: false },
 			decidedBy: optionalText,
 			reason: optionalText,
+			madeOutTo: optionalText,
 			preDrill: optionalJson,
 			cautions: optionalJson,
 			createdBy: reference,

@@ -10,7 +10,7 @@ export const recommendationOperations = {
 		path: '/api/v1/recommendations',
 		action: 'recommendations.write',
 		summary:
-			'Recommends an assessed mount; against "cuts out" it takes the name of who decided, and a reason.',
+			'Recommends an assessed mount; against "cuts out" or the word of the battery’s maker it takes the name of who decided, and a reason.',
 		body: recommendationInputSchema,
 		answer: recommendationSchema,
 		status: 201

@@ -85,9 +85,10 @@ const eraseFromPapers: Step = async ({ ids, scrub }, transaction) => {
 	const where = { jobId: ids.jobs };
 	await rewrite(
 		await Recommendation.findAll({ where, transaction }),
-		({ decidedBy, reason, preDrill }) => ({
+		({ decidedBy, reason, madeOutTo, preDrill }) => ({
 			decidedBy: decidedBy === null ? null : scrub.free(decidedBy),
 			reason: reason === null ? null : scrub.free(reason),
+			madeOutTo: (madeOutTo ?? null) === null ? null : ERASED,
 			preDrill: scrub.freeJson(preDrill ?? null)
 		}),
 		transaction

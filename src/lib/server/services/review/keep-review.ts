@@ -28,7 +28,7 @@ const SOURCES = `
 		COALESCE(p.own_zone_id, 0) AS ownZoneId,
 		(SELECT CAST(MIN(f.due_on) AS CHAR) FROM follow_ups f
 			WHERE f.installation_id = i.id AND f.done_on IS NULL) AS nextDueOn,
-		r.id AS recommendationId, COALESCE(r.against_verdict, 0) AS againstVerdict,
+		r.id AS recommendationId, COALESCE(r.against_verdict OR r.against_maker, 0) AS againstVerdict,
 		(SELECT MAX(s.id) FROM sheets s JOIN recommendations sr ON sr.id = s.recommendation_id
 			WHERE s.job_id = i.job_id AND sr.assessment_id = i.assessment_id AND s.withdrawn_at IS NULL) AS sheetId,
 		EXISTS (SELECT 1 FROM sheets s JOIN recommendations sr ON sr.id = s.recommendation_id

@@ -1,4 +1,5 @@
 import { stringify } from 'csv-stringify/sync';
+import { nameAgainst } from '$lib/format/recommendations';
 import { formatVerdict } from '$lib/format/verdict';
 import { CHANCE_WORDS, SHEET_WORDS } from '$lib/format/review-words';
 import type { SignedInPerson } from '$lib/schemas/people';
@@ -27,6 +28,7 @@ const COLUMNS: Record<string, (row: ReviewInstallation) => string | number> = {
 	'Reported dark days': ({ reportedDays }) => reportedDays,
 	'Next look due on': ({ nextDueOn }) => nextDueOn ?? '',
 	'Days overdue': ({ overdueDays }) => overdueDays,
+	'Went ahead against': ({ override }) => (override ? nameAgainst(override) : ''),
 	'Went ahead by': ({ override }) => override?.decidedBy ?? '',
 	'Entered by': ({ override }) => override?.enteredBy ?? '',
 	Reason: ({ override }) => override?.reason ?? '',

@@ -82,7 +82,7 @@ const enter = ({ column }: Order): string => `FORCE INDEX (${ENTRIES[column]})`;
 /** Of whom each row tells is looked up for the rows of the page alone. */
 const page = (where: string, order: Order, isFirst: boolean): string => `
 	SELECT r.*, j.number AS jobNumber, m.letter, m.name AS mountName, c.name AS customer, v.make, v.model,
-		p.name AS place, a.chemistry, n.decided_by AS decidedBy, n.reason, e.name AS enteredBy, CAST(DATE(s.created_at) AS CHAR) AS sheetSentOn,
+		p.name AS place, a.chemistry, n.against_verdict AS overVerdict, n.against_maker AS overMaker, n.decided_by AS decidedBy, n.reason, e.name AS enteredBy, CAST(DATE(s.created_at) AS CHAR) AS sheetSentOn,
 		l.id AS laterId, CAST(DATE(l.created_at) AS CHAR) AS laterOn, w.name AS laterBy
 	FROM (
 		SELECT * FROM review_rows ${isFirst ? '' : enter(order)} WHERE ${where}
@@ -135,6 +135,8 @@ function present(stored: StoredRow, kind: ReviewScope['kind'], now: string): Rev
 		override: row.againstVerdict
 			? {
 					...{ decidedBy: text('decidedBy'), reason: text('reason') },
+					againstVerdict: Number(stored.overVerdict) === 1,
+					againstMaker: Number(stored.overMaker) === 1,
 					enteredBy: findEntrant(text('decidedBy'), text('enteredBy'))
 				}
 			: null,

@@ -27,6 +27,7 @@ export interface ReviewSource {
 	darkDays: readonly { on: string; isHeat: boolean }[];
 	nextDueOn: string | null;
 	recommendationId: number | null;
+	/** Or against the word of the battery's maker: somebody answers for it by name. */
 	againstVerdict: boolean;
 	sheetId: number | null;
 	isAcknowledged: boolean;

@@ -1,6 +1,11 @@
 import { error } from '@sveltejs/kit';
 import type { SignedInPerson } from '$lib/schemas/people';
-import { recommendationInputSchema, type RecommendationView } from '$lib/schemas/recommendations';
+import {
+	findAgainst,
+	isUndecided,
+	recommendationInputSchema,
+	type RecommendationView
+} from '$lib/schemas/recommendations';
 import { loadForm, saveForm } from '$lib/server/http/forms';
 import { guard, orPageError } from '$lib/server/http/guard';
 import { pageId } from '$lib/server/http/page-id';
@@ -21,7 +26,7 @@ async function loadChosen(person: SignedInPerson, jobId: number, asked: string |
 	const preDrill = await snapshotPreDrill(person, mountId);
 	return {
 		...{ id, mountId, mountLetter, mountName, chemistry, verdict, headroomK, isCurrent },
-		...{ sentence, maker, preDrill }
+		...{ sentence, maker, preDrill, against: findAgainst(assessment) }
 	};
 }
 
@@ -29,7 +34,12 @@ async function loadChosen(person: SignedInPerson, jobId: number, asked: string |
 async function loadStanding(person: SignedInPerson, recommendation: RecommendationView | undefined) {
 	if (!recommendation) return null;
 	const assessment = await getAssessment(person, recommendation.assessment.id);
-	return { ...recommendation, isCurrent: assessment.isCurrent, maker: presentReport(assessment).maker };
+	return {
+		...recommendation,
+		isCurrent: assessment.isCurrent,
+		isUndecided: isUndecided(recommendation, assessment),
+		maker: presentReport(assessment).maker
+	};
 }
 
 export const load: PageServerLoad = async (event) => {

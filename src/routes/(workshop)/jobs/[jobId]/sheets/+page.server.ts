@@ -1,6 +1,7 @@
 import { error, fail, redirect, type RequestEvent } from '@sveltejs/kit';
 import { idSchema } from '$lib/schemas/fields';
 import type { SignedInPerson } from '$lib/schemas/people';
+import { isUndecided } from '$lib/schemas/recommendations';
 import { sendSheetFormSchema } from '$lib/schemas/sheets';
 import { AppError } from '$lib/server/errors';
 import { saveEdited } from '$lib/server/http/edit-form';
@@ -33,6 +34,7 @@ export const load: PageServerLoad = async (event) => {
 	const asked = idSchema.safeParse(event.url.searchParams.get('withdraw') ?? undefined).data;
 	return {
 		...{ job, recommendation, sheets },
+		isUndecided: recommendation !== null && assessment !== null && isUndecided(recommendation, assessment),
 		isOutOfDate: assessment?.isCurrent === false,
 		toWithdraw: sheets.find(({ id, withdrawnAt }) => id === asked && withdrawnAt === null) ?? null,
 		form: await loadForm(sendSheetFormSchema, {
