@@ -188,7 +188,7 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 	page('/erasures', 'manager', 'default'),
 
 	page('/my', 'customer'),
-	page('/my/data', 'customer', 'default'),
+	page('/my/data', 'customer', 'ask', 'withdraw'),
 	page('/my/data.zip', 'customer'),
 	owned('/my/[sheetId]', 'customer', 'acknowledge', 'ask', 'send'),
 	owned('/my/handover/[mountId].pdf', 'customer'),
@@ -256,6 +256,7 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 	}),
 	api('/my/data', 'customer', 'GET'),
 	api('/my/erasure', 'customer', 'POST'),
+	api('/my/erasure/withdrawal', 'customer', 'POST'),
 	api('/books', 'bench', 'GET', 'POST'),
 	ownedApi('/books/[bookId]', 'bench', { GET: null }),
 	ownedApi('/books/[bookId]/state', 'bench', { PUT: { to: 'on-trial', version: 0 } }),

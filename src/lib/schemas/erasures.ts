@@ -5,7 +5,7 @@ import { sentLetterSchema } from './letters';
 /** Stands where something of a person stood. */
 export const ERASED = '(erased)';
 
-export const ERASURE_STATES = ['asked', 'granted', 'refused'] as const;
+export const ERASURE_STATES = ['asked', 'granted', 'refused', 'withdrawn'] as const;
 export type ErasureState = (typeof ERASURE_STATES)[number];
 
 /** A customer asks that what is held about them be deleted. */
@@ -59,7 +59,8 @@ export type ErasureView = z.infer<typeof erasureSchema>;
 export const myErasureSchema = z.object({
 	state: z.enum(ERASURE_STATES),
 	askedAt: z.iso.datetime(),
-	reason: z.string()
+	reason: z.string(),
+	canWithdraw: z.boolean().meta({ description: 'While it waits, where they asked for it themselves' })
 });
 export type MyErasure = z.infer<typeof myErasureSchema>;
 

@@ -9,6 +9,7 @@ export const LETTER_KINDS = {
 	'verdict-changed': 'A verdict that changed',
 	reminder: 'Reminder of a follow-up',
 	'erasure-asked': 'A customer asks for deletion',
+	'erasure-withdrawn': 'A customer takes back a request for deletion',
 	'erasure-refused': 'A request for deletion, refused',
 	'erasure-granted': 'A request for deletion, done',
 	'sign-in': 'Link to sign in',

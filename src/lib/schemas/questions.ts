@@ -22,5 +22,9 @@ const messageFields = {
 };
 
 /** A question with what the shop answered, oldest first. */
-export const questionSchema = z.object({ ...messageFields, answers: z.array(z.object(messageFields)) });
+export const questionSchema = z.object({
+	...messageFields,
+	answers: z.array(z.object(messageFields)),
+	takesAnswers: z.boolean().meta({ description: 'No once the customer’s data was deleted' })
+});
 export type Question = z.infer<typeof questionSchema>;

@@ -19,6 +19,18 @@ export function writeErasureAsked(workshop: Shop, href: string): LaidOutLetter {
 	});
 }
 
+/** Tells the shop that nothing is to be decided any more. It names no one, as the one before did not. */
+export function writeErasureWithdrawn(workshop: Shop, href: string): LaidOutLetter {
+	return layOutLetter({
+		subject: 'A customer takes back a request for deletion',
+		from: workshop.name,
+		parts: [
+			'A customer who had asked that what is held about them be deleted has taken that back. Nothing is to be decided, and nothing is deleted.',
+			{ href, words: 'See the requests' }
+		]
+	});
+}
+
 export function writeErasureRefused(name: string, workshop: Shop, reason: string): LaidOutLetter {
 	const reach = sayReach(workshop);
 	return layOutLetter({

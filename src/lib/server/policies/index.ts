@@ -32,6 +32,7 @@ export const RULES = {
 	'questions.ask': ['customer'],
 	'held-data.read-own': ['customer'],
 	'erasures.ask': ['customer'],
+	'erasures.withdraw': ['customer'],
 	'erasures.decide': ['manager'],
 	'books.read': BENCH,
 	'books.write': BENCH,

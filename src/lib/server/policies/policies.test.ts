@@ -40,6 +40,7 @@ const EXPECTED: Record<Action, string> = {
 	'questions.ask': 'c',
 	'held-data.read-own': 'c',
 	'erasures.ask': 'c',
+	'erasures.withdraw': 'c',
 	'erasures.decide': 'm',
 	'books.read': 'em',
 	'books.write': 'em',

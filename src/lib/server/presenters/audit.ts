@@ -25,6 +25,7 @@ export const DID = {
 	'customer.erased': 'had a customer’s data deleted',
 	'customer.erasure-asked': 'asked for deletion',
 	'customer.erasure-refused': 'refused a request for deletion',
+	'customer.erasure-withdrawn': 'took back their request for deletion',
 	'customer.reminders-stopped': 'stopped the reminders',
 	'customer.reminders-wanted': 'wanted the reminders again',
 	'day-plan.changed': 'changed a day plan',

@@ -24,5 +24,6 @@ export function presentErasure(
 export const presentMyErasure = (erasure: Erasure): MyErasure => ({
 	state: stateOf(erasure),
 	askedAt: erasure.createdAt.toISOString(),
-	reason: erasure.reason
+	reason: erasure.reason,
+	canWithdraw: erasure.state === 'asked' && (erasure.askedBy ?? null) !== null
 });

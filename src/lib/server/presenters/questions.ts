@@ -7,11 +7,12 @@ const presentMessage = ({ id, authorName, createdAt, body }: CustomerMessage) =>
 });
 
 /** The messages of a job as questions with their answers, in the order in which they were written. */
-export function presentQuestions(messages: readonly CustomerMessage[]): Question[] {
+export function presentQuestions(messages: readonly CustomerMessage[], isErased: boolean): Question[] {
 	return messages
 		.filter(({ questionId }) => (questionId ?? null) === null)
 		.map((question) => ({
 			...presentMessage(question),
-			answers: messages.filter(({ questionId }) => questionId === question.id).map(presentMessage)
+			answers: messages.filter(({ questionId }) => questionId === question.id).map(presentMessage),
+			takesAnswers: !isErased
 		}));
 }

@@ -5,7 +5,12 @@ import { Customer, Erasure, Job, OutgoingMail, Person, Vehicle, Workshop } from 
 import { inTransaction } from '../db/transaction';
 import { env } from '../env';
 import { AppError, notFound } from '../errors';
-import { writeErasureAsked, writeErasureGranted, writeErasureRefused } from '../mail/erasure-letters';
+import {
+	writeErasureAsked,
+	writeErasureGranted,
+	writeErasureRefused,
+	writeErasureWithdrawn
+} from '../mail/erasure-letters';
 import { postLetter } from '../mail/outbox';
 import { allow } from '../policies';
 import { presentErasure, presentMyErasure } from '../presenters/erasures';
@@ -56,13 +61,19 @@ export async function getMyErasure(person: SignedInPerson): Promise<MyErasure | 
 	return newest && presentMyErasure(newest);
 }
 
-async function tellShop(workshopId: number, transaction: Transaction): Promise<void> {
+const TO_SHOP = { 'erasure-asked': writeErasureAsked, 'erasure-withdrawn': writeErasureWithdrawn };
+
+async function tellShop(
+	workshopId: number,
+	kind: keyof typeof TO_SHOP,
+	transaction: Transaction
+): Promise<void> {
 	const workshop = (await Workshop.findByPk(workshopId, { transaction }))!;
 	const manager = await Person.findOne({ where: { workshopId, role: 'manager', active: true }, transaction });
 	const recipient = workshop.email || manager?.email;
 	if (!recipient) return;
-	const letter = writeErasureAsked(workshop, `${env().ORIGIN}/erasures`);
-	await postLetter({ ...letter, kind: 'erasure-asked', workshopId, recipient }, transaction);
+	const letter = TO_SHOP[kind](workshop, `${env().ORIGIN}/erasures`);
+	await postLetter({ ...letter, kind, workshopId, recipient }, transaction);
 }
 
 /** A customer asks that what is held about them be deleted; to ask again while that waits changes nothing. */
@@ -78,9 +89,36 @@ export async function askErasure(person: SignedInPerson): Promise<MyErasure> {
 		if (waiting) return presentMyErasure(waiting);
 		const row = { workshopId, customerId: customer.id, askedBy: person.id };
 		const erasure = await Erasure.create(row, { transaction });
-		await tellShop(workshopId, transaction);
+		await tellShop(workshopId, 'erasure-asked', transaction);
 		const subject = { type: 'customer', id: customer.id };
 		await recordBy(person, 'customer.erasure-asked', subject, transaction);
+		return presentMyErasure(erasure);
+	});
+}
+
+const NOTHING_WAITS =
+	'No request of yours waits for a decision. What was granted is deleted and cannot be undone.';
+
+/** A customer takes back their own request while it waits; the shop is told, as it was told of the request. */
+export async function withdrawErasure(person: SignedInPerson): Promise<MyErasure> {
+	const { workshopId, customerId } = allow(person, 'erasures.withdraw');
+	return inTransaction(async (transaction) => {
+		const erasure = await Erasure.findOne({
+			where: { customerId: customerId!, state: 'asked', askedBy: { [Op.not]: null } },
+			transaction,
+			lock: transaction.LOCK.UPDATE
+		});
+		if (!erasure) throw new AppError('conflict', NOTHING_WAITS);
+		await saveVersioned(
+			erasure,
+			'request',
+			erasure.version,
+			{ state: 'withdrawn', decidedAt: new Date() },
+			transaction
+		);
+		await tellShop(workshopId, 'erasure-withdrawn', transaction);
+		const subject = { type: 'customer', id: customerId! };
+		await recordBy(person, 'customer.erasure-withdrawn', subject, transaction, { erasureId: erasure.id });
 		return presentMyErasure(erasure);
 	});
 }
@@ -156,6 +194,8 @@ export async function decideErasure(
 		const where = { id: erasureId, workshopId: person.workshopId };
 		const erasure = await Erasure.findOne({ where, transaction, lock: transaction.LOCK.UPDATE });
 		if (!erasure) throw notFound('request');
+		if (erasure.state === 'withdrawn')
+			throw new AppError('conflict', 'The customer has taken this request back.');
 		if (erasure.state !== 'asked') throw new AppError('conflict', 'This request was decided already.');
 		await saveVersioned(erasure, 'request', version, {}, transaction);
 		const customer = (await Customer.findByPk(erasure.customerId, { transaction }))!;

@@ -24,6 +24,7 @@ const OF_NO_JOB: Partial<Record<LetterKind, Action>> = {
 	invitation: 'people.write',
 	'second-factor': 'people.write',
 	'erasure-asked': 'erasures.decide',
+	'erasure-withdrawn': 'erasures.decide',
 	'erasure-refused': 'erasures.decide',
 	'erasure-granted': 'erasures.decide'
 };

@@ -5,12 +5,12 @@ import { spend } from '../auth/rate-limit';
 import { CustomerMessage, Job, Person, Sheet, Workshop } from '../db/models';
 import { inTransaction } from '../db/transaction';
 import { env } from '../env';
-import { notFound } from '../errors';
+import { AppError, notFound } from '../errors';
 import { postLetter } from '../mail/outbox';
 import { writeAnswerLetter, writeQuestionLetter } from '../mail/question-letters';
 import { allow } from '../policies';
 import { record, recordBy } from './audit';
-import { readThread } from './question-threads';
+import { isCustomerErased, readThread } from './question-threads';
 import { findLinkedSheet, findMySheet } from './sheet-readers';
 
 /** Enough for any conversation, too few to fill anybody's mailbox. */
@@ -104,6 +104,8 @@ async function findAsker({ personId }: CustomerMessage, sheet: Sheet): Promise<s
 	return asker?.email ?? sheet.sentTo;
 }
 
+const NOBODY_THERE = 'This customer’s data was deleted as they asked: nobody is there to be answered.';
+
 /** Answers a question for good: by e-mail, and on the customer's page. */
 export async function answerQuestion(
 	person: SignedInPerson,
@@ -117,6 +119,7 @@ export async function answerQuestion(
 		const sheet = question?.sheetId ? await Sheet.findByPk(question.sheetId, { transaction }) : null;
 		if (!question || !sheet) throw notFound('question');
 		const { workshopId, jobId, authorName: askedBy, body } = question;
+		if (await isCustomerErased(jobId)) throw new AppError('conflict', NOBODY_THERE);
 		const { id } = await CustomerMessage.create(
 			{ workshopId, jobId, questionId, personId: person.id, authorName: person.name, body: answer },
 			{ transaction }

@@ -38,13 +38,13 @@ export async function findAged(workshopId: number, years: Years, now = today()):
 /** What waits or was granted; a refusal holds for a year, for its reason may be over by then. */
 const stillAnswers = (now: string) => ({
 	[Op.or]: [
-		{ state: { [Op.ne]: 'refused' } },
+		{ state: { [Op.notIn]: ['refused', 'withdrawn'] } },
 		{ decidedAt: { [Op.gte]: new Date(`${addMonths(now, -12)}T00:00:00Z`) } }
 	]
 });
 
 /**
- * Puts those whom the rule of their shop reaches on the list of requests, once each, or again a year after a refusal; a manager decides there. Nothing is
+ * Puts those whom the rule of their shop reaches on the list of requests, once each, or again a year after a refusal or after one was taken back; a manager decides there. Nothing is
  * deleted unseen: a customer who calls after years may still have a battery under warranty. Says how many are new.
  */
 export async function askForAged(now = today()): Promise<number> {

@@ -35,6 +35,15 @@ export const erasureOperations = {
 		answer: myErasureSchema,
 		status: 201
 	}),
+	withdraw: defineOperation({
+		id: 'withdrawErasure',
+		method: 'POST',
+		path: '/api/v1/my/erasure/withdrawal',
+		action: 'erasures.withdraw',
+		summary: 'A signed-in customer takes back their request for deletion while it waits.',
+		answer: myErasureSchema,
+		status: 200
+	}),
 	data: defineOperation({
 		id: 'getHeldData',
 		method: 'GET',

@@ -163,7 +163,7 @@ const eraseFromTraces: Step = async ({ ids, scrub }, transaction) => {
 	);
 };
 
-const TO_SHOP = new Set(['question', 'erasure-asked']);
+const TO_SHOP = new Set(['question', 'erasure-asked', 'erasure-withdrawn']);
 
 /** What the mail server may have already is in doubt for good: its words are gone. */
 const fateOfWaiting = ({ handedOverAt }: OutgoingMail): Partial<OutgoingMail> =>

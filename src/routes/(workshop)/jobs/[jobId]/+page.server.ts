@@ -18,8 +18,9 @@ import type { Actions, PageServerLoad } from './$types';
 
 /** The question that was chosen; else the first that nobody has answered. */
 function chooseQuestion(questions: readonly Question[], asked: string | null): Question | null {
-	const chosen = questions.find(({ id }) => String(id) === asked);
-	return chosen ?? questions.find(({ answers }) => answers.length === 0) ?? null;
+	const answerable = questions.filter(({ takesAnswers }) => takesAnswers);
+	const chosen = answerable.find(({ id }) => String(id) === asked);
+	return chosen ?? answerable.find(({ answers }) => answers.length === 0) ?? null;
 }
 
 export const load: PageServerLoad = async (event) => {
