@@ -1,11 +1,17 @@
 import { chemistryOf, findGasNeeds, type ChemistryKey } from '../thermal/chemistries';
-import type { PositionKind } from '../thermal/survey/types';
+import { listSurveyLines } from '../format/survey-lines';
+import { questionsFor } from '../thermal/survey';
+import type { PositionKind, SurveyAnswers } from '../thermal/survey/types';
+import type { UnderBonnetWord } from './batteries';
 
 /** What the questions before drilling depend on. */
 export interface PreDrillCase {
 	positionKind: PositionKind;
 	chemistry: ChemistryKey;
 	capacityAh: number;
+	underBonnet: UnderBonnetWord;
+	underBonnetWords: string;
+	survey: SurveyAnswers;
 }
 
 export interface PreDrillQuestion {
@@ -17,6 +23,10 @@ export interface PreDrillQuestion {
 	reason: string;
 	/** A photo says more than the answer here. */
 	photo: boolean;
+	/** Words of the maker that it is about: an answer holds for these and no others. */
+	quote: string | null;
+	/** What the survey says that bears on it. */
+	beside: { label: string; value: string }[];
 }
 
 interface QuestionRow {
@@ -25,6 +35,9 @@ interface QuestionRow {
 	question: string | ((of: PreDrillCase) => string);
 	reason: string | ((of: PreDrillCase) => string);
 	photo: boolean;
+	quote?: (of: PreDrillCase) => string;
+	/** The questions of the survey that bear on it. */
+	surveyed?: readonly string[];
 	/** Where it is not asked everywhere. */
 	isAsked?: (of: PreDrillCase) => boolean;
 }
@@ -43,6 +56,9 @@ const isInside = ({ positionKind }: PreDrillCase): boolean =>
 const gasOf = ({ chemistry, capacityAh }: PreDrillCase) => findGasNeeds(chemistry, capacityAh);
 const isLithium = ({ chemistry }: PreDrillCase): boolean => chemistryOf(chemistry).family === 'lithium';
 
+const hasCondition = ({ positionKind, underBonnet, underBonnetWords }: PreDrillCase): boolean =>
+	positionKind === 'under-bonnet' && underBonnet === 'conditional' && underBonnetWords !== '';
+
 function askForAir(of: PreDrillCase): string {
 	const { openingCm2 = 0, sparkFreeMm = 0 } = gasOf(of) ?? {};
 	const round = (value: number): number => Math.ceil(value);
@@ -59,6 +75,17 @@ function explainAir(of: PreDrillCase): string {
  * practice.
  */
 const ROWS: readonly QuestionRow[] = [
+	{
+		key: 'makerCondition',
+		label: 'The maker’s condition',
+		question: ({ underBonnetWords }) => `Is the maker’s condition kept here: “${underBonnetWords}”?`,
+		reason:
+			'The battery’s maker allows it under the bonnet on this condition alone. Hold it against what you see; what the survey says of the heat stands below.',
+		photo: true,
+		quote: ({ underBonnetWords }) => underBonnetWords,
+		surveyed: ['exhaust', 'engine', 'air', 'shield'],
+		isAsked: hasCondition
+	},
 	{
 		key: 'behindPanel',
 		label: 'What lies behind',
@@ -168,14 +195,19 @@ export const PRE_DRILL_KEYS = ROWS.map(({ key }) => key);
 export const preDrillLabelOf = (key: string | null): string =>
 	ROWS.find((row) => row.key === key)?.label ?? '';
 
+const listBeside = ({ surveyed = [] }: QuestionRow, { positionKind, survey }: PreDrillCase) =>
+	questionsFor(positionKind)
+		.filter(({ id }) => surveyed.includes(id))
+		.flatMap((question) => listSurveyLines(question, survey));
+
 /** The questions for a position and a battery, in order. */
 export function preDrillQuestionsFor(of: PreDrillCase): PreDrillQuestion[] {
 	const say = (words: QuestionRow['question']): string => (typeof words === 'string' ? words : words(of));
-	return ROWS.filter(({ isAsked }) => isAsked?.(of) ?? true).map(
-		({ key, label, question, reason, photo }) => ({
-			...{ key, label, photo },
-			question: say(question),
-			reason: say(reason)
-		})
-	);
+	return ROWS.filter(({ isAsked }) => isAsked?.(of) ?? true).map((row) => ({
+		...{ key: row.key, label: row.label, photo: row.photo },
+		question: say(row.question),
+		reason: say(row.reason),
+		quote: row.quote?.(of) ?? null,
+		beside: listBeside(row, of)
+	}));
 }

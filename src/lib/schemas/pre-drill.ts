@@ -38,6 +38,23 @@ export const preDrillAnswersSchema = z
 	});
 export type PreDrillAnswers = z.infer<typeof preDrillAnswersSchema>;
 
+/** As they are kept: with the maker's words that an answer was given to. */
+export type KeptAnswers = Record<string, (PreDrillAnswer & { quote?: string }) | undefined>;
+
+export const keepQuotes = (questions: readonly PreDrillQuestion[], answers: PreDrillAnswers): KeptAnswers =>
+	Object.fromEntries(
+		Object.entries(answers).map(([key, given]) => {
+			const quote = questions.find((question) => question.key === key)?.quote ?? null;
+			return [key, given && quote !== null ? { ...given, quote } : given];
+		})
+	);
+
+/** The answer to a question; one that was given to other words of the maker is none. */
+export function answerTo({ key, quote }: PreDrillQuestion, answers: KeptAnswers): PreDrillAnswer | null {
+	const given = answers[key];
+	return given && (quote === null || given.quote === quote) ? given : null;
+}
+
 export const preDrillChangeSchema = z.object({ answers: preDrillAnswersSchema, version: versionSchema });
 export type PreDrillChange = z.infer<typeof preDrillChangeSchema>;
 
@@ -68,6 +85,10 @@ export const preDrillSchema = z.object({
 			question: z.string(),
 			reason: z.string(),
 			photo: z.boolean(),
+			quote: z.string().nullable().meta({ description: 'Words of the maker that it is about' }),
+			beside: z
+				.array(z.object({ label: z.string(), value: z.string() }))
+				.meta({ description: 'What the survey says that bears on it' }),
 			answer: z.enum(PRE_DRILL_ANSWERS).nullable(),
 			note: z.string()
 		})
@@ -84,9 +105,10 @@ export const preDrillSnapshotSchema = preDrillSchema.pick({ open: true, signedBy
 export type PreDrillSnapshot = z.infer<typeof preDrillSnapshotSchema>;
 
 /** The questions that have no answer, and those whose answer is no. */
-export function findOpenItems(questions: readonly PreDrillQuestion[], answers: PreDrillAnswers): OpenItem[] {
-	return questions.flatMap(({ key, label }): OpenItem[] => {
-		const given = answers[key];
+export function findOpenItems(questions: readonly PreDrillQuestion[], answers: KeptAnswers): OpenItem[] {
+	return questions.flatMap((question): OpenItem[] => {
+		const { key, label } = question;
+		const given = answerTo(question, answers);
 		if (!given) return [{ key, label, state: 'unanswered', note: '' }];
 		return given.answer === 'does-not' ? [{ key, label, state: 'failed', note: given.note }] : [];
 	});

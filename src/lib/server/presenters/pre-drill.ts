@@ -1,4 +1,4 @@
-import { findOpenItems, type PreDrillSnapshot, type PreDrillView } from '$lib/schemas/pre-drill';
+import { answerTo, findOpenItems, type PreDrillSnapshot, type PreDrillView } from '$lib/schemas/pre-drill';
 import type { PreDrillQuestion } from '$lib/schemas/pre-drill-questions';
 import type { PreDrillCheck } from '../db/models';
 
@@ -21,7 +21,7 @@ export function presentPreDrill(
 	return {
 		mountId,
 		questions: questions.map((question) => {
-			const given = check?.answers[question.key];
+			const given = answerTo(question, check?.answers ?? {});
 			return { ...question, answer: given?.answer ?? null, note: given?.note ?? '' };
 		}),
 		...presentSnapshot(questions, check),

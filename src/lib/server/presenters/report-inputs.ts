@@ -14,11 +14,12 @@ import {
 	formatWithUnit,
 	writeNumber
 } from '$lib/format/numbers';
+import { listSurveyLines } from '$lib/format/survey-lines';
 import { formatClock, formatClockHour, formatHours, formatMinutes } from '$lib/format/time';
 import type { AssessmentInputs, AssessmentResult } from '$lib/schemas/assessments';
 import type { MakerCaution, ReportDerivation, ReportLine, ReportQuestion } from '$lib/schemas/reports';
 import { guardOf } from '$lib/thermal/chemistries';
-import { describeAnswer, questionsFor } from '$lib/thermal/survey';
+import { questionsFor } from '$lib/thermal/survey';
 import { listAssumptions } from '$lib/thermal/survey/answers';
 
 export function listVehicle({ vehicle }: AssessmentInputs): ReportLine[] {
@@ -140,10 +141,7 @@ export function listLegs({ dayPlan }: AssessmentInputs, { legs }: AssessmentResu
 export function listSurvey({ mount: { survey } }: AssessmentInputs): ReportQuestion[] {
 	return questionsFor(survey.positionKind).map((question) => ({
 		title: question.title,
-		lines: describeAnswer(question, survey).map(({ label, answer, assumed }) => ({
-			label,
-			value: assumed === null ? (answer ?? '') : `${answer ?? 'Not answered'}: ${assumed} assumed`
-		}))
+		lines: listSurveyLines(question, survey)
 	}));
 }
 

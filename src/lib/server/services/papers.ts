@@ -15,7 +15,7 @@ import { listFieldNotes } from './field-notes';
 import { listMountFiles, readFileContent } from './files';
 import { getFitting } from './fittings';
 import { getOutlookReport } from './outlook-reports';
-import { getPreDrillOf } from './pre-drill';
+import { caseOf, getPreDrillOf } from './pre-drill';
 import { findFittedUnder } from './recommendation-history';
 import { getRecommendationDocument } from './recommendations';
 import { listSheets } from './sheets';
@@ -64,10 +64,9 @@ async function listPhotos(person: SignedInPerson, mountId: number, until?: strin
 }
 
 /** What the questions before drilling depended on for what was fitted. */
-async function caseOf(assessmentId: number): Promise<PreDrillCase> {
+async function fittedCaseOf(assessmentId: number): Promise<PreDrillCase> {
 	const { battery, mount } = (await Assessment.findByPk(assessmentId))!.inputs;
-	const { chemistry, capacityAh } = battery;
-	return { positionKind: mount.survey.positionKind, chemistry, capacityAh };
+	return caseOf(battery, mount.survey);
 }
 
 /** What is kept of a fitted battery, from its recommendation to the last note. */
@@ -81,7 +80,7 @@ async function readMountRecord(person: SignedInPerson, mountId: number): Promise
 	return {
 		paper: await getRecommendationPaper(person, recommendation.id),
 		fitting: { ...fitting, assessmentId, installation },
-		preDrill: await getPreDrillOf(person, mountId, await caseOf(assessmentId)),
+		preDrill: await getPreDrillOf(person, mountId, await fittedCaseOf(assessmentId)),
 		notes: await listFieldNotes(person, mountId),
 		acknowledgement: await findAcknowledgement(person, recommendation),
 		photos: await listPhotos(person, mountId)

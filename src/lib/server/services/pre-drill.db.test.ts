@@ -2,7 +2,8 @@ import { describe, expect, it } from 'vitest';
 import { makeBareJob } from '../../../../tests/support/jobs';
 import { AGM_BATTERY, BATTERY } from '../../../../tests/support/records';
 import { makeCrew, useTestDatabase } from '../../../../tests/support/services';
-import { AuditEntry, Job } from '../db/models';
+import { AuditEntry, BatteryRecord, Job } from '../db/models';
+import { SURVEY_FIELDS } from '$lib/thermal/survey';
 import { createBattery } from './batteries';
 import { addMount } from './mounts';
 import {
@@ -41,6 +42,41 @@ describe('the check before drilling', () => {
 		const inCabin = await keysOf(BATTERY, 'cabin');
 		expect(inCabin).toContain('failingCell');
 		expect(inCabin).not.toContain('clearance');
+	});
+
+	it('asks whether the maker’s condition is kept, in its words, beside what the survey says of the heat', async () => {
+		const { installer, mountId, jobId } = await makeMount();
+		const ofMaker = async () =>
+			(await getPreDrill(installer, mountId)).questions.find(({ key }) => key === 'makerCondition');
+		expect(await ofMaker()).toMatchObject({
+			question: 'Is the maker’s condition kept here: “Not above 75 °C at the case.”?',
+			answer: null,
+			beside: expect.arrayContaining([
+				{ label: SURVEY_FIELDS.exhaustGapMm.label, value: expect.any(String) },
+				{ label: SURVEY_FIELDS.shieldKind.label, value: expect.any(String) }
+			]) as unknown
+		});
+		const failed = { answer: 'does-not', note: 'It sees the manifold.' } as const;
+		const saved = await savePreDrill(installer, mountId, { answers: { makerCondition: failed }, version: 0 });
+		expect(saved.open.find(({ key }) => key === 'makerCondition')).toMatchObject({
+			...{ state: 'failed', label: 'The maker’s condition', note: failed.note }
+		});
+		const same = { answers: { makerCondition: HOLDS }, version: saved.version };
+		expect((await savePreDrill(installer, mountId, same)).open.map(({ key }) => key)).not.toContain(
+			'makerCondition'
+		);
+		const { batteryRecordId } = (await Job.findByPk(jobId))!;
+		const where = { id: batteryRecordId! };
+		await BatteryRecord.update({ underBonnetWords: 'Not in view of the exhaust.' }, { where });
+		expect(await ofMaker()).toMatchObject({ quote: 'Not in view of the exhaust.', answer: null });
+		await BatteryRecord.update({ underBonnet: 'silent' }, { where });
+		expect(await ofMaker()).toBeUndefined();
+	});
+
+	it('does not ask for a condition of the bonnet in the cabin', async () => {
+		const { installer, mountId } = await makeMount(BATTERY, 'cabin');
+		const keys = (await getPreDrill(installer, mountId)).questions.map(({ key }) => key);
+		expect(keys).not.toContain('makerCondition');
 	});
 
 	it('asks nothing yet where the job has no battery, so that photos can come before it', async () => {

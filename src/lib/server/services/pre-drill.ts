@@ -3,6 +3,7 @@ import type { Transaction } from 'sequelize';
 import type { SignedInPerson } from '$lib/schemas/people';
 import {
 	findOpenItems,
+	keepQuotes,
 	type PreDrillAnswers,
 	type PreDrillChange,
 	type PreDrillSignature,
@@ -14,6 +15,7 @@ import {
 	type PreDrillCase,
 	type PreDrillQuestion
 } from '$lib/schemas/pre-drill-questions';
+import type { SurveyAnswers } from '$lib/schemas/survey';
 import { BatteryRecord, Job, PreDrillCheck, type Mount } from '../db/models';
 import { inTransaction } from '../db/transaction';
 import { AppError } from '../errors';
@@ -31,16 +33,22 @@ interface Asked {
 	questions: PreDrillQuestion[] | null;
 }
 
+/** What the questions depend on, of a battery and where it is to go. */
+export const caseOf = (
+	{ chemistry, capacityAh, underBonnet, underBonnetWords }: Omit<PreDrillCase, 'positionKind' | 'survey'>,
+	survey: SurveyAnswers
+): PreDrillCase => ({
+	...{ chemistry, capacityAh, underBonnet, underBonnetWords, survey },
+	positionKind: survey.positionKind
+});
+
 async function findMount(person: SignedInPerson, mountId: number): Promise<Asked> {
 	const mount = await findStandingMount(person, mountId);
 	const job = await Job.findByPk(mount.jobId, { attributes: ['batteryRecordId'] });
 	const battery = job?.batteryRecordId ? await BatteryRecord.findByPk(job.batteryRecordId) : null;
 	if (!battery) return { mount, questions: null };
-	const { chemistry, capacityAh } = battery;
-	return {
-		mount,
-		questions: preDrillQuestionsFor({ positionKind: mount.positionKind, chemistry, capacityAh })
-	};
+	const { positionKind, survey } = mount;
+	return { mount, questions: preDrillQuestionsFor(caseOf(battery, { ...survey, positionKind })) };
 }
 
 async function findAsked(person: SignedInPerson, mountId: number) {
@@ -111,8 +119,9 @@ export async function savePreDrill(
 		const { mount, questions } = await findAsked(person, mountId);
 		refuseUnasked(questions, answers);
 		const check = await holdCheck(mount, transaction);
-		const unsigned = isDeepStrictEqual(check.answers, answers) ? {} : { signedBy: null, signedAt: null };
-		await saveVersioned(check, 'check', version, { answers, ...unsigned }, transaction);
+		const kept = keepQuotes(questions, answers);
+		const unsigned = isDeepStrictEqual(check.answers, kept) ? {} : { signedBy: null, signedAt: null };
+		await saveVersioned(check, 'check', version, { answers: kept, ...unsigned }, transaction);
 		const subject = { type: 'mount', id: mountId };
 		await recordBy(person, 'mount.pre-drill', subject, transaction, { answers });
 		return presentPreDrill(mountId, questions, check);

@@ -5,7 +5,7 @@ import {
 	type InferCreationAttributes,
 	type Sequelize
 } from 'sequelize';
-import type { PreDrillAnswers } from '$lib/schemas/pre-drill';
+import type { KeptAnswers } from '$lib/schemas/pre-drill';
 import { edited, id, json, moment, optionalMoment, optionalText, reference, whole } from './base';
 
 /** What was asked before a hole was drilled, one a mount. */
@@ -16,7 +16,7 @@ export class PreDrillCheck extends Model<
 	declare id: CreationOptional<number>;
 	declare workshopId: number;
 	declare mountId: number;
-	declare answers: PreDrillAnswers;
+	declare answers: KeptAnswers;
 	/** Who put a name under the answers as they stand; a later change takes it off. */
 	declare signedBy: CreationOptional<string | null>;
 	declare signedAt: CreationOptional<Date | null>;
