@@ -67,6 +67,14 @@ test(
 		await expect(page.getByText(/^You asked for it on/)).toBeVisible();
 		await expect(page).toHaveTitle(/^What is held about you/);
 		await expect(page.locator(':focus')).toContainText('You asked for it on');
+		await expectNoViolations(page);
+		await expect(page.getByText('what was deleted cannot be brought back')).toBeVisible();
+		await page.getByRole('button', { name: 'Take the request back' }).click();
+		await expect(page.getByText(/^You took your request of .+ back$/)).toBeVisible();
+		await expectNoViolations(page);
+		await page.getByLabel('Yes, delete what is held about me').check();
+		await page.getByRole('button', { name: 'Ask for deletion' }).click();
+		await expect(page.getByText(/^You asked for it on/)).toBeVisible();
 
 		const context = await browser.newContext({ baseURL: baseURL! });
 		const manager = await context.newPage();

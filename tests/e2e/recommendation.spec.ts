@@ -71,6 +71,43 @@ test('going ahead against the verdict takes a named person and a reason', async 
 	await expect(page.getByText(`Reason: ${WHY}`)).toBeVisible();
 });
 
+test('going against the maker’s word takes a named person and a reason, whatever the verdict', async ({
+	page
+}) => {
+	test.slow();
+	const { jobId } = await makeAssessableJob(page, { mounts: 1 });
+	const { battery, customer, version, ...job } = await ask(page, 'GET', `/api/v1/jobs/${jobId}`);
+	expect(battery).toMatchObject({ underBonnet: 'excluded' });
+	const { id: placeId } = job.place as { id: number };
+	const mild = { placeId, hotDayMaxC: 14, dailyRangeK: 10, sunPeakWPerM2: 600, version };
+	await ask(page, 'PUT', `/api/v1/jobs/${jobId}/climate`, mild);
+	const [hot] = await assessAll(page, jobId);
+	expect(hot!.verdict).not.toBe('cuts-out');
+	await page.goto(`/jobs/${jobId}/recommendation?assessment=${String(hot!.id)}`);
+	await expect(page.getByText('This goes ahead against the maker’s word')).toBeVisible();
+	await expectNoViolations(page);
+	await page.getByRole('button', { name: 'Recommend it against the maker’s word' }).click();
+	const although = 'although the battery’s maker does not allow it under the bonnet.';
+	await expect(page.getByRole('link', { name: `Say why it goes ahead ${although}` })).toBeVisible();
+	await page.getByLabel('Who decided').fill(WHO);
+	await page.getByLabel('Reason').fill(WHY);
+	await page.getByRole('button', { name: 'Recommend it against the maker’s word' }).click();
+	await expect(page.getByText('Recommended and kept.')).toBeVisible();
+	const { id, name, email, phone, version: seen } = customer as Record<string, unknown>;
+	const renamed = { name: `Zoë ${String(name)}`, email, phone, version: seen };
+	await ask(page, 'PUT', `/api/v1/customers/${String(id)}`, renamed);
+	for (const path of [`/jobs/${jobId}/recommendation`, `/jobs/${jobId}/sheets`]) {
+		await page.goto(path);
+		await expect(page.getByText(`Made out to ${String(name)}`)).toBeVisible();
+		await expect(page.getByText(`is called Zoë ${String(name)} now`)).toBeVisible();
+		await expectNoViolations(page);
+	}
+	await page.goto(`/jobs/${jobId}/recommendation`);
+	await page.getByRole('link', { name: 'Print the recommendation' }).click();
+	await expect(page.getByText(`Goes ahead ${although}`)).toBeVisible();
+	await expect(page.getByText(`Reason: ${WHY}`)).toBeVisible();
+});
+
 test('a later recommendation stands beside the one that a fitting is held against', async ({ page }) => {
 	test.slow();
 	const { jobId, mountIds } = await makeAssessableJob(page, { mounts: 1 });

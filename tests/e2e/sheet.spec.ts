@@ -46,6 +46,9 @@ test('the shop sends the page, the customer acknowledges it without a script, th
 	await expect(customer.getByRole('heading', { level: 1, name: 'Cuts out' })).toBeVisible();
 	await expect(customer.getByText(/^The fridge goes dark at/)).toBeVisible();
 	await expect(customer.getByText('Konstantin Abernathy-Wollstonecraft')).toBeVisible();
+	await expect(
+		customer.getByRole('heading', { name: 'Still open before anything is drilled' })
+	).toBeVisible();
 	await expect(customer.getByText(/On .+ days like this the fridge goes dark\./)).toBeVisible();
 	for (const label of ['How often.', 'What would make it safer.', 'How long it lasts.']) {
 		await expect(customer.getByText(label)).toBeVisible();
@@ -154,7 +157,12 @@ test(
 	ONCE,
 	async ({ page }) => {
 		test.slow();
-		const { jobId } = await makeAssessableJob(page, { mounts: 6 });
+		const { jobId, mountIds } = await makeAssessableJob(page, { mounts: 6 });
+		const preDrill = `/api/v1/mounts/${mountIds[0]}/pre-drill`;
+		const { questions, version } = await ask(page, 'GET', preDrill);
+		const missing = { answer: 'does-not', note: 'It is not there yet. '.repeat(8).slice(0, 160).trim() };
+		const failed = (questions as { key: string }[]).slice(0, 5).map(({ key }) => [key, missing] as const);
+		await ask(page, 'PUT', preDrill, { answers: Object.fromEntries(failed), version });
 		const { battery } = await ask(page, 'GET', `/api/v1/jobs/${jobId}`);
 		const record = `/api/v1/batteries/${(battery as { id: number }).id}`;
 		for (const [quoted, length] of [
@@ -177,6 +185,7 @@ test(
 			const { id: recommendationId } = await ask(page, 'POST', '/api/v1/recommendations', decision);
 			const { link } = await sendSheet(page, { jobId, recommendationId });
 			await page.goto(link);
+			await expect(page.getByText(/^Not looked at yet: /)).toBeVisible();
 			const pdf = await page.pdf({ format: 'A4', printBackground: false, preferCSSPageSize: true });
 			expect(
 				pdf.toString('latin1').match(/\/Type\s*\/Page\b/g),

@@ -34,12 +34,9 @@ export const recommendationSchema = z.object({
 	jobNumber: z.number().int(),
 	assessment: assessmentRowSchema,
 	againstVerdict: z.boolean(),
-	againstMaker: z
-		.boolean()
-		.meta({
-			description:
-				'The maker does not allow it there; false too where nobody was asked yet who answers for it'
-		}),
+	againstMaker: z.boolean().meta({
+		description: 'The maker does not allow it there; false too where nobody was asked yet who answers for it'
+	}),
 	decidedBy: z.string().nullable(),
 	reason: z.string().nullable(),
 	madeOutTo: z.string().meta({ description: 'The customer as they were called when it was made' }),

@@ -179,6 +179,15 @@ describe('the customer’s page', () => {
 			'Fuse: not in order yet. None yet.',
 			'Not looked at yet: clearances and terminals.'
 		]);
+		const failed = ['Fuse', 'Air', 'Hold-down', 'Terminals', 'Cable run'].map((label) =>
+			item(label, 'failed', 'None.')
+		);
+		expect(write({ preDrill: { ...check, open: failed } }).beforeDrilling).toEqual([
+			'Fuse: not in order yet. None.',
+			'Air: not in order yet. None.',
+			'Hold-down: not in order yet. None.',
+			'Not in order yet either: terminals and cable run.'
+		]);
 		expect(write({ preDrill: { ...check, open: [] } }).beforeDrilling).toEqual([]);
 	});
 
