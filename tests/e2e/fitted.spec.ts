@@ -75,11 +75,15 @@ test('a look long before its date asks first, without a script too; the job says
 	const { jobId, mountIds } = await makeAssessableJob(page, { mounts: 1 });
 	const [hot] = await assessAll(page, jobId);
 	const words = { assessmentId: hot!.id, decidedBy: 'Ida Fenn', reason: 'A duct is fitted before summer.' };
-	await ask(page, 'POST', '/api/v1/recommendations', words);
+	const { id: recommendationId } = await ask(page, 'POST', '/api/v1/recommendations', words);
 	const today = new Date().toISOString().slice(0, 10);
 	await ask(page, 'PUT', `/api/v1/mounts/${mountIds[0]}/fitting`, {
 		...{ fittedOn: today, fittedBy: 'Ida Fenn', serialNumber: '', note: '', differences: [], version: null }
 	});
+	await page.goto(`/jobs/${jobId}`);
+	await expect(page.getByText('what was recommended has not gone to the customer')).toBeVisible();
+	const sheet = { recommendationId, sendTo: 'ida@travellers.example' };
+	await ask(page, 'POST', `/api/v1/jobs/${jobId}/sheets`, sheet);
 	await page.goto(`/jobs/${jobId}`);
 	await expect(page.getByText('The battery is fitted. Mount A is to be looked at next on')).toBeVisible();
 	await page.getByRole('link', { name: 'See the dates' }).click();

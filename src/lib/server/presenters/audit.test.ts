@@ -3,7 +3,7 @@ import type { AuditEntry } from '../db/models';
 import { actionsSaying, DID, presentAuditEntry, sayAction, type AuditNames } from './audit';
 
 /** Past tenses that do not end in -ed; what is none of these and does not, does not read on from a name. */
-const IRREGULAR = ['began', 'brought', 'chose', 'drew', 'gave', 'had', 'kept', 'let', 'made', 'put'];
+const IRREGULAR = ['began', 'brought', 'chose', 'drew', 'gave', 'had', 'held', 'kept', 'let', 'made', 'put'];
 const MORE_IRREGULAR = ['read', 'reset', 'said', 'sent', 'set', 'struck', 'took', 'told', 'withdrew'];
 const PAST = new RegExp(`^(?:\\w+ed|${[...IRREGULAR, ...MORE_IRREGULAR].join('|')})\\b`);
 

@@ -15,6 +15,7 @@ const LONGEST_HOURS = 9;
  *
  * @param report when it went dark and came back
  * @param hottestDayC the hottest of that day, °C
+ * @returns true for such a report; false for a cooler day, another hour, and where nobody knows when it came back
  * Validity: batteries with a BMS that lets them come back by itself.
  * Source: engineering judgement, after the hours that cells under a bonnet take to warm and to cool.
  * @example

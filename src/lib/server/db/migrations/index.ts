@@ -222,7 +222,7 @@ export const migrations: Migration[] = [
 	m186,
 	m187,
 	m188,
-	m189
+	m189,
 	m190,
 	m191,
 	m192,
