@@ -27,13 +27,13 @@ export const EVENINGS = [
 ] as const;
 
 /**
- * A job of the crew's customer: agreed on was a battery that goes dark at 95 °C, and fitted was what is said; with the ways
+ * A job of the crew's customer: agreed on was a battery that goes dark at 110 °C, and fitted was what is said; with the ways
  * to note an evening, to recommend anew as it was fitted, and to save the fitting.
  */
-export async function makeAgreedFor95(battery = FITTED_INSTEAD) {
+export async function makeAgreedFor110(battery = FITTED_INSTEAD) {
 	const crew = await makeCrew();
 	const { installer } = crew;
-	const { jobId, hot } = await makeAssessableJob(installer, { dischargeCutC: 95, dischargeResetC: 80 });
+	const { jobId, hot } = await makeAssessableJob(installer, { dischargeCutC: 110, dischargeResetC: 95 });
 	await Job.update({ customerId: crew.customer.customerId! }, { where: { id: jobId } });
 	const recommend = async () => {
 		const [ofHot] = await assessJob(installer, jobId);

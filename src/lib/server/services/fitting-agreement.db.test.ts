@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { EVENINGS, FITTED_INSTEAD, makeAgreedFor95 } from '../../../../tests/support/otherwise';
+import { EVENINGS, FITTED_INSTEAD, makeAgreedFor110 } from '../../../../tests/support/otherwise';
 import { FITTED } from '../../../../tests/support/fitted';
 import { readReview } from '../../../../tests/support/review';
 import { makeCrew, useTestDatabase } from '../../../../tests/support/services';
@@ -20,7 +20,7 @@ import { rebuildReview } from './review/keep-review';
 useTestDatabase();
 
 const LONG_MS = 120_000;
-type Made = Awaited<ReturnType<typeof makeAgreedFor95>>;
+type Made = Awaited<ReturnType<typeof makeAgreedFor110>>;
 
 const hold = async ({ installer, mountId }: Made, recommendationId: number) => {
 	const { version } = (await getFitting(installer, mountId)).installation!;
@@ -46,7 +46,7 @@ describe('a fitting of another battery than agreed', () => {
 		'is judged, papered and explained as nothing that it is not, until it is held against what was fitted',
 		{ timeout: LONG_MS },
 		async () => {
-			const made = await makeAgreedFor95();
+			const made = await makeAgreedFor110();
 			for (const evening of EVENINGS) await made.note(evening);
 			const { installer, mountId, jobId } = made;
 			expect(await listFitted(installer, jobId)).toMatchObject([{ mismatch: 'assess' }]);
@@ -54,7 +54,7 @@ describe('a fitting of another battery than agreed', () => {
 			const [unjudged] = await reportsOf(made);
 			expect(unjudged!.cause).toMatchObject({ word: 'It cannot be judged yet', others: [], doubt: '' });
 			expect(unjudged!.cause!.sentence).toMatch(
-				/goes dark at 95\s°C.*was not fitted \(battery: Fenmoor Low 65\)/
+				/goes dark at 110\s°C.*was not fitted \(battery: Fenmoor Low 65\)/
 			);
 			const mine = await readMine(made);
 			expect(mine).toContain('cannot be judged yet');
@@ -94,9 +94,9 @@ describe('a fitting of another battery than agreed', () => {
 			expect(reports[0]!.anew).toContain('The answer then was: hardly.');
 			expect(await readMine(made)).toContain('Heat alone explains it. This was worked out anew');
 			const after = await readPaper(made, 'handover');
-			expect(handover).toMatch(/95\s°C/);
+			expect(handover).toMatch(/110\s°C/);
 			expect(after).toMatch(/Fenmoor Low 65, 100.*65\s°C/);
-			expect(after).not.toMatch(/fitted instead|95\s°C|not for what was fitted/);
+			expect(after).not.toMatch(/fitted instead|110\s°C|not for what was fitted/);
 			expect(await readPaper(made, 'warranty-file')).toContain(`Recommendation ${newer.id}`);
 			expect(await getRecommendation(installer, newer.id)).toMatchObject({ isFittedUnder: true });
 			const kept = await readReview(installer.workshopId);
@@ -110,7 +110,7 @@ describe('a fitting of another battery than agreed', () => {
 		'goes back to the earlier recommendation as it was, with what its notes had come to still on record',
 		{ timeout: LONG_MS },
 		async () => {
-			const made = await makeAgreedFor95();
+			const made = await makeAgreedFor110();
 			await made.note(EVENINGS[0]);
 			const before = await getFitting(made.installer, made.mountId);
 			const asNoted = (await FieldNote.findAll({ where: {}, order: [['id', 'DESC']], limit: 1 }))[0]!;
@@ -122,7 +122,7 @@ describe('a fitting of another battery than agreed', () => {
 			expect(back.installation!.differences).toEqual(before.installation!.differences);
 			expect(back).toMatchObject({ agreed: before.agreed, assessmentId: before.assessmentId });
 			const [row] = (await listFieldNotes(made.installer, made.mountId)).rows;
-			expect(row!.finding!.cause!.finding).toBe('not-explained');
+			expect(row!.finding).toEqual(asNoted.finding);
 			expect((await FieldNote.findByPk(asNoted.id))!.finding).toEqual(asNoted.finding);
 			const found = await FieldNoteFinding.findAll({
 				where: { fieldNoteId: asNoted.id },
@@ -147,7 +147,7 @@ describe('a fitting of another battery than agreed', () => {
 		'named in other words stays a difference, which is for whoever noted it',
 		{ timeout: LONG_MS },
 		async () => {
-			const made = await makeAgreedFor95('The low one of Fenmoor');
+			const made = await makeAgreedFor110('The low one of Fenmoor');
 			await made.chooseFitted();
 			const newer = await made.recommend();
 			const { installation } = await hold(made, newer.id);
@@ -162,7 +162,7 @@ describe('a fitting of another battery than agreed', () => {
 
 describe('holding a fitting against another recommendation', () => {
 	it('is refused for a version of before, another mount’s recommendation, and other people', async () => {
-		const made = await makeAgreedFor95();
+		const made = await makeAgreedFor110();
 		const newer = await made.recommend();
 		const { mountId, installer, crew } = made;
 		const { version } = (await getFitting(installer, mountId)).installation!;
@@ -171,7 +171,7 @@ describe('holding a fitting against another recommendation', () => {
 		await expect(attempt(installer, newer.id, version + 1)).rejects.toMatchObject({
 			code: 'changed_meanwhile'
 		});
-		const other = await makeAgreedFor95();
+		const other = await makeAgreedFor110();
 		await expect(attempt(installer, other.agreed.id)).rejects.toMatchObject({
 			problems: [{ path: 'recommendationId' }]
 		});
@@ -188,7 +188,7 @@ describe('holding a fitting against another recommendation', () => {
 	});
 
 	it('lets no note in that was weighed by the earlier one meanwhile', { timeout: LONG_MS }, async () => {
-		const made = await makeAgreedFor95();
+		const made = await makeAgreedFor110();
 		const { installer, mountId } = made;
 		await made.chooseFitted();
 		const newer = await made.recommend();
@@ -204,7 +204,7 @@ describe('evenings that contradict the estimate', () => {
 		'raise doubt of it from the second on, before other causes, and not once one is struck out',
 		{ timeout: LONG_MS },
 		async () => {
-			const made = await makeAgreedFor95('');
+			const made = await makeAgreedFor110('');
 			await made.note(EVENINGS[0]);
 			const [alone] = await reportsOf(made);
 			expect(alone!.cause).toMatchObject({ word: 'Hardly', doubt: '' });

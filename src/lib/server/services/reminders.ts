@@ -71,8 +71,8 @@ async function postReminder(
 	await postLetter({ ...writeReminder(about), ...posted, replyTo: workshop!.email }, transaction);
 }
 
-/** Puts the reminders that are due into the outbox, each in one transaction with the note that it is there. */
-export async function remindDue(now = today()): Promise<number> {
+/** Puts some of the reminders that are due into the outbox, in one transaction with the notes that they are there. */
+async function remindSome(now: string): Promise<number> {
 	return inTransaction(async (transaction) => {
 		const rows = await connection().query<{ id: number }>(DUE, {
 			replacements: { since: addDays(now, -DAYS_BEHIND), until: addDays(now, DAYS_AHEAD) },
@@ -85,14 +85,15 @@ export async function remindDue(now = today()): Promise<number> {
 	});
 }
 
-let timer: NodeJS.Timeout | undefined;
-
-async function remindAllDue(): Promise<void> {
-	while ((await remindDue()) === BATCH);
+/** Puts every reminder that is due into the outbox, once. */
+export async function remindDue(now = today()): Promise<void> {
+	while ((await remindSome(now)) === BATCH);
 }
 
+let timer: NodeJS.Timeout | undefined;
+
 function look(): void {
-	remindAllDue().catch((error: unknown) => logger.error({ err: error }, 'reminders failed'));
+	remindDue().catch((error: unknown) => logger.error({ err: error }, 'reminders failed'));
 }
 
 /** Looks at once, for what came due while nothing ran, and then every hour. */
