@@ -22,6 +22,8 @@ export interface RouteRule {
 	methods: readonly string[];
 	/** A good answer is a redirect to where the work is. */
 	leadsOn?: true;
+	/** A method that is answered with a conflict by whoever is let in, where there is nothing yet that it could change. */
+	nothingFor?: string;
 	/** Methods that fewer may use than the route is open to. */
 	only?: Readonly<Record<string, Audience>>;
 	/** A body that the schema lets through, so that only ownership can refuse. */
@@ -188,7 +190,7 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 	page('/erasures', 'manager', 'default'),
 
 	page('/my', 'customer'),
-	page('/my/data', 'customer', 'ask', 'withdraw'),
+	{ ...page('/my/data', 'customer', 'ask', 'withdraw'), nothingFor: 'withdraw' },
 	page('/my/data.zip', 'customer'),
 	owned('/my/[sheetId]', 'customer', 'acknowledge', 'ask', 'send'),
 	owned('/my/handover/[mountId].pdf', 'customer'),
@@ -256,7 +258,7 @@ export const ROUTE_RULES: readonly RouteRule[] = [
 	}),
 	api('/my/data', 'customer', 'GET'),
 	api('/my/erasure', 'customer', 'POST'),
-	api('/my/erasure/withdrawal', 'customer', 'POST'),
+	{ ...api('/my/erasure/withdrawal', 'customer', 'POST'), nothingFor: 'POST' },
 	api('/books', 'bench', 'GET', 'POST'),
 	ownedApi('/books/[bookId]', 'bench', { GET: null }),
 	ownedApi('/books/[bookId]/state', 'bench', { PUT: { to: 'on-trial', version: 0 } }),
