@@ -1,3 +1,5 @@
+import { afterEach, beforeEach, vi } from 'vitest';
+
 /** A stream of events that the test speaks into, in the place of EventSource. */
 export class SpokenStream extends EventTarget {
 	static open: SpokenStream[] = [];
@@ -12,4 +14,15 @@ export class SpokenStream extends EventTarget {
 	say(name: string, data: unknown = {}): void {
 		this.dispatchEvent(new MessageEvent(name, { data: JSON.stringify(data) }));
 	}
+}
+
+/** For each test the browser's streams are these, none of them open yet. */
+export function useSpokenStreams(): void {
+	beforeEach(() => {
+		SpokenStream.open = [];
+		vi.stubGlobal('EventSource', SpokenStream);
+	});
+	afterEach(() => {
+		vi.unstubAllGlobals();
+	});
 }

@@ -1,8 +1,8 @@
 import { cleanup, fireEvent, render, screen } from '@testing-library/svelte';
 import axe from 'axe-core';
 import { tick } from 'svelte';
-import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
-import { SpokenStream } from '../../../../tests/support/spoken-stream';
+import { afterEach, describe, expect, it, vi } from 'vitest';
+import { SpokenStream, useSpokenStreams } from '../../../../tests/support/spoken-stream';
 import { invalidateAll } from '$app/navigation';
 import type { CableReport, RemedyLine, RemedyReport } from '../../schemas/outlook-reports';
 import CablePart from './CablePart.svelte';
@@ -28,13 +28,9 @@ async function findViolations(container: Element): Promise<string[]> {
 	return violations.map(({ id }) => id);
 }
 
-beforeEach(() => {
-	SpokenStream.open = [];
-	vi.stubGlobal('EventSource', SpokenStream);
-});
+useSpokenStreams();
 afterEach(() => {
 	cleanup();
-	vi.unstubAllGlobals();
 	vi.clearAllMocks();
 });
 

@@ -4,6 +4,7 @@ import type { PaperBlock, PaperPhoto } from '$lib/schemas/papers';
 import type { PreDrillView } from '$lib/schemas/pre-drill';
 import type { ReportLine } from '$lib/schemas/reports';
 import type { AcknowledgementView } from '$lib/schemas/sheets';
+import { NOT_NOTED } from '$lib/format/agreed-anew';
 import { formatDate, formatDateTime } from '$lib/format/dates';
 import { isNotNoted, listHeatDifferences, sayFitted, sayHeatDifferences } from '$lib/format/fitted';
 import { sayAgainst, sayDecider } from '$lib/format/recommendations';
@@ -24,7 +25,6 @@ export interface MountRecord {
 }
 
 export const AS_AGREED = 'as agreed';
-const NOT_NOTED = 'not noted';
 
 /** What was agreed and what was fitted, one beside the other. */
 export function tellFitted({ agreed, installation }: MountRecord['fitting']): PaperBlock[] {
@@ -76,7 +76,7 @@ function tellOtherwise(record: MountRecord): { instead: ReportLine[]; agreed: Re
 function tellSerialNumber({ fitting: { installation } }: MountRecord): ReportLine {
 	const isOther = installation.differences.some(({ key }) => key === 'battery');
 	const label = isOther ? 'Serial number of the fitted battery' : 'Serial number';
-	return { label, value: installation.serialNumber || 'not noted' };
+	return { label, value: installation.serialNumber || NOT_NOTED };
 }
 
 export const tellBattery = (record: MountRecord): PaperBlock => {

@@ -5,14 +5,11 @@ import { connection } from '../../db/connection';
 import { Assessment } from '../../db/models';
 import { allow } from '../../policies';
 import { startHourOf } from '../../presenters/traces';
+import { follow } from '../follow';
 import { findTrace } from '../traces';
 import { UNHELD_TRACES, WAITS } from './check-scope';
 import { shareHeld } from './hold-waiting';
 import { findTraceReading } from './list-readings';
-
-const LOOK_EVERY_MS = 700;
-
-const pause = (): Promise<void> => new Promise((resolve) => setTimeout(resolve, LOOK_EVERY_MS));
 
 async function listWaiting(workshopId: number, traceId: number | null = null): Promise<number[]> {
 	const rows = await connection().query<{ id: number }>(
@@ -39,19 +36,18 @@ export async function findTraceHold(person: SignedInPerson, traceId: number): Pr
 }
 
 /** Follows a trace until something can be said of it, or nobody listens any more. */
-export async function followTraceHold(
+export const followTraceHold = (
 	person: SignedInPerson,
 	traceId: number,
 	tell: (hold: TraceHold | null) => void,
 	isOver: () => boolean
-): Promise<void> {
-	for (;;) {
-		const hold = await findTraceHold(person, traceId);
-		tell(hold);
-		if (hold?.state !== 'waits' || isOver()) return;
-		await pause();
-	}
-}
+): Promise<void> =>
+	follow(
+		() => findTraceHold(person, traceId),
+		(hold) => hold?.state !== 'waits',
+		tell,
+		isOver
+	);
 
 /** Tells how many traces of the workshop wait to be held until none does, or nobody listens any more. */
 export async function followHolds(
@@ -61,12 +57,11 @@ export async function followHolds(
 ): Promise<void> {
 	const { workshopId } = allow(person, 'books.read');
 	let most = 0;
-	for (;;) {
+	const look = async (): Promise<HoldsProgress> => {
 		const waiting = await listWaiting(workshopId);
 		most = Math.max(most, waiting.length);
 		const done = most - waiting.length + Math.max(0, ...waiting.map(shareHeld));
-		tell({ waiting: waiting.length, share: most === 0 ? 1 : done / most });
-		if (waiting.length === 0 || isOver()) return;
-		await pause();
-	}
+		return { waiting: waiting.length, share: most === 0 ? 1 : done / most };
+	};
+	await follow(look, ({ waiting }) => waiting === 0, tell, isOver);
 }

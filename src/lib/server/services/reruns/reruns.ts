@@ -8,6 +8,7 @@ import { AppError, notFound } from '../../errors';
 import { allow } from '../../policies';
 import { presentProgress, presentRerun, type ItemCount } from '../../presenters/reruns';
 import { recordBy } from '../audit';
+import { follow } from '../follow';
 import { putInConcerned } from './concerned';
 import { continueReruns } from './run-reruns';
 
@@ -91,22 +92,19 @@ export async function getRerunProgress(person: SignedInPerson, rerunId: number):
 	return presentProgress(rerun, (await countItems([rerunId])).get(rerunId)!);
 }
 
-const LOOK_EVERY_MS = 700;
-
 /** Tells how far a re-run is until it is at its end, or nobody listens any more. */
-export async function followRerun(
+export const followRerun = (
 	person: SignedInPerson,
 	rerunId: number,
 	tell: (progress: RerunProgress) => void,
 	isOver: () => boolean
-): Promise<void> {
-	for (;;) {
-		const progress = await getRerunProgress(person, rerunId);
-		tell(progress);
-		if (progress.state !== 'running' || isOver()) return;
-		await new Promise((resolve) => setTimeout(resolve, LOOK_EVERY_MS));
-	}
-}
+): Promise<void> =>
+	follow(
+		() => getRerunProgress(person, rerunId),
+		({ state }) => state !== 'running',
+		tell,
+		isOver
+	);
 
 /** Stops a re-run, whose rest then stays as it was assessed before, or lets it go on. */
 export async function moveRerun(

@@ -1,6 +1,6 @@
 import { cleanup, render, screen } from '@testing-library/svelte';
-import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
-import { SpokenStream } from '../../../../../tests/support/spoken-stream';
+import { afterEach, describe, expect, it, vi } from 'vitest';
+import { SpokenStream, useSpokenStreams } from '../../../../../tests/support/spoken-stream';
 import { invalidateAll } from '$app/navigation';
 import type { Reading, TraceHold } from '$lib/schemas/accuracy';
 import HeldSection from './HeldSection.svelte';
@@ -17,13 +17,9 @@ const READING: Reading = {
 };
 const HELD: TraceHold = { state: 'held', reading: READING };
 
-beforeEach(() => {
-	SpokenStream.open = [];
-	vi.stubGlobal('EventSource', SpokenStream);
-});
+useSpokenStreams();
 afterEach(() => {
 	cleanup();
-	vi.unstubAllGlobals();
 	vi.clearAllMocks();
 });
 
