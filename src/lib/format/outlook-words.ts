@@ -81,3 +81,14 @@ export const sayShare = (share: number): string =>
 
 /** The first letter small, so that a name can stand inside a sentence. */
 export const small = (words: string): string => `${words.charAt(0).toLowerCase()}${words.slice(1)}`;
+
+/** Two counts that are this close are called alike. */
+const ALIKE_SHARE = 0.05;
+
+/** How a count of days changed, by no more than what is shown of both: what reads alike is alike. */
+export function compareDays(was: Range, is: Range): 'fewer' | 'more' | 'alike' {
+	const isAlike =
+		sayDayCount(was) === sayDayCount(is) || Math.abs(is.middle - was.middle) <= was.middle * ALIKE_SHARE;
+	if (isAlike) return 'alike';
+	return is.middle < was.middle ? 'fewer' : 'more';
+}

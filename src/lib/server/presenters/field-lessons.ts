@@ -1,5 +1,5 @@
 import { formatTemperature } from '$lib/format/numbers';
-import { sayDayCount, sayOfTwenty } from '$lib/format/outlook-words';
+import { compareDays, sayDayCount, sayOfTwenty } from '$lib/format/outlook-words';
 import { formatClockHour } from '$lib/format/time';
 import { hasBms } from '$lib/schemas/batteries';
 import type { FieldNoteData } from '$lib/schemas/field-notes';
@@ -28,14 +28,18 @@ function sayRead(data: FieldNoteData, why: string): string {
 	return `The heat label on the battery has turned at ${formatTemperature(data.turnedC)}, on days of up to ${formatTemperature(data.hottestDayC)}.`;
 }
 
+const OFTEN_CHANGED = {
+	fewer: 'less often than',
+	more: 'more often than',
+	alike: 'about as often as'
+} as const;
+
 function sayLesson({ fits, before, after }: Learning, event: string, isCutOut: boolean): string {
 	if (!fits && isCutOut)
 		return 'Heat explains that by itself, but it does not agree with what was read on this battery before. The estimate stays as it was, and we look at the battery and the readings again.';
 	if (!fits)
 		return 'That does not fit what we had thought possible. The estimate stays as it was, and we look at the battery and the reading again.';
-	const [was, is] = [before.year.year.middle, after.year.year.middle];
-	const change =
-		is < was * 0.95 ? 'less often than' : is > was * 1.05 ? 'more often than' : 'about as often as';
+	const change = OFTEN_CHANGED[compareDays(before.year.year, after.year.year)];
 	return `With that we expect that it ${event} ${change} we had thought. It is still an estimate.`;
 }
 

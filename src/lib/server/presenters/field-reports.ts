@@ -10,7 +10,7 @@ import {
 	formatWithUnit
 } from '$lib/format/numbers';
 import { sayDoubt, sayTeachesNothing, sayUnjudged, UNJUDGED } from '$lib/format/field-doubt-words';
-import { sayDayCount, sayOfTwenty } from '$lib/format/outlook-words';
+import { compareDays, sayDayCount, sayOfTwenty } from '$lib/format/outlook-words';
 import { formatClockHour, formatHours } from '$lib/format/time';
 import {
 	FIELD_NOTE_LABELS,
@@ -101,14 +101,14 @@ function sayLearnt({ fits, unknowns, before, after }: Learning, cause: HeatCause
 
 type Belief = Learning['before'];
 
-/** No more than the figures beside it show: what both read alike is called alike. */
+const DAYS_CHANGED = {
+	fewer: 'fewer dark days than',
+	more: 'more dark days than',
+	alike: 'about as many dark days as'
+} as const;
+
 function sayChange(before: Belief, after: Belief): string {
-	const [was, is] = [before.year.year, after.year.year];
-	const isAlike =
-		sayDayCount(was) === sayDayCount(is) || Math.abs(is.middle - was.middle) <= was.middle * 0.05;
-	const days = isAlike
-		? 'about as many dark days as'
-		: `${is.middle < was.middle ? 'fewer' : 'more'} dark days than`;
+	const days = DAYS_CHANGED[compareDays(before.year.year, after.year.year)];
 	const gainedK = after.headroomMiddleK - before.headroomMiddleK;
 	const headroom = Math.abs(gainedK) < 1 ? '' : `, with ${gainedK < 0 ? 'less' : 'more'} headroom`;
 	return `${days} before are to be expected${headroom}`;
