@@ -26,6 +26,12 @@ export const EVENINGS = [
 	}
 ] as const;
 
+/** The same, but back sooner than any cells cool: no draw of any mount has such a day. */
+export const BRIEF_EVENINGS = EVENINGS.map((evening) => ({
+	...evening,
+	...{ cameBackHour: evening.wentDarkHour + 0.6, withinHours: 0.1 }
+}));
+
 /**
  * A job of the crew's customer: agreed on was a battery that goes dark at 110 °C, and fitted was what is said; with the ways
  * to note an evening, to recommend anew as it was fitted, and to save the fitting.
@@ -47,7 +53,7 @@ export async function makeAgreedFor110(battery = FITTED_INSTEAD) {
 	const agreed = await recommend();
 	const differences = battery ? [{ key: 'battery' as const, fitted: battery }] : [];
 	await saveFitting(installer, hot.id, { ...FITTED, differences });
-	const note = async (data: (typeof EVENINGS)[number]) =>
+	const note = async (data: (typeof EVENINGS | typeof BRIEF_EVENINGS)[number]) =>
 		addFieldNote(installer, hot.id, data, LIGHT_LEARNING);
 	return { crew, installer, jobId, mountId: hot.id, agreed, recommend, chooseFitted, note };
 }

@@ -3,7 +3,7 @@ import { col, Op, type Transaction } from 'sequelize';
 import { ERASED } from '$lib/schemas/erasures';
 import type { LetterKind } from '$lib/schemas/letters';
 import { OutgoingMail, Workshop } from '../db/models';
-import { outsideTransaction } from '../db/transaction';
+import { inTransaction, outsideTransaction } from '../db/transaction';
 import { logger } from '../logger';
 import { withLetterhead } from './letterhead';
 import { isFinalRefusal, isRefusal, sayMailError } from './mail-error';
@@ -96,26 +96,39 @@ export async function noteArrived(id: number, transaction: Transaction): Promise
 const withoutReader = ({ kind }: OutgoingMail): Partial<OutgoingMail> =>
 	kind === 'erasure-granted' ? { recipient: ERASED, lastError: '', ...FORGOTTEN } : {};
 
+/** Notes something of a letter, again where two changes met; says whether it was still as it is taken to be. */
+async function note(
+	{ id }: OutgoingMail,
+	values: Parameters<typeof OutgoingMail.update>[0],
+	still: Partial<Pick<OutgoingMail, 'state' | 'attempts' | 'nextAttemptAt' | 'handedOverAt'>> = {}
+): Promise<boolean> {
+	const [changed] = await inTransaction(() => OutgoingMail.update(values, { where: { ...still, id } }));
+	return changed === 1;
+}
+
 /** Takes a letter for a while; gives until when, or null where another process was faster. */
 async function claim(mail: OutgoingMail): Promise<Date | null> {
 	const until = new Date(Date.now() + CLAIM_MS);
-	const [changed] = await OutgoingMail.update(
-		{ nextAttemptAt: until, attempts: mail.attempts + 1 },
-		{ where: { id: mail.id, state: 'waiting', attempts: mail.attempts, handedOverAt: null } }
+	const { attempts } = mail;
+	const isTaken = await note(
+		mail,
+		{ nextAttemptAt: until, attempts: attempts + 1 },
+		{ state: 'waiting', attempts, handedOverAt: null }
 	);
-	return changed === 1 ? until : null;
+	return isTaken ? until : null;
 }
 
 /**
  * Written before the server can have the letter: whatever happens from here to its answer, the letter is not sent by
  * itself a second time. A process that was held up for longer than its claim finds it gone and lets go of the letter.
  */
-async function noteHandedOver({ id }: OutgoingMail, claimedUntil: Date): Promise<void> {
-	const [changed] = await OutgoingMail.update(
+async function noteHandedOver(mail: OutgoingMail, claimedUntil: Date): Promise<void> {
+	const isStillClaimed = await note(
+		mail,
 		{ handedOverAt: new Date(), nextAttemptAt: new Date(claimedUntil.getTime() + CLAIM_MS) },
-		{ where: { id, state: 'waiting', nextAttemptAt: claimedUntil } }
+		{ state: 'waiting', nextAttemptAt: claimedUntil }
 	);
-	if (changed !== 1) throw new Error('It was dropped, or another process took it over.');
+	if (!isStillClaimed) throw new Error('It was dropped, or another process took it over.');
 }
 
 /** The server has it: a hiccup of the database must not send it again. */
@@ -128,8 +141,8 @@ async function noteSent(mail: OutgoingMail): Promise<void> {
 		...FORGOTTEN,
 		...withoutReader(mail)
 	} as const;
-	const note = () => OutgoingMail.update(sent, { where: { id: mail.id } });
-	await note().catch(note).catch(note);
+	const noteIt = () => note(mail, sent);
+	await noteIt().catch(noteIt).catch(noteIt);
 }
 
 async function noteRefused(mail: OutgoingMail, attempts: number, error: unknown): Promise<void> {
@@ -137,23 +150,21 @@ async function noteRefused(mail: OutgoingMail, attempts: number, error: unknown)
 	const givenUp = attempts >= MOST_ATTEMPTS || isFinalRefusal(error);
 	const pauseMs = Math.min(FIRST_PAUSE_MS * 2 ** attempts, LONGEST_PAUSE_MS);
 	const nextAttemptAt = new Date(Date.now() + pauseMs);
-	await OutgoingMail.update(
+	await note(
+		mail,
 		{
 			...{ state: givenUp ? 'failed' : 'waiting', nextAttemptAt, lastError, handedOverAt: null },
 			...(givenUp ? withoutReader(mail) : {})
 		},
 		// Whoever dropped it meanwhile meant it: it is not put back.
-		{ where: { id: mail.id, state: 'waiting' } }
+		{ state: 'waiting' }
 	);
 	logger.warn({ mailId: mail.id, attempts, givenUp, lastError }, 'mail not sent');
 }
 
 /** The line broke, or the process died, between a letter's end and the answer: a person decides whether to send it again. */
 async function noteUnsure(mail: OutgoingMail): Promise<void> {
-	await OutgoingMail.update(
-		{ state: 'unsure', lastError: UNSURE, ...withoutReader(mail) },
-		{ where: { id: mail.id, state: 'waiting' } }
-	);
+	await note(mail, { state: 'unsure', lastError: UNSURE, ...withoutReader(mail) }, { state: 'waiting' });
 	logger.warn({ mailId: mail.id }, 'mail may have arrived');
 }
 
@@ -175,8 +186,9 @@ async function sendOne(mail: OutgoingMail): Promise<void> {
 }
 
 /**
- * Sends what is due. What the server may have already is not sent again, but set aside for a person to decide. A letter that fails waits longer each time, up to an hour, and is given up after three days, or at
- * once when the server refuses it for good.
+ * Sends what is due. What the server may have already is not sent again, but set aside for a person to decide. A letter
+ * that fails waits longer each time, up to an hour, and is given up after three days, or at once when the server refuses
+ * it for good.
  */
 export async function sendDue(isOver: () => boolean = () => false): Promise<void> {
 	let due: OutgoingMail[];

@@ -1,5 +1,10 @@
 import { describe, expect, it } from 'vitest';
-import { EVENINGS, FITTED_INSTEAD, makeAgreedFor110 } from '../../../../tests/support/otherwise';
+import {
+	BRIEF_EVENINGS,
+	EVENINGS,
+	FITTED_INSTEAD,
+	makeAgreedFor110
+} from '../../../../tests/support/otherwise';
 import { FITTED } from '../../../../tests/support/fitted';
 import { readReview } from '../../../../tests/support/review';
 import { makeCrew, useTestDatabase } from '../../../../tests/support/services';
@@ -205,10 +210,10 @@ describe('evenings that contradict the estimate', () => {
 		{ timeout: LONG_MS },
 		async () => {
 			const made = await makeAgreedFor110('');
-			await made.note(EVENINGS[0]);
+			await made.note(BRIEF_EVENINGS[0]!);
 			const [alone] = await reportsOf(made);
 			expect(alone!.cause).toMatchObject({ word: 'Hardly', doubt: '' });
-			await made.note(EVENINGS[1]);
+			await made.note(BRIEF_EVENINGS[1]!);
 			const both = await reportsOf(made);
 			for (const { cause } of both)
 				expect(cause!.doubt).toMatch(

@@ -8,15 +8,13 @@ import { OutcomeRunner } from '../vehicle/outcome-run';
 import { runScenario } from '../vehicle/simulate';
 import { findEndHour, findSpans } from '../vehicle/spans';
 import { checkReading, weighReading, type FieldReading, type RunForReading } from './readings';
-import { drawAgain, effectiveCount, weightedMean, weightedQuantile } from './weighted';
+import { drawAgain, effectiveCount, FEWEST_EFFECTIVE, weightedMean, weightedQuantile } from './weighted';
 
 /** What is another on each day; everything else belongs to vehicle and mount, and stays. */
 const OF_THE_DAY = new Set(['dayMax', 'dayRange', 'driveLength', 'loads', 'startCharge']);
 const MOUNT_PRIORS = PRIORS.filter(({ key }) => !OF_THE_DAY.has(key));
 const DAY_PRIORS = PRIORS.filter(({ key }) => OF_THE_DAY.has(key));
 
-/** With fewer draws left that agree, nothing is learnt: the reading lies outside of what was held possible. */
-const FEWEST_EFFECTIVE = 6;
 const EDGE = 0.05;
 /** From this move of its middle, or this much left of its spread, an unknown is said to have been learnt about. */
 const MOVED_FROM = 0.15;
@@ -192,6 +190,7 @@ export function* learnFrom(
 		yield (0.6 * (draw + 1)) / samples;
 	}
 	const effectiveSamples = effectiveCount(weights);
+	// With fewer, the reading lies outside of what was held possible.
 	const fits = effectiveSamples >= FEWEST_EFFECTIVE;
 	const even = weights.map(() => 1);
 	const countYear = (held: readonly number[], from: number): Generator<number, CutOutDays> => {

@@ -7,6 +7,7 @@ import { runScenario } from '../vehicle/simulate';
 import { findEndHour } from '../vehicle/spans';
 import { checkReport, matchesReport, weighAnyTime, weighReport, type CutOutReport } from './cut-out-report';
 import { rankOtherCauses, type RankedCause } from './other-causes';
+import { effectiveCount, FEWEST_EFFECTIVE } from './weighted';
 
 const EDGE = 0.05;
 /** On so many days something else than heat makes a battery go dark of which that is asked: engineering judgement. */
@@ -14,6 +15,8 @@ const OTHERWISE_DARK_SHARE = 0.1;
 /** From here on heat alone is taken for the cause, and below this it is not: engineering judgement. */
 const EXPLAINED_FROM = 0.8;
 const POSSIBLE_FROM = 0.2;
+/** So many times the draws that were asked for are made at most where few of them bear on the report. */
+const MOST_TIMES = 8;
 
 export interface HourRange {
 	lowHour: number;
@@ -22,6 +25,7 @@ export interface HourRange {
 }
 
 export interface HeatCause {
+	/** Draws made: more than were asked for when few of those bore on the report. */
 	samples: number;
 	seed: number;
 	/** How likely it is that heat alone did it. */
@@ -77,8 +81,9 @@ function findFalling({ ambient }: MinuteSeries, minute: number | null): boolean 
 	return ambient[minute]! < ambient[minute - 1]!;
 }
 
-function judge(probability: number): HeatCause['finding'] {
-	if (probability >= EXPLAINED_FROM) return 'explained';
+/** What one draw in hundreds has come about by may be the draw: it makes nothing more than possible. */
+function judge(probability: number, effectiveSamples: number): HeatCause['finding'] {
+	if (probability >= EXPLAINED_FROM && effectiveSamples >= FEWEST_EFFECTIVE) return 'explained';
 	return probability >= POSSIBLE_FROM ? 'possible' : 'not-explained';
 }
 
@@ -113,17 +118,19 @@ function readMoment(scenario: Scenario, report: CutOutReport) {
  *     P = m/(m + r q),   m = mean over draws of L(report | run),   q = density of the report at any time for any length
  *
  * Against heat stands that on a share r = 0.1 of days something else makes the battery go dark, at any time of the day and
- * for any time up to twelve hours.
+ * for any time up to twelve hours. Where some draws bear on the report and fewer than six do, counted as if they were
+ * equal, more are made, up to eight times as many; what still rests on fewer is possible at most.
  *
  * @param scenario the mount on that day: the day's own maximum and its legs as they were driven
  * @param report when it went dark and came back, and how exactly that is known
- * @param options number of draws (a power of two) and seed
+ * @param options number of draws to begin with (a power of two) and seed
  * @returns as a generator, yields the share of the work done; then how likely heat is, on how many of the days drawn it
  *   went like that, when such days usually go dark and come back, and the other causes in order
  * @throws EngineInputError for a report that cannot be, RunFailedError when a draw cannot be run to its end
  * Validity: lithium batteries with a BMS whose limits are known; as the priors.
  * Source: Bayes' rule with the draws as prior (Kass and Raftery, J. Am. Stat. Assoc. 90 (1995) 773, for the ratio m/q);
- * the tenth of days, the twelve hours and the thresholds are engineering judgement.
+ * the number of draws that bear on it after Kong, Technical Report 348, University of Chicago (1992); the tenth of days,
+ * the twelve hours and the thresholds are engineering judgement.
  * @example
  * const report = { wentDarkHour: 5, cameBackHour: 6, withinHours: 0.5 };
  * const work = weighHeat(defaultScenario([{ minutes: 60 }]), report, { samples: 16, seed: 1 });
@@ -140,11 +147,18 @@ export function* weighHeat(
 	const runner = new OutcomeRunner();
 	const darkHours: number[] = [];
 	const backHours: number[] = [];
-	let [likelihood, when, both] = [0, 0, 0];
-	for (let draw = 0; draw < samples; draw++) {
+	const likelihoods: number[] = [];
+	const isThin = () => {
+		const effectiveSamples = effectiveCount(likelihoods);
+		return effectiveSamples > 0 && effectiveSamples < FEWEST_EFFECTIVE;
+	};
+	let [when, both] = [0, 0];
+	const most = samples * MOST_TIMES;
+	for (let planned = samples; likelihoods.length < planned;) {
+		const draw = likelihoods.length;
 		const drawn = drawScenario(scenario, scrambledSobolPoint(draw, PRIORS.length, seed));
 		const { darkSpans: spans } = runner.run(drawn);
-		likelihood += weighReport(spans, report);
+		likelihoods.push(weighReport(spans, report));
 		const matched = matchesReport(spans, report);
 		if (matched.when) when++;
 		if (matched.both) both++;
@@ -153,16 +167,19 @@ export function* weighHeat(
 			darkHours.push(first.fromHour);
 			if (!first.open) backHours.push(first.toHour);
 		}
-		yield (draw + 1) / samples;
+		yield (draw + 1) / most;
+		if (draw + 1 === planned && planned < most && isThin()) planned *= 2;
 	}
-	const mean = likelihood / samples;
+	const made = likelihoods.length;
+	const mean = likelihoods.reduce((sum, likelihood) => sum + likelihood, 0) / made;
 	const anyTime = weighAnyTime(report, findEndHour(scenario) - scenario.start.hour);
 	const heatProbability = mean / (mean + OTHERWISE_DARK_SHARE * anyTime);
 	return {
-		...{ samples, seed, heatProbability, finding: judge(heatProbability) },
-		darkShare: darkHours.length / samples,
-		whenShare: when / samples,
-		bothShare: both / samples,
+		...{ samples: made, seed, heatProbability },
+		finding: judge(heatProbability, effectiveCount(likelihoods)),
+		darkShare: darkHours.length / made,
+		whenShare: when / made,
+		bothShare: both / made,
 		usuallyDark: rangeOf(darkHours),
 		usuallyBack: rangeOf(backHours),
 		...readMoment(scenario, report)

@@ -1,3 +1,6 @@
+/** With fewer draws left that agree, nothing is said by them: engineering judgement. */
+export const FEWEST_EFFECTIVE = 6;
+
 /** What is left of a number of equal draws once they are weighed: so many equal ones would say as much. */
 export function effectiveCount(weights: readonly number[]): number {
 	let sum = 0;
