@@ -17,7 +17,7 @@ for (const role of ['engineer', 'manager'] as const) {
 		const rows = page.getByRole('table', { name: /^Single readings/ }).getByRole('row');
 		const reading = rows.filter({ hasText: /Peak label|Capacity test|Cut-outs/ }).first();
 		await expect(reading).toBeVisible();
-		const assessment = reading.getByRole('link', { name: /^Assessment \d+$/ });
+		const assessment = reading.getByRole('link', { name: 'The estimate' });
 		await assessment.click();
 		await expect(page).toHaveURL(/\/assessments\/\d+$/);
 		await page.goBack();

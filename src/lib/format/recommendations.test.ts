@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { findEntrant, sayDecider, sayReplaced } from './recommendations';
 
-const replacedBy = { id: 9, recommendedBy: 'Odo Marsh', createdAt: '2026-03-04T12:00:00.000Z' };
+const replacedBy = { id: 3010, number: 9, recommendedBy: 'Odo Marsh', createdAt: '2026-03-04T12:00:00.000Z' };
 
 describe('what is said of an earlier recommendation', () => {
 	it.each([

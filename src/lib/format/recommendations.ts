@@ -25,8 +25,8 @@ export function sayReplaced({
 	isFittedUnder
 }: Pick<RecommendationView, 'replacedBy' | 'isFittedUnder'>): string {
 	if (!replacedBy) return '';
-	const { id, recommendedBy, createdAt } = replacedBy;
-	const later = `recommendation ${id} on ${formatDate(createdAt)}, by ${recommendedBy}`;
+	const { number, recommendedBy, createdAt } = replacedBy;
+	const later = `recommendation ${number} on ${formatDate(createdAt)}, by ${recommendedBy}`;
 	return isFittedUnder
 		? `What was fitted is held against this one; later came ${later}.`
 		: `Replaced by ${later}.`;

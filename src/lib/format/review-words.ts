@@ -124,8 +124,8 @@ export const sayOverride = ({ override }: Pick<ReviewInstallation, 'override'>):
 		: '';
 
 /** What was recommended after the fitting changes nothing until the fitting is held against it. */
-export const sayLater = ({ id, on, recommendedBy }: NonNullable<ReviewInstallation['later']>): string =>
-	`Recommended again after the fitting: recommendation ${id}, ${formatShortDate(on)}, by ${recommendedBy}.`;
+export const sayLater = ({ number, on, recommendedBy }: NonNullable<ReviewInstallation['later']>): string =>
+	`Recommended again after the fitting: recommendation ${number}, ${formatShortDate(on)}, by ${recommendedBy}.`;
 
 /** Whether a prediction can be held against an installation, and if not, why. */
 export const CHANCE_WORDS: Record<Chance, string> = {

@@ -81,7 +81,11 @@ export const followUpChangeSchema = z.object({
 export type FollowUpChange = z.infer<typeof followUpChangeSchema>;
 
 /** A recommendation of a mount against which a fitting may be held. */
-const agreementSchema = z.object({ id: z.number().int(), recommendedAt: z.iso.datetime() });
+const agreementSchema = z.object({
+	id: z.number().int(),
+	number: z.number().int().meta({ description: 'Which one of its job' }),
+	recommendedAt: z.iso.datetime()
+});
 export type AgreementView = z.infer<typeof agreementSchema>;
 
 /** The recommendation against which a fitting is to be held from now on. */

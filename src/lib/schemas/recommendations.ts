@@ -30,6 +30,7 @@ export type RecommendationInput = z.infer<typeof recommendationInputSchema>;
 
 export const recommendationSchema = z.object({
 	id: z.number().int(),
+	number: z.number().int().meta({ description: 'Which one of its job' }),
 	jobId: z.number().int(),
 	jobNumber: z.number().int(),
 	assessment: assessmentRowSchema,
@@ -51,7 +52,12 @@ export const recommendationSchema = z.object({
 	recommendedBy: z.string(),
 	createdAt: z.iso.datetime(),
 	replacedBy: z
-		.object({ id: z.number().int(), recommendedBy: z.string(), createdAt: z.iso.datetime() })
+		.object({
+			id: z.number().int(),
+			number: z.number().int(),
+			recommendedBy: z.string(),
+			createdAt: z.iso.datetime()
+		})
 		.nullable()
 		.meta({ description: 'The next recommendation of the same mount' }),
 	isFittedUnder: z.boolean().meta({ description: 'Whether what was fitted is held against this one' })

@@ -121,7 +121,12 @@ export const reviewInstallationSchema = z.object({
 		})
 		.nullable(),
 	later: z
-		.object({ id: z.number().int(), on: z.iso.date(), recommendedBy: z.string() })
+		.object({
+			id: z.number().int(),
+			number: z.number().int(),
+			on: z.iso.date(),
+			recommendedBy: z.string()
+		})
 		.nullable()
 		.meta({ description: 'The newest recommendation that was made after the one it was fitted under' }),
 	sheetState: z.enum(SHEET_STATES),

@@ -124,13 +124,13 @@ export const tellFollowUps = ({ fitting }: MountRecord): PaperBlock => ({
 
 export const tellAgreement = ({ paper, acknowledgement }: MountRecord): PaperBlock => {
 	const { recommendation } = paper;
-	const { id, createdAt, recommendedBy, reason, assessment } = recommendation;
+	const { number, createdAt, recommendedBy, reason, assessment } = recommendation;
 	const against = sayAgainst(recommendation, assessment);
 	const verdict = sayVerdict(assessment.verdict, assessment.chemistry);
 	return {
 		...{ kind: 'lines', title: 'What was recommended' },
 		lines: [
-			{ label: `Recommendation ${id}`, value: `${formatDateTime(createdAt)}, by ${recommendedBy}` },
+			{ label: `Recommendation ${number}`, value: `${formatDateTime(createdAt)}, by ${recommendedBy}` },
 			{ label: 'Verdict', value: verdict },
 			...(against
 				? [

@@ -165,7 +165,7 @@ function firstPage(paper: RecommendationPaper, scale: number): Content {
 			paperHead({
 				shop: paper.workshop,
 				logo: paper.logo,
-				title: `Recommendation ${recommendation.id}`,
+				title: `Recommendation ${recommendation.number}`,
 				under: `Job ${recommendation.jobNumber}, ${formatDate(recommendation.createdAt)}`
 			}),
 			answer(paper, size),
@@ -270,13 +270,13 @@ export function layOutRecommendation(
 	scales: PageScales,
 	photos: Content | null
 ): TDocumentDefinitions {
-	const { id, jobNumber } = paper.recommendation;
+	const { number, jobNumber } = paper.recommendation;
 	return {
 		pageSize: 'A4',
 		pageMargins: [mm(14), mm(10), mm(14), mm(12)],
 		defaultStyle: { font: TEXT_FAMILY, lineHeight: 1.12 },
 		footer: (page, count) => ({
-			text: `Recommendation ${id}, job ${jobNumber}, page ${page} of ${count}`,
+			text: `Recommendation ${number}, job ${jobNumber}, page ${page} of ${count}`,
 			alignment: 'right',
 			fontSize: 6.5,
 			margin: [0, mm(3), mm(14), 0]

@@ -44,9 +44,9 @@ const smaller = (scale: number): number => SCALES[SCALES.indexOf(scale) + 1] ?? 
  * for itself.
  */
 export async function writeRecommendation(paper: RecommendationPaper, readPhoto: ReadPhoto): Promise<Buffer> {
-	const { id, jobNumber, createdAt } = paper.recommendation;
+	const { number, jobNumber, createdAt } = paper.recommendation;
 	const meta = {
-		title: `Recommendation ${id}, job ${jobNumber}`,
+		title: `Recommendation ${number}, job ${jobNumber}`,
 		...{ author: paper.workshop.name, madeAt: new Date(createdAt) }
 	};
 	const photos = paper.photos.length > 0 ? await layPhotos(paper.photos, readPhoto) : null;

@@ -56,8 +56,8 @@ export interface Agreed {
 	first: Recommendation;
 }
 
-const presentAgreement = ({ id, createdAt }: Recommendation): AgreementView => ({
-	id,
+const presentAgreement = ({ id, number, createdAt }: Recommendation): AgreementView => ({
+	...{ id, number },
 	recommendedAt: createdAt.toISOString()
 });
 

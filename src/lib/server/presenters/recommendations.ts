@@ -5,6 +5,7 @@ import type { Recommendation } from '../db/models';
 export function presentRecommendation(
 	{
 		id,
+		number,
 		jobId,
 		againstVerdict,
 		againstMaker,
@@ -22,7 +23,7 @@ export function presentRecommendation(
 	}
 ): RecommendationView {
 	return {
-		...{ id, jobId, againstVerdict, againstMaker, decidedBy, reason },
+		...{ id, number, jobId, againstVerdict, againstMaker, decidedBy, reason },
 		preDrill: preDrill ?? null,
 		cautions: cautions ?? null,
 		...more,

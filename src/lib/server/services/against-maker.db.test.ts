@@ -57,9 +57,12 @@ describe('a mount that the battery’s maker does not allow', () => {
 	it('is refused by the database itself without a reason', async () => {
 		const { crew, jobId, ofHot } = await makeForbiddenJob();
 		const { id: createdBy, workshopId } = crew.installer;
-		const bare = { workshopId, jobId, assessmentId: ofHot.id, createdBy, againstVerdict: false };
+		const bare = {
+			...{ workshopId, jobId, number: 1, assessmentId: ofHot.id },
+			...{ createdBy, againstVerdict: false }
+		};
 		const nobody = { againstMaker: true, decidedBy: null, reason: null };
-		await expect(Recommendation.create({ ...bare, ...nobody })).rejects.toThrow();
+		await expect(Recommendation.create({ ...bare, ...nobody })).rejects.toThrow('recommendations_reasoned');
 		expect(await Recommendation.count({ where: { jobId } })).toBe(0);
 	});
 
@@ -86,7 +89,7 @@ describe('a mount that the battery’s maker does not allow', () => {
 		const { crew, jobId, ofHot } = await makeForbiddenJob();
 		const { id: createdBy, workshopId } = crew.installer;
 		const { id } = await Recommendation.create({
-			...{ workshopId, jobId, assessmentId: ofHot.id, createdBy, againstVerdict: false },
+			...{ workshopId, jobId, number: 1, assessmentId: ofHot.id, createdBy, againstVerdict: false },
 			...{ decidedBy: null, reason: null }
 		});
 		const sending = sendSheet(crew.installer, { recommendationId: id, sendTo: 'ilse@travellers.example' });

@@ -88,7 +88,7 @@ describe('a fitting of another battery than agreed', () => {
 			expect(await listFitted(installer, jobId)).toMatchObject([{ mismatch: 'hold' }]);
 			const offered = await getFitting(installer, mountId);
 			expect(offered.recommendation.id).toBe(made.agreed.id);
-			expect(offered.newer).toEqual({ id: newer.id, recommendedAt: newer.createdAt });
+			expect(offered.newer).toEqual({ id: newer.id, number: 2, recommendedAt: newer.createdAt });
 			const held = await hold(made, newer.id);
 			expect(held).toMatchObject({ assessmentId: newer.assessment.id, newer: null });
 			expect(held.installation!.differences).toEqual([]);
@@ -102,7 +102,7 @@ describe('a fitting of another battery than agreed', () => {
 			expect(handover).toMatch(/110\s°C/);
 			expect(after).toMatch(/Fenmoor Low 65, 100.*65\s°C/);
 			expect(after).not.toMatch(/fitted instead|110\s°C|not for what was fitted/);
-			expect(await readPaper(made, 'warranty-file')).toContain(`Recommendation ${newer.id}`);
+			expect(await readPaper(made, 'warranty-file')).toContain(`Recommendation ${newer.number}`);
 			expect(await getRecommendation(installer, newer.id)).toMatchObject({ isFittedUnder: true });
 			const kept = await readReview(installer.workshopId);
 			expect(kept.rows).toMatchObject([{ recommendation_id: newer.id, dark_days: 2, not_heat_days: 0 }]);

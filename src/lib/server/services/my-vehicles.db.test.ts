@@ -53,7 +53,7 @@ describe('what a customer finds of their own vehicles', () => {
 		const { text } = await readPdf(await writeMyHandover(crew.customer, assessment.mountId));
 		expect(text).toContain('Handover');
 		const recommended = await readPdf(await writeMyRecommendation(crew.customer, sheet.recommendationId));
-		expect(recommended.text).toContain(`Recommendation ${sheet.recommendationId}`);
+		expect(recommended.text).toContain('Recommendation 1, job');
 		const { customer } = await makeCrew();
 		const stranger = { ...customer, workshopId: crew.workshopId };
 		for (const read of [

@@ -41,7 +41,8 @@ describe('a customer whose name was put right after a recommendation', () => {
 		const { crew, jobId, assessment } = await makeRenamed();
 		const { id: createdBy, workshopId } = crew.installer;
 		const { id } = await Recommendation.create({
-			...{ workshopId, jobId, assessmentId: assessment.id, createdBy, againstVerdict: true, ...WHY }
+			...{ workshopId, jobId, number: 9, assessmentId: assessment.id },
+			...{ createdBy, againstVerdict: true, ...WHY }
 		});
 		const { customerName } = assessment.inputs;
 		expect(await getRecommendation(crew.installer, id)).toMatchObject({ madeOutTo: customerName });

@@ -41,12 +41,12 @@ describe('a recommendation as a document', () => {
 			const { installer: neighbour } = await makeCrew();
 			const { jobId } = await makeAssessableJob(installer);
 			const [, ofCool] = await assessJob(installer, jobId);
-			const { id } = await makeRecommendation(installer, { assessmentId: ofCool!.id });
+			const { id, jobNumber } = await makeRecommendation(installer, { assessmentId: ofCool!.id });
 			const pdf = await writeRecommendationPdf(installer, id);
 			const { pages, text, fonts, inkShares } = await readPdf(pdf);
 			expect(pages).toBe(2);
 			expect(text).toContain('Rides it out');
-			expect(text).toContain(`Recommendation ${id}, job`);
+			expect(text).toContain(`Recommendation 1, job ${jobNumber}`);
 			expect(text).toContain('goes dark at 75 °C');
 			for (const { title } of listCautions('lithium-iron-phosphate')) expect(text).toContain(`${title}.`);
 			expect(new Set(fonts)).toEqual(new Set(['RobotoFlex-Regular']));

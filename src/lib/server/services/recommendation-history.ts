@@ -43,7 +43,7 @@ export async function findAftermath(
 	const under = installation && (await findFittedUnder(installation));
 	return {
 		replacedBy: newer && {
-			id: newer.id,
+			...{ id: newer.id, number: newer.number },
 			recommendedBy: author?.name ?? '',
 			createdAt: newer.createdAt.toISOString()
 		},

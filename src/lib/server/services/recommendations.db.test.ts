@@ -71,13 +71,13 @@ describe('a recommendation', () => {
 	it('against a verdict without a reason is refused by the database itself', async () => {
 		const { crew, jobId, ofHot } = await makeAssessedJob();
 		const { id: createdBy, workshopId } = crew.installer;
-		const bare = { workshopId, jobId, assessmentId: ofHot.id, againstVerdict: true, createdBy };
+		const bare = { workshopId, jobId, number: 1, assessmentId: ofHot.id, againstVerdict: true, createdBy };
 		for (const words of [
 			{ decidedBy: null, reason: null },
 			{ decidedBy: '', reason: 'because' },
 			{ decidedBy: 'Ilse Tarn', reason: '' }
 		]) {
-			await expect(Recommendation.create({ ...bare, ...words })).rejects.toThrow();
+			await expect(Recommendation.create({ ...bare, ...words })).rejects.toThrow('recommendations_reasoned');
 		}
 		expect(await Recommendation.count({ where: { jobId } })).toBe(0);
 	});
@@ -113,15 +113,27 @@ describe('a recommendation', () => {
 		expect(made[0]).toMatchObject({ id: later.id, ...again, replacedBy: null, isFittedUnder: false });
 		expect(made[2]).toMatchObject({
 			...{ id: first.id, ...WHY, isFittedUnder: true },
-			replacedBy: { id: later.id, recommendedBy: crew.manager.name, createdAt: later.createdAt }
+			replacedBy: { id: later.id, number: 3, recommendedBy: crew.manager.name, createdAt: later.createdAt }
 		});
+	});
+
+	it('is numbered within its job, also where two are made at once', async () => {
+		const [{ crew, jobId, ofHot, ofCool }, other] = [await makeAssessedJob(), await makeAssessedJob()];
+		const ofMount = (assessmentId: number) => makeRecommendation(crew.installer, { assessmentId, ...WHY });
+		const made = await Promise.all([ofMount(ofHot.id), ofMount(ofCool.id), ofMount(ofHot.id)]);
+		expect(made.map(({ number }) => number).sort()).toEqual([1, 2, 3]);
+		const listed = await listRecommendations(crew.installer, jobId);
+		expect(listed.map(({ number }) => number)).toEqual([3, 2, 1]);
+		const elsewhere = { assessmentId: other.ofCool.id };
+		expect(await makeRecommendation(other.crew.installer, elsewhere)).toMatchObject({ number: 1 });
 	});
 
 	it('cannot be changed or deleted', async () => {
 		const { crew, ofCool } = await makeAssessedJob();
 		const { id } = await makeRecommendation(crew.installer, { assessmentId: ofCool.id });
 		const run = (sql: string) => connection().query(sql, { replacements: { id } });
-		await expect(run("UPDATE recommendations SET reason = 'x' WHERE id = :id")).rejects.toThrow(/immutable/);
+		for (const change of ["reason = 'x'", 'number = 7'])
+			await expect(run(`UPDATE recommendations SET ${change} WHERE id = :id`)).rejects.toThrow(/immutable/);
 		await expect(run('DELETE FROM recommendations WHERE id = :id')).rejects.toThrow(/immutable/);
 		expect(await getRecommendation(crew.installer, id)).toMatchObject({ id, reason: null });
 	});

@@ -68,11 +68,16 @@ function readOverride(assessment: AssessmentView, input: RecommendationInput) {
 	return { ...against, decidedBy, reason };
 }
 
-function requireCurrent({ isCurrent, id }: AssessmentView): void {
+/** Numbers count within a job; whoever asks holds the job. */
+async function nextNumber(jobId: number): Promise<number> {
+	return 1 + ((await Recommendation.max<number | null, Recommendation>('number', { where: { jobId } })) ?? 0);
+}
+
+function requireCurrent({ isCurrent }: AssessmentView): void {
 	if (isCurrent) return;
 	throw new AppError(
 		'conflict',
-		`Assessment ${id} is out of date: the job, the coefficient book or the engine has changed since. Assess the mount again first.`
+		'The assessment is out of date: the job, the coefficient book or the engine has changed since. Assess the mount again first.'
 	);
 }
 
@@ -92,7 +97,13 @@ export async function makeRecommendation(
 		const { name: madeOutTo } = (await Customer.findByPk(job.customerId))!;
 		const preDrill = await snapshotPreDrill(person, assessment.mountId);
 		const cautions = await listIssuedCautions(workshopId, person.workshopName, assessment.chemistry);
-		const made = { workshopId, jobId: job.id, assessmentId: assessment.id, createdBy: person.id };
+		const made = {
+			workshopId,
+			jobId: job.id,
+			number: await nextNumber(job.id),
+			assessmentId: assessment.id,
+			createdBy: person.id
+		};
 		const recommendation = await Recommendation.create(
 			{ ...made, ...override, madeOutTo, preDrill, cautions },
 			{ transaction }

@@ -111,6 +111,11 @@ import { migration as m191 } from './191-recommendations-reasoned';
 import { migration as m192 } from './192-recommendations-made-out-to';
 import { migration as m193 } from './193-recommendations-against-stays';
 import { migration as m194 } from './194-erasures-withdrawn';
+import { migration as m195 } from './195-recommendations-number';
+import { migration as m196 } from './196-recommendations-number-once';
+import { migration as m197 } from './197-recommendations-numbered';
+import { migration as m198 } from './198-recommendations-number-kept';
+import { migration as m199 } from './199-recommendations-number-stays';
 import type { Migration } from '../migrate';
 
 /** Every migration, in the order in which they run; each is one DDL step that may run again. */
@@ -227,5 +232,10 @@ export const migrations: Migration[] = [
 	m191,
 	m192,
 	m193,
-	m194
+	m194,
+	m195,
+	m196,
+	m197,
+	m198,
+	m199
 ];

@@ -7,7 +7,7 @@ import {
 } from 'sequelize';
 import type { CautionLine } from '$lib/schemas/caution-texts';
 import type { PreDrillSnapshot } from '$lib/schemas/pre-drill';
-import { flag, id, moment, optionalJson, optionalText, reference, writtenOnce } from './base';
+import { flag, id, moment, optionalJson, optionalText, reference, whole, writtenOnce } from './base';
 
 export class Recommendation extends Model<
 	InferAttributes<Recommendation>,
@@ -16,6 +16,8 @@ export class Recommendation extends Model<
 	declare id: CreationOptional<number>;
 	declare workshopId: number;
 	declare jobId: number;
+	/** Which one of its job: what people call it by. */
+	declare number: number;
 	declare assessmentId: number;
 	declare againstVerdict: boolean;
 	/** The maker does not allow it there; asked only since somebody has to answer for it. */
@@ -38,6 +40,7 @@ export function initRecommendation(sequelize: Sequelize): void {
 			id: id,
 			workshopId: reference,
 			jobId: reference,
+			number: whole,
 			assessmentId: reference,
 			againstVerdict: flag,
 			againstMaker: { ...flag, defaultValue: false },

@@ -189,13 +189,13 @@ async function storeChunk(
 	);
 	const recommendations = await add(
 		'recommendations',
-		'workshop_id job_id assessment_id against_verdict decided_by reason created_by created_at',
+		'workshop_id job_id number assessment_id against_verdict decided_by reason created_by created_at',
 		invented.map(({ fittedOn, verdict }, k) => {
 			const words =
 				verdict === 'cuts-out'
 					? [1, 'Invented manager', 'Invented: a duct is fitted before summer.']
 					: [0, null, null];
-			return [workshopId, jobs[k], assessments[k], ...words, managerId, at(fittedOn)];
+			return [workshopId, jobs[k], 1, assessments[k], ...words, managerId, at(fittedOn)];
 		})
 	);
 	const sent = invented.flatMap((each, k) => (each.sheet === 'none' ? [] : [{ ...each, k }]));

@@ -86,7 +86,10 @@ describe('the review of a workshop', () => {
 			expect(rows).toMatchObject([
 				{
 					override: { decidedBy, reason, enteredBy: installer.name },
-					later: { id: again.id, on: again.createdAt.slice(0, 10), recommendedBy: installer.name }
+					later: {
+						...{ id: again.id, number: 2, on: again.createdAt.slice(0, 10) },
+						recommendedBy: installer.name
+					}
 				}
 			]);
 			const sent = await sendSheet(installer, {

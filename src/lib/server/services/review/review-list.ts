@@ -83,7 +83,7 @@ const enter = ({ column }: Order): string => `FORCE INDEX (${ENTRIES[column]})`;
 const page = (where: string, order: Order, isFirst: boolean): string => `
 	SELECT r.*, j.number AS jobNumber, m.letter, m.name AS mountName, c.name AS customer, v.make, v.model,
 		p.name AS place, a.chemistry, n.against_verdict AS overVerdict, n.against_maker AS overMaker, n.decided_by AS decidedBy, n.reason, e.name AS enteredBy, CAST(DATE(s.created_at) AS CHAR) AS sheetSentOn,
-		l.id AS laterId, CAST(DATE(l.created_at) AS CHAR) AS laterOn, w.name AS laterBy
+		l.id AS laterId, l.number AS laterNumber, CAST(DATE(l.created_at) AS CHAR) AS laterOn, w.name AS laterBy
 	FROM (
 		SELECT * FROM review_rows ${isFirst ? '' : enter(order)} WHERE ${where}
 		ORDER BY ${order.column} ${order.direction}, installation_id ${order.direction} LIMIT :limit
@@ -143,7 +143,10 @@ function present(stored: StoredRow, kind: ReviewScope['kind'], now: string): Rev
 		later:
 			stored.laterId === null
 				? null
-				: { id: Number(stored.laterId), on: text('laterOn'), recommendedBy: text('laterBy') },
+				: {
+						...{ id: Number(stored.laterId), number: Number(stored.laterNumber) },
+						...{ on: text('laterOn'), recommendedBy: text('laterBy') }
+					},
 		sheetSentOn: sheetState === 'missing' || stored.sheetSentOn === null ? null : text('sheetSentOn')
 	};
 }

@@ -53,7 +53,7 @@ describe('a trace beside what had been predicted of it', () => {
 		expect(text).toContain('43.0 °C (40.0 to 46.0)');
 		expect(text).toContain('It is not counted: with legs that nobody has confirmed yet.');
 		expect(text).toContain('The assessment was entered after the day of the trace.');
-		expect(screen.getByRole('link', { name: 'Assessment 12' }).getAttribute('href')).toBe('/assessments/12');
+		expect(screen.getByRole('link', { name: 'The assessment' }).getAttribute('href')).toBe('/assessments/12');
 	});
 
 	it.each([

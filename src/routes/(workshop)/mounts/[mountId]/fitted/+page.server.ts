@@ -6,6 +6,8 @@ import {
 	fromFittingForm,
 	toFittingForm
 } from '$lib/schemas/fitting';
+import type { SignedInPerson } from '$lib/schemas/people';
+import type { RecommendationView } from '$lib/schemas/recommendations';
 import { doOrSay } from '$lib/server/http/do-or-say';
 import { saveEdited } from '$lib/server/http/edit-form';
 import { loadForm } from '$lib/server/http/forms';
@@ -14,15 +16,22 @@ import { pageId } from '$lib/server/http/page-id';
 import { validate } from '$lib/server/http/validate';
 import { holdFitting } from '$lib/server/services/fitting-agreement';
 import { finishFollowUp, getFitting, saveFitting } from '$lib/server/services/fittings';
+import { listRecommendations } from '$lib/server/services/recommendations';
 import { findReminded } from '$lib/server/services/reminders';
 import { getJob } from '$lib/server/services/jobs';
 import { openMount } from '../open-mount';
 import type { Actions, PageServerLoad } from './$types';
 
 /** The recommendation that it was held against until a moment ago. */
-function readHeldBefore(url: URL): number | null {
+async function findHeldBefore(
+	person: SignedInPerson,
+	jobId: number,
+	url: URL
+): Promise<RecommendationView | null> {
 	const read = idSchema.safeParse(url.searchParams.get('heldBefore') ?? undefined);
-	return read.success ? read.data : null;
+	if (!read.success) return null;
+	const made = await orPageError(listRecommendations(person, jobId));
+	return made.find(({ id }) => id === read.data) ?? null;
 }
 
 export const load: PageServerLoad = async (event) => {
@@ -42,7 +51,7 @@ export const load: PageServerLoad = async (event) => {
 		job: { id: job.id, number: job.number },
 		form: await loadForm(fittingFormSchema, known),
 		isSaved: event.url.searchParams.has('saved'),
-		heldBefore: readHeldBefore(event.url)
+		heldBefore: await findHeldBefore(person, mount.jobId, event.url)
 	};
 };
 
