@@ -1,5 +1,5 @@
 import { expect, test } from '@playwright/test';
-import { expectNoViolations, signInAs } from './support';
+import { expectNoViolations, openForm, signInAs } from './support';
 
 for (const role of ['engineer', 'manager'] as const) {
 	test(`the ${role} sees how the predictions did, the furthest off first, each with its mount`, async ({
@@ -32,7 +32,7 @@ test('readings are narrowed down in the address, with and without a script, and 
 	baseURL
 }) => {
 	await signInAs(page, 'engineer');
-	await page.goto('/accuracy');
+	await openForm(page, '/accuracy');
 	await page.getByLabel('Kind of reading').selectOption('Only label readings');
 	await expect(page).toHaveURL(/kind=label/);
 	const rows = page.getByRole('table', { name: /^Single readings/ }).getByRole('row');

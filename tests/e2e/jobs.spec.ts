@@ -117,7 +117,7 @@ test.describe('with a script', () => {
 	});
 
 	test('the list is ordered from its sentence', async ({ page }) => {
-		await page.goto('/jobs?verdict=cuts-out&sort=least-headroom');
+		await openForm(page, '/jobs?verdict=cuts-out&sort=least-headroom');
 		const headrooms = async () => {
 			const texts = await page.getByRole('cell').filter({ hasText: /K$/ }).allInnerTexts();
 			return texts.map((text) => Number(text.replace('−', '-').replace(/[^\d.-]/g, '')));
