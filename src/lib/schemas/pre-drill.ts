@@ -55,6 +55,12 @@ export function answerTo({ key, quote }: PreDrillQuestion, answers: KeptAnswers)
 	return given && (quote === null || given.quote === quote) ? given : null;
 }
 
+/** A question as it was put: another one has another key, or is about other words of the maker. */
+export type AskedThen = Pick<PreDrillQuestion, 'key' | 'quote'>;
+
+export const listAsked = (questions: readonly PreDrillQuestion[]): AskedThen[] =>
+	questions.map(({ key, quote }) => ({ key, quote }));
+
 export const preDrillChangeSchema = z.object({ answers: preDrillAnswersSchema, version: versionSchema });
 export type PreDrillChange = z.infer<typeof preDrillChangeSchema>;
 
@@ -96,6 +102,10 @@ export const preDrillSchema = z.object({
 	open: z.array(openItemSchema),
 	signedBy: z.string().nullable(),
 	signedAt: z.iso.datetime().nullable(),
+	signedBefore: z
+		.object({ by: z.string(), at: z.iso.datetime() })
+		.nullable()
+		.meta({ description: 'A name from before something else was asked: it does not count any more' }),
 	version: versionSchema
 });
 export type PreDrillView = z.infer<typeof preDrillSchema>;

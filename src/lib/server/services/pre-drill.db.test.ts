@@ -120,6 +120,23 @@ describe('the check before drilling', () => {
 		expect(actions.map(({ action }) => action)).toContain('mount.pre-drill-signed');
 	});
 
+	it('is not signed for what was not asked at the time, and says that it was signed before', async () => {
+		const { installer, mountId, jobId } = await makeMount();
+		const { questions } = await getPreDrill(installer, mountId);
+		const answers = Object.fromEntries(questions.map(({ key }) => [key, HOLDS]));
+		const signed = await saveAndSignPreDrill(installer, mountId, { answers, name: 'Ida Fenn', version: 0 });
+		expect(signed).toMatchObject({ open: [], signedBy: 'Ida Fenn', signedBefore: null });
+		const where = { id: (await Job.findByPk(jobId))!.batteryRecordId! };
+		await BatteryRecord.update({ underBonnetWords: 'Not in view of the exhaust.' }, { where });
+		expect(await getPreDrill(installer, mountId)).toMatchObject({
+			...{ open: [{ key: 'makerCondition', state: 'unanswered' }], signedBy: null, signedAt: null },
+			signedBefore: { by: 'Ida Fenn', at: signed.signedAt }
+		});
+		expect(await snapshotPreDrill(installer, mountId)).toMatchObject({ signedBy: null, signedAt: null });
+		await BatteryRecord.update({ underBonnetWords: BATTERY.underBonnetWords }, { where });
+		expect(await getPreDrill(installer, mountId)).toEqual(signed);
+	});
+
 	it('is kept and signed at once, or neither', async () => {
 		const { installer, mountId } = await makeMount();
 		const first = await savePreDrill(installer, mountId, { answers: { fuse: HOLDS }, version: 0 });

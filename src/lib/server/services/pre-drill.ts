@@ -4,6 +4,7 @@ import type { SignedInPerson } from '$lib/schemas/people';
 import {
 	findOpenItems,
 	keepQuotes,
+	listAsked,
 	type PreDrillAnswers,
 	type PreDrillChange,
 	type PreDrillSignature,
@@ -120,7 +121,9 @@ export async function savePreDrill(
 		refuseUnasked(questions, answers);
 		const check = await holdCheck(mount, transaction);
 		const kept = keepQuotes(questions, answers);
-		const unsigned = isDeepStrictEqual(check.answers, kept) ? {} : { signedBy: null, signedAt: null };
+		const unsigned = isDeepStrictEqual(check.answers, kept)
+			? {}
+			: { signedBy: null, signedAt: null, signedFor: null };
 		await saveVersioned(check, 'check', version, { answers: kept, ...unsigned }, transaction);
 		const subject = { type: 'mount', id: mountId };
 		await recordBy(person, 'mount.pre-drill', subject, transaction, { answers });
@@ -141,7 +144,8 @@ export async function signPreDrill(
 		if (Object.keys(check.answers).length === 0) {
 			throw new AppError('conflict', 'Nothing is answered yet: there is nothing to sign.');
 		}
-		await saveVersioned(check, 'check', version, { signedBy: name, signedAt: new Date() }, transaction);
+		const signature = { signedBy: name, signedAt: new Date(), signedFor: listAsked(questions) };
+		await saveVersioned(check, 'check', version, signature, transaction);
 		const open = findOpenItems(questions, check.answers).map(({ key }) => key);
 		const subject = { type: 'mount', id: mountId };
 		await recordBy(person, 'mount.pre-drill-signed', subject, transaction, { name, open });

@@ -116,6 +116,7 @@ import { migration as m196 } from './196-recommendations-number-once';
 import { migration as m197 } from './197-recommendations-numbered';
 import { migration as m198 } from './198-recommendations-number-kept';
 import { migration as m199 } from './199-recommendations-number-stays';
+import { migration as m215 } from './215-pre-drill-signed-for';
 import type { Migration } from '../migrate';
 
 /** Every migration, in the order in which they run; each is one DDL step that may run again. */
@@ -237,5 +238,6 @@ export const migrations: Migration[] = [
 	m196,
 	m197,
 	m198,
-	m199
+	m199,
+	m215
 ];

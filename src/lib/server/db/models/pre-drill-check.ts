@@ -5,8 +5,18 @@ import {
 	type InferCreationAttributes,
 	type Sequelize
 } from 'sequelize';
-import type { KeptAnswers } from '$lib/schemas/pre-drill';
-import { edited, id, json, moment, optionalMoment, optionalText, reference, whole } from './base';
+import type { AskedThen, KeptAnswers } from '$lib/schemas/pre-drill';
+import {
+	edited,
+	id,
+	json,
+	moment,
+	optionalJson,
+	optionalMoment,
+	optionalText,
+	reference,
+	whole
+} from './base';
 
 /** What was asked before a hole was drilled, one a mount. */
 export class PreDrillCheck extends Model<
@@ -20,6 +30,8 @@ export class PreDrillCheck extends Model<
 	/** Who put a name under the answers as they stand; a later change takes it off. */
 	declare signedBy: CreationOptional<string | null>;
 	declare signedAt: CreationOptional<Date | null>;
+	/** What was asked then; null for those from before it was kept. */
+	declare signedFor: CreationOptional<AskedThen[] | null>;
 	declare version: CreationOptional<number>;
 	declare createdAt: CreationOptional<Date>;
 	declare updatedAt: CreationOptional<Date>;
@@ -34,6 +46,7 @@ export function initPreDrillCheck(sequelize: Sequelize): void {
 			answers: json,
 			signedBy: optionalText,
 			signedAt: optionalMoment,
+			signedFor: optionalJson,
 			version: { ...whole, defaultValue: 0 },
 			createdAt: moment,
 			updatedAt: moment
